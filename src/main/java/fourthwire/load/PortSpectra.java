@@ -1,0 +1,45 @@
+package fourthwire.load;
+
+import fourthwire.quantity.Spectrum;
+import java.util.Arrays;
+
+/**
+ * A reusable block of rms phasors by port and order (sine reference), the working form in which
+ * spectra move between the network and the load models without allocation.
+ */
+public final class PortSpectra {
+  /** Real parts, {@code re[port][order]}; index 0 of an order array is unused. */
+  public final double[][] re;
+
+  /** Imaginary parts likewise. */
+  public final double[][] im;
+
+  /** A block of zeros for this many ports. */
+  public PortSpectra(int ports) {
+    re = new double[ports][Spectrum.HIGHEST_ORDER + 1];
+    im = new double[ports][Spectrum.HIGHEST_ORDER + 1];
+  }
+
+  /** Number of ports. */
+  public int ports() {
+    return re.length;
+  }
+
+  /** Sets every phasor to zero. */
+  public void clear() {
+    for (int p = 0; p < re.length; p++) {
+      Arrays.fill(re[p], 0);
+      Arrays.fill(im[p], 0);
+    }
+  }
+
+  /** An immutable copy of one port's spectrum. */
+  public Spectrum spectrum(int port) {
+    return Spectrum.of(re[port], im[port]);
+  }
+
+  /** Sets one port from a spectrum. */
+  public void set(int port, Spectrum spectrum) {
+    spectrum.copyTo(re[port], im[port]);
+  }
+}
