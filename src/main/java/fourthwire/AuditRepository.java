@@ -1,0 +1,70 @@
+package fourthwire.audit;
+
+import java.time.Instant;
+import java.util.List;
+import java.util.Optional;
+
+/** Where audits are kept: their state while they run, their immutable result after. */
+public interface AuditRepository {
+  /** State of an audit. */
+  enum State {
+    QUEUED,
+    RUNNING,
+    DONE,
+    FAILED,
+    CANCELLED;
+
+    /** The word used in the public interface. */
+    public String word() {
+      return name().toLowerCase(java.util.Locale.ROOT);
+    }
+  }
+
+  /**
+   * An audit as listed.
+   *
+   * @param supply the supply asked for; empty: the normal one
+   */
+  record Entry(
+      long id,
+      long siteId,
+      int surveyRevision,
+      Optional<String> supply,
+      State state,
+      double progress,
+      String message,
+      Instant asked,
+      Optional<String> engineVersion,
+      List<String> editions,
+      List<String> notes) {}
+
+  /** Stores a queued audit of a site's survey revision; returns its id. */
+  long create(long siteId, int surveyRevision, Optional<String> supply);
+
+  /** One audit. */
+  Optional<Entry> find(long auditId);
+
+  /** A site's audits, newest first. */
+  List<Entry> ofSite(long siteId);
+
+  /** Takes a queued or interrupted audit into work; false if it was cancelled or finished. */
+  boolean start(long auditId);
+
+  /** Notes progress; false if a cancel was asked for. */
+  boolean progress(long auditId, double share, String message);
+
+  /** Asks a queued or running audit to stop; false if it had ended. */
+  boolean cancel(long auditId);
+
+  /** Stores the result and the state done, in one transaction. */
+  void finish(long auditId, AuditResult result);
+
+  /** Stores the reason and the state failed or cancelled. */
+  void end(long auditId, State state, String message);
+
+  /** Every node of a finished audit, in the order of its tree. */
+  List<NodeResult> nodes(long auditId);
+
+  /** One node of a finished audit. */
+  Optional<NodeResult> node(long auditId, String node);
+}
