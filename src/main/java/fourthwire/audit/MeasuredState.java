@@ -1,7 +1,6 @@
 package fourthwire.audit;
 
 import fourthwire.quantity.Conductor;
-import fourthwire.quantity.Figure;
 import fourthwire.quantity.PowerFigures;
 import fourthwire.quantity.Spectrum;
 import java.util.Map;

@@ -5,8 +5,8 @@ import java.util.OptionalDouble;
 import java.util.OptionalInt;
 
 /**
- * The feeder columns of a transformer, panel or circuit: the conductors that feed it. Ampacities are
- * of the whole feeder as installed, before any harmonic factor. Empty means not known.
+ * The feeder columns of a transformer, panel or circuit: the conductors that feed it. Ampacities
+ * are of the whole feeder as installed, before any harmonic factor. Empty means not known.
  */
 public record Feeder(
     OptionalDouble lengthM,
@@ -64,6 +64,8 @@ public record Feeder(
 
   /** Whether a size or an override gives the feeder an impedance. */
   public boolean hasImpedance() {
-    return conductorSize.isPresent() || resistanceOhmPerKm.isPresent() || reactanceOhmPerKm.isPresent();
+    return conductorSize.isPresent()
+        || resistanceOhmPerKm.isPresent()
+        || reactanceOhmPerKm.isPresent();
   }
 }

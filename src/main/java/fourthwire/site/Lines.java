@@ -57,7 +57,8 @@ public enum Lines {
   /** The circuit conductors written so; A, B, C are read as L1, L2, L3. */
   public static Optional<Lines> find(String text) {
     String iec = text.trim().toUpperCase(java.util.Locale.ROOT);
-    String named = iec.replaceAll("\\bA\\b", "L1").replaceAll("\\bB\\b", "L2").replaceAll("\\bC\\b", "L3");
+    String named =
+        iec.replaceAll("\\bA\\b", "L1").replaceAll("\\bB\\b", "L2").replaceAll("\\bC\\b", "L3");
     return Arrays.stream(values()).filter(l -> l.word.equals(named)).findFirst();
   }
 }

@@ -5,7 +5,8 @@ import java.util.List;
 
 /** The conductors a supply or panel has. */
 public enum PhaseSystem {
-  THREE_PHASE_4_WIRE("three-phase-4-wire", List.of(Conductor.L1, Conductor.L2, Conductor.L3, Conductor.N)),
+  THREE_PHASE_4_WIRE(
+      "three-phase-4-wire", List.of(Conductor.L1, Conductor.L2, Conductor.L3, Conductor.N)),
   THREE_PHASE_3_WIRE("three-phase-3-wire", List.of(Conductor.L1, Conductor.L2, Conductor.L3)),
   SPLIT_PHASE("split-phase", List.of(Conductor.L1, Conductor.L2, Conductor.N)),
   SINGLE_PHASE("single-phase", List.of(Conductor.L1, Conductor.N));

@@ -13,8 +13,8 @@ import java.util.Optional;
  * The tree a site hangs in, rooted at the supply in use: which node feeds which, with which
  * conductors, at which nominal voltage.
  *
- * <p>A standby supply takes over at one node (its {@code connects_at}, by default the node below the
- * normal supply): what hangs there is the tree, the rest is not supplied. Source: the public
+ * <p>A standby supply takes over at one node (its {@code connects_at}, by default the node below
+ * the normal supply): what hangs there is the tree, the rest is not supplied. Source: the public
  * contract, section 2.
  */
 public final class SiteTree {
@@ -222,7 +222,9 @@ public final class SiteTree {
 
     private List<Node> below(Node parent) {
       List<Node> children = new ArrayList<>();
-      transformers.getOrDefault(parent.name(), List.of()).forEach(t -> children.add(node(t, parent)));
+      transformers
+          .getOrDefault(parent.name(), List.of())
+          .forEach(t -> children.add(node(t, parent)));
       panels.getOrDefault(parent.name(), List.of()).forEach(p -> children.add(node(p, parent)));
       circuits.getOrDefault(parent.name(), List.of()).forEach(c -> children.add(node(c, parent)));
       return children;
@@ -242,7 +244,8 @@ public final class SiteTree {
     }
 
     private static Node node(Panel p, Node parent) {
-      List<Conductor> conductors = p.system().map(PhaseSystem::conductors).orElse(parent.conductors());
+      List<Conductor> conductors =
+          p.system().map(PhaseSystem::conductors).orElse(parent.conductors());
       List<Conductor> own = conductors.stream().filter(Conductor::isLine).toList();
       return new Node(
           p.name(),

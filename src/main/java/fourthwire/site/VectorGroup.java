@@ -127,6 +127,17 @@ public record VectorGroup(Primary primary, Secondary secondary, int clock) {
     return secondary == Secondary.CENTRE_TAPPED;
   }
 
+  /** The conductors its secondary has. */
+  public PhaseSystem secondarySystem() {
+    if (isSplitPhase()) {
+      return PhaseSystem.SPLIT_PHASE;
+    }
+    if (isSinglePhase()) {
+      return PhaseSystem.SINGLE_PHASE;
+    }
+    return hasSecondaryNeutral() ? PhaseSystem.THREE_PHASE_4_WIRE : PhaseSystem.THREE_PHASE_3_WIRE;
+  }
+
   /** Whether the secondary has an earthed neutral that is brought out. */
   public boolean hasSecondaryNeutral() {
     return switch (secondary) {
