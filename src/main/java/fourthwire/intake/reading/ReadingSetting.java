@@ -1,0 +1,27 @@
+package fourthwire.intake.reading;
+
+import fourthwire.metering.ReadingMapping;
+import fourthwire.quantity.Conductor;
+import java.time.ZoneId;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.function.Function;
+
+/**
+ * What is known about a meter's file beside the file.
+ *
+ * @param siteZone the site's time zone
+ * @param nominalHz the site's frequency, 50 or 60
+ * @param mapping given with the upload; it overrides what is proposed
+ * @param remembered the mapping used before for this meter and a layout
+ * @param ctReversed conductors whose current transformer is known to point the wrong way
+ * @param ctRatio of the meter, applied to currents a file marks as secondary without a ratio
+ */
+public record ReadingSetting(
+    Optional<ZoneId> siteZone,
+    double nominalHz,
+    Optional<ReadingMapping> mapping,
+    Function<String, Optional<ReadingMapping>> remembered,
+    List<Conductor> ctReversed,
+    OptionalDouble ctRatio) {}

@@ -1,0 +1,58 @@
+package fourthwire.metering;
+
+import fourthwire.quantity.Conductor;
+import fourthwire.quantity.Figure;
+import fourthwire.quantity.PowerFigures;
+import fourthwire.quantity.Spectrum;
+import java.util.Map;
+
+/**
+ * What a waveform capture says.
+ *
+ * <p>Angles: t = 0 is the upward zero crossing of the fundamental of the first voltage (without
+ * voltages: of the first line current).
+ *
+ * @param frequencyHz fundamental, found from the samples
+ * @param cycles whole cycles analysed
+ * @param basis over what the figures are formed, in sentences
+ * @param current by conductor; N is as {@code neutralBasis} says
+ * @param neutralPercentOfMeanLine against the mean of the lines' rms
+ * @param neutralBasis where N comes from, one sentence
+ * @param neutralChannelRmsA what the channel mapped as the neutral reads, amps
+ * @param voltage by line ({@code L1}) or pair ({@code L1-L2})
+ * @param spectrum of the currents
+ * @param voltageSpectrum keys as {@code voltage}
+ * @param power of all lines
+ * @param powerBasis how it was formed, one sentence
+ * @param powerByLine by line, from its own voltage to neutral and current
+ */
+public record CaptureResult(
+    double frequencyHz,
+    int cycles,
+    String basis,
+    Map<Conductor, CurrentFigures> current,
+    Figure neutralPercentOfMeanLine,
+    String neutralBasis,
+    Figure neutralChannelRmsA,
+    Map<String, VoltageFigures> voltage,
+    Map<Conductor, Spectrum> spectrum,
+    Map<String, Spectrum> voltageSpectrum,
+    PowerFigures power,
+    String powerBasis,
+    Map<Conductor, PowerFigures> powerByLine) {
+
+  /**
+   * A conductor's current.
+   *
+   * @param rmsA true rms of the samples: all orders, interharmonics and the direct component
+   * @param fundamentalA order 1
+   * @param thdPercent orders 2 to 50 on the fundamental
+   * @param crestFactor largest sample on the rms
+   */
+  public record CurrentFigures(
+      Figure rmsA, Figure fundamentalA, Figure thdPercent, Figure crestFactor) {}
+
+  /** A voltage, likewise, volts. */
+  public record VoltageFigures(
+      Figure rmsV, Figure fundamentalV, Figure thdPercent, Figure crestFactor) {}
+}

@@ -1,0 +1,76 @@
+package fourthwire.metering;
+
+import java.time.Instant;
+import java.util.List;
+import java.util.Optional;
+
+/**
+ * Where readings are kept: the file as it came, the mapping it was read by, and what it says.
+ * Readings of a meter outlive revisions of the survey.
+ */
+public interface ReadingRepository {
+  /**
+   * A measuring point as readings know it.
+   *
+   * @param name the meter's name: of the survey's {@code meters}, or of the node it was made at
+   * @param node the node it measures, a circuit as {@code panel:circuit}
+   */
+  record MeterRef(String name, String node) {}
+
+  /**
+   * A reading to be stored.
+   *
+   * @param files the uploaded files as they came
+   * @param layout signature of the file's header; a later file of the same is read the same way
+   * @param mapping the full mapping it was read by; remembered for this meter and layout
+   */
+  record Addition(
+      long siteId,
+      MeterRef meter,
+      List<RawFile> files,
+      String layout,
+      ReadingMapping mapping,
+      Reading reading) {
+    /** Copies the list. */
+    public Addition {
+      files = List.copyOf(files);
+    }
+  }
+
+  /**
+   * A stored reading.
+   *
+   * @param files names of the uploaded files
+   * @param sha256 of the uploaded file; of a set of files, of their digests in name order
+   */
+  record Entry(
+      long id,
+      long siteId,
+      MeterRef meter,
+      List<String> files,
+      String sha256,
+      Instant added,
+      ReadingMapping mapping,
+      Reading reading) {}
+
+  /**
+   * Stores a reading in one transaction; returns its id. The same bytes at the same meter a second
+   * time add nothing: the id of the first comes back.
+   */
+  long add(Addition addition);
+
+  /** A site's readings, newest first. */
+  List<Entry> ofSite(long siteId);
+
+  /** One reading. */
+  Optional<Entry> find(long readingId);
+
+  /** Removes a reading with its file; whether it was there. */
+  boolean delete(long readingId);
+
+  /** The mapping last used for files of this layout at this meter. */
+  Optional<ReadingMapping> mapping(long siteId, String meter, String layout);
+
+  /** The meters of a site that have readings or were made for one. */
+  List<MeterRef> meters(long siteId);
+}
