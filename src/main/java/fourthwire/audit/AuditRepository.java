@@ -41,6 +41,13 @@ public interface AuditRepository {
   /** Stores a queued audit of a site's survey revision; returns its id. */
   long create(long siteId, int surveyRevision, Optional<String> supply);
 
+  /**
+   * After a restart: what was running is queued again, or cancelled where that had been asked for.
+   *
+   * @return every queued audit, oldest first
+   */
+  List<Long> recover();
+
   /** One audit. */
   Optional<Entry> find(long auditId);
 
@@ -56,11 +63,17 @@ public interface AuditRepository {
   /** Asks a queued or running audit to stop; false if it had ended. */
   boolean cancel(long auditId);
 
-  /** Stores the result and the state done, in one transaction. */
+  /**
+   * Stores the result and the state done, in one transaction. Stores nothing where a cancel was
+   * asked for, or where the audit is gone together with its site.
+   */
   void finish(long auditId, AuditResult result);
 
   /** Stores the reason and the state failed or cancelled. */
   void end(long auditId, State state, String message);
+
+  /** One row a node of a finished audit, worst first. */
+  List<NodeSummary> summaries(long auditId);
 
   /** Every node of a finished audit, in the order of its tree. */
   List<NodeResult> nodes(long auditId);
