@@ -1,0 +1,77 @@
+package fourthwire.load;
+
+import fourthwire.site.ModelColumns;
+import java.util.OptionalDouble;
+import java.util.function.DoubleFunction;
+
+/**
+ * Rectifier models from survey rows: the defaults of the model columns that are empty, and the size
+ * of the direct-current side.
+ *
+ * <p>Defaults (all common practice, no source, except as noted): smoothing capacitor 2 µF/W below
+ * 160 V, 1 µF/W above (recalled from power supply handbooks); own source resistance 2 % of V²/P,
+ * own inductance none; diodes as in the public contract, section 3; drives 40 µF/kW.
+ */
+final class Rectifiers {
+  /** Below this nominal voltage a supply is taken to be built for 100 to 240 V. */
+  private static final double LOW_VOLTAGE_V = 160;
+
+  private static final double CAPACITANCE_LOW_VOLTAGE_UF_PER_W = 2;
+  private static final double CAPACITANCE_UF_PER_W = 1;
+  private static final double SOURCE_RESISTANCE_SHARE = 0.02;
+
+  private Rectifiers() {}
+
+  static LoadModel capacitorInput(LoadRequest request) {
+    DoubleFunction<BridgeLoad> unit = power -> singlePhaseUnit(request, power);
+    BridgeLoad load = sized(request, unit, l -> new CapacitorInput(l, request.frequencyHz()));
+    return new CapacitorInput(load, request.frequencyHz());
+  }
+
+  private static BridgeLoad singlePhaseUnit(LoadRequest request, double dcPowerW) {
+    ModelColumns c = request.columns();
+    double v = request.nominalPortV();
+    double microfaradPerW =
+        c.capacitanceUfPerW()
+            .orElse(v < LOW_VOLTAGE_V ? CAPACITANCE_LOW_VOLTAGE_UF_PER_W : CAPACITANCE_UF_PER_W);
+    double base = v * v / dcPowerW;
+    double choke = c.lineChokePercent().orElse(0) / 100 * base;
+    return new BridgeLoad(
+        dcPowerW,
+        microfaradPerW * 1e-6 * dcPowerW,
+        c.sourceResistanceOhm().orElse(SOURCE_RESISTANCE_SHARE * base) + choke / 15,
+        c.sourceInductanceUh().orElse(0) * 1e-6 + choke / (2 * Math.PI * request.frequencyHz()),
+        0,
+        0,
+        diode(c));
+  }
+
+  static Diode diode(ModelColumns c) {
+    return new Diode(
+        c.diodeSaturationA().orElse(3e-11),
+        c.diodeEmission().orElse(1.2),
+        c.diodeResistanceOhm().orElse(1e-3));
+  }
+
+  /**
+   * All units of the row together, in this state.
+   *
+   * @param unit one unit by its rated direct-current power
+   */
+  static BridgeLoad sized(
+      LoadRequest request,
+      DoubleFunction<BridgeLoad> unit,
+      java.util.function.Function<BridgeLoad, LoadModel> model) {
+    OptionalDouble efficiency = request.columns().efficiency();
+    double rated;
+    if (efficiency.isPresent() && request.rating() instanceof LoadRequest.Rating.Watts w) {
+      rated = w.w() * efficiency.getAsDouble();
+    } else {
+      rated = new DesignPower(request).find(p -> model.apply(unit.apply(p)));
+    }
+    BridgeLoad one = unit.apply(rated);
+    return request.lowerPower()
+        ? one.atPower(rated * request.demand()).parallel(request.units())
+        : one.parallel(request.units() * request.demand());
+  }
+}
