@@ -3,7 +3,14 @@
  * per order by block elimination from the leaves to the root. Knows sources, links, shunts and
  * injections; nothing of buildings.
  *
- * <p>May use {@code quantity}.
+ * <p>Door: {@link fourthwire.network.NetworkBuilder}, which makes a {@link
+ * fourthwire.network.TreeNetwork}; that is factored per order into a {@link
+ * fourthwire.network.FactoredOrder}, which solves for any number of {@link
+ * fourthwire.network.Excitation excitations}. May use {@code quantity}.
+ *
+ * <p>Sources: Kirchhoff's laws; symmetrical components (C. L. Fortescue, 1918); connection symbols
+ * of IEC 60076-1:2011 (from memory); Norton and Thévenin equivalents. Impedances are in ohms,
+ * admittances in siemens, potentials in volts to earth, all rms phasors of one order.
  */
 @org.jspecify.annotations.NullMarked
 package fourthwire.network;

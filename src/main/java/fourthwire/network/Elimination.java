@@ -1,0 +1,206 @@
+package fourthwire.network;
+
+/**
+ * Block elimination of one order, leaves first. A node's subtree, seen from what feeds it, is a
+ * Norton equivalent I = Y·V - J; behind the impedance Z of what feeds it, whose ideal end has the
+ * potential U, that becomes
+ *
+ * <pre>  I = Q·U - S,   Q = (1 + Y·Z)⁻¹·Y,   S = J - Q·Z·J,   V = U - Z·I</pre>
+ *
+ * which needs no inverse of Z or of Y: a feeder without impedance and a section without any
+ * reference to earth are ordinary cases. Kept per node is Q alone; where nothing but injections
+ * hangs below, Q = 0; where a leaf has one admittance y between two conductors, Q = q·e·eᵀ with e =
+ * (1, -1) and q = y/(1 + y·(z_from + z_to)).
+ */
+final class Elimination {
+  private final Layout layout;
+  private final double order;
+  private final Shunt.Stamp stamp = new Shunt.Stamp();
+  private final double[] left;
+
+  /** Impedances of feeder conductors, by conductor. */
+  final double[] series;
+
+  /** Impedance matrices of transformers, by transformer. */
+  final double[][] transformers;
+
+  final double[] source;
+
+  /** Q of every node, at the layout's block offsets; Y until the node is reached. */
+  final double[] blocks;
+
+  Elimination(Layout layout, double order) {
+    this.layout = layout;
+    this.order = order;
+    left = new double[2 * layout.largest * layout.largest];
+    series = seriesImpedances();
+    transformers = new double[layout.transformers.length][];
+    for (int k = 0; k < transformers.length; k++) {
+      transformers[k] = layout.transformers[k].matrix(order);
+    }
+    source = layout.source.matrix(order);
+    blocks = new double[layout.blocksLength];
+  }
+
+  void run() {
+    for (int n = layout.nodes - 1; n >= 0; n--) {
+      switch (layout.role[n]) {
+        case Layout.PAIR -> eliminatePair(n);
+        case Layout.FULL -> eliminateFull(n);
+        default -> {
+          // nothing but injections at or below: Q = 0
+        }
+      }
+    }
+  }
+
+  private double[] seriesImpedances() {
+    double[] factors = new double[layout.laws.length];
+    for (int k = 0; k < factors.length; k++) {
+      factors[k] = layout.laws[k].factor(order);
+      if (!Double.isFinite(factors[k])) {
+        throw new ArithmeticException(
+            "an impedance's law gives the factor " + factors[k] + " at order " + order);
+      }
+    }
+    double[] z = new double[2 * layout.conductors()];
+    for (int k = layout.first[1]; k < layout.conductors(); k++) {
+      if (factors.length > 0) {
+        z[2 * k] = layout.resistance[k] * factors[layout.resistanceLaw[k]];
+        z[2 * k + 1] = layout.reactance[k] * factors[layout.reactanceLaw[k]];
+      }
+    }
+    return z;
+  }
+
+  private void eliminatePair(int n) {
+    double re = 0;
+    double im = 0;
+    for (int k = layout.firstShunt[n]; k < layout.firstShunt[n + 1]; k++) {
+      double[] y = stamp.siemens();
+      ((Shunt.TwoTerminal) layout.shunts[k]).admittance().at(order, y);
+      re += y[0];
+      im += y[1];
+    }
+    int from = 2 * layout.pairFrom[n];
+    int to = 2 * layout.pairTo[n];
+    double zRe = series[from] + series[to];
+    double zIm = series[from + 1] + series[to + 1];
+    double dRe = 1 + re * zRe - im * zIm;
+    double dIm = re * zIm + im * zRe;
+    double square = dRe * dRe + dIm * dIm;
+    double qRe = (re * dRe + im * dIm) / square;
+    double qIm = (im * dRe - re * dIm) / square;
+    if (!Double.isFinite(qRe) || !Double.isFinite(qIm)) {
+      throw new UnsolvableOrderException(order, n);
+    }
+    blocks[layout.block[n]] = qRe;
+    blocks[layout.block[n] + 1] = qIm;
+    int p = layout.parent[n];
+    int a = layout.joinedTo[layout.pairFrom[n]] - layout.first[p];
+    int b = layout.joinedTo[layout.pairTo[n]] - layout.first[p];
+    stamp.on(blocks, layout.block[p], layout.size(p));
+    stamp.add(a, a, qRe, qIm);
+    stamp.add(b, b, qRe, qIm);
+    stamp.add(a, b, -qRe, -qIm);
+    stamp.add(b, a, -qRe, -qIm);
+  }
+
+  private void eliminateFull(int n) {
+    int size = layout.size(n);
+    int at = layout.block[n];
+    stamp.on(blocks, at, size);
+    for (int k = layout.firstShunt[n]; k < layout.firstShunt[n + 1]; k++) {
+      layout.shunts[k].stamp(order, stamp);
+    }
+    boolean impedance = layout.isFeeder(n) ? writeFeederLeft(n) : writeDenseLeft(n);
+    if (impedance && !Blocks.solve(left, size, blocks, at, size)) {
+      throw new UnsolvableOrderException(order, n);
+    }
+    if (n > 0) {
+      if (layout.isFeeder(n)) {
+        addFeederToParent(n);
+      } else {
+        addTransformerToParent(n);
+      }
+    }
+  }
+
+  /** 1 + Y·Z with diagonal Z; false if Z is zero, so that Q = Y. */
+  private boolean writeFeederLeft(int n) {
+    int size = layout.size(n);
+    int z = 2 * layout.first[n];
+    boolean any = false;
+    for (int k = z; k < z + 2 * size; k++) {
+      any |= series[k] != 0;
+    }
+    if (!any) {
+      return false;
+    }
+    int y = layout.block[n];
+    int at = 0;
+    for (int row = 0; row < size; row++) {
+      for (int k = z; k < z + 2 * size; k += 2) {
+        left[at] = blocks[y + at] * series[k] - blocks[y + at + 1] * series[k + 1];
+        left[at + 1] = blocks[y + at] * series[k + 1] + blocks[y + at + 1] * series[k];
+        at += 2;
+      }
+      left[2 * row * (size + 1)] += 1;
+    }
+    return true;
+  }
+
+  private boolean writeDenseLeft(int n) {
+    int size = layout.size(n);
+    double[] m = Blocks.product(blocks, layout.block[n], denseImpedance(n), 0, size);
+    for (int k = 0; k < size; k++) {
+      m[2 * k * (size + 1)] += 1;
+    }
+    System.arraycopy(m, 0, left, 0, m.length);
+    return true;
+  }
+
+  double[] denseImpedance(int n) {
+    return n == 0 ? source : transformers[layout.transformerOf[n]];
+  }
+
+  private void addFeederToParent(int n) {
+    int size = layout.size(n);
+    int p = layout.parent[n];
+    int first = layout.first[n];
+    stamp.on(blocks, layout.block[p], layout.size(p));
+    int at = layout.block[n];
+    for (int row = 0; row < size; row++) {
+      int toRow = layout.joinedTo[first + row] - layout.first[p];
+      for (int column = 0; column < size; column++) {
+        int toColumn = layout.joinedTo[first + column] - layout.first[p];
+        stamp.add(toRow, toColumn, blocks[at], blocks[at + 1]);
+        at += 2;
+      }
+    }
+  }
+
+  /** Aᵀ·Q·A, A being real. */
+  private void addTransformerToParent(int n) {
+    int p = layout.parent[n];
+    int size = layout.size(n);
+    int parentSize = layout.size(p);
+    double[] a = layout.turns[layout.transformerOf[n]];
+    stamp.on(blocks, layout.block[p], parentSize);
+    for (int row = 0; row < size; row++) {
+      for (int column = 0; column < size; column++) {
+        int at = layout.block[n] + 2 * (row * size + column);
+        addTurned(a, row * parentSize, column * parentSize, parentSize, at);
+      }
+    }
+  }
+
+  private void addTurned(double[] a, int rowAt, int columnAt, int parentSize, int at) {
+    for (int i = 0; i < parentSize; i++) {
+      for (int j = 0; j < parentSize; j++) {
+        double factor = a[rowAt + i] * a[columnAt + j];
+        stamp.add(i, j, factor * blocks[at], factor * blocks[at + 1]);
+      }
+    }
+  }
+}

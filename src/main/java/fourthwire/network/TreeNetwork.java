@@ -1,0 +1,75 @@
+package fourthwire.network;
+
+/**
+ * A radial network: a source, and a tree of nodes behind feeders and transformers, with linear
+ * elements at the nodes. Immutable; different orders may be factored by different threads at once.
+ */
+public final class TreeNetwork {
+  /** The number of the source's terminals. */
+  public static final int SOURCE = 0;
+
+  private final Layout layout;
+
+  TreeNetwork(Layout layout) {
+    this.layout = layout;
+  }
+
+  /** How many nodes there are, the source's terminals included. */
+  public int nodes() {
+    return layout.nodes;
+  }
+
+  /** How many conductors a node has. */
+  public int conductors(int node) {
+    return layout.size(node);
+  }
+
+  /** How many conductors all nodes have together. */
+  public int conductors() {
+    return layout.conductors();
+  }
+
+  /** The node that feeds this one; the source's terminals have none. */
+  public int parent(int node) {
+    if (node == SOURCE) {
+      throw new IllegalArgumentException("nothing feeds the source's terminals");
+    }
+    return layout.parent[node];
+  }
+
+  /**
+   * Where a node's conductor stands among all conductors of the network: for hot loops that read
+   * and write by index.
+   */
+  public int index(int node, int conductor) {
+    int at = layout.first[node] + conductor;
+    if (conductor < 0 || at >= layout.first[node + 1]) {
+      throw new IllegalArgumentException(
+          "node %d has no conductor %d; it has %d, counted from 0"
+              .formatted(node, conductor, layout.size(node)));
+    }
+    return at;
+  }
+
+  /**
+   * Eliminates the network at one order, from the leaves to the source.
+   *
+   * @param order above 0, also between whole orders
+   * @throws UnsolvableOrderException if the network has no unique solution at this order
+   */
+  public FactoredOrder factor(double order) {
+    if (!(order > 0) || Double.isInfinite(order)) {
+      throw new IllegalArgumentException("order " + order + ": it is above 0");
+    }
+    return new FactoredOrder(layout, order);
+  }
+
+  /** An excitation of this network that is zero everywhere. */
+  public Excitation excitation() {
+    return new Excitation(this, layout.size(SOURCE));
+  }
+
+  Layout layout() {
+    return layout;
+  }
+}
