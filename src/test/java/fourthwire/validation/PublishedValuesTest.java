@@ -30,6 +30,7 @@ class PublishedValuesTest {
 
   static {
     CHECKS.putAll(QuantityChecks.all());
+    CHECKS.putAll(LimitChecks.all());
   }
 
   @ParameterizedTest(name = "{0}")

@@ -1,0 +1,11 @@
+package fourthwire.limits.loading;
+
+/**
+ * What harmonics leave of a cable's ampacity.
+ *
+ * @param line factor on the lines' ampacity
+ * @param neutral factor on the neutral's ampacity
+ * @param reason why, one sentence a page can show
+ * @param basis document, edition and clause
+ */
+public record AmpacityFactors(double line, double neutral, String reason, String basis) {}
