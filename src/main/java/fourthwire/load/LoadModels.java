@@ -21,6 +21,8 @@ public final class LoadModels {
       case LINEAR -> constantImpedance(request, request.displacementFactor().orElse(1));
       case MEASURED -> measured(request);
       case CAPACITOR_INPUT -> Rectifiers.capacitorInput(request);
+      case SIX_PULSE -> Rectifiers.sixPulse(request);
+      case PFC_CONTINUOUS, PFC_CRITICAL -> PfcSupplies.of(request);
       default ->
           throw new IllegalArgumentException(
               String.format(

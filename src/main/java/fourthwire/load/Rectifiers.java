@@ -10,7 +10,8 @@ import java.util.function.DoubleFunction;
  *
  * <p>Defaults (all common practice, no source, except as noted): smoothing capacitor 2 µF/W below
  * 160 V, 1 µF/W above (recalled from power supply handbooks); own source resistance 2 % of V²/P,
- * own inductance none; diodes as in the public contract, section 3; drives 40 µF/kW.
+ * own inductance none; diodes as in the public contract, section 3; drives 40 µF/kW at 400 V, more
+ * at lower voltage for the same stored energy, and 0.2 % of V²/P in each line.
  */
 final class Rectifiers {
   /** Below this nominal voltage a supply is taken to be built for 100 to 240 V. */
@@ -19,6 +20,9 @@ final class Rectifiers {
   private static final double CAPACITANCE_LOW_VOLTAGE_UF_PER_W = 2;
   private static final double CAPACITANCE_UF_PER_W = 1;
   private static final double SOURCE_RESISTANCE_SHARE = 0.02;
+
+  private static final double DRIVE_UF_PER_W_AT_400_V = 0.04;
+  private static final double DRIVE_RESISTANCE_SHARE = 0.002;
 
   private Rectifiers() {}
 
@@ -43,6 +47,31 @@ final class Rectifiers {
         c.sourceInductanceUh().orElse(0) * 1e-6 + choke / (2 * Math.PI * request.frequencyHz()),
         0,
         0,
+        diode(c));
+  }
+
+  static LoadModel sixPulse(LoadRequest request) {
+    DoubleFunction<BridgeLoad> unit = power -> sixPulseUnit(request, power);
+    BridgeLoad load = sized(request, unit, l -> new SixPulse(l, request.frequencyHz()));
+    return new SixPulse(load, request.frequencyHz());
+  }
+
+  private static BridgeLoad sixPulseUnit(LoadRequest request, double dcPowerW) {
+    ModelColumns c = request.columns();
+    double v = request.nominalPortV();
+    double base = v * v / dcPowerW;
+    double omega = 2 * Math.PI * request.frequencyHz();
+    double line = c.lineChokePercent().orElse(0) / 100 * base;
+    double direct = c.dcChokePercent().orElse(0) / 100 * base;
+    double microfaradPerW =
+        c.capacitanceUfPerW().orElse(DRIVE_UF_PER_W_AT_400_V * (400 / v) * (400 / v));
+    return new BridgeLoad(
+        dcPowerW,
+        microfaradPerW * 1e-6 * dcPowerW,
+        c.sourceResistanceOhm().orElse(DRIVE_RESISTANCE_SHARE * base) + line / 15,
+        c.sourceInductanceUh().orElse(0) * 1e-6 + line / omega,
+        direct / 10,
+        direct / omega,
         diode(c));
   }
 

@@ -1,0 +1,200 @@
+package fourthwire.load;
+
+import fourthwire.quantity.Spectrum;
+import java.util.Arrays;
+import java.util.Locale;
+
+/**
+ * Steady state of a power-factor-corrected supply behind a series R-L, in the frequency domain.
+ *
+ * <p>With D the dead zone's map, i = G·(v - D·v) + residual and v = e - Z·i, so v = (1 + G·Z)⁻¹·(e
+ * + G·Z·D·v - Z·residual). D is a projection and |G·Z/(1 + G·Z)| below 1 for every passive Z, so
+ * that repetition converges; the crossings and G are renewed in each turn.
+ */
+final class PfcSolver implements LoadSolver {
+  private static final int ORDERS = Spectrum.HIGHEST_ORDER;
+  private static final double TOLERANCE = 1e-9;
+  private static final int MOST_TURNS = 2000;
+
+  private final double powerW;
+  private final double frequencyHz;
+  private final double residual;
+  private final DeadZone zone;
+
+  private final double[] vRe = new double[ORDERS + 1];
+  private final double[] vIm = new double[ORDERS + 1];
+  private final double[] turnedRe = new double[ORDERS + 1];
+  private final double[] turnedIm = new double[ORDERS + 1];
+  private final double[] insideRe = new double[ORDERS + 1];
+  private final double[] insideIm = new double[ORDERS + 1];
+  private final double[] zoneRe = new double[ORDERS + 1];
+  private final double[] zoneIm = new double[ORDERS + 1];
+
+  private int step;
+  private double residualRe;
+  private double residualIm;
+
+  PfcSolver(double powerW, double frequencyHz, double residual, DeadZone zone) {
+    this.powerW = powerW;
+    this.frequencyHz = frequencyHz;
+    this.residual = residual;
+    this.zone = zone;
+  }
+
+  @Override
+  public void solve(PortSpectra emf, double seriesOhm, double seriesHenry, PortSpectra current) {
+    double[] eRe = emf.re[0];
+    double[] eIm = emf.im[0];
+    double strength = Math.hypot(eRe[1], eIm[1]);
+    if (!(strength > 0) || Double.isInfinite(strength)) {
+      throw new NoSteadyStateException(
+          "a power-factor-corrected supply has no voltage to draw from");
+    }
+    step = oddOnly(eRe, eIm) ? 2 : 1;
+    System.arraycopy(eRe, 0, vRe, 0, ORDERS + 1);
+    System.arraycopy(eIm, 0, vIm, 0, ORDERS + 1);
+    double reactance = 2 * Math.PI * frequencyHz * seriesHenry;
+    double g = 0;
+    double moved = Double.POSITIVE_INFINITY;
+    for (int turn = 0; turn < MOST_TURNS && moved > TOLERANCE * strength; turn++) {
+      g = conductance();
+      if (!(g > 0) || !(Math.hypot(vRe[1], vIm[1]) > 0.2 * strength)) {
+        break;
+      }
+      moved = renew(eRe, eIm, g, seriesOhm, reactance);
+    }
+    if (!(moved <= TOLERANCE * strength)) {
+      throw new NoSteadyStateException(
+          String.format(
+              Locale.ROOT,
+              "a power-factor-corrected supply of %.4g W has no steady state at %.4g V behind %.4g"
+                  + " ohm and %.4g mH: the source cannot give what the load asks for",
+              powerW,
+              strength,
+              seriesOhm,
+              seriesHenry * 1e3));
+    }
+    g = conductance();
+    for (int h = 1; h <= ORDERS; h++) {
+      current.re[0][h] = g * (vRe[h] - insideRe[h]);
+      current.im[0][h] = g * (vIm[h] - insideIm[h]);
+    }
+    current.re[0][3] += g * residualRe;
+    current.im[0][3] += g * residualIm;
+  }
+
+  private static boolean oddOnly(double[] re, double[] im) {
+    for (int h = 2; h <= ORDERS; h += 2) {
+      if (re[h] != 0 || im[h] != 0) {
+        return false;
+      }
+    }
+    return true;
+  }
+
+  /** Renews the parts inside the dead zones and the residual, and finds G from the power. */
+  private double conductance() {
+    Arrays.fill(insideRe, 0);
+    Arrays.fill(insideIm, 0);
+    double first = -Math.atan2(vIm[1], vRe[1]);
+    addZone(crossing(first));
+    if (step == 1) {
+      addZone(crossing(first + Math.PI));
+    }
+    residualOfThird();
+    double power = vRe[3] * residualRe + vIm[3] * residualIm;
+    for (int h = 1; h <= ORDERS; h += step) {
+      power += vRe[h] * (vRe[h] - insideRe[h]) + vIm[h] * (vIm[h] - insideIm[h]);
+    }
+    return powerW / power;
+  }
+
+  /** Per siemens of G: -residual·|V1|∠3θ, most negative near the crossings. */
+  private void residualOfThird() {
+    double size = vRe[1] * vRe[1] + vIm[1] * vIm[1];
+    double re = vRe[1];
+    double im = vIm[1];
+    double squareRe = re * re - im * im;
+    double squareIm = 2 * re * im;
+    residualRe = -residual * (squareRe * re - squareIm * im) / size;
+    residualIm = -residual * (squareRe * im + squareIm * re) / size;
+  }
+
+  private void addZone(double at) {
+    double turnCos = Math.cos(at);
+    double turnSin = Math.sin(at);
+    double c = 1;
+    double s = 0;
+    for (int h = 1; h <= ORDERS; h++) {
+      double next = c * turnCos - s * turnSin;
+      s = s * turnCos + c * turnSin;
+      c = next;
+      turnedRe[h] = vRe[h] * c - vIm[h] * s;
+      turnedIm[h] = vRe[h] * s + vIm[h] * c;
+      zoneRe[h] = 0;
+      zoneIm[h] = 0;
+    }
+    zone.add(turnedRe, turnedIm, step, step, zoneRe, zoneIm);
+    c = 1;
+    s = 0;
+    for (int h = 1; h <= ORDERS; h++) {
+      double next = c * turnCos - s * turnSin;
+      s = s * turnCos + c * turnSin;
+      c = next;
+      insideRe[h] += zoneRe[h] * c + zoneIm[h] * s;
+      insideIm[h] += zoneIm[h] * c - zoneRe[h] * s;
+    }
+  }
+
+  /**
+   * Angle of the voltage's zero crossing nearest the fundamental's, by Newton; where the voltage
+   * rings so that none is found within 30°, the fundamental's own.
+   */
+  private double crossing(double guess) {
+    double x = guess;
+    for (int n = 0; n < 20; n++) {
+      double value = 0;
+      double slope = 0;
+      double sin1 = Math.sin(x);
+      double cos1 = Math.cos(x);
+      double s = 0;
+      double c = 1;
+      for (int h = 1; h <= ORDERS; h++) {
+        double next = s * cos1 + c * sin1;
+        c = c * cos1 - s * sin1;
+        s = next;
+        value += vRe[h] * s + vIm[h] * c;
+        slope += h * (vRe[h] * c - vIm[h] * s);
+      }
+      double by = value / slope;
+      x -= by;
+      if (!(Math.abs(x - guess) < Math.PI / 6)) {
+        return guess;
+      }
+      if (Math.abs(by) < 1e-13) {
+        return x;
+      }
+    }
+    return x;
+  }
+
+  /** One turn of the repetition; returns by how much the voltage moved. */
+  private double renew(double[] eRe, double[] eIm, double g, double ohm, double reactance) {
+    double moved = 0;
+    for (int h = 1; h <= ORDERS; h += step) {
+      double r = g * ohm;
+      double x = g * h * reactance;
+      double dRe = insideRe[h] - (h == 3 ? residualRe : 0);
+      double dIm = insideIm[h] - (h == 3 ? residualIm : 0);
+      double re = eRe[h] + r * dRe - x * dIm;
+      double im = eIm[h] + r * dIm + x * dRe;
+      double square = (1 + r) * (1 + r) + x * x;
+      double nextRe = (re * (1 + r) + im * x) / square;
+      double nextIm = (im * (1 + r) - re * x) / square;
+      moved = Math.max(moved, Math.abs(nextRe - vRe[h]) + Math.abs(nextIm - vIm[h]));
+      vRe[h] = nextRe;
+      vIm[h] = nextIm;
+    }
+    return moved;
+  }
+}
