@@ -42,7 +42,7 @@ create table meters (
 create table meter_layouts (
   site_id bigint not null,
   meter varchar not null,
-  layout varchar(64) not null,
+  layout varchar not null,
   mapping text not null,
   primary key (site_id, meter, layout),
   foreign key (site_id, meter) references meters (site_id, name) on delete cascade

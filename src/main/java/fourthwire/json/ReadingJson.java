@@ -1,0 +1,111 @@
+package fourthwire.json;
+
+import fourthwire.metering.Period;
+import fourthwire.metering.QualityFinding;
+import fourthwire.metering.Reading;
+import fourthwire.metering.ReadingKind;
+import fourthwire.metering.ReadingRepository;
+import java.time.Instant;
+import java.util.Optional;
+import tools.jackson.databind.JsonNode;
+import tools.jackson.databind.node.ObjectNode;
+
+/** A reading, section 5 of the public contract. */
+public final class ReadingJson {
+  private static final String PERIOD = "period";
+
+  private ReadingJson() {}
+
+  /** The whole document of a stored reading. */
+  public static ObjectNode write(ReadingRepository.Entry entry) {
+    ObjectNode o = heading(entry);
+    writeResult(o, entry.reading());
+    o.set("mapping", MappingJson.write(entry.mapping()));
+    return o;
+  }
+
+  /** Its row in a list: what it is, without its figures. */
+  public static ObjectNode row(ReadingRepository.Entry entry) {
+    ObjectNode o = heading(entry);
+    writeKind(o, entry.reading());
+    return o.put("quality_findings", entry.reading().quality().size());
+  }
+
+  private static ObjectNode heading(ReadingRepository.Entry entry) {
+    ObjectNode o = Json.object().put("id", entry.id()).put("site", entry.siteId());
+    o.put("meter", entry.meter().name()).put("at", entry.meter().node());
+    o.set("files", Json.strings(entry.files()));
+    return o.put("sha256", entry.sha256()).put("added", entry.added().toString());
+  }
+
+  /** What a reading says, without where it is stored. */
+  public static ObjectNode write(Reading reading) {
+    ObjectNode o = Json.object();
+    writeResult(o, reading);
+    return o;
+  }
+
+  private static void writeResult(ObjectNode o, Reading r) {
+    writeKind(o, r);
+    o.set("notes", Json.strings(r.notes()));
+    o.set("quality", Json.list(r.quality(), ReadingJson::write));
+    r.log().ifPresent(log -> LogJson.write(o, log));
+    r.capture().ifPresent(capture -> CaptureJson.write(o, capture));
+  }
+
+  private static void writeKind(ObjectNode o, Reading r) {
+    o.put("kind", r.kind().word());
+    write(o, r.period());
+    o.put(countKey(r.kind()), r.count());
+    Json.put(o, "sample_rate_hz", r.sampleRateHz());
+  }
+
+  private static String countKey(ReadingKind kind) {
+    return kind == ReadingKind.LOG ? "rows" : "samples";
+  }
+
+  private static void write(ObjectNode into, Optional<Period> period) {
+    period.ifPresentOrElse(
+        p -> into.putObject(PERIOD).put("from", p.from().toString()).put("to", p.to().toString()),
+        () -> into.putNull(PERIOD));
+  }
+
+  private static ObjectNode write(QualityFinding q) {
+    ObjectNode o = Json.object().put("code", q.code());
+    write(o, q.period());
+    return o.put("effect", q.effect()).put("sentence", q.sentence());
+  }
+
+  /** The reading that {@link #write(Reading)} wrote. */
+  public static Reading read(String document) {
+    JsonNode o = Json.parse(document);
+    ReadingKind kind = ReadingKind.find(o.path("kind").asString()).orElseThrow();
+    boolean log = kind == ReadingKind.LOG;
+    return new Reading(
+        kind,
+        period(o),
+        o.path(countKey(kind)).longValue(),
+        Json.number(o, "sample_rate_hz"),
+        Json.strings(o, "notes"),
+        Json.list(o, "quality", ReadingJson::quality),
+        log ? Optional.of(LogJson.read(o)) : Optional.empty(),
+        log ? Optional.empty() : Optional.of(CaptureJson.read(o)));
+  }
+
+  private static Optional<Period> period(JsonNode o) {
+    JsonNode p = o.path(PERIOD);
+    return p.isObject()
+        ? Optional.of(
+            new Period(
+                Instant.parse(p.path("from").asString()), Instant.parse(p.path("to").asString())))
+        : Optional.empty();
+  }
+
+  private static QualityFinding quality(JsonNode o) {
+    return new QualityFinding(
+        o.path("code").asString(),
+        period(o),
+        o.path("effect").asString(),
+        o.path("sentence").asString());
+  }
+}

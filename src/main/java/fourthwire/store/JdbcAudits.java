@@ -1,0 +1,241 @@
+package fourthwire.store;
+
+import fourthwire.audit.AuditRepository;
+import fourthwire.audit.AuditResult;
+import fourthwire.audit.NodeResult;
+import fourthwire.audit.NodeSummary;
+import fourthwire.json.Documents;
+import fourthwire.json.NodeJson;
+import fourthwire.json.SummaryJson;
+import java.sql.PreparedStatement;
+import java.sql.ResultSet;
+import java.sql.SQLException;
+import java.time.Clock;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import org.springframework.jdbc.core.BatchPreparedStatementSetter;
+import org.springframework.jdbc.core.JdbcTemplate;
+import org.springframework.jdbc.core.simple.JdbcClient;
+import org.springframework.transaction.support.TransactionTemplate;
+
+/** Audits, and each node's result as a gzipped document of its own. */
+final class JdbcAudits implements AuditRepository {
+  private static final String COLUMNS =
+      """
+      select id, site_id, revision, supply, state, progress, message, asked, engine_version,
+        editions, notes from audits
+      """;
+
+  private final JdbcClient jdbc;
+  private final JdbcTemplate template;
+  private final TransactionTemplate transaction;
+  private final Clock clock;
+
+  JdbcAudits(JdbcClient jdbc, JdbcTemplate template, TransactionTemplate transaction, Clock clock) {
+    this.jdbc = jdbc;
+    this.template = template;
+    this.transaction = transaction;
+    this.clock = clock;
+  }
+
+  @Override
+  public long create(long siteId, int surveyRevision, Optional<String> supply) {
+    return Rows.insert(
+        jdbc.sql(
+                """
+                insert into audits (site_id, revision, supply, state, progress, message,
+                  cancel_asked, asked, editions, notes)
+                values (?, ?, ?, 'queued', 0, 'waiting', false, ?, '[]', '[]')
+                """)
+            .params(siteId, surveyRevision)
+            .param(supply.orElse(null))
+            .param(Rows.now(clock)));
+  }
+
+  @Override
+  public Optional<Entry> find(long auditId) {
+    return jdbc.sql(COLUMNS + " where id = ?").param(auditId).query(JdbcAudits::entry).optional();
+  }
+
+  @Override
+  public List<Entry> ofSite(long siteId) {
+    return jdbc.sql(COLUMNS + " where site_id = ? order by id desc")
+        .param(siteId)
+        .query(JdbcAudits::entry)
+        .list();
+  }
+
+  private static Entry entry(ResultSet row, int number) throws SQLException {
+    return new Entry(
+        row.getLong("id"),
+        row.getLong("site_id"),
+        row.getInt("revision"),
+        Rows.optionalText(row, "supply"),
+        State.valueOf(Rows.text(row, "state").toUpperCase(Locale.ROOT)),
+        row.getDouble("progress"),
+        Rows.text(row, "message"),
+        Rows.instant(row, "asked"),
+        Rows.optionalText(row, "engine_version"),
+        Documents.texts(Rows.text(row, "editions")),
+        Documents.texts(Rows.text(row, "notes")));
+  }
+
+  @Override
+  public boolean start(long auditId) {
+    return jdbc.sql(
+                """
+                update audits set state = 'running', progress = 0, message = 'started', started = ?
+                where id = ? and state in ('queued', 'running') and not cancel_asked
+                """)
+            .params(Rows.now(clock), auditId)
+            .update()
+        == 1;
+  }
+
+  @Override
+  public boolean progress(long auditId, double share, String message) {
+    return jdbc.sql(
+                """
+                update audits set progress = ?, message = ?
+                where id = ? and state = 'running' and not cancel_asked
+                """)
+            .params(share, message, auditId)
+            .update()
+        == 1;
+  }
+
+  @Override
+  public boolean cancel(long auditId) {
+    int stopped =
+        jdbc.sql(
+                """
+                update audits set state = 'cancelled', message = 'cancelled before it began',
+                  cancel_asked = true, ended = ? where id = ? and state = 'queued'
+                """)
+            .params(Rows.now(clock), auditId)
+            .update();
+    int asked =
+        jdbc.sql("update audits set cancel_asked = true where id = ? and state = 'running'")
+            .param(auditId)
+            .update();
+    return stopped + asked > 0;
+  }
+
+  @Override
+  public List<Long> recover() {
+    jdbc.sql(
+            """
+            update audits set state = 'cancelled', message = 'cancelled', ended = ?
+            where state = 'running' and cancel_asked
+            """)
+        .param(Rows.now(clock))
+        .update();
+    jdbc.sql(
+            """
+            update audits set state = 'queued', progress = 0,
+              message = 'waiting to run again after a restart' where state = 'running'
+            """)
+        .update();
+    return jdbc.sql("select id from audits where state = 'queued' order by id")
+        .query(Long.class)
+        .list();
+  }
+
+  @Override
+  public void finish(long auditId, AuditResult result) {
+    transaction.executeWithoutResult(
+        status -> {
+          if (markDone(auditId, result)) {
+            addNodes(auditId, result.nodes());
+          } else {
+            end(auditId, State.CANCELLED, "cancelled");
+          }
+        });
+  }
+
+  private boolean markDone(long auditId, AuditResult result) {
+    return jdbc.sql(
+                """
+                update audits set state = 'done', progress = 1, message = 'done', ended = ?,
+                  engine_version = ?, editions = ?, notes = ?
+                where id = ? and state = 'running' and not cancel_asked
+                """)
+            .params(
+                Rows.now(clock),
+                result.engineVersion(),
+                Documents.ofTexts(result.editions()),
+                Documents.ofTexts(result.notes()),
+                auditId)
+            .update()
+        == 1;
+  }
+
+  private void addNodes(long auditId, List<NodeResult> nodes) {
+    template.batchUpdate(
+        """
+        insert into audit_nodes (audit_id, position, node, summary, document)
+        values (?, ?, ?, ?, ?)
+        """,
+        new BatchPreparedStatementSetter() {
+          @Override
+          public void setValues(PreparedStatement insert, int i) throws SQLException {
+            NodeResult node = nodes.get(i);
+            insert.setLong(1, auditId);
+            insert.setInt(2, i);
+            insert.setString(3, node.node());
+            insert.setString(4, SummaryJson.write(NodeSummary.of(node)).toString());
+            insert.setBytes(5, Documents.zipped(NodeJson.write(node)));
+          }
+
+          @Override
+          public int getBatchSize() {
+            return nodes.size();
+          }
+        });
+  }
+
+  @Override
+  public void end(long auditId, State state, String message) {
+    jdbc.sql(
+            """
+            update audits set state = ?, message = ?, ended = ?
+            where id = ? and state in ('queued', 'running')
+            """)
+        .params(state.word(), message, Rows.now(clock), auditId)
+        .update();
+  }
+
+  @Override
+  public List<NodeSummary> summaries(long auditId) {
+    return jdbc
+        .sql("select summary from audit_nodes where audit_id = ? order by position")
+        .param(auditId)
+        .query(String.class)
+        .list()
+        .stream()
+        .map(SummaryJson::read)
+        .sorted(NodeSummary.WORST_FIRST)
+        .toList();
+  }
+
+  @Override
+  public List<NodeResult> nodes(long auditId) {
+    return jdbc.sql("select document from audit_nodes where audit_id = ? order by position")
+        .param(auditId)
+        .query(JdbcAudits::node)
+        .list();
+  }
+
+  @Override
+  public Optional<NodeResult> node(long auditId, String node) {
+    return jdbc.sql("select document from audit_nodes where audit_id = ? and node = ?")
+        .params(auditId, node)
+        .query(JdbcAudits::node)
+        .optional();
+  }
+
+  private static NodeResult node(ResultSet row, int number) throws SQLException {
+    return NodeJson.read(Documents.unzipped(row.getBytes("document")));
+  }
+}

@@ -1,0 +1,205 @@
+package fourthwire.store;
+
+import fourthwire.json.MappingJson;
+import fourthwire.json.ReadingJson;
+import fourthwire.metering.RawFile;
+import fourthwire.metering.ReadingMapping;
+import fourthwire.metering.ReadingRepository;
+import java.io.IOException;
+import java.io.InputStream;
+import java.io.UncheckedIOException;
+import java.nio.charset.StandardCharsets;
+import java.security.MessageDigest;
+import java.sql.ResultSet;
+import java.sql.SQLException;
+import java.time.Clock;
+import java.util.Comparator;
+import java.util.HexFormat;
+import java.util.List;
+import java.util.Objects;
+import java.util.Optional;
+import java.util.stream.Collectors;
+import org.springframework.jdbc.core.simple.JdbcClient;
+import org.springframework.transaction.support.TransactionTemplate;
+
+/** Readings: the files as they came, the mapping they were read by, the result as a document. */
+final class JdbcReadings implements ReadingRepository {
+  private static final String COLUMNS =
+      """
+      select r.id, r.site_id, r.meter, m.node, r.sha256, r.added, r.mapping, r.result
+      from readings r join meters m on m.site_id = r.site_id and m.name = r.meter
+      """;
+
+  private final JdbcClient jdbc;
+  private final TransactionTemplate transaction;
+  private final FileStore files;
+  private final Clock clock;
+
+  JdbcReadings(JdbcClient jdbc, TransactionTemplate transaction, FileStore files, Clock clock) {
+    this.jdbc = jdbc;
+    this.transaction = transaction;
+    this.files = files;
+    this.clock = clock;
+  }
+
+  @Override
+  public long add(Addition addition) {
+    String sha256 = sha256(addition.files());
+    return Objects.requireNonNull(
+        transaction.execute(
+            status -> {
+              putMeter(addition.siteId(), addition.meter());
+              putLayout(addition);
+              return same(addition, sha256).orElseGet(() -> insert(addition, sha256));
+            }));
+  }
+
+  /** Of one file its own; of several, of their digests in name order. */
+  private static String sha256(List<RawFile> files) {
+    if (files.size() == 1) {
+      return files.get(0).sha256();
+    }
+    String digests =
+        files.stream()
+            .sorted(Comparator.comparing(RawFile::name))
+            .map(RawFile::sha256)
+            .collect(Collectors.joining());
+    MessageDigest digest = FileStore.sha256();
+    return HexFormat.of().formatHex(digest.digest(digests.getBytes(StandardCharsets.US_ASCII)));
+  }
+
+  private Optional<Long> same(Addition addition, String sha256) {
+    return jdbc.sql("select id from readings where site_id = ? and meter = ? and sha256 = ?")
+        .params(addition.siteId(), addition.meter().name(), sha256)
+        .query(Long.class)
+        .optional();
+  }
+
+  private void putMeter(long siteId, MeterRef meter) {
+    int changed =
+        jdbc.sql("update meters set node = ? where site_id = ? and name = ?")
+            .params(meter.node(), siteId, meter.name())
+            .update();
+    if (changed == 0) {
+      jdbc.sql("insert into meters (site_id, name, node) values (?, ?, ?)")
+          .params(siteId, meter.name(), meter.node())
+          .update();
+    }
+  }
+
+  private void putLayout(Addition a) {
+    String mapping = MappingJson.write(a.mapping()).toString();
+    int changed =
+        jdbc.sql(
+                """
+                update meter_layouts set mapping = ?
+                where site_id = ? and meter = ? and layout = ?
+                """)
+            .params(mapping, a.siteId(), a.meter().name(), a.layout())
+            .update();
+    if (changed == 0) {
+      jdbc.sql("insert into meter_layouts (site_id, meter, layout, mapping) values (?, ?, ?, ?)")
+          .params(a.siteId(), a.meter().name(), a.layout(), mapping)
+          .update();
+    }
+  }
+
+  private long insert(Addition addition, String sha256) {
+    long id =
+        Rows.insert(
+            jdbc.sql(
+                    """
+                    insert into readings (site_id, meter, sha256, added, mapping, result)
+                    values (?, ?, ?, ?, ?, ?)
+                    """)
+                .params(
+                    addition.siteId(),
+                    addition.meter().name(),
+                    sha256,
+                    Rows.now(clock),
+                    MappingJson.write(addition.mapping()).toString(),
+                    ReadingJson.write(addition.reading()).toString()));
+    for (int i = 0; i < addition.files().size(); i++) {
+      addFile(id, i, addition.files().get(i));
+    }
+    return id;
+  }
+
+  private void addFile(long readingId, int position, RawFile file) {
+    try (InputStream in = file.open()) {
+      jdbc.sql(
+              "insert into reading_files (reading_id, position, name, file_id) values (?, ?, ?, ?)")
+          .params(readingId, position, file.name(), files.save(in).id())
+          .update();
+    } catch (IOException e) {
+      throw new UncheckedIOException(e);
+    }
+  }
+
+  @Override
+  public List<Entry> ofSite(long siteId) {
+    return jdbc.sql(COLUMNS + " where r.site_id = ? order by r.id desc")
+        .param(siteId)
+        .query(this::entry)
+        .list();
+  }
+
+  @Override
+  public Optional<Entry> find(long readingId) {
+    return jdbc.sql(COLUMNS + " where r.id = ?").param(readingId).query(this::entry).optional();
+  }
+
+  private Entry entry(ResultSet row, int number) throws SQLException {
+    long id = row.getLong("id");
+    return new Entry(
+        id,
+        row.getLong("site_id"),
+        new MeterRef(Rows.text(row, "meter"), Rows.text(row, "node")),
+        fileNames(id),
+        Rows.text(row, "sha256"),
+        Rows.instant(row, "added"),
+        MappingJson.read(Rows.text(row, "mapping")),
+        ReadingJson.read(Rows.text(row, "result")));
+  }
+
+  private List<String> fileNames(long readingId) {
+    return jdbc.sql("select name from reading_files where reading_id = ? order by position")
+        .param(readingId)
+        .query(String.class)
+        .list();
+  }
+
+  @Override
+  public boolean delete(long readingId) {
+    return Boolean.TRUE.equals(
+        transaction.execute(
+            status -> {
+              List<Long> owned =
+                  jdbc.sql("select file_id from reading_files where reading_id = ?")
+                      .param(readingId)
+                      .query(Long.class)
+                      .list();
+              int gone = jdbc.sql("delete from readings where id = ?").param(readingId).update();
+              files.delete(owned);
+              return gone == 1;
+            }));
+  }
+
+  @Override
+  public Optional<ReadingMapping> mapping(long siteId, String meter, String layout) {
+    return jdbc.sql(
+            "select mapping from meter_layouts where site_id = ? and meter = ? and layout = ?")
+        .params(siteId, meter, layout)
+        .query(String.class)
+        .optional()
+        .map(MappingJson::read);
+  }
+
+  @Override
+  public List<MeterRef> meters(long siteId) {
+    return jdbc.sql("select name, node from meters where site_id = ? order by name")
+        .param(siteId)
+        .query((row, number) -> new MeterRef(Rows.text(row, "name"), Rows.text(row, "node")))
+        .list();
+  }
+}

@@ -1,0 +1,220 @@
+package fourthwire.store;
+
+import fourthwire.json.MappingJson;
+import fourthwire.metering.RawFile;
+import fourthwire.metering.ReadingMapping;
+import fourthwire.metering.ReadingRepository.MeterRef;
+import fourthwire.metering.ReadingUploads;
+import java.io.IOException;
+import java.io.InputStream;
+import java.io.UncheckedIOException;
+import java.sql.ResultSet;
+import java.sql.SQLException;
+import java.time.Clock;
+import java.util.List;
+import java.util.Locale;
+import java.util.Objects;
+import java.util.Optional;
+import org.springframework.jdbc.core.simple.JdbcClient;
+import org.springframework.transaction.support.TransactionTemplate;
+
+/** Uploads of readings, their files kept until they have been read. */
+final class JdbcUploads implements ReadingUploads {
+  private final JdbcClient jdbc;
+  private final TransactionTemplate transaction;
+  private final FileStore files;
+  private final Clock clock;
+
+  JdbcUploads(JdbcClient jdbc, TransactionTemplate transaction, FileStore files, Clock clock) {
+    this.jdbc = jdbc;
+    this.transaction = transaction;
+    this.files = files;
+    this.clock = clock;
+  }
+
+  @Override
+  public long create(
+      long siteId,
+      MeterRef meter,
+      List<? extends RawFile> uploaded,
+      Optional<ReadingMapping> mapping) {
+    return Objects.requireNonNull(
+        transaction.execute(
+            status -> {
+              long id = insert(siteId, meter, mapping);
+              for (int i = 0; i < uploaded.size(); i++) {
+                addFile(id, i, uploaded.get(i));
+              }
+              return id;
+            }));
+  }
+
+  private long insert(long siteId, MeterRef meter, Optional<ReadingMapping> mapping) {
+    return Rows.insert(
+        jdbc.sql(
+                """
+                insert into reading_uploads (site_id, meter, node, mapping, state, progress,
+                  message, cancel_asked, asked)
+                values (?, ?, ?, ?, 'queued', 0, 'waiting', false, ?)
+                """)
+            .params(siteId, meter.name(), meter.node())
+            .param(mapping.map(m -> MappingJson.write(m).toString()).orElse(null))
+            .param(Rows.now(clock)));
+  }
+
+  private void addFile(long uploadId, int position, RawFile file) {
+    try (InputStream in = file.open()) {
+      jdbc.sql(
+              """
+              insert into reading_upload_files (upload_id, position, name, file_id)
+              values (?, ?, ?, ?)
+              """)
+          .params(uploadId, position, file.name(), files.save(in).id())
+          .update();
+    } catch (IOException e) {
+      throw new UncheckedIOException(e);
+    }
+  }
+
+  @Override
+  public Optional<Entry> find(long uploadId) {
+    return jdbc.sql(
+            """
+            select id, site_id, meter, node, mapping, state, progress, message, asked, reading_id
+            from reading_uploads where id = ?
+            """)
+        .param(uploadId)
+        .query(JdbcUploads::entry)
+        .optional();
+  }
+
+  private static Entry entry(ResultSet row, int number) throws SQLException {
+    return new Entry(
+        row.getLong("id"),
+        row.getLong("site_id"),
+        new MeterRef(Rows.text(row, "meter"), Rows.text(row, "node")),
+        Rows.optionalText(row, "mapping").map(MappingJson::read),
+        State.valueOf(Rows.text(row, "state").toUpperCase(Locale.ROOT)),
+        row.getDouble("progress"),
+        Rows.text(row, "message"),
+        Rows.instant(row, "asked"),
+        Rows.optionalLong(row, "reading_id"));
+  }
+
+  @Override
+  public List<RawFile> files(long uploadId) {
+    return jdbc.sql(
+            """
+            select u.name, f.id, f.byte_count, f.sha256 from reading_upload_files u
+            join stored_files f on f.id = u.file_id where u.upload_id = ? order by u.position
+            """)
+        .param(uploadId)
+        .query(
+            (row, number) ->
+                (RawFile)
+                    new StoredRawFile(
+                        Rows.text(row, "name"),
+                        new FileStore.Stored(
+                            row.getLong("id"), row.getLong("byte_count"), Rows.text(row, "sha256")),
+                        files))
+        .list();
+  }
+
+  @Override
+  public boolean start(long uploadId) {
+    return jdbc.sql(
+                """
+                update reading_uploads set state = 'running', progress = 0, message = 'started'
+                where id = ? and state in ('queued', 'running') and not cancel_asked
+                """)
+            .param(uploadId)
+            .update()
+        == 1;
+  }
+
+  @Override
+  public boolean progress(long uploadId, double share, String message) {
+    return jdbc.sql(
+                """
+                update reading_uploads set progress = ?, message = ?
+                where id = ? and state = 'running' and not cancel_asked
+                """)
+            .params(share, message, uploadId)
+            .update()
+        == 1;
+  }
+
+  @Override
+  public boolean cancel(long uploadId) {
+    boolean asked =
+        jdbc.sql(
+                    """
+                    update reading_uploads set cancel_asked = true
+                    where id = ? and state in ('queued', 'running')
+                    """)
+                .param(uploadId)
+                .update()
+            == 1;
+    find(uploadId)
+        .filter(u -> u.state() == State.QUEUED)
+        .ifPresent(u -> end(uploadId, State.CANCELLED, "cancelled before it began"));
+    return asked;
+  }
+
+  @Override
+  public void finish(long uploadId, long readingId) {
+    transaction.executeWithoutResult(
+        status -> {
+          jdbc.sql(
+                  """
+                  update reading_uploads set state = 'done', progress = 1, message = 'done',
+                    reading_id = ? where id = ? and state = 'running'
+                  """)
+              .params(readingId, uploadId)
+              .update();
+          letGo(uploadId);
+        });
+  }
+
+  @Override
+  public void end(long uploadId, State state, String message) {
+    transaction.executeWithoutResult(
+        status -> {
+          jdbc.sql(
+                  """
+                  update reading_uploads set state = ?, message = ?
+                  where id = ? and state in ('queued', 'running')
+                  """)
+              .params(state.word(), message, uploadId)
+              .update();
+          letGo(uploadId);
+        });
+  }
+
+  private void letGo(long uploadId) {
+    List<Long> owned =
+        jdbc.sql("select file_id from reading_upload_files where upload_id = ?")
+            .param(uploadId)
+            .query(Long.class)
+            .list();
+    jdbc.sql("delete from reading_upload_files where upload_id = ?").param(uploadId).update();
+    files.delete(owned);
+  }
+
+  @Override
+  public List<Long> recover() {
+    jdbc.sql("select id from reading_uploads where state = 'running' and cancel_asked")
+        .query(Long.class)
+        .list()
+        .forEach(id -> end(id, State.CANCELLED, "cancelled"));
+    jdbc.sql(
+            """
+            update reading_uploads set state = 'queued', progress = 0,
+              message = 'waiting to be read again after a restart' where state = 'running'
+            """)
+        .update();
+    return jdbc.sql("select id from reading_uploads where state = 'queued' order by id")
+        .query(Long.class)
+        .list();
+  }
+}
