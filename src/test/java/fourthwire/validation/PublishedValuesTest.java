@@ -31,6 +31,7 @@ class PublishedValuesTest {
   static {
     CHECKS.putAll(QuantityChecks.all());
     CHECKS.putAll(LimitChecks.all());
+    CHECKS.putAll(ConductorChecks.all());
   }
 
   @ParameterizedTest(name = "{0}")

@@ -1,6 +1,7 @@
 package fourthwire.limits.loading;
 
 import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.tuple;
 import static org.assertj.core.api.Assertions.within;
 
 import fourthwire.limits.Finding;
@@ -152,7 +153,7 @@ class LoadingLimitsTest {
     TransformerLoading over = transformer(amps(96, 30, 10), OptionalDouble.empty());
     assertThat(over.findings())
         .extracting(Finding::code, Finding::severity)
-        .containsExactly(org.assertj.core.groups.Tuple.tuple("transformer-loading", Severity.ACT));
+        .containsExactly(tuple("transformer-loading", Severity.ACT));
   }
 
   /** A K rating is held against the K-factor (UL 1561); the next one that bears it is named. */
@@ -186,9 +187,9 @@ class LoadingLimitsTest {
         new CapacitorLoading.Phase("PFC-1", amps(100, 0, 88), amps(231, 0, 23), 231, 23_100);
     assertThat(CapacitorLoading.judge(phase, CapacitorLoading.Standard.IEC_60831))
         .extracting(Finding::code, Finding::severity)
-        .containsExactly(org.assertj.core.groups.Tuple.tuple("capacitor-current", Severity.ACT));
+        .containsExactly(tuple("capacitor-current", Severity.ACT));
     assertThat(CapacitorLoading.judge(phase, CapacitorLoading.Standard.IEEE_18))
         .extracting(Finding::code, Finding::severity)
-        .contains(org.assertj.core.groups.Tuple.tuple("capacitor-current", Severity.WATCH));
+        .contains(tuple("capacitor-current", Severity.WATCH));
   }
 }
