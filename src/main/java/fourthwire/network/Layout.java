@@ -1,6 +1,8 @@
 package fourthwire.network;
 
+import java.util.Arrays;
 import java.util.List;
+import java.util.stream.IntStream;
 
 /**
  * The network as flat arrays, parents before children: what every order shares. Conductors of all
@@ -53,6 +55,17 @@ final class Layout {
 
   final int largest;
 
+  /**
+   * The nodes in spans: one node, or a run of consecutive feeders that need no matrix, which are
+   * swept conductor by conductor. Span s has the nodes from {@code span[s]} to {@code span[s + 1]}.
+   */
+  final int[] span;
+
+  /** The nodes that are a {@link #PAIR}, and for every span the first of its own among them. */
+  final int[] pairs;
+
+  final int[] firstPairOfSpan;
+
   Layout(SourceImpedance source, List<NetworkBuilder.Draft> drafts, OrderLaw[] laws) {
     this.source = source;
     this.laws = laws.clone();
@@ -87,11 +100,17 @@ final class Layout {
     }
     assignRoles();
     blocksLength = assignBlocks();
-    int size = 0;
-    for (int n = 0; n < nodes; n++) {
-      size = Math.max(size, size(n));
+    largest = IntStream.range(0, nodes).map(this::size).max().orElse(0);
+    span =
+        IntStream.rangeClosed(0, nodes)
+            .filter(n -> n == 0 || n == nodes || !isSimple(n - 1) || !isSimple(n))
+            .toArray();
+    pairs = IntStream.range(0, nodes).filter(n -> role[n] == PAIR).toArray();
+    firstPairOfSpan = new int[span.length];
+    for (int s = 0; s < span.length; s++) {
+      int found = Arrays.binarySearch(pairs, span[s]);
+      firstPairOfSpan[s] = found < 0 ? -found - 1 : found;
     }
-    largest = size;
   }
 
   int size(int node) {
@@ -104,6 +123,11 @@ final class Layout {
 
   boolean isFeeder(int node) {
     return node > 0 && transformerOf[node] < 0;
+  }
+
+  /** A feeder that needs no matrix. */
+  boolean isSimple(int node) {
+    return role[node] != FULL && isFeeder(node);
   }
 
   private void place(int n, NetworkBuilder.Draft draft) {
@@ -129,12 +153,14 @@ final class Layout {
   }
 
   private void assignRoles() {
+    boolean[] feeds = new boolean[nodes];
     for (int n = nodes - 1; n >= 0; n--) {
       if (role[n] == PASSIVE && firstShunt[n + 1] > firstShunt[n]) {
-        role[n] = isFeeder(n) && isOnePair(n) ? PAIR : FULL;
+        role[n] = isFeeder(n) && !feeds[n] && isOnePair(n) ? PAIR : FULL;
       }
-      if (n > 0 && role[n] != PASSIVE) {
-        role[parent[n]] = FULL;
+      if (n > 0) {
+        feeds[parent[n]] = true;
+        role[parent[n]] = role[n] == PASSIVE ? role[parent[n]] : FULL;
       }
     }
   }
