@@ -27,6 +27,7 @@ final class ConductorChecks {
     checks.put(
         "skin argument of 1 ohm/kft",
         in -> ConductorData.skinArgument(1 / 0.3048, in.number("hz")));
+    checks.put("skin depth in mm", ConductorChecks::skinDepthMm);
     checks.put("dc ohm/km", in -> dcOhmPerKm(in));
     checks.put(
         "ac ohm/kft",
@@ -43,6 +44,13 @@ final class ConductorChecks {
   private static double skinRatio(Inputs in) {
     double x = in.number("x");
     return ConductorData.skinRatio(1000 * 8 * Math.PI * 50e-7 / (x * x), 50);
+  }
+
+  /** A round wire's x is √2 times its radius on the skin depth, so the depth follows from x. */
+  private static double skinDepthMm(Inputs in) {
+    double radiusMm = 10;
+    double dcOhmPerKm = in.number("ohm_m") / (Math.PI * radiusMm * radiusMm * 1e-6) * 1000;
+    return Math.sqrt(2) * radiusMm / ConductorData.skinArgument(dcOhmPerKm, in.number("hz"));
   }
 
   private static double dcOhmPerKm(Inputs in) {

@@ -8,6 +8,7 @@ import fourthwire.quantity.LinePower;
 import fourthwire.quantity.Phasor;
 import fourthwire.quantity.Spectrum;
 import fourthwire.quantity.ThreePhasePower;
+import fourthwire.quantity.Waveform;
 import java.util.Arrays;
 import java.util.HashMap;
 import java.util.List;
@@ -48,6 +49,7 @@ final class QuantityChecks {
 
   private static void neutral(Map<String, ToDoubleFunction<Inputs>> checks) {
     checks.put("balanced neutral", in -> sum(in.balanced("i")).rms());
+    checks.put("neutral of samples", QuantityChecks::neutralOfSamples);
     checks.put("balanced neutral on line", in -> neutralRatio(in.spectrum("i")));
     checks.put(
         "neutral ratio of pulses", in -> ratioOfSamples(pulses(in.number("width_deg"), 3600)));
@@ -80,9 +82,21 @@ final class QuantityChecks {
     checks.put(
         "K-factor on its own rms",
         in -> HarmonicLoss.kFactor(in.spectrum("i"), in.spectrum("i").rms()));
+    checks.put("factor K with n = 1 counted", QuantityChecks::factorKWithFundamental);
     checks.put(
         "factor K",
         in -> known(HarmonicLoss.factorK(in.spectrum("i"), in.number("e"), in.number("q"))));
+  }
+
+  /**
+   * Factor K as one worked example prints it, which counts n = 1 in the sum: K² grows by
+   * e/(1+e)·(I1/I)². That the difference is exactly this shows where the two part.
+   */
+  private static double factorKWithFundamental(Inputs in) {
+    Spectrum i = in.spectrum("i");
+    double e = in.number("e");
+    double k = known(HarmonicLoss.factorK(i, e, in.number("q")));
+    return Math.sqrt(k * k + e / (1 + e) * Math.pow(i.magnitude(1) / i.rms(), 2));
   }
 
   private static LinePower single(Inputs in) {
@@ -128,6 +142,12 @@ final class QuantityChecks {
   private static double[] pulses(double width, int n) {
     return sampled(
         n, x -> Math.abs(x - 90) < width / 2 ? 1 : Math.abs(x - 270) < width / 2 ? -1 : 0);
+  }
+
+  /** The neutral of a balanced load by its cycle: three shifted cycles added sample by sample. */
+  private static double neutralOfSamples(Inputs in) {
+    double[] line = Waveform.of(in.spectrum("i"), 3000).toArray();
+    return ratioOfSamples(line) * in.spectrum("i").rms();
   }
 
   /** As from a capture: three lines a third of a cycle apart, added sample by sample. */

@@ -71,6 +71,12 @@ public record ConductorLoading(
                     sentence(conductor, factors)));
   }
 
+  /** Whether it uses more of what it carries than the other does. */
+  boolean isTighterThan(ConductorLoading other) {
+    return adjustedLoadingPercent.value().orElse(0)
+        > other.adjustedLoadingPercent.value().orElse(0) * (1 + 1e-9);
+  }
+
   private String basis(AmpacityFactors factors) {
     return factor < 1 ? factors.basis() : "ampacity of the " + adjustedName + " as surveyed";
   }
@@ -79,8 +85,12 @@ public record ConductorLoading(
     double limit = adjustedAmpacityA.value().orElseThrow();
     String why =
         factor < 1
-            ? "%s A x %s; %s"
-                .formatted(Words.number(limit / factor), Words.number(factor), factors.reason())
+            ? "%s: %s A × %s, as %s"
+                .formatted(
+                    adjustedName,
+                    Words.number(limit / factor),
+                    Words.number(factor),
+                    factors.reason())
             : adjustedName;
     return "%s carries %s A, %s %% of the %s A that it is good for (%s)."
         .formatted(

@@ -36,8 +36,8 @@ public final class CurrentCarryingCount {
     int count = c.lines().size() + (counts ? 1 : 0);
     double factor = percent(count) / 100;
     String reason =
-        "%s: %d current-carrying conductors, factor %s"
-            .formatted(reason(c, counts), count, Words.number(factor));
+        "%s (%d current-carrying conductor%s: factor %s)"
+            .formatted(reason(c, counts), count, count == 1 ? "" : "s", Words.number(factor));
     return new AmpacityFactors(factor, factor, reason, BASIS);
   }
 
@@ -50,7 +50,7 @@ public final class CurrentCarryingCount {
 
   private static String reason(NeutralCase c, boolean counts) {
     if (c.neutral().isEmpty()) {
-      return "no neutral";
+      return "there is no neutral";
     }
     if (!c.wye() || c.lines().size() == 1) {
       return "the neutral is not counted";
@@ -58,7 +58,7 @@ public final class CurrentCarryingCount {
     if (c.lines().size() == 2) {
       return "the neutral beside two lines of a wye counts";
     }
-    return "nonlinear loads are %s %% of the feeder's design VA, the neutral %s"
+    return "nonlinear loads are %s %% of the feeder's design VA and the neutral %s"
         .formatted(Words.number(100 * c.nonlinearShare()), counts ? "counts" : "is not counted");
   }
 }

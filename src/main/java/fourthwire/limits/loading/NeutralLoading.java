@@ -21,7 +21,9 @@ import java.util.Optional;
  * @param thirdHarmonicPercent I3/I1 of the most loaded line
  * @param requiredAmpacityA tabulated ampacity that a cable would need for these currents with these
  *     factors, amps
- * @param findings act over the limit, watch over 80 %, a note on other triplens; worst first
+ * @param findings act over the limit, watch over 80 %, a note on other triplens; worst first. A
+ *     circuit of one line says the same of line and neutral, so the neutral is left out there
+ *     unless it is the tighter of the two
  */
 public record NeutralLoading(
     Optional<ConductorLoading> neutral,
@@ -42,6 +44,7 @@ public record NeutralLoading(
         c.neutral().map(n -> ConductorLoading.of(n.rms(), c.neutralRatings(), factors.neutral()));
     List<Finding> findings = new ArrayList<>();
     neutral
+        .filter(n -> c.lines().size() > 1 || n.isTighterThan(line))
         .flatMap(n -> n.finding(FindingCode.NEUTRAL_AMPACITY, "The neutral", factors))
         .ifPresent(findings::add);
     line.finding(FindingCode.LINE_AMPACITY, lineName, factors).ifPresent(findings::add);

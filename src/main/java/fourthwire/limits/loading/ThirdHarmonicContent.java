@@ -25,18 +25,18 @@ final class ThirdHarmonicContent {
 
   static AmpacityFactors factors(NeutralCase c) {
     if (!c.isFourWire()) {
-      return new AmpacityFactors(
-          1, 1, "Annex E is for three lines and a neutral: no factor", TABLE.basis());
+      return new AmpacityFactors(1, 1, "Annex E is for three lines and a neutral", TABLE.basis());
     }
     double content = percent(c.mostLoadedLine().getValue());
     PublishedTable.Row row = row(content);
     double factor = row.number("factor");
     boolean onLine = row.text("size_on").equals("line");
     String reason =
-        "third harmonic %s %% of the fundamental on %s: factor %s on the %s"
+        "the third harmonic is %s %% of the fundamental on %s (%s: factor %s on the %s)"
             .formatted(
                 Words.number(content),
                 c.mostLoadedLine().getKey(),
+                band(row),
                 Words.number(factor),
                 onLine ? "line" : "neutral");
     return new AmpacityFactors(onLine ? factor : 1, onLine ? 1 : factor, reason, TABLE.basis());
@@ -63,6 +63,12 @@ final class ThirdHarmonicContent {
   private static double percentOfFundamental(Spectrum line, double amps) {
     double fundamental = line.magnitude(1);
     return fundamental > 0 ? 100 * amps / fundamental : 0;
+  }
+
+  private static String band(PublishedTable.Row row) {
+    String from = row.text("above_percent");
+    String to = row.text("up_to_percent");
+    return to.isEmpty() ? "above " + from + " %" : from + " to " + to + " %";
   }
 
   private static PublishedTable.Row row(double content) {

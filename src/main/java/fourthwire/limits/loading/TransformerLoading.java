@@ -109,7 +109,7 @@ public record TransformerLoading(
   private static void deratedLoading(
       TransformerCase t, double loadKva, double limit, List<Finding> findings) {
     String sentence =
-        "The transformer's most loaded line stands for %s kVA; of a current of this shape its %s kVA are good for %s kVA."
+        "The most loaded line puts %s kVA on the transformer; with this current's harmonics its rating of %s kVA is good for %s kVA."
             .formatted(Words.number(loadKva), Words.number(t.ratedKva()), Words.number(limit));
     Judgement.of(loadKva, limit)
         .map(
@@ -128,7 +128,7 @@ public record TransformerLoading(
   /** A K-rated transformer bears its rated current as long as the K-factor is within its rating. */
   private static void ratedLoading(TransformerCase t, double loadKva, List<Finding> findings) {
     String sentence =
-        "The transformer's most loaded line stands for %s kVA of its %s kVA."
+        "The most loaded line puts %s kVA on the transformer, which is rated %s kVA."
             .formatted(Words.number(loadKva), Words.number(t.ratedKva()));
     Judgement.of(loadKva, t.ratedKva())
         .map(

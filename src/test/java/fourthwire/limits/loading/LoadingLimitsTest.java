@@ -52,7 +52,7 @@ class LoadingLimitsTest {
     assertThat(finding.severity()).isEqualTo(Severity.ACT);
     assertThat(finding.limit().value().orElseThrow()).isCloseTo(129, within(1e-9));
     assertThat(finding.basis()).contains("IEC 60364-5-52", "E.52.1");
-    assertThat(finding.sentence()).contains("132 A", "129 A", "150 A x 0.86", "40 %");
+    assertThat(finding.sentence()).contains("132 A", "129 A", "feeder: 150 A × 0.86", "40 %");
   }
 
   /** The same annex: 15 to 33 % puts 0.86 on the lines; over 45 % the neutral takes 1.0. */
@@ -133,6 +133,28 @@ class LoadingLimitsTest {
 
   private static double northAmerican(NeutralCase c) {
     return NeutralLoading.of(c).factors().neutral();
+  }
+
+  /** One line and its neutral carry the same: said once, of the tighter one. */
+  @Test
+  void aSingleLineCircuitIsJudgedOnce() {
+    assertThat(singleLine(FEEDER)).containsExactly("line-ampacity");
+    assertThat(singleLine(new ConductorRating("feeder", 120, true)))
+        .containsExactly("neutral-ampacity", "line-ampacity");
+  }
+
+  private static List<String> singleLine(ConductorRating neutral) {
+    Spectrum line = amps(140, 0, 0);
+    NeutralCase c =
+        new NeutralCase(
+            AmpacityRule.THIRD_HARMONIC_CONTENT,
+            Map.of(Conductor.L1, line),
+            Optional.of(line),
+            List.of(FEEDER),
+            List.of(neutral),
+            1,
+            true);
+    return NeutralLoading.of(c).findings().stream().map(Finding::code).toList();
   }
 
   /** No rating known: no loading and no verdict, and the reason is there. */
