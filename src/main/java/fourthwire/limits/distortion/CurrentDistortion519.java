@@ -51,6 +51,9 @@ public final class CurrentDistortion519 {
    */
   public static CurrentDistortion519 of(
       Edition519 edition, double nominalLineV, double shortCircuitA, double demandA) {
+    if (!(demandA > 0)) {
+      throw new IllegalArgumentException("demand current " + demandA + " A, must be above 0");
+    }
     PublishedTable table =
         nominalLineV <= 69_000 ? TABLE_2 : nominalLineV <= 161_000 ? TABLE_3 : TABLE_4;
     return new CurrentDistortion519(edition, table, shortCircuitA / demandA);

@@ -7,6 +7,7 @@ import fourthwire.limits.Words;
 import fourthwire.quantity.Figure;
 import fourthwire.quantity.Spectrum;
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
 
@@ -49,6 +50,7 @@ public record NeutralLoading(
         .ifPresent(findings::add);
     line.finding(FindingCode.LINE_AMPACITY, lineName, factors).ifPresent(findings::add);
     otherTriplens(c, worst, lineName).ifPresent(findings::add);
+    findings.sort(Comparator.comparing(Finding::severity));
     return new NeutralLoading(
         neutral,
         line,
