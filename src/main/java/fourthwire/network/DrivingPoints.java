@@ -1,130 +1,21 @@
 package fourthwire.network;
 
-import java.util.Arrays;
-
-/**
- * Driving-point impedances of nodes at one order. With G of the feeding node, what a current
- * injected at a node meets is
- *
- * <pre>  G_node = ((1 - Z·Q)·A·G·Aᵀ + Z)·(1 - Q·Z)</pre>
- *
- * which follows from the elimination (see {@link Elimination}): 1 - Z·Q = (1 + Z·Y)⁻¹ and 1 - Q·Z =
- * (1 + Y·Z)⁻¹. An ideal source has G = 0 behind its own impedance.
- */
+/** The driving-point impedances of every node at one order. */
 public final class DrivingPoints {
   private final Layout layout;
-  private final Elimination factors;
-  private final double[][] known;
+  private final double[][] ohm;
 
-  DrivingPoints(Layout layout, Elimination factors) {
+  DrivingPoints(Layout layout, ImpedanceWalk walk) {
     this.layout = layout;
-    this.factors = factors;
-    known = new double[layout.nodes][];
-    Arrays.fill(known, new double[0]);
+    ohm = new double[layout.nodes][];
+    ohm[0] = walk.source();
+    for (int n = 1; n < layout.nodes; n++) {
+      ohm[n] = walk.step(n, ohm[layout.parent[n]]);
+    }
   }
 
   /** The impedance at a node. */
   public DrivingPoint at(int node) {
-    return new DrivingPoint(matrix(node), layout.size(node));
-  }
-
-  void all() {
-    for (int n = 0; n < layout.nodes; n++) {
-      matrix(n);
-    }
-  }
-
-  private double[] matrix(int n) {
-    if (known[n].length == 0) {
-      int size = layout.size(n);
-      double[] behind =
-          n == 0 ? new double[2 * size * size] : transferred(n, matrix(layout.parent[n]));
-      known[n] = behindImpedance(n, behind);
-    }
-    return known[n];
-  }
-
-  /** A·G·Aᵀ. */
-  private double[] transferred(int n, double[] g) {
-    int size = layout.size(n);
-    int parentSize = layout.size(layout.parent[n]);
-    double[] result = new double[2 * size * size];
-    if (layout.isFeeder(n)) {
-      int first = layout.first[n];
-      int parentFirst = layout.first[layout.parent[n]];
-      for (int k = 0; k < size * size; k++) {
-        int row = layout.joinedTo[first + k / size] - parentFirst;
-        int column = layout.joinedTo[first + k % size] - parentFirst;
-        result[2 * k] = g[2 * (row * parentSize + column)];
-        result[2 * k + 1] = g[2 * (row * parentSize + column) + 1];
-      }
-      return result;
-    }
-    double[] a = layout.turns[layout.transformerOf[n]];
-    for (int k = 0; k < size * size; k++) {
-      int rowAt = k / size * parentSize;
-      int columnAt = k % size * parentSize;
-      for (int m = 0; m < parentSize * parentSize; m++) {
-        double factor = a[rowAt + m / parentSize] * a[columnAt + m % parentSize];
-        result[2 * k] += factor * g[2 * m];
-        result[2 * k + 1] += factor * g[2 * m + 1];
-      }
-    }
-    return result;
-  }
-
-  private double[] behindImpedance(int n, double[] behind) {
-    int size = layout.size(n);
-    double[] z = impedance(n);
-    if (layout.role[n] == Layout.PASSIVE) {
-      add(z, behind);
-      return behind;
-    }
-    double[] q = factor(n);
-    double[] left = Blocks.product(z, 0, q, 0, size);
-    Blocks.subtractFromIdentity(left, size);
-    double[] right = Blocks.product(q, 0, z, 0, size);
-    Blocks.subtractFromIdentity(right, size);
-    double[] sum = Blocks.product(left, 0, behind, 0, size);
-    add(z, sum);
-    return Blocks.product(sum, 0, right, 0, size);
-  }
-
-  private static void add(double[] from, double[] to) {
-    for (int k = 0; k < to.length; k++) {
-      to[k] += from[k];
-    }
-  }
-
-  private double[] impedance(int n) {
-    if (!layout.isFeeder(n)) {
-      return factors.denseImpedance(n);
-    }
-    int size = layout.size(n);
-    double[] z = new double[2 * size * size];
-    for (int k = 0; k < size; k++) {
-      z[2 * k * (size + 1)] = factors.series[2 * (layout.first[n] + k)];
-      z[2 * k * (size + 1) + 1] = factors.series[2 * (layout.first[n] + k) + 1];
-    }
-    return z;
-  }
-
-  private double[] factor(int n) {
-    int size = layout.size(n);
-    int at = layout.block[n];
-    if (layout.role[n] == Layout.FULL) {
-      return Arrays.copyOfRange(factors.blocks, at, at + 2 * size * size);
-    }
-    double[] q = new double[2 * size * size];
-    int a = layout.pairFrom[n] - layout.first[n];
-    int b = layout.pairTo[n] - layout.first[n];
-    Shunt.Stamp stamp = new Shunt.Stamp().on(q, 0, size);
-    double re = factors.blocks[at];
-    double im = factors.blocks[at + 1];
-    stamp.add(a, a, re, im);
-    stamp.add(b, b, re, im);
-    stamp.add(a, b, -re, -im);
-    stamp.add(b, a, -re, -im);
-    return q;
+    return new DrivingPoint(ohm[node], layout.size(node));
   }
 }

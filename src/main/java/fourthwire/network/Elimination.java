@@ -1,5 +1,7 @@
 package fourthwire.network;
 
+import fourthwire.network.element.Shunt;
+
 /**
  * Block elimination of one order, leaves first. A node's subtree, seen from what feeds it, is a
  * Norton equivalent I = Y·V - J; behind the impedance Z of what feeds it, whose ideal end has the
@@ -14,8 +16,10 @@ package fourthwire.network;
  */
 final class Elimination {
   private final Layout layout;
+  private final Plan plan;
   private final double order;
-  private final Shunt.Stamp stamp = new Shunt.Stamp();
+  private final Stamp stamp = new Stamp();
+  private final double[] siemens = new double[6];
   private final double[] left;
 
   /** Impedances of feeder conductors, by conductor. */
@@ -29,24 +33,25 @@ final class Elimination {
   /** Q of every node, at the layout's block offsets; Y until the node is reached. */
   final double[] blocks;
 
-  Elimination(Layout layout, double order) {
+  Elimination(Layout layout, Plan plan, double order) {
     this.layout = layout;
+    this.plan = plan;
     this.order = order;
-    left = new double[2 * layout.largest * layout.largest];
+    left = new double[2 * plan.largest * plan.largest];
     series = seriesImpedances();
     transformers = new double[layout.transformers.length][];
     for (int k = 0; k < transformers.length; k++) {
       transformers[k] = layout.transformers[k].matrix(order);
     }
     source = layout.source.matrix(order);
-    blocks = new double[layout.blocksLength];
+    blocks = new double[plan.blocksLength];
   }
 
   void run() {
     for (int n = layout.nodes - 1; n >= 0; n--) {
-      switch (layout.role[n]) {
-        case Layout.PAIR -> eliminatePair(n);
-        case Layout.FULL -> eliminateFull(n);
+      switch (plan.role[n]) {
+        case Plan.PAIR -> eliminatePair(n);
+        case Plan.FULL -> eliminateFull(n);
         default -> {
           // nothing but injections at or below: Q = 0
         }
@@ -77,13 +82,12 @@ final class Elimination {
     double re = 0;
     double im = 0;
     for (int k = layout.firstShunt[n]; k < layout.firstShunt[n + 1]; k++) {
-      double[] y = stamp.siemens();
-      ((Shunt.TwoTerminal) layout.shunts[k]).admittance().at(order, y);
-      re += y[0];
-      im += y[1];
+      ((Shunt.TwoTerminal) layout.shunts[k]).admittance().at(order, siemens);
+      re += siemens[0];
+      im += siemens[1];
     }
-    int from = 2 * layout.pairFrom[n];
-    int to = 2 * layout.pairTo[n];
+    int from = 2 * plan.pairFrom[n];
+    int to = 2 * plan.pairTo[n];
     double zRe = series[from] + series[to];
     double zIm = series[from + 1] + series[to + 1];
     double dRe = 1 + re * zRe - im * zIm;
@@ -94,24 +98,21 @@ final class Elimination {
     if (!Double.isFinite(qRe) || !Double.isFinite(qIm)) {
       throw new UnsolvableOrderException(order, n);
     }
-    blocks[layout.block[n]] = qRe;
-    blocks[layout.block[n] + 1] = qIm;
+    blocks[plan.block[n]] = qRe;
+    blocks[plan.block[n] + 1] = qIm;
     int p = layout.parent[n];
-    int a = layout.joinedTo[layout.pairFrom[n]] - layout.first[p];
-    int b = layout.joinedTo[layout.pairTo[n]] - layout.first[p];
-    stamp.on(blocks, layout.block[p], layout.size(p));
-    stamp.add(a, a, qRe, qIm);
-    stamp.add(b, b, qRe, qIm);
-    stamp.add(a, b, -qRe, -qIm);
-    stamp.add(b, a, -qRe, -qIm);
+    int a = layout.joinedTo[plan.pairFrom[n]] - layout.first[p];
+    int b = layout.joinedTo[plan.pairTo[n]] - layout.first[p];
+    stamp.on(blocks, plan.block[p], layout.size(p));
+    stamp.addPair(a, b, qRe, qIm);
   }
 
   private void eliminateFull(int n) {
     int size = layout.size(n);
-    int at = layout.block[n];
+    int at = plan.block[n];
     stamp.on(blocks, at, size);
     for (int k = layout.firstShunt[n]; k < layout.firstShunt[n + 1]; k++) {
-      layout.shunts[k].stamp(order, stamp);
+      stamp.add(layout.shunts[k], order);
     }
     boolean impedance = layout.isFeeder(n) ? writeFeederLeft(n) : writeDenseLeft(n);
     if (impedance && !Blocks.solve(left, size, blocks, at, size)) {
@@ -137,7 +138,7 @@ final class Elimination {
     if (!any) {
       return false;
     }
-    int y = layout.block[n];
+    int y = plan.block[n];
     int at = 0;
     for (int row = 0; row < size; row++) {
       for (int k = z; k < z + 2 * size; k += 2) {
@@ -152,7 +153,7 @@ final class Elimination {
 
   private boolean writeDenseLeft(int n) {
     int size = layout.size(n);
-    double[] m = Blocks.product(blocks, layout.block[n], denseImpedance(n), 0, size);
+    double[] m = Blocks.product(blocks, plan.block[n], denseImpedance(n), 0, size);
     for (int k = 0; k < size; k++) {
       m[2 * k * (size + 1)] += 1;
     }
@@ -168,8 +169,8 @@ final class Elimination {
     int size = layout.size(n);
     int p = layout.parent[n];
     int first = layout.first[n];
-    stamp.on(blocks, layout.block[p], layout.size(p));
-    int at = layout.block[n];
+    stamp.on(blocks, plan.block[p], layout.size(p));
+    int at = plan.block[n];
     for (int row = 0; row < size; row++) {
       int toRow = layout.joinedTo[first + row] - layout.first[p];
       for (int column = 0; column < size; column++) {
@@ -186,10 +187,10 @@ final class Elimination {
     int size = layout.size(n);
     int parentSize = layout.size(p);
     double[] a = layout.turns[layout.transformerOf[n]];
-    stamp.on(blocks, layout.block[p], parentSize);
+    stamp.on(blocks, plan.block[p], parentSize);
     for (int row = 0; row < size; row++) {
       for (int column = 0; column < size; column++) {
-        int at = layout.block[n] + 2 * (row * size + column);
+        int at = plan.block[n] + 2 * (row * size + column);
         addTurned(a, row * parentSize, column * parentSize, parentSize, at);
       }
     }

@@ -5,17 +5,17 @@ package fourthwire.network;
  * threads may solve at once, each with its own excitation and solution.
  */
 public final class FactoredOrder {
-  private final Layout layout;
+  private final TreeNetwork network;
   private final double order;
   private final Elimination factors;
   private final Sweep sweep;
 
-  FactoredOrder(Layout layout, double order) {
-    this.layout = layout;
+  FactoredOrder(TreeNetwork network, double order) {
+    this.network = network;
     this.order = order;
-    factors = new Elimination(layout, order);
+    factors = new Elimination(network.layout(), network.plan(), order);
     factors.run();
-    sweep = new Sweep(layout, factors);
+    sweep = new Sweep(network.layout(), network.plan(), factors);
   }
 
   /** The order. */
@@ -25,7 +25,7 @@ public final class FactoredOrder {
 
   /** Solves for an excitation, into a new solution. */
   public OrderSolution solve(Excitation excitation) {
-    OrderSolution solution = new OrderSolution(excitation.network(), layout.largest);
+    OrderSolution solution = new OrderSolution(network);
     solve(excitation, solution);
     return solution;
   }
@@ -35,26 +35,30 @@ public final class FactoredOrder {
    * allocated.
    */
   public void solve(Excitation excitation, OrderSolution into) {
-    if (excitation.network().layout() != layout || into.network().layout() != layout) {
-      throw new IllegalArgumentException("the excitation or the solution is another network's");
-    }
+    requireOwn(excitation, into);
     sweep.run(excitation, into);
   }
 
   /** The impedance between a node's conductors and earth, as an injected current meets it. */
   public DrivingPoint drivingPoint(int node) {
-    return new DrivingPoints(layout, factors).at(node);
+    return new ImpedanceWalk(network.layout(), network.plan(), factors).at(node);
   }
 
-  /** The driving-point impedances of every node, worked out once, in linear time. */
+  /** The driving-point impedances of every node, in linear time. */
   public DrivingPoints drivingPoints() {
-    DrivingPoints all = new DrivingPoints(layout, factors);
-    all.all();
-    return all;
+    return new DrivingPoints(
+        network.layout(), new ImpedanceWalk(network.layout(), network.plan(), factors));
   }
 
   /** Kirchhoff's laws and the balance of power of a solution of this order. */
   public SolutionCheck check(Excitation excitation, OrderSolution solution) {
-    return SolutionCheck.of(layout, factors, order, excitation, solution);
+    requireOwn(excitation, solution);
+    return SolutionCheck.of(network.layout(), factors, order, excitation, solution);
+  }
+
+  private void requireOwn(Excitation excitation, OrderSolution solution) {
+    if (excitation.network() != network || solution.network() != network) {
+      throw new IllegalArgumentException("the excitation or the solution is another network's");
+    }
   }
 }

@@ -1,5 +1,10 @@
 package fourthwire.network;
 
+import fourthwire.network.element.FeederConductor;
+import fourthwire.network.element.OrderLaw;
+import fourthwire.network.element.Shunt;
+import fourthwire.network.element.SourceImpedance;
+import fourthwire.network.element.Transformer;
 import java.util.ArrayList;
 import java.util.IdentityHashMap;
 import java.util.List;
@@ -22,7 +27,8 @@ import java.util.Optional;
  */
 public final class NetworkBuilder {
   private final List<Draft> drafts = new ArrayList<>();
-  private final Map<OrderLaw, Integer> laws = new IdentityHashMap<>();
+  private final Map<OrderLaw, Integer> lawNumbers = new IdentityHashMap<>();
+  private final List<OrderLaw> laws = new ArrayList<>();
   private Optional<SourceImpedance> source = Optional.empty();
 
   /** A node as it is noted down until the network is built. */
@@ -89,13 +95,11 @@ public final class NetworkBuilder {
    * @throws IllegalStateException if it has no source
    */
   public TreeNetwork build() {
-    OrderLaw[] table = new OrderLaw[laws.size()];
-    laws.forEach((law, index) -> table[index] = law);
     return new TreeNetwork(
         new Layout(
             source.orElseThrow(() -> new IllegalStateException("a network needs a source")),
             drafts,
-            table));
+            laws));
   }
 
   private int add(
@@ -119,8 +123,12 @@ public final class NetworkBuilder {
   }
 
   private int lawIndex(OrderLaw law) {
-    Integer known = laws.putIfAbsent(law, laws.size());
-    return known == null ? laws.size() - 1 : known;
+    Integer known = lawNumbers.putIfAbsent(law, laws.size());
+    if (known == null) {
+      laws.add(law);
+      return laws.size() - 1;
+    }
+    return known;
   }
 
   private void requireNode(int node) {

@@ -12,11 +12,11 @@ public final class OrderSolution {
   final double[] current;
   final double[] work;
 
-  OrderSolution(TreeNetwork network, int largestNode) {
+  OrderSolution(TreeNetwork network) {
     this.network = network;
     potential = new double[2 * network.conductors()];
     current = new double[2 * network.conductors()];
-    work = new double[4 * largestNode];
+    work = new double[2 * network.plan().largest];
   }
 
   /** Potential of a node's conductor to earth, volts. */

@@ -75,9 +75,9 @@ public record SolutionCheck(double currentLaw, double voltageLaw, double power) 
     private void addShunts(int n) {
       int size = layout.size(n);
       double[] y = new double[2 * size * size];
-      Shunt.Stamp stamp = new Shunt.Stamp().on(y, 0, size);
+      Stamp stamp = new Stamp().on(y, 0, size);
       for (int k = layout.firstShunt[n]; k < layout.firstShunt[n + 1]; k++) {
-        layout.shunts[k].stamp(order, stamp);
+        stamp.add(layout.shunts[k], order);
       }
       double[] taken = new double[2 * size];
       int at = 2 * layout.first[n];

@@ -10,20 +10,22 @@ import java.util.Arrays;
  */
 final class Sweep {
   private final Layout layout;
+  private final Plan plan;
   private final Elimination factors;
   private final double[] series;
 
-  Sweep(Layout layout, Elimination factors) {
+  Sweep(Layout layout, Plan plan, Elimination factors) {
     this.layout = layout;
+    this.plan = plan;
     this.factors = factors;
     series = factors.series;
   }
 
   void run(Excitation excitation, OrderSolution s) {
     System.arraycopy(excitation.injected, 0, s.current, 0, s.current.length);
-    for (int k = layout.span.length - 2; k >= 0; k--) {
-      int n = layout.span[k];
-      if (layout.isSimple(n)) {
+    for (int k = plan.span.length - 2; k >= 0; k--) {
+      int n = plan.span[k];
+      if (plan.isSimple(n)) {
         gatherRun(k, s.current);
       } else {
         gather(n, s);
@@ -31,9 +33,9 @@ final class Sweep {
     }
     System.arraycopy(excitation.emf, 0, s.potential, 0, excitation.emf.length);
     descend(0, s);
-    for (int k = 1; k < layout.span.length - 1; k++) {
-      int n = layout.span[k];
-      if (layout.isSimple(n)) {
+    for (int k = 1; k < plan.span.length - 1; k++) {
+      int n = plan.span[k];
+      if (plan.isSimple(n)) {
         descendRun(k, s);
       } else {
         takeIdealPotential(n, s.potential);
@@ -44,20 +46,20 @@ final class Sweep {
 
   /** S of a run of simple feeders: J but for the pairs, which are leaves. */
   private void gatherRun(int span, double[] current) {
-    for (int p = layout.firstPairOfSpan[span]; p < layout.firstPairOfSpan[span + 1]; p++) {
-      condensePair(layout.pairs[p], current);
+    for (int p = plan.firstPairOfSpan[span]; p < plan.firstPairOfSpan[span + 1]; p++) {
+      condensePair(plan.pairs[p], current);
     }
-    passUp(layout.first[layout.span[span]], layout.first[layout.span[span + 1]], current);
+    passUp(layout.first[plan.span[span]], layout.first[plan.span[span + 1]], current);
   }
 
   private void condensePair(int n, double[] j) {
-    int a = 2 * layout.pairFrom[n];
-    int b = 2 * layout.pairTo[n];
+    int a = 2 * plan.pairFrom[n];
+    int b = 2 * plan.pairTo[n];
     double[] z = series;
     double re = z[a] * j[a] - z[a + 1] * j[a + 1] - z[b] * j[b] + z[b + 1] * j[b + 1];
     double im = z[a] * j[a + 1] + z[a + 1] * j[a] - z[b] * j[b + 1] - z[b + 1] * j[b];
-    double qRe = factors.blocks[layout.block[n]];
-    double qIm = factors.blocks[layout.block[n] + 1];
+    double qRe = factors.blocks[plan.block[n]];
+    double qIm = factors.blocks[plan.block[n] + 1];
     double wRe = qRe * re - qIm * im;
     double wIm = qRe * im + qIm * re;
     j[a] -= wRe;
@@ -81,8 +83,8 @@ final class Sweep {
     int[] joinedTo = layout.joinedTo;
     double[] v = s.potential;
     double[] i = s.current;
-    int end = 2 * layout.first[layout.span[span + 1]];
-    for (int k = 2 * layout.first[layout.span[span]]; k < end; k += 2) {
+    int end = 2 * layout.first[plan.span[span + 1]];
+    for (int k = 2 * layout.first[plan.span[span]]; k < end; k += 2) {
       int from = 2 * joinedTo[k >> 1];
       double re = i[k];
       double im = i[k + 1];
@@ -91,20 +93,20 @@ final class Sweep {
       i[k] = -re;
       i[k + 1] = -im;
     }
-    for (int p = layout.firstPairOfSpan[span]; p < layout.firstPairOfSpan[span + 1]; p++) {
-      descendPair(layout.pairs[p], v, i);
+    for (int p = plan.firstPairOfSpan[span]; p < plan.firstPairOfSpan[span + 1]; p++) {
+      descendPair(plan.pairs[p], v, i);
     }
   }
 
   private void descendPair(int n, double[] v, double[] i) {
-    int a = layout.pairFrom[n];
-    int b = layout.pairTo[n];
+    int a = plan.pairFrom[n];
+    int b = plan.pairTo[n];
     int from = 2 * layout.joinedTo[a];
     int to = 2 * layout.joinedTo[b];
     double uRe = v[from] - v[to];
     double uIm = v[from + 1] - v[to + 1];
-    double qRe = factors.blocks[layout.block[n]];
-    double qIm = factors.blocks[layout.block[n] + 1];
+    double qRe = factors.blocks[plan.block[n]];
+    double qIm = factors.blocks[plan.block[n] + 1];
     addCurrent(2 * a, qRe * uRe - qIm * uIm, qRe * uIm + qIm * uRe, v, i);
     addCurrent(2 * b, qIm * uIm - qRe * uRe, -qRe * uIm - qIm * uRe, v, i);
   }
@@ -117,12 +119,12 @@ final class Sweep {
   }
 
   private void gather(int n, OrderSolution s) {
-    if (layout.role[n] == Layout.FULL) {
+    if (plan.role[n] == Plan.FULL) {
       int at = 2 * layout.first[n];
       Arrays.fill(s.work, 0, 2 * layout.size(n), 0);
       addImpedanceTimes(1, n, s.current, s.work, 0);
       Blocks.addProduct(
-          -1, factors.blocks, layout.block[n], layout.size(n), s.work, 0, s.current, at);
+          -1, factors.blocks, plan.block[n], layout.size(n), s.work, 0, s.current, at);
     }
     if (layout.isFeeder(n)) {
       passUp(layout.first[n], layout.first[n + 1], s.current);
@@ -178,10 +180,9 @@ final class Sweep {
     for (int k = from; k < to; k++) {
       s.current[k] = -s.current[k];
     }
-    if (layout.role[n] == Layout.FULL) {
+    if (plan.role[n] == Plan.FULL) {
       int size = layout.size(n);
-      Blocks.addProduct(
-          1, factors.blocks, layout.block[n], size, s.potential, from, s.current, from);
+      Blocks.addProduct(1, factors.blocks, plan.block[n], size, s.potential, from, s.current, from);
     }
     addImpedanceTimes(-1, n, s.current, s.potential, from);
   }

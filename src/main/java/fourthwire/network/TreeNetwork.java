@@ -9,9 +9,11 @@ public final class TreeNetwork {
   public static final int SOURCE = 0;
 
   private final Layout layout;
+  private final Plan plan;
 
   TreeNetwork(Layout layout) {
     this.layout = layout;
+    plan = new Plan(layout);
   }
 
   /** How many nodes there are, the source's terminals included. */
@@ -61,7 +63,7 @@ public final class TreeNetwork {
     if (!(order > 0) || Double.isInfinite(order)) {
       throw new IllegalArgumentException("order " + order + ": it is above 0");
     }
-    return new FactoredOrder(layout, order);
+    return new FactoredOrder(this, order);
   }
 
   /** An excitation of this network that is zero everywhere. */
@@ -71,5 +73,9 @@ public final class TreeNetwork {
 
   Layout layout() {
     return layout;
+  }
+
+  Plan plan() {
+    return plan;
   }
 }

@@ -8,9 +8,11 @@
  * fourthwire.network.FactoredOrder}, which solves for any number of {@link
  * fourthwire.network.Excitation excitations}. May use {@code quantity}.
  *
- * <p>Sources: Kirchhoff's laws; symmetrical components (C. L. Fortescue, 1918); connection symbols
- * of IEC 60076-1:2011 (from memory); Norton and Thévenin equivalents. Impedances are in ohms,
- * admittances in siemens, potentials in volts to earth, all rms phasors of one order.
+ * <p>What a network is made of stands in {@link fourthwire.network.element}.
+ *
+ * <p>Sources: Kirchhoff's laws; Norton and Thévenin equivalents; block elimination of a tree.
+ * Impedances are in ohms, admittances in siemens, potentials in volts to earth, all rms phasors of
+ * one order.
  */
 @org.jspecify.annotations.NullMarked
 package fourthwire.network;

@@ -3,6 +3,12 @@ package fourthwire.network;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
+import fourthwire.network.element.CapacitorBank;
+import fourthwire.network.element.FeederConductor;
+import fourthwire.network.element.SeriesImpedance;
+import fourthwire.network.element.SourceImpedance;
+import fourthwire.network.element.Transformer;
+import fourthwire.network.element.TransformerImpedance;
 import fourthwire.quantity.Phasor;
 import org.junit.jupiter.api.DisplayName;
 import org.junit.jupiter.api.Test;

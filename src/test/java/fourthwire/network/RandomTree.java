@@ -1,5 +1,14 @@
 package fourthwire.network;
 
+import fourthwire.network.element.FeederConductor;
+import fourthwire.network.element.OrderAdmittance;
+import fourthwire.network.element.OrderLaw;
+import fourthwire.network.element.SequenceAdmittance;
+import fourthwire.network.element.SeriesImpedance;
+import fourthwire.network.element.Shunt;
+import fourthwire.network.element.SourceImpedance;
+import fourthwire.network.element.Transformer;
+import fourthwire.network.element.TransformerImpedance;
 import fourthwire.quantity.Phasor;
 import java.util.ArrayList;
 import java.util.List;

@@ -1,5 +1,10 @@
 package fourthwire.network;
 
+import fourthwire.network.element.FeederConductor;
+import fourthwire.network.element.OrderAdmittance;
+import fourthwire.network.element.SeriesImpedance;
+import fourthwire.network.element.Shunt;
+import fourthwire.network.element.SourceImpedance;
 import fourthwire.quantity.Phasor;
 import java.util.SplittableRandom;
 

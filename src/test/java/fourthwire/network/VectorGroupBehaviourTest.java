@@ -4,6 +4,11 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.assertThatThrownBy;
 import static org.assertj.core.api.Assertions.within;
 
+import fourthwire.network.element.SeriesImpedance;
+import fourthwire.network.element.Shunt;
+import fourthwire.network.element.SourceImpedance;
+import fourthwire.network.element.Transformer;
+import fourthwire.network.element.TransformerImpedance;
 import fourthwire.quantity.Phasor;
 import org.junit.jupiter.api.DisplayName;
 import org.junit.jupiter.api.Test;

@@ -1,4 +1,4 @@
-package fourthwire.network;
+package fourthwire.network.element;
 
 import fourthwire.quantity.Phasor;
 

@@ -1,4 +1,4 @@
-package fourthwire.network;
+package fourthwire.network.element;
 
 /**
  * Three equal legs on three lines, as seen by the symmetrical components of the line potentials
@@ -35,6 +35,18 @@ public interface SequenceAdmittance {
       for (int k = 0; k < 4; k++) {
         siemens[k] = 0;
       }
+    };
+  }
+
+  /**
+   * These legs with their common point not connected, as where there is no neutral to join it to:
+   * the same, and open to zero sequence.
+   */
+  default SequenceAdmittance openToZeroSequence() {
+    return (order, siemens) -> {
+      at(order, siemens);
+      siemens[4] = 0;
+      siemens[5] = 0;
     };
   }
 }

@@ -1,4 +1,4 @@
-package fourthwire.network;
+package fourthwire.network.element;
 
 /**
  * One conductor of a feeder: which conductor of the feeding node it is joined to, and what lies

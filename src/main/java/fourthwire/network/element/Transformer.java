@@ -1,4 +1,4 @@
-package fourthwire.network;
+package fourthwire.network.element;
 
 import fourthwire.quantity.Phasor;
 
@@ -106,11 +106,12 @@ public final class Transformer {
   }
 
   /**
-   * The real matrix from the feeding node's potentials to the secondary's ideal ones, row by row.
+   * The real matrix from the feeding node's potentials to the secondary's ideal ones, row by row; a
+   * new array.
    *
    * @throws IllegalArgumentException if the feeding node lacks the conductors
    */
-  double[] turns(int parentConductors) {
+  public double[] turns(int parentConductors) {
     double[] a = new double[conductors() * parentConductors];
     switch (kind) {
       case THREE_PHASE -> writeThreePhase(a, parentConductors);
@@ -158,8 +159,11 @@ public final class Transformer {
     }
   }
 
-  /** The impedance matrix at an order, row by row, real and imaginary part. */
-  double[] matrix(double order) {
+  /**
+   * The impedance matrix over the secondary's conductors at an order, ohms, row by row, real and
+   * imaginary part side by side; a new array.
+   */
+  public double[] matrix(double order) {
     int size = conductors();
     double[] z = new double[2 * size * size];
     Phasor z1 = impedance.at(order);

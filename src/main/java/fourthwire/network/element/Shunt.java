@@ -1,4 +1,4 @@
-package fourthwire.network;
+package fourthwire.network.element;
 
 /** A linear element between conductors of one node, or between them and earth. */
 public sealed interface Shunt {
@@ -23,10 +23,7 @@ public sealed interface Shunt {
   /** The highest conductor number used. */
   int highestConductor();
 
-  /** Adds this to a node's admittance matrix at an order. */
-  void stamp(double order, Stamp into);
-
-  /** An admittance between two conductors. */
+  /** An admittance between two conductors, or between one and earth. */
   record TwoTerminal(int conductor, int other, OrderAdmittance admittance) implements Shunt {
     /** Refuses an element on one conductor or without one. */
     public TwoTerminal {
@@ -39,18 +36,6 @@ public sealed interface Shunt {
     @Override
     public int highestConductor() {
       return Math.max(conductor, other);
-    }
-
-    @Override
-    public void stamp(double order, Stamp into) {
-      double[] y = into.siemens();
-      admittance.at(order, y);
-      into.add(conductor, conductor, y[0], y[1]);
-      if (other != EARTH) {
-        into.add(other, other, y[0], y[1]);
-        into.add(conductor, other, -y[0], -y[1]);
-        into.add(other, conductor, -y[0], -y[1]);
-      }
     }
   }
 
@@ -75,62 +60,9 @@ public sealed interface Shunt {
       return Math.max(Math.max(line1, line2), Math.max(line3, common));
     }
 
-    @Override
-    public void stamp(double order, Stamp into) {
-      double[] y = into.siemens();
-      admittance.at(order, y);
-      double zeroRe = y[4];
-      double zeroIm = y[5];
-      Sequences.toCirculant(y);
-      for (int row = 0; row < 3; row++) {
-        for (int column = 0; column < 3; column++) {
-          int k = 2 * ((row - column + 3) % 3);
-          into.add(line(row), line(column), y[k], y[k + 1]);
-        }
-      }
-      if (common != EARTH && (zeroRe != 0 || zeroIm != 0)) {
-        stampCommon(zeroRe, zeroIm, into);
-      }
-    }
-
-    /** All line currents return at the common conductor; each line row and column sums to Y0. */
-    private void stampCommon(double zeroRe, double zeroIm, Stamp into) {
-      for (int row = 0; row < 3; row++) {
-        into.add(line(row), common, -zeroRe, -zeroIm);
-        into.add(common, line(row), -zeroRe, -zeroIm);
-      }
-      into.add(common, common, 3 * zeroRe, 3 * zeroIm);
-    }
-
-    private int line(int k) {
-      return k == 0 ? line1 : k == 1 ? line2 : line3;
-    }
-  }
-
-  /** Where shunts add themselves up: one node's admittance matrix at one order. */
-  final class Stamp {
-    private final double[] siemens = new double[6];
-    private double[] matrix = new double[0];
-    private int offset;
-    private int size;
-
-    Stamp() {}
-
-    Stamp on(double[] matrix, int offset, int size) {
-      this.matrix = matrix;
-      this.offset = offset;
-      this.size = size;
-      return this;
-    }
-
-    double[] siemens() {
-      return siemens;
-    }
-
-    void add(int row, int column, double re, double im) {
-      int at = offset + 2 * (row * size + column);
-      matrix[at] += re;
-      matrix[at + 1] += im;
+    /** The conductor of leg 0, 1 or 2. */
+    public int line(int leg) {
+      return leg == 0 ? line1 : leg == 1 ? line2 : line3;
     }
   }
 }

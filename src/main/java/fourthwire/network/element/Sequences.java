@@ -1,4 +1,4 @@
-package fourthwire.network;
+package fourthwire.network.element;
 
 /**
  * Symmetrical components of three equal, symmetrically arranged phases (C. L. Fortescue, 1918): a
@@ -6,7 +6,7 @@ package fourthwire.network;
  * -k·120°) by Σ c[k]·a<sup>k</sup>, the negative by Σ c[k]·a<sup>-k</sup> and the zero sequence by
  * Σ c[k], where a = 1∠120°.
  */
-final class Sequences {
+public final class Sequences {
   private static final double SIN_120 = Math.sqrt(3) / 2;
 
   private Sequences() {}
@@ -15,7 +15,7 @@ final class Sequences {
    * Turns positive, negative and zero component (real, imaginary; six values) into c[0], c[1], c[2]
    * of the circulant, in place: c[k] = (zero + positive·a<sup>-k</sup> + negative·a<sup>k</sup>)/3.
    */
-  static void toCirculant(double[] c) {
+  public static void toCirculant(double[] c) {
     double sumRe = c[0] + c[2];
     double sumIm = c[1] + c[3];
     double differenceRe = c[0] - c[2];
@@ -32,7 +32,7 @@ final class Sequences {
   }
 
   /** Writes the circulant of c into lines 0 to 2 of a square complex matrix. */
-  static void writeCirculant(double[] c, double[] matrix, int size) {
+  public static void writeCirculant(double[] c, double[] matrix, int size) {
     for (int row = 0; row < 3; row++) {
       for (int column = 0; column < 3; column++) {
         int k = 2 * ((row - column + 3) % 3);

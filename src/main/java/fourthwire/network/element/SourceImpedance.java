@@ -1,4 +1,4 @@
-package fourthwire.network;
+package fourthwire.network.element;
 
 import fourthwire.quantity.Phasor;
 
@@ -81,8 +81,11 @@ public final class SourceImpedance {
     }
   }
 
-  /** The impedance matrix at an order, row by row, real and imaginary part. */
-  double[] matrix(double order) {
+  /**
+   * The impedance matrix over the conductors at an order, ohms, row by row, real and imaginary part
+   * side by side; a new array.
+   */
+  public double[] matrix(double order) {
     int size = conductors();
     double[] z = new double[2 * size * size];
     Phasor z1 = regulated && order == 1 ? Phasor.ZERO : positive.at(order);

@@ -1,9 +1,12 @@
-package fourthwire.network;
+package fourthwire.network.element;
 
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.assertThatThrownBy;
 import static org.assertj.core.api.Assertions.within;
 
+import fourthwire.network.Excitation;
+import fourthwire.network.NetworkBuilder;
+import fourthwire.network.TreeNetwork;
 import java.util.OptionalDouble;
 import org.junit.jupiter.api.DisplayName;
 import org.junit.jupiter.api.Test;

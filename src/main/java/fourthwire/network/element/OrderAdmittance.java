@@ -1,4 +1,4 @@
-package fourthwire.network;
+package fourthwire.network.element;
 
 import fourthwire.quantity.Phasor;
 
@@ -16,11 +16,13 @@ public interface OrderAdmittance {
    * The admittance at an order.
    *
    * @param order above 0, also between whole orders
-   * @param siemens receives the real and the imaginary part
+   * @param siemens receives the real and the imaginary part; it may be longer than two
    */
   void at(double order, double[] siemens);
 
-  /** The reciprocal of a series impedance; open at an order where that is zero is refused. */
+  /**
+   * The reciprocal of a series impedance; at an order where that is 0 the network can't be solved.
+   */
   static OrderAdmittance ofSeries(SeriesImpedance impedance) {
     return (order, siemens) -> reciprocal(impedance.at(order), siemens);
   }

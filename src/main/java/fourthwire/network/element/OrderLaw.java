@@ -1,4 +1,4 @@
-package fourthwire.network;
+package fourthwire.network.element;
 
 /**
  * How a resistance or a reactance changes with the harmonic order: the factor on its value at the
