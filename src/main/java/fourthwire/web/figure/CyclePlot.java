@@ -1,0 +1,92 @@
+package fourthwire.web.figure;
+
+import fourthwire.quantity.Conductor;
+import fourthwire.quantity.Spectrum;
+import fourthwire.quantity.Waveform;
+import java.util.Locale;
+import java.util.Map;
+
+/** One cycle of each conductor's instantaneous value, summed from its orders 1 to 50. */
+public final class CyclePlot {
+  private static final double HEIGHT_PX = 208;
+  private static final int SAMPLES = 240;
+  private static final int STEPS = 2;
+  private static final int UNITS_WIDE = 1000;
+
+  private CyclePlot() {}
+
+  /**
+   * The picture; the neutral is drawn last and heaviest.
+   *
+   * @param unit of the spectra, {@code A} or {@code V}
+   */
+  public static String draw(Map<Conductor, Spectrum> spectra, String unit, String alternative) {
+    double peak =
+        spectra.values().stream().mapToDouble(s -> Waveform.of(s, SAMPLES).peak()).max().orElse(0);
+    Ticks ticks = Ticks.upTo(peak, STEPS);
+    Svg svg = Svg.picture("plot cycle", alternative);
+    rules(svg, ticks, unit);
+    svg.open(
+        "svg",
+        "x",
+        0,
+        "y",
+        0,
+        "width",
+        "100%",
+        "height",
+        HEIGHT_PX,
+        "viewBox",
+        "0 0 " + UNITS_WIDE + " " + Svg.rounded(HEIGHT_PX, 0),
+        "preserveAspectRatio",
+        "none");
+    for (Conductor conductor : Conductor.values()) {
+      Spectrum spectrum = spectra.get(conductor);
+      if (spectrum != null) {
+        svg.add(
+            "path",
+            "class",
+            "trace " + conductor.name().toLowerCase(Locale.ROOT),
+            "d",
+            path(Waveform.of(spectrum, SAMPLES), ticks.end()));
+      }
+    }
+    return svg.close().done();
+  }
+
+  private static void rules(Svg svg, Ticks ticks, String unit) {
+    for (double value : ticks.values()) {
+      rule(svg, ticks, value, unit);
+      if (value > 0) {
+        rule(svg, ticks, -value, "");
+      }
+    }
+    for (int quarter = 0; quarter <= 4; quarter++) {
+      String x = Svg.share(quarter / 4.0);
+      String anchor = quarter == 0 ? "start" : quarter == 4 ? "end" : "middle";
+      svg.text(90 * quarter + "°", "x", x, "y", HEIGHT_PX + 18, "text-anchor", anchor);
+    }
+  }
+
+  private static void rule(Svg svg, Ticks ticks, double value, String unit) {
+    double y = y(value, ticks.end());
+    String classes = value == 0 ? "axis" : "rule";
+    svg.add("line", "class", classes, "x1", 0, "x2", "100%", "y1", y, "y2", y);
+    String text = value == ticks.end() ? ticks.text(value) + "\u202f" + unit : ticks.text(value);
+    svg.text(text, "x", 0, "dx", -6, "y", y + 4, "text-anchor", "end");
+  }
+
+  private static String path(Waveform wave, double end) {
+    StringBuilder d = new StringBuilder("M");
+    for (int k = 0; k <= wave.count(); k++) {
+      double x = (double) UNITS_WIDE * k / wave.count();
+      double y = y(wave.at(k % wave.count()), end);
+      d.append(k == 0 ? "" : "L").append(Svg.rounded(x, 1)).append(' ').append(Svg.rounded(y, 1));
+    }
+    return d.toString();
+  }
+
+  private static double y(double value, double end) {
+    return HEIGHT_PX / 2 * (1 - value / end);
+  }
+}

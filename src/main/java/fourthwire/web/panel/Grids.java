@@ -1,0 +1,46 @@
+package fourthwire.web.panel;
+
+import fourthwire.quantity.Figure;
+import fourthwire.web.support.Column;
+import fourthwire.web.support.Reasons;
+import fourthwire.web.support.Words;
+import java.util.ArrayList;
+import java.util.List;
+
+/** Puts figures together as a table, row by row, and aligns its columns at the end. */
+final class Grids {
+  private final Words words;
+  private final String title;
+  private final List<String> heads;
+  private final List<String> names = new ArrayList<>();
+  private final List<List<Figure>> rows = new ArrayList<>();
+
+  Grids(Words words, String title, List<String> heads) {
+    this.words = words;
+    this.title = title;
+    this.heads = heads;
+  }
+
+  /** Adds a row; an unknown figure without a reason leaves its cell empty. */
+  Grids row(String name, List<Figure> figures) {
+    names.add(name);
+    rows.add(figures);
+    return this;
+  }
+
+  /** The table with these workings beside it. */
+  NodePage.Grid done(Working... workings) {
+    Reasons reasons = new Reasons();
+    List<List<Column.Cell>> columns = new ArrayList<>();
+    for (int c = 0; c < heads.size() - 1; c++) {
+      int column = c;
+      columns.add(Column.of(rows.stream().map(r -> r.get(column)).toList(), reasons));
+    }
+    List<NodePage.GridRow> out = new ArrayList<>();
+    for (int r = 0; r < names.size(); r++) {
+      int row = r;
+      out.add(new NodePage.GridRow(names.get(r), columns.stream().map(c -> c.get(row)).toList()));
+    }
+    return new NodePage.Grid(title, heads, out, reasons.list(), Working.lines(words, workings));
+  }
+}

@@ -1,0 +1,105 @@
+package fourthwire.web.panel;
+
+import fourthwire.web.support.Column;
+import fourthwire.web.support.Reasons;
+import fourthwire.web.support.Verdict;
+import java.util.List;
+import java.util.Optional;
+
+/**
+ * What the page of a node shows, ready to be set.
+ *
+ * @param kindKey message key of what it is
+ * @param facts what the survey says of it, one line
+ * @param unsupplied why there is no design state, else empty text
+ */
+public record NodePage(
+    long siteId,
+    String siteName,
+    long auditId,
+    int surveyRevision,
+    String supply,
+    String name,
+    String kindKey,
+    String facts,
+    List<Crumb> path,
+    VerdictLine verdict,
+    String unsupplied,
+    Optional<Rails> rails,
+    Optional<Pictures> pictures,
+    List<Finding> findings,
+    List<Adder> adders,
+    Optional<Grid> voltage,
+    Optional<Grid> power,
+    Optional<Grid> transformer,
+    List<Grid> measured,
+    List<NodeRow> children,
+    List<String> assumptions) {
+
+  /** A node above this one. */
+  public record Crumb(String name) {}
+
+  /**
+   * The verdict.
+   *
+   * @param about what the worst finding is about, a few words; empty without one
+   * @param sure how sure it is, a few words
+   */
+  public record VerdictLine(Verdict verdict, String about, String sure) {}
+
+  /** The four conductors. */
+  public record Rails(
+      List<RailRow> rows,
+      String caption,
+      String heat,
+      List<Reasons.Reason> reasons,
+      Grid figures) {}
+
+  /** One conductor. */
+  public record RailRow(
+      String name, boolean neutral, String svg, Column.Cell amps, String shape, String share) {}
+
+  /** The pictures side by side; the voltage's is empty where its distortion is not known. */
+  public record Pictures(
+      String spectrum,
+      String spectrumOf,
+      String cycle,
+      List<Key> keys,
+      Grid orders,
+      String voltage,
+      String voltageOf) {}
+
+  /** An entry of a picture's key. */
+  public record Key(String svg, String name) {}
+
+  /** A finding. */
+  public record Finding(
+      Verdict verdict, String sentence, String figure, String basis, String probability) {}
+
+  /** A circuit or panel by what it adds to the neutral. */
+  public record Adder(
+      String node,
+      String name,
+      String lines,
+      String loads,
+      String amps,
+      String share,
+      String known) {}
+
+  /**
+   * A table of figures.
+   *
+   * @param title its caption
+   * @param heads column heads, the first over the row names
+   * @param working how its figures come about
+   */
+  public record Grid(
+      String title,
+      List<String> heads,
+      List<GridRow> rows,
+      List<Reasons.Reason> reasons,
+      List<Working.Line> working) {}
+
+  /** A row of a table of figures. */
+  public record GridRow(String name, List<Column.Cell> cells) {}
+}

@@ -1,0 +1,130 @@
+package fourthwire.web.panel;
+
+import fourthwire.audit.DesignState;
+import fourthwire.limits.Finding;
+import fourthwire.site.Panel;
+import fourthwire.site.SiteTree;
+import fourthwire.site.Transformer;
+import fourthwire.web.support.FindingText;
+import fourthwire.web.support.Numbers;
+import fourthwire.web.support.Verdict;
+import fourthwire.web.support.Words;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import org.springframework.stereotype.Component;
+
+/** Makes a node's page out of its result and the survey. */
+@Component
+class NodePageMaker {
+  private final Words words;
+  private final NodeRows rows;
+
+  NodePageMaker(Words words, NodeRows rows) {
+    this.words = words;
+    this.rows = rows;
+  }
+
+  NodePage make(NodeCase node) {
+    Optional<DesignState> design = node.design();
+    Optional<TablesMaker> tables = design.map(d -> new TablesMaker(words, node, d));
+    return new NodePage(
+        node.audit().siteId(),
+        node.survey().settings().name(),
+        node.audit().id(),
+        node.audit().surveyRevision(),
+        node.node().supply(),
+        node.node().node(),
+        kindKey(node.node().kind()),
+        facts(node),
+        path(node),
+        verdict(node),
+        design.isPresent() ? "" : node.names().in(node.node().designReason()),
+        design.map(d -> new RailsMaker(words, node, d).make()),
+        design.flatMap(d -> new PicturesMaker(words, node, d).make()),
+        findings(node),
+        design.map(d -> new AddersMaker(words, node, d).make()).orElse(List.of()),
+        tables.map(TablesMaker::voltage),
+        tables.map(TablesMaker::power),
+        tables.flatMap(TablesMaker::transformer),
+        tables.map(TablesMaker::measured).orElse(List.of()),
+        rows.of(node.children(), node.tree(), node.survey()),
+        node.node().assumptions().stream().map(node.names()::in).toList());
+  }
+
+  private static String kindKey(SiteTree.Kind kind) {
+    return "kind." + kind.word();
+  }
+
+  private static List<NodePage.Crumb> path(NodeCase node) {
+    List<SiteTree.Node> path = node.tree().path(node.node().node());
+    return path.stream()
+        .filter(n -> !n.name().equals(node.node().node()))
+        .map(n -> new NodePage.Crumb(n.name()))
+        .toList();
+  }
+
+  private NodePage.VerdictLine verdict(NodeCase node) {
+    List<Finding> findings = node.node().findings();
+    Optional<Finding> worst = Verdict.worst(findings);
+    return new NodePage.VerdictLine(
+        Verdict.of(findings),
+        worst.map(f -> FindingText.about(words, f)).orElse(""),
+        worst.map(f -> FindingText.probability(words, f)).orElse(""));
+  }
+
+  private List<NodePage.Finding> findings(NodeCase node) {
+    return node.node().findings().stream()
+        .sorted(java.util.Comparator.comparing(Finding::severity))
+        .map(
+            f ->
+                new NodePage.Finding(
+                    Verdict.of(f.severity()),
+                    node.names().in(f.sentence()),
+                    FindingText.figure(words, f),
+                    f.basis(),
+                    FindingText.probability(words, f)))
+        .toList();
+  }
+
+  /** What the survey says of the node: voltage, system, rating, feeder. */
+  private String facts(NodeCase node) {
+    String name = node.node().node();
+    Optional<SiteTree.Node> at = node.tree().find(name);
+    List<String> facts = new ArrayList<>();
+    at.ifPresent(n -> facts.add(Numbers.of(n.nominalV(), "V")));
+    at.ifPresent(
+        n ->
+            facts.add(
+                n.conductors().stream()
+                    .map(node.names()::of)
+                    .collect(java.util.stream.Collectors.joining(" "))));
+    node.survey().transformers().stream()
+        .filter(t -> t.name().equals(name))
+        .findFirst()
+        .ifPresent(t -> facts.addAll(plate(t)));
+    node.survey().panels().stream()
+        .filter(p -> p.name().equals(name))
+        .findFirst()
+        .map(Panel::busRatingA)
+        .ifPresent(r -> r.ifPresent(a -> facts.add(words.of("facts.bus", Numbers.of(a, "A")))));
+    at.ifPresent(n -> facts.addAll(feeder(n)));
+    return String.join(" · ", facts);
+  }
+
+  private List<String> plate(Transformer t) {
+    return List.of(
+        Numbers.of(t.ratedKva(), "kVA"),
+        t.connection().symbol(),
+        words.of("facts.impedance", Numbers.of(t.impedancePercent(), "%")));
+  }
+
+  private List<String> feeder(SiteTree.Node node) {
+    List<String> facts = new ArrayList<>();
+    node.feeder().lengthM().ifPresent(m -> facts.add(words.of("facts.feeder", Numbers.of(m, "m"))));
+    node.feeder()
+        .conductorSize()
+        .ifPresent(s -> facts.add(words.of("facts.size", s.replace("mm2", "mm²"))));
+    return facts;
+  }
+}

@@ -1,0 +1,87 @@
+package fourthwire.web;
+
+import static org.assertj.core.api.Assertions.assertThat;
+import static org.junit.jupiter.api.Assumptions.assumeTrue;
+
+import com.microsoft.playwright.Page;
+import com.microsoft.playwright.options.ColorScheme;
+import java.nio.file.Path;
+import org.junit.jupiter.api.AfterAll;
+import org.junit.jupiter.api.BeforeAll;
+import org.junit.jupiter.api.Tag;
+import org.junit.jupiter.api.TestInstance;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvSource;
+import org.springframework.boot.test.context.SpringBootTest;
+import org.springframework.boot.test.web.server.LocalServerPort;
+
+/**
+ * Every page in a real browser, at the widths of a phone, a tablet and a desk: no violation of the
+ * accessibility rules (axe-core: WCAG 2.2 A and AA and its best practices), no scrolling sideways,
+ * no script or style refused by the content policy.
+ */
+@Tag("browser")
+@TestInstance(TestInstance.Lifecycle.PER_CLASS)
+@SpringBootTest(
+    classes = PagesApplication.class,
+    webEnvironment = SpringBootTest.WebEnvironment.RANDOM_PORT)
+class BrowserTest {
+  private static final int[] WIDTHS = {390, 820, 1440};
+
+  @LocalServerPort int port;
+  private Browser browser;
+
+  @BeforeAll
+  void open() {
+    assumeTrue(
+        Browser.installed().isPresent(),
+        "no Chromium is installed; set FOURTHWIRE_BROWSER to its path");
+    browser = new Browser();
+  }
+
+  @AfterAll
+  void close() {
+    if (browser != null) {
+      browser.close();
+    }
+  }
+
+  @ParameterizedTest(name = "{0}")
+  @CsvSource({
+    "panel, /audits/1/node?name=LP-2%20East%20offices",
+    "transformer, /audits/1/node?name=T1",
+    "three-wire, /audits/1/node?name=MP-1%20Pumps%20%26%20air",
+    "circuit, /audits/1/node?name=LP-2%20East%20offices:1",
+  })
+  void aPageFitsEveryScreenAndBreaksNoRule(String name, String path) {
+    for (int width : WIDTHS) {
+      check(name, path, width, ColorScheme.LIGHT);
+    }
+    check(name, path, WIDTHS[1], ColorScheme.DARK);
+  }
+
+  private void check(String name, String path, int width, ColorScheme scheme) {
+    try (Page page = browser.page(width, scheme)) {
+      StringBuilder console = new StringBuilder();
+      page.onConsoleMessage(m -> console.append(m.type()).append(": ").append(m.text()));
+      page.navigate("http://localhost:" + port + path);
+      shoot(page, name + "-" + width + "-" + scheme.name().toLowerCase(java.util.Locale.ROOT));
+      Object overflow =
+          page.evaluate(
+              "document.documentElement.scrollWidth - document.documentElement.clientWidth");
+      assertThat(overflow).as("pixels too wide at %d", width).isEqualTo(0);
+      page.evaluate("document.querySelectorAll('details').forEach(d => d.open = true)");
+      assertThat(Browser.violations(page)).as("%s at %d, %s", name, width, scheme).isEmpty();
+      assertThat(console.toString()).doesNotContain("error", "Refused");
+    }
+  }
+
+  /** With {@code -Dshots=folder} every page is also kept as a picture. */
+  private static void shoot(Page page, String name) {
+    String folder = System.getProperty("shots", "");
+    if (!folder.isEmpty()) {
+      page.screenshot(
+          new Page.ScreenshotOptions().setPath(Path.of(folder, name + ".png")).setFullPage(true));
+    }
+  }
+}
