@@ -46,4 +46,7 @@ public record QualityFinding(String code, Optional<Period> period, String effect
 
   /** Samples stand at the end of the instrument's range. */
   public static final String CLIPPED = "clipped";
+
+  /** A direct component where the current or voltage should have none. */
+  public static final String DIRECT_COMPONENT = "direct-component";
 }

@@ -17,6 +17,11 @@ public final class ReadingRefusedException extends RuntimeException {
    */
   public record Question(String part, String message) {}
 
+  /** With one sentence that says it all. */
+  public ReadingRefusedException(String message) {
+    this(message, List.of(), List.of());
+  }
+
   /** With one sentence, the columns found in order, and every question at once. */
   public ReadingRefusedException(String message, List<String> columns, List<Question> questions) {
     super(message);

@@ -1,0 +1,47 @@
+package fourthwire.intake.reading;
+
+import fourthwire.metering.Reading;
+import fourthwire.metering.capture.Capture;
+import fourthwire.metering.capture.CaptureAnalysis;
+import fourthwire.metering.capture.NoFundamentalException;
+import fourthwire.quantity.Conductor;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.concurrent.CancellationException;
+import java.util.function.BiPredicate;
+import java.util.stream.Collectors;
+
+/** From a capture, whatever format it came in, to its reading. */
+final class CaptureReading {
+  private CaptureReading() {}
+
+  static Reading of(
+      Capture capture,
+      ReadingSetting setting,
+      List<String> notes,
+      BiPredicate<Double, String> progress) {
+    go(progress, 0.5, "analysing the waveforms");
+    List<Conductor> reversed =
+        setting.ctReversed().stream().filter(c -> capture.nameOf(c + ".i").isPresent()).toList();
+    List<String> all = new ArrayList<>(notes);
+    if (!reversed.isEmpty()) {
+      all.add(
+          "Turned, as the meter's ct_reversed says: "
+              + reversed.stream().map(Conductor::name).collect(Collectors.joining(", "))
+              + ".");
+    }
+    try {
+      return CaptureAnalysis.of(
+          capture.turned(reversed.stream().map(c -> c + ".i").toList()), setting.nominalHz(), all);
+    } catch (NoFundamentalException e) {
+      throw new ReadingRefusedException(String.valueOf(e.getMessage()));
+    }
+  }
+
+  /** Tells how far it is; stops where asked to. */
+  static void go(BiPredicate<Double, String> progress, double share, String message) {
+    if (!progress.test(share, message)) {
+      throw new CancellationException("stopped while " + message);
+    }
+  }
+}

@@ -1,0 +1,100 @@
+package fourthwire.intake.reading.comtrade;
+
+import java.time.LocalDateTime;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
+
+/**
+ * A COMTRADE record: its channels and their samples, in the units the record states, primary or
+ * secondary as it says.
+ */
+public final class Comtrade {
+  private final Configuration configuration;
+  private final double[] timesS;
+  private final double[][] samples;
+  private final List<String> notes;
+
+  Comtrade(Configuration configuration, double[] timesS, double[][] samples, List<String> notes) {
+    this.configuration = configuration;
+    this.timesS = timesS;
+    this.samples = samples;
+    this.notes = List.copyOf(notes);
+  }
+
+  /**
+   * Reads a configuration and its data.
+   *
+   * @throws ComtradeException where it can't be read
+   */
+  public static Comtrade of(byte[] configuration, byte[] data) {
+    Configuration c = new ConfigurationReader(configuration).read();
+    return new DataReader(c, data).read();
+  }
+
+  /** The analogue channels of a configuration alone. */
+  public static List<AnalogChannel> channels(byte[] configuration) {
+    return new ConfigurationReader(configuration).read().channels();
+  }
+
+  /**
+   * Reads a single file that holds all parts (CFF, revision 2013).
+   *
+   * @throws ComtradeException where it can't be read
+   */
+  public static Comtrade ofCombined(byte[] file) {
+    CombinedFile parts = CombinedFile.of(file);
+    return of(parts.configuration(), parts.data());
+  }
+
+  /** The configuration part of a single file that holds all parts. */
+  public static byte[] configurationOf(byte[] combined) {
+    return CombinedFile.of(combined).configuration();
+  }
+
+  /** The analogue channels, in order. */
+  public List<AnalogChannel> channels() {
+    return configuration.channels();
+  }
+
+  /** Samples of a channel, from 0, as a·x + b; NaN where the record marks them as missing. */
+  public double[] samples(int channel) {
+    return samples[channel].clone();
+  }
+
+  /** Times of the samples after the first, seconds. */
+  public double[] timesS() {
+    return timesS.clone();
+  }
+
+  /** Samples a second; empty where the rate changes. */
+  public OptionalDouble sampleRateHz() {
+    double[] t = timesS;
+    if (configuration.rates().size() > 1 || t.length < 2) {
+      return OptionalDouble.empty();
+    }
+    return OptionalDouble.of((t.length - 1) / t[t.length - 1]);
+  }
+
+  /** Time of the first sample as written; local, or UTC with the offset. */
+  public Optional<LocalDateTime> start() {
+    return configuration.start();
+  }
+
+  /** Offset of the written times from UTC, as {@code +05:30}. */
+  public Optional<String> utcOffset() {
+    return configuration.utcOffset();
+  }
+
+  /** Line frequency the record states. */
+  public OptionalDouble lineHz() {
+    return configuration.lineHz() > 0
+        ? OptionalDouble.of(configuration.lineHz())
+        : OptionalDouble.empty();
+  }
+
+  /** How the record was read: what it left open, in sentences. */
+  public List<String> notes() {
+    return notes;
+  }
+}

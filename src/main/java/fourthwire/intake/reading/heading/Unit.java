@@ -1,0 +1,70 @@
+package fourthwire.intake.reading.heading;
+
+import java.util.Arrays;
+import java.util.Locale;
+import java.util.Optional;
+
+/** Units that columns come in, with the factor to the base unit of their kind. */
+enum Unit {
+  AMPERE(Kind.CURRENT, 1, "a", "amp", "amps", "ampere", "amperes", "arms"),
+  MILLIAMPERE(Kind.CURRENT, 1e-3, "ma"),
+  KILOAMPERE(Kind.CURRENT, 1e3, "ka"),
+  VOLT(Kind.VOLTAGE, 1, "v", "volt", "volts", "vrms"),
+  MILLIVOLT(Kind.VOLTAGE, 1e-3, "mv"),
+  KILOVOLT(Kind.VOLTAGE, 1e3, "kv"),
+  WATT(Kind.ACTIVE, 1, "w", "watt", "watts"),
+  KILOWATT(Kind.ACTIVE, 1e3, "kw"),
+  MEGAWATT(Kind.ACTIVE, 1e6, "mw"),
+  VAR(Kind.REACTIVE, 1, "var", "vars"),
+  KILOVAR(Kind.REACTIVE, 1e3, "kvar", "kvars"),
+  MEGAVAR(Kind.REACTIVE, 1e6, "mvar"),
+  VOLTAMPERE(Kind.APPARENT, 1, "va"),
+  KILOVOLTAMPERE(Kind.APPARENT, 1e3, "kva"),
+  MEGAVOLTAMPERE(Kind.APPARENT, 1e6, "mva"),
+  WATTHOUR(Kind.ENERGY, 1, "wh"),
+  KILOWATTHOUR(Kind.ENERGY, 1e3, "kwh"),
+  MEGAWATTHOUR(Kind.ENERGY, 1e6, "mwh"),
+  PERCENT(Kind.SHARE, 1, "%", "pct", "percent"),
+  DEGREE(Kind.ANGLE, 1, "°", "deg", "degree", "degrees"),
+  HERTZ(Kind.FREQUENCY, 1, "hz", "hertz");
+
+  /** What a unit measures. */
+  enum Kind {
+    CURRENT,
+    VOLTAGE,
+    ACTIVE,
+    REACTIVE,
+    APPARENT,
+    ENERGY,
+    SHARE,
+    ANGLE,
+    FREQUENCY
+  }
+
+  private final Kind kind;
+  private final double factor;
+  private final String[] words;
+
+  Unit(Kind kind, double factor, String... words) {
+    this.kind = kind;
+    this.factor = factor;
+    this.words = words;
+  }
+
+  Kind kind() {
+    return kind;
+  }
+
+  double factor() {
+    return factor;
+  }
+
+  static Optional<Unit> find(String text) {
+    String word = text.trim().toLowerCase(Locale.ROOT);
+    return Arrays.stream(values())
+        .filter(u -> Arrays.asList(u.words).contains(word))
+        // mW and mVA of a building are no milliwatts, but MW and mW differ by a letter's case.
+        .filter(u -> u.factor != 1e6 || text.trim().startsWith("M"))
+        .findFirst();
+  }
+}
