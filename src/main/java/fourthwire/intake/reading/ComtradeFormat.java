@@ -180,7 +180,7 @@ final class ComtradeFormat implements Format {
     try {
       return reading.get();
     } catch (ComtradeException e) {
-      throw new ReadingRefusedException(e.getMessage());
+      throw new ReadingRefusedException(String.valueOf(e.getMessage()));
     }
   }
 }

@@ -39,11 +39,11 @@ final class Fits {
   }
 
   private static void derive(Map<String, double[]> samples) {
-    if (LINES.stream().allMatch(l -> samples.containsKey(l + ".i"))) {
-      double[] sum = new double[samples.get("L1.i").length];
-      for (Conductor line : LINES) {
-        add(sum, samples.get(line + ".i"), 1);
-      }
+    List<double[]> lines = new ArrayList<>();
+    LINES.forEach(l -> Optional.ofNullable(samples.get(l + ".i")).ifPresent(lines::add));
+    if (lines.size() == LINES.size()) {
+      double[] sum = new double[lines.get(0).length];
+      lines.forEach(x -> add(sum, x, 1));
       samples.put(SUM, sum);
     }
     for (String pair : PAIRS) {
@@ -69,9 +69,10 @@ final class Fits {
     PAIRS.forEach(p -> candidates.add(p + ".v"));
     LINES.forEach(l -> candidates.add(l + ".i"));
     return candidates.stream()
-        .filter(byQuantity::containsKey)
+        .map(this::find)
+        .flatMap(Optional::stream)
         .findFirst()
-        .map(q -> byQuantity.get(q).at(1).degrees())
+        .map(fit -> fit.at(1).degrees())
         .orElse(0.0);
   }
 
@@ -108,7 +109,9 @@ final class Fits {
   /** Mean of the lines' rms currents, amps. */
   double meanLineA() {
     return lines().stream()
-        .mapToDouble(l -> byQuantity.get(l + ".i").alternatingRms())
+        .map(this::current)
+        .flatMap(Optional::stream)
+        .mapToDouble(HarmonicFit::alternatingRms)
         .average()
         .orElse(0);
   }
