@@ -119,7 +119,11 @@ final class NetworkPlan {
     private void lay(SiteTree.Node node) {
       switch (node.kind()) {
         case SUPPLY ->
-            put(node, builder.source(plate.impedance()), numbered(node.conductors()), FeederPath.NONE);
+            put(
+                node,
+                builder.source(plate.impedance()),
+                numbered(node.conductors()),
+                FeederPath.NONE);
         case TRANSFORMER -> {
           if (supply.roleOrDefault() == SupplyRole.STANDBY && fedByTheSupply(node)) {
             layBehindFeeder(node);
@@ -159,7 +163,11 @@ final class NetworkPlan {
       if (node.hasNeutral()) {
         conductors.add(FeederConductor.from(number(parent, N), path.neutral()));
       }
-      put(node, builder.feeder(parent.networkNode(), conductors), numbered(node.conductors()), path);
+      put(
+          node,
+          builder.feeder(parent.networkNode(), conductors),
+          numbered(node.conductors()),
+          path);
     }
 
     private static List<FeederConductor> lineConductors(

@@ -13,7 +13,9 @@ import java.util.OptionalDouble;
 final class SharedNeutral {
   private SharedNeutral() {}
 
-  /** A feeder whose neutral is the shared one: the row that says most of it, at the longest length. */
+  /**
+   * A feeder whose neutral is the shared one: the row that says most of it, at the longest length.
+   */
   static Feeder feeder(List<Circuit> group) {
     Feeder f =
         group.stream()

@@ -24,8 +24,7 @@ final class SupplyPlate {
 
   SupplyPlate(Supply supply, List<Background> background) {
     this.supply = supply;
-    this.background =
-        background.stream().filter(b -> b.supply().equals(supply.name())).toList();
+    this.background = background.stream().filter(b -> b.supply().equals(supply.name())).toList();
   }
 
   SourceImpedance impedance() {
@@ -52,13 +51,13 @@ final class SupplyPlate {
               / (1000 * supply.generatorKva().orElseThrow());
       return SeriesImpedance.of(reactance / xOverR, reactance);
     }
-    return SeriesImpedance.ofMagnitude(v * v / (1e6 * supply.faultLevelMva().orElseThrow()), xOverR);
+    return SeriesImpedance.ofMagnitude(
+        v * v / (1e6 * supply.faultLevelMva().orElseThrow()), xOverR);
   }
 
   private SeriesImpedance zeroSequence(SeriesImpedance positive) {
     return SeriesImpedance.of(
-        positive.resistanceOhm(),
-        positive.reactanceOhm() * supply.zeroSequenceRatio().orElse(1));
+        positive.resistanceOhm(), positive.reactanceOhm() * supply.zeroSequenceRatio().orElse(1));
   }
 
   /** Sets the electromotive forces of one whole order; false if there are none. */

@@ -57,8 +57,8 @@ final class TransformerPlate {
 
   /**
    * Winding eddy loss per unit of rated I²R: as surveyed, else mid-range planning figures of IEEE
-   * C57.110-era tutorials (from memory). A survey does not say dry or oil: low-voltage primaries and
-   * K-rated transformers are taken as dry.
+   * C57.110-era tutorials (from memory). A survey does not say dry or oil: low-voltage primaries
+   * and K-rated transformers are taken as dry.
    */
   private double eddyFraction() {
     if (plate.windingEddyLossPercent().isPresent()) {
@@ -115,8 +115,7 @@ final class TransformerPlate {
       return List.of();
     }
     double ratio = plate.primaryV() / plate.secondaryV();
-    return List.of(
-        impedance.primaryZeroSequencePath(ratio, primaryNeutral ? 3 : Shunt.EARTH));
+    return List.of(impedance.primaryZeroSequencePath(ratio, primaryNeutral ? 3 : Shunt.EARTH));
   }
 
   /** Rated secondary line current, amps. */
