@@ -40,10 +40,10 @@ final class ActiveFilter {
     return new ActiveFilter(
         filter.ratedA().orElseThrow(),
         lines.stream()
-            .mapToInt(l -> network.index(place.networkNode(), place.conductors().get(l)))
+            .mapToInt(l -> network.index(place.networkNode(), place.conductors().of(l)))
             .toArray(),
         place.node().hasNeutral()
-            ? network.index(place.networkNode(), place.conductors().get(N))
+            ? network.index(place.networkNode(), place.conductors().of(N))
             : -1,
         offset);
   }

@@ -55,12 +55,12 @@ final class Compensation {
   }
 
   private static Shunt threeLegs(Place place, SequenceAdmittance admittance) {
-    Map<fourthwire.quantity.Conductor, Integer> number = place.conductors();
+    Numbering number = place.conductors();
     return new Shunt.ThreeTerminal(
-        number.get(L1),
-        number.get(L2),
-        number.get(L3),
-        number.getOrDefault(N, Shunt.EARTH),
+        number.of(L1),
+        number.of(L2),
+        number.of(L3),
+        number.has(N) ? number.of(N) : Shunt.EARTH,
         admittance);
   }
 

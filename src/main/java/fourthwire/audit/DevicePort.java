@@ -8,7 +8,6 @@ import fourthwire.network.OrderSolution;
 import fourthwire.network.TreeNetwork;
 import fourthwire.quantity.Conductor;
 import java.util.List;
-import java.util.Map;
 
 /**
  * One load at its place in the network while the two are solved together: a mutable work block, for
@@ -56,8 +55,7 @@ final class DevicePort {
   }
 
   private static int index(TreeNetwork network, Place place, Conductor conductor) {
-    Map<Conductor, Integer> numbers = place.conductors();
-    return network.index(place.networkNode(), numbers.get(conductor));
+    return network.index(place.networkNode(), place.conductors().of(conductor));
   }
 
   Device device() {

@@ -19,6 +19,7 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Objects;
 import java.util.Optional;
 import java.util.function.Function;
 import java.util.stream.Collectors;
@@ -122,7 +123,7 @@ final class NetworkPlan {
             put(
                 node,
                 builder.source(plate.impedance()),
-                numbered(node.conductors()),
+                Numbering.of(node.conductors()),
                 FeederPath.NONE);
         case TRANSFORMER -> {
           if (supply.roleOrDefault() == SupplyRole.STANDBY && fedByTheSupply(node)) {
@@ -166,7 +167,7 @@ final class NetworkPlan {
       put(
           node,
           builder.feeder(parent.networkNode(), conductors),
-          numbered(node.conductors()),
+          Numbering.of(node.conductors()),
           path);
     }
 
@@ -179,12 +180,13 @@ final class NetworkPlan {
 
     private void layTransformer(SiteTree.Node node) {
       Place parent = parentOf(node);
-      TransformerPlate transformer = new TransformerPlate(transformers.get(node.name()));
+      TransformerPlate transformer =
+          new TransformerPlate(Objects.requireNonNull(transformers.get(node.name())));
       FeederPath path = feeders.of(node.feeder());
       List<Conductor> primary = new ArrayList<>(node.parentLines());
       List<FeederConductor> conductors = new ArrayList<>(lineConductors(parent, primary, path));
       boolean neutral =
-          parent.conductors().containsKey(N) && transformer.wantsPrimaryNeutral(primary.size());
+          parent.conductors().has(N) && transformer.wantsPrimaryNeutral(primary.size());
       if (neutral) {
         primary.add(N);
         conductors.add(FeederConductor.from(number(parent, N), path.neutral()));
@@ -197,21 +199,21 @@ final class NetworkPlan {
           new Place(
               node,
               secondary,
-              numbered(node.conductors()),
+              Numbering.of(node.conductors()),
               path,
               Optional.of(
-                  new Place.TransformerPlace(transformer, primaryNode, numbered(primary)))));
+                  new Place.TransformerPlace(transformer, primaryNode, Numbering.of(primary)))));
     }
 
     private void laySharedNeutral(List<Circuit> group) {
       List<FeederConductor> conductors = new ArrayList<>();
-      List<Map<Conductor, Integer>> numbers = new ArrayList<>();
+      List<List<Integer>> numbers = new ArrayList<>();
       Place parent = parentOf(tree.get(group.get(0).id()));
       for (Circuit circuit : group) {
-        Map<Conductor, Integer> own = new LinkedHashMap<>();
+        List<Integer> own = new ArrayList<>();
         FeederPath path = feeders.of(circuit.feeder());
         for (Conductor line : circuit.lines().lines()) {
-          own.put(line, conductors.size());
+          own.add(conductors.size());
           conductors.add(FeederConductor.from(number(parent, line), path.line()));
         }
         numbers.add(own);
@@ -221,32 +223,23 @@ final class NetworkPlan {
       conductors.add(FeederConductor.from(number(parent, N), neutral.neutral()));
       int joint = builder.feeder(parent.networkNode(), conductors);
       for (int k = 0; k < group.size(); k++) {
-        numbers.get(k).put(N, conductors.size() - 1);
+        numbers.get(k).add(conductors.size() - 1);
         SiteTree.Node node = tree.get(group.get(k).id());
         FeederPath own = feeders.of(node.feeder());
-        put(node, joint, numbers.get(k), own.withNeutralOf(neutral));
+        put(
+            node,
+            joint,
+            new Numbering(node.conductors(), List.copyOf(numbers.get(k))),
+            own.withNeutralOf(neutral));
       }
     }
 
-    private void put(
-        SiteTree.Node node, int networkNode, Map<Conductor, Integer> numbers, FeederPath path) {
+    private void put(SiteTree.Node node, int networkNode, Numbering numbers, FeederPath path) {
       places.put(node.name(), new Place(node, networkNode, numbers, path, Optional.empty()));
     }
 
     private static int number(Place place, Conductor conductor) {
-      Integer number = place.conductors().get(conductor);
-      if (number == null) {
-        throw new IllegalArgumentException(place.name() + " has no conductor " + conductor);
-      }
-      return number;
-    }
-
-    private static Map<Conductor, Integer> numbered(List<Conductor> conductors) {
-      Map<Conductor, Integer> numbers = new LinkedHashMap<>();
-      for (Conductor conductor : conductors) {
-        numbers.put(conductor, numbers.size());
-      }
-      return numbers;
+      return place.conductors().of(conductor);
     }
 
     private static String sharedKey(Circuit circuit) {

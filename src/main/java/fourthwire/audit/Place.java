@@ -1,8 +1,6 @@
 package fourthwire.audit;
 
-import fourthwire.quantity.Conductor;
 import fourthwire.site.SiteTree;
-import java.util.Map;
 import java.util.Optional;
 
 /**
@@ -17,13 +15,12 @@ import java.util.Optional;
 record Place(
     SiteTree.Node node,
     int networkNode,
-    Map<Conductor, Integer> conductors,
+    Numbering conductors,
     FeederPath feeder,
     Optional<TransformerPlace> transformer) {
 
   /** A transformer's rating plate and where its primary terminals stand in the network. */
-  record TransformerPlace(
-      TransformerPlate plate, int networkNode, Map<Conductor, Integer> conductors) {}
+  record TransformerPlace(TransformerPlate plate, int networkNode, Numbering conductors) {}
 
   /** Its name on the site. */
   String name() {

@@ -4,7 +4,6 @@ import fourthwire.network.OrderSolution;
 import fourthwire.network.TreeNetwork;
 import fourthwire.quantity.Conductor;
 import fourthwire.quantity.Spectrum;
-import java.util.Map;
 
 /** The solved network of a site: potentials and feeding currents of every node at every order. */
 final class SiteSolution {
@@ -40,8 +39,8 @@ final class SiteSolution {
    * Current of a node's conductor in the contract's sense: lines from source to load, the neutral
    * from load to source, amps.
    */
-  Spectrum current(int networkNode, Map<Conductor, Integer> conductors, Conductor conductor) {
-    int index = network.index(networkNode, conductors.get(conductor));
+  Spectrum current(int networkNode, Numbering conductors, Conductor conductor) {
+    int index = network.index(networkNode, conductors.of(conductor));
     double sign = conductor.isLine() ? 1 : -1;
     double[] re = new double[Spectrum.HIGHEST_ORDER + 1];
     double[] im = new double[Spectrum.HIGHEST_ORDER + 1];
