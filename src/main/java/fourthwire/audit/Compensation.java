@@ -6,10 +6,10 @@ import static fourthwire.quantity.Conductor.L3;
 import static fourthwire.quantity.Conductor.N;
 
 import fourthwire.network.NetworkBuilder;
-import fourthwire.network.OrderAdmittance;
-import fourthwire.network.SequenceAdmittance;
-import fourthwire.network.SeriesImpedance;
-import fourthwire.network.Shunt;
+import fourthwire.network.element.OrderAdmittance;
+import fourthwire.network.element.SequenceAdmittance;
+import fourthwire.network.element.SeriesImpedance;
+import fourthwire.network.element.Shunt;
 import fourthwire.site.CapacitorBank;
 import fourthwire.site.Filter;
 import fourthwire.site.Survey;

@@ -144,7 +144,7 @@ final class DevicePort {
     try {
       solver.solve(emf, seriesOhm, seriesHenry, drawn);
     } catch (NoSteadyStateException e) {
-      failure = e.getMessage();
+      failure = String.valueOf(e.getMessage());
       return;
     }
     at = offset;

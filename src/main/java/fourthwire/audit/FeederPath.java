@@ -1,6 +1,6 @@
 package fourthwire.audit;
 
-import fourthwire.network.SeriesImpedance;
+import fourthwire.network.element.SeriesImpedance;
 import java.util.List;
 
 /**

@@ -1,7 +1,7 @@
 package fourthwire.audit;
 
-import fourthwire.network.OrderLaw;
-import fourthwire.network.SeriesImpedance;
+import fourthwire.network.element.OrderLaw;
+import fourthwire.network.element.SeriesImpedance;
 import fourthwire.site.Feeder;
 import fourthwire.site.Feeder.Material;
 import fourthwire.site.SiteSettings;

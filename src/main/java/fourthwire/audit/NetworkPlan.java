@@ -2,11 +2,11 @@ package fourthwire.audit;
 
 import static fourthwire.quantity.Conductor.N;
 
-import fourthwire.network.FeederConductor;
 import fourthwire.network.NetworkBuilder;
-import fourthwire.network.SequenceAdmittance;
-import fourthwire.network.Shunt;
 import fourthwire.network.TreeNetwork;
+import fourthwire.network.element.FeederConductor;
+import fourthwire.network.element.SequenceAdmittance;
+import fourthwire.network.element.Shunt;
 import fourthwire.quantity.Conductor;
 import fourthwire.site.Circuit;
 import fourthwire.site.Feeder;

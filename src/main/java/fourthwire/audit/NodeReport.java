@@ -5,7 +5,7 @@ import fourthwire.audit.DesignState.TransformerState;
 import fourthwire.audit.NodeCurrents.Demand;
 import fourthwire.limits.Finding;
 import fourthwire.limits.loading.TransformerLoading;
-import fourthwire.network.TransformerImpedance;
+import fourthwire.network.element.TransformerImpedance;
 import fourthwire.quantity.Conductor;
 import fourthwire.quantity.Figure;
 import fourthwire.quantity.HarmonicLoss;

@@ -22,24 +22,27 @@ record NodeVoltages(Map<String, Spectrum> spectra, double nominalV, Figure neutr
 
   static NodeVoltages of(SiteSolution solution, Place place) {
     List<Conductor> lines = place.node().lines();
-    Map<Conductor, Spectrum> potentials = new LinkedHashMap<>();
-    for (Conductor c : place.conductors().conductors()) {
-      potentials.put(c, solution.potential(place.networkNode(), place.conductors().of(c)));
-    }
     Map<String, Spectrum> spectra = new LinkedHashMap<>();
-    Spectrum neutral = potentials.get(N);
-    if (neutral != null) {
-      lines.forEach(line -> spectra.put(line.name(), potentials.get(line).minus(neutral)));
+    if (place.node().hasNeutral()) {
+      Spectrum neutral = potential(solution, place, N);
+      lines.forEach(
+          line -> spectra.put(line.name(), potential(solution, place, line).minus(neutral)));
       return new NodeVoltages(spectra, place.node().lineToNeutralV(), Figure.of(neutral.rms()));
     }
     int pairs = lines.size() == 2 ? 1 : lines.size();
     for (int k = 0; k < pairs; k++) {
+      Conductor line = lines.get(k);
       Conductor next = lines.get((k + 1) % lines.size());
       spectra.put(
-          lines.get(k) + "-" + next, potentials.get(lines.get(k)).minus(potentials.get(next)));
+          line + "-" + next,
+          potential(solution, place, line).minus(potential(solution, place, next)));
     }
     return new NodeVoltages(
         spectra, place.node().nominalV(), Figure.unknown("no neutral conductor here"));
+  }
+
+  private static Spectrum potential(SiteSolution solution, Place place, Conductor conductor) {
+    return solution.potential(place.networkNode(), place.conductors().of(conductor));
   }
 
   boolean toNeutral() {

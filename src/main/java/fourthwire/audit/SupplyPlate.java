@@ -1,8 +1,8 @@
 package fourthwire.audit;
 
 import fourthwire.network.Excitation;
-import fourthwire.network.SeriesImpedance;
-import fourthwire.network.SourceImpedance;
+import fourthwire.network.element.SeriesImpedance;
+import fourthwire.network.element.SourceImpedance;
 import fourthwire.quantity.Phasor;
 import fourthwire.site.Background;
 import fourthwire.site.PhaseSystem;

@@ -1,8 +1,8 @@
 package fourthwire.audit;
 
-import fourthwire.network.Shunt;
-import fourthwire.network.Transformer;
-import fourthwire.network.TransformerImpedance;
+import fourthwire.network.element.Shunt;
+import fourthwire.network.element.Transformer;
+import fourthwire.network.element.TransformerImpedance;
 import fourthwire.site.Supply;
 import fourthwire.site.VectorGroup;
 import java.util.ArrayList;
