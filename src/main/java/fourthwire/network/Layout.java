@@ -105,4 +105,15 @@ final class Layout {
   boolean isFeeder(int node) {
     return node > 0 && transformerOf[node] < 0;
   }
+
+  /**
+   * The part that conductor m of the feeding node has in the ideal potential of the node's
+   * conductor k, and k's current in m's: an entry of A.
+   */
+  double coupling(int node, int k, int m) {
+    int feeding = parent[node];
+    return isFeeder(node)
+        ? joinedTo[first[node] + k] == first[feeding] + m ? 1 : 0
+        : turns[transformerOf[node]][k * size(feeding) + m];
+  }
 }

@@ -40,6 +40,45 @@ public final class OrderSolution {
     return new Phasor(current[at], current[at + 1]);
   }
 
+  /**
+   * Current that what feeds a node draws from a conductor of the feeding node, amps: a
+   * transformer's primary current, or the sum of the feeder's conductors joined there.
+   *
+   * @param node any but the source's terminals
+   * @param parentConductor conductor of the feeding node
+   */
+  public Phasor primaryCurrent(int node, int parentConductor) {
+    network.index(network.parent(node), parentConductor);
+    Phasor sum = Phasor.ZERO;
+    for (int k = 0; k < network.conductors(node); k++) {
+      double part = network.layout().coupling(node, k, parentConductor);
+      sum = sum.plus(current(node, k).times(part));
+    }
+    return sum;
+  }
+
+  /**
+   * Active power lost at this order in what feeds a node, watts: in all conductors of its feeder,
+   * neutral included, or in its transformer's windings.
+   *
+   * @param node any but the source's terminals
+   */
+  public double lossW(int node) {
+    int parent = network.parent(node);
+    double watts = 0;
+    for (int m = 0; m < network.conductors(parent); m++) {
+      watts += realPower(potential(parent, m), primaryCurrent(node, m));
+    }
+    for (int k = 0; k < network.conductors(node); k++) {
+      watts -= realPower(potential(node, k), current(node, k));
+    }
+    return watts;
+  }
+
+  private static double realPower(Phasor volts, Phasor amps) {
+    return volts.re() * amps.re() + volts.im() * amps.im();
+  }
+
   /** Real part of a potential, by the conductor's {@link TreeNetwork#index index}. */
   public double potentialRe(int index) {
     return potential[2 * index];

@@ -132,7 +132,7 @@ public record SolutionCheck(double currentLaw, double voltageLaw, double power) 
       int parentSize = layout.size(layout.parent[n]);
       for (int k = 0; k < layout.size(n); k++) {
         for (int m = 0; m < parentSize; m++) {
-          double factor = turns(n, k, m, parentFirst, parentSize);
+          double factor = layout.coupling(n, k, m);
           ideal[2 * k] += factor * solution.potential[2 * (parentFirst + m)];
           ideal[2 * k + 1] += factor * solution.potential[2 * (parentFirst + m) + 1];
         }
@@ -145,18 +145,11 @@ public record SolutionCheck(double currentLaw, double voltageLaw, double power) 
       int parentSize = layout.size(layout.parent[n]);
       for (int k = 0; k < layout.size(n); k++) {
         for (int m = 0; m < parentSize; m++) {
-          double factor = turns(n, k, m, parentFirst, parentSize);
+          double factor = layout.coupling(n, k, m);
           leaving[2 * (parentFirst + m)] += factor * current[2 * k];
           leaving[2 * (parentFirst + m) + 1] += factor * current[2 * k + 1];
         }
       }
-    }
-
-    private double turns(int n, int k, int m, int parentFirst, int parentSize) {
-      if (layout.isFeeder(n)) {
-        return layout.joinedTo[layout.first[n] + k] == parentFirst + m ? 1 : 0;
-      }
-      return layout.turns[layout.transformerOf[n]][k * parentSize + m];
     }
 
     /** Adds Σ V·I*, conductor by conductor. */

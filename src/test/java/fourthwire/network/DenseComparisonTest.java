@@ -3,8 +3,12 @@ package fourthwire.network;
 import static org.assertj.core.api.Assertions.assertThat;
 
 import fourthwire.quantity.Phasor;
+import java.util.List;
+import java.util.Set;
+import java.util.TreeSet;
 import java.util.stream.LongStream;
 import org.junit.jupiter.api.DisplayName;
+import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 
@@ -66,6 +70,29 @@ class DenseComparisonTest {
           .isLessThanOrEqualTo(1e-9 * tree.dense.largest(false));
       assertThat(factored.drivingPoints().at(node).at(k, into)).isEqualTo(at.at(k, into));
     }
+  }
+
+  @Test
+  @DisplayName("The random trees hold every kind of source, link and shunt")
+  void everyKindOccurs() {
+    Set<String> kinds = new TreeSet<>();
+    seeds().forEach(s -> kinds.addAll(new RandomTree(s, 4 + (int) (s % 37)).kinds));
+    Set<String> expected = new TreeSet<>();
+    for (int hour = 0; hour < 12; hour++) {
+      expected.addAll(List.of("clock " + hour, "clock " + hour + "n"));
+      if (hour % 2 == 0) {
+        expected.add("clock " + hour + "n passing zero");
+      }
+    }
+    for (int conductors = 3; conductors < 8; conductors++) {
+      expected.add("shared neutral of " + conductors);
+    }
+    expected.addAll(List.of("source 1N", "source 2N", "source 3", "source 3N", "source free"));
+    expected.addAll(List.of("source held", "feeder", "feeder without impedance", "shunt"));
+    expected.addAll(List.of("centre-tapped", "single-phase transformer", "shunt to earth"));
+    expected.addAll(List.of("bank", "detuned bank", "three-terminal"));
+    expected.add("three-terminal with neutral");
+    assertThat(kinds).containsExactlyElementsOf(expected);
   }
 
   private static Phasor[] potentials(DenseNetwork dense, int node, int count) {

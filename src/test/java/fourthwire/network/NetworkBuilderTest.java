@@ -55,6 +55,25 @@ class NetworkBuilderTest {
   }
 
   @Test
+  @DisplayName("Losses are R·I² of every conductor, windings included; primary currents by turns")
+  void lossesAndPrimaryCurrents() {
+    int supply = net.source(STIFF);
+    TransformerImpedance z = TransformerImpedance.ofRating(100, 400, 4, 1000, 0.1);
+    Transformer.Clock dyn11 = new Transformer.Clock(11, true, false);
+    int board = net.transformer(supply, Transformer.threePhase(dyn11, 25, z));
+    int lamp = net.feeder(board, from(0, OHM), from(3, OHM.times(3)));
+    TreeNetwork network = net.build();
+    Excitation load = network.excitation().draw(lamp, 0, 1, new Phasor(0, 5));
+    OrderSolution solution = network.factor(5).solve(load);
+    assertThat(solution.lossW(lamp)).isCloseTo(25 * (1 + 3), within(1e-9));
+    assertThat(solution.lossW(board)).isCloseTo(25 * z.at(5).re(), within(1e-9));
+    double byTurns = 5 / (25 * Math.sqrt(3));
+    assertThat(solution.primaryCurrent(board, 0).im()).isCloseTo(byTurns, within(1e-12));
+    assertThat(solution.primaryCurrent(board, 1).im()).isCloseTo(-byTurns, within(1e-12));
+    assertThat(solution.primaryCurrent(lamp, 3).im()).isCloseTo(-5, within(1e-12));
+  }
+
+  @Test
   @DisplayName("A feeder without impedance: one node, and its current is still known")
   void feederWithoutImpedance() {
     int supply = net.source(STIFF);

@@ -12,7 +12,9 @@ import fourthwire.network.element.TransformerImpedance;
 import fourthwire.quantity.Phasor;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Set;
 import java.util.SplittableRandom;
+import java.util.TreeSet;
 
 /**
  * A random radial site at one order, built twice: with the network builder, and as a dense system
@@ -32,6 +34,9 @@ final class RandomTree {
   final TreeNetwork network;
   final Excitation excitation;
   final double order;
+
+  /** Which kinds of source, link and shunt occurred. */
+  final Set<String> kinds = new TreeSet<>();
 
   private final SplittableRandom random;
   private final NetworkBuilder builder = new NetworkBuilder();
@@ -88,6 +93,8 @@ final class RandomTree {
       paste(fromSequences(one, at(z2), at(z0)), z);
     }
     builder.source(held ? impedance.regulated() : impedance);
+    kinds.add("source " + shapes.get(0).lines() + (shapes.get(0).neutral() ? "N" : ""));
+    kinds.add(held && order == 1 ? "source held" : "source free");
     Phasor[] emf = new Phasor[z.length];
     for (int k = 0; k < z.length; k++) {
       boolean line = k < shapes.get(0).lines();
@@ -100,8 +107,8 @@ final class RandomTree {
   private void addNode(int parent) {
     Shape shape = shapes.get(parent);
     boolean threePhase = shape.lines() == 3;
-    int pick = random.nextInt(8);
-    if (pick == 0 && threePhase) {
+    int pick = random.nextInt(9);
+    if ((pick == 0 || pick == 8) && threePhase) {
       addThreePhaseTransformer(parent);
     } else if (pick == 1 && shape.conductors() >= 2) {
       addSinglePhaseTransformer(parent);
@@ -130,6 +137,7 @@ final class RandomTree {
     for (int k = 0; k < joined.length; k++) {
       joined[k] = k == joined.length - 1 ? lines : random.nextInt(lines);
     }
+    kinds.add("shared neutral of " + joined.length);
     addFeeder(parent, new Shape(joined.length - 1, true), joined);
   }
 
@@ -149,6 +157,7 @@ final class RandomTree {
       z[k][k] = at(impedance);
     }
     builder.feeder(parent, conductors);
+    kinds.add(without ? "feeder without impedance" : "feeder");
     shapes.add(shape);
     dense.node(parent, a, z);
   }
@@ -156,13 +165,14 @@ final class RandomTree {
   private void addThreePhaseTransformer(int parent) {
     boolean parentNeutral = shapes.get(parent).neutral();
     int hour = random.nextInt(12);
-    boolean neutral = random.nextInt(4) > 0;
+    boolean neutral = random.nextInt(3) > 0;
     boolean passes = neutral && hour % 2 == 0 && random.nextBoolean();
     double ratio = uniform(0.5, 3);
     TransformerImpedance impedance = randomTransformer();
     builder.transformer(
         parent,
         Transformer.threePhase(new Transformer.Clock(hour, neutral, passes), ratio, impedance));
+    kinds.add("clock " + hour + (neutral ? "n" : "") + (passes ? " passing zero" : ""));
     shapes.add(new Shape(3, neutral));
     // The definition: positive sequence by -30° times the hour, negative by as much the other way;
     // zero sequence through two windings on one limb, reversed in the hours 2, 6, 10.
@@ -209,6 +219,7 @@ final class RandomTree {
         split
             ? Transformer.centreTapped(from, to, ratio, impedance)
             : Transformer.singlePhase(from, to, ratio, impedance));
+    kinds.add(split ? "centre-tapped" : "single-phase transformer");
     shapes.add(new Shape(lines, true));
     double[][] a = new double[lines + 1][count];
     Phasor[][] z = zeros(lines + 1);
@@ -238,10 +249,12 @@ final class RandomTree {
     SeriesImpedance z = SeriesImpedance.of(uniform(1, 50), uniform(0, 20));
     Phasor y = new Phasor(1, 0).over(at(z));
     if (random.nextInt(6) == 0) {
+      kinds.add("shunt to earth");
       builder.shunt(n, Shunt.between(i, Shunt.EARTH, OrderAdmittance.ofSeries(z)));
       dense.shunt(n, new int[] {i}, new Phasor[][] {{y}});
       return;
     }
+    kinds.add("shunt");
     builder.shunt(n, Shunt.between(i, k, OrderAdmittance.ofSeries(z)));
     Phasor minus = y.times(-1);
     dense.shunt(n, new int[] {i, k}, new Phasor[][] {{y, minus}, {minus, y}});
@@ -256,6 +269,7 @@ final class RandomTree {
       double xc = uniform(0.1, 5);
       double xl = random.nextBoolean() ? 0.07 * xc : 0;
       double r = uniform(0.001, 0.05);
+      kinds.add(xl == 0 ? "bank" : "detuned bank");
       builder.shunt(
           n,
           Shunt.threeLines(
@@ -267,6 +281,7 @@ final class RandomTree {
       y1 = new Phasor(uniform(0, 0.5), uniform(-0.5, 0.5));
       y2 = new Phasor(uniform(0, 0.5), uniform(-0.5, 0.5));
       y0 = random.nextBoolean() ? new Phasor(uniform(0, 2), uniform(-2, 2)) : Phasor.ZERO;
+      kinds.add("three-terminal" + (shape.neutral() ? " with neutral" : ""));
       double[] y = {y1.re(), y1.im(), y2.re(), y2.im(), y0.re(), y0.im()};
       builder.shunt(
           n,
