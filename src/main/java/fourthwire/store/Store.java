@@ -58,6 +58,14 @@ public final class Store {
     return new Settings(jdbc);
   }
 
+  /**
+   * Empties the scheduler's own table, in which a stop may have left tasks as picked up. What is to
+   * be done stands in our tables.
+   */
+  public void forgetScheduledTasks() {
+    jdbc.sql("delete from scheduled_tasks").update();
+  }
+
   private FileStore files() {
     return new FileStore(jdbc);
   }

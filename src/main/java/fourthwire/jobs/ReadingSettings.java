@@ -1,0 +1,54 @@
+package fourthwire.jobs;
+
+import fourthwire.intake.reading.ReadingSetting;
+import fourthwire.metering.ReadingMapping;
+import fourthwire.metering.ReadingRepository;
+import fourthwire.metering.ReadingRepository.MeterRef;
+import fourthwire.site.Meter;
+import fourthwire.site.SiteRepository;
+import fourthwire.site.Survey;
+import java.time.DateTimeException;
+import java.time.ZoneId;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
+
+/** What is known about a meter's file from the site's latest survey and its earlier files. */
+public final class ReadingSettings {
+  private final SiteRepository sites;
+  private final ReadingRepository readings;
+
+  /** From what is stored here. */
+  public ReadingSettings(SiteRepository sites, ReadingRepository readings) {
+    this.sites = sites;
+    this.readings = readings;
+  }
+
+  /** The setting of a meter's file; the site must be there. */
+  ReadingSetting of(long siteId, MeterRef ref, Optional<ReadingMapping> mapping) {
+    Survey survey = survey(siteId);
+    Optional<Meter> meter =
+        survey.meters().stream().filter(m -> m.name().equals(ref.name())).findFirst();
+    return new ReadingSetting(
+        survey.settings().timezone().flatMap(ReadingSettings::zone),
+        survey.settings().frequencyHz(),
+        mapping,
+        layout -> readings.mapping(siteId, ref.name(), layout),
+        meter.map(Meter::ctReversed).orElse(List.of()),
+        meter.map(Meter::ctRatio).orElse(OptionalDouble.empty()));
+  }
+
+  /** The site's latest survey; the site must be there. */
+  Survey survey(long siteId) {
+    SiteRepository.Entry site = sites.find(siteId).orElseThrow();
+    return sites.survey(siteId, site.latestRevision());
+  }
+
+  private static Optional<ZoneId> zone(String name) {
+    try {
+      return Optional.of(ZoneId.of(name));
+    } catch (DateTimeException e) {
+      return Optional.empty();
+    }
+  }
+}
