@@ -97,7 +97,7 @@ final class TransformerPlate {
       return Transformer.singlePhase(0, 1, ratio, impedance);
     }
     return Transformer.threePhase(
-        new Transformer.Clock(
+        new Transformer.Connection(
             group.clock(), group.hasSecondaryNeutral(), group.passesZeroSequence()),
         ratio,
         impedance);

@@ -151,4 +151,14 @@ final class Blocks {
       m[2 * k * (size + 1)] += 1;
     }
   }
+
+  /** Whether so many values from the offset are all numbers. */
+  static boolean isFinite(double[] m, int offset, int length) {
+    for (int k = offset; k < offset + length; k++) {
+      if (!Double.isFinite(m[k])) {
+        return false;
+      }
+    }
+    return true;
+  }
 }

@@ -69,11 +69,9 @@ final class Elimination {
       }
     }
     double[] z = new double[2 * layout.conductors()];
-    for (int k = layout.first[1]; k < layout.conductors(); k++) {
-      if (factors.length > 0) {
-        z[2 * k] = layout.resistance[k] * factors[layout.resistanceLaw[k]];
-        z[2 * k + 1] = layout.reactance[k] * factors[layout.reactanceLaw[k]];
-      }
+    for (int k = 0; k < layout.conductors() && factors.length > 0; k++) {
+      z[2 * k] = layout.resistance[k] * factors[layout.resistanceLaw[k]];
+      z[2 * k + 1] = layout.reactance[k] * factors[layout.reactanceLaw[k]];
     }
     return z;
   }
@@ -115,7 +113,11 @@ final class Elimination {
       stamp.add(layout.shunts[k], order);
     }
     boolean impedance = layout.isFeeder(n) ? writeFeederLeft(n) : writeDenseLeft(n);
-    if (impedance && !Blocks.solve(left, size, blocks, at, size)) {
+    boolean solved =
+        impedance
+            ? Blocks.solve(left, size, blocks, at, size)
+            : Blocks.isFinite(blocks, at, 2 * size * size);
+    if (!solved) {
       throw new UnsolvableOrderException(order, n);
     }
     if (n > 0) {

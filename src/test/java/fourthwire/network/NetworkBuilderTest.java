@@ -59,7 +59,7 @@ class NetworkBuilderTest {
   void lossesAndPrimaryCurrents() {
     int supply = net.source(STIFF);
     TransformerImpedance z = TransformerImpedance.ofRating(100, 400, 4, 1000, 0.1);
-    Transformer.Clock dyn11 = new Transformer.Clock(11, true, false);
+    Transformer.Connection dyn11 = new Transformer.Connection(11, true, false);
     int board = net.transformer(supply, Transformer.threePhase(dyn11, 25, z));
     int lamp = net.feeder(board, from(0, OHM), from(3, OHM.times(3)));
     TreeNetwork network = net.build();
@@ -105,7 +105,7 @@ class NetworkBuilderTest {
   void sectionsWithoutReference() {
     int supply = net.source(STIFF);
     TransformerImpedance z = TransformerImpedance.ofRating(100, 400, 4, 1000, 0);
-    Transformer.Clock dd0 = new Transformer.Clock(0, false, false);
+    Transformer.Connection dd0 = new Transformer.Connection(0, false, false);
     int delta = net.transformer(supply, Transformer.threePhase(dd0, 1, z));
     net.shunt(delta, Shunt.between(0, 1, OrderAdmittance.ofSeries(OHM)));
     TreeNetwork network = net.build();
@@ -128,6 +128,19 @@ class NetworkBuilderTest {
     assertThatThrownBy(() -> network.factor(2))
         .isInstanceOf(UnsolvableOrderException.class)
         .hasMessageContaining("order 2.0")
+        .hasMessageContaining("node 1");
+  }
+
+  @Test
+  @DisplayName("A load without any impedance is refused, with or without a feeder's before it")
+  void loadWithoutImpedance() {
+    int supply = net.source(STIFF);
+    int near = net.feeder(supply, from(0, SeriesImpedance.NONE), from(3, SeriesImpedance.NONE));
+    net.shunt(near, Shunt.between(0, 1, OrderAdmittance.ofSeries(SeriesImpedance.NONE)));
+    assertThatThrownBy(() -> net.build().factor(1)).isInstanceOf(UnsolvableOrderException.class);
+    net.feeder(near, from(0, SeriesImpedance.NONE), from(1, OHM));
+    assertThatThrownBy(() -> net.build().factor(1))
+        .isInstanceOf(UnsolvableOrderException.class)
         .hasMessageContaining("node 1");
   }
 
@@ -177,14 +190,14 @@ class NetworkBuilderTest {
         .hasMessageContaining("conductors 1 and 1");
     assertThatThrownBy(() -> SeriesImpedance.of(-1, 0)).hasMessageContaining("0 or more");
     assertThatThrownBy(() -> net.build().factor(0)).hasMessageContaining("above 0");
-    assertThatThrownBy(() -> new Transformer.Clock(11, true, true))
+    assertThatThrownBy(() -> new Transformer.Connection(11, true, true))
         .hasMessageContaining("passes zero sequence");
     int lamp = net.feeder(supply, from(0, OHM), from(3, OHM));
     TransformerImpedance z = TransformerImpedance.ofRating(1, 100, 4, 0, 0);
     assertThatThrownBy(
             () ->
                 net.transformer(
-                    lamp, Transformer.threePhase(new Transformer.Clock(0, true, false), 1, z)))
+                    lamp, Transformer.threePhase(new Transformer.Connection(0, true, false), 1, z)))
         .hasMessageContaining("not from 2 conductors");
     assertThatThrownBy(() -> net.transformer(lamp, Transformer.singlePhase(0, 2, 1, z)))
         .hasMessageContaining("a node that has 2");

@@ -22,7 +22,7 @@ import org.junit.jupiter.params.provider.CsvSource;
 class PublishedCircuitsTest {
   private static final SourceImpedance STIFF =
       SourceImpedance.fourWire(SeriesImpedance.NONE, SeriesImpedance.NONE);
-  private static final Transformer.Clock DYN11 = new Transformer.Clock(11, true, false);
+  private static final Transformer.Connection DYN11 = new Transformer.Connection(11, true, false);
 
   @Test
   @DisplayName("T9 (P): short-circuit current of 400 kVA, 420 V, 4 %")
@@ -117,7 +117,7 @@ class PublishedCircuitsTest {
     TransformerImpedance z = TransformerImpedance.ofRating(1000, 400, 6, 10_000, 0.01);
     int delta =
         net.transformer(
-            supply, Transformer.threePhase(new Transformer.Clock(0, false, false), 1, z));
+            supply, Transformer.threePhase(new Transformer.Connection(0, false, false), 1, z));
     int star = net.transformer(supply, Transformer.threePhase(DYN11, 1, z));
     TreeNetwork network = net.build();
     // Each rectifier follows its own terminals' fundamental, which at the star stands 30° ahead.

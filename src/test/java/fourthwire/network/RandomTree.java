@@ -171,7 +171,8 @@ final class RandomTree {
     TransformerImpedance impedance = randomTransformer();
     builder.transformer(
         parent,
-        Transformer.threePhase(new Transformer.Clock(hour, neutral, passes), ratio, impedance));
+        Transformer.threePhase(
+            new Transformer.Connection(hour, neutral, passes), ratio, impedance));
     kinds.add("clock " + hour + (neutral ? "n" : "") + (passes ? " passing zero" : ""));
     shapes.add(new Shape(3, neutral));
     // The definition: positive sequence by -30° times the hour, negative by as much the other way;

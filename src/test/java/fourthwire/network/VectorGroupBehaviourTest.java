@@ -21,8 +21,8 @@ import org.junit.jupiter.params.provider.ValueSource;
  * vector_group_behaviour: standard machine theory, from memory, unless a line says otherwise).
  */
 class VectorGroupBehaviourTest {
-  private static final Transformer.Clock DYN11 = new Transformer.Clock(11, true, false);
-  private static final Transformer.Clock YNYN0 = new Transformer.Clock(0, true, true);
+  private static final Transformer.Connection DYN11 = new Transformer.Connection(11, true, false);
+  private static final Transformer.Connection YNYN0 = new Transformer.Connection(0, true, true);
 
   private final NetworkBuilder net = new NetworkBuilder();
 
@@ -34,7 +34,7 @@ class VectorGroupBehaviourTest {
     return TransformerImpedance.ofRating(1000, 400, 6, 10_000, 0.01);
   }
 
-  private static Phasor secondaryOpen(Transformer.Clock clock, double firstLine, double turn) {
+  private static Phasor secondaryOpen(Transformer.Connection clock, double firstLine, double turn) {
     NetworkBuilder net = new NetworkBuilder();
     int supply = net.source(SourceImpedance.fourWire(SeriesImpedance.NONE, SeriesImpedance.NONE));
     int secondary = net.transformer(supply, Transformer.threePhase(clock, 2, rated()));
@@ -50,7 +50,7 @@ class VectorGroupBehaviourTest {
   @ValueSource(ints = {0, 1, 2, 3, 4, 5, 6, 7, 8, 9, 10, 11})
   @DisplayName("Clock n: positive sequence lags by n·30°, negative leads by it, zero is trapped")
   void shiftsByTheClock(int hour) {
-    Transformer.Clock clock = new Transformer.Clock(hour, true, false);
+    Transformer.Connection clock = new Transformer.Connection(hour, true, false);
     Phasor expected = Phasor.polar(115, -30 * hour);
     assertThat(secondaryOpen(clock, 230, -120).minus(expected).magnitude()).isLessThan(1e-12 * 230);
     assertThat(secondaryOpen(clock, 230, 120).minus(expected.conjugate()).magnitude())
@@ -76,11 +76,11 @@ class VectorGroupBehaviourTest {
   @CsvSource({"0,1", "2,-1", "4,1", "6,-1", "8,1", "10,-1"})
   @DisplayName("YNyn passes zero sequence, reversed in the hours whose windings are reversed")
   void starToStarPassesZeroSequence(int hour, double sign) {
-    Phasor zero = secondaryOpen(new Transformer.Clock(hour, true, true), 230, 0);
+    Phasor zero = secondaryOpen(new Transformer.Connection(hour, true, true), 230, 0);
     assertThat(zero.minus(new Phasor(sign * 115, 0)).magnitude()).isLessThan(1e-12 * 230);
   }
 
-  private OrderSolution triplens(Transformer.Clock clock, double[] amps) {
+  private OrderSolution triplens(Transformer.Connection clock, double[] amps) {
     int supply = stiffSupply();
     int board = net.transformer(supply, Transformer.threePhase(clock, 1, rated()));
     TreeNetwork network = net.build();
@@ -133,7 +133,7 @@ class VectorGroupBehaviourTest {
         net.transformer(
             supply,
             Transformer.threePhase(
-                new Transformer.Clock(hour, true, false),
+                new Transformer.Connection(hour, true, false),
                 50,
                 rated().withZeroSequenceRatio(percent / 6)));
     DrivingPoint at = net.build().factor(1).drivingPoint(board);

@@ -13,7 +13,7 @@ import fourthwire.quantity.Phasor;
  */
 public final class Transformer {
   private final Kind kind;
-  private final Clock connection;
+  private final Connection connection;
   private final int from;
   private final int to;
   private final double ratio;
@@ -28,19 +28,19 @@ public final class Transformer {
   /**
    * What a three-phase connection does to the symmetrical components.
    *
-   * @param hour clock number: the secondary's positive sequence lags by this many times 30°, its
+   * @param clock clock number: the secondary's positive sequence lags by this many times 30°, its
    *     negative sequence leads by the same
    * @param secondaryNeutral whether the secondary star point is earthed and brought out
    * @param passesZeroSequence whether zero sequence passes: star to star with both star points
    *     connected; the primary's is tied to the feeding node's neutral, or to earth if it has none
    */
-  public record Clock(int hour, boolean secondaryNeutral, boolean passesZeroSequence) {
+  public record Connection(int clock, boolean secondaryNeutral, boolean passesZeroSequence) {
     /** Refuses an hour outside 0 to 11 and a zero-sequence path without star points. */
-    public Clock {
-      if (hour < 0 || hour > 11) {
-        throw new IllegalArgumentException("a clock number of " + hour + ": it is 0 to 11");
+    public Connection {
+      if (clock < 0 || clock > 11) {
+        throw new IllegalArgumentException("a clock number of " + clock + ": it is 0 to 11");
       }
-      if (passesZeroSequence && (!secondaryNeutral || hour % 2 != 0)) {
+      if (passesZeroSequence && (!secondaryNeutral || clock % 2 != 0)) {
         throw new IllegalArgumentException(
             "only a star to star transformer, with an even clock number and its neutral brought"
                 + " out, passes zero sequence");
@@ -49,7 +49,12 @@ public final class Transformer {
   }
 
   private Transformer(
-      Kind kind, Clock connection, int from, int to, double ratio, TransformerImpedance impedance) {
+      Kind kind,
+      Connection connection,
+      int from,
+      int to,
+      double ratio,
+      TransformerImpedance impedance) {
     if (!(ratio > 0) || Double.isInfinite(ratio)) {
       throw new IllegalArgumentException("a transformer ratio of " + ratio + ": it is above 0");
     }
@@ -67,7 +72,7 @@ public final class Transformer {
    * @param ratio primary over secondary voltage, both line to line
    */
   public static Transformer threePhase(
-      Clock connection, double ratio, TransformerImpedance impedance) {
+      Connection connection, double ratio, TransformerImpedance impedance) {
     return new Transformer(Kind.THREE_PHASE, connection, 0, 1, ratio, impedance);
   }
 
@@ -80,7 +85,7 @@ public final class Transformer {
   public static Transformer singlePhase(
       int from, int to, double ratio, TransformerImpedance impedance) {
     return new Transformer(
-        Kind.SINGLE_PHASE, new Clock(0, true, false), from, to, ratio, impedance);
+        Kind.SINGLE_PHASE, new Connection(0, true, false), from, to, ratio, impedance);
   }
 
   /**
@@ -93,7 +98,7 @@ public final class Transformer {
   public static Transformer centreTapped(
       int from, int to, double ratio, TransformerImpedance impedance) {
     return new Transformer(
-        Kind.CENTRE_TAPPED, new Clock(0, true, false), from, to, ratio, impedance);
+        Kind.CENTRE_TAPPED, new Connection(0, true, false), from, to, ratio, impedance);
   }
 
   /** Conductors of the secondary, its neutral included. */
@@ -147,10 +152,10 @@ public final class Transformer {
               + " conductors");
     }
     double zero =
-        connection.passesZeroSequence() ? (connection.hour() % 4 == 0 ? 1 : -1) / ratio : 0;
+        connection.passesZeroSequence() ? (connection.clock() % 4 == 0 ? 1 : -1) / ratio : 0;
     for (int row = 0; row < 3; row++) {
       for (int column = 0; column < 3; column++) {
-        double angle = Math.toRadians(connection.hour() * 30 + 120 * (row - column));
+        double angle = Math.toRadians(connection.clock() * 30 + 120 * (row - column));
         a[row * parentConductors + column] = (2 / ratio * Math.cos(angle) + zero) / 3;
       }
       if (parentConductors == 4) {
