@@ -99,7 +99,8 @@ public final class SiteTree {
       return lineToNeutral;
     }
 
-    static Section of(PhaseSystem system) {
+    /** The section that a supply of this system, or a transformer with it, makes. */
+    public static Section of(PhaseSystem system) {
       return switch (system) {
         case THREE_PHASE_4_WIRE, THREE_PHASE_3_WIRE -> THREE_PHASE;
         case SPLIT_PHASE -> SPLIT_PHASE;
