@@ -30,8 +30,7 @@ final class Schemas {
           new Rows<>(DistributionTables.METERS, Survey::meters),
           new Rows<>(DistributionTables.SPOT_READINGS, Survey::spotReadings));
 
-  /** The columns of each table, by the tables' names in the contract's order. */
-  static final Map<String, Set<String>> COLUMNS = columns();
+  private static final Map<String, Set<String>> COLUMNS = columns();
 
   private Schemas() {}
 
@@ -40,6 +39,16 @@ final class Schemas {
     List<String> names = new ArrayList<>(List.of(SourceTables.SITE.name()));
     ALL.forEach(t -> names.add(t.schema().name()));
     return names;
+  }
+
+  /** Whether the contract has this table. */
+  static boolean has(String table) {
+    return COLUMNS.containsKey(table);
+  }
+
+  /** The columns that a table may have. */
+  static Set<String> columns(String table) {
+    return COLUMNS.getOrDefault(table, Set.of());
   }
 
   private static Map<String, Set<String>> columns() {

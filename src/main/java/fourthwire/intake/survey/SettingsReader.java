@@ -84,11 +84,10 @@ final class SettingsReader {
   private Optional<DraftRow<String>> pcc(SiteSettings settings) {
     return settings
         .pcc()
-        .map(
-            pcc -> {
-              DraftRow<Setting> row = rows.get("pcc");
-              return new DraftRow<>(TABLE, row.row(), pcc, Set.of(), row.cells());
-            });
+        .flatMap(
+            pcc ->
+                Optional.ofNullable(rows.get("pcc"))
+                    .map(row -> new DraftRow<>(TABLE, row.row(), pcc, Set.of(), row.cells())));
   }
 
   private void take(DraftRow<Setting> row) {

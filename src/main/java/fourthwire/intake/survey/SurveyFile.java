@@ -71,7 +71,7 @@ final class SurveyFile {
   }
 
   private void add(String name, SurveyTable table) {
-    if (!Schemas.COLUMNS.containsKey(name)) {
+    if (!Schemas.has(name)) {
       remarks.warning("table \"" + name + "\" is not known and was left out.");
     } else if (tables.containsKey(name)) {
       reportTwice(name);
@@ -91,7 +91,7 @@ final class SurveyFile {
     for (Archive.Entry entry : entries) {
       Matcher path = TABLE_FILE.matcher(entry.path());
       String name = path.matches() ? Text.key(path.group(2)) : "";
-      if (!Schemas.COLUMNS.containsKey(name)) {
+      if (!Schemas.has(name)) {
         remarks.warning("\"" + entry.path() + "\" is no table of a survey and was left out.");
         continue;
       }
@@ -115,7 +115,7 @@ final class SurveyFile {
       return;
     }
     try {
-      add(name, CsvTables.read(name, files.get(0).bytes(), Schemas.COLUMNS.get(name), guards));
+      add(name, CsvTables.read(name, files.get(0).bytes(), Schemas.columns(name), guards));
     } catch (RefusedException e) {
       if (e.error().table().isEmpty()) {
         throw e;

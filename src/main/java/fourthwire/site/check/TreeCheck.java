@@ -7,6 +7,7 @@ import java.util.Deque;
 import java.util.HashMap;
 import java.util.HashSet;
 import java.util.LinkedHashMap;
+import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -29,8 +30,6 @@ final class TreeCheck {
 
   /** Each transformer's and panel's parent, in the order of the rows. */
   private final Map<String, String> parents = new LinkedHashMap<>();
-
-  private final Map<String, DraftRow<?>> rows = new HashMap<>();
 
   TreeCheck(SurveyDraft draft, NodeIndex nodes, CircuitIndex circuits, Remarks remarks) {
     this.draft = draft;
@@ -65,7 +64,6 @@ final class TreeCheck {
               + " takes over is named in its connects_at.");
     } else if (nameSound && !nodes.isDoubtful(name)) {
       parents.put(name, fedFrom);
-      rows.put(name, row);
     }
   }
 
@@ -99,34 +97,42 @@ final class TreeCheck {
     Set<String> settled = new HashSet<>();
     for (String start : parents.keySet()) {
       Set<String> way = new HashSet<>();
-      String node = start;
-      while (parents.containsKey(node) && !settled.contains(node) && way.add(node)) {
-        node = parents.get(node);
+      Optional<String> node = Optional.of(start);
+      while (node.isPresent() && !settled.contains(node.get()) && way.add(node.get())) {
+        node = Optional.ofNullable(parents.get(node.get()));
       }
-      if (way.contains(node) && !settled.contains(node)) {
-        reportLoop(node);
-      }
+      node.filter(way::contains).ifPresent(this::reportLoop);
       settled.addAll(way);
     }
   }
 
   private void reportLoop(String member) {
-    List<String> loop = new ArrayList<>(List.of(member));
-    for (String n = parents.get(member); !n.equals(member); n = parents.get(n)) {
-      loop.add(n);
+    Set<String> loop = new LinkedHashSet<>();
+    Optional<String> node = Optional.of(member);
+    while (node.isPresent() && loop.add(node.get())) {
+      node = Optional.ofNullable(parents.get(node.get()));
     }
-    // The rows' own order decides where it is reported: the tree is usually entered from the top.
-    String first =
-        parents.keySet().stream().filter(Set.copyOf(loop)::contains).findFirst().orElse(member);
     String named =
         loop.stream()
-            .map(n -> "\"%s\" (%s)".formatted(n, rows.get(n).place()))
+            .map(n -> "\"%s\"%s".formatted(n, nodes.find(n).map(TreeCheck::inBrackets).orElse("")))
             .collect(Collectors.joining(", fed from "));
-    remarks.error(
-        rows.get(first),
-        FED_FROM,
-        "The nodes feed each other in a loop: %s, fed from \"%s\". Enter a ring at its open point."
-            .formatted(named, member));
+    // The order of the rows decides where it is reported: a tree is usually written from the top.
+    parents.keySet().stream()
+        .filter(loop::contains)
+        .findFirst()
+        .flatMap(nodes::find)
+        .ifPresent(
+            first ->
+                remarks.error(
+                    first.row(),
+                    FED_FROM,
+                    ("The nodes feed each other in a loop: %s, fed from \"%s\". Enter a ring at its"
+                            + " open point.")
+                        .formatted(named, member)));
+  }
+
+  private static String inBrackets(NodeIndex.Node node) {
+    return " (" + node.row().place() + ")";
   }
 
   private Map<String, Wiring> wirings() {
