@@ -1,28 +1,73 @@
 package fourthwire.intake.reading;
 
+import fourthwire.intake.reading.table.TableException;
+import fourthwire.intake.reading.table.TextTable;
+import fourthwire.intake.reading.table.TimeColumns;
+import fourthwire.metering.MeasuredQuantity;
 import fourthwire.metering.Reading;
+import fourthwire.metering.ReadingKind;
+import fourthwire.metering.ReadingMapping;
+import java.util.List;
+import java.util.Optional;
 import java.util.function.BiPredicate;
 
 /** A text file of rows: an interval log, or a capture of instantaneous values. */
 final class TextFormat implements Format {
-  private final Part part;
+  private final TextTable table;
 
-  private TextFormat(Part part) {
-    this.part = part;
+  private TextFormat(TextTable table) {
+    this.table = table;
   }
 
   static TextFormat of(Part part) {
-    return new TextFormat(part);
+    try {
+      return new TextFormat(TextTable.of(part::open));
+    } catch (TableException e) {
+      throw new ReadingRefusedException(part.name() + ": " + e.getMessage());
+    }
   }
 
   @Override
   public ReadingPlan plan(ReadingSetting setting) {
-    throw new ReadingRefusedException(part.name() + ": CSV files are not read yet.");
+    String layout = Layout.of("text", table.headings());
+    Mappings known = Mappings.of(setting, layout);
+    try {
+      TimeColumns time = time(known.mapping());
+      return kind(known.mapping(), time) == ReadingKind.CAPTURE
+          ? new TextCapture(table, time).plan(setting, layout, known)
+          : new LogFormat(table, time).plan(setting, layout, known);
+    } catch (TableException e) {
+      throw new ReadingRefusedException(
+          "The time of the rows can't be read.",
+          table.headings(),
+          List.of(new ReadingRefusedException.Question("time", String.valueOf(e.getMessage()))));
+    }
   }
 
   @Override
   public Reading read(
       ReadingPlan plan, ReadingSetting setting, BiPredicate<Double, String> progress) {
-    throw new ReadingRefusedException(part.name() + ": CSV files are not read yet.");
+    TimeColumns time = time(Optional.of(plan.mapping()));
+    return plan.kind() == ReadingKind.CAPTURE
+        ? new TextCapture(table, time).read(plan, setting, progress)
+        : new LogFormat(table, time).read(plan, setting, progress);
+  }
+
+  private TimeColumns time(Optional<ReadingMapping> mapping) {
+    List<String> named = mapping.map(m -> m.time().columns()).orElse(List.of());
+    return named.isEmpty() ? TimeColumns.find(table) : TimeColumns.named(table, named);
+  }
+
+  /** As told, else by what the file shows: elapsed seconds or a capture's names are a capture. */
+  private ReadingKind kind(Optional<ReadingMapping> mapping, TimeColumns time) {
+    Optional<ReadingKind> told = mapping.flatMap(ReadingMapping::kind);
+    boolean rate = mapping.map(m -> m.sampleRateHz().isPresent()).orElse(false);
+    boolean captureNames =
+        mapping.stream()
+                .flatMap(m -> m.columns().values().stream())
+                .anyMatch(c -> MeasuredQuantity.ofCapture(c.quantity()).isPresent())
+            || table.headings().stream().anyMatch(h -> MeasuredQuantity.ofCapture(h).isPresent());
+    return told.orElse(
+        time.elapsed() || rate || captureNames ? ReadingKind.CAPTURE : ReadingKind.LOG);
   }
 }

@@ -1,0 +1,210 @@
+package fourthwire.intake.reading;
+
+import fourthwire.intake.reading.heading.Heading;
+import fourthwire.intake.reading.table.DateOrder;
+import fourthwire.intake.reading.table.TextTable;
+import fourthwire.intake.reading.table.TimeColumns;
+import fourthwire.metering.MeasuredQuantity;
+import fourthwire.metering.Reading;
+import fourthwire.metering.ReadingKind;
+import fourthwire.metering.ReadingMapping;
+import fourthwire.metering.ReadingMapping.Column;
+import fourthwire.metering.capture.Capture;
+import java.time.Duration;
+import java.time.Instant;
+import java.time.LocalDateTime;
+import java.time.ZoneId;
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.function.BiPredicate;
+
+/** A capture of instantaneous values as a text table. */
+final class TextCapture {
+  private static final int MOST_ROWS = 5_000_000;
+  private static final ChannelMapping.Words WORDS =
+      new ChannelMapping.Words(
+          h -> Heading.ofCapture(h, "", ""),
+          MeasuredQuantity::ofCapture,
+          "a capture holds L1.v, L1-L2.v, N.v … in volts and L1.i, N.i … in amps");
+
+  private final TextTable table;
+  private final TimeColumns time;
+
+  TextCapture(TextTable table, TimeColumns time) {
+    this.table = table;
+    this.time = time;
+  }
+
+  ReadingPlan plan(ReadingSetting setting, String layout, Mappings known) {
+    List<String> timeNames = time.columns().stream().map(table.headings()::get).toList();
+    List<String> others = table.headings().stream().filter(h -> !timeNames.contains(h)).toList();
+    ChannelMapping mapping = ChannelMapping.settle(others, known.mapping(), known.whence(), WORDS);
+    OptionalDouble rate =
+        known.mapping().map(ReadingMapping::sampleRateHz).orElse(OptionalDouble.empty());
+    if (time.columns().isEmpty() && rate.isEmpty()) {
+      throw new ReadingRefusedException(
+          "The capture has no time column.",
+          table.headings(),
+          List.of(
+              new ReadingRefusedException.Question(
+                  "sample_rate_hz", "give the samples a second, or name the time column")));
+    }
+    ReadingMapping.Time given =
+        known.mapping().map(ReadingMapping::time).orElse(ReadingMapping.Time.FROM_FILE);
+    List<String> notes = new ArrayList<>(List.of(table.note()));
+    if (!mapping.unmapped().isEmpty()) {
+      notes.add("Columns not read: " + String.join(", ", mapping.unmapped()) + ".");
+    }
+    return new ReadingPlan(
+        ReadingKind.CAPTURE,
+        layout,
+        new ReadingMapping(
+            Optional.of(ReadingKind.CAPTURE),
+            new ReadingMapping.Time(
+                timeNames, given.format(), given.zone(), given.stamp(), given.intervalS()),
+            rate,
+            mapping.columns()),
+        table.headings(),
+        mapping.confidence(),
+        notes);
+  }
+
+  Reading read(ReadingPlan plan, ReadingSetting setting, BiPredicate<Double, String> progress) {
+    CaptureReading.go(progress, 0, "reading the samples");
+    Map<String, Column> columns = plan.mapping().columns();
+    int[] at = columns.keySet().stream().mapToInt(table.headings()::indexOf).toArray();
+    double[] factor = columns.values().stream().mapToDouble(Column::factor).toArray();
+    Samples samples = new Samples(at.length);
+    DateOrder order =
+        plan.mapping().time().format().map(DateOrder::of).orElse(DateOrder.YEAR_MONTH_DAY);
+    table.forEach(
+        row -> {
+          double[] values = new double[at.length];
+          for (int k = 0; k < at.length; k++) {
+            double value = row.value(at[k]);
+            values[k] = value == Double.NEGATIVE_INFINITY ? Double.NaN : value * factor[k];
+          }
+          samples.add(seconds(row, order, samples), values);
+          return true;
+        });
+    Capture capture = capture(plan, setting, samples, columns);
+    return CaptureReading.of(capture, setting, plan.notes(), progress);
+  }
+
+  /** A row's time in seconds; NaN where the rows are counted instead. */
+  private double seconds(TextTable.Row row, DateOrder order, Samples samples) {
+    if (time.columns().isEmpty()) {
+      return Double.NaN;
+    }
+    if (time.elapsed()) {
+      return row.value(time.columns().get(0)) * time.unitS();
+    }
+    LocalDateTime local =
+        time.at(row, order)
+            .map(TimeColumns.At::local)
+            .orElseThrow(
+                () ->
+                    new ReadingRefusedException(
+                        "Row "
+                            + row.number()
+                            + ": \""
+                            + time.text(row)
+                            + "\" is no time in the order "
+                            + order.pattern()
+                            + ".",
+                        table.headings(),
+                        List.of(
+                            new ReadingRefusedException.Question(
+                                "time.format", "say how times are written, or mend the row"))));
+    return samples.sinceFirst(local);
+  }
+
+  private Capture capture(
+      ReadingPlan plan, ReadingSetting setting, Samples samples, Map<String, Column> columns) {
+    double[] t = samples.times(plan.mapping().sampleRateHz(), table.headings());
+    List<Capture.Channel> channels = new ArrayList<>();
+    columns.forEach((name, column) -> channels.add(new Capture.Channel(name, column.quantity())));
+    Optional<ZoneId> zone = plan.mapping().time().zone().map(ZoneId::of).or(setting::siteZone);
+    Optional<Instant> start =
+        samples.first().flatMap(local -> zone.map(z -> local.atZone(z).toInstant()));
+    double rate = (t.length - 1) / t[t.length - 1];
+    return new Capture(start, OptionalDouble.of(rate), t, channels, samples.columns());
+  }
+
+  /** Rows gathered. */
+  private static final class Samples {
+    private double[][] columns;
+    private double[] times = new double[4096];
+    private int rows;
+    private Optional<LocalDateTime> first = Optional.empty();
+
+    Samples(int channels) {
+      this.columns = new double[channels][4096];
+    }
+
+    void add(double seconds, double[] values) {
+      if (rows == times.length) {
+        if (rows >= MOST_ROWS) {
+          throw new ReadingRefusedException(
+              "The capture has more than " + MOST_ROWS + " rows: cut it into shorter files.");
+        }
+        times = Arrays.copyOf(times, 2 * rows);
+        for (int k = 0; k < columns.length; k++) {
+          columns[k] = Arrays.copyOf(columns[k], 2 * rows);
+        }
+      }
+      times[rows] = seconds;
+      for (int k = 0; k < values.length; k++) {
+        columns[k][rows] = values[k];
+      }
+      rows++;
+    }
+
+    double sinceFirst(LocalDateTime local) {
+      first = first.or(() -> Optional.of(local));
+      return Duration.between(first.orElse(local), local).toNanos() * 1e-9;
+    }
+
+    Optional<LocalDateTime> first() {
+      return first;
+    }
+
+    List<double[]> columns() {
+      return Arrays.stream(columns).map(c -> Arrays.copyOf(c, rows)).toList();
+    }
+
+    /** Times after the first; printed to few digits they are put on an even grid. */
+    double[] times(OptionalDouble rateHz, List<String> headings) {
+      double[] t = new double[rows];
+      double span = rows < 2 ? 0 : times[rows - 1] - times[0];
+      double step = rateHz.isPresent() ? 1 / rateHz.getAsDouble() : span / Math.max(1, rows - 1);
+      if (rows < 2 || !(step > 0)) {
+        throw new ReadingRefusedException(
+            "The times of the samples do not rise: check the time column.",
+            headings,
+            List.of(
+                new ReadingRefusedException.Question(
+                    "sample_rate_hz", "or give the samples a second")));
+      }
+      for (int k = 0; k < rows; k++) {
+        t[k] = k * step;
+        if (rateHz.isEmpty() && !(Math.abs(times[k] - times[0] - t[k]) < 2 * step)) {
+          throw new ReadingRefusedException(
+              "Sample "
+                  + (k + 1)
+                  + " stands off the even grid of times: samples are missing or the time column is"
+                  + " not the time.",
+              headings,
+              List.of(
+                  new ReadingRefusedException.Question(
+                      "sample_rate_hz", "give the samples a second if they are even after all")));
+        }
+      }
+      return t;
+    }
+  }
+}

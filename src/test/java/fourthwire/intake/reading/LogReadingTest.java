@@ -1,0 +1,210 @@
+package fourthwire.intake.reading;
+
+import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.assertThatThrownBy;
+import static org.assertj.core.api.Assertions.within;
+
+import fourthwire.metering.QualityFinding;
+import fourthwire.metering.Reading;
+import fourthwire.metering.ReadingKind;
+import java.nio.charset.StandardCharsets;
+import java.time.Duration;
+import java.time.Instant;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import org.junit.jupiter.api.Test;
+
+/** Interval logs as CSV: layouts, times, refusals. The expected figures are those typed in. */
+class LogReadingTest {
+  private static Reading read(String text) {
+    return read(text.getBytes(StandardCharsets.UTF_8), Files.setting(50));
+  }
+
+  private static Reading read(byte[] bytes, ReadingSetting setting) {
+    List<fourthwire.metering.RawFile> files = List.of(Files.of("log.csv", bytes));
+    ReadingReader reader = new FormatReader();
+    return reader.read(files, reader.plan(files, setting), setting, (share, message) -> true);
+  }
+
+  private static ReadingRefusedException refusal(String text, ReadingSetting setting) {
+    try {
+      read(text.getBytes(StandardCharsets.UTF_8), setting);
+    } catch (ReadingRefusedException e) {
+      return e;
+    }
+    throw new AssertionError("was not refused");
+  }
+
+  private static double mean(Reading reading, String quantity) {
+    return reading.log().orElseThrow().quantities().get(quantity).mean();
+  }
+
+  @Test
+  void tradeWordsWithUnitsAreMappedWithoutBeingTold() {
+    Reading r =
+        read(
+            """
+            Time,I1 rms [A],Current L2 (A),U L1-N avg V,P total kW,Neutral current [A],PF L1,THD I L1 %,Frequency Hz
+            2025-03-01 00:00:00,10,20,230,4.5,7,0.9,33,50.01
+            2025-03-01 00:10:00,12,22,232,5.5,9,0.8,35,49.99
+            """);
+    assertThat(r.kind()).isEqualTo(ReadingKind.LOG);
+    assertThat(r.count()).isEqualTo(2);
+    assertThat(r.sampleRateHz().orElseThrow()).isEqualTo(1 / 600.0, within(1e-12));
+    assertThat(r.log().orElseThrow().interval()).isEqualTo(Duration.ofMinutes(10));
+    assertThat(mean(r, "L1.rms_a")).isEqualTo(11);
+    assertThat(mean(r, "L2.rms_a")).isEqualTo(21);
+    assertThat(mean(r, "L1.rms_v")).isEqualTo(231);
+    assertThat(mean(r, "total.active_w")).isEqualTo(5000);
+    assertThat(mean(r, "N.rms_a")).isEqualTo(8);
+    assertThat(mean(r, "L1.power_factor")).isEqualTo(0.85, within(1e-12));
+    assertThat(mean(r, "L1.current_thd_percent")).isEqualTo(34);
+    assertThat(mean(r, "frequency_hz")).isEqualTo(50);
+  }
+
+  @Test
+  void exactQuantityNamesAreRead() {
+    Reading r =
+        read(
+            "time;L1.rms_a;N.current_h9_a;L1.current_h3_percent\n"
+                + "2025-03-01T00:00:00Z;1,5;0,25;61,2\n"
+                + "2025-03-01T00:01:00Z;2,5;0,75;63,2\n");
+    assertThat(mean(r, "L1.rms_a")).isEqualTo(2);
+    assertThat(mean(r, "N.current_h9_a")).isEqualTo(0.5);
+    assertThat(mean(r, "L1.current_h3_percent")).isEqualTo(62.2, within(1e-12));
+    assertThat(r.period().orElseThrow().from()).isEqualTo(Instant.parse("2025-03-01T00:00:00Z"));
+    assertThat(r.period().orElseThrow().to()).isEqualTo(Instant.parse("2025-03-01T00:02:00Z"));
+  }
+
+  @Test
+  void preambleUnitsRowDateAndTimeColumnsDayFirstAndUtf16AreRead() {
+    String text =
+        """
+        Meter;MSB main
+        Serial;4711
+
+        Date;Time;L1;L1 voltage
+        ;;A;V
+        13.02.2025;00:00;1.234,5;230,1
+        13.02.2025;00:15;1.236,5;230,3
+        """
+            .replace("Date;Time;L1;", "Date;Time;Current L1;");
+    byte[] utf16 = ("\uFEFF" + text).getBytes(StandardCharsets.UTF_16LE);
+    Reading r = read(utf16, Files.setting(50));
+    assertThat(mean(r, "L1.rms_a")).isEqualTo(1235.5);
+    assertThat(mean(r, "L1.rms_v")).isEqualTo(230.2, within(1e-9));
+    // Amsterdam stands at UTC+1 in February.
+    assertThat(r.period().orElseThrow().from()).isEqualTo(Instant.parse("2025-02-12T23:00:00Z"));
+  }
+
+  @Test
+  void theStepsSettleTheOrderOfDates() {
+    Reading r =
+        read(
+            """
+            Date Time,I L1 (A)
+            01/02/2025 23:50,1
+            02/02/2025 00:00,2
+            02/02/2025 00:10,3
+            """);
+    assertThat(r.period().orElseThrow().from()).isEqualTo(Instant.parse("2025-02-01T22:50:00Z"));
+    assertThat(r.notes()).anySatisfy(n -> assertThat(n).contains("day first"));
+  }
+
+  @Test
+  void aDateOrderThatTheFileDoesNotSettleIsAsked() {
+    ReadingRefusedException e =
+        refusal("Date Time,I L1 (A)\n01/02/2025 10:00,1\n01/02/2025 10:10,2\n", Files.setting(50));
+    assertThat(e.columns()).containsExactly("Date Time", "I L1 (A)");
+    assertThat(e.questions()).extracting("part").containsExactly("time.format");
+  }
+
+  @Test
+  void unitsAndConductorsThatAreOpenAreAskedAllAtOnce() {
+    ReadingSetting noZone =
+        new ReadingSetting(
+            Optional.empty(),
+            50,
+            Optional.empty(),
+            l -> Optional.empty(),
+            List.of(),
+            OptionalDouble.empty());
+    ReadingRefusedException e =
+        refusal("time,Power L1,THD L2\n2025-01-01 00:00,1,2\n2025-01-01 00:10,1,2\n", noZone);
+    assertThat(e.questions())
+        .extracting("part")
+        .containsExactlyInAnyOrder("columns.Power L1", "columns.THD L2", "time.zone");
+  }
+
+  @Test
+  void theRepeatedHourOfAutumnIsTwoHours() {
+    StringBuilder text = new StringBuilder("time,L1.rms_a\n");
+    for (String t : List.of("01:30", "02:00", "02:30", "02:00", "02:30", "03:00", "03:30")) {
+      text.append("2025-10-26 ").append(t).append(",").append(text.length()).append("\n");
+    }
+    Reading r = read(text.toString());
+    assertThat(r.quality()).isEmpty();
+    assertThat(r.period().orElseThrow().length()).isEqualTo(Duration.ofMinutes(210));
+  }
+
+  @Test
+  void gapsRepeatsBlanksAndOverflowsAreFound() {
+    StringBuilder text = new StringBuilder("time,L1.rms_a,L1.power_factor\n");
+    for (int k = 0; k < 200; k++) {
+      if (k >= 50 && k < 60) {
+        continue;
+      }
+      String t = String.format("2025-01-%02d %02d:%02d", 1 + k / 144, k / 6 % 24, k % 6 * 10);
+      String i = k == 80 ? "-" : k == 90 ? "99999" : k == 91 ? "1O.5" : String.valueOf(10 + k % 7);
+      String row = t + "," + i + "," + (k == 100 ? "1.4" : "0.9") + "\n";
+      text.append(row).append(k == 120 ? row : "");
+    }
+    Reading r = read(text.toString());
+    assertThat(r.quality())
+        .extracting(QualityFinding::code)
+        .containsExactlyInAnyOrder(
+            QualityFinding.GAP,
+            QualityFinding.REPEATED_ROWS,
+            QualityFinding.MISSING_VALUES,
+            QualityFinding.IMPOSSIBLE_VALUE,
+            QualityFinding.IMPOSSIBLE_VALUE,
+            QualityFinding.IMPOSSIBLE_VALUE);
+    assertThat(r.quality())
+        .filteredOn(f -> f.code().equals(QualityFinding.GAP))
+        .singleElement()
+        .satisfies(
+            f -> assertThat(f.period().orElseThrow().length()).isEqualTo(Duration.ofMinutes(100)));
+  }
+
+  @Test
+  void aReversedClampAndAWrongRatioAreFound() {
+    StringBuilder text = new StringBuilder("time,L1.active_w,L2.active_w,L2.rms_v,L2.rms_a\n");
+    for (int k = 0; k < 60; k++) {
+      text.append(
+          String.format("2025-01-01 00:%02d,%d,%d,230,%d%n", k, -2000 - k, 46000 + k, 20 + k % 3));
+    }
+    assertThat(read(text.toString()).quality())
+        .extracting(QualityFinding::code)
+        .contains(QualityFinding.REVERSED_CLAMP, QualityFinding.WRONG_RATIO);
+  }
+
+  @Test
+  void aValueThatStandsStillIsFound() {
+    StringBuilder text = new StringBuilder("time,L1.rms_a\n");
+    for (int k = 0; k < 144; k++) {
+      double i = k > 60 && k < 90 ? 12.34 : 10 + Math.sin(k);
+      text.append(String.format("2025-01-01 %02d:%02d,%.4f%n", k / 6, k % 6 * 10, i));
+    }
+    assertThat(read(text.toString()).quality())
+        .extracting(QualityFinding::code)
+        .containsExactly(QualityFinding.FLAT_LINE);
+  }
+
+  @Test
+  void noTableIsRefusedInWords() {
+    assertThatThrownBy(() -> read("nothing here"))
+        .isInstanceOf(ReadingRefusedException.class)
+        .hasMessageContaining("No table was found");
+  }
+}
