@@ -9,7 +9,7 @@ import fourthwire.testsupport.ServiceTest;
 import fourthwire.testsupport.SmallSite;
 import java.nio.charset.StandardCharsets;
 import java.util.Map;
-import org.junit.jupiter.api.AfterEach;
+import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
 import tools.jackson.databind.JsonNode;
 
@@ -17,7 +17,7 @@ import tools.jackson.databind.JsonNode;
 class SiteApiTest extends ServiceTest {
   private static final String SITES = "/api/v1/sites";
 
-  @AfterEach
+  @BeforeEach
   void removeAll() {
     for (JsonNode site : http().get(SITES).json()) {
       http().delete(SITES + "/" + site.path("id").asLong());
