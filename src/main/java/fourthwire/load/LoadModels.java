@@ -1,11 +1,17 @@
 package fourthwire.load;
 
-import fourthwire.quantity.Spectrum;
+import fourthwire.quantity.Phasor;
 import java.util.Locale;
 import java.util.OptionalDouble;
 
 /** Makes the load model of a survey row. */
 public final class LoadModels {
+  /** Common practice, no source. */
+  private static final double MOTOR_DISPLACEMENT_FACTOR = 0.85;
+
+  private static final double LOCKED_ROTOR_PERCENT = 17;
+  private static final double FIRING_DEGREES = 90;
+
   private LoadModels() {}
 
   /**
@@ -19,10 +25,13 @@ public final class LoadModels {
     return switch (request.kind()) {
       case RESISTIVE -> constantImpedance(request, 1);
       case LINEAR -> constantImpedance(request, request.displacementFactor().orElse(1));
-      case MEASURED -> measured(request);
+      case MEASURED -> GivenSpectra.measured(request);
       case CAPACITOR_INPUT -> Rectifiers.capacitorInput(request);
       case SIX_PULSE -> Rectifiers.sixPulse(request);
       case PFC_CONTINUOUS, PFC_CRITICAL -> PfcSupplies.of(request);
+      case MOTOR -> motor(request);
+      case PHASE_DIMMER -> dimmer(request);
+      case MAGNETIC_BALLAST, ACTIVE_FRONT_END -> GivenSpectra.published(request);
       default ->
           throw new IllegalArgumentException(
               String.format(
@@ -42,21 +51,30 @@ public final class LoadModels {
         displacementFactor);
   }
 
-  private static LoadModel measured(LoadRequest request) {
-    Spectrum shape = request.spectrum().orElseThrow();
-    double cos = shape.re(1) / shape.magnitude(1);
-    double rms = shape.rms() / shape.magnitude(1);
-    double perPhaseRoot = request.ports() == 3 ? Math.sqrt(3) : 1;
-    LoadRequest.Rating rating = request.rating();
-    double unitAmps;
-    if (rating instanceof LoadRequest.Rating.Watts w) {
-      unitAmps = w.w() / (perPhaseRoot * request.nominalPortV() * cos);
-    } else {
-      unitAmps =
-          Ratings.voltAmperes(request, rating, 1) / (perPhaseRoot * request.nominalPortV() * rms);
-    }
-    double scale = unitAmps * request.units() * request.demand() / shape.magnitude(1);
-    return new MeasuredSpectrum(request.ports(), request.frequencyHz(), shape.times(scale));
+  private static LoadModel motor(LoadRequest request) {
+    double cos = Math.abs(request.displacementFactor().orElse(MOTOR_DISPLACEMENT_FACTOR));
+    double unitVa = Ratings.voltAmperes(request, request.rating(), cos);
+    double ratedVa = unitVa * request.units() * (request.lowerPower() ? 1 : request.demand());
+    double va = unitVa * request.units() * request.demand();
+    double sign = Math.signum(request.displacementFactor().orElse(1));
+    double x = request.columns().lockedRotorReactancePercent().orElse(LOCKED_ROTOR_PERCENT) / 100;
+    double v = request.nominalPortV();
+    return new Motor(
+        request.frequencyHz(),
+        new Phasor(va * cos, sign * va * Math.sqrt(1 - cos * cos)),
+        x * v * v / ratedVa);
+  }
+
+  private static LoadModel dimmer(LoadRequest request) {
+    double cos = Math.abs(request.displacementFactor().orElse(1));
+    double va =
+        Ratings.voltAmperes(request, request.rating(), cos) * request.units() * request.demand();
+    double z = request.nominalPortV() * request.nominalPortV() / va;
+    return new PhaseDimmer(
+        z * cos,
+        z * Math.sqrt(1 - cos * cos) / (2 * Math.PI * request.frequencyHz()),
+        request.frequencyHz(),
+        Math.toRadians(request.columns().firingDegrees().orElse(FIRING_DEGREES)));
   }
 
   /**

@@ -124,7 +124,7 @@ final class PairBridge {
   private double turnOn(double a, double b, double from, double square, double fall) {
     double ga = excess(a, from, square, fall);
     if (ga >= 0) {
-      return a;
+      return b; // just turned off: let it move on, or it chatters
     }
     double gb = excess(b, from, square, fall);
     double low = a;
@@ -164,10 +164,7 @@ final class PairBridge {
       trace.start(u, sign * amps);
     }
     if (starting) {
-      double node = Math.floor(u) + 1;
-      if (node - u < 0.5) {
-        node++;
-      }
+      double node = path.nextNode(path.nextNode(u));
       double base = u;
       double span = Math.min(node, to) - base;
       for (double share : GRADING) {
@@ -178,7 +175,7 @@ final class PairBridge {
       }
     }
     while (u < to) {
-      amps = advance(sign, amps, Math.min(Math.floor(u) + 1, to));
+      amps = advance(sign, amps, Math.min(path.nextNode(u), to));
       if (amps == 0) {
         return v > 0;
       }
@@ -201,11 +198,12 @@ final class PairBridge {
       h = turnOff(sign, amps, h, e0, d0);
       path.i = 0;
     }
+    double charge = path.charge(h, v);
     u = path.i == 0 ? u + h : next;
     v = path.v;
     i = 0;
     if (recording) {
-      trace.next(u, sign * path.i);
+      trace.next(u, sign * path.i, sign * charge);
     }
     return path.i;
   }

@@ -12,6 +12,11 @@ package fourthwire.load;
  * in cells of {@link CycleTable}.
  */
 final class PathStep {
+  /** Longest step as a share of √(LC). */
+  private static final double STEP_OF_RING = 0.3;
+
+  private static final int MOST_DIVISIONS = 4;
+
   /** Ohms: inductance over the length of a cell. */
   double inductance;
 
@@ -36,6 +41,8 @@ final class PathStep {
   /** Both diodes' logarithmic drop at the threshold, volts. */
   double thresholdV;
 
+  private int division;
+
   /** Result of the last step: amps. */
   double i;
 
@@ -49,6 +56,13 @@ final class PathStep {
     this.power = load.powerW();
     this.slopeV = 2 * load.diode().slopeV();
     this.saturation = load.diode().saturationA();
+    double ring = Math.sqrt(this.inductance * this.capacitance);
+    this.division = (int) Math.min(MOST_DIVISIONS, Math.ceil(1 / (STEP_OF_RING * ring + 1e-9)));
+  }
+
+  /** The next place to step to: cells are divided where the path would ring within one. */
+  double nextNode(double position) {
+    return (Math.floor(position * division + 1e-9) + 1) / division;
   }
 
   void threshold(double amps) {
@@ -95,5 +109,10 @@ final class PathStep {
     r2 = yi - power / yv + ch * (u1v - u2v - (8.0 / 3) * u3v);
     i = yi + (r1 * d - r2) * det;
     v = yv + (a * r2 + r1) * det;
+  }
+
+  /** Charge of the last step from its voltages, in amp-cells: C·Δv and what the load took. */
+  double charge(double h, double v0) {
+    return capacitance * (v - v0) + 2 * power * h / (v + v0);
   }
 }

@@ -97,9 +97,9 @@ final class PfcSolver implements LoadSolver {
     Arrays.fill(insideRe, 0);
     Arrays.fill(insideIm, 0);
     double first = -Math.atan2(vIm[1], vRe[1]);
-    addZone(crossing(first));
+    addZone(Crossing.near(vRe, vIm, first));
     if (step == 1) {
-      addZone(crossing(first + Math.PI));
+      addZone(Crossing.near(vRe, vIm, first + Math.PI));
     }
     residualOfThird();
     double power = vRe[3] * residualRe + vIm[3] * residualIm;
@@ -144,38 +144,6 @@ final class PfcSolver implements LoadSolver {
       insideRe[h] += zoneRe[h] * c + zoneIm[h] * s;
       insideIm[h] += zoneIm[h] * c - zoneRe[h] * s;
     }
-  }
-
-  /**
-   * Angle of the voltage's zero crossing nearest the fundamental's, by Newton; where the voltage
-   * rings so that none is found within 30°, the fundamental's own.
-   */
-  private double crossing(double guess) {
-    double x = guess;
-    for (int n = 0; n < 20; n++) {
-      double value = 0;
-      double slope = 0;
-      double sin1 = Math.sin(x);
-      double cos1 = Math.cos(x);
-      double s = 0;
-      double c = 1;
-      for (int h = 1; h <= ORDERS; h++) {
-        double next = s * cos1 + c * sin1;
-        c = c * cos1 - s * sin1;
-        s = next;
-        value += vRe[h] * s + vIm[h] * c;
-        slope += h * (vRe[h] * c - vIm[h] * s);
-      }
-      double by = value / slope;
-      x -= by;
-      if (!(Math.abs(x - guess) < Math.PI / 6)) {
-        return guess;
-      }
-      if (Math.abs(by) < 1e-13) {
-        return x;
-      }
-    }
-    return x;
   }
 
   /** One turn of the repetition; returns by how much the voltage moved. */

@@ -7,11 +7,16 @@ import fourthwire.quantity.Spectrum;
  * harmonics by direct integration.
  *
  * <p>Inside a piece the current is a cubic Hermite polynomial between nodes, its slopes from
- * parabolas through neighbouring nodes; each interval is integrated against e^(-jhωt) with the
- * three-point Gauss-Legendre rule. Workspace of one solver, not thread-safe.
+ * parabolas through neighbouring nodes, plus a parabola that makes its charge right; each interval
+ * is integrated against e^(-jhωt) with the three-point Gauss-Legendre rule. Workspace of one
+ * solver, not thread-safe.
  */
 final class PulseTrace {
   private static final int CAPACITY = 8192;
+
+  /** An interval this much shorter than its neighbour tells nothing about slopes. */
+  private static final double SHORT = 0.02;
+
   private static final double[] GAUSS_X = {
     0.5 - Math.sqrt(0.15), 0.5, 0.5 + Math.sqrt(0.15),
   };
@@ -21,6 +26,7 @@ final class PulseTrace {
   private final double[] amps = new double[CAPACITY];
   private final boolean[] starts = new boolean[CAPACITY];
   private final double[] slope = new double[CAPACITY];
+  private final double[] charge = new double[CAPACITY];
   private int size;
 
   void clear() {
@@ -32,9 +38,15 @@ final class PulseTrace {
     append(position, amps, true);
   }
 
-  /** Adds the next node of the piece. */
-  void next(double position, double amps) {
+  /**
+   * Adds the next node of the piece.
+   *
+   * @param ampCells the charge since the node before: a stiff path's current is less sure than the
+   *     capacitor's voltage, and the charge comes from that; NaN where it is not known
+   */
+  void next(double position, double amps, double ampCells) {
     append(position, amps, false);
+    charge[size - 1] = ampCells;
   }
 
   private void append(double at, double value, boolean start) {
@@ -57,6 +69,10 @@ final class PulseTrace {
 
   double amps(int node) {
     return amps[node];
+  }
+
+  double charge(int node) {
+    return charge[node];
   }
 
   boolean starts(int node) {
@@ -100,8 +116,14 @@ final class PulseTrace {
 
   private double inside(int n, double width, double x) {
     double y = 1 - x;
-    return y * y * ((1 + 2 * x) * amps[n] + x * width * slope[n])
-        + x * x * ((1 + 2 * y) * amps[n + 1] - y * width * slope[n + 1]);
+    double cubic =
+        y * y * ((1 + 2 * x) * amps[n] + x * width * slope[n])
+            + x * x * ((1 + 2 * y) * amps[n + 1] - y * width * slope[n + 1]);
+    if (Double.isNaN(charge[n + 1])) {
+      return cubic;
+    }
+    double mean = (amps[n] + amps[n + 1]) / 2 + width * (slope[n] - slope[n + 1]) / 12;
+    return cubic + 6 * x * y * (charge[n + 1] / width - mean);
   }
 
   private static void addPoint(double at, double weight, int step, double[] re, double[] im) {
@@ -149,7 +171,13 @@ final class PulseTrace {
       double after = position[n + 1] - position[n];
       double left = (amps[n] - amps[n - 1]) / before;
       double right = (amps[n + 1] - amps[n]) / after;
-      slope[n] = (left * after + right * before) / (before + after);
+      if (before < SHORT * after) {
+        slope[n] = right;
+      } else if (after < SHORT * before) {
+        slope[n] = left;
+      } else {
+        slope[n] = (left * after + right * before) / (before + after);
+      }
     }
     slope[first] = 2 * chord(first) - slope[first + 1];
     slope[last] = 2 * chord(last - 1) - slope[last - 1];

@@ -120,16 +120,6 @@ final class ThreeLineBridge {
     }
   }
 
-  private void record() {
-    if (recording) {
-      for (int k = 0; k < 3; k++) {
-        if (line[k] != 0) {
-          trace[k].next(u, line[k]);
-        }
-      }
-    }
-  }
-
   private int highest(double at) {
     double a = emf[0].at(at);
     double b = emf[1].at(at);
@@ -186,7 +176,7 @@ final class ThreeLineBridge {
     double high = b;
     double gLow = excess(a, from, square, fall);
     if (gLow >= 0) {
-      return a;
+      return b; // just turned off: let it move on, or it chatters
     }
     double gHigh = excess(b, from, square, fall);
     for (int n = 0; n < 60 && high - low > 1e-9; n++) {
@@ -223,7 +213,7 @@ final class ThreeLineBridge {
       double next =
           graded < GRADING.length
               ? base + GRADING[graded++] * span
-              : Math.min(Math.floor(u) + 1, to);
+              : Math.min(pair.nextNode(u), to);
       if (!stepPair(p, n, next)) {
         return v > 0;
       }
@@ -232,8 +222,7 @@ final class ThreeLineBridge {
   }
 
   private double gradedSpan(double to) {
-    double node = Math.floor(u) + 1;
-    return Math.min(node - u < 0.5 ? node + 1 : node, to) - u;
+    return Math.min(pair.nextNode(pair.nextNode(u)), to) - u;
   }
 
   /** One step of a pair; false where the set of conducting lines has changed. */
@@ -257,11 +246,15 @@ final class ThreeLineBridge {
         h = Math.max(h, 1e-7);
       }
     }
+    double charge = pair.charge(h, v);
     u = leaves || h < next - start ? start + h : next;
     v = pair.v;
     line[p] = pair.i;
     line[n] = -pair.i;
-    record();
+    if (recording) {
+      trace[p].next(u, pair.i, charge);
+      trace[n].next(u, -pair.i, -charge);
+    }
     if (!(v > 0)) {
       v = 0;
       return false;
@@ -371,7 +364,7 @@ final class ThreeLineBridge {
       double next =
           graded < GRADING.length
               ? base + GRADING[graded++] * span
-              : Math.min(Math.floor(u) + 1, to);
+              : Math.min(pair.nextNode(u), to);
       if (!stepOverlap(a, b, c, sign, next)) {
         return v > 0;
       }
@@ -414,7 +407,11 @@ final class ThreeLineBridge {
     line[a] = sign * overlap.xa;
     line[b] = sign * overlap.xb;
     line[c] = -sign * (overlap.xa + overlap.xb);
-    record();
+    if (recording) {
+      for (int k = 0; k < 3; k++) {
+        trace[k].next(u, line[k], Double.NaN);
+      }
+    }
     if (!(v > 0)) {
       v = 0;
       return false;

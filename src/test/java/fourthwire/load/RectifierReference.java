@@ -1,87 +1,112 @@
 package fourthwire.load;
 
+import de.siegmar.fastcsv.reader.CsvReader;
+import de.siegmar.fastcsv.reader.NamedCsvRecord;
 import fourthwire.quantity.Phasor;
 import fourthwire.quantity.Spectrum;
 import java.io.IOException;
-import java.io.InputStream;
+import java.io.InputStreamReader;
 import java.io.UncheckedIOException;
 import java.nio.charset.StandardCharsets;
-import java.util.ArrayList;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
 
 /** The circuit-simulator cases of the test resources, {@code load/rectifiers/README.md}. */
-final class RectifierReference {
+record RectifierReference(NamedCsvRecord row) {
   private static final String FOLDER = "/load/rectifiers/";
 
-  private RectifierReference() {}
-
-  /** One case by column name. */
-  static List<Map<String, String>> cases(String kind) {
-    return rows("cases.csv").stream().filter(r -> r.get("kind").equals(kind)).toList();
+  static List<RectifierReference> all() {
+    return rows("cases.csv").stream().map(RectifierReference::new).toList();
   }
 
-  /** The simulated line current of a case. */
-  static Spectrum spectrum(String id) {
-    Map<Integer, Phasor> byOrder = new HashMap<>();
-    for (Map<String, String> row : rows("spectra.csv")) {
-      if (row.get("id").equals(id)) {
-        byOrder.put(
-            Integer.parseInt(row.get("h")),
-            Phasor.polar(number(row, "I_rms_A"), number(row, "phase_deg")));
-      }
-    }
-    return Spectrum.of(h -> byOrder.getOrDefault(h, Phasor.ZERO));
+  boolean threePhase() {
+    return row.getField("kind").startsWith("3ph");
   }
 
-  /** The summary row of a case. */
-  static Map<String, String> summary(String id) {
-    return rows("summary.csv").stream()
-        .filter(r -> r.get("id").equals(id))
-        .findFirst()
-        .orElseThrow();
+  /** All units together. */
+  BridgeLoad load() {
+    return new BridgeLoad(
+            number("P_dc_W"),
+            number("C_uF") * 1e-6,
+            number("Rb_ohm"),
+            number("Lb_uH") * 1e-6,
+            number("R_dc_ohm"),
+            number("L_dc_uH") * 1e-6,
+            new Diode(3e-11, 1.2, 1e-3))
+        .parallel(number("n_units"));
   }
 
-  static double number(Map<String, String> row, String column) {
-    return Double.parseDouble(row.get(column));
+  /** The line currents this project computes for the case. */
+  PortSpectra computed() {
+    LoadModel model =
+        threePhase()
+            ? new SixPulse(load(), number("f_Hz"))
+            : new CapacitorInput(load(), number("f_Hz"));
+    PortSpectra current = new PortSpectra(model.ports());
+    model.newSolver().solve(emf(), number("Rs_ohm"), number("Ls_uH") * 1e-6, current);
+    return current;
   }
 
-  /** The source's electromotive force, line to neutral on one port or on three lines. */
-  static PortSpectra emf(Map<String, String> row, int ports) {
-    PortSpectra emf = new PortSpectra(ports);
-    double v = number(row, "V_ln_rms");
-    for (int p = 0; p < ports; p++) {
-      put(emf, p, 1, Phasor.polar(v, -120.0 * p));
-      for (int h = 3; h <= 5; h += 2) {
-        double size = v * number(row, "v" + h + "_pct") / 100;
-        put(emf, p, h, Phasor.polar(size, number(row, "v" + h + "_deg") - 120.0 * p * h));
+  /** The source's electromotive force, line to neutral. */
+  PortSpectra emf() {
+    PortSpectra emf = new PortSpectra(threePhase() ? 3 : 1);
+    for (int p = 0; p < emf.ports(); p++) {
+      add(emf, p, 1, 100, 0);
+      for (String term : row.getField("emf").split(" ")) {
+        if (!term.isEmpty() && !(term.startsWith("a") && p > 0)) {
+          String[] part = term.replace("a", "").split(":");
+          add(
+              emf,
+              p,
+              Integer.parseInt(part[0]),
+              Double.parseDouble(part[1]),
+              Double.parseDouble(part[2]));
+        }
       }
     }
     return emf;
   }
 
-  private static void put(PortSpectra s, int port, int order, Phasor value) {
-    s.re[port][order] = value.re();
-    s.im[port][order] = value.im();
+  private void add(PortSpectra emf, int port, int order, double percent, double degrees) {
+    Phasor value = Phasor.polar(number("V_ln_rms") * percent / 100, degrees - 120.0 * port * order);
+    emf.re[port][order] += value.re();
+    emf.im[port][order] += value.im();
   }
 
-  private static List<Map<String, String>> rows(String file) {
-    try (InputStream in = RectifierReference.class.getResourceAsStream(FOLDER + file)) {
-      String[] lines = new String(in.readAllBytes(), StandardCharsets.UTF_8).split("\n");
-      String[] header = lines[0].split(",");
-      List<Map<String, String>> rows = new ArrayList<>();
-      for (int n = 1; n < lines.length; n++) {
-        String[] cells = lines[n].split(",");
-        Map<String, String> row = new HashMap<>();
-        for (int c = 0; c < Math.min(header.length, cells.length); c++) {
-          row.put(header[c], cells[c]);
-        }
-        rows.add(row);
+  /** The simulated current of line a or b. */
+  Spectrum simulated(String line) {
+    Map<Integer, Phasor> byOrder = new HashMap<>();
+    for (NamedCsvRecord r : rows("spectra.csv")) {
+      if (r.getField("id").equals(row.getField("id")) && r.getField("line").equals(line)) {
+        byOrder.put(
+            Integer.parseInt(r.getField("h")),
+            Phasor.polar(
+                Double.parseDouble(r.getField("I_rms_A")),
+                Double.parseDouble(r.getField("phase_deg"))));
       }
-      return rows;
+    }
+    return Spectrum.of(h -> byOrder.getOrDefault(h, Phasor.ZERO));
+  }
+
+  double number(String column) {
+    return Double.parseDouble(row.getField(column));
+  }
+
+  private static List<NamedCsvRecord> rows(String file) {
+    try (var in =
+            new InputStreamReader(
+                RectifierReference.class.getResourceAsStream(FOLDER + file),
+                StandardCharsets.UTF_8);
+        var csv = CsvReader.builder().ofNamedCsvRecord(in)) {
+      return csv.stream().toList();
     } catch (IOException e) {
       throw new UncheckedIOException(e);
     }
+  }
+
+  @Override
+  public String toString() {
+    return row.getField("id") + " " + row.getField("note");
   }
 }
