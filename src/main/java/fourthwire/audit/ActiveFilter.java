@@ -22,6 +22,7 @@ final class ActiveFilter {
   private final int[] lines;
   private final int neutral;
   private final int offset;
+  private double part = 1;
 
   private ActiveFilter(double ratedA, int[] lines, int neutral, int offset) {
     this.ratedA = ratedA;
@@ -102,10 +103,9 @@ final class ActiveFilter {
       }
       largest = Math.max(largest, Math.sqrt(square));
     }
-    if (largest > ratedA) {
-      for (int k = 0; k < lines.length * perLine; k++) {
-        g[offset + k] *= ratedA / largest;
-      }
+    part = largest > ratedA ? ratedA / largest : 1;
+    for (int k = 0; k < lines.length * perLine; k++) {
+      g[offset + k] *= part;
     }
   }
 

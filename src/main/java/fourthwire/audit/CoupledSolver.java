@@ -18,10 +18,12 @@ import java.util.stream.IntStream;
 /**
  * Solves the network and its loads together: voltages shape the currents and currents the voltages.
  *
- * <p>The unknown is what the loads draw. One pass solves the network for it at every order (in
- * linear time, see {@code fourthwire.network}), then every load behind the series R-L that the
- * network shows it ({@link SeriesEstimate}), so that a load with no impedance of its own sees what
- * limits it. The fixed-point iteration that results is accelerated ({@link AndersonAcceleration}).
+ * <p>The unknown x is what the loads draw. The network answers it with voltages in linear time (see
+ * {@code fourthwire.network}); each load, solved behind the series R-L that the network shows it
+ * ({@link SeriesEstimate}), answers those with its current again: g(x). Two plain passes lead near
+ * x = g(x), then Newton's method to it, its linear equations solved by minimal residuals ({@link
+ * Gmres}) from the slopes of the loads and the network's own linear answer, so that no matrix over
+ * the site is ever formed and a resonance or a soft generator costs a few more products, no more.
  *
  * <p>Converged means: every load's current at the final voltages equals what was injected within
  * {@value #LOAD_TOLERANCE} of its rms, no load's voltage moved by more than {@value
@@ -43,7 +45,7 @@ final class CoupledSolver {
   static final double CHECK_TOLERANCE = 1e-8;
 
   private static final int MOST_PASSES = 300;
-  private static final int DEPTH = 8;
+  private static final int DEPTH = 40;
   private static final int MOST_STUMBLES = 8;
 
   private final NetworkPlan plan;
@@ -90,7 +92,6 @@ final class CoupledSolver {
     eachOrder(this::factor);
     solveNetwork(new double[length]);
     if (length > 0) {
-      new SeriesEstimate(network, loads, omega).apply(factors, solutions[1]);
       iterate(progress);
     }
     check();
@@ -98,34 +99,70 @@ final class CoupledSolver {
   }
 
   private void iterate(Progress progress) {
+    SeriesEstimate series = new SeriesEstimate(network, factors, loads, omega);
+    series.applyTogether(solutions[1]);
     double[] x = new double[length];
     double[] g = new double[length];
-    AndersonAcceleration acceleration = new AndersonAcceleration(weights(), DEPTH);
     Settling settling = new Settling(loads, filters, orders);
-    int stumbles = 0;
-    for (int pass = 1; pass <= MOST_PASSES; pass++) {
-      String failure = image(x, g);
-      if (!failure.isEmpty()) {
-        if (pass == 1 || ++stumbles > MOST_STUMBLES) {
-          throw new AuditFailedException(failure);
-        }
-        // An overshoot of the acceleration: go on from the last image that was possible.
-        acceleration.restart();
-        System.arraycopy(g, 0, x, 0, length);
-        solveNetwork(x);
-        continue;
-      }
+    for (int pass = 1; pass <= PLAIN_PASSES; pass++) {
+      refuse(image(x, g));
+      settling.look(x, g);
+      System.arraycopy(g, 0, x, 0, length);
+      solveNetwork(x);
+    }
+    series.applyAlone(plan);
+    refuse(image(x, g));
+    NewtonStep newton = new NewtonStep(network, factors, orders, loads, filters, omega);
+    for (int pass = PLAIN_PASSES + 1; pass <= MOST_PASSES; pass++) {
       settling.look(x, g);
       progress.at(settling.share(), "Network and loads together, pass " + pass);
       if (settling.loadsSettled() && conductorsSettled(g)) {
         return;
       }
-      acceleration.step(x, g);
-      solveNetwork(x);
+      newton.renewWhereSlow(settling.change());
+      advance(x, g, newton.step(x, g));
     }
     throw new AuditFailedException(
         "The network and its loads did not settle in %d passes: %s"
             .formatted(MOST_PASSES, settling.worst()));
+  }
+
+  /**
+   * Takes a Newton step, or the longest part of it (halved again and again) that brings the loads
+   * nearer to what was injected.
+   */
+  private void advance(double[] x, double[] g, double[] step) {
+    double[] start = x.clone();
+    double before = distance(x, g);
+    String failure = "";
+    double part = 1;
+    for (int halving = 0; halving < SHORTEST_STEP; halving++) {
+      for (int i = 0; i < length; i++) {
+        x[i] = start[i] + part * step[i];
+      }
+      solveNetwork(x);
+      failure = image(x, g);
+      if (failure.isEmpty() && distance(x, g) < before) {
+        return;
+      }
+      part /= 2;
+    }
+    // The shortest step stands: near the end rounding can keep the distance from falling.
+    refuse(failure);
+  }
+
+  private static void refuse(String failure) {
+    if (!failure.isEmpty()) {
+      throw new AuditFailedException(failure);
+    }
+  }
+
+  private static double distance(double[] x, double[] g) {
+    double sum = 0;
+    for (int i = 0; i < x.length; i++) {
+      sum += (g[i] - x[i]) * (g[i] - x[i]);
+    }
+    return Math.sqrt(sum);
   }
 
   /** What the loads draw at the solved voltages, into g; the reason where one can't. */
@@ -209,17 +246,6 @@ final class CoupledSolver {
             c ->
                 Math.sqrt(moved[c])
                     <= CONDUCTOR_TOLERANCE * (Math.sqrt(square[c]) + largest / 100));
-  }
-
-  /** Small loads count as well as large ones: amps weigh by one over the root of a load's size. */
-  private double[] weights() {
-    double[] weight = new double[length];
-    Arrays.fill(weight, 1);
-    for (DevicePort load : loads) {
-      int end = load.offset() + 2 * load.ports() * orders.count();
-      Arrays.fill(weight, load.offset(), end, 1 / Math.sqrt(load.device().roughA()));
-    }
-    return weight;
   }
 
   /** Nothing leaves here that breaks Kirchhoff's laws or the balance of power. */

@@ -16,6 +16,11 @@ import java.util.List;
 final class DevicePort {
   private static final int NONE = -1;
 
+  /** Part of the nominal voltage by which one order is stepped to find a slope. */
+  private static final double SLOPE_STEP = 1e-4;
+
+  private static final double THIRD = 2 * Math.PI / 3;
+
   private final Device device;
   private final int[] from;
   private final int to;
@@ -77,6 +82,19 @@ final class DevicePort {
   void setSeries(double ohm, double henry) {
     seriesOhm = ohm;
     seriesHenry = henry;
+  }
+
+  double seriesOhm() {
+    return seriesOhm;
+  }
+
+  double seriesHenry() {
+    return seriesHenry;
+  }
+
+  /** How many numbers of the state are its own. */
+  int length(OrdersInPlay orders) {
+    return 2 * ports() * orders.count();
   }
 
   /** The largest change of a voltage of one order since the pass before, volts. */
@@ -143,17 +161,92 @@ final class DevicePort {
     failure = "";
     try {
       solver.solve(emf, seriesOhm, seriesHenry, drawn);
+      copyDrawn(orders, g, offset);
     } catch (NoSteadyStateException e) {
       failure = String.valueOf(e.getMessage());
-      return;
     }
-    at = offset;
+  }
+
+  private void copyDrawn(OrdersInPlay orders, double[] into, int start) {
+    int at = start;
     for (int port = 0; port < from.length; port++) {
       for (int k = 0; k < orders.count(); k++) {
-        int h = orders.at(k);
-        g[at++] = drawn.re[port][h];
-        g[at++] = drawn.im[port][h];
+        into[at++] = drawn.re[port][orders.at(k)];
+        into[at++] = drawn.im[port][orders.at(k)];
       }
     }
+  }
+
+  /**
+   * The slope at the electromotive force last solved, by small steps of it. Of a load on three
+   * lines only the first line's columns are stepped: turning all by a third of a cycle gives the
+   * others, exactly on a balanced voltage and well enough to iterate with on any other.
+   */
+  DeviceSlope slope(OrdersInPlay orders) {
+    int size = length(orders);
+    DeviceSlope slope = new DeviceSlope(size);
+    double[] before = new double[size];
+    double[] after = new double[size];
+    double step = SLOPE_STEP * nominalV();
+    solver.solve(emf, seriesOhm, seriesHenry, drawn);
+    copyDrawn(orders, before, 0);
+    for (int k = 0; k < orders.count(); k++) {
+      for (int part = 0; part < 2; part++) {
+        double[] stepped = part == 0 ? emf.re[0] : emf.im[0];
+        int h = orders.at(k);
+        stepped[h] += step;
+        try {
+          solver.solve(emf, seriesOhm, seriesHenry, drawn);
+        } finally {
+          stepped[h] -= step;
+        }
+        copyDrawn(orders, after, 0);
+        for (int row = 0; row < size; row++) {
+          slope.set(row, 2 * k + part, (after[row] - before[row]) / step);
+        }
+      }
+    }
+    for (int port = 1; port < from.length; port++) {
+      turn(slope, orders, port);
+    }
+    return slope;
+  }
+
+  /** Columns of a port from those of the port before: delayed by a third of a cycle. */
+  private void turn(DeviceSlope slope, OrdersInPlay orders, int port) {
+    int perPort = 2 * orders.count();
+    for (int row = 0; row < orders.count(); row++) {
+      for (int column = 0; column < orders.count(); column++) {
+        double out = -orders.at(row) * THIRD;
+        double in = -orders.at(column) * THIRD;
+        for (int line = 0; line < from.length; line++) {
+          int fromRow = Math.floorMod(line - 1, from.length) * perPort + 2 * row;
+          int fromColumn = (port - 1) * perPort + 2 * column;
+          turnBlock(
+              slope, fromRow, fromColumn, line * perPort + 2 * row, port * perPort + 2 * column, out, in);
+        }
+      }
+    }
+  }
+
+  /** A two-by-two block B becomes T(out)·B·T(-in), T turning a phasor. */
+  private static void turnBlock(
+      DeviceSlope s, int fromRow, int fromColumn, int row, int column, double out, double in) {
+    double a = s.get(fromRow, fromColumn);
+    double b = s.get(fromRow, fromColumn + 1);
+    double c = s.get(fromRow + 1, fromColumn);
+    double d = s.get(fromRow + 1, fromColumn + 1);
+    double co = Math.cos(out);
+    double so = Math.sin(out);
+    double ci = Math.cos(in);
+    double si = Math.sin(in);
+    double topRe = co * a - so * c;
+    double topIm = co * b - so * d;
+    double lowRe = so * a + co * c;
+    double lowIm = so * b + co * d;
+    s.set(row, column, topRe * ci - topIm * si);
+    s.set(row, column + 1, topRe * si + topIm * ci);
+    s.set(row + 1, column, lowRe * ci - lowIm * si);
+    s.set(row + 1, column + 1, lowRe * si + lowIm * ci);
   }
 }

@@ -84,6 +84,11 @@ final class Settling {
         && worstMove <= CoupledSolver.VOLTAGE_TOLERANCE;
   }
 
+  /** The largest change of a load's current, on its rms. */
+  double change() {
+    return worstChange;
+  }
+
   /** How far the way to the tolerance is gone, on a logarithmic scale, 0 to 1. */
   double share() {
     double whole = Math.log(firstChange / CoupledSolver.LOAD_TOLERANCE);
