@@ -110,6 +110,32 @@ final class ActiveFilter {
   }
 
   /**
+   * What the filter answers to a small change, in its place of {@code into}: taken off there.
+   *
+   * @param response the change of the currents
+   * @param y the change of the whole state
+   */
+  void subtractAnswer(OrdersInPlay orders, OrderSolution[] response, double[] y, double[] into) {
+    int perLine = 2 * orders.count();
+    double[] answer = new double[into.length];
+    for (int line = 0; line < lines.length; line++) {
+      for (int k = 0; k < orders.count(); k++) {
+        int at = offset + line * perLine + 2 * k;
+        int h = orders.at(k);
+        boolean taken = h > 1 && h <= HIGHEST_ORDER;
+        answer[at] = taken ? part * (response[h].currentRe(lines[line]) + y[at]) : 0;
+        answer[at + 1] = taken ? part * (response[h].currentIm(lines[line]) + y[at + 1]) : 0;
+      }
+    }
+    if (neutral < 0) {
+      removeZeroSequence(answer, perLine);
+    }
+    for (int k = offset; k < offset + lines.length * perLine; k++) {
+      into[k] -= answer[k];
+    }
+  }
+
+  /**
    * Feeds the order at this position of the state into the panel, and takes it from the neutral.
    */
   void feed(Excitation excitation, OrdersInPlay orders, int position, double[] x) {

@@ -44,9 +44,9 @@ final class CoupledSolver {
   /** Kirchhoff's laws and the balance of power hold at least this well, relative. */
   static final double CHECK_TOLERANCE = 1e-8;
 
-  private static final int MOST_PASSES = 300;
-  private static final int DEPTH = 40;
-  private static final int MOST_STUMBLES = 8;
+  private static final int MOST_PASSES = 60;
+  private static final int PLAIN_PASSES = 2;
+  private static final int SHORTEST_STEP = 10;
 
   private final NetworkPlan plan;
   private final TreeNetwork network;

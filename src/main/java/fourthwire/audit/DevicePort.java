@@ -223,7 +223,13 @@ final class DevicePort {
           int fromRow = Math.floorMod(line - 1, from.length) * perPort + 2 * row;
           int fromColumn = (port - 1) * perPort + 2 * column;
           turnBlock(
-              slope, fromRow, fromColumn, line * perPort + 2 * row, port * perPort + 2 * column, out, in);
+              slope,
+              fromRow,
+              fromColumn,
+              line * perPort + 2 * row,
+              port * perPort + 2 * column,
+              out,
+              in);
         }
       }
     }

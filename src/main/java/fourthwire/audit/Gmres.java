@@ -5,9 +5,9 @@ import java.util.List;
 import java.util.function.BiConsumer;
 
 /**
- * Solves A·x = b where only A·x can be formed, by minimal residuals over a Krylov space: Y. Saad and
- * M. H. Schultz, "GMRES", SIAM J. Sci. Stat. Comput. 7 (1986), with modified Gram-Schmidt and Givens
- * rotations, not restarted.
+ * Solves A·x = b where only A·x can be formed, by minimal residuals over a Krylov space: Y. Saad
+ * and M. H. Schultz, "GMRES", SIAM J. Sci. Stat. Comput. 7 (1986), with modified Gram-Schmidt and
+ * Givens rotations, not restarted.
  */
 final class Gmres {
   private final BiConsumer<double[], double[]> operator;

@@ -91,7 +91,9 @@ final class NewtonStep {
     factors[h].solve(excitation, responses[h]);
   }
 
-  /** The change of the electromotive force before a load: of its voltage, and over its series R-L. */
+  /**
+   * The change of the electromotive force before a load: of its voltage, and over its series R-L.
+   */
   private double[] emf(DevicePort load, double[] y) {
     double[] emf = new double[load.length(orders)];
     int at = 0;
