@@ -91,7 +91,9 @@ class AuditApi {
   @Operation(summary = "List a site's audits, newest first")
   @ApiResponse(responseCode = "200", description = "All its audits")
   List<State> list(@PathVariable long site) {
-    sites.find(site).orElseThrow(() -> MissingException.site(site));
+    if (sites.find(site).isEmpty()) {
+      throw MissingException.site(site);
+    }
     return audits.ofSite(site).stream().map(AuditApi::state).toList();
   }
 

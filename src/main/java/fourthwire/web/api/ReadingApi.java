@@ -127,6 +127,8 @@ class ReadingApi {
   }
 
   private void existing(long site) {
-    sites.find(site).orElseThrow(() -> MissingException.site(site));
+    if (sites.find(site).isEmpty()) {
+      throw MissingException.site(site);
+    }
   }
 }
