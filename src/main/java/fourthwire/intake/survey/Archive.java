@@ -4,6 +4,7 @@ import fourthwire.site.check.SurveyError;
 import java.io.ByteArrayOutputStream;
 import java.io.IOException;
 import java.io.InputStream;
+import java.nio.charset.StandardCharsets;
 import java.util.ArrayList;
 import java.util.Collections;
 import java.util.List;
@@ -46,7 +47,7 @@ final class Archive {
       }
       List<Entry> unpacked = new ArrayList<>();
       for (ZipArchiveEntry entry : entries) {
-        checkName(entry.getName());
+        checkName(rawName(entry));
         if (!entry.isDirectory()) {
           unpacked.add(new Entry(entry.getName(), content(zip, entry, guards)));
         }
@@ -76,6 +77,11 @@ final class Archive {
       throw damaged("the checksum of " + entry.getName() + " does not match");
     }
     return content.toByteArray();
+  }
+
+  /** The name as written: the library turns backslashes into slashes. */
+  private static String rawName(ZipArchiveEntry entry) {
+    return new String(entry.getRawName(), StandardCharsets.ISO_8859_1);
   }
 
   private static void checkName(String name) throws RefusedException {

@@ -4,6 +4,7 @@ import fourthwire.site.Panel;
 import fourthwire.site.Supply;
 import fourthwire.site.Transformer;
 import java.util.Collection;
+import java.util.HashMap;
 import java.util.HashSet;
 import java.util.LinkedHashMap;
 import java.util.Map;
@@ -27,6 +28,7 @@ final class NodeIndex {
   record Node(Kind kind, DraftRow<?> row) {}
 
   private final Map<String, Node> byName = new LinkedHashMap<>();
+  private final Map<String, String> missing = new HashMap<>();
   private final Set<String> doubtful = new HashSet<>();
   private final boolean namesHidden;
   private final Remarks remarks;
@@ -72,6 +74,16 @@ final class NodeIndex {
   /** Whether a name that is not found may have been lost with a row reported already. */
   boolean mayHide() {
     return namesHidden || !doubtful.isEmpty();
+  }
+
+  /** The cause of all errors that a node of this name is missing. */
+  String missing(String name) {
+    return missing.getOrDefault(name, "node " + name);
+  }
+
+  /** Has a missing node's errors counted under another cause. */
+  void missingBecause(String name, String cause) {
+    missing.put(name, cause);
   }
 
   Collection<String> names() {

@@ -16,7 +16,7 @@ record PanelReference(NodeIndex nodes, Remarks remarks) {
     if (node.isEmpty()) {
       List<String> panels = nodes.names().stream().filter(n -> nodes.panel(n).isPresent()).toList();
       remarks.error(
-          "node " + name,
+          nodes.missing(name),
           row,
           PANEL,
           "No panel is called \"%s\".".formatted(name) + Closest.hint(name, panels));

@@ -6,6 +6,8 @@ import java.util.Optional;
 
 /** Checks the cells that refer to circuits, or to any node, of the site. */
 final class References {
+  private static final String NO_CIRCUITS = "table circuits";
+
   private final SurveyDraft draft;
   private final NodeIndex nodes;
   private final CircuitIndex circuits;
@@ -36,13 +38,17 @@ final class References {
     if (found.size() > 1) {
       reportAmbiguous(row, "circuit", text, found);
     } else if (panel.isEmpty()) {
-      reportMissing(row, "circuit", text, "No circuit is called \"%s\".".formatted(text));
+      reportMissing(
+          "circuit " + text, row, "circuit", text, "No circuit is called \"%s\".".formatted(text));
     } else if (nodes.panel(panel).isEmpty() && !hasCircuitsOn(panel)) {
       new PanelReference(nodes, remarks).check(row, panel);
     } else {
       String id = panel + ":" + text;
       reportMissing(
-          row, "circuit", id, "Panel \"%s\" has no circuit \"%s\".".formatted(panel, text));
+          "circuit " + id,
+          row,
+          "circuit",
+          id, "Panel \"%s\" has no circuit \"%s\".".formatted(panel, text));
     }
     return Optional.empty();
   }
@@ -57,6 +63,7 @@ final class References {
       reportAmbiguous(row, column, text, found);
     } else if (found.isEmpty() && !nodes.mayHide()) {
       reportMissing(
+          text.contains(":") ? "circuit " + text : nodes.missing(text),
           row,
           column,
           text,
@@ -78,13 +85,16 @@ final class References {
             .formatted(text, circuits.candidates(found)));
   }
 
-  private void reportMissing(DraftRow<?> row, String column, String text, String message) {
+  private void reportMissing(
+      String cause, DraftRow<?> row, String column, String text, String message) {
     if (circuitsHidden || isOnLostPanel(text)) {
       return;
     }
-    boolean noTable = draft.circuits().state() == DraftTable.State.ABSENT;
+    boolean noTable =
+        draft.circuits().state() == DraftTable.State.ABSENT
+            && (cause.startsWith("circuit ") || remarks.has(NO_CIRCUITS));
     remarks.error(
-        noTable ? "table circuits" : "circuit " + text,
+        noTable ? NO_CIRCUITS : cause,
         row,
         column,
         noTable ? message + " There is no table of circuits." : message);

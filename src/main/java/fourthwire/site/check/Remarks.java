@@ -34,6 +34,11 @@ final class Remarks {
         .add(new Placed(row, row.error(column, message)));
   }
 
+  /** Whether an error of this cause was reported. */
+  boolean has(String cause) {
+    return byCause.containsKey(cause);
+  }
+
   void warning(DraftRow<?> row, String message) {
     warnings.add(row.place() + ": " + message);
   }

@@ -115,7 +115,7 @@ final class SupplyCheck {
     Optional<NodeIndex.Node> node = nodes.find(name);
     if (node.isEmpty() && !nodes.mayHide()) {
       remarks.error(
-          "node " + name,
+          nodes.missing(name),
           row,
           CONNECTS_AT,
           "No transformer or panel is called \"%s\".".formatted(name)
@@ -199,7 +199,7 @@ final class SupplyCheck {
     String name = row.content().supply();
     boolean supply = nodes.supply(name).isPresent();
     if (!supply && !nodes.mayHide()) {
-      remarks.error("node " + name, row, "supply", "No supply is called \"%s\".".formatted(name));
+      remarks.error(nodes.missing(name), row, "supply", "No supply is called \"%s\".".formatted(name));
     }
     return supply;
   }

@@ -55,7 +55,7 @@ final class TreeCheck {
     Optional<NodeIndex.Node> parent = nodes.find(fedFrom);
     if (parent.isEmpty()) {
       reportMissing(row, fedFrom);
-    } else if (isStandby(fedFrom)) {
+    } else if (isStandby(fedFrom) && hasNormal()) {
       remarks.error(
           row,
           FED_FROM,
@@ -74,6 +74,11 @@ final class TreeCheck {
         .isPresent();
   }
 
+  private boolean hasNormal() {
+    return draft.supplies().rows().stream()
+        .anyMatch(s -> s.sound("role") && s.content().roleOrDefault() == SupplyRole.NORMAL);
+  }
+
   private void reportMissing(DraftRow<?> row, String fedFrom) {
     if (nodes.mayHide()) {
       return;
@@ -86,8 +91,11 @@ final class TreeCheck {
             : noTransformers
                 ? "No supply or panel is called \"%s\", and there is no table of transformers."
                 : "No supply, transformer or panel is called \"%s\".";
+    if (noTransformers) {
+      nodes.missingBecause(fedFrom, "table transformers");
+    }
     remarks.error(
-        noTransformers ? "table transformers" : "node " + fedFrom,
+        nodes.missing(fedFrom),
         row,
         FED_FROM,
         why.formatted(fedFrom) + Closest.hint(fedFrom, nodes.names()));

@@ -146,6 +146,8 @@ final class WiringCheck {
     }
     if (conductors.contains(Conductor.N) && !parent.hasNeutral()) {
       withoutNeutral.add(new WithoutNeutral(row, parent, parentName));
+      // It may hang on the wrong node: the voltage it has is not taken from there.
+      return panelWiring(panel, conductors, Wiring.OPEN);
     }
     return panelWiring(panel, conductors, parent);
   }

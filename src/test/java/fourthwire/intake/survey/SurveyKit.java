@@ -3,6 +3,7 @@ package fourthwire.intake.survey;
 import java.io.ByteArrayOutputStream;
 import java.io.IOException;
 import java.io.UncheckedIOException;
+import java.math.BigDecimal;
 import java.nio.charset.StandardCharsets;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
@@ -10,6 +11,8 @@ import java.util.List;
 import java.util.Map;
 import java.util.zip.ZipEntry;
 import java.util.zip.ZipOutputStream;
+import org.dhatim.fastexcel.Workbook;
+import org.dhatim.fastexcel.Worksheet;
 
 /**
  * A small survey with rows in every table, as a tester writes it by hand, to be changed cell by
@@ -218,17 +221,29 @@ final class SurveyKit {
     return bytes.toByteArray();
   }
 
-  /** The same tables as a workbook, every cell a text. */
+  /** The same tables as a workbook: numbers as numbers, all else as text. */
   byte[] xlsx() {
-    return XlsxWriting.bytes(
-        tables.entrySet().stream().map(t -> table(t.getKey(), t.getValue())).toList());
+    ByteArrayOutputStream bytes = new ByteArrayOutputStream();
+    try (Workbook workbook = new Workbook(bytes, "test", null)) {
+      tables.forEach((name, rows) -> write(rows, workbook.newWorksheet(name)));
+    } catch (IOException e) {
+      throw new UncheckedIOException(e);
+    }
+    return bytes.toByteArray();
   }
 
-  private static SurveyTable table(String name, List<List<String>> rows) {
-    List<SurveyTable.Row> below = new ArrayList<>();
-    for (int r = 1; r < rows.size(); r++) {
-      below.add(new SurveyTable.Row(r + 1, rows.get(r)));
+  private static void write(List<List<String>> rows, Worksheet sheet) {
+    for (int r = 0; r < rows.size(); r++) {
+      for (int c = 0; c < rows.get(r).size(); c++) {
+        String text = rows.get(r).get(c);
+        if (text.startsWith("=")) {
+          sheet.formula(r, c, text.substring(1));
+        } else if (text.matches("-?\\d+(\\.\\d+)?")) {
+          sheet.value(r, c, new BigDecimal(text));
+        } else {
+          sheet.value(r, c, text);
+        }
+      }
     }
-    return new SurveyTable(name, rows.get(0), below, false);
   }
 }

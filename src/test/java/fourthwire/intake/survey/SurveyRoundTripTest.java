@@ -3,7 +3,10 @@ package fourthwire.intake.survey;
 import static org.assertj.core.api.Assertions.assertThat;
 
 import fourthwire.site.Survey;
+import java.util.stream.LongStream;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.MethodSource;
 
 /** What goes out comes in again, equal and byte for byte. */
 class SurveyRoundTripTest {
@@ -22,6 +25,34 @@ class SurveyRoundTripTest {
   @Test
   void exportImportExportIsByteIdentical() {
     assertRoundTrip(read(new SurveyKit().zip()));
+  }
+
+  @ParameterizedTest(name = "seed {0}")
+  @MethodSource("seeds")
+  void randomSurveysComeBackEqualAndByteForByte(long seed) {
+    SurveyImport.Outcome outcome = SurveyImport.read(SurveyGenerator.tables(seed));
+    assertThat(outcome).isInstanceOf(SurveyImport.Read.class);
+    assertRoundTrip(((SurveyImport.Read) outcome).survey());
+  }
+
+  static LongStream seeds() {
+    return LongStream.rangeClosed(1, 100);
+  }
+
+  @Test
+  void theSameWorkbookIsWrittenAtAnyTime() throws InterruptedException {
+    Survey survey = read(new SurveyKit().zip());
+    byte[] first = SurveyExport.xlsx(survey);
+    // A zip's own time stamps count in steps of two seconds.
+    Thread.sleep(2100);
+    assertThat(SurveyExport.xlsx(survey)).isEqualTo(first);
+  }
+
+  @Test
+  void theCodecKeepsASurvey() {
+    Survey survey = read(new SurveyKit().zip());
+    ZipSurveyCodec codec = new ZipSurveyCodec();
+    assertThat(codec.decode(codec.encode(survey))).isEqualTo(survey);
   }
 
   static void assertRoundTrip(Survey survey) {
