@@ -48,7 +48,8 @@ final class References {
           "circuit " + id,
           row,
           "circuit",
-          id, "Panel \"%s\" has no circuit \"%s\".".formatted(panel, text));
+          id,
+          "Panel \"%s\" has no circuit \"%s\".".formatted(panel, text));
     }
     return Optional.empty();
   }

@@ -199,7 +199,8 @@ final class SupplyCheck {
     String name = row.content().supply();
     boolean supply = nodes.supply(name).isPresent();
     if (!supply && !nodes.mayHide()) {
-      remarks.error(nodes.missing(name), row, "supply", "No supply is called \"%s\".".formatted(name));
+      remarks.error(
+          nodes.missing(name), row, "supply", "No supply is called \"%s\".".formatted(name));
     }
     return supply;
   }

@@ -12,9 +12,9 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 
 /**
- * One thing at a time is damaged in a good survey: exactly one error comes back, at the right table,
- * row and column, with the value as it was written. Source of what is an error: the public contract,
- * section 2.
+ * One thing at a time is damaged in a good survey: exactly one error comes back, at the right
+ * table, row and column, with the value as it was written. Source of what is an error: the public
+ * contract, section 2.
  */
 class BrokenSurveyTest {
   /** A damage and the one error it must give; the message must hold the last text. */
@@ -34,12 +34,7 @@ class BrokenSurveyTest {
   }
 
   private static Case of(
-      String table,
-      int row,
-      String column,
-      String value,
-      String says,
-      Consumer<SurveyKit> damage) {
+      String table, int row, String column, String value, String says, Consumer<SurveyKit> damage) {
     return new Case(damage, new SurveyError(table, row, column, value, says));
   }
 
@@ -180,47 +175,118 @@ class BrokenSurveyTest {
         of("site", 9, "key", "name", "row 2", k -> k.append("site", "name,Other house")),
         of("site", 1, "value", "", "missing", k -> k.removeColumn("site", "value")),
         of("supplies", 0, "role", "", "exactly one", k -> k.set("supplies", 2, "role", "standby")),
-        of("supplies", 0, "", "", "no rows", k -> k.removeRow("supplies", 3).removeRow("supplies", 2)),
-        of("supplies", 4, "role", "normal", "Exactly one",
+        of(
+            "supplies",
+            0,
+            "",
+            "",
+            "no rows",
+            k -> k.removeRow("supplies", 3).removeRow("supplies", 2)),
+        of(
+            "supplies",
+            4,
+            "role",
+            "normal",
+            "Exactly one",
             k -> k.append("supplies", "GRID-2,11000,100,,normal,three-phase-3-wire,,,")),
-        of("supplies", 2, "generator_kva", "500", "not both",
-            k -> k.set("supplies", 2, "generator_kva", "500")
-                .set("supplies", 2, "subtransient_reactance_percent", "12")),
-        of("panels", 2, "system", "three-phase-4-wire", "no neutral upstream",
+        of(
+            "supplies",
+            2,
+            "generator_kva",
+            "500",
+            "not both",
+            k ->
+                k.set("supplies", 2, "generator_kva", "500")
+                    .set("supplies", 2, "subtransient_reactance_percent", "12")),
+        of(
+            "panels",
+            2,
+            "system",
+            "three-phase-4-wire",
+            "no neutral upstream",
             k -> k.set("panels", 2, "fed_from", "GRID")),
         of("panels", 1, "fed_from", "", "missing", k -> k.removeColumn("panels", "fed_from")),
         of("circuits", 1, "lines", "", "missing", k -> k.rename("circuits", "lines", "line")),
         of("loads", 1, "load", "", "missing", k -> k.removeColumn("loads", "load")),
-        of("spectra", 1, "percent", "percent", "twice", k -> k.rename("spectra", "degrees", "percent")),
+        of(
+            "spectra",
+            1,
+            "percent",
+            "percent",
+            "twice",
+            k -> k.rename("spectra", "degrees", "percent")),
         of("schedules", 1, "h23", "", "missing", k -> k.removeColumn("schedules", "h23")),
         of("circuits", 2, "panel", "LP-1", "circuits row 3", k -> k.removeRow("panels", 3)),
         of("spectra", 2, "order", "3", "no order 1", k -> k.removeRow("spectra", 2)),
         of("schedules", 2, "days", "weekday", "sunday", k -> k.removeRow("schedules", 4)),
         of("circuits", 2, "", "extra", "more cells", k -> k.rows("circuits").get(1).add("extra")),
-        of("transformers", 2, "rated_kva", "", "impedance_percent",
+        of(
+            "transformers",
+            2,
+            "rated_kva",
+            "",
+            "impedance_percent",
             k -> k.rows("transformers").set(1, List.of("T1", "GRID"))),
-        of("loads", 2, "preset", "no such thing", "preset",
+        of(
+            "loads",
+            2,
+            "preset",
+            "no such thing",
+            "preset",
             k -> k.set("loads", 2, "kind", "").set("loads", 2, "preset", "no such thing")),
-        of("loads", 4, "spectrum", "", "needs the name",
+        of(
+            "loads",
+            4,
+            "spectrum",
+            "",
+            "needs the name",
             k -> k.set("loads", 4, "kind", "measured").set("loads", 4, "spectrum", "")),
-        of("loads", 8, "spectrum", "led", "order 3",
+        of(
+            "loads",
+            8,
+            "spectrum",
+            "led",
+            "order 3",
             k -> k.set("loads", 8, "kind", "").set("loads", 8, "spectrum", "led")),
-        of("panels", 3, "length_m", "", "resistance_ohm_per_km",
-            k -> k.set("panels", 2, "resistance_ohm_per_km", "")
-                .set("panels", 3, "resistance_ohm_per_km", "0.5")
-                .set("panels", 3, "conductor_size", "")
-                .set("panels", 3, "neutral_size", "")
-                .set("panels", 3, "length_m", "")),
-        of("panels", 3, "panel", "LP\t1", "Control",
-            k -> k.set("panels", 3, "panel", "LP\t1")),
-        of("panels", 3, "", "", "UTF-8", k -> k.file("panels.csv",
-            "panel,fed_from\nMSB,T1\nK\u00fcche,MSB\n".getBytes(StandardCharsets.ISO_8859_1))),
-        of("panels", 3, "", "", "not closed",
+        of(
+            "panels",
+            3,
+            "length_m",
+            "",
+            "resistance_ohm_per_km",
+            k ->
+                k.set("panels", 2, "resistance_ohm_per_km", "")
+                    .set("panels", 3, "resistance_ohm_per_km", "0.5")
+                    .set("panels", 3, "conductor_size", "")
+                    .set("panels", 3, "neutral_size", "")
+                    .set("panels", 3, "length_m", "")),
+        of("panels", 3, "panel", "LP\t1", "Control", k -> k.set("panels", 3, "panel", "LP\t1")),
+        of(
+            "panels",
+            3,
+            "",
+            "",
+            "UTF-8",
+            k ->
+                k.file(
+                    "panels.csv",
+                    "panel,fed_from\nMSB,T1\nK\u00fcche,MSB\n"
+                        .getBytes(StandardCharsets.ISO_8859_1))),
+        of(
+            "panels",
+            3,
+            "",
+            "",
+            "not closed",
             k -> k.file("panels.csv", "panel,fed_from\nMSB,T1\n\"LP-1,MSB\nLP-2,MSB\n")),
-        of("panels", 1, "", "", "Row 1 is empty",
+        of(
+            "panels",
+            1,
+            "",
+            "",
+            "Row 1 is empty",
             k -> k.file("panels.csv", "\npanel,fed_from\nMSB,T1\n")),
-        of("panels", 0, "", "", "twice",
-            k -> k.file("PANELS.csv", "panel,fed_from\nMSB,T1\n")));
+        of("panels", 0, "", "", "twice", k -> k.file("PANELS.csv", "panel,fed_from\nMSB,T1\n")));
   }
 
   @ParameterizedTest
@@ -272,8 +338,7 @@ class BrokenSurveyTest {
     SurveyError error = errors.get(0);
     assertThat(List.of(error.table(), error.row(), error.column(), error.value()))
         .as(error.message())
-        .isEqualTo(
-            List.of(expected.table(), expected.row(), expected.column(), expected.value()));
+        .isEqualTo(List.of(expected.table(), expected.row(), expected.column(), expected.value()));
     assertThat(error.message()).containsIgnoringCase(expected.message());
   }
 }

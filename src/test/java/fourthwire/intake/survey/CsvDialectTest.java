@@ -89,8 +89,7 @@ class CsvDialectTest {
   @Test
   void blankLinesCountAndQuotedLinesAreOneRow() {
     SurveyKit kit = new SurveyKit();
-    String text =
-        "meter,at,note\n\nmain,MSB,\"two\nlines\"\n\nsecond,NOWHERE,x\n";
+    String text = "meter,at,note\n\nmain,MSB,\"two\nlines\"\n\nsecond,NOWHERE,x\n";
     SurveyImport.Outcome outcome = SurveyImport.read(kit.file("meters.csv", text).zip());
     assertThat(((SurveyImport.Refused) outcome).errors())
         .extracting(e -> e.table() + " " + e.row() + " " + e.column() + " " + e.value())

@@ -18,7 +18,13 @@ class SurveyFileGuardsTest {
 
   @ParameterizedTest
   @ValueSource(
-      strings = {"/etc/panels.csv", "../panels.csv", "a/../../panels.csv", "a\\panels.csv", "C:panels.csv"})
+      strings = {
+        "/etc/panels.csv",
+        "../panels.csv",
+        "a/../../panels.csv",
+        "a\\panels.csv",
+        "C:panels.csv"
+      })
   void pathsThatLeadElsewhereAreRefused(String path) {
     assertRefused(new SurveyKit().file(path, "panel,fed_from\n").zip(), "path");
   }

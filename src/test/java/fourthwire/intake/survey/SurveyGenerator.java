@@ -8,8 +8,8 @@ import java.util.stream.IntStream;
 
 /**
  * Makes good surveys of invented sites from a seed, as tables of text: a supply, a transformer, a
- * main board, panels of every system in chains, circuits on the lines each panel has, loads of every
- * kind that fits, and rows in the other tables. The same seed gives the same survey.
+ * main board, panels of every system in chains, circuits on the lines each panel has, loads of
+ * every kind that fits, and rows in the other tables. The same seed gives the same survey.
  */
 final class SurveyGenerator {
   private static final List<String> SINGLE_PHASE =
@@ -24,7 +24,8 @@ final class SurveyGenerator {
           "phase-dimmer");
   private static final List<String> THREE_PHASE =
       List.of("motor", "six-pulse", "twelve-pulse", "active-front-end", "resistive", "linear");
-  private static final List<String> NAMES = List.of("Küche", "A \"quoted\" one", "x, y; z", "007", "1e3");
+  private static final List<String> NAMES =
+      List.of("Küche", "A \"quoted\" one", "x, y; z", "007", "1e3");
 
   private final Random random;
   private final List<SurveyTable> tables = new ArrayList<>();
@@ -71,7 +72,10 @@ final class SurveyGenerator {
                 number(4, 8),
                 number(100, 3000))));
     makePanels();
-    add("panels", "panel,fed_from,system,parent_lines,bus_rating_a,length_m,conductor_size", panels);
+    add(
+        "panels",
+        "panel,fed_from,system,parent_lines,bus_rating_a,length_m,conductor_size",
+        panels);
     add("circuits", "circuit,panel,lines,breaker_a,shared_neutral", circuits);
     add(
         "loads",
@@ -94,7 +98,8 @@ final class SurveyGenerator {
       String name = "LP-" + i + (i == 1 ? " " + pick(NAMES) : "");
       String system =
           pick(
-              List.of("three-phase-4-wire", "three-phase-3-wire", "single-phase", "split-phase", ""));
+              List.of(
+                  "three-phase-4-wire", "three-phase-3-wire", "single-phase", "split-phase", ""));
       String parentLines =
           switch (system) {
             case "single-phase" -> pick(List.of("L1", "L2", "L3"));
