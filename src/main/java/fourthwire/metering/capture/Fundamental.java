@@ -11,8 +11,13 @@ import java.util.List;
  * the whole record. A record of less than two cycles can't settle it: nominal is taken.
  */
 final class Fundamental {
-  private static final int ORDERS = 9;
+  /** Orders fitted beside the frequency: those left out bias a short record. */
+  private static final int ORDERS_SHORT = 50;
+
+  private static final int ORDERS_LONG = 15;
+  private static final int SHORT_SAMPLES = 100_000;
   private static final int MOST_STEPS = 40;
+  private static final int COARSE = 40;
   private static final double FIRST_STRETCH_S = 1;
 
   private final double[] timesS;
@@ -60,13 +65,19 @@ final class Fundamental {
     return count;
   }
 
+  /** Means of neighbouring samples, some {@value #COARSE} to a cycle, are enough for the search. */
   private double coarse(int count) {
     double span = spanS(count);
-    double step = Math.min(0.1 / span, 0.5);
+    int block = (int) Math.max(1, count / (span * nominalHz * COARSE));
+    double[] t = means(timesS, count, block);
+    List<double[]> x = channels.stream().map(c -> means(c, count, block)).toList();
     double best = nominalHz;
     double largest = -1;
-    for (double f = 0.8 * nominalHz; f <= 1.2 * nominalHz; f += step) {
-      double energy = windowedEnergy(f, count, span);
+    for (double f = 0.8 * nominalHz; f <= 1.2 * nominalHz; f += Math.min(0.1 / span, 0.5)) {
+      double energy = 0;
+      for (double[] channel : x) {
+        energy += windowedEnergy(t, channel, f, span);
+      }
       if (energy > largest) {
         largest = energy;
         best = f;
@@ -75,22 +86,28 @@ final class Fundamental {
     return best;
   }
 
-  private double windowedEnergy(double f, int count, double span) {
-    double energy = 0;
-    for (double[] x : channels) {
-      double mean = mean(x, count);
-      double re = 0;
-      double im = 0;
-      for (int k = 0; k < count; k++) {
-        if (!Double.isNaN(x[k])) {
-          double w = (x[k] - mean) * (1 - Math.cos(2 * Math.PI * timesS[k] / span));
-          re += w * Math.cos(2 * Math.PI * f * timesS[k]);
-          im += w * Math.sin(2 * Math.PI * f * timesS[k]);
-        }
+  private static double[] means(double[] x, int count, int block) {
+    double[] means = new double[count / block];
+    for (int k = 0; k < means.length; k++) {
+      for (int j = 0; j < block; j++) {
+        means[k] += x[k * block + j] / block;
       }
-      energy += re * re + im * im;
     }
-    return energy;
+    return means;
+  }
+
+  private static double windowedEnergy(double[] t, double[] x, double f, double span) {
+    double mean = mean(x, x.length);
+    double re = 0;
+    double im = 0;
+    for (int k = 0; k < x.length; k++) {
+      if (!Double.isNaN(x[k])) {
+        double w = (x[k] - mean) * (1 - Math.cos(2 * Math.PI * t[k] / span));
+        re += w * Math.cos(2 * Math.PI * f * t[k]);
+        im += w * Math.sin(2 * Math.PI * f * t[k]);
+      }
+    }
+    return re * re + im * im;
   }
 
   private static double mean(double[] x, int count) {
@@ -124,8 +141,9 @@ final class Fundamental {
   }
 
   private int ordersFor(double f, int count) {
+    int most = count <= SHORT_SAMPLES ? ORDERS_SHORT : ORDERS_LONG;
     double nyquist = 0.5 / (spanS(count) / count);
-    return Math.max(1, Math.min(ORDERS, (int) Math.ceil(nyquist / f - 0.5) - 1));
+    return Math.max(1, Math.min(most, (int) Math.ceil(nyquist / f - 0.5) - 1));
   }
 
   /**
