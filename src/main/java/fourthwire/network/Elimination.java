@@ -1,6 +1,8 @@
 package fourthwire.network;
 
+import fourthwire.network.element.OrderLaw;
 import fourthwire.network.element.Shunt;
+import java.util.function.Function;
 
 /**
  * Block elimination of one order, leaves first. A node's subtree, seen from what feeds it, is a
@@ -22,8 +24,8 @@ final class Elimination {
   private final double[] siemens = new double[6];
   private final double[] left;
 
-  /** Impedances of feeder conductors, by conductor. */
-  final double[] series;
+  /** Resistance and reactance of every feeder's conductors, side by side. */
+  private final double[] series;
 
   /** Impedance matrices of transformers, by transformer. */
   final double[][] transformers;
@@ -60,20 +62,37 @@ final class Elimination {
   }
 
   private double[] seriesImpedances() {
+    double[] resistanceFactors = factorsOf(NetworkBuilder.Laws::resistance);
+    double[] reactanceFactors = factorsOf(NetworkBuilder.Laws::reactance);
+    double[] z = new double[2 * layout.conductors()];
+    for (int k = 0; k < layout.conductors() && resistanceFactors.length > 0; k++) {
+      int law = layout.law[k];
+      z[2 * k] = layout.resistance[k] * resistanceFactors[law];
+      z[2 * k + 1] = layout.reactance[k] * reactanceFactors[law];
+    }
+    return z;
+  }
+
+  private double[] factorsOf(Function<NetworkBuilder.Laws, OrderLaw> which) {
     double[] factors = new double[layout.laws.length];
     for (int k = 0; k < factors.length; k++) {
-      factors[k] = layout.laws[k].factor(order);
+      factors[k] = which.apply(layout.laws[k]).factor(order);
       if (!Double.isFinite(factors[k])) {
         throw new ArithmeticException(
             "an impedance's law gives the factor " + factors[k] + " at order " + order);
       }
     }
-    double[] z = new double[2 * layout.conductors()];
-    for (int k = 0; k < layout.conductors() && factors.length > 0; k++) {
-      z[2 * k] = layout.resistance[k] * factors[layout.resistanceLaw[k]];
-      z[2 * k + 1] = layout.reactance[k] * factors[layout.reactanceLaw[k]];
-    }
-    return z;
+    return factors;
+  }
+
+  /** Resistance of a feeder's conductor at this order, ohms. */
+  double resistance(int conductor) {
+    return series[2 * conductor];
+  }
+
+  /** Reactance of a feeder's conductor at this order, ohms. */
+  double reactance(int conductor) {
+    return series[2 * conductor + 1];
   }
 
   private void eliminatePair(int n) {
@@ -84,10 +103,10 @@ final class Elimination {
       re += siemens[0];
       im += siemens[1];
     }
-    int from = 2 * plan.pairFrom[n];
-    int to = 2 * plan.pairTo[n];
-    double zRe = series[from] + series[to];
-    double zIm = series[from + 1] + series[to + 1];
+    int from = plan.pairFrom[n];
+    int to = plan.pairTo[n];
+    double zRe = resistance(from) + resistance(to);
+    double zIm = reactance(from) + reactance(to);
     double dRe = 1 + re * zRe - im * zIm;
     double dIm = re * zIm + im * zRe;
     double square = dRe * dRe + dIm * dIm;
@@ -99,8 +118,8 @@ final class Elimination {
     blocks[plan.block[n]] = qRe;
     blocks[plan.block[n] + 1] = qIm;
     int p = layout.parent[n];
-    int a = layout.joinedTo[plan.pairFrom[n]] - layout.first[p];
-    int b = layout.joinedTo[plan.pairTo[n]] - layout.first[p];
+    int a = layout.joinedTo[from] - layout.first[p];
+    int b = layout.joinedTo[to] - layout.first[p];
     stamp.on(blocks, plan.block[p], layout.size(p));
     stamp.addPair(a, b, qRe, qIm);
   }
@@ -132,25 +151,19 @@ final class Elimination {
   /** 1 + Y·Z with diagonal Z; false if Z is zero, so that Q = Y. */
   private boolean writeFeederLeft(int n) {
     int size = layout.size(n);
-    int z = 2 * layout.first[n];
-    boolean any = false;
-    for (int k = z; k < z + 2 * size; k++) {
-      any |= series[k] != 0;
-    }
-    if (!any) {
-      return false;
-    }
     int y = plan.block[n];
-    int at = 0;
-    for (int row = 0; row < size; row++) {
-      for (int k = z; k < z + 2 * size; k += 2) {
-        left[at] = blocks[y + at] * series[k] - blocks[y + at + 1] * series[k + 1];
-        left[at + 1] = blocks[y + at] * series[k + 1] + blocks[y + at + 1] * series[k];
-        at += 2;
+    boolean any = false;
+    for (int column = 0; column < size; column++) {
+      double zRe = resistance(layout.first[n] + column);
+      double zIm = reactance(layout.first[n] + column);
+      any |= zRe != 0 || zIm != 0;
+      for (int row = 0; row < size; row++) {
+        int at = 2 * (row * size + column);
+        left[at] = blocks[y + at] * zRe - blocks[y + at + 1] * zIm + (row == column ? 1 : 0);
+        left[at + 1] = blocks[y + at] * zIm + blocks[y + at + 1] * zRe;
       }
-      left[2 * row * (size + 1)] += 1;
     }
-    return true;
+    return any;
   }
 
   private boolean writeDenseLeft(int n) {

@@ -101,8 +101,8 @@ final class ImpedanceWalk {
     int size = layout.size(n);
     double[] z = new double[2 * size * size];
     for (int k = 0; k < size; k++) {
-      z[2 * k * (size + 1)] = factors.series[2 * (layout.first[n] + k)];
-      z[2 * k * (size + 1) + 1] = factors.series[2 * (layout.first[n] + k) + 1];
+      z[2 * k * (size + 1)] = factors.resistance(layout.first[n] + k);
+      z[2 * k * (size + 1) + 1] = factors.reactance(layout.first[n] + k);
     }
     return z;
   }

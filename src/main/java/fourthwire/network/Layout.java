@@ -1,7 +1,6 @@
 package fourthwire.network;
 
 import fourthwire.network.element.FeederConductor;
-import fourthwire.network.element.OrderLaw;
 import fourthwire.network.element.SeriesImpedance;
 import fourthwire.network.element.Shunt;
 import fourthwire.network.element.SourceImpedance;
@@ -24,9 +23,11 @@ final class Layout {
 
   final double[] resistance;
   final double[] reactance;
-  final int[] resistanceLaw;
-  final int[] reactanceLaw;
-  final OrderLaw[] laws;
+
+  /** For a feeder's conductors: which of {@link #laws} their impedance follows. */
+  final int[] law;
+
+  final NetworkBuilder.Laws[] laws;
 
   /** Index into {@link #transformers}, or -1 for the root and for feeders. */
   final int[] transformerOf;
@@ -41,9 +42,12 @@ final class Layout {
 
   final Shunt[] shunts;
 
-  Layout(SourceImpedance source, List<NetworkBuilder.Draft> drafts, Collection<OrderLaw> laws) {
+  Layout(
+      SourceImpedance source,
+      List<NetworkBuilder.Draft> drafts,
+      Collection<NetworkBuilder.Laws> laws) {
     this.source = source;
-    this.laws = laws.toArray(OrderLaw[]::new);
+    this.laws = laws.toArray(NetworkBuilder.Laws[]::new);
     nodes = drafts.size();
     parent = drafts.stream().mapToInt(NetworkBuilder.Draft::parent).toArray();
     first = new int[nodes + 1];
@@ -59,8 +63,7 @@ final class Layout {
     joinedTo = new int[first[nodes]];
     resistance = new double[first[nodes]];
     reactance = new double[first[nodes]];
-    resistanceLaw = new int[first[nodes]];
-    reactanceLaw = new int[first[nodes]];
+    law = new int[first[nodes]];
     transformers = new Transformer[count];
     turns = new double[count][];
     shunts = new Shunt[firstShunt[nodes]];
@@ -77,8 +80,7 @@ final class Layout {
       SeriesImpedance impedance = conductor.impedance();
       resistance[at] = impedance.resistanceOhm();
       reactance[at] = impedance.reactanceOhm();
-      resistanceLaw[at] = draft.resistanceLaws()[k];
-      reactanceLaw[at] = draft.reactanceLaws()[k];
+      law[at] = draft.laws()[k];
     }
     draft
         .transformer()

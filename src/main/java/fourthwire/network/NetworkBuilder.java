@@ -2,11 +2,12 @@ package fourthwire.network;
 
 import fourthwire.network.element.FeederConductor;
 import fourthwire.network.element.OrderLaw;
+import fourthwire.network.element.SeriesImpedance;
 import fourthwire.network.element.Shunt;
 import fourthwire.network.element.SourceImpedance;
 import fourthwire.network.element.Transformer;
 import java.util.ArrayList;
-import java.util.IdentityHashMap;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -27,17 +28,18 @@ import java.util.Optional;
  */
 public final class NetworkBuilder {
   private final List<Draft> drafts = new ArrayList<>();
-  private final Map<OrderLaw, Integer> lawNumbers = new IdentityHashMap<>();
-  private final List<OrderLaw> laws = new ArrayList<>();
+  private final Map<Laws, Integer> laws = new LinkedHashMap<>();
   private Optional<SourceImpedance> source = Optional.empty();
+
+  /** The laws of one impedance over the order. */
+  record Laws(OrderLaw resistance, OrderLaw reactance) {}
 
   /** A node as it is noted down until the network is built. */
   record Draft(
       int parent,
       int conductors,
       List<FeederConductor> feeder,
-      int[] resistanceLaws,
-      int[] reactanceLaws,
+      int[] laws,
       Optional<Transformer> transformer,
       List<Shunt> shunts) {}
 
@@ -99,36 +101,20 @@ public final class NetworkBuilder {
         new Layout(
             source.orElseThrow(() -> new IllegalStateException("a network needs a source")),
             drafts,
-            laws));
+            laws.keySet()));
   }
 
   private int add(
       int parent, int conductors, List<FeederConductor> feeder, Optional<Transformer> transformer) {
-    int[] resistanceLaws = new int[feeder.size()];
-    int[] reactanceLaws = new int[feeder.size()];
-    for (int k = 0; k < feeder.size(); k++) {
-      resistanceLaws[k] = lawIndex(feeder.get(k).impedance().resistanceLaw());
-      reactanceLaws[k] = lawIndex(feeder.get(k).impedance().reactanceLaw());
-    }
-    drafts.add(
-        new Draft(
-            parent,
-            conductors,
-            feeder,
-            resistanceLaws,
-            reactanceLaws,
-            transformer,
-            new ArrayList<>(0)));
+    int[] lawNumbers = feeder.stream().mapToInt(c -> lawNumber(c.impedance())).toArray();
+    drafts.add(new Draft(parent, conductors, feeder, lawNumbers, transformer, new ArrayList<>(0)));
     return drafts.size() - 1;
   }
 
-  private int lawIndex(OrderLaw law) {
-    Integer known = lawNumbers.putIfAbsent(law, laws.size());
-    if (known == null) {
-      laws.add(law);
-      return laws.size() - 1;
-    }
-    return known;
+  private int lawNumber(SeriesImpedance impedance) {
+    Laws pair = new Laws(impedance.resistanceLaw(), impedance.reactanceLaw());
+    Integer known = laws.putIfAbsent(pair, laws.size());
+    return known == null ? laws.size() - 1 : known;
   }
 
   private void requireNode(int node) {

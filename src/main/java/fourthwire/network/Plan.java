@@ -31,7 +31,7 @@ final class Plan {
   final int[] pairTo;
 
   /**
-   * The nodes in spans: one node, or a run of consecutive feeders that need no matrix, which are
+   * The nodes in spans: one node, or a run of consecutive circuits that need no matrix, which are
    * swept conductor by conductor. Span s has the nodes from {@code span[s]} to {@code span[s + 1]}.
    */
   final int[] span;
@@ -47,12 +47,16 @@ final class Plan {
 
   private final Layout layout;
 
+  /** Which nodes feed others. */
+  private final boolean[] feeds;
+
   Plan(Layout layout) {
     this.layout = layout;
     int nodes = layout.nodes;
     role = new byte[nodes];
     pairFrom = new int[nodes];
     pairTo = new int[nodes];
+    feeds = new boolean[nodes];
     assignRoles();
     block = new int[nodes];
     blocksLength = assignBlocks();
@@ -65,13 +69,12 @@ final class Plan {
     largest = IntStream.range(0, nodes).map(layout::size).max().orElse(0);
   }
 
-  /** A feeder that needs no matrix. */
+  /** A leaf behind a feeder that needs no matrix. */
   boolean isSimple(int node) {
-    return role[node] != FULL && layout.isFeeder(node);
+    return role[node] != FULL && layout.isFeeder(node) && !feeds[node];
   }
 
   private void assignRoles() {
-    boolean[] feeds = new boolean[layout.nodes];
     for (int n = layout.nodes - 1; n >= 0; n--) {
       if (role[n] == PASSIVE && layout.firstShunt[n + 1] > layout.firstShunt[n]) {
         role[n] = layout.isFeeder(n) && !feeds[n] && isOnePair(n) ? PAIR : FULL;

@@ -114,8 +114,8 @@ public record SolutionCheck(double currentLaw, double voltageLaw, double power) 
         return drop;
       }
       for (int k = 0; k < size; k++) {
-        double re = factors.series[2 * (layout.first[n] + k)];
-        double im = factors.series[2 * (layout.first[n] + k) + 1];
+        double re = factors.resistance(layout.first[n] + k);
+        double im = factors.reactance(layout.first[n] + k);
         drop[2 * k] = re * current[2 * k] - im * current[2 * k + 1];
         drop[2 * k + 1] = re * current[2 * k + 1] + im * current[2 * k];
       }

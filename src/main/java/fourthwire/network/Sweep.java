@@ -7,26 +7,35 @@ import java.util.Arrays;
  * from the leaves to the source, S = J - Q·Z·J; potentials and currents follow from the source to
  * the leaves, U = A·V<sub>parent</sub>, I = Q·U - S, V = U - Z·I. All in the solution's own arrays:
  * the currents hold J, then S, then I; the potentials hold U, then V.
+ *
+ * <p>Circuits, the many leaves, are swept conductor by conductor. Their J is read where it was
+ * injected. A pair with the admittance q (see {@link Elimination}) sees the voltage w that would
+ * stand across it without its own current, and draws q·w.
  */
 final class Sweep {
   private final Layout layout;
   private final Plan plan;
   private final Elimination factors;
-  private final double[] series;
 
   Sweep(Layout layout, Plan plan, Elimination factors) {
     this.layout = layout;
     this.plan = plan;
     this.factors = factors;
-    series = factors.series;
   }
 
   void run(Excitation excitation, OrderSolution s) {
-    System.arraycopy(excitation.injected, 0, s.current, 0, s.current.length);
+    double[] injected = excitation.injected;
+    for (int k = 0; k < plan.span.length - 1; k++) {
+      int n = plan.span[k];
+      if (!plan.isSimple(n)) {
+        int at = 2 * layout.first[n];
+        System.arraycopy(injected, at, s.current, at, 2 * layout.size(n));
+      }
+    }
     for (int k = plan.span.length - 2; k >= 0; k--) {
       int n = plan.span[k];
       if (plan.isSimple(n)) {
-        gatherRun(k, s.current);
+        gatherCircuits(k, injected, s.current);
       } else {
         gather(n, s);
       }
@@ -36,7 +45,7 @@ final class Sweep {
     for (int k = 1; k < plan.span.length - 1; k++) {
       int n = plan.span[k];
       if (plan.isSimple(n)) {
-        descendRun(k, s);
+        descendCircuits(k, injected, s);
       } else {
         takeIdealPotential(n, s.potential);
         descend(n, s);
@@ -44,54 +53,65 @@ final class Sweep {
     }
   }
 
-  /** S of a run of simple feeders: J but for the pairs, which are leaves. */
-  private void gatherRun(int span, double[] current) {
+  private void gatherCircuits(int span, double[] injected, double[] current) {
+    int end = layout.first[plan.span[span + 1]];
+    passUp(layout.first[plan.span[span]], end, injected, current);
     for (int p = plan.firstPairOfSpan[span]; p < plan.firstPairOfSpan[span + 1]; p++) {
-      condensePair(plan.pairs[p], current);
+      gatherPair(plan.pairs[p], injected, current);
     }
-    passUp(layout.first[plan.span[span]], layout.first[plan.span[span + 1]], current);
   }
 
-  private void condensePair(int n, double[] j) {
-    int a = 2 * plan.pairFrom[n];
-    int b = 2 * plan.pairTo[n];
-    double[] z = series;
-    double re = z[a] * j[a] - z[a + 1] * j[a + 1] - z[b] * j[b] + z[b + 1] * j[b + 1];
-    double im = z[a] * j[a + 1] + z[a + 1] * j[a] - z[b] * j[b + 1] - z[b + 1] * j[b];
+  /** A pair takes q·(z_a·J_a - z_b·J_b) off what its circuit injects. */
+  private void gatherPair(int n, double[] injected, double[] current) {
+    int a = plan.pairFrom[n];
+    int b = plan.pairTo[n];
+    double re =
+        factors.resistance(a) * injected[2 * a]
+            - factors.reactance(a) * injected[2 * a + 1]
+            - factors.resistance(b) * injected[2 * b]
+            + factors.reactance(b) * injected[2 * b + 1];
+    double im =
+        factors.resistance(a) * injected[2 * a + 1]
+            + factors.reactance(a) * injected[2 * a]
+            - factors.resistance(b) * injected[2 * b + 1]
+            - factors.reactance(b) * injected[2 * b];
     double qRe = factors.blocks[plan.block[n]];
     double qIm = factors.blocks[plan.block[n] + 1];
-    double wRe = qRe * re - qIm * im;
-    double wIm = qRe * im + qIm * re;
-    j[a] -= wRe;
-    j[a + 1] -= wIm;
-    j[b] += wRe;
-    j[b + 1] += wIm;
+    double drawnRe = qRe * re - qIm * im;
+    double drawnIm = qRe * im + qIm * re;
+    int from = 2 * layout.joinedTo[a];
+    int to = 2 * layout.joinedTo[b];
+    current[from] -= drawnRe;
+    current[from + 1] -= drawnIm;
+    current[to] += drawnRe;
+    current[to + 1] += drawnIm;
   }
 
-  /** Adds feeder conductors' S to what they are joined to, the last conductor first. */
-  private void passUp(int firstConductor, int endConductor, double[] current) {
+  /** Adds feeder conductors' S to what they are joined to. */
+  private void passUp(int firstConductor, int endConductor, double[] from, double[] current) {
     int[] joinedTo = layout.joinedTo;
-    for (int k = endConductor - 1; k >= firstConductor; k--) {
+    for (int k = firstConductor; k < endConductor; k++) {
       int to = 2 * joinedTo[k];
-      current[to] += current[2 * k];
-      current[to + 1] += current[2 * k + 1];
+      current[to] += from[2 * k];
+      current[to + 1] += from[2 * k + 1];
     }
   }
 
-  /** V and I of a run: as if without admittance, then what each pair draws besides. */
-  private void descendRun(int span, OrderSolution s) {
-    int[] joinedTo = layout.joinedTo;
+  /** V and I of circuits: as if without admittance, then what each pair draws besides. */
+  private void descendCircuits(int span, double[] injected, OrderSolution s) {
     double[] v = s.potential;
     double[] i = s.current;
-    int end = 2 * layout.first[plan.span[span + 1]];
-    for (int k = 2 * layout.first[plan.span[span]]; k < end; k += 2) {
-      int from = 2 * joinedTo[k >> 1];
-      double re = i[k];
-      double im = i[k + 1];
-      v[k] = v[from] + series[k] * re - series[k + 1] * im;
-      v[k + 1] = v[from + 1] + series[k] * im + series[k + 1] * re;
-      i[k] = -re;
-      i[k + 1] = -im;
+    int end = layout.first[plan.span[span + 1]];
+    for (int k = layout.first[plan.span[span]]; k < end; k++) {
+      int from = 2 * layout.joinedTo[k];
+      double r = factors.resistance(k);
+      double x = factors.reactance(k);
+      double re = injected[2 * k];
+      double im = injected[2 * k + 1];
+      v[2 * k] = v[from] + r * re - x * im;
+      v[2 * k + 1] = v[from + 1] + r * im + x * re;
+      i[2 * k] = -re;
+      i[2 * k + 1] = -im;
     }
     for (int p = plan.firstPairOfSpan[span]; p < plan.firstPairOfSpan[span + 1]; p++) {
       descendPair(plan.pairs[p], v, i);
@@ -101,21 +121,24 @@ final class Sweep {
   private void descendPair(int n, double[] v, double[] i) {
     int a = plan.pairFrom[n];
     int b = plan.pairTo[n];
-    int from = 2 * layout.joinedTo[a];
-    int to = 2 * layout.joinedTo[b];
-    double uRe = v[from] - v[to];
-    double uIm = v[from + 1] - v[to + 1];
+    double re = v[2 * a] - v[2 * b];
+    double im = v[2 * a + 1] - v[2 * b + 1];
     double qRe = factors.blocks[plan.block[n]];
     double qIm = factors.blocks[plan.block[n] + 1];
-    addCurrent(2 * a, qRe * uRe - qIm * uIm, qRe * uIm + qIm * uRe, v, i);
-    addCurrent(2 * b, qIm * uIm - qRe * uRe, -qRe * uIm - qIm * uRe, v, i);
+    double drawnRe = qRe * re - qIm * im;
+    double drawnIm = qRe * im + qIm * re;
+    addCurrent(a, drawnRe, drawnIm, v, i);
+    addCurrent(b, -drawnRe, -drawnIm, v, i);
   }
 
-  private void addCurrent(int at, double re, double im, double[] v, double[] i) {
+  private void addCurrent(int conductor, double re, double im, double[] v, double[] i) {
+    double r = factors.resistance(conductor);
+    double x = factors.reactance(conductor);
+    int at = 2 * conductor;
     i[at] += re;
     i[at + 1] += im;
-    v[at] -= series[at] * re - series[at + 1] * im;
-    v[at + 1] -= series[at] * im + series[at + 1] * re;
+    v[at] -= r * re - x * im;
+    v[at + 1] -= r * im + x * re;
   }
 
   private void gather(int n, OrderSolution s) {
@@ -127,7 +150,7 @@ final class Sweep {
           -1, factors.blocks, plan.block[n], layout.size(n), s.work, 0, s.current, at);
     }
     if (layout.isFeeder(n)) {
-      passUp(layout.first[n], layout.first[n + 1], s.current);
+      passUp(layout.first[n], layout.first[n + 1], s.current, s.current);
     } else if (n > 0) {
       passUpTransformer(n, s.current);
     }
@@ -187,17 +210,20 @@ final class Sweep {
     addImpedanceTimes(-1, n, s.current, s.potential, from);
   }
 
-  /** y += sign·Z·x, x being a whole-network array, y from yAt. */
-  private void addImpedanceTimes(double sign, int n, double[] x, double[] y, int yAt) {
+  /** y += sign·Z·I with the node's currents; y from yAt. */
+  private void addImpedanceTimes(double sign, int n, double[] current, double[] y, int yAt) {
     int at = 2 * layout.first[n];
     if (!layout.isFeeder(n)) {
-      Blocks.addProduct(sign, factors.denseImpedance(n), 0, layout.size(n), x, at, y, yAt);
+      Blocks.addProduct(sign, factors.denseImpedance(n), 0, layout.size(n), current, at, y, yAt);
       return;
     }
-    int shift = yAt - at;
-    for (int k = at; k < 2 * layout.first[n + 1]; k += 2) {
-      y[k + shift] += sign * (series[k] * x[k] - series[k + 1] * x[k + 1]);
-      y[k + shift + 1] += sign * (series[k] * x[k + 1] + series[k + 1] * x[k]);
+    for (int k = 0; k < layout.size(n); k++) {
+      double r = sign * factors.resistance(layout.first[n] + k);
+      double x = sign * factors.reactance(layout.first[n] + k);
+      double re = current[at + 2 * k];
+      double im = current[at + 2 * k + 1];
+      y[yAt + 2 * k] += r * re - x * im;
+      y[yAt + 2 * k + 1] += r * im + x * re;
     }
   }
 }
