@@ -51,13 +51,24 @@ final class DenseSite {
   static DenseSite solve(Survey survey) {
     DenseSite site = new DenseSite(survey);
     site.number();
+    Map<String, Double> before = Map.of();
     for (int pass = 0; pass < 60; pass++) {
       Map<String, Double> angles = site.angles(pass);
+      if (stoodStill(before, angles)) {
+        break;
+      }
+      before = angles;
       for (int h = 1; h <= Spectrum.HIGHEST_ORDER; h++) {
         site.solveOrder(h, angles);
       }
     }
     return site;
+  }
+
+  private static boolean stoodStill(Map<String, Double> before, Map<String, Double> now) {
+    return !before.isEmpty()
+        && now.entrySet().stream()
+            .allMatch(e -> Math.abs(e.getValue() - before.get(e.getKey())) < 1e-7);
   }
 
   /** Current into a node's conductor, positive towards the load; of N positive from the load. */

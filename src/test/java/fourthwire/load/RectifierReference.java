@@ -13,14 +13,16 @@ import java.util.List;
 import java.util.Map;
 
 /** The circuit-simulator cases of the test resources, {@code load/rectifiers/README.md}. */
-record RectifierReference(NamedCsvRecord row) {
+public record RectifierReference(NamedCsvRecord row) {
   private static final String FOLDER = "/load/rectifiers/";
 
-  static List<RectifierReference> all() {
+  /** Every case. */
+  public static List<RectifierReference> all() {
     return rows("cases.csv").stream().map(RectifierReference::new).toList();
   }
 
-  boolean threePhase() {
+  /** Whether it is a bridge on three lines. */
+  public boolean threePhase() {
     return row.getField("kind").startsWith("3ph");
   }
 
@@ -75,7 +77,7 @@ record RectifierReference(NamedCsvRecord row) {
   }
 
   /** The simulated current of line a or b. */
-  Spectrum simulated(String line) {
+  public Spectrum simulated(String line) {
     Map<Integer, Phasor> byOrder = new HashMap<>();
     for (NamedCsvRecord r : rows("spectra.csv")) {
       if (r.getField("id").equals(row.getField("id")) && r.getField("line").equals(line)) {
@@ -89,7 +91,8 @@ record RectifierReference(NamedCsvRecord row) {
     return Spectrum.of(h -> byOrder.getOrDefault(h, Phasor.ZERO));
   }
 
-  double number(String column) {
+  /** A column of the case. */
+  public double number(String column) {
     return Double.parseDouble(row.getField(column));
   }
 
