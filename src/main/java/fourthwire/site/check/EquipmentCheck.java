@@ -70,6 +70,7 @@ final class EquipmentCheck {
     Wiring wiring = wirings.getOrDefault(panel, Wiring.OPEN);
     if (wiring.isKnown() && wiring.lines().size() < THREE_LINES) {
       remarks.error(
+          WiringCheck.linesCause(panel),
           row,
           "panel",
           "%s is three-phase; panel \"%s\" has only %s.".formatted(what, panel, wiring.words()));
@@ -126,6 +127,7 @@ final class EquipmentCheck {
     Wiring wiring = wirings.getOrDefault(row.content().panel(), Wiring.OPEN);
     if (wiring.isKnown() && !wiring.hasNeutral()) {
       remarks.error(
+          WiringCheck.neutralCause(wiring),
           row,
           "panel",
           "A zero-sequence filter needs a neutral; panel \"%s\" has only %s."

@@ -115,7 +115,7 @@ final class LoadCheck {
           PRESET,
           "No preset is called \"%s\".".formatted(preset)
               + (hint.isEmpty()
-                  ? " The presets are " + String.join("; ", presets.names()) + "."
+                  ? " Known are: " + String.join("; ", presets.names()) + "."
                   : hint));
     }
     return kind;

@@ -170,6 +170,7 @@ final class SupplyCheck {
       double nominal = taken.nominalV().getAsDouble();
       if (Math.abs(own.nominalV().getAsDouble() - nominal) > MOST_VOLTAGE_DIFFERENCE * nominal) {
         remarks.error(
+            WiringCheck.voltageCause(taken),
             row,
             "line_voltage_v",
             "The node \"%s\" that it takes over is at %.5g V; the supply must be within 5 %% of that."

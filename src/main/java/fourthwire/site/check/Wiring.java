@@ -14,16 +14,18 @@ import java.util.stream.Collectors;
  * @param nominalV nominal voltage of its section; empty where it is open
  * @param section how its lines stand to each other
  * @param origin the supply, transformer or panel that settled the conductors
+ * @param voltageOrigin the supply or transformer that settled the voltage
  */
 record Wiring(
     List<Conductor> conductors,
     List<Conductor> parentLines,
     OptionalDouble nominalV,
     Section section,
-    String origin) {
+    String origin,
+    String voltageOrigin) {
   /** Nothing is known. */
   static final Wiring OPEN =
-      new Wiring(List.of(), List.of(), OptionalDouble.empty(), Section.THREE_PHASE, "");
+      new Wiring(List.of(), List.of(), OptionalDouble.empty(), Section.THREE_PHASE, "", "");
 
   boolean isKnown() {
     return !conductors.isEmpty();

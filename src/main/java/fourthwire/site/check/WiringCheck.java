@@ -42,6 +42,7 @@ final class WiringCheck {
         List.of(),
         known(row, "line_voltage_v", supply.lineVoltageV()),
         Section.of(system),
+        supply.name(),
         supply.name());
   }
 
@@ -64,6 +65,7 @@ final class WiringCheck {
         List.of(),
         known(row, "secondary_v", t.secondaryV()),
         Section.of(system),
+        t.name(),
         t.name());
   }
 
@@ -121,6 +123,7 @@ final class WiringCheck {
     double fed = parent.nominalV().getAsDouble() * share;
     if (Math.abs(row.content().primaryV() - fed) > (MOST_VOLTAGE_DIFFERENCE + ROUNDING) * fed) {
       remarks.error(
+          voltageCause(parent),
           row,
           "primary_v",
           "It is fed from \"%s\" at %.5g V%s; primary_v must be within 5 %% of that."
@@ -159,7 +162,8 @@ final class WiringCheck {
         panel.parentLines().size() == own.size() ? panel.parentLines() : own,
         parent.nominalV(),
         parent.section(),
-        panel.system().isPresent() ? panel.name() : parent.origin());
+        panel.system().isPresent() ? panel.name() : parent.origin(),
+        parent.voltageOrigin());
   }
 
   private boolean linesFit(
@@ -203,6 +207,16 @@ final class WiringCheck {
                 ("No neutral upstream: the panel has a neutral, and its parent \"%s\" has only %s."
                         + " A transformer between them can make one.")
                     .formatted(w.parentName, w.parent.words())));
+  }
+
+  /** The cause of every voltage that does not fit in a section. */
+  static String voltageCause(Wiring wiring) {
+    return "voltage " + wiring.voltageOrigin();
+  }
+
+  /** The cause of every line missing at a panel. */
+  static String linesCause(String panel) {
+    return "lines of " + panel;
   }
 
   /** The cause of every neutral missing below the node where it ends. */
