@@ -130,7 +130,10 @@ final class CircuitCheck {
           "No neutral upstream: %s needs a neutral. %s".formatted(lines.word(), message));
     } else {
       remarks.error(
-          WiringCheck.linesCause(panel), row, "lines", "The circuit asks for other lines. " + message);
+          WiringCheck.linesCause(panel),
+          row,
+          "lines",
+          "The circuit asks for other lines. " + message);
     }
   }
 }

@@ -164,17 +164,56 @@ class BrokenSurveyTest {
 
   static Stream<Case> structures() {
     return Stream.of(
-        of("transformers", 3, "primary_v", "400", "supplies row 3",
+        of(
+            "transformers",
+            3,
+            "primary_v",
+            "400",
+            "supplies row 3",
             k -> k.set("transformers", 2, "secondary_v", "208")),
-        of("panels", 4, "system", "single-phase", "no neutral upstream",
+        of(
+            "panels",
+            4,
+            "system",
+            "single-phase",
+            "no neutral upstream",
             k -> k.set("panels", 2, "system", "three-phase-3-wire")),
-        of("circuits", 8, "lines", "L1-L2-L3", "filters row 2",
-            k -> k.set("panels", 6, "system", "single-phase").set("panels", 6, "parent_lines", "L1")),
-        of("transformers", 3, "fed_from", "MSB", "supplies row 3", k -> k.set("panels", 2, "panel", "MAIN")),
-        of("transformers", 2, "fed_from", "GRID", "background row 2",
+        of(
+            "circuits",
+            8,
+            "lines",
+            "L1-L2-L3",
+            "filters row 2",
+            k ->
+                k.set("panels", 6, "system", "single-phase")
+                    .set("panels", 6, "parent_lines", "L1")),
+        of(
+            "transformers",
+            3,
+            "fed_from",
+            "MSB",
+            "supplies row 3",
+            k -> k.set("panels", 2, "panel", "MAIN")),
+        of(
+            "transformers",
+            2,
+            "fed_from",
+            "GRID",
+            "background row 2",
             k -> k.set("supplies", 2, "supply", "MAINS")),
-        of("loads", 2, "circuit", "LP-1:1", "meters row 3", k -> k.set("circuits", 2, "circuit", "11")),
-        of("panels", 2, "system", "three-phase-4-wire", "no neutral upstream",
+        of(
+            "loads",
+            2,
+            "circuit",
+            "LP-1:1",
+            "meters row 3",
+            k -> k.set("circuits", 2, "circuit", "11")),
+        of(
+            "panels",
+            2,
+            "system",
+            "three-phase-4-wire",
+            "no neutral upstream",
             k -> k.set("transformers", 2, "connection", "Dd0")),
         of("site", 0, "", "", "missing", k -> k.removeTable("site")),
         of("supplies", 0, "", "", "missing", k -> k.removeTable("supplies")),
