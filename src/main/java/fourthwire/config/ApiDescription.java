@@ -4,9 +4,13 @@ import io.swagger.v3.oas.models.OpenAPI;
 import io.swagger.v3.oas.models.Operation;
 import io.swagger.v3.oas.models.PathItem;
 import io.swagger.v3.oas.models.info.Info;
+import io.swagger.v3.oas.models.media.ArraySchema;
 import io.swagger.v3.oas.models.media.Content;
+import io.swagger.v3.oas.models.media.IntegerSchema;
 import io.swagger.v3.oas.models.media.MediaType;
+import io.swagger.v3.oas.models.media.ObjectSchema;
 import io.swagger.v3.oas.models.media.Schema;
+import io.swagger.v3.oas.models.media.StringSchema;
 import io.swagger.v3.oas.models.responses.ApiResponse;
 import java.util.LinkedHashMap;
 import java.util.Map;
@@ -35,12 +39,63 @@ class ApiDescription {
 
   @Bean
   OpenApiCustomizer errorsOfEveryCall() {
-    return api ->
-        api.getPaths()
-            .forEach(
-                (path, item) ->
-                    item.readOperationsMap()
-                        .forEach((method, operation) -> describe(path, method, operation)));
+    return api -> {
+      api.getPaths()
+          .forEach(
+              (path, item) ->
+                  item.readOperationsMap()
+                      .forEach((method, operation) -> describe(path, method, operation)));
+      api.getComponents().addSchemas("Problem", problem()).addSchemas("ObjectNode", document());
+    };
+  }
+
+  /** Documents are written by hand, so their shape is not found from a Java type. */
+  private static Schema<?> document() {
+    return new ObjectSchema()
+        .additionalProperties(true)
+        .description(
+            "A document of the interface: a node's result, a row of the list of nodes, a reading");
+  }
+
+  private static Schema<?> problem() {
+    return new ObjectSchema()
+        .description("What went wrong, as in RFC 9457")
+        .addProperty("type", text("Always about:blank: the status says the kind"))
+        .addProperty("title", text("The status in words"))
+        .addProperty("status", new IntegerSchema().description("The HTTP status"))
+        .addProperty("detail", text("What is wrong and how to mend it"))
+        .addProperty(
+            "errors", list("Of a refused survey: everything that is wrong with it", surveyError()))
+        .addProperty(
+            "columns", list("Of a refused reading: columns or channels found", text("A header")))
+        .addProperty(
+            "questions",
+            list(
+                "Of a refused reading: what the mapping must say",
+                new ObjectSchema()
+                    .addProperty("part", text("Part of the mapping"))
+                    .addProperty("message", text("What is wrong with it and what is accepted"))))
+        .addProperty("reference", text("Of an unforeseen error: its number in the log"));
+  }
+
+  private static Schema<?> surveyError() {
+    return new ObjectSchema()
+        .addProperty("table", text("The table; empty for an error of the whole file"))
+        .addProperty(
+            "row",
+            new IntegerSchema()
+                .description("As a spreadsheet shows it, the header being 1; 0: the whole table"))
+        .addProperty("column", text("The column; empty where it is no single one"))
+        .addProperty("value", text("The cell as read"))
+        .addProperty("message", text("What is wrong and what is accepted"));
+  }
+
+  private static Schema<?> text(String description) {
+    return new StringSchema().description(description);
+  }
+
+  private static Schema<?> list(String description, Schema<?> item) {
+    return new ArraySchema().items(item).description(description);
   }
 
   private static void describe(String path, PathItem.HttpMethod method, Operation operation) {

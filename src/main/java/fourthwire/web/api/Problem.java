@@ -3,26 +3,20 @@ package fourthwire.web.api;
 import com.fasterxml.jackson.annotation.JsonInclude;
 import fourthwire.intake.reading.ReadingRefusedException;
 import fourthwire.site.check.SurveyError;
-import io.swagger.v3.oas.annotations.media.Schema;
 import java.util.List;
 import java.util.Optional;
 
 /** A problem document (RFC 9457): what went wrong with a call. */
-@Schema(description = "What went wrong, as in RFC 9457")
 @JsonInclude(JsonInclude.Include.NON_ABSENT)
 record Problem(
-    @Schema(description = "Always about:blank: the status says the kind") String type,
-    @Schema(description = "The status in words") String title,
-    @Schema(description = "The HTTP status") int status,
-    @Schema(description = "What is wrong and how to mend it") String detail,
-    @Schema(description = "Of a refused survey: everything that is wrong, all at once")
-        Optional<List<SurveyError>> errors,
-    @Schema(description = "Of a refused reading: the columns or channels found in the file")
-        Optional<List<String>> columns,
-    @Schema(description = "Of a refused reading: what the mapping must say")
-        Optional<List<ReadingRefusedException.Question>> questions,
-    @Schema(description = "Of an unforeseen error: the number it has in the log")
-        Optional<String> reference) {
+    String type,
+    String title,
+    int status,
+    String detail,
+    Optional<List<SurveyError>> errors,
+    Optional<List<String>> columns,
+    Optional<List<ReadingRefusedException.Question>> questions,
+    Optional<String> reference) {
   /** Its media type. */
   static final String MEDIA_TYPE = "application/problem+json";
 

@@ -65,8 +65,9 @@ class ReadingApi {
       @Parameter(description = "A supply, transformer, panel or circuit; a meter is made there")
           @RequestParam(required = false)
           @Nullable String at,
-      @Parameter(description = "Which columns hold what, as JSON") @RequestParam(required = false)
-          @Nullable String mapping,
+      @Parameter(description = "Which columns hold what, as JSON; a field or a file")
+          @RequestPart(name = "mapping", required = false)
+          @Nullable MultipartFile mapping,
       @Parameter(hidden = true) MultipartHttpServletRequest form) {
     existing(site);
     long job =
@@ -76,7 +77,9 @@ class ReadingApi {
                 filled(meter),
                 filled(at),
                 file.stream().map(UploadedFile::of).toList(),
-                filled(mapping).or(() -> filePart(form, "mapping")).map(MappingJson::read)));
+                filled(form.getParameter("mapping"))
+                    .or(() -> text(mapping))
+                    .map(MappingJson::read)));
     return ResponseEntity.accepted()
         .location(URI.create("/api/v1/jobs/" + job))
         .body(new Queued(job));
@@ -86,9 +89,8 @@ class ReadingApi {
     return Optional.ofNullable(field).filter(f -> !f.isBlank());
   }
 
-  /** A field that was sent as a file, as many programs send JSON. */
-  private static Optional<String> filePart(MultipartHttpServletRequest form, String name) {
-    MultipartFile part = form.getFile(name);
+  /** Of a field that was sent as a file, as many programs send JSON. */
+  private static Optional<String> text(@Nullable MultipartFile part) {
     try {
       return part == null
           ? Optional.empty()
