@@ -1,0 +1,33 @@
+package fourthwire.web.site;
+
+import fourthwire.web.audit.AuditView;
+import fourthwire.web.panel.NodeRow;
+import fourthwire.web.support.Verdict;
+import java.util.List;
+import java.util.Optional;
+
+/**
+ * What the page of a site shows.
+ *
+ * @param audit the audit shown; empty where none is finished yet
+ * @param pending an audit that is not finished, newest first
+ * @param headline the verdict in words
+ * @param circuits findings on circuits, in words; empty without any
+ * @param supplies that an audit can run on, the normal one first
+ * @param outdated whether the survey has been revised since the audit shown
+ */
+record SitePage(
+    long siteId,
+    String siteName,
+    String system,
+    Optional<AuditView> audit,
+    Optional<AuditView> pending,
+    String headline,
+    Verdict verdict,
+    List<String> holds,
+    String circuits,
+    List<NodeRow> rows,
+    List<String> supplies,
+    boolean outdated,
+    List<String> notes,
+    List<String> editions) {}

@@ -1,0 +1,140 @@
+package fourthwire.web.site;
+
+import fourthwire.audit.AuditRepository;
+import fourthwire.audit.NodeResult;
+import fourthwire.audit.NodeSummary;
+import fourthwire.limits.Finding;
+import fourthwire.limits.Severity;
+import fourthwire.site.SiteRepository;
+import fourthwire.site.SiteTree;
+import fourthwire.site.Supply;
+import fourthwire.site.SupplyRole;
+import fourthwire.site.Survey;
+import fourthwire.web.audit.AuditView;
+import fourthwire.web.panel.NodeRows;
+import fourthwire.web.support.Headline;
+import fourthwire.web.support.Numbers;
+import fourthwire.web.support.Verdict;
+import fourthwire.web.support.Words;
+import java.util.Comparator;
+import java.util.List;
+import java.util.Optional;
+import org.springframework.stereotype.Component;
+
+/** Makes a site's page out of its survey and one of its audits. */
+@Component
+class SitePageMaker {
+  private final AuditRepository audits;
+  private final SiteRepository sites;
+  private final NodeRows rows;
+  private final Words words;
+
+  SitePageMaker(AuditRepository audits, SiteRepository sites, NodeRows rows, Words words) {
+    this.audits = audits;
+    this.sites = sites;
+    this.rows = rows;
+    this.words = words;
+  }
+
+  /** The page on the newest finished audit. */
+  SitePage latest(SiteRepository.Entry site) {
+    Optional<AuditRepository.Entry> done =
+        audits.ofSite(site.id()).stream()
+            .filter(a -> a.state() == AuditRepository.State.DONE)
+            .findFirst();
+    return done.map(a -> audited(site, a)).orElseGet(() -> unaudited(site));
+  }
+
+  /** The page on this finished audit. */
+  SitePage audited(SiteRepository.Entry site, AuditRepository.Entry audit) {
+    Survey survey = sites.survey(site.id(), audit.surveyRevision());
+    SiteTree tree = tree(survey, audit);
+    List<NodeResult> shown =
+        TreeOrder.of(survey, tree).stream()
+            .flatMap(n -> audits.node(audit.id(), n).stream())
+            .toList();
+    List<List<Finding>> findings = shown.stream().map(NodeResult::findings).toList();
+    return new SitePage(
+        site.id(),
+        survey.settings().name(),
+        system(survey),
+        Optional.of(AuditView.of(audit, survey)),
+        pending(site, survey),
+        new Headline(words).of(findings),
+        Verdict.of(findings.stream().flatMap(List::stream).toList()),
+        holds(survey),
+        circuits(audits.summaries(audit.id())),
+        rows.of(shown, tree, survey),
+        supplies(survey),
+        site.latestRevision() > audit.surveyRevision(),
+        audit.notes(),
+        audit.editions());
+  }
+
+  private SitePage unaudited(SiteRepository.Entry site) {
+    Survey survey = sites.survey(site.id(), site.latestRevision());
+    return new SitePage(
+        site.id(),
+        survey.settings().name(),
+        system(survey),
+        Optional.empty(),
+        pending(site, survey),
+        words.of("site.unaudited"),
+        Verdict.NONE,
+        holds(survey),
+        "",
+        List.of(),
+        supplies(survey),
+        false,
+        List.of(),
+        List.of());
+  }
+
+  private static SiteTree tree(Survey survey, AuditRepository.Entry audit) {
+    return audit
+        .supply()
+        .flatMap(name -> survey.supplies().stream().filter(s -> s.name().equals(name)).findFirst())
+        .map(s -> SiteTree.of(survey, s))
+        .orElseGet(() -> SiteTree.of(survey));
+  }
+
+  private Optional<AuditView> pending(SiteRepository.Entry site, Survey survey) {
+    return audits.ofSite(site.id()).stream()
+        .filter(a -> AuditView.isOpen(a.state()))
+        .findFirst()
+        .map(a -> AuditView.of(a, survey));
+  }
+
+  private String system(Survey survey) {
+    return words.of(
+        "site.system",
+        Numbers.of(survey.normalSupply().lineVoltageV(), "V"),
+        Numbers.of(survey.settings().frequencyHz(), "Hz"));
+  }
+
+  private List<String> holds(Survey survey) {
+    return List.of(
+        words.of("site.holds.nodes", survey.panels().size(), survey.circuits().size()),
+        words.of("site.holds.meters", survey.meters().size(), survey.spotReadings().size()));
+  }
+
+  private String circuits(List<NodeSummary> summaries) {
+    List<NodeSummary> circuits =
+        summaries.stream().filter(s -> s.kind() == SiteTree.Kind.CIRCUIT).toList();
+    long act = circuits.stream().filter(s -> s.count(Severity.ACT) > 0).count();
+    long watch =
+        circuits.stream()
+            .filter(s -> s.count(Severity.ACT) == 0 && s.count(Severity.WATCH) > 0)
+            .count();
+    return act + watch == 0
+        ? words.of("site.circuits.none")
+        : words.of("site.circuits", act, watch);
+  }
+
+  private static List<String> supplies(Survey survey) {
+    return survey.supplies().stream()
+        .sorted(Comparator.comparing(s -> s.roleOrDefault() != SupplyRole.NORMAL))
+        .map(Supply::name)
+        .toList();
+  }
+}
