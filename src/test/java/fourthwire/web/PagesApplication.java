@@ -29,6 +29,11 @@ import org.springframework.security.web.SecurityFilterChain;
             type = FilterType.REGEX,
             pattern = "fourthwire\\.web\\.(api\\..*|.*Application|.*Test.*)"))
 public class PagesApplication {
+  /** Serves the pages by themselves, to look at them. */
+  public static void main(String[] args) {
+    org.springframework.boot.SpringApplication.run(PagesApplication.class, args);
+  }
+
   @Bean
   MemoryStore store() {
     return new MemoryStore();

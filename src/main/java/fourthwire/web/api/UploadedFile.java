@@ -12,8 +12,9 @@ import java.util.HexFormat;
 import org.springframework.web.multipart.MultipartFile;
 
 /** An uploaded meter's file. */
-record UploadedFile(String name, String sha256, MultipartFile file) implements RawFile {
-  static UploadedFile of(MultipartFile file) {
+public record UploadedFile(String name, String sha256, MultipartFile file) implements RawFile {
+  /** The file as it was sent. */
+  public static UploadedFile of(MultipartFile file) {
     return new UploadedFile(name(file), digest(file), file);
   }
 

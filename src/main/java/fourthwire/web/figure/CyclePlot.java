@@ -3,6 +3,7 @@ package fourthwire.web.figure;
 import fourthwire.quantity.Conductor;
 import fourthwire.quantity.Spectrum;
 import fourthwire.quantity.Waveform;
+import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 
@@ -10,13 +11,15 @@ import java.util.Map;
 public final class CyclePlot {
   private static final double HEIGHT_PX = 208;
   private static final int SAMPLES = 240;
-  private static final int STEPS = 2;
+  private static final int STEPS = 3;
   private static final int UNITS_WIDE = 1000;
+  private static final List<Conductor> NEUTRAL_FIRST =
+      List.of(Conductor.N, Conductor.L1, Conductor.L2, Conductor.L3);
 
   private CyclePlot() {}
 
   /**
-   * The picture; the neutral is drawn last and heaviest.
+   * The picture; the neutral is the heavy one, below the lines.
    *
    * @param unit of the spectra, {@code A} or {@code V}
    */
@@ -40,7 +43,7 @@ public final class CyclePlot {
         "0 0 " + UNITS_WIDE + " " + Svg.rounded(HEIGHT_PX, 0),
         "preserveAspectRatio",
         "none");
-    for (Conductor conductor : Conductor.values()) {
+    for (Conductor conductor : NEUTRAL_FIRST) {
       Spectrum spectrum = spectra.get(conductor);
       if (spectrum != null) {
         svg.add(

@@ -12,7 +12,7 @@ import java.util.function.IntFunction;
  */
 public final class SpectrumPlot {
   private static final double HEIGHT_PX = 208;
-  private static final int STEPS = 4;
+  private static final int STEPS = 5;
   private static final double BARS_SHARE = 0.72;
 
   private SpectrumPlot() {}
@@ -50,14 +50,7 @@ public final class SpectrumPlot {
     for (int i = 0; i < groups.size(); i++) {
       group(svg, ticks, series, groups.get(i), (double) i / groups.size(), 1.0 / groups.size());
       String middle = Svg.share((i + 0.5) / groups.size());
-      svg.text(
-          ordinal.apply(groups.get(i).order()),
-          "x",
-          middle,
-          "y",
-          HEIGHT_PX + 18,
-          "text-anchor",
-          "middle");
+      svg.ordinal(ordinal.apply(groups.get(i).order()), middle, HEIGHT_PX + 18);
     }
     return svg.done();
   }

@@ -34,6 +34,18 @@ final class Svg {
     return this;
   }
 
+  /** An ordinal centred here; its letters are a span of their own that small screens leave out. */
+  Svg ordinal(String ordinal, String x, double y) {
+    String digits = ordinal.replaceAll("\\D", "");
+    start("text", "x", x, "y", y, "text-anchor", "middle").append('>').append(digits);
+    open.push("text");
+    start("tspan", "class", "letters")
+        .append('>')
+        .append(escaped(ordinal.substring(digits.length())));
+    open.push("tspan");
+    return close().close();
+  }
+
   /** Closes the element opened last. */
   Svg close() {
     out.append("</").append(open.pop()).append('>');

@@ -1,11 +1,13 @@
 package fourthwire.web.figure;
 
+import java.math.BigDecimal;
+import java.math.MathContext;
 import java.util.ArrayList;
 import java.util.List;
 
-/** Round values along an axis: steps of 1, 2 or 5 times a power of ten. */
+/** Round values along an axis: steps of 1, 2, 2.5 or 5 times a power of ten. */
 record Ticks(double step, double end) {
-  private static final double[] ROUND = {1, 2, 5, 10};
+  private static final double[] ROUND = {1, 2, 2.5, 5, 10};
 
   /** Ticks from 0 that reach at least {@code highest} in about {@code count} steps. */
   static Ticks upTo(double highest, int count) {
@@ -33,8 +35,8 @@ record Ticks(double step, double end) {
 
   /** A value's text, with no more decimals than the step needs. */
   String text(double value) {
-    int decimals = (int) Math.max(0, -Math.floor(Math.log10(step) + 1e-9));
-    String text = Svg.rounded(value, decimals);
+    int decimals = new BigDecimal(step).round(new MathContext(3)).stripTrailingZeros().scale();
+    String text = Svg.rounded(value, Math.max(0, decimals));
     return text.replace('-', '\u2212');
   }
 }

@@ -66,7 +66,7 @@ final class AddersMaker {
   }
 
   private String loadText(Load load) {
-    String quantity = load.quantity() == 1 ? "" : Numbers.of(load.quantity()) + "\u00a0× ";
+    String quantity = load.quantity() == 1 ? "" : Numbers.plain(load.quantity(), "") + "\u00a0× ";
     return words.of("adder.load", quantity, load.name(), kind(load));
   }
 

@@ -92,7 +92,7 @@ class NodePageMaker {
     String name = node.node().node();
     Optional<SiteTree.Node> at = node.tree().find(name);
     List<String> facts = new ArrayList<>();
-    at.ifPresent(n -> facts.add(Numbers.of(n.nominalV(), "V")));
+    at.ifPresent(n -> facts.add(Numbers.plain(n.nominalV(), "V")));
     at.ifPresent(
         n ->
             facts.add(
@@ -107,21 +107,23 @@ class NodePageMaker {
         .filter(p -> p.name().equals(name))
         .findFirst()
         .map(Panel::busRatingA)
-        .ifPresent(r -> r.ifPresent(a -> facts.add(words.of("facts.bus", Numbers.of(a, "A")))));
+        .ifPresent(r -> r.ifPresent(a -> facts.add(words.of("facts.bus", Numbers.plain(a, "A")))));
     at.ifPresent(n -> facts.addAll(feeder(n)));
     return String.join(" · ", facts);
   }
 
   private List<String> plate(Transformer t) {
     return List.of(
-        Numbers.of(t.ratedKva(), "kVA"),
+        Numbers.plain(t.ratedKva(), "kVA"),
         t.connection().symbol(),
-        words.of("facts.impedance", Numbers.of(t.impedancePercent(), "%")));
+        words.of("facts.impedance", Numbers.plain(t.impedancePercent(), "%")));
   }
 
   private List<String> feeder(SiteTree.Node node) {
     List<String> facts = new ArrayList<>();
-    node.feeder().lengthM().ifPresent(m -> facts.add(words.of("facts.feeder", Numbers.of(m, "m"))));
+    node.feeder()
+        .lengthM()
+        .ifPresent(m -> facts.add(words.of("facts.feeder", Numbers.plain(m, "m"))));
     node.feeder()
         .conductorSize()
         .ifPresent(s -> facts.add(words.of("facts.size", s.replace("mm2", "mm²"))));

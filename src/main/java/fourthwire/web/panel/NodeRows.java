@@ -35,6 +35,7 @@ public final class NodeRows {
 
   /** The rows of these results, in their order; depths are counted in the tree. */
   public List<NodeRow> of(List<NodeResult> results, SiteTree tree, Survey survey) {
+    int top = results.stream().mapToInt(r -> depth(tree, r.node())).min().orElse(0);
     List<String> line = column(results, NodeRows::lineLoading);
     List<String> neutral = column(results, d -> d.neutral().loadingPercent());
     List<String> thd = column(results, NodeRows::voltageThd);
@@ -46,16 +47,22 @@ public final class NodeRows {
               result.node(),
               shortName(result),
               "kind." + result.kind().word(),
-              depth(tree, result.node()),
+              depth(tree, result.node()) - top,
               about(result, survey),
               result.design().map(d -> rails(d, survey)).orElse(""),
               line.get(i),
               neutral.get(i),
               thd.get(i),
               Verdict.of(result.findings()),
-              Verdict.worst(result.findings()).map(f -> FindingText.about(words, f)).orElse("")));
+              about(result)));
     }
     return rows;
+  }
+
+  private String about(NodeResult result) {
+    return result.design().isEmpty()
+        ? words.of("row.unsupplied")
+        : Verdict.worst(result.findings()).map(f -> FindingText.about(words, f)).orElse("");
   }
 
   private static String shortName(NodeResult result) {
@@ -72,13 +79,16 @@ public final class NodeRows {
       case TRANSFORMER ->
           survey.transformers().stream()
               .filter(t -> t.name().equals(result.node()))
-              .map(t -> Numbers.of(t.ratedKva(), "kVA") + " " + t.connection().symbol())
+              .map(t -> Numbers.plain(t.ratedKva(), "kVA") + " " + t.connection().symbol())
               .findFirst()
               .orElse("");
       case CIRCUIT ->
           survey.loads().stream()
               .filter(l -> l.circuitId().equals(result.node()))
-              .map(l -> (l.quantity() == 1 ? "" : Numbers.of(l.quantity()) + "\u00a0× ") + l.name())
+              .map(
+                  l ->
+                      (l.quantity() == 1 ? "" : Numbers.plain(l.quantity(), "") + "\u00a0× ")
+                          + l.name())
               .collect(Collectors.joining("; "));
       case SUPPLY, PANEL -> "";
     };

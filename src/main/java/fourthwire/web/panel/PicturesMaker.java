@@ -129,9 +129,10 @@ final class PicturesMaker {
     List<SpectrumPlot.Group> groups =
         IntStream.rangeClosed(2, Spectrum.HIGHEST_ORDER)
             .boxed()
-            .filter(h -> h % 2 == 1 && h <= 25 || volts.magnitude(h) > 0.002 * fundamental)
+            .filter(
+                h -> h % 2 == 1 && h <= USUAL_HIGHEST || volts.magnitude(h) > 0.002 * fundamental)
             .sorted(Comparator.comparingDouble(h -> -volts.magnitude(h)))
-            .limit(MOST_ORDERS - 2)
+            .limit(MOST_ORDERS)
             .sorted()
             .map(
                 h ->

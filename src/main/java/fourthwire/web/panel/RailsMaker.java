@@ -34,7 +34,7 @@ final class RailsMaker {
   NodePage.Rails make() {
     List<Conductor> drawn = conductors();
     Reasons reasons = new Reasons();
-    List<Column.Cell> amps = Column.of(drawn.stream().map(this::rms).toList(), reasons);
+    List<Column.Cell> amps = Column.of(drawn.stream().map(this::rms).toList(), "A", reasons);
     List<Rail> rails = drawn.stream().map(this::rail).toList();
     Rail.Scale scale = scale(rails);
     List<NodePage.RailRow> rows = new ArrayList<>();
@@ -117,9 +117,14 @@ final class RailsMaker {
     }
     String list =
         parts.stream()
-            .map(p -> p.label() + " " + Numbers.of(100 * p.share(), "%"))
+            .map(p -> p.label() + " " + percent(100 * p.share()))
             .collect(Collectors.joining(", "));
     return words.of("rails.heat", list);
+  }
+
+  private static String percent(double share) {
+    String text = Numbers.withDecimals(share, 0);
+    return (text.equals("0") ? "<" + Numbers.THIN_SPACE + "1" : text) + Numbers.THIN_SPACE + "%";
   }
 
   private String shape(Conductor c) {
@@ -143,7 +148,7 @@ final class RailsMaker {
                     words.of(
                         "rails.share",
                         Numbers.of(l, "%"),
-                        Numbers.of(ampacity(c).value().orElse(0), "A")))
+                        Numbers.plain(ampacity(c).value().orElse(0), "A")))
             .findFirst();
     return share.orElse(words.of("rails.share.unknown"));
   }

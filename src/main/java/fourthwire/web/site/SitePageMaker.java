@@ -108,8 +108,8 @@ class SitePageMaker {
   private String system(Survey survey) {
     return words.of(
         "site.system",
-        Numbers.of(survey.normalSupply().lineVoltageV(), "V"),
-        Numbers.of(survey.settings().frequencyHz(), "Hz"));
+        Numbers.plain(survey.normalSupply().lineVoltageV(), "V"),
+        Numbers.plain(survey.settings().frequencyHz(), "Hz"));
   }
 
   private List<String> holds(Survey survey) {

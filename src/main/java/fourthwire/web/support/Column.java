@@ -23,10 +23,13 @@ public final class Column {
 
   /** The cells of a column; reasons of unknown figures go into {@code reasons}. */
   public static List<Cell> of(List<Figure> figures, Reasons reasons) {
-    List<String> texts =
-        figures.stream()
-            .map(f -> f.value().isPresent() ? Numbers.of(f.value().getAsDouble()) : UNKNOWN)
-            .toList();
+    return of(figures, "", reasons);
+  }
+
+  /** The cells of a column with their unit beside each number. */
+  public static List<Cell> of(List<Figure> figures, String unit, Reasons reasons) {
+    String tail = unit.isEmpty() ? "" : Numbers.THIN_SPACE + unit;
+    List<String> texts = figures.stream().map(Column::text).toList();
     int decimals = texts.stream().mapToInt(Column::decimals).max().orElse(0);
     List<Cell> cells = new ArrayList<>();
     for (int i = 0; i < texts.size(); i++) {
@@ -34,7 +37,7 @@ public final class Column {
       boolean known = figure.value().isPresent();
       cells.add(
           new Cell(
-              known ? padded(texts.get(i), decimals) : texts.get(i),
+              known ? texts.get(i) + tail + padding(texts.get(i), decimals) : texts.get(i),
               known || figure.reason().isEmpty() ? "" : reasons.markOf(figure)));
     }
     return cells;
@@ -52,16 +55,23 @@ public final class Column {
         .toList();
   }
 
+  /** A figure that does not apply, unknown without a reason, is left out. */
+  private static String text(Figure figure) {
+    if (figure.value().isPresent()) {
+      return Numbers.of(figure.value().getAsDouble());
+    }
+    return figure.reason().isEmpty() ? "" : UNKNOWN;
+  }
+
   private static int decimals(String text) {
     int point = text.indexOf('.');
     return point < 0 ? 0 : text.length() - point - 1;
   }
 
-  private static String padded(String text, int decimals) {
+  private static String padding(String text, int decimals) {
     int missing = decimals - decimals(text);
     boolean point = text.indexOf('.') >= 0;
-    return text
-        + (point || missing == 0 ? "" : String.valueOf(Numbers.PUNCTUATION_SPACE))
+    return (point || missing == 0 ? "" : String.valueOf(Numbers.PUNCTUATION_SPACE))
         + String.valueOf(Numbers.FIGURE_SPACE).repeat(missing);
   }
 }

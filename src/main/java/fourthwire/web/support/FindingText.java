@@ -25,14 +25,18 @@ public final class FindingText {
         ? words.of(
             "finding.against",
             figure,
-            Numbers.of(finding.limit().value().getAsDouble(), finding.unit()))
+            Numbers.plain(finding.limit().value().getAsDouble(), finding.unit()))
         : figure;
   }
 
   /** The probability in words; empty where none was computed. */
   public static String probability(Words words, Finding finding) {
     return finding.probability().value().stream()
-        .mapToObj(p -> words.of("finding.probability", Numbers.of(100 * p, "%")))
+        .mapToObj(
+            p ->
+                words.of(
+                    "finding.probability",
+                    Numbers.withDecimals(100 * p, 0) + Numbers.THIN_SPACE + "%"))
         .findFirst()
         .orElse("");
   }

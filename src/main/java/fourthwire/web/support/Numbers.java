@@ -57,6 +57,15 @@ public final class Numbers {
     return unit.isEmpty() ? of(value) : of(value) + THIN_SPACE + unit;
   }
 
+  /** The number without trailing zeros, with its unit: limits, ratings, counts. */
+  public static String plain(double value, String unit) {
+    String text = of(value);
+    if (text.indexOf('.') >= 0) {
+      text = text.replaceAll("0+$", "").replaceAll("\\.$", "");
+    }
+    return unit.isEmpty() ? text : text + THIN_SPACE + unit;
+  }
+
   /** An order of the fundamental as an ordinal: 1st, 3rd, 11th. */
   public static String ordinal(int order) {
     int tens = order % 100;
