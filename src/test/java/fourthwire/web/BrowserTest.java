@@ -9,10 +9,8 @@ import java.nio.file.Path;
 import org.junit.jupiter.api.AfterAll;
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Tag;
-import org.junit.jupiter.api.TestInstance;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
-import org.springframework.boot.test.context.SpringBootTest;
 import org.springframework.boot.test.web.server.LocalServerPort;
 
 /**
@@ -21,11 +19,7 @@ import org.springframework.boot.test.web.server.LocalServerPort;
  * no script or style refused by the content policy.
  */
 @Tag("browser")
-@TestInstance(TestInstance.Lifecycle.PER_CLASS)
-@SpringBootTest(
-    classes = PagesApplication.class,
-    webEnvironment = SpringBootTest.WebEnvironment.RANDOM_PORT)
-class BrowserTest {
+class BrowserTest extends PagesTest {
   private static final int[] WIDTHS = {390, 820, 1440};
 
   @LocalServerPort int port;
@@ -48,10 +42,17 @@ class BrowserTest {
 
   @ParameterizedTest(name = "{0}")
   @CsvSource({
-    "panel, /audits/1/node?name=LP-2%20East%20offices",
-    "transformer, /audits/1/node?name=T1",
-    "three-wire, /audits/1/node?name=MP-1%20Pumps%20%26%20air",
-    "circuit, /audits/1/node?name=LP-2%20East%20offices:1",
+    "sites, /",
+    "site, /sites/{site}",
+    "survey, /sites/{site}/survey",
+    "audits, /sites/{site}/audits",
+    "delete, /sites/{site}/delete",
+    "help, /help",
+    "missing, /sites/999",
+    "panel, /audits/{audit}/node?name=LP-2%20East%20offices",
+    "transformer, /audits/{audit}/node?name=T1",
+    "three-wire, /audits/{audit}/node?name=MP-1%20Pumps%20%26%20air",
+    "circuit, /audits/{audit}/node?name=LP-2%20East%20offices:1",
   })
   void aPageFitsEveryScreenAndBreaksNoRule(String name, String path) {
     for (int width : WIDTHS) {
@@ -64,7 +65,10 @@ class BrowserTest {
     try (Page page = browser.page(width, scheme)) {
       StringBuilder console = new StringBuilder();
       page.onConsoleMessage(m -> console.append(m.type()).append(": ").append(m.text()));
-      page.navigate("http://localhost:" + port + path);
+      page.navigate(
+          "http://localhost:"
+              + port
+              + path.replace("{audit}", "" + audit).replace("{site}", "" + site));
       shoot(page, name + "-" + width + "-" + scheme.name().toLowerCase(java.util.Locale.ROOT));
       Object overflow =
           page.evaluate(

@@ -1,24 +1,17 @@
 package fourthwire.web;
 
 import static org.assertj.core.api.Assertions.assertThat;
-import static org.springframework.test.web.servlet.request.MockMvcRequestBuilders.get;
-import static org.springframework.test.web.servlet.result.MockMvcResultMatchers.status;
 
+import fourthwire.testsupport.Http.Answer;
+import java.net.URLEncoder;
+import java.nio.charset.StandardCharsets;
 import org.junit.jupiter.api.Test;
-import org.springframework.beans.factory.annotation.Autowired;
-import org.springframework.boot.test.context.SpringBootTest;
-import org.springframework.boot.webmvc.test.autoconfigure.AutoConfigureMockMvc;
-import org.springframework.test.web.servlet.MockMvc;
 
 /** The page of a node shows what its result holds. */
-@SpringBootTest(classes = PagesApplication.class)
-@AutoConfigureMockMvc
-class NodePageTest {
-  @Autowired MockMvc mvc;
-
+class NodePageTest extends PagesTest {
   @Test
-  void aPanelShowsItsVerdictItsConductorsAndItsFindings() throws Exception {
-    String page = page("/audits/1/node", "LP-2 East offices");
+  void aPanelShowsItsVerdictItsConductorsAndItsFindings() {
+    String page = page(audit, "LP-2 East offices");
     assertThat(page)
         .contains("<h1>LP-2 East offices</h1>")
         .contains("Act", "neutral over its ampacity", "probability 94")
@@ -29,27 +22,27 @@ class NodePageTest {
   }
 
   @Test
-  void theNorthAmericanPracticeNamesTheLinesAbc() throws Exception {
-    String page = page("/audits/2/node", "LP-2 East offices");
+  void theNorthAmericanPracticeNamesTheLinesAbc() {
+    String page = page(americanAudit, "LP-2 East offices");
     assertThat(page).contains("distortion of C stands above").doesNotContain(">L1<");
   }
 
   @Test
-  void aNodeWithoutNeutralHasThreeRailsAndVoltagesBetweenLines() throws Exception {
-    String page = page("/audits/1/node", "MP-1 Pumps & air");
+  void aNodeWithoutNeutralHasThreeRailsAndVoltagesBetweenLines() {
+    String page = page(audit, "MP-1 Pumps & air");
     assertThat(page).contains("MP-1 Pumps &amp; air").contains("L1-L2").doesNotContain("rail n\"");
   }
 
   @Test
-  void nothingIsLeftUnsaidByAMissingKey() throws Exception {
-    assertThat(page("/audits/1/node", "T1")).doesNotContain("??").contains("Factor K");
+  void nothingIsLeftUnsaidByAMissingKey() {
+    assertThat(page(audit, "T1")).doesNotContain("??").contains("Factor K");
   }
 
-  private String page(String path, String node) throws Exception {
-    return mvc.perform(get(path).param("name", node))
-        .andExpect(status().isOk())
-        .andReturn()
-        .getResponse()
-        .getContentAsString();
+  private String page(long of, String node) {
+    Answer answer =
+        http()
+            .get("/audits/" + of + "/node?name=" + URLEncoder.encode(node, StandardCharsets.UTF_8));
+    assertThat(answer.status()).isEqualTo(200);
+    return new String(answer.response().body(), StandardCharsets.UTF_8);
   }
 }

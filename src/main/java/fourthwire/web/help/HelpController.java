@@ -2,6 +2,7 @@ package fourthwire.web.help;
 
 import fourthwire.limits.FindingCode;
 import fourthwire.limits.LimitEditions;
+import fourthwire.web.support.Verdict;
 import org.springframework.stereotype.Controller;
 import org.springframework.ui.Model;
 import org.springframework.web.bind.annotation.GetMapping;
@@ -13,6 +14,9 @@ class HelpController {
   String help(Model model) {
     model.addAttribute("editions", LimitEditions.editions());
     model.addAttribute("checks", FindingCode.values());
+    model.addAttribute("act", Verdict.ACT);
+    model.addAttribute("watch", Verdict.WATCH);
+    model.addAttribute("note", Verdict.NOTE);
     return "help/help";
   }
 }
