@@ -1,7 +1,7 @@
 package fourthwire.config;
 
 import fourthwire.audit.Audit;
-import fourthwire.audit.HarmonicAudit;
+import fourthwire.audit.run.HarmonicAudit;
 import org.springframework.context.annotation.Bean;
 import org.springframework.context.annotation.Configuration;
 

@@ -3,6 +3,7 @@ package fourthwire.audit;
 import static fourthwire.audit.SurveyBuilder.ohms;
 import static org.assertj.core.api.Assertions.assertThat;
 
+import fourthwire.audit.run.HarmonicAudit;
 import fourthwire.quantity.Conductor;
 import fourthwire.quantity.Spectrum;
 import fourthwire.site.LoadKind;

@@ -5,6 +5,7 @@ import static fourthwire.audit.SurveyBuilder.some;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
+import fourthwire.audit.run.HarmonicAudit;
 import fourthwire.load.RectifierReference;
 import fourthwire.quantity.Conductor;
 import fourthwire.quantity.Spectrum;

@@ -1,0 +1,77 @@
+package fourthwire.audit.judge;
+
+import fourthwire.audit.plan.Compensation;
+import fourthwire.audit.plan.Place;
+import fourthwire.audit.solve.SiteSolution;
+import fourthwire.limits.Finding;
+import fourthwire.limits.loading.CapacitorLoading;
+import fourthwire.quantity.Conductor;
+import fourthwire.quantity.Phasor;
+import fourthwire.quantity.Spectrum;
+import fourthwire.site.CapacitorBank;
+import fourthwire.site.Practice;
+import fourthwire.site.Survey;
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.List;
+
+/** Capacitor banks held against what capacitors bear: current, voltage and reactive power. */
+final class BankFindings {
+  private final Survey survey;
+  private final SiteSolution solution;
+
+  BankFindings(Survey survey, SiteSolution solution) {
+    this.survey = survey;
+    this.solution = solution;
+  }
+
+  /** Of the banks at a panel. */
+  List<Finding> at(Place place) {
+    List<Finding> findings = new ArrayList<>();
+    for (CapacitorBank bank : survey.capacitors()) {
+      if (bank.panel().equals(place.name())) {
+        findings.addAll(CapacitorLoading.judge(worstPhase(bank, place), standard()));
+      }
+    }
+    return findings;
+  }
+
+  private CapacitorLoading.Standard standard() {
+    return survey.settings().practice() == Practice.IEC
+        ? CapacitorLoading.Standard.IEC_60831
+        : CapacitorLoading.Standard.IEEE_18;
+  }
+
+  private CapacitorLoading.Phase worstPhase(CapacitorBank bank, Place place) {
+    List<Spectrum> legs = legVoltages(place);
+    return legs.stream()
+        .map(v -> phase(bank, place, v))
+        .max(Comparator.comparingDouble(phase -> phase.current().rms()))
+        .orElseThrow();
+  }
+
+  /** Line to the isolated star point, which stands at the mean of the lines. */
+  private List<Spectrum> legVoltages(Place place) {
+    List<Spectrum> lines = new ArrayList<>();
+    for (Conductor line : place.node().lines()) {
+      lines.add(solution.potential(place.networkNode(), place.conductors().of(line)));
+    }
+    Spectrum star = lines.stream().reduce(Spectrum.ZERO, Spectrum::plus).times(1.0 / lines.size());
+    return lines.stream().map(v -> v.minus(star)).toList();
+  }
+
+  private static CapacitorLoading.Phase phase(CapacitorBank bank, Place place, Spectrum leg) {
+    double ratedV = bank.ratedV().orElse(place.node().nominalV()) / Math.sqrt(3);
+    double ratedVar = 1000 * bank.kvar() / 3;
+    double capacitiveOhm = ratedV * ratedV / ratedVar;
+    double[] y = new double[2];
+    Spectrum current =
+        Spectrum.of(
+            h -> {
+              Compensation.leg(bank, place).at(h, y);
+              return leg.at(h).times(new Phasor(y[0], y[1]));
+            });
+    Spectrum across = Spectrum.of(h -> current.at(h).times(new Phasor(0, -capacitiveOhm / h)));
+    return new CapacitorLoading.Phase(bank.name(), current, across, ratedV, ratedVar);
+  }
+}

@@ -1,0 +1,107 @@
+package fourthwire.audit.run;
+
+import fourthwire.audit.Audit;
+import fourthwire.audit.AuditFailedException;
+import fourthwire.audit.AuditRequest;
+import fourthwire.audit.AuditResult;
+import fourthwire.audit.MeasuredState;
+import fourthwire.audit.NodeResult;
+import fourthwire.audit.Progress;
+import fourthwire.audit.judge.AuditContext;
+import fourthwire.audit.judge.NodeReport;
+import fourthwire.audit.plan.Device;
+import fourthwire.audit.plan.LoadPlacements;
+import fourthwire.audit.plan.NetworkPlan;
+import fourthwire.audit.plan.Place;
+import fourthwire.audit.solve.CoupledSolver;
+import fourthwire.audit.solve.SiteSolution;
+import fourthwire.limits.LimitEditions;
+import fourthwire.site.SiteTree;
+import fourthwire.site.Supply;
+import fourthwire.site.Survey;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+
+/**
+ * The audit: assembles the site's network, solves it together with its loads in the design state,
+ * and reports every node.
+ */
+public final class HarmonicAudit implements Audit {
+  /** Version of the engine: rises whenever the same survey can give other figures. */
+  public static final String ENGINE_VERSION = "1.0";
+
+  private static final List<String> NOTES =
+      List.of(
+          "Design state: every load at its demand, schedules ignored, all capacitor steps in.",
+          "No-load loss and magnetising current of transformers are outside the network.",
+          "Mutual coupling between conductors and the proximity effect are not modelled.");
+
+  @Override
+  public AuditResult run(AuditRequest request, Progress progress) {
+    Survey survey = request.survey();
+    Supply supply = supply(survey, request.supply());
+    progress.at(0.02, "Building the load models");
+    SiteTree tree = SiteTree.of(survey, supply);
+    List<Device> devices = LoadPlacements.of(survey, tree).stream().map(Device::of).toList();
+    NetworkPlan plan = NetworkPlan.of(survey, supply, tree, devices, true);
+    SiteSolution solution =
+        new CoupledSolver(survey, plan, devices)
+            .solve((share, message) -> progress.at(0.05 + 0.55 * share, message));
+    progress.at(0.6, "Scanning the impedance over the orders");
+    AuditContext context = new AuditContext(survey, supply, tree, devices, plan, solution);
+    List<NodeResult> nodes = report(context, request.measured(), progress);
+    nodes.addAll(notSupplied(survey, tree, supply, request.measured()));
+    progress.at(1, "Done");
+    return new AuditResult(
+        supply.name(), ENGINE_VERSION, LimitEditions.editions(), List.copyOf(nodes), NOTES);
+  }
+
+  private static Supply supply(Survey survey, Optional<String> name) {
+    if (name.isEmpty()) {
+      return survey.normalSupply();
+    }
+    return survey.supplies().stream()
+        .filter(s -> s.name().equals(name.get()))
+        .findFirst()
+        .orElseThrow(
+            () -> new AuditFailedException("The survey has no supply called " + name.get()));
+  }
+
+  private static List<NodeResult> report(
+      AuditContext context, Map<String, List<MeasuredState>> measured, Progress progress) {
+    List<NodeResult> nodes = new ArrayList<>();
+    List<Place> places = context.plan().places();
+    for (SiteTree.Node node : context.tree().nodes()) {
+      progress.at(0.7 + 0.3 * nodes.size() / places.size(), "Judging " + node.name());
+      nodes.add(
+          new NodeReport(context, context.plan().get(node.name()))
+              .result(measured.getOrDefault(node.name(), List.of())));
+    }
+    return nodes;
+  }
+
+  /** The nodes that the supply in use does not feed, with the reason instead of figures. */
+  private static List<NodeResult> notSupplied(
+      Survey survey, SiteTree tree, Supply supply, Map<String, List<MeasuredState>> measured) {
+    List<NodeResult> nodes = new ArrayList<>();
+    SiteTree whole = SiteTree.of(survey);
+    for (SiteTree.Node node : whole.nodes()) {
+      if (tree.find(node.name()).isEmpty()) {
+        nodes.add(
+            new NodeResult(
+                node.name(),
+                node.kind(),
+                node.parent(),
+                supply.name(),
+                Optional.empty(),
+                "not supplied from " + supply.name(),
+                measured.getOrDefault(node.name(), List.of()),
+                List.of(),
+                List.of()));
+      }
+    }
+    return nodes;
+  }
+}

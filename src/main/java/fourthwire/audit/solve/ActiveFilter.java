@@ -1,0 +1,151 @@
+package fourthwire.audit.solve;
+
+import static fourthwire.quantity.Conductor.N;
+
+import fourthwire.audit.plan.Place;
+import fourthwire.network.Excitation;
+import fourthwire.network.OrderSolution;
+import fourthwire.network.TreeNetwork;
+import fourthwire.quantity.Conductor;
+import fourthwire.site.Filter;
+import java.util.List;
+
+/**
+ * An active filter at its panel: it feeds the panel the harmonics of what hangs below, orders 2 to
+ * 25, so that they do not come from above; up to its rated current per line (three times that in
+ * the neutral), all orders clipped in one proportion. Without a neutral it leaves zero sequence
+ * alone. Source: the public contract and methods; a screening model, no source.
+ */
+final class ActiveFilter {
+  private static final int HIGHEST_ORDER = 25;
+
+  private final double ratedA;
+  private final int[] lines;
+  private final int neutral;
+  private final int offset;
+  private double part = 1;
+
+  private ActiveFilter(double ratedA, int[] lines, int neutral, int offset) {
+    this.ratedA = ratedA;
+    this.lines = lines;
+    this.neutral = neutral;
+    this.offset = offset;
+  }
+
+  /**
+   * The filter at its place.
+   *
+   * @param offset where its currents start in the whole state
+   */
+  static ActiveFilter of(Filter filter, Place place, TreeNetwork network, int offset) {
+    List<Conductor> lines = place.node().lines();
+    return new ActiveFilter(
+        filter.ratedA().orElseThrow(),
+        lines.stream()
+            .mapToInt(l -> network.index(place.networkNode(), place.conductors().of(l)))
+            .toArray(),
+        place.node().hasNeutral()
+            ? network.index(place.networkNode(), place.conductors().of(N))
+            : -1,
+        offset);
+  }
+
+  int ports() {
+    return lines.length;
+  }
+
+  int offset() {
+    return offset;
+  }
+
+  /**
+   * What it would feed at these currents.
+   *
+   * @param x the whole state, amps: what it fed when these currents were solved
+   * @param g receives what it feeds now, in its place
+   */
+  void solve(OrdersInPlay orders, OrderSolution[] solutions, double[] x, double[] g) {
+    int perLine = 2 * orders.count();
+    for (int line = 0; line < lines.length; line++) {
+      for (int k = 0; k < orders.count(); k++) {
+        int at = offset + line * perLine + 2 * k;
+        int h = orders.at(k);
+        boolean taken = h > 1 && h <= HIGHEST_ORDER;
+        g[at] = taken ? solutions[h].currentRe(lines[line]) + x[at] : 0;
+        g[at + 1] = taken ? solutions[h].currentIm(lines[line]) + x[at + 1] : 0;
+      }
+    }
+    if (neutral < 0) {
+      removeZeroSequence(g, perLine);
+    }
+    clip(g, perLine);
+  }
+
+  private void removeZeroSequence(double[] g, int perLine) {
+    for (int k = 0; k < perLine; k++) {
+      double mean = 0;
+      for (int line = 0; line < lines.length; line++) {
+        mean += g[offset + line * perLine + k] / lines.length;
+      }
+      for (int line = 0; line < lines.length; line++) {
+        g[offset + line * perLine + k] -= mean;
+      }
+    }
+  }
+
+  /** One factor for all lines keeps what sums to zero summing to zero. */
+  private void clip(double[] g, int perLine) {
+    double largest = 0;
+    for (int line = 0; line < lines.length; line++) {
+      double square = 0;
+      for (int k = 0; k < perLine; k++) {
+        double part = g[offset + line * perLine + k];
+        square += part * part;
+      }
+      largest = Math.max(largest, Math.sqrt(square));
+    }
+    part = largest > ratedA ? ratedA / largest : 1;
+    for (int k = 0; k < lines.length * perLine; k++) {
+      g[offset + k] *= part;
+    }
+  }
+
+  /**
+   * What the filter answers to a small change, in its place of {@code into}: taken off there.
+   *
+   * @param response the change of the currents
+   * @param y the change of the whole state
+   */
+  void subtractAnswer(OrdersInPlay orders, OrderSolution[] response, double[] y, double[] into) {
+    int perLine = 2 * orders.count();
+    double[] answer = new double[into.length];
+    for (int line = 0; line < lines.length; line++) {
+      for (int k = 0; k < orders.count(); k++) {
+        int at = offset + line * perLine + 2 * k;
+        int h = orders.at(k);
+        boolean taken = h > 1 && h <= HIGHEST_ORDER;
+        answer[at] = taken ? part * (response[h].currentRe(lines[line]) + y[at]) : 0;
+        answer[at + 1] = taken ? part * (response[h].currentIm(lines[line]) + y[at + 1]) : 0;
+      }
+    }
+    if (neutral < 0) {
+      removeZeroSequence(answer, perLine);
+    }
+    for (int k = offset; k < offset + lines.length * perLine; k++) {
+      into[k] -= answer[k];
+    }
+  }
+
+  /**
+   * Feeds the order at this position of the state into the panel, and takes it from the neutral.
+   */
+  void feed(Excitation excitation, OrdersInPlay orders, int position, double[] x) {
+    for (int line = 0; line < lines.length; line++) {
+      int at = offset + 2 * (line * orders.count() + position);
+      excitation.inject(lines[line], x[at], x[at + 1]);
+      if (neutral >= 0) {
+        excitation.inject(neutral, -x[at], -x[at + 1]);
+      }
+    }
+  }
+}

@@ -1,0 +1,262 @@
+package fourthwire.audit.solve;
+
+import fourthwire.audit.plan.Device;
+import fourthwire.audit.plan.LoadPlacement;
+import fourthwire.audit.plan.NetworkPlan;
+import fourthwire.audit.plan.Place;
+import fourthwire.load.LoadSolver;
+import fourthwire.load.NoSteadyStateException;
+import fourthwire.load.PortSpectra;
+import fourthwire.network.Excitation;
+import fourthwire.network.OrderSolution;
+import fourthwire.network.TreeNetwork;
+import fourthwire.quantity.Conductor;
+import java.util.List;
+
+/**
+ * One load at its place in the network while the two are solved together: a mutable work block, for
+ * one thread at a time.
+ */
+final class DevicePort {
+  private static final int NONE = -1;
+
+  /** Part of the nominal voltage by which one order is stepped to find a slope. */
+  private static final double SLOPE_STEP = 1e-4;
+
+  private static final double THIRD = 2 * Math.PI / 3;
+
+  private final Device device;
+  private final int[] from;
+  private final int to;
+  private final LoadSolver solver;
+  private final PortSpectra voltage;
+  private final PortSpectra emf;
+  private final PortSpectra drawn;
+  private final int offset;
+  private double seriesOhm;
+  private double seriesHenry;
+  private double voltageMovedV;
+  private String failure = "";
+
+  private DevicePort(Device device, int[] from, int to, int offset) {
+    this.device = device;
+    this.from = from;
+    this.to = to;
+    this.offset = offset;
+    this.solver = device.model().newSolver();
+    this.voltage = new PortSpectra(from.length);
+    this.emf = new PortSpectra(from.length);
+    this.drawn = new PortSpectra(from.length);
+  }
+
+  /**
+   * The load at its place.
+   *
+   * @param offset where its currents start in the whole state
+   */
+  static DevicePort of(Device device, NetworkPlan plan, int offset) {
+    LoadPlacement placement = device.placement();
+    Place place = plan.get(placement.circuit());
+    int[] from = placement.from().stream().mapToInt(c -> index(plan.network(), place, c)).toArray();
+    List<Conductor> to = placement.to();
+    return new DevicePort(
+        device, from, to.isEmpty() ? NONE : index(plan.network(), place, to.get(0)), offset);
+  }
+
+  private static int index(TreeNetwork network, Place place, Conductor conductor) {
+    return network.index(place.networkNode(), place.conductors().of(conductor));
+  }
+
+  Device device() {
+    return device;
+  }
+
+  int ports() {
+    return from.length;
+  }
+
+  int offset() {
+    return offset;
+  }
+
+  double nominalV() {
+    return device.placement().request().nominalPortV();
+  }
+
+  void setSeries(double ohm, double henry) {
+    seriesOhm = ohm;
+    seriesHenry = henry;
+  }
+
+  double seriesOhm() {
+    return seriesOhm;
+  }
+
+  double seriesHenry() {
+    return seriesHenry;
+  }
+
+  /** How many numbers of the state are its own. */
+  int length(OrdersInPlay orders) {
+    return 2 * ports() * orders.count();
+  }
+
+  /** The largest change of a voltage of one order since the pass before, volts. */
+  double voltageMovedV() {
+    return voltageMovedV;
+  }
+
+  /** Why the last solution failed; empty if it did not. */
+  String failure() {
+    return failure;
+  }
+
+  /** Voltage of one port in one order's solution, real part. */
+  double voltageRe(int port, OrderSolution s) {
+    return s.potentialRe(from[port]) - (to == NONE ? 0 : s.potentialRe(to));
+  }
+
+  /** Likewise, imaginary part. */
+  double voltageIm(int port, OrderSolution s) {
+    return s.potentialIm(from[port]) - (to == NONE ? 0 : s.potentialIm(to));
+  }
+
+  /** Draws a current at one port: out of the line, back into the return conductor. */
+  void draw(Excitation excitation, int port, double re, double im) {
+    excitation.inject(from[port], -re, -im);
+    if (to != NONE) {
+      excitation.inject(to, re, im);
+    }
+  }
+
+  /** Takes the voltages of the solved orders. */
+  void takeVoltages(OrdersInPlay orders, OrderSolution[] solutions) {
+    double moved = 0;
+    for (int port = 0; port < from.length; port++) {
+      for (int k = 0; k < orders.count(); k++) {
+        int h = orders.at(k);
+        double re = voltageRe(port, solutions[h]);
+        double im = voltageIm(port, solutions[h]);
+        moved = Math.max(moved, Math.hypot(re - voltage.re[port][h], im - voltage.im[port][h]));
+        voltage.re[port][h] = re;
+        voltage.im[port][h] = im;
+      }
+    }
+    voltageMovedV = moved;
+  }
+
+  /**
+   * Solves the load at the voltages taken.
+   *
+   * @param x the whole state, amps: what it drew when these voltages were solved
+   * @param g receives what it draws now, in its place
+   */
+  void solve(OrdersInPlay orders, double omega, double[] x, double[] g) {
+    int at = offset;
+    for (int port = 0; port < from.length; port++) {
+      for (int k = 0; k < orders.count(); k++) {
+        int h = orders.at(k);
+        double reactance = h * omega * seriesHenry;
+        emf.re[port][h] = voltage.re[port][h] + seriesOhm * x[at] - reactance * x[at + 1];
+        emf.im[port][h] = voltage.im[port][h] + seriesOhm * x[at + 1] + reactance * x[at];
+        at += 2;
+      }
+    }
+    failure = "";
+    try {
+      solver.solve(emf, seriesOhm, seriesHenry, drawn);
+      copyDrawn(orders, g, offset);
+    } catch (NoSteadyStateException e) {
+      failure = String.valueOf(e.getMessage());
+    }
+  }
+
+  private void copyDrawn(OrdersInPlay orders, double[] into, int start) {
+    int at = start;
+    for (int port = 0; port < from.length; port++) {
+      for (int k = 0; k < orders.count(); k++) {
+        into[at++] = drawn.re[port][orders.at(k)];
+        into[at++] = drawn.im[port][orders.at(k)];
+      }
+    }
+  }
+
+  /**
+   * The slope at the electromotive force last solved, by small steps of it. Of a load on three
+   * lines only the first line's columns are stepped: turning all by a third of a cycle gives the
+   * others, exactly on a balanced voltage and well enough to iterate with on any other.
+   */
+  DeviceSlope slope(OrdersInPlay orders) {
+    int size = length(orders);
+    DeviceSlope slope = new DeviceSlope(size);
+    double[] before = new double[size];
+    double[] after = new double[size];
+    double step = SLOPE_STEP * nominalV();
+    solver.solve(emf, seriesOhm, seriesHenry, drawn);
+    copyDrawn(orders, before, 0);
+    for (int k = 0; k < orders.count(); k++) {
+      for (int part = 0; part < 2; part++) {
+        double[] stepped = part == 0 ? emf.re[0] : emf.im[0];
+        int h = orders.at(k);
+        stepped[h] += step;
+        try {
+          solver.solve(emf, seriesOhm, seriesHenry, drawn);
+        } finally {
+          stepped[h] -= step;
+        }
+        copyDrawn(orders, after, 0);
+        for (int row = 0; row < size; row++) {
+          slope.set(row, 2 * k + part, (after[row] - before[row]) / step);
+        }
+      }
+    }
+    for (int port = 1; port < from.length; port++) {
+      turn(slope, orders, port);
+    }
+    return slope;
+  }
+
+  /** Columns of a port from those of the port before: delayed by a third of a cycle. */
+  private void turn(DeviceSlope slope, OrdersInPlay orders, int port) {
+    int perPort = 2 * orders.count();
+    for (int row = 0; row < orders.count(); row++) {
+      for (int column = 0; column < orders.count(); column++) {
+        double out = -orders.at(row) * THIRD;
+        double in = -orders.at(column) * THIRD;
+        for (int line = 0; line < from.length; line++) {
+          int fromRow = Math.floorMod(line - 1, from.length) * perPort + 2 * row;
+          int fromColumn = (port - 1) * perPort + 2 * column;
+          turnBlock(
+              slope,
+              fromRow,
+              fromColumn,
+              line * perPort + 2 * row,
+              port * perPort + 2 * column,
+              out,
+              in);
+        }
+      }
+    }
+  }
+
+  /** A two-by-two block B becomes T(out)·B·T(-in), T turning a phasor. */
+  private static void turnBlock(
+      DeviceSlope s, int fromRow, int fromColumn, int row, int column, double out, double in) {
+    double a = s.get(fromRow, fromColumn);
+    double b = s.get(fromRow, fromColumn + 1);
+    double c = s.get(fromRow + 1, fromColumn);
+    double d = s.get(fromRow + 1, fromColumn + 1);
+    double co = Math.cos(out);
+    double so = Math.sin(out);
+    double ci = Math.cos(in);
+    double si = Math.sin(in);
+    double topRe = co * a - so * c;
+    double topIm = co * b - so * d;
+    double lowRe = so * a + co * c;
+    double lowIm = so * b + co * d;
+    s.set(row, column, topRe * ci - topIm * si);
+    s.set(row, column + 1, topRe * si + topIm * ci);
+    s.set(row + 1, column, lowRe * ci - lowIm * si);
+    s.set(row + 1, column + 1, lowRe * si + lowIm * ci);
+  }
+}
