@@ -10,8 +10,12 @@ package fourthwire.load;
  */
 final class CapacitorInputSolver implements LoadSolver {
   private static final double TOLERANCE = 1e-8;
+
+  /** A capacitor under this share of the crest is empty: no supply runs on it. */
+  private static final double LEAST_SHARE = 0.05;
+
   private static final int MOST_SECANTS = 40;
-  private static final int MOST_SUBSTITUTIONS = 2000;
+  private static final int MOST_SUBSTITUTIONS = 600;
 
   private final BridgeLoad load;
   private final double frequencyHz;
@@ -43,8 +47,9 @@ final class CapacitorInputSolver implements LoadSolver {
   private String refusal() {
     return String.format(
         java.util.Locale.ROOT,
-        "a capacitor-input rectifier of %.4g W has no steady state at %.4g V peak behind %.4g ohm"
-            + " and %.4g mH: the source cannot give what the load asks for",
+        "a capacitor-input rectifier of %.4g W finds no steady state at %.4g V peak behind %.4g ohm"
+            + " and %.4g mH: the source cannot give what the load asks for, or the current does not"
+            + " repeat from cycle to cycle",
         load.powerW(),
         peak,
         bridge.path.resistance,
@@ -58,6 +63,7 @@ final class CapacitorInputSolver implements LoadSolver {
     if (!(peak > 0) || Double.isInfinite(peak)) {
       throw new NoSteadyStateException("a capacitor-input rectifier has no voltage to draw from");
     }
+    bridge.floorV = LEAST_SHARE * peak;
     double cellSeconds = 1 / (frequencyHz * CycleTable.CELLS);
     bridge.path.set(load.lineOhm() + seriesOhm, load.lineHenry() + seriesHenry, load, cellSeconds);
     bridge.path.threshold(1e-3 * load.powerW() / peak);

@@ -56,11 +56,11 @@ final class OverlapStep {
 
   void threshold(double amps) {
     threshold = amps;
-    thresholdV = slopeV * Math.log1p(amps / saturation);
+    thresholdV = slopeV * Math.log(1 + amps / saturation);
   }
 
   private double drop(double amps) {
-    return amps > threshold ? slopeV * Math.log1p(amps / saturation) : thresholdV;
+    return amps > threshold ? slopeV * Math.log(1 + amps / saturation) : thresholdV;
   }
 
   private double conductance(double amps) {

@@ -14,18 +14,21 @@ final class PairBridge {
   enum End {
     /** The end of the interval was reached. */
     REACHED,
-    /** The load emptied the capacitor: no voltage is left to draw power at. */
+    /** The load emptied the capacitor, or the current breaks up without end as it does so. */
     COLLAPSED
   }
 
   /** First steps after a turn-on, as shares of the way to a node: the current starts like t². */
   private static final double[] GRADING = {0.02, 0.06, 0.16, 0.36, 1};
 
-  private static final int MOST_SWITCHINGS = 400;
+  private static final int MOST_SWITCHINGS = 200;
 
   final CycleTable emf = new CycleTable();
   final PathStep path = new PathStep();
   final PulseTrace trace = new PulseTrace();
+
+  /** Capacitor voltage under which the load counts as having emptied it. */
+  double floorV;
 
   private boolean recording;
   private int switchings;
@@ -80,12 +83,6 @@ final class PairBridge {
     return End.REACHED;
   }
 
-  private void countSwitching() {
-    if (++switchings > MOST_SWITCHINGS) {
-      throw new NoSteadyStateException("the rectifier's current switches too often to be followed");
-    }
-  }
-
   /** Off until |e| passes the capacitor; leaves u at the turn-on or at the end. */
   private boolean rest(double to) {
     double from = u;
@@ -97,7 +94,7 @@ final class PairBridge {
     while (!on) {
       double node = Math.min(Math.floor(before) + 1, to);
       double left = square - fall * (node - from);
-      if (left <= 0) {
+      if (left <= floorV * floorV) {
         return false;
       }
       double drive = Math.abs(emf.at(node)) - path.thresholdV;
@@ -156,7 +153,9 @@ final class PairBridge {
    * On until the current falls through the threshold or the end; false if the capacitor empties.
    */
   private boolean conduct(double to) {
-    countSwitching();
+    if (++switchings > MOST_SWITCHINGS) {
+      return false;
+    }
     boolean starting = i == 0;
     int sign = (starting ? emf.at(u) : i) >= 0 ? 1 : -1;
     double amps = starting ? path.threshold : Math.abs(i);
@@ -190,7 +189,7 @@ final class PairBridge {
     double e0 = sign * emf.at(u);
     double d0 = sign * emf.slopeAt(u);
     path.step(h, amps, v, e0, d0, sign * emf.at(next));
-    if (!(path.v > 0)) {
+    if (!(path.v > floorV)) {
       v = 0;
       return 0;
     }

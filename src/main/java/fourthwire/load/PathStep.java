@@ -67,11 +67,11 @@ final class PathStep {
 
   void threshold(double amps) {
     threshold = amps;
-    thresholdV = slopeV * Math.log1p(amps / saturation);
+    thresholdV = slopeV * Math.log(1 + amps / saturation);
   }
 
   private double drop(double amps) {
-    return amps > threshold ? slopeV * Math.log1p(amps / saturation) : thresholdV;
+    return amps > threshold ? slopeV * Math.log(1 + amps / saturation) : thresholdV;
   }
 
   /** Steps from (i0, v0) over h cells while the drive goes from e0 (slope d0 per cell) to e1. */

@@ -9,12 +9,15 @@ import java.util.Locale;
  *
  * <p>With D the dead zone's map, i = G·(v - D·v) + residual and v = e - Z·i, so v = (1 + G·Z)⁻¹·(e
  * + G·Z·D·v - Z·residual). D is a projection and |G·Z/(1 + G·Z)| below 1 for every passive Z, so
- * that repetition converges; the crossings and G are renewed in each turn.
+ * that repetition converges; the crossings and G are renewed in each turn. Behind a soft source the
+ * voltage may ring at its crossing so that no crossing is consistent with the current it causes;
+ * then the fundamental's is taken, as a control's own filter does.
  */
 final class PfcSolver implements LoadSolver {
   private static final int ORDERS = Spectrum.HIGHEST_ORDER;
   private static final double TOLERANCE = 1e-9;
-  private static final int MOST_TURNS = 2000;
+  private static final int MOST_TURNS = 1000;
+  private static final int TURNS_ON_CROSSING = 100;
 
   private final double powerW;
   private final double frequencyHz;
@@ -31,6 +34,7 @@ final class PfcSolver implements LoadSolver {
   private final double[] zoneIm = new double[ORDERS + 1];
 
   private int step;
+  private boolean lockedToFundamental;
   private double residualRe;
   private double residualIm;
 
@@ -57,6 +61,7 @@ final class PfcSolver implements LoadSolver {
     double g = 0;
     double moved = Double.POSITIVE_INFINITY;
     for (int turn = 0; turn < MOST_TURNS && moved > TOLERANCE * strength; turn++) {
+      lockedToFundamental = turn >= TURNS_ON_CROSSING;
       g = conductance();
       if (!(g > 0) || !(Math.hypot(vRe[1], vIm[1]) > 0.2 * strength)) {
         break;
@@ -97,9 +102,9 @@ final class PfcSolver implements LoadSolver {
     Arrays.fill(insideRe, 0);
     Arrays.fill(insideIm, 0);
     double first = -Math.atan2(vIm[1], vRe[1]);
-    addZone(Crossing.near(vRe, vIm, first));
+    addZone(trigger(first));
     if (step == 1) {
-      addZone(Crossing.near(vRe, vIm, first + Math.PI));
+      addZone(trigger(first + Math.PI));
     }
     residualOfThird();
     double power = vRe[3] * residualRe + vIm[3] * residualIm;
@@ -107,6 +112,10 @@ final class PfcSolver implements LoadSolver {
       power += vRe[h] * (vRe[h] - insideRe[h]) + vIm[h] * (vIm[h] - insideIm[h]);
     }
     return powerW / power;
+  }
+
+  private double trigger(double fundamentals) {
+    return lockedToFundamental ? fundamentals : Crossing.near(vRe, vIm, fundamentals);
   }
 
   /** Per siemens of G: -residual·|V1|∠3θ, most negative near the crossings. */

@@ -12,8 +12,15 @@ import java.util.Locale;
  */
 final class SixPulseSolver implements LoadSolver {
   private static final double TOLERANCE = 1e-8;
+
+  /**
+   * With a direct-current choke and no line inductance at all commutation would take no time; a
+   * lead's least share keeps it finite (0.001 % of V²/P).
+   */
+  private static final double LEAST_REACTANCE = 1e-5 / (2 * Math.PI);
+
   private static final int MOST_NEWTONS = 60;
-  private static final int MOST_SUBSTITUTIONS = 6000;
+  private static final int MOST_SUBSTITUTIONS = 400;
 
   private final BridgeLoad load;
   private final double frequencyHz;
@@ -82,7 +89,6 @@ final class SixPulseSolver implements LoadSolver {
   private void prepare(PortSpectra emf, double seriesOhm, double seriesHenry) {
     bridge.fill(emf);
     double cellSeconds = 1 / (frequencyHz * CycleTable.CELLS);
-    bridge.set(load.lineOhm() + seriesOhm, load.lineHenry() + seriesHenry, load, cellSeconds);
     peak = 0;
     for (int n = 0; n < CycleTable.CELLS; n++) {
       double a = bridge.emf[0].value[n];
@@ -94,6 +100,10 @@ final class SixPulseSolver implements LoadSolver {
       throw new NoSteadyStateException("a six-pulse rectifier has no voltage to draw from");
     }
     ampsScale = load.powerW() / peak;
+    bridge.floorV = 0.05 * peak;
+    double leastHenry = load.dcHenry() > 0 ? LEAST_REACTANCE * peak / ampsScale / frequencyHz : 0;
+    double henry = Math.max(load.lineHenry() + seriesHenry, leastHenry);
+    bridge.set(load.lineOhm() + seriesOhm, henry, load, cellSeconds);
     bridge.threshold(1e-3 * ampsScale);
     double share = !halfWave() ? 1 : balanced() ? 1.0 / 6 : 0.5;
     cells = CycleTable.CELLS * share;

@@ -12,6 +12,14 @@ final class ThreeLineBridge {
   private static final double[] GRADING = {0.02, 0.06, 0.16, 0.36, 1};
   private static final int MOST_SWITCHINGS = 600;
 
+  /** A line that has left stands just at its rail: for this many cells rounding could recall it. */
+  private static final double REST_OF_LEAVER = 0.1;
+
+  /** Unless it is past a rail (the other one) by this many volts. */
+  private static final double CLEARLY_PAST_V = 1;
+
+  private static final double SHORTEST_STEP = 1e-9;
+
   final CycleTable[] emf = {new CycleTable(), new CycleTable(), new CycleTable()};
   final PulseTrace[] trace = {new PulseTrace(), new PulseTrace(), new PulseTrace()};
   final PathStep pair = new PathStep();
@@ -22,6 +30,9 @@ final class ThreeLineBridge {
 
   /** Capacitor voltage. */
   double v;
+
+  /** Capacitor voltage under which the load counts as having emptied it. */
+  double floorV;
 
   private double lineInductance;
   private double lineOhm;
@@ -150,7 +161,7 @@ final class ThreeLineBridge {
     while (!on) {
       double node = Math.min(Math.floor(before) + 1, to);
       double left = square - fall * (node - from);
-      if (left <= 0) {
+      if (left <= floorV * floorV) {
         return false;
       }
       double drive = difference(node) - pair.thresholdV;
@@ -203,8 +214,10 @@ final class ThreeLineBridge {
     begin();
     int p = line[0] > 0 ? 0 : line[1] > 0 ? 1 : 2;
     int n = line[0] < 0 ? 0 : line[1] < 0 ? 1 : 2;
-    if (u >= joinNotBefore && joins(p, n, 3 - p - n, line[p], u, v)) {
-      return v > 0;
+    double clearly = u < joinNotBefore ? CLEARLY_PAST_V : 0;
+    if (joinMargin(p, n, 3 - p - n, line[p], u, v) > clearly) {
+      join(p, n, 3 - p - n);
+      return true;
     }
     double base = u;
     double span = gradedSpan(to);
@@ -239,15 +252,14 @@ final class ThreeLineBridge {
     if (leaves) {
       h = leaveOfPair(h, x, v0, e0, d0, p, n, start);
     }
-    if (start + h >= joinNotBefore && joinMargin(p, n, third, pair.i, start + h, pair.v) > 0) {
+    boolean joins =
+        start + h >= joinNotBefore && joinMargin(p, n, third, pair.i, start + h, pair.v) > 0;
+    if (joins) {
       h = joinOfPair(h, x, v0, e0, d0, p, n, start);
       leaves = false;
-      if (start + h <= joinNotBefore) {
-        h = Math.max(h, 1e-7);
-      }
     }
     double charge = pair.charge(h, v);
-    u = leaves || h < next - start ? start + h : next;
+    u = leaves || joins ? start + h : next;
     v = pair.v;
     line[p] = pair.i;
     line[n] = -pair.i;
@@ -255,7 +267,7 @@ final class ThreeLineBridge {
       trace[p].next(u, pair.i, charge);
       trace[n].next(u, -pair.i, -charge);
     }
-    if (!(v > 0)) {
+    if (!(v > floorV)) {
       v = 0;
       return false;
     }
@@ -264,7 +276,10 @@ final class ThreeLineBridge {
       line[n] = 0;
       return false;
     }
-    return u < joinNotBefore || !joins(p, n, third, pair.i, u, v);
+    if (joins) {
+      join(p, n, third);
+    }
+    return !joins;
   }
 
   private void tryPair(
@@ -293,7 +308,7 @@ final class ThreeLineBridge {
       }
     }
     tryPair(high, x, v0, e0, d0, p, n, start);
-    return high;
+    return Math.max(high, SHORTEST_STEP);
   }
 
   private double joinOfPair(
@@ -318,14 +333,14 @@ final class ThreeLineBridge {
       }
     }
     tryPair(high, x, v0, e0, d0, p, n, start);
-    return high;
+    return Math.max(high, SHORTEST_STEP);
   }
 
   /** By how many volts the idle line passes a rail and a diode's threshold; negative inside. */
   private double joinMargin(int p, int n, int third, double x, double at, double volts) {
     double upper = emf[p].at(at);
     double lower = emf[n].at(at);
-    double own = pair.slopeV * 0.5 * Math.log1p(x / pair.saturation);
+    double own = pair.slopeV * 0.5 * Math.log(1 + x / pair.saturation);
     double residual = upper - lower - volts - pair.resistance * x - 2 * own;
     double share = lineInductance == 0 ? 0 : lineInductance / pair.inductance;
     double drop = share * residual + lineOhm * x + own;
@@ -333,21 +348,14 @@ final class ThreeLineBridge {
     return Math.max(e - (upper - drop), lower + drop - e) - overlap.thresholdV;
   }
 
-  /** Lets the idle line in where it passes a rail. */
-  private boolean joins(int p, int n, int third, double x, double at, double volts) {
-    if (joinMargin(p, n, third, x, at, volts) < 0) {
-      return false;
-    }
-    double middle = emf[p].at(at) + emf[n].at(at);
-    boolean up = 2 * emf[third].at(at) > middle;
+  /** Lets the idle line in on the rail it has passed, with a threshold's current. */
+  private void join(int p, int n, int third) {
+    boolean up = 2 * emf[third].at(u) > emf[p].at(u) + emf[n].at(u);
     double little = pair.threshold;
+    line[p] = Math.max(line[p], 2 * little);
+    line[n] = -line[p];
     line[third] = up ? little : -little;
-    line[up ? p : n] += up ? -little : little;
-    if (line[up ? p : n] == 0) {
-      line[up ? p : n] = up ? little : -little;
-      line[up ? n : p] += up ? -little : little;
-    }
-    return true;
+    line[up ? p : n] -= line[third];
   }
 
   private boolean runOverlap(double to, boolean fresh) {
@@ -399,7 +407,7 @@ final class ThreeLineBridge {
           gLow /= 2;
         }
       }
-      h = high;
+      h = Math.max(high, SHORTEST_STEP);
       tryOverlap(h, xa, xb, a, b, c, sign, start);
     }
     u = leaves ? start + h : next;
@@ -412,20 +420,18 @@ final class ThreeLineBridge {
         trace[k].next(u, line[k], Double.NaN);
       }
     }
-    if (!(v > 0)) {
+    if (!(v > floorV)) {
       v = 0;
       return false;
     }
     if (leaves) {
-      leave(a, b, c, sign, h);
+      leave(a, b, c, sign);
     }
     return !leaves;
   }
 
-  private void leave(int a, int b, int c, int sign, double h) {
-    if (h < 1e-5) {
-      joinNotBefore = Math.floor(u) + 1;
-    }
+  private void leave(int a, int b, int c, int sign) {
+    joinNotBefore = u + REST_OF_LEAVER;
     int gone = overlap.xa < overlap.xb ? a : b;
     int stays = gone == a ? b : a;
     double x = Math.max(overlap.xa, overlap.xb);

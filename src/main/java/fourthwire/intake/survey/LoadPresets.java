@@ -1,5 +1,7 @@
 package fourthwire.intake.survey;
 
+import fourthwire.load.Preset;
+import fourthwire.load.Presets;
 import fourthwire.site.LoadKind;
 import fourthwire.site.check.PresetKinds;
 import java.util.List;
@@ -9,11 +11,11 @@ import java.util.Optional;
 final class LoadPresets implements PresetKinds {
   @Override
   public List<String> names() {
-    return List.of();
+    return Presets.names();
   }
 
   @Override
   public Optional<LoadKind> kindOf(String preset) {
-    return Optional.empty();
+    return Presets.find(preset).map(Preset::kind);
   }
 }

@@ -1,0 +1,56 @@
+package fourthwire.load;
+
+import fourthwire.site.LoadKind;
+import fourthwire.site.ModelColumns;
+import java.util.Optional;
+import java.util.OptionalDouble;
+
+/** Small builders for load model tests. */
+final class LoadCases {
+  private LoadCases() {}
+
+  /** A request of this kind with every model column empty. */
+  static LoadRequest request(LoadKind kind, double watts, double units, double demand) {
+    boolean three = kind.family() == LoadKind.Family.THREE_PHASE;
+    return new LoadRequest(
+        kind,
+        three ? 3 : 1,
+        50,
+        three ? 400 : 230,
+        new LoadRequest.Rating.Watts(watts),
+        units,
+        demand,
+        true,
+        OptionalDouble.empty(),
+        ModelColumns.NONE,
+        Optional.empty());
+  }
+
+  /** Sinusoidal, balanced electromotive force of nominal port voltage, turned by some degrees. */
+  static PortSpectra emf(int ports, double nominalV, double degrees) {
+    PortSpectra emf = new PortSpectra(ports);
+    double v = ports == 3 ? nominalV / Math.sqrt(3) : nominalV;
+    for (int p = 0; p < ports; p++) {
+      double angle = Math.toRadians(degrees - 120 * p);
+      emf.re[p][1] = v * Math.cos(angle);
+      emf.im[p][1] = v * Math.sin(angle);
+    }
+    return emf;
+  }
+
+  /** Whole current (injected and, from the terminal voltage, linear) behind a series R-L. */
+  static PortSpectra current(LoadModel model, double nominalV, double ohm, double henry) {
+    PortSpectra emf = emf(model.ports(), nominalV, 0);
+    PortSpectra current = new PortSpectra(model.ports());
+    model.newSolver().solve(emf, ohm, henry, current);
+    double[] y = new double[6];
+    model.linearSiemens(1, y);
+    for (int p = 0; p < model.ports(); p++) {
+      double re = emf.re[p][1];
+      double im = emf.im[p][1];
+      current.re[p][1] += y[0] * re - y[1] * im;
+      current.im[p][1] += y[0] * im + y[1] * re;
+    }
+    return current;
+  }
+}
