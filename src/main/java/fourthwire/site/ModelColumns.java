@@ -38,4 +38,27 @@ public record ModelColumns(
           OptionalDouble.empty(),
           OptionalDouble.empty(),
           OptionalDouble.empty());
+
+  /** These columns, and where one is empty the other's. */
+  public ModelColumns orElse(ModelColumns other) {
+    return new ModelColumns(
+        or(efficiency, other.efficiency),
+        or(capacitanceUfPerW, other.capacitanceUfPerW),
+        or(sourceResistanceOhm, other.sourceResistanceOhm),
+        or(sourceInductanceUh, other.sourceInductanceUh),
+        or(diodeSaturationA, other.diodeSaturationA),
+        or(diodeEmission, other.diodeEmission),
+        or(diodeResistanceOhm, other.diodeResistanceOhm),
+        or(lineChokePercent, other.lineChokePercent),
+        or(dcChokePercent, other.dcChokePercent),
+        or(firingDegrees, other.firingDegrees),
+        or(inputFilterUf, other.inputFilterUf),
+        or(deadAngleDegrees, other.deadAngleDegrees),
+        or(residualPercent, other.residualPercent),
+        or(lockedRotorReactancePercent, other.lockedRotorReactancePercent));
+  }
+
+  private static OptionalDouble or(OptionalDouble own, OptionalDouble other) {
+    return own.isPresent() ? own : other;
+  }
 }

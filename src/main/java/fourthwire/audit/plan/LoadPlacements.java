@@ -2,6 +2,7 @@ package fourthwire.audit.plan;
 
 import static fourthwire.quantity.Conductor.N;
 
+import fourthwire.load.LoadModels;
 import fourthwire.load.LoadRequest;
 import fourthwire.load.LoadRequest.Rating;
 import fourthwire.quantity.Conductor;
@@ -84,18 +85,19 @@ public final class LoadPlacements {
       List<Conductor> to,
       int shares) {
     boolean lineToNeutral = from.size() == 1 && to.equals(List.of(N));
+    double portV = lineToNeutral ? circuit.lineToNeutralV() : circuit.nominalV();
     LoadRequest request =
         new LoadRequest(
             equipment.kind(),
             from.size(),
             frequencyHz,
-            lineToNeutral ? circuit.lineToNeutralV() : circuit.nominalV(),
+            portV,
             share(equipment.rating(), shares),
             load.quantity(),
             load.demandFactor().orElse(1),
             lowerPower(load, equipment.kind()),
-            load.displacementFactor(),
-            equipment.columns(),
+            equipment.displacementFactor(),
+            equipment.columns(portV),
             load.spectrum().map(name -> spectrum(load, name)));
     return new LoadPlacement(load, circuit.name(), from, to, request);
   }
@@ -133,24 +135,10 @@ public final class LoadPlacements {
     for (SpectrumTable.Row row : table.rows()) {
       double assumed =
           row.order() == 1
-              ? fundamentalDegrees(load.displacementFactor())
-              : crestPulseDegrees(row.order());
+              ? LoadModels.fundamentalDegrees(OptionalDouble.empty(), load.displacementFactor())
+              : LoadModels.assumedHarmonicDegrees(row.order());
       byOrder[row.order()] = Phasor.polar(row.percent() / 100, row.degrees().orElse(assumed));
     }
     return Spectrum.of(h -> Optional.ofNullable(byOrder[h]).orElse(Phasor.ZERO));
-  }
-
-  private static double fundamentalDegrees(OptionalDouble displacementFactor) {
-    if (displacementFactor.isEmpty()) {
-      return 0;
-    }
-    double factor = displacementFactor.getAsDouble();
-    double degrees = Math.toDegrees(Math.acos(Math.min(1, Math.abs(factor))));
-    return factor < 0 ? degrees : -degrees;
-  }
-
-  /** A pulse at the crest of the voltage: 180° for 3, 7, 11 …, 0° for 5, 9, 13 … */
-  public static double crestPulseDegrees(int order) {
-    return order % 4 == 3 ? 180 : 0;
   }
 }
