@@ -40,9 +40,10 @@ record Equipment(
    * The model columns of one unit.
    *
    * @param portV nominal voltage of its port (line to line on three lines)
+   * @param shares how many ports a unit is spread over
    */
-  ModelColumns columns(double portV) {
-    return preset.map(p -> row.orElse(p.columns(roughW(portV), portV))).orElse(row);
+  ModelColumns columns(double portV, int shares) {
+    return preset.map(p -> row.orElse(p.columns(roughW(portV) / shares, portV))).orElse(row);
   }
 
   /** About how many watts a unit draws, for what a preset sizes by its power. */

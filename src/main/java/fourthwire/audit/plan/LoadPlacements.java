@@ -97,7 +97,7 @@ public final class LoadPlacements {
             load.demandFactor().orElse(1),
             lowerPower(load, equipment.kind()),
             equipment.displacementFactor(),
-            equipment.columns(portV),
+            equipment.columns(portV, shares),
             load.spectrum().map(name -> spectrum(load, name)));
     return new LoadPlacement(load, circuit.name(), from, to, request);
   }
