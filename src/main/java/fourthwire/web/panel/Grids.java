@@ -8,24 +8,30 @@ import java.util.ArrayList;
 import java.util.List;
 
 /** Puts figures together as a table, row by row, and aligns its columns at the end. */
-final class Grids {
+public final class Grids {
   private final Words words;
   private final String title;
   private final List<String> heads;
   private final List<String> names = new ArrayList<>();
   private final List<List<Figure>> rows = new ArrayList<>();
 
-  Grids(Words words, String title, List<String> heads) {
+  /** An empty table with this caption and these column heads, the first over the names. */
+  public Grids(Words words, String title, List<String> heads) {
     this.words = words;
     this.title = title;
     this.heads = heads;
   }
 
   /** Adds a row; an unknown figure without a reason leaves its cell empty. */
-  Grids row(String name, List<Figure> figures) {
+  public Grids row(String name, List<Figure> figures) {
     names.add(name);
     rows.add(figures);
     return this;
+  }
+
+  /** The table. */
+  public NodePage.Grid done() {
+    return done(new Working[0]);
   }
 
   /** The table with these workings beside it. */

@@ -38,6 +38,7 @@ public final class NodeRows {
     int top = results.stream().mapToInt(r -> depth(tree, r.node())).min().orElse(0);
     List<String> line = column(results, NodeRows::lineLoading);
     List<String> neutral = column(results, d -> d.neutral().loadingPercent());
+    List<String> amps = results.stream().map(NodeRows::neutralAmps).toList();
     List<String> thd = column(results, NodeRows::voltageThd);
     List<NodeRow> rows = new ArrayList<>();
     for (int i = 0; i < results.size(); i++) {
@@ -51,7 +52,7 @@ public final class NodeRows {
               about(result, survey),
               result.design().map(d -> rails(d, survey)).orElse(""),
               line.get(i),
-              neutral.get(i),
+              neutral.get(i).isEmpty() ? amps.get(i) : neutral.get(i),
               thd.get(i),
               Verdict.of(result.findings()),
               about(result)));
@@ -118,6 +119,16 @@ public final class NodeRows {
     return percent.value().isPresent()
         ? OptionalDouble.of(percent.value().getAsDouble() / 100)
         : OptionalDouble.empty();
+  }
+
+  /** Where no ampacity is known: what the neutral carries. */
+  private static String neutralAmps(NodeResult result) {
+    return result
+        .design()
+        .map(d -> d.neutral().rmsA().value())
+        .filter(OptionalDouble::isPresent)
+        .map(a -> Numbers.of(a.getAsDouble(), "A"))
+        .orElse("");
   }
 
   private static List<String> column(

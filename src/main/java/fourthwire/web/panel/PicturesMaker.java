@@ -101,6 +101,7 @@ final class PicturesMaker {
   }
 
   private String spectrum(List<Conductor> series, List<Integer> orders) {
+    Optional<OrderLimits> limits = OrderLimits.at(node, design);
     List<SpectrumPlot.Group> groups =
         orders.stream()
             .map(
@@ -108,7 +109,7 @@ final class PicturesMaker {
                     new SpectrumPlot.Group(
                         h,
                         series.stream().map(c -> spectrum(c).magnitude(h)).toList(),
-                        OptionalDouble.empty()))
+                        limits.map(l -> l.amps(h)).orElse(OptionalDouble.empty())))
             .toList();
     return SpectrumPlot.draw(
         series,
@@ -119,8 +120,19 @@ final class PicturesMaker {
   }
 
   private String spectrumOf(List<Conductor> series) {
-    return words.of(
-        "spectrum.of." + series.size(), series.stream().map(names::of).toArray(Object[]::new));
+    String of =
+        words.of(
+            "spectrum.of." + series.size(), series.stream().map(names::of).toArray(Object[]::new));
+    return OrderLimits.at(node, design)
+        .filter(l -> series.get(0).isLine())
+        .map(
+            l ->
+                words.of(
+                    l.binding() ? "spectrum.limit" : "spectrum.guidance",
+                    of,
+                    l.basis(),
+                    names.of(series.get(0))))
+        .orElse(of);
   }
 
   private String voltage(Map.Entry<String, Spectrum> worst) {

@@ -6,7 +6,7 @@ import java.util.List;
 import java.util.Locale;
 
 /** How a figure of the page comes about: its formula and where that stands. */
-enum Working {
+public enum Working {
   RMS,
   FUNDAMENTAL,
   THD,
@@ -34,7 +34,7 @@ enum Working {
   UNBALANCE;
 
   /** One figure's working, in words. */
-  record Line(String name, String formula, String source) {}
+  public record Line(String name, String formula, String source) {}
 
   /** These workings in words. */
   static List<Line> lines(Words words, Working... workings) {

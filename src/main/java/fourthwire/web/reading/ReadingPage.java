@@ -1,0 +1,41 @@
+package fourthwire.web.reading;
+
+import fourthwire.web.panel.NodePage;
+import java.util.List;
+import java.util.Optional;
+
+/**
+ * What the page of a reading shows.
+ *
+ * @param facts what was read: files, period, length, digest
+ * @param quality what is wrong with it, worst first
+ * @param quantities of a log
+ * @param currents of a capture, likewise voltages and powers
+ */
+record ReadingPage(
+    long id,
+    String meter,
+    String node,
+    String kindKey,
+    List<Fact> facts,
+    List<String> notes,
+    List<Quality> quality,
+    Optional<NodePage.Grid> quantities,
+    List<NodePage.Grid> capture,
+    String spectrum,
+    String cycle,
+    List<NodePage.Key> keys,
+    String basis) {
+  /** A fact about the file. */
+  record Fact(String key, String text) {}
+
+  /** Something wrong with the reading. */
+  record Quality(String sentence, String effect) {}
+
+  /** A reading in the list. */
+  record Row(
+      long id, String meter, String node, String kindKey, String period, String files, int found) {}
+
+  /** A place a file can come from. */
+  record Place(String value, String text) {}
+}

@@ -1,0 +1,163 @@
+package fourthwire.web.reading;
+
+import fourthwire.metering.CaptureResult;
+import fourthwire.metering.LogResult;
+import fourthwire.metering.Reading;
+import fourthwire.metering.ReadingRepository;
+import fourthwire.quantity.Figure;
+import fourthwire.site.SiteTree;
+import fourthwire.site.Survey;
+import fourthwire.web.figure.CyclePlot;
+import fourthwire.web.figure.Shapes;
+import fourthwire.web.panel.Grids;
+import fourthwire.web.panel.NodePage;
+import fourthwire.web.support.Moments;
+import fourthwire.web.support.Names;
+import fourthwire.web.support.Numbers;
+import fourthwire.web.support.Words;
+import java.util.ArrayList;
+import java.util.List;
+import org.springframework.stereotype.Component;
+
+/** Makes a reading's page and its row in the list. */
+@Component
+class ReadingPageMaker {
+  /** Before the name of a meter of the survey, in the list of places. */
+  static final String METER = "meter ";
+
+  private final Words words;
+
+  ReadingPageMaker(Words words) {
+    this.words = words;
+  }
+
+  ReadingPage.Row row(ReadingRepository.Entry entry, Survey survey) {
+    return new ReadingPage.Row(
+        entry.id(),
+        entry.meter().name(),
+        entry.meter().node(),
+        kindKey(entry.reading()),
+        period(entry.reading(), survey),
+        String.join(", ", entry.files()),
+        entry.reading().quality().size());
+  }
+
+  /** The survey's meters, then every node but circuits, then the circuits. */
+  List<ReadingPage.Place> places(Survey survey) {
+    List<ReadingPage.Place> places = new ArrayList<>();
+    survey
+        .meters()
+        .forEach(
+            m ->
+                places.add(
+                    new ReadingPage.Place(
+                        METER + m.name(), words.of("reading.place.meter", m.name(), m.at()))));
+    List<SiteTree.Node> nodes = SiteTree.of(survey).nodes();
+    nodes.stream()
+        .filter(n -> n.kind() != SiteTree.Kind.CIRCUIT)
+        .forEach(n -> places.add(new ReadingPage.Place(n.name(), n.name())));
+    nodes.stream()
+        .filter(n -> n.kind() == SiteTree.Kind.CIRCUIT)
+        .forEach(n -> places.add(new ReadingPage.Place(n.name(), n.name())));
+    return places;
+  }
+
+  ReadingPage make(ReadingRepository.Entry entry, Survey survey) {
+    Reading reading = entry.reading();
+    Names names = new Names(survey.settings().practice());
+    return new ReadingPage(
+        entry.id(),
+        entry.meter().name(),
+        entry.meter().node(),
+        kindKey(reading),
+        facts(entry, survey),
+        reading.notes().stream().map(names::in).toList(),
+        reading.quality().stream()
+            .map(q -> new ReadingPage.Quality(names.in(q.sentence()), names.in(q.effect())))
+            .toList(),
+        reading.log().map(this::quantities),
+        reading.capture().map(c -> new CaptureTables(words, names).of(c)).orElse(List.of()),
+        reading.capture().map(c -> new CaptureTables(words, names).spectrum(c)).orElse(""),
+        reading.capture().map(this::cycle).orElse(""),
+        reading.capture().map(c -> keys(c, names)).orElse(List.of()),
+        reading.capture().map(c -> names.in(c.basis() + " " + c.neutralBasis())).orElse(""));
+  }
+
+  private static String kindKey(Reading reading) {
+    return "reading.kind." + reading.kind().word();
+  }
+
+  private String period(Reading reading, Survey survey) {
+    Moments moments = Moments.of(survey);
+    return reading
+        .period()
+        .map(p -> words.of("reading.period", moments.minute(p.from()), moments.minute(p.to())))
+        .orElse(words.of("reading.period.unknown"));
+  }
+
+  private List<ReadingPage.Fact> facts(ReadingRepository.Entry entry, Survey survey) {
+    Reading reading = entry.reading();
+    List<ReadingPage.Fact> facts = new ArrayList<>();
+    facts.add(fact("files", String.join(", ", entry.files())));
+    facts.add(fact("when", period(reading, survey)));
+    facts.add(fact("count." + reading.kind().word(), Numbers.withDecimals(reading.count(), 0)));
+    reading
+        .sampleRateHz()
+        .ifPresent(rate -> facts.add(fact("rate", Numbers.plain(rate, words.of("reading.hz")))));
+    reading.log().ifPresent(l -> facts.add(fact("interval", seconds(l))));
+    reading
+        .capture()
+        .ifPresent(c -> facts.add(fact("frequency", Numbers.of(c.frequencyHz(), "Hz"))));
+    facts.add(fact("sha", entry.sha256()));
+    return facts;
+  }
+
+  private static String seconds(LogResult log) {
+    return Numbers.plain(log.interval().toMillis() / 1000.0, "s");
+  }
+
+  private static ReadingPage.Fact fact(String key, String text) {
+    return new ReadingPage.Fact("reading.fact." + key, text);
+  }
+
+  private NodePage.Grid quantities(LogResult log) {
+    Grids grid =
+        new Grids(
+            words,
+            words.of("reading.quantities"),
+            List.of(
+                words.of("reading.quantity"),
+                words.of("reading.count"),
+                words.of("reading.min"),
+                words.of("reading.mean"),
+                words.of("reading.max"),
+                words.of("reading.p95"),
+                words.of("reading.p99")));
+    log.quantities()
+        .forEach(
+            (name, q) ->
+                grid.row(
+                    name,
+                    List.of(
+                        Figure.of(q.count()),
+                        Figure.of(q.min()),
+                        Figure.of(q.mean()),
+                        Figure.of(q.max()),
+                        Figure.of(q.p95()),
+                        Figure.of(q.p99()))));
+    return grid.done();
+  }
+
+  private String cycle(CaptureResult capture) {
+    return capture.spectrum().isEmpty()
+        ? ""
+        : CyclePlot.draw(capture.spectrum(), "A", words.of("reading.cycle"));
+  }
+
+  private static List<NodePage.Key> keys(CaptureResult capture, Names names) {
+    return capture.spectrum().keySet().stream()
+        .sorted()
+        .map(c -> new NodePage.Key(Shapes.sample(c), names.of(c)))
+        .toList();
+  }
+}
