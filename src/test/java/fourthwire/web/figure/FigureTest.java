@@ -1,0 +1,134 @@
+package fourthwire.web.figure;
+
+import static org.assertj.core.api.Assertions.assertThat;
+
+import fourthwire.quantity.Conductor;
+import fourthwire.quantity.Phasor;
+import fourthwire.quantity.Spectrum;
+import java.io.StringReader;
+import java.util.List;
+import java.util.Map;
+import java.util.OptionalDouble;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
+import javax.xml.parsers.DocumentBuilderFactory;
+import org.junit.jupiter.api.Test;
+import org.w3c.dom.Document;
+import org.w3c.dom.Element;
+import org.w3c.dom.NodeList;
+import org.xml.sax.InputSource;
+
+/** The pictures: well-formed, in proportion, with no style and no script in them. */
+class FigureTest {
+  private static final Rail.Scale SCALE = new Rail.Scale(1.3, true);
+
+  @Test
+  void aBarIsAsLongAsTheCurrentIsOfTheAmpacity() throws Exception {
+    Document svg = parsed(rail(Conductor.L1, 0.65, List.of(), List.of(1.3)));
+    assertThat(widths(svg, "fill")).containsExactly(50.0);
+    assertThat(svg.getDocumentElement().getAttribute("aria-label")).isEqualTo("L1 <&> \"N\"");
+    // the mark at 100 % of ampacity on a scale that ends at 130 %
+    assertThat(element(svg, "line", "full-mark").getAttribute("x1")).isEqualTo("76.92%");
+    assertThat(((Element) svg.getElementsByTagName("svg").item(1)).getAttribute("x"))
+        .isEqualTo("100%");
+  }
+
+  @Test
+  void thePartsOfTheNeutralFillItsBar() throws Exception {
+    List<Rail.Part> parts =
+        List.of(
+            new Rail.Part("unbalance", 0.1, "unbalance"),
+            new Rail.Part("3", 0.8, "3rd"),
+            new Rail.Part("9", 0.1, "9th"));
+    Document svg = parsed(rail(Conductor.N, 1.3, parts, List.of()));
+    assertThat(widths(svg, "fill part-unbalance", "fill part-3", "fill part-9"))
+        .containsExactly(10.0, 80.0, 10.0);
+    assertThat(svg.getElementsByTagName("text").item(0).getTextContent()).isEqualTo("3rd");
+  }
+
+  @Test
+  void aScaleGrowsWithWhatItHolds() {
+    assertThat(Rail.Scale.holding(List.of(0.5, 1.1), true).end()).isEqualTo(1.3);
+    assertThat(Rail.Scale.holding(List.of(2.0), true).end()).isGreaterThan(2);
+  }
+
+  @Test
+  void axesHaveRoundSteps() {
+    assertThat(Ticks.upTo(110, 5)).isEqualTo(new Ticks(25, 125));
+    assertThat(Ticks.upTo(0.19, 5).text(0.05)).isEqualTo("0.05");
+    assertThat(Ticks.upTo(11, 5).text(2.5)).isEqualTo("2.5");
+    assertThat(Ticks.upTo(230, 3).values()).containsExactly(0.0, 100.0, 200.0, 300.0);
+    assertThat(Ticks.upTo(0, 5).end()).isEqualTo(1);
+  }
+
+  @Test
+  void aSineOfOneAmpPeaksAtItsRootTwo() throws Exception {
+    Spectrum sine = Spectrum.of(h -> h == 1 ? new Phasor(1, 0) : Phasor.ZERO);
+    Document svg = parsed(CyclePlot.draw(Map.of(Conductor.L1, sine), "A", "one cycle"));
+    Matcher point =
+        Pattern.compile("L250 ([0-9.]+)L")
+            .matcher(element(svg, "path", "trace l1").getAttribute("d"));
+    assertThat(point.find()).isTrue();
+    double end = Ticks.upTo(Math.sqrt(2), 3).end();
+    assertThat(Double.parseDouble(point.group(1)))
+        .isBetween(104 * (1 - Math.sqrt(2) / end) - 0.1, 104 * (1 - Math.sqrt(2) / end) + 0.1);
+  }
+
+  @Test
+  void aSpectrumHasABarASeriesAndAMarkWhereALimitStands() throws Exception {
+    List<SpectrumPlot.Group> groups =
+        List.of(
+            new SpectrumPlot.Group(3, List.of(5.0, 10.0), OptionalDouble.of(2.5)),
+            new SpectrumPlot.Group(5, List.of(2.0, 0.0), OptionalDouble.empty()));
+    Document svg =
+        parsed(
+            SpectrumPlot.draw(
+                List.of(Conductor.L3, Conductor.N), groups, h -> h + "th", "A", "spectrum"));
+    NodeList bars = svg.getElementsByTagName("rect");
+    assertThat(bars.getLength()).isEqualTo(4);
+    assertThat(((Element) bars.item(1)).getAttribute("height")).isEqualTo("208");
+    assertThat(((Element) bars.item(0)).getAttribute("height")).isEqualTo("104");
+    assertThat(element(svg, "line", "limit").getAttribute("y1")).isEqualTo("156");
+  }
+
+  @Test
+  void theSmallRailsLeaveOutWhatIsNotThere() throws Exception {
+    Document svg =
+        parsed(
+            SmallRails.draw(
+                Map.of(Conductor.L1, OptionalDouble.of(0.65), Conductor.N, OptionalDouble.empty()),
+                "small"));
+    assertThat(widths(svg, "fill l1")).containsExactly(50.0);
+    assertThat(svg.getElementsByTagName("rect").getLength()).isEqualTo(3);
+  }
+
+  private static String rail(
+      Conductor c, double share, List<Rail.Part> parts, List<Double> measured) {
+    return new Rail(c, share, false, parts, measured).draw(SCALE, "L1 <&> \"N\"");
+  }
+
+  private static Document parsed(String svg) throws Exception {
+    assertThat(svg).doesNotContain("style=").doesNotContain("<script").doesNotContain("NaN");
+    return DocumentBuilderFactory.newInstance()
+        .newDocumentBuilder()
+        .parse(new InputSource(new StringReader(svg)));
+  }
+
+  private static List<Double> widths(Document svg, String... classes) {
+    return java.util.Arrays.stream(classes)
+        .map(c -> element(svg, "rect", c).getAttribute("width").replace("%", ""))
+        .map(Double::valueOf)
+        .toList();
+  }
+
+  private static Element element(Document svg, String name, String classes) {
+    NodeList all = svg.getElementsByTagName(name);
+    for (int i = 0; i < all.getLength(); i++) {
+      Element e = (Element) all.item(i);
+      if (e.getAttribute("class").equals(classes)) {
+        return e;
+      }
+    }
+    throw new AssertionError("no " + name + " of class " + classes);
+  }
+}
