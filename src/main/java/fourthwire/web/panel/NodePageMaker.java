@@ -70,7 +70,7 @@ class NodePageMaker {
     return new NodePage.VerdictLine(
         Verdict.of(findings),
         worst.map(f -> FindingText.about(words, f)).orElse(""),
-        worst.map(f -> FindingText.probability(words, f)).orElse(""));
+        worst.map(f -> FindingText.sureness(words, f)).orElse(""));
   }
 
   private List<NodePage.Finding> findings(NodeCase node) {

@@ -40,4 +40,12 @@ public final class FindingText {
         .findFirst()
         .orElse("");
   }
+
+  /** The probability in words, or why there is none. */
+  public static String sureness(Words words, Finding finding) {
+    String reason = finding.probability().reason();
+    return reason.isEmpty()
+        ? probability(words, finding)
+        : words.of("finding.probability.unknown", reason);
+  }
 }
