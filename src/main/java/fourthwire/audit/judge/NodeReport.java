@@ -128,19 +128,23 @@ public final class NodeReport {
         + windingLossW(t.plate());
   }
 
+  /**
+   * Of a neutral, the node's part: its returned current in step with what the neutral carries. That
+   * is all of it, except where circuits share a neutral; their parts then sum to its heat.
+   */
   private double feederLossW(Map<Conductor, Spectrum> spectra) {
+    Spectrum neutral = spectra.getOrDefault(Conductor.N, Spectrum.ZERO);
     double watts = 0;
     for (int h = 1; h <= Spectrum.HIGHEST_ORDER; h++) {
       double lineSquare = 0;
-      double neutralSquare = 0;
+      Phasor returned = Phasor.ZERO;
       for (Map.Entry<Conductor, Spectrum> e : spectra.entrySet()) {
-        double square = e.getValue().magnitude(h) * e.getValue().magnitude(h);
         if (e.getKey().isLine()) {
-          lineSquare += square;
-        } else {
-          neutralSquare += square;
+          lineSquare += e.getValue().magnitude(h) * e.getValue().magnitude(h);
+          returned = returned.plus(e.getValue().at(h));
         }
       }
+      double neutralSquare = returned.times(neutral.at(h).conjugate()).re();
       watts += place.feeder().lossW(h, lineSquare, neutralSquare);
     }
     return watts;
