@@ -241,6 +241,24 @@ class DenseComparisonTest {
   }
 
   @Test
+  void aBankTunedToAWholeOrderTakesThatOrderAndNothingBreaks() {
+    SurveyBuilder b = base().bank("C1", "MSB", 60, 4);
+    pulse(b, "a", "L1-L2-L3-N", 6000);
+    AuditResult audit =
+        new HarmonicAudit()
+            .run(new AuditRequest(b.build(), Optional.empty(), Map.of()), Progress.SILENT);
+    DesignState board =
+        audit.nodes().stream()
+            .filter(n -> n.node().equals("MSB"))
+            .findFirst()
+            .orElseThrow()
+            .design()
+            .orElseThrow();
+    assertThat(board.voltageSpectrum().get("L1").magnitude(5)).isLessThan(1e-3);
+    assertThat(board.voltageSpectrum().get("L1").magnitude(7)).isGreaterThan(0.1);
+  }
+
+  @Test
   void aUnitWithNoImpedanceOfItsOwnDrawsWhatItsTerminalVoltageAsks() {
     ModelColumns stiff =
         new ModelColumns(

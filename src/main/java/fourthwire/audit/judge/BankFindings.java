@@ -61,17 +61,12 @@ final class BankFindings {
   }
 
   private static CapacitorLoading.Phase phase(CapacitorBank bank, Place place, Spectrum leg) {
+    fourthwire.network.element.CapacitorBank element = Compensation.bank(bank, place);
     double ratedV = bank.ratedV().orElse(place.node().nominalV()) / Math.sqrt(3);
     double ratedVar = 1000 * bank.kvar() / 3;
-    double capacitiveOhm = ratedV * ratedV / ratedVar;
-    double[] y = new double[2];
-    Spectrum current =
-        Spectrum.of(
-            h -> {
-              Compensation.leg(bank, place).at(h, y);
-              return leg.at(h).times(new Phasor(y[0], y[1]));
-            });
-    Spectrum across = Spectrum.of(h -> current.at(h).times(new Phasor(0, -capacitiveOhm / h)));
+    Spectrum current = Spectrum.of(h -> leg.at(h).over(element.ohm(h)));
+    Spectrum across =
+        Spectrum.of(h -> current.at(h).times(new Phasor(0, -element.capacitiveOhm() / h)));
     return new CapacitorLoading.Phase(bank.name(), current, across, ratedV, ratedVar);
   }
 }

@@ -272,7 +272,7 @@ public final class NetworkPlan {
               number(place, from.get(1)),
               number(place, from.get(2)),
               common,
-              admittance));
+              to.isEmpty() ? admittance.openToZeroSequence() : admittance));
     }
   }
 }

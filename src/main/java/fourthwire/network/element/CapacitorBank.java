@@ -1,5 +1,6 @@
 package fourthwire.network.element;
 
+import fourthwire.quantity.Phasor;
 import java.util.OptionalDouble;
 
 /**
@@ -21,6 +22,12 @@ import java.util.OptionalDouble;
  * @param resistanceOhm R of the reactor, the same at every order
  */
 public record CapacitorBank(double capacitiveOhm, double inductiveOhm, double resistanceOhm) {
+  /**
+   * Quality factor that stands for a reactor without resistance: at its tuning order a bank would
+   * otherwise be a short circuit, which no finite admittance is.
+   */
+  private static final double LOSSLESS = 1e6;
+
   /** Refuses a bank without capacitance, and one whose reactor outweighs it. */
   public CapacitorBank {
     if (!(capacitiveOhm > 0) || Double.isInfinite(capacitiveOhm)) {
@@ -44,13 +51,13 @@ public record CapacitorBank(double capacitiveOhm, double inductiveOhm, double re
    * @param kvar of the capacitor alone at its rated voltage
    * @param ratedV rated voltage of the capacitor, line to line
    * @param detuningPercent X_L over X_C, 0 without a reactor
-   * @param qualityFactor X_L over R at the fundamental; empty: no resistance
+   * @param qualityFactor X_L over R at the fundamental; empty: next to no resistance
    */
   public static CapacitorBank detuned(
       double kvar, double ratedV, double detuningPercent, OptionalDouble qualityFactor) {
     double capacitive = ratedV * ratedV / (1000 * kvar);
     double inductive = detuningPercent / 100 * capacitive;
-    double resistance = qualityFactor.isPresent() ? inductive / qualityFactor.getAsDouble() : 0;
+    double resistance = inductive / qualityFactor.orElse(LOSSLESS);
     return new CapacitorBank(capacitive, inductive, resistance);
   }
 
@@ -99,6 +106,11 @@ public record CapacitorBank(double capacitiveOhm, double inductiveOhm, double re
   /** Inductance of a leg's reactor, henries. */
   public double inductanceH(double frequencyHz) {
     return inductiveOhm / (2 * Math.PI * frequencyHz);
+  }
+
+  /** Impedance of a leg at an order, ohms. */
+  public Phasor ohm(double order) {
+    return new Phasor(resistanceOhm, order * inductiveOhm - capacitiveOhm / order);
   }
 
   /** The bank as a linear element on lines 0, 1 and 2 of a node. */
