@@ -1,5 +1,8 @@
 package fourthwire.load;
 
+import fourthwire.load.model.LoadModel;
+import fourthwire.load.model.LoadSolver;
+
 /**
  * {@code resistive} and {@code linear}: a constant impedance, sized at nominal voltage.
  *

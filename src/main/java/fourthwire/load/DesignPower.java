@@ -1,5 +1,7 @@
 package fourthwire.load;
 
+import fourthwire.load.model.LoadModel;
+import fourthwire.load.model.NoSteadyStateException;
 import java.util.Locale;
 import java.util.function.DoubleFunction;
 

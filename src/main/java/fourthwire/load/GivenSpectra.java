@@ -1,5 +1,6 @@
 package fourthwire.load;
 
+import fourthwire.load.model.LoadModel;
 import fourthwire.quantity.Phasor;
 import fourthwire.quantity.Spectrum;
 import fourthwire.site.LoadKind;

@@ -1,5 +1,7 @@
 package fourthwire.load;
 
+import fourthwire.load.control.PhaseDimmer;
+import fourthwire.load.model.LoadModel;
 import fourthwire.quantity.Phasor;
 import java.util.Locale;
 import java.util.OptionalDouble;

@@ -1,5 +1,9 @@
 package fourthwire.load;
 
+import fourthwire.load.model.LoadModel;
+import fourthwire.load.model.LoadSolver;
+import fourthwire.load.model.NoSteadyStateException;
+import fourthwire.load.model.PortSpectra;
 import fourthwire.quantity.Phasor;
 import fourthwire.quantity.Spectrum;
 
@@ -49,7 +53,7 @@ final class MeasuredSpectrum implements LoadModel {
   }
 
   private void inject(PortSpectra emf, double seriesOhm, double seriesHenry, PortSpectra current) {
-    Phasor e = ports == 3 ? positiveSequence(emf) : new Phasor(emf.re[0][1], emf.im[0][1]);
+    Phasor e = ports == 3 ? emf.positiveSequence() : new Phasor(emf.re[0][1], emf.im[0][1]);
     Phasor drop = amps.at(1).times(new Phasor(seriesOhm, 2 * Math.PI * frequencyHz * seriesHenry));
     double theta = terminalAngle(e, drop);
     for (int line = 0; line < ports; line++) {
@@ -77,14 +81,5 @@ final class MeasuredSpectrum implements LoadModel {
           "the measured current drops more than the source's whole voltage in its impedance");
     }
     return Math.atan2(e.im(), e.re()) - Math.atan2(w.im(), v + w.re());
-  }
-
-  /** Fundamental positive sequence of the three ports. */
-  static Phasor positiveSequence(PortSpectra s) {
-    Phasor sum = Phasor.ZERO;
-    for (int k = 0; k < 3; k++) {
-      sum = sum.plus(new Phasor(s.re[k][1], s.im[k][1]).turned(120.0 * k));
-    }
-    return sum.times(1.0 / 3);
   }
 }

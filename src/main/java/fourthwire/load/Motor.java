@@ -1,5 +1,9 @@
 package fourthwire.load;
 
+import fourthwire.load.model.LoadModel;
+import fourthwire.load.model.LoadSolver;
+import fourthwire.load.model.NoSteadyStateException;
+import fourthwire.load.model.PortSpectra;
 import fourthwire.quantity.Phasor;
 
 /**
@@ -62,7 +66,7 @@ final class Motor implements LoadModel {
   }
 
   private void inject(PortSpectra emf, double seriesOhm, double seriesHenry, PortSpectra current) {
-    Phasor e = MeasuredSpectrum.positiveSequence(emf);
+    Phasor e = emf.positiveSequence();
     Phasor z = new Phasor(seriesOhm, 2 * Math.PI * frequencyHz * seriesHenry);
     Phasor perLine = voltAmperes.times(1.0 / 3).conjugate();
     Phasor drop = z.times(perLine);

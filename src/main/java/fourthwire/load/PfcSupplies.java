@@ -1,5 +1,7 @@
 package fourthwire.load;
 
+import fourthwire.load.control.PowerFactorCorrected;
+import fourthwire.load.model.LoadModel;
 import fourthwire.site.LoadKind;
 import fourthwire.site.ModelColumns;
 

@@ -1,5 +1,10 @@
 package fourthwire.load;
 
+import fourthwire.load.model.LoadModel;
+import fourthwire.load.rectifier.BridgeLoad;
+import fourthwire.load.rectifier.CapacitorInput;
+import fourthwire.load.rectifier.Diode;
+import fourthwire.load.rectifier.SixPulse;
 import fourthwire.site.ModelColumns;
 import java.util.OptionalDouble;
 import java.util.function.DoubleFunction;

@@ -3,6 +3,11 @@ package fourthwire.load;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
+import fourthwire.load.control.PhaseDimmer;
+import fourthwire.load.model.LoadModel;
+import fourthwire.load.rectifier.BridgeLoad;
+import fourthwire.load.rectifier.Diode;
+import fourthwire.load.rectifier.SixPulse;
 import fourthwire.quantity.Spectrum;
 import fourthwire.site.LoadKind;
 import org.junit.jupiter.api.Test;

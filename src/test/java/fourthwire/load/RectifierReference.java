@@ -2,6 +2,12 @@ package fourthwire.load;
 
 import de.siegmar.fastcsv.reader.CsvReader;
 import de.siegmar.fastcsv.reader.NamedCsvRecord;
+import fourthwire.load.model.LoadModel;
+import fourthwire.load.model.PortSpectra;
+import fourthwire.load.rectifier.BridgeLoad;
+import fourthwire.load.rectifier.CapacitorInput;
+import fourthwire.load.rectifier.Diode;
+import fourthwire.load.rectifier.SixPulse;
 import fourthwire.quantity.Phasor;
 import fourthwire.quantity.Spectrum;
 import java.io.IOException;

@@ -3,6 +3,7 @@ package fourthwire.load;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
+import fourthwire.load.model.PortSpectra;
 import fourthwire.quantity.Spectrum;
 import java.util.stream.Stream;
 import org.junit.jupiter.params.ParameterizedTest;

@@ -1,9 +1,9 @@
 package fourthwire.audit.plan;
 
 import fourthwire.audit.AuditFailedException;
-import fourthwire.load.LoadModel;
 import fourthwire.load.LoadModels;
 import fourthwire.load.LoadRequest.Rating;
+import fourthwire.load.model.LoadModel;
 
 /**
  * A placed load with its model.

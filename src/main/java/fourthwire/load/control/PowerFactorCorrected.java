@@ -1,4 +1,7 @@
-package fourthwire.load;
+package fourthwire.load.control;
+
+import fourthwire.load.model.LoadModel;
+import fourthwire.load.model.LoadSolver;
 
 /**
  * {@code pfc-continuous} and {@code pfc-critical}: a supply whose control makes the current repeat
@@ -16,7 +19,7 @@ package fourthwire.load;
  * follows: orders to 50. Expected error: a few percent of the fundamental, since every maker's
  * control differs.
  */
-final class PowerFactorCorrected implements LoadModel {
+public final class PowerFactorCorrected implements LoadModel {
   /** Beyond this dead angle the current would be a needle no control makes. */
   private static final double WIDEST_DEGREES = 80;
 
@@ -34,7 +37,7 @@ final class PowerFactorCorrected implements LoadModel {
    * @param deadDegrees dead angle in this state
    * @param residual third harmonic as a share of the fundamental
    */
-  PowerFactorCorrected(
+  public PowerFactorCorrected(
       double powerW, double frequencyHz, double filterF, double deadDegrees, double residual) {
     this.powerW = powerW;
     this.frequencyHz = frequencyHz;

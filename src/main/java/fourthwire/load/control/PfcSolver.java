@@ -1,5 +1,8 @@
-package fourthwire.load;
+package fourthwire.load.control;
 
+import fourthwire.load.model.LoadSolver;
+import fourthwire.load.model.NoSteadyStateException;
+import fourthwire.load.model.PortSpectra;
 import fourthwire.quantity.Spectrum;
 import java.util.Arrays;
 import java.util.Locale;

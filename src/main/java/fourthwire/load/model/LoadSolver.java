@@ -1,4 +1,4 @@
-package fourthwire.load;
+package fourthwire.load.model;
 
 /** Finds the injected current of one load model, again and again as its voltage settles. */
 public interface LoadSolver {

@@ -1,5 +1,8 @@
-package fourthwire.load;
+package fourthwire.load.rectifier;
 
+import fourthwire.load.model.LoadSolver;
+import fourthwire.load.model.NoSteadyStateException;
+import fourthwire.load.model.PortSpectra;
 import fourthwire.quantity.Spectrum;
 import java.util.Locale;
 
@@ -107,7 +110,7 @@ final class SixPulseSolver implements LoadSolver {
     bridge.threshold(1e-3 * ampsScale);
     double share = !halfWave() ? 1 : balanced() ? 1.0 / 6 : 0.5;
     cells = CycleTable.CELLS * share;
-    var positive = MeasuredSpectrum.positiveSequence(emf);
+    var positive = emf.positiveSequence();
     double turns = 1.0 / 12 - Math.atan2(positive.im(), positive.re()) / (2 * Math.PI) - 1e-9;
     section = Math.floor((turns - Math.floor(turns)) * CycleTable.CELLS);
   }

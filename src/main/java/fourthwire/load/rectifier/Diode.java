@@ -1,4 +1,4 @@
-package fourthwire.load;
+package fourthwire.load.rectifier;
 
 /**
  * The exponential diode law of the rectifier models: v = n·25.86 mV·ln(1 + i/Is) + i·R.
@@ -10,22 +10,22 @@ package fourthwire.load;
  * @param emission emission coefficient n
  * @param ohm series resistance R, ohms
  */
-record Diode(double saturationA, double emission, double ohm) {
+public record Diode(double saturationA, double emission, double ohm) {
   /** Thermal voltage kT/q at 27 °C, volts. */
   static final double THERMAL_V = 0.02586;
 
   /** n·kT/q, volts: the drop grows by this with each e-fold of current. */
-  double slopeV() {
+  public double slopeV() {
     return emission * THERMAL_V;
   }
 
   /** Forward drop at a current of zero or more, volts. */
-  double drop(double amps) {
+  public double drop(double amps) {
     return slopeV() * Math.log1p(amps / saturationA) + amps * ohm;
   }
 
   /** N of these side by side as one. */
-  Diode parallel(double units) {
+  public Diode parallel(double units) {
     return new Diode(saturationA * units, emission, ohm / units);
   }
 }

@@ -1,4 +1,4 @@
-package fourthwire.load;
+package fourthwire.load.rectifier;
 
 /**
  * One time step while three lines of a six-pulse bridge conduct: two lines a and b on one side

@@ -1,4 +1,7 @@
-package fourthwire.load;
+package fourthwire.load.rectifier;
+
+import fourthwire.load.model.NoSteadyStateException;
+import fourthwire.load.model.PortSpectra;
 
 /**
  * A six-pulse bridge followed through time: no line conducting, a pair, or three in commutation

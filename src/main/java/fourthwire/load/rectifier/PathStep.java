@@ -1,4 +1,4 @@
-package fourthwire.load;
+package fourthwire.load.rectifier;
 
 /**
  * One time step of a conducting path: source, R-L, two diodes, capacitor with a constant-power

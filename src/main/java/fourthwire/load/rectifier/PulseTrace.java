@@ -1,5 +1,6 @@
-package fourthwire.load;
+package fourthwire.load.rectifier;
 
+import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.quantity.Spectrum;
 
 /**

@@ -1,4 +1,8 @@
-package fourthwire.load;
+package fourthwire.load.rectifier;
+
+import fourthwire.load.model.LoadSolver;
+import fourthwire.load.model.NoSteadyStateException;
+import fourthwire.load.model.PortSpectra;
 
 /**
  * Periodic steady state of the capacitor-input rectifier, by shooting.

@@ -1,4 +1,7 @@
-package fourthwire.load;
+package fourthwire.load.rectifier;
+
+import fourthwire.load.model.LoadModel;
+import fourthwire.load.model.LoadSolver;
 
 /**
  * {@code capacitor-input}: single-phase diode bridge, source R-L, smoothing capacitor and a
@@ -15,11 +18,11 @@ package fourthwire.load;
  * results with the same diode (test resources {@code load/rectifiers}); expected error 0.4 % of the
  * fundamental at each order to 39.
  */
-final class CapacitorInput implements LoadModel {
+public final class CapacitorInput implements LoadModel {
   private final BridgeLoad load;
   private final double frequencyHz;
 
-  CapacitorInput(BridgeLoad load, double frequencyHz) {
+  public CapacitorInput(BridgeLoad load, double frequencyHz) {
     this.load = load;
     this.frequencyHz = frequencyHz;
   }

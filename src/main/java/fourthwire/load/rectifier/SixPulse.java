@@ -1,4 +1,7 @@
-package fourthwire.load;
+package fourthwire.load.rectifier;
+
+import fourthwire.load.model.LoadModel;
+import fourthwire.load.model.LoadSolver;
 
 /**
  * {@code six-pulse}: three-phase diode bridge with line and direct-current chokes, a smoothing
@@ -16,11 +19,11 @@ package fourthwire.load;
  * the same diodes (test resources {@code load/rectifiers}); expected error 0.4 % of the fundamental
  * at each order to 39.
  */
-final class SixPulse implements LoadModel {
+public final class SixPulse implements LoadModel {
   private final BridgeLoad load;
   private final double frequencyHz;
 
-  SixPulse(BridgeLoad load, double frequencyHz) {
+  public SixPulse(BridgeLoad load, double frequencyHz) {
     this.load = load;
     this.frequencyHz = frequencyHz;
   }

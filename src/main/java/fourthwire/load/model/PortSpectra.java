@@ -1,5 +1,6 @@
-package fourthwire.load;
+package fourthwire.load.model;
 
+import fourthwire.quantity.Phasor;
 import fourthwire.quantity.Spectrum;
 import java.util.Arrays;
 
@@ -41,5 +42,14 @@ public final class PortSpectra {
   /** Sets one port from a spectrum. */
   public void set(int port, Spectrum spectrum) {
     spectrum.copyTo(re[port], im[port]);
+  }
+
+  /** Fundamental positive sequence of three ports. */
+  public Phasor positiveSequence() {
+    Phasor sum = Phasor.ZERO;
+    for (int k = 0; k < 3; k++) {
+      sum = sum.plus(new Phasor(re[k][1], im[k][1]).turned(120.0 * k));
+    }
+    return sum.times(1.0 / 3);
   }
 }

@@ -1,4 +1,4 @@
-package fourthwire.load;
+package fourthwire.load.model;
 
 /**
  * Equipment as the network sees it: a linear part that goes into the network's matrix, and a

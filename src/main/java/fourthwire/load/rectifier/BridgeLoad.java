@@ -1,4 +1,4 @@
-package fourthwire.load;
+package fourthwire.load.rectifier;
 
 /**
  * The electrical data of a bridge rectifier with a smoothing capacitor and a constant-power load,
@@ -13,7 +13,7 @@ package fourthwire.load;
  * @param dcHenry inductance likewise, henries
  * @param diode each of the two diodes in the path
  */
-record BridgeLoad(
+public record BridgeLoad(
     double powerW,
     double capacitanceF,
     double lineOhm,
@@ -23,7 +23,7 @@ record BridgeLoad(
     Diode diode) {
 
   /** N equal units as one unit N times as large: exact admittance scaling. */
-  BridgeLoad parallel(double units) {
+  public BridgeLoad parallel(double units) {
     return new BridgeLoad(
         powerW * units,
         capacitanceF * units,
@@ -35,7 +35,7 @@ record BridgeLoad(
   }
 
   /** The same equipment delivering another power. */
-  BridgeLoad atPower(double watts) {
+  public BridgeLoad atPower(double watts) {
     return new BridgeLoad(watts, capacitanceF, lineOhm, lineHenry, dcOhm, dcHenry, diode);
   }
 }

@@ -1,4 +1,4 @@
-package fourthwire.load;
+package fourthwire.load.model;
 
 /** The equipment has no periodic steady state at this voltage, or none was found; says why. */
 public final class NoSteadyStateException extends RuntimeException {

@@ -1,4 +1,4 @@
-package fourthwire.load;
+package fourthwire.load.rectifier;
 
 import fourthwire.quantity.Spectrum;
 

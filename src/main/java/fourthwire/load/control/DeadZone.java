@@ -1,4 +1,4 @@
-package fourthwire.load;
+package fourthwire.load.control;
 
 import fourthwire.quantity.Spectrum;
 

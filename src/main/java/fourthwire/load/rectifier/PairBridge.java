@@ -1,4 +1,4 @@
-package fourthwire.load;
+package fourthwire.load.rectifier;
 
 /**
  * A single-phase bridge followed through time from a section of the cycle: off, conducting with one

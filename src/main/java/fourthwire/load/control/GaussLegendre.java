@@ -1,4 +1,4 @@
-package fourthwire.load;
+package fourthwire.load.control;
 
 /** Nodes and weights of Gauss-Legendre quadrature on [-1, 1], by Newton on the recurrence. */
 final class GaussLegendre {

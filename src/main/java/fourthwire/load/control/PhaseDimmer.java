@@ -1,5 +1,9 @@
-package fourthwire.load;
+package fourthwire.load.control;
 
+import fourthwire.load.model.LoadModel;
+import fourthwire.load.model.LoadSolver;
+import fourthwire.load.model.NoSteadyStateException;
+import fourthwire.load.model.PortSpectra;
 import fourthwire.quantity.Spectrum;
 import java.util.Arrays;
 
@@ -18,7 +22,7 @@ import java.util.Arrays;
  * resistance falls with temperature when dimmed, which is not modelled (common practice, no
  * source).
  */
-final class PhaseDimmer implements LoadModel {
+public final class PhaseDimmer implements LoadModel {
   private static final int ORDERS = Spectrum.HIGHEST_ORDER;
   private static final double[][] RULE = GaussLegendre.rule(220);
 
@@ -32,7 +36,7 @@ final class PhaseDimmer implements LoadModel {
    *
    * @param firing angle after the voltage's crossing, radians
    */
-  PhaseDimmer(double ohm, double henry, double frequencyHz, double firing) {
+  public PhaseDimmer(double ohm, double henry, double frequencyHz, double firing) {
     this.ohm = ohm;
     this.henry = henry;
     this.frequencyHz = frequencyHz;
