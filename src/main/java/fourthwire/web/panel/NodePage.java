@@ -28,13 +28,18 @@ public record NodePage(
     Optional<Rails> rails,
     Optional<Pictures> pictures,
     List<Finding> findings,
-    List<Adder> adders,
     Optional<Grid> voltage,
     Optional<Grid> power,
     Optional<Grid> transformer,
     List<Grid> measured,
-    List<NodeRow> children,
+    List<Branch> branches,
+    List<Working.Line> addingWorking,
     List<String> assumptions) {
+
+  /** Whether what hangs here adds to a neutral. */
+  public boolean adding() {
+    return branches.stream().anyMatch(b -> !b.amps().isEmpty());
+  }
 
   /** A node above this one. */
   public record Crumb(String name) {}
@@ -76,15 +81,15 @@ public record NodePage(
   public record Finding(
       Verdict verdict, String sentence, String figure, String basis, String probability) {}
 
-  /** A circuit or panel by what it adds to the neutral. */
-  public record Adder(
-      String node,
-      String name,
-      String lines,
-      String loads,
-      String amps,
-      String share,
-      String known) {}
+  /**
+   * What hangs directly on the node.
+   *
+   * @param lines of a circuit, else empty
+   * @param known how its loads are known; empty for a panel
+   * @param amps what it adds to the neutral, padded; empty without one
+   * @param share the same in per cent of the neutral's current
+   */
+  public record Branch(NodeRow row, String lines, String known, String amps, String share) {}
 
   /**
    * A table of figures.

@@ -43,12 +43,12 @@ class NodePageMaker {
         design.map(d -> new RailsMaker(words, node, d).make()),
         design.flatMap(d -> new PicturesMaker(words, node, d).make()),
         findings(node),
-        design.map(d -> new AddersMaker(words, node, d).make()).orElse(List.of()),
         tables.map(TablesMaker::voltage),
         tables.map(TablesMaker::power),
         tables.flatMap(TablesMaker::transformer),
         tables.map(TablesMaker::measured).orElse(List.of()),
-        rows.of(node.children(), node.tree(), node.survey()),
+        new BranchesMaker(words, node, rows).make(),
+        Working.lines(words, Working.ADDER),
         node.node().assumptions().stream().map(node.names()::in).toList());
   }
 

@@ -1,6 +1,7 @@
 package fourthwire.web.panel;
 
 import fourthwire.web.support.Verdict;
+import java.util.List;
 
 /**
  * A node as a row of a list or tree.
@@ -11,6 +12,7 @@ import fourthwire.web.support.Verdict;
  * @param neutral loading of the neutral, padded, with its mark
  * @param line loading of the most loaded line
  * @param voltageThd worst distortion of its voltage
+ * @param below circuits fed from it that have findings of their own; empty where those are rows too
  */
 public record NodeRow(
     String node,
@@ -23,4 +25,9 @@ public record NodeRow(
     String neutral,
     String voltageThd,
     Verdict verdict,
-    String finding) {}
+    String finding,
+    List<Below> below) {
+
+  /** How many circuits come to this verdict, in words. */
+  public record Below(Verdict verdict, String text) {}
+}

@@ -35,6 +35,12 @@ public final class NodeRows {
 
   /** The rows of these results, in their order; depths are counted in the tree. */
   public List<NodeRow> of(List<NodeResult> results, SiteTree tree, Survey survey) {
+    return of(results, List.of(), tree, survey);
+  }
+
+  /** The same, each row saying besides what was found at those of these circuits that it feeds. */
+  public List<NodeRow> of(
+      List<NodeResult> results, List<NodeResult> circuits, SiteTree tree, Survey survey) {
     int top = results.stream().mapToInt(r -> depth(tree, r.node())).min().orElse(0);
     List<String> line = column(results, NodeRows::lineLoading);
     List<String> neutral = column(results, d -> d.neutral().loadingPercent());
@@ -55,7 +61,8 @@ public final class NodeRows {
               neutral.get(i).isEmpty() ? amps.get(i) : neutral.get(i),
               thd.get(i),
               Verdict.of(result.findings()),
-              about(result)));
+              about(result),
+              below(result, circuits)));
     }
     return rows;
   }
@@ -64,6 +71,23 @@ public final class NodeRows {
     return result.design().isEmpty()
         ? words.of("row.unsupplied")
         : Verdict.worst(result.findings()).map(f -> FindingText.about(words, f)).orElse("");
+  }
+
+  private List<NodeRow.Below> below(NodeResult feeding, List<NodeResult> circuits) {
+    List<Verdict> verdicts =
+        circuits.stream()
+            .filter(c -> c.fedFrom().filter(feeding.node()::equals).isPresent())
+            .map(c -> Verdict.of(c.findings()))
+            .toList();
+    return Stream.of(Verdict.ACT, Verdict.WATCH)
+        .filter(verdicts::contains)
+        .map(v -> below(v, (int) verdicts.stream().filter(v::equals).count()))
+        .toList();
+  }
+
+  private NodeRow.Below below(Verdict verdict, int count) {
+    String key = "row.below." + verdict.word() + (count == 1 ? ".one" : ".many");
+    return new NodeRow.Below(verdict, words.of(key, words.count(count)));
   }
 
   private static String shortName(NodeResult result) {

@@ -2,7 +2,7 @@ package fourthwire.web.site;
 
 import fourthwire.web.audit.AuditView;
 import fourthwire.web.panel.NodeRow;
-import fourthwire.web.support.Verdict;
+import fourthwire.web.support.Headline;
 import java.util.List;
 import java.util.Optional;
 
@@ -12,7 +12,6 @@ import java.util.Optional;
  * @param audit the audit shown; empty where none is finished yet
  * @param pending an audit that is not finished, newest first
  * @param headline the verdict in words
- * @param circuits findings on circuits, in words; empty without any
  * @param supplies that an audit can run on, the normal one first
  * @param outdated whether the survey has been revised since the audit shown
  */
@@ -22,10 +21,8 @@ record SitePage(
     String system,
     Optional<AuditView> audit,
     Optional<AuditView> pending,
-    String headline,
-    Verdict verdict,
+    Headline.Text headline,
     List<String> holds,
-    String circuits,
     List<NodeRow> rows,
     List<String> supplies,
     boolean outdated,

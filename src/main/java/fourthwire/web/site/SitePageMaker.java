@@ -3,7 +3,6 @@ package fourthwire.web.site;
 import fourthwire.audit.AuditRepository;
 import fourthwire.audit.NodeResult;
 import fourthwire.audit.NodeSummary;
-import fourthwire.limits.Finding;
 import fourthwire.limits.Severity;
 import fourthwire.site.SiteRepository;
 import fourthwire.site.SiteTree;
@@ -13,12 +12,13 @@ import fourthwire.site.Survey;
 import fourthwire.web.audit.AuditView;
 import fourthwire.web.panel.NodeRows;
 import fourthwire.web.support.Headline;
+import fourthwire.web.support.Names;
 import fourthwire.web.support.Numbers;
-import fourthwire.web.support.Verdict;
 import fourthwire.web.support.Words;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
+import java.util.stream.Stream;
 import org.springframework.stereotype.Component;
 
 /** Makes a site's page out of its survey and one of its audits. */
@@ -49,26 +49,34 @@ class SitePageMaker {
   SitePage audited(SiteRepository.Entry site, AuditRepository.Entry audit) {
     Survey survey = sites.survey(site.id(), audit.surveyRevision());
     SiteTree tree = tree(survey, audit);
-    List<NodeResult> shown =
-        TreeOrder.of(survey, tree).stream()
-            .flatMap(n -> audits.node(audit.id(), n).stream())
-            .toList();
-    List<List<Finding>> findings = shown.stream().map(NodeResult::findings).toList();
+    List<NodeResult> shown = nodes(audit, TreeOrder.of(survey, tree));
+    List<NodeResult> circuits = nodes(audit, circuitsWithFindings(audit));
+    List<NodeResult> all = Stream.concat(shown.stream(), circuits.stream()).toList();
     return new SitePage(
         site.id(),
         survey.settings().name(),
         system(survey),
         Optional.of(AuditView.of(audit, survey)),
         pending(site, survey),
-        new Headline(words).of(findings),
-        Verdict.of(findings.stream().flatMap(List::stream).toList()),
+        new Headline(words).of(all, survey),
         holds(survey),
-        circuits(audits.summaries(audit.id())),
-        rows.of(shown, tree, survey),
+        rows.of(shown, circuits, tree, survey),
         supplies(survey),
         site.latestRevision() > audit.surveyRevision(),
-        audit.notes(),
+        audit.notes().stream().map(new Names(survey.settings().practice())::in).toList(),
         audit.editions());
+  }
+
+  private List<NodeResult> nodes(AuditRepository.Entry audit, List<String> names) {
+    return names.stream().flatMap(n -> audits.node(audit.id(), n).stream()).toList();
+  }
+
+  private List<String> circuitsWithFindings(AuditRepository.Entry audit) {
+    return audits.summaries(audit.id()).stream()
+        .filter(s -> s.kind() == SiteTree.Kind.CIRCUIT)
+        .filter(s -> s.count(Severity.ACT) + s.count(Severity.WATCH) > 0)
+        .map(NodeSummary::node)
+        .toList();
   }
 
   private SitePage unaudited(SiteRepository.Entry site) {
@@ -79,10 +87,8 @@ class SitePageMaker {
         system(survey),
         Optional.empty(),
         pending(site, survey),
-        words.of("site.unaudited"),
-        Verdict.NONE,
+        new Headline.Text(words.of("site.unaudited"), ""),
         holds(survey),
-        "",
         List.of(),
         supplies(survey),
         false,
@@ -116,19 +122,6 @@ class SitePageMaker {
     return List.of(
         words.of("site.holds.nodes", survey.panels().size(), survey.circuits().size()),
         words.of("site.holds.meters", survey.meters().size(), survey.spotReadings().size()));
-  }
-
-  private String circuits(List<NodeSummary> summaries) {
-    List<NodeSummary> circuits =
-        summaries.stream().filter(s -> s.kind() == SiteTree.Kind.CIRCUIT).toList();
-    long act = circuits.stream().filter(s -> s.count(Severity.ACT) > 0).count();
-    long watch =
-        circuits.stream()
-            .filter(s -> s.count(Severity.ACT) == 0 && s.count(Severity.WATCH) > 0)
-            .count();
-    return act + watch == 0
-        ? words.of("site.circuits.none")
-        : words.of("site.circuits", act, watch);
   }
 
   private static List<String> supplies(Survey survey) {

@@ -1,18 +1,47 @@
 package fourthwire.web.support;
 
 import fourthwire.limits.Finding;
-import java.util.Locale;
+import fourthwire.limits.FindingCode;
+import fourthwire.limits.Severity;
+import java.util.List;
+import java.util.stream.Stream;
 
 /** Writes the parts of a finding that are not sentences. */
 public final class FindingText {
+  /** The manner of a distortion that is over a figure meant for another place. */
+  static final String GUIDANCE = "guidance";
+
+  /** Checks whose limits bind at the point of common coupling and are guidance elsewhere. */
+  static final List<String> DISTORTION =
+      Stream.of(
+              FindingCode.CURRENT_TDD,
+              FindingCode.CURRENT_ORDER,
+              FindingCode.VOLTAGE_THD,
+              FindingCode.VOLTAGE_ORDER)
+          .map(FindingCode::word)
+          .toList();
+
   private FindingText() {}
 
   /** A few words for what it is about, for a heading: "neutral over its ampacity". */
   public static String about(Words words, Finding finding) {
     String key = "finding." + finding.code();
     String plain = finding.code().replace('-', ' ');
-    String severity = finding.severity().name().toLowerCase(Locale.ROOT);
-    return words.orElse(key + "." + severity, words.orElse(key, plain));
+    return words.orElse(key + "." + manner(finding), words.orElse(key, plain));
+  }
+
+  /**
+   * How the figure stands to its limit, as keys have it: {@code act} over it, {@code watch} near
+   * it, {@code guidance} over a figure that does not bind inside the site, {@code note} held
+   * against none.
+   */
+  static String manner(Finding finding) {
+    boolean over =
+        finding.limit().value().isPresent()
+            && finding.figure().value().orElse(0) > finding.limit().value().getAsDouble();
+    return finding.severity() == Severity.WATCH && over && DISTORTION.contains(finding.code())
+        ? GUIDANCE
+        : finding.severity().word();
   }
 
   /** Figure and limit: "106 A against 101 A"; empty where there is no figure. */

@@ -36,6 +36,7 @@ class MessagesTest {
           "heat.",
           "confidence.",
           "headline.",
+          "row.below.",
           "finding.",
           "working.",
           "audit.state.",
@@ -69,9 +70,12 @@ class MessagesTest {
     Set<String> known = keys();
     for (String code : Headline.weighed()) {
       assertThat(Stream.of(FindingCode.values()).map(FindingCode::word)).contains(code);
-      for (var severity : Headline.severities()) {
-        String key = "headline." + code + "." + severity.word();
+      for (String manner : Headline.manners(code)) {
+        String key = "headline." + code + "." + manner;
         assertThat(known).contains(key + ".one", key + ".many");
+      }
+      for (String manner : Headline.manners(code)) {
+        assertThat(known).contains("finding." + code + "." + manner);
       }
     }
   }
