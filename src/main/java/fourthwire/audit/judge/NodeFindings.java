@@ -167,7 +167,14 @@ final class NodeFindings {
         state.resonances().stream()
             .map(r -> new ResonanceCheck.Peak(r.order(), r.ohm(), r.bank()))
             .toList();
-    return ResonanceCheck.judge(peaks, lines(currents).values());
+    return ResonanceCheck.judge(peaks, withoutZeroSequence());
+  }
+
+  /** A bank's star point is not earthed: zero sequence passes it by. */
+  private List<Spectrum> withoutZeroSequence() {
+    List<Spectrum> lines = List.copyOf(lines(currents).values());
+    Spectrum zero = lines.stream().reduce(Spectrum.ZERO, Spectrum::plus).times(1.0 / lines.size());
+    return lines.stream().map(line -> line.minus(zero)).toList();
   }
 
   private static Optional<Double> known(Figure figure) {

@@ -37,7 +37,7 @@ public final class ResonanceCheck {
    * One finding for each peak near an order that carries current.
    *
    * @param peaks peaks of the impedance seen from the node
-   * @param currents line currents there, amps
+   * @param currents line currents there without their zero sequence, amps
    */
   public static List<Finding> judge(List<Peak> peaks, Collection<Spectrum> currents) {
     return peaks.stream().map(peak -> judge(peak, currents)).flatMap(Optional::stream).toList();
