@@ -12,12 +12,16 @@ final class Crossing {
 
   /** The wave over √2 at an angle. */
   static double value(double[] re, double[] im, double at) {
+    return value(re, im, at, Spectrum.HIGHEST_ORDER);
+  }
+
+  private static double value(double[] re, double[] im, double at, int highest) {
     double sin1 = Math.sin(at);
     double cos1 = Math.cos(at);
     double s = 0;
     double c = 1;
     double sum = 0;
-    for (int h = 1; h <= Spectrum.HIGHEST_ORDER; h++) {
+    for (int h = 1; h <= highest; h++) {
       double next = s * cos1 + c * sin1;
       c = c * cos1 - s * sin1;
       s = next;
@@ -29,11 +33,13 @@ final class Crossing {
   /**
    * The zero crossing nearest a guess (the fundamental's crossing), by Newton; where the wave rings
    * so that none is found within 30°, the guess itself.
+   *
+   * @param highest orders above this are left out
    */
-  static double near(double[] re, double[] im, double guess) {
+  static double near(double[] re, double[] im, double guess, int highest) {
     double x = guess;
     for (int n = 0; n < 30; n++) {
-      double by = value(re, im, x) / slope(re, im, x);
+      double by = value(re, im, x, highest) / slope(re, im, x, highest);
       x -= by;
       if (!(Math.abs(x - guess) < FARTHEST)) {
         return guess;
@@ -45,13 +51,13 @@ final class Crossing {
     return x;
   }
 
-  private static double slope(double[] re, double[] im, double at) {
+  private static double slope(double[] re, double[] im, double at, int highest) {
     double sin1 = Math.sin(at);
     double cos1 = Math.cos(at);
     double s = 0;
     double c = 1;
     double sum = 0;
-    for (int h = 1; h <= Spectrum.HIGHEST_ORDER; h++) {
+    for (int h = 1; h <= highest; h++) {
       double next = s * cos1 + c * sin1;
       c = c * cos1 - s * sin1;
       s = next;

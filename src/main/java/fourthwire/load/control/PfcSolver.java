@@ -18,6 +18,13 @@ import java.util.Locale;
  */
 final class PfcSolver implements LoadSolver {
   private static final int ORDERS = Spectrum.HIGHEST_ORDER;
+
+  /**
+   * A control senses the crossing through a filter: what rings above this order does not move it
+   * (common practice, no source).
+   */
+  private static final int HIGHEST_SENSED = 13;
+
   private static final double TOLERANCE = 1e-9;
   private static final int MOST_TURNS = 1000;
   private static final int TURNS_ON_CROSSING = 100;
@@ -118,7 +125,9 @@ final class PfcSolver implements LoadSolver {
   }
 
   private double trigger(double fundamentals) {
-    return lockedToFundamental ? fundamentals : Crossing.near(vRe, vIm, fundamentals);
+    return lockedToFundamental
+        ? fundamentals
+        : Crossing.near(vRe, vIm, fundamentals, HIGHEST_SENSED);
   }
 
   /** Per siemens of G: -residual·|V1|∠3θ, most negative near the crossings. */

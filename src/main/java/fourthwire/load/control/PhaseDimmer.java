@@ -87,10 +87,11 @@ public final class PhaseDimmer implements LoadModel {
       boolean halfWave = steadyCurrent(eRe, eIm, r, x);
       Arrays.fill(current.re[0], 0);
       Arrays.fill(current.im[0], 0);
-      double first = Crossing.near(eRe, eIm, -Math.atan2(eIm[1], eRe[1]));
+      double first = Crossing.near(eRe, eIm, -Math.atan2(eIm[1], eRe[1]), Spectrum.HIGHEST_ORDER);
       boolean pulsed = pulse(first, 1, halfWave ? 2 : 1, current);
       if (pulsed && !halfWave) {
-        double second = Crossing.near(eRe, eIm, -Math.atan2(eIm[1], eRe[1]) + Math.PI);
+        double second =
+            Crossing.near(eRe, eIm, -Math.atan2(eIm[1], eRe[1]) + Math.PI, Spectrum.HIGHEST_ORDER);
         pulsed = pulse(second, -1, 1, current);
       }
       if (!pulsed) {
