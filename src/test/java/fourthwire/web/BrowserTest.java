@@ -6,6 +6,9 @@ import static org.junit.jupiter.api.Assumptions.assumeTrue;
 import com.microsoft.playwright.Page;
 import com.microsoft.playwright.options.ColorScheme;
 import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.function.Predicate;
 import org.junit.jupiter.api.AfterAll;
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Tag;
@@ -21,6 +24,8 @@ import org.springframework.boot.test.web.server.LocalServerPort;
 @Tag("browser")
 class BrowserTest extends PagesTest {
   private static final int[] WIDTHS = {390, 820, 1440};
+  private static final int MOST_STOPS = 80;
+  private static final Predicate<String> FAINT = stop -> stop.endsWith(" without outline");
 
   @LocalServerPort int port;
   private Browser browser;
@@ -62,14 +67,74 @@ class BrowserTest extends PagesTest {
     check(name, path, WIDTHS[1], ColorScheme.DARK);
   }
 
+  /** What a person does here can be done with the tabulator alone, in the order it is read. */
+  @ParameterizedTest(name = "{0}")
+  @CsvSource({
+    "sites, /, '#page|input[type=file]|Upload the survey'",
+    "site, /sites/{site}, '#page|name=LP-2|select#supply|Run it'",
+    "panel, /audits/{audit}/node?name=LP-2%20East%20offices, '#page|summary|name=LP-2'",
+    "readings, /sites/{site}/readings, '#page|input[type=file]|Read it'",
+    "delete, /sites/{site}/delete, '#page|Delete it|Keep it'",
+  })
+  void everythingIsReachedByTheKeyboardInOrder(String name, String path, String stops) {
+    try (Page page = browser.page(WIDTHS[2], ColorScheme.LIGHT)) {
+      page.navigate(address(path));
+      List<String> reached = new ArrayList<>();
+      for (int i = 0; i < MOST_STOPS; i++) {
+        page.keyboard().press("Tab");
+        String stop =
+            String.valueOf(
+                page.evaluate(
+                    "(() => { const e = document.activeElement;"
+                        + " if (e === document.body) return '';"
+                        + " const o = getComputedStyle(e).outlineStyle;"
+                        + " return e.outerHTML.split('>')[0] + '> ' + e.innerText"
+                        + " + (o === 'none' ? ' without outline' : ''); })()"));
+        if (stop.isEmpty()) {
+          break;
+        }
+        reached.add(stop);
+      }
+      assertThat(reached).as("each shows where the focus is").noneMatch(FAINT);
+      int from = 0;
+      for (String wanted : stops.split("\\|")) {
+        int at = indexOf(reached, wanted, from);
+        assertThat(at).as("%s after stop %d of %s", wanted, from, reached).isNotNegative();
+        from = at;
+      }
+    }
+  }
+
+  private static int indexOf(List<String> reached, String wanted, int from) {
+    String id = wanted.replaceAll(".*#", "");
+    for (int i = from; i < reached.size(); i++) {
+      String stop = reached.get(i);
+      boolean found =
+          switch (wanted) {
+            case "#page" -> stop.contains("href=\"#page\"");
+            case "summary" -> stop.startsWith("<summary");
+            case "input[type=file]" -> stop.contains("type=\"file\"");
+            case "select#supply" -> stop.contains("id=\"" + id + "\"");
+            default -> stop.contains(wanted);
+          };
+      if (found) {
+        return i;
+      }
+    }
+    return -1;
+  }
+
+  private String address(String path) {
+    return "http://localhost:"
+        + port
+        + path.replace("{audit}", "" + audit).replace("{site}", "" + site);
+  }
+
   private void check(String name, String path, int width, ColorScheme scheme) {
     try (Page page = browser.page(width, scheme)) {
       StringBuilder console = new StringBuilder();
       page.onConsoleMessage(m -> console.append(m.type()).append(": ").append(m.text()));
-      page.navigate(
-          "http://localhost:"
-              + port
-              + path.replace("{audit}", "" + audit).replace("{site}", "" + site));
+      page.navigate(address(path));
       shoot(page, name + "-" + width + "-" + scheme.name().toLowerCase(java.util.Locale.ROOT));
       Object overflow =
           page.evaluate(

@@ -34,6 +34,21 @@ class NodePageTest extends PagesTest {
   }
 
   @Test
+  void aFindingShowsItsWorkingWithTheNodesOwnFigures() {
+    String page = page(audit, "LP-2 East offices");
+    assertThat(page)
+        .contains("I(N) = √(Σ I_h²) = √(", "² (3rd)", "As installed it carries 101")
+        .contains("What makes the neutral current", "Adds to N, A");
+  }
+
+  @Test
+  void whatAPanelFeedsStandsOnceRankedByWhatItAdds() {
+    String page = page(audit, "LP-2 East offices");
+    String table = page.substring(page.indexOf("id=\"branches\""));
+    assertThat(table.split("LP-2%20East%20offices:1\"", -1)).hasSize(2);
+  }
+
+  @Test
   void nothingIsLeftUnsaidByAMissingKey() {
     assertThat(page(audit, "T1")).doesNotContain("??").contains("Factor K");
   }

@@ -3,6 +3,11 @@ package fourthwire.web;
 import static org.assertj.core.api.Assertions.assertThat;
 
 import fourthwire.audit.AuditRepository;
+import fourthwire.limits.FindingCode;
+import fourthwire.limits.LimitEditions;
+import fourthwire.load.Preset;
+import fourthwire.load.Presets;
+import fourthwire.site.LoadKind;
 import fourthwire.testsupport.Http.Answer;
 import fourthwire.testsupport.Http.Part;
 import fourthwire.testsupport.SmallSite;
@@ -101,6 +106,21 @@ class SitePagesTest extends PagesTest {
       assertThat(text(answer))
           .contains("before the resonance check")
           .doesNotContain("style=", "<style", "onclick", "??");
+    }
+  }
+
+  @Test
+  void theHelpNamesEveryCheckEveryPresetAndEveryEdition() {
+    String help = text("/help");
+    for (FindingCode code : FindingCode.values()) {
+      assertThat(help).contains("<code>" + code.word() + "</code>");
+    }
+    for (Preset preset : Presets.all()) {
+      assertThat(help).contains(preset.name(), preset.source());
+    }
+    assertThat(help).contains(LimitEditions.editions());
+    for (LoadKind kind : LoadKind.values()) {
+      assertThat(help).contains("<code>" + kind.word() + "</code>");
     }
   }
 

@@ -31,6 +31,8 @@ public record NodePage(
     Optional<Grid> voltage,
     Optional<Grid> power,
     Optional<Grid> transformer,
+    Optional<Grid> primary,
+    List<String> resonances,
     List<Grid> measured,
     List<Branch> branches,
     List<Working.Line> addingWorking,
@@ -77,9 +79,18 @@ public record NodePage(
   /** An entry of a picture's key. */
   public record Key(String svg, String name) {}
 
-  /** A finding. */
+  /**
+   * A finding.
+   *
+   * @param steps how its figure comes about; empty where the sentence says all
+   */
   public record Finding(
-      Verdict verdict, String sentence, String figure, String basis, String probability) {}
+      Verdict verdict,
+      String sentence,
+      String figure,
+      String basis,
+      String probability,
+      List<String> steps) {}
 
   /**
    * What hangs directly on the node.

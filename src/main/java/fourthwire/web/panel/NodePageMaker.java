@@ -2,6 +2,7 @@ package fourthwire.web.panel;
 
 import fourthwire.audit.DesignState;
 import fourthwire.limits.Finding;
+import fourthwire.quantity.Spectrum;
 import fourthwire.site.Panel;
 import fourthwire.site.SiteTree;
 import fourthwire.site.Transformer;
@@ -17,6 +18,9 @@ import org.springframework.stereotype.Component;
 /** Makes a node's page out of its result and the survey. */
 @Component
 class NodePageMaker {
+  /** Of the fundamental: less is not worth naming beside a resonance. */
+  private static final double WORTH_SAYING = 1e-4;
+
   private final Words words;
   private final NodeRows rows;
 
@@ -46,6 +50,8 @@ class NodePageMaker {
         tables.map(TablesMaker::voltage),
         tables.map(TablesMaker::power),
         tables.flatMap(TablesMaker::transformer),
+        tables.flatMap(TablesMaker::primary),
+        design.map(d -> resonances(node, d)).orElse(List.of()),
         tables.map(TablesMaker::measured).orElse(List.of()),
         new BranchesMaker(words, node, rows).make(),
         Working.lines(words, Working.ADDER),
@@ -80,11 +86,61 @@ class NodePageMaker {
             f ->
                 new NodePage.Finding(
                     Verdict.of(f.severity()),
-                    node.names().in(f.sentence()),
+                    FindingText.set(node.names().in(f.sentence())),
                     FindingText.figure(words, f),
-                    f.basis(),
-                    FindingText.probability(words, f)))
+                    FindingText.set(f.basis()),
+                    FindingText.probability(words, f),
+                    node.design()
+                        .map(d -> new FindingWorking(words, node, d).steps(f))
+                        .orElse(List.of())))
         .toList();
+  }
+
+  /** Where the impedance peaks, which bank makes it, and what flows at the orders beside it. */
+  private List<String> resonances(NodeCase node, DesignState design) {
+    return design.resonances().stream()
+        .map(
+            r ->
+                words.of(
+                    "resonances.sentence",
+                    r.bank(),
+                    Numbers.of(r.order()),
+                    Numbers.of(r.ohm(), "Ω"),
+                    beside(node, design, r.order())))
+        .map(String::strip)
+        .toList();
+  }
+
+  private String beside(NodeCase node, DesignState design, double peak) {
+    String flowing = flowing(node, design, peak);
+    return flowing.isEmpty() ? words.of("resonances.none") : words.of("resonances.beside", flowing);
+  }
+
+  private String flowing(NodeCase node, DesignState design, double peak) {
+    return java.util.stream.IntStream.of((int) Math.floor(peak), (int) Math.floor(peak) + 1)
+        .filter(h -> h >= 2 && h <= Spectrum.HIGHEST_ORDER)
+        .filter(h -> flows(design, h))
+        .mapToObj(h -> largest(node, design, h))
+        .collect(java.util.stream.Collectors.joining(" " + words.of("headline.and") + " "));
+  }
+
+  private static boolean flows(DesignState design, int order) {
+    return design.currentSpectrum().values().stream()
+        .anyMatch(s -> s.magnitude(order) > WORTH_SAYING * s.magnitude(1));
+  }
+
+  private String largest(NodeCase node, DesignState design, int order) {
+    return design.currentSpectrum().entrySet().stream()
+        .filter(e -> e.getKey().isLine())
+        .max(java.util.Comparator.comparingDouble(e -> e.getValue().magnitude(order)))
+        .map(
+            e ->
+                words.of(
+                    "resonances.order",
+                    Numbers.of(e.getValue().magnitude(order), "A"),
+                    Numbers.ordinal(order),
+                    node.names().of(e.getKey())))
+        .orElse("");
   }
 
   /** What the survey says of the node: voltage, system, rating, feeder. */

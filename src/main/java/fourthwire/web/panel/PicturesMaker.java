@@ -54,7 +54,7 @@ final class PicturesMaker {
             CyclePlot.draw(
                 design.currentSpectrum(), "A", words.of("cycle.alternative", node.node().node())),
             keys(),
-            table(orders),
+            table(IntStream.rangeClosed(1, Spectrum.HIGHEST_ORDER).boxed().toList()),
             voltage.map(this::voltage).orElse(""),
             voltage.map(v -> words.of("voltage.of", names.of(v.getKey()))).orElse("")));
   }

@@ -62,7 +62,7 @@ final class TablesMaker {
     List<String> heads = new ArrayList<>(List.of(words.of("power.figure")));
     heads.add(words.of("power.whole"));
     lines.forEach(c -> heads.add(names.of(c)));
-    Grids grid = new Grids(words, words.of("power.title", design.powerBasis()), heads);
+    Grids grid = new Grids(words, words.of("power.title", names.in(design.powerBasis())), heads);
     row(grid, "power.active", lines, p -> kilo(p.activeW()));
     row(grid, "power.reactive", lines, p -> kilo(p.fundamentalReactiveVar()));
     row(grid, "power.apparent", lines, p -> kilo(p.apparentVa()));
@@ -106,12 +106,54 @@ final class TablesMaker {
                         Working.FACTOR_K));
   }
 
+  /** A transformer's primary side: its lines, and its neutral where it has one. */
+  Optional<NodePage.Grid> primary() {
+    return design.primary().map(this::primary);
+  }
+
+  private NodePage.Grid primary(DesignState.PrimaryState primary) {
+    Grids grid =
+        new Grids(
+            words,
+            words.of("primary.title"),
+            heads(
+                "currents.conductor",
+                "currents.rms",
+                "currents.fundamental",
+                "currents.thd",
+                "currents.tdd",
+                "currents.ampacity",
+                "currents.loading"));
+    primary.lines().entrySet().stream()
+        .sorted(java.util.Map.Entry.comparingByKey())
+        .forEach(
+            e ->
+                grid.row(
+                    names.of(e.getKey()),
+                    List.of(
+                        e.getValue().rmsA(),
+                        e.getValue().fundamentalA(),
+                        e.getValue().thdPercent(),
+                        e.getValue().tddPercent(),
+                        e.getValue().ampacityA(),
+                        e.getValue().loadingPercent())));
+    DesignState.NeutralCurrent neutral = primary.neutral();
+    if (neutral.rmsA().value().isPresent()) {
+      Figure none = Figure.unknown("");
+      grid.row(
+          names.of(Conductor.N),
+          List.of(neutral.rmsA(), none, none, none, neutral.ampacityA(), neutral.loadingPercent()));
+    }
+    return grid.done();
+  }
+
   List<NodePage.Grid> measured() {
     return node.node().measured().stream().map(this::measured).toList();
   }
 
   private NodePage.Grid measured(MeasuredState state) {
-    String title = words.of("measured.title", state.meter(), state.period(), state.basis());
+    String title =
+        words.of("measured.title", state.meter(), state.period(), names.in(state.basis()));
     Grids grid =
         new Grids(
             words,

@@ -21,6 +21,7 @@ import java.util.stream.IntStream;
 final class CaptureTables {
   private static final int HIGHEST_DRAWN = 25;
   private static final double KILO = 1000;
+  private static final double SMALLEST_WITH_ANGLE = 1e-4;
 
   private final Words words;
   private final Names names;
@@ -107,6 +108,37 @@ final class CaptureTables {
     figures.add(p.powerFactor());
     figures.add(p.displacementFactor());
     grid.row(name, figures);
+  }
+
+  /** Every order that carries anything, of every conductor: amps and degrees. */
+  NodePage.Grid orders(CaptureResult capture) {
+    List<Conductor> shown = capture.spectrum().keySet().stream().sorted().toList();
+    List<String> heads = new ArrayList<>(List.of(words.of("spectrum.order")));
+    shown.forEach(c -> heads.add(words.of("spectrum.amps", names.of(c))));
+    shown.forEach(c -> heads.add(words.of("spectrum.degrees", names.of(c))));
+    Grids grid = new Grids(words, words.of("spectrum.table"), heads);
+    for (int order = 1; order <= Spectrum.HIGHEST_ORDER; order++) {
+      List<Figure> row = new ArrayList<>();
+      for (Conductor c : shown) {
+        row.add(Figure.of(spectrum(capture, c).magnitude(order)));
+      }
+      for (Conductor c : shown) {
+        row.add(angle(spectrum(capture, c), order));
+      }
+      grid.row(Numbers.ordinal(order), row);
+    }
+    return grid.done();
+  }
+
+  private static Spectrum spectrum(CaptureResult capture, Conductor c) {
+    return java.util.Objects.requireNonNull(capture.spectrum().get(c));
+  }
+
+  /** An angle, unless there is hardly anything that could have one. */
+  private static Figure angle(Spectrum spectrum, int order) {
+    return spectrum.magnitude(order) > SMALLEST_WITH_ANGLE * spectrum.rms()
+        ? Figure.of(Math.rint(spectrum.at(order).degrees()))
+        : Figure.unknown("");
   }
 
   /** Every conductor's odd orders beside each other, the fundamental left out. */

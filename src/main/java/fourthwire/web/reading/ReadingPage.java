@@ -10,7 +10,8 @@ import java.util.Optional;
  * @param facts what was read: files, period, length, digest
  * @param quality what is wrong with it, worst first
  * @param quantities of a log
- * @param currents of a capture, likewise voltages and powers
+ * @param capture of a capture: its currents, voltages and powers
+ * @param orders of a capture: the spectrum in figures
  */
 record ReadingPage(
     long id,
@@ -22,6 +23,7 @@ record ReadingPage(
     List<Quality> quality,
     Optional<NodePage.Grid> quantities,
     List<NodePage.Grid> capture,
+    Optional<NodePage.Grid> orders,
     String spectrum,
     String cycle,
     List<NodePage.Key> keys,

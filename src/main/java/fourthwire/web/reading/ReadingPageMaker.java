@@ -77,6 +77,10 @@ class ReadingPageMaker {
             .toList(),
         reading.log().map(this::quantities),
         reading.capture().map(c -> new CaptureTables(words, names).of(c)).orElse(List.of()),
+        reading
+            .capture()
+            .filter(c -> !c.spectrum().isEmpty())
+            .map(c -> new CaptureTables(words, names).orders(c)),
         reading.capture().map(c -> new CaptureTables(words, names).spectrum(c)).orElse(""),
         reading.capture().map(this::cycle).orElse(""),
         reading.capture().map(c -> keys(c, names)).orElse(List.of()),

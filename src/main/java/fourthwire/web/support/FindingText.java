@@ -49,6 +49,12 @@ public final class FindingText {
     if (finding.figure().value().isEmpty()) {
       return "";
     }
+    if (finding.code().equals(FindingCode.RESONANCE.word())) {
+      return words.of(
+          "finding.beside",
+          Numbers.of(finding.figure().value().getAsDouble()),
+          Numbers.ordinal((int) Math.rint(finding.limit().value().orElse(0))));
+    }
     String figure = Numbers.of(finding.figure().value().getAsDouble(), finding.unit());
     return finding.limit().value().isPresent()
         ? words.of(
@@ -76,5 +82,10 @@ public final class FindingText {
     return reason.isEmpty()
         ? probability(words, finding)
         : words.of("finding.probability.unknown", reason);
+  }
+
+  /** A sentence of the engine as a page sets it: powers of units raised. */
+  public static String set(String sentence) {
+    return sentence.replace("mm2", "mm²").replace(" ohm", Numbers.THIN_SPACE + "Ω");
   }
 }

@@ -1,0 +1,108 @@
+package fourthwire.web;
+
+import static org.assertj.core.api.Assertions.assertThat;
+
+import fourthwire.testsupport.Http.Answer;
+import fourthwire.testsupport.Http.Part;
+import fourthwire.testsupport.ServiceTest;
+import fourthwire.testsupport.SmallSite;
+import java.nio.charset.StandardCharsets;
+import java.util.Locale;
+import org.junit.jupiter.api.BeforeEach;
+import org.junit.jupiter.api.Test;
+
+/** Meters' files through the pages: taken in, shown in figures, refused with what is missing. */
+class ReadingPagesTest extends ServiceTest {
+  private static final String HTML = "text/html";
+
+  private String readings = "";
+
+  @BeforeEach
+  void makeSite() {
+    Answer added =
+        http().form("POST", "/sites", new Part("survey", "a.zip", SmallSite.zip("Mill")));
+    readings = added.header("Location").replaceAll(".*(/sites/\\d+).*", "$1") + "/readings";
+  }
+
+  /** THD of 1 + 0.3 of the 3rd is 30 %, its rms 10·√1.09 (definitions of IEEE 519-2022). */
+  @Test
+  void aCaptureShowsEveryOrderInFigures() throws InterruptedException {
+    String page = read("record.csv", capture(), "LP-1", "");
+    assertThat(page)
+        .contains("waveform capture", "Every order in figures", "50th")
+        .contains("30.0", "10.4", "3.00", "Crest factor")
+        .doesNotContain("??");
+  }
+
+  @Test
+  void aLogShowsItsQuantities() throws InterruptedException {
+    String log =
+        """
+        Time,I1,IN
+        2026-03-02 00:10:00,10,3
+        2026-03-02 00:20:00,20,4
+        2026-03-02 00:30:00,30,5
+        """;
+    String mapping =
+        """
+        {"kind":"log","time":{"columns":["Time"],"format":"yyyy-MM-dd HH:mm:ss","stamp":"end",
+        "interval_s":600},"columns":{"I1":{"quantity":"L1.rms_a"},"IN":{"quantity":"N.rms_a"}}}
+        """;
+    assertThat(read("week.csv", log, "LP-1", mapping))
+        .contains("interval log", "L1.rms_a", "N.rms_a", "20.0", "30.0")
+        .doesNotContain("??");
+  }
+
+  @Test
+  void aFileThatCantBeReadIsRefusedWithItsColumnsAndTheQuestions() {
+    Answer refused = add("odd.csv", "Moment,Foo,Bar\nyesterday,1,2\n", "LP-1", "");
+    assertThat(refused.status()).isEqualTo(422);
+    assertThat(text(refused))
+        .contains("The file was not read", "What must be said", "Foo", "Bar")
+        .doesNotContain("??", "Exception");
+  }
+
+  private String read(String name, String file, String at, String mapping)
+      throws InterruptedException {
+    Answer taken = add(name, file, at, mapping);
+    assertThat(taken.status()).as(text(taken)).isEqualTo(302);
+    String upload = taken.header("Location").replaceAll(".*(/uploads/\\d+).*", "$1");
+    Answer progress = http().get(upload, "Accept", HTML);
+    for (int tries = 0; progress.status() != 302 && tries < 600; tries++) {
+      assertThat(text(progress)).doesNotContain("failed");
+      Thread.sleep(50);
+      progress = http().get(upload, "Accept", HTML);
+    }
+    String reading = progress.header("Location").replaceAll(".*(/readings/\\d+).*", "$1");
+    Answer shown = http().get(reading, "Accept", HTML);
+    assertThat(shown.status()).isEqualTo(200);
+    return text(shown);
+  }
+
+  private Answer add(String name, String file, String at, String mapping) {
+    return http()
+        .form(
+            "POST",
+            readings,
+            new Part("file", name, file.getBytes(StandardCharsets.UTF_8)),
+            Part.field("at", at),
+            Part.field("mapping", mapping));
+  }
+
+  /** Twelve cycles at 50 Hz, 128 samples each. */
+  private static String capture() {
+    StringBuilder csv = new StringBuilder("time_s,L1.v,L1.i\n");
+    for (int k = 0; k < 12 * 128; k++) {
+      double t = k / 6400.0;
+      double wt = 2 * Math.PI * 50 * t;
+      double i = Math.sqrt(2) * (10 * Math.sin(wt) + 3 * Math.sin(3 * wt + Math.PI));
+      csv.append(
+          String.format(Locale.ROOT, "%.9f,%.6f,%.6f%n", t, 230 * Math.sqrt(2) * Math.sin(wt), i));
+    }
+    return csv.toString();
+  }
+
+  private static String text(Answer answer) {
+    return new String(answer.response().body(), StandardCharsets.UTF_8);
+  }
+}
