@@ -91,13 +91,14 @@ class ReadingPagesTest extends ServiceTest {
 
   /** Twelve cycles at 50 Hz, 128 samples each. */
   private static String capture() {
-    StringBuilder csv = new StringBuilder("time_s,L1.v,L1.i\n");
+    StringBuilder csv = new StringBuilder("Time [ms],U1 [V],I1 [A]\n");
     for (int k = 0; k < 12 * 128; k++) {
       double t = k / 6400.0;
       double wt = 2 * Math.PI * 50 * t;
       double i = Math.sqrt(2) * (10 * Math.sin(wt) + 3 * Math.sin(3 * wt + Math.PI));
       csv.append(
-          String.format(Locale.ROOT, "%.9f,%.6f,%.6f%n", t, 230 * Math.sqrt(2) * Math.sin(wt), i));
+          String.format(
+              Locale.ROOT, "%.6f,%.6f,%.6f%n", 1000 * t, 230 * Math.sqrt(2) * Math.sin(wt), i));
     }
     return csv.toString();
   }
