@@ -125,8 +125,7 @@ final class Ampacities {
           .amps()
           .value()
           .ifPresentOrElse(
-              amps ->
-                  known.add(new ConductorRating(name + " (" + ampacity.basis() + ")", amps, true)),
+              amps -> known.add(new ConductorRating(name + ", " + ampacity.basis(), amps, true)),
               () -> reason = ampacity.amps().reason());
     }
 

@@ -108,8 +108,7 @@ public final class CoupledSolver {
     double[] x = new double[length];
     double[] g = new double[length];
     Settling settling = new Settling(loads, filters, orders);
-    for (int pass = 1; pass <= PLAIN_PASSES; pass++) {
-      refuse(image(x, g));
+    for (int pass = 1; pass <= PLAIN_PASSES && image(x, g).isEmpty(); pass++) {
       settling.look(x, g);
       System.arraycopy(g, 0, x, 0, length);
       solveNetwork(x);

@@ -182,9 +182,10 @@ final class DevicePort {
   }
 
   /**
-   * The slope at the electromotive force last solved, by small steps of it. Of a load on three
-   * lines only the first line's columns are stepped: turning all by a third of a cycle gives the
-   * others, exactly on a balanced voltage and well enough to iterate with on any other.
+   * The slope at the electromotive force last solved (which it follows at once), by small steps of
+   * it. Of a load on three lines only the first line's columns are stepped: turning all by a third
+   * of a cycle gives the others, exactly on a balanced voltage and well enough to iterate with on
+   * any other.
    */
   DeviceSlope slope(OrdersInPlay orders) {
     int size = length(orders);
@@ -192,7 +193,6 @@ final class DevicePort {
     double[] before = new double[size];
     double[] after = new double[size];
     double step = SLOPE_STEP * nominalV();
-    solver.solve(emf, seriesOhm, seriesHenry, drawn);
     copyDrawn(orders, before, 0);
     for (int k = 0; k < orders.count(); k++) {
       for (int part = 0; part < 2; part++) {

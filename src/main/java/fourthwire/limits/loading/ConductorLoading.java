@@ -78,7 +78,7 @@ public record ConductorLoading(
   }
 
   private String basis(AmpacityFactors factors) {
-    return factor < 1 ? factors.basis() : "ampacity of the " + adjustedName + " as surveyed";
+    return factor < 1 ? factors.basis() : "Rating: " + adjustedName;
   }
 
   private String sentence(String conductor, AmpacityFactors factors) {

@@ -12,7 +12,7 @@ import java.util.OptionalDouble;
  * @param basis one sentence: the survey's own figure, or the table it was looked up in
  */
 public record Ampacity(Figure amps, String basis) {
-  private static final String SURVEYED = "ampacity of the feeder as surveyed";
+  private static final String SURVEYED = "ampacity as surveyed";
 
   /** Ampacity of a line: ampacity_a, else the table's for conductor_size. */
   public static Ampacity ofLine(Feeder feeder) {
@@ -34,8 +34,7 @@ public record Ampacity(Figure amps, String basis) {
   public static Ampacity ofNeutral(Feeder feeder) {
     if (feeder.neutralAmpacityA().isPresent()) {
       return new Ampacity(
-          Figure.of(feeder.neutralAmpacityA().getAsDouble()),
-          "ampacity of the neutral as surveyed");
+          Figure.of(feeder.neutralAmpacityA().getAsDouble()), "ampacity as surveyed");
     }
     int count = feeder.neutralConductors().orElse(1);
     Optional<String> size = feeder.neutralSize();
