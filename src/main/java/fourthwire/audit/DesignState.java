@@ -27,7 +27,7 @@ import java.util.Optional;
  * @param shortCircuitA the short-circuit current solved at this node, amps
  * @param transformer of a transformer
  * @param primary of a transformer: its primary's lines, neutral and spectrum
- * @param harmonicLossFactor ΣI_h²h²/ΣI_h² of the worst line
+ * @param harmonicLossFactor ΣI_h²h²/ΣI_h² of the most loaded line
  * @param lossesW of its feeder, and of a transformer its winding losses, watts
  * @param currentUnbalancePercent |I2|/|I1|
  * @param zeroSequencePercent |I0|/|I1|

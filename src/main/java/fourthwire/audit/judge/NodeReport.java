@@ -80,7 +80,7 @@ public final class NodeReport {
         context.faults().amps(place.name()),
         place.transformer().map(t -> transformerState()),
         place.transformer().map(this::primaryState),
-        worstHarmonicLossFactor(lines),
+        harmonicLossFactor(lines),
         Figure.of(lossesW()),
         sequences(lines).map(SymmetricalComponents::negativePercent).orElse(NOT_THREE_LINES),
         sequences(lines).map(SymmetricalComponents::zeroPercent).orElse(NOT_THREE_LINES),
@@ -95,10 +95,10 @@ public final class NodeReport {
     return three.size() == 3 ? Optional.of(SymmetricalComponents.of(three)) : Optional.empty();
   }
 
-  private static Figure worstHarmonicLossFactor(List<Spectrum> lines) {
+  private static Figure harmonicLossFactor(List<Spectrum> lines) {
     return lines.stream()
+        .max(Comparator.comparingDouble(Spectrum::rms))
         .map(HarmonicLoss::harmonicLossFactor)
-        .max(Comparator.comparingDouble(f -> f.value().orElse(-1)))
         .orElse(Figure.unknown("no lines"));
   }
 

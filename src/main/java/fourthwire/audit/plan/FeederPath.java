@@ -15,6 +15,15 @@ public record FeederPath(SeriesImpedance line, SeriesImpedance neutral, List<Str
   public static final FeederPath NONE =
       new FeederPath(SeriesImpedance.NONE, SeriesImpedance.NONE, List.of());
 
+  /**
+   * A standby supply stands at the bus itself: the feeder that the survey tells of is not in use.
+   */
+  static final FeederPath NOT_IN_USE =
+      new FeederPath(
+          SeriesImpedance.NONE,
+          SeriesImpedance.NONE,
+          List.of("The standby supply stands at this bus: its own feeder is not in use."));
+
   /** This with another feeder's neutral. */
   public FeederPath withNeutralOf(FeederPath other) {
     return new FeederPath(line, other.neutral, assumptions);

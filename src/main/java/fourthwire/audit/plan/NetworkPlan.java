@@ -126,7 +126,7 @@ public final class NetworkPlan {
                 Numbering.of(node.conductors()),
                 FeederPath.NONE);
         case TRANSFORMER -> {
-          if (supply.roleOrDefault() == SupplyRole.STANDBY && fedByTheSupply(node)) {
+          if (isTakenOver(node)) {
             layBehindFeeder(node);
           } else {
             layTransformer(node);
@@ -144,8 +144,9 @@ public final class NetworkPlan {
       }
     }
 
-    private boolean fedByTheSupply(SiteTree.Node node) {
-      return node.parent().filter(supply.name()::equals).isPresent();
+    private boolean isTakenOver(SiteTree.Node node) {
+      return supply.roleOrDefault() == SupplyRole.STANDBY
+          && node.parent().filter(supply.name()::equals).isPresent();
     }
 
     private Place parentOf(SiteTree.Node node) {
@@ -158,7 +159,7 @@ public final class NetworkPlan {
 
     private void layBehindFeeder(SiteTree.Node node) {
       Place parent = parentOf(node);
-      FeederPath path = feeders.of(node.feeder());
+      FeederPath path = isTakenOver(node) ? FeederPath.NOT_IN_USE : feeders.of(node.feeder());
       List<FeederConductor> conductors =
           new ArrayList<>(lineConductors(parent, node.parentLines(), path));
       if (node.hasNeutral()) {

@@ -8,13 +8,14 @@ import fourthwire.network.OrderSolution;
 import fourthwire.network.TreeNetwork;
 import fourthwire.quantity.Conductor;
 import fourthwire.site.Filter;
+import java.util.Arrays;
 import java.util.List;
 
 /**
  * An active filter at its panel: it feeds the panel the harmonics of what hangs below, orders 2 to
  * 25, so that they do not come from above; up to its rated current per line (three times that in
- * the neutral), all orders clipped in one proportion. Without a neutral it leaves zero sequence
- * alone. Source: the public contract and methods; a screening model, no source.
+ * the neutral), all orders of a line clipped in one proportion. Without a neutral it leaves zero
+ * sequence alone. Source: the public contract and methods; a screening model, no source.
  */
 final class ActiveFilter {
   private static final int HIGHEST_ORDER = 25;
@@ -23,13 +24,15 @@ final class ActiveFilter {
   private final int[] lines;
   private final int neutral;
   private final int offset;
-  private double part = 1;
+  private final double[] parts;
 
   private ActiveFilter(double ratedA, int[] lines, int neutral, int offset) {
     this.ratedA = ratedA;
     this.lines = lines;
     this.neutral = neutral;
     this.offset = offset;
+    this.parts = new double[lines.length];
+    Arrays.fill(parts, 1);
   }
 
   /**
@@ -93,20 +96,28 @@ final class ActiveFilter {
     }
   }
 
-  /** One factor for all lines keeps what sums to zero summing to zero. */
+  /**
+   * Each line to its rated current, all its orders in one proportion; without a neutral all lines
+   * alike, so that what sums to zero goes on summing to zero.
+   */
   private void clip(double[] g, int perLine) {
-    double largest = 0;
+    double smallest = 1;
     for (int line = 0; line < lines.length; line++) {
       double square = 0;
       for (int k = 0; k < perLine; k++) {
-        double part = g[offset + line * perLine + k];
-        square += part * part;
+        double amps = g[offset + line * perLine + k];
+        square += amps * amps;
       }
-      largest = Math.max(largest, Math.sqrt(square));
+      parts[line] = square > ratedA * ratedA ? ratedA / Math.sqrt(square) : 1;
+      smallest = Math.min(smallest, parts[line]);
     }
-    part = largest > ratedA ? ratedA / largest : 1;
-    for (int k = 0; k < lines.length * perLine; k++) {
-      g[offset + k] *= part;
+    if (neutral < 0) {
+      Arrays.fill(parts, smallest);
+    }
+    for (int line = 0; line < lines.length; line++) {
+      for (int k = 0; k < perLine; k++) {
+        g[offset + line * perLine + k] *= parts[line];
+      }
     }
   }
 
@@ -124,8 +135,8 @@ final class ActiveFilter {
         int at = offset + line * perLine + 2 * k;
         int h = orders.at(k);
         boolean taken = h > 1 && h <= HIGHEST_ORDER;
-        answer[at] = taken ? part * (response[h].currentRe(lines[line]) + y[at]) : 0;
-        answer[at + 1] = taken ? part * (response[h].currentIm(lines[line]) + y[at + 1]) : 0;
+        answer[at] = taken ? parts[line] * (response[h].currentRe(lines[line]) + y[at]) : 0;
+        answer[at + 1] = taken ? parts[line] * (response[h].currentIm(lines[line]) + y[at + 1]) : 0;
       }
     }
     if (neutral < 0) {

@@ -12,7 +12,6 @@ import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
 import java.util.OptionalDouble;
-import java.util.function.Function;
 
 /**
  * What a transformer carries of a distorted current.
@@ -25,7 +24,7 @@ import java.util.function.Function;
  *
  * @param loadingPercent rms of the most loaded line on the rated current
  * @param kFactor Σ(I_h/I_rated)²·h², largest line
- * @param harmonicLossFactor F_HL of the line that derates most
+ * @param harmonicLossFactor F_HL of the most loaded line
  * @param deratedA what a line may carry of this shape, amps
  * @param deratedKva the same as a rating, kVA
  * @param deratedLoadingPercent rms of the most loaded line on {@code deratedA}
@@ -50,13 +49,17 @@ public record TransformerLoading(
   private static final double EDDY_RATIO = 0.1;
   private static final double EXPONENT = 1.7;
 
-  /** Judges a transformer by its most loaded line and its most distorted one. */
+  /** Judges a transformer by its most loaded line. */
   public static TransformerLoading of(TransformerCase t) {
-    double rmsA = t.lines().stream().mapToDouble(Spectrum::rms).max().orElse(0);
+    Spectrum worst =
+        t.lines().stream()
+            .max(Comparator.comparingDouble(Spectrum::rms))
+            .orElseThrow(() -> new IllegalArgumentException("a transformer has a line"));
+    double rmsA = worst.rms();
     double k =
         t.lines().stream().mapToDouble(i -> HarmonicLoss.kFactor(i, t.ratedA())).max().orElse(0);
-    Figure lossFactor = largest(t, HarmonicLoss::harmonicLossFactor);
-    Figure factorK = largest(t, i -> HarmonicLoss.factorK(i, EDDY_RATIO, EXPONENT));
+    Figure lossFactor = HarmonicLoss.harmonicLossFactor(worst);
+    Figure factorK = HarmonicLoss.factorK(worst, EDDY_RATIO, EXPONENT);
     Figure perUnit = lossFactor.map(f -> deratedPerUnit(t.eddyFraction(), f));
     Figure deratedA = perUnit.map(pu -> pu * t.ratedA());
     Figure deratedKva = perUnit.map(pu -> pu * t.ratedKva());
@@ -83,14 +86,6 @@ public record TransformerLoading(
         .mapToDouble(row -> row.number("k"))
         .filter(k -> k >= kFactor)
         .min();
-  }
-
-  private static Figure largest(TransformerCase t, Function<Spectrum, Figure> f) {
-    return t.lines().stream()
-        .map(f)
-        .filter(figure -> figure.value().isPresent())
-        .max(Comparator.comparingDouble(figure -> figure.value().orElseThrow()))
-        .orElse(Figure.unknown("no current flows"));
   }
 
   private static List<Finding> findings(
