@@ -92,7 +92,7 @@ final class CapacitorInputSolver implements LoadSolver {
 
   /** g(v) = map(v) - v with no current at the section; NaN where the capacitor empties. */
   private double defect(double v) {
-    if (bridge.march(section, cells, 0, v, false) == PairBridge.End.COLLAPSED) {
+    if (!bridge.march(section, cells, 0, v, false)) {
       return Double.NaN;
     }
     return bridge.v - v;
@@ -142,7 +142,7 @@ final class CapacitorInputSolver implements LoadSolver {
     double v = peak * 0.95;
     double sign = bridge.emf.halfWave ? -1 : 1;
     for (int n = 0; n < 60; n++) {
-      if (bridge.march(section, cells, i, v, false) == PairBridge.End.COLLAPSED) {
+      if (!bridge.march(section, cells, i, v, false)) {
         return false;
       }
       double endI = sign * bridge.i;
@@ -162,12 +162,12 @@ final class CapacitorInputSolver implements LoadSolver {
       }
       double di = 1e-5 * i;
       double dv = 1e-6 * peak;
-      if (bridge.march(section, cells, i + di, v, false) == PairBridge.End.COLLAPSED) {
+      if (!bridge.march(section, cells, i + di, v, false)) {
         return false;
       }
       double aii = (sign * bridge.i - endI) / di - 1;
       double avi = (bridge.v - endV) / di;
-      if (bridge.march(section, cells, i, v + dv, false) == PairBridge.End.COLLAPSED) {
+      if (!bridge.march(section, cells, i, v + dv, false)) {
         return false;
       }
       double aiv = (sign * bridge.i - endI) / dv;
@@ -192,7 +192,7 @@ final class CapacitorInputSolver implements LoadSolver {
     double i = 0;
     double v = peak;
     for (int n = 0; n < MOST_SUBSTITUTIONS; n++) {
-      if (bridge.march(section, cells, i, v, false) == PairBridge.End.COLLAPSED) {
+      if (!bridge.march(section, cells, i, v, false)) {
         return false;
       }
       double moved = Math.abs(bridge.v - v) / peak;

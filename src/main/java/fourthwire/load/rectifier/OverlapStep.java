@@ -20,7 +20,7 @@ final class OverlapStep {
   private double threshold;
 
   /** One diode's logarithmic drop at the threshold, volts. */
-  double thresholdV;
+  private double thresholdV;
 
   /** Results of the last step: the shared currents and the capacitor's voltage. */
   double xa;
@@ -57,6 +57,23 @@ final class OverlapStep {
   void threshold(double amps) {
     threshold = amps;
     thresholdV = slopeV * Math.log(1 + amps / saturation);
+  }
+
+  /**
+   * How willingly an idle line would join: positive where, with a threshold's current taken over by
+   * it from a direct current, that current would grow.
+   *
+   * @param total direct current, amps
+   * @param driveA e_a - e_c of the line that conducts, volts
+   * @param driveB e_b - e_c of the idle line
+   */
+  double margin(double total, double volts, double driveA, double driveB) {
+    double first = Math.max(total - threshold, threshold);
+    slopes(first, threshold, volts, driveA, driveB);
+    double shared = conductance(first + threshold);
+    double share =
+        own > 0 ? mutual / own : (mutualOhm + shared) / (ownOhm + shared + conductance(first));
+    return fb - share * fa;
   }
 
   private double drop(double amps) {

@@ -38,8 +38,11 @@ final class PathStep {
   /** Amps under which a path counts as open; below it the drop is held. */
   double threshold;
 
+  /** What a drive has to have over the capacitor's voltage for a current to start, volts. */
+  double onsetV;
+
   /** Both diodes' logarithmic drop at the threshold, volts. */
-  double thresholdV;
+  private double thresholdV;
 
   private int division;
 
@@ -68,6 +71,7 @@ final class PathStep {
   void threshold(double amps) {
     threshold = amps;
     thresholdV = slopeV * Math.log(1 + amps / saturation);
+    onsetV = thresholdV + resistance * amps;
   }
 
   private double drop(double amps) {

@@ -60,26 +60,6 @@ final class PulseTrace {
     size++;
   }
 
-  int size() {
-    return size;
-  }
-
-  double position(int node) {
-    return position[node];
-  }
-
-  double amps(int node) {
-    return amps[node];
-  }
-
-  double charge(int node) {
-    return charge[node];
-  }
-
-  boolean starts(int node) {
-    return starts[node];
-  }
-
   /**
    * Writes the rms phasors of the recorded current.
    *
@@ -188,19 +168,21 @@ final class PulseTrace {
     return (amps[n + 1] - amps[n]) / (position[n + 1] - position[n]);
   }
 
-  /** Mean over the record's span of the product with a table, per cell of the whole cycle. */
-  double meanProduct(CycleTable table, boolean halfWave) {
+  /** What is averaged over a cycle. */
+  interface Integrand {
+    /** At a position in cells, where the current is so large. */
+    double at(double position, double amps);
+  }
+
+  /** Mean over the cycle of a function that is zero where no current flows. */
+  double mean(boolean halfWave, Integrand f) {
     slopes();
     double sum = 0;
     for (int n = 0; n + 1 < size; n++) {
-      if (starts[n + 1]) {
-        continue;
-      }
-      double width = position[n + 1] - position[n];
-      for (int g = 0; g < 3; g++) {
+      double width = starts[n + 1] ? 0 : position[n + 1] - position[n];
+      for (int g = 0; g < 3 && width > 0; g++) {
         double x = GAUSS_X[g];
-        double current = inside(n, width, x);
-        sum += width * GAUSS_W[g] * current * table.at(position[n] + x * width);
+        sum += width * GAUSS_W[g] * f.at(position[n] + x * width, inside(n, width, x));
       }
     }
     return sum / CycleTable.CELLS * (halfWave ? 2 : 1);

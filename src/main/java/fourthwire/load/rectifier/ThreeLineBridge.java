@@ -1,32 +1,30 @@
 package fourthwire.load.rectifier;
 
-import fourthwire.load.model.NoSteadyStateException;
-import fourthwire.load.model.PortSpectra;
-
 /**
  * A six-pulse bridge followed through time: no line conducting, a pair, or three in commutation
  * overlap; each change of the conducting set is found as an event.
  *
- * <p>A third line joins where its electromotive force passes the potential of the bridge's upper or
- * lower rail by a diode's threshold; a line leaves where its current falls through the threshold.
- * Workspace of one solver, not thread-safe.
+ * <p>A third line joins where, with a diode's threshold current in it and the direct current
+ * unchanged, that current would grow; a line leaves where its current falls through the threshold,
+ * handing it to the line that stays. Both look at the same equations at the same currents, so that
+ * a line that has joined does not leave at once. Workspace of one solver, not thread-safe.
  */
 final class ThreeLineBridge {
+  /** First steps after a change, as shares of the way to a node: the current starts like t². */
   private static final double[] GRADING = {0.02, 0.06, 0.16, 0.36, 1};
-  private static final int MOST_SWITCHINGS = 600;
 
-  /** A line that has left stands just at its rail: for this many cells rounding could recall it. */
+  private static final int MOST_SWITCHINGS = 600;
+  private static final double EVENT_CELLS = 1e-7;
+
+  /**
+   * A line that has left may join again only this many cells later, unless its margin is clear: a
+   * current of about the threshold's would else come and go without end.
+   */
   private static final double REST_OF_LEAVER = 0.1;
 
-  /** Unless it is past a rail (the other one) by this many volts. */
-  private static final double CLEARLY_PAST_V = 1;
-
-  private static final double SHORTEST_STEP = 1e-9;
-
-  final CycleTable[] emf = {new CycleTable(), new CycleTable(), new CycleTable()};
+  final ThreeLineEmf emf = new ThreeLineEmf();
   final PulseTrace[] trace = {new PulseTrace(), new PulseTrace(), new PulseTrace()};
   final PathStep pair = new PathStep();
-  final OverlapStep overlap = new OverlapStep();
 
   /** Signed line currents, 0 where a line does not conduct. */
   final double[] line = new double[3];
@@ -37,94 +35,85 @@ final class ThreeLineBridge {
   /** Capacitor voltage under which the load counts as having emptied it. */
   double floorV;
 
-  private double lineInductance;
-  private double lineOhm;
+  private final OverlapStep overlap = new OverlapStep();
+  private final Discharge discharge = new Discharge(emf::spread, pair);
+  private final EventFinder.Margin pairShortfall = this::pairShortfall;
+  private final EventFinder.Margin joinMargin = this::joinMarginAfter;
+  private final EventFinder.Margin overlapShortfall = this::overlapShortfall;
+
   private boolean recording;
   private int switchings;
-  private double u;
-  private double joinNotBefore;
+  private boolean justLeft;
+  private double joinsFrom;
 
-  void set(double ohm, double henry, BridgeLoad load, double cellSeconds) {
+  /** Position in cells, and the end of the march. */
+  private double u;
+
+  private double to;
+
+  /** Lines of a pair: current enters by p, returns by n, t idles. */
+  private int p;
+
+  private int n;
+  private int t;
+
+  /** Lines of an overlap: a and b share the current that returns by c; sign of a's current. */
+  private int a;
+
+  private int b;
+  private int c;
+  private int sign;
+
+  /** Shared currents at the start of a step. */
+  private double xa;
+
+  private double xb;
+
+  void set(double ohm, double henry, BridgeLoad load, double cellSeconds, double threshold) {
     pair.set(2 * ohm + load.dcOhm(), 2 * henry + load.dcHenry(), load, cellSeconds);
     overlap.set(ohm, henry, load, cellSeconds);
-    lineInductance = henry / cellSeconds;
-    lineOhm = ohm + load.diode().ohm();
-  }
-
-  void threshold(double amps) {
-    pair.threshold(amps);
-    overlap.threshold(amps);
-  }
-
-  /**
-   * Samples the three electromotive forces and takes their common part away, which drives nothing.
-   */
-  void fill(PortSpectra spectra) {
-    for (int k = 0; k < 3; k++) {
-      emf[k].fill(spectra.re[k], spectra.im[k]);
-    }
-    for (int n = 0; n <= 2 * CycleTable.CELLS; n++) {
-      double mean = (emf[0].value[n] + emf[1].value[n] + emf[2].value[n]) / 3;
-      double drift = (emf[0].slope[n] + emf[1].slope[n] + emf[2].slope[n]) / 3;
-      for (int k = 0; k < 3; k++) {
-        emf[k].value[n] -= mean;
-        emf[k].slope[n] -= drift;
-      }
-    }
+    pair.threshold(threshold);
+    overlap.threshold(threshold);
   }
 
   /**
    * Marches over a number of cells from a position, starting with {@link #line} and {@link #v} as
    * they stand.
    *
-   * @return false where the load empties the capacitor
+   * @return false where the load empties the capacitor, or the current breaks up without end
    */
   boolean march(double from, double cells, boolean record) {
     recording = record;
     switchings = 0;
+    justLeft = false;
+    joinsFrom = from;
     u = from;
-    joinNotBefore = from;
-    double to = from + cells;
+    to = from + cells;
     if (record) {
-      for (PulseTrace t : trace) {
-        t.clear();
+      for (PulseTrace each : trace) {
+        each.clear();
       }
     }
-    boolean fresh = false;
-    while (u < to) {
-      int conducting = conducting();
-      boolean alive;
-      if (conducting == 0) {
-        alive = rest(to);
-        fresh = true;
-      } else if (conducting == 2) {
-        alive = runPair(to, fresh);
-        fresh = conducting() == 3;
+    int before = conducting();
+    while (u < to && v > floorV && switchings <= MOST_SWITCHINGS) {
+      int now = conducting();
+      if (now == 0) {
+        rest();
       } else {
-        alive = runOverlap(to, fresh);
-        fresh = false;
+        begin();
+        conduct(now, now > before);
       }
-      if (!alive) {
-        return false;
-      }
+      before = now;
     }
-    return true;
+    return u >= to && v > floorV;
   }
 
-  int conducting() {
-    int count = 0;
-    for (double i : line) {
-      if (i != 0) {
-        count++;
-      }
-    }
-    return count;
+  private int conducting() {
+    return (line[0] != 0 ? 1 : 0) + (line[1] != 0 ? 1 : 0) + (line[2] != 0 ? 1 : 0);
   }
 
   private void begin() {
-    if (++switchings > MOST_SWITCHINGS) {
-      throw new NoSteadyStateException("the drive's current switches too often to be followed");
-    }
+    switchings++;
     if (recording) {
       for (int k = 0; k < 3; k++) {
         if (line[k] != 0) {
@@ -134,135 +123,70 @@ final class ThreeLineBridge {
     }
   }
 
-  private int highest(double at) {
-    double a = emf[0].at(at);
-    double b = emf[1].at(at);
-    double c = emf[2].at(at);
-    return a >= b ? (a >= c ? 0 : 2) : (b >= c ? 1 : 2);
+  private void rest() {
+    if (!discharge.run(u, v, justLeft, to, floorV)) {
+      v = 0;
+      return;
+    }
+    justLeft = false;
+    u = discharge.u;
+    v = discharge.v;
+    if (discharge.turnedOn) {
+      line[emf.highest(u)] = pair.threshold;
+      line[emf.lowest(u)] = -pair.threshold;
+    }
   }
 
-  private int lowest(double at) {
-    double a = emf[0].at(at);
-    double b = emf[1].at(at);
-    double c = emf[2].at(at);
-    return a <= b ? (a <= c ? 0 : 2) : (b <= c ? 1 : 2);
-  }
-
-  private double difference(double at) {
-    double a = emf[0].at(at);
-    double b = emf[1].at(at);
-    double c = emf[2].at(at);
-    return Math.max(a, Math.max(b, c)) - Math.min(a, Math.min(b, c));
-  }
-
-  private boolean rest(double to) {
-    double from = u;
-    double square = v * v;
-    double fall = 2 * pair.power / pair.capacitance;
-    double before = u;
-    boolean on = difference(u) - pair.thresholdV > v + pair.slopeV;
-    while (!on) {
-      double node = Math.min(Math.floor(before) + 1, to);
-      double left = square - fall * (node - from);
-      if (left <= floorV * floorV) {
-        return false;
+  /** Steps until the set of conducting lines changes. */
+  private void conduct(int lines, boolean fresh) {
+    if (lines == 2) {
+      p = line[0] > 0 ? 0 : line[1] > 0 ? 1 : 2;
+      n = line[0] < 0 ? 0 : line[1] < 0 ? 1 : 2;
+      t = 3 - p - n;
+      if (joins(joinMargin(line[p], u, v), u)) {
+        join();
+        return;
       }
-      double drive = difference(node) - pair.thresholdV;
-      if (drive > 0 && drive * drive >= left) {
-        u = turnOn(before, node, from, square, fall);
-        on = true;
-      } else if (node >= to) {
-        u = to;
-        break;
-      }
-      before = node;
-    }
-    v = Math.sqrt(square - fall * (u - from));
-    if (on) {
-      line[highest(u)] = pair.threshold;
-      line[lowest(u)] = -pair.threshold;
-    }
-    return true;
-  }
-
-  private double turnOn(double a, double b, double from, double square, double fall) {
-    double low = a;
-    double high = b;
-    double gLow = excess(a, from, square, fall);
-    if (gLow >= 0) {
-      return b; // just turned off: let it move on, or it chatters
-    }
-    double gHigh = excess(b, from, square, fall);
-    for (int n = 0; n < 60 && high - low > 1e-9; n++) {
-      double x = high - gHigh * (high - low) / (gHigh - gLow);
-      double g = excess(x, from, square, fall);
-      if (g < 0) {
-        low = x;
-        gLow = g;
-        gHigh /= 2;
-      } else {
-        high = x;
-        gHigh = g;
-        gLow /= 2;
-      }
-    }
-    return high;
-  }
-
-  private double excess(double at, double from, double square, double fall) {
-    return difference(at) - pair.thresholdV - Math.sqrt(square - fall * (at - from));
-  }
-
-  private boolean runPair(double to, boolean fresh) {
-    begin();
-    int p = line[0] > 0 ? 0 : line[1] > 0 ? 1 : 2;
-    int n = line[0] < 0 ? 0 : line[1] < 0 ? 1 : 2;
-    double clearly = u < joinNotBefore ? CLEARLY_PAST_V : 0;
-    if (joinMargin(p, n, 3 - p - n, line[p], u, v) > clearly) {
-      join(p, n, 3 - p - n);
-      return true;
+    } else {
+      int positive = (line[0] > 0 ? 1 : 0) + (line[1] > 0 ? 1 : 0) + (line[2] > 0 ? 1 : 0);
+      sign = positive == 2 ? 1 : -1;
+      c = line[0] * sign < 0 ? 0 : line[1] * sign < 0 ? 1 : 2;
+      a = c == 0 ? 1 : 0;
+      b = 3 - a - c;
     }
     double base = u;
-    double span = gradedSpan(to);
+    double span = Math.min(pair.nextNode(pair.nextNode(u)), to) - u;
     int graded = fresh ? 0 : GRADING.length;
-    while (u < to) {
+    boolean same = true;
+    while (same && u < to && v > floorV) {
       double next =
           graded < GRADING.length
               ? base + GRADING[graded++] * span
               : Math.min(pair.nextNode(u), to);
-      if (!stepPair(p, n, next)) {
-        return v > 0;
+      if (u < joinsFrom) {
+        next = Math.min(next, joinsFrom);
       }
+      same = lines == 2 ? stepPair(next) : stepOverlap(next);
     }
-    return true;
-  }
-
-  private double gradedSpan(double to) {
-    return Math.min(pair.nextNode(pair.nextNode(u)), to) - u;
   }
 
   /** One step of a pair; false where the set of conducting lines has changed. */
-  private boolean stepPair(int p, int n, double next) {
-    double x = line[p];
+  private boolean stepPair(double next) {
+    xa = line[p];
     double h = next - u;
-    double v0 = v;
-    double e0 = emf[p].at(u) - emf[n].at(u);
-    double d0 = emf[p].slopeAt(u) - emf[n].slopeAt(u);
-    int third = 3 - p - n;
-    double start = u;
-    tryPair(h, x, v0, e0, d0, p, n, start);
-    boolean leaves = pair.i < pair.threshold;
+    double short0 = pairShortfall(h);
+    boolean leaves = short0 > 0;
     if (leaves) {
-      h = leaveOfPair(h, x, v0, e0, d0, p, n, start);
+      h = EventFinder.find(pairShortfall, 0, pair.threshold - xa, h, short0, EVENT_CELLS, 0);
     }
-    boolean joins =
-        start + h >= joinNotBefore && joinMargin(p, n, third, pair.i, start + h, pair.v) > 0;
+    double margin = joinMargin(pair.i, u + h, pair.v);
+    boolean joins = joins(margin, u + h);
     if (joins) {
-      h = joinOfPair(h, x, v0, e0, d0, p, n, start);
+      h = joinAfter(h, margin);
       leaves = false;
     }
     double charge = pair.charge(h, v);
-    u = leaves || joins ? start + h : next;
+    u = leaves || joins ? u + h : next;
     v = pair.v;
     line[p] = pair.i;
     line[n] = -pair.i;
@@ -270,195 +194,107 @@ final class ThreeLineBridge {
       trace[p].next(u, pair.i, charge);
       trace[n].next(u, -pair.i, -charge);
     }
-    if (!(v > floorV)) {
-      v = 0;
-      return false;
-    }
     if (leaves) {
-      line[p] = 0;
-      line[n] = 0;
-      return false;
+      endPair();
+    } else if (joins) {
+      join();
     }
-    if (joins) {
-      join(p, n, third);
-    }
-    return !joins;
+    return !leaves && !joins;
   }
 
-  private void tryPair(
-      double h, double x, double v0, double e0, double d0, int p, int n, double start) {
-    pair.step(h, x, v0, e0, d0, emf[p].at(start + h) - emf[n].at(start + h));
+  private double joinAfter(double h, double margin) {
+    double before = joinMargin(xa, u, v);
+    return before < 0 && u >= joinsFrom
+        ? EventFinder.find(joinMargin, 0, before, h, margin, EVENT_CELLS, 0)
+        : h;
   }
 
-  private double leaveOfPair(
-      double whole, double x, double v0, double e0, double d0, int p, int n, double start) {
-    double low = 0;
-    double high = whole;
-    double gLow = Math.max(x - pair.threshold, 1e-12 * pair.threshold);
-    double gHigh = pair.i - pair.threshold;
-    for (int k = 0; k < 40 && high - low > 1e-7; k++) {
-      double h = high - gHigh * (high - low) / (gHigh - gLow);
-      tryPair(h, x, v0, e0, d0, p, n, start);
-      double g = pair.i - pair.threshold;
-      if (g > 0) {
-        low = h;
-        gLow = g;
-        gHigh /= 2;
-      } else {
-        high = h;
-        gHigh = g;
-        gLow /= 2;
-      }
-    }
-    tryPair(high, x, v0, e0, d0, p, n, start);
-    return Math.max(high, SHORTEST_STEP);
+  private void endPair() {
+    line[p] = 0;
+    line[n] = 0;
+    justLeft = true;
   }
 
-  private double joinOfPair(
-      double whole, double x, double v0, double e0, double d0, int p, int n, double start) {
-    int third = 3 - p - n;
-    double low = 0;
-    double high = whole;
-    double gLow = Math.min(joinMargin(p, n, third, x, start, v0), -1e-12);
-    double gHigh = joinMargin(p, n, third, pair.i, start + whole, pair.v);
-    for (int k = 0; k < 40 && high - low > 1e-7; k++) {
-      double h = high - gHigh * (high - low) / (gHigh - gLow);
-      tryPair(h, x, v0, e0, d0, p, n, start);
-      double g = joinMargin(p, n, third, pair.i, start + h, pair.v);
-      if (g < 0) {
-        low = h;
-        gLow = g;
-        gHigh /= 2;
-      } else {
-        high = h;
-        gHigh = g;
-        gLow /= 2;
-      }
-    }
-    tryPair(high, x, v0, e0, d0, p, n, start);
-    return Math.max(high, SHORTEST_STEP);
+  /** Steps the pair by h cells; by how much its current falls short of the threshold then. */
+  private double pairShortfall(double h) {
+    pair.step(h, xa, v, emf.between(p, n, u), emf.slopeBetween(p, n, u), emf.between(p, n, u + h));
+    return pair.threshold - pair.i;
   }
 
-  /** By how many volts the idle line passes a rail and a diode's threshold; negative inside. */
-  private double joinMargin(int p, int n, int third, double x, double at, double volts) {
-    double upper = emf[p].at(at);
-    double lower = emf[n].at(at);
-    double own = pair.slopeV * 0.5 * Math.log(1 + x / pair.saturation);
-    double residual = upper - lower - volts - pair.resistance * x - 2 * own;
-    double share = lineInductance == 0 ? 0 : lineInductance / pair.inductance;
-    double drop = share * residual + lineOhm * x + own;
-    double e = emf[third].at(at);
-    return Math.max(e - (upper - drop), lower + drop - e) - overlap.thresholdV;
+  private boolean joins(double margin, double at) {
+    return margin >= (at < joinsFrom ? pair.slopeV : 0);
   }
 
-  /** Lets the idle line in on the rail it has passed, with a threshold's current. */
-  private void join(int p, int n, int third) {
-    boolean up = 2 * emf[third].at(u) > emf[p].at(u) + emf[n].at(u);
-    double little = pair.threshold;
-    line[p] = Math.max(line[p], 2 * little);
-    line[n] = -line[p];
-    line[third] = up ? little : -little;
-    line[up ? p : n] -= line[third];
+  private double joinMarginAfter(double h) {
+    pairShortfall(h);
+    return joinMargin(pair.i, u + h, pair.v);
   }
 
-  private boolean runOverlap(double to, boolean fresh) {
-    begin();
-    int positive = (line[0] > 0 ? 1 : 0) + (line[1] > 0 ? 1 : 0) + (line[2] > 0 ? 1 : 0);
-    int sign = positive == 2 ? 1 : -1;
-    int c = line[0] * sign < 0 ? 0 : line[1] * sign < 0 ? 1 : 2;
-    int a = c == 0 ? 1 : 0;
-    int b = 3 - a - c;
-    double base = u;
-    double span = gradedSpan(to);
-    int graded = fresh ? 0 : GRADING.length;
-    while (u < to) {
-      double next =
-          graded < GRADING.length
-              ? base + GRADING[graded++] * span
-              : Math.min(pair.nextNode(u), to);
-      if (!stepOverlap(a, b, c, sign, next)) {
-        return v > 0;
-      }
-    }
-    return true;
+  /** The idle line's margin on the side where it is larger, volts. */
+  private double joinMargin(double amps, double at, double volts) {
+    double drive = emf.between(p, n, at);
+    double above = emf.between(t, n, at);
+    return overlap.margin(amps, volts, drive, Math.max(above, drive - above));
   }
 
-  private boolean stepOverlap(int a, int b, int c, int sign, double next) {
-    double start = u;
-    double h = next - start;
-    double xa = sign * line[a];
-    double xb = sign * line[b];
-    tryOverlap(h, xa, xb, a, b, c, sign, start);
-    double least = Math.min(overlap.xa, overlap.xb) - pair.threshold;
-    boolean leaves = least < 0;
+  /** Lets the idle line in on its side, with a threshold's share of the current. */
+  private void join() {
+    double above = emf.between(t, n, u);
+    double total = Math.max(line[p], 2 * pair.threshold);
+    boolean up = 2 * above > emf.between(p, n, u);
+    line[p] = total;
+    line[n] = -total;
+    line[t] = up ? pair.threshold : -pair.threshold;
+    line[up ? p : n] -= line[t];
+  }
+
+  /** One step of an overlap; false where the set of conducting lines has changed. */
+  private boolean stepOverlap(double next) {
+    xa = sign * line[a];
+    xb = sign * line[b];
+    double h = next - u;
+    double short0 = overlapShortfall(h);
+    boolean leaves = short0 > 0;
     if (leaves) {
-      double low = 0;
-      double gLow = Math.max(Math.min(xa, xb) - pair.threshold, 1e-12 * pair.threshold);
-      double high = h;
-      double gHigh = least;
-      for (int k = 0; k < 40 && high - low > 1e-7; k++) {
-        h = high - gHigh * (high - low) / (gHigh - gLow);
-        tryOverlap(h, xa, xb, a, b, c, sign, start);
-        double g = Math.min(overlap.xa, overlap.xb) - pair.threshold;
-        if (g > 0) {
-          low = h;
-          gLow = g;
-          gHigh /= 2;
-        } else {
-          high = h;
-          gHigh = g;
-          gLow /= 2;
-        }
-      }
-      h = Math.max(high, SHORTEST_STEP);
-      tryOverlap(h, xa, xb, a, b, c, sign, start);
+      double before = pair.threshold - Math.min(xa, xb);
+      h = EventFinder.find(overlapShortfall, 0, before, h, short0, EVENT_CELLS, 0);
     }
-    u = leaves ? start + h : next;
+    u = leaves ? u + h : next;
     v = overlap.v;
     line[a] = sign * overlap.xa;
     line[b] = sign * overlap.xb;
-    line[c] = -sign * (overlap.xa + overlap.xb);
+    line[c] = -line[a] - line[b];
     if (recording) {
       for (int k = 0; k < 3; k++) {
         trace[k].next(u, line[k], Double.NaN);
       }
     }
-    if (!(v > floorV)) {
-      v = 0;
-      return false;
-    }
     if (leaves) {
-      leave(a, b, c, sign);
+      leave();
     }
     return !leaves;
   }
 
-  private void leave(int a, int b, int c, int sign) {
-    joinNotBefore = u + REST_OF_LEAVER;
+  private void leave() {
+    joinsFrom = u + REST_OF_LEAVER;
     int gone = overlap.xa < overlap.xb ? a : b;
-    int stays = gone == a ? b : a;
-    double x = Math.max(overlap.xa, overlap.xb);
     line[gone] = 0;
-    line[stays] = x > pair.threshold ? sign * x : 0;
-    line[c] = -line[stays];
+    line[a + b - gone] = -line[c];
   }
 
-  private void tryOverlap(
-      double h, double xa, double xb, int a, int b, int c, int sign, double start) {
-    double end = start + h;
-    double ec = emf[c].at(start);
-    double sc = emf[c].slopeAt(start);
-    double fc = emf[c].at(end);
+  private double overlapShortfall(double h) {
+    double end = u + h;
     overlap.step(
         h,
         xa,
         xb,
         v,
-        sign * (emf[a].at(start) - ec),
-        sign * (emf[a].slopeAt(start) - sc),
-        sign * (emf[a].at(end) - fc),
-        sign * (emf[b].at(start) - ec),
-        sign * (emf[b].slopeAt(start) - sc),
-        sign * (emf[b].at(end) - fc));
+        sign * emf.between(a, c, u),
+        sign * emf.slopeBetween(a, c, u),
+        sign * emf.between(a, c, end),
+        sign * emf.between(b, c, u),
+        sign * emf.slopeBetween(b, c, u),
+        sign * emf.between(b, c, end));
+    return pair.threshold - Math.min(overlap.xa, overlap.xb);
   }
 }

@@ -1,0 +1,81 @@
+package fourthwire.load.rectifier;
+
+import java.util.function.DoubleUnaryOperator;
+
+/**
+ * The capacitor alone with its load while no diode conducts: v² falls linearly under constant
+ * power, until the driving voltage passes v and the diodes' thresholds.
+ *
+ * <p>At the threshold's current the path's equation then starts with a slope of zero or more, so
+ * that a conduction that begins does not end at once. Workspace of one solver, not thread-safe.
+ */
+final class Discharge {
+  /**
+   * After an end of conduction a start is looked for only this many cells later, unless the drive
+   * is clearly past: a current of about the threshold's would else come and go without end.
+   */
+  private static final double REST = 0.1;
+
+  private final DoubleUnaryOperator drive;
+  private final PathStep path;
+  private final EventFinder.Margin excess = this::excess;
+
+  private double from;
+  private double square;
+  private double fall;
+
+  /** Where the discharge ended, in cells. */
+  double u;
+
+  /** The capacitor's voltage there. */
+  double v;
+
+  /** Whether it ended because conduction begins. */
+  boolean turnedOn;
+
+  /**
+   * Of a path.
+   *
+   * @param drive the voltage that would drive a current at a position in cells
+   */
+  Discharge(DoubleUnaryOperator drive, PathStep path) {
+    this.drive = drive;
+    this.path = path;
+  }
+
+  /**
+   * Discharges from a position on, at most to another.
+   *
+   * @param justLeft whether a conduction has ended at this very position
+   * @return false where the voltage falls to the floor
+   */
+  boolean run(double position, double volts, boolean justLeft, double to, double floorV) {
+    from = position;
+    square = volts * volts;
+    fall = 2 * path.power / path.capacitance;
+    u = Math.min(to, justLeft && excess(from) < path.slopeV ? from + REST : from);
+    turnedOn = u < to && excess(u) >= 0;
+    boolean alive = true;
+    while (!turnedOn && u < to && alive) {
+      double node = Math.min(Math.floor(u) + 1, to);
+      alive = square - fall * (node - from) > floorV * floorV;
+      if (alive) {
+        advance(node);
+      }
+    }
+    v = alive ? Math.sqrt(square - fall * (u - from)) : 0;
+    return alive;
+  }
+
+  private void advance(double node) {
+    double after = excess(node);
+    turnedOn = after >= 0;
+    u = turnedOn ? EventFinder.find(excess, u, excess(u), node, after, 1e-9, 1e-10) : node;
+  }
+
+  private double excess(double at) {
+    return drive.applyAsDouble(at)
+        - path.onsetV
+        - Math.sqrt(Math.max(0, square - fall * (at - from)));
+  }
+}

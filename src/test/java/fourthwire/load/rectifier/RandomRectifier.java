@@ -1,0 +1,122 @@
+package fourthwire.load.rectifier;
+
+import fourthwire.load.model.PortSpectra;
+import java.util.Random;
+
+/**
+ * Random but sensible equipment behind a random source, from a seed.
+ *
+ * @param seed repeats the case
+ * @param load all units together; the direct-current choke has no resistance here, so that all
+ *     losses lie in the lines
+ * @param hertz system frequency
+ * @param emf electromotive force
+ * @param ohm series resistance of the source per port
+ * @param henry series inductance likewise
+ */
+record RandomRectifier(
+    long seed, BridgeLoad load, double hertz, PortSpectra emf, double ohm, double henry) {
+  private static final Diode DIODE = new Diode(3e-11, 1.2, 1e-3);
+
+  /**
+   * A drive of 2 to 100 kW at 20 to 100 % load, without choke, with 3 % in the lines or 4 % on the
+   * direct-current side, on balanced, 3 % unbalanced or 5 % distorted voltage, behind 0.01 to 10 %.
+   */
+  static RandomRectifier drive(long seed) {
+    Random r = new Random(seed * 7919 + 1);
+    double watts = between(r, 2e3, 1e5);
+    double volts = r.nextBoolean() ? 400 : 480;
+    double hertz = r.nextBoolean() ? 50 : 60;
+    double base = volts * volts / watts;
+    double omega = 2 * Math.PI * hertz;
+    int choke = r.nextInt(3);
+    double line = choke == 1 ? 0.03 * base : 0;
+    double direct = choke == 2 ? 0.04 * base : 0;
+    double farad = between(r, 2e-8, 1e-7) * watts * (400 / volts) * (400 / volts);
+    BridgeLoad load =
+        new BridgeLoad(
+            watts * between(r, 0.2, 1),
+            farad,
+            0.002 * base * r.nextInt(2) + line / 15,
+            line / omega,
+            0,
+            direct / omega,
+            DIODE);
+    return behindSource(seed, r, load, hertz, emf(r, 3, volts / Math.sqrt(3)), base);
+  }
+
+  /** A supply of 5 W to 2 kW with 0.5 to 5 µF/W at 10 to 100 % load behind 0.01 to 5 %. */
+  static RandomRectifier supply(long seed) {
+    Random r = new Random(seed * 104729 + 3);
+    double watts = between(r, 5, 2e3);
+    double volts = r.nextBoolean() ? 230 : 120;
+    double base = volts * volts / watts;
+    BridgeLoad load =
+        new BridgeLoad(
+            watts * between(r, 0.1, 1),
+            watts * between(r, 0.5e-6, 5e-6),
+            0.02 * base * r.nextInt(2),
+            0,
+            0,
+            0,
+            DIODE);
+    return behindSource(seed, r, load, r.nextBoolean() ? 50 : 60, emf(r, 1, volts), base / 2);
+  }
+
+  private static RandomRectifier behindSource(
+      long seed, Random r, BridgeLoad load, double hertz, PortSpectra emf, double base) {
+    double ohms = base * between(r, 1e-4, 0.1);
+    double angle = r.nextDouble() * Math.PI / 2;
+    int kind = r.nextInt(6);
+    return new RandomRectifier(
+        seed,
+        load,
+        hertz,
+        emf,
+        kind == 0 ? 0 : ohms * Math.cos(angle),
+        kind == 1 ? 0 : ohms * Math.sin(angle) / (2 * Math.PI * hertz));
+  }
+
+  private static PortSpectra emf(Random r, int ports, double volts) {
+    PortSpectra emf = new PortSpectra(ports);
+    int voltage = r.nextInt(3);
+    double start = r.nextDouble() * 2 * Math.PI;
+    double[] percent = new double[14];
+    double[] angle = new double[14];
+    for (int h : voltage == 2 ? new int[] {5, 7, 11, 13} : new int[0]) {
+      percent[h] = 25.0 / h * r.nextDouble();
+      angle[h] = 2 * Math.PI * r.nextDouble();
+    }
+    percent[1] = 100;
+    angle[1] = start;
+    for (int port = 0; port < ports; port++) {
+      double scale = voltage == 1 ? 1 + 0.03 * (2 * r.nextDouble() - 1) : 1;
+      for (int h = 1; h < percent.length; h++) {
+        double x = angle[h] - h * port * 2 * Math.PI / 3;
+        emf.re[port][h] = scale * volts * percent[h] / 100 * Math.cos(x);
+        emf.im[port][h] = scale * volts * percent[h] / 100 * Math.sin(x);
+      }
+    }
+    return emf;
+  }
+
+  private static double between(Random r, double low, double high) {
+    return low * Math.pow(high / low, r.nextDouble());
+  }
+
+  boolean halfWave() {
+    return true; // odd orders only, above
+  }
+
+  /** Watts lost by a current in one port: a line's diode, or both of a single-phase path. */
+  double loss(double amps) {
+    int diodes = emf.ports() == 1 ? 2 : 1;
+    double ohms = load.lineOhm() + ohm;
+    return amps * (diodes * load.diode().drop(amps) + ohms * amps);
+  }
+
+  @Override
+  public String toString() {
+    return String.format("seed %d: %s behind %.4g ohm, %.4g H", seed, load, ohm, henry);
+  }
+}
