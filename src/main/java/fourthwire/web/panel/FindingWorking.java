@@ -174,6 +174,9 @@ final class FindingWorking {
     double ratedKva = plate.get().ratedKva();
     double squared = Math.pow(derated.getAsDouble() / ratedKva, 2);
     double eddy = (1 - squared) / (lossFactor.getAsDouble() * squared - 1);
+    if (!Double.isFinite(eddy)) {
+      return List.of(words.of("steps.loss-factor", Numbers.of(lossFactor.getAsDouble())));
+    }
     return List.of(
         words.of("steps.loss-factor", Numbers.of(lossFactor.getAsDouble())),
         words.of(
