@@ -28,7 +28,7 @@ public final class LoadModels {
       case RESISTIVE -> constantImpedance(request, 1);
       case LINEAR -> constantImpedance(request, request.displacementFactor().orElse(1));
       case MEASURED -> GivenSpectra.measured(request);
-      case CAPACITOR_INPUT -> Rectifiers.capacitorInput(request);
+      case CAPACITOR_INPUT, CAPACITOR_INPUT_CHOKE -> Rectifiers.capacitorInput(request);
       case SIX_PULSE -> Rectifiers.sixPulse(request);
       case PFC_CONTINUOUS, PFC_CRITICAL -> PfcSupplies.of(request);
       case MOTOR -> motor(request);

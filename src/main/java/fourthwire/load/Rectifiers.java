@@ -5,6 +5,7 @@ import fourthwire.load.rectifier.BridgeLoad;
 import fourthwire.load.rectifier.CapacitorInput;
 import fourthwire.load.rectifier.Diode;
 import fourthwire.load.rectifier.SixPulse;
+import fourthwire.site.LoadKind;
 import fourthwire.site.ModelColumns;
 import java.util.OptionalDouble;
 import java.util.function.DoubleFunction;
@@ -15,8 +16,9 @@ import java.util.function.DoubleFunction;
  *
  * <p>Defaults (all common practice, no source, except as noted): smoothing capacitor 2 µF/W below
  * 160 V, 1 µF/W above (recalled from power supply handbooks); own source resistance 2 % of V²/P,
- * own inductance none; diodes as in the public contract, section 3; drives 40 µF/kW at 400 V, more
- * at lower voltage for the same stored energy, and 0.2 % of V²/P in each line.
+ * own inductance none; {@code capacitor-input-choke} a line choke of 3 % where neither choke is
+ * given; diodes as in the public contract, section 3; drives 40 µF/kW at 400 V, more at lower
+ * voltage for the same stored energy, and 0.2 % of V²/P in each line.
  */
 final class Rectifiers {
   /** Below this nominal voltage a supply is taken to be built for 100 to 240 V. */
@@ -25,6 +27,9 @@ final class Rectifiers {
   private static final double CAPACITANCE_LOW_VOLTAGE_UF_PER_W = 2;
   private static final double CAPACITANCE_UF_PER_W = 1;
   private static final double SOURCE_RESISTANCE_SHARE = 0.02;
+
+  /** Line choke of a supply said to have one, percent of V²/P. */
+  private static final double CHOKE_PERCENT = 3;
 
   private static final double DRIVE_UF_PER_W_AT_400_V = 0.04;
   private static final double DRIVE_RESISTANCE_SHARE = 0.002;
@@ -44,14 +49,20 @@ final class Rectifiers {
         c.capacitanceUfPerW()
             .orElse(v < LOW_VOLTAGE_V ? CAPACITANCE_LOW_VOLTAGE_UF_PER_W : CAPACITANCE_UF_PER_W);
     double base = v * v / dcPowerW;
-    double choke = c.lineChokePercent().orElse(0) / 100 * base;
+    double omega = 2 * Math.PI * request.frequencyHz();
+    boolean unsaid =
+        request.kind() == LoadKind.CAPACITOR_INPUT_CHOKE
+            && c.lineChokePercent().isEmpty()
+            && c.dcChokePercent().isEmpty();
+    double choke = c.lineChokePercent().orElse(unsaid ? CHOKE_PERCENT : 0) / 100 * base;
+    double direct = c.dcChokePercent().orElse(0) / 100 * base;
     return new BridgeLoad(
         dcPowerW,
         microfaradPerW * 1e-6 * dcPowerW,
         c.sourceResistanceOhm().orElse(SOURCE_RESISTANCE_SHARE * base) + choke / 15,
-        c.sourceInductanceUh().orElse(0) * 1e-6 + choke / (2 * Math.PI * request.frequencyHz()),
-        0,
-        0,
+        c.sourceInductanceUh().orElse(0) * 1e-6 + choke / omega,
+        direct / 10,
+        direct / omega,
         diode(c));
   }
 

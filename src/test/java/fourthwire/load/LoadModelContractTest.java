@@ -17,8 +17,7 @@ import org.junit.jupiter.params.provider.MethodSource;
 
 /** What every load model owes: laws of scaling, of shifting in time, and its rated power. */
 class LoadModelContractTest {
-  private static final EnumSet<LoadKind> LATER =
-      EnumSet.of(LoadKind.CAPACITOR_INPUT_CHOKE, LoadKind.TWELVE_PULSE);
+  private static final EnumSet<LoadKind> LATER = EnumSet.of(LoadKind.TWELVE_PULSE);
 
   static Stream<LoadKind> kinds() {
     return Stream.of(LoadKind.values()).filter(k -> !LATER.contains(k) && k != LoadKind.MEASURED);

@@ -12,6 +12,10 @@ import fourthwire.load.model.LoadSolver;
  * equipment's own and the network's together. The periodic state is found by shooting ({@link
  * CapacitorInputSolver}).
  *
+ * <p>{@code capacitor-input-choke} is the same with a choke in the lead or behind the bridge; the
+ * latter is in series with the former as long as its current ends before the voltage behind the
+ * bridge crosses zero, and is refused beyond.
+ *
  * <p>Assumed: constant power between crests, an ideal capacitor (its loss resistance counts in the
  * diode's), no inrush limiter drift. Valid from stiff to soft sources, in discontinuous and
  * continuous conduction, under any voltage of orders 1 to 50. Checked against circuit-simulator

@@ -18,6 +18,11 @@ final class CapacitorInputSolver implements LoadSolver {
   /** A capacitor under this share of the crest is empty: no supply runs on it. */
   private static final double LEAST_SHARE = 0.05;
 
+  private static final String FREEWHEELS =
+      "the direct-current choke of a capacitor-input rectifier carries its current past the"
+          + " voltage's crossing, which is not modelled: enter a smaller dc_choke_percent, or the"
+          + " choke as line_choke_percent";
+
   private static final int MOST_SECANTS = 40;
   private static final int MOST_SUBSTITUTIONS = 600;
 
@@ -45,6 +50,10 @@ final class CapacitorInputSolver implements LoadSolver {
       throw new NoSteadyStateException(refusal());
     }
     bridge.march(section, cells, lastI, lastV, true);
+    if (bridge.freewheels) {
+      lastV = 0;
+      throw new NoSteadyStateException(FREEWHEELS);
+    }
     bridge.trace.harmonics(bridge.emf.halfWave, current.re[0], current.im[0]);
   }
 
@@ -69,7 +78,10 @@ final class CapacitorInputSolver implements LoadSolver {
     }
     bridge.floorV = LEAST_SHARE * peak;
     double cellSeconds = 1 / (frequencyHz * CycleTable.CELLS);
-    bridge.path.set(load.lineOhm() + seriesOhm, load.lineHenry() + seriesHenry, load, cellSeconds);
+    double henry = load.lineHenry() + seriesHenry;
+    bridge.path.set(
+        load.lineOhm() + seriesOhm + load.dcOhm(), henry + load.dcHenry(), load, cellSeconds);
+    bridge.directShare = load.dcHenry() > 0 ? load.dcHenry() / (henry + load.dcHenry()) : 0;
     bridge.path.threshold(1e-3 * load.powerW() / peak);
     cells = table.halfWave ? CycleTable.CELLS / 2.0 : CycleTable.CELLS;
     section = sectionAfterCrossing(emf.re[0][1], emf.im[0][1]);

@@ -23,6 +23,15 @@ final class PairBridge {
   /** Capacitor voltage under which the load counts as having emptied it. */
   double floorV;
 
+  /** Share of the path's inductance that lies between bridge and capacitor. */
+  double directShare;
+
+  /**
+   * Whether in the last recorded march the choke behind the bridge drove its current on through
+   * both legs: the voltage behind the bridge would have been negative, which is outside the model.
+   */
+  boolean freewheels;
+
   /** Signed current into the port, amps; 0 while off. */
   double i;
 
@@ -56,6 +65,7 @@ final class PairBridge {
     v = v0;
     if (record) {
       trace.clear();
+      freewheels = false;
     }
     double to = from + cells;
     boolean justLeft = false;
@@ -118,6 +128,7 @@ final class PairBridge {
     v = path.v;
     amps = end;
     if (recording) {
+      freewheels |= directShare * sign * emf.at(u) + (1 - directShare) * v < 0;
       trace.next(u, sign * end, sign * charge);
     }
   }

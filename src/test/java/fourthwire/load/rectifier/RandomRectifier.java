@@ -45,7 +45,10 @@ record RandomRectifier(
     return behindSource(seed, r, load, hertz, emf(r, 3, volts / Math.sqrt(3)), base);
   }
 
-  /** A supply of 5 W to 2 kW with 0.5 to 5 µF/W at 10 to 100 % load behind 0.01 to 5 %. */
+  /**
+   * A supply of 5 W to 2 kW with 0.5 to 5 µF/W at 10 to 100 % load behind 0.01 to 5 %, some with
+   * chokes.
+   */
   static RandomRectifier supply(long seed) {
     Random r = new Random(seed * 104729 + 3);
     double watts = between(r, 5, 2e3);
@@ -56,9 +59,9 @@ record RandomRectifier(
             watts * between(r, 0.1, 1),
             watts * between(r, 0.5e-6, 5e-6),
             0.02 * base * r.nextInt(2),
+            r.nextInt(3) == 0 ? 0.05 * base / 314 * r.nextDouble() : 0,
             0,
-            0,
-            0,
+            r.nextInt(3) == 0 ? 0.05 * base / 314 * r.nextDouble() : 0,
             DIODE);
     return behindSource(seed, r, load, r.nextBoolean() ? 50 : 60, emf(r, 1, volts), base / 2);
   }
