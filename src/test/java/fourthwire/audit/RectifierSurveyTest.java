@@ -30,7 +30,9 @@ class RectifierSurveyTest {
   private static final double STIFF_MVA = 1e7;
 
   static Stream<RectifierReference> cases() {
-    return RectifierReference.all().stream().filter(c -> !c.row().getField("emf").contains("a"));
+    return RectifierReference.all().stream()
+        .filter(c -> !c.row().getField("emf").contains("a"))
+        .filter(c -> c.threePhase() || c.number("L_dc_uH") == 0);
   }
 
   @ParameterizedTest
