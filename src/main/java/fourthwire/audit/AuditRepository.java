@@ -24,12 +24,14 @@ public interface AuditRepository {
    * An audit as listed.
    *
    * @param supply the supply asked for; empty: the normal one
+   * @param draws how many draws of the loads' spread were asked for
    */
   record Entry(
       long id,
       long siteId,
       int surveyRevision,
       Optional<String> supply,
+      int draws,
       State state,
       double progress,
       String message,
@@ -39,7 +41,12 @@ public interface AuditRepository {
       List<String> notes) {}
 
   /** Stores a queued audit of a site's survey revision; returns its id. */
-  long create(long siteId, int surveyRevision, Optional<String> supply);
+  long create(long siteId, int surveyRevision, Optional<String> supply, int draws);
+
+  /** The same without draws. */
+  default long create(long siteId, int surveyRevision, Optional<String> supply) {
+    return create(siteId, surveyRevision, supply, 0);
+  }
 
   /**
    * After a restart: what was running is queued again, or cancelled where that had been asked for.

@@ -3,7 +3,11 @@ package fourthwire.audit;
 import fourthwire.quantity.Conductor;
 import fourthwire.quantity.PowerFigures;
 import fourthwire.quantity.Spectrum;
+import java.time.OffsetDateTime;
+import java.time.ZoneOffset;
+import java.time.format.DateTimeFormatter;
 import java.util.Map;
+import java.util.Optional;
 import java.util.OptionalLong;
 
 /**
@@ -11,7 +15,7 @@ import java.util.OptionalLong;
  *
  * @param meter the meter's name, or "clamp reading"
  * @param reading id of the stored reading; empty for a clamp reading in the survey
- * @param period from when to when, as text in the site's time
+ * @param period from when to when; empty where the clock time is not known
  * @param basis what the figures are: means, highest interval, one capture …, one sentence
  * @param neutral the measured neutral current, unknown where none was measured
  * @param currentSpectrum from a capture; empty for a log
@@ -19,10 +23,28 @@ import java.util.OptionalLong;
 public record MeasuredState(
     String meter,
     OptionalLong reading,
-    String period,
+    Optional<Span> period,
     String basis,
     Map<Conductor, DesignState.LineCurrent> lines,
     DesignState.NeutralCurrent neutral,
     Map<String, DesignState.LineVoltage> voltage,
     PowerFigures power,
-    Map<Conductor, Spectrum> currentSpectrum) {}
+    Map<Conductor, Spectrum> currentSpectrum) {
+  /** From when to when, in the site's time; both alike for a single moment. */
+  public record Span(OffsetDateTime from, OffsetDateTime to) {
+    private static final DateTimeFormatter MOMENT =
+        DateTimeFormatter.ofPattern("uuuu-MM-dd HH:mm:ss[.SSS]");
+
+    /** In words, to the second; to the millisecond where it is shorter than that. */
+    public String text() {
+      String text = from.equals(to) ? written(from) : written(from) + " to " + written(to);
+      return from.getOffset().equals(ZoneOffset.UTC) ? text + " UTC" : text;
+    }
+
+    private String written(OffsetDateTime moment) {
+      boolean brief = from.plusSeconds(2).isAfter(to) && from.isBefore(to);
+      String text = MOMENT.format(moment);
+      return brief ? text : text.substring(0, text.indexOf('.'));
+    }
+  }
+}

@@ -2,6 +2,7 @@ package fourthwire.config;
 
 import jakarta.servlet.http.HttpServletResponse;
 import java.io.IOException;
+import java.nio.charset.StandardCharsets;
 import org.springframework.context.annotation.Bean;
 import org.springframework.context.annotation.Configuration;
 import org.springframework.http.HttpStatus;
@@ -74,6 +75,7 @@ class WebSecurityConfiguration {
       throws IOException {
     response.setStatus(status.value());
     response.setContentType("application/problem+json");
+    response.setCharacterEncoding(StandardCharsets.UTF_8);
     response
         .getWriter()
         .write(

@@ -4,13 +4,20 @@ import fourthwire.audit.Audit;
 import fourthwire.audit.AuditFailedException;
 import fourthwire.audit.AuditRepository;
 import fourthwire.audit.AuditRequest;
+import fourthwire.audit.AuditResult;
 import fourthwire.audit.Progress;
 import fourthwire.jobs.measured.MeasuredStates;
+import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.site.SiteRepository;
 import fourthwire.site.Survey;
+import java.util.ArrayList;
+import java.util.List;
 
 /** Runs one stored audit from queued to its end. */
 public final class AuditRun {
+  private static final String NO_SPREAD =
+      "Draws were asked for, but this version computes no spread: range is null at every node.";
+
   private final AuditRepository audits;
   private final SiteRepository sites;
   private final MeasuredStates measured;
@@ -39,10 +46,14 @@ public final class AuditRun {
     try {
       audits
           .find(auditId)
-          .ifPresent(entry -> audits.finish(auditId, audit.run(request(entry), listener(auditId))));
+          .ifPresent(
+              entry -> {
+                AuditResult result = audit.run(request(entry), listener(auditId));
+                audits.finish(auditId, entry.draws() > 0 ? withoutSpread(result) : result);
+              });
     } catch (Progress.CancelledException e) {
       audits.end(auditId, AuditRepository.State.CANCELLED, "cancelled");
-    } catch (AuditFailedException e) {
+    } catch (AuditFailedException | NoSteadyStateException e) {
       audits.end(auditId, AuditRepository.State.FAILED, String.valueOf(e.getMessage()));
     } catch (Stop.StoppedException e) {
       // stays stored as running: the next start runs it again
@@ -51,6 +62,13 @@ public final class AuditRun {
         audits.end(auditId, AuditRepository.State.FAILED, Failure.sentence("Audit " + auditId, e));
       }
     }
+  }
+
+  /** Draws were asked for: the result says that they were not made. */
+  private static AuditResult withoutSpread(AuditResult r) {
+    List<String> notes = new ArrayList<>(r.notes());
+    notes.add(NO_SPREAD);
+    return new AuditResult(r.supply(), r.engineVersion(), r.editions(), r.nodes(), notes);
   }
 
   private AuditRequest request(AuditRepository.Entry entry) {

@@ -25,19 +25,25 @@ public final class AuditService {
    * Queues an audit of a site's latest survey.
    *
    * @param supply to run on; empty: the normal one
+   * @param draws of the loads' spread, 0 or more
    * @return its id; empty where the site is not there
    * @throws RefusedException where the survey has no such supply
    */
-  public OptionalLong ask(long siteId, Optional<String> supply) {
+  public OptionalLong ask(long siteId, Optional<String> supply, int draws) {
     Optional<SiteRepository.Entry> site = sites.find(siteId);
     if (site.isEmpty()) {
       return OptionalLong.empty();
     }
     int revision = site.get().latestRevision();
     supply.ifPresent(name -> check(name, sites.survey(siteId, revision)));
-    long id = audits.create(siteId, revision, supply);
+    long id = audits.create(siteId, revision, supply, draws);
     queue.addAudit(id);
     return OptionalLong.of(id);
+  }
+
+  /** Queues an audit without draws. */
+  public OptionalLong ask(long siteId, Optional<String> supply) {
+    return ask(siteId, supply, 0);
   }
 
   private static void check(String supply, Survey survey) {

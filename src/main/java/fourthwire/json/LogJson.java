@@ -4,7 +4,8 @@ import fourthwire.metering.LogResult;
 import fourthwire.metering.LogResult.KeyInterval;
 import fourthwire.metering.QuantitySummary;
 import java.time.Duration;
-import java.time.Instant;
+import java.time.OffsetDateTime;
+import java.time.ZoneId;
 import tools.jackson.databind.JsonNode;
 import tools.jackson.databind.node.ObjectNode;
 
@@ -14,10 +15,10 @@ final class LogJson {
 
   private LogJson() {}
 
-  static void write(ObjectNode o, LogResult log) {
+  static void write(ObjectNode o, LogResult log, ZoneId zone) {
     o.put("interval_s", log.interval().toNanos() / NANOS);
     o.set("quantities", Json.map(log.quantities(), LogJson::write));
-    o.set("key_intervals", Json.list(log.keyIntervals(), LogJson::write));
+    o.set("key_intervals", Json.list(log.keyIntervals(), k -> write(k, zone)));
   }
 
   private static ObjectNode write(QuantitySummary q) {
@@ -30,8 +31,8 @@ final class LogJson {
         .put("p99", q.p99());
   }
 
-  private static ObjectNode write(KeyInterval k) {
-    ObjectNode o = Json.object().put("code", k.code()).put("start", k.start().toString());
+  private static ObjectNode write(KeyInterval k, ZoneId zone) {
+    ObjectNode o = Json.object().put("code", k.code()).put("start", Moments.write(k.start(), zone));
     o.put("reason", k.reason());
     ObjectNode values = o.putObject("values");
     k.values().forEach(values::put);
@@ -58,7 +59,7 @@ final class LogJson {
   private static KeyInterval keyInterval(JsonNode o) {
     return new KeyInterval(
         o.path("code").asString(),
-        Instant.parse(o.path("start").asString()),
+        OffsetDateTime.parse(o.path("start").asString()).toInstant(),
         o.path("reason").asString(),
         Json.map(o, "values", JsonNode::doubleValue));
   }

@@ -1,9 +1,11 @@
 package fourthwire.json;
 
 import fourthwire.audit.MeasuredState;
+import fourthwire.audit.MeasuredState.Span;
 import java.util.EnumMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import tools.jackson.databind.JsonNode;
 import tools.jackson.databind.node.ArrayNode;
 import tools.jackson.databind.node.ObjectNode;
@@ -15,6 +17,7 @@ import tools.jackson.databind.node.ObjectNode;
 final class MeasuredJson {
   private static final String MEASURED = "measured";
   private static final String FURTHER = "further";
+  private static final String PERIOD = "period";
 
   private MeasuredJson() {}
 
@@ -31,7 +34,8 @@ final class MeasuredJson {
   private static ObjectNode write(MeasuredState m) {
     ObjectNode o = Json.object().put("meter", m.meter());
     Json.put(o, "reading", m.reading());
-    o.put("period", m.period()).put("basis", m.basis());
+    writePeriod(o, m.period());
+    o.put("basis", m.basis());
     o.set("current", ConductorJson.write(m.lines(), m.neutral()));
     o.set("voltage", ConductorJson.write(m.voltage()));
     o.set("power", PowerJson.write(m.power()));
@@ -41,6 +45,18 @@ final class MeasuredJson {
     ArrayNode rows = SpectrumJson.write(spectrum, SpectrumJson.AMPS);
     o.set("spectrum", rows);
     return o;
+  }
+
+  private static void writePeriod(ObjectNode into, Optional<Span> period) {
+    period.ifPresentOrElse(
+        span -> into.set(PERIOD, Moments.write(span.from(), span.to())),
+        () -> Json.putAbsent(into, PERIOD, "the file or row tells no clock time"));
+  }
+
+  private static Optional<Span> period(JsonNode o) {
+    return Optional.of(o.path(PERIOD))
+        .filter(JsonNode::isObject)
+        .map(p -> new Span(Moments.from(p), Moments.to(p)));
   }
 
   static List<MeasuredState> read(JsonNode node) {
@@ -57,7 +73,7 @@ final class MeasuredJson {
     return new MeasuredState(
         o.path("meter").asString(),
         Json.whole(o, "reading"),
-        o.path("period").asString(),
+        period(o),
         o.path("basis").asString(),
         ConductorJson.lines(o.path("current")),
         ConductorJson.neutral(o.path("current")),

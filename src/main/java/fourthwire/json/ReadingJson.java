@@ -5,7 +5,8 @@ import fourthwire.metering.QualityFinding;
 import fourthwire.metering.Reading;
 import fourthwire.metering.ReadingKind;
 import fourthwire.metering.ReadingRepository;
-import java.time.Instant;
+import java.time.ZoneId;
+import java.time.ZoneOffset;
 import java.util.Optional;
 import tools.jackson.databind.JsonNode;
 import tools.jackson.databind.node.ObjectNode;
@@ -16,46 +17,46 @@ public final class ReadingJson {
 
   private ReadingJson() {}
 
-  /** The whole document of a stored reading. */
-  public static ObjectNode write(ReadingRepository.Entry entry) {
-    ObjectNode o = heading(entry);
-    writeResult(o, entry.reading());
+  /** The whole document of a stored reading, its times with the offset of this zone. */
+  public static ObjectNode write(ReadingRepository.Entry entry, ZoneId zone) {
+    ObjectNode o = heading(entry, zone);
+    writeResult(o, entry.reading(), zone);
     o.set("mapping", MappingJson.write(entry.mapping()));
     return o;
   }
 
   /** Its row in a list: what it is, without its figures. */
-  public static ObjectNode row(ReadingRepository.Entry entry) {
-    ObjectNode o = heading(entry);
-    writeKind(o, entry.reading());
+  public static ObjectNode row(ReadingRepository.Entry entry, ZoneId zone) {
+    ObjectNode o = heading(entry, zone);
+    writeKind(o, entry.reading(), zone);
     return o.put("quality_findings", entry.reading().quality().size());
   }
 
-  private static ObjectNode heading(ReadingRepository.Entry entry) {
+  private static ObjectNode heading(ReadingRepository.Entry entry, ZoneId zone) {
     ObjectNode o = Json.object().put("id", entry.id()).put("site", entry.siteId());
     o.put("meter", entry.meter().name()).put("at", entry.meter().node());
     o.set("files", Json.strings(entry.files()));
-    return o.put("sha256", entry.sha256()).put("added", entry.added().toString());
+    return o.put("sha256", entry.sha256()).put("added", Moments.write(entry.added(), zone));
   }
 
   /** What a reading says, without where it is stored. */
   public static ObjectNode write(Reading reading) {
     ObjectNode o = Json.object();
-    writeResult(o, reading);
+    writeResult(o, reading, ZoneOffset.UTC);
     return o;
   }
 
-  private static void writeResult(ObjectNode o, Reading r) {
-    writeKind(o, r);
+  private static void writeResult(ObjectNode o, Reading r, ZoneId zone) {
+    writeKind(o, r, zone);
     o.set("notes", Json.strings(r.notes()));
-    o.set("quality", Json.list(r.quality(), ReadingJson::write));
-    r.log().ifPresent(log -> LogJson.write(o, log));
+    o.set("quality", Json.list(r.quality(), q -> write(q, zone)));
+    r.log().ifPresent(log -> LogJson.write(o, log, zone));
     r.capture().ifPresent(capture -> CaptureJson.write(o, capture));
   }
 
-  private static void writeKind(ObjectNode o, Reading r) {
+  private static void writeKind(ObjectNode o, Reading r, ZoneId zone) {
     o.put("kind", r.kind().word());
-    write(o, r.period());
+    write(o, r.period(), zone);
     o.put(countKey(r.kind()), r.count());
     Json.put(o, "sample_rate_hz", r.sampleRateHz());
   }
@@ -64,15 +65,20 @@ public final class ReadingJson {
     return kind == ReadingKind.LOG ? "rows" : "samples";
   }
 
-  private static void write(ObjectNode into, Optional<Period> period) {
+  private static void write(ObjectNode into, Optional<Period> period, ZoneId zone) {
     period.ifPresentOrElse(
-        p -> into.putObject(PERIOD).put("from", p.from().toString()).put("to", p.to().toString()),
+        p ->
+            into.set(
+                PERIOD,
+                Moments.write(
+                    p.from().atZone(zone).toOffsetDateTime(),
+                    p.to().atZone(zone).toOffsetDateTime())),
         () -> into.putNull(PERIOD));
   }
 
-  private static ObjectNode write(QualityFinding q) {
+  private static ObjectNode write(QualityFinding q, ZoneId zone) {
     ObjectNode o = Json.object().put("code", q.code());
-    write(o, q.period());
+    write(o, q.period(), zone);
     return o.put("effect", q.effect()).put("sentence", q.sentence());
   }
 
@@ -95,9 +101,7 @@ public final class ReadingJson {
   private static Optional<Period> period(JsonNode o) {
     JsonNode p = o.path(PERIOD);
     return p.isObject()
-        ? Optional.of(
-            new Period(
-                Instant.parse(p.path("from").asString()), Instant.parse(p.path("to").asString())))
+        ? Optional.of(new Period(Moments.from(p).toInstant(), Moments.to(p).toInstant()))
         : Optional.empty();
   }
 

@@ -23,7 +23,7 @@ import org.springframework.transaction.support.TransactionTemplate;
 final class JdbcAudits implements AuditRepository {
   private static final String COLUMNS =
       """
-      select id, site_id, revision, supply, state, progress, message, asked, engine_version,
+      select id, site_id, revision, supply, draws, state, progress, message, asked, engine_version,
         editions, notes from audits
       """;
 
@@ -40,16 +40,17 @@ final class JdbcAudits implements AuditRepository {
   }
 
   @Override
-  public long create(long siteId, int surveyRevision, Optional<String> supply) {
+  public long create(long siteId, int surveyRevision, Optional<String> supply, int draws) {
     return Rows.insert(
         jdbc.sql(
                 """
-                insert into audits (site_id, revision, supply, state, progress, message,
+                insert into audits (site_id, revision, supply, draws, state, progress, message,
                   cancel_asked, asked, editions, notes)
-                values (?, ?, ?, 'queued', 0, 'waiting', false, ?, '[]', '[]')
+                values (?, ?, ?, ?, 'queued', 0, 'waiting', false, ?, '[]', '[]')
                 """)
             .params(siteId, surveyRevision)
             .param(supply.orElse(null))
+            .param(draws)
             .param(Rows.now(clock)));
   }
 
@@ -72,6 +73,7 @@ final class JdbcAudits implements AuditRepository {
         row.getLong("site_id"),
         row.getInt("revision"),
         Rows.optionalText(row, "supply"),
+        row.getInt("draws"),
         State.valueOf(Rows.text(row, "state").toUpperCase(Locale.ROOT)),
         row.getDouble("progress"),
         Rows.text(row, "message"),

@@ -128,6 +128,19 @@ class RequestGuardTest extends ServiceTest {
   }
 
   @Test
+  void errorsBeforeAControllerAreProblemsInUtf8() throws IOException {
+    for (String first : new String[] {"TRACE /api/v1/sites", "GET /actuator/nothing"}) {
+      assertThat(http().raw(first + " HTTP/1.1", "Host: localhost", "Connection: close"))
+          .as(first)
+          .containsIgnoringCase("content-type: application/problem+json;charset=utf-8")
+          .contains("\"type\":\"about:blank\"")
+          .contains("\"detail\":");
+    }
+    assertThat(asked("evil.example.com"))
+        .containsIgnoringCase("content-type: application/problem+json;charset=utf-8");
+  }
+
+  @Test
   void itSaysWhenItIsReady() {
     assertThat(http().get("/actuator/health").json().path("status").asString()).isEqualTo("UP");
     assertThat(http().get("/actuator/env").status()).isEqualTo(404);

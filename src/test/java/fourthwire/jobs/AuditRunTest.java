@@ -9,6 +9,7 @@ import fourthwire.audit.AuditRepository.State;
 import fourthwire.audit.Progress;
 import fourthwire.intake.survey.ZipSurveyCodec;
 import fourthwire.jobs.measured.MeasuredStates;
+import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.site.SiteRepository;
 import fourthwire.store.Store;
 import fourthwire.testsupport.Databases;
@@ -47,6 +48,28 @@ class AuditRunTest {
     assertThat(state(id)).isEqualTo(State.FAILED);
     assertThat(message(id)).isEqualTo("LP-1 does not converge at order 5");
     assertThat(audits.nodes(id)).isEmpty();
+  }
+
+  @Test
+  void equipmentWithoutASteadyStateFailsWithItsOwnSentence() {
+    long id =
+        run(
+            (request, progress) -> {
+              throw new NoSteadyStateException("the source cannot give what the load takes");
+            });
+
+    assertThat(state(id)).isEqualTo(State.FAILED);
+    assertThat(message(id)).isEqualTo("the source cannot give what the load takes");
+  }
+
+  @Test
+  void drawsAreAnsweredByANoteUntilTheyAreMade() {
+    long id = audits.create(site, 1, Optional.empty(), 7);
+    auditRun(new SlowAudit().letGo()).run(id);
+    assertThat(audits.find(id).orElseThrow().draws()).isEqualTo(7);
+    assertThat(audits.find(id).orElseThrow().notes()).last().asString().contains("no spread");
+    long without = run(new SlowAudit().letGo());
+    assertThat(audits.find(without).orElseThrow().notes().toString()).doesNotContain("spread");
   }
 
   @Test

@@ -125,14 +125,19 @@ public final class Http {
 
   /** Asks again and again until the job at this path has ended; at most a minute. */
   public JsonNode ended(String path) {
-    for (int i = 0; i < 600; i++) {
+    return ended(path, 60);
+  }
+
+  /** Asks ten times a second until the job at this path has ended. */
+  public JsonNode ended(String path, int mostSeconds) {
+    for (int i = 0; i < 10 * mostSeconds; i++) {
       JsonNode state = get(path).json();
       if (!Map.of("queued", 1, "running", 1).containsKey(state.path("state").asString())) {
         return state;
       }
       pause();
     }
-    throw new IllegalStateException(path + " did not end within a minute");
+    throw new IllegalStateException(path + " did not end within " + mostSeconds + " s");
   }
 
   private static void pause() {

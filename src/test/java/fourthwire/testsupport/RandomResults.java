@@ -11,6 +11,8 @@ import fourthwire.quantity.Phasor;
 import fourthwire.quantity.PowerFigures;
 import fourthwire.quantity.Spectrum;
 import fourthwire.site.SiteTree;
+import java.time.OffsetDateTime;
+import java.time.ZoneOffset;
 import java.util.EnumMap;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -79,13 +81,20 @@ public final class RandomResults {
     return new MeasuredState(
         sentence(),
         random.nextBoolean() ? OptionalLong.empty() : OptionalLong.of(random.nextInt(1000)),
-        sentence(),
+        random.nextBoolean() ? Optional.empty() : Optional.of(span()),
         sentence(),
         lines(),
         neutral(),
         voltages(),
         power(),
         random.nextBoolean() ? Map.of() : currentSpectra());
+  }
+
+  private MeasuredState.Span span() {
+    OffsetDateTime from =
+        OffsetDateTime.of(2026, 1 + random.nextInt(12), 1, 0, 0, 0, 0, ZoneOffset.ofHours(2))
+            .plusNanos(1000L * random.nextInt());
+    return new MeasuredState.Span(from, from.plusNanos(1000L * random.nextInt(1_000_000)));
   }
 
   private Finding finding() {

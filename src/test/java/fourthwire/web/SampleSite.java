@@ -27,6 +27,7 @@ import fourthwire.site.SupplyRole;
 import fourthwire.site.Survey;
 import fourthwire.site.Transformer;
 import fourthwire.site.VectorGroup;
+import java.time.OffsetDateTime;
 import java.util.ArrayList;
 import java.util.EnumMap;
 import java.util.LinkedHashMap;
@@ -120,7 +121,10 @@ public final class SampleSite {
         new MeasuredState(
             "M2",
             OptionalLong.of(3),
-            "20 to 27 January",
+            Optional.of(
+                new MeasuredState.Span(
+                    OffsetDateTime.parse("2026-01-20T00:00:00+01:00"),
+                    OffsetDateTime.parse("2026-01-27T00:00:00+01:00"))),
             "Means of the hour with the highest neutral current.",
             Map.of(Conductor.L1, amps(60), Conductor.L2, amps(48.5), Conductor.L3, amps(69.2)),
             new DesignState.NeutralCurrent(Figure.of(103.4), unknown(), unknown(), unknown(), ""),

@@ -23,7 +23,7 @@ final class CaptureStates {
     return new MeasuredState(
         entry.meter().name(),
         OptionalLong.of(entry.id()),
-        Measured.text(entry.reading().period(), survey),
+        Measured.span(entry.reading().period(), survey),
         c.basis() + " " + c.neutralBasis(),
         lines(c),
         Measured.neutral(

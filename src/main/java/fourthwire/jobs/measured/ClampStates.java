@@ -8,6 +8,7 @@ import fourthwire.quantity.Figure;
 import fourthwire.quantity.PowerFigures;
 import fourthwire.site.Instrument;
 import fourthwire.site.SpotReading;
+import java.time.ZoneId;
 import java.util.EnumMap;
 import java.util.LinkedHashMap;
 import java.util.Map;
@@ -20,7 +21,7 @@ final class ClampStates {
 
   private ClampStates() {}
 
-  static MeasuredState of(SpotReading r) {
+  static MeasuredState of(SpotReading r, ZoneId zone) {
     Map<Conductor, LineCurrent> lines = new EnumMap<>(Conductor.class);
     putLine(lines, Conductor.L1, r.l1A(), r.thdPercent());
     putLine(lines, Conductor.L2, r.l2A(), r.thdPercent());
@@ -32,7 +33,7 @@ final class ClampStates {
     return new MeasuredState(
         "clamp reading",
         OptionalLong.empty(),
-        r.time().map(Object::toString).orElse("time not noted"),
+        Measured.span(r.time(), zone),
         "one moment, read by hand"
             + r.instrument().map(Instrument::word).map(w -> " (" + w + " instrument)").orElse(""),
         lines,

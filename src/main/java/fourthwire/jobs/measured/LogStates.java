@@ -41,7 +41,7 @@ final class LogStates {
     return new MeasuredState(
         entry.meter().name(),
         OptionalLong.of(entry.id()),
-        Measured.text(entry.reading().period(), survey),
+        Measured.span(entry.reading().period(), survey),
         key.reason(),
         lines,
         Measured.neutral(value(key, "N.rms_a"), lines.values()),

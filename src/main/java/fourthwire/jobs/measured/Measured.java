@@ -3,14 +3,13 @@ package fourthwire.jobs.measured;
 import fourthwire.audit.DesignState.LineCurrent;
 import fourthwire.audit.DesignState.LineVoltage;
 import fourthwire.audit.DesignState.NeutralCurrent;
+import fourthwire.audit.MeasuredState.Span;
 import fourthwire.metering.Period;
 import fourthwire.quantity.Conductor;
 import fourthwire.quantity.Figure;
 import fourthwire.site.Survey;
-import java.time.DateTimeException;
+import java.time.LocalDateTime;
 import java.time.ZoneId;
-import java.time.ZoneOffset;
-import java.time.format.DateTimeFormatter;
 import java.util.Collection;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -22,7 +21,6 @@ final class Measured {
       Figure.unknown("readings are not held against a demand current");
   private static final Figure AGAINST_AMPACITY =
       Figure.unknown("readings are not held against an ampacity");
-  private static final DateTimeFormatter MINUTE = DateTimeFormatter.ofPattern("yyyy-MM-dd HH:mm");
 
   private Measured() {}
 
@@ -57,25 +55,18 @@ final class Measured {
             : Figure.unknown("no line current was measured"));
   }
 
-  /** Text of a period in the site's time, in UTC where the site has none. */
-  static String text(Optional<Period> period, Survey survey) {
-    ZoneId zone = zone(survey);
-    return period
-        .map(
-            p ->
-                MINUTE.format(p.from().atZone(zone))
-                    + " to "
-                    + MINUTE.format(p.to().atZone(zone))
-                    + (zone.equals(ZoneOffset.UTC) ? " UTC" : ""))
-        .orElse("no clock time in the file");
+  /** A period in the site's time, in UTC where the site has none. */
+  static Optional<Span> span(Optional<Period> period, Survey survey) {
+    ZoneId zone = SiteZone.of(survey);
+    return period.map(
+        p ->
+            new Span(
+                p.from().atZone(zone).toOffsetDateTime(), p.to().atZone(zone).toOffsetDateTime()));
   }
 
-  private static ZoneId zone(Survey survey) {
-    try {
-      return survey.settings().timezone().map(ZoneId::of).orElse(ZoneOffset.UTC);
-    } catch (DateTimeException e) {
-      return ZoneOffset.UTC;
-    }
+  /** A moment by the site's clock. */
+  static Optional<Span> span(Optional<LocalDateTime> moment, ZoneId zone) {
+    return moment.map(m -> m.atZone(zone).toOffsetDateTime()).map(m -> new Span(m, m));
   }
 
   /** The line conductors. */

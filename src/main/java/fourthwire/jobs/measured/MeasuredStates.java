@@ -3,6 +3,7 @@ package fourthwire.jobs.measured;
 import fourthwire.audit.MeasuredState;
 import fourthwire.metering.ReadingRepository;
 import fourthwire.site.Survey;
+import java.time.ZoneId;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -28,7 +29,8 @@ public final class MeasuredStates {
     captures(stored).forEach(e -> add(byNode, e.meter().node(), CaptureStates.of(e, survey)));
     logs(stored)
         .forEach(e -> LogStates.of(e, survey).ifPresent(s -> add(byNode, e.meter().node(), s)));
-    survey.spotReadings().forEach(r -> add(byNode, r.at(), ClampStates.of(r)));
+    ZoneId zone = SiteZone.of(survey);
+    survey.spotReadings().forEach(r -> add(byNode, r.at(), ClampStates.of(r, zone)));
     return byNode;
   }
 

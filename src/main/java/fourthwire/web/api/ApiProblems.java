@@ -27,8 +27,8 @@ import org.springframework.web.servlet.ModelAndView;
 import tools.jackson.databind.json.JsonMapper;
 
 /**
- * Turns every error below {@code /api/} into a problem document, whatever the caller accepts: also
- * those that happen before a controller is found.
+ * Turns every error below {@code /api/} and {@code /actuator/} into a problem document, whatever
+ * the caller accepts: also those that happen before a controller is found.
  */
 @Component
 final class ApiProblems implements HandlerExceptionResolver, Ordered {
@@ -56,13 +56,18 @@ final class ApiProblems implements HandlerExceptionResolver, Ordered {
       HttpServletResponse response,
       @Nullable Object handler,
       Exception error) {
-    if (!request.getRequestURI().startsWith("/api/")) {
+    if (!isOurs(request.getRequestURI())) {
       return null;
     }
     if (!response.isCommitted() && !(error instanceof AsyncRequestNotUsableException)) {
       write(response, error, problem(request, error));
     }
     return new ModelAndView();
+  }
+
+  /** Whether programs rather than people ask at this address. */
+  static boolean isOurs(String address) {
+    return address.startsWith("/api/") || address.startsWith("/actuator/");
   }
 
   private void write(HttpServletResponse response, Exception error, Problem problem) {
@@ -73,7 +78,7 @@ final class ApiProblems implements HandlerExceptionResolver, Ordered {
           .getHeaders()
           .forEach((name, values) -> values.forEach(v -> response.addHeader(name, v)));
     }
-    response.setContentType(Problem.MEDIA_TYPE);
+    response.setContentType(Problem.MEDIA_TYPE + ";charset=UTF-8");
     try {
       response.getOutputStream().write(json.writeValueAsBytes(problem));
     } catch (IOException gone) {

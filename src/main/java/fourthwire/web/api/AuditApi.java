@@ -9,9 +9,12 @@ import fourthwire.json.SummaryJson;
 import fourthwire.site.SiteRepository;
 import io.swagger.v3.oas.annotations.Operation;
 import io.swagger.v3.oas.annotations.Parameter;
+import io.swagger.v3.oas.annotations.media.ArraySchema;
+import io.swagger.v3.oas.annotations.media.Content;
 import io.swagger.v3.oas.annotations.media.Schema;
 import io.swagger.v3.oas.annotations.responses.ApiResponse;
 import io.swagger.v3.oas.annotations.tags.Tag;
+import java.math.BigDecimal;
 import java.net.URI;
 import java.time.Instant;
 import java.util.List;
@@ -32,6 +35,8 @@ import tools.jackson.databind.node.ObjectNode;
 @RequestMapping(path = "/api/v1", produces = MediaType.APPLICATION_JSON_VALUE)
 @Tag(name = "Audits", description = "Audits of a site's survey, and their results node by node")
 class AuditApi {
+  private static final BigDecimal MOST_DRAWS = BigDecimal.valueOf(10_000);
+
   private final AuditService service;
   private final AuditRepository audits;
   private final SiteRepository sites;
@@ -43,26 +48,41 @@ class AuditApi {
   }
 
   /** What is asked for. */
+  @Schema(name = "AuditOrder", description = "What is asked for; every part may be left out")
   record Order(
       @Schema(description = "The supply to run on; left out: the normal one")
           @Nullable String supply,
-      @Schema(description = "Draws of the spread of the loads; this version computes no spread")
-          @Nullable Integer draws) {}
+      @Schema(
+              description = "Draws of the spread of the loads; this version computes no spread",
+              type = "integer",
+              minimum = "0",
+              maximum = "10000")
+          @Nullable BigDecimal draws) {}
 
   /** The audit that was queued. */
-  record Queued(long id) {}
+  @Schema(name = "QueuedAudit", description = "The audit that was queued")
+  record Queued(@Schema(description = "Id of the audit") long id) {}
 
   /** An audit. */
+  @Schema(name = "Audit", description = "An audit and how far it is")
   record State(
-      long id,
-      long site,
+      @Schema(description = "Id of the audit") long id,
+      @Schema(description = "Id of its site") long site,
       @Schema(description = "Revision of the survey it is of") int revision,
-      Optional<String> supply,
+      @Schema(
+              description = "The supply asked for; null: the normal one",
+              types = {"string", "null"})
+          Optional<String> supply,
+      @Schema(description = "Draws asked for of the spread of the loads") int draws,
       @Schema(allowableValues = {"queued", "running", "done", "failed", "cancelled"}) String state,
       @Schema(description = "0 to 1") double progress,
       @Schema(description = "What is being done, or why it failed") String message,
-      Instant asked,
-      @JsonProperty("engine_version") Optional<String> engineVersion,
+      @Schema(description = "When it was asked for, UTC") Instant asked,
+      @Schema(
+              description = "Version of the engine that computed it; null until it is done",
+              types = {"string", "null"})
+          @JsonProperty("engine_version")
+          Optional<String> engineVersion,
       @Schema(description = "Documents and editions of the limits used") List<String> editions,
       @Schema(description = "What holds for the whole site") List<String> notes) {}
 
@@ -73,18 +93,21 @@ class AuditApi {
   @ApiResponse(responseCode = "202", description = "It is queued")
   ResponseEntity<Queued> ask(
       @PathVariable long site, @RequestBody(required = false) @Nullable Order order) {
-    check(order);
     Optional<String> supply = Optional.ofNullable(order).map(Order::supply);
-    long id = service.ask(site, supply).orElseThrow(() -> MissingException.site(site));
+    int draws = Optional.ofNullable(order).map(Order::draws).map(AuditApi::draws).orElse(0);
+    long id = service.ask(site, supply, draws).orElseThrow(() -> MissingException.site(site));
     return ResponseEntity.accepted()
         .location(URI.create("/api/v1/audits/" + id))
         .body(new Queued(id));
   }
 
-  private static void check(@Nullable Order order) {
-    if (order != null && order.draws() != null && order.draws() < 0) {
-      throw new RefusedException("draws is " + order.draws() + "; it must be 0 or more");
+  private static int draws(BigDecimal draws) {
+    boolean whole = draws.signum() == 0 || draws.stripTrailingZeros().scale() <= 0;
+    if (!whole || draws.signum() < 0 || draws.compareTo(MOST_DRAWS) > 0) {
+      throw new RefusedException(
+          "draws is " + draws + "; it must be a whole number from 0 to " + MOST_DRAWS);
     }
+    return draws.intValueExact();
   }
 
   @GetMapping("/sites/{site}/audits")
@@ -118,7 +141,11 @@ class AuditApi {
   @Operation(
       summary = "List the nodes of a finished audit, worst first",
       description = "Of several lines the worst figure; unknown figures are null with a reason.")
-  @ApiResponse(responseCode = "200", description = "One row a node")
+  @ApiResponse(
+      responseCode = "200",
+      description = "One row a node",
+      content =
+          @Content(array = @ArraySchema(schema = @Schema(ref = "#/components/schemas/NodeRow"))))
   List<ObjectNode> nodes(@PathVariable long audit) {
     finished(audit);
     return audits.summaries(audit).stream().map(SummaryJson::write).toList();
@@ -126,7 +153,10 @@ class AuditApi {
 
   @GetMapping("/audits/{audit}/nodes/{node}")
   @Operation(summary = "The result for a supply, transformer, panel or circuit")
-  @ApiResponse(responseCode = "200", description = "Everything computed and measured at the node")
+  @ApiResponse(
+      responseCode = "200",
+      description = "Everything computed and measured at the node",
+      content = @Content(schema = @Schema(ref = "#/components/schemas/Node")))
   ObjectNode node(
       @PathVariable long audit,
       @Parameter(description = "Its name, URL-encoded; a circuit as panel:circuit") @PathVariable
@@ -157,6 +187,7 @@ class AuditApi {
         e.siteId(),
         e.surveyRevision(),
         e.supply(),
+        e.draws(),
         e.state().word(),
         e.progress(),
         e.message(),

@@ -28,12 +28,15 @@ class JobApi {
   }
 
   /** A job. */
+  @Schema(name = "Job", description = "Work in the background and how far it is")
   record State(
-      long id,
+      @Schema(description = "Id of the job") long id,
       @Schema(allowableValues = {"queued", "running", "done", "failed", "cancelled"}) String state,
       @Schema(description = "0 to 1") double progress,
       @Schema(description = "What is being done, or why it failed") String message,
-      @Schema(description = "Id of the reading it made; null until it is done", type = "integer")
+      @Schema(
+              description = "Id of the reading it made; null until it is done",
+              types = {"integer", "null"})
           OptionalLong result) {}
 
   @GetMapping

@@ -1,18 +1,23 @@
 package fourthwire.web.api;
 
 import fourthwire.jobs.ReadingService;
+import fourthwire.jobs.measured.SiteZone;
 import fourthwire.json.MappingJson;
 import fourthwire.json.ReadingJson;
 import fourthwire.metering.ReadingRepository;
 import fourthwire.site.SiteRepository;
 import io.swagger.v3.oas.annotations.Operation;
 import io.swagger.v3.oas.annotations.Parameter;
+import io.swagger.v3.oas.annotations.media.ArraySchema;
+import io.swagger.v3.oas.annotations.media.Content;
+import io.swagger.v3.oas.annotations.media.Schema;
 import io.swagger.v3.oas.annotations.responses.ApiResponse;
 import io.swagger.v3.oas.annotations.tags.Tag;
 import java.io.IOException;
 import java.io.UncheckedIOException;
 import java.net.URI;
 import java.nio.charset.StandardCharsets;
+import java.time.ZoneId;
 import java.util.List;
 import java.util.Optional;
 import org.jspecify.annotations.Nullable;
@@ -48,7 +53,8 @@ class ReadingApi {
   }
 
   /** The job that reads the files. */
-  record Queued(long job) {}
+  @Schema(name = "QueuedJob", description = "The job that was queued")
+  record Queued(@Schema(description = "Id of the job") long job) {}
 
   @PostMapping(path = "/sites/{site}/readings", consumes = MediaType.MULTIPART_FORM_DATA_VALUE)
   @Operation(
@@ -60,13 +66,9 @@ class ReadingApi {
   ResponseEntity<Queued> add(
       @PathVariable long site,
       @RequestPart("file") List<MultipartFile> file,
-      @Parameter(description = "A meter of the survey") @RequestParam(required = false)
-          @Nullable String meter,
-      @Parameter(description = "A supply, transformer, panel or circuit; a meter is made there")
-          @RequestParam(required = false)
-          @Nullable String at,
-      @Parameter(description = "Which columns hold what, as JSON; a field or a file")
-          @RequestPart(name = "mapping", required = false)
+      @Parameter(hidden = true) @RequestParam(required = false) @Nullable String meter,
+      @Parameter(hidden = true) @RequestParam(required = false) @Nullable String at,
+      @Parameter(hidden = true) @RequestPart(name = "mapping", required = false)
           @Nullable MultipartFile mapping,
       @Parameter(hidden = true) MultipartHttpServletRequest form) {
     existing(site);
@@ -102,19 +104,26 @@ class ReadingApi {
 
   @GetMapping("/sites/{site}/readings")
   @Operation(summary = "List a site's readings, newest first")
-  @ApiResponse(responseCode = "200", description = "What each is, without its figures")
+  @ApiResponse(
+      responseCode = "200",
+      description = "What each is, without its figures",
+      content =
+          @Content(array = @ArraySchema(schema = @Schema(ref = "#/components/schemas/ReadingRow"))))
   List<ObjectNode> list(@PathVariable long site) {
-    existing(site);
-    return readings.ofSite(site).stream().map(ReadingJson::row).toList();
+    ZoneId zone = zone(existing(site));
+    return readings.ofSite(site).stream().map(r -> ReadingJson.row(r, zone)).toList();
   }
 
   @GetMapping("/readings/{reading}")
   @Operation(summary = "What a reading says, and what is wrong with it")
-  @ApiResponse(responseCode = "200", description = "Its figures and quality findings")
+  @ApiResponse(
+      responseCode = "200",
+      description = "Its figures and quality findings",
+      content = @Content(schema = @Schema(ref = "#/components/schemas/Reading")))
   ObjectNode get(@PathVariable long reading) {
     return readings
         .find(reading)
-        .map(ReadingJson::write)
+        .map(r -> ReadingJson.write(r, zone(existing(r.siteId()))))
         .orElseThrow(() -> MissingException.reading(reading));
   }
 
@@ -128,9 +137,11 @@ class ReadingApi {
     }
   }
 
-  private void existing(long site) {
-    if (sites.find(site).isEmpty()) {
-      throw MissingException.site(site);
-    }
+  private SiteRepository.Entry existing(long site) {
+    return sites.find(site).orElseThrow(() -> MissingException.site(site));
+  }
+
+  private ZoneId zone(SiteRepository.Entry site) {
+    return SiteZone.of(sites.survey(site.id(), site.latestRevision()));
   }
 }

@@ -7,8 +7,13 @@ import fourthwire.site.SiteRepository;
 import fourthwire.site.Survey;
 import io.swagger.v3.oas.annotations.Operation;
 import io.swagger.v3.oas.annotations.Parameter;
+import io.swagger.v3.oas.annotations.media.Content;
+import io.swagger.v3.oas.annotations.media.Schema;
 import io.swagger.v3.oas.annotations.responses.ApiResponse;
 import io.swagger.v3.oas.annotations.tags.Tag;
+import jakarta.servlet.ServletException;
+import jakarta.servlet.http.HttpServletRequest;
+import java.io.IOException;
 import java.net.URI;
 import java.util.List;
 import org.springframework.http.ContentDisposition;
@@ -23,16 +28,15 @@ import org.springframework.web.bind.annotation.PostMapping;
 import org.springframework.web.bind.annotation.PutMapping;
 import org.springframework.web.bind.annotation.RequestMapping;
 import org.springframework.web.bind.annotation.RequestParam;
-import org.springframework.web.bind.annotation.RequestPart;
 import org.springframework.web.bind.annotation.ResponseStatus;
 import org.springframework.web.bind.annotation.RestController;
-import org.springframework.web.multipart.MultipartFile;
 
 /** Sites and their surveys. */
 @RestController
 @RequestMapping("/api/v1/sites")
 @Tag(name = "Sites", description = "Sites and their surveys")
 class SiteApi {
+  private static final String ZIP = "application/zip";
   private static final String XLSX =
       "application/vnd.openxmlformats-officedocument.spreadsheetml.sheet";
 
@@ -43,10 +47,18 @@ class SiteApi {
   }
 
   /** A site in the list. */
-  record SiteRow(long id, String name) {}
+  @Schema(name = "SiteRow", description = "A site in the list")
+  record SiteRow(
+      @Schema(description = "Its id") long id,
+      @Schema(description = "Its name in the latest survey") String name) {}
 
   /** A survey that was taken in. */
-  record Stored(long id, String name, int revision, List<String> warnings) {}
+  @Schema(name = "StoredSurvey", description = "A survey that was taken in")
+  record Stored(
+      @Schema(description = "Id of the site") long id,
+      @Schema(description = "Name of the site") String name,
+      @Schema(description = "The survey's revision, from 1") int revision,
+      @Schema(description = "What was read otherwise than one may expect") List<String> warnings) {}
 
   @PostMapping(
       consumes = MediaType.MULTIPART_FORM_DATA_VALUE,
@@ -55,8 +67,8 @@ class SiteApi {
       summary = "Make a site of a survey",
       description = "The survey is a zip of CSV tables or an xlsx workbook with a sheet per table.")
   @ApiResponse(responseCode = "201", description = "The site was made; Location is its survey")
-  ResponseEntity<Stored> make(@RequestPart("survey") MultipartFile survey) {
-    SurveyImport.Read read = Surveys.read(survey);
+  ResponseEntity<Stored> make(HttpServletRequest form) throws IOException, ServletException {
+    SurveyImport.Read read = Surveys.read(form);
     long id = sites.create(read.survey(), read.warnings());
     return ResponseEntity.created(URI.create("/api/v1/sites/" + id + "/survey"))
         .body(new Stored(id, name(read), 1, read.warnings()));
@@ -87,9 +99,10 @@ class SiteApi {
       summary = "Store a new revision of a site's survey",
       description = "Earlier audits stay as they were.")
   @ApiResponse(responseCode = "200", description = "The revision is the site's latest")
-  Stored revise(@PathVariable long site, @RequestPart("survey") MultipartFile survey) {
+  Stored revise(@PathVariable long site, HttpServletRequest form)
+      throws IOException, ServletException {
     existing(site);
-    SurveyImport.Read read = Surveys.read(survey);
+    SurveyImport.Read read = Surveys.read(form);
     int revision =
         sites
             .revise(site, read.survey(), read.warnings())
@@ -101,15 +114,28 @@ class SiteApi {
   @Operation(
       summary = "Export a site's latest survey",
       description = "Exported, imported and exported again it is the same, byte for byte.")
-  @ApiResponse(responseCode = "200", description = "The survey's tables in one file")
+  @ApiResponse(
+      responseCode = "200",
+      description = "The survey's tables in one file",
+      content = {
+        @Content(mediaType = ZIP, schema = @Schema(type = "string", format = "binary")),
+        @Content(mediaType = XLSX, schema = @Schema(type = "string", format = "binary"))
+      })
   ResponseEntity<byte[]> export(
       @PathVariable long site,
-      @Parameter(description = "zip (of CSV tables) or xlsx") @RequestParam(defaultValue = "zip")
+      @Parameter(
+              description = "zip (of CSV tables) or xlsx",
+              schema =
+                  @Schema(
+                      type = "string",
+                      allowableValues = {"zip", "xlsx"},
+                      defaultValue = "zip"))
+          @RequestParam(defaultValue = "zip")
           String format) {
     SiteRepository.Entry entry = existing(site);
     Survey survey = sites.survey(site, entry.latestRevision());
     return switch (format) {
-      case "zip" -> file(entry, format, "application/zip", SurveyExport.zip(survey));
+      case "zip" -> file(entry, format, ZIP, SurveyExport.zip(survey));
       case "xlsx" -> file(entry, format, XLSX, SurveyExport.xlsx(survey));
       default ->
           throw new RefusedException(

@@ -151,9 +151,16 @@ final class TablesMaker {
     return node.node().measured().stream().map(this::measured).toList();
   }
 
+  private String period(MeasuredState state) {
+    return state
+        .period()
+        .map(MeasuredState.Span::text)
+        .orElseGet(() -> words.of("reading.period.unknown"));
+  }
+
   private NodePage.Grid measured(MeasuredState state) {
     String title =
-        words.of("measured.title", state.meter(), state.period(), names.in(state.basis()));
+        words.of("measured.title", state.meter(), period(state), names.in(state.basis()));
     Grids grid =
         new Grids(
             words,

@@ -81,7 +81,11 @@ class AuditApiTest extends ServiceTest {
     Answer refused = http.postJson(audits, "{\"supply\":\"SUN\"}");
     ProblemShape.check(refused, 422);
     assertThat(refused.json().path("detail").asString()).contains("SUN", "GRID", "SET");
-    ProblemShape.check(http.postJson(audits, "{\"draws\":-1}"), 422);
+    for (String draws : new String[] {"-1", "1.5", "10001", "1e400", "1e999999999"}) {
+      Answer answer = http.postJson(audits, "{\"draws\":" + draws + "}");
+      ProblemShape.check(answer, 422);
+      assertThat(answer.json().path("detail").asString()).as(draws).contains("0 to 10000");
+    }
     ProblemShape.check(http.postJson(audits, "{\"supply\":"), 400);
     ProblemShape.check(http.postJson(audits, "{\"draws\":\"many\"}"), 400);
     assertThat(http.postJson(audits, "{}").status()).isEqualTo(202);

@@ -89,9 +89,15 @@ class SiteApiTest extends ServiceTest {
     Http http = http();
     byte[] text = "not a zip".getBytes(StandardCharsets.UTF_8);
     ProblemShape.check(http.form("POST", SITES, Part.field("other", "x")), 400);
-    ProblemShape.check(http.form("POST", SITES, Part.field("survey", "x")), 400);
+    ProblemShape.check(http.form("POST", SITES, Part.field("survey", "x")), 422);
+    Part survey = survey(SmallSite.zip("Works"));
+    Answer two = http.form("POST", SITES, survey, survey);
+    ProblemShape.check(two, 422);
+    assertThat(two.json().path("detail").asString()).contains("2 parts", "one is expected");
     ProblemShape.check(http.form("POST", SITES, survey(text)), 422);
-    ProblemShape.check(http.postJson(SITES, "{}"), 415);
+    Answer unsupported = http.postJson(SITES, "{}");
+    ProblemShape.check(unsupported, 415);
+    assertThat(unsupported.header("Accept")).isEqualTo("multipart/form-data");
     ProblemShape.check(
         http.send("POST", SITES, "multipart/form-data; boundary=x", "--x\r\nbroken"), 400);
     ProblemShape.check(http.send("POST", SITES, "multipart/form-data", "no boundary"), 400);
@@ -102,6 +108,12 @@ class SiteApiTest extends ServiceTest {
     ProblemShape.check(http.get(SITES + "/" + make("Works") + "/survey?format=pdf"), 422);
     ProblemShape.check(http.get("/api/v1/nothing"), 404);
     ProblemShape.check(http.get("/api/"), 404);
+  }
+
+  @Test
+  void aSurveyMayComeWithoutAFileName() {
+    Answer made = http().form("POST", SITES, new Part("survey", "", SmallSite.zip("Works")));
+    assertThat(made.status()).as(made.json().toString()).isEqualTo(201);
   }
 
   @Test

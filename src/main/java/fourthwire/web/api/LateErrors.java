@@ -1,0 +1,56 @@
+package fourthwire.web.api;
+
+import jakarta.servlet.RequestDispatcher;
+import jakarta.servlet.http.HttpServletRequest;
+import java.util.List;
+import java.util.Map;
+import org.springframework.boot.autoconfigure.web.WebProperties;
+import org.springframework.boot.webmvc.autoconfigure.error.BasicErrorController;
+import org.springframework.boot.webmvc.autoconfigure.error.ErrorViewResolver;
+import org.springframework.boot.webmvc.error.ErrorAttributes;
+import org.springframework.http.HttpStatus;
+import org.springframework.http.HttpStatusCode;
+import org.springframework.http.MediaType;
+import org.springframework.http.ResponseEntity;
+import org.springframework.stereotype.Component;
+
+/**
+ * Errors that the server reports by itself, such as a method no controller is asked for: a problem
+ * document for programs, the error page for people.
+ */
+@Component
+class LateErrors extends BasicErrorController {
+  private static final MediaType PROBLEM =
+      MediaType.parseMediaType(Problem.MEDIA_TYPE + ";charset=UTF-8");
+
+  LateErrors(ErrorAttributes attributes, WebProperties web, List<ErrorViewResolver> views) {
+    super(attributes, web.getError(), views);
+  }
+
+  @Override
+  public ResponseEntity<Map<String, Object>> error(HttpServletRequest request) {
+    HttpStatusCode status = getStatus(request);
+    HttpStatus known = HttpStatus.valueOf(status.value());
+    return ResponseEntity.status(status)
+        .contentType(PROBLEM)
+        .body(
+            Map.of(
+                "type",
+                "about:blank",
+                "title",
+                known.getReasonPhrase(),
+                "status",
+                status.value(),
+                "detail",
+                detail(request, known)));
+  }
+
+  private static String detail(HttpServletRequest request, HttpStatus status) {
+    return switch (status) {
+      case NOT_FOUND ->
+          "nothing is found at " + request.getAttribute(RequestDispatcher.ERROR_REQUEST_URI);
+      case METHOD_NOT_ALLOWED -> request.getMethod() + " is not possible here";
+      default -> "the request was answered with " + status.getReasonPhrase();
+    };
+  }
+}
