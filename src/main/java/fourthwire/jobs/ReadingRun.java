@@ -11,6 +11,8 @@ import fourthwire.metering.ReadingUploads;
 import java.util.List;
 import java.util.concurrent.CancellationException;
 import java.util.function.BiPredicate;
+import java.util.stream.Collectors;
+import java.util.stream.Stream;
 
 /** Reads one stored upload from queued to its end. */
 public final class ReadingRun {
@@ -45,6 +47,8 @@ public final class ReadingRun {
       uploads.end(uploadId, ReadingUploads.State.CANCELLED, "cancelled");
     } catch (ReadingRefusedException e) {
       uploads.end(uploadId, ReadingUploads.State.FAILED, sentence(e));
+    } catch (RefusedException e) {
+      uploads.end(uploadId, ReadingUploads.State.FAILED, String.valueOf(e.getMessage()));
     } catch (Stop.StoppedException e) {
       // stays stored as running: the next start reads it again
     } catch (RuntimeException | Error e) {
@@ -59,12 +63,19 @@ public final class ReadingRun {
     List<RawFile> files = uploads.files(upload.id());
     ReadingSetting setting = settings.of(upload.siteId(), upload.meter(), upload.mapping());
     ReadingPlan plan = reader.plan(files, setting);
+    settings.checkNotReadOtherwise(upload.siteId(), upload.meter(), files, plan.mapping());
     Reading reading = reader.read(files, plan, setting, listener(upload.id()));
     uploads.finish(
         upload.id(),
         readings.add(
             new ReadingRepository.Addition(
-                upload.siteId(), upload.meter(), files, plan.layout(), plan.mapping(), reading)));
+                upload.siteId(),
+                upload.meter(),
+                files,
+                plan.layout(),
+                plan.mapping(),
+                upload.mapping(),
+                reading)));
   }
 
   private BiPredicate<Double, String> listener(long uploadId) {
@@ -77,9 +88,10 @@ public final class ReadingRun {
 
   /** The refusal with its questions, for a place that has one sentence only. */
   static String sentence(ReadingRefusedException e) {
-    StringBuilder sentence = new StringBuilder(String.valueOf(e.getMessage()));
-    e.questions()
-        .forEach(q -> sentence.append("; ").append(q.part()).append(": ").append(q.message()));
-    return sentence.toString();
+    return Stream.concat(
+            Stream.of(String.valueOf(e.getMessage())),
+            e.questions().stream().map(q -> q.part() + ": " + q.message()))
+        .map(s -> s.endsWith(".") ? s : s + ".")
+        .collect(Collectors.joining(" "));
   }
 }

@@ -1,5 +1,6 @@
 package fourthwire.jobs;
 
+import fourthwire.intake.reading.ReadingPlan;
 import fourthwire.intake.reading.ReadingReader;
 import fourthwire.metering.RawFile;
 import fourthwire.metering.ReadingMapping;
@@ -44,7 +45,8 @@ public final class ReadingService {
    * Checks that the files can be read and queues the reading; the site must be there.
    *
    * @return the job's id
-   * @throws RefusedException where the meter or node is not known
+   * @throws RefusedException where the meter or node is not known, or the same files were read by
+   *     another mapping before
    * @throws fourthwire.intake.reading.ReadingRefusedException with the columns found and what must
    *     be mapped
    */
@@ -58,7 +60,8 @@ public final class ReadingService {
   public long store(Upload upload) {
     MeterRef meter = meter(upload);
     List<RawFile> files = List.copyOf(upload.files());
-    reader.plan(files, settings.of(upload.siteId(), meter, upload.mapping()));
+    ReadingPlan plan = reader.plan(files, settings.of(upload.siteId(), meter, upload.mapping()));
+    settings.checkNotReadOtherwise(upload.siteId(), meter, files, plan.mapping());
     return uploads.create(upload.siteId(), meter, files, upload.mapping());
   }
 

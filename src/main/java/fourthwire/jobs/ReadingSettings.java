@@ -1,6 +1,7 @@
 package fourthwire.jobs;
 
 import fourthwire.intake.reading.ReadingSetting;
+import fourthwire.metering.RawFile;
 import fourthwire.metering.ReadingMapping;
 import fourthwire.metering.ReadingRepository;
 import fourthwire.metering.ReadingRepository.MeterRef;
@@ -36,6 +37,28 @@ public final class ReadingSettings {
         layout -> readings.mapping(siteId, ref.name(), layout),
         meter.map(Meter::ctReversed).orElse(List.of()),
         meter.map(Meter::ctRatio).orElse(OptionalDouble.empty()));
+  }
+
+  /**
+   * Refuses files that are there already and were read by another mapping: the earlier reading
+   * would be answered as if it were this one.
+   *
+   * @throws RefusedException naming the earlier reading
+   */
+  void checkNotReadOtherwise(
+      long siteId, MeterRef ref, List<RawFile> files, ReadingMapping mapping) {
+    readings
+        .same(siteId, ref.name(), files)
+        .filter(entry -> !entry.mapping().equals(mapping))
+        .ifPresent(
+            entry -> {
+              throw new RefusedException(
+                  "this file is already there as reading "
+                      + entry.id()
+                      + " of "
+                      + ref.name()
+                      + ", read by another mapping; delete that reading first to read it otherwise");
+            });
   }
 
   /** The site's latest survey; the site must be there. */

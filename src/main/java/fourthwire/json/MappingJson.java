@@ -80,7 +80,9 @@ public final class MappingJson {
         return o;
       }
     } catch (JacksonException e) {
-      throw new RefusedException("the mapping is not JSON: " + e.getOriginalMessage());
+      throw new RefusedException(
+          "the mapping is not JSON: it can't be read from line %d, column %d on"
+              .formatted(e.getLocation().getLineNr(), e.getLocation().getColumnNr()));
     }
     throw new RefusedException("the mapping must be a JSON object with \"columns\"");
   }

@@ -22,7 +22,9 @@ public interface ReadingRepository {
    *
    * @param files the uploaded files as they came
    * @param layout signature of the file's header; a later file of the same is read the same way
-   * @param mapping the full mapping it was read by; remembered for this meter and layout
+   * @param mapping the full mapping it was read by
+   * @param confirmed the mapping the user gave; remembered as given for this meter and layout.
+   *     Empty where the mapping was remembered or only proposed: a proposal is no confirmation
    */
   record Addition(
       long siteId,
@@ -30,6 +32,7 @@ public interface ReadingRepository {
       List<RawFile> files,
       String layout,
       ReadingMapping mapping,
+      Optional<ReadingMapping> confirmed,
       Reading reading) {
     /** Copies the list. */
     public Addition {
@@ -68,7 +71,10 @@ public interface ReadingRepository {
   /** Removes a reading with its file; whether it was there. */
   boolean delete(long readingId);
 
-  /** The mapping last used for files of this layout at this meter. */
+  /** The reading that these same bytes became at this meter before. */
+  Optional<Entry> same(long siteId, String meter, List<RawFile> files);
+
+  /** The mapping last confirmed for files of this layout at this meter, as it was given. */
   Optional<ReadingMapping> mapping(long siteId, String meter, String layout);
 
   /** The meters of a site that have readings or were made for one. */

@@ -18,4 +18,23 @@ public record SpotReading(
     OptionalDouble kw,
     OptionalDouble powerFactor,
     OptionalDouble thdPercent,
-    Optional<Instrument> instrument) {}
+    Optional<Instrument> instrument) {
+
+  /** The same reading at another local time. */
+  public SpotReading takenAt(LocalDateTime localTime) {
+    return new SpotReading(
+        at,
+        Optional.of(localTime),
+        l1A,
+        l2A,
+        l3A,
+        nA,
+        l1V,
+        l2V,
+        l3V,
+        kw,
+        powerFactor,
+        thdPercent,
+        instrument);
+  }
+}

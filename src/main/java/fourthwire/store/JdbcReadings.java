@@ -49,8 +49,9 @@ final class JdbcReadings implements ReadingRepository {
         transaction.execute(
             status -> {
               putMeter(addition.siteId(), addition.meter());
-              putLayout(addition);
-              return same(addition, sha256).orElseGet(() -> insert(addition, sha256));
+              addition.confirmed().ifPresent(mapping -> putLayout(addition, mapping));
+              return same(addition.siteId(), addition.meter().name(), sha256)
+                  .orElseGet(() -> insert(addition, sha256));
             }));
   }
 
@@ -68,11 +69,16 @@ final class JdbcReadings implements ReadingRepository {
     return HexFormat.of().formatHex(digest.digest(digests.getBytes(StandardCharsets.US_ASCII)));
   }
 
-  private Optional<Long> same(Addition addition, String sha256) {
+  private Optional<Long> same(long siteId, String meter, String sha256) {
     return jdbc.sql("select id from readings where site_id = ? and meter = ? and sha256 = ?")
-        .params(addition.siteId(), addition.meter().name(), sha256)
+        .params(siteId, meter, sha256)
         .query(Long.class)
         .optional();
+  }
+
+  @Override
+  public Optional<Entry> same(long siteId, String meter, List<RawFile> same) {
+    return same(siteId, meter, sha256(same)).flatMap(this::find);
   }
 
   private void putMeter(long siteId, MeterRef meter) {
@@ -87,8 +93,8 @@ final class JdbcReadings implements ReadingRepository {
     }
   }
 
-  private void putLayout(Addition a) {
-    String mapping = MappingJson.write(a.mapping()).toString();
+  private void putLayout(Addition a, ReadingMapping confirmed) {
+    String mapping = MappingJson.write(confirmed).toString();
     int changed =
         jdbc.sql(
                 """

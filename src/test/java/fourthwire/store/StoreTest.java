@@ -278,6 +278,7 @@ class StoreTest {
             List.of(file("week.csv", 1_500_000)),
             "layout",
             mapping(),
+            Optional.of(mapping()),
             reading()));
   }
 

@@ -58,6 +58,14 @@ record ChannelMapping(
                 questions.add(
                     question(
                         name, "\"" + column.quantity() + "\" is no quantity; " + words.examples()));
+              } else if (!(column.factor() > 0) || Double.isInfinite(column.factor())) {
+                questions.add(
+                    question(
+                        name + ".factor",
+                        "it is "
+                            + column.factor()
+                            + " and must be above 0; a clamp that points the wrong way is the"
+                            + " meter's ct_reversed"));
               }
             });
     Map<String, Column> columns = new LinkedHashMap<>();

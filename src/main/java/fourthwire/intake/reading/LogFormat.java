@@ -60,7 +60,7 @@ final class LogFormat {
     ReadingMapping.Time settled =
         new ReadingMapping.Time(
             names(),
-            given.format().or(() -> order.map(DateOrder::pattern)),
+            order.map(DateOrder::pattern),
             zone,
             Optional.of(stamp(given, notes)),
             given.intervalS());
@@ -102,11 +102,13 @@ final class LogFormat {
       ReadingMapping.Time given,
       List<ReadingRefusedException.Question> questions,
       List<String> notes) {
-    if (given.format().isPresent()) {
-      return given.format().map(DateOrder::of);
-    }
     if (time.columns().isEmpty()) {
       return Optional.empty();
+    }
+    if (given.format().isPresent()) {
+      DateOrder told = DateOrder.of(given.format().get());
+      formatQuestion(table, time, told).ifPresent(questions::add);
+      return Optional.of(told);
     }
     Optional<TimeColumns.Order> order = time.order(table);
     order.map(TimeColumns.Order::reason).filter(r -> !r.isEmpty()).ifPresent(notes::add);
@@ -118,6 +120,21 @@ final class LogFormat {
                   + " MM/dd/yyyy"));
     }
     return order.map(TimeColumns.Order::order);
+  }
+
+  /** A question where dates contradict the order that was told. */
+  static Optional<ReadingRefusedException.Question> formatQuestion(
+      TextTable table, TimeColumns time, DateOrder told) {
+    return time.misfit(table, told)
+        .map(
+            misfit ->
+                question(
+                    "time.format",
+                    "the format given or remembered writes dates as "
+                        + told.pattern()
+                        + ", but "
+                        + misfit
+                        + ": say how this file writes them"));
   }
 
   private void zone(

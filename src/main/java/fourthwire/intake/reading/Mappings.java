@@ -1,7 +1,10 @@
 package fourthwire.intake.reading;
 
 import fourthwire.metering.ReadingMapping;
+import java.util.LinkedHashMap;
+import java.util.Map;
 import java.util.Optional;
+import java.util.function.UnaryOperator;
 
 /**
  * The mapping known before a file is looked at.
@@ -14,5 +17,31 @@ record Mappings(Optional<ReadingMapping> mapping, ReadingPlan.Confidence whence)
     return setting.mapping().isPresent()
         ? new Mappings(setting.mapping(), ReadingPlan.Confidence.GIVEN)
         : new Mappings(setting.remembered().apply(layout), ReadingPlan.Confidence.REMEMBERED);
+  }
+
+  /** The same with every column under the heading it stands for. */
+  Mappings under(UnaryOperator<String> heading) {
+    return new Mappings(mapping.map(m -> under(m, heading)), whence);
+  }
+
+  private static ReadingMapping under(ReadingMapping m, UnaryOperator<String> heading) {
+    Map<String, ReadingMapping.Column> columns = new LinkedHashMap<>();
+    m.columns()
+        .forEach(
+            (name, column) -> {
+              boolean twice = columns.containsKey(heading.apply(name));
+              columns.put(twice ? name : heading.apply(name), column);
+            });
+    ReadingMapping.Time time = m.time();
+    return new ReadingMapping(
+        m.kind(),
+        new ReadingMapping.Time(
+            time.columns().stream().map(heading).toList(),
+            time.format(),
+            time.zone(),
+            time.stamp(),
+            time.intervalS()),
+        m.sampleRateHz(),
+        columns);
   }
 }

@@ -14,7 +14,7 @@ import java.util.function.Function;
  * @param siteZone the site's time zone
  * @param nominalHz the site's frequency, 50 or 60
  * @param mapping given with the upload; it overrides what is proposed
- * @param remembered the mapping used before for this meter and a layout
+ * @param remembered the mapping confirmed before for this meter and a layout
  * @param ctReversed conductors whose current transformer is known to point the wrong way
  * @param ctRatio of the meter, applied to currents a file marks as secondary without a ratio
  */

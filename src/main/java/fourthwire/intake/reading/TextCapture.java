@@ -55,6 +55,7 @@ final class TextCapture {
     }
     ReadingMapping.Time given =
         known.mapping().map(ReadingMapping::time).orElse(ReadingMapping.Time.FROM_FILE);
+    checkFormat(given);
     List<String> notes = new ArrayList<>(List.of(table.note()));
     if (!mapping.unmapped().isEmpty()) {
       notes.add("Columns not read: " + String.join(", ", mapping.unmapped()) + ".");
@@ -71,6 +72,19 @@ final class TextCapture {
         table.headings(),
         mapping.confidence(),
         notes);
+  }
+
+  private void checkFormat(ReadingMapping.Time given) {
+    if (given.format().isPresent() && !time.columns().isEmpty() && !time.elapsed()) {
+      LogFormat.formatQuestion(table, time, DateOrder.of(given.format().get()))
+          .ifPresent(
+              question -> {
+                throw new ReadingRefusedException(
+                    "The times of the samples can't be read as told.",
+                    table.headings(),
+                    List.of(question));
+              });
+    }
   }
 
   Reading read(ReadingPlan plan, ReadingSetting setting, BiPredicate<Double, String> progress) {

@@ -30,7 +30,7 @@ final class TextFormat implements Format {
   @Override
   public ReadingPlan plan(ReadingSetting setting) {
     String layout = Layout.of("text", table.headings());
-    Mappings known = Mappings.of(setting, layout);
+    Mappings known = Mappings.of(setting, layout).under(table::heading);
     try {
       TimeColumns time = time(known.mapping());
       return kind(known.mapping(), time) == ReadingKind.CAPTURE

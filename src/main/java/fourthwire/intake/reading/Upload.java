@@ -5,11 +5,11 @@ import java.io.ByteArrayInputStream;
 import java.io.IOException;
 import java.io.InputStream;
 import java.io.UncheckedIOException;
+import java.nio.charset.StandardCharsets;
 import java.util.ArrayList;
 import java.util.List;
-import java.util.zip.ZipEntry;
-import java.util.zip.ZipException;
-import java.util.zip.ZipInputStream;
+import org.apache.commons.compress.archivers.zip.ZipArchiveEntry;
+import org.apache.commons.compress.archivers.zip.ZipArchiveInputStream;
 
 /** What was uploaded, zips opened, sorted out into a format. */
 final class Upload {
@@ -30,10 +30,33 @@ final class Upload {
 
   private void take(RawFile file) {
     if (isZip(file)) {
+      int before = parts.size();
       unpack(file);
+      List<Part> unpackedParts = parts.subList(before, parts.size());
+      if (unpackedParts.stream().anyMatch(p -> p.name().equals(FirstSheet.CONTENT_TYPES))) {
+        Part sheet = sheet(file, List.copyOf(unpackedParts));
+        unpackedParts.clear();
+        parts.add(sheet);
+      }
     } else {
       parts.add(new Part(file.name(), file::open));
     }
+  }
+
+  /** Parts that declare a document type could reach outside the file. */
+  private static Part sheet(RawFile file, List<Part> workbook) {
+    for (Part part : workbook) {
+      String text = new String(part.bytes(MOST_BYTES), StandardCharsets.ISO_8859_1);
+      if (part.ending().matches("xml|rels")
+          && (text.contains("<!DOCTYPE") || text.indexOf(0) >= 0)) {
+        throw new ReadingRefusedException(
+            file.name()
+                + " is a workbook in UTF-16 or declares a document type, which is refused. Save it"
+                + " again as xlsx, or its sheet as CSV.");
+      }
+    }
+    byte[] csv = FirstSheet.csv(file.name(), new Part(file.name(), file::open).bytes(MOST_BYTES));
+    return new Part(file.name(), () -> new ByteArrayInputStream(csv));
   }
 
   /** By its first bytes: a name may say anything. */
@@ -47,18 +70,17 @@ final class Upload {
   }
 
   private void unpack(RawFile file) {
-    try (ZipInputStream zip = new ZipInputStream(file.open())) {
-      for (ZipEntry e = zip.getNextEntry(); e != null; e = zip.getNextEntry()) {
+    try (ZipArchiveInputStream zip =
+        new ZipArchiveInputStream(file.open(), StandardCharsets.UTF_8.name(), true, true)) {
+      for (ZipArchiveEntry e = zip.getNextEntry(); e != null; e = zip.getNextEntry()) {
         String name = e.getName().substring(e.getName().replace('\\', '/').lastIndexOf('/') + 1);
         if (!e.isDirectory() && !name.startsWith(".")) {
           byte[] bytes = unpacked(zip, file.name());
           parts.add(new Part(name, () -> new ByteArrayInputStream(bytes)));
         }
       }
-    } catch (ZipException e) {
-      throw new ReadingRefusedException(file.name() + " is no zip that can be opened.");
     } catch (IOException e) {
-      throw new UncheckedIOException(e);
+      throw new ReadingRefusedException(file.name() + " is no zip that can be opened.");
     }
   }
 
@@ -95,7 +117,7 @@ final class Upload {
       return TextFormat.of(parts.get(0));
     }
     throw new ReadingRefusedException(
-        "One reading at a time: one CSV file, one CFF file, or one CFG file with its DAT file;"
+        "One reading at a time: one CSV file, one xlsx workbook, one CFF file, or one CFG file with its DAT file;"
             + " found "
             + (parts.isEmpty()
                 ? "none"

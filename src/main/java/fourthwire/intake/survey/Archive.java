@@ -54,7 +54,7 @@ final class Archive {
       }
       return unpacked;
     } catch (IOException | IllegalArgumentException e) {
-      throw damaged(Text.message(e));
+      throw damaged("it is cut off, or its directory can't be read");
     }
   }
 

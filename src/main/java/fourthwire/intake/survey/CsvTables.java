@@ -39,7 +39,11 @@ final class CsvTables {
     String text = decode(table, bytes);
     char separator = separator(text, known);
     List<SurveyTable.Row> rows = records(table, text, separator, guards);
-    if (rows.isEmpty() || rows.get(0).isBlank()) {
+    if (rows.stream().allMatch(SurveyTable.Row::isBlank)) {
+      throw new RefusedException(
+          SurveyError.ofTable(table, "The file is empty; row 1 must name the columns."));
+    }
+    if (rows.get(0).isBlank()) {
       throw new RefusedException(
           new SurveyError(
               table, 1, "", "", "Row 1 is empty; it must hold the names of the columns."));
@@ -113,7 +117,7 @@ final class CsvTables {
             .allowUnclosedQuote(false)
             .ofCsvRecord(text)) {
       for (CsvRecord line : reader) {
-        guards.countRow();
+        guards.countRow(table);
         SurveyTable.Row row = new SurveyTable.Row(++number, line.getFields());
         if (number == 1 || !row.isBlank()) {
           rows.add(row);

@@ -5,6 +5,12 @@ import fourthwire.site.check.DraftTable;
 import fourthwire.site.check.DraftTable.State;
 import fourthwire.site.check.SurveyDraft;
 import fourthwire.site.check.SurveyError;
+import java.time.DateTimeException;
+import java.time.LocalDateTime;
+import java.time.OffsetDateTime;
+import java.time.ZoneId;
+import fourthwire.site.SpotReading;
+import fourthwire.site.check.DraftRow;
 import java.util.List;
 import java.util.Optional;
 import java.util.Set;
@@ -41,7 +47,46 @@ final class DraftReader {
         table(DistributionTables.CAPACITORS),
         table(DistributionTables.FILTERS),
         table(DistributionTables.METERS),
-        table(DistributionTables.SPOT_READINGS));
+        spotReadings(settings.table()));
+  }
+
+  /** A time written with its offset from UTC is put into the site's local time. */
+  private DraftTable<SpotReading> spotReadings(DraftTable<SiteSettings> site) {
+    DraftTable<SpotReading> read = table(DistributionTables.SPOT_READINGS);
+    Optional<ZoneId> zone =
+        site.rows().stream().findFirst().flatMap(r -> r.content().timezone()).flatMap(this::zone);
+    return new DraftTable<>(
+        read.name(), read.state(), read.rows().stream().map(r -> local(r, zone)).toList());
+  }
+
+  private Optional<ZoneId> zone(String name) {
+    try {
+      return Optional.of(ZoneId.of(name));
+    } catch (DateTimeException e) {
+      return Optional.empty();
+    }
+  }
+
+  private DraftRow<SpotReading> local(DraftRow<SpotReading> row, Optional<ZoneId> zone) {
+    Optional<OffsetDateTime> written =
+        row.sound("time") ? Formats.withOffset(row.cell("time")) : Optional.empty();
+    if (written.isEmpty()) {
+      return row;
+    }
+    if (zone.isEmpty()) {
+      remarks.warning(
+          row.table(),
+          "row %d: the site has no timezone, so the time is kept as written, without its offset."
+              .formatted(row.row()));
+      return row;
+    }
+    LocalDateTime time = written.get().atZoneSameInstant(zone.get()).toLocalDateTime();
+    return new DraftRow<>(
+        row.table(),
+        row.row(),
+        row.content().takenAt(time),
+        row.damaged(),
+        row.cells());
   }
 
   private SettingsReader.Settings settings() {

@@ -6,13 +6,16 @@ import fourthwire.site.VectorGroup;
 import fourthwire.site.conductor.ConductorSize;
 import java.time.DateTimeException;
 import java.time.LocalDateTime;
+import java.time.OffsetDateTime;
 import java.time.ZoneId;
 import java.time.format.DateTimeFormatter;
 import java.time.format.DateTimeParseException;
+import java.time.temporal.TemporalAccessor;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 import java.util.function.Function;
 import java.util.regex.Pattern;
 import java.util.stream.Collectors;
@@ -58,7 +61,7 @@ final class Formats {
   /** A time zone of the tz database, or an offset. */
   static final Format<String> ZONE = Format.ofText(Formats::zone, t -> t, "");
 
-  /** A local date and time. */
+  /** A local date and time; an offset from UTC may stand behind it. */
   static final Format<LocalDateTime> TIME =
       Format.ofText(Formats::time, DateTimeFormatter.ISO_LOCAL_DATE_TIME::format, SERIAL_EPOCH);
 
@@ -136,6 +139,11 @@ final class Formats {
   }
 
   private static String nodeName(String text) {
+    if (text.equals(".") || text.equals("..")) {
+      throw new IllegalArgumentException(
+          "A supply, transformer or panel can't be called . or .., which stand for folders in"
+              + " addresses.");
+    }
     if (text.contains("/") || text.contains(":")) {
       throw new IllegalArgumentException(
           "The characters / and : can't stand in the name of a supply, transformer or panel.");
@@ -204,12 +212,27 @@ final class Formats {
       return SERIAL_EPOCH.plusSeconds(Math.round(Double.parseDouble(text) * SECONDS_A_DAY));
     }
     try {
-      return LocalDateTime.parse(text.replaceFirst("\\s+", "T"));
+      return LocalDateTime.from(parsedTime(text));
     } catch (DateTimeParseException e) {
       throw new IllegalArgumentException(
-          "This is no local date and time. Write it as 2026-03-14T09:30 or 2026-03-14 09:30:00,"
-              + " without a time zone.",
+          "This is no date and time. Write it as 2026-03-14T09:30 or 2026-03-14 09:30:00, in the"
+              + " site's local time, or with an offset from UTC, as 2026-03-14T09:30+01:00.",
           e);
     }
+  }
+
+  /** The instant of a time that is written with its offset from UTC, as a date with that offset. */
+  static Optional<OffsetDateTime> withOffset(String text) {
+    try {
+      return parsedTime(text) instanceof OffsetDateTime time ? Optional.of(time) : Optional.empty();
+    } catch (DateTimeParseException e) {
+      return Optional.empty();
+    }
+  }
+
+  private static TemporalAccessor parsedTime(String text) {
+    String iso = text.replaceFirst("\\s+(?=\\d)", "T").replaceFirst("\\s+(?=[-+Zz])", "");
+    return DateTimeFormatter.ISO_DATE_TIME.parseBest(
+        iso, OffsetDateTime::from, LocalDateTime::from);
   }
 }

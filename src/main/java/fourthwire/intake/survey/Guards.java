@@ -53,10 +53,20 @@ final class Guards {
     }
   }
 
-  void countRow() throws RefusedException {
+  /** Counts a row of this table. */
+  void countRow(String table) throws RefusedException {
     if (++rows > MOST_ROWS) {
-      throw refusal("The tables have more than 1,000,000 rows." + CAPS);
+      throw new RefusedException(
+          SurveyError.ofTable(
+              table,
+              "With this table the survey has more than 1,000,000 rows; it was read no further."
+                  + CAPS));
     }
+  }
+
+  /** Whether no more rows can be read. */
+  boolean isOverRows() {
+    return rows > MOST_ROWS;
   }
 
   private static RefusedException refusal(String message) {

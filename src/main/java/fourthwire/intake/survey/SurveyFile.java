@@ -18,6 +18,7 @@ import java.util.regex.Pattern;
 final class SurveyFile {
   private static final int OLE2_FIRST_BYTE = 0xD0;
   private static final int OLE2_SECOND_BYTE = 0xCF;
+  private static final int MOST_COLUMNS = 1000;
 
   /** A table file: at the top or in one folder. */
   private static final Pattern TABLE_FILE =
@@ -75,6 +76,16 @@ final class SurveyFile {
       remarks.warning("table \"" + name + "\" is not known and was left out.");
     } else if (tables.containsKey(name)) {
       reportTwice(name);
+    } else if (table.header().isEmpty() && table.rows().isEmpty()) {
+      unreadable.add(name);
+      remarks.error(SurveyError.ofTable(name, "The sheet is empty; row 1 must name the columns."));
+    } else if (table.header().size() > MOST_COLUMNS) {
+      unreadable.add(name);
+      remarks.error(
+          SurveyError.ofTable(
+              name,
+              "The table has %d columns; at most %d are accepted."
+                  .formatted(table.header().size(), MOST_COLUMNS)));
     } else if (table.header().isEmpty()) {
       unreadable.add(name);
       remarks.error(
@@ -117,7 +128,7 @@ final class SurveyFile {
     try {
       add(name, CsvTables.read(name, files.get(0).bytes(), Schemas.columns(name), guards));
     } catch (RefusedException e) {
-      if (e.error().table().isEmpty()) {
+      if (e.error().table().isEmpty() || guards.isOverRows()) {
         throw e;
       }
       unreadable.add(name);

@@ -18,11 +18,14 @@ import java.util.Set;
  * column of that row as damaged, so that nothing further is said about it.
  */
 final class TableReader<R> {
+  private static final int MOST_UNKNOWN = 20;
+
   private final Schema<R> schema;
   private final SurveyTable table;
   private final Remarks remarks;
   private final Map<String, Integer> indexes = new LinkedHashMap<>();
   private final Set<String> damagedColumns = new HashSet<>();
+  private final List<String> unknown = new ArrayList<>();
 
   private TableReader(Schema<R> schema, SurveyTable table, Remarks remarks) {
     this.schema = schema;
@@ -45,17 +48,32 @@ final class TableReader<R> {
       if (column.isEmpty()) {
         warnOfNamelessColumn(i);
       } else if (!known.contains(column)) {
-        remarks.warning(
-            schema.name(),
-            "column \"" + column + "\" is not known and was left out." + hint(column));
+        unknown.add(column);
       } else if (indexes.putIfAbsent(column, i) != null) {
         damagedColumns.add(column);
         headerError(column, table.header().get(i), "The column stands there twice; keep one.");
       }
     }
+    warnOfUnknown();
     schema.columns().stream()
         .filter(c -> c.required() && !indexes.containsKey(c.name()))
         .forEach(this::reportMissing);
+  }
+
+  private void warnOfUnknown() {
+    unknown.stream()
+        .limit(MOST_UNKNOWN)
+        .forEach(
+            column ->
+                remarks.warning(
+                    schema.name(),
+                    "column \"" + column + "\" is not known and was left out." + hint(column)));
+    if (unknown.size() > MOST_UNKNOWN) {
+      remarks.warning(
+          schema.name(),
+          "and %d more columns are not known and were left out."
+              .formatted(unknown.size() - MOST_UNKNOWN));
+    }
   }
 
   private String hint(String column) {

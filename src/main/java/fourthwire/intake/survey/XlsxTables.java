@@ -50,7 +50,7 @@ final class XlsxTables {
       }
       return tables;
     } catch (IOException | ExcelReaderException e) {
-      throw damaged(Text.message(e));
+      throw damaged("its parts can't be read as those of a workbook");
     }
   }
 
@@ -82,16 +82,16 @@ final class XlsxTables {
   private static SurveyTable table(Sheet sheet, Guards guards)
       throws IOException, RefusedException {
     List<SurveyTable.Row> rows = new ArrayList<>();
+    String name = Text.key(sheet.getName());
     try (Stream<Row> stream = sheet.openStream()) {
       for (Row row : (Iterable<Row>) stream::iterator) {
-        guards.countRow();
+        guards.countRow(name);
         SurveyTable.Row read = new SurveyTable.Row(row.getRowNum(), cells(row));
         if (!read.isBlank()) {
           rows.add(read);
         }
       }
     }
-    String name = Text.key(sheet.getName());
     boolean headed = !rows.isEmpty() && rows.get(0).number() == 1;
     return headed
         ? new SurveyTable(name, rows.get(0).cells(), rows.subList(1, rows.size()), true)
@@ -113,6 +113,9 @@ final class XlsxTables {
     String formula = cell.getFormula();
     if (cell.getType() == CellType.FORMULA || (formula != null && !formula.isEmpty())) {
       return "=" + (formula == null ? "" : formula);
+    }
+    if (cell.getType() == CellType.BOOLEAN) {
+      return cell.asBoolean() ? "TRUE" : "FALSE";
     }
     if (cell.getType() == CellType.NUMBER) {
       return Numbers.print(cell.asNumber().doubleValue());

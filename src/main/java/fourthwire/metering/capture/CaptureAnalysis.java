@@ -27,6 +27,9 @@ import java.util.Optional;
  * <p>Not made here: the 10/12-cycle windows, groups and aggregation of IEC 61000-4-7 and -4-30.
  */
 public final class CaptureAnalysis {
+  /** Below this share a fundamental is noise; common practice, no source. */
+  private static final double LEAST_FUNDAMENTAL = 1e-3;
+
   private final Capture capture;
   private final Window window;
   private final Fits fits;
@@ -76,19 +79,23 @@ public final class CaptureAnalysis {
   private CaptureResult result() {
     Map<Conductor, CaptureResult.CurrentFigures> current = new LinkedHashMap<>();
     Map<Conductor, Spectrum> spectrum = new LinkedHashMap<>();
+    double largestLineA = largestLine(Fits.LINES.stream().map(l -> l + ".i").toList());
     for (Conductor c : Conductor.values()) {
       Optional<HarmonicFit> fit = c.isLine() ? fits.current(c) : neutral.fit();
       fit.ifPresent(
           f -> {
-            current.put(c, currentFigures(f));
+            current.put(c, currentFigures(f, largestLineA));
             spectrum.put(c, fits.spectrum(f));
           });
     }
     Map<String, CaptureResult.VoltageFigures> voltage = new LinkedHashMap<>();
     Map<String, Spectrum> voltageSpectrum = new LinkedHashMap<>();
+    double largestLineV =
+        largestLine(
+            voltageKeys().stream().filter(k -> k.startsWith("L")).map(k -> k + ".v").toList());
     for (String key : voltageKeys()) {
       HarmonicFit f = fits.find(key + ".v").orElseThrow();
-      voltage.put(key, voltageFigures(f));
+      voltage.put(key, voltageFigures(f, largestLineV));
       voltageSpectrum.put(key, fits.spectrum(f));
     }
     CapturePower power = CapturePower.of(fits, neutral);
@@ -130,20 +137,41 @@ public final class CaptureAnalysis {
         .orElse(Figure.unknown(mean > 0 ? neutral.basis() : "no line current"));
   }
 
-  private CaptureResult.CurrentFigures currentFigures(HarmonicFit fit) {
+  private CaptureResult.CurrentFigures currentFigures(HarmonicFit fit, double largestLineA) {
     return new CaptureResult.CurrentFigures(
         Figure.of(fit.alternatingRms()),
         Figure.of(fit.at(1).magnitude()),
-        Distortion.thdPercent(fits.spectrum(fit)),
+        thdPercent(fit, largestLineA),
         crest(fit));
   }
 
-  private CaptureResult.VoltageFigures voltageFigures(HarmonicFit fit) {
+  private CaptureResult.VoltageFigures voltageFigures(HarmonicFit fit, double largestLineV) {
     return new CaptureResult.VoltageFigures(
         Figure.of(fit.alternatingRms()),
         Figure.of(fit.at(1).magnitude()),
-        Distortion.thdPercent(fits.spectrum(fit)),
+        thdPercent(fit, largestLineV),
         crest(fit));
+  }
+
+  private double largestLine(List<String> quantities) {
+    return quantities.stream()
+        .map(fits::find)
+        .flatMap(Optional::stream)
+        .mapToDouble(f -> f.at(1).magnitude())
+        .max()
+        .orElse(0);
+  }
+
+  /**
+   * On a fundamental that is only noise beside its channel or its lines, distortion says nothing.
+   */
+  private Figure thdPercent(HarmonicFit fit, double largestLine) {
+    double fundamental = fit.at(1).magnitude();
+    return fundamental < LEAST_FUNDAMENTAL * Math.max(fit.alternatingRms(), largestLine)
+        ? Figure.unknown(
+            "the fundamental is below 0.1 % of the channel's rms or of the largest line's"
+                + " fundamental: too small to refer to")
+        : Distortion.thdPercent(fits.spectrum(fit));
   }
 
   private static Figure crest(HarmonicFit fit) {

@@ -8,6 +8,7 @@ import fourthwire.quantity.ThreePhasePower;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 
 /**
  * Powers of a capture (IEEE 1459-2010): rms totals and active power from the samples, so that what
@@ -31,7 +32,11 @@ record CapturePower(PowerFigures total, String basis, Map<Conductor, PowerFigure
     if (byLine.size() == 3) {
       return new CapturePower(
           fourWire(fits, neutral, byLine),
-          "Effective three-phase power, four wires (IEEE 1459-2010, 3.2.3).",
+          "Effective three-phase power, four wires (IEEE 1459-2010, 3.2.3), "
+              + (neutral.isMeasured()
+                  ? "the neutral current as measured."
+                  : "without the neutral: its current was not measured, the sum of the lines is no"
+                      + " measurement of it."),
           figures);
     }
     if (lines.size() == 3 && Fits.PAIRS.stream().allMatch(p -> fits.find(p + ".v").isPresent())) {
@@ -59,15 +64,16 @@ record CapturePower(PowerFigures total, String basis, Map<Conductor, PowerFigure
 
   private static PowerFigures fourWire(
       Fits fits, Neutral neutral, Map<Conductor, LinePower> byLine) {
-    HarmonicFit n = neutral.fit().orElseThrow();
+    Optional<HarmonicFit> n = neutral.fit().filter(fit -> neutral.isMeasured());
     List<HarmonicFit> v = Fits.LINES.stream().map(l -> fits.voltage(l).orElseThrow()).toList();
     List<HarmonicFit> i = Fits.LINES.stream().map(l -> fits.current(l).orElseThrow()).toList();
     List<HarmonicFit> u = Fits.PAIRS.stream().map(p -> fits.find(p + ".v").orElseThrow()).toList();
     ThreePhasePower orders =
-        ThreePhasePower.fourWire(spectra(fits, v), spectra(fits, i), fits.spectrum(n));
+        ThreePhasePower.fourWire(
+            spectra(fits, v), spectra(fits, i), n.map(fits::spectrum).orElse(Spectrum.ZERO));
     double p = byLine.values().stream().mapToDouble(LinePower::activeW).sum();
     double ve = Math.sqrt((3 * squares(v) + squares(u)) / 18);
-    double ie = Math.sqrt((squares(i) + squares(List.of(n))) / 3);
+    double ie = Math.sqrt((squares(i) + squares(n.stream().toList())) / 3);
     return withTotals(orders, p, ve, ie);
   }
 

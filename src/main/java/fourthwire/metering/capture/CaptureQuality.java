@@ -9,6 +9,7 @@ import static fourthwire.metering.QualityFinding.REVERSED_CLAMP;
 import static fourthwire.metering.QualityFinding.SHORT_RECORD;
 import static fourthwire.metering.QualityFinding.SWAPPED_LINES;
 
+import fourthwire.metering.Amount;
 import fourthwire.metering.QualityFinding;
 import fourthwire.quantity.Conductor;
 import fourthwire.quantity.Phasor;
@@ -67,6 +68,10 @@ final class CaptureQuality {
 
   private String name(String quantity) {
     return capture.nameOf(quantity).orElse(quantity);
+  }
+
+  private static String amount(Capture.Channel channel, double value) {
+    return Amount.of(value, Amount.unit(channel.quantity()));
   }
 
   private void neutralChannel() {
@@ -151,11 +156,12 @@ final class CaptureQuality {
     add(
         REVERSED_CLAMP,
         "Power, power factor and the sum of the lines are wrong until its sign is turned.",
-        "The current of %s (channel %s) runs against its voltage, active power %.0f W: its clamp"
+        "The current of %s (channel %s) runs against its voltage, active power %s: its clamp"
             + " points the wrong way, or this line feeds power back.",
         line,
         name(line + ".i"),
-        fits.voltage(line).orElseThrow().activePower(fits.current(line).orElseThrow()));
+        Amount.of(
+            fits.voltage(line).orElseThrow().activePower(fits.current(line).orElseThrow()), "W"));
   }
 
   private void missing(Capture.Channel channel, double[] x) {
@@ -184,9 +190,9 @@ final class CaptureQuality {
     add(
         FLAT_LINE,
         "Its figures are of a channel that was not connected.",
-        "Channel %s reads %.4g in every sample.",
+        "Channel %s reads %s in every sample.",
         channel.name(),
-        first);
+        amount(channel, first));
     return true;
   }
 
@@ -208,10 +214,10 @@ final class CaptureQuality {
       add(
           CLIPPED,
           "Peaks are cut off: rms reads low and the odd orders high.",
-          "Channel %s stands still at %.4g or %.4g for %d samples or more, %d times.",
+          "Channel %s stands still at %s or %s for %d samples or more, %d times.",
           channel.name(),
-          highest,
-          lowest,
+          amount(channel, highest),
+          amount(channel, lowest),
           length,
           runs);
     }
@@ -240,9 +246,9 @@ final class CaptureQuality {
       add(
           DIRECT_COMPONENT,
           "It is left out of rms and power.",
-          "Channel %s has a direct component of %.3g, %.1f %% of its alternating rms.",
+          "Channel %s has a direct component of %s, %.1f %% of its alternating rms.",
           channel.name(),
-          fit.direct(),
+          amount(channel, fit.direct()),
           100 * Math.abs(fit.direct()) / fit.alternatingRms());
     }
   }

@@ -41,6 +41,11 @@ record Neutral(
     return new Neutral(own ? channel : sum, channel, agreement, basis(channel, sum, agreement));
   }
 
+  /** Whether its current was measured: a clamp that only points the wrong way did measure it. */
+  boolean isMeasured() {
+    return channel.isPresent() && agreement != Agreement.DIFFERENT;
+  }
+
   private static Agreement compare(HarmonicFit channel, HarmonicFit sum, double meanLineA) {
     double allowed =
         OF_SUM * Math.max(sum.alternatingRms(), channel.alternatingRms()) + OF_LINE * meanLineA;

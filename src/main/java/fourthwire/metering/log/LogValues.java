@@ -4,6 +4,7 @@ import static fourthwire.metering.QualityFinding.FLAT_LINE;
 import static fourthwire.metering.QualityFinding.IMPOSSIBLE_VALUE;
 import static fourthwire.metering.QualityFinding.MISSING_VALUES;
 
+import fourthwire.metering.Amount;
 import fourthwire.metering.Period;
 import fourthwire.metering.QualityFinding;
 import java.time.Instant;
@@ -86,12 +87,8 @@ final class LogValues {
               quantity,
               count,
               count == 1 ? "value" : "values",
-              number(x[first])));
+              Amount.read(x[first], quantity)));
     }
-  }
-
-  private static String number(double x) {
-    return Math.rint(x) == x && Math.abs(x) < 1e15 ? Long.toString((long) x) : Double.toString(x);
   }
 
   private DoublePredicate possible(String quantity, double[] x) {
@@ -151,7 +148,11 @@ final class LogValues {
           to,
           "The instrument repeated its last value: nothing is known of this time.",
           String.format(
-              Locale.ROOT, "%s stands still at %s for %d rows.", quantity, number(x[from]), rows));
+              Locale.ROOT,
+              "%s stands still at %s for %d rows.",
+              quantity,
+              Amount.read(x[from], quantity),
+              rows));
     }
   }
 

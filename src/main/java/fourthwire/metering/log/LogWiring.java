@@ -4,6 +4,7 @@ import static fourthwire.metering.QualityFinding.NEUTRAL_NOT_SUM;
 import static fourthwire.metering.QualityFinding.REVERSED_CLAMP;
 import static fourthwire.metering.QualityFinding.WRONG_RATIO;
 
+import fourthwire.metering.Amount;
 import fourthwire.metering.QualityFinding;
 import java.util.ArrayList;
 import java.util.List;
@@ -50,11 +51,11 @@ final class LogWiring {
               + " turned.",
           negative.size() == lines.size() && lines.size() > 1
               ? "Active power of %s is negative in most rows, as on all lines: all clamps point the"
-                  + " wrong way, or the site feeds power back. Median %.0f W."
-              : "Active power of %s is negative in most rows, median %.0f W: its clamp points the"
+                  + " wrong way, or the site feeds power back. Median %s."
+              : "Active power of %s is negative in most rows, median %s: its clamp points the"
                   + " wrong way, or this line feeds power back.",
           line,
-          Statistics.median(log.values(line + ".active_w")));
+          Amount.of(Statistics.median(log.values(line + ".active_w")), "W"));
     }
   }
 

@@ -16,9 +16,11 @@ import java.util.Set;
 /**
  * Whether circuits hang on panels that have their conductors.
  *
- * <p>A panel with fewer lines than its parent names its own lines L1, L2 by position. Where a panel
- * has a circuit that fits only the parent's names, and all its circuits fit those, the circuits are
- * read by the parent's names, with a warning.
+ * <p>A panel with fewer lines than its parent names its own lines L1, L2 by position, and a circuit
+ * that names those is on them, whatever its neighbours say. A circuit that names a line the panel
+ * has not, but its parent feeds it from, is read as on that line, with a warning. Where both occur
+ * and the first would be another conductor in the parent's names, it is open what the author meant:
+ * one error for the panel.
  */
 final class CircuitCheck {
   private final SurveyDraft draft;
@@ -66,29 +68,34 @@ final class CircuitCheck {
   }
 
   private void checkLines(String panel, Wiring wiring, List<DraftRow<Circuit>> rows) {
-    boolean allOwn = rows.stream().allMatch(r -> fits(r, wiring));
-    if (allOwn) {
+    Map<DraftRow<Circuit>, Lines> renamed = new LinkedHashMap<>();
+    for (DraftRow<Circuit> row : rows) {
+      if (!fits(row, wiring)) {
+        byParentsNames(wiring, row.content().lines())
+            .ifPresentOrElse(own -> renamed.put(row, own), () -> report(row, panel, wiring));
+      }
+    }
+    List<DraftRow<Circuit>> otherwise =
+        rows.stream().filter(r -> fits(r, wiring) && isAnotherByParent(r, wiring)).toList();
+    if (!renamed.isEmpty() && !otherwise.isEmpty()) {
+      reportTwoNamings(panel, wiring, renamed.keySet().iterator().next(), otherwise.get(0));
       return;
     }
-    Map<Integer, Lines> renamed = byParentsNames(wiring, rows);
-    if (renamed.size() == rows.size()) {
-      ownLines.putAll(renamed);
-      warnOfParentsNames(panel, wiring, rows);
-      return;
-    }
-    rows.stream().filter(r -> !fits(r, wiring)).forEach(r -> report(r, panel, wiring));
+    renamed.forEach(
+        (row, own) -> {
+          ownLines.put(row.row(), own);
+          warnOfParentsNames(row, panel, own);
+        });
   }
 
   private static boolean fits(DraftRow<Circuit> row, Wiring wiring) {
     return wiring.conductors().containsAll(row.content().lines().conductors());
   }
 
-  private static Map<Integer, Lines> byParentsNames(Wiring wiring, List<DraftRow<Circuit>> rows) {
-    Map<Integer, Lines> renamed = new HashMap<>();
-    for (DraftRow<Circuit> row : rows) {
-      byParentsNames(wiring, row.content().lines()).ifPresent(l -> renamed.put(row.row(), l));
-    }
-    return renamed;
+  /** Whether the lines it names as the panel's own are others than the parent's of these names. */
+  private static boolean isAnotherByParent(DraftRow<Circuit> row, Wiring wiring) {
+    return row.content().lines().lines().stream()
+        .anyMatch(l -> wiring.parentLines().get(wiring.lines().indexOf(l)) != l);
   }
 
   private static Optional<Lines> byParentsNames(Wiring wiring, Lines lines) {
@@ -109,12 +116,28 @@ final class CircuitCheck {
     return a.size() == b.size() && a.containsAll(b);
   }
 
-  private void warnOfParentsNames(String panel, Wiring wiring, List<DraftRow<Circuit>> rows) {
+  private void warnOfParentsNames(DraftRow<Circuit> row, String panel, Lines own) {
     remarks.warning(
-        rows.get(0),
-        ("the circuits of panel \"%s\" name the lines %s of its parent; they are read as the panel's"
-                + " own lines %s.")
-            .formatted(panel, Wiring.words(wiring.parentLines()), Wiring.words(wiring.lines())));
+        row,
+        "panel \"%s\" has no %s of its own; read as that of its parent, the panel's own %s."
+            .formatted(panel, row.content().lines().word(), own.word()));
+  }
+
+  private void reportTwoNamings(
+      String panel, Wiring wiring, DraftRow<Circuit> byParent, DraftRow<Circuit> byOwn) {
+    remarks.error(
+        byParent,
+        "lines",
+        ("Panel \"%s\" calls its lines %s, fed from %s of its parent. This circuit is named by the"
+                + " parent's lines, and %s says %s, which is another conductor in each naming. Use"
+                + " one naming: the panel's own %s on all its circuits.")
+            .formatted(
+                panel,
+                Wiring.words(wiring.lines()),
+                Wiring.words(wiring.parentLines()),
+                byOwn.place(),
+                byOwn.content().lines().word(),
+                Wiring.words(wiring.lines())));
   }
 
   private void report(DraftRow<Circuit> row, String panel, Wiring wiring) {

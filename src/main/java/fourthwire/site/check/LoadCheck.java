@@ -53,6 +53,9 @@ final class LoadCheck {
 
   void check() {
     table.rows().forEach(this::check);
+    if (table.rows().isEmpty() && table.state() != DraftTable.State.UNREADABLE) {
+      remarks.warning("no loads: nothing will flow.");
+    }
   }
 
   private void check(DraftRow<Load> row) {
@@ -125,16 +128,15 @@ final class LoadCheck {
     if (spectra.has(spectrum)) {
       return Optional.of(LoadKind.MEASURED);
     }
-    boolean noTable = spectraTable.state() == DraftTable.State.ABSENT;
-    if (!spectraTable.mayHide(SPECTRUM)) {
+    if (spectraTable.state() == DraftTable.State.ABSENT) {
+      remarks.missingTable("spectra", row, SPECTRUM, "");
+    } else if (!spectraTable.mayHide(SPECTRUM)) {
       remarks.error(
-          noTable ? "table spectra" : "spectrum " + spectrum,
+          "spectrum " + spectrum,
           row,
           SPECTRUM,
-          noTable
-              ? "No spectrum is called \"%s\"; there is no table of spectra.".formatted(spectrum)
-              : "No spectrum is called \"%s\".".formatted(spectrum)
-                  + Closest.hint(spectrum, spectra.names()));
+          "No spectrum is called \"%s\".".formatted(spectrum)
+              + Closest.hint(spectrum, spectra.names()));
     }
     return Optional.empty();
   }
@@ -192,13 +194,15 @@ final class LoadCheck {
         || scheduleTable.mayHide(SCHEDULE)) {
       return;
     }
-    boolean noTable = scheduleTable.state() == DraftTable.State.ABSENT;
+    if (scheduleTable.state() == DraftTable.State.ABSENT) {
+      remarks.missingTable("schedules", row, SCHEDULE, "");
+      return;
+    }
     remarks.error(
-        noTable ? "table schedules" : "schedule " + schedule.get(),
+        "schedule " + schedule.get(),
         row,
         SCHEDULE,
-        "No schedule is called \"%s\"%s."
-                .formatted(schedule.get(), noTable ? "; there is no table of schedules" : "")
+        "No schedule is called \"%s\".".formatted(schedule.get())
             + Closest.hint(schedule.get(), schedules.names()));
   }
 

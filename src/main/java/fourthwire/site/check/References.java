@@ -6,7 +6,7 @@ import java.util.Optional;
 
 /** Checks the cells that refer to circuits, or to any node, of the site. */
 final class References {
-  private static final String NO_CIRCUITS = "table circuits";
+  private static final String CIRCUITS = "circuits";
 
   private final SurveyDraft draft;
   private final NodeIndex nodes;
@@ -32,6 +32,18 @@ final class References {
    */
   Optional<DraftRow<Circuit>> circuit(DraftRow<?> row, String text, String panel) {
     List<DraftRow<Circuit>> found = circuits.matching(text, panel);
+    if (draft.circuits().state() == DraftTable.State.ABSENT) {
+      remarks.missingTable(CIRCUITS, row, "circuit", "");
+      return Optional.empty();
+    }
+    if (draft.circuits().state() == DraftTable.State.PRESENT && draft.circuits().rows().isEmpty()) {
+      remarks.error(
+          "no circuits",
+          row,
+          "circuit",
+          "No circuit is called \"%s\": the table circuits has no rows.".formatted(text));
+      return Optional.empty();
+    }
     if (found.size() == 1) {
       return Optional.of(found.get(0));
     }
@@ -91,14 +103,14 @@ final class References {
     if (circuitsHidden || isOnLostPanel(text)) {
       return;
     }
-    boolean noTable =
-        draft.circuits().state() == DraftTable.State.ABSENT
-            && (cause.startsWith("circuit ") || remarks.has(NO_CIRCUITS));
-    remarks.error(
-        noTable ? NO_CIRCUITS : cause,
-        row,
-        column,
-        noTable ? message + " There is no table of circuits." : message);
+    boolean ofCircuits =
+        cause.startsWith("circuit ")
+            || cause.startsWith("node ") && remarks.isMissingTable(CIRCUITS);
+    if (draft.circuits().state() == DraftTable.State.ABSENT && ofCircuits) {
+      remarks.missingTable(CIRCUITS, row, column, "");
+    } else {
+      remarks.error(cause, row, column, message);
+    }
   }
 
   /** Whether a circuit of this name hangs on a panel that is itself reported as missing. */

@@ -11,6 +11,9 @@ import java.util.stream.Collectors;
  * at the first of their rows, naming the others.
  */
 final class Remarks {
+  /** Begins the cause of a table that is not there; its name follows. */
+  static final String MISSING_TABLE = "table ";
+
   private static final int PLACES_NAMED = 10;
 
   private final List<SurveyError> errors = new ArrayList<>();
@@ -34,9 +37,22 @@ final class Remarks {
         .add(new Placed(row, row.error(column, message)));
   }
 
-  /** Whether an error of this cause was reported. */
-  boolean has(String cause) {
+  private boolean has(String cause) {
     return byCause.containsKey(cause);
+  }
+
+  /** An error of a whole table that is not there, one with every other row that needs it. */
+  void missingTable(String table, DraftRow<?> row, String column, String hint) {
+    error(MISSING_TABLE + table, row, column, hint);
+  }
+
+  /** Whether a table was reported as missing. */
+  boolean isMissingTable(String table) {
+    return has(MISSING_TABLE + table);
+  }
+
+  void warning(String warning) {
+    warnings.add(warning);
   }
 
   void warning(DraftRow<?> row, String message) {
@@ -45,12 +61,37 @@ final class Remarks {
 
   List<SurveyError> errors() {
     List<SurveyError> all = new ArrayList<>(errors);
-    byCause.values().forEach(placed -> all.add(together(placed)));
+    byCause.forEach(
+        (cause, placed) ->
+            all.add(
+                cause.startsWith(MISSING_TABLE)
+                    ? missing(cause.substring(MISSING_TABLE.length()), placed)
+                    : together(placed)));
     return all;
   }
 
   List<String> warnings() {
     return List.copyOf(warnings);
+  }
+
+  private static SurveyError missing(String table, List<Placed> placed) {
+    String rows =
+        placed.stream()
+            .limit(PLACES_NAMED)
+            .map(p -> "%s (\"%s\")".formatted(p.row.place(), p.error.value()))
+            .distinct()
+            .collect(Collectors.joining(", "));
+    String more =
+        placed.size() > PLACES_NAMED
+            ? " and %d more".formatted(placed.size() - PLACES_NAMED)
+            : "";
+    return SurveyError.ofTable(
+        table,
+        "The table is missing, and it is needed by "
+            + rows
+            + more
+            + "."
+            + placed.get(0).error.message());
   }
 
   private static SurveyError together(List<Placed> placed) {

@@ -21,6 +21,7 @@ import java.util.stream.Collectors;
  */
 final class TreeCheck {
   private static final String FED_FROM = "fed_from";
+  private static final String TRANSFORMERS = "transformers";
 
   private final SurveyDraft draft;
   private final NodeIndex nodes;
@@ -84,6 +85,13 @@ final class TreeCheck {
       return;
     }
     boolean noTransformers = draft.transformers().state() == DraftTable.State.ABSENT;
+    String hint = Closest.hint(fedFrom, nodes.names());
+    boolean slip = fedFrom.length() > 2 && !hint.isEmpty();
+    if (noTransformers && !slip && circuits.matching(fedFrom).isEmpty() && !hangsOnASupply()) {
+      nodes.missingBecause(fedFrom, Remarks.MISSING_TABLE + TRANSFORMERS);
+      remarks.missingTable(TRANSFORMERS, row, FED_FROM, "");
+      return;
+    }
     String why =
         !circuits.matching(fedFrom).isEmpty()
             ? "\"%s\" is a circuit; transformers and panels are fed from a supply, a transformer or"
@@ -91,14 +99,17 @@ final class TreeCheck {
             : noTransformers
                 ? "No supply or panel is called \"%s\", and there is no table of transformers."
                 : "No supply, transformer or panel is called \"%s\".";
-    if (noTransformers) {
-      nodes.missingBecause(fedFrom, "table transformers");
-    }
     remarks.error(
         nodes.missing(fedFrom),
         row,
         FED_FROM,
-        why.formatted(fedFrom) + Closest.hint(fedFrom, nodes.names()));
+        why.formatted(fedFrom) + hint);
+  }
+
+  /** A site that needs no transformer has its main panel on the supply. */
+  private boolean hangsOnASupply() {
+    return draft.panels().rows().stream()
+        .anyMatch(r -> r.sound(FED_FROM) && nodes.supply(r.content().fedFrom()).isPresent());
   }
 
   private void reportLoops() {

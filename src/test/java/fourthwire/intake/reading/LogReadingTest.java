@@ -7,13 +7,24 @@ import static org.assertj.core.api.Assertions.within;
 import fourthwire.metering.QualityFinding;
 import fourthwire.metering.Reading;
 import fourthwire.metering.ReadingKind;
+import fourthwire.metering.ReadingMapping;
+import java.io.ByteArrayOutputStream;
+import java.io.IOException;
 import java.nio.charset.StandardCharsets;
 import java.time.Duration;
 import java.time.Instant;
+import java.time.LocalDateTime;
+import java.time.ZoneId;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import org.dhatim.fastexcel.Workbook;
+import org.dhatim.fastexcel.Worksheet;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvSource;
+import org.junit.jupiter.params.provider.ValueSource;
 
 /** Interval logs as CSV: layouts, times, refusals. The expected figures are those typed in. */
 class LogReadingTest {
@@ -206,5 +217,93 @@ class LogReadingTest {
     assertThatThrownBy(() -> read("nothing here"))
         .isInstanceOf(ReadingRefusedException.class)
         .hasMessageContaining("No table was found");
+  }
+
+  private static ReadingSetting told(ReadingMapping mapping) {
+    return new ReadingSetting(
+        Optional.of(ZoneId.of("Europe/Amsterdam")),
+        50,
+        Optional.of(mapping),
+        l -> Optional.empty(),
+        List.of(),
+        OptionalDouble.empty());
+  }
+
+  private static ReadingMapping mapping(String column, double factor, Optional<String> format) {
+    return new ReadingMapping(
+        Optional.empty(),
+        new ReadingMapping.Time(
+            List.of(), format, Optional.empty(), Optional.empty(), OptionalDouble.empty()),
+        OptionalDouble.empty(),
+        Map.of(
+            column, new ReadingMapping.Column("L1.rms_a", ReadingMapping.Statistic.MEAN, factor)));
+  }
+
+  @ParameterizedTest
+  @ValueSource(strings = {"I L1", "I L1 [A]"})
+  void aColumnWithAUnitBelowIsNamedWithOrWithoutIt(String name) {
+    String text = "Time,I L1,U L1\n,A,V\n2025-01-01 00:00,10,230\n2025-01-01 00:10,20,231\n";
+    ReadingMapping mapping = mapping(name, 1, Optional.empty());
+    Reading r = read(text.getBytes(StandardCharsets.UTF_8), told(mapping));
+    assertThat(mean(r, "L1.rms_a")).isEqualTo(15);
+    assertThat(r.log().orElseThrow().quantities()).containsOnlyKeys("L1.rms_a");
+  }
+
+  @ParameterizedTest
+  @ValueSource(doubles = {0, -1, Double.NaN, Double.POSITIVE_INFINITY})
+  void aFactorThatIsNotAboveZeroIsRefused(double factor) {
+    ReadingRefusedException e =
+        refusal(
+            "Time,I L1 (A)\n2025-01-01 00:00,10\n2025-01-01 00:10,20\n",
+            told(mapping("I L1 (A)", factor, Optional.empty())));
+    assertThat(e.questions())
+        .singleElement()
+        .satisfies(q -> assertThat(q.part()).isEqualTo("columns.I L1 (A).factor"))
+        .satisfies(q -> assertThat(q.message()).contains("ct_reversed"));
+  }
+
+  @ParameterizedTest
+  @CsvSource({
+    "2025-01-13 00:00, 2025-01-13 00:10, dd/MM/yyyy HH:mm",
+    "01/13/2025 00:00, 01/13/2025 00:10, dd/MM/yyyy",
+    "13.01.2025 00:00, 13.01.2025 00:10, MM/dd/yyyy",
+    "13.01.2025 00:00, 13.01.2025 00:10, yyyy-MM-dd"
+  })
+  void aFormatThatContradictsTheFileIsAsked(String first, String second, String format) {
+    String text = "Time,I L1 (A)\n" + first + ",10\n" + second + ",20\n";
+    ReadingMapping mapping = mapping("I L1 (A)", 1, Optional.of(format));
+    ReadingRefusedException e = refusal(text, told(mapping));
+    assertThat(e.columns()).containsExactly("Time", "I L1 (A)");
+    assertThat(e.questions()).extracting("part").containsExactly("time.format");
+    ReadingSetting remembered =
+        new ReadingSetting(
+            Optional.of(ZoneId.of("Europe/Amsterdam")),
+            50,
+            Optional.empty(),
+            l -> Optional.of(mapping),
+            List.of(),
+            OptionalDouble.empty());
+    assertThat(refusal(text, remembered).questions()).hasSize(1);
+  }
+
+  @Test
+  void theSheetOfAWorkbookIsReadAsATable() throws IOException {
+    ByteArrayOutputStream bytes = new ByteArrayOutputStream();
+    try (Workbook workbook = new Workbook(bytes, "test", null)) {
+      Worksheet sheet = workbook.newWorksheet("log");
+      sheet.value(0, 0, "Meter, main");
+      sheet.value(2, 0, "Time");
+      sheet.value(2, 1, "I L1 (A)");
+      for (int k = 0; k < 3; k++) {
+        sheet.value(3 + k, 0, LocalDateTime.of(2025, 2, 1, 0, 10 * k));
+        sheet.style(3 + k, 0).format("dd/mm/yyyy hh:mm").set();
+        sheet.value(3 + k, 1, 10.5 + k);
+      }
+    }
+    Reading r = read(bytes.toByteArray(), Files.setting(50));
+    assertThat(mean(r, "L1.rms_a")).isEqualTo(11.5);
+    assertThat(r.log().orElseThrow().interval()).isEqualTo(Duration.ofMinutes(10));
+    assertThat(r.period().orElseThrow().from()).isEqualTo(Instant.parse("2025-01-31T23:00:00Z"));
+    assertThat(r.notes()).anySatisfy(n -> assertThat(n).contains("row 4"));
   }
 }

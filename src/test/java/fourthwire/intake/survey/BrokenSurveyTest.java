@@ -3,7 +3,14 @@ package fourthwire.intake.survey;
 import static org.assertj.core.api.Assertions.assertThat;
 
 import fourthwire.site.check.SurveyError;
+import fourthwire.site.Lines;
+import java.io.ByteArrayOutputStream;
+import java.io.IOException;
 import java.nio.charset.StandardCharsets;
+import java.time.LocalDateTime;
+import org.dhatim.fastexcel.Workbook;
+import org.dhatim.fastexcel.Worksheet;
+import org.junit.jupiter.params.provider.ValueSource;
 import java.util.List;
 import java.util.function.Consumer;
 import java.util.stream.Stream;
@@ -84,6 +91,8 @@ class BrokenSurveyTest {
         cell("transformers", 3, "primary_v", "230", "within 5 %"),
         cell("panels", 2, "panel", "M/SB", "/ and :"),
         cell("panels", 3, "panel", "LP:1", "/ and :"),
+        cell("panels", 3, "panel", ".", "folders"),
+        cell("panels", 3, "panel", "..", "folders"),
         cell("panels", 3, "panel", "", "required"),
         cell("panels", 4, "panel", "LP-1", "already"),
         cell("panels", 3, "panel", "T1", "already"),
@@ -218,10 +227,41 @@ class BrokenSurveyTest {
         of("site", 0, "", "", "missing", k -> k.removeTable("site")),
         of("supplies", 0, "", "", "missing", k -> k.removeTable("supplies")),
         of("panels", 0, "", "", "missing", k -> k.removeTable("panels")),
-        of("loads", 2, "circuit", "LP-1:1", "table of circuits", k -> k.removeTable("circuits")),
-        of("loads", 4, "spectrum", "led", "table of spectra", k -> k.removeTable("spectra")),
-        of("loads", 2, "schedule", "office", "table of sched", k -> k.removeTable("schedules")),
-        of("panels", 2, "fed_from", "T1", "transformers", k -> k.removeTable("transformers")),
+        of("circuits", 0, "", "", "loads row 2 (\"LP-1:1\")", k -> k.removeTable("circuits")),
+        of("spectra", 0, "", "", "loads row 4", k -> k.removeTable("spectra")),
+        of("schedules", 0, "", "", "loads row 3", k -> k.removeTable("schedules")),
+        of("transformers", 0, "", "", "panels row 2", k -> k.removeTable("transformers")),
+        of(
+            "loads",
+            2,
+            "circuit",
+            "LP-1:1",
+            "loads row 9",
+            k ->
+                k.removeTable("circuits")
+                    .removeTable("meters")
+                    .removeTable("spot_readings")
+                    .file("circuits.csv", "circuit,panel,lines\n")),
+        of("panels", 0, "", "", "file is empty", k -> k.file("panels.csv", "\n\n")),
+        of(
+            "capacitors",
+            0,
+            "",
+            "",
+            "1001 columns",
+            k -> k.file("capacitors.csv", "capacitor,panel,kvar" + ",x".repeat(998) + "\n")),
+        of(
+            "circuits",
+            10,
+            "lines",
+            "L3",
+            "one naming",
+            k ->
+                k.append("panels", "LP-4,MSB,single-phase,L2-L3,,,,,,,")
+                    .set("panels", 7, "system", "split-phase")
+                    .append("circuits", "1,LP-4,L3,16,,,,")
+                    .append("circuits", "2,LP-4,L2,16,,,,")
+                    .append("circuits", "3,LP-4,L3,16,,,,")),
         of("site", 0, "key", "", "frequency_hz", k -> k.removeRow("site", 3)),
         of("site", 9, "key", "name", "row 2", k -> k.append("site", "name,Other house")),
         of("site", 1, "value", "", "missing", k -> k.removeColumn("site", "value")),
@@ -391,5 +431,86 @@ class BrokenSurveyTest {
         .as(error.message())
         .isEqualTo(List.of(expected.table(), expected.row(), expected.column(), expected.value()));
     assertThat(error.message()).containsIgnoringCase(expected.message());
+  }
+
+  private static SurveyImport.Read accepted(byte[] file) {
+    SurveyImport.Outcome outcome = SurveyImport.read(file);
+    assertThat(outcome).isInstanceOf(SurveyImport.Read.class);
+    return (SurveyImport.Read) outcome;
+  }
+
+  /** LP-2 is fed by L3 alone and calls it L1; what its neighbours say changes nothing. */
+  @Test
+  void aLineOfTheParentIsReadAsTheOwnLineItFeedsAndSaidSo() {
+    SurveyKit kit =
+        new SurveyKit().set("circuits", 6, "lines", "L3");
+    SurveyImport.Read read = accepted(kit.zip());
+    assertThat(read.survey().circuits().get(4).lines()).isEqualTo(Lines.L1);
+    assertThat(read.warnings())
+        .anySatisfy(w -> assertThat(w).contains("circuits row 6", "LP-2", "L3", "own L1"));
+  }
+
+  /** Fed by L1 and L3 with own names L1 and L2: L1 is L1 in both, L3 is the parent's only. */
+  @Test
+  void namesThatMeanTheSameInBothReadingsDoNotContradict() {
+    SurveyKit kit =
+        new SurveyKit()
+            .append("panels", "LP-4,MSB,split-phase,L1-L3,,,,,,,")
+            .append("circuits", "1,LP-4,L1,16,,,,")
+            .append("circuits", "2,LP-4,L3,16,,,,");
+    SurveyImport.Read read = accepted(kit.zip());
+    assertThat(read.survey().circuits().get(8).lines()).isEqualTo(Lines.L1);
+    assertThat(read.survey().circuits().get(9).lines()).isEqualTo(Lines.L2);
+    assertThat(accepted(kit.set("circuits", 11, "lines", "L2").zip()).warnings())
+        .noneSatisfy(w -> assertThat(w).contains("LP-4"));
+  }
+
+  @Test
+  void aSurveyWithoutLoadsIsAcceptedWithAWarning() {
+    assertThat(accepted(new SurveyKit().removeTable("loads").zip()).warnings())
+        .contains("no loads: nothing will flow.");
+  }
+
+  @Test
+  void unknownColumnsAreNamedUpToTwenty() {
+    SurveyKit kit = new SurveyKit();
+    for (int k = 0; k < 100; k++) {
+      kit.set("capacitors", 2, "odd" + k, "1");
+    }
+    assertThat(accepted(kit.zip()).warnings())
+        .hasSize(21)
+        .last()
+        .asString()
+        .contains("capacitors: and 80 more");
+  }
+
+  /** Vienna stands at UTC+1 on 10 March. */
+  @ParameterizedTest
+  @ValueSource(
+      strings = {"2026-03-10T10:15", "2026-03-10 09:15Z", "2026-03-10T04:15-05:00", "2026-03-10 10:15:00 +01:00"})
+  void aTimeWithItsOffsetIsPutIntoLocalTime(String time) {
+    SurveyImport.Read read = accepted(new SurveyKit().set("spot_readings", 2, "time", time).zip());
+    assertThat(read.survey().spotReadings().get(0).time())
+        .contains(LocalDateTime.of(2026, 3, 10, 10, 15));
+  }
+
+  @Test
+  void aBooleanInAWorkbookIsNoNumber() throws IOException {
+    ByteArrayOutputStream bytes = new ByteArrayOutputStream();
+    try (Workbook workbook = new Workbook(bytes, "test", null)) {
+      Worksheet sheet = workbook.newWorksheet("supplies");
+      sheet.value(0, 0, "supply");
+      sheet.value(0, 1, "line_voltage_v");
+      sheet.value(1, 0, "GRID");
+      sheet.value(1, 1, true);
+    }
+    SurveyImport.Outcome outcome = SurveyImport.read(bytes.toByteArray());
+    assertThat(((SurveyImport.Refused) outcome).errors())
+        .anySatisfy(
+            e -> {
+              assertThat(e.column()).isEqualTo("line_voltage_v");
+              assertThat(e.value()).isEqualTo("TRUE");
+              assertThat(e.message()).contains("not a number");
+            });
   }
 }

@@ -183,6 +183,46 @@ class CaptureAnalysisTest {
         .containsExactly(QualityFinding.NEUTRAL_NOT_SUM);
   }
 
+  /** IEEE 1459-2010, 3.2.3.1: Ie² = (ΣI² + In²)/3; without a measured neutral In does not count. */
+  @Test
+  void onlyAMeasuredNeutralCountsInTheApparentPower() {
+    Map<String, DoubleUnaryOperator> s = threePhase(20);
+    double lines = 3 * 64 + 20 * 20 + 21 * 21 + 22 * 22;
+    double neutral = 24 * 24 + 3;
+    CaptureResult derived = result(capture(12800, 0.4, s), 50);
+    assertThat(value(derived.power().apparentVa()))
+        .isEqualTo(3 * 230 * Math.sqrt(lines / 3), within(1e-4));
+    assertThat(derived.powerBasis()).contains("was not measured");
+    s.put("N.i", sum(s.get("L1.i"), s.get("L2.i"), s.get("L3.i")));
+    CaptureResult measured = result(capture(12800, 0.4, s), 50);
+    assertThat(value(measured.power().apparentVa()))
+        .isEqualTo(3 * 230 * Math.sqrt((lines + neutral) / 3), within(1e-4));
+    assertThat(measured.powerBasis()).contains("as measured");
+  }
+
+  @Test
+  void distortionOnAVanishingFundamentalIsNotGiven() {
+    Map<String, DoubleUnaryOperator> s = threePhase(20);
+    s.put("N.v", sum(sine(0.004, 50, 0), sine(0.012, 150, 0)));
+    CaptureResult r = result(capture(12800, 0.4, s), 50);
+    assertThat(r.voltage().get("N").thdPercent().value()).isEmpty();
+    assertThat(r.voltage().get("N").thdPercent().reason()).contains("0.1 %");
+    assertThat(r.voltage().get("L1").thdPercent().value()).isPresent();
+    assertThat(value(r.current().get(Conductor.N).thdPercent()))
+        .isEqualTo(2400 / Math.sqrt(3), within(1e-3));
+  }
+
+  @Test
+  void sentencesCarryUnitsAndAMinusSign() {
+    Map<String, DoubleUnaryOperator> s = threePhase(20);
+    DoubleUnaryOperator second = s.get("L2.i");
+    s.put("L2.i", t -> -second.applyAsDouble(t) - 1);
+    assertThat(CaptureAnalysis.of(capture(12800, 0.4, s), 50, List.of()).quality())
+        .extracting(QualityFinding::sentence)
+        .anySatisfy(x -> assertThat(x).contains("active power \u2212").contains(" W:"))
+        .anySatisfy(x -> assertThat(x).contains("direct component of \u22121 A"));
+  }
+
   @Test
   void reversedClampsAndExchangedLinesAreNamed() {
     Map<String, DoubleUnaryOperator> s = threePhase(20);

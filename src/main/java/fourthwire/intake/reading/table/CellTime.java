@@ -184,6 +184,11 @@ record CellTime(
     }
   }
 
+  /** Whether it is a date in this order, and not plainly written in another. */
+  boolean fits(DateOrder order) {
+    return (!yearFirst || order == DateOrder.YEAR_MONTH_DAY) && local(order).isPresent();
+  }
+
   /** Whether the order of its date is plain from the cell alone. */
   boolean plain() {
     return yearFirst || monthNamed;

@@ -12,10 +12,16 @@ import java.util.regex.Pattern;
  *
  * @param separator between cells
  * @param decimalComma whether numbers have a comma for their decimal mark
- * @param headings of the columns, each once
+ * @param headings of the columns, each once, a row of units joined to them
+ * @param written the same as the header row alone writes them
  * @param firstData row the values begin in, the first of the file being 1
  */
-record Dialect(char separator, boolean decimalComma, List<String> headings, long firstData) {
+record Dialect(
+    char separator,
+    boolean decimalComma,
+    List<String> headings,
+    List<String> written,
+    long firstData) {
   private static final char[] SEPARATORS = {',', ';', '\t', '|'};
   private static final Pattern NUMBER =
       Pattern.compile("[+-]?(\\d+([.,]\\d+)*|[.,]\\d+)([eE][+-]?\\d+)?\\s*%?");
@@ -84,6 +90,7 @@ record Dialect(char separator, boolean decimalComma, List<String> headings, long
         separator,
         separator != ',' && decimalComma(lines.subList(first, lines.size())),
         distinct(units ? joined(lines.get(first - 2).cells(), above) : above),
+        distinct(units ? lines.get(first - 2).cells() : above),
         lines.get(first).row());
   }
 

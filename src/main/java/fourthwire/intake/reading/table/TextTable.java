@@ -50,6 +50,15 @@ public final class TextTable {
     return dialect.headings();
   }
 
+  /**
+   * The heading that a text stands for: itself, or what the header row alone writes where a row of
+   * units was joined to it.
+   */
+  public String heading(String text) {
+    int at = dialect.headings().contains(text) ? -1 : dialect.written().indexOf(text);
+    return at < 0 ? text : dialect.headings().get(at);
+  }
+
   /** How the file is written, one sentence. */
   public String note() {
     String separator =

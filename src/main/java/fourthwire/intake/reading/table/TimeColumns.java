@@ -18,6 +18,9 @@ import java.util.OptionalInt;
 public record TimeColumns(List<Integer> columns, boolean elapsed, double unitS) {
   private static final int LOOK_ROWS = 20;
 
+  /** Dates that name their own order are alike throughout a file. */
+  private static final int LOOK_PLAIN = 1000;
+
   /** Copies the positions. */
   public TimeColumns {
     columns = List.copyOf(columns);
@@ -111,6 +114,22 @@ public record TimeColumns(List<Integer> columns, boolean elapsed, double unitS) 
         : Optional.empty();
   }
 
+  /** The first row whose date is none in this order; empty where the order fits. */
+  public Optional<String> misfit(TextTable table, DateOrder order) {
+    List<String> found = new ArrayList<>();
+    int[] plainRows = {0};
+    table.forEach(
+        row -> {
+          Optional<CellTime> time = CellTime.of(text(row));
+          if (time.isPresent() && !time.get().fits(order)) {
+            found.add("row " + row.number() + " holds \"" + text(row) + "\"");
+          }
+          boolean plain = time.isEmpty() || time.get().plain();
+          return found.isEmpty() && !(plain && ++plainRows[0] > LOOK_PLAIN);
+        });
+    return found.stream().findFirst();
+  }
+
   /** The order of the dates and why it is that; empty where the file does not settle it. */
   public Optional<Order> order(TextTable table) {
     OrderSearch search = new OrderSearch();
@@ -119,7 +138,7 @@ public record TimeColumns(List<Integer> columns, boolean elapsed, double unitS) 
         row -> {
           CellTime.of(text(row)).ifPresent(search::take);
           // Dates that name their own order need no search through all of a long file.
-          return !(search.plain() && ++rows[0] > 1000);
+          return !(search.plain() && ++rows[0] > LOOK_PLAIN);
         });
     return search.settled().map(s -> new Order(s.order(), s.reason()));
   }
