@@ -13,6 +13,7 @@ import org.dhatim.fastexcel.reader.Cell;
 import org.dhatim.fastexcel.reader.CellType;
 import org.dhatim.fastexcel.reader.ExcelReaderException;
 import org.dhatim.fastexcel.reader.ReadableWorkbook;
+import org.dhatim.fastexcel.reader.ReadingOptions;
 import org.dhatim.fastexcel.reader.Row;
 import org.jspecify.annotations.Nullable;
 
@@ -25,6 +26,7 @@ final class FirstSheet {
   /** The part that every workbook has and no other zip. */
   static final String CONTENT_TYPES = "[Content_Types].xml";
 
+  private static final ReadingOptions WITH_FORMATS = new ReadingOptions(true, false);
   private static final int MOST_ROWS = 1_100_000;
   private static final DateTimeFormatter TIME =
       DateTimeFormatter.ofPattern("yyyy-MM-dd HH:mm:ss", Locale.ROOT);
@@ -37,7 +39,7 @@ final class FirstSheet {
   /** The sheet as CSV with commas. */
   static byte[] csv(String name, byte[] workbook) {
     FirstSheet sheet = new FirstSheet();
-    try (ReadableWorkbook book = new ReadableWorkbook(new ByteArrayInputStream(workbook));
+    try (ReadableWorkbook book = new ReadableWorkbook(new ByteArrayInputStream(workbook), WITH_FORMATS);
         Stream<Row> rows = book.getFirstSheet().openStream()) {
       rows.forEach(sheet::row);
     } catch (IOException | ExcelReaderException e) {

@@ -1,6 +1,8 @@
 package fourthwire.intake.survey;
 
 import fourthwire.site.SiteSettings;
+import fourthwire.site.SpotReading;
+import fourthwire.site.check.DraftRow;
 import fourthwire.site.check.DraftTable;
 import fourthwire.site.check.DraftTable.State;
 import fourthwire.site.check.SurveyDraft;
@@ -9,8 +11,6 @@ import java.time.DateTimeException;
 import java.time.LocalDateTime;
 import java.time.OffsetDateTime;
 import java.time.ZoneId;
-import fourthwire.site.SpotReading;
-import fourthwire.site.check.DraftRow;
 import java.util.List;
 import java.util.Optional;
 import java.util.Set;
@@ -82,11 +82,7 @@ final class DraftReader {
     }
     LocalDateTime time = written.get().atZoneSameInstant(zone.get()).toLocalDateTime();
     return new DraftRow<>(
-        row.table(),
-        row.row(),
-        row.content().takenAt(time),
-        row.damaged(),
-        row.cells());
+        row.table(), row.row(), row.content().takenAt(time), row.damaged(), row.cells());
   }
 
   private SettingsReader.Settings settings() {

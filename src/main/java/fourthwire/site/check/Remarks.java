@@ -82,9 +82,7 @@ final class Remarks {
             .distinct()
             .collect(Collectors.joining(", "));
     String more =
-        placed.size() > PLACES_NAMED
-            ? " and %d more".formatted(placed.size() - PLACES_NAMED)
-            : "";
+        placed.size() > PLACES_NAMED ? " and %d more".formatted(placed.size() - PLACES_NAMED) : "";
     return SurveyError.ofTable(
         table,
         "The table is missing, and it is needed by "

@@ -2,6 +2,7 @@ package fourthwire.site.check;
 
 import fourthwire.quantity.Conductor;
 import fourthwire.site.Circuit;
+import fourthwire.site.Lines;
 import java.util.ArrayList;
 import java.util.EnumMap;
 import java.util.LinkedHashMap;
@@ -21,10 +22,15 @@ final class SharedNeutralCheck {
           "neutral_reactance_ohm_per_km");
 
   private final DraftTable<Circuit> circuits;
+  private final Map<Integer, Lines> ownLines;
   private final Remarks remarks;
 
-  SharedNeutralCheck(DraftTable<Circuit> circuits, Remarks remarks) {
+  /**
+   * @param ownLines by row, the lines of circuits that were named as the panel's parent names them
+   */
+  SharedNeutralCheck(DraftTable<Circuit> circuits, Map<Integer, Lines> ownLines, Remarks remarks) {
     this.circuits = circuits;
+    this.ownLines = ownLines;
     this.remarks = remarks;
   }
 
@@ -76,7 +82,7 @@ final class SharedNeutralCheck {
   private void warnOfSameLine(List<DraftRow<Circuit>> rows) {
     Map<Conductor, DraftRow<Circuit>> byLine = new EnumMap<>(Conductor.class);
     for (DraftRow<Circuit> row : rows) {
-      for (Conductor line : row.content().lines().lines()) {
+      for (Conductor line : ownLines.getOrDefault(row.row(), row.content().lines()).lines()) {
         DraftRow<Circuit> first = byLine.putIfAbsent(line, row);
         if (first != null && row.content().lines().hasNeutral()) {
           remarks.warning(

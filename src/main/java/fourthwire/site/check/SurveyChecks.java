@@ -42,7 +42,7 @@ public final class SurveyChecks {
     new LoadCheck(draft, presets, spectra, schedules, references, circuitCheck, remarks).check();
     new EquipmentCheck(draft, nodes, wirings, references, remarks).check();
     new FeederCheck(draft, remarks).check();
-    new SharedNeutralCheck(draft.circuits(), remarks).check();
+    new SharedNeutralCheck(draft.circuits(), circuitCheck.ownLines(), remarks).check();
     List<SurveyError> errors = remarks.errors();
     boolean sound = errors.isEmpty() && draft.isSound();
     return new Result(

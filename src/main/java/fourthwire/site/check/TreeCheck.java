@@ -99,11 +99,7 @@ final class TreeCheck {
             : noTransformers
                 ? "No supply or panel is called \"%s\", and there is no table of transformers."
                 : "No supply, transformer or panel is called \"%s\".";
-    remarks.error(
-        nodes.missing(fedFrom),
-        row,
-        FED_FROM,
-        why.formatted(fedFrom) + hint);
+    remarks.error(nodes.missing(fedFrom), row, FED_FROM, why.formatted(fedFrom) + hint);
   }
 
   /** A site that needs no transformer has its main panel on the supply. */

@@ -2,21 +2,21 @@ package fourthwire.intake.survey;
 
 import static org.assertj.core.api.Assertions.assertThat;
 
-import fourthwire.site.check.SurveyError;
 import fourthwire.site.Lines;
+import fourthwire.site.check.SurveyError;
 import java.io.ByteArrayOutputStream;
 import java.io.IOException;
 import java.nio.charset.StandardCharsets;
 import java.time.LocalDateTime;
-import org.dhatim.fastexcel.Workbook;
-import org.dhatim.fastexcel.Worksheet;
-import org.junit.jupiter.params.provider.ValueSource;
 import java.util.List;
 import java.util.function.Consumer;
 import java.util.stream.Stream;
+import org.dhatim.fastexcel.Workbook;
+import org.dhatim.fastexcel.Worksheet;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
+import org.junit.jupiter.params.provider.ValueSource;
 
 /**
  * One thing at a time is damaged in a good survey: exactly one error comes back, at the right
@@ -442,8 +442,7 @@ class BrokenSurveyTest {
   /** LP-2 is fed by L3 alone and calls it L1; what its neighbours say changes nothing. */
   @Test
   void aLineOfTheParentIsReadAsTheOwnLineItFeedsAndSaidSo() {
-    SurveyKit kit =
-        new SurveyKit().set("circuits", 6, "lines", "L3");
+    SurveyKit kit = new SurveyKit().set("circuits", 6, "lines", "L3");
     SurveyImport.Read read = accepted(kit.zip());
     assertThat(read.survey().circuits().get(4).lines()).isEqualTo(Lines.L1);
     assertThat(read.warnings())
@@ -487,7 +486,12 @@ class BrokenSurveyTest {
   /** Vienna stands at UTC+1 on 10 March. */
   @ParameterizedTest
   @ValueSource(
-      strings = {"2026-03-10T10:15", "2026-03-10 09:15Z", "2026-03-10T04:15-05:00", "2026-03-10 10:15:00 +01:00"})
+      strings = {
+        "2026-03-10T10:15",
+        "2026-03-10 09:15Z",
+        "2026-03-10T04:15-05:00",
+        "2026-03-10 10:15:00 +01:00"
+      })
   void aTimeWithItsOffsetIsPutIntoLocalTime(String time) {
     SurveyImport.Read read = accepted(new SurveyKit().set("spot_readings", 2, "time", time).zip());
     assertThat(read.survey().spotReadings().get(0).time())
