@@ -134,8 +134,7 @@ class ReadingRunTest {
         .hasMessageContaining("delete");
     readings.delete(first);
     long again = read(DAY_13, mapping(10, Optional.empty())).reading().orElseThrow();
-    assertThat(
-            readings.find(again).orElseThrow().reading().log().orElseThrow().quantities())
+    assertThat(readings.find(again).orElseThrow().reading().log().orElseThrow().quantities())
         .hasEntrySatisfying("L1.rms_a", s -> assertThat(s.mean()).isEqualTo(200));
   }
 
@@ -160,8 +159,7 @@ class ReadingRunTest {
                 assertThat(((ReadingRefusedException) e).questions())
                     .extracting("part")
                     .containsExactly("time.format"));
-    long given =
-        read(DAY_2, mapping(1, Optional.of("dd/MM/yyyy"))).reading().orElseThrow();
+    long given = read(DAY_2, mapping(1, Optional.of("dd/MM/yyyy"))).reading().orElseThrow();
     assertThat(readings.find(given).orElseThrow().reading().notes())
         .contains("Times are taken as the starts of the intervals.");
     // The format was given and is remembered; the note on the assumption comes again.

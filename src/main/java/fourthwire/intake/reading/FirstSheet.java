@@ -39,7 +39,8 @@ final class FirstSheet {
   /** The sheet as CSV with commas. */
   static byte[] csv(String name, byte[] workbook) {
     FirstSheet sheet = new FirstSheet();
-    try (ReadableWorkbook book = new ReadableWorkbook(new ByteArrayInputStream(workbook), WITH_FORMATS);
+    try (ReadableWorkbook book =
+            new ReadableWorkbook(new ByteArrayInputStream(workbook), WITH_FORMATS);
         Stream<Row> rows = book.getFirstSheet().openStream()) {
       rows.forEach(sheet::row);
     } catch (IOException | ExcelReaderException e) {
