@@ -31,12 +31,14 @@ final class JdbcAudits implements AuditRepository {
   private final JdbcTemplate template;
   private final TransactionTemplate transaction;
   private final Clock clock;
+  private final JobRows rows;
 
   JdbcAudits(JdbcClient jdbc, JdbcTemplate template, TransactionTemplate transaction, Clock clock) {
     this.jdbc = jdbc;
     this.template = template;
     this.transaction = transaction;
     this.clock = clock;
+    this.rows = new JobRows(jdbc, "audits");
   }
 
   @Override
@@ -97,14 +99,7 @@ final class JdbcAudits implements AuditRepository {
 
   @Override
   public boolean progress(long auditId, double share, String message) {
-    return jdbc.sql(
-                """
-                update audits set progress = ?, message = ?
-                where id = ? and state = 'running' and not cancel_asked
-                """)
-            .params(share, message, auditId)
-            .update()
-        == 1;
+    return rows.progress(auditId, share, message);
   }
 
   @Override
@@ -133,15 +128,7 @@ final class JdbcAudits implements AuditRepository {
             """)
         .param(Rows.now(clock))
         .update();
-    jdbc.sql(
-            """
-            update audits set state = 'queued', progress = 0,
-              message = 'waiting to run again after a restart' where state = 'running'
-            """)
-        .update();
-    return jdbc.sql("select id from audits where state = 'queued' order by id")
-        .query(Long.class)
-        .list();
+    return rows.requeue("waiting to run again after a restart");
   }
 
   @Override

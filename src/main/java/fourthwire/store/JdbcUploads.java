@@ -24,12 +24,14 @@ final class JdbcUploads implements ReadingUploads {
   private final TransactionTemplate transaction;
   private final FileStore files;
   private final Clock clock;
+  private final JobRows rows;
 
   JdbcUploads(JdbcClient jdbc, TransactionTemplate transaction, FileStore files, Clock clock) {
     this.jdbc = jdbc;
     this.transaction = transaction;
     this.files = files;
     this.clock = clock;
+    this.rows = new JobRows(jdbc, "reading_uploads");
   }
 
   @Override
@@ -134,14 +136,7 @@ final class JdbcUploads implements ReadingUploads {
 
   @Override
   public boolean progress(long uploadId, double share, String message) {
-    return jdbc.sql(
-                """
-                update reading_uploads set progress = ?, message = ?
-                where id = ? and state = 'running' and not cancel_asked
-                """)
-            .params(share, message, uploadId)
-            .update()
-        == 1;
+    return rows.progress(uploadId, share, message);
   }
 
   @Override
@@ -207,14 +202,6 @@ final class JdbcUploads implements ReadingUploads {
         .query(Long.class)
         .list()
         .forEach(id -> end(id, State.CANCELLED, "cancelled"));
-    jdbc.sql(
-            """
-            update reading_uploads set state = 'queued', progress = 0,
-              message = 'waiting to be read again after a restart' where state = 'running'
-            """)
-        .update();
-    return jdbc.sql("select id from reading_uploads where state = 'queued' order by id")
-        .query(Long.class)
-        .list();
+    return rows.requeue("waiting to be read again after a restart");
   }
 }

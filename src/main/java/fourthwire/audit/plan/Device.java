@@ -4,6 +4,7 @@ import fourthwire.audit.AuditFailedException;
 import fourthwire.load.LoadModels;
 import fourthwire.load.LoadRequest.Rating;
 import fourthwire.load.model.LoadModel;
+import fourthwire.load.model.NoSteadyStateException;
 
 /**
  * A placed load with its model.
@@ -16,7 +17,7 @@ public record Device(LoadPlacement placement, LoadModel model) {
   public static Device of(LoadPlacement placement) {
     try {
       return new Device(placement, LoadModels.of(placement.request()));
-    } catch (IllegalArgumentException e) {
+    } catch (IllegalArgumentException | NoSteadyStateException e) {
       throw new AuditFailedException(
           "Load \"%s\" on %s: %s"
               .formatted(placement.load().name(), placement.circuit(), e.getMessage()),

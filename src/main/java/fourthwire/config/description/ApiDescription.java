@@ -16,7 +16,7 @@ import org.springframework.context.annotation.Configuration;
  * no Java type tells, and the errors of every call.
  */
 @Configuration(proxyBeanMethods = false)
-public class ApiDescription {
+class ApiDescription {
   /** Records of which every key is always sent. */
   private static final List<String> WHOLE =
       List.of("SiteRow", "StoredSurvey", "Audit", "QueuedAudit", "Job", "QueuedJob");
