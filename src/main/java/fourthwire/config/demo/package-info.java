@@ -6,6 +6,8 @@
  * underscores or the extension ({@code M-LP3__week.csv}), and beside a file whose columns do not
  * name themselves its mapping ({@code M-LP3__week.csv.mapping.json}). Files of one name with
  * different extensions are one capture.
+ *
+ * <p>Door: {@link fourthwire.config.demo.DemoSite}.
  */
 @org.jspecify.annotations.NullMarked
 package fourthwire.config.demo;

@@ -3,8 +3,8 @@
  * banks, feeders. A draft read row by row goes in; clear errors, or a survey whose references are
  * all resolved, come out.
  *
- * <p>Door: {@link fourthwire.site.check.SurveyChecks}. May use {@code site} and {@code quantity}.
- * Source: the public contract, section 2.
+ * <p>Door: {@link fourthwire.site.check.SurveyChecks}. May use {@code site}, {@code site.conductor}
+ * and {@code quantity}. Source: the public contract, section 2.
  */
 @org.jspecify.annotations.NullMarked
 package fourthwire.site.check;
