@@ -8,6 +8,7 @@ import java.time.LocalDateTime;
 import java.time.format.DateTimeFormatter;
 import java.time.temporal.ChronoUnit;
 import java.util.Locale;
+import java.util.regex.Pattern;
 import java.util.stream.Stream;
 import org.dhatim.fastexcel.reader.Cell;
 import org.dhatim.fastexcel.reader.CellType;
@@ -34,7 +35,16 @@ final class FirstSheet {
   private final StringBuilder text = new StringBuilder();
   private int rows;
 
+  /** A cell beyond column XFD, the last; a reader would make room for all before it. */
+  private static final Pattern COLUMN_BEYOND_XFD =
+      Pattern.compile("<c\\s[^>]*\\br\\s*=\\s*[\"'][A-Za-z]{4,}");
+
   private FirstSheet() {}
+
+  /** Whether a part's text names a cell in a column that no workbook has. */
+  static boolean namesNoColumn(String part) {
+    return COLUMN_BEYOND_XFD.matcher(part).find();
+  }
 
   /** The sheet as CSV with commas. */
   static byte[] csv(String name, byte[] workbook) {
@@ -43,7 +53,7 @@ final class FirstSheet {
             new ReadableWorkbook(new ByteArrayInputStream(workbook), WITH_FORMATS);
         Stream<Row> rows = book.getFirstSheet().openStream()) {
       rows.forEach(sheet::row);
-    } catch (IOException | ExcelReaderException e) {
+    } catch (IOException | ExcelReaderException | NumberFormatException e) {
       throw new ReadingRefusedException(
           name + " is a workbook that can't be read. Save it again as xlsx, or its sheet as CSV.");
     }

@@ -14,7 +14,7 @@ import org.apache.commons.compress.archivers.zip.ZipArchiveInputStream;
 /** What was uploaded, zips opened, sorted out into a format. */
 final class Upload {
   private static final int MOST_BYTES = 200_000_000;
-  private static final int MOST_PARTS = 20;
+  private static final int MOST_PARTS = 200;
 
   private final List<Part> parts = new ArrayList<>();
   private long unpacked;
@@ -53,6 +53,10 @@ final class Upload {
             file.name()
                 + " is a workbook in UTF-16 or declares a document type, which is refused. Save it"
                 + " again as xlsx, or its sheet as CSV.");
+      }
+      if (FirstSheet.namesNoColumn(text)) {
+        throw new ReadingRefusedException(
+            file.name() + " names a column that no workbook has. Save its sheet as CSV.");
       }
     }
     byte[] csv = FirstSheet.csv(file.name(), new Part(file.name(), file::open).bytes(MOST_BYTES));

@@ -19,6 +19,8 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.zip.ZipEntry;
+import java.util.zip.ZipOutputStream;
 import org.dhatim.fastexcel.Workbook;
 import org.dhatim.fastexcel.Worksheet;
 import org.junit.jupiter.api.Test;
@@ -305,5 +307,22 @@ class LogReadingTest {
     assertThat(r.log().orElseThrow().interval()).isEqualTo(Duration.ofMinutes(10));
     assertThat(r.period().orElseThrow().from()).isEqualTo(Instant.parse("2025-01-31T23:00:00Z"));
     assertThat(r.notes()).anySatisfy(n -> assertThat(n).contains("row 4"));
+  }
+
+  @Test
+  void aWorkbookThatCouldDoHarmIsRefused() throws IOException {
+    String cell = "<worksheet><sheetData><row r='1'><c r='ZZZZZZ1'><v>1</v></c></row></sheetData>";
+    for (String part : List.of(cell + "</worksheet>", "<!DOCTYPE x [<!ENTITY e 'e'>]><x>&e;</x>")) {
+      ByteArrayOutputStream bytes = new ByteArrayOutputStream();
+      try (ZipOutputStream zip = new ZipOutputStream(bytes)) {
+        for (String name : List.of("[Content_Types].xml", "xl/worksheets/sheet1.xml")) {
+          zip.putNextEntry(new ZipEntry(name));
+          zip.write(part.getBytes(StandardCharsets.UTF_8));
+        }
+      }
+      assertThatThrownBy(() -> read(bytes.toByteArray(), Files.setting(50)))
+          .isInstanceOf(ReadingRefusedException.class)
+          .hasMessageContaining("CSV");
+    }
   }
 }
