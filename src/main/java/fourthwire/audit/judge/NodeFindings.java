@@ -5,6 +5,7 @@ import fourthwire.audit.judge.NodeCurrents.Demand;
 import fourthwire.audit.plan.Place;
 import fourthwire.audit.plan.TransformerPlate;
 import fourthwire.limits.Finding;
+import fourthwire.limits.distortion.AssessmentPoint;
 import fourthwire.limits.distortion.CurrentDistortion519;
 import fourthwire.limits.distortion.Edition519;
 import fourthwire.limits.distortion.ResonanceCheck;
@@ -147,13 +148,13 @@ final class NodeFindings {
     return findings;
   }
 
-  private fourthwire.limits.distortion.Place where() {
+  private AssessmentPoint where() {
     if (context.supply().isGenerator()) {
-      return fourthwire.limits.distortion.Place.GENERATOR;
+      return AssessmentPoint.GENERATOR;
     }
     return place.name().equals(context.pcc())
-        ? fourthwire.limits.distortion.Place.COMMON_COUPLING
-        : fourthwire.limits.distortion.Place.INSIDE;
+        ? AssessmentPoint.COMMON_COUPLING
+        : AssessmentPoint.INSIDE;
   }
 
   private Optional<Finding> motorVoltage() {

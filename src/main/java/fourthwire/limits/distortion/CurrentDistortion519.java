@@ -85,7 +85,8 @@ public final class CurrentDistortion519 {
    * @param lines line currents at the node, amps
    * @param demandA demand current I_L, amps
    */
-  public List<Finding> judge(Map<Conductor, Spectrum> lines, double demandA, Place place) {
+  public List<Finding> judge(
+      Map<Conductor, Spectrum> lines, double demandA, AssessmentPoint place) {
     List<Finding> findings = new ArrayList<>();
     judgeOrders(lines, demandA, place).ifPresent(findings::add);
     judgeTdd(lines, demandA, place).ifPresent(findings::add);
@@ -93,7 +94,7 @@ public final class CurrentDistortion519 {
   }
 
   private Optional<Finding> judgeOrders(
-      Map<Conductor, Spectrum> lines, double demandA, Place place) {
+      Map<Conductor, Spectrum> lines, double demandA, AssessmentPoint place) {
     return orders(lines, demandA)
         .max(Comparator.comparingDouble(OrderFigure::ofLimit))
         .flatMap(
@@ -106,7 +107,7 @@ public final class CurrentDistortion519 {
   private Finding orderFinding(
       Map<Conductor, Spectrum> lines,
       double demandA,
-      Place place,
+      AssessmentPoint place,
       OrderFigure worst,
       Severity severity) {
     long over =
@@ -150,7 +151,8 @@ public final class CurrentDistortion519 {
                                 orderLimitPercent(h))));
   }
 
-  private Optional<Finding> judgeTdd(Map<Conductor, Spectrum> lines, double demandA, Place place) {
+  private Optional<Finding> judgeTdd(
+      Map<Conductor, Spectrum> lines, double demandA, AssessmentPoint place) {
     double limit = tddLimitPercent();
     double worst =
         lines.values().stream()

@@ -113,15 +113,18 @@ public final class VoltageDistortion {
    *
    * @param voltages by name, {@code L1} to neutral or {@code L1-L2}
    */
-  public List<Finding> judge(Map<String, Spectrum> voltages, Place place) {
-    Place binding = everywhere && place != Place.COMMON_COUPLING ? Place.COMMON_COUPLING : place;
+  public List<Finding> judge(Map<String, Spectrum> voltages, AssessmentPoint place) {
+    AssessmentPoint binding =
+        everywhere && place != AssessmentPoint.COMMON_COUPLING
+            ? AssessmentPoint.COMMON_COUPLING
+            : place;
     List<Finding> findings = new ArrayList<>();
     judgeOrders(voltages, binding).ifPresent(findings::add);
     judgeThd(voltages, binding).ifPresent(findings::add);
     return findings;
   }
 
-  private Optional<Finding> judgeOrders(Map<String, Spectrum> voltages, Place place) {
+  private Optional<Finding> judgeOrders(Map<String, Spectrum> voltages, AssessmentPoint place) {
     return voltages.entrySet().stream()
         .filter(voltage -> voltage.getValue().magnitude(1) > 0)
         .flatMap(voltage -> figures(voltage.getKey(), voltage.getValue()))
@@ -146,7 +149,7 @@ public final class VoltageDistortion {
                     orderLimitPercent(h).getAsDouble()));
   }
 
-  private Finding orderFinding(OrderFigure worst, Place place, Severity severity) {
+  private Finding orderFinding(OrderFigure worst, AssessmentPoint place, Severity severity) {
     String sentence =
         "The %s harmonic of the voltage %s is %s %%; %s allows %s %%.%s"
             .formatted(
@@ -160,7 +163,7 @@ public final class VoltageDistortion {
         FindingCode.VOLTAGE_ORDER, severity, worst.percent(), worst.limit(), "%", basis, sentence);
   }
 
-  private Optional<Finding> judgeThd(Map<String, Spectrum> voltages, Place place) {
+  private Optional<Finding> judgeThd(Map<String, Spectrum> voltages, AssessmentPoint place) {
     double worst = voltages.values().stream().mapToDouble(this::thdPercent).max().orElse(0);
     return place
         .judge(worst, thd)

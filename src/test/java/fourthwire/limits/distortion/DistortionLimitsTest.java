@@ -23,14 +23,14 @@ class DistortionLimitsTest {
     return Spectrum.of(h -> new Phasor(h == 1 ? fundamental : h == order ? amount : 0, 0));
   }
 
-  private static List<Finding> judge(double fifth, Place place) {
+  private static List<Finding> judge(double fifth, AssessmentPoint place) {
     return TABLE_2.judge(
         Map.of(Conductor.L1, with(90, 5, 1), Conductor.L2, with(90, 5, fifth)), 100, place);
   }
 
   @Test
   void overALimitAtCommonCouplingAsksForAction() {
-    List<Finding> findings = judge(9.1, Place.COMMON_COUPLING);
+    List<Finding> findings = judge(9.1, AssessmentPoint.COMMON_COUPLING);
     assertThat(findings).extracting(Finding::code).containsExactly("current-order", "current-tdd");
     Finding order = findings.get(0);
     assertThat(order.severity()).isEqualTo(Severity.ACT);
@@ -45,23 +45,23 @@ class DistortionLimitsTest {
 
   @Test
   void nearTheLimitIsWatchedAndUnderItIsNoFinding() {
-    assertThat(judge(6.9, Place.COMMON_COUPLING))
+    assertThat(judge(6.9, AssessmentPoint.COMMON_COUPLING))
         .extracting(Finding::severity)
         .containsExactly(Severity.WATCH, Severity.WATCH);
-    assertThat(judge(5.5, Place.COMMON_COUPLING)).isEmpty();
+    assertThat(judge(5.5, AssessmentPoint.COMMON_COUPLING)).isEmpty();
   }
 
   @Test
   void insideTheSiteTheLimitIsAGuide() {
-    assertThat(judge(9.1, Place.INSIDE))
+    assertThat(judge(9.1, AssessmentPoint.INSIDE))
         .allSatisfy(f -> assertThat(f.severity()).isEqualTo(Severity.WATCH))
         .allSatisfy(f -> assertThat(f.sentence()).contains("Guidance only"));
-    assertThat(judge(6.9, Place.INSIDE)).isEmpty();
+    assertThat(judge(6.9, AssessmentPoint.INSIDE)).isEmpty();
   }
 
   @Test
   void aGeneratorHasNoCommonCoupling() {
-    assertThat(judge(50, Place.GENERATOR)).isEmpty();
+    assertThat(judge(50, AssessmentPoint.GENERATOR)).isEmpty();
   }
 
   /** The ratio's bands: a printed bound belongs to the upper row, 1000 itself to "100 to 1000". */
@@ -81,7 +81,7 @@ class DistortionLimitsTest {
   void voltageOverTableOne() {
     VoltageDistortion table = VoltageDistortion.ieee519(Edition519.IEEE_519_2022, 480);
     List<Finding> findings =
-        table.judge(Map.of("L1", with(277, 5, 277 * 0.06)), Place.COMMON_COUPLING);
+        table.judge(Map.of("L1", with(277, 5, 277 * 0.06)), AssessmentPoint.COMMON_COUPLING);
     assertThat(findings).extracting(Finding::code).containsExactly("voltage-order");
     assertThat(findings.get(0).severity()).isEqualTo(Severity.ACT);
     assertThat(findings.get(0).sentence()).contains("5th harmonic", "6 %", "5 %");
@@ -91,10 +91,10 @@ class DistortionLimitsTest {
   @Test
   void plantLevelsBindInside() {
     Map<String, Spectrum> voltage = Map.of("L1", with(230, 5, 230 * 0.07));
-    assertThat(VoltageDistortion.iec61000x2x4(2).judge(voltage, Place.INSIDE))
+    assertThat(VoltageDistortion.iec61000x2x4(2).judge(voltage, AssessmentPoint.INSIDE))
         .extracting(Finding::severity)
         .containsExactly(Severity.ACT, Severity.WATCH);
-    assertThat(VoltageDistortion.en50160(400).judge(voltage, Place.INSIDE))
+    assertThat(VoltageDistortion.en50160(400).judge(voltage, AssessmentPoint.INSIDE))
         .extracting(Finding::severity)
         .containsExactly(Severity.WATCH);
     assertThat(VoltageDistortion.en50160(400).orderLimitPercent(29)).isEmpty();

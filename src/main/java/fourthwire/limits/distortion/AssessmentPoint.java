@@ -8,7 +8,7 @@ import java.util.Optional;
  * Where a distortion is held against limits that bind at the point of common coupling: there they
  * are limits, elsewhere a guide, on a generator nothing.
  */
-public enum Place {
+public enum AssessmentPoint {
   /** The point of common coupling with other users of the supply. */
   COMMON_COUPLING,
   /** Any other node: over the figure is worth watching, never more. */

@@ -1,4 +1,4 @@
-package fourthwire.config.description;
+package fourthwire.config.openapi;
 
 import io.swagger.v3.oas.models.media.Schema;
 
