@@ -2,9 +2,11 @@ package fourthwire.web.api;
 
 import jakarta.servlet.RequestDispatcher;
 import jakarta.servlet.http.HttpServletRequest;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import org.springframework.boot.autoconfigure.web.WebProperties;
+import org.springframework.boot.web.error.ErrorAttributeOptions;
 import org.springframework.boot.webmvc.autoconfigure.error.BasicErrorController;
 import org.springframework.boot.webmvc.autoconfigure.error.ErrorViewResolver;
 import org.springframework.boot.webmvc.error.ErrorAttributes;
@@ -20,6 +22,7 @@ import org.springframework.stereotype.Component;
  */
 @Component
 class LateErrors extends BasicErrorController {
+  private static final String REFERENCE = "reference";
   private static final MediaType PROBLEM =
       MediaType.parseMediaType(Problem.MEDIA_TYPE + ";charset=UTF-8");
 
@@ -31,18 +34,16 @@ class LateErrors extends BasicErrorController {
   public ResponseEntity<Map<String, Object>> error(HttpServletRequest request) {
     HttpStatusCode status = getStatus(request);
     HttpStatus known = HttpStatus.valueOf(status.value());
-    return ResponseEntity.status(status)
-        .contentType(PROBLEM)
-        .body(
-            Map.of(
-                "type",
-                "about:blank",
-                "title",
-                known.getReasonPhrase(),
-                "status",
-                status.value(),
-                "detail",
-                detail(request, known)));
+    Map<String, Object> problem = new LinkedHashMap<>();
+    problem.put("type", "about:blank");
+    problem.put("title", known.getReasonPhrase());
+    problem.put("status", status.value());
+    problem.put("detail", detail(request, known));
+    Object reference = getErrorAttributes(request, ErrorAttributeOptions.defaults()).get(REFERENCE);
+    if (reference != null) {
+      problem.put(REFERENCE, reference);
+    }
+    return ResponseEntity.status(status).contentType(PROBLEM).body(problem);
   }
 
   private static String detail(HttpServletRequest request, HttpStatus status) {
