@@ -32,12 +32,12 @@ class CapacitorBankTest {
   void detunedBankExample() {
     // Manufacturer's worked example (WE8 of the worked examples).
     CapacitorBank bank = bank(80, 525, 7);
-    assertThat(50 * bank.tuningOrder().orElseThrow()).isCloseTo(189, within(0.1));
-    assertThat(bank.capacitiveOhm()).isCloseTo(3.445, within(0.001));
-    assertThat(1000 * bank.capacitanceF(50)).isCloseTo(0.924, within(0.001));
-    assertThat(1000 * bank.inductanceH(50)).isCloseTo(0.768, within(0.001));
-    assertThat(bank.kvarAt(525)).isCloseTo(86.025, within(0.01));
-    assertThat(bank.kvarAt(400)).isCloseTo(49.9, within(0.1));
+    assertThat(50 * bank.tuningOrder().orElseThrow()).as("C4").isCloseTo(189, within(0.1));
+    assertThat(bank.capacitiveOhm()).as("C5").isCloseTo(3.445, within(0.001));
+    assertThat(1000 * bank.capacitanceF(50)).as("C6").isCloseTo(0.924, within(0.001));
+    assertThat(1000 * bank.inductanceH(50)).as("C7").isCloseTo(0.768, within(0.001));
+    assertThat(bank.kvarAt(525)).as("C8").isCloseTo(86.025, within(0.01));
+    assertThat(bank.kvarAt(400)).as("C9").isCloseTo(49.9, within(0.1));
   }
 
   @Test
