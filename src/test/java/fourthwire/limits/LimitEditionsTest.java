@@ -11,7 +11,7 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 
-/** Every table that judges is named among the editions an audit stores. */
+/** Every table that judges is named among the editions. */
 class LimitEditionsTest {
   private static final Path TABLES = Path.of("src/main/resources/fourthwire/limits");
 
@@ -34,7 +34,9 @@ class LimitEditionsTest {
             .orElseThrow()
             .substring("# document: ".length());
     for (String document : documents.split("; ")) {
-      assertThat(LimitEditions.editions()).anyMatch(edition -> edition.startsWith(document));
+      assertThat(
+              Stream.of(LimitEditions.editions(), LimitEditions.equipment()).flatMap(List::stream))
+          .anyMatch(edition -> edition.startsWith(document));
     }
   }
 

@@ -5,6 +5,9 @@ import static fourthwire.validation.QuantityChecks.known;
 import fourthwire.limits.distortion.CurrentDistortion519;
 import fourthwire.limits.distortion.Edition519;
 import fourthwire.limits.distortion.VoltageDistortion;
+import fourthwire.limits.equipment.Equipment;
+import fourthwire.limits.equipment.EquipmentLimits;
+import fourthwire.limits.equipment.EquipmentUse;
 import fourthwire.limits.loading.AmpacityRule;
 import fourthwire.limits.loading.ConductorRating;
 import fourthwire.limits.loading.CurrentCarryingCount;
@@ -21,6 +24,7 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.function.ToDoubleFunction;
+import java.util.stream.Stream;
 
 /** The limits and loadings that validation files ask for, by name. */
 final class LimitChecks {
@@ -40,12 +44,45 @@ final class LimitChecks {
             VoltageDistortion.en50160(in.number("line_v"))
                 .orderLimitPercent(in.whole("h"))
                 .orElseThrow());
+    checks.put("IEC 61000-3-2 order limit", LimitChecks::smallEquipment);
+    checks.put("IEC 61000-3-12 order limit", LimitChecks::largeEquipment);
     checks.put("Annex E required ampacity", in -> annexE(in).requiredAmpacityA());
     checks.put("adjusted ampacity", LimitChecks::adjustedAmpacity);
     checks.put("adjusted neutral ampacity", in -> adjustedNeutral(in));
     checks.put("derated A", in -> known(transformer(in).deratedA()));
     checks.put("derated kVA", in -> known(transformer(in).deratedKva()));
     return checks;
+  }
+
+  private static double smallEquipment(Inputs in) {
+    EquipmentUse use =
+        Stream.of(EquipmentUse.values())
+            .filter(u -> u.word().equals(in.text("use")))
+            .findFirst()
+            .orElseThrow();
+    Equipment equipment = new Equipment(use, in.number("w"), 5, false, 230, OptionalDouble.empty());
+    Spectrum current = orders(in.has("i1") ? in.number("i1") : 5, 0.1);
+    return equipmentLimit(equipment, current, in.whole("h"));
+  }
+
+  private static double largeEquipment(Inputs in) {
+    double a = in.number("a");
+    Equipment equipment =
+        new Equipment(
+            EquipmentUse.OTHER,
+            690 * a,
+            a,
+            in.text("balanced").equals("yes"),
+            230,
+            OptionalDouble.of(in.number("rsce")));
+    Spectrum current =
+        new Inputs("i=1:" + a + " 5:" + (in.has("fifth") ? in.text("fifth") : "15@0"))
+            .spectrum("i");
+    return equipmentLimit(equipment, current, in.whole("h"));
+  }
+
+  private static double equipmentLimit(Equipment equipment, Spectrum current, int order) {
+    return EquipmentLimits.judge(equipment, current).order(order).orElseThrow().limitA();
   }
 
   private static CurrentDistortion519 limits519(Inputs in) {
