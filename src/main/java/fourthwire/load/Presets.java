@@ -1,13 +1,13 @@
 package fourthwire.load;
 
 import fourthwire.site.LoadKind;
-import fourthwire.site.ModelColumns;
 import java.io.IOException;
 import java.io.InputStream;
 import java.io.UncheckedIOException;
 import java.nio.charset.StandardCharsets;
 import java.util.Collection;
 import java.util.Collections;
+import java.util.EnumMap;
 import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -15,7 +15,12 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 
-/** The presets, read from the resource {@code presets.csv} (semicolons), in its order. */
+/**
+ * The presets, read from the resource {@code presets.csv} (semicolons), in its order.
+ *
+ * <p>A figure stands there as {@code low..typical..high}, fifth and ninety-fifth percentile, or as
+ * one number; a band of what to expect as {@code low..high}.
+ */
 public final class Presets {
   private static final Map<String, Preset> BY_NAME = read();
 
@@ -48,7 +53,9 @@ public final class Presets {
       Map<String, Preset> presets = new LinkedHashMap<>();
       for (String line : lines.subList(1, lines.size())) {
         Preset preset = preset(cells(columns, line.split(";", -1)));
-        presets.put(preset.name(), preset);
+        if (presets.put(preset.name(), preset) != null) {
+          throw new IllegalStateException("two presets are named " + preset.name());
+        }
       }
       return Collections.unmodifiableMap(presets);
     } catch (IOException e) {
@@ -65,47 +72,40 @@ public final class Presets {
   }
 
   private static Preset preset(Map<String, String> row) {
+    double[] thd = band(text(row, "thd_percent"));
+    double[] powerFactor = band(text(row, "power_factor"));
+    String volts = text(row, "sized_for_v");
     return new Preset(
         text(row, "name"),
         LoadKind.find(text(row, "kind")).orElseThrow(),
-        number(row, "typical_w").orElseThrow(),
-        number(row, "low_w").orElseThrow(),
-        number(row, "high_w").orElseThrow(),
-        number(row, "displacement_factor"),
-        number(row, "thd_low_percent").orElseThrow(),
-        number(row, "thd_high_percent").orElseThrow(),
-        text(row, "source"),
-        sizes(row),
-        number(row, "source_resistance_percent"),
-        number(row, "input_filter_nf_per_w"));
+        Spread.parse(text(row, "watts")),
+        volts.isEmpty() ? OptionalDouble.empty() : OptionalDouble.of(Double.parseDouble(volts)),
+        parameters(row),
+        thd[0],
+        thd[1],
+        powerFactor[0],
+        powerFactor[1],
+        text(row, "source"));
   }
 
-  private static ModelColumns sizes(Map<String, String> row) {
-    OptionalDouble none = OptionalDouble.empty();
-    return new ModelColumns(
-        number(row, "efficiency"),
-        number(row, "capacitance_uf_per_w"),
-        none,
-        none,
-        none,
-        none,
-        none,
-        number(row, "line_choke_percent"),
-        number(row, "dc_choke_percent"),
-        number(row, "firing_degrees"),
-        none,
-        number(row, "dead_angle_degrees"),
-        none,
-        none);
+  private static Map<PresetParameter, Spread> parameters(Map<String, String> row) {
+    Map<PresetParameter, Spread> parameters = new EnumMap<>(PresetParameter.class);
+    for (PresetParameter parameter : PresetParameter.values()) {
+      String cell = text(row, parameter.column());
+      if (!cell.isEmpty()) {
+        parameters.put(parameter, Spread.parse(cell));
+      }
+    }
+    return parameters;
+  }
+
+  private static double[] band(String text) {
+    String[] ends = text.split("\\.\\.", -1);
+    return new double[] {Double.parseDouble(ends[0]), Double.parseDouble(ends[1])};
   }
 
   private static String text(Map<String, String> row, String column) {
     return Optional.ofNullable(row.get(column))
         .orElseThrow(() -> new IllegalStateException("presets have no column " + column));
-  }
-
-  private static OptionalDouble number(Map<String, String> row, String column) {
-    String cell = text(row, column);
-    return cell.isEmpty() ? OptionalDouble.empty() : OptionalDouble.of(Double.parseDouble(cell));
   }
 }

@@ -3,9 +3,13 @@ package fourthwire.web.help;
 import fourthwire.limits.FindingCode;
 import fourthwire.limits.LimitEditions;
 import fourthwire.load.Preset;
+import fourthwire.load.PresetParameter;
 import fourthwire.load.Presets;
+import fourthwire.load.Spread;
 import fourthwire.web.support.Numbers;
 import fourthwire.web.support.Verdict;
+import java.util.Arrays;
+import java.util.stream.Collectors;
 import org.springframework.stereotype.Controller;
 import org.springframework.ui.Model;
 import org.springframework.web.bind.annotation.GetMapping;
@@ -17,16 +21,41 @@ class HelpController {
    * A preset in the list.
    *
    * @param watts what one unit usually draws
+   * @param parameters what is set of its model, each with its spread
    * @param thd the band of current distortion its source leads one to expect
+   * @param powerFactor likewise
    */
-  record PresetRow(String name, String kind, String watts, String thd, String source) {
+  record PresetRow(
+      String name,
+      String kind,
+      String watts,
+      String parameters,
+      String thd,
+      String powerFactor,
+      String source) {
     static PresetRow of(Preset p) {
       return new PresetRow(
           p.name(),
           p.kind().word(),
-          range(p.lowW(), p.highW()),
+          figure(p.watts(), ""),
+          parameters(p),
           range(p.thdLowPercent(), p.thdHighPercent()),
+          range(p.powerFactorLow(), p.powerFactorHigh()),
           p.source());
+    }
+
+    private static String parameters(Preset p) {
+      return Arrays.stream(PresetParameter.values())
+          .flatMap(x -> p.find(x).map(s -> x.words() + " " + figure(s, x.unit())).stream())
+          .collect(Collectors.joining(", "));
+    }
+
+    /** The usual figure, and in brackets what nine of ten lie between. */
+    private static String figure(Spread spread, String unit) {
+      String typical = Numbers.plain(spread.typical(), "");
+      String figure =
+          spread.isExact() ? typical : typical + " (" + range(spread.low(), spread.high()) + ")";
+      return unit.isEmpty() ? figure : figure + Numbers.THIN_SPACE + unit;
     }
 
     private static String range(double low, double high) {
