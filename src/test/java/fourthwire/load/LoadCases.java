@@ -28,6 +28,23 @@ final class LoadCases {
         Optional.empty());
   }
 
+  /** A request of one unit of a preset at its usual figures. */
+  static LoadRequest request(
+      Preset preset, double watts, double portV, double hertz, double demand) {
+    return new LoadRequest(
+        preset.kind(),
+        preset.kind().family() == LoadKind.Family.THREE_PHASE ? 3 : 1,
+        hertz,
+        portV,
+        new LoadRequest.Rating.Watts(watts),
+        1,
+        demand,
+        true,
+        preset.displacementFactor(),
+        preset.columns(watts, portV),
+        Optional.empty());
+  }
+
   /** Sinusoidal, balanced electromotive force of nominal port voltage, turned by some degrees. */
   static PortSpectra emf(int ports, double nominalV, double degrees) {
     PortSpectra emf = new PortSpectra(ports);
