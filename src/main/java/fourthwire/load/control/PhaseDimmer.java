@@ -87,12 +87,17 @@ public final class PhaseDimmer implements LoadModel {
       boolean halfWave = steadyCurrent(eRe, eIm, r, x);
       Arrays.fill(current.re[0], 0);
       Arrays.fill(current.im[0], 0);
-      double first = Crossing.near(eRe, eIm, -Math.atan2(eIm[1], eRe[1]), Spectrum.HIGHEST_ORDER);
-      boolean pulsed = pulse(first, 1, halfWave ? 2 : 1, current);
-      if (pulsed && !halfWave) {
+      double fundamental = -Math.atan2(eIm[1], eRe[1]);
+      double first = Crossing.near(eRe, eIm, fundamental, Spectrum.HIGHEST_ORDER);
+      boolean pulsed;
+      if (halfWave) {
+        pulsed = pulse(first, Math.PI, 1, 2, current);
+      } else {
         double second =
-            Crossing.near(eRe, eIm, -Math.atan2(eIm[1], eRe[1]) + Math.PI, Spectrum.HIGHEST_ORDER);
-        pulsed = pulse(second, -1, 1, current);
+            Crossing.near(eRe, eIm, fundamental + Math.PI, Spectrum.HIGHEST_ORDER);
+        pulsed =
+            pulse(first, second - first, 1, 1, current)
+                && pulse(second, first + 2 * Math.PI - second, -1, 1, current);
       }
       if (!pulsed) {
         System.arraycopy(pRe, 0, current.re[0], 0, ORDERS + 1);
@@ -116,11 +121,16 @@ public final class PhaseDimmer implements LoadModel {
       return decay == Double.POSITIVE_INFINITY ? p : p - atFiring * Math.exp(-(at - fired) * decay);
     }
 
-    /** Adds one pulse; false where it would last beyond the next firing. */
-    private boolean pulse(double crossing, int sign, int share, PortSpectra into) {
+    /**
+     * Adds one pulse; false where it would last beyond the next firing.
+     *
+     * @param toNext from this crossing (and so from this firing) to the next
+     */
+    private boolean pulse(
+        double crossing, double toNext, int sign, int share, PortSpectra into) {
       fired = crossing + firing;
       atFiring = Crossing.value(pRe, pIm, fired);
-      double end = extinction(sign);
+      double end = extinction(sign, toNext);
       if (Double.isNaN(end)) {
         return false;
       }
@@ -141,9 +151,9 @@ public final class PhaseDimmer implements LoadModel {
     }
 
     /** Where the current falls back to zero; NaN where it does not before the next firing. */
-    private double extinction(int sign) {
+    private double extinction(int sign, double toNext) {
       int steps = 720;
-      double width = Math.PI / steps;
+      double width = toNext / steps;
       double before = fired;
       for (int n = 1; n <= steps; n++) {
         double at = fired + n * width;
