@@ -107,8 +107,7 @@ class PfcSuppliesTest {
     for (double watts : new double[] {preset.typicalW(), preset.highW()}) {
       double perPort = preset.typicalW() > 10000 ? watts / 3 : watts;
       LoadRequest request = LoadCases.request(preset, perPort, 230, 50, 1);
-      Terminal rated =
-          Terminal.of(LoadModels.of(request), LoadCases.emf(1, 230, 0), 50, 0, 0);
+      Terminal rated = Terminal.of(LoadModels.of(request), LoadCases.emf(1, 230, 0), 50, 0, 0);
       EquipmentJudgement judged = judged(EquipmentUse.named(preset.name()), perPort, rated);
       assertThat(judged.met()).as("%s W: %s", watts, judged).isTrue();
     }
@@ -133,7 +132,8 @@ class PfcSuppliesTest {
             50,
             0,
             0);
-    // Class A is in amps whatever the power: over 2 kW it asks for less than the default dead angle.
+    // Class A is in amps whatever the power: over 2 kW it asks for less than the default dead
+    // angle.
     EquipmentJudgement judged = judged(use, watts, rated);
     assertThat(judged.limited()).isTrue();
     assertThat(judged.met()).as("%s", judged).isTrue();
@@ -183,8 +183,7 @@ class PfcSuppliesTest {
       }
     }
     Terminal drawn =
-        Terminal.of(
-            LoadModels.of(LoadCases.request(kind, 300, 1, 1)), emf, 50, 0.4, 0.25 / OMEGA);
+        Terminal.of(LoadModels.of(LoadCases.request(kind, 300, 1, 1)), emf, 50, 0.4, 0.25 / OMEGA);
     assertThat(correlation(drawn.voltage(), drawn.current())).isGreaterThan(0.995);
   }
 

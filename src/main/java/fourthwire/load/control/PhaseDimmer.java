@@ -93,8 +93,7 @@ public final class PhaseDimmer implements LoadModel {
       if (halfWave) {
         pulsed = pulse(first, Math.PI, 1, 2, current);
       } else {
-        double second =
-            Crossing.near(eRe, eIm, fundamental + Math.PI, Spectrum.HIGHEST_ORDER);
+        double second = Crossing.near(eRe, eIm, fundamental + Math.PI, Spectrum.HIGHEST_ORDER);
         pulsed =
             pulse(first, second - first, 1, 1, current)
                 && pulse(second, first + 2 * Math.PI - second, -1, 1, current);
@@ -126,8 +125,7 @@ public final class PhaseDimmer implements LoadModel {
      *
      * @param toNext from this crossing (and so from this firing) to the next
      */
-    private boolean pulse(
-        double crossing, double toNext, int sign, int share, PortSpectra into) {
+    private boolean pulse(double crossing, double toNext, int sign, int share, PortSpectra into) {
       fired = crossing + firing;
       atFiring = Crossing.value(pRe, pIm, fired);
       double end = extinction(sign, toNext);

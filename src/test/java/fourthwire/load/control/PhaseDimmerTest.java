@@ -38,8 +38,7 @@ class PhaseDimmerTest {
     for (int h = 3; h <= ORDERS; h += 2) {
       double b = (Math.sin((h + 1) * a) / (h + 1) - Math.sin((h - 1) * a) / (h - 1)) / Math.PI;
       double c =
-          ((Math.cos((h + 1) * a) - 1) / (h + 1) - (Math.cos((h - 1) * a) - 1) / (h - 1))
-              / Math.PI;
+          ((Math.cos((h + 1) * a) - 1) / (h + 1) - (Math.cos((h - 1) * a) - 1) / (h - 1)) / Math.PI;
       assertThat(current.re[0][h]).as("order %d", h).isCloseTo(full * b, within(1e-6 * full * b1));
       assertThat(current.im[0][h]).as("order %d", h).isCloseTo(full * c, within(1e-6 * full * b1));
     }
@@ -66,8 +65,14 @@ class PhaseDimmerTest {
 
   @ParameterizedTest(name = "{0} degrees, displacement factor {1}, distorted: {2}")
   @CsvSource({
-    "60, 0.95, false", "75, 0.7, false", "90, 0.85, true", "110, 0.5, true", "130, 0.9, true",
-    "45, 0.9, true", "150, 0.3, false", "100, 0.1, true"
+    "60, 0.95, false",
+    "75, 0.7, false",
+    "90, 0.85, true",
+    "110, 0.5, true",
+    "130, 0.9, true",
+    "45, 0.9, true",
+    "150, 0.3, false",
+    "100, 0.1, true"
   })
   void onResistanceAndInductanceItEqualsStepwiseIntegration(
       double degrees, double factor, boolean distorted) {
@@ -75,8 +80,7 @@ class PhaseDimmerTest {
     double ohm = 20 * factor;
     double henry = 20 * Math.sqrt(1 - factor * factor) / OMEGA;
     PortSpectra current = solve(ohm, henry, degrees, emf, 0.4, 0.25 / OMEGA);
-    Stepwise expected =
-        new Stepwise(emf, ohm + 0.4, OMEGA * henry + 0.25, Math.toRadians(degrees));
+    Stepwise expected = new Stepwise(emf, ohm + 0.4, OMEGA * henry + 0.25, Math.toRadians(degrees));
     double fundamental = Math.hypot(expected.re[1], expected.im[1]);
     for (int h = 1; h <= ORDERS; h++) {
       assertThat(Math.hypot(current.re[0][h] - expected.re[h], current.im[0][h] - expected.im[h]))
