@@ -29,6 +29,7 @@ final class CaptureJson {
     o.set("voltage_spectrum", SpectrumJson.write(c.voltageSpectrum(), SpectrumJson.VOLTS));
     o.set("power", PowerJson.write(c.power()).put("basis", c.powerBasis()));
     o.set("power_by_line", Json.map(inOrder(c.powerByLine()), PowerJson::write));
+    WaveformJson.write(o, c);
   }
 
   private static <V> Map<Conductor, V> inOrder(Map<Conductor, V> map) {
@@ -69,7 +70,11 @@ final class CaptureJson {
         SpectrumJson.read(o.path("voltage_spectrum"), SpectrumJson.VOLTS, Function.identity()),
         PowerJson.read(o.path("power")),
         o.path("power").path("basis").asString(""),
-        DesignJson.powerByLine(o));
+        DesignJson.powerByLine(o),
+        WaveformJson.unbalance(o),
+        WaveformJson.windows(o),
+        WaveformJson.events(o),
+        WaveformJson.picture(o));
   }
 
   private static CurrentFigures current(JsonNode o) {

@@ -5,6 +5,7 @@ import fourthwire.quantity.Figure;
 import fourthwire.quantity.PowerFigures;
 import fourthwire.quantity.Spectrum;
 import java.util.Map;
+import java.util.Optional;
 
 /**
  * What a waveform capture says.
@@ -25,6 +26,10 @@ import java.util.Map;
  * @param power of all lines
  * @param powerBasis how it was formed, one sentence
  * @param powerByLine by line, from its own voltage to neutral and current
+ * @param unbalance of the fundamentals
+ * @param windows the standard windows' groups and intervals; empty where there are none
+ * @param events dips, swells and interruptions
+ * @param picture the waveforms as they are drawn
  */
 public record CaptureResult(
     double frequencyHz,
@@ -39,12 +44,26 @@ public record CaptureResult(
     Map<String, Spectrum> voltageSpectrum,
     PowerFigures power,
     String powerBasis,
-    Map<Conductor, PowerFigures> powerByLine) {
+    Map<Conductor, PowerFigures> powerByLine,
+    Unbalance unbalance,
+    Optional<CaptureWindows> windows,
+    VoltageEvents events,
+    WaveformPicture picture) {
+
+  /**
+   * How unequal three lines are, percent of the positive sequence at the fundamental.
+   *
+   * @param voltagePercent negative-sequence voltage
+   * @param currentPercent negative-sequence current
+   * @param zeroSequencePercent zero-sequence current
+   */
+  public record Unbalance(
+      Figure voltagePercent, Figure currentPercent, Figure zeroSequencePercent) {}
 
   /**
    * A conductor's current.
    *
-   * @param rmsA true rms of the samples: all orders, interharmonics and the direct component
+   * @param rmsA true rms of the samples: all orders and interharmonics, without the direct component
    * @param fundamentalA order 1
    * @param thdPercent orders 2 to 50 on the fundamental
    * @param crestFactor largest sample on the rms

@@ -1,6 +1,5 @@
 package fourthwire.validation;
 
-import fourthwire.quantity.Dft;
 import fourthwire.quantity.Distortion;
 import fourthwire.quantity.Figure;
 import fourthwire.quantity.HarmonicLoss;
@@ -9,6 +8,7 @@ import fourthwire.quantity.Phasor;
 import fourthwire.quantity.Spectrum;
 import fourthwire.quantity.ThreePhasePower;
 import fourthwire.quantity.Waveform;
+import fourthwire.testsupport.Transform;
 import java.util.Arrays;
 import java.util.HashMap;
 import java.util.List;
@@ -111,7 +111,7 @@ final class QuantityChecks {
   /** A sampled current of unit fundamental on a sine of 100 V, as a capture would be evaluated. */
   private static LinePower ofSamples(Inputs in) {
     double[] samples = samples(in.text("shape"), in.whole("n"));
-    Dft current = Dft.of(samples, 1);
+    Transform current = Transform.of(samples, 1);
     double i1 = current.spectrum().magnitude(1);
     Spectrum voltage = current.spectrum().times(100 / i1);
     Spectrum sine = Spectrum.of(h -> h == 1 ? voltage.at(1) : Phasor.ZERO);
@@ -157,7 +157,7 @@ final class QuantityChecks {
         IntStream.range(0, n)
             .mapToDouble(k -> line[k] + line[(k + n / 3) % n] + line[(k + 2 * n / 3) % n])
             .toArray();
-    return Dft.of(sum, 1).rms() / Dft.of(line, 1).rms();
+    return Transform.of(sum, 1).rms() / Transform.of(line, 1).rms();
   }
 
   /** Samples in the middle of n equal steps, so that no sample stands on an edge. */

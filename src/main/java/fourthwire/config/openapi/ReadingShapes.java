@@ -89,7 +89,13 @@ final class ReadingShapes {
         .optional("spectrum", Figures.spectrum())
         .optional("voltage_spectrum", Figures.voltageSpectrum())
         .optional("power", Figures.power().text("basis", "How the sums are taken").schema())
-        .optional("power_by_line", Figures.powerByLine());
+        .optional("power_by_line", Figures.powerByLine())
+        .figureOfSome("voltage_unbalance_percent", "Of a capture: negative on positive sequence")
+        .figureOfSome("current_unbalance_percent", "Of a capture: likewise")
+        .figureOfSome("zero_sequence_percent", "Of a capture: zero on positive sequence current")
+        .optional("windows", WaveformShapes.windows())
+        .optional("events", WaveformShapes.events())
+        .optional("waveforms", WaveformShapes.waveforms());
   }
 
   private static Schema<?> captureCurrent() {

@@ -3,7 +3,7 @@ package fourthwire.intake.reading;
 import fourthwire.metering.Reading;
 import fourthwire.metering.capture.Capture;
 import fourthwire.metering.capture.CaptureAnalysis;
-import fourthwire.metering.capture.NoFundamentalException;
+import fourthwire.metering.capture.fit.NoFundamentalException;
 import fourthwire.quantity.Conductor;
 import java.util.ArrayList;
 import java.util.List;

@@ -10,11 +10,11 @@ import fourthwire.metering.ReadingKind;
 import fourthwire.metering.ReadingMapping;
 import fourthwire.metering.ReadingMapping.Column;
 import fourthwire.metering.capture.Capture;
+import fourthwire.metering.capture.wave.Samples;
 import java.time.Instant;
 import java.time.ZoneId;
 import java.time.ZoneOffset;
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
@@ -107,29 +107,24 @@ final class ComtradeFormat implements Format {
     List<String> notes = new ArrayList<>(plan.notes());
     notes.addAll(comtrade.notes());
     List<Capture.Channel> channels = new ArrayList<>();
-    List<double[]> samples = new ArrayList<>();
+    List<Samples> samples = new ArrayList<>();
     int k = 0;
     for (Map.Entry<String, AnalogChannel> e : named(comtrade.channels()).entrySet()) {
       Column column = plan.mapping().columns().get(e.getKey());
       if (column != null) {
         double ratio = ratio(e.getKey(), e.getValue(), column, setting, notes);
-        channels.add(new Capture.Channel(e.getKey(), column.quantity()));
-        samples.add(times(comtrade.samples(k), column.factor() * ratio));
+        channels.add(new Capture.Channel(e.getKey(), column.quantity(), e.getValue().skewS()));
+        samples.add(comtrade.samples(k).times(column.factor() * ratio));
       }
       k++;
     }
     Capture capture =
         new Capture(
             start(comtrade, plan, setting, notes),
-            comtrade.sampleRateHz(),
-            comtrade.timesS(),
+            comtrade.time(),
             channels,
             samples);
     return CaptureReading.of(capture, setting, notes, progress);
-  }
-
-  private static double[] times(double[] x, double factor) {
-    return Arrays.stream(x).map(value -> value * factor).toArray();
   }
 
   /** Secondary values by the record's own ratio, else for currents by the meter's. */

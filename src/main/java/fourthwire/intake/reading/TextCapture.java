@@ -10,6 +10,7 @@ import fourthwire.metering.ReadingKind;
 import fourthwire.metering.ReadingMapping;
 import fourthwire.metering.ReadingMapping.Column;
 import fourthwire.metering.capture.Capture;
+import fourthwire.metering.capture.wave.TimeAxis;
 import java.time.Duration;
 import java.time.Instant;
 import java.time.LocalDateTime;
@@ -24,7 +25,6 @@ import java.util.function.BiPredicate;
 
 /** A capture of instantaneous values as a text table. */
 final class TextCapture {
-  private static final int MOST_ROWS = 5_000_000;
   private static final ChannelMapping.Words WORDS =
       new ChannelMapping.Words(
           h -> Heading.ofCapture(h, "", ""),
@@ -139,41 +139,42 @@ final class TextCapture {
 
   private Capture capture(
       ReadingPlan plan, ReadingSetting setting, Samples samples, Map<String, Column> columns) {
-    double[] t = samples.times(plan.mapping().sampleRateHz(), table.headings());
+    TimeAxis axis = samples.axis(plan.mapping().sampleRateHz(), table.headings());
     List<Capture.Channel> channels = new ArrayList<>();
     columns.forEach((name, column) -> channels.add(new Capture.Channel(name, column.quantity())));
     Optional<ZoneId> zone = plan.mapping().time().zone().map(ZoneId::of).or(setting::siteZone);
     Optional<Instant> start =
         samples.first().flatMap(local -> zone.map(z -> local.atZone(z).toInstant()));
-    double rate = (t.length - 1) / t[t.length - 1];
-    return new Capture(start, OptionalDouble.of(rate), t, channels, samples.columns());
+    return new Capture(start, axis, channels, samples.columns());
   }
 
   /** Rows gathered. */
   private static final class Samples {
-    private double[][] columns;
+    private final List<fourthwire.metering.capture.wave.Samples.Gatherer> columns =
+        new ArrayList<>();
     private double[] times = new double[4096];
     private int rows;
     private Optional<LocalDateTime> first = Optional.empty();
 
     Samples(int channels) {
-      this.columns = new double[channels][4096];
+      for (int k = 0; k < channels; k++) {
+        columns.add(new fourthwire.metering.capture.wave.Samples.Gatherer(4096));
+      }
     }
 
     void add(double seconds, double[] values) {
+      if ((long) (rows + 1) * values.length > Capture.MOST_SAMPLES) {
+        throw new ReadingRefusedException(
+            "The capture has more than "
+                + Capture.MOST_SAMPLES
+                + " samples of all channels: cut it into shorter files.");
+      }
       if (rows == times.length) {
-        if (rows >= MOST_ROWS) {
-          throw new ReadingRefusedException(
-              "The capture has more than " + MOST_ROWS + " rows: cut it into shorter files.");
-        }
         times = Arrays.copyOf(times, 2 * rows);
-        for (int k = 0; k < columns.length; k++) {
-          columns[k] = Arrays.copyOf(columns[k], 2 * rows);
-        }
       }
       times[rows] = seconds;
       for (int k = 0; k < values.length; k++) {
-        columns[k][rows] = values[k];
+        columns.get(k).add(values[k]);
       }
       rows++;
     }
@@ -187,13 +188,14 @@ final class TextCapture {
       return first;
     }
 
-    List<double[]> columns() {
-      return Arrays.stream(columns).map(c -> Arrays.copyOf(c, rows)).toList();
+    List<fourthwire.metering.capture.wave.Samples> columns() {
+      return columns.stream()
+          .map(fourthwire.metering.capture.wave.Samples.Gatherer::done)
+          .toList();
     }
 
     /** Times after the first; printed to few digits they are put on an even grid. */
-    double[] times(OptionalDouble rateHz, List<String> headings) {
-      double[] t = new double[rows];
+    TimeAxis axis(OptionalDouble rateHz, List<String> headings) {
       double span = rows < 2 ? 0 : times[rows - 1] - times[0];
       double step = rateHz.isPresent() ? 1 / rateHz.getAsDouble() : span / Math.max(1, rows - 1);
       if (rows < 2 || !(step > 0)) {
@@ -205,8 +207,7 @@ final class TextCapture {
                     "sample_rate_hz", "or give the samples a second")));
       }
       for (int k = 0; k < rows; k++) {
-        t[k] = k * step;
-        if (rateHz.isEmpty() && !(Math.abs(times[k] - times[0] - t[k]) < 2 * step)) {
+        if (rateHz.isEmpty() && !(Math.abs(times[k] - times[0] - k * step) < 2 * step)) {
           throw new ReadingRefusedException(
               "Sample "
                   + (k + 1)
@@ -218,7 +219,7 @@ final class TextCapture {
                       "sample_rate_hz", "give the samples a second if they are even after all")));
         }
       }
-      return t;
+      return TimeAxis.even(1 / step, rows);
     }
   }
 }

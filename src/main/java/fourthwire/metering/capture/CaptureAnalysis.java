@@ -4,54 +4,83 @@ import fourthwire.metering.CaptureResult;
 import fourthwire.metering.Period;
 import fourthwire.metering.Reading;
 import fourthwire.metering.ReadingKind;
+import fourthwire.metering.capture.window.PhaseTrack;
+import fourthwire.metering.capture.window.WindowAnalysis;
 import fourthwire.quantity.Conductor;
 import fourthwire.quantity.Distortion;
 import fourthwire.quantity.Figure;
 import fourthwire.quantity.Spectrum;
+import fourthwire.quantity.SymmetricalComponents;
 import java.time.Instant;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.function.Function;
 
 /**
  * Turns a waveform capture into what it says.
  *
- * <p>The fundamental is found from the samples, whatever rate the file states for it; spectra are
- * the least-squares fit of orders 1 to 50 over the largest whole number of cycles, so the sampling
- * need not be synchronous. Rms and power are those of the samples without the direct component: a
- * current transformer passes none, so what an instrument shows there is its own offset, reported in
- * the findings. For a signal of harmonic orders all figures are exact to rounding; noise of rms σ
- * leaves about σ·√(2/samples) on each order.
- *
- * <p>Not made here: the 10/12-cycle windows, groups and aggregation of IEC 61000-4-7 and -4-30.
+ * <p>The fundamental is found from the samples, so the sampling need not be synchronous. A record of
+ * ten cycles (60 Hz: twelve) or more is cut into gapless windows resampled to whole cycles; its
+ * figures are their root mean squares, and groups and standard intervals come with them. A shorter
+ * one, or one sampled unevenly, has orders 1 to 50 fitted to its largest whole number of cycles by
+ * least squares, and nothing else. Rms and power are those of the samples without the direct
+ * component: a current transformer passes none, so what an instrument shows there is its own offset,
+ * reported in the findings. For a signal of harmonic orders all figures are exact within 1e-5; noise
+ * of rms σ leaves about σ·√(2/samples) on each order.
  */
 public final class CaptureAnalysis {
   /** Below this share a fundamental is noise; common practice, no source. */
   private static final double LEAST_FUNDAMENTAL = 1e-3;
 
   private final Capture capture;
-  private final Window window;
-  private final Fits fits;
+  private final Capture whole;
+  private final boolean complete;
+  private final OptionalDouble nominalV;
+  private final Extent extent;
+  private final Optional<WindowAnalysis> windows;
+  private final Channels channels;
   private final Neutral neutral;
 
-  private CaptureAnalysis(Capture capture, double nominalHz) {
+  private CaptureAnalysis(Capture capture, double siteHz, OptionalDouble nominalV) {
     this.capture = capture;
-    this.window = Window.of(capture, nominalHz);
-    this.fits = new Fits(capture, window);
-    this.neutral = Neutral.of(fits);
+    this.nominalV = nominalV;
+    Optional<Capture> filled = new Gaps(capture, siteHz).filled();
+    this.whole = filled.orElse(capture);
+    this.complete = filled.isPresent();
+    Extent found = new ExtentFinder(whole, siteHz).find();
+    this.extent = complete ? found : found.withoutWindows();
+    this.windows = extent.track().map(t -> WindowChannels.analysis(whole, extent, t));
+    this.channels =
+        windows
+            .map(w -> WindowChannels.of(w, whole))
+            .orElseGet(() -> FitChannels.of(whole, extent));
+    this.neutral = Neutral.of(channels);
+  }
+
+  /**
+   * Analyses a capture of a site whose nominal voltage is not known.
+   *
+   * @see #of(Capture, double, OptionalDouble, List)
+   */
+  public static Reading of(Capture capture, double siteHz, List<String> notes) {
+    return of(capture, siteHz, OptionalDouble.empty(), notes);
   }
 
   /**
    * Analyses a capture.
    *
-   * @param nominalHz the site's frequency, 50 or 60; the fundamental is looked for within 20 % of
-   *     it
+   * @param siteHz the site's frequency, 50 or 60, for a record too short to show its own
+   * @param nominalV the site's line-to-neutral voltage at the meter
    * @param notes how the file was read, put before what is noted here
-   * @throws NoFundamentalException where there is no whole cycle of a steady fundamental
+   * @throws fourthwire.metering.capture.fit.NoFundamentalException where there is no whole cycle of
+   *     a fundamental
    */
-  public static Reading of(Capture capture, double nominalHz, List<String> notes) {
-    return new CaptureAnalysis(capture, nominalHz).reading(notes);
+  public static Reading of(
+      Capture capture, double siteHz, OptionalDouble nominalV, List<String> notes) {
+    return new CaptureAnalysis(capture, siteHz, nominalV).reading(notes);
   }
 
   private Reading reading(List<String> notes) {
@@ -59,16 +88,15 @@ public final class CaptureAnalysis {
         ReadingKind.CAPTURE,
         period(),
         capture.count(),
-        capture.sampleRateHz(),
+        capture.time().rateHz(),
         notes,
-        new CaptureQuality(capture, window, fits, neutral).findings(),
+        new CaptureQuality(capture, extent, channels, neutral).findings(),
         Optional.empty(),
         Optional.of(result()));
   }
 
   private Optional<Period> period() {
-    double[] t = capture.timesS();
-    double span = t.length * t[t.length - 1] / (t.length - 1);
+    double span = capture.time().spanS(capture.count());
     return capture.start().map(from -> new Period(from, plus(from, span)));
   }
 
@@ -79,13 +107,13 @@ public final class CaptureAnalysis {
   private CaptureResult result() {
     Map<Conductor, CaptureResult.CurrentFigures> current = new LinkedHashMap<>();
     Map<Conductor, Spectrum> spectrum = new LinkedHashMap<>();
-    double largestLineA = largestLine(Fits.LINES.stream().map(l -> l + ".i").toList());
+    double largestLineA = largestLine(Channels.LINES.stream().map(l -> l + ".i").toList());
     for (Conductor c : Conductor.values()) {
-      Optional<HarmonicFit> fit = c.isLine() ? fits.current(c) : neutral.fit();
+      Optional<ChannelFigures> fit = c.isLine() ? channels.current(c) : neutral.fit();
       fit.ifPresent(
           f -> {
             current.put(c, currentFigures(f, largestLineA));
-            spectrum.put(c, fits.spectrum(f));
+            spectrum.put(c, f.spectrum());
           });
     }
     Map<String, CaptureResult.VoltageFigures> voltage = new LinkedHashMap<>();
@@ -94,28 +122,65 @@ public final class CaptureAnalysis {
         largestLine(
             voltageKeys().stream().filter(k -> k.startsWith("L")).map(k -> k + ".v").toList());
     for (String key : voltageKeys()) {
-      HarmonicFit f = fits.find(key + ".v").orElseThrow();
+      ChannelFigures f = channels.find(key + ".v").orElseThrow();
       voltage.put(key, voltageFigures(f, largestLineV));
-      voltageSpectrum.put(key, fits.spectrum(f));
+      voltageSpectrum.put(key, f.spectrum());
     }
-    CapturePower power = CapturePower.of(fits, neutral);
+    CapturePower power = CapturePower.of(channels, neutral);
     return new CaptureResult(
-        window.frequencyHz(),
-        window.cycles(),
-        window.basis(),
+        extent.frequencyHz(),
+        extent.cycles(),
+        extent.basis(),
         current,
         percentOfMeanLine(),
         neutral.basis(),
         neutral
             .channel()
-            .map(c -> Figure.of(c.alternatingRms()))
+            .map(c -> Figure.of(c.rms()))
             .orElse(Figure.unknown("no channel is mapped as N")),
         voltage,
         spectrum,
         voltageSpectrum,
         power.total(),
         power.basis(),
-        power.byLine());
+        power.byLine(),
+        unbalance(),
+        windows.map(w -> new WindowFigures(w, extent, capture).of()),
+        EventFinder.of(whole, clock(), nominalV),
+        PictureMaker.of(capture));
+  }
+
+  /** The fundamental's clock, of any evenly sampled record. */
+  private Optional<PhaseTrack> clock() {
+    return extent.track().or(() -> steadyClock());
+  }
+
+  private Optional<PhaseTrack> steadyClock() {
+    boolean even = whole.time().isEven() && complete;
+    return even
+        ? Optional.of(
+            PhaseTrack.steady(whole.time().rateHz().orElseThrow() / extent.frequencyHz()))
+        : Optional.empty();
+  }
+
+  private CaptureResult.Unbalance unbalance() {
+    return new CaptureResult.Unbalance(
+        sequences(".v", SymmetricalComponents::negativePercent, "voltages"),
+        sequences(".i", SymmetricalComponents::negativePercent, "currents"),
+        sequences(".i", SymmetricalComponents::zeroPercent, "currents"));
+  }
+
+  private Figure sequences(
+      String kind, Function<SymmetricalComponents, Figure> of, String what) {
+    List<Spectrum> lines =
+        Channels.LINES.stream()
+            .map(l -> channels.find(l + kind))
+            .flatMap(Optional::stream)
+            .map(ChannelFigures::spectrum)
+            .toList();
+    return lines.size() == 3
+        ? of.apply(SymmetricalComponents.of(lines))
+        : Figure.unknown("not all three lines' " + what + " were recorded");
   }
 
   /** The channels' own voltages; line-to-line ones that were only formed here are left out. */
@@ -129,35 +194,35 @@ public final class CaptureAnalysis {
   }
 
   private Figure percentOfMeanLine() {
-    double mean = fits.meanLineA();
+    double mean = channels.meanLineA();
     return neutral
         .fit()
         .filter(n -> mean > 0)
-        .map(n -> Figure.of(100 * n.alternatingRms() / mean))
+        .map(n -> Figure.of(100 * n.rms() / mean))
         .orElse(Figure.unknown(mean > 0 ? neutral.basis() : "no line current"));
   }
 
-  private CaptureResult.CurrentFigures currentFigures(HarmonicFit fit, double largestLineA) {
+  private CaptureResult.CurrentFigures currentFigures(ChannelFigures fit, double largestLineA) {
     return new CaptureResult.CurrentFigures(
-        Figure.of(fit.alternatingRms()),
-        Figure.of(fit.at(1).magnitude()),
+        Figure.of(fit.rms()),
+        Figure.of(fit.spectrum().at(1).magnitude()),
         thdPercent(fit, largestLineA),
         crest(fit));
   }
 
-  private CaptureResult.VoltageFigures voltageFigures(HarmonicFit fit, double largestLineV) {
+  private CaptureResult.VoltageFigures voltageFigures(ChannelFigures fit, double largestLineV) {
     return new CaptureResult.VoltageFigures(
-        Figure.of(fit.alternatingRms()),
-        Figure.of(fit.at(1).magnitude()),
+        Figure.of(fit.rms()),
+        Figure.of(fit.spectrum().at(1).magnitude()),
         thdPercent(fit, largestLineV),
         crest(fit));
   }
 
   private double largestLine(List<String> quantities) {
     return quantities.stream()
-        .map(fits::find)
+        .map(channels::find)
         .flatMap(Optional::stream)
-        .mapToDouble(f -> f.at(1).magnitude())
+        .mapToDouble(f -> f.spectrum().at(1).magnitude())
         .max()
         .orElse(0);
   }
@@ -165,17 +230,17 @@ public final class CaptureAnalysis {
   /**
    * On a fundamental that is only noise beside its channel or its lines, distortion says nothing.
    */
-  private Figure thdPercent(HarmonicFit fit, double largestLine) {
-    double fundamental = fit.at(1).magnitude();
-    return fundamental < LEAST_FUNDAMENTAL * Math.max(fit.alternatingRms(), largestLine)
+  private Figure thdPercent(ChannelFigures fit, double largestLine) {
+    double fundamental = fit.spectrum().at(1).magnitude();
+    return fundamental < LEAST_FUNDAMENTAL * Math.max(fit.rms(), largestLine)
         ? Figure.unknown(
             "the fundamental is below 0.1 % of the channel's rms or of the largest line's"
                 + " fundamental: too small to refer to")
-        : Distortion.thdPercent(fits.spectrum(fit));
+        : Distortion.thdPercent(fit.spectrum());
   }
 
-  private static Figure crest(HarmonicFit fit) {
-    double rms = fit.alternatingRms();
+  private static Figure crest(ChannelFigures fit) {
+    double rms = fit.rms();
     return rms > 0 ? Figure.of(fit.peak() / rms) : Figure.unknown("nothing flows");
   }
 }

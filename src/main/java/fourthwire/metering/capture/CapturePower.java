@@ -20,18 +20,17 @@ import java.util.Optional;
  */
 record CapturePower(PowerFigures total, String basis, Map<Conductor, PowerFigures> byLine) {
 
-  static CapturePower of(Fits fits, Neutral neutral) {
+  static CapturePower of(Channels channels, Neutral neutral) {
     Map<Conductor, LinePower> byLine = new LinkedHashMap<>();
-    for (Conductor line : fits.linesWithPower()) {
-      byLine.put(
-          line, line(fits, fits.voltage(line).orElseThrow(), fits.current(line).orElseThrow()));
+    for (Conductor line : channels.linesWithPower()) {
+      byLine.put(line, line(channels, line));
     }
     Map<Conductor, PowerFigures> figures = new LinkedHashMap<>();
     byLine.forEach((line, power) -> figures.put(line, power.figures()));
-    List<Conductor> lines = fits.lines();
+    List<Conductor> lines = channels.lines();
     if (byLine.size() == 3) {
       return new CapturePower(
-          fourWire(fits, neutral, byLine),
+          fourWire(channels, neutral, byLine),
           "Effective three-phase power, four wires (IEEE 1459-2010, 3.2.3), "
               + (neutral.isMeasured()
                   ? "the neutral current as measured."
@@ -39,9 +38,9 @@ record CapturePower(PowerFigures total, String basis, Map<Conductor, PowerFigure
                       + " measurement of it."),
           figures);
     }
-    if (lines.size() == 3 && Fits.PAIRS.stream().allMatch(p -> fits.find(p + ".v").isPresent())) {
+    if (lines.size() == 3 && Channels.PAIRS.stream().allMatch(p -> channels.find(p + ".v").isPresent())) {
       return new CapturePower(
-          threeWire(fits), "Effective three-phase power, three wires (IEEE 1459-2010).", figures);
+          threeWire(channels), "Effective three-phase power, three wires (IEEE 1459-2010).", figures);
     }
     if (!byLine.isEmpty() && byLine.size() == lines.size()) {
       return new CapturePower(
@@ -53,36 +52,38 @@ record CapturePower(PowerFigures total, String basis, Map<Conductor, PowerFigure
     return new CapturePower(PowerFigures.unknown(reason), "Not known: " + reason + ".", figures);
   }
 
-  private static LinePower line(Fits fits, HarmonicFit voltage, HarmonicFit current) {
+  private static LinePower line(Channels channels, Conductor line) {
+    ChannelFigures voltage = channels.voltage(line).orElseThrow();
+    ChannelFigures current = channels.current(line).orElseThrow();
     return LinePower.of(
-        fits.spectrum(voltage),
-        fits.spectrum(current),
-        voltage.alternatingRms(),
-        current.alternatingRms(),
-        voltage.activePower(current));
+        voltage.spectrum(),
+        current.spectrum(),
+        voltage.rms(),
+        current.rms(),
+        channels.activeW(line));
   }
 
   private static PowerFigures fourWire(
-      Fits fits, Neutral neutral, Map<Conductor, LinePower> byLine) {
-    Optional<HarmonicFit> n = neutral.fit().filter(fit -> neutral.isMeasured());
-    List<HarmonicFit> v = Fits.LINES.stream().map(l -> fits.voltage(l).orElseThrow()).toList();
-    List<HarmonicFit> i = Fits.LINES.stream().map(l -> fits.current(l).orElseThrow()).toList();
-    List<HarmonicFit> u = Fits.PAIRS.stream().map(p -> fits.find(p + ".v").orElseThrow()).toList();
+      Channels channels, Neutral neutral, Map<Conductor, LinePower> byLine) {
+    Optional<ChannelFigures> n = neutral.fit().filter(fit -> neutral.isMeasured());
+    List<ChannelFigures> v = Channels.LINES.stream().map(l -> channels.voltage(l).orElseThrow()).toList();
+    List<ChannelFigures> i = Channels.LINES.stream().map(l -> channels.current(l).orElseThrow()).toList();
+    List<ChannelFigures> u = Channels.PAIRS.stream().map(p -> channels.find(p + ".v").orElseThrow()).toList();
     ThreePhasePower orders =
         ThreePhasePower.fourWire(
-            spectra(fits, v), spectra(fits, i), n.map(fits::spectrum).orElse(Spectrum.ZERO));
+            spectra(v), spectra(i), n.map(ChannelFigures::spectrum).orElse(Spectrum.ZERO));
     double p = byLine.values().stream().mapToDouble(LinePower::activeW).sum();
     double ve = Math.sqrt((3 * squares(v) + squares(u)) / 18);
     double ie = Math.sqrt((squares(i) + squares(n.stream().toList())) / 3);
     return withTotals(orders, p, ve, ie);
   }
 
-  private static PowerFigures threeWire(Fits fits) {
-    List<HarmonicFit> i = Fits.LINES.stream().map(l -> fits.current(l).orElseThrow()).toList();
-    List<HarmonicFit> u = Fits.PAIRS.stream().map(p -> fits.find(p + ".v").orElseThrow()).toList();
-    ThreePhasePower orders = ThreePhasePower.threeWire(spectra(fits, u), spectra(fits, i));
+  private static PowerFigures threeWire(Channels channels) {
+    List<ChannelFigures> i = Channels.LINES.stream().map(l -> channels.current(l).orElseThrow()).toList();
+    List<ChannelFigures> u = Channels.PAIRS.stream().map(p -> channels.find(p + ".v").orElseThrow()).toList();
+    ThreePhasePower orders = ThreePhasePower.threeWire(spectra(u), spectra(i));
     // Two wattmeters: P = V13·I1 + V23·I2.
-    double p = u.get(1).activePower(i.get(1)) - u.get(2).activePower(i.get(0));
+    double p = channels.activeW("L2-L3.v", "L2.i") - channels.activeW("L3-L1.v", "L1.i");
     return withTotals(orders, p, Math.sqrt(squares(u) / 9), Math.sqrt(squares(i) / 3));
   }
 
@@ -99,11 +100,11 @@ record CapturePower(PowerFigures total, String basis, Map<Conductor, PowerFigure
         .figures();
   }
 
-  private static List<Spectrum> spectra(Fits fits, List<HarmonicFit> of) {
-    return of.stream().map(fits::spectrum).toList();
+  private static List<Spectrum> spectra(List<ChannelFigures> of) {
+    return of.stream().map(ChannelFigures::spectrum).toList();
   }
 
-  private static double squares(List<HarmonicFit> of) {
-    return of.stream().mapToDouble(f -> Math.pow(f.alternatingRms(), 2)).sum();
+  private static double squares(List<ChannelFigures> of) {
+    return of.stream().mapToDouble(f -> Math.pow(f.rms(), 2)).sum();
   }
 }

@@ -1,9 +1,5 @@
 package fourthwire.metering.capture;
 
-import static fourthwire.metering.QualityFinding.CLIPPED;
-import static fourthwire.metering.QualityFinding.DIRECT_COMPONENT;
-import static fourthwire.metering.QualityFinding.FLAT_LINE;
-import static fourthwire.metering.QualityFinding.MISSING_VALUES;
 import static fourthwire.metering.QualityFinding.NEUTRAL_NOT_SUM;
 import static fourthwire.metering.QualityFinding.REVERSED_CLAMP;
 import static fourthwire.metering.QualityFinding.SHORT_RECORD;
@@ -27,19 +23,16 @@ final class CaptureQuality {
   /** A line carrying less than this share of the mean is too small to judge its angle. */
   private static final double IDLE = 0.02;
 
-  private static final double DIRECT = 0.01;
-  private static final int FLAT_TOP = 4;
-
   private final Capture capture;
-  private final Window window;
-  private final Fits fits;
+  private final Extent extent;
+  private final Channels channels;
   private final Neutral neutral;
   private final List<QualityFinding> findings = new ArrayList<>();
 
-  CaptureQuality(Capture capture, Window window, Fits fits, Neutral neutral) {
+  CaptureQuality(Capture capture, Extent extent, Channels channels, Neutral neutral) {
     this.capture = capture;
-    this.window = window;
-    this.fits = fits;
+    this.extent = extent;
+    this.channels = channels;
     this.neutral = neutral;
   }
 
@@ -49,12 +42,13 @@ final class CaptureQuality {
     voltageLeads();
     clamps();
     for (Capture.Channel channel : capture.channels()) {
-      double[] x = capture.find(channel.quantity()).orElseThrow();
-      missing(channel, x);
-      if (!flat(channel, x)) {
-        clipped(channel, x);
-        direct(channel);
-      }
+      findings.addAll(
+          new ChannelQuality(
+                  channel,
+                  capture.of(channel),
+                  channels.find(channel.quantity()).orElseThrow(),
+                  extent)
+              .findings());
     }
     shortRecord();
     return List.copyOf(findings);
@@ -68,10 +62,6 @@ final class CaptureQuality {
 
   private String name(String quantity) {
     return capture.nameOf(quantity).orElse(quantity);
-  }
-
-  private static String amount(Capture.Channel channel, double value) {
-    return Amount.of(value, Amount.unit(channel.quantity()));
   }
 
   private void neutralChannel() {
@@ -89,14 +79,14 @@ final class CaptureQuality {
           "Channel %s, mapped as N, reads %.2f A rms, but the three line currents sum to %.2f A rms:"
               + " it is not the neutral of these lines.",
           name("N.i"),
-          neutral.channel().orElseThrow().alternatingRms(),
-          fits.sumOfLines().orElseThrow().alternatingRms());
+          neutral.channel().orElseThrow().rms(),
+          channels.sumOfLines().orElseThrow().rms());
     }
   }
 
   private void voltageLeads() {
     List<Phasor> v = new ArrayList<>();
-    Fits.LINES.forEach(l -> fits.voltage(l).ifPresent(f -> v.add(f.at(1))));
+    Channels.LINES.forEach(l -> channels.voltage(l).ifPresent(f -> v.add(f.spectrum().at(1))));
     if (v.size() == 3 && Wiring.voltagesRunBackwards(v)) {
       add(
           SWAPPED_LINES,
@@ -109,9 +99,9 @@ final class CaptureQuality {
 
   private void clamps() {
     List<Conductor> lines =
-        fits.linesWithPower().stream()
-            .filter(l -> magnitude(fits.current(l)) > IDLE * fits.meanLineA())
-            .filter(l -> magnitude(fits.voltage(l)) > 0)
+        channels.linesWithPower().stream()
+            .filter(l -> magnitude(channels.current(l)) > IDLE * channels.meanLineA())
+            .filter(l -> magnitude(channels.voltage(l)) > 0)
             .toList();
     if (lines.isEmpty()) {
       return;
@@ -119,8 +109,8 @@ final class CaptureQuality {
     Optional<Wiring.Clamps> mended =
         Wiring.mended(
             lines,
-            l -> fits.voltage(l).orElseThrow().at(1),
-            l -> fits.current(l).orElseThrow().at(1));
+            l -> channels.voltage(l).orElseThrow().spectrum().at(1),
+            l -> channels.current(l).orElseThrow().spectrum().at(1));
     if (mended.isPresent()) {
       mended.ifPresent(this::clamps);
     } else {
@@ -128,12 +118,12 @@ final class CaptureQuality {
     }
   }
 
-  private static double magnitude(Optional<HarmonicFit> fit) {
-    return fit.map(f -> f.at(1).magnitude()).orElse(0.0);
+  private static double magnitude(Optional<ChannelFigures> fit) {
+    return fit.map(f -> f.spectrum().at(1).magnitude()).orElse(0.0);
   }
 
   private boolean feedsBack(Conductor line) {
-    return fits.voltage(line).orElseThrow().activePower(fits.current(line).orElseThrow()) < 0;
+    return channels.activeW(line) < 0;
   }
 
   private void clamps(Wiring.Clamps clamps) {
@@ -160,107 +150,17 @@ final class CaptureQuality {
             + " points the wrong way, or this line feeds power back.",
         line,
         name(line + ".i"),
-        Amount.of(
-            fits.voltage(line).orElseThrow().activePower(fits.current(line).orElseThrow()), "W"));
-  }
-
-  private void missing(Capture.Channel channel, double[] x) {
-    int missing = 0;
-    for (double value : x) {
-      missing += Double.isNaN(value) ? 1 : 0;
-    }
-    if (missing > 0) {
-      add(
-          MISSING_VALUES,
-          "The figures are formed from the samples that are there.",
-          "Channel %s: %d of %d samples were not recorded.",
-          channel.name(),
-          missing,
-          x.length);
-    }
-  }
-
-  private boolean flat(Capture.Channel channel, double[] x) {
-    double first = x[0];
-    for (double value : x) {
-      if (value != first && !Double.isNaN(value)) {
-        return false;
-      }
-    }
-    add(
-        FLAT_LINE,
-        "Its figures are of a channel that was not connected.",
-        "Channel %s reads %s in every sample.",
-        channel.name(),
-        amount(channel, first));
-    return true;
-  }
-
-  /** Runs of equal samples at the very top or bottom: an input at the end of its range. */
-  private void clipped(Capture.Channel channel, double[] x) {
-    double highest = Double.NEGATIVE_INFINITY;
-    double lowest = Double.POSITIVE_INFINITY;
-    double step = Double.POSITIVE_INFINITY;
-    for (int k = 0; k < x.length; k++) {
-      highest = Double.isNaN(x[k]) ? highest : Math.max(highest, x[k]);
-      lowest = Double.isNaN(x[k]) ? lowest : Math.min(lowest, x[k]);
-      double moved = k == 0 ? 0 : Math.abs(x[k] - x[k - 1]);
-      step = moved > 0 ? Math.min(step, moved) : step;
-    }
-    int length = FLAT_TOP + crestSamples(step, (highest - lowest) / 2);
-    int runs = runs(x, highest, length) + runs(x, lowest, length);
-    // One flat crest is chance; a clipped wave has one in most cycles.
-    if (runs > Math.max(1, window.cycles() / 2)) {
-      add(
-          CLIPPED,
-          "Peaks are cut off: rms reads low and the odd orders high.",
-          "Channel %s stands still at %s or %s for %d samples or more, %d times.",
-          channel.name(),
-          amount(channel, highest),
-          amount(channel, lowest),
-          length,
-          runs);
-    }
-  }
-
-  /** How many samples the crest of a sine stays within one step of the instrument's resolution. */
-  private int crestSamples(double step, double amplitude) {
-    double angle = 2 * Math.acos(Math.max(-1, 1 - step / amplitude));
-    return (int) Math.ceil(angle / (2 * Math.PI) * window.samples() / window.cycles());
-  }
-
-  private static int runs(double[] x, double level, int least) {
-    int runs = 0;
-    int length = 0;
-    for (double value : x) {
-      length = value == level ? length + 1 : 0;
-      runs += length == least ? 1 : 0;
-    }
-    return runs;
-  }
-
-  private void direct(Capture.Channel channel) {
-    HarmonicFit fit = fits.find(channel.quantity()).orElseThrow();
-    if (channel.quantity().startsWith("L")
-        && Math.abs(fit.direct()) > DIRECT * fit.alternatingRms()) {
-      add(
-          DIRECT_COMPONENT,
-          "It is left out of rms and power.",
-          "Channel %s has a direct component of %s, %.1f %% of its alternating rms.",
-          channel.name(),
-          amount(channel, fit.direct()),
-          100 * Math.abs(fit.direct()) / fit.alternatingRms());
-    }
+        Amount.of(channels.activeW(line), "W"));
   }
 
   private void shortRecord() {
-    if (window.cycles() < window.standardCycles()) {
+    if (extent.cycles() < extent.standardCycles()) {
       add(
           SHORT_RECORD,
           "The figures are of these cycles only, a snapshot.",
-          "%s, so no standard aggregation: the measuring window of IEC 61000-4-30 is %d cycles.",
-          window.count(),
-          window.standardCycles());
+          "%s, so no standard aggregation: the measuring extent of IEC 61000-4-30 is %d cycles.",
+          extent.count(),
+          extent.standardCycles());
     }
   }
 }

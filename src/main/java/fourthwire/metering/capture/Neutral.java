@@ -14,7 +14,7 @@ import java.util.Optional;
  * @param basis where N comes from, one sentence
  */
 record Neutral(
-    Optional<HarmonicFit> fit, Optional<HarmonicFit> channel, Agreement agreement, String basis) {
+    Optional<ChannelFigures> fit, Optional<ChannelFigures> channel, Agreement agreement, String basis) {
   /** Instruments of class 1 at the end of their range, and earth leakage, stay within this. */
   private static final double OF_SUM = 0.1;
 
@@ -30,12 +30,12 @@ record Neutral(
     DIFFERENT
   }
 
-  static Neutral of(Fits fits) {
-    Optional<HarmonicFit> channel = fits.current(Conductor.N);
-    Optional<HarmonicFit> sum = fits.sumOfLines();
+  static Neutral of(Channels channels) {
+    Optional<ChannelFigures> channel = channels.current(Conductor.N);
+    Optional<ChannelFigures> sum = channels.sumOfLines();
     Agreement agreement =
         channel.isPresent() && sum.isPresent()
-            ? compare(channel.get(), sum.get(), fits.meanLineA())
+            ? compare(channel.get(), sum.get(), channels)
             : Agreement.NOT_COMPARED;
     boolean own = channel.isPresent() && (agreement == Agreement.SAME || sum.isEmpty());
     return new Neutral(own ? channel : sum, channel, agreement, basis(channel, sum, agreement));
@@ -46,26 +46,25 @@ record Neutral(
     return channel.isPresent() && agreement != Agreement.DIFFERENT;
   }
 
-  private static Agreement compare(HarmonicFit channel, HarmonicFit sum, double meanLineA) {
+  private static Agreement compare(
+      ChannelFigures channel, ChannelFigures sum, Channels channels) {
     double allowed =
-        OF_SUM * Math.max(sum.alternatingRms(), channel.alternatingRms()) + OF_LINE * meanLineA;
-    if (distance(channel, sum, 1) <= allowed) {
+        OF_SUM * Math.max(sum.rms(), channel.rms()) + OF_LINE * channels.meanLineA();
+    double product = channels.neutralTimesSum();
+    if (distance(channel, sum, product) <= allowed) {
       return Agreement.SAME;
     }
-    return distance(channel, sum, -1) <= allowed ? Agreement.OPPOSITE : Agreement.DIFFERENT;
+    return distance(channel, sum, -product) <= allowed ? Agreement.OPPOSITE : Agreement.DIFFERENT;
   }
 
-  /** Rms of channel - sign·sum. */
-  private static double distance(HarmonicFit channel, HarmonicFit sum, double sign) {
-    double square =
-        Math.pow(channel.alternatingRms(), 2)
-            + Math.pow(sum.alternatingRms(), 2)
-            - 2 * sign * channel.activePower(sum);
-    return Math.sqrt(Math.max(0, square));
+  /** Rms of the difference of two currents whose mean product is this. */
+  private static double distance(ChannelFigures channel, ChannelFigures sum, double product) {
+    return Math.sqrt(
+        Math.max(0, Math.pow(channel.rms(), 2) + Math.pow(sum.rms(), 2) - 2 * product));
   }
 
   private static String basis(
-      Optional<HarmonicFit> channel, Optional<HarmonicFit> sum, Agreement agreement) {
+      Optional<ChannelFigures> channel, Optional<ChannelFigures> sum, Agreement agreement) {
     if (sum.isEmpty()) {
       return channel.isPresent()
           ? "As its channel reads; not all three lines were recorded, so it can't be checked."
@@ -79,7 +78,7 @@ record Neutral(
           String.format(
               Locale.ROOT,
               "The sum of the line currents: the channel mapped as N reads %.2f A and is not it.",
-              channel.map(HarmonicFit::alternatingRms).orElse(0.0));
+              channel.map(ChannelFigures::rms).orElse(0.0));
     };
   }
 }

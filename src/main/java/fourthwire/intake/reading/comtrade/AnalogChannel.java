@@ -9,6 +9,7 @@ package fourthwire.intake.reading.comtrade;
  * @param a multiplier
  * @param b offset
  * @param skewS time the channel is sampled after the sample's time, seconds
+ * @param highest end of the range of x
  * @param primary primary rating of its instrument transformer
  * @param secondary secondary rating
  * @param secondaryValues whether a·x + b is the secondary value (S), not the primary one (P)
@@ -20,6 +21,7 @@ public record AnalogChannel(
     double a,
     double b,
     double skewS,
+    double highest,
     double primary,
     double secondary,
     boolean secondaryValues) {

@@ -1,5 +1,7 @@
 package fourthwire.intake.reading.comtrade;
 
+import fourthwire.metering.capture.wave.Samples;
+import fourthwire.metering.capture.wave.TimeAxis;
 import java.time.LocalDateTime;
 import java.util.List;
 import java.util.Optional;
@@ -11,14 +13,15 @@ import java.util.OptionalDouble;
  */
 public final class Comtrade {
   private final Configuration configuration;
-  private final double[] timesS;
-  private final double[][] samples;
+  private final TimeAxis time;
+  private final List<Samples> samples;
   private final List<String> notes;
 
-  Comtrade(Configuration configuration, double[] timesS, double[][] samples, List<String> notes) {
+  Comtrade(
+      Configuration configuration, TimeAxis time, List<Samples> samples, List<String> notes) {
     this.configuration = configuration;
-    this.timesS = timesS;
-    this.samples = samples;
+    this.time = time;
+    this.samples = List.copyOf(samples);
     this.notes = List.copyOf(notes);
   }
 
@@ -58,22 +61,13 @@ public final class Comtrade {
   }
 
   /** Samples of a channel, from 0, as a·x + b; NaN where the record marks them as missing. */
-  public double[] samples(int channel) {
-    return samples[channel].clone();
+  public Samples samples(int channel) {
+    return samples.get(channel);
   }
 
-  /** Times of the samples after the first, seconds. */
-  public double[] timesS() {
-    return timesS.clone();
-  }
-
-  /** Samples a second; empty where the rate changes. */
-  public OptionalDouble sampleRateHz() {
-    double[] t = timesS;
-    if (configuration.rates().size() > 1 || t.length < 2) {
-      return OptionalDouble.empty();
-    }
-    return OptionalDouble.of((t.length - 1) / t[t.length - 1]);
+  /** When the samples stand. */
+  public TimeAxis time() {
+    return time;
   }
 
   /** Time of the first sample as written; local, or UTC with the offset. */

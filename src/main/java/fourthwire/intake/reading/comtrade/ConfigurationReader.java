@@ -142,6 +142,7 @@ final class ConfigurationReader {
         number(f, 5, "the multiplier", 1),
         number(f, 6, "the offset", 0),
         number(f, 7, "the skew", 0) * 1e-6,
+        number(f, 9, "the end of the range", 99999),
         number(f, 10, "the primary rating", 1),
         number(f, 11, "the secondary rating", 1),
         side.startsWith("S"));

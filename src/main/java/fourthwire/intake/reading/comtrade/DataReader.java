@@ -1,10 +1,11 @@
 package fourthwire.intake.reading.comtrade;
 
+import fourthwire.metering.capture.Capture;
+import fourthwire.metering.capture.wave.Samples;
 import java.nio.ByteBuffer;
 import java.nio.ByteOrder;
 import java.nio.charset.StandardCharsets;
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
 
@@ -12,22 +13,24 @@ import java.util.Locale;
  * Reads a data file (IEEE C37.111-1999, clause 8).
  *
  * <p>Missing samples: {@code 99999} or empty in text, {@code 0x8000} in 16 and {@code 0x80000000}
- * in 32 bits, and in FLOAT32 its lowest number. Times: the sample rates where stated, else the
- * data's own.
+ * in 32 bits, and in FLOAT32 its lowest number.
  */
 final class DataReader {
-  private static final String SUBSTITUTE = "\u001A";
+  private static final int SUBSTITUTE = 0x1A;
+  private static final double MISSING = 99999;
+  private static final int NUMBER_AND_TIME = 8;
 
   private final Configuration c;
   private final byte[] data;
   private final List<String> notes = new ArrayList<>();
-  private double[][] samples = new double[0][];
-  private double[] ownTimesS = new double[0];
-  private int count;
+  private final List<Samples.Gatherer> samples = new ArrayList<>();
+  private final OwnTimes ownTimes;
+  private int rows;
 
   DataReader(Configuration configuration, byte[] data) {
     this.c = configuration;
     this.data = data;
+    this.ownTimes = new OwnTimes(configuration);
   }
 
   Comtrade read() {
@@ -39,77 +42,111 @@ final class DataReader {
     } else {
       binary();
     }
-    if (count < 2) {
-      throw new ComtradeException("The data holds " + count + " samples: at least two are needed.");
+    if (rows < 2) {
+      throw new ComtradeException("The data holds " + rows + " samples: at least two are needed.");
     }
-    double[][] kept = new double[samples.length][];
-    for (int k = 0; k < kept.length; k++) {
-      kept[k] = Arrays.copyOf(samples[k], count);
-    }
-    return new Comtrade(c, times(), kept, notes);
+    SampleTimes times = new SampleTimes(c, ownTimes, rows);
+    return new Comtrade(
+        c, times.axis(notes), samples.stream().map(Samples.Gatherer::done).toList(), notes);
   }
 
-  private void room(int rows) {
-    samples = new double[c.channels().size()][rows];
-    ownTimesS = new double[rows];
+  private void room(int rowsExpected) {
+    if ((long) rowsExpected * c.channels().size() > Capture.MOST_SAMPLES) {
+      throw new ComtradeException(
+          String.format(
+              Locale.ROOT,
+              "The record has %d samples of %d channels; at most %d samples in all are read: cut it"
+                  + " into shorter records.",
+              rowsExpected,
+              c.channels().size(),
+              Capture.MOST_SAMPLES));
+    }
+    for (int k = 0; k < c.channels().size(); k++) {
+      samples.add(new Samples.Gatherer(rowsExpected));
+    }
   }
 
   private void text() {
-    List<String> lines =
-        new String(data, StandardCharsets.ISO_8859_1)
-            .replace(SUBSTITUTE, "")
-            .lines()
-            .filter(l -> !l.isBlank())
-            .toList();
-    room(lines.size());
-    for (String line : lines) {
-      row(line);
+    int lines = 1;
+    for (byte b : data) {
+      lines += b == '\n' ? 1 : 0;
+    }
+    room(lines);
+    int from = 0;
+    while (from < data.length) {
+      int to = from;
+      while (to < data.length && data[to] != '\n' && data[to] != '\r') {
+        to++;
+      }
+      String line = line(from, to);
+      if (!line.isEmpty() && !row(line)) {
+        atEnd(line, to);
+        return;
+      }
+      from = to + 1;
     }
   }
 
-  private void row(String line) {
-    String[] f = line.split(",", -1);
-    if (f.length < 2 + samples.length) {
+  /** A line without the substitute character that ends old text files. */
+  private String line(int from, int to) {
+    return new String(data, from, to - from, StandardCharsets.ISO_8859_1)
+        .replace((char) SUBSTITUTE, ' ')
+        .trim();
+  }
+
+  /** A line that is no row may stand at the end of the data; elsewhere it is damage. */
+  private void atEnd(String line, int at) {
+    int left = 0;
+    for (int k = at; k < data.length; k++) {
+      left += data[k] == '\n' ? 1 : 0;
+    }
+    if (rows < 2 || left > 2) {
       throw new ComtradeException(
           "data, row "
-              + (count + 1)
-              + ": "
-              + f.length
-              + " fields, but the configuration asks for "
-              + (2 + samples.length + c.digital())
-              + ".");
+              + (rows + 1)
+              + ": \""
+              + (line.length() > 40 ? line.substring(0, 40) + "…" : line)
+              + "\" is no row of "
+              + (2 + c.channels().size() + c.digital())
+              + " numbers, as the configuration asks for.");
     }
-    ownTimesS[count] = time(f[1].trim());
-    for (int k = 0; k < samples.length; k++) {
-      samples[k][count] = value(k, f[k + 2].trim());
+    notes.add("After row " + rows + " the data holds no further whole row; the rest was left out.");
+  }
+
+  private boolean row(String line) {
+    String[] f = line.split(line.indexOf(',') >= 0 ? "," : "[;\\s]+", -1);
+    int channels = samples.size();
+    if (f.length < 2 + channels) {
+      return false;
     }
-    count++;
-  }
-
-  private double time(String text) {
-    return text.isEmpty() ? Double.NaN : parsed(text) * tickS();
-  }
-
-  /** One unit of the data's own times, seconds. */
-  private double tickS() {
-    return (c.nanoseconds() ? 1e-9 : 1e-6) * c.timeMultiplier();
-  }
-
-  private double value(int channel, String text) {
-    if (text.isEmpty()) {
-      return Double.NaN;
+    double[] values = new double[channels];
+    for (int k = 0; k < channels; k++) {
+      String text = f[k + 2].trim();
+      if (!text.isEmpty() && !isNumber(text)) {
+        return false;
+      }
+      values[k] = text.isEmpty() ? Double.NaN : value(k, Double.parseDouble(text));
     }
-    double x = parsed(text);
-    return x == 99999 ? Double.NaN : scaled(channel, x);
+    ownTimes.add(isNumber(f[1].trim()) ? Double.parseDouble(f[1].trim()) : Double.NaN);
+    for (int k = 0; k < channels; k++) {
+      samples.get(k).add(values[k]);
+    }
+    rows++;
+    return true;
   }
 
-  private double parsed(String text) {
+  private static boolean isNumber(String text) {
     try {
-      return Double.parseDouble(text);
+      return Double.isFinite(Double.parseDouble(text));
     } catch (NumberFormatException e) {
-      throw new ComtradeException(
-          "data, row " + (count + 1) + ": \"" + text + "\" is not a number.");
+      return false;
     }
+  }
+
+  /** {@code 99999} marks a missing sample unless the channel's range reaches beyond. */
+  private double value(int channel, double x) {
+    boolean missing = x == MISSING && !(c.channels().get(channel).highest() > MISSING);
+    return missing ? Double.NaN : scaled(channel, x);
   }
 
   private double scaled(int channel, double x) {
@@ -118,23 +155,42 @@ final class DataReader {
   }
 
   private void binary() {
-    int words = (c.digital() + 15) / 16;
-    int row = 8 + c.format().bytes() * c.channels().size() + 2 * words;
-    int rows = data.length / row;
-    room(rows);
     ByteBuffer in = ByteBuffer.wrap(data).order(ByteOrder.LITTLE_ENDIAN);
-    for (count = 0; count < rows; count++) {
-      in.position(count * row + 4);
+    int length = rowLength(in);
+    int held = data.length / length;
+    room(held);
+    for (rows = 0; rows < held; rows++) {
+      in.position(rows * length + 4);
       int own = in.getInt();
-      ownTimesS[count] = own == -1 ? Double.NaN : Integer.toUnsignedLong(own) * tickS();
-      for (int k = 0; k < samples.length; k++) {
-        samples[k][count] = binaryValue(k, in);
+      ownTimes.add(own == -1 ? Double.NaN : Integer.toUnsignedLong(own));
+      for (int k = 0; k < samples.size(); k++) {
+        samples.get(k).add(binaryValue(k, in));
       }
     }
-    int rest = data.length - rows * row;
-    if (rest > 1 || rest == 1 && data[data.length - 1] != 0x1A) {
+    int rest = data.length - held * length;
+    if (rest > 1 || rest == 1 && data[data.length - 1] != SUBSTITUTE) {
       notes.add("The last " + rest + " bytes of the data are no whole sample and were left out.");
     }
+  }
+
+  /**
+   * Bytes of a sample: as the configuration says, unless the samples' numbers count up only with
+   * the status words left out.
+   */
+  private int rowLength(ByteBuffer in) {
+    int analog = NUMBER_AND_TIME + c.format().bytes() * c.channels().size();
+    int stated = analog + 2 * ((c.digital() + 15) / 16);
+    if (stated != analog && !countsUp(in, stated) && countsUp(in, analog)) {
+      notes.add("The data holds no status words although the configuration names status channels.");
+      return analog;
+    }
+    return stated;
+  }
+
+  private static boolean countsUp(ByteBuffer in, int length) {
+    return in.capacity() >= 3 * length
+        && in.getInt(length) == in.getInt(0) + 1
+        && in.getInt(2 * length) == in.getInt(0) + 2;
   }
 
   private double binaryValue(int channel, ByteBuffer in) {
@@ -152,56 +208,5 @@ final class DataReader {
         return x == -Float.MAX_VALUE || Float.isNaN(x) ? Double.NaN : scaled(channel, x);
       }
     }
-  }
-
-  /** Seconds after the first sample. */
-  private double[] times() {
-    if (c.rates().isEmpty()) {
-      return ownTimes();
-    }
-    double[] t = new double[count];
-    int rate = 0;
-    for (int k = 1; k < count; k++) {
-      while (rate < c.rates().size() - 1 && k >= c.rates().get(rate).lastSample()) {
-        rate++;
-      }
-      t[k] = t[k - 1] + 1 / c.rates().get(rate).hertz();
-    }
-    if (c.rates().size() == 1) {
-      for (int k = 0; k < count; k++) {
-        t[k] = k / c.rates().get(0).hertz();
-      }
-    }
-    compare(t[count - 1]);
-    return t;
-  }
-
-  /** The stated rate rules; where the data's own times tell otherwise it is said. */
-  private void compare(double spanS) {
-    double own = ownTimesS[count - 1] - ownTimesS[0];
-    if (Math.abs(own - spanS) > 0.005 * spanS) {
-      notes.add(
-          String.format(
-              Locale.ROOT,
-              "The data's own times span %.6g s, the stated sample rate %.6g s; the rate was used.",
-              own,
-              spanS));
-    }
-  }
-
-  private double[] ownTimes() {
-    double[] t = Arrays.copyOf(ownTimesS, count);
-    double first = t[0];
-    for (int k = 0; k < count; k++) {
-      t[k] -= first;
-      if (Double.isNaN(t[k]) || k > 0 && t[k] <= t[k - 1]) {
-        throw new ComtradeException(
-            "data, row "
-                + (k + 1)
-                + ": the configuration states no sample rate, and this sample's own time is missing"
-                + " or does not rise.");
-      }
-    }
-    return t;
   }
 }

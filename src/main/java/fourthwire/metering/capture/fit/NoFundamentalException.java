@@ -1,4 +1,4 @@
-package fourthwire.metering.capture;
+package fourthwire.metering.capture.fit;
 
 /** A capture in which no steady fundamental can be found: no figure can be given. */
 public final class NoFundamentalException extends RuntimeException {

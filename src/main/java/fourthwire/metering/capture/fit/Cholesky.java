@@ -1,4 +1,4 @@
-package fourthwire.metering.capture;
+package fourthwire.metering.capture.fit;
 
 /** Solution of a symmetric positive definite system by Cholesky's factors. */
 final class Cholesky {

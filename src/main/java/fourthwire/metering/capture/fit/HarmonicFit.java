@@ -1,4 +1,4 @@
-package fourthwire.metering.capture;
+package fourthwire.metering.capture.fit;
 
 import fourthwire.quantity.Phasor;
 import fourthwire.quantity.Spectrum;
@@ -13,7 +13,7 @@ import java.util.Arrays;
  * equations (IEEE 1057-2017, the three-parameter sine fit, with more orders): their matrix is made
  * of the sums Σcos(mωt) and Σsin(mωt), m to 2H.
  */
-final class HarmonicFit {
+public final class HarmonicFit {
   private static final double ROOT2 = Math.sqrt(2);
 
   private final double direct;
@@ -39,7 +39,7 @@ final class HarmonicFit {
    * @param frequencyHz the fundamental
    * @param orders highest order H; the samples that are there must outnumber 2H + 1 and resolve H
    */
-  static HarmonicFit of(
+  public static HarmonicFit of(
       double[] timesS, double[] samples, int count, double frequencyHz, int orders) {
     double[] cosSums = new double[2 * orders + 1];
     double[] sinSums = new double[2 * orders + 1];
@@ -127,37 +127,37 @@ final class HarmonicFit {
   }
 
   /** The direct component. */
-  double direct() {
+  public double direct() {
     return direct;
   }
 
   /** Largest absolute sample, the direct component taken off. */
-  double peak() {
+  public double peak() {
     return peak;
   }
 
   /** Highest order fitted. */
-  int orders() {
+  public int orders() {
     return re.length - 1;
   }
 
   /** Rms phasor of an order, t = 0 at time 0; zero above the highest fitted. */
-  Phasor at(int order) {
+  public Phasor at(int order) {
     return order < re.length ? new Phasor(re[order], im[order]) : Phasor.ZERO;
   }
 
   /** Orders 1 to 50, t = 0 where the fundamental of this angle at time 0 crosses zero upwards. */
-  Spectrum spectrum(double referenceDegrees) {
+  public Spectrum spectrum(double referenceDegrees) {
     return Spectrum.of(h -> at(h).turned(-h * referenceDegrees));
   }
 
   /** What is left of the samples: other frequencies, noise; NaN where none was recorded. Shared. */
-  double[] residual() {
+  public double[] residual() {
     return residual;
   }
 
   /** Rms without the direct component: the fitted orders and everything that is left. */
-  double alternatingRms() {
+  public double alternatingRms() {
     double square = meanProduct(this);
     for (int h = 1; h < re.length; h++) {
       square += re[h] * re[h] + im[h] * im[h];
@@ -166,7 +166,7 @@ final class HarmonicFit {
   }
 
   /** Mean product with another quantity of the same instants, direct components left out. */
-  double activePower(HarmonicFit other) {
+  public double activePower(HarmonicFit other) {
     double power = meanProduct(other);
     for (int h = 1; h < Math.min(re.length, other.re.length); h++) {
       power += re[h] * other.re[h] + im[h] * other.im[h];

@@ -1,55 +1,73 @@
-package fourthwire.metering.capture;
+package fourthwire.metering.capture.fit;
 
 import java.util.List;
+import java.util.OptionalDouble;
 
 /**
  * The fundamental frequency of a capture, found from its samples.
  *
- * <p>First the highest peak of the Hann-windowed Fourier integral within 20 % of nominal, over the
- * first second; then least squares with the frequency among the unknowns (IEEE 1057-2017, the
- * four-parameter sine fit, with orders above the first), over a stretch that doubles until it is
- * the whole record. A record of less than two cycles can't settle it: nominal is taken.
+ * <p>First roughly ({@link RoughFrequency}); then least squares with the frequency among the unknowns
+ * (IEEE 1057-2017, the four-parameter sine fit, with orders above the first), over a stretch that
+ * doubles until it is the whole record. A record of less than two cycles can't settle it: nominal is
+ * taken. One so unsteady that the fit does not settle keeps the rough frequency.
  */
-final class Fundamental {
+public final class Fundamental {
   /** Orders fitted beside the frequency: those left out bias a short record. */
   private static final int ORDERS_SHORT = 50;
 
   private static final int ORDERS_LONG = 15;
   private static final int SHORT_SAMPLES = 100_000;
   private static final int MOST_STEPS = 40;
-  private static final int COARSE = 40;
   private static final double FIRST_STRETCH_S = 1;
 
   private final double[] timesS;
   private final List<double[]> channels;
   private final double nominalHz;
+  private boolean steady = true;
 
   /**
    * For these channels taken together, of one unit: voltages, or where there are none, currents.
    */
-  Fundamental(double[] timesS, List<double[]> channels, double nominalHz) {
+  public Fundamental(double[] timesS, List<double[]> channels, double nominalHz) {
     this.timesS = timesS;
     this.channels = channels;
     this.nominalHz = nominalHz;
   }
 
   /** Whether the record is long enough to settle the frequency. */
-  boolean settled() {
+  public boolean settled() {
     return spanS(timesS.length) * nominalHz >= 1.95;
   }
 
-  /** Finds it, in hertz. */
-  double hertz() {
+  /**
+   * Finds it, in hertz.
+   *
+   * @throws NoFundamentalException where hardly anything stands at any frequency looked at
+   */
+  public double hertz() {
     if (!settled()) {
       return nominalHz;
     }
-    int count = samplesIn(FIRST_STRETCH_S);
-    double f = refined(coarse(count), count);
-    while (count < timesS.length) {
-      count = (int) Math.min(timesS.length, 2L * count);
-      f = refined(f, count);
-    }
+    double rough = RoughFrequency.hertz(timesS, channels);
+    OptionalDouble fine = fine(rough);
+    steady = fine.isPresent();
+    double f = fine.orElse(rough);
     requireStrong(f);
+    return f;
+  }
+
+  /** Whether the fit settled: else the rough frequency was kept. */
+  public boolean isSteady() {
+    return steady;
+  }
+
+  private OptionalDouble fine(double rough) {
+    int count = samplesIn(FIRST_STRETCH_S);
+    OptionalDouble f = refined(rough, count);
+    while (f.isPresent() && count < timesS.length) {
+      count = (int) Math.min(timesS.length, 2L * count);
+      f = refined(f.getAsDouble(), count);
+    }
     return f;
   }
 
@@ -65,79 +83,25 @@ final class Fundamental {
     return count;
   }
 
-  /** Means of neighbouring samples, some {@value #COARSE} to a cycle, are enough for the search. */
-  private double coarse(int count) {
-    double span = spanS(count);
-    int block = (int) Math.max(1, count / (span * nominalHz * COARSE));
-    double[] t = means(timesS, count, block);
-    List<double[]> x = channels.stream().map(c -> means(c, count, block)).toList();
-    double best = nominalHz;
-    double largest = -1;
-    for (double f = 0.8 * nominalHz; f <= 1.2 * nominalHz; f += Math.min(0.1 / span, 0.5)) {
-      double energy = 0;
-      for (double[] channel : x) {
-        energy += windowedEnergy(t, channel, f, span);
-      }
-      if (energy > largest) {
-        largest = energy;
-        best = f;
-      }
-    }
-    return best;
-  }
-
-  private static double[] means(double[] x, int count, int block) {
-    double[] means = new double[count / block];
-    for (int k = 0; k < means.length; k++) {
-      for (int j = 0; j < block; j++) {
-        means[k] += x[k * block + j] / block;
-      }
-    }
-    return means;
-  }
-
-  private static double windowedEnergy(double[] t, double[] x, double f, double span) {
-    double mean = mean(x, x.length);
-    double re = 0;
-    double im = 0;
-    for (int k = 0; k < x.length; k++) {
-      if (!Double.isNaN(x[k])) {
-        double w = (x[k] - mean) * (1 - Math.cos(2 * Math.PI * t[k] / span));
-        re += w * Math.cos(2 * Math.PI * f * t[k]);
-        im += w * Math.sin(2 * Math.PI * f * t[k]);
-      }
-    }
-    return re * re + im * im;
-  }
-
-  private static double mean(double[] x, int count) {
-    double sum = 0;
-    int there = 0;
-    for (int k = 0; k < count; k++) {
-      if (!Double.isNaN(x[k])) {
-        sum += x[k];
-        there++;
-      }
-    }
-    return there == 0 ? 0 : sum / there;
-  }
-
   /** Gauss-Newton on the frequency, the amplitudes eliminated at every step. */
-  private double refined(double start, int count) {
+  private OptionalDouble refined(double start, int count) {
     double f = start;
     double bin = 1 / spanS(count);
     int orders = ordersFor(start, count);
     for (int i = 0; i < MOST_STEPS; i++) {
       double step = step(f, count, orders);
+      if (Double.isNaN(step)) {
+        break;
+      }
       f += Math.max(-bin / 2, Math.min(bin / 2, step));
       if (Math.abs(f - start) > 2 * bin) {
         break;
       }
       if (Math.abs(step) < 1e-9 * nominalHz) {
-        return f;
+        return OptionalDouble.of(f);
       }
     }
-    throw none();
+    return OptionalDouble.empty();
   }
 
   private int ordersFor(double f, int count) {
@@ -164,10 +128,7 @@ final class Fundamental {
         }
       }
     }
-    if (!(square > 0)) {
-      throw none();
-    }
-    return along / square;
+    return square > 0 ? along / square : Double.NaN;
   }
 
   private double[] slope(HarmonicFit fit, double f, int count, double[] x) {
@@ -200,8 +161,6 @@ final class Fundamental {
 
   private NoFundamentalException none() {
     return new NoFundamentalException(
-        "No steady fundamental was found within 20 % of "
-            + Math.round(nominalHz)
-            + " Hz: check the site's frequency and the capture's sample rate.");
+        "No fundamental was found between 40 and 72 Hz: check the capture's sample rate.");
   }
 }
