@@ -179,9 +179,7 @@ final class WaveformJson {
     return new WaveformPicture(
         o.path("step_s").doubleValue(),
         Json.map(
-            o,
-            "channels",
-            t -> new WaveformPicture.Trace(numbers(t, "min"), numbers(t, "max"))));
+            o, "channels", t -> new WaveformPicture.Trace(numbers(t, "min"), numbers(t, "max"))));
   }
 
   private static ArrayNode numbers(List<Double> values) {

@@ -63,7 +63,8 @@ public record CaptureResult(
   /**
    * A conductor's current.
    *
-   * @param rmsA true rms of the samples: all orders and interharmonics, without the direct component
+   * @param rmsA true rms of the samples: all orders and interharmonics, without the direct
+   *     component
    * @param fundamentalA order 1
    * @param thdPercent orders 2 to 50 on the fundamental
    * @param crestFactor largest sample on the rms

@@ -119,11 +119,7 @@ final class ComtradeFormat implements Format {
       k++;
     }
     Capture capture =
-        new Capture(
-            start(comtrade, plan, setting, notes),
-            comtrade.time(),
-            channels,
-            samples);
+        new Capture(start(comtrade, plan, setting, notes), comtrade.time(), channels, samples);
     return CaptureReading.of(capture, setting, notes, progress);
   }
 

@@ -189,9 +189,7 @@ final class TextCapture {
     }
 
     List<fourthwire.metering.capture.wave.Samples> columns() {
-      return columns.stream()
-          .map(fourthwire.metering.capture.wave.Samples.Gatherer::done)
-          .toList();
+      return columns.stream().map(fourthwire.metering.capture.wave.Samples.Gatherer::done).toList();
     }
 
     /** Times after the first; printed to few digits they are put on an even grid. */

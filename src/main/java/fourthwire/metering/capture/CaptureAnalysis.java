@@ -22,14 +22,14 @@ import java.util.function.Function;
 /**
  * Turns a waveform capture into what it says.
  *
- * <p>The fundamental is found from the samples, so the sampling need not be synchronous. A record of
- * ten cycles (60 Hz: twelve) or more is cut into gapless windows resampled to whole cycles; its
+ * <p>The fundamental is found from the samples, so the sampling need not be synchronous. A record
+ * of ten cycles (60 Hz: twelve) or more is cut into gapless windows resampled to whole cycles; its
  * figures are their root mean squares, and groups and standard intervals come with them. A shorter
  * one, or one sampled unevenly, has orders 1 to 50 fitted to its largest whole number of cycles by
  * least squares, and nothing else. Rms and power are those of the samples without the direct
- * component: a current transformer passes none, so what an instrument shows there is its own offset,
- * reported in the findings. For a signal of harmonic orders all figures are exact within 1e-5; noise
- * of rms σ leaves about σ·√(2/samples) on each order.
+ * component: a current transformer passes none, so what an instrument shows there is its own
+ * offset, reported in the findings. For a signal of harmonic orders all figures are exact within
+ * 1e-5; noise of rms σ leaves about σ·√(2/samples) on each order.
  */
 public final class CaptureAnalysis {
   /** Below this share a fundamental is noise; common practice, no source. */
@@ -158,8 +158,7 @@ public final class CaptureAnalysis {
   private Optional<PhaseTrack> steadyClock() {
     boolean even = whole.time().isEven() && complete;
     return even
-        ? Optional.of(
-            PhaseTrack.steady(whole.time().rateHz().orElseThrow() / extent.frequencyHz()))
+        ? Optional.of(PhaseTrack.steady(whole.time().rateHz().orElseThrow() / extent.frequencyHz()))
         : Optional.empty();
   }
 
@@ -170,8 +169,7 @@ public final class CaptureAnalysis {
         sequences(".i", SymmetricalComponents::zeroPercent, "currents"));
   }
 
-  private Figure sequences(
-      String kind, Function<SymmetricalComponents, Figure> of, String what) {
+  private Figure sequences(String kind, Function<SymmetricalComponents, Figure> of, String what) {
     List<Spectrum> lines =
         Channels.LINES.stream()
             .map(l -> channels.find(l + kind))

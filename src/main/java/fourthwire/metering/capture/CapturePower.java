@@ -38,9 +38,12 @@ record CapturePower(PowerFigures total, String basis, Map<Conductor, PowerFigure
                       + " measurement of it."),
           figures);
     }
-    if (lines.size() == 3 && Channels.PAIRS.stream().allMatch(p -> channels.find(p + ".v").isPresent())) {
+    if (lines.size() == 3
+        && Channels.PAIRS.stream().allMatch(p -> channels.find(p + ".v").isPresent())) {
       return new CapturePower(
-          threeWire(channels), "Effective three-phase power, three wires (IEEE 1459-2010).", figures);
+          threeWire(channels),
+          "Effective three-phase power, three wires (IEEE 1459-2010).",
+          figures);
     }
     if (!byLine.isEmpty() && byLine.size() == lines.size()) {
       return new CapturePower(
@@ -66,9 +69,12 @@ record CapturePower(PowerFigures total, String basis, Map<Conductor, PowerFigure
   private static PowerFigures fourWire(
       Channels channels, Neutral neutral, Map<Conductor, LinePower> byLine) {
     Optional<ChannelFigures> n = neutral.fit().filter(fit -> neutral.isMeasured());
-    List<ChannelFigures> v = Channels.LINES.stream().map(l -> channels.voltage(l).orElseThrow()).toList();
-    List<ChannelFigures> i = Channels.LINES.stream().map(l -> channels.current(l).orElseThrow()).toList();
-    List<ChannelFigures> u = Channels.PAIRS.stream().map(p -> channels.find(p + ".v").orElseThrow()).toList();
+    List<ChannelFigures> v =
+        Channels.LINES.stream().map(l -> channels.voltage(l).orElseThrow()).toList();
+    List<ChannelFigures> i =
+        Channels.LINES.stream().map(l -> channels.current(l).orElseThrow()).toList();
+    List<ChannelFigures> u =
+        Channels.PAIRS.stream().map(p -> channels.find(p + ".v").orElseThrow()).toList();
     ThreePhasePower orders =
         ThreePhasePower.fourWire(
             spectra(v), spectra(i), n.map(ChannelFigures::spectrum).orElse(Spectrum.ZERO));
@@ -79,8 +85,10 @@ record CapturePower(PowerFigures total, String basis, Map<Conductor, PowerFigure
   }
 
   private static PowerFigures threeWire(Channels channels) {
-    List<ChannelFigures> i = Channels.LINES.stream().map(l -> channels.current(l).orElseThrow()).toList();
-    List<ChannelFigures> u = Channels.PAIRS.stream().map(p -> channels.find(p + ".v").orElseThrow()).toList();
+    List<ChannelFigures> i =
+        Channels.LINES.stream().map(l -> channels.current(l).orElseThrow()).toList();
+    List<ChannelFigures> u =
+        Channels.PAIRS.stream().map(p -> channels.find(p + ".v").orElseThrow()).toList();
     ThreePhasePower orders = ThreePhasePower.threeWire(spectra(u), spectra(i));
     // Two wattmeters: P = V13·I1 + V23·I2.
     double p = channels.activeW("L2-L3.v", "L2.i") - channels.activeW("L3-L1.v", "L1.i");

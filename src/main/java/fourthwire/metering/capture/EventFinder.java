@@ -36,8 +36,7 @@ final class EventFinder {
     this.halves.putAll(halves);
     this.rateHz = rateHz;
     this.count = halves.values().stream().mapToInt(HalfCycles::count).min().orElse(0);
-    double usual =
-        halves.values().stream().mapToDouble(HalfCycles::median).max().orElse(0);
+    double usual = halves.values().stream().mapToDouble(HalfCycles::median).max().orElse(0);
     double nominal = nominalV.orElse(0) * (pairs ? Math.sqrt(3) : 1);
     boolean fits = Math.abs(usual / nominal - 1) < FITS_WITHIN;
     this.referenceV = fits ? nominal : usual;
@@ -49,8 +48,7 @@ final class EventFinder {
    *
    * @param nominalV the site's line-to-neutral voltage at the meter, where it is known
    */
-  static VoltageEvents of(
-      Capture capture, Optional<PhaseTrack> track, OptionalDouble nominalV) {
+  static VoltageEvents of(Capture capture, Optional<PhaseTrack> track, OptionalDouble nominalV) {
     List<Capture.Channel> voltages = voltages(capture);
     if (voltages.isEmpty()) {
       return none("No events were looked for: no line's voltage was recorded.");

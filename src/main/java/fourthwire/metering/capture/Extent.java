@@ -52,8 +52,7 @@ record Extent(
 
   /** The same, its orders fitted instead of formed in windows. */
   Extent withoutWindows() {
-    return new Extent(
-        frequencyHz, certainty, cycles, samples, orders, nominalHz, Optional.empty());
+    return new Extent(frequencyHz, certainty, cycles, samples, orders, nominalHz, Optional.empty());
   }
 
   /** Over what the figures are formed. */

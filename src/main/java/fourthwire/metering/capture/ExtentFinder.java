@@ -140,7 +140,8 @@ final class ExtentFinder {
               siteHz));
     }
     double nominal = hertz > 55 ? 60 : 50;
-    int end = (int) Math.round(track.map(t -> t.positionAt(cycles)).orElse(time.count() * cycles / run));
+    int end =
+        (int) Math.round(track.map(t -> t.positionAt(cycles)).orElse(time.count() * cycles / run));
     int samples = Math.min(time.count(), end);
     boolean windows = cycles >= Extent.standardCycles(nominal);
     return new Extent(

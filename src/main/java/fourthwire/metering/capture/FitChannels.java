@@ -24,7 +24,9 @@ final class FitChannels {
       fits.put(c.quantity(), fit(capture.of(c), t, extent));
     }
     for (Channels.Sum sum : Channels.sums(List.copyOf(fits.keySet()))) {
-      fits.put(sum.quantity(), fit(samples(capture, sum), capture.time().first(extent.samples()), extent));
+      fits.put(
+          sum.quantity(),
+          fit(samples(capture, sum), capture.time().first(extent.samples()), extent));
     }
     double reference =
         Channels.reference(List.copyOf(fits.keySet()))

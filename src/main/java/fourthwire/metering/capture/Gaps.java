@@ -40,8 +40,7 @@ final class Gaps {
       for (Capture.Channel c : capture.channels()) {
         filled.add(filled(capture.of(c)));
       }
-      return Optional.of(
-          new Capture(capture.start(), capture.time(), capture.channels(), filled));
+      return Optional.of(new Capture(capture.start(), capture.time(), capture.channels(), filled));
     } catch (NoFundamentalException e) {
       return Optional.empty();
     }
@@ -77,7 +76,9 @@ final class Gaps {
     double[] t = capture.time().first(x.length);
     double hertz = new Fundamental(t, List.of(x), siteHz).hertz();
     int orders =
-        (int) Math.min(50, Math.floor(LEAST_RECORDED * capture.time().rateHz().orElseThrow() / hertz / 2));
+        (int)
+            Math.min(
+                50, Math.floor(LEAST_RECORDED * capture.time().rateHz().orElseThrow() / hertz / 2));
     HarmonicFit fit = HarmonicFit.of(t, x, x.length, hertz, orders);
     double[] model = new double[x.length];
     for (int k = 0; k < x.length; k++) {

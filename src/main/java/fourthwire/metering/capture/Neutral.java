@@ -14,7 +14,10 @@ import java.util.Optional;
  * @param basis where N comes from, one sentence
  */
 record Neutral(
-    Optional<ChannelFigures> fit, Optional<ChannelFigures> channel, Agreement agreement, String basis) {
+    Optional<ChannelFigures> fit,
+    Optional<ChannelFigures> channel,
+    Agreement agreement,
+    String basis) {
   /** Instruments of class 1 at the end of their range, and earth leakage, stay within this. */
   private static final double OF_SUM = 0.1;
 
@@ -46,10 +49,8 @@ record Neutral(
     return channel.isPresent() && agreement != Agreement.DIFFERENT;
   }
 
-  private static Agreement compare(
-      ChannelFigures channel, ChannelFigures sum, Channels channels) {
-    double allowed =
-        OF_SUM * Math.max(sum.rms(), channel.rms()) + OF_LINE * channels.meanLineA();
+  private static Agreement compare(ChannelFigures channel, ChannelFigures sum, Channels channels) {
+    double allowed = OF_SUM * Math.max(sum.rms(), channel.rms()) + OF_LINE * channels.meanLineA();
     double product = channels.neutralTimesSum();
     if (distance(channel, sum, product) <= allowed) {
       return Agreement.SAME;

@@ -21,8 +21,7 @@ final class WindowChannels {
     List<String> names = capture.channels().stream().map(Capture.Channel::quantity).toList();
     List<Signal> sums = new ArrayList<>();
     for (Channels.Sum s : Channels.sums(names)) {
-      sums.add(
-          new Signal(s.quantity(), s.of().stream().map(names::indexOf).toList(), s.factors()));
+      sums.add(new Signal(s.quantity(), s.of().stream().map(names::indexOf).toList(), s.factors()));
     }
     List<String> all = new ArrayList<>(names);
     sums.forEach(s -> all.add(s.quantity()));
@@ -56,9 +55,7 @@ final class WindowChannels {
       boolean shown = s.quantity().equals(Channels.SUM);
       peaks.put(
           s.quantity(),
-          shown
-              ? peak(windows, s.quantity(), FitChannels.samples(capture, s).extremes())
-              : 0.0);
+          shown ? peak(windows, s.quantity(), FitChannels.samples(capture, s).extremes()) : 0.0);
     }
     double turn =
         Channels.reference(List.copyOf(peaks.keySet()))

@@ -40,8 +40,7 @@ public final class WaveformBenchmark {
     int warm = Integer.parseInt(args[1]);
     int measured = Integer.parseInt(args[2]);
     try (Stream<Path> files = Files.list(Path.of(args[0]))) {
-      List<Path> records =
-          files.filter(f -> f.toString().endsWith(".npz")).sorted().toList();
+      List<Path> records = files.filter(f -> f.toString().endsWith(".npz")).sorted().toList();
       for (Path f : records) {
         run(f, warm, 0);
       }
@@ -109,7 +108,8 @@ public final class WaveformBenchmark {
       List<Double> subgroups = r.windows().orElseThrow().groups().get(q).subgroups();
       double worst = 0;
       for (Map.Entry<String, JsonNode> h : t.path("harmonics").properties()) {
-        double error = subgroups.get(Integer.parseInt(h.getKey()) - 1) - h.getValue().get(0).asDouble();
+        double error =
+            subgroups.get(Integer.parseInt(h.getKey()) - 1) - h.getValue().get(0).asDouble();
         worst = Math.max(worst, 100 * Math.abs(error) / t.path("fund").asDouble());
       }
       voltage = q.endsWith("v") ? Math.max(voltage, worst) : voltage;

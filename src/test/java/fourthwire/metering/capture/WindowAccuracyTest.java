@@ -58,7 +58,9 @@ class WindowAccuracyTest {
 
   private static void check(Spectrum truth, Spectrum found, double nominal, Spectrum reference) {
     for (int h = 1; h <= Spectrum.HIGHEST_ORDER; h++) {
-      assertThat(found.magnitude(h)).as("order %d", h).isEqualTo(truth.magnitude(h), within(2e-4 * nominal));
+      assertThat(found.magnitude(h))
+          .as("order %d", h)
+          .isEqualTo(truth.magnitude(h), within(2e-4 * nominal));
       if (truth.magnitude(h) > 0.01 * truth.magnitude(1)) {
         double turned = truth.at(h).turned(-h * reference.at(1).degrees()).degrees();
         double error = Math.IEEEremainder(found.at(h).degrees() - turned, 360);
@@ -107,8 +109,7 @@ class WindowAccuracyTest {
     }
     // The first full ten minutes of the clock stand five minutes after the first sample.
     java.time.Instant start = java.time.Instant.parse("2026-03-02T08:05:00Z");
-    CaptureWindows w =
-        analysed(x, 1600, Optional.of(start)).windows().orElseThrow();
+    CaptureWindows w = analysed(x, 1600, Optional.of(start)).windows().orElseThrow();
     assertThat(w.intervals()).filteredOn(i -> i.length().equals("3s")).hasSize(threes);
     assertThat(w.intervals())
         .filteredOn(i -> i.length().equals("10min"))
@@ -119,16 +120,19 @@ class WindowAccuracyTest {
               assertThat(i.toS()).isEqualTo(900, within(0.3));
               // 350 s of 200 V and 250 s of 240 V.
               assertThat(i.rms().get("L1.v"))
-                  .isEqualTo(Math.sqrt((350 * 200.0 * 200 + 250 * 240.0 * 240) / 600), within(0.05));
+                  .isEqualTo(
+                      Math.sqrt((350 * 200.0 * 200 + 250 * 240.0 * 240) / 600), within(0.05));
             });
-    assertThat(w.intervals()).allSatisfy(i -> assertThat(i.frequencyHz()).isEqualTo(hz, within(1e-3)));
+    assertThat(w.intervals())
+        .allSatisfy(i -> assertThat(i.frequencyHz()).isEqualTo(hz, within(1e-3)));
   }
 
   private static CaptureResult analysed(double[] x, double rateHz) {
     return analysed(x, rateHz, Optional.empty());
   }
 
-  private static CaptureResult analysed(double[] x, double rateHz, Optional<java.time.Instant> start) {
+  private static CaptureResult analysed(
+      double[] x, double rateHz, Optional<java.time.Instant> start) {
     Capture capture =
         new Capture(
             start,

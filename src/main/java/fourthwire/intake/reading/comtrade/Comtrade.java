@@ -17,8 +17,7 @@ public final class Comtrade {
   private final List<Samples> samples;
   private final List<String> notes;
 
-  Comtrade(
-      Configuration configuration, TimeAxis time, List<Samples> samples, List<String> notes) {
+  Comtrade(Configuration configuration, TimeAxis time, List<Samples> samples, List<String> notes) {
     this.configuration = configuration;
     this.time = time;
     this.samples = List.copyOf(samples);

@@ -12,7 +12,8 @@ final class OwnTimes {
   private int count;
 
   OwnTimes(Configuration c) {
-    this.tickS = (c.nanoseconds() ? 1e-9 : 1e-6) * (c.timeMultiplier() > 0 ? c.timeMultiplier() : 1);
+    this.tickS =
+        (c.nanoseconds() ? 1e-9 : 1e-6) * (c.timeMultiplier() > 0 ? c.timeMultiplier() : 1);
   }
 
   /** Adds a time as it stands, in units of the record; a counter that ran over goes on. */

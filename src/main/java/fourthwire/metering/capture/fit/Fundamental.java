@@ -6,10 +6,10 @@ import java.util.OptionalDouble;
 /**
  * The fundamental frequency of a capture, found from its samples.
  *
- * <p>First roughly ({@link RoughFrequency}); then least squares with the frequency among the unknowns
- * (IEEE 1057-2017, the four-parameter sine fit, with orders above the first), over a stretch that
- * doubles until it is the whole record. A record of less than two cycles can't settle it: nominal is
- * taken. One so unsteady that the fit does not settle keeps the rough frequency.
+ * <p>First roughly ({@link RoughFrequency}); then least squares with the frequency among the
+ * unknowns (IEEE 1057-2017, the four-parameter sine fit, with orders above the first), over a
+ * stretch that doubles until it is the whole record. A record of less than two cycles can't settle
+ * it: nominal is taken. One so unsteady that the fit does not settle keeps the rough frequency.
  */
 public final class Fundamental {
   /** Orders fitted beside the frequency: those left out bias a short record. */

@@ -7,8 +7,8 @@ import java.util.List;
 
 /**
  * Channels that go on for a little beyond both ends, as their outermost cycles do: the harmonics
- * fitted to these, and what the fit leaves, repeated. A window at the very end can then be resampled
- * like any other.
+ * fitted to these, and what the fit leaves, repeated. A window at the very end can then be
+ * resampled like any other.
  */
 final class Band {
   private static final int FITTED_CYCLES = 3;

@@ -7,10 +7,10 @@ import java.util.Map;
 
 /**
  * How windows fall into the standard intervals (IEC 61000-4-30:2015, 4.5): fifteen of them make a
- * very short one; those that begin within ten minutes of the clock make a short one, twelve of which
- * make a long one. Fifteen are counted anew from each full ten minutes. (The standard lets the
- * window that begins at the full ten minutes overlap the one before; here windows stay gapless and
- * one that crosses the mark belongs where it begins.)
+ * very short one; those that begin within ten minutes of the clock make a short one, twelve of
+ * which make a long one. Fifteen are counted anew from each full ten minutes. (The standard lets
+ * the window that begins at the full ten minutes overlap the one before; here windows stay gapless
+ * and one that crosses the mark belongs where it begins.)
  */
 final class Intervals {
   private static final double TEN_MINUTES_S = 600;

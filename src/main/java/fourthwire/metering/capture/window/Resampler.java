@@ -2,12 +2,12 @@ package fourthwire.metering.capture.window;
 
 /**
  * Reads a band-limited signal between its samples: a sinc of the middle of the transition band
- * under a window as narrow as {@value #ATTENUATION_DB} dB ask for, so that what is to be kept passes
- * within 1e-5 and what would fold onto it is as far down.
+ * under a window as narrow as {@value #ATTENUATION_DB} dB ask for, so that what is to be kept
+ * passes within 1e-5 and what would fold onto it is as far down.
  *
- * <p>Length by J. F. Kaiser's design formula, 1974. The window is the exponential of a semicircle (A.
- * Barnett, J. Magland, L. af Klinteberg, SIAM J. Sci. Comput. 41, 2019): as good as Kaiser's, and no
- * Bessel function to compute.
+ * <p>Length by J. F. Kaiser's design formula, 1974. The window is the exponential of a semicircle
+ * (A. Barnett, J. Magland, L. af Klinteberg, SIAM J. Sci. Comput. 41, 2019): as good as Kaiser's,
+ * and no Bessel function to compute.
  */
 final class Resampler {
   private static final double ATTENUATION_DB = 100;

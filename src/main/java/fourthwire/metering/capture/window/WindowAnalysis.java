@@ -55,7 +55,13 @@ public final class WindowAnalysis {
   public static WindowAnalysis of(Request r) {
     WindowPlan plan =
         WindowPlan.of(
-            r.channels(), r.sums(), r.products(), r.track(), r.rateHz(), r.cycles(), r.totalCycles());
+            r.channels(),
+            r.sums(),
+            r.products(),
+            r.track(),
+            r.rateHz(),
+            r.cycles(),
+            r.totalCycles());
     Intervals intervals = new Intervals(plan, r.secondsToTick());
     WindowSums whole = plan.sums();
     List<Interval> kept = new ArrayList<>();
@@ -63,9 +69,11 @@ public final class WindowAnalysis {
     for (int from = 0; from < stretches.size(); from += AT_ONCE) {
       List<Intervals.Stretch> some =
           stretches.subList(from, Math.min(stretches.size(), from + AT_ONCE));
-      List<WindowSums> sums = IntStream.range(0, some.size()).parallel()
-          .mapToObj(k -> sums(plan, some.get(k)))
-          .toList();
+      List<WindowSums> sums =
+          IntStream.range(0, some.size())
+              .parallel()
+              .mapToObj(k -> sums(plan, some.get(k)))
+              .toList();
       for (int k = 0; k < some.size(); k++) {
         whole.add(sums.get(k));
         kept.add(new Interval(plan, some.get(k), sums.get(k).withoutBins()));
