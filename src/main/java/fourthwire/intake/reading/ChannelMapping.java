@@ -88,7 +88,8 @@ record ChannelMapping(
       Heading heading = words.heading().apply(name);
       switch (heading.meaning()) {
         case NONE -> {}
-        case UNCLEAR -> questions.add(question(name, "say " + heading.question()));
+        case UNCLEAR, UNIT_OPEN, PLACELESS ->
+            questions.add(question(name, "say " + heading.question()));
         default -> {
           columns.put(name, new Column(heading.quantity(), heading.statistic(), heading.factor()));
           confidence.put(name, ReadingPlan.Confidence.valueOf(heading.meaning().name()));

@@ -4,6 +4,7 @@ import fourthwire.intake.reading.heading.Heading;
 import fourthwire.intake.reading.table.DateOrder;
 import fourthwire.intake.reading.table.TextTable;
 import fourthwire.intake.reading.table.TimeColumns;
+import fourthwire.intake.reading.table.ZoneNamed;
 import fourthwire.metering.MeasuredQuantity;
 import fourthwire.metering.QualityFinding;
 import fourthwire.metering.Reading;
@@ -16,19 +17,15 @@ import java.time.DateTimeException;
 import java.time.ZoneId;
 import java.util.ArrayList;
 import java.util.List;
-import java.util.Locale;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.function.BiPredicate;
 
 /** An interval log as a text table. */
 final class LogFormat {
-  private static final ChannelMapping.Words WORDS =
-      new ChannelMapping.Words(
-          Heading::ofLog,
-          MeasuredQuantity::ofLog,
-          "a log holds L1.rms_a, N.rms_a, L1.rms_v, total.active_w, L1.current_thd_percent,"
-              + " L1.current_h3_a … (contract, section 4)");
+  private static final String EXAMPLES =
+      "a log holds L1.rms_a, N.rms_a, L1.rms_v, total.active_w, L1.current_thd_percent,"
+          + " L1.current_h3_a … (contract, section 4)";
 
   private final TextTable table;
   private final TimeColumns time;
@@ -43,12 +40,13 @@ final class LogFormat {
     List<String> notes = new ArrayList<>(List.of(table.note()));
     ReadingMapping.Time given =
         known.mapping().map(ReadingMapping::time).orElse(ReadingMapping.Time.FROM_FILE);
-    ChannelMapping mapping = columns(known, questions);
-    if (time.columns().isEmpty()) {
+    ChannelMapping mapping = columns(known, questions, notes);
+    if (time.columns().isEmpty() || time.elapsed()) {
       questions.add(question("time.columns", "no column holds dates: say which one, or which two"));
     }
     Optional<DateOrder> order = order(given, questions, notes);
-    Optional<String> zone = given.zone().or(() -> setting.siteZone().map(ZoneId::getId));
+    Optional<String> zone =
+        given.zone().or(() -> written(notes)).or(() -> setting.siteZone().map(ZoneId::getId));
     zone(zone, order, questions);
     if (!questions.isEmpty()) {
       throw new ReadingRefusedException(
@@ -79,15 +77,34 @@ final class LogFormat {
   }
 
   /** What is open about the columns is asked together with what is open about the time. */
-  private ChannelMapping columns(Mappings known, List<ReadingRefusedException.Question> questions) {
+  private ChannelMapping columns(
+      Mappings known, List<ReadingRefusedException.Question> questions, List<String> notes) {
     List<String> names = names();
     List<String> others = table.headings().stream().filter(h -> !names.contains(h)).toList();
     try {
-      return ChannelMapping.settle(others, known.mapping(), known.whence(), WORDS);
+      return ChannelMapping.settle(
+          others, known.mapping(), known.whence(), words(known, others, notes));
     } catch (ReadingRefusedException e) {
       questions.addAll(e.questions());
       return new ChannelMapping(java.util.Map.of(), java.util.Map.of(), List.of());
     }
+  }
+
+  private ChannelMapping.Words words(Mappings known, List<String> others, List<String> notes) {
+    if (known.mapping().filter(m -> !m.columns().isEmpty()).isPresent()) {
+      return new ChannelMapping.Words(h -> Heading.none(), MeasuredQuantity::ofLog, EXAMPLES);
+    }
+    OpenUnits.Settled read = OpenUnits.settle(Heading.ofLog(others), new SampledColumns(table));
+    notes.addAll(read.notes());
+    return new ChannelMapping.Words(
+        h -> read.headings().getOrDefault(h, Heading.none()), MeasuredQuantity::ofLog, EXAMPLES);
+  }
+
+  /** The zone that the file names. */
+  private Optional<String> written(List<String> notes) {
+    Optional<String> zone = ZoneNamed.of(table, names()).map(ZoneId::getId);
+    zone.ifPresent(z -> notes.add("Times are in the zone " + z + ", as the file says."));
+    return zone;
   }
 
   private List<String> names() {
@@ -174,8 +191,7 @@ final class LogFormat {
     if (given.stamp().isPresent()) {
       return given.stamp().get();
     }
-    boolean end =
-        names().stream().anyMatch(n -> n.toLowerCase(Locale.ROOT).matches(".*\\b(end|to)\\b.*"));
+    boolean end = names().stream().anyMatch(TimeColumns::isEnd);
     notes.add(
         end
             ? "Times mark the ends of the intervals, as their heading says."

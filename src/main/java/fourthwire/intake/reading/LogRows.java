@@ -17,10 +17,14 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.function.BiPredicate;
+import java.util.regex.Pattern;
 
 /** Reads the rows of a log as planned. */
 final class LogRows {
   private static final int TOLD = 3;
+  private static final Pattern SUMMARY =
+      Pattern.compile(
+          "(?i)\\W*(min|max|avg|average|mean|total|sum|summe|std|stdev|p\\d\\d|median|mittel|moy|count|peak|end|statisti|summary|note|comment|remark|#|//|\\*).*");
 
   private final TextTable table;
   private final TimeColumns time;
@@ -28,7 +32,7 @@ final class LogRows {
   private final DateOrder order;
   private final LocalClock clock;
   private final int[] at;
-  private final double[] factor;
+  private final Factor[] factor;
   private final double[] values;
   private final IntervalLog.Builder log;
   private final List<String> leftOut = new ArrayList<>();
@@ -45,7 +49,7 @@ final class LogRows {
     this.clock = new LocalClock(mapping.time().zone().map(ZoneId::of).orElse(ZoneOffset.UTC));
     List<Column> columns = List.copyOf(mapping.columns().values());
     this.at = mapping.columns().keySet().stream().mapToInt(table.headings()::indexOf).toArray();
-    this.factor = columns.stream().mapToDouble(Column::factor).toArray();
+    this.factor = columns.stream().map(c -> Factor.of(c.factor())).toArray(Factor[]::new);
     this.values = new double[at.length];
     this.log = new IntervalLog.Builder(columns.stream().map(LogRows::key).toList());
   }
@@ -91,7 +95,7 @@ final class LogRows {
     Optional<Instant> when = time.at(row, order).map(this::instant);
     boolean any = false;
     for (int k = 0; k < at.length; k++) {
-      double value = row.value(at[k]);
+      double value = row.value(at[k], factor[k].shift());
       if (value == Double.NEGATIVE_INFINITY) {
         value = Double.NaN;
         if (when.isPresent()) {
@@ -99,7 +103,10 @@ final class LogRows {
         }
       }
       any = any || !Double.isNaN(value);
-      values[k] = value * factor[k];
+      values[k] = value * factor[k].rest();
+    }
+    if (when.isEmpty() && isNote(row)) {
+      any = false;
     }
     if (when.isPresent()) {
       log.add(when.get().toEpochMilli(), values);
@@ -122,6 +129,14 @@ final class LogRows {
         leftOut.add("row " + row.number());
       }
     }
+  }
+
+  /** A line below or between the values: a sum, a remark, a header that comes again. */
+  private boolean isNote(TextTable.Row row) {
+    String first = row.text(time.columns().get(0));
+    return first.isEmpty()
+        ? 2 * row.cells() < table.headings().size()
+        : SUMMARY.matcher(first).matches() || table.headings().contains(first) || row.cells() < 3;
   }
 
   private Instant instant(TimeColumns.At when) {
@@ -150,7 +165,7 @@ final class LogRows {
         ? List.of()
         : List.of(
             leftOutRows
-                + " rows without time and values were passed over: "
+                + " rows without a time were passed over: "
                 + String.join(", ", leftOut)
                 + (leftOutRows > leftOut.size() ? " …" : "")
                 + ".");

@@ -61,6 +61,9 @@ final class TextFormat implements Format {
   /** As told, else by what the file shows: elapsed seconds or a capture's names are a capture. */
   private ReadingKind kind(Optional<ReadingMapping> mapping, TimeColumns time) {
     Optional<ReadingKind> told = mapping.flatMap(ReadingMapping::kind);
+    if (told.isEmpty() && time.elapsed() && SampleStep.isOfALog(table, time)) {
+      return ReadingKind.LOG;
+    }
     boolean rate = mapping.map(m -> m.sampleRateHz().isPresent()).orElse(false);
     boolean captureNames =
         mapping.stream()

@@ -2,7 +2,11 @@ package fourthwire.intake.reading.heading;
 
 import fourthwire.metering.MeasuredQuantity;
 import fourthwire.metering.ReadingMapping.Statistic;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
 import java.util.Optional;
+import java.util.stream.Collectors;
 
 /**
  * What a heading says.
@@ -22,6 +26,10 @@ public record Heading(
     CLEAR,
     /** The unit is the plain one by practice: A, V, percent. */
     LIKELY,
+    /** All but the unit is named; the values may settle it. */
+    UNIT_OPEN,
+    /** It names a measure of no conductor: a mean over lines, or the only one there is. */
+    PLACELESS,
     /** It names a quantity but leaves a choice open. */
     UNCLEAR,
     /** It names nothing known. */
@@ -30,13 +38,37 @@ public record Heading(
 
   private static final Heading NONE = new Heading(Meaning.NONE, "", Statistic.MEAN, 1, "");
 
-  /** Of a column of an interval log. */
-  public static Heading ofLog(String text) {
-    Optional<MeasuredQuantity> exact = MeasuredQuantity.ofLog(text.trim());
-    if (exact.isPresent()) {
-      return new Heading(Meaning.EXACT, text.trim(), Statistic.MEAN, 1, "");
+  /**
+   * Of the columns of an interval log, in their order: which letters name the lines shows in all of
+   * them together.
+   */
+  public static Map<String, Heading> ofLog(List<String> headings) {
+    Map<String, LogWords> words = new LinkedHashMap<>();
+    headings.forEach(h -> words.put(h, LogWords.of(h)));
+    LogPlace places =
+        new LogPlace(
+            words.values().stream()
+                .flatMap(w -> w.places().stream())
+                .collect(Collectors.toUnmodifiableSet()));
+    Map<String, Heading> read = new LinkedHashMap<>();
+    words.forEach(
+        (heading, w) ->
+            read.put(heading, exact(heading).orElseGet(() -> new LogHeading(w, places).read())));
+    return read;
+  }
+
+  /** A quantity's name, perhaps with the statistic behind it as results write it. */
+  private static Optional<Heading> exact(String heading) {
+    String text = heading.trim();
+    for (Statistic s : Statistic.values()) {
+      String ending = "." + s.word();
+      String name = text.endsWith(ending) ? text.substring(0, text.length() - ending.length()) : "";
+      if (MeasuredQuantity.ofLog(name).isPresent()) {
+        return Optional.of(new Heading(Meaning.EXACT, name, s, 1, ""));
+      }
     }
-    return new LogHeading(Words.of(text, "")).read();
+    return MeasuredQuantity.ofLog(text)
+        .map(q -> new Heading(Meaning.EXACT, text, Statistic.MEAN, 1, ""));
   }
 
   /**
@@ -54,11 +86,17 @@ public record Heading(
     return new CaptureHeading(Words.of(text, unit), phase).read();
   }
 
-  static Heading none() {
+  /** Nothing a log holds. */
+  public static Heading none() {
     return NONE;
   }
 
-  static Heading unclear(String question) {
+  static Heading placeless(String measure, String question) {
+    return new Heading(Meaning.PLACELESS, measure, Statistic.MEAN, 1, question);
+  }
+
+  /** Something that must be asked. */
+  public static Heading unclear(String question) {
     return new Heading(Meaning.UNCLEAR, "", Statistic.MEAN, 1, question);
   }
 }

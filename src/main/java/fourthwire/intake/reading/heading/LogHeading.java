@@ -1,196 +1,231 @@
 package fourthwire.intake.reading.heading;
 
+import fourthwire.intake.reading.heading.Vocabulary.Sense;
 import fourthwire.metering.MeasuredQuantity;
 import fourthwire.metering.ReadingMapping.Statistic;
 import java.util.Optional;
-import java.util.regex.Matcher;
-import java.util.regex.Pattern;
 
 /** Reads the heading of a column of an interval log. */
 final class LogHeading {
-  private static final Pattern ORDER =
-      Pattern.compile("(?:h|harm|harmonic|order)0?(\\d{1,2})|(\\d{1,2})(?:st|nd|rd|th|h)");
-  private static final Pattern NUMBER = Pattern.compile("0?(\\d{1,2})");
+  private static final int HIGHEST_ORDER = 50;
 
-  private final Words words;
+  private final LogWords words;
+  private final LogPlace places;
   private final Optional<Unit.Kind> unit;
 
-  LogHeading(Words words) {
+  LogHeading(LogWords words, LogPlace places) {
     this.words = words;
+    this.places = places;
     this.unit = words.unit().map(Unit::kind);
   }
 
   Heading read() {
-    Optional<String> measure = measure();
-    if (measure.isEmpty()) {
+    boolean peak = words.says(Sense.PEAK) && (voltage() || current());
+    if (words.says(Sense.OTHER) || peak || words.saysNothing()) {
       return Heading.none();
     }
-    if (measure.get().equals("frequency_hz")) {
+    if (words.order() > 0
+        || words.says(Sense.HARMONIC)
+        || words.says(Sense.INDIVIDUAL_DISTORTION)) {
+      return harmonic(words.order());
+    }
+    if (words.says(Sense.DISTORTION)) {
+      return distortion();
+    }
+    if (words.says(Sense.ENERGY) || is(Unit.Kind.ENERGY)) {
+      return energy();
+    }
+    if (words.says(Sense.DISPLACEMENT)
+        || words.says(Sense.POWER_FACTOR)
+        || words.says(Sense.FACTOR)) {
+      return factor();
+    }
+    if (words.says(Sense.ANGLE) || is(Unit.Kind.ANGLE) || is(Unit.Kind.SHARE)) {
+      return Heading.none();
+    }
+    if (words.says(Sense.FREQUENCY) || is(Unit.Kind.FREQUENCY)) {
       return settled("frequency_hz", true);
     }
-    if (measure.get().startsWith("?")) {
-      return Heading.unclear(measure.get().substring(1));
+    return words.says(Sense.FUNDAMENTAL) ? fundamental() : plain();
+  }
+
+  private boolean is(Unit.Kind kind) {
+    return unit.filter(k -> k == kind).isPresent();
+  }
+
+  private boolean current() {
+    return words.says(Sense.CURRENT) || is(Unit.Kind.CURRENT);
+  }
+
+  private boolean voltage() {
+    return words.says(Sense.VOLTAGE) || is(Unit.Kind.VOLTAGE);
+  }
+
+  private boolean power() {
+    return words.says(Sense.POWER)
+        || words.says(Sense.ACTIVE)
+        || words.says(Sense.REACTIVE)
+        || words.says(Sense.APPARENT);
+  }
+
+  private Heading harmonic(int order) {
+    if (order < 1 || order > HIGHEST_ORDER || power()) {
+      return Heading.none();
     }
-    Optional<String> place = place(measure.get());
-    if (place.isEmpty()) {
-      return Heading.unclear("which conductor this is (L1, L2, L3, N), or total");
+    if (current() == voltage()) {
+      return Heading.unclear("whether this harmonic is of current or voltage");
     }
-    String quantity = ordered(place.get(), measure.get()) + "." + measure.get();
-    return MeasuredQuantity.ofLog(quantity).isPresent()
-        ? settled(quantity, unitNamed(measure.get()))
+    String start = (current() ? "current_h" : "voltage_h") + order;
+    if (words.says(Sense.ANGLE) || is(Unit.Kind.ANGLE)) {
+      return at(start + "_deg", unit.isPresent());
+    }
+    if (unit.isEmpty()) {
+      return words.says(Sense.INDIVIDUAL_DISTORTION)
+          ? at(start + "_percent", false)
+          : open(
+              start + (current() ? "_a" : "_v"),
+              "the unit of this harmonic: "
+                  + (current() ? "A" : "V")
+                  + " or percent of the fundamental");
+    }
+    if (is(Unit.Kind.SHARE)) {
+      return words.shareOf().startsWith("r") ? Heading.none() : at(start + "_percent", true);
+    }
+    boolean fits = is(current() ? Unit.Kind.CURRENT : Unit.Kind.VOLTAGE);
+    return fits ? at(start + (current() ? "_a" : "_v"), true) : Heading.none();
+  }
+
+  private Heading fundamental() {
+    return power() || current() == voltage()
+        ? Heading.none()
+        : at(current() ? "current_h1_a" : "voltage_h1_v", unit.isPresent());
+  }
+
+  private Heading distortion() {
+    if (unit.isPresent() && !is(Unit.Kind.SHARE) || words.shareOf().startsWith("r")) {
+      return Heading.none();
+    }
+    if (words.says(Sense.CURRENT) == words.says(Sense.VOLTAGE)) {
+      return Heading.unclear("whether this distortion is of current or voltage");
+    }
+    return at(
+        (words.says(Sense.CURRENT) ? "current" : "voltage") + "_thd_percent", unit.isPresent());
+  }
+
+  private Heading energy() {
+    if (words.says(Sense.REACTIVE) || words.says(Sense.APPARENT) || words.says(Sense.EXPORTED)) {
+      return Heading.none();
+    }
+    if (unit.isPresent() && !is(Unit.Kind.ENERGY)) {
+      return Heading.none();
+    }
+    return unit.isPresent()
+        ? at("energy_wh", true)
+        : open("energy_wh", "the unit of this energy: Wh, kWh or MWh");
+  }
+
+  private Heading factor() {
+    if (!words.says(Sense.POWER_FACTOR)
+        && !words.says(Sense.DISPLACEMENT)
+        && !words.says(Sense.POWER)) {
+      return Heading.none();
+    }
+    boolean angle = words.says(Sense.ANGLE) || is(Unit.Kind.ANGLE);
+    return angle
+        ? Heading.none()
+        : at(words.says(Sense.DISPLACEMENT) ? "displacement_factor" : "power_factor", true);
+  }
+
+  /** Volts, amps and powers; what words and unit say must agree. */
+  private Heading plain() {
+    if (voltage() && current() || power() && (voltage() || current())) {
+      return Heading.unclear("which quantity this is: its name and its unit disagree");
+    }
+    if (current()) {
+      return at("rms_a", unit.isPresent());
+    }
+    if (voltage()) {
+      return at("rms_v", unit.isPresent());
+    }
+    Optional<String> named = named();
+    Optional<String> measured = unit.flatMap(LogHeading::powerOf);
+    if (named.isPresent() && measured.isPresent() && !named.equals(measured)) {
+      return Heading.unclear("which power this is: its name and its unit disagree");
+    }
+    if (measured.isPresent()) {
+      return at(measured.get(), true);
+    }
+    if (named.isPresent()) {
+      return open(named.get(), "the unit of this power: W, kW, var, kvar, VA or kVA");
+    }
+    return words.says(Sense.POWER)
+        ? Heading.unclear("the unit of this power: W, kW, var, kvar, VA or kVA")
         : Heading.none();
   }
 
-  /** Powers of no named line are the total; a line-to-line rms has no direction. */
-  private Optional<String> place(String measure) {
-    Optional<String> named = Place.of(words);
-    boolean power = measure.matches("active_w|reactive_var|apparent_va|.*_factor|energy_wh");
-    return named.or(() -> power ? Optional.of(Place.TOTAL) : Optional.empty());
+  private Optional<String> named() {
+    if (words.says(Sense.REACTIVE)) {
+      return Optional.of("reactive_var");
+    }
+    if (words.says(Sense.APPARENT)) {
+      return Optional.of("apparent_va");
+    }
+    return words.says(Sense.ACTIVE) ? Optional.of("active_w") : Optional.empty();
   }
 
-  private static String ordered(String place, String measure) {
-    boolean pairBackwards = place.matches("L2-L1|L3-L2|L1-L3");
-    return pairBackwards && !measure.endsWith("_deg")
-        ? place.substring(3) + "-" + place.substring(0, 2)
-        : place;
-  }
-
-  private boolean unitNamed(String measure) {
-    return unit.isPresent() || measure.endsWith("_factor");
-  }
-
-  private Heading settled(String quantity, boolean unitNamed) {
-    return new Heading(
-        unitNamed ? Heading.Meaning.CLEAR : Heading.Meaning.LIKELY,
-        quantity,
-        statistic(),
-        words.unit().map(Unit::factor).orElse(1.0),
-        "");
-  }
-
-  private Statistic statistic() {
-    if (words.has("min", "minimum", "lowest")) {
-      return Statistic.MIN;
-    }
-    if (words.has("max", "maximum", "peak", "highest")) {
-      return Statistic.MAX;
-    }
-    return words.has("inst", "instantaneous") ? Statistic.INSTANT : Statistic.MEAN;
-  }
-
-  /** The measure; starting with ? what is unclear about it. */
-  private Optional<String> measure() {
-    if (words.has(
-        w -> w.contains("unbalance") || w.contains("imbalance") || w.matches("flicker|p[sl]t"))) {
-      return Optional.empty();
-    }
-    Optional<String> order = order();
-    if (order.isPresent()) {
-      return harmonic(order.get());
-    }
-    if (words.has(w -> w.contains("thd")) || words.together().contains("distortion")) {
-      return distortion();
-    }
-    return factor().or(this::byUnit).or(this::byWords);
-  }
-
-  private Optional<String> order() {
-    Optional<Matcher> order = words.first(ORDER);
-    if (order.isPresent()) {
-      Matcher m = order.get();
-      return Optional.of(m.group(1) != null ? m.group(1) : m.group(2));
-    }
-    int at = words.all().indexOf("harmonic");
-    at = at < 0 ? words.all().indexOf("order") : at;
-    if (at >= 0 && at + 1 < words.all().size()) {
-      Matcher m = NUMBER.matcher(words.all().get(at + 1));
-      return m.matches() ? Optional.of(m.group(1)) : Optional.empty();
-    }
-    return Optional.empty();
-  }
-
-  private Optional<String> harmonic(String order) {
-    boolean current = unit.filter(k -> k == Unit.Kind.CURRENT).isPresent() || current();
-    boolean voltage = unit.filter(k -> k == Unit.Kind.VOLTAGE).isPresent() || voltage();
-    if (current == voltage) {
-      return Optional.of("?whether this harmonic is of current or voltage");
-    }
-    String start = (current ? "current_h" : "voltage_h") + Integer.parseInt(order);
-    if (unit.isEmpty()) {
-      return Optional.of(
-          "?the unit of this harmonic: "
-              + (current ? "A" : "V")
-              + " or percent of the fundamental");
-    }
-    return switch (unit.get()) {
-      case CURRENT -> Optional.of(start + "_a");
-      case VOLTAGE -> Optional.of(start + "_v");
-      case SHARE -> Optional.of(start + "_percent");
-      case ANGLE -> Optional.of(start + "_deg");
+  private static Optional<String> powerOf(Unit.Kind kind) {
+    return switch (kind) {
+      case ACTIVE -> Optional.of("active_w");
+      case REACTIVE -> Optional.of("reactive_var");
+      case APPARENT -> Optional.of("apparent_va");
       default -> Optional.empty();
     };
   }
 
-  private Optional<String> distortion() {
-    boolean current = current() || words.has(w -> w.matches("thdi.?|ithd.*|thdin"));
-    boolean voltage = voltage() || words.has(w -> w.matches("thd[uv].{0,2}|[uv]thd.*"));
-    if (unit.isPresent() && unit.get() != Unit.Kind.SHARE) {
-      return Optional.empty();
-    }
-    return Optional.of(
-        current == voltage
-            ? "?whether this distortion is of current or voltage"
-            : (current ? "current" : "voltage") + "_thd_percent");
+  private Heading open(String measure, String question) {
+    Heading found = at(measure, false);
+    return found.quantity().isEmpty()
+        ? found
+        : new Heading(Heading.Meaning.UNIT_OPEN, found.quantity(), found.statistic(), 1, question);
   }
 
-  private Optional<String> factor() {
-    if (words.has(w -> w.matches("cos|cosphi|cosφ|φ|dpf.{0,2}")) || words.has("displacement")) {
-      return Optional.of("displacement_factor");
+  /** At the place it names; powers and energies of no named line are the total. */
+  private Heading at(String measure, boolean unitNamed) {
+    boolean summed = measure.matches("active_w|reactive_var|apparent_va|.*_factor|energy_wh");
+    Optional<String> named = places.of(words.places());
+    if (words.says(Sense.NEUTRAL)) {
+      named = named.filter(p -> !p.equals(Place.TOTAL)).or(() -> Optional.of("N"));
     }
-    boolean factor =
-        words.has(w -> w.matches("pf.{0,3}|powerfactor"))
-            || words.has("power") && words.has("factor");
-    return factor ? Optional.of("power_factor") : Optional.empty();
+    if (named.isEmpty() && (summed || words.says(Sense.TOTAL))) {
+      named = Optional.of(Place.TOTAL);
+    }
+    if (named.isEmpty()) {
+      return Heading.placeless(measure, "which conductor this is (L1, L2, L3, N), or total");
+    }
+    String quantity = named.get() + "." + measure;
+    return MeasuredQuantity.ofLog(quantity).isPresent()
+        ? settled(quantity, unitNamed)
+        : Heading.none();
   }
 
-  private Optional<String> byUnit() {
-    if (unit.isEmpty()) {
-      return Optional.empty();
-    }
-    return switch (unit.get()) {
-      case CURRENT -> Optional.of("rms_a");
-      case VOLTAGE -> Optional.of("rms_v");
-      case ACTIVE -> Optional.of("active_w");
-      case REACTIVE -> Optional.of("reactive_var");
-      case APPARENT -> Optional.of("apparent_va");
-      case ENERGY -> Optional.of("energy_wh");
-      case FREQUENCY -> Optional.of("frequency_hz");
-      case SHARE, ANGLE -> Optional.empty();
-    };
+  private Heading settled(String quantity, boolean unitNamed) {
+    boolean ratio = quantity.endsWith("_factor");
+    double factor = words.unit().map(Unit::factor).orElse(1.0);
+    return new Heading(
+        unitNamed ? Heading.Meaning.CLEAR : Heading.Meaning.LIKELY,
+        quantity,
+        statistic(),
+        ratio && is(Unit.Kind.SHARE) ? 0.01 : factor,
+        "");
   }
 
-  private Optional<String> byWords() {
-    if (words.has(w -> w.matches("frequency|freq|f"))) {
-      return Optional.of("frequency_hz");
+  private Statistic statistic() {
+    if (words.says(Sense.MIN)) {
+      return Statistic.MIN;
     }
-    if (words.has(w -> w.matches("energy")) || words.has("active") && words.has("import")) {
-      return Optional.of("?the unit of this energy: Wh, kWh or MWh");
+    if (words.says(Sense.MAX) || words.says(Sense.PEAK)) {
+      return Statistic.MAX;
     }
-    if (words.has("power") || words.has(w -> w.matches("[pqs](l?[123]|[abc]|tot|total|sum|t)?"))) {
-      return Optional.of("?the unit of this power: W, kW, var, kvar, VA or kVA");
-    }
-    if (current()) {
-      return Optional.of("rms_a");
-    }
-    return voltage() ? Optional.of("rms_v") : Optional.empty();
-  }
-
-  private boolean current() {
-    return words.has(w -> w.matches("currents?|amps?|amperes?|i|irms.*|i(l?[1-4]|[abcrstn])"));
-  }
-
-  private boolean voltage() {
-    return words.has(
-        w -> w.matches("voltages?|volts?|[uv]|[uv]rms.*|[uv](l?[1-4]|[abcrstn]){1,2}"));
+    return words.says(Sense.INSTANT) ? Statistic.INSTANT : Statistic.MEAN;
   }
 }

@@ -6,10 +6,10 @@ import java.util.Optional;
 
 /** Units that columns come in, with the factor to the base unit of their kind. */
 enum Unit {
-  AMPERE(Kind.CURRENT, 1, "a", "amp", "amps", "ampere", "amperes", "arms"),
+  AMPERE(Kind.CURRENT, 1, "a", "amp", "amps", "ampere", "amperes", "arms", "aac", "aeff"),
   MILLIAMPERE(Kind.CURRENT, 1e-3, "ma"),
   KILOAMPERE(Kind.CURRENT, 1e3, "ka"),
-  VOLT(Kind.VOLTAGE, 1, "v", "volt", "volts", "vrms"),
+  VOLT(Kind.VOLTAGE, 1, "v", "volt", "volts", "vrms", "vac", "veff"),
   MILLIVOLT(Kind.VOLTAGE, 1e-3, "mv"),
   KILOVOLT(Kind.VOLTAGE, 1e3, "kv"),
   WATT(Kind.ACTIVE, 1, "w", "watt", "watts"),

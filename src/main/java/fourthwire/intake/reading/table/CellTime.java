@@ -3,7 +3,6 @@ package fourthwire.intake.reading.table;
 import java.time.DateTimeException;
 import java.time.LocalDate;
 import java.time.LocalDateTime;
-import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.OptionalInt;
@@ -13,172 +12,173 @@ import java.util.regex.Pattern;
 /**
  * A date and time of day as a cell holds them, before the order of day and month is settled.
  *
- * @param first first number of the date
- * @param second second number
- * @param third third number
- * @param yearFirst whether the first number is the year
- * @param monthNamed whether the month was a name: the second number then is the month
+ * @param date its numbers as they stand
  * @param nanoOfDay time of day
  * @param offsetSeconds offset from UTC, where it is written
  */
-record CellTime(
-    int first,
-    int second,
-    int third,
-    boolean yearFirst,
-    boolean monthNamed,
-    long nanoOfDay,
-    OptionalInt offsetSeconds) {
-  private static final List<String> MONTHS =
-      List.of("jan", "feb", "mar", "apr", "may", "jun", "jul", "aug", "sep", "oct", "nov", "dec");
+record CellTime(Numerals date, long nanoOfDay, OptionalInt offsetSeconds) {
   private static final Pattern DATE =
-      Pattern.compile(
-          "^(?:\\p{L}{2,9},?\\s+)?(\\d{1,4})\\s*[-/. ]\\s*(\\d{1,2}|\\p{L}{3,9}\\.?)\\s*[-/. ,]\\s*(\\d{1,4})(?=\\D|$)");
+      Pattern.compile("(\\d{1,4})\\s?([-/.])\\s?(\\d{1,2})\\s?\\2\\s?(\\d{1,4})\\.?(?=\\D|$)");
+  private static final Pattern NAMED_DATE =
+      Pattern.compile("(\\d{1,4})\\.?[-/ .]\\s?(\\p{L}{3,10})\\.?[-/ .,]\\s?(\\d{1,4})(?=\\D|$)");
   private static final Pattern MONTH_DAY =
-      Pattern.compile("^(\\p{L}{3,9})\\.?\\s+(\\d{1,2}),?\\s+(\\d{4})(?=\\D|$)");
+      Pattern.compile("(\\p{L}{3,10})\\.?[- ](\\d{1,2})[, -]\\s?(\\d{4})(?=\\D|$)");
   private static final Pattern COMPACT =
-      Pattern.compile("^(\\d{4})(\\d{2})(\\d{2})(?=\\D|\\d{4,6}$|$)");
-  private static final Pattern CLOCK =
-      Pattern.compile(
-          "^[T\\s,]*(\\d{1,2})[:.](\\d{2})(?:[:.](\\d{2})(?:[.,](\\d{1,9}))?)?\\s*([aApP])?\\.?[mM]?\\.?\\s*"
-              + "(Z|UTC|(?:UTC)?[+-]\\d{2}:?\\d{2})?$");
-  private static final Pattern COMPACT_CLOCK =
-      Pattern.compile("^[T\\s]*(\\d{2})(\\d{2})(\\d{2})?$");
+      Pattern.compile("((?:19|20)\\d{2})(\\d{2})(\\d{2})(?=\\D|\\d{4}$|\\d{6}$|$)");
+  private static final Pattern WEEKDAY =
+      Pattern.compile("(mo|tu|we|th|fr|sa|su)[a-z]*\\.?,?\\s+(?=[\\d\\p{L}])");
+  private static final Pattern FROM_TO =
+      Pattern.compile("(.*\\d(?::\\d\\d)(?:\\s?[ap]m)?)\\s*(?:-|–|to|bis)\\s*\\d.*");
+
+  /**
+   * The numbers of a date.
+   *
+   * @param yearFirst whether the first is the year, as its four digits show
+   * @param monthNamed whether the month was a name: the second then is the month
+   * @param hyphened whether hyphens stand between them
+   * @param weekday 1 for Monday to 7, as named in English; 0 for none
+   */
+  record Numerals(
+      int first,
+      int second,
+      int third,
+      boolean yearFirst,
+      boolean monthNamed,
+      boolean hyphened,
+      int weekday) {
+
+    private Numerals onWeekday(int day) {
+      return new Numerals(first, second, third, yearFirst, monthNamed, hyphened, day);
+    }
+  }
+
+  private record Found(Numerals date, int end) {}
+
+  /** Whether a cell is a date, a time of day, or both. */
+  static boolean isTime(String cell) {
+    return couldBeTime(cell)
+        && (cell.indexOf(':') > 0 && ClockText.of(cell.toLowerCase(Locale.ROOT)).isPresent()
+            || of(cell).isPresent());
+  }
+
+  private static boolean couldBeTime(String cell) {
+    if (cell.length() < 4 || cell.length() > 60) {
+      return false;
+    }
+    int digits = 0;
+    boolean mark = false;
+    for (int k = 0; k < cell.length(); k++) {
+      char c = cell.charAt(k);
+      digits += c >= '0' && c <= '9' ? 1 : 0;
+      mark = mark || ":/-. ".indexOf(c) >= 0 && k > 0;
+    }
+    return digits > 2 && (mark || digits >= 8);
+  }
 
   /** What this text says; empty where it is no date with or without a time of day. */
-  static Optional<CellTime> of(String text) {
-    Matcher compact = COMPACT.matcher(text);
-    if (compact.find()) {
-      return clock(
-          text.substring(compact.end()),
-          number(compact, 1),
-          number(compact, 2),
-          number(compact, 3),
-          true,
-          false);
-    }
-    Matcher named = MONTH_DAY.matcher(text);
-    if (named.find() && month(named.group(1)) > 0) {
-      return clock(
-          text.substring(named.end()),
-          number(named, 2),
-          month(named.group(1)),
-          number(named, 3),
-          false,
-          true);
-    }
-    Matcher date = DATE.matcher(text);
-    if (!date.find()) {
+  static Optional<CellTime> of(String cell) {
+    if (!couldBeTime(cell)) {
       return Optional.empty();
     }
-    boolean name = !Character.isDigit(date.group(2).charAt(0));
-    int second = name ? month(date.group(2)) : number(date, 2);
-    boolean yearFirst = date.group(1).length() > 2;
-    if (second < 1 || yearFirst == date.group(3).length() > 2 && yearFirst) {
-      return Optional.empty();
+    String text = cell.toLowerCase(Locale.ROOT);
+    Optional<CellTime> dateFirst = dateFirst(text);
+    if (dateFirst.isPresent()) {
+      return dateFirst;
     }
-    return clock(
-        text.substring(date.end()), number(date, 1), second, number(date, 3), yearFirst, name);
+    Matcher fromTo = FROM_TO.matcher(text);
+    if (fromTo.matches()) {
+      return dateFirst(fromTo.group(1));
+    }
+    int blank = text.indexOf(' ');
+    return blank > 0 && text.charAt(Math.min(2, blank)) == ':'
+        ? dateFirst(turned(text))
+        : Optional.empty();
+  }
+
+  /** A time before the date: {@code 00:10:00 am 13/02/2025}. */
+  private static String turned(String text) {
+    Matcher m = Pattern.compile("(\\S+(?:\\s?[ap]\\.?m\\.?)?)\\s+(.*)").matcher(text);
+    return m.matches() ? m.group(2) + " " + m.group(1) : text;
+  }
+
+  private static Optional<CellTime> dateFirst(String text) {
+    Matcher weekday = WEEKDAY.matcher(text);
+    boolean named = weekday.lookingAt();
+    String rest = named ? text.substring(weekday.end()) : text;
+    int day = named ? 1 + "mo tu we th fr sa su".indexOf(weekday.group(1)) / 3 : 0;
+    return date(rest)
+        .flatMap(
+            found -> {
+              String clock = rest.substring(found.end());
+              return clock.isBlank()
+                  ? Optional.of(new CellTime(found.date().onWeekday(day), 0, OptionalInt.empty()))
+                  : ClockText.of(clock.replaceFirst("^[t\\s,_-]+", ""))
+                      .map(
+                          c ->
+                              new CellTime(
+                                  found.date().onWeekday(day), c.nanoOfDay(), c.offsetSeconds()));
+            });
+  }
+
+  private static Optional<Found> date(String text) {
+    Matcher m = DATE.matcher(text);
+    if (m.lookingAt()) {
+      return found(m, number(m, 1), number(m, 3), number(m, 4), m.group(1), m.group(4), false);
+    }
+    m = COMPACT.matcher(text);
+    if (m.lookingAt()) {
+      return found(m, number(m, 1), number(m, 2), number(m, 3), m.group(1), m.group(3), false);
+    }
+    m = NAMED_DATE.matcher(text);
+    if (m.lookingAt() && MonthNames.number(m.group(2)) > 0) {
+      int month = MonthNames.number(m.group(2));
+      return found(m, number(m, 1), month, number(m, 3), m.group(1), m.group(3), true);
+    }
+    m = MONTH_DAY.matcher(text);
+    if (m.lookingAt() && MonthNames.number(m.group(1)) > 0) {
+      int month = MonthNames.number(m.group(1));
+      return found(m, number(m, 2), month, number(m, 3), m.group(2), m.group(3), true);
+    }
+    return Optional.empty();
   }
 
   private static int number(Matcher m, int group) {
     return Integer.parseInt(m.group(group));
   }
 
-  private static int month(String name) {
-    String start = name.toLowerCase(Locale.ROOT);
-    return start.length() < 3 ? 0 : MONTHS.indexOf(start.substring(0, 3)) + 1;
-  }
-
-  private static Optional<CellTime> clock(
-      String text, int first, int second, int third, boolean yearFirst, boolean named) {
-    if (text.isBlank()) {
-      return Optional.of(
-          new CellTime(first, second, third, yearFirst, named, 0, OptionalInt.empty()));
-    }
-    Matcher compact = COMPACT_CLOCK.matcher(text);
-    if (compact.matches()) {
-      long s = compact.group(3) == null ? 0 : number(compact, 3);
-      return at(
-          first,
-          second,
-          third,
-          yearFirst,
-          named,
-          number(compact, 1),
-          number(compact, 2),
-          s * 1_000_000_000,
-          OptionalInt.empty());
-    }
-    Matcher m = CLOCK.matcher(text);
-    if (!m.matches()) {
-      return Optional.empty();
-    }
-    int hour = number(m, 1);
-    if (m.group(5) != null) {
-      boolean afternoon = m.group(5).equalsIgnoreCase("p");
-      if (hour < 1 || hour > 12) {
-        return Optional.empty();
-      }
-      hour = hour % 12 + (afternoon ? 12 : 0);
-    }
-    long nanos = m.group(3) == null ? 0 : number(m, 3) * 1_000_000_000L;
-    if (m.group(4) != null) {
-      nanos += Long.parseLong((m.group(4) + "000000000").substring(0, 9));
-    }
-    return at(
-        first, second, third, yearFirst, named, hour, number(m, 2), nanos, offset(m.group(6)));
-  }
-
-  private static OptionalInt offset(@org.jspecify.annotations.Nullable String text) {
-    if (text == null) {
-      return OptionalInt.empty();
-    }
-    if (text.equals("Z") || text.equals("UTC")) {
-      return OptionalInt.of(0);
-    }
-    String digits = text.replaceAll("\\D", "");
-    int seconds =
-        3600 * Integer.parseInt(digits.substring(0, 2))
-            + 60 * Integer.parseInt(digits.substring(2));
-    return OptionalInt.of(text.contains("-") ? -seconds : seconds);
-  }
-
-  private static Optional<CellTime> at(
-      int first,
-      int second,
-      int third,
-      boolean yearFirst,
-      boolean named,
-      int hour,
-      int minute,
-      long nanos,
-      OptionalInt offset) {
-    // 24:00 is the end of the day.
-    if (hour > 24 || minute > 59 || nanos >= 61_000_000_000L) {
-      return Optional.empty();
-    }
-    long nanoOfDay = (60L * hour + minute) * 60_000_000_000L + nanos;
-    return Optional.of(new CellTime(first, second, third, yearFirst, named, nanoOfDay, offset));
+  /** A year has two digits or four, never three or one; only one number can be the year. */
+  private static Optional<Found> found(
+      Matcher m, int first, int second, int third, String start, String end, boolean named) {
+    boolean yearFirst = start.length() == 4;
+    boolean can = yearFirst ? end.length() <= 2 : start.length() <= 2 && end.length() % 2 == 0;
+    boolean hyphened = m.group().indexOf('-') >= 0;
+    return can
+        ? Optional.of(
+            new Found(new Numerals(first, second, third, yearFirst, named, hyphened, 0), m.end()))
+        : Optional.empty();
   }
 
   /** The local time in this order; empty where there is no such day. */
   Optional<LocalDateTime> local(DateOrder order) {
     DateOrder in =
-        yearFirst ? DateOrder.YEAR_MONTH_DAY : monthNamed ? DateOrder.DAY_MONTH_YEAR : order;
-    int year = in == DateOrder.YEAR_MONTH_DAY ? first : third;
-    int month = in == DateOrder.MONTH_DAY_YEAR ? first : second;
+        date.yearFirst()
+            ? DateOrder.YEAR_MONTH_DAY
+            : date.monthNamed() ? DateOrder.DAY_MONTH_YEAR : order;
+    int year = in == DateOrder.YEAR_MONTH_DAY ? date.first() : date.third();
+    int month = in == DateOrder.MONTH_DAY_YEAR ? date.first() : date.second();
     int day =
         switch (in) {
-          case YEAR_MONTH_DAY -> third;
-          case DAY_MONTH_YEAR -> first;
-          case MONTH_DAY_YEAR -> second;
+          case YEAR_MONTH_DAY -> date.third();
+          case DAY_MONTH_YEAR -> date.first();
+          case MONTH_DAY_YEAR -> date.second();
         };
+    if (month < 1 || month > 12 || day < 1 || day > 31) {
+      return Optional.empty();
+    }
     try {
-      return Optional.of(
-          LocalDate.of(year < 100 ? 2000 + year : year, month, day)
-              .atStartOfDay()
-              .plusNanos(nanoOfDay));
+      LocalDate at = LocalDate.of(year < 100 ? 2000 + year : year, month, day);
+      boolean other = date.weekday() > 0 && at.getDayOfWeek().getValue() != date.weekday();
+      return other ? Optional.empty() : Optional.of(at.atStartOfDay().plusNanos(nanoOfDay));
     } catch (DateTimeException e) {
       return Optional.empty();
     }
@@ -186,11 +186,11 @@ record CellTime(
 
   /** Whether it is a date in this order, and not plainly written in another. */
   boolean fits(DateOrder order) {
-    return (!yearFirst || order == DateOrder.YEAR_MONTH_DAY) && local(order).isPresent();
+    return (!date.yearFirst() || order == DateOrder.YEAR_MONTH_DAY) && local(order).isPresent();
   }
 
   /** Whether the order of its date is plain from the cell alone. */
   boolean plain() {
-    return yearFirst || monthNamed;
+    return date.yearFirst() || date.monthNamed();
   }
 }

@@ -1,7 +1,6 @@
 package fourthwire.intake.reading.table;
 
-import java.io.IOException;
-import java.io.StringReader;
+import java.nio.charset.Charset;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -11,87 +10,125 @@ import java.util.regex.Pattern;
  * How a text table is written, found from its first rows.
  *
  * @param separator between cells
- * @param decimalComma whether numbers have a comma for their decimal mark
- * @param headings of the columns, each once, a row of units joined to them
- * @param written the same as the header row alone writes them
+ * @param numbers how they are written
+ * @param header of the columns
  * @param firstData row the values begin in, the first of the file being 1
+ * @param preamble cells of the rows above the header
  */
 record Dialect(
-    char separator,
-    boolean decimalComma,
-    List<String> headings,
-    List<String> written,
-    long firstData) {
-  private static final char[] SEPARATORS = {',', ';', '\t', '|'};
+    char separator, NumberStyle numbers, HeaderRows header, long firstData, List<String> preamble) {
+  private static final char[] SEPARATORS = {',', ';', '\t', '|', ' '};
+  private static final int MOST_ROWS = 1000;
   private static final Pattern NUMBER =
-      Pattern.compile("[+-]?(\\d+([.,]\\d+)*|[.,]\\d+)([eE][+-]?\\d+)?\\s*%?");
-  private static final Pattern COMMA =
-      Pattern.compile("[+-]?\\d+(\\.\\d{3})*,\\d+([eE][+-]?\\d+)?");
-  private static final Pattern POINT = Pattern.compile("[+-]?\\d*\\.\\d+([eE][+-]?\\d+)?");
-  private static final Pattern CLOCK = Pattern.compile("\\d{1,2}:\\d{2}.*");
-  private static final Pattern UNIT =
-      Pattern.compile(
-          "[\\[(]?\\s*([kmM]?(A|V|W|VA|var|VAr|Wh|VAh|varh)|%|Hz|°|deg|-|s|ms)?\\s*[\\])]?");
+      Pattern.compile("[-+\u2212]?\\s?(\\d+([.,'’\\h]\\d+)*|[.,]\\d+)([eE][+-]?\\d+)?\\s*%?");
 
   private record Line(long row, List<String> cells) {}
 
+  /** A header and the rows below it, with how much of them is understood. */
+  private record Candidate(char separator, List<Line> lines, int first, int rows, double clean) {
+    List<String> above() {
+      return lines.get(first - 1).cells();
+    }
+  }
+
   /** The dialect of a file that begins so. */
-  static Dialect of(String head) throws IOException {
-    Optional<Dialect> best = Optional.empty();
+  static Dialect of(byte[] head, int length, Charset charset) {
+    Optional<Candidate> best = Optional.empty();
     for (char separator : SEPARATORS) {
-      Optional<Dialect> found = with(separator, head);
-      if (found.isPresent()
-          && (best.isEmpty() || found.get().headings().size() > best.get().headings().size())) {
+      Optional<Candidate> found = candidate(separator, lines(head, length, separator, charset));
+      if (found.isPresent() && (best.isEmpty() || found.get().clean() > best.get().clean())) {
         best = found;
       }
     }
-    return best.orElseThrow(
-        () ->
-            new TableException(
-                "No table was found: a row of headings, and below it rows of as many values,"
-                    + " separated by comma, semicolon or tab."));
+    return best.map(Dialect::of)
+        .orElseThrow(
+            () ->
+                new TableException(
+                    "No table was found: a row of headings, and below it rows of as many values,"
+                        + " separated by comma, semicolon or tab."));
   }
 
-  private static Optional<Dialect> with(char separator, String head) throws IOException {
+  private static List<Line> lines(byte[] head, int length, char separator, Charset charset) {
     List<Line> lines = new ArrayList<>();
-    RowScanner rows = new RowScanner(new StringReader(head), separator);
-    while (rows.next() && lines.size() < 300) {
-      lines.add(new Line(rows.row(), rows.texts()));
-    }
-    int best = -1;
-    int longest = 0;
-    for (int k = 1; k < lines.size(); k++) {
-      int run = isData(lines.get(k - 1).cells()) ? 0 : run(lines, k);
-      if (run > longest) {
-        best = k;
-        longest = run;
+    RowCutter cutter = new RowCutter(separator, charset);
+    int at = 0;
+    for (long row = 1; at < length && lines.size() < MOST_ROWS; row++) {
+      at = cutter.next(head, at, length);
+      if (!cutter.isEmpty()) {
+        lines.add(new Line(row, cutter.texts()));
       }
     }
-    return best < 0 ? Optional.empty() : Optional.of(below(separator, lines, best));
+    return lines;
   }
 
-  /** How many rows of values as wide as the row above begin here. */
+  /** The longest run of rows of values, as wide as the row of headings above it. */
+  private static Optional<Candidate> candidate(char separator, List<Line> lines) {
+    Optional<Candidate> best = Optional.empty();
+    int k = 1;
+    while (k < lines.size()) {
+      int rows = isData(lines.get(k - 1).cells()) ? 0 : run(lines, k);
+      if (rows > best.map(Candidate::rows).orElse(0)) {
+        double clean = lines.subList(k, k + rows).stream().mapToInt(l -> clean(l.cells())).sum();
+        best = Optional.of(new Candidate(separator, lines, k, rows, clean / rows));
+      }
+      k += Math.max(1, rows);
+    }
+    return best.filter(c -> c.clean() >= 2 && 2 * c.clean() >= c.above().size());
+  }
+
+  /** How many rows of values no wider than the row above begin here; it may end on blanks. */
   private static int run(List<Line> lines, int first) {
-    int width = lines.get(first - 1).cells().size();
+    int headings = filled(lines.get(first - 1).cells());
+    int width = lines.get(first).cells().size();
     int k = first;
     while (k < lines.size()
         && lines.get(k).cells().size() == width
+        && filled(lines.get(k).cells()) <= Math.max(headings, lines.get(first - 1).cells().size())
         && isData(lines.get(k).cells())) {
       k++;
     }
-    return k - first;
+    return 2 * width > headings && headings > 1 ? k - first : 0;
   }
 
-  private static Dialect below(char separator, List<Line> lines, int first) {
-    List<String> above = lines.get(first - 1).cells();
-    boolean units =
-        isUnits(above) && first > 1 && lines.get(first - 2).cells().size() == above.size();
+  /** Cells up to the last that is not blank. */
+  private static int filled(List<String> cells) {
+    int filled = cells.size();
+    while (filled > 0 && cells.get(filled - 1).isEmpty()) {
+      filled--;
+    }
+    return filled;
+  }
+
+  private static Dialect of(Candidate found) {
+    List<Line> lines = found.lines();
+    int first = firstBelow(found);
+    int width = Math.max(filled(found.above()), lines.get(first).cells().size());
+    List<List<String>> above = lines.subList(0, first).stream().map(Line::cells).toList();
+    List<List<String>> values =
+        lines.subList(found.first(), found.first() + found.rows()).stream()
+            .map(Line::cells)
+            .toList();
     return new Dialect(
-        separator,
-        separator != ',' && decimalComma(lines.subList(first, lines.size())),
-        distinct(units ? joined(lines.get(first - 2).cells(), above) : above),
-        distinct(units ? lines.get(first - 2).cells() : above),
-        lines.get(first).row());
+        found.separator(),
+        NumberStyle.of(values, found.separator()),
+        HeaderRows.of(above, width),
+        lines.get(first).row(),
+        above.stream()
+            .limit(Math.max(0, first - 1L))
+            .flatMap(List::stream)
+            .filter(c -> !c.isEmpty())
+            .toList());
+  }
+
+  /** Where the same headings stand more than once, values begin below the first of them. */
+  private static int firstBelow(Candidate found) {
+    for (int k = 1; k < found.first(); k++) {
+      if (found.lines().get(k - 1).cells().equals(found.above())
+          && isData(found.lines().get(k).cells())) {
+        return k;
+      }
+    }
+    return found.first();
   }
 
   /** At least half of what is not blank are numbers or times. */
@@ -99,52 +136,19 @@ record Dialect(
     int filled = 0;
     int values = 0;
     for (String cell : cells) {
-      if (!cell.isEmpty()) {
+      if (!cell.isEmpty() && !Numbers.isMark(cell)) {
         filled++;
         values += isValue(cell) ? 1 : 0;
       }
     }
-    return filled > 0 && 2 * values >= filled;
+    return filled > 0 && 2 * values >= filled && values > 0;
+  }
+
+  private static int clean(List<String> cells) {
+    return (int) cells.stream().filter(c -> isValue(c) || Numbers.isMark(c)).count();
   }
 
   private static boolean isValue(String cell) {
-    return NUMBER.matcher(cell).matches()
-        || CLOCK.matcher(cell).matches()
-        || CellTime.of(cell).isPresent();
-  }
-
-  private static boolean isUnits(List<String> cells) {
-    return cells.stream().allMatch(c -> UNIT.matcher(c).matches())
-        && cells.stream().anyMatch(c -> !c.isEmpty());
-  }
-
-  private static List<String> joined(List<String> headings, List<String> units) {
-    List<String> joined = new ArrayList<>();
-    for (int k = 0; k < headings.size(); k++) {
-      String unit = units.get(k).replaceAll("[\\[\\]()\\s-]", "");
-      joined.add(unit.isEmpty() ? headings.get(k) : headings.get(k) + " [" + unit + "]");
-    }
-    return joined;
-  }
-
-  private static boolean decimalComma(List<Line> lines) {
-    int commas = 0;
-    int points = 0;
-    for (Line line : lines) {
-      for (String cell : line.cells()) {
-        commas += COMMA.matcher(cell).matches() ? 1 : 0;
-        points += POINT.matcher(cell).matches() ? 1 : 0;
-      }
-    }
-    return commas > points;
-  }
-
-  private static List<String> distinct(List<String> headings) {
-    List<String> distinct = new ArrayList<>();
-    for (int k = 0; k < headings.size(); k++) {
-      String name = headings.get(k).isEmpty() ? "column " + (k + 1) : headings.get(k);
-      distinct.add(distinct.contains(name) ? name + " #" + (k + 1) : name);
-    }
-    return List.copyOf(distinct);
+    return NUMBER.matcher(cell).matches() || CellTime.isTime(cell);
   }
 }

@@ -1,7 +1,10 @@
 package fourthwire.intake.reading.table;
 
+import java.math.BigDecimal;
+import java.nio.charset.Charset;
 import java.util.Locale;
 import java.util.Set;
+import java.util.regex.Pattern;
 
 /** Numbers as cells hold them. */
 final class Numbers {
@@ -14,30 +17,88 @@ final class Numbers {
   private static final Set<String> MARKS =
       Set.of(
           "",
-          "-",
-          "--",
-          "---",
-          "*",
-          "**",
-          "***",
           "n/a",
+          "n.a.",
           "na",
           "#n/a",
+          "#na",
           "nan",
           "null",
           "none",
           "nil",
           "ol",
+          "o.l",
+          "o.l.",
           "ovl",
+          "ovld",
+          "ovf",
+          "ovfl",
           "overload",
+          "overflow",
           "over",
           "overrange",
-          "ovf",
+          "over range",
+          "over-range",
+          "or",
+          "ul",
+          "under",
+          "underrange",
           "inf",
-          "-inf",
+          "infinity",
           "invalid",
-          "?",
-          ".");
+          "inv",
+          "inval",
+          "err",
+          "error",
+          "fail",
+          "fault",
+          "bad",
+          "missing",
+          "void",
+          "no data",
+          "nodata",
+          "#div/0!",
+          "#value!",
+          "#num!",
+          "#ref!",
+          "#null!",
+          "#name?",
+          "n.v.",
+          "k.a.",
+          "n.d.",
+          "nd",
+          "off",
+          "x",
+          "xx",
+          "xxx",
+          "(null)",
+          "<null>",
+          "undef",
+          "undefined",
+          "1.#inf",
+          "1.#qnan",
+          "1.#ind",
+          "1.#snan",
+          "not available",
+          "not measured");
+
+  /** Signs alone, in any number: {@code -}, {@code ----}, {@code ***}, {@code ?}. */
+  private static final Pattern SIGNS = Pattern.compile("[-–—*?.#_/\\s]*");
+
+  /** A limit is no value: {@code >600}, {@code < 0.1}. */
+  private static final Pattern BEYOND = Pattern.compile("[<>≤≥].*");
+
+  private static final Pattern PLAIN =
+      Pattern.compile("[+-]?(\\d+\\.?\\d*|\\.\\d+)([eE][+-]?\\d{1,3})?");
+
+  /**
+   * Digits in groups of three, by comma or point as the decimal mark leaves, blank or apostrophe.
+   */
+  private static final Pattern GROUPED_BY_COMMA =
+      Pattern.compile("[+-]?\\d{1,3}(?:[, '’]\\d{3})+(?:\\.\\d*)?");
+
+  private static final Pattern GROUPED_BY_POINT =
+      Pattern.compile("[+-]?\\d{1,3}(?:[. '’]\\d{3})+(?:,\\d*)?");
 
   private static final double[] POWERS = new double[23];
 
@@ -51,59 +112,82 @@ final class Numbers {
   private Numbers() {}
 
   /**
-   * The number in these characters.
+   * The number in these bytes times ten to the power of {@code shift}.
    *
    * <p>Up to 15 digits the result is one exact division or product, hence correctly rounded
    * (Clinger, 1990); anything longer or stranger takes the slow way.
    */
-  static double parse(char[] text, int from, int to, boolean decimalComma) {
-    char mark = decimalComma ? ',' : '.';
+  static double parse(
+      byte[] text, int from, int to, Charset charset, boolean decimalComma, int shift) {
+    byte mark = (byte) (decimalComma ? ',' : '.');
     int k = from;
-    int end = to;
-    while (k < end && text[k] <= ' ') {
-      k++;
-    }
-    while (end > k && text[end - 1] <= ' ') {
-      end--;
-    }
-    int first = k;
-    boolean negative = k < end && text[k] == '-';
-    k += k < end && (negative || text[k] == '+') ? 1 : 0;
+    boolean negative = k < to && text[k] == '-';
+    k += negative ? 1 : 0;
     long digits = 0;
-    int count = 0;
-    int decimals = -1;
-    for (; k < end; k++) {
-      char c = text[k];
-      if (c >= '0' && c <= '9' && count < 15) {
-        digits = 10 * digits + (c - '0');
-        count++;
-        decimals += decimals >= 0 ? 1 : 0;
-      } else if (c == mark && decimals < 0) {
-        decimals = 0;
+    int first = k;
+    int point = -1;
+    for (; k < to; k++) {
+      int digit = text[k] - '0';
+      if (digit >= 0 && digit <= 9) {
+        digits = 10 * digits + digit;
+      } else if (text[k] == mark && point < 0) {
+        point = k;
       } else {
-        return slow(new String(text, first, end - first), decimalComma);
+        return slow(text(text, from, to, charset), decimalComma, shift);
       }
     }
-    if (count == 0) {
-      return slow(new String(text, first, end - first), decimalComma);
+    int count = k - first - (point < 0 ? 0 : 1);
+    if (count == 0 || count > 15) {
+      return slow(text(text, from, to, charset), decimalComma, shift);
     }
-    double value = decimals > 0 ? digits / POWERS[decimals] : digits;
+    int decimals = (point < 0 ? 0 : k - point - 1) - shift;
+    double value = scaled(digits, decimals);
     return negative ? -value : value;
   }
 
-  private static double slow(String text, boolean decimalComma) {
-    if (MARKS.contains(text.toLowerCase(Locale.ROOT))) {
+  private static double scaled(long digits, int decimals) {
+    if (decimals > 22 || decimals < -22) {
+      return new BigDecimal(digits).scaleByPowerOfTen(-decimals).doubleValue();
+    }
+    return decimals >= 0 ? digits / POWERS[decimals] : digits * POWERS[-decimals];
+  }
+
+  private static String text(byte[] text, int from, int to, Charset charset) {
+    return new String(text, from, to - from, charset).replace('\0', ' ');
+  }
+
+  private static double slow(String text, boolean decimalComma, int shift) {
+    String plain = plain(text);
+    if (isMark(plain)) {
       return BLANK;
     }
-    String plain = text.replace("\u00A0", "").replace("\u2212", "-").replace(" ", "");
-    plain = decimalComma ? plain.replace(".", "").replace(',', '.') : plain.replace(",", "");
-    if (plain.endsWith("%")) {
-      plain = plain.substring(0, plain.length() - 1);
-    }
-    if (!plain.matches("[+-]?(\\d+\\.?\\d*|\\.\\d+)([eE][+-]?\\d{1,3})?")) {
+    String number = ungrouped(plain, decimalComma);
+    if (!PLAIN.matcher(number).matches()) {
       return UNREADABLE;
     }
-    double value = Double.parseDouble(plain);
+    double value = new BigDecimal(number).scaleByPowerOfTen(shift).doubleValue();
     return Double.isFinite(value) ? value : UNREADABLE;
+  }
+
+  /** Blanks of every kind as one, a true minus as the hyphen, a percent sign behind taken off. */
+  private static String plain(String text) {
+    String plain = text.replaceAll("[\\s\\h\\uFEFF\\u001A]+", " ").trim().replace('\u2212', '-');
+    plain = plain.endsWith("%") ? plain.substring(0, plain.length() - 1).trim() : plain;
+    return plain.startsWith("- ") || plain.startsWith("+ ")
+        ? plain.charAt(0) + plain.substring(2)
+        : plain;
+  }
+
+  /** Whether a text stands for "not measured" or "beyond the range". */
+  static boolean isMark(String text) {
+    String word = text.toLowerCase(Locale.ROOT).trim();
+    String bare = word.replaceAll("^[-+]+|[!*]+$", "").trim();
+    return SIGNS.matcher(word).matches() || MARKS.contains(bare) || BEYOND.matcher(word).matches();
+  }
+
+  private static String ungrouped(String plain, boolean decimalComma) {
+    boolean grouped = (decimalComma ? GROUPED_BY_POINT : GROUPED_BY_COMMA).matcher(plain).matches();
+    String digits = grouped ? plain.replaceAll(decimalComma ? "[. '’]" : "[, '’]", "") : plain;
+    return decimalComma ? digits.replace(',', digits.contains(".") ? '?' : '.') : digits;
   }
 }

@@ -1,8 +1,10 @@
 package fourthwire.intake.reading.table;
 
 import java.time.Duration;
+import java.time.LocalDate;
 import java.time.LocalDateTime;
 import java.util.ArrayList;
+import java.util.Collection;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
@@ -10,8 +12,8 @@ import java.util.Optional;
 
 /**
  * Settles the order of day and month from every date of a file: an order in which one of them is no
- * date is out; of the rest the one whose rows follow each other more evenly is taken, if there is
- * one.
+ * date is out; of the rest the one whose rows follow each other more evenly, over less time and
+ * without running back, is taken, if there is one.
  */
 final class OrderSearch {
   private final List<Candidate> candidates = new ArrayList<>();
@@ -20,6 +22,7 @@ final class OrderSearch {
   private static final class Candidate {
     final DateOrder order;
     final Map<Duration, Integer> steps = new HashMap<>();
+    Optional<LocalDateTime> first = Optional.empty();
     Optional<LocalDateTime> before = Optional.empty();
     boolean possible = true;
 
@@ -28,11 +31,15 @@ final class OrderSearch {
     }
 
     void take(CellTime time) {
-      Optional<LocalDateTime> at = time.local(order);
+      // Two-digit years stand first only between hyphens.
+      boolean strange =
+          order == DateOrder.YEAR_MONTH_DAY && !time.plain() && !time.date().hyphened();
+      Optional<LocalDateTime> at = strange ? Optional.empty() : time.local(order);
       possible = possible && at.isPresent();
       if (at.isPresent() && before.isPresent() && steps.size() < 10_000) {
         steps.merge(Duration.between(before.get(), at.get()), 1, Integer::sum);
       }
+      first = first.or(() -> at);
       before = at;
     }
 
@@ -40,6 +47,20 @@ final class OrderSearch {
     int uneven() {
       int all = steps.values().stream().mapToInt(Integer::intValue).sum();
       return all - steps.values().stream().mapToInt(Integer::intValue).max().orElse(0);
+    }
+
+    Duration span() {
+      return first.isEmpty() || before.isEmpty()
+          ? Duration.ZERO
+          : Duration.between(first.get(), before.get()).abs();
+    }
+
+    boolean betterThan(Candidate other) {
+      return uneven() < other.uneven() && span().compareTo(other.span()) <= 0;
+    }
+
+    boolean begins(Collection<LocalDate> days) {
+      return first.isPresent() && days.contains(first.get().toLocalDate());
     }
   }
 
@@ -61,29 +82,43 @@ final class OrderSearch {
     return plain;
   }
 
-  /** The order and the sentence why; empty where the file does not settle it. */
-  Optional<Settled> settled() {
+  private List<Candidate> possible() {
+    return candidates.stream().filter(c -> c.possible).toList();
+  }
+
+  /** Whether only one order fits what was seen so far. */
+  boolean single() {
+    return !plain && possible().size() <= 1;
+  }
+
+  /**
+   * The order and the sentence why; empty where the file does not settle it.
+   *
+   * @param named days that lines above the table name plainly
+   */
+  Optional<Settled> settled(Collection<LocalDate> named) {
     if (plain) {
       return Optional.of(new Settled(DateOrder.YEAR_MONTH_DAY, ""));
     }
-    // Two-digit years first are a custom of files that write them so throughout, never beside 4.
-    List<Candidate> possible = candidates.stream().filter(c -> c.possible).toList();
+    List<Candidate> possible = possible();
     if (possible.size() == 1) {
-      return Optional.of(
-          new Settled(
-              possible.get(0).order,
-              "Dates are " + words(possible.get(0).order) + ": no other order fits every row."));
+      return settled(possible.get(0), "no other order fits every row.");
     }
-    int least = possible.stream().mapToInt(Candidate::uneven).min().orElse(0);
-    List<Candidate> best = possible.stream().filter(c -> c.uneven() == least).toList();
-    return best.size() == 1
-        ? Optional.of(
-            new Settled(
-                best.get(0).order,
-                "Dates are "
-                    + words(best.get(0).order)
-                    + ": only so do the rows follow each other evenly."))
+    List<Candidate> even =
+        possible.stream()
+            .filter(c -> possible.stream().allMatch(o -> o == c || c.betterThan(o)))
+            .toList();
+    if (even.size() == 1) {
+      return settled(even.get(0), "only so do the rows follow each other evenly.");
+    }
+    List<Candidate> begun = possible.stream().filter(c -> c.begins(named)).toList();
+    return begun.size() == 1
+        ? settled(begun.get(0), "so they begin on the day that stands above the table.")
         : Optional.empty();
+  }
+
+  private static Optional<Settled> settled(Candidate found, String why) {
+    return Optional.of(new Settled(found.order, "Dates are " + words(found.order) + ": " + why));
   }
 
   private static String words(DateOrder order) {

@@ -2,25 +2,33 @@ package fourthwire.intake.reading.table;
 
 import java.io.IOException;
 import java.io.InputStream;
-import java.io.Reader;
 import java.io.UncheckedIOException;
 import java.util.List;
 import java.util.function.Supplier;
 
 /**
  * A text file of rows below a row of headings: any encoding of UTF-8, UTF-16 and Windows-1252, any
- * of the separators comma, semicolon, tab and bar, decimal point or comma, lines before the
- * headings passed over, a row of units below them joined to them.
+ * of the separators comma, semicolon, tab, bar and lined-up blanks, decimal point or comma, lines
+ * before the headings passed over, units below and groups above them joined to them.
  */
 public final class TextTable {
-  private static final int HEAD = 1 << 17;
+  private static final int HEAD = 1 << 18;
 
   private final Supplier<InputStream> file;
+  private final Encoding encoding;
   private final Dialect dialect;
+  private final byte lineEnd;
+  private final boolean quotes;
 
-  private TextTable(Supplier<InputStream> file, Dialect dialect) {
+  private TextTable(Supplier<InputStream> file, Encoding encoding, byte[] head, int length) {
     this.file = file;
-    this.dialect = dialect;
+    this.encoding = encoding;
+    String text = new String(head, 0, length, java.nio.charset.StandardCharsets.ISO_8859_1);
+    this.lineEnd = (byte) (text.indexOf('\n') < 0 ? '\r' : '\n');
+    this.quotes = text.indexOf('"') >= 0;
+    // A head that is not the whole file may end within a row.
+    int rows = length < HEAD ? length : text.lastIndexOf(lineEnd) + 1;
+    this.dialect = Dialect.of(head, rows, encoding.charset());
   }
 
   /**
@@ -30,16 +38,12 @@ public final class TextTable {
    * @throws TableException where there is none
    */
   public static TextTable of(Supplier<InputStream> file) {
-    try (Reader in = Encoding.open(file.get())) {
-      char[] head = new char[HEAD];
-      int length = 0;
-      for (int n = in.read(head); n > 0; n = in.read(head, length, HEAD - length)) {
-        length += n;
-      }
-      // A head that is not the whole file may end within a row.
-      String text = new String(head, 0, length);
-      return new TextTable(
-          file, Dialect.of(length < HEAD ? text : text.substring(0, text.lastIndexOf('\n') + 1)));
+    try (InputStream first = file.get();
+        InputStream again = file.get()) {
+      Encoding encoding = Encoding.of(first);
+      byte[] head = new byte[HEAD];
+      int length = encoding.open(again).readNBytes(head, 0, HEAD);
+      return new TextTable(file, encoding, head, length);
     } catch (IOException e) {
       throw new UncheckedIOException(e);
     }
@@ -47,16 +51,29 @@ public final class TextTable {
 
   /** Headings of the columns, each once; a row of units is joined in brackets. */
   public List<String> headings() {
-    return dialect.headings();
+    return dialect.header().headings();
+  }
+
+  /** What stands above the headings, cell by cell. */
+  public List<String> preamble() {
+    return dialect.preamble();
+  }
+
+  /** Headings of columns whose numbers may have thousands set apart or three decimals. */
+  public List<String> openNumbers() {
+    return dialect.numbers().openColumns().stream()
+        .filter(k -> k < headings().size())
+        .map(headings()::get)
+        .toList();
   }
 
   /**
-   * The heading that a text stands for: itself, or what the header row alone writes where a row of
-   * units was joined to it.
+   * The heading that a text stands for: itself, or what the row of names alone writes where a unit
+   * or group was joined to it.
    */
   public String heading(String text) {
-    int at = dialect.headings().contains(text) ? -1 : dialect.written().indexOf(text);
-    return at < 0 ? text : dialect.headings().get(at);
+    int at = headings().contains(text) ? -1 : dialect.header().written().indexOf(text);
+    return at < 0 ? text : headings().get(at);
   }
 
   /** How the file is written, one sentence. */
@@ -66,12 +83,13 @@ public final class TextTable {
           case ';' -> "semicolon";
           case '\t' -> "tab";
           case '|' -> "bar";
+          case ' ' -> "blanks";
           default -> "comma";
         };
     return "Cells are separated by "
         + separator
         + ", decimals by "
-        + (dialect.decimalComma() ? "comma" : "point")
+        + (dialect.numbers().decimalComma() ? "comma" : "point")
         + "; headings stand above row "
         + dialect.firstData()
         + ".";
@@ -82,14 +100,22 @@ public final class TextTable {
     /** Its number as a spreadsheet shows it. */
     long number();
 
+    /** Its cells. */
+    int cells();
+
     /** A cell's text, trimmed. */
     String text(int column);
 
     /**
-     * A cell's value: NaN for a blank or a mark for "not measured", negative infinity for what is
-     * no number.
+     * A cell's value times ten to the power of {@code shift}: NaN for a blank or a mark for "not
+     * measured", negative infinity for what is no number.
      */
-    double value(int column);
+    double value(int column, int shift);
+
+    /** A cell's value. */
+    default double value(int column) {
+      return value(column, 0);
+    }
   }
 
   /** Goes through rows. */
@@ -100,11 +126,11 @@ public final class TextTable {
 
   /** Passes every row of values by. */
   public void forEach(Visitor visitor) {
-    try (Reader in = Encoding.open(file.get())) {
-      RowScanner rows = new RowScanner(in, dialect.separator());
-      Row row = row(rows);
-      while (rows.next()) {
-        if (rows.row() >= dialect.firstData() && !visitor.row(row)) {
+    try (InputStream in = open()) {
+      Blocks blocks = blocks(in);
+      RowWalk walk = new RowWalk(cutter(), dialect.numbers().decimalComma(), 0);
+      for (Blocks.Block b = blocks.next(); b.length() > 0; b = blocks.next()) {
+        if (!walk.through(b, dialect.firstData(), visitor)) {
           return;
         }
       }
@@ -113,22 +139,15 @@ public final class TextTable {
     }
   }
 
-  private Row row(RowScanner rows) {
-    return new Row() {
-      @Override
-      public long number() {
-        return rows.row();
-      }
+  private InputStream open() throws IOException {
+    return encoding.open(file.get());
+  }
 
-      @Override
-      public String text(int column) {
-        return rows.text(column);
-      }
+  private Blocks blocks(InputStream in) {
+    return new Blocks(in, lineEnd, quotes);
+  }
 
-      @Override
-      public double value(int column) {
-        return rows.number(column, dialect.decimalComma());
-      }
-    };
+  private RowCutter cutter() {
+    return new RowCutter(dialect.separator(), encoding.charset());
   }
 }

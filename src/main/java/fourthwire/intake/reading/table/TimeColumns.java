@@ -1,5 +1,6 @@
 package fourthwire.intake.reading.table;
 
+import java.time.LocalDate;
 import java.time.LocalDateTime;
 import java.time.ZoneOffset;
 import java.util.ArrayList;
@@ -7,19 +8,36 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.OptionalInt;
+import java.util.Set;
+import java.util.TreeSet;
 
 /**
  * The column, or the date and the time column, that say when a row is.
  *
  * @param columns their positions; none where the table has no time
- * @param elapsed whether they count seconds (or parts of them) from the start
- * @param unitS of an elapsed time, seconds
+ * @param kind how they say it
+ * @param unitS of an elapsed time or of epoch time, seconds
  */
-public record TimeColumns(List<Integer> columns, boolean elapsed, double unitS) {
-  private static final int LOOK_ROWS = 20;
+public record TimeColumns(List<Integer> columns, Kind kind, double unitS) {
+  /** How times are written. */
+  public enum Kind {
+    /** Dates with times of day. */
+    CALENDAR,
+    /** Time from the start of the record. */
+    ELAPSED,
+    /** Days since the end of 1899, as spreadsheets count them. */
+    SERIAL,
+    /** Time since 1970 in UTC. */
+    EPOCH
+  }
+
+  private static final int LOOK_ROWS = 60;
 
   /** Dates that name their own order are alike throughout a file. */
   private static final int LOOK_PLAIN = 1000;
+
+  private static final LocalDateTime SERIAL_ORIGIN = LocalDateTime.of(1899, 12, 30, 0, 0);
+  private static final double DAY_MILLIS = 86_400_000;
 
   /** Copies the positions. */
   public TimeColumns {
@@ -31,6 +49,21 @@ public record TimeColumns(List<Integer> columns, boolean elapsed, double unitS) 
 
   /** Finds them, by content first and heading second. */
   public static TimeColumns find(TextTable table) {
+    List<List<String>> rows = sample(table);
+    int width = table.headings().size();
+    List<Integer> dates = new ArrayList<>();
+    for (int k = 0; k < width; k++) {
+      int column = k;
+      if (most(rows, r -> CellTime.of(r.get(column)).isPresent())) {
+        dates.add(k);
+      }
+    }
+    return dates.isEmpty()
+        ? NumericTime.find(table, rows)
+        : new TimeColumns(withClock(rows, start(table, dates), width), Kind.CALENDAR, 1);
+  }
+
+  private static List<List<String>> sample(TextTable table) {
     List<List<String>> rows = new ArrayList<>();
     int width = table.headings().size();
     table.forEach(
@@ -42,43 +75,46 @@ public record TimeColumns(List<Integer> columns, boolean elapsed, double unitS) 
           rows.add(cells);
           return rows.size() < LOOK_ROWS;
         });
-    for (int k = 0; k < width; k++) {
-      int column = k;
-      if (rows.stream().filter(r -> CellTime.of(r.get(column)).isPresent()).count() * 2
-          > rows.size()) {
-        return new TimeColumns(withClock(rows, k, width), false, 1);
-      }
-    }
-    return elapsed(table.headings());
+    return rows;
   }
 
-  /** A date alone has its time of day in the next column that looks like one. */
+  private static boolean most(
+      List<List<String>> rows, java.util.function.Predicate<List<String>> such) {
+    return 2 * rows.stream().filter(such).count() > rows.size();
+  }
+
+  /** Of a start and an end the start. */
+  private static int start(TextTable table, List<Integer> dates) {
+    return dates.stream()
+        .filter(k -> !isEnd(table.headings().get(k)))
+        .findFirst()
+        .orElse(dates.get(0));
+  }
+
+  /** Whether a heading says that its times are the ends of intervals. */
+  public static boolean isEnd(String heading) {
+    return heading
+        .toLowerCase(Locale.ROOT)
+        .matches(".*\\b(end|ende|ending|to|until|stop|fin)\\b.*");
+  }
+
+  /** A date alone has its time of day in the column that looks like one, the nearest behind it. */
   private static List<Integer> withClock(List<List<String>> rows, int date, int width) {
-    boolean whole = rows.stream().anyMatch(r -> r.get(date).matches(".*\\d:\\d\\d.*"));
+    boolean whole = most(rows, r -> r.get(date).matches("(?i).*\\d:\\d\\d.*|.*\\d[t ]\\d{4,6}z?"));
     for (int k = 0; !whole && k < width; k++) {
-      int column = k;
-      if (k != date && rows.stream().allMatch(r -> r.get(column).matches("\\d{1,2}[:.]\\d{2}.*"))) {
-        return List.of(date, k);
+      int column = (date + 1 + k) % width;
+      if (column != date && most(rows, r -> isClock(r.get(column), r.get(date)))) {
+        return List.of(date, column);
       }
     }
     return List.of(date);
   }
 
-  private static TimeColumns elapsed(List<String> headings) {
-    for (int k = 0; k < headings.size(); k++) {
-      String heading = headings.get(k).toLowerCase(Locale.ROOT).trim();
-      if (heading.matches("(elapsed )?(t|time|seconds|sec)\\b.*")) {
-        return new TimeColumns(List.of(k), true, unit(heading));
-      }
-    }
-    return new TimeColumns(List.of(), false, 1);
-  }
-
-  private static double unit(String heading) {
-    if (heading.matches(".*(\\bms\\b|millisec).*")) {
-      return 1e-3;
-    }
-    return heading.matches(".*(\\b[uµμ]s\\b|microsec).*") ? 1e-6 : 1;
+  /** Digits alone are a time of day only beside a date in digits alone. */
+  private static boolean isClock(String cell, String date) {
+    boolean digits = date.matches("\\d{8}") && cell.matches("\\d{4}|\\d{6}");
+    return (digits || cell.matches("\\d{1,2}[:.h]\\d{2}.*"))
+        && ClockText.of(cell.toLowerCase(Locale.ROOT)).isPresent();
   }
 
   /** The columns of these headings. */
@@ -92,8 +128,15 @@ public record TimeColumns(List<Integer> columns, boolean elapsed, double unitS) 
       columns.add(at);
     }
     TimeColumns found = find(table);
-    boolean elapsed = found.columns().equals(columns) && found.elapsed();
-    return new TimeColumns(columns, elapsed, elapsed ? found.unitS() : 1);
+    return found.columns().equals(columns)
+        ? found
+        : NumericTime.of(table, sample(table), columns)
+            .orElse(new TimeColumns(columns, Kind.CALENDAR, 1));
+  }
+
+  /** Whether time is counted from the start of the record. */
+  public boolean elapsed() {
+    return kind == Kind.ELAPSED;
   }
 
   /** The text of a row's time. */
@@ -104,8 +147,27 @@ public record TimeColumns(List<Integer> columns, boolean elapsed, double unitS) 
 
   /** A row's time; empty where it is none in this order. */
   public Optional<At> at(TextTable.Row row, DateOrder order) {
-    return CellTime.of(text(row))
-        .flatMap(t -> t.local(order).map(local -> new At(local, offset(t.offsetSeconds()))));
+    if (kind == Kind.CALENDAR) {
+      return CellTime.of(text(row))
+          .flatMap(t -> t.local(order).map(local -> new At(local, offset(t.offsetSeconds()))));
+    }
+    double value = row.value(columns.get(0));
+    boolean can = NumericTime.isSerial(value) || kind == Kind.EPOCH && value * unitS > 1e8;
+    return can ? Optional.of(counted(value)) : Optional.empty();
+  }
+
+  private At counted(double value) {
+    if (kind == Kind.EPOCH) {
+      long millis = Math.round(value * unitS * 1000);
+      return new At(
+          LocalDateTime.ofEpochSecond(
+              Math.floorDiv(millis, 1000L),
+              1_000_000 * (int) Math.floorMod(millis, 1000L),
+              ZoneOffset.UTC),
+          Optional.of(ZoneOffset.UTC));
+    }
+    long seconds = Math.round(value * DAY_MILLIS / 1000);
+    return new At(SERIAL_ORIGIN.plusSeconds(seconds), Optional.empty());
   }
 
   private static Optional<ZoneOffset> offset(OptionalInt seconds) {
@@ -127,20 +189,36 @@ public record TimeColumns(List<Integer> columns, boolean elapsed, double unitS) 
           boolean plain = time.isEmpty() || time.get().plain();
           return found.isEmpty() && !(plain && ++plainRows[0] > LOOK_PLAIN);
         });
-    return found.stream().findFirst();
+    return kind == Kind.CALENDAR ? found.stream().findFirst() : Optional.empty();
   }
 
   /** The order of the dates and why it is that; empty where the file does not settle it. */
   public Optional<Order> order(TextTable table) {
+    if (kind != Kind.CALENDAR) {
+      return Optional.of(new Order(DateOrder.YEAR_MONTH_DAY, NumericTime.note(kind)));
+    }
     OrderSearch search = new OrderSearch();
     int[] rows = {0};
     table.forEach(
         row -> {
           CellTime.of(text(row)).ifPresent(search::take);
-          // Dates that name their own order need no search through all of a long file.
-          return !(search.plain() && ++rows[0] > LOOK_PLAIN);
+          // Dates that name their own order, or fit one only, need no search through a long file.
+          return ++rows[0] < LOOK_PLAIN || !search.plain() && !search.single();
         });
-    return search.settled().map(s -> new Order(s.order(), s.reason()));
+    return search.settled(daysNamed(table)).map(s -> new Order(s.order(), s.reason()));
+  }
+
+  /** Days that lines above the table name in words or year first. */
+  private static Set<LocalDate> daysNamed(TextTable table) {
+    Set<LocalDate> days = new TreeSet<>();
+    for (String cell : table.preamble()) {
+      String value = cell.replaceFirst("^[\\p{L} ]+:\\s*", "");
+      CellTime.of(value)
+          .filter(CellTime::plain)
+          .flatMap(t -> t.local(DateOrder.YEAR_MONTH_DAY))
+          .ifPresent(t -> days.add(t.toLocalDate()));
+    }
+    return days;
   }
 
   /** An order of dates and the sentence why; empty text where the dates are plain. */

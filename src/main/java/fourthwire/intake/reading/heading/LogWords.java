@@ -1,0 +1,243 @@
+package fourthwire.intake.reading.heading;
+
+import fourthwire.intake.reading.heading.Vocabulary.Sense;
+import java.text.Normalizer;
+import java.util.ArrayList;
+import java.util.EnumSet;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import java.util.Set;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
+
+/** A heading of a log taken apart: what its words say, its places, its order, its unit. */
+final class LogWords {
+  private static final Pattern BRACKET = Pattern.compile("[\\[({]\\s*([^\\[\\](){}]*?)\\s*[\\])}]");
+  private static final Pattern BEHIND_SLASH =
+      Pattern.compile("(.*[\\p{L}\\p{N})])\\s*/\\s*([\\p{L}%°]+)");
+  private static final Pattern BREAK = Pattern.compile("[^\\p{L}\\p{N}%°]+");
+  private static final Pattern CAMEL =
+      Pattern.compile(
+          "(?<=\\p{Ll}{3})(?=\\p{Lu})|(?<=\\p{Lu}{3})(?=\\p{Lu}\\p{Ll}{2})|(?<=\\d)(?=[kM]?(?:W|VA|VAr|var|VAR|A|V)$)");
+  private static final Pattern STANDING =
+      Pattern.compile(
+          "l[123]|l[123]l[123]|l[123]n|l?[123]-?[123n]|[123][123n]|[abcrstnyb]|[abc][abcn]|[rst][rstn]|ry|yb|br|[yb]n");
+  private static final Pattern DIGITS = Pattern.compile("0?\\d{1,2}");
+
+  private final Set<Sense> senses = EnumSet.noneOf(Sense.class);
+  private final List<String> places = new ArrayList<>();
+  private final List<Integer> numbers = new ArrayList<>();
+  private final List<String> unknown = new ArrayList<>();
+  private Optional<Unit> unit = Optional.empty();
+  private String shareOf = "";
+  private int order;
+
+  private LogWords() {}
+
+  /** Takes a heading apart. */
+  static LogWords of(String heading) {
+    LogWords words = new LogWords();
+    String text = words.withoutUnit(plain(heading));
+    List<String> all = new ArrayList<>();
+    for (String part : BREAK.split(text)) {
+      for (String word : CAMEL.split(part)) {
+        if (!word.isEmpty()) {
+          all.add(word);
+        }
+      }
+    }
+    words.takeTrailingUnit(all);
+    for (int k = 0; k < all.size(); k++) {
+      words.take(all, k);
+    }
+    words.settleNumbers();
+    words.settleAmpere();
+    return words;
+  }
+
+  /** Accents, subscripts and Greek letters as plain ones; phrases as one word. */
+  private static String plain(String heading) {
+    String text =
+        Normalizer.normalize(heading.replace('\u03C6', 'φ').replace("ϕ", "φ"), Normalizer.Form.NFKD)
+            .replaceAll("\\p{M}", "")
+            .replaceAll("[Σ∑]", " total ")
+            .replace('º', '°');
+    return text.replaceAll("(?i)total\\s+harmonic\\s+dist(ortion|\\.)?", " thd ")
+        .replaceAll("(?i)harmonic\\s+distortion", " thd ")
+        .replaceAll("(?i)power[\\s_-]*factor", " pf ")
+        .replaceAll("(?i)cos\\s*[-_(]?\\s*(phi|φ)\\s*\\)?", " cosphi ")
+        .replaceAll("(?i)line[\\s-]+to[\\s-]+(line|neutral)", " ")
+        .replaceAll("(?i)k[\\s-]factor", " kfactor ")
+        .replaceAll("(?i)thd[\\s-]?f\\b", " thd ")
+        .replaceAll("(?i)thd[\\s-]r\\b(?=.*\\d|.*[abc]\\b)", " thdr ");
+  }
+
+  /** The unit in brackets, or behind the last slash, taken off. */
+  private String withoutUnit(String heading) {
+    Matcher bracket = BRACKET.matcher(heading);
+    StringBuilder rest = new StringBuilder();
+    while (bracket.find()) {
+      boolean taken = unit.isEmpty() && takeUnit(bracket.group(1));
+      bracket.appendReplacement(
+          rest, taken ? " " : Matcher.quoteReplacement(" " + bracket.group(1) + " "));
+    }
+    bracket.appendTail(rest);
+    Matcher slash = BEHIND_SLASH.matcher(rest);
+    return unit.isEmpty() && slash.matches() && takeUnit(slash.group(2))
+        ? slash.group(1)
+        : rest.toString();
+  }
+
+  /** {@code kW}, {@code A rms}, {@code % of fundamental}, {@code %r}. */
+  private boolean takeUnit(String text) {
+    String bare = text.replaceAll("(?i)[\\s_]*\\b(rms|trms|eff)\\b|(?<=[AV])rms", "").trim();
+    Matcher share = Pattern.compile("%\\s*(?:of|von|de|d')?\\s*(.*)").matcher(bare);
+    if (share.matches()) {
+      shareOf = share.group(1).toLowerCase(Locale.ROOT);
+      bare = "%";
+    }
+    unit = Unit.find(bare);
+    return unit.isPresent();
+  }
+
+  /** A last word that is a unit; the letter A only where a place stands before it. */
+  private void takeTrailingUnit(List<String> all) {
+    if (unit.isPresent() || all.size() < 2) {
+      return;
+    }
+    String last = all.get(all.size() - 1);
+    boolean line = all.subList(0, all.size() - 1).stream().anyMatch(LogWords::namesPlace);
+    boolean letter = last.length() == 1 && last.toLowerCase(Locale.ROOT).matches("[avw]");
+    if (Unit.find(last).isPresent() && (!letter || line || !last.equalsIgnoreCase("a"))) {
+      unit = Unit.find(last);
+      all.remove(all.size() - 1);
+      if (Vocabulary.isConnector(all.get(all.size() - 1).toLowerCase(Locale.ROOT))) {
+        all.remove(all.size() - 1);
+      }
+    }
+  }
+
+  private static boolean namesPlace(String word) {
+    String w = word.toLowerCase(Locale.ROOT);
+    return STANDING.matcher(w).matches()
+        || w.matches("[1234]")
+        || Vocabulary.sense(w).filter(s -> s == Sense.NEUTRAL || s == Sense.TOTAL).isPresent()
+        || Symbol.of(w).filter(s -> !s.place().isEmpty()).isPresent();
+  }
+
+  private void take(List<String> all, int k) {
+    String word = all.get(k).toLowerCase(Locale.ROOT);
+    boolean withMany = all.size() > 1;
+    if (DIGITS.matcher(word).matches()) {
+      takeNumber(Integer.parseInt(word), k > 0 ? all.get(k - 1) : "");
+    } else if (isConnecting(all, k)) {
+      return;
+    } else if (withMany && !(k == 0 && word.equals("s")) && STANDING.matcher(word).matches()) {
+      places.add(word);
+    } else if (unit.isEmpty() && word.length() > 1 && isUnitWord(all.get(k))) {
+      unit = Unit.find(all.get(k));
+    } else if (Vocabulary.sense(word).isPresent()) {
+      senses.add(Vocabulary.sense(word).get());
+    } else {
+      Symbol.of(word).ifPresentOrElse(this::take, () -> unknown.add(word));
+    }
+  }
+
+  private void takeNumber(int number, String before) {
+    Optional<Sense> sense = Vocabulary.sense(before);
+    if (sense.filter(s -> s == Sense.HARMONIC || s == Sense.INDIVIDUAL_DISTORTION).isPresent()) {
+      order = number;
+    } else {
+      numbers.add(number);
+    }
+  }
+
+  /** The word "in" before a unit; elsewhere it is the neutral's current. */
+  private static boolean isConnecting(List<String> all, int k) {
+    return k + 1 < all.size()
+        && Vocabulary.isConnector(all.get(k).toLowerCase(Locale.ROOT))
+        && Unit.find(all.get(k + 1)).isPresent();
+  }
+
+  /** A unit that is no symbol of something on a line: VA may be the voltage of line A. */
+  private static boolean isUnitWord(String word) {
+    return Unit.find(word).isPresent()
+        && Vocabulary.sense(word.toLowerCase(Locale.ROOT)).isEmpty()
+        && !word.equalsIgnoreCase("va");
+  }
+
+  private void take(Symbol symbol) {
+    senses.addAll(symbol.senses());
+    if (!symbol.place().isEmpty()) {
+      if (symbol.place().matches("tot|total|sum|sys|t|3ph|3p")) {
+        places.add(symbol.place().equals("t") ? "t" : "total");
+      } else {
+        places.add(symbol.place());
+      }
+    }
+    order = symbol.order() > 0 ? symbol.order() : order;
+    if (symbol.order() == 0 && symbol.senses().contains(Sense.HARMONIC)) {
+      senses.add(Sense.OTHER);
+    }
+    unit = unit.or(symbol::unit);
+  }
+
+  /** Bare numbers: an order where a harmonic is named, else lines. */
+  private void settleNumbers() {
+    List<Integer> left = new ArrayList<>(numbers);
+    boolean harmonic =
+        senses.contains(Sense.HARMONIC) || senses.contains(Sense.INDIVIDUAL_DISTORTION);
+    if (harmonic && order == 0 && !left.isEmpty()) {
+      order = left.remove(left.size() - 1);
+    }
+    if (places.size() == 1
+        && places.get(0).matches("l?[1-3]")
+        && left.size() == 1
+        && left.get(0) < 4
+        && says(Sense.VOLTAGE)) {
+      places.add(String.valueOf(left.get(0)));
+    }
+    if (places.isEmpty() && !left.isEmpty() && left.stream().allMatch(n -> n >= 1 && n <= 4)) {
+      StringBuilder place = new StringBuilder();
+      left.stream().limit(2).forEach(place::append);
+      places.add(place.toString());
+    }
+  }
+
+  /** The letter A beside a numbered line is the unit: {@code A_L1}. */
+  private void settleAmpere() {
+    boolean numbered = places.stream().anyMatch(p -> p.matches("l?[1-3]n?"));
+    if (numbered && places.remove("a") && unit.isEmpty()) {
+      unit = Optional.of(Unit.AMPERE);
+    }
+  }
+
+  boolean says(Sense sense) {
+    return senses.contains(sense);
+  }
+
+  Optional<Unit> unit() {
+    return unit;
+  }
+
+  /** What a percentage is of, as written; empty text where it is not said. */
+  String shareOf() {
+    return shareOf;
+  }
+
+  /** Order of a harmonic; 0 for none. */
+  int order() {
+    return order;
+  }
+
+  /** Conductors as written, in order. */
+  List<String> places() {
+    return places;
+  }
+
+  /** Whether nothing in it is understood. */
+  boolean saysNothing() {
+    return senses.isEmpty() && unit.isEmpty();
+  }
+}

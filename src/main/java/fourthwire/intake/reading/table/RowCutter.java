@@ -1,0 +1,182 @@
+package fourthwire.intake.reading.table;
+
+import java.nio.charset.Charset;
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+
+/**
+ * Cuts bytes into rows and cells (RFC 4180, with any separator of one ASCII character): one row at
+ * a time, as positions in the bytes themselves, so that reading makes no object for a cell.
+ *
+ * <p>A blank as the separator stands for any number of blanks: columns that were lined up.
+ */
+final class RowCutter {
+  private static final byte QUOTE = '"';
+
+  private final byte separator;
+  private final Charset charset;
+  private byte[] bytes = new byte[0];
+  private int[] start = new int[256];
+  private int[] end = new int[256];
+  private int cells;
+
+  RowCutter(char separator, Charset charset) {
+    this.separator = (byte) separator;
+    this.charset = charset;
+  }
+
+  /**
+   * Cuts the row that begins here.
+   *
+   * @param from its first byte
+   * @param to the byte after the last there is
+   * @return the first byte of the next row
+   */
+  int next(byte[] block, int from, int to) {
+    bytes = block;
+    cells = 0;
+    int at = separator == ' ' ? skipBlanks(block, from, to) : from;
+    while (true) {
+      int cellEnd = at < to && block[at] == QUOTE ? quoted(at, to) : plain(at, to);
+      at = cellEnd;
+      if (at >= to) {
+        return to;
+      }
+      byte c = block[at++];
+      if (c == separator) {
+        at = separator == ' ' ? skipBlanks(block, at, to) : at;
+        if (separator == ' ' && (at >= to || block[at] == '\n' || block[at] == '\r')) {
+          return rowEnd(at, to);
+        }
+      } else {
+        return rowEnd(at - 1, to);
+      }
+    }
+  }
+
+  private static int skipBlanks(byte[] block, int from, int to) {
+    int at = from;
+    while (at < to && block[at] == ' ') {
+      at++;
+    }
+    return at;
+  }
+
+  /** Passes over one line end: LF, CR, or CR LF. */
+  private int rowEnd(int at, int to) {
+    if (at < to && bytes[at] == '\r') {
+      return at + 1 < to && bytes[at + 1] == '\n' ? at + 2 : at + 1;
+    }
+    return Math.min(to, at + 1);
+  }
+
+  private int plain(int from, int to) {
+    byte[] b = bytes;
+    byte s = separator;
+    int at = from;
+    while (at < to) {
+      byte c = b[at];
+      if (c == s || c == '\n' || c == '\r') {
+        break;
+      }
+      at++;
+    }
+    add(from, at);
+    return at;
+  }
+
+  /** A cell in quotes; what stands between the closing quote and the separator is dropped. */
+  private int quoted(int from, int to) {
+    int at = from + 1;
+    while (at < to && (bytes[at] != QUOTE || at + 1 < to && bytes[at + 1] == QUOTE)) {
+      at += bytes[at] == QUOTE ? 2 : 1;
+    }
+    add(from + 1, Math.min(at, to));
+    at++;
+    while (at < to && bytes[at] != separator && bytes[at] != '\n' && bytes[at] != '\r') {
+      at++;
+    }
+    return Math.min(at, to);
+  }
+
+  private void add(int from, int to) {
+    if (cells == start.length) {
+      start = Arrays.copyOf(start, 2 * cells);
+      end = Arrays.copyOf(end, 2 * cells);
+    }
+    start[cells] = from;
+    end[cells++] = to;
+  }
+
+  /** Cells of this row. */
+  int cells() {
+    return cells;
+  }
+
+  /** Whether nothing stands in this row. */
+  boolean isEmpty() {
+    return cells == 0 || cells == 1 && isBlank(0);
+  }
+
+  private boolean isBlank(int cell) {
+    for (int k = start[cell]; k < end[cell]; k++) {
+      if (bytes[k] > ' ' || bytes[k] < 0) {
+        return false;
+      }
+    }
+    return true;
+  }
+
+  /** First byte of a cell. */
+  int start(int cell) {
+    return start[cell];
+  }
+
+  /** The byte after a cell's last. */
+  int end(int cell) {
+    return end[cell];
+  }
+
+  /** A cell's text, trimmed; empty beyond the row's end. */
+  String text(int cell) {
+    if (cell >= cells) {
+      return "";
+    }
+    String text = new String(bytes, start[cell], end[cell] - start[cell], charset);
+    return trimmed(text.indexOf('"') < 0 ? text : text.replace("\"\"", "\""));
+  }
+
+  /** Blanks of every kind, and the end marks of old systems, taken off both ends. */
+  private static String trimmed(String text) {
+    int from = 0;
+    int to = text.length();
+    while (from < to && isSpace(text.charAt(from))) {
+      from++;
+    }
+    while (to > from && isSpace(text.charAt(to - 1))) {
+      to--;
+    }
+    return text.substring(from, to);
+  }
+
+  private static boolean isSpace(char c) {
+    return c <= ' ' || Character.isSpaceChar(c) || c == '\uFEFF';
+  }
+
+  /** All cells of this row as text. */
+  List<String> texts() {
+    List<String> texts = new ArrayList<>(cells);
+    for (int k = 0; k < cells; k++) {
+      texts.add(text(k));
+    }
+    return texts;
+  }
+
+  /** A cell as a number times ten to the power of {@code shift}. */
+  double number(int cell, boolean decimalComma, int shift) {
+    return cell < cells
+        ? Numbers.parse(bytes, start[cell], end[cell], charset, decimalComma, shift)
+        : Numbers.BLANK;
+  }
+}

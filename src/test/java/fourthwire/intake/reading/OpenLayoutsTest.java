@@ -1,0 +1,105 @@
+package fourthwire.intake.reading;
+
+import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.catchThrowableOfType;
+
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.stream.Stream;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.MethodSource;
+
+/** Layouts that leave something open: the reader asks, with the columns, and guesses nothing. */
+class OpenLayoutsTest {
+  private record Open(LayoutWriter layout, String part) {}
+
+  private static final Map<String, Open> LAYOUTS = new LinkedHashMap<>();
+
+  private static void layout(String name, String part, LayoutWriter layout) {
+    LAYOUTS.put(name, new Open(layout, part));
+  }
+
+  private static LayoutWriter dated() {
+    return LayoutWriter.of(",", '.').time("Time", "yyyy-MM-dd HH:mm");
+  }
+
+  static {
+    layout(
+        "day or month first",
+        "time.format",
+        LayoutWriter.of(",", '.')
+            .time("Time", "dd/MM/yyyy HH:mm")
+            .rows(18)
+            .lines("V# (V)", "rms_v"));
+    layout(
+        "a year of two digits that may be a day",
+        "time.format",
+        LayoutWriter.of(",", '.').time("Time", "yy-MM-dd HH:mm").rows(18).lines("V# (V)", "rms_v"));
+    layout(
+        "powers without unit and without amps",
+        "columns.P1",
+        dated().lines("P#", "active_w", 3).lines("V#", "rms_v"));
+    layout(
+        "harmonics without unit and without anything to compare",
+        "columns.I1 H3",
+        dated().lines("I# H3", "current_h3_a").lines("V#", "rms_v"));
+    layout("no conductor", "columns.Current (A)", dated().column("Current (A)", "L1.rms_a"));
+    layout(
+        "no date",
+        "time.columns",
+        LayoutWriter.of(",", '.').time("Time", "HH:mm").lines("V# (V)", "rms_v"));
+    layout(
+        "seconds from a start",
+        "time.columns",
+        LayoutWriter.of(",", '.')
+            .time(
+                "Time (s)",
+                t ->
+                    String.valueOf(
+                        600 * (t.getDayOfMonth() * 144 + t.getHour() * 6 + t.getMinute() / 10)))
+            .lines("V# (V)", "rms_v"));
+    layout(
+        "distortion of what",
+        "columns.THD L1 (%)",
+        dated().lines("THD L# (%)", "current_thd_percent").lines("V# (V)", "rms_v"));
+    layout(
+        "energy without unit",
+        "columns.Energy",
+        dated().column("Energy", "total.energy_wh", 3).lines("V# (V)", "rms_v"));
+    layout(
+        "the same quantity twice",
+        "columns.V L1 (V)",
+        dated().column("U1 (V)", "L1.rms_v").column("V L1 (V)", "L1.rms_v"));
+    layout(
+        "thousands or three decimals",
+        "columns.P L1 (W)",
+        LayoutWriter.of(";", ',')
+            .time("Time", "yyyy-MM-dd HH:mm")
+            .lines("P L# (W)", "active_w")
+            .grouping("."));
+    layout(
+        "name and unit disagree",
+        "columns.Voltage L1 (A)",
+        dated().lines("Voltage L# (A)", "rms_v").column("I N (A)", "N.rms_a"));
+  }
+
+  static Stream<String> layouts() {
+    return LAYOUTS.keySet().stream();
+  }
+
+  @ParameterizedTest
+  @MethodSource("layouts")
+  void isAsked(String name) {
+    Open open = LAYOUTS.get(name);
+    ReadingRefusedException e =
+        catchThrowableOfType(
+            ReadingRefusedException.class,
+            () ->
+                new FormatReader()
+                    .plan(List.of(Files.of("log.csv", open.layout().bytes())), Files.setting(50)));
+    assertThat(e).as("refused").isNotNull();
+    assertThat(e.columns()).isNotEmpty();
+    assertThat(e.questions()).extracting("part").contains(open.part());
+  }
+}
