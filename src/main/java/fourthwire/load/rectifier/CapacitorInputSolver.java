@@ -3,39 +3,65 @@ package fourthwire.load.rectifier;
 import fourthwire.load.model.LoadSolver;
 import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.load.model.PortSpectra;
+import java.util.Locale;
 
 /**
  * Periodic steady state of the capacitor-input rectifier, by shooting.
  *
  * <p>The state at a section of the cycle is the capacitor's voltage, and the current where
  * conduction is continuous. The map over half a cycle (the whole one where the electromotive force
- * has even orders) is iterated to its fixed point by a safeguarded secant or Newton step, so that
- * slow transients need not die out.
+ * has even orders) is brought to its fixed point by Newton steps with the derivatives that the
+ * march itself carries ({@link PathTangent}), so that slow transients need not die out; three to
+ * four marches do.
+ *
+ * <p>The same derivatives tell whether the state found is stable (both multipliers within the unit
+ * circle: Floquet). Where the state that repeats in mirrored halves is not, the circuit goes to one
+ * that repeats only after the whole cycle, with even orders in its current; it is looked for, and
+ * refused where it does not settle either.
+ *
+ * <p>An instance is a few numbers (the last state, to start from); the workspace is the thread's.
  */
 final class CapacitorInputSolver implements LoadSolver {
-  private static final double TOLERANCE = 1e-8;
+  /** Accepted defect of the capacitor's energy in a cycle, as a share of what the load draws. */
+  private static final double TOLERANCE = 1e-5;
+
+  /** Bounds of the defect of its voltage that this gives, as shares of the crest. */
+  private static final double FINEST = 1e-9;
+
+  private static final double COARSEST = 5e-7;
+
+  /** A capacitor that rings with its source can be charged over the crest, less than to twice. */
+  private static final double MOST_CHARGE = 2;
+
+  /** Accepted defect of the current, as a share of itself and the load's. */
+  private static final double TOLERANCE_OF_CURRENT = 1e-6;
 
   /** A capacitor under this share of the crest is empty: no supply runs on it. */
   private static final double LEAST_SHARE = 0.05;
+
+  /** Largest multiplier of a stable state; a little over 1 for its own error. */
+  private static final double MOST_MULTIPLIER = 1.001;
+
+  private static final int MOST_STEPS = 40;
+  private static final int MOST_SUBSTITUTIONS = 600;
 
   private static final String FREEWHEELS =
       "the direct-current choke of a capacitor-input rectifier carries its current past the"
           + " voltage's crossing, which is not modelled: enter a smaller dc_choke_percent, or the"
           + " choke as line_choke_percent";
 
-  private static final int MOST_SECANTS = 40;
-  private static final int MOST_SUBSTITUTIONS = 600;
+  private static final ThreadLocal<PairBridge> WORKSPACE = ThreadLocal.withInitial(PairBridge::new);
 
   private final BridgeLoad load;
   private final double frequencyHz;
-  private final PairBridge bridge = new PairBridge();
 
+  private PairBridge bridge = WORKSPACE.get();
   private double peak;
+  private double toleranceV;
   private double section;
-  private double cells;
+  private boolean halfWave;
   private double lastV;
   private double lastI;
-  private double lastSlope = 0.3;
 
   CapacitorInputSolver(BridgeLoad load, double frequencyHz) {
     this.load = load;
@@ -44,22 +70,28 @@ final class CapacitorInputSolver implements LoadSolver {
 
   @Override
   public void solve(PortSpectra emf, double seriesOhm, double seriesHenry, PortSpectra current) {
+    bridge = WORKSPACE.get();
     prepare(emf, seriesOhm, seriesHenry);
-    if (!secant() && !newton() && !substitution()) {
-      lastV = 0;
+    if (!(repeats() && stable()) && !(halfWave && repeatsAfterWholeCycle())) {
+      forget();
       throw new NoSteadyStateException(refusal());
     }
-    bridge.march(section, cells, lastI, lastV, true);
     if (bridge.freewheels) {
-      lastV = 0;
+      forget();
       throw new NoSteadyStateException(FREEWHEELS);
     }
-    bridge.trace.harmonics(bridge.emf.halfWave, current.re[0], current.im[0]);
+    bridge.trace.harmonics(halfWave, current.re[0], current.im[0]);
+  }
+
+  /** Forgets the last state: the next solution starts cold. */
+  void forget() {
+    lastV = 0;
+    lastI = 0;
   }
 
   private String refusal() {
     return String.format(
-        java.util.Locale.ROOT,
+        Locale.ROOT,
         "a capacitor-input rectifier of %.4g W finds no steady state at %.4g V peak behind %.4g ohm"
             + " and %.4g mH: the source cannot give what the load asks for, or the current does not"
             + " repeat from cycle to cycle",
@@ -76,6 +108,9 @@ final class CapacitorInputSolver implements LoadSolver {
     if (!(peak > 0) || Double.isInfinite(peak)) {
       throw new NoSteadyStateException("a capacitor-input rectifier has no voltage to draw from");
     }
+    double share =
+        TOLERANCE * load.powerW() / (2 * frequencyHz * load.capacitanceF() * peak * peak);
+    toleranceV = peak * Math.max(FINEST, Math.min(COARSEST, share));
     bridge.floorV = LEAST_SHARE * peak;
     double cellSeconds = 1 / (frequencyHz * CycleTable.CELLS);
     double henry = load.lineHenry() + seriesHenry;
@@ -83,7 +118,7 @@ final class CapacitorInputSolver implements LoadSolver {
         load.lineOhm() + seriesOhm + load.dcOhm(), henry + load.dcHenry(), load, cellSeconds);
     bridge.directShare = load.dcHenry() > 0 ? load.dcHenry() / (henry + load.dcHenry()) : 0;
     bridge.path.threshold(1e-3 * load.powerW() / peak);
-    cells = table.halfWave ? CycleTable.CELLS / 2.0 : CycleTable.CELLS;
+    halfWave = table.halfWave;
     section = sectionAfterCrossing(emf.re[0][1], emf.im[0][1]);
   }
 
@@ -93,104 +128,94 @@ final class CapacitorInputSolver implements LoadSolver {
     return Math.floor((turns - Math.floor(turns)) * CycleTable.CELLS);
   }
 
+  /** Marches once through what has to repeat; false where the capacitor empties. */
+  private boolean march(double i, double v) {
+    return bridge.march(section, halfWave ? CycleTable.CELLS / 2.0 : CycleTable.CELLS, i, v);
+  }
+
+  /** The current at the end as it has to be at the start. */
+  private double endI() {
+    return halfWave ? -bridge.i : bridge.i;
+  }
+
+  /** Whether a state was found that repeats; it is the last, and the bridge has marched it. */
+  private boolean repeats() {
+    return (lastI == 0 && discontinuous()) || continuous() || substitution(0, peak);
+  }
+
   private double firstGuess() {
-    if (lastV > 0 && lastV < peak) {
+    if (lastV > 0 && lastV < MOST_CHARGE * peak) {
       return lastV;
     }
-    double fall = 2 * load.powerW() / load.capacitanceF() * 0.25 / frequencyHz;
-    double square = 0.92 * peak * peak - fall;
+    double fall = 2 * load.powerW() / load.capacitanceF() * 0.15 / frequencyHz;
+    double square = 0.97 * peak * peak - fall;
     return square > 0.2 * peak * peak ? Math.sqrt(square) : 0.7 * peak;
   }
 
-  /** g(v) = map(v) - v with no current at the section; NaN where the capacitor empties. */
-  private double defect(double v) {
-    if (!bridge.march(section, cells, 0, v, false)) {
-      return Double.NaN;
-    }
-    return bridge.v - v;
-  }
-
-  /** Discontinuous conduction: one unknown. False where current flows at the section. */
-  private boolean secant() {
-    double high = peak;
+  /** One unknown, by Newton steps kept between bounds; false where current flows at the section. */
+  private boolean discontinuous() {
+    double high = MOST_CHARGE * peak;
     double low = 0;
     double v = firstGuess();
-    double previousV = 0;
-    double previousG = 0;
-    double slope = lastSlope - 1;
-    for (int n = 0; n < MOST_SECANTS; n++) {
-      double g = defect(v);
-      if (Double.isNaN(g) || bridge.i != 0) {
+    for (int n = 0; n < MOST_STEPS; n++) {
+      if (!march(0, v) || bridge.i != 0) {
         return false;
       }
-      if (Math.abs(g) < TOLERANCE * peak) {
-        lastV = v;
-        lastI = 0;
-        return true;
+      double defect = bridge.v - v;
+      if (Math.abs(defect) < toleranceV) {
+        return found(0, v);
       }
-      if (g > 0) {
+      if (defect > 0) {
         low = Math.max(low, v);
       } else {
         high = Math.min(high, v);
       }
-      if (n > 0 && g != previousG) {
-        slope = Math.min(-0.02, Math.max(-3, (g - previousG) / (v - previousV)));
-      }
-      previousV = v;
-      previousG = g;
-      double next = v - g / slope;
+      double next = v - defect / Math.min(-0.02, Math.max(-3, bridge.tangent.vv - 1));
       if (next >= high || next <= low) {
-        next = g > 0 ? 0.5 * (v + high) : low > 0 ? 0.5 * (v + low) : v + g;
+        next = defect > 0 ? 0.5 * (v + high) : low > 0 ? 0.5 * (v + low) : v + defect;
       }
       v = next;
-      lastSlope = slope + 1;
     }
     return false;
   }
 
-  /** Continuous conduction: current and voltage at the section, by Newton with differences. */
-  private boolean newton() {
-    double i = 0;
-    double v = peak * 0.95;
-    double sign = bridge.emf.halfWave ? -1 : 1;
-    for (int n = 0; n < 60; n++) {
-      if (!bridge.march(section, cells, i, v, false)) {
+  private boolean found(double i, double v) {
+    lastI = i;
+    lastV = v;
+    return true;
+  }
+
+  /** Current and voltage at the section, by repetition first where nothing is known. */
+  private boolean continuous() {
+    boolean cold = lastI == 0;
+    double i = lastI;
+    double v = cold ? peak * 0.95 : lastV;
+    for (int n = 0; n < MOST_STEPS; n++) {
+      if (!march(i, v)) {
         return false;
       }
-      double endI = sign * bridge.i;
-      double endV = bridge.v;
-      double gi = endI - i;
-      double gv = endV - v;
-      double scale = Math.abs(i) + load.powerW() / peak;
-      if (Math.abs(gi) < 1e-7 * scale && Math.abs(gv) < TOLERANCE * peak) {
-        lastI = i;
-        lastV = v;
-        return true;
+      double defectI = endI() - i;
+      double defectV = bridge.v - v;
+      if (closes(i, defectI, defectV)) {
+        return found(i, v);
       }
-      if (n < 6 || i == 0 || endI == 0) {
-        i = endI;
-        v = endV;
+      if ((cold && n < 6) || i == 0 || bridge.i == 0) {
+        i += defectI;
+        v += defectV;
         continue;
       }
-      double di = 1e-5 * i;
-      double dv = 1e-6 * peak;
-      if (!bridge.march(section, cells, i + di, v, false)) {
-        return false;
-      }
-      double aii = (sign * bridge.i - endI) / di - 1;
-      double avi = (bridge.v - endV) / di;
-      if (!bridge.march(section, cells, i, v + dv, false)) {
-        return false;
-      }
-      double aiv = (sign * bridge.i - endI) / dv;
-      double avv = (bridge.v - endV) / dv - 1;
-      double det = aii * avv - aiv * avi;
-      double stepI = -(gi * avv - aiv * gv) / det;
-      double stepV = -(aii * gv - avi * gi) / det;
-      double shrink =
-          Math.min(1, Math.min(0.3 * peak / Math.abs(stepV), 2 * Math.abs(i) / Math.abs(stepI)));
-      i += shrink * stepI;
-      v += shrink * stepV;
+      double sign = halfWave ? -1 : 1;
+      PathTangent t = bridge.tangent;
+      double ii = sign * t.ii - 1;
+      double iv = sign * t.iv;
+      double vv = t.vv - 1;
+      double det = ii * vv - iv * t.vi;
+      double stepI = (iv * defectV - vv * defectI) / det;
+      double stepV = (t.vi * defectI - ii * defectV) / det;
+      double most = Math.max(Math.abs(stepV) / (0.3 * peak), Math.abs(stepI / (2 * i)));
+      double share = most > 1 ? 1 / most : 1;
+      i += share * stepI;
+      v += share * stepV;
       if (!(v > 0)) {
         return false;
       }
@@ -198,29 +223,47 @@ final class CapacitorInputSolver implements LoadSolver {
     return false;
   }
 
-  /** Plain repetition from the crest: slow, but it reaches the stable state if there is one. */
-  private boolean substitution() {
-    double sign = bridge.emf.halfWave ? -1 : 1;
-    double i = 0;
-    double v = peak;
+  private boolean closes(double i, double defectI, double defectV) {
+    return Math.abs(defectV) < toleranceV
+        && Math.abs(defectI) < TOLERANCE_OF_CURRENT * (Math.abs(i) + load.powerW() / peak);
+  }
+
+  /** Plain repetition: slow, but it reaches the stable state if there is one. */
+  private boolean substitution(double startI, double startV) {
+    double i = startI;
+    double v = startV;
     for (int n = 0; n < MOST_SUBSTITUTIONS; n++) {
-      if (!bridge.march(section, cells, i, v, false)) {
+      if (!march(i, v)) {
         return false;
       }
-      double moved = Math.abs(bridge.v - v) / peak;
-      double movedI = Math.abs(sign * bridge.i - i) * peak / load.powerW();
-      i = sign * bridge.i;
-      v = bridge.v;
-      if (moved < TOLERANCE && movedI < 1e-6) {
-        lastV = v;
-        lastI = i;
-        return true;
+      if (closes(i, endI() - i, bridge.v - v)) {
+        return found(i, v);
       }
+      i = endI();
+      v = bridge.v;
     }
     return false;
   }
 
-  /** The recorded current of the last solution: amps at positions in cells. */
+  /** Whether small departures from the state just marched die out. */
+  private boolean stable() {
+    PathTangent t = bridge.tangent;
+    double sign = halfWave ? -1 : 1;
+    return t.largestMultiplier(sign) < MOST_MULTIPLIER;
+  }
+
+  /** From a small departure on to a state that repeats after the whole cycle only. */
+  private boolean repeatsAfterWholeCycle() {
+    halfWave = false;
+    return substitution(lastI, 1.01 * (lastV > 0 ? lastV : 0.9 * peak)) && stable();
+  }
+
+  /** Whether that record is half a cycle, whose mirror image is the other. */
+  boolean halfWave() {
+    return halfWave;
+  }
+
+  /** The recorded current of the last solution on this thread: amps at positions in cells. */
   PulseTrace trace() {
     return bridge.trace;
   }

@@ -14,13 +14,17 @@ final class CycleTable {
   static final int CELLS = 384;
 
   private static final int HALF = CELLS / 2;
+  private static final int QUARTER = CELLS / 4;
   private static final double ROOT2 = Math.sqrt(2);
-  private static final double[][] SIN = new double[Spectrum.HIGHEST_ORDER + 1][HALF];
-  private static final double[][] COS = new double[Spectrum.HIGHEST_ORDER + 1][HALF];
+
+  /** Sines and cosines of each order at the nodes of a quarter cycle: symmetry tells the rest. */
+  private static final double[][] SIN = new double[Spectrum.HIGHEST_ORDER + 1][QUARTER + 1];
+
+  private static final double[][] COS = new double[Spectrum.HIGHEST_ORDER + 1][QUARTER + 1];
 
   static {
     for (int h = 1; h <= Spectrum.HIGHEST_ORDER; h++) {
-      for (int k = 0; k < HALF; k++) {
+      for (int k = 0; k <= QUARTER; k++) {
         double x = 2 * Math.PI * ((h * k) % CELLS) / CELLS;
         SIN[h][k] = Math.sin(x);
         COS[h][k] = Math.cos(x);
@@ -34,64 +38,77 @@ final class CycleTable {
   /** Slope per cell likewise. */
   final double[] slope = new double[2 * CELLS + 1];
 
-  private final double[] oddValue = new double[HALF];
-  private final double[] oddSlope = new double[HALF];
-  private final double[] evenValue = new double[HALF];
-  private final double[] evenSlope = new double[HALF];
+  /** Sine and cosine parts of value and slope over a quarter cycle, one parity at a time. */
+  private final double[] sines = new double[QUARTER + 1];
+
+  private final double[] cosines = new double[QUARTER + 1];
+  private final double[] sineSlopes = new double[QUARTER + 1];
+  private final double[] cosineSlopes = new double[QUARTER + 1];
 
   /** Whether the last fill held odd orders only, so that half cycles mirror each other. */
   boolean halfWave;
 
   /** Samples rms phasors of the orders 1 to 50. */
   void fill(double[] re, double[] im) {
-    halfWave = true;
-    clear(oddValue, oddSlope);
-    for (int h = 1; h <= Spectrum.HIGHEST_ORDER; h += 2) {
-      add(h, re[h], im[h], oddValue, oddSlope);
+    addOrders(1, re, im);
+    for (int k = 0; k <= QUARTER; k++) {
+      value[k] = sines[k] + cosines[k];
+      value[HALF - k] = sines[k] - cosines[k];
+      slope[k] = sineSlopes[k] + cosineSlopes[k];
+      slope[HALF - k] = cosineSlopes[k] - sineSlopes[k];
     }
-    clear(evenValue, evenSlope);
-    for (int h = 2; h <= Spectrum.HIGHEST_ORDER; h += 2) {
+    for (int k = 0; k < HALF; k++) {
+      value[k + HALF] = -value[k];
+      slope[k + HALF] = -slope[k];
+    }
+    halfWave = !addOrders(2, re, im);
+    if (!halfWave) {
+      addEven(0);
+      addEven(HALF);
+    }
+    System.arraycopy(value, 0, value, CELLS, CELLS);
+    System.arraycopy(slope, 0, slope, CELLS, CELLS);
+    value[2 * CELLS] = value[0];
+    slope[2 * CELLS] = slope[0];
+  }
+
+  /** Adds up the odd or the even orders over a quarter cycle; whether there are any. */
+  private boolean addOrders(int first, double[] re, double[] im) {
+    java.util.Arrays.fill(sines, 0);
+    java.util.Arrays.fill(cosines, 0);
+    java.util.Arrays.fill(sineSlopes, 0);
+    java.util.Arrays.fill(cosineSlopes, 0);
+    boolean any = false;
+    for (int h = first; h <= Spectrum.HIGHEST_ORDER; h += 2) {
       if (re[h] != 0 || im[h] != 0) {
-        halfWave = false;
-        add(h, re[h], im[h], evenValue, evenSlope);
+        any = true;
+        add(SIN[h], COS[h], 2 * Math.PI * h / CELLS, ROOT2 * re[h], ROOT2 * im[h]);
       }
     }
-    unfold(oddValue, evenValue, value);
-    unfold(oddSlope, evenSlope, slope);
+    return any;
   }
 
-  private static void clear(double[] a, double[] b) {
-    java.util.Arrays.fill(a, 0);
-    java.util.Arrays.fill(b, 0);
-  }
-
-  private static void add(int h, double re, double im, double[] value, double[] slope) {
-    if (re == 0 && im == 0) {
-      return;
-    }
-    double a = ROOT2 * re;
-    double b = ROOT2 * im;
-    double w = 2 * Math.PI * h / CELLS;
-    double aw = a * w;
-    double bw = b * w;
-    double[] sin = SIN[h];
-    double[] cos = COS[h];
-    for (int k = 0; k < HALF; k++) {
-      value[k] += a * sin[k] + b * cos[k];
-      slope[k] += aw * cos[k] - bw * sin[k];
+  private void add(double[] sin, double[] cos, double turn, double a, double b) {
+    double slopeA = turn * a;
+    double slopeB = -turn * b;
+    for (int k = 0; k <= QUARTER; k++) {
+      sines[k] += a * sin[k];
+      cosines[k] += b * cos[k];
+      sineSlopes[k] += slopeA * cos[k];
+      cosineSlopes[k] += slopeB * sin[k];
     }
   }
 
-  private static void unfold(double[] odd, double[] even, double[] whole) {
-    for (int k = 0; k < HALF; k++) {
-      double first = even[k] + odd[k];
-      double second = even[k] - odd[k];
-      whole[k] = first;
-      whole[k + HALF] = second;
-      whole[k + CELLS] = first;
-      whole[k + CELLS + HALF] = second;
+  /** Adds the even orders, which repeat after half a cycle, to the half that starts at a node. */
+  private void addEven(int start) {
+    for (int k = 0; k < QUARTER; k++) {
+      value[start + k] += sines[k] + cosines[k];
+      slope[start + k] += sineSlopes[k] + cosineSlopes[k];
     }
-    whole[2 * CELLS] = whole[0];
+    for (int k = 1; k <= QUARTER; k++) {
+      value[start + HALF - k] += cosines[k] - sines[k];
+      slope[start + HALF - k] += sineSlopes[k] - cosineSlopes[k];
+    }
   }
 
   /** The sample at a position between 0 and 2·CELLS. */
@@ -122,8 +139,11 @@ final class CycleTable {
   /** Largest absolute sample. */
   double peak() {
     double peak = 0;
-    for (int k = 0; k < CELLS; k++) {
-      peak = Math.max(peak, Math.abs(value[k]));
+    for (int k = 0; k < (halfWave ? HALF : CELLS); k++) {
+      double size = Math.abs(value[k]);
+      if (size > peak || Double.isNaN(size)) {
+        peak = size;
+      }
     }
     return peak;
   }

@@ -58,19 +58,19 @@ final class Discharge {
     boolean alive = true;
     while (!turnedOn && u < to && alive) {
       double node = Math.min(Math.floor(u) + 1, to);
-      alive = square - fall * (node - from) > floorV * floorV;
-      if (alive) {
-        advance(node);
-      }
+      double left = square - fall * (node - from);
+      double free = drive.applyAsDouble(node) - path.onsetV;
+      alive = left > floorV * floorV;
+      turnedOn = free > 0 && free * free >= left;
+      u = turnedOn ? turnOn(node) : node;
     }
     v = alive ? Math.sqrt(square - fall * (u - from)) : 0;
     return alive;
   }
 
-  private void advance(double node) {
-    double after = excess(node);
-    turnedOn = after >= 0;
-    u = turnedOn ? EventFinder.find(excess, u, excess(u), node, after, 1e-9, 1e-10) : node;
+  /** Where between u and a node the drive passes. */
+  private double turnOn(double node) {
+    return EventFinder.find(excess, u, excess(u), node, excess(node), 1e-9, 1e-10);
   }
 
   private double excess(double at) {

@@ -19,6 +19,7 @@ final class PairBridge {
   final CycleTable emf = new CycleTable();
   final PathStep path = new PathStep();
   final PulseTrace trace = new PulseTrace();
+  final PathTangent tangent = new PathTangent();
 
   /** Capacitor voltage under which the load counts as having emptied it. */
   double floorV;
@@ -41,8 +42,6 @@ final class PairBridge {
   private final Discharge discharge = new Discharge(at -> Math.abs(emf.at(at)), path);
   private final EventFinder.Margin shortfall = this::shortfall;
 
-  private boolean recording;
-
   /** Position in cells. */
   private double u;
 
@@ -52,21 +51,19 @@ final class PairBridge {
   private double amps;
 
   /**
-   * Marches from a position with signed current i0 and voltage v0 over a number of cells.
+   * Marches from a position with signed current i0 and voltage v0 over a number of cells, keeping
+   * the current in {@link #trace} and the derivatives of the end by the start in {@link #tangent}.
    *
-   * @param record whether the current is kept in {@link #trace}
    * @return false where the load empties the capacitor, or the current breaks up without end as it
    *     does so
    */
-  boolean march(double from, double cells, double i0, double v0, boolean record) {
-    recording = record;
+  boolean march(double from, double cells, double i0, double v0) {
     u = from;
     i = i0;
     v = v0;
-    if (record) {
-      trace.clear();
-      freewheels = false;
-    }
+    trace.clear();
+    tangent.clear(i0 != 0);
+    freewheels = false;
     double to = from + cells;
     boolean justLeft = false;
     int switchings = 0;
@@ -88,6 +85,13 @@ final class PairBridge {
   /** Off until |e| passes the capacitor; leaves u at the turn-on or at the end. */
   private boolean rest(boolean justLeft, double to) {
     boolean alive = discharge.run(u, v, justLeft, to, floorV);
+    if (justLeft && discharge.turnedOn && discharge.u == u) {
+      double size = Math.abs(emf.at(u));
+      double held = v + path.onsetV;
+      tangent.reverse(sign * emf.at(u) > 0 ? 1 : (size - held) / (size + held));
+    } else {
+      tangent.rest(v, discharge.v);
+    }
     u = discharge.u;
     v = discharge.v;
     return alive;
@@ -98,9 +102,7 @@ final class PairBridge {
     boolean starting = i == 0;
     sign = (starting ? emf.at(u) : i) >= 0 ? 1 : -1;
     amps = starting ? path.threshold : Math.abs(i);
-    if (recording) {
-      trace.start(u, sign * amps);
-    }
+    trace.start(u, sign * amps);
     double base = u;
     double span = Math.min(path.nextNode(path.nextNode(u)), to) - u;
     int graded = starting ? 0 : GRADING.length;
@@ -119,18 +121,17 @@ final class PairBridge {
     double missing = shortfall(h);
     boolean ends = missing > 0;
     if (ends) {
-      double close = 1e-3 * path.threshold;
+      double close = 0.1 * path.threshold;
       h = EventFinder.find(shortfall, 0, path.threshold - amps, h, missing, EVENT_CELLS, close);
     }
     double end = ends ? 0 : path.i;
     double charge = path.charge(h, v);
+    tangent.step(path, sign, h, 0.5 * (amps + path.i), 0.5 * (v + path.v));
     u = ends ? u + h : next;
     v = path.v;
     amps = end;
-    if (recording) {
-      freewheels |= directShare * sign * emf.at(u) + (1 - directShare) * v < 0;
-      trace.next(u, sign * end, sign * charge);
-    }
+    freewheels |= directShare * sign * emf.at(u) + (1 - directShare) * v < 0;
+    trace.next(u, sign * end, sign * charge);
   }
 
   /** Steps by h cells; by how much the current falls short of the threshold then. */

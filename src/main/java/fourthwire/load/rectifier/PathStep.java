@@ -46,6 +46,9 @@ final class PathStep {
 
   private int division;
 
+  /** Cells from one place to step to to the next. */
+  private double stride;
+
   /** Result of the last step: amps. */
   double i;
 
@@ -61,11 +64,12 @@ final class PathStep {
     this.saturation = load.diode().saturationA();
     double ring = Math.sqrt(this.inductance * this.capacitance);
     this.division = (int) Math.min(MOST_DIVISIONS, Math.ceil(1 / (STEP_OF_RING * ring + 1e-9)));
+    this.stride = 1.0 / division;
   }
 
   /** The next place to step to: cells are divided where the path would ring within one. */
   double nextNode(double position) {
-    return (Math.floor(position * division + 1e-9) + 1) / division;
+    return (Math.floor(position * division + 1e-9) + 1) * stride;
   }
 
   void threshold(double amps) {
@@ -78,17 +82,23 @@ final class PathStep {
     return amps > threshold ? slopeV * Math.log(1 + amps / saturation) : thresholdV;
   }
 
+  /** Slope of both diodes' logarithmic drop, ohms. */
+  double diodeOhm(double amps) {
+    return amps >= threshold ? slopeV / (amps + saturation) : 0;
+  }
+
   /** Steps from (i0, v0) over h cells while the drive goes from e0 (slope d0 per cell) to e1. */
   void step(double h, double i0, double v0, double e0, double d0, double e1) {
-    double rd = i0 >= threshold ? slopeV / (i0 + saturation) : 0;
-    double a = 2 * inductance / h + resistance + rd;
-    double d = 2 * capacitance / h - power / (v0 * v0);
+    double rate = 1 / h;
+    double lh = inductance * rate;
+    double ch = capacitance * rate;
+    double drawn = power / v0;
+    double a = 2 * lh + resistance + diodeOhm(i0);
+    double d = 2 * ch - drawn / v0;
     double det = 1 / (a * d + 1);
-    double lh = inductance / h;
-    double ch = capacitance / h;
 
     double f1 = e0 - v0 - resistance * i0 - drop(i0);
-    double f2 = i0 - power / v0;
+    double f2 = i0 - drawn;
     double hd = h * d0;
     double r1 = f1 + 0.5 * hd;
     double r2 = f2;

@@ -1,7 +1,7 @@
 package fourthwire.load.rectifier;
 
 import fourthwire.load.model.NoSteadyStateException;
-import fourthwire.quantity.Spectrum;
+import java.util.Arrays;
 
 /**
  * A current recorded at the nodes of a time-domain solution, piece by smooth piece, and its
@@ -9,11 +9,11 @@ import fourthwire.quantity.Spectrum;
  *
  * <p>Inside a piece the current is a cubic Hermite polynomial between nodes, its slopes from
  * parabolas through neighbouring nodes, plus a parabola that makes its charge right; each interval
- * is integrated against e^(-jhωt) with the three-point Gauss-Legendre rule. Workspace of one
- * solver, not thread-safe.
+ * gives its moments ({@link FourierSum}) by the three-point Gauss-Legendre rule. Workspace of one
+ * thread.
  */
 final class PulseTrace {
-  private static final int CAPACITY = 8192;
+  private static final int MOST_NODES = 8192;
 
   /** An interval this much shorter than its neighbour tells nothing about slopes. */
   private static final double SHORT = 0.02;
@@ -23,12 +23,23 @@ final class PulseTrace {
   };
   private static final double[] GAUSS_W = {5.0 / 18, 8.0 / 18, 5.0 / 18};
 
-  private final double[] position = new double[CAPACITY];
-  private final double[] amps = new double[CAPACITY];
-  private final boolean[] starts = new boolean[CAPACITY];
-  private final double[] slope = new double[CAPACITY];
-  private final double[] charge = new double[CAPACITY];
+  private final FourierSum fourier = new FourierSum();
+
+  private double[] position = new double[256];
+  private double[] amps = new double[256];
+  private boolean[] starts = new boolean[256];
+  private double[] slope = new double[256];
+  private double[] charge = new double[256];
   private int size;
+
+  /** The polynomial of one interval: its origin, what a cell is to it, and its coefficients. */
+  private double origin;
+
+  private double perCell;
+  private double c0;
+  private double c1;
+  private double c2;
+  private double c3;
 
   void clear() {
     size = 0;
@@ -51,13 +62,24 @@ final class PulseTrace {
   }
 
   private void append(double at, double value, boolean start) {
-    if (size == CAPACITY) {
-      throw new NoSteadyStateException("the current switches too often to be followed");
+    if (size == position.length) {
+      grow();
     }
     position[size] = at;
     amps[size] = value;
     starts[size] = start;
     size++;
+  }
+
+  private void grow() {
+    if (size == MOST_NODES) {
+      throw new NoSteadyStateException("the current switches too often to be followed");
+    }
+    position = Arrays.copyOf(position, 2 * size);
+    amps = Arrays.copyOf(amps, 2 * size);
+    starts = Arrays.copyOf(starts, 2 * size);
+    slope = Arrays.copyOf(slope, 2 * size);
+    charge = Arrays.copyOf(charge, 2 * size);
   }
 
   /**
@@ -66,62 +88,57 @@ final class PulseTrace {
    * @param halfWave the record is half a cycle whose mirror image follows: odd orders only
    */
   void harmonics(boolean halfWave, double[] re, double[] im) {
-    java.util.Arrays.fill(re, 0);
-    java.util.Arrays.fill(im, 0);
     slopes();
-    int step = halfWave ? 2 : 1;
-    for (int n = 1; n < size; n++) {
-      if (!starts[n]) {
-        addInterval(n - 1, step, re, im);
+    fourier.clear(halfWave);
+    for (int n = 0; n + 1 < size; n++) {
+      if (!starts[n + 1]) {
+        addInterval(n);
       }
     }
+    fourier.close();
     // (2/T)·∫ i·sin and cos give peak values; over √2 they are rms; a half record counts twice.
-    double scale = Math.sqrt(2) / CycleTable.CELLS * (halfWave ? 2 : 1);
-    for (int h = 1; h <= Spectrum.HIGHEST_ORDER; h += step) {
-      re[h] *= scale;
-      im[h] *= scale;
+    fourier.write(Math.sqrt(2) / CycleTable.CELLS * (halfWave ? 2 : 1), re, im);
+  }
+
+  /** One interval, cell by cell. */
+  private void addInterval(int n) {
+    fit(n);
+    double from = position[n];
+    double end = position[n + 1];
+    while (from < end) {
+      int cell = (int) from;
+      double to = Math.min(cell + 1, end);
+      if (cell != fourier.cell()) {
+        fourier.close();
+        fourier.open(cell);
+      }
+      for (int g = 0; g < 3; g++) {
+        double at = from + GAUSS_X[g] * (to - from);
+        fourier.add(at, inside(at) * (to - from) * GAUSS_W[g]);
+      }
+      from = to;
     }
   }
 
-  private void addInterval(int n, int step, double[] re, double[] im) {
+  /** The polynomial of the interval between nodes n and n + 1. */
+  private void fit(int n) {
     double width = position[n + 1] - position[n];
-    if (width <= 0) {
-      return;
-    }
-    for (int g = 0; g < 3; g++) {
-      double x = GAUSS_X[g];
-      double current = inside(n, width, x);
-      addPoint(position[n] + x * width, current * width * GAUSS_W[g], step, re, im);
-    }
+    double rise = amps[n + 1] - amps[n];
+    double start = width * slope[n];
+    double end = width * slope[n + 1];
+    double mean = (amps[n] + amps[n + 1]) / 2 + (start - end) / 12;
+    double bump = Double.isNaN(charge[n + 1]) ? 0 : 6 * (charge[n + 1] / width - mean);
+    origin = position[n];
+    perCell = 1 / width;
+    c0 = amps[n];
+    c1 = start + bump;
+    c2 = 3 * rise - 2 * start - end - bump;
+    c3 = start + end - 2 * rise;
   }
 
-  private double inside(int n, double width, double x) {
-    double y = 1 - x;
-    double cubic =
-        y * y * ((1 + 2 * x) * amps[n] + x * width * slope[n])
-            + x * x * ((1 + 2 * y) * amps[n + 1] - y * width * slope[n + 1]);
-    if (Double.isNaN(charge[n + 1])) {
-      return cubic;
-    }
-    double mean = (amps[n] + amps[n + 1]) / 2 + width * (slope[n] - slope[n + 1]) / 12;
-    return cubic + 6 * x * y * (charge[n + 1] / width - mean);
-  }
-
-  private static void addPoint(double at, double weight, int step, double[] re, double[] im) {
-    double angle = 2 * Math.PI / CycleTable.CELLS * at;
-    double sin = Math.sin(angle);
-    double cos = Math.cos(angle);
-    double turnSin = step == 2 ? 2 * sin * cos : sin;
-    double turnCos = step == 2 ? cos * cos - sin * sin : cos;
-    double s = weight * sin;
-    double c = weight * cos;
-    for (int h = 1; h <= Spectrum.HIGHEST_ORDER; h += step) {
-      re[h] += s;
-      im[h] += c;
-      double next = s * turnCos + c * turnSin;
-      c = c * turnCos - s * turnSin;
-      s = next;
-    }
+  private double inside(double at) {
+    double x = (at - origin) * perCell;
+    return c0 + x * (c1 + x * (c2 + x * c3));
   }
 
   private void slopes() {
@@ -180,9 +197,10 @@ final class PulseTrace {
     double sum = 0;
     for (int n = 0; n + 1 < size; n++) {
       double width = starts[n + 1] ? 0 : position[n + 1] - position[n];
+      fit(n);
       for (int g = 0; g < 3 && width > 0; g++) {
-        double x = GAUSS_X[g];
-        sum += width * GAUSS_W[g] * f.at(position[n] + x * width, inside(n, width, x));
+        double at = position[n] + GAUSS_X[g] * width;
+        sum += width * GAUSS_W[g] * f.at(at, inside(at));
       }
     }
     return sum / CycleTable.CELLS * (halfWave ? 2 : 1);
