@@ -4,11 +4,11 @@ package fourthwire.load.rectifier;
  * How current and capacitor voltage of a march answer to those it started with: the derivative of
  * the one pair by the other.
  *
- * <p>Along a conducting step the linearised path L·δi' = -(R + r_d)·δi - δv, C·δv' = δi +
- * (P/v²)·δv is taken by the two-stage, second-order, L-stable SDIRK method (Alexander, "Diagonally
- * implicit Runge-Kutta methods for stiff O.D.E.'s", SIAM Journal on Numerical Analysis 14, 1977),
- * the diodes' slope r_d at the mean current. It serves the Newton steps of the solver and tells
- * whether a steady state is stable; a solution's own accuracy does not hang on it.
+ * <p>Along a conducting step the linearised path L·δi' = -(R + r_d)·δi - δv, C·δv' = δi + (P/v²)·δv
+ * is taken by the two-stage, second-order, L-stable SDIRK method (Alexander, "Diagonally implicit
+ * Runge-Kutta methods for stiff O.D.E.'s", SIAM Journal on Numerical Analysis 14, 1977), the
+ * diodes' slope r_d at the mean current. It serves the Newton steps of the solver and tells whether
+ * a steady state is stable; a solution's own accuracy does not hang on it.
  */
 final class PathTangent {
   private static final double GAMMA = 1 - Math.sqrt(0.5);
@@ -62,10 +62,7 @@ final class PathTangent {
     double kvi = SECOND * bvi;
     double kvv = 1 - SECOND + SECOND * bvv;
     times(
-        kii * bii + kiv * bvi,
-        kii * biv + kiv * bvv,
-        kvi * bii + kvv * bvi,
-        kvi * biv + kvv * bvv);
+        kii * bii + kiv * bvi, kii * biv + kiv * bvv, kvi * bii + kvv * bvi, kvi * biv + kvv * bvv);
   }
 
   /**
