@@ -3,7 +3,6 @@ package fourthwire.load;
 import fourthwire.load.control.PhaseDimmer;
 import fourthwire.load.model.LoadModel;
 import fourthwire.quantity.Phasor;
-import java.util.Locale;
 import java.util.OptionalDouble;
 
 /** Makes the load model of a survey row. */
@@ -34,13 +33,7 @@ public final class LoadModels {
       case MOTOR -> motor(request);
       case PHASE_DIMMER -> dimmer(request);
       case MAGNETIC_BALLAST, ACTIVE_FRONT_END -> GivenSpectra.published(request);
-      default ->
-          throw new IllegalArgumentException(
-              String.format(
-                  Locale.ROOT,
-                  "the load kind %s can not be computed yet; enter the equipment as measured with"
-                      + " its spectrum",
-                  request.kind().word()));
+      case TWELVE_PULSE -> Rectifiers.twelvePulse(request);
     };
   }
 

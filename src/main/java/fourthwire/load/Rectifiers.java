@@ -5,10 +5,12 @@ import fourthwire.load.rectifier.BridgeLoad;
 import fourthwire.load.rectifier.CapacitorInput;
 import fourthwire.load.rectifier.Diode;
 import fourthwire.load.rectifier.SixPulse;
+import fourthwire.load.rectifier.TwelvePulse;
 import fourthwire.site.LoadKind;
 import fourthwire.site.ModelColumns;
 import java.util.OptionalDouble;
 import java.util.function.DoubleFunction;
+import java.util.function.Function;
 
 /**
  * Rectifier models from survey rows: the defaults of the model columns that are empty, and the size
@@ -18,7 +20,8 @@ import java.util.function.DoubleFunction;
  * 160 V, 1 µF/W above (recalled from power supply handbooks); own source resistance 2 % of V²/P,
  * own inductance none; {@code capacitor-input-choke} a line choke of 3 % where neither choke is
  * given; diodes as in the public contract, section 3; drives 40 µF/kW at 400 V, more at lower
- * voltage for the same stored energy, and 0.2 % of V²/P in each line.
+ * voltage for the same stored energy, and 0.2 % of V²/P in each line; of twelve-pulse rectifiers
+ * that is the lead ahead of the windings, and no line choke is taken where none is given.
  */
 final class Rectifiers {
   /** Below this nominal voltage a supply is taken to be built for 100 to 240 V. */
@@ -67,25 +70,35 @@ final class Rectifiers {
   }
 
   static LoadModel sixPulse(LoadRequest request) {
-    DoubleFunction<BridgeLoad> unit = power -> sixPulseUnit(request, power);
-    BridgeLoad load = sized(request, unit, l -> new SixPulse(l, request.frequencyHz()));
-    return new SixPulse(load, request.frequencyHz());
+    return threeLine(request, 1, load -> new SixPulse(load, request.frequencyHz()));
   }
 
-  private static BridgeLoad sixPulseUnit(LoadRequest request, double dcPowerW) {
+  static LoadModel twelvePulse(LoadRequest request) {
+    return threeLine(request, 2, load -> new TwelvePulse(load, request.frequencyHz()));
+  }
+
+  private static LoadModel threeLine(
+      LoadRequest request, int bridges, Function<BridgeLoad, LoadModel> model) {
+    return model.apply(sized(request, power -> threeLineUnit(request, bridges, power), model));
+  }
+
+  /** The lead is common to all bridges, each has a line choke for its share of the power. */
+  private static BridgeLoad threeLineUnit(LoadRequest request, int bridges, double dcPowerW) {
     ModelColumns c = request.columns();
     double v = request.nominalPortV();
     double base = v * v / dcPowerW;
     double omega = 2 * Math.PI * request.frequencyHz();
-    double line = c.lineChokePercent().orElse(0) / 100 * base;
+    double line = c.lineChokePercent().orElse(0) / 100 * base * bridges;
     double direct = c.dcChokePercent().orElse(0) / 100 * base;
     double microfaradPerW =
         c.capacitanceUfPerW().orElse(DRIVE_UF_PER_W_AT_400_V * (400 / v) * (400 / v));
     return new BridgeLoad(
         dcPowerW,
         microfaradPerW * 1e-6 * dcPowerW,
-        c.sourceResistanceOhm().orElse(DRIVE_RESISTANCE_SHARE * base) + line / 15,
-        c.sourceInductanceUh().orElse(0) * 1e-6 + line / omega,
+        c.sourceResistanceOhm().orElse(DRIVE_RESISTANCE_SHARE * base),
+        c.sourceInductanceUh().orElse(0) * 1e-6,
+        line / 15,
+        line / omega,
         direct / 10,
         direct / omega,
         diode(c));
@@ -104,9 +117,7 @@ final class Rectifiers {
    * @param unit one unit by its rated direct-current power
    */
   static BridgeLoad sized(
-      LoadRequest request,
-      DoubleFunction<BridgeLoad> unit,
-      java.util.function.Function<BridgeLoad, LoadModel> model) {
+      LoadRequest request, DoubleFunction<BridgeLoad> unit, Function<BridgeLoad, LoadModel> model) {
     OptionalDouble efficiency = request.columns().efficiency();
     double rated;
     if (efficiency.isPresent() && request.rating() instanceof LoadRequest.Rating.Watts w) {

@@ -9,7 +9,6 @@ import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.load.model.PortSpectra;
 import fourthwire.quantity.Spectrum;
 import fourthwire.site.LoadKind;
-import java.util.EnumSet;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -17,10 +16,8 @@ import org.junit.jupiter.params.provider.MethodSource;
 
 /** What every load model owes: laws of scaling, of shifting in time, and its rated power. */
 class LoadModelContractTest {
-  private static final EnumSet<LoadKind> LATER = EnumSet.of(LoadKind.TWELVE_PULSE);
-
   static Stream<LoadKind> kinds() {
-    return Stream.of(LoadKind.values()).filter(k -> !LATER.contains(k) && k != LoadKind.MEASURED);
+    return Stream.of(LoadKind.values()).filter(k -> k != LoadKind.MEASURED);
   }
 
   private static double watts(LoadKind kind) {
@@ -79,9 +76,6 @@ class LoadModelContractTest {
     assertThatThrownBy(() -> LoadModels.of(LoadCases.request(LoadKind.CAPACITOR_INPUT, -5, 1, 1)))
         .isInstanceOf(IllegalArgumentException.class)
         .hasMessageContaining("rating of capacitor-input");
-    assertThatThrownBy(() -> LoadModels.of(LoadCases.request(LoadKind.TWELVE_PULSE, 5, 1, 1)))
-        .isInstanceOf(IllegalArgumentException.class)
-        .hasMessageContaining("can not be computed yet");
   }
 
   @Test

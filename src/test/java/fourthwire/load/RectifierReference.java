@@ -8,6 +8,7 @@ import fourthwire.load.rectifier.BridgeLoad;
 import fourthwire.load.rectifier.CapacitorInput;
 import fourthwire.load.rectifier.Diode;
 import fourthwire.load.rectifier.SixPulse;
+import fourthwire.load.rectifier.TwelvePulse;
 import fourthwire.quantity.Phasor;
 import fourthwire.quantity.Spectrum;
 import java.io.IOException;
@@ -47,13 +48,19 @@ public record RectifierReference(NamedCsvRecord row) {
 
   /** The line currents this project computes for the case. */
   PortSpectra computed() {
-    LoadModel model =
-        threePhase()
-            ? new SixPulse(load(), number("f_Hz"))
-            : new CapacitorInput(load(), number("f_Hz"));
+    LoadModel model = model();
     PortSpectra current = new PortSpectra(model.ports());
     model.newSolver().solve(emf(), number("Rs_ohm"), number("Ls_uH") * 1e-6, current);
     return current;
+  }
+
+  private LoadModel model() {
+    double hertz = number("f_Hz");
+    return switch (row.getField("kind")) {
+      case "3ph_sixpulse" -> new SixPulse(load(), hertz);
+      case "3ph_twelvepulse" -> new TwelvePulse(load(), hertz);
+      default -> new CapacitorInput(load(), hertz);
+    };
   }
 
   /** The source's electromotive force, line to neutral. */

@@ -8,11 +8,11 @@ import fourthwire.load.model.LoadSolver;
  * capacitor and a constant-power load: the input of most drives.
  *
  * <p>While lines p and n conduct: (2L + D)·di/dt = e_p - e_n - (2R + S)·i - 2·v_d(i) - v and
- * C·dv/dt = i - P/v; in commutation overlap two lines share the current ({@link OverlapStep}). L, R
+ * C·dv/dt = i - P/v; in commutation overlap two lines share the current ({@link LoopStep}). L, R
  * are the network's and the line choke's, D, S the direct-current choke's. Only differences of the
  * three electromotive forces count and no zero-sequence current flows; unbalanced voltage brings
  * orders 3, 9 … in the lines. The periodic state is found by Newton's method on one section of the
- * cycle ({@link SixPulseSolver}).
+ * cycle ({@link MultiPulseSolver}).
  *
  * <p>Assumed: constant power on the direct-current side, linear chokes. Overlap of four lines (a
  * short-circuited drive) is outside its validity. Checked against circuit-simulator results with
@@ -45,6 +45,6 @@ public final class SixPulse implements LoadModel {
 
   @Override
   public LoadSolver newSolver() {
-    return new SixPulseSolver(load, frequencyHz);
+    return new MultiPulseSolver(1, load, frequencyHz);
   }
 }

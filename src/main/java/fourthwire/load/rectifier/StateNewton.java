@@ -1,12 +1,17 @@
 package fourthwire.load.rectifier;
 
 /**
- * Newton's method on the state of a bridge at a section of the cycle: three line currents that add
- * up to zero, and the capacitor's voltage. Where the set of conducting lines at the section changes
- * from turn to turn the map itself is repeated. Workspace of one solver, not thread-safe.
+ * Newton's method on the state of bridges at a section of the cycle: the currents of their lines,
+ * which add up to zero in each bridge, and the capacitor's voltage.
+ *
+ * <p>The Jacobian is taken by differences once and then kept up to date by Broyden's formula ("A
+ * class of methods for solving nonlinear simultaneous equations", Mathematics of Computation 19,
+ * 1965), from solve to solve too, as long as that closes in. Where the set of conducting lines at
+ * the section changes from turn to turn the map itself is repeated. Workspace of one solver, not
+ * thread-safe.
  */
 final class StateNewton {
-  /** Where one period later the bridge stands; false where it does not get there. */
+  /** Where one period later the bridges stand; false where they do not get there. */
   interface Period {
     /** Writes the image of a state. */
     boolean map(double[] from, double[] to);
@@ -22,24 +27,50 @@ final class StateNewton {
   private static final double AT_A_JUMP = 300;
 
   private static final int MOST_TURNS = 40;
-  private static final int VOLTS = 3;
+  private static final int MOST_UNKNOWNS = 5;
+
+  /** A kept Jacobian that brings the defect down by less than this is taken anew. */
+  private static final double SLOW = 0.3;
 
   /** Currents of the lines, then the voltage. */
-  final double[] state = new double[4];
+  final double[] state;
 
   private final Period period;
-  private final double[] image = new double[4];
-  private final double[] nudged = new double[4];
-  private final double[] nudgedImage = new double[4];
-  private final double[][] matrix = new double[3][4];
-  private final int[] unknown = new int[3];
+  private final int volts;
+  private final double[] image;
+  private final double[] nudged;
+  private final double[] nudgedImage;
+
+  /** Jacobian of the defect, image less state, in units of {@link #scaleOf}. */
+  private final double[][] jacobian = new double[MOST_UNKNOWNS][MOST_UNKNOWNS];
+
+  private final double[][] matrix = new double[MOST_UNKNOWNS][MOST_UNKNOWNS + 1];
+  private final double[] defect = new double[MOST_UNKNOWNS];
+  private final double[] step = new double[MOST_UNKNOWNS];
+  private final int[] unknown = new int[MOST_UNKNOWNS];
+  private int size;
+
+  /** Which lines conduct at the section, and for which of these the Jacobian was taken. */
+  private int lines;
+
+  private int jacobianOf = -1;
 
   private double peak;
   private double ampsScale;
   private double threshold;
 
-  StateNewton(Period period) {
+  /**
+   * Of bridges.
+   *
+   * @param lines how many lines they have together
+   */
+  StateNewton(int lines, Period period) {
     this.period = period;
+    volts = lines;
+    state = new double[lines + 1];
+    image = new double[lines + 1];
+    nudged = new double[lines + 1];
+    nudgedImage = new double[lines + 1];
   }
 
   void scale(double peakV, double amps, double thresholdA) {
@@ -51,11 +82,19 @@ final class StateNewton {
   /** Starts from no current and a share of the peak voltage. */
   void start(double share) {
     java.util.Arrays.fill(state, 0);
-    state[VOLTS] = share * peak;
+    state[volts] = share * peak;
+    jacobianOf = -1;
+  }
+
+  /** The period has changed: what is known of its Jacobian does not hold. */
+  void forget() {
+    jacobianOf = -1;
   }
 
   /** Moves the state until it closes on itself; false where it does not. */
   boolean converge() {
+    boolean stepped = false;
+    double before = 0;
     for (int n = 0; n < MOST_TURNS; n++) {
       if (!period.map(state, image)) {
         return false;
@@ -63,14 +102,19 @@ final class StateNewton {
       if (closed(n < MOST_TURNS - 1 ? 1 : AT_A_JUMP)) {
         return true;
       }
-      if (n < 1 || !sameLines() || !step()) {
-        System.arraycopy(image, 0, state, 0, 4);
+      stepped = (n > 0 || jacobianOf >= 0) && sameLines() && advance(stepped, before);
+      if (stepped) {
+        before = norm(defect);
+      } else {
+        System.arraycopy(image, 0, state, 0, volts + 1);
       }
     }
     return false;
   }
 
-  /** Repeats the period plainly, as the bridge itself would; false where it does not survive. */
+  /**
+   * Repeats the period plainly, as the bridges themselves would; false where they do not survive.
+   */
   boolean repeat(int turns) {
     for (int n = 0; n < turns; n++) {
       if (!period.map(state, image)) {
@@ -79,13 +123,13 @@ final class StateNewton {
       if (closed(1)) {
         return true;
       }
-      System.arraycopy(image, 0, state, 0, 4);
+      System.arraycopy(image, 0, state, 0, volts + 1);
     }
     return true;
   }
 
   private boolean sameLines() {
-    for (int k = 0; k < VOLTS; k++) {
+    for (int k = 0; k < volts; k++) {
       if (Math.signum(state[k]) != Math.signum(image[k])) {
         return false;
       }
@@ -94,62 +138,104 @@ final class StateNewton {
   }
 
   private boolean closed(double times) {
-    for (int k = 0; k < VOLTS; k++) {
-      if (Math.abs(image[k] - state[k]) > times * AMPS_TOLERANCE * ampsScale) {
+    for (int k = 0; k < volts; k++) {
+      if (!(Math.abs(image[k] - state[k]) <= times * AMPS_TOLERANCE * ampsScale)) {
         return false;
       }
     }
-    return Math.abs(image[VOLTS] - state[VOLTS]) < times * TOLERANCE * peak;
+    return Math.abs(image[volts] - state[volts]) < times * TOLERANCE * peak;
   }
 
-  /** One step with a Jacobian by differences; false leaves the state to plain repetition. */
-  private boolean step() {
-    int size = unknowns();
-    for (int column = 0; column < size; column++) {
-      System.arraycopy(state, 0, nudged, 0, 4);
-      double step = nudge(unknown[column]);
+  /**
+   * One step from the image just found; false leaves the state to plain repetition.
+   *
+   * @param stepped whether the state came from such a step, with this defect before it
+   */
+  private boolean advance(boolean stepped, double before) {
+    unknowns();
+    for (int a = 0; a < size; a++) {
+      defect[a] = (image[unknown[a]] - state[unknown[a]]) / scaleOf(unknown[a]);
+    }
+    if (jacobianOf != lines || stepped && norm(defect) > SLOW * before) {
+      if (!differences()) {
+        return false;
+      }
+    } else if (stepped) {
+      update();
+    }
+    return eliminate() && accept();
+  }
+
+  private double scaleOf(int index) {
+    return index == volts ? peak : ampsScale;
+  }
+
+  private double norm(double[] a) {
+    double sum = 0;
+    for (int n = 0; n < size; n++) {
+      sum += a[n] * a[n];
+    }
+    return Math.sqrt(sum);
+  }
+
+  /** Broyden's update: what the last step has missed lies along it. */
+  private void update() {
+    double square = 0;
+    for (int a = 0; a < size; a++) {
+      square += step[a] * step[a];
+    }
+    for (int a = 0; a < size; a++) {
+      for (int b = 0; b < size; b++) {
+        jacobian[a][b] += defect[a] * step[b] / square;
+      }
+    }
+  }
+
+  private boolean differences() {
+    jacobianOf = -1;
+    for (int b = 0; b < size; b++) {
+      System.arraycopy(state, 0, nudged, 0, volts + 1);
+      int index = unknown[b];
+      double nudge = index == volts ? 1e-6 * peak : Math.copySign(1e-5 * ampsScale, nudged[index]);
+      shift(index, nudge);
       if (!period.map(nudged, nudgedImage)) {
         return false;
       }
-      for (int row = 0; row < size; row++) {
-        int k = unknown[row];
-        matrix[row][column] = (nudgedImage[k] - image[k]) / step - (row == column ? 1 : 0);
+      for (int a = 0; a < size; a++) {
+        int k = unknown[a];
+        jacobian[a][b] =
+            (nudgedImage[k] - image[k]) / nudge * scaleOf(index) / scaleOf(k) - (a == b ? 1 : 0);
       }
     }
-    for (int row = 0; row < size; row++) {
-      matrix[row][3] = state[unknown[row]] - image[unknown[row]];
-    }
-    return eliminate(size) && accept(size);
+    jacobianOf = lines;
+    return true;
   }
 
-  /** The independent unknowns: one current of a pair, the two like-signed ones of three. */
-  private int unknowns() {
-    int size = 0;
-    int balance = 0;
-    for (int k = 0; k < VOLTS; k++) {
-      balance += (int) Math.signum(state[k]);
-    }
-    int sign = balance >= 0 ? 1 : -1;
-    for (int k = 0; k < VOLTS; k++) {
-      if (state[k] * sign > 0) {
-        unknown[size++] = k;
+  /**
+   * The independent unknowns of each bridge: one current of a pair, the two like-signed of three.
+   */
+  private void unknowns() {
+    size = 0;
+    lines = 0;
+    for (int k = 0; k < volts; k += 3) {
+      double balance =
+          Math.signum(state[k]) + Math.signum(state[k + 1]) + Math.signum(state[k + 2]);
+      int sign = balance >= 0 ? 1 : -1;
+      for (int m = k; m < k + 3; m++) {
+        lines = 3 * lines + 1 + (int) Math.signum(state[m]);
+        if (state[m] * sign > 0) {
+          unknown[size++] = m;
+        }
       }
     }
-    unknown[size++] = VOLTS;
-    return size;
+    unknown[size++] = volts;
   }
 
-  /** Enlarges one unknown of the nudged state a little; returns the signed change. */
-  private double nudge(int index) {
-    double step = index == VOLTS ? 1e-6 * peak : Math.copySign(1e-5 * ampsScale, nudged[index]);
-    shift(index, step);
-    return step;
-  }
-
-  /** Changes one unknown, keeping the sum of currents zero. */
+  /** Changes one unknown of the nudged state, keeping the bridge's sum of currents zero. */
   private void shift(int index, double step) {
-    if (index < VOLTS) {
-      for (int k = 0; k < VOLTS; k++) {
+    if (index < volts) {
+      int first = index - index % 3;
+      for (int k = first; k < first + 3; k++) {
         if (nudged[k] * nudged[index] < 0) {
           nudged[k] -= step;
           break;
@@ -159,59 +245,69 @@ final class StateNewton {
     nudged[index] += step;
   }
 
-  /** Gauss-Jordan with row exchange. */
-  private boolean eliminate(int size) {
+  /** The step to a defect of zero, by Gauss and Jordan with row exchange. */
+  private boolean eliminate() {
+    for (int r = 0; r < size; r++) {
+      System.arraycopy(jacobian[r], 0, matrix[r], 0, size);
+      matrix[r][size] = -defect[r];
+    }
     for (int p = 0; p < size; p++) {
-      int best = p;
-      for (int r = p + 1; r < size; r++) {
-        if (Math.abs(matrix[r][p]) > Math.abs(matrix[best][p])) {
-          best = r;
-        }
-      }
-      double[] swap = matrix[p];
-      matrix[p] = matrix[best];
-      matrix[best] = swap;
+      exchange(p);
       if (matrix[p][p] == 0) {
         return false;
       }
       for (int r = 0; r < size; r++) {
         if (r != p) {
-          subtract(r, p, size);
+          subtract(r, p);
         }
       }
+    }
+    for (int r = 0; r < size; r++) {
+      step[r] = matrix[r][size] / matrix[r][r];
     }
     return true;
   }
 
-  private void subtract(int row, int pivot, int size) {
+  private void exchange(int p) {
+    int best = p;
+    for (int r = p + 1; r < size; r++) {
+      if (Math.abs(matrix[r][p]) > Math.abs(matrix[best][p])) {
+        best = r;
+      }
+    }
+    double[] swap = matrix[p];
+    matrix[p] = matrix[best];
+    matrix[best] = swap;
+  }
+
+  private void subtract(int row, int pivot) {
     double factor = matrix[row][pivot] / matrix[pivot][pivot];
-    for (int c = pivot; c < size; c++) {
+    for (int c = pivot; c <= size; c++) {
       matrix[row][c] -= factor * matrix[pivot][c];
     }
-    matrix[row][3] -= factor * matrix[pivot][3];
   }
 
   /** Takes the step, shortened to what is sensible; false where it would leave the lines' set. */
-  private boolean accept(int size) {
+  private boolean accept() {
     double shrink = 1;
     for (int r = 0; r < size; r++) {
-      double step = Math.abs(matrix[r][3] / matrix[r][r]);
-      double most = unknown[r] == VOLTS ? 0.2 * peak : 5 * ampsScale;
-      shrink = Math.min(shrink, most / Math.max(step, 1e-300));
+      double most = unknown[r] == volts ? 0.2 : 5;
+      shrink = Math.min(shrink, most / Math.max(Math.abs(step[r]), 1e-300));
     }
-    System.arraycopy(state, 0, nudged, 0, 4);
+    System.arraycopy(state, 0, nudged, 0, volts + 1);
     for (int r = 0; r < size; r++) {
-      double step = shrink * matrix[r][3] / matrix[r][r];
+      step[r] *= shrink;
       int k = unknown[r];
-      if (k < VOLTS && Math.abs(nudged[k]) + step * Math.signum(nudged[k]) <= threshold) {
+      double change = step[r] * scaleOf(k);
+      if (k < volts && Math.abs(nudged[k]) + change * Math.signum(nudged[k]) <= threshold) {
         return false;
       }
-      shift(k, step);
+      shift(k, change);
     }
-    if (!(nudged[VOLTS] > 0.05 * peak)) {
+    if (!(nudged[volts] > 0.05 * peak)) {
       return false;
     }
-    System.arraycopy(nudged, 0, state, 0, 4);
+    System.arraycopy(nudged, 0, state, 0, volts + 1);
     return true;
   }
 }

@@ -1,13 +1,15 @@
 package fourthwire.load.rectifier;
 
+import fourthwire.load.model.PortSpectra;
+
 /**
- * A six-pulse bridge followed through time: no line conducting, a pair, or three in commutation
- * overlap; each change of the conducting set is found as an event.
+ * One six-pulse bridge, or two on one capacitor, followed through time: of each bridge no line
+ * conducts, a pair, or three in commutation overlap; each change of the conducting set is found as
+ * an event.
  *
- * <p>A third line joins where, with a diode's threshold current in it and the direct current
- * unchanged, that current would grow; a line leaves where its current falls through the threshold,
- * handing it to the line that stays. Both look at the same equations at the same currents, so that
- * a line that has joined does not leave at once. Workspace of one solver, not thread-safe.
+ * <p>A line joins where, with a diode's threshold current in it and the direct current unchanged,
+ * that current would grow; it leaves where its current falls through the threshold, handing it to
+ * the line that stays. Workspace, not thread-safe.
  */
 final class ThreeLineBridge {
   /** First steps after a change, as shares of the way to a node: the current starts like t². */
@@ -17,17 +19,20 @@ final class ThreeLineBridge {
   private static final double EVENT_CELLS = 1e-7;
 
   /**
-   * A line that has left may join again only this many cells later, unless its margin is clear: a
+   * After a line has left one may join only this many cells later, unless its margin is clear: a
    * current of about the threshold's would else come and go without end.
    */
   private static final double REST_OF_LEAVER = 0.1;
 
   final ThreeLineEmf emf = new ThreeLineEmf();
-  final PulseTrace[] trace = {new PulseTrace(), new PulseTrace(), new PulseTrace()};
+  final PulseTrace[] trace = new PulseTrace[6];
   final PathStep pair = new PathStep();
 
-  /** Signed line currents, 0 where a line does not conduct. */
-  final double[] line = new double[3];
+  /** Space for the spectra of a second bridge's windings. */
+  final PortSpectra second = new PortSpectra(3);
+
+  /** Signed line currents, 0 where a line does not conduct; of a second bridge from 3 on. */
+  final double[] line = new double[6];
 
   /** Capacitor voltage. */
   double v;
@@ -35,12 +40,17 @@ final class ThreeLineBridge {
   /** Capacitor voltage under which the load counts as having emptied it. */
   double floorV;
 
-  private final OverlapStep overlap = new OverlapStep();
-  private final Discharge discharge = new Discharge(emf::spread, pair);
-  private final EventFinder.Margin pairShortfall = this::pairShortfall;
-  private final EventFinder.Margin joinMargin = this::joinMarginAfter;
-  private final EventFinder.Margin overlapShortfall = this::overlapShortfall;
+  /** Line currents at the start of a step. */
+  private final double[] before = new double[6];
 
+  private final LoopStep loops = new LoopStep();
+  private final Loop idle = new Loop();
+  private final Loop joiner = new Loop();
+  private final Discharge discharge = new Discharge(this::spread, pair);
+  private final EventFinder.Margin shortfall = this::shortfall;
+  private final EventFinder.Margin joinMargin = this::marginAfter;
+
+  private int bridges = 1;
   private boolean recording;
   private int switchings;
   private boolean justLeft;
@@ -51,29 +61,41 @@ final class ThreeLineBridge {
 
   private double to;
 
-  /** Lines of a pair: current enters by p, returns by n, t idles. */
-  private int p;
+  ThreeLineBridge() {
+    java.util.Arrays.setAll(trace, k -> new PulseTrace());
+  }
 
-  private int n;
-  private int t;
-
-  /** Lines of an overlap: a and b share the current that returns by c; sign of a's current. */
-  private int a;
-
-  private int b;
-  private int c;
-  private int sign;
-
-  /** Shared currents at the start of a step. */
-  private double xa;
-
-  private double xb;
-
-  void set(double ohm, double henry, BridgeLoad load, double cellSeconds, double threshold) {
-    pair.set(2 * ohm + load.dcOhm(), 2 * henry + load.dcHenry(), load, cellSeconds);
-    overlap.set(ohm, henry, load, cellSeconds);
+  /**
+   * Takes the circuit.
+   *
+   * @param sourceOhm resistance per line ahead of the bridges
+   * @param sourceHenry inductance likewise
+   * @param ownHenry inductance of each bridge's line
+   */
+  void set(
+      int bridges,
+      double sourceOhm,
+      double sourceHenry,
+      double ownHenry,
+      BridgeLoad load,
+      double cellSeconds,
+      double threshold) {
+    this.bridges = bridges;
+    double ohm = 2 * (sourceOhm + load.lineOhm()) + load.dcOhm();
+    double henry = 2 * (sourceHenry + ownHenry) + load.dcHenry();
+    pair.set(ohm, henry, load, cellSeconds);
     pair.threshold(threshold);
-    overlap.threshold(threshold);
+    loops.set(sourceOhm, sourceHenry, ownHenry, load, cellSeconds);
+    loops.threshold(threshold);
+  }
+
+  int lines() {
+    return 3 * bridges;
+  }
+
+  private double spread(double position) {
+    double spread = emf.spread(0, position);
+    return bridges == 1 ? spread : Math.max(spread, emf.spread(1, position));
   }
 
   /**
@@ -89,36 +111,36 @@ final class ThreeLineBridge {
     joinsFrom = from;
     u = from;
     to = from + cells;
-    if (record) {
-      for (PulseTrace each : trace) {
-        each.clear();
-      }
+    for (int k = 0; k < lines() && record; k++) {
+      trace[k].clear();
     }
-    int before = conducting();
+    int earlier = conducting(0, lines());
     while (u < to && v > floorV && switchings <= MOST_SWITCHINGS) {
-      int now = conducting();
+      int now = conducting(0, lines());
       if (now == 0) {
         rest();
       } else {
         begin();
-        conduct(now, now > before);
+        conduct(now > earlier);
       }
-      before = now;
+      earlier = now;
     }
     return u >= to && v > floorV;
   }
 
-  private int conducting() {
-    return (line[0] != 0 ? 1 : 0) + (line[1] != 0 ? 1 : 0) + (line[2] != 0 ? 1 : 0);
+  private int conducting(int from, int to) {
+    int count = 0;
+    for (int k = from; k < to; k++) {
+      count += line[k] != 0 ? 1 : 0;
+    }
+    return count;
   }
 
   private void begin() {
     switchings++;
-    if (recording) {
-      for (int k = 0; k < 3; k++) {
-        if (line[k] != 0) {
-          trace[k].start(u, line[k]);
-        }
+    for (int k = 0; k < lines() && recording; k++) {
+      if (line[k] != 0) {
+        trace[k].start(u, line[k]);
       }
     }
   }
@@ -132,27 +154,20 @@ final class ThreeLineBridge {
     u = discharge.u;
     v = discharge.v;
     if (discharge.turnedOn) {
-      line[emf.highest(u)] = pair.threshold;
-      line[emf.lowest(u)] = -pair.threshold;
+      int b = bridges == 1 || emf.spread(0, u) >= emf.spread(1, u) ? 0 : 1;
+      line[emf.highest(b, u)] = pair.threshold;
+      line[emf.lowest(b, u)] = -pair.threshold;
     }
   }
 
   /** Steps until the set of conducting lines changes. */
-  private void conduct(int lines, boolean fresh) {
-    if (lines == 2) {
-      p = line[0] > 0 ? 0 : line[1] > 0 ? 1 : 2;
-      n = line[0] < 0 ? 0 : line[1] < 0 ? 1 : 2;
-      t = 3 - p - n;
-      if (joins(joinMargin(line[p], u, v), u)) {
-        join();
-        return;
-      }
-    } else {
-      int positive = (line[0] > 0 ? 1 : 0) + (line[1] > 0 ? 1 : 0) + (line[2] > 0 ? 1 : 0);
-      sign = positive == 2 ? 1 : -1;
-      c = line[0] * sign < 0 ? 0 : line[1] * sign < 0 ? 1 : 2;
-      a = c == 0 ? 1 : 0;
-      b = 3 - a - c;
+  private void conduct(boolean fresh) {
+    arrange();
+    System.arraycopy(loops.from, 0, loops.x, 0, loops.n);
+    loops.v = v;
+    if (joins(margin(u), u)) {
+      join();
+      return;
     }
     double base = u;
     double span = Math.min(pair.nextNode(pair.nextNode(u)), to) - u;
@@ -163,39 +178,54 @@ final class ThreeLineBridge {
           graded < GRADING.length
               ? base + GRADING[graded++] * span
               : Math.min(pair.nextNode(u), to);
-      if (u < joinsFrom) {
-        next = Math.min(next, joinsFrom);
-      }
-      same = lines == 2 ? stepPair(next) : stepOverlap(next);
+      same = step(u < joinsFrom ? Math.min(next, joinsFrom) : next);
     }
   }
 
-  /** One step of a pair; false where the set of conducting lines has changed. */
-  private boolean stepPair(double next) {
-    xa = line[p];
-    double h = next - u;
-    double short0 = pairShortfall(h);
-    boolean leaves = short0 > 0;
-    if (leaves) {
-      h = EventFinder.find(pairShortfall, 0, pair.threshold - xa, h, short0, EVENT_CELLS, 0);
+  /** The loops in which the conducting lines share the current. */
+  private void arrange() {
+    loops.n = 0;
+    for (int b = 0; b < bridges; b++) {
+      int k = 3 * b;
+      int balance = signum(line[k]) + signum(line[k + 1]) + signum(line[k + 2]);
+      int sign = balance >= 0 ? 1 : -1;
+      int common = line[k] * sign < 0 ? k : line[k + 1] * sign < 0 ? k + 1 : k + 2;
+      for (int m = k; m < k + 3; m++) {
+        if (line[m] * sign > 0) {
+          loops.add(m, common, sign, line[m] * sign);
+        }
+      }
     }
-    double margin = joinMargin(pair.i, u + h, pair.v);
+    loops.couple();
+  }
+
+  private static int signum(double x) {
+    return x > 0 ? 1 : x < 0 ? -1 : 0;
+  }
+
+  /** The line of a loop's bridge that is not in it. */
+  private static int third(Loop loop) {
+    return 9 * loop.bridge() + 3 - loop.in - loop.out;
+  }
+
+  /** One step; false where the set of conducting lines has changed. */
+  private boolean step(double next) {
+    double h = next - u;
+    double missing = shortfall(h);
+    boolean leaves = missing > 0;
+    if (leaves) {
+      double short0 = pair.threshold - least(loops.from);
+      h = EventFinder.find(shortfall, 0, short0, h, missing, EVENT_CELLS, 1e-3 * pair.threshold);
+    }
+    double margin = margin(u + h);
     boolean joins = joins(margin, u + h);
     if (joins) {
       h = joinAfter(h, margin);
       leaves = false;
     }
-    double charge = pair.charge(h, v);
-    u = leaves || joins ? u + h : next;
-    v = pair.v;
-    line[p] = pair.i;
-    line[n] = -pair.i;
-    if (recording) {
-      trace[p].next(u, pair.i, charge);
-      trace[n].next(u, -pair.i, -charge);
-    }
+    put(leaves || joins ? u + h : next);
     if (leaves) {
-      endPair();
+      leave();
     } else if (joins) {
       join();
     }
@@ -203,98 +233,156 @@ final class ThreeLineBridge {
   }
 
   private double joinAfter(double h, double margin) {
-    double before = joinMargin(xa, u, v);
-    return before < 0 && u >= joinsFrom
-        ? EventFinder.find(joinMargin, 0, before, h, margin, EVENT_CELLS, 0)
-        : h;
+    System.arraycopy(loops.from, 0, loops.x, 0, loops.n);
+    loops.v = v;
+    double atStart = margin(u);
+    if (atStart < 0 && u >= joinsFrom) {
+      return EventFinder.find(joinMargin, 0, atStart, h, margin, EVENT_CELLS, 0);
+    }
+    marginAfter(h);
+    return h;
   }
 
-  private void endPair() {
-    line[p] = 0;
-    line[n] = 0;
-    justLeft = true;
+  /** Takes over what the last step has come to, which ends at a position. */
+  private void put(double end) {
+    System.arraycopy(line, 0, before, 0, lines());
+    double chargePerAmp = loops.chargePerAmp(end - u, v);
+    u = end;
+    v = loops.v;
+    for (int a = 0; a < loops.n; a++) {
+      line[loops.loop[a].out] = 0;
+    }
+    for (int a = 0; a < loops.n; a++) {
+      Loop loop = loops.loop[a];
+      loops.from[a] = loops.x[a];
+      line[loop.in] = loop.sign * loops.x[a];
+      line[loop.out] -= line[loop.in];
+    }
+    for (int k = 0; k < lines() && recording; k++) {
+      if (line[k] != 0) {
+        trace[k].next(u, line[k], chargePerAmp * (before[k] + line[k]));
+      }
+    }
   }
 
-  /** Steps the pair by h cells; by how much its current falls short of the threshold then. */
-  private double pairShortfall(double h) {
-    pair.step(h, xa, v, emf.between(p, n, u), emf.slopeBetween(p, n, u), emf.between(p, n, u + h));
-    return pair.threshold - pair.i;
+  /** The smallest current leaves its line: to the line that stays, or with its whole pair. */
+  private void leave() {
+    int gone = 0;
+    for (int a = 1; a < loops.n; a++) {
+      if (loops.x[a] < loops.x[gone]) {
+        gone = a;
+      }
+    }
+    Loop loop = loops.loop[gone];
+    int k = 3 * loop.bridge();
+    double rest = line[loop.in];
+    line[loop.in] = 0;
+    if (conducting(k, k + 3) == 2) {
+      line[third(loop)] += rest;
+    } else {
+      line[loop.out] = 0;
+    }
+    justLeft = loops.n == 1;
+    joinsFrom = u + REST_OF_LEAVER;
+  }
+
+  /** Steps by h cells; by how much the smallest current falls short of the threshold then. */
+  private double shortfall(double h) {
+    if (loops.n > 1) {
+      loops.step(emf, u, h, v);
+    } else {
+      Loop one = loops.loop[0];
+      pair.step(
+          h, loops.from[0], v, one.drive(emf, u), one.driveSlope(emf, u), one.drive(emf, u + h));
+      loops.x[0] = pair.i;
+      loops.v = pair.v;
+    }
+    return pair.threshold - least(loops.x);
+  }
+
+  private double least(double[] amps) {
+    double least = amps[0];
+    for (int a = 1; a < loops.n; a++) {
+      least = Math.min(least, amps[a]);
+    }
+    return least;
   }
 
   private boolean joins(double margin, double at) {
     return margin >= (at < joinsFrom ? pair.slopeV : 0);
   }
 
-  private double joinMarginAfter(double h) {
-    pairShortfall(h);
-    return joinMargin(pair.i, u + h, pair.v);
+  private double marginAfter(double h) {
+    shortfall(h);
+    return margin(u + h);
   }
 
-  /** The idle line's margin on the side where it is larger, volts. */
-  private double joinMargin(double amps, double at, double volts) {
-    double drive = emf.between(p, n, at);
-    double above = emf.between(t, n, at);
-    return overlap.margin(amps, volts, drive, Math.max(above, drive - above));
-  }
-
-  /** Lets the idle line in on its side, with a threshold's share of the current. */
-  private void join() {
-    double above = emf.between(t, n, u);
-    double total = Math.max(line[p], 2 * pair.threshold);
-    boolean up = 2 * above > emf.between(p, n, u);
-    line[p] = total;
-    line[n] = -total;
-    line[t] = up ? pair.threshold : -pair.threshold;
-    line[up ? p : n] -= line[t];
-  }
-
-  /** One step of an overlap; false where the set of conducting lines has changed. */
-  private boolean stepOverlap(double next) {
-    xa = sign * line[a];
-    xb = sign * line[b];
-    double h = next - u;
-    double short0 = overlapShortfall(h);
-    boolean leaves = short0 > 0;
-    if (leaves) {
-      double before = pair.threshold - Math.min(xa, xb);
-      h = EventFinder.find(overlapShortfall, 0, before, h, short0, EVENT_CELLS, 0);
-    }
-    u = leaves ? u + h : next;
-    v = overlap.v;
-    line[a] = sign * overlap.xa;
-    line[b] = sign * overlap.xb;
-    line[c] = -line[a] - line[b];
-    if (recording) {
-      for (int k = 0; k < 3; k++) {
-        trace[k].next(u, line[k], Double.NaN);
+  /** The margin of the idle line that is the most willing to join, which becomes the joiner. */
+  private double margin(double at) {
+    double most = Double.NEGATIVE_INFINITY;
+    if (loops.n < 2 * bridges) {
+      loops.rates(emf, at);
+      for (int b = 0, a = 0; b < bridges; b++) {
+        int first = a;
+        while (a < loops.n && loops.loop[a].bridge() == b) {
+          a++;
+        }
+        if (a == first) {
+          most = Math.max(most, offMargin(3 * b, at, most));
+        } else if (a == first + 1) {
+          most = Math.max(most, thirdMargin(first, at, most));
+        }
       }
     }
-    if (leaves) {
-      leave();
+    return most;
+  }
+
+  /** Of a bridge without current: each pair of its lines, both ways. */
+  private double offMargin(int k, double at, double atLeast) {
+    double most = atLeast;
+    for (int in = k; in < k + 3; in++) {
+      for (int out = k; out < k + 3; out++) {
+        if (in != out) {
+          most = candidate(in, out, 0, at, most);
+        }
+      }
     }
-    return !leaves;
+    return most;
   }
 
-  private void leave() {
-    joinsFrom = u + REST_OF_LEAVER;
-    int gone = overlap.xa < overlap.xb ? a : b;
-    line[gone] = 0;
-    line[a + b - gone] = -line[c];
+  /** Of a pair's idle line: on either side. */
+  private double thirdMargin(int a, double at, double atLeast) {
+    Loop loop = loops.loop[a];
+    int third = third(loop);
+    double up = candidate(third, loop.out, loops.x[a], at, atLeast);
+    return candidate(loop.in, third, loops.x[a], at, up);
   }
 
-  private double overlapShortfall(double h) {
-    double end = u + h;
-    overlap.step(
-        h,
-        xa,
-        xb,
-        v,
-        sign * emf.between(a, c, u),
-        sign * emf.slopeBetween(a, c, u),
-        sign * emf.between(a, c, end),
-        sign * emf.between(b, c, u),
-        sign * emf.slopeBetween(b, c, u),
-        sign * emf.between(b, c, end));
-    return pair.threshold - Math.min(overlap.xa, overlap.xb);
+  private double candidate(int in, int out, double carried, double at, double atLeast) {
+    idle.set(in, out, 1);
+    double margin = loops.margin(idle, emf, at, carried);
+    if (margin > atLeast) {
+      joiner.set(in, out, 1);
+      return margin;
+    }
+    return atLeast;
+  }
+
+  /** Lets the joiner in with a threshold's share of the current. */
+  private void join() {
+    double amps = pair.threshold;
+    double enter = line[joiner.in];
+    double leave = line[joiner.out];
+    if (enter == 0 && leave == 0) {
+      line[joiner.in] = amps;
+      line[joiner.out] = -amps;
+      return;
+    }
+    int yields = third(joiner);
+    double total = Math.max(Math.abs(line[yields]), 2 * amps);
+    int sign = enter == 0 ? 1 : -1;
+    line[enter == 0 ? joiner.in : joiner.out] = sign * amps;
+    line[enter == 0 ? joiner.out : joiner.in] = -sign * total;
+    line[yields] = sign * (total - amps);
   }
 }

@@ -107,8 +107,18 @@ record RandomRectifier(
     return low * Math.pow(high / low, r.nextDouble());
   }
 
-  boolean halfWave() {
-    return true; // odd orders only, above
+  /** The same with the source's resistance in the equipment's own lines. */
+  RandomRectifier withOwnResistance() {
+    BridgeLoad own =
+        new BridgeLoad(
+            load.powerW(),
+            load.capacitanceF(),
+            load.lineOhm() + ohm,
+            load.lineHenry(),
+            load.dcOhm(),
+            load.dcHenry(),
+            load.diode());
+    return new RandomRectifier(seed, own, hertz, emf, 0, henry);
   }
 
   /** Watts lost by a current in one port: a line's diode, or both of a single-phase path. */

@@ -22,6 +22,7 @@ class RectifierLawsTest {
   @ValueSource(longs = {1, 2})
   void everySensibleDriveFindsItsSteadyState(long seed) {
     for (int n = 0; n < SETS; n++) {
+<<<<<<< Updated upstream
       RandomRectifier given = RandomRectifier.drive(1000 * seed + n);
       SixPulseSolver solver = new SixPulseSolver(given.load(), given.hertz());
       PortSpectra current = new PortSpectra(3);
@@ -31,7 +32,30 @@ class RectifierLawsTest {
         fail("%s: %s", given, none.getMessage());
       }
       check(given, given.halfWave(), current, solver::trace);
+=======
+      checkDrive(1, RandomRectifier.drive(1000 * seed + n));
+>>>>>>> Stashed changes
     }
+  }
+
+  /** Resistance lies behind the windings, where each line's loss is its own current's. */
+  @ParameterizedTest(name = "seed {0}")
+  @ValueSource(longs = {1, 2})
+  void everySensibleTwelvePulseDriveFindsItsSteadyState(long seed) {
+    for (int n = 0; n < SETS; n++) {
+      checkDrive(2, RandomRectifier.drive(1000 * seed + n).withOwnResistance());
+    }
+  }
+
+  private static void checkDrive(int bridges, RandomRectifier given) {
+    MultiPulseSolver solver = new MultiPulseSolver(bridges, given.load(), given.hertz());
+    PortSpectra current = new PortSpectra(3);
+    try {
+      solver.solve(given.emf(), given.ohm(), given.henry(), current);
+    } catch (NoSteadyStateException none) {
+      fail("%s: %s", given, none.getMessage());
+    }
+    check(given, current, solver::trace, solver.lines(), solver.periods());
   }
 
   @ParameterizedTest(name = "seed {0}")
@@ -49,7 +73,11 @@ class RectifierLawsTest {
         unsettled++;
         continue;
       }
+<<<<<<< Updated upstream
       check(given, solver.halfWave(), current, port -> solver.trace());
+=======
+      check(given, current, port -> solver.trace(), 1, 2);
+>>>>>>> Stashed changes
     }
     assertThat(unsettled).as("supplies whose current does not settle").isLessThan(SETS / 50);
   }
@@ -58,6 +86,7 @@ class RectifierLawsTest {
     PulseTrace of(int port);
   }
 
+<<<<<<< Updated upstream
   private static void check(
       RandomRectifier given, boolean halfWave, PortSpectra current, Traces traces) {
     double fourier = 0;
@@ -65,28 +94,51 @@ class RectifierLawsTest {
     double lost = 0;
     int ports = given.emf().ports();
     for (int port = 0; port < ports; port++) {
+=======
+  /**
+   * One solution's laws.
+   *
+   * @param lines of all bridges
+   * @param periods how many times what was recorded makes up the cycle
+   */
+  private static void check(
+      RandomRectifier given, PortSpectra current, Traces traces, int lines, int periods) {
+    double fourier = 0;
+    double instantaneous = 0;
+    double lost = 0;
+    double weight = Math.max(periods, 2) / 2.0;
+    for (int port = 0; port < given.emf().ports(); port++) {
+>>>>>>> Stashed changes
       assertThat(current.spectrum(port).rms()).as(given.toString()).isFinite().isPositive();
-      CycleTable emf = new CycleTable();
-      emf.fill(given.emf().re[port], given.emf().im[port]);
       for (int h = 1; h <= Spectrum.HIGHEST_ORDER; h++) {
         fourier +=
             given.emf().re[port][h] * current.re[port][h]
                 + given.emf().im[port][h] * current.im[port][h];
       }
-      if (port < 2 || ports == 1) {
-        instantaneous += traces.of(port).mean(halfWave, (at, amps) -> emf.at(at) * amps);
-      }
-      lost += traces.of(port).mean(halfWave, (at, amps) -> given.loss(Math.abs(amps)));
     }
-    if (ports == 3) {
-      CycleTable third = new CycleTable();
-      third.fill(given.emf().re[2], given.emf().im[2]);
-      for (int port = 0; port < 2; port++) {
-        instantaneous -= traces.of(port).mean(halfWave, (at, amps) -> third.at(at) * amps);
-      }
+    for (int line = 0; line < lines; line++) {
+      PulseTrace trace = traces.of(line);
+      CycleTable emf = emfOf(given, line);
+      boolean halfWave = periods > 1;
+      instantaneous += weight * trace.mean(halfWave, (at, amps) -> emf.at(at) * amps);
+      lost += weight * trace.mean(halfWave, (at, amps) -> given.loss(Math.abs(amps)));
     }
     double watts = given.load().powerW();
     assertThat(instantaneous).as("time domain, " + given).isCloseTo(fourier, within(1e-6 * watts));
     assertThat(fourier - lost).as("balance, " + given).isCloseTo(watts, within(1e-4 * watts));
+  }
+
+  /** A port's, or that of a winding 30° ahead: the difference of two lines over √3. */
+  private static CycleTable emfOf(RandomRectifier given, int line) {
+    PortSpectra emf = given.emf();
+    double[] re = emf.re[line % 3].clone();
+    double[] im = emf.im[line % 3].clone();
+    for (int h = 1; h < re.length && line > 2; h++) {
+      re[h] = (re[h] - emf.re[(line + 1) % 3][h]) / Math.sqrt(3);
+      im[h] = (im[h] - emf.im[(line + 1) % 3][h]) / Math.sqrt(3);
+    }
+    CycleTable table = new CycleTable();
+    table.fill(re, im);
+    return table;
   }
 }

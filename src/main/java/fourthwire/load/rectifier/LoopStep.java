@@ -1,0 +1,298 @@
+package fourthwire.load.rectifier;
+
+/**
+ * One time step of all loops of current that conduct in one bridge or in two on one capacitor.
+ *
+ * <p>With x the loops' currents, M and R the matrices of what they share of the source, the line
+ * chokes and the direct-current choke: M·x' = e - R·x - v_d - v and C·v' = Σx - P/v, where v_d is
+ * the drop of the diode that a loop has for itself plus that of the one which carries all loops of
+ * its bridge. Method and units as in {@link PathStep}; M may be singular (no inductance).
+ */
+final class LoopStep {
+  /** Two lines of each bridge share a current. */
+  static final int MOST = 4;
+
+  /** Over this many cells the currents' rates are taken where a line may join. */
+  private static final double MOMENT = 1e-3;
+
+  /** Loops, those of a bridge next to each other. */
+  final Loop[] loop = {new Loop(), new Loop(), new Loop(), new Loop()};
+
+  /** How many of them conduct. */
+  int n;
+
+  /** Their currents, amps: where a step starts, and where it has ended. */
+  final double[] from = new double[MOST];
+
+  final double[] x = new double[MOST];
+
+  /** Capacitor's voltage after a step. */
+  double v;
+
+  private double sourceOhm;
+  private double sourceHenry;
+  private double ownOhm;
+  private double ownHenry;
+  private double dcOhm;
+  private double dcHenry;
+  private boolean resistive;
+  private double capacitance;
+  private double power;
+  private double slopeV;
+  private double saturation;
+  private double threshold;
+
+  private final double[] ohm = new double[MOST * MOST];
+  private final double[] henry = new double[MOST * MOST];
+  private final double[] factors = new double[MOST * MOST];
+
+  /** Drives at the start of a step, their change over it, and at its end. */
+  private final double[] drive = new double[MOST];
+
+  private final double[] change = new double[MOST];
+  private final double[] driveAfter = new double[MOST];
+
+  private final double[] f = new double[MOST];
+  private final double[] r = new double[MOST];
+  private final double[] k = new double[MOST];
+  private final double[] u = new double[MOST];
+  private double fv;
+  private double uv;
+  private double c;
+
+  /**
+   * Takes the circuit.
+   *
+   * @param sourceOhm resistance per line ahead of both bridges
+   * @param sourceHenry inductance likewise
+   */
+  void set(
+      double sourceOhm, double sourceHenry, double ownHenry, BridgeLoad load, double cellSeconds) {
+    this.sourceOhm = sourceOhm;
+    this.sourceHenry = sourceHenry / cellSeconds;
+    ownOhm = load.lineOhm() + load.diode().ohm();
+    this.ownHenry = ownHenry / cellSeconds;
+    dcOhm = load.dcOhm();
+    dcHenry = load.dcHenry() / cellSeconds;
+    resistive = sourceHenry + ownHenry + load.dcHenry() == 0;
+    capacitance = load.capacitanceF() / cellSeconds;
+    power = load.powerW();
+    slopeV = load.diode().slopeV();
+    saturation = load.diode().saturationA();
+  }
+
+  void threshold(double amps) {
+    threshold = amps;
+  }
+
+  /** Takes note of another loop; {@link #couple} has to follow. */
+  void add(int in, int out, int sign, double amps) {
+    loop[n].set(in, out, sign);
+    from[n] = amps;
+    n++;
+  }
+
+  /** The matrices of the loops as they stand. */
+  void couple() {
+    for (int a = 0; a < n; a++) {
+      for (int b = 0; b <= a; b++) {
+        ohm[a * MOST + b] = ohm[b * MOST + a] = mutualOhm(loop[a], loop[b]);
+        henry[a * MOST + b] = henry[b * MOST + a] = mutualHenry(loop[a], loop[b]);
+      }
+    }
+  }
+
+  private double mutualOhm(Loop a, Loop b) {
+    return (a.bridge() == b.bridge() ? ownOhm + sourceOhm : sourceOhm) * a.along(b) + dcOhm;
+  }
+
+  private double mutualHenry(Loop a, Loop b) {
+    return (a.bridge() == b.bridge() ? ownHenry + sourceHenry : sourceHenry) * a.along(b) + dcHenry;
+  }
+
+  /** All loops of this one's bridge together: the current in their common diode. */
+  private double shared(int a, double[] amps) {
+    double sum = amps[a];
+    if (a > 0 && loop[a - 1].bridge() == loop[a].bridge()) {
+      sum += amps[a - 1];
+    } else if (a + 1 < n && loop[a + 1].bridge() == loop[a].bridge()) {
+      sum += amps[a + 1];
+    }
+    return sum;
+  }
+
+  /** Logarithmic drop of two diodes. */
+  private double drops(double one, double other) {
+    return slopeV
+        * Math.log(
+            (1 + Math.max(one, threshold) / saturation)
+                * (1 + Math.max(other, threshold) / saturation));
+  }
+
+  private double conductance(double amps) {
+    return amps >= threshold ? slopeV / (amps + saturation) : 0;
+  }
+
+  /** What drives each loop's current on: {@link #f}, and the capacitor's: {@link #fv}. */
+  private void forces(double[] amps, double volts, double[] drives) {
+    double sum = 0;
+    for (int a = 0; a < n; a++) {
+      double drop = drops(amps[a], shared(a, amps));
+      for (int b = 0; b < n; b++) {
+        drop += ohm[a * MOST + b] * amps[b];
+      }
+      f[a] = drives[a] - volts - drop;
+      sum += amps[a];
+    }
+    fv = sum - power / volts;
+  }
+
+  /** Factors weight·M + R + diodes + 1/c by Cholesky's method without roots. */
+  private void factor(double weight, double[] amps, double perC) {
+    for (int a = 0; a < n; a++) {
+      double common = conductance(shared(a, amps));
+      for (int b = 0; b <= a; b++) {
+        double sum = weight * henry[a * MOST + b] + ohm[a * MOST + b] + perC;
+        if (loop[a].bridge() == loop[b].bridge()) {
+          sum += a == b ? common + conductance(amps[a]) : common;
+        }
+        for (int m = 0; m < b; m++) {
+          sum -= factors[a * MOST + m] * factors[b * MOST + m] * factors[m * MOST + m];
+        }
+        factors[a * MOST + b] = a == b ? sum : sum / factors[b * MOST + b];
+      }
+    }
+  }
+
+  /** Solves for {@link #u} and {@link #uv} from {@link #r} and the capacitor's side. */
+  private void solve(double rv) {
+    for (int a = 0; a < n; a++) {
+      double sum = r[a] - rv / c;
+      for (int m = 0; m < a; m++) {
+        sum -= factors[a * MOST + m] * u[m];
+      }
+      u[a] = sum;
+    }
+    double total = 0;
+    for (int a = n - 1; a >= 0; a--) {
+      double sum = u[a] / factors[a * MOST + a];
+      for (int m = a + 1; m < n; m++) {
+        sum -= factors[m * MOST + a] * u[m];
+      }
+      u[a] = sum;
+      total += sum;
+    }
+    uv = (rv + total) / c;
+  }
+
+  /**
+   * Charge of the last step for each amp of a line's currents at its ends together, in cells: from
+   * the capacitor's voltage, which is surer than a stiff path's current. NaN where loops share the
+   * charge in a way that their currents tell better.
+   */
+  double chargePerAmp(double h, double v0) {
+    if (n > 1 && !resistive) {
+      return Double.NaN;
+    }
+    double sum = 0;
+    for (int a = 0; a < n; a++) {
+      sum += from[a] + x[a];
+    }
+    return (capacitance * (v - v0) + 2 * power * h / (v + v0)) / sum;
+  }
+
+  private double inductive(int a, double[] rates) {
+    double sum = 0;
+    for (int b = 0; b < n; b++) {
+      sum += henry[a * MOST + b] * rates[b];
+    }
+    return sum;
+  }
+
+  /** Steps from {@link #from} and a voltage at a position over h cells. */
+  void step(ThreeLineEmf emf, double position, double h, double v0) {
+    for (int a = 0; a < n; a++) {
+      drive[a] = loop[a].drive(emf, position);
+      change[a] = h * loop[a].driveSlope(emf, position);
+      driveAfter[a] = loop[a].drive(emf, position + h);
+    }
+    c = 2 * capacitance / h - power / (v0 * v0);
+    factor(2 / h, from, 1 / c);
+    double ch = capacitance / h;
+    forces(from, v0, drive);
+    double fv0 = fv;
+    for (int a = 0; a < n; a++) {
+      r[a] = f[a] + 0.5 * change[a];
+    }
+    solve(fv0);
+    System.arraycopy(u, 0, k, 0, n);
+    double kv = uv;
+    for (int a = 0; a < n; a++) {
+      r[a] = f[a] + 1.5 * change[a] + 4 / h * inductive(a, k);
+      x[a] = from[a] + 2 * k[a];
+    }
+    v = v0 + 2 * kv;
+    solve(fv0 + 4 * ch * kv);
+    kv -= uv;
+    for (int a = 0; a < n; a++) {
+      k[a] -= u[a];
+    }
+    kv = lastStage(h, ch, kv);
+    for (int a = 0; a < n; a++) {
+      k[a] -= (8.0 / 3) * u[a];
+    }
+    lastStage(h, ch, kv);
+  }
+
+  /** Third and fourth stage; returns the voltage's rate for the one that follows. */
+  private double lastStage(double h, double ch, double kv) {
+    forces(x, v, driveAfter);
+    for (int a = 0; a < n; a++) {
+      r[a] = f[a] + inductive(a, k) / h;
+    }
+    solve(fv + ch * kv);
+    for (int a = 0; a < n; a++) {
+      x[a] += u[a];
+    }
+    v += uv;
+    return kv - (8.0 / 3) * uv;
+  }
+
+  /** Looks at the currents' rates where the last step ended, for {@link #margin}. */
+  void rates(ThreeLineEmf emf, double position) {
+    for (int a = 0; a < n; a++) {
+      drive[a] = loop[a].drive(emf, position);
+    }
+    factor(1 / MOMENT, x, 0);
+    forces(x, v, drive);
+    System.arraycopy(f, 0, r, 0, n);
+    c = Double.POSITIVE_INFINITY;
+    solve(0);
+  }
+
+  /**
+   * How willingly an idle line would join, after {@link #rates}: by how much the voltage around its
+   * loop exceeds the drops, the other loops' currents changing as they do.
+   *
+   * @param idle a loop through the idle line
+   * @param carried what its other line carries already, amps
+   */
+  double margin(Loop idle, ThreeLineEmf emf, double position, double carried) {
+    double held = Math.max(carried, threshold);
+    double sum =
+        idle.drive(emf, position)
+            - v
+            - drops(0, held)
+            - (carried > 0 ? slopeV * 2 * threshold / held : 0);
+    double common = carried > 0 ? conductance(held) : 0;
+    for (int a = 0; a < n; a++) {
+      double r = mutualOhm(idle, loop[a]);
+      double drop = r + mutualHenry(idle, loop[a]) / MOMENT;
+      if (loop[a].bridge() == idle.bridge()) {
+        drop += common;
+      }
+      sum -= r * x[a] + drop * u[a];
+    }
+    return sum;
+  }
+}

@@ -1,0 +1,263 @@
+package fourthwire.load.rectifier;
+
+import fourthwire.load.model.LoadSolver;
+import fourthwire.load.model.NoSteadyStateException;
+import fourthwire.load.model.PortSpectra;
+import fourthwire.quantity.Phasor;
+import fourthwire.quantity.Spectrum;
+import java.util.Locale;
+
+/**
+ * Periodic steady state of the six- and twelve-pulse rectifiers, by Newton's method on the state at
+ * a section of the cycle: capacitor voltage and, where lines conduct there, their currents ({@link
+ * StateNewton}).
+ *
+ * <p>The map goes over a sixth of a cycle with the lines exchanged where the electromotive forces
+ * are balanced, over a half where they hold odd orders only, else over a whole cycle. A section at
+ * which a line is just about to change can keep Newton's method from closing; then another section
+ * is taken, and at last the power is brought up in stages.
+ */
+final class MultiPulseSolver implements LoadSolver {
+  /**
+   * With a direct-current choke, or a source common to two bridges, and no inductance of a bridge's
+   * own, commutation would take no time; a lead's least share keeps it finite (0.001 % of V²/P).
+   */
+  private static final double LEAST_REACTANCE = 1e-5 / (2 * Math.PI);
+
+  /** Cells by which the section moves on in each attempt. */
+  private static final int[] SECTIONS = {0, 21, 43};
+
+  private static final double[] STAGES = {0.1, 0.2, 0.35, 0.5, 0.65, 0.8, 0.9, 1};
+  private static final int REPETITIONS = 60;
+  private static final int SIXTHS = 6;
+  private static final ThreadLocal<ThreeLineBridge> WORK =
+      ThreadLocal.withInitial(ThreeLineBridge::new);
+  private static final double ROOT3 = Math.sqrt(3);
+
+  private final BridgeLoad load;
+  private final double frequencyHz;
+  private final int bridges;
+  private final StateNewton newton;
+
+  /** The thread's workspace, taken for each solve. */
+  private ThreeLineBridge bridge = WORK.get();
+
+  private double peak;
+  private double firstSection;
+
+  /** Where the map starts and how long it is, in cells. */
+  private double section;
+
+  private int cells;
+
+  /** How many times the map goes into a cycle. */
+  private int periods;
+
+  private boolean warm;
+
+  MultiPulseSolver(int bridges, BridgeLoad load, double frequencyHz) {
+    this.bridges = bridges;
+    this.load = load;
+    this.frequencyHz = frequencyHz;
+    newton = new StateNewton(3 * bridges, this::map);
+  }
+
+  @Override
+  public void solve(PortSpectra emf, double seriesOhm, double seriesHenry, PortSpectra current) {
+    bridge = WORK.get();
+    bridge.emf.fill(emf, bridges);
+    peak = bridge.emf.peak(bridges);
+    if (!(peak > 0) || Double.isInfinite(peak)) {
+      throw new NoSteadyStateException("a rectifier on three lines has no voltage to draw from");
+    }
+    choosePeriod();
+    firstSection = firstSection(emf.positiveSequence());
+    equip(load, seriesOhm, seriesHenry);
+    warm = warm && newton.converge() || search() || inStages(seriesOhm, seriesHenry);
+    if (!warm) {
+      throw new NoSteadyStateException(refusal());
+    }
+    write(current);
+  }
+
+  private void choosePeriod() {
+    int parts = !bridge.emf.halfWave() ? 1 : bridge.emf.balanced ? SIXTHS : 2;
+    if (parts != periods) {
+      newton.forget();
+    }
+    periods = parts;
+    cells = CycleTable.CELLS / parts;
+  }
+
+  private String refusal() {
+    return String.format(
+        Locale.ROOT,
+        "a rectifier on three lines of %.4g W finds no steady state at %.4g V peak line to line behind"
+            + " its source impedance: the source cannot give what the load asks for, or the"
+            + " current does not repeat from cycle to cycle",
+        load.powerW(),
+        peak);
+  }
+
+  /** Just before the voltage of the first line passes the third's. */
+  private static double firstSection(Phasor positive) {
+    double turns = 1.0 / 12 - Math.atan2(positive.im(), positive.re()) / (2 * Math.PI) - 1e-9;
+    return Math.floor((turns - Math.floor(turns)) * CycleTable.CELLS);
+  }
+
+  private void equip(BridgeLoad equipment, double seriesOhm, double seriesHenry) {
+    double amps = load.powerW() / peak;
+    double sourceHenry = load.leadHenry() + seriesHenry;
+    boolean momentary = load.dcHenry() > 0 || bridges > 1 && sourceHenry > 0;
+    double leastHenry = momentary ? LEAST_REACTANCE * peak / amps / frequencyHz : 0;
+    double ownHenry = Math.max(load.lineHenry(), leastHenry - (bridges == 1 ? sourceHenry : 0));
+    double cellSeconds = 1 / (frequencyHz * CycleTable.CELLS);
+    double threshold = 1e-3 * equipment.powerW() / peak;
+    bridge.floorV = 0.05 * peak;
+    bridge.set(
+        bridges,
+        load.leadOhm() + seriesOhm,
+        sourceHenry,
+        ownHenry,
+        equipment,
+        cellSeconds,
+        threshold);
+    newton.scale(peak, amps, threshold);
+  }
+
+  private boolean search() {
+    for (int shift : SECTIONS) {
+      moveSection(shift);
+      newton.start(0.95);
+      if (newton.converge()) {
+        return true;
+      }
+    }
+    moveSection(0);
+    newton.start(1);
+    return newton.repeat(REPETITIONS) && newton.converge();
+  }
+
+  private boolean inStages(double seriesOhm, double seriesHenry) {
+    for (int shift : SECTIONS) {
+      moveSection(shift);
+      newton.start(0.95);
+      boolean found = true;
+      for (int s = 0; s < STAGES.length && found; s++) {
+        equip(load.atPower(STAGES[s] * load.powerW()), seriesOhm, seriesHenry);
+        found = newton.converge();
+      }
+      if (found) {
+        return true;
+      }
+    }
+    return false;
+  }
+
+  private void moveSection(int shift) {
+    section = (firstSection + shift) % CycleTable.CELLS;
+  }
+
+  private void put(double[] s) {
+    System.arraycopy(s, 0, bridge.line, 0, bridge.lines());
+    bridge.v = s[bridge.lines()];
+  }
+
+  /** The state a period later, seen from the section's lines. */
+  private boolean map(double[] from, double[] to) {
+    put(from);
+    if (!bridge.march(section, cells, false)) {
+      return false;
+    }
+    double[] i = bridge.line;
+    for (int k = 0; k < bridge.lines(); k++) {
+      to[k] = periods == 1 ? i[k] : periods == 2 ? -i[k] : -i[k - k % 3 + (k + 2) % 3];
+    }
+    to[bridge.lines()] = bridge.v;
+    return true;
+  }
+
+  private void write(PortSpectra current) {
+    put(newton.state);
+    bridge.march(section, cells, true);
+    takeHarmonics(0, current);
+    if (bridges == 2) {
+      takeHarmonics(3, bridge.second);
+      addShifted(bridge.second.re, current.re);
+      addShifted(bridge.second.im, current.im);
+    }
+  }
+
+  /** Of the three lines of a bridge. */
+  private void takeHarmonics(int first, PortSpectra to) {
+    for (int k = 0; k < 2; k++) {
+      bridge.trace[first + k].harmonics(periods > 1, to.re[k], to.im[k]);
+    }
+    for (int h = 1; h <= Spectrum.HIGHEST_ORDER; h++) {
+      to.re[2][h] = -to.re[0][h] - to.re[1][h];
+      to.im[2][h] = -to.im[0][h] - to.im[1][h];
+      if (periods == SIXTHS) {
+        addSixths(to, h);
+      }
+    }
+  }
+
+  /**
+   * A half cycle from its first sixth: in the next each line carries the negative of what the line
+   * after it did.
+   */
+  private static void addSixths(PortSpectra to, int h) {
+    boolean positive = h % 6 == 1;
+    if (!positive && h % 6 != 5) {
+      clear(to, h);
+      return;
+    }
+    // Σ over m of (-1)^m·F(k + m)·e^(-jhmπ/3): for h = 6n ± 1 the sequence component, three times.
+    double half = positive ? ROOT3 / 2 : -ROOT3 / 2;
+    double re = 0;
+    double im = 0;
+    for (int m = 0; m < 3; m++) {
+      double cos = m == 0 ? 1 : -0.5;
+      double sin = m == 0 ? 0 : m == 1 ? half : -half;
+      re += to.re[m][h] * cos - to.im[m][h] * sin;
+      im += to.re[m][h] * sin + to.im[m][h] * cos;
+    }
+    for (int k = 0; k < 3; k++) {
+      double cos = k == 0 ? 1 : -0.5;
+      double sin = k == 0 ? 0 : k == 1 ? -half : half;
+      to.re[k][h] = re * cos - im * sin;
+      to.im[k][h] = re * sin + im * cos;
+    }
+  }
+
+  private static void clear(PortSpectra to, int h) {
+    for (int k = 0; k < 3; k++) {
+      to.re[k][h] = 0;
+      to.im[k][h] = 0;
+    }
+  }
+
+  /** What currents in the shifted windings take from the lines: each winding lies across two. */
+  private static void addShifted(double[][] winding, double[][] line) {
+    for (int k = 0; k < 3; k++) {
+      for (int h = 1; h <= Spectrum.HIGHEST_ORDER; h++) {
+        line[k][h] += (winding[k][h] - winding[(k + 2) % 3][h]) / ROOT3;
+      }
+    }
+  }
+
+  /** The recorded current of a line of the last solution. */
+  PulseTrace trace(int line) {
+    return bridge.trace[line];
+  }
+
+  /** How many times what was recorded, with the lines exchanged, makes up the cycle. */
+  int periods() {
+    return periods;
+  }
+
+  /** Number of lines of all bridges. */
+  int lines() {
+    return 3 * bridges;
+  }
+}
