@@ -22,19 +22,7 @@ class RectifierLawsTest {
   @ValueSource(longs = {1, 2})
   void everySensibleDriveFindsItsSteadyState(long seed) {
     for (int n = 0; n < SETS; n++) {
-<<<<<<< Updated upstream
-      RandomRectifier given = RandomRectifier.drive(1000 * seed + n);
-      SixPulseSolver solver = new SixPulseSolver(given.load(), given.hertz());
-      PortSpectra current = new PortSpectra(3);
-      try {
-        solver.solve(given.emf(), given.ohm(), given.henry(), current);
-      } catch (NoSteadyStateException none) {
-        fail("%s: %s", given, none.getMessage());
-      }
-      check(given, given.halfWave(), current, solver::trace);
-=======
       checkDrive(1, RandomRectifier.drive(1000 * seed + n));
->>>>>>> Stashed changes
     }
   }
 
@@ -73,11 +61,7 @@ class RectifierLawsTest {
         unsettled++;
         continue;
       }
-<<<<<<< Updated upstream
-      check(given, solver.halfWave(), current, port -> solver.trace());
-=======
-      check(given, current, port -> solver.trace(), 1, 2);
->>>>>>> Stashed changes
+      check(given, current, port -> solver.trace(), 1, solver.halfWave() ? 2 : 1);
     }
     assertThat(unsettled).as("supplies whose current does not settle").isLessThan(SETS / 50);
   }
@@ -86,15 +70,6 @@ class RectifierLawsTest {
     PulseTrace of(int port);
   }
 
-<<<<<<< Updated upstream
-  private static void check(
-      RandomRectifier given, boolean halfWave, PortSpectra current, Traces traces) {
-    double fourier = 0;
-    double instantaneous = 0;
-    double lost = 0;
-    int ports = given.emf().ports();
-    for (int port = 0; port < ports; port++) {
-=======
   /**
    * One solution's laws.
    *
@@ -108,7 +83,6 @@ class RectifierLawsTest {
     double lost = 0;
     double weight = Math.max(periods, 2) / 2.0;
     for (int port = 0; port < given.emf().ports(); port++) {
->>>>>>> Stashed changes
       assertThat(current.spectrum(port).rms()).as(given.toString()).isFinite().isPositive();
       for (int h = 1; h <= Spectrum.HIGHEST_ORDER; h++) {
         fourier +=
