@@ -88,7 +88,7 @@ class RectifierSurveyTest {
     return b.load(
             "P",
             "c",
-            three ? LoadKind.SIX_PULSE : LoadKind.CAPACITOR_INPUT,
+            kind(c),
             c.number("P_dc_W"),
             c.number("n_units"),
             Optional.empty(),
@@ -96,11 +96,20 @@ class RectifierSurveyTest {
         .build();
   }
 
+  private static LoadKind kind(RectifierReference c) {
+    return switch (c.row().getField("kind")) {
+      case "3ph_sixpulse" -> LoadKind.SIX_PULSE;
+      case "3ph_twelvepulse" -> LoadKind.TWELVE_PULSE;
+      default -> LoadKind.CAPACITOR_INPUT;
+    };
+  }
+
   /** All of the rated input reaches the direct-current side: the case gives that side's watts. */
   private static ModelColumns columns(RectifierReference c, double volts, double hertz) {
     double watts = c.number("P_dc_W");
     double percentPerHenry = 100 * 2 * Math.PI * hertz * watts / (volts * volts);
     boolean three = c.threePhase();
+    int bridges = kind(c) == LoadKind.TWELVE_PULSE ? 2 : 1;
     OptionalDouble none = OptionalDouble.empty();
     return new ModelColumns(
         some(1),
@@ -110,7 +119,7 @@ class RectifierSurveyTest {
         some(3e-11),
         some(1.2),
         some(1e-3),
-        three ? some(c.number("Lb_uH") * 1e-6 * percentPerHenry) : none,
+        three ? some(c.number("Lb_uH") * 1e-6 * percentPerHenry / bridges) : none,
         three ? some(c.number("L_dc_uH") * 1e-6 * percentPerHenry) : none,
         none,
         none,
