@@ -8,6 +8,12 @@ import fourthwire.site.LoadKind;
 /**
  * Loads whose spectrum is given, not computed: {@code measured} from the survey, {@code
  * magnetic-ballast} and {@code active-front-end} from published rows.
+ *
+ * <p>The row is scaled to the rating at nominal voltage and turned by the displacement factor, then
+ * injected as {@link MeasuredSpectrum} says; {@code residual_percent} scales its distortion as a
+ * whole. Harmonic angles are those of a pulse at the crest, since none are published. Valid at
+ * rated load; single orders of real equipment lie within half to twice the row (common practice, no
+ * source).
  */
 final class GivenSpectra {
   /** Percent of the fundamental at orders 3, 5, 7, 9 (common practice, no source). */

@@ -26,8 +26,10 @@ final class PfcSolver implements LoadSolver {
   private static final int HIGHEST_SENSED = 13;
 
   private static final double TOLERANCE = 1e-9;
-  private static final int MOST_TURNS = 1000;
   private static final int TURNS_ON_CROSSING = 100;
+
+  /** What a hundred turns must leave of a move at most; slower than that it does not settle. */
+  private static final double LEAST_PROGRESS = 0.2;
 
   private final double powerW;
   private final double frequencyHz;
@@ -67,35 +69,51 @@ final class PfcSolver implements LoadSolver {
     step = oddOnly(eRe, eIm) ? 2 : 1;
     System.arraycopy(eRe, 0, vRe, 0, ORDERS + 1);
     System.arraycopy(eIm, 0, vIm, 0, ORDERS + 1);
-    double reactance = 2 * Math.PI * frequencyHz * seriesHenry;
-    double g = 0;
-    double moved = Double.POSITIVE_INFINITY;
-    for (int turn = 0; turn < MOST_TURNS && moved > TOLERANCE * strength; turn++) {
-      lockedToFundamental = turn >= TURNS_ON_CROSSING;
-      g = conductance();
-      if (!(g > 0) || !(Math.hypot(vRe[1], vIm[1]) > 0.2 * strength)) {
-        break;
-      }
-      moved = renew(eRe, eIm, g, seriesOhm, reactance);
-    }
-    if (!(moved <= TOLERANCE * strength)) {
-      throw new NoSteadyStateException(
-          String.format(
-              Locale.ROOT,
-              "a power-factor-corrected supply of %.4g W has no steady state at %.4g V behind %.4g"
-                  + " ohm and %.4g mH: the source cannot give what the load asks for",
-              powerW,
-              strength,
-              seriesOhm,
-              seriesHenry * 1e3));
-    }
-    g = conductance();
+    settle(eRe, eIm, strength, seriesOhm, 2 * Math.PI * frequencyHz * seriesHenry);
+    double g = conductance();
     for (int h = 1; h <= ORDERS; h++) {
       current.re[0][h] = g * (vRe[h] - insideRe[h]);
       current.im[0][h] = g * (vIm[h] - insideIm[h]);
     }
     current.re[0][3] += g * residualRe;
     current.im[0][3] += g * residualIm;
+  }
+
+  /** Repeats until the voltage stands; every hundred turns must have brought it much nearer. */
+  private void settle(double[] eRe, double[] eIm, double volts, double ohm, double reactance) {
+    double moved = Double.POSITIVE_INFINITY;
+    double before = Double.POSITIVE_INFINITY;
+    for (int turn = 0; !(moved <= TOLERANCE * volts); turn++) {
+      lockedToFundamental = turn >= TURNS_ON_CROSSING;
+      double g = conductance();
+      if (!(g > 0) || !(Math.hypot(vRe[1], vIm[1]) > 0.2 * volts)) {
+        throw none("the source cannot give what the load asks for", volts, ohm, reactance);
+      }
+      moved = renew(eRe, eIm, g, ohm, reactance);
+      if (turn > TURNS_ON_CROSSING && turn % TURNS_ON_CROSSING == 0) {
+        if (!(moved < LEAST_PROGRESS * before)) {
+          throw none(
+              "the source is so soft that the instant from which it draws does not settle",
+              volts,
+              ohm,
+              reactance);
+        }
+        before = moved;
+      }
+    }
+  }
+
+  private NoSteadyStateException none(String reason, double volts, double ohm, double reactance) {
+    return new NoSteadyStateException(
+        String.format(
+            Locale.ROOT,
+            "a power-factor-corrected supply of %.4g W has no steady state at %.4g V behind %.4g ohm"
+                + " and %.4g mH: %s",
+            powerW,
+            volts,
+            ohm,
+            reactance / (2 * Math.PI * frequencyHz) * 1e3,
+            reason));
   }
 
   private static boolean oddOnly(double[] re, double[] im) {

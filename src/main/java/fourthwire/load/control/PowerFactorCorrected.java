@@ -11,13 +11,21 @@ import fourthwire.load.model.LoadSolver;
  * inside, G such that the supply draws its power: a constant-power load. The dead angle grows as
  * the load falls, δ = a·(rated/actual)^b. Critical mode adds a third harmonic of {@code
  * residual_percent} of the fundamental that thins the current near the crossings, where its
- * switching frequency is limited. The input filter's capacitor is a linear part of the network.
+ * switching frequency is limited. The input filter's capacitor is a linear part of the network, so
+ * that a supply at little load leads.
  *
  * <p>Fit: a = 11°, b = 0.5 (continuous) and a = 9°, b = 0.5, residual 3 % (critical) put the
- * distortion at rated load inside 3 to 8 % and at a fifth of it inside 10 to 25 %, the ranges
- * published for such supplies (recalled from data sheets, low confidence). Valid while the control
- * follows: orders to 50. Expected error: a few percent of the fundamental, since every maker's
- * control differs.
+ * distortion at rated load at 5 %, inside the published 3 to 8 %, and at a fifth of it at 18 and 15
+ * %, inside the published 10 to 25 % (recalled from data sheets, medium and low confidence). The
+ * power factor of 0.9 published for a fifth of the load (low confidence) is the filter's doing: it
+ * comes out with 5 nF/W, as presets have; with the default of 1 nF/W (common practice, no source)
+ * it is 0.98.
+ *
+ * <p>Valid while the control follows: orders to 50, and to where the current ends at δ before a
+ * crossing against a source that is not too inductive (some 20 % of V²/P). With the default dead
+ * angle class A of IEC 61000-3-2, which is in amps, is met up to 2 kW; larger supplies have a
+ * smaller one. Expected error: a few percent of the fundamental, since every maker's control
+ * differs.
  */
 public final class PowerFactorCorrected implements LoadModel {
   /** Beyond this dead angle the current would be a needle no control makes. */
