@@ -19,7 +19,8 @@ import java.util.OptionalDouble;
  * The presets, read from the resource {@code presets.csv} (semicolons), in its order.
  *
  * <p>A figure stands there as {@code low..typical..high}, fifth and ninety-fifth percentile, or as
- * one number; a band of what to expect as {@code low..high}.
+ * one number; a band of what to expect as {@code low..high}. The source is the last column and may
+ * hold semicolons of its own.
  */
 public final class Presets {
   private static final Map<String, Preset> BY_NAME = read();
@@ -52,7 +53,7 @@ public final class Presets {
       List<String> columns = List.of(lines.get(0).split(";"));
       Map<String, Preset> presets = new LinkedHashMap<>();
       for (String line : lines.subList(1, lines.size())) {
-        Preset preset = preset(cells(columns, line.split(";", -1)));
+        Preset preset = preset(cells(columns, line.split(";", columns.size())));
         if (presets.put(preset.name(), preset) != null) {
           throw new IllegalStateException("two presets are named " + preset.name());
         }
