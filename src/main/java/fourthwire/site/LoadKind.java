@@ -49,6 +49,17 @@ public enum LoadKind {
     return family;
   }
 
+  /**
+   * What a demand below the rating means unless the survey says otherwise: true, each unit runs at
+   * lower power; false, fewer units run at full power (public contract, section 3).
+   */
+  public boolean runsAtLowerPower() {
+    return switch (this) {
+      case RESISTIVE, LINEAR, PHASE_DIMMER, MAGNETIC_BALLAST, MEASURED -> false;
+      default -> true;
+    };
+  }
+
   /** The kind of this word, if there is one. */
   public static Optional<LoadKind> find(String word) {
     return Arrays.stream(values()).filter(k -> k.word.equals(word)).findFirst();

@@ -116,11 +116,7 @@ public final class LoadPlacements {
   private static boolean lowerPower(Load load, LoadKind kind) {
     return load.partLoad()
         .map(p -> p == Load.PartLoad.LOWER_POWER)
-        .orElse(
-            switch (kind) {
-              case RESISTIVE, LINEAR, PHASE_DIMMER, MAGNETIC_BALLAST, MEASURED -> false;
-              default -> true;
-            });
+        .orElse(kind.runsAtLowerPower());
   }
 
   /**

@@ -1,0 +1,80 @@
+package fourthwire.load.trial;
+
+import fourthwire.load.LoadRequest;
+import fourthwire.load.model.NoSteadyStateException;
+import fourthwire.site.ModelColumns;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.function.DoubleFunction;
+
+/** The same equipment in a row of states, each solved for itself. */
+public final class Sweep {
+  private Sweep() {}
+
+  /**
+   * One state.
+   *
+   * @param at load level, number of units or firing angle, as its row says
+   * @param result empty where there is no steady state
+   */
+  public record Point(double at, Optional<TrialResult> result) {}
+
+  /** Over the share of rated power, each in (0, 1]. */
+  public static List<Point> overLevel(
+      LoadRequest request, TrialSource source, List<Double> levels) {
+    return over(levels, level -> at(request, request.units(), level, request.columns()), source);
+  }
+
+  /** Over the number of equal units behind the one source. */
+  public static List<Point> overUnits(
+      LoadRequest request, TrialSource source, List<Double> units) {
+    return over(units, n -> at(request, n, request.demand(), request.columns()), source);
+  }
+
+  /** Over a dimmer's firing angle, degrees. */
+  public static List<Point> overFiring(
+      LoadRequest request, TrialSource source, List<Double> degrees) {
+    return over(
+        degrees,
+        d -> at(request, request.units(), request.demand(), fired(request.columns(), d)),
+        source);
+  }
+
+  private static List<Point> over(
+      List<Double> values, DoubleFunction<LoadRequest> request, TrialSource source) {
+    return values.stream().map(v -> new Point(v, tried(request.apply(v), source))).toList();
+  }
+
+  private static Optional<TrialResult> tried(LoadRequest request, TrialSource source) {
+    try {
+      return Optional.of(LoadTrial.solve(request, source));
+    } catch (NoSteadyStateException none) {
+      return Optional.empty();
+    }
+  }
+
+  private static LoadRequest at(
+      LoadRequest r, double units, double demand, ModelColumns columns) {
+    return new LoadRequest(
+        r.kind(),
+        r.ports(),
+        r.frequencyHz(),
+        r.nominalPortV(),
+        r.rating(),
+        units,
+        demand,
+        r.lowerPower(),
+        r.displacementFactor(),
+        columns,
+        r.spectrum());
+  }
+
+  private static ModelColumns fired(ModelColumns columns, double degrees) {
+    OptionalDouble none = OptionalDouble.empty();
+    OptionalDouble firing = OptionalDouble.of(degrees);
+    return new ModelColumns(
+            none, none, none, none, none, none, none, none, none, firing, none, none, none, none)
+        .orElse(columns);
+  }
+}

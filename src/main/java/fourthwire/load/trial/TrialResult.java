@@ -1,0 +1,63 @@
+package fourthwire.load.trial;
+
+import fourthwire.quantity.Figure;
+import fourthwire.quantity.LinePower;
+import fourthwire.quantity.Phasor;
+import fourthwire.quantity.PowerFigures;
+import fourthwire.quantity.Spectrum;
+import fourthwire.quantity.SymmetricalComponents;
+import fourthwire.quantity.ThreePhasePower;
+import java.util.List;
+
+/**
+ * What all units together draw, and the voltage that this leaves at their terminals.
+ *
+ * <p>Angles are those of the public contract's spectrum tables: time starts at the upward zero
+ * crossing of the terminal voltage's own fundamental (on three lines of its positive sequence).
+ *
+ * @param current of each line, rms amps
+ * @param voltage of each port, rms volts; on three lines of each line to the common point
+ */
+public record TrialResult(List<Spectrum> current, List<Spectrum> voltage) {
+  /** Copies the lists. */
+  public TrialResult {
+    current = List.copyOf(current);
+    voltage = List.copyOf(voltage);
+  }
+
+  /** Takes spectra of any time origin. */
+  static TrialResult of(List<Spectrum> current, List<Spectrum> voltage) {
+    Phasor reference =
+        voltage.size() == 3
+            ? SymmetricalComponents.of(voltage).positive().at(1)
+            : voltage.get(0).at(1);
+    double degrees = reference.degrees();
+    return new TrialResult(turned(current, degrees), turned(voltage, degrees));
+  }
+
+  private static List<Spectrum> turned(List<Spectrum> spectra, double degrees) {
+    return spectra.stream().map(s -> Spectrum.of(h -> s.at(h).turned(-h * degrees))).toList();
+  }
+
+  /** The current of the first line. */
+  public Spectrum first() {
+    return current.get(0);
+  }
+
+  /** Whether it stands on three lines. */
+  public boolean threeLines() {
+    return current.size() == 3;
+  }
+
+  /** Powers after IEEE 1459: of the port, or effective ones of three lines without a neutral. */
+  public PowerFigures power() {
+    return threeLines()
+        ? ThreePhasePower.threeWire(SymmetricalComponents.differences(voltage), current).figures()
+        : LinePower.of(voltage.get(0), first()).figures();
+  }
+
+  /** True power factor; unknown where nothing flows. */
+  public Figure powerFactor() {
+    return power().powerFactor();
+  }
+}

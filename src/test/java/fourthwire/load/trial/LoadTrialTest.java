@@ -1,0 +1,156 @@
+package fourthwire.load.trial;
+
+import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.assertThatThrownBy;
+import static org.assertj.core.api.Assertions.within;
+
+import fourthwire.load.LoadRequest;
+import fourthwire.load.model.NoSteadyStateException;
+import fourthwire.quantity.Distortion;
+import fourthwire.quantity.Phasor;
+import fourthwire.quantity.Spectrum;
+import fourthwire.site.LoadKind;
+import fourthwire.site.ModelColumns;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.EnumSource;
+
+/** Laws of equipment behind a source: Ohm's, Kirchhoff's, and that N units are one N times as large. */
+class LoadTrialTest {
+  private static final Spectrum FLAT =
+      Spectrum.of(
+          h -> h == 3 ? new Phasor(0.02, 0) : h == 5 ? Phasor.polar(0.03, 170) : Phasor.ZERO);
+
+  /** 230 V on 52.9 ohm behind 2 + 1.5j ohm, by hand: 230 / (54.9 + 1.5j) A. */
+  @Test
+  void aResistanceBehindAnImpedanceDividesTheVoltage() {
+    TrialResult result =
+        LoadTrial.solve(request(LoadKind.RESISTIVE, 1000, 1), source(230, 2, 1.5, Spectrum.ZERO));
+    double amps = 230 / Math.hypot(54.9, 1.5);
+    assertThat(result.first().magnitude(1)).isCloseTo(amps, within(1e-9));
+    assertThat(result.voltage().get(0).magnitude(1)).isCloseTo(52.9 * amps, within(1e-9));
+    assertThat(result.voltage().get(0).at(1).degrees()).isCloseTo(0, within(1e-9));
+    assertThat(result.powerFactor().value().orElseThrow()).isCloseTo(1, within(1e-12));
+  }
+
+  /** Public contract: N equal units are one unit N times as large, so I(N, Z) = N·I(1, N·Z). */
+  @ParameterizedTest
+  @EnumSource(
+      value = LoadKind.class,
+      names = {"MEASURED", "TWELVE_PULSE"},
+      mode = EnumSource.Mode.EXCLUDE)
+  void unitsAndImpedanceScaleTogether(LoadKind kind) {
+    TrialResult many =
+        LoadTrial.solve(request(kind, 100, 16), source(volts(kind), 0.05, 0.08, FLAT));
+    TrialResult one = LoadTrial.solve(request(kind, 100, 1), source(volts(kind), 0.8, 1.28, FLAT));
+    for (int h = 1; h <= Spectrum.HIGHEST_ORDER; h++) {
+      assertThat(many.first().at(h).minus(one.first().at(h).times(16)).magnitude())
+          .as("order %d", h)
+          .isLessThan(1e-5 * many.first().magnitude(1));
+    }
+  }
+
+  /** Active power leaves the source, or stays in its resistance: P_emf - R·I² is the equipment's. */
+  @ParameterizedTest
+  @EnumSource(
+      value = LoadKind.class,
+      names = {"MEASURED", "TWELVE_PULSE"},
+      mode = EnumSource.Mode.EXCLUDE)
+  void whatTheSourceGivesArrivesOrIsLostOnTheWay(LoadKind kind) {
+    TrialSource source = source(volts(kind), 0.4, 0.25, FLAT);
+    TrialResult result = LoadTrial.solve(request(kind, 200, 3), source);
+    for (int line = 0; line < result.current().size(); line++) {
+      Spectrum i = result.current().get(line);
+      Spectrum v = result.voltage().get(line);
+      Spectrum emf =
+          Spectrum.of(h -> v.at(h).plus(i.at(h).times(source.impedance(h, 50))));
+      double fundamental = kind.family() == LoadKind.Family.THREE_PHASE ? 400 / Math.sqrt(3) : 230;
+      assertThat(emf.magnitude(1)).isCloseTo(fundamental, within(1e-5 * fundamental));
+      assertThat(emf.magnitude(5)).isCloseTo(0.03 * fundamental, within(1e-5 * fundamental));
+      assertThat(emf.magnitude(11)).isLessThan(1e-5 * fundamental);
+    }
+    assertThat(result.power().activeW().value().orElseThrow()).isPositive();
+  }
+
+  /** The filter's capacitor, the source's inductance and a control that follows the voltage. */
+  @Test
+  void aFilterThatResonatesWithTheSourceIsSolvedToo() {
+    TrialResult result =
+        LoadTrial.solve(
+            request(LoadKind.PFC_CRITICAL, 60, 60), source(230, 0.1, 0.35, FLAT));
+    assertThat(result.power().activeW().value().orElseThrow()).isCloseTo(3600, within(1.0));
+  }
+
+  @Test
+  void tooSoftASourceIsSaidSo() {
+    assertThatThrownBy(
+            () ->
+                LoadTrial.solve(
+                    request(LoadKind.CAPACITOR_INPUT, 3000, 10),
+                    source(230, 3, 3, Spectrum.ZERO)))
+        .isInstanceOf(NoSteadyStateException.class)
+        .hasMessageContaining("source");
+  }
+
+  /** Attenuation (A. Mansoor et al., IEEE Trans. Power Delivery 10, 1995): THD falls with units. */
+  @Test
+  void sweepsFollowTheEquipment() {
+    LoadRequest computers = request(LoadKind.CAPACITOR_INPUT, 100, 1);
+    TrialSource source = source(230, 0.4, 0.25, Spectrum.ZERO);
+    List<Double> thd =
+        Sweep.overUnits(computers, source, List.of(1.0, 2.0, 5.0, 10.0, 20.0)).stream()
+            .map(p -> thd(p.result().orElseThrow()))
+            .toList();
+    assertThat(thd).isSortedAccordingTo((a, b) -> Double.compare(b, a));
+    assertThat(
+            Sweep.overUnits(computers, source, List.of(1.0, 500.0)).stream()
+                .map(p -> p.result().isPresent()))
+        .containsExactly(true, false);
+    assertThat(
+            Sweep.overLevel(
+                    request(LoadKind.PFC_CONTINUOUS, 300, 1),
+                    TrialSource.ideal(230),
+                    List.of(0.1, 0.2, 0.5, 1.0))
+                .stream()
+                .map(p -> thd(p.result().orElseThrow()))
+                .toList())
+        .isSortedAccordingTo((a, b) -> Double.compare(b, a));
+    List<Sweep.Point> firing =
+        Sweep.overFiring(
+            request(LoadKind.PHASE_DIMMER, 300, 1), TrialSource.ideal(230), List.of(0.0, 90.0));
+    // closed form at 90 degrees, orders 2 to 50: √(rms² - I1²) on I1 is 65.1 % over all orders
+    assertThat(thd(firing.get(0).result().orElseThrow())).isLessThan(0.01);
+    assertThat(thd(firing.get(1).result().orElseThrow())).isBetween(63.0, 65.1);
+  }
+
+  private static double thd(TrialResult result) {
+    return Distortion.thdPercent(result.first()).value().orElseThrow();
+  }
+
+  private static double volts(LoadKind kind) {
+    return kind.family() == LoadKind.Family.THREE_PHASE ? 400 : 230;
+  }
+
+  private static TrialSource source(double v, double ohm, double reactance, Spectrum background) {
+    return new TrialSource(v, ohm, reactance / (2 * Math.PI * 50), background);
+  }
+
+  private static LoadRequest request(LoadKind kind, double watts, double units) {
+    boolean three = kind.family() == LoadKind.Family.THREE_PHASE;
+    return new LoadRequest(
+        kind,
+        three ? 3 : 1,
+        50,
+        volts(kind),
+        new LoadRequest.Rating.Watts(watts),
+        units,
+        1,
+        kind.runsAtLowerPower(),
+        OptionalDouble.empty(),
+        ModelColumns.NONE,
+        Optional.empty());
+  }
+}
