@@ -53,6 +53,9 @@ class BrowserTest extends PagesTest {
     "audits, /sites/{site}/audits",
     "delete, /sites/{site}/delete",
     "help, /help",
+    "loads, /loads?load=desktop%20computer%2C%20no%20PFC&units=20&r_ohm=0.4&x_ohm=0.25&background=flat",
+    "loads-three, /loads?load=six-pulse&watts=20000&fault_mva=2",
+    "loads-wrong, /loads?load=capacitor-input&watts=many&units=0&capacitance_uf_per_w=0",
     "readings, /sites/{site}/readings",
     "missing, /sites/999",
     "panel, /audits/{audit}/node?name=LP-2%20East%20offices",
@@ -73,6 +76,7 @@ class BrowserTest extends PagesTest {
     "sites, /, '#page|input[type=file]|Upload the survey'",
     "site, /sites/{site}, '#page|name=LP-2|select#supply|Run it'",
     "panel, /audits/{audit}/node?name=LP-2%20East%20offices, '#page|summary|name=LP-2'",
+    "loads, /loads, '#page|id=\"load\"|id=\"watts\"|Compute|spectra.csv'",
     "readings, /sites/{site}/readings, '#page|input[type=file]|Read it'",
     "delete, /sites/{site}/delete, '#page|Delete it|Keep it'",
   })

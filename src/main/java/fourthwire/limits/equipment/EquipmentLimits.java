@@ -31,7 +31,7 @@ public final class EquipmentLimits {
       return LargeEquipment.judge(equipment, current);
     }
     return EquipmentJudgement.none(
-        "no equipment standard",
+        "No equipment standard",
         LargeEquipment.SCOPE,
         "over 75 A a line neither IEC 61000-3-2 nor IEC 61000-3-12 holds; the supplier sets what the"
             + " installation may draw");

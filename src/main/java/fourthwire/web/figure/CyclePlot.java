@@ -6,6 +6,7 @@ import fourthwire.quantity.Waveform;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
+import java.util.Optional;
 
 /** One cycle of each conductor's instantaneous value, summed from its orders 1 to 50. */
 public final class CyclePlot {
@@ -13,6 +14,7 @@ public final class CyclePlot {
   private static final int SAMPLES = 240;
   private static final int STEPS = 3;
   private static final int UNITS_WIDE = 1000;
+  private static final double BACKDROP_SHARE = 0.92;
   private static final List<Conductor> NEUTRAL_FIRST =
       List.of(Conductor.N, Conductor.L1, Conductor.L2, Conductor.L3);
 
@@ -24,6 +26,19 @@ public final class CyclePlot {
    * @param unit of the spectra, {@code A} or {@code V}
    */
   public static String draw(Map<Conductor, Spectrum> spectra, String unit, String alternative) {
+    return draw(spectra, unit, Optional.empty(), alternative);
+  }
+
+  /**
+   * The picture over another curve, faint and on a scale of its own: the voltage behind currents.
+   *
+   * @param unit of the spectra
+   */
+  public static String draw(
+      Map<Conductor, Spectrum> spectra,
+      String unit,
+      Optional<Spectrum> backdrop,
+      String alternative) {
     double peak =
         spectra.values().stream().mapToDouble(s -> Waveform.of(s, SAMPLES).peak()).max().orElse(0);
     Ticks ticks = Ticks.upTo(peak, STEPS);
@@ -43,6 +58,7 @@ public final class CyclePlot {
         "0 0 " + UNITS_WIDE + " " + Svg.rounded(HEIGHT_PX, 0),
         "preserveAspectRatio",
         "none");
+    backdrop.map(b -> Waveform.of(b, SAMPLES)).ifPresent(w -> backdrop(svg, w));
     for (Conductor conductor : NEUTRAL_FIRST) {
       Spectrum spectrum = spectra.get(conductor);
       if (spectrum != null) {
@@ -55,6 +71,11 @@ public final class CyclePlot {
       }
     }
     return svg.close().done();
+  }
+
+  private static void backdrop(Svg svg, Waveform wave) {
+    double end = wave.peak() > 0 ? wave.peak() / BACKDROP_SHARE : 1;
+    svg.add("path", "class", "backdrop", "d", path(wave, end));
   }
 
   private static void rules(Svg svg, Ticks ticks, String unit) {

@@ -9,12 +9,26 @@ public final class Shapes {
 
   /** A short piece of a conductor's line, as it is drawn in the pictures. */
   public static String sample(Conductor conductor) {
+    return sample("trace " + conductor.name().toLowerCase(Locale.ROOT));
+  }
+
+  /** A short piece of a curve of a chart. */
+  public static String sample(CurvePlot.Style style) {
+    return sample("curve " + style.word());
+  }
+
+  /** A short piece of the faint curve behind others. */
+  public static String backdrop() {
+    return sample("backdrop");
+  }
+
+  private static String sample(String classes) {
     return new Svg()
         .open("svg", "class", "sample", "aria-hidden", "true")
         .add(
             "line",
             "class",
-            "trace " + conductor.name().toLowerCase(Locale.ROOT),
+            classes,
             "x1",
             0,
             "x2",

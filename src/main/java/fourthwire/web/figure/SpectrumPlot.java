@@ -38,13 +38,24 @@ public final class SpectrumPlot {
       IntFunction<String> ordinal,
       String unit,
       String alternative) {
-    double highest =
-        groups.stream()
-            .flatMap(g -> g.values().stream())
-            .mapToDouble(Double::doubleValue)
-            .max()
-            .orElse(0);
-    Ticks ticks = Ticks.upTo(highest, STEPS);
+    return draw(series, groups, 0, ordinal, unit, alternative);
+  }
+
+  /**
+   * The picture with room for limits.
+   *
+   * @param room times its tallest bar that the picture grows to hold a limit; a limit above that is
+   *     not drawn
+   */
+  public static String draw(
+      List<Conductor> series,
+      List<Group> groups,
+      double room,
+      IntFunction<String> ordinal,
+      String unit,
+      String alternative) {
+    double highest = highest(groups);
+    Ticks ticks = Ticks.upTo(Math.max(highest, tallestLimit(groups, room * highest)), STEPS);
     Svg svg = Svg.picture("plot spectrum", alternative);
     rules(svg, ticks, unit);
     for (int i = 0; i < groups.size(); i++) {
@@ -53,6 +64,22 @@ public final class SpectrumPlot {
       svg.ordinal(ordinal.apply(groups.get(i).order()), middle, HEIGHT_PX + 18);
     }
     return svg.done();
+  }
+
+  private static double highest(List<Group> groups) {
+    return groups.stream()
+        .flatMap(g -> g.values().stream())
+        .mapToDouble(Double::doubleValue)
+        .max()
+        .orElse(0);
+  }
+
+  private static double tallestLimit(List<Group> groups, double most) {
+    return groups.stream()
+        .flatMapToDouble(g -> g.limit().stream())
+        .filter(limit -> limit <= most)
+        .max()
+        .orElse(0);
   }
 
   private static void rules(Svg svg, Ticks ticks, String unit) {

@@ -21,6 +21,7 @@ import org.springframework.web.method.annotation.MethodArgumentTypeMismatchExcep
       "fourthwire.web.panel",
       "fourthwire.web.survey",
       "fourthwire.web.reading",
+      "fourthwire.web.load",
       "fourthwire.web.help"
     })
 class PageErrors {

@@ -39,7 +39,7 @@ class EquipmentLimitsTest {
           other,            3600,  16,   230, 'IEC 61000-3-2, class A'
           other,            3700,  16.1, 230, 'IEC 61000-3-12, Table 2'
           other,            17000, 75,   230, 'IEC 61000-3-12, Table 2'
-          other,            17500, 75.1, 230, 'no equipment standard'
+          other,            17500, 75.1, 230, 'No equipment standard'
           """)
   void standardAndClass(String use, double w, double a, double v, String standing) {
     Equipment equipment = equipment(use, w, a, v);

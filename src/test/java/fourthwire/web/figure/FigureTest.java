@@ -8,6 +8,7 @@ import fourthwire.quantity.Spectrum;
 import java.io.StringReader;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
@@ -89,6 +90,56 @@ class FigureTest {
     assertThat(((Element) bars.item(1)).getAttribute("height")).isEqualTo("208");
     assertThat(((Element) bars.item(0)).getAttribute("height")).isEqualTo("104");
     assertThat(element(svg, "line", "limit").getAttribute("y1")).isEqualTo("156");
+  }
+
+  @Test
+  void aLimitWithinReachMakesThePictureTaller() throws Exception {
+    List<SpectrumPlot.Group> groups =
+        List.of(
+            new SpectrumPlot.Group(3, List.of(10.0), OptionalDouble.of(20)),
+            new SpectrumPlot.Group(5, List.of(1.0), OptionalDouble.of(500)));
+    Document svg =
+        parsed(
+            SpectrumPlot.draw(
+                List.of(Conductor.L1), groups, 2.5, h -> h + "th", "A", "limits"));
+    assertThat(element(svg, "line", "limit").getAttribute("y1")).isEqualTo("0");
+    assertThat(((Element) svg.getElementsByTagName("rect").item(0)).getAttribute("height"))
+        .isEqualTo("104");
+  }
+
+  @Test
+  void aCurveBreaksWhereThereIsNoValue() throws Exception {
+    List<CurvePlot.Place> places =
+        List.of(
+            new CurvePlot.Place(0, "1"),
+            new CurvePlot.Place(0.5, ""),
+            new CurvePlot.Place(1, "100"));
+    Document svg =
+        parsed(
+            CurvePlot.draw(
+                places,
+                List.of(
+                    new CurvePlot.Curve(
+                        CurvePlot.Style.SOLID,
+                        List.of(
+                            OptionalDouble.of(100), OptionalDouble.empty(), OptionalDouble.of(50)))),
+                OptionalDouble.of(0.5),
+                "%",
+                "curves"));
+    assertThat(element(svg, "path", "curve solid").getAttribute("d")).isEqualTo("M0 0M1000 84");
+    assertThat(element(svg, "line", "here").getAttribute("x1")).isEqualTo("50%");
+  }
+
+  /** The curve behind others fills the height whatever its unit. */
+  @Test
+  void aVoltageBehindTheCurrentHasItsOwnScale() throws Exception {
+    Spectrum amps = Spectrum.of(h -> h == 1 ? new Phasor(0.2, 0) : Phasor.ZERO);
+    Spectrum volts = Spectrum.of(h -> h == 1 ? new Phasor(230, 0) : Phasor.ZERO);
+    Document svg =
+        parsed(
+            CyclePlot.draw(
+                Map.of(Conductor.L1, amps), "A", Optional.of(volts), "voltage and current"));
+    assertThat(element(svg, "path", "backdrop").getAttribute("d")).contains("L250 8.3L");
   }
 
   @Test

@@ -42,7 +42,21 @@ class MessagesTest {
           "audit.state.",
           "spectrum.of.",
           "reading.kind.",
-          "reading.fact.");
+          "reading.fact.",
+          "loads.kind.",
+          "loads.model.",
+          "loads.field.",
+          "loads.hint.",
+          "loads.use.",
+          "loads.hz.",
+          "loads.lines.",
+          "loads.background.",
+          "loads.chart.",
+          "loads.total.",
+          "loads.active.",
+          "loads.reactive.",
+          "loads.apparent.",
+          "loads.nonfundamental.");
 
   @Test
   void everyKeyOfATemplateHasItsText() throws IOException {

@@ -1,0 +1,203 @@
+package fourthwire.web.load;
+
+import fourthwire.load.trial.Sweep;
+import fourthwire.load.trial.TrialResult;
+import fourthwire.quantity.Distortion;
+import fourthwire.quantity.Figure;
+import fourthwire.site.LoadKind;
+import fourthwire.web.figure.CurvePlot;
+import fourthwire.web.figure.CurvePlot.Style;
+import fourthwire.web.figure.Shapes;
+import fourthwire.web.panel.Grids;
+import fourthwire.web.support.Numbers;
+import fourthwire.web.support.Words;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.function.DoubleUnaryOperator;
+import java.util.function.Function;
+import java.util.stream.IntStream;
+
+/** Draws how a question's figures move with load level, firing angle and number of units. */
+final class ChartMaker {
+  private static final List<Double> UNITS = List.of(1.0, 2.0, 5.0, 10.0, 20.0, 50.0, 100.0);
+  private static final String UNKNOWN = "–";
+
+  private final Words words;
+  private final LoadQuestion question;
+  private final List<Line> lines;
+
+  /** One curve: what it is of, and its figure in percent. */
+  private record Line(Style style, String name, Function<TrialResult, Figure> percent) {}
+
+  ChartMaker(Words words, LoadQuestion question) {
+    this.words = words;
+    this.question = question;
+    int first = question.threeLines() ? 5 : 3;
+    int second = question.threeLines() ? 7 : 5;
+    this.lines =
+        List.of(
+            new Line(Style.SOLID, "THD", r -> Distortion.thdPercent(r.first())),
+            order(Style.DASHED, first),
+            order(Style.DOTTED, second),
+            new Line(
+                Style.HEAVY,
+                words.of("loads.chart.power-factor"),
+                r -> r.powerFactor().map(f -> 100 * Math.abs(f))));
+  }
+
+  private static Line order(Style style, int order) {
+    return new Line(
+        style, Numbers.ordinal(order), r -> Distortion.percentOfFundamental(r.first(), order));
+  }
+
+  List<LoadPage.Chart> make() {
+    List<LoadPage.Chart> charts = new ArrayList<>();
+    if (question.kind() == LoadKind.PHASE_DIMMER) {
+      charts.add(firing());
+    } else if (question.request().lowerPower()) {
+      charts.add(level());
+    }
+    if (question.sourceOhm() > 0) {
+      charts.add(units());
+    }
+    return charts;
+  }
+
+  private LoadPage.Chart level() {
+    List<Double> levels = IntStream.rangeClosed(1, 10).mapToObj(k -> k / 10.0).toList();
+    return chart(
+        "level",
+        Sweep.overLevel(question.request(), question.source(), levels),
+        level -> (level - 0.1) / 0.9,
+        level -> Numbers.plain(100 * level, "%"),
+        question.request().demand());
+  }
+
+  private LoadPage.Chart firing() {
+    List<Double> degrees = IntStream.rangeClosed(0, 11).mapToObj(k -> 15.0 * k).toList();
+    double here =
+        question.request().columns().firingDegrees().orElse(
+            LoadDefaults.of(ModelField.FIRING, LoadKind.PHASE_DIMMER, 1, 1).orElseThrow());
+    return chart(
+        "firing",
+        Sweep.overFiring(question.request(), question.source(), degrees),
+        angle -> angle / 165,
+        angle -> Numbers.plain(angle, "") + "°",
+        here);
+  }
+
+  private LoadPage.Chart units() {
+    return chart(
+        "units",
+        Sweep.overUnits(question.request(), question.source(), UNITS),
+        n -> Math.log10(n) / 2,
+        n -> Numbers.plain(n, ""),
+        question.units());
+  }
+
+  private LoadPage.Chart chart(
+      String id,
+      List<Sweep.Point> points,
+      DoubleUnaryOperator place,
+      Function<Double, String> label,
+      double here) {
+    List<CurvePlot.Place> places =
+        points.stream()
+            .map(p -> new CurvePlot.Place(place.applyAsDouble(p.at()), label.apply(p.at())))
+            .toList();
+    List<CurvePlot.Curve> curves =
+        lines.stream().map(l -> new CurvePlot.Curve(l.style(), values(points, l))).toList();
+    double x = place.applyAsDouble(here);
+    String title = words.of("loads.chart." + id);
+    return new LoadPage.Chart(
+        id,
+        title,
+        CurvePlot.draw(
+            thinned(places),
+            curves,
+            x >= 0 && x <= 1 ? OptionalDouble.of(x) : OptionalDouble.empty(),
+            "%",
+            words.of("loads.chart.alternative", title)),
+        lines.stream()
+            .map(l -> new LoadPage.Key(Shapes.sample(l.style()), l.name()))
+            .toList(),
+        sentence(id, points, label),
+        table(title, points, label));
+  }
+
+  /** Every second label is left out where there are many. */
+  private static List<CurvePlot.Place> thinned(List<CurvePlot.Place> places) {
+    int last = places.size() - 1;
+    return IntStream.rangeClosed(0, last)
+        .mapToObj(
+            i ->
+                last < 8 || (last - i) % 3 == 0
+                    ? places.get(i)
+                    : new CurvePlot.Place(places.get(i).at(), ""))
+        .toList();
+  }
+
+  private static List<OptionalDouble> values(List<Sweep.Point> points, Line line) {
+    return points.stream()
+        .map(p -> p.result().map(line.percent()).map(Figure::value).orElse(OptionalDouble.empty()))
+        .toList();
+  }
+
+  /** First and last solved state in words, and where none was found. */
+  private String sentence(
+      String id, List<Sweep.Point> points, Function<Double, String> label) {
+    List<Sweep.Point> solved = points.stream().filter(p -> p.result().isPresent()).toList();
+    if (solved.isEmpty()) {
+      return words.of("loads.chart.none");
+    }
+    Sweep.Point first = solved.get(0);
+    Sweep.Point last = solved.get(solved.size() - 1);
+    String said =
+        words.of(
+            "loads.chart." + id + ".sentence",
+            label.apply(first.at()),
+            thd(first),
+            factor(first),
+            label.apply(last.at()),
+            thd(last),
+            factor(last));
+    Optional<Sweep.Point> none = points.stream().filter(p -> p.result().isEmpty()).findFirst();
+    return none.map(p -> said + " " + words.of("loads.chart.unsolved", label.apply(p.at())))
+        .orElse(said);
+  }
+
+  private static String thd(Sweep.Point point) {
+    return percent(Distortion.thdPercent(point.result().orElseThrow().first()));
+  }
+
+  private static String factor(Sweep.Point point) {
+    OptionalDouble factor = point.result().orElseThrow().powerFactor().value();
+    return factor.isPresent() ? Numbers.of(factor.getAsDouble()) : UNKNOWN;
+  }
+
+  private static String percent(Figure figure) {
+    OptionalDouble value = figure.value();
+    return value.isPresent() ? Numbers.of(value.getAsDouble(), "%") : UNKNOWN;
+  }
+
+  private fourthwire.web.panel.NodePage.Grid table(
+      String title, List<Sweep.Point> points, Function<Double, String> label) {
+    List<String> heads = new ArrayList<>(List.of(title));
+    lines.forEach(l -> heads.add(l.name() + ", %"));
+    Grids grid = new Grids(words, title, heads);
+    for (Sweep.Point p : points) {
+      grid.row(
+          label.apply(p.at()),
+          lines.stream()
+              .map(
+                  l ->
+                      p.result()
+                          .map(l.percent())
+                          .orElse(Figure.unknown(words.of("loads.chart.reason"))))
+              .toList());
+    }
+    return grid.done();
+  }
+}

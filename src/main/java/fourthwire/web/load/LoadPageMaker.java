@@ -1,0 +1,356 @@
+package fourthwire.web.load;
+
+import fourthwire.limits.equipment.EquipmentJudgement;
+import fourthwire.load.model.NoSteadyStateException;
+import fourthwire.load.trial.LoadTrial;
+import fourthwire.load.trial.TrialResult;
+import fourthwire.quantity.Conductor;
+import fourthwire.quantity.Distortion;
+import fourthwire.quantity.Figure;
+import fourthwire.quantity.HarmonicLoss;
+import fourthwire.quantity.PowerFigures;
+import fourthwire.quantity.Spectrum;
+import fourthwire.quantity.Waveform;
+import fourthwire.web.figure.CyclePlot;
+import fourthwire.web.figure.Shapes;
+import fourthwire.web.figure.SpectrumPlot;
+import fourthwire.web.panel.Grids;
+import fourthwire.web.panel.NodePage.Grid;
+import fourthwire.web.support.Numbers;
+import fourthwire.web.support.Words;
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.EnumMap;
+import java.util.List;
+import java.util.Locale;
+import java.util.Map;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.stream.IntStream;
+
+/** Answers one question: solves it, draws it, says it. Figures are of one unit. */
+final class LoadPageMaker {
+  private static final int SAMPLES = 720;
+  private static final int MOST_ORDERS = 14;
+  private static final int USUAL_HIGHEST = 15;
+
+  /** A limit up to so many times the tallest bar has its place in the picture. */
+  private static final double ROOM = 2.5;
+
+  private static final List<Conductor> LINES = List.of(Conductor.L1, Conductor.L2, Conductor.L3);
+
+  private final Words words;
+  private final LoadQuestion question;
+  private final LimitsMaker limits;
+
+  LoadPageMaker(Words words, LoadQuestion question) {
+    this.words = words;
+    this.question = question;
+    this.limits = new LimitsMaker(words, question);
+  }
+
+  LoadPage make(String query) {
+    try {
+      return page(query, LoadTrial.solve(question.request(), question.source()));
+    } catch (NoSteadyStateException none) {
+      return page(
+          query,
+          words.of("loads.title.none", named()),
+          List.of(words.of("loads.none", sentence(none.getMessage()))),
+          Optional.empty(),
+          Optional.empty());
+    }
+  }
+
+  private LoadPage page(String query, TrialResult all) {
+    TrialResult unit = ofOneUnit(all);
+    List<String> said = new ArrayList<>();
+    if (question.units() > 1) {
+      said.add(
+          words.of(
+              "loads.together",
+              Numbers.plain(question.units(), ""),
+              Numbers.of(all.first().rms(), "A")));
+    }
+    String thd = percent(Distortion.thdPercent(unit.first()));
+    String factor = text(unit.powerFactor(), "");
+    return page(
+        query,
+        words.of("loads.title", named(), thd, factor),
+        said,
+        Optional.of(unit.first()),
+        Optional.of(answer(unit)));
+  }
+
+  private LoadPage page(
+      String query,
+      String title,
+      List<String> first,
+      Optional<Spectrum> unit,
+      Optional<LoadPage.Answer> answer) {
+    List<String> sentences = new ArrayList<>(first);
+    sentences.addAll(limits.sentences(unit));
+    return new LoadPage(
+        title,
+        about(),
+        limits.verdict(),
+        limits.standing(),
+        sentences,
+        answer,
+        model(),
+        granted(),
+        query);
+  }
+
+  private TrialResult ofOneUnit(TrialResult all) {
+    double share = 1 / question.units();
+    return new TrialResult(
+        all.current().stream().map(s -> s.times(share)).toList(), all.voltage());
+  }
+
+  /** The equipment's words with a capital. */
+  private String named() {
+    String name =
+        question.preset().isPresent()
+            ? question.name()
+            : words.of("loads.kind." + question.kind().word());
+    return name.substring(0, 1).toUpperCase(Locale.ROOT) + name.substring(1);
+  }
+
+  private String about() {
+    List<String> parts = new ArrayList<>();
+    parts.add(words.of("loads.kind." + question.kind().word()));
+    parts.add(
+        words.of(
+            "loads.about.size",
+            Numbers.plain(question.ratedW(), "W"),
+            Numbers.plain(question.source().nominalV(), "V"),
+            Numbers.plain(question.request().frequencyHz(), "Hz")));
+    if (question.request().demand() < 1) {
+      parts.add(
+          words.of("loads.about.level", Numbers.plain(100 * question.request().demand(), "%")));
+    }
+    if (question.units() > 1) {
+      parts.add(words.of("loads.about.units", Numbers.plain(question.units(), "")));
+    }
+    parts.add(
+        question.sourceOhm() > 0
+            ? words.of("loads.about.source", Numbers.of(question.sourceOhm(), "Ω"))
+            : words.of("loads.about.stiff"));
+    double distortion = 100 * question.source().background().distortionRms();
+    if (distortion > 0) {
+      parts.add(words.of("loads.about.background", Numbers.of(distortion, "%")));
+    }
+    return String.join(" · ", parts);
+  }
+
+  private LoadPage.Answer answer(TrialResult unit) {
+    Map<Conductor, Spectrum> currents = new EnumMap<>(Conductor.class);
+    List<LoadPage.Key> keys = new ArrayList<>();
+    for (int k = 0; k < unit.current().size(); k++) {
+      Conductor line = LINES.get(k);
+      currents.put(line, unit.current().get(k));
+      String name = unit.threeLines() ? line.name() : words.of("loads.key.current");
+      keys.add(new LoadPage.Key(Shapes.sample(line), name));
+    }
+    keys.add(new LoadPage.Key(Shapes.backdrop(), voltageKey(unit)));
+    return new LoadPage.Answer(
+        CyclePlot.draw(
+            currents,
+            "A",
+            Optional.of(unit.voltage().get(0)),
+            words.of("loads.cycle.alternative", named())),
+        keys,
+        spectrum(unit.first()),
+        spectrumOf(unit.first()),
+        figures(unit),
+        new ChartMaker(words, question).make(),
+        limits.table(unit.first()));
+  }
+
+  private String voltageKey(TrialResult unit) {
+    return words.of(
+        unit.threeLines() ? "loads.key.voltage.three" : "loads.key.voltage",
+        Numbers.of(Waveform.of(unit.voltage().get(0), SAMPLES).peak(), "V"));
+  }
+
+  private String spectrum(Spectrum current) {
+    EquipmentJudgement judgement = limits.judge(current);
+    List<SpectrumPlot.Group> groups =
+        drawn(current).stream()
+            .map(
+                h ->
+                    new SpectrumPlot.Group(
+                        h,
+                        List.of(current.magnitude(h)),
+                        judgement.order(h).stream().mapToDouble(o -> o.limitA()).findFirst()))
+            .toList();
+    return SpectrumPlot.draw(
+        List.of(Conductor.L1),
+        groups,
+        ROOM,
+        Numbers::ordinal,
+        "A",
+        words.of("loads.spectrum.alternative", named()));
+  }
+
+  private String spectrumOf(Spectrum current) {
+    String of = words.of("loads.spectrum.of", Numbers.of(current.magnitude(1), "A"));
+    EquipmentJudgement judgement = limits.judge(current);
+    return judgement.limited()
+        ? of + "; " + words.of("loads.spectrum.limit", judgement.standing())
+        : of;
+  }
+
+  /** The usual odd orders, and others that flow, strongest first; the fundamental stands apart. */
+  private List<Integer> drawn(Spectrum current) {
+    double strongest =
+        IntStream.rangeClosed(2, Spectrum.HIGHEST_ORDER)
+            .mapToDouble(current::magnitude)
+            .max()
+            .orElse(0);
+    return IntStream.rangeClosed(2, Spectrum.HIGHEST_ORDER)
+        .filter(
+            h ->
+                usual(h) && h <= USUAL_HIGHEST || current.magnitude(h) >= 0.01 * strongest)
+        .boxed()
+        .sorted(
+            Comparator.comparing((Integer h) -> !(usual(h) && h <= USUAL_HIGHEST))
+                .thenComparing(h -> -current.magnitude(h)))
+        .limit(MOST_ORDERS)
+        .sorted()
+        .toList();
+  }
+
+  private boolean usual(int order) {
+    return order % 2 == 1 && (!question.threeLines() || order % 3 != 0);
+  }
+
+  private List<Grid> figures(TrialResult unit) {
+    List<Grid> grids = new ArrayList<>();
+    grids.add(currents(unit));
+    grids.add(powers(unit.power()));
+    grids.add(voltages(unit));
+    return grids;
+  }
+
+  private Grid currents(TrialResult unit) {
+    List<String> heads = new ArrayList<>(List.of(words.of("loads.figure")));
+    for (int k = 0; k < unit.current().size(); k++) {
+      heads.add(unit.threeLines() ? LINES.get(k).name() : words.of("loads.value"));
+    }
+    Grids grid = new Grids(words, words.of("loads.currents"), heads);
+    row(grid, "loads.rms", unit.current(), s -> Figure.of(s.rms()));
+    row(grid, "loads.fundamental", unit.current(), s -> Figure.of(s.magnitude(1)));
+    row(grid, "loads.peak", unit.current(), s -> Figure.of(Waveform.of(s, SAMPLES).peak()));
+    row(grid, "loads.crest", unit.current(), s -> Waveform.of(s, SAMPLES).crestFactor());
+    row(grid, "loads.thd", unit.current(), Distortion::thdPercent);
+    row(grid, "loads.loss-factor", unit.current(), HarmonicLoss::harmonicLossFactor);
+    return grid.done();
+  }
+
+  private Grid powers(PowerFigures power) {
+    Grids grid =
+        new Grids(
+            words,
+            words.of("loads.powers"),
+            List.of(words.of("loads.figure"), words.of("loads.value")));
+    boolean kilo = question.ratedW() >= 10_000;
+    double scale = kilo ? 1e-3 : 1;
+    String of = kilo ? ".kilo" : "";
+    grid.row(words.of("loads.active" + of), List.of(power.activeW().map(x -> x * scale)));
+    grid.row(
+        words.of("loads.reactive" + of),
+        List.of(power.fundamentalReactiveVar().map(x -> x * scale)));
+    grid.row(words.of("loads.apparent" + of), List.of(power.apparentVa().map(x -> x * scale)));
+    grid.row(
+        words.of("loads.nonfundamental" + of),
+        List.of(power.nonfundamentalVa().map(x -> x * scale)));
+    grid.row(words.of("power.factor"), List.of(power.powerFactor()));
+    grid.row(words.of("power.displacement"), List.of(power.displacementFactor()));
+    return grid.done();
+  }
+
+  private Grid voltages(TrialResult unit) {
+    List<String> heads = new ArrayList<>(List.of(words.of("loads.figure")));
+    for (int k = 0; k < unit.voltage().size(); k++) {
+      heads.add(unit.threeLines() ? LINES.get(k).name() : words.of("loads.value"));
+    }
+    double nominal =
+        question.source().nominalV() / (unit.threeLines() ? Math.sqrt(3) : 1);
+    Grids grid =
+        new Grids(
+            words,
+            words.of(unit.threeLines() ? "loads.voltages.three" : "loads.voltages"),
+            heads);
+    row(grid, "loads.volts.rms", unit.voltage(), s -> Figure.of(s.rms()));
+    row(grid, "loads.thd", unit.voltage(), Distortion::thdPercent);
+    row(
+        grid,
+        "loads.drop",
+        unit.voltage(),
+        s -> Figure.of(zeroed(100 * (nominal - s.magnitude(1)) / nominal)));
+    return grid.done();
+  }
+
+  /** Rounding alone is no drop. */
+  private static double zeroed(double percent) {
+    return Math.abs(percent) < 1e-9 ? 0 : percent;
+  }
+
+  private void row(
+      Grids grid,
+      String key,
+      List<Spectrum> spectra,
+      java.util.function.Function<Spectrum, Figure> figure) {
+    grid.row(words.of(key), spectra.stream().map(figure).toList());
+  }
+
+  private LoadPage.Model model() {
+    String kind = question.kind().word();
+    return new LoadPage.Model(
+        words.of("loads.kind." + kind),
+        words.of("loads.model." + kind),
+        words.of("loads.model." + kind + ".assumed"),
+        words.of("loads.model." + kind + ".source"),
+        question
+            .preset()
+            .map(p -> words.of("loads.model.preset", p.name(), sentence(p.source())))
+            .orElse(""));
+  }
+
+  private List<LoadPage.Fact> granted() {
+    List<LoadPage.Fact> facts = new ArrayList<>();
+    for (ModelField field : ModelField.of(question.kind())) {
+      OptionalDouble given = field.of(question.request().columns());
+      OptionalDouble otherwise =
+          LoadDefaults.of(
+              field, question.kind(), question.request().nominalPortV(), question.ratedW());
+      if (given.isPresent()) {
+        facts.add(fact(field, words.of("loads.granted.given", Typed.bound(given.getAsDouble()))));
+      } else if (otherwise.isPresent()) {
+        facts.add(
+            fact(field, words.of("loads.granted.assumed", Typed.bound(otherwise.getAsDouble()))));
+      }
+    }
+    return facts;
+  }
+
+  private LoadPage.Fact fact(ModelField field, String text) {
+    return new LoadPage.Fact(words.of("loads.field." + field.column()), text);
+  }
+
+  private static String sentence(String text) {
+    String first = text.substring(0, 1).toUpperCase(Locale.ROOT) + text.substring(1);
+    return first.endsWith(".") ? first : first + ".";
+  }
+
+  private static String percent(Figure figure) {
+    return text(figure, "%");
+  }
+
+  private static String text(Figure figure, String unit) {
+    OptionalDouble value = figure.value();
+    return value.isPresent() ? Numbers.of(value.getAsDouble(), unit) : "–";
+  }
+}

@@ -1,0 +1,68 @@
+package fourthwire.web.load;
+
+import fourthwire.limits.equipment.EquipmentUse;
+import fourthwire.load.LoadRequest;
+import fourthwire.load.Preset;
+import fourthwire.load.trial.TrialSource;
+import fourthwire.site.LoadKind;
+import java.util.Optional;
+
+/**
+ * What the form asks, understood.
+ *
+ * @param name the preset's or the kind's words
+ * @param request all units at the asked level
+ * @param use what the equipment is for, as said or as its name says
+ */
+record LoadQuestion(
+    String name,
+    Optional<Preset> preset,
+    LoadRequest request,
+    TrialSource source,
+    EquipmentUse use) {
+
+  LoadKind kind() {
+    return request.kind();
+  }
+
+  double ratedW() {
+    return ((LoadRequest.Rating.Watts) request.rating()).w();
+  }
+
+  double units() {
+    return request.units();
+  }
+
+  boolean threeLines() {
+    return request.ports() == 3;
+  }
+
+  /** Ohms of the source at the fundamental; 0 for a stiff one. */
+  double sourceOhm() {
+    return Math.hypot(
+        source.ohm(), 2 * Math.PI * request.frequencyHz() * source.henry());
+  }
+
+  /** Whether it stands as the equipment standards' tests have it. */
+  boolean asTested() {
+    return sourceOhm() == 0
+        && source.background().distortionRms() == 0
+        && (request.demand() == 1 || !request.lowerPower());
+  }
+
+  /** One unit at rated power. */
+  LoadRequest tested() {
+    return new LoadRequest(
+        request.kind(),
+        request.ports(),
+        request.frequencyHz(),
+        request.nominalPortV(),
+        request.rating(),
+        1,
+        1,
+        request.lowerPower(),
+        request.displacementFactor(),
+        request.columns(),
+        request.spectrum());
+  }
+}

@@ -1,0 +1,71 @@
+package fourthwire.web.load;
+
+import fourthwire.web.support.Numbers;
+import fourthwire.web.support.Words;
+import java.util.LinkedHashMap;
+import java.util.Map;
+import java.util.OptionalDouble;
+
+/** The form's fields as typed, and what is wrong with each. */
+final class Typed {
+  private final Words words;
+  private final Map<String, String> values;
+  private final Map<String, String> errors = new LinkedHashMap<>();
+
+  Typed(Words words, Map<String, String> values) {
+    this.words = words;
+    this.values = values;
+  }
+
+  /** What stands in a field, without space around it; empty where nothing does. */
+  String text(String field) {
+    return values.getOrDefault(field, "").strip();
+  }
+
+  boolean has(String field) {
+    return !text(field).isEmpty();
+  }
+
+  /** A field's number; an error where it is none or out of range. A decimal comma is read too. */
+  OptionalDouble number(String field, double low, double high) {
+    String text = text(field);
+    if (text.isEmpty()) {
+      return OptionalDouble.empty();
+    }
+    OptionalDouble value = parsed(text);
+    if (value.isPresent() && value.getAsDouble() >= low && value.getAsDouble() <= high) {
+      return value;
+    }
+    error(
+        field,
+        words.of(
+            value.isPresent() ? "loads.error.range" : "loads.error.number",
+            text,
+            bound(low),
+            bound(high)));
+    return OptionalDouble.empty();
+  }
+
+  static OptionalDouble parsed(String text) {
+    try {
+      double value =
+          Double.parseDouble(text.indexOf('.') < 0 ? text.replace(',', '.') : text);
+      return Double.isFinite(value) ? OptionalDouble.of(value) : OptionalDouble.empty();
+    } catch (NumberFormatException e) {
+      return OptionalDouble.empty();
+    }
+  }
+
+  /** Says what is wrong with a field; the first word on it stays. */
+  void error(String field, String sentence) {
+    errors.putIfAbsent(field, sentence);
+  }
+
+  Map<String, String> errors() {
+    return errors;
+  }
+
+  static String bound(double value) {
+    return value != 0 && Math.abs(value) < 1e-2 ? String.valueOf(value) : Numbers.plain(value, "");
+  }
+}
