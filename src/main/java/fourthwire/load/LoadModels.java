@@ -3,6 +3,7 @@ package fourthwire.load;
 import fourthwire.load.control.PhaseDimmer;
 import fourthwire.load.model.LoadModel;
 import fourthwire.quantity.Phasor;
+import fourthwire.site.ModelColumns;
 import java.util.OptionalDouble;
 
 /** Makes the load model of a survey row. */
@@ -12,6 +13,7 @@ public final class LoadModels {
 
   private static final double LOCKED_ROTOR_PERCENT = 17;
   private static final double FIRING_DEGREES = 90;
+  private static final double LEAST_EFFICIENCY = 0.01;
 
   private LoadModels() {}
 
@@ -35,6 +37,50 @@ public final class LoadModels {
       case MAGNETIC_BALLAST, ACTIVE_FRONT_END -> GivenSpectra.published(request);
       case TWELVE_PULSE -> Rectifiers.twelvePulse(request);
     };
+  }
+
+  /**
+   * The same request with the efficiency filled in that a rectifier's rated watts come to, so that
+   * models of many states of it need not find it each time; any other request as it is.
+   *
+   * @throws IllegalArgumentException where the parameters are impossible, as for a model
+   */
+  public static LoadRequest sized(LoadRequest request) {
+    boolean rectifier =
+        switch (request.kind()) {
+          case CAPACITOR_INPUT, CAPACITOR_INPUT_CHOKE, SIX_PULSE, TWELVE_PULSE -> true;
+          default -> false;
+        };
+    if (!rectifier
+        || request.columns().efficiency().isPresent()
+        || !(request.rating() instanceof LoadRequest.Rating.Watts watts)) {
+      return request;
+    }
+    RequestCheck.check(request);
+    LoadRequest one = request.inState(1, 1);
+    double directW =
+        new DesignPower(request)
+            .find(p -> of(one.withColumns(efficient(Math.max(LEAST_EFFICIENCY, p / watts.w())))));
+    return request.withColumns(efficient(directW / watts.w()));
+  }
+
+  private static ModelColumns efficient(double efficiency) {
+    OptionalDouble none = OptionalDouble.empty();
+    return new ModelColumns(
+        OptionalDouble.of(efficiency),
+        none,
+        none,
+        none,
+        none,
+        none,
+        none,
+        none,
+        none,
+        none,
+        none,
+        none,
+        none,
+        none);
   }
 
   private static LoadModel constantImpedance(LoadRequest request, double displacementFactor) {

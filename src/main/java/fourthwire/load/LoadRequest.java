@@ -38,6 +38,38 @@ public record LoadRequest(
     ModelColumns columns,
     Optional<Spectrum> spectrum) {
 
+  /** The same equipment in another state. */
+  public LoadRequest inState(double newUnits, double newDemand) {
+    return new LoadRequest(
+        kind,
+        ports,
+        frequencyHz,
+        nominalPortV,
+        rating,
+        newUnits,
+        newDemand,
+        lowerPower,
+        displacementFactor,
+        columns,
+        spectrum);
+  }
+
+  /** The same with these columns; where one is empty, its own. */
+  public LoadRequest withColumns(ModelColumns others) {
+    return new LoadRequest(
+        kind,
+        ports,
+        frequencyHz,
+        nominalPortV,
+        rating,
+        units,
+        demand,
+        lowerPower,
+        displacementFactor,
+        others.orElse(columns),
+        spectrum);
+  }
+
   /** What one unit is rated: electrical input watts, volt-amperes or amps at nominal voltage. */
   public sealed interface Rating {
     /** Active input power, watts. */

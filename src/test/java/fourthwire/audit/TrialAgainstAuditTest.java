@@ -22,8 +22,8 @@ import org.junit.jupiter.params.provider.CsvSource;
 
 /**
  * The load model page's solution beside the audit's, which finds the same state by Newton's method
- * on a network: equipment at the end of a feeder, on a distorted supply. An audit's own tolerance is
- * 1e-4 of the current; angles are each against the equipment's own voltage.
+ * on a network: equipment at the end of a feeder, on a distorted supply. An audit's own tolerance
+ * is 1e-4 of the current; angles are each against the equipment's own voltage.
  */
 class TrialAgainstAuditTest {
   private static final double STIFF_MVA = 1e9;
@@ -94,10 +94,7 @@ class TrialAgainstAuditTest {
     boolean three = kind.family() == LoadKind.Family.THREE_PHASE;
     Spectrum background =
         Spectrum.of(
-            h ->
-                h == 5
-                    ? Phasor.polar(0.03, 170)
-                    : h == 7 ? Phasor.polar(0.015, 20) : Phasor.ZERO);
+            h -> h == 5 ? Phasor.polar(0.03, 170) : h == 7 ? Phasor.polar(0.015, 20) : Phasor.ZERO);
     return LoadTrial.solve(
         new LoadRequest(
             kind,

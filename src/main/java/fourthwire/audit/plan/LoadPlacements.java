@@ -114,9 +114,7 @@ public final class LoadPlacements {
   }
 
   private static boolean lowerPower(Load load, LoadKind kind) {
-    return load.partLoad()
-        .map(p -> p == Load.PartLoad.LOWER_POWER)
-        .orElse(kind.runsAtLowerPower());
+    return load.partLoad().map(p -> p == Load.PartLoad.LOWER_POWER).orElse(kind.runsAtLowerPower());
   }
 
   /**

@@ -15,14 +15,14 @@ import java.util.List;
  * Solves equipment behind a source, at every order to the 50th.
  *
  * <p>The equipment's injected current is solved behind the source's R-L; where it also has a linear
- * part (an input filter, a locked rotor) the electromotive force that its injecting part sees is u =
- * V + Z·I, with V = (E - Z·I)/(1 + Z·Y) and I = I(u): a fixed point, which without a linear part is
- * E itself. Three lines are taken in symmetrical components, order by order. N units are one unit N
- * times as large, as everywhere.
+ * part (an input filter, a locked rotor) the electromotive force that its injecting part sees is u
+ * = V + Z·I, with V = (E - Z·I)/(1 + Z·Y) and I = I(u): a fixed point, which without a linear part
+ * is E itself. Three lines are taken in symmetrical components, order by order. N units are one
+ * unit N times as large, as everywhere.
  */
 public final class LoadTrial {
   /** Of the electromotive force's fundamental; an audit asks for 1e-5 of the nominal voltage. */
-  private static final double TOLERANCE = 1e-8;
+  private static final double TOLERANCE = 1e-6;
 
   private final double frequencyHz;
   private final TrialSource source;

@@ -1,5 +1,6 @@
 package fourthwire.load.trial;
 
+import fourthwire.load.LoadModels;
 import fourthwire.load.LoadRequest;
 import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.site.ModelColumns;
@@ -23,24 +24,23 @@ public final class Sweep {
   /** Over the share of rated power, each in (0, 1]. */
   public static List<Point> overLevel(
       LoadRequest request, TrialSource source, List<Double> levels) {
-    return over(levels, level -> at(request, request.units(), level, request.columns()), source);
+    LoadRequest sized = LoadModels.sized(request);
+    return over(levels, level -> sized.inState(sized.units(), level), source);
   }
 
   /** Over the number of equal units behind the one source. */
-  public static List<Point> overUnits(
-      LoadRequest request, TrialSource source, List<Double> units) {
-    return over(units, n -> at(request, n, request.demand(), request.columns()), source);
+  public static List<Point> overUnits(LoadRequest request, TrialSource source, List<Double> units) {
+    LoadRequest sized = LoadModels.sized(request);
+    return over(units, n -> sized.inState(n, sized.demand()), source);
   }
 
   /** Over a dimmer's firing angle, degrees. */
   public static List<Point> overFiring(
       LoadRequest request, TrialSource source, List<Double> degrees) {
-    return over(
-        degrees,
-        d -> at(request, request.units(), request.demand(), fired(request.columns(), d)),
-        source);
+    return over(degrees, d -> request.withColumns(fired(d)), source);
   }
 
+  /** Each state by itself; the equipment is sized once. */
   private static List<Point> over(
       List<Double> values, DoubleFunction<LoadRequest> request, TrialSource source) {
     return values.stream().map(v -> new Point(v, tried(request.apply(v), source))).toList();
@@ -54,27 +54,10 @@ public final class Sweep {
     }
   }
 
-  private static LoadRequest at(
-      LoadRequest r, double units, double demand, ModelColumns columns) {
-    return new LoadRequest(
-        r.kind(),
-        r.ports(),
-        r.frequencyHz(),
-        r.nominalPortV(),
-        r.rating(),
-        units,
-        demand,
-        r.lowerPower(),
-        r.displacementFactor(),
-        columns,
-        r.spectrum());
-  }
-
-  private static ModelColumns fired(ModelColumns columns, double degrees) {
+  private static ModelColumns fired(double degrees) {
     OptionalDouble none = OptionalDouble.empty();
     OptionalDouble firing = OptionalDouble.of(degrees);
     return new ModelColumns(
-            none, none, none, none, none, none, none, none, none, firing, none, none, none, none)
-        .orElse(columns);
+        none, none, none, none, none, none, none, none, none, firing, none, none, none, none);
   }
 }

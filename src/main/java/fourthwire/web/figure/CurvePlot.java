@@ -90,7 +90,8 @@ public final class CurvePlot {
         "0 0 " + UNITS_WIDE + " " + Svg.rounded(HEIGHT_PX, 0),
         "preserveAspectRatio",
         "none");
-    curves.forEach(c -> svg.add("path", "class", "curve " + c.style().word(), "d", path(places, c, ticks)));
+    curves.forEach(
+        c -> svg.add("path", "class", "curve " + c.style().word(), "d", path(places, c, ticks)));
     return svg.done();
   }
 

@@ -25,18 +25,7 @@ public final class Shapes {
   private static String sample(String classes) {
     return new Svg()
         .open("svg", "class", "sample", "aria-hidden", "true")
-        .add(
-            "line",
-            "class",
-            classes,
-            "x1",
-            0,
-            "x2",
-            "100%",
-            "y1",
-            "50%",
-            "y2",
-            "50%")
+        .add("line", "class", classes, "x1", 0, "x2", "100%", "y1", "50%", "y2", "50%")
         .done();
   }
 }

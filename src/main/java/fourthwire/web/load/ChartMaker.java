@@ -78,8 +78,11 @@ final class ChartMaker {
   private LoadPage.Chart firing() {
     List<Double> degrees = IntStream.rangeClosed(0, 11).mapToObj(k -> 15.0 * k).toList();
     double here =
-        question.request().columns().firingDegrees().orElse(
-            LoadDefaults.of(ModelField.FIRING, LoadKind.PHASE_DIMMER, 1, 1).orElseThrow());
+        question
+            .request()
+            .columns()
+            .firingDegrees()
+            .orElse(LoadDefaults.of(ModelField.FIRING, LoadKind.PHASE_DIMMER, 1, 1).orElseThrow());
     return chart(
         "firing",
         Sweep.overFiring(question.request(), question.source(), degrees),
@@ -120,9 +123,7 @@ final class ChartMaker {
             x >= 0 && x <= 1 ? OptionalDouble.of(x) : OptionalDouble.empty(),
             "%",
             words.of("loads.chart.alternative", title)),
-        lines.stream()
-            .map(l -> new LoadPage.Key(Shapes.sample(l.style()), l.name()))
-            .toList(),
+        lines.stream().map(l -> new LoadPage.Key(Shapes.sample(l.style()), l.name())).toList(),
         sentence(id, points, label),
         table(title, points, label));
   }
@@ -146,8 +147,7 @@ final class ChartMaker {
   }
 
   /** First and last solved state in words, and where none was found. */
-  private String sentence(
-      String id, List<Sweep.Point> points, Function<Double, String> label) {
+  private String sentence(String id, List<Sweep.Point> points, Function<Double, String> label) {
     List<Sweep.Point> solved = points.stream().filter(p -> p.result().isPresent()).toList();
     if (solved.isEmpty()) {
       return words.of("loads.chart.none");

@@ -38,8 +38,7 @@ final class FormMaker {
   }
 
   private Group group(String title, boolean folded, List<Field> fields) {
-    boolean open =
-        fields.stream().anyMatch(f -> !f.error().isEmpty() || !f.value().isEmpty());
+    boolean open = fields.stream().anyMatch(f -> !f.error().isEmpty() || !f.value().isEmpty());
     return new Group(title, folded, open, fields);
   }
 
@@ -73,9 +72,7 @@ final class FormMaker {
                 .map(
                     k ->
                         new Choice(
-                            k.word(),
-                            words.of("loads.kind." + k.word()),
-                            k.word().equals(chosen)))
+                            k.word(), words.of("loads.kind." + k.word()), k.word().equals(chosen)))
                 .toList()));
   }
 
@@ -91,9 +88,7 @@ final class FormMaker {
             "background",
             choices(
                 "background",
-                Arrays.stream(Backgrounds.values())
-                    .map(Backgrounds::word)
-                    .toArray(String[]::new)),
+                Arrays.stream(Backgrounds.values()).map(Backgrounds::word).toArray(String[]::new)),
             ""),
         lines("orders", words.of("loads.hint.orders")));
   }
@@ -110,8 +105,7 @@ final class FormMaker {
                     Stream.concat(
                             Stream.of(
                                 new Choice("", words.of("loads.use"), typed.text("use").isEmpty())),
-                            Arrays.stream(EquipmentUse.values())
-                                .map(u -> choice("use", u.word())))
+                            Arrays.stream(EquipmentUse.values()).map(u -> choice("use", u.word())))
                         .toList())),
             ""));
     if (LoadDefaults.displacement(kind).isPresent()) {
@@ -128,28 +122,23 @@ final class FormMaker {
   private String hint(ModelField field) {
     double volts = typed.number("volts", 24, 1000).orElse(reader.assumedVolts());
     double watts = typed.number("watts", 0.1, 2e6).orElse(reader.assumedWatts());
-    Optional<ModelColumns> ofPreset =
-        reader.chosen().preset().map(p -> p.columns(watts, volts));
+    Optional<ModelColumns> ofPreset = reader.chosen().preset().map(p -> p.columns(watts, volts));
     OptionalDouble given = ofPreset.map(field::of).orElse(OptionalDouble.empty());
     if (given.isPresent()) {
       return words.of("loads.hint.preset", Typed.bound(given.getAsDouble()));
     }
-    OptionalDouble otherwise =
-        LoadDefaults.of(field, reader.chosen().kind(), volts, watts);
+    OptionalDouble otherwise = LoadDefaults.of(field, reader.chosen().kind(), volts, watts);
     return otherwise.isPresent()
         ? words.of("loads.hint.assumed", Typed.bound(otherwise.getAsDouble()))
         : words.orElse("loads.hint." + field.column(), "");
   }
 
   private String assumed(String unit, OptionalDouble value) {
-    return value.isPresent()
-        ? words.of(unit, Typed.bound(value.getAsDouble()))
-        : "";
+    return value.isPresent() ? words.of(unit, Typed.bound(value.getAsDouble())) : "";
   }
 
   private List<Choices> choices(String field, String... values) {
-    return List.of(
-        new Choices("", Arrays.stream(values).map(v -> choice(field, v)).toList()));
+    return List.of(new Choices("", Arrays.stream(values).map(v -> choice(field, v)).toList()));
   }
 
   private Choice choice(String field, String value) {

@@ -47,9 +47,7 @@ final class LimitsMaker {
             amps,
             three,
             three ? volts / Math.sqrt(3) : volts,
-            ohm > 0
-                ? OptionalDouble.of(volts * volts / ohm / apparentVa)
-                : OptionalDouble.empty());
+            ohm > 0 ? OptionalDouble.of(volts * volts / ohm / apparentVa) : OptionalDouble.empty());
     this.tested = EquipmentLimits.judge(equipment, test.first());
   }
 
@@ -71,7 +69,11 @@ final class LimitsMaker {
   /** Why these limits hold, how the test comes out, and how the state that is shown does. */
   List<String> sentences(Optional<Spectrum> unit) {
     List<String> said = new ArrayList<>();
-    said.add(words.of(tested.limited() ? "loads.hold" : "loads.hold.none", tested.standing(), tested.reason()));
+    said.add(
+        words.of(
+            tested.limited() ? "loads.hold" : "loads.hold.none",
+            tested.standing(),
+            tested.reason()));
     if (tested.limited()) {
       said.add(words.of("loads.tested", outcome(tested)));
       if (!question.asTested() && unit.isPresent()) {
@@ -121,7 +123,8 @@ final class LimitsMaker {
   }
 
   private String total(TotalLimit t) {
-    return words.of("loads.total." + t.name().toLowerCase(java.util.Locale.ROOT).replaceAll("[^a-z]+", "-"));
+    return words.of(
+        "loads.total." + t.name().toLowerCase(java.util.Locale.ROOT).replaceAll("[^a-z]+", "-"));
   }
 
   private static String figure(double value, TotalLimit t) {

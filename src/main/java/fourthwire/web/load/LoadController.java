@@ -46,8 +46,7 @@ class LoadController {
       try {
         String query = request.getQueryString();
         model.addAttribute(
-            "page",
-            new LoadPageMaker(words, question.get()).make(query == null ? "" : query));
+            "page", new LoadPageMaker(words, question.get()).make(query == null ? "" : query));
       } catch (IllegalArgumentException impossible) {
         failure = String.valueOf(impossible.getMessage());
       }

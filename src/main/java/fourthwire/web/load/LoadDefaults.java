@@ -54,9 +54,10 @@ final class LoadDefaults {
     boolean critical = kind == LoadKind.PFC_CRITICAL;
     return switch (field) {
       case CAPACITANCE -> OptionalDouble.of(capacitance(three, portV));
-      case SOURCE_RESISTANCE ->
-          OptionalDouble.of((three ? 0.002 : 0.02) * portV * portV / ratedW);
-      case SOURCE_INDUCTANCE, DC_CHOKE -> OptionalDouble.of(0);
+      case SOURCE_RESISTANCE -> OptionalDouble.of((three ? 0.002 : 0.02) * portV * portV / ratedW);
+      case SOURCE_INDUCTANCE -> OptionalDouble.of(0);
+      case DC_CHOKE ->
+          kind == LoadKind.CAPACITOR_INPUT_CHOKE ? OptionalDouble.empty() : OptionalDouble.of(0);
       case LINE_CHOKE -> OptionalDouble.of(kind == LoadKind.CAPACITOR_INPUT_CHOKE ? 3 : 0);
       case DIODE_SATURATION -> OptionalDouble.of(3e-11);
       case DIODE_EMISSION -> OptionalDouble.of(1.2);

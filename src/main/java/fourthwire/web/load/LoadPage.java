@@ -43,7 +43,8 @@ record LoadPage(
   record Key(String svg, String name) {}
 
   /** How figures move with one quantity. */
-  record Chart(String id, String title, String svg, List<Key> keys, String sentence, Grid figures) {}
+  record Chart(
+      String id, String title, String svg, List<Key> keys, String sentence, Grid figures) {}
 
   /**
    * Every order beside its limit.

@@ -45,8 +45,8 @@ final class LoadPageMaker {
 
   LoadPageMaker(Words words, LoadQuestion question) {
     this.words = words;
-    this.question = question;
-    this.limits = new LimitsMaker(words, question);
+    this.question = question.sized();
+    this.limits = new LimitsMaker(words, this.question);
   }
 
   LoadPage make(String query) {
@@ -56,7 +56,7 @@ final class LoadPageMaker {
       return page(
           query,
           words.of("loads.title.none", named()),
-          List.of(words.of("loads.none", sentence(none.getMessage()))),
+          List.of(words.of("loads.none", sentence(String.valueOf(none.getMessage())))),
           Optional.empty(),
           Optional.empty());
     }
@@ -68,7 +68,7 @@ final class LoadPageMaker {
     if (question.units() > 1) {
       said.add(
           words.of(
-              "loads.together",
+              question.threeLines() ? "loads.together.three" : "loads.together",
               Numbers.plain(question.units(), ""),
               Numbers.of(all.first().rms(), "A")));
     }
@@ -104,8 +104,7 @@ final class LoadPageMaker {
 
   private TrialResult ofOneUnit(TrialResult all) {
     double share = 1 / question.units();
-    return new TrialResult(
-        all.current().stream().map(s -> s.times(share)).toList(), all.voltage());
+    return new TrialResult(all.current().stream().map(s -> s.times(share)).toList(), all.voltage());
   }
 
   /** The equipment's words with a capital. */
@@ -119,7 +118,9 @@ final class LoadPageMaker {
 
   private String about() {
     List<String> parts = new ArrayList<>();
-    parts.add(words.of("loads.kind." + question.kind().word()));
+    if (question.preset().isPresent()) {
+      parts.add(words.of("loads.kind." + question.kind().word()));
+    }
     parts.add(
         words.of(
             "loads.about.size",
@@ -210,9 +211,7 @@ final class LoadPageMaker {
             .max()
             .orElse(0);
     return IntStream.rangeClosed(2, Spectrum.HIGHEST_ORDER)
-        .filter(
-            h ->
-                usual(h) && h <= USUAL_HIGHEST || current.magnitude(h) >= 0.01 * strongest)
+        .filter(h -> usual(h) && h <= USUAL_HIGHEST || current.magnitude(h) >= 0.01 * strongest)
         .boxed()
         .sorted(
             Comparator.comparing((Integer h) -> !(usual(h) && h <= USUAL_HIGHEST))
@@ -276,13 +275,10 @@ final class LoadPageMaker {
     for (int k = 0; k < unit.voltage().size(); k++) {
       heads.add(unit.threeLines() ? LINES.get(k).name() : words.of("loads.value"));
     }
-    double nominal =
-        question.source().nominalV() / (unit.threeLines() ? Math.sqrt(3) : 1);
+    double nominal = question.source().nominalV() / (unit.threeLines() ? Math.sqrt(3) : 1);
     Grids grid =
         new Grids(
-            words,
-            words.of(unit.threeLines() ? "loads.voltages.three" : "loads.voltages"),
-            heads);
+            words, words.of(unit.threeLines() ? "loads.voltages.three" : "loads.voltages"), heads);
     row(grid, "loads.volts.rms", unit.voltage(), s -> Figure.of(s.rms()));
     row(grid, "loads.thd", unit.voltage(), Distortion::thdPercent);
     row(
@@ -315,7 +311,7 @@ final class LoadPageMaker {
         words.of("loads.model." + kind + ".source"),
         question
             .preset()
-            .map(p -> words.of("loads.model.preset", p.name(), sentence(p.source())))
+            .map(p -> words.of("loads.preset", p.name(), sentence(p.source())))
             .orElse(""));
   }
 

@@ -1,6 +1,7 @@
 package fourthwire.web.load;
 
 import fourthwire.limits.equipment.EquipmentUse;
+import fourthwire.load.LoadModels;
 import fourthwire.load.LoadRequest;
 import fourthwire.load.Preset;
 import fourthwire.load.trial.TrialSource;
@@ -39,8 +40,7 @@ record LoadQuestion(
 
   /** Ohms of the source at the fundamental; 0 for a stiff one. */
   double sourceOhm() {
-    return Math.hypot(
-        source.ohm(), 2 * Math.PI * request.frequencyHz() * source.henry());
+    return Math.hypot(source.ohm(), 2 * Math.PI * request.frequencyHz() * source.henry());
   }
 
   /** Whether it stands as the equipment standards' tests have it. */
@@ -52,17 +52,15 @@ record LoadQuestion(
 
   /** One unit at rated power. */
   LoadRequest tested() {
-    return new LoadRequest(
-        request.kind(),
-        request.ports(),
-        request.frequencyHz(),
-        request.nominalPortV(),
-        request.rating(),
-        1,
-        1,
-        request.lowerPower(),
-        request.displacementFactor(),
-        request.columns(),
-        request.spectrum());
+    return request.inState(1, 1);
+  }
+
+  /**
+   * With the efficiency found that its rated watts come to, once for all its states.
+   *
+   * @throws IllegalArgumentException where no equipment has these parameters
+   */
+  LoadQuestion sized() {
+    return new LoadQuestion(name, preset, LoadModels.sized(request), source, use);
   }
 }

@@ -20,8 +20,7 @@ import java.util.function.Function;
 /** The survey's model columns as fields of the form: which kinds have them, and in what range. */
 enum ModelField {
   EFFICIENCY("efficiency", 0.01, 1, Kinds.RECTIFIERS, ModelColumns::efficiency),
-  CAPACITANCE(
-      "capacitance_uf_per_w", 1e-3, 1e4, Kinds.RECTIFIERS, ModelColumns::capacitanceUfPerW),
+  CAPACITANCE("capacitance_uf_per_w", 1e-3, 1e4, Kinds.RECTIFIERS, ModelColumns::capacitanceUfPerW),
   SOURCE_RESISTANCE(
       "source_resistance_ohm", 0, 1e6, Kinds.RECTIFIERS, ModelColumns::sourceResistanceOhm),
   SOURCE_INDUCTANCE(
@@ -114,10 +113,7 @@ enum ModelField {
     static final Set<LoadKind> PFC = EnumSet.of(PFC_CONTINUOUS, PFC_CRITICAL);
     static final Set<LoadKind> RESIDUAL =
         EnumSet.of(
-            PFC_CONTINUOUS,
-            PFC_CRITICAL,
-            LoadKind.MAGNETIC_BALLAST,
-            LoadKind.ACTIVE_FRONT_END);
+            PFC_CONTINUOUS, PFC_CRITICAL, LoadKind.MAGNETIC_BALLAST, LoadKind.ACTIVE_FRONT_END);
 
     private Kinds() {}
   }

@@ -46,8 +46,7 @@ final class OrderList {
     return read(list, typed, field, words).map(s -> s.times(1 / s.magnitude(1)));
   }
 
-  private static Optional<Spectrum> read(
-      OrderList list, Typed typed, String field, Words words) {
+  private static Optional<Spectrum> read(OrderList list, Typed typed, String field, Words words) {
     for (String entry : typed.text(field).split("[;\\n\\r]+")) {
       if (!entry.isBlank() && !list.take(entry.strip())) {
         list.wrong = entry.strip();

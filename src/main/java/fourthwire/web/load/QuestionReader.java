@@ -145,9 +145,7 @@ final class QuestionReader {
   private ModelColumns columns(double watts, double volts) {
     Map<ModelField, Double> values = new EnumMap<>(ModelField.class);
     for (ModelField field : ModelField.of(chosen.kind())) {
-      typed
-          .number(field.column(), field.low(), field.high())
-          .ifPresent(v -> values.put(field, v));
+      typed.number(field.column(), field.low(), field.high()).ifPresent(v -> values.put(field, v));
     }
     ModelColumns own = ModelField.columns(values);
     return chosen.preset().map(p -> own.orElse(p.columns(watts, volts))).orElse(own);

@@ -48,8 +48,7 @@ final class Typed {
 
   static OptionalDouble parsed(String text) {
     try {
-      double value =
-          Double.parseDouble(text.indexOf('.') < 0 ? text.replace(',', '.') : text);
+      double value = Double.parseDouble(text.indexOf('.') < 0 ? text.replace(',', '.') : text);
       return Double.isFinite(value) ? OptionalDouble.of(value) : OptionalDouble.empty();
     } catch (NumberFormatException e) {
       return OptionalDouble.empty();
@@ -65,7 +64,13 @@ final class Typed {
     return errors;
   }
 
+  /** A number as it could be typed. */
   static String bound(double value) {
-    return value != 0 && Math.abs(value) < 1e-2 ? String.valueOf(value) : Numbers.plain(value, "");
+    return value != 0 && Math.abs(value) < 1e-4
+        ? new java.math.BigDecimal(value, new java.math.MathContext(3))
+            .stripTrailingZeros()
+            .toString()
+            .replace("E", "e")
+        : Numbers.plain(value, "");
   }
 }

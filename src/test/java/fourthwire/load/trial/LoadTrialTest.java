@@ -18,7 +18,9 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.EnumSource;
 
-/** Laws of equipment behind a source: Ohm's, Kirchhoff's, and that N units are one N times as large. */
+/**
+ * Laws of equipment behind a source: Ohm's, Kirchhoff's, and that N units are one N times as large.
+ */
 class LoadTrialTest {
   private static final Spectrum FLAT =
       Spectrum.of(
@@ -53,7 +55,9 @@ class LoadTrialTest {
     }
   }
 
-  /** Active power leaves the source, or stays in its resistance: P_emf - R·I² is the equipment's. */
+  /**
+   * Active power leaves the source, or stays in its resistance: P_emf - R·I² is the equipment's.
+   */
   @ParameterizedTest
   @EnumSource(
       value = LoadKind.class,
@@ -65,8 +69,7 @@ class LoadTrialTest {
     for (int line = 0; line < result.current().size(); line++) {
       Spectrum i = result.current().get(line);
       Spectrum v = result.voltage().get(line);
-      Spectrum emf =
-          Spectrum.of(h -> v.at(h).plus(i.at(h).times(source.impedance(h, 50))));
+      Spectrum emf = Spectrum.of(h -> v.at(h).plus(i.at(h).times(source.impedance(h, 50))));
       double fundamental = kind.family() == LoadKind.Family.THREE_PHASE ? 400 / Math.sqrt(3) : 230;
       assertThat(emf.magnitude(1)).isCloseTo(fundamental, within(1e-5 * fundamental));
       assertThat(emf.magnitude(5)).isCloseTo(0.03 * fundamental, within(1e-5 * fundamental));
@@ -79,8 +82,7 @@ class LoadTrialTest {
   @Test
   void aFilterThatResonatesWithTheSourceIsSolvedToo() {
     TrialResult result =
-        LoadTrial.solve(
-            request(LoadKind.PFC_CRITICAL, 60, 60), source(230, 0.1, 0.35, FLAT));
+        LoadTrial.solve(request(LoadKind.PFC_CRITICAL, 60, 60), source(230, 0.1, 0.35, FLAT));
     assertThat(result.power().activeW().value().orElseThrow()).isCloseTo(3600, within(1.0));
   }
 
@@ -89,8 +91,7 @@ class LoadTrialTest {
     assertThatThrownBy(
             () ->
                 LoadTrial.solve(
-                    request(LoadKind.CAPACITOR_INPUT, 3000, 10),
-                    source(230, 3, 3, Spectrum.ZERO)))
+                    request(LoadKind.CAPACITOR_INPUT, 3000, 10), source(230, 3, 3, Spectrum.ZERO)))
         .isInstanceOf(NoSteadyStateException.class)
         .hasMessageContaining("source");
   }

@@ -99,9 +99,7 @@ class FigureTest {
             new SpectrumPlot.Group(3, List.of(10.0), OptionalDouble.of(20)),
             new SpectrumPlot.Group(5, List.of(1.0), OptionalDouble.of(500)));
     Document svg =
-        parsed(
-            SpectrumPlot.draw(
-                List.of(Conductor.L1), groups, 2.5, h -> h + "th", "A", "limits"));
+        parsed(SpectrumPlot.draw(List.of(Conductor.L1), groups, 2.5, h -> h + "th", "A", "limits"));
     assertThat(element(svg, "line", "limit").getAttribute("y1")).isEqualTo("0");
     assertThat(((Element) svg.getElementsByTagName("rect").item(0)).getAttribute("height"))
         .isEqualTo("104");
@@ -122,7 +120,9 @@ class FigureTest {
                     new CurvePlot.Curve(
                         CurvePlot.Style.SOLID,
                         List.of(
-                            OptionalDouble.of(100), OptionalDouble.empty(), OptionalDouble.of(50)))),
+                            OptionalDouble.of(100),
+                            OptionalDouble.empty(),
+                            OptionalDouble.of(50)))),
                 OptionalDouble.of(0.5),
                 "%",
                 "curves"));
