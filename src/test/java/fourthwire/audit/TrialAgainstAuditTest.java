@@ -38,6 +38,7 @@ class TrialAgainstAuditTest {
     "magnetic-ballast,     44,   20, 0.4, 0.25",
     "linear,               2000,  1, 0.5, 0.5",
     "six-pulse,            7500,  2, 0.05, 0.08",
+    "twelve-pulse,         45000, 1, 0.02, 0.05",
     "motor,                5500,  2, 0.05, 0.08",
     "active-front-end,     15000, 1, 0.05, 0.08",
   })

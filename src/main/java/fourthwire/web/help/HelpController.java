@@ -6,6 +6,7 @@ import fourthwire.load.Preset;
 import fourthwire.load.PresetParameter;
 import fourthwire.load.Presets;
 import fourthwire.load.Spread;
+import fourthwire.site.LoadKind;
 import fourthwire.web.support.Numbers;
 import fourthwire.web.support.Verdict;
 import java.util.Arrays;
@@ -66,6 +67,8 @@ class HelpController {
   @GetMapping("/help")
   String help(Model model) {
     model.addAttribute("editions", LimitEditions.editions());
+    model.addAttribute("equipment", LimitEditions.equipment());
+    model.addAttribute("kinds", Arrays.stream(LoadKind.values()).map(LoadKind::word).toList());
     model.addAttribute("checks", FindingCode.values());
     model.addAttribute("presets", Presets.all().stream().map(PresetRow::of).toList());
     model.addAttribute("act", Verdict.ACT);

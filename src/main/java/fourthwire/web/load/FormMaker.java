@@ -51,13 +51,25 @@ final class FormMaker {
       fields.add(number("level", words.of("loads.hint.level")));
     }
     fields.add(number("units", words.of("loads.hint.units")));
-    if (kind.family() == LoadKind.Family.LINEAR || kind == LoadKind.MEASURED) {
-      fields.add(select("lines", choices("lines", "one", "three"), ""));
+    if (kind.family() != LoadKind.Family.THREE_PHASE) {
+      fields.add(lines(kind));
     }
     if (kind == LoadKind.MEASURED) {
       fields.add(lines("spectrum", words.of("loads.hint.spectrum")));
     }
     return fields;
+  }
+
+  /** Three lines: with N for a single-phase kind, without for one that spans them. */
+  private Field lines(LoadKind kind) {
+    boolean three = reader.threeLines() || reader.parts() == 3;
+    String key =
+        kind.family() == LoadKind.Family.SINGLE_PHASE ? "loads.lines.parts" : "loads.lines.three";
+    List<Choice> choices =
+        List.of(
+            new Choice("one", words.of("loads.lines.one"), !three),
+            new Choice("three", words.of(key), three));
+    return select("lines", List.of(new Choices("", choices)), "");
   }
 
   private List<Choices> loads() {
@@ -82,7 +94,11 @@ final class FormMaker {
         select("hz", choices("hz", "50", "60"), ""),
         number("fault_mva", words.of("loads.hint.fault_mva")),
         number("x_over_r", words.of("loads.hint.x_over_r")),
-        number("r_ohm", words.of("loads.hint.r_ohm." + (reader.threeLines() ? "three" : "one"))),
+        number(
+            "r_ohm",
+            words.of(
+                "loads.hint.r_ohm."
+                    + (reader.threeLines() || reader.parts() == 3 ? "three" : "one"))),
         number("x_ohm", words.of("loads.hint.x_ohm")),
         select(
             "background",
@@ -121,7 +137,7 @@ final class FormMaker {
   /** What the preset gives, else what the kind takes for granted. */
   private String hint(ModelField field) {
     double volts = typed.number("volts", 24, 1000).orElse(reader.assumedVolts());
-    double watts = typed.number("watts", 0.1, 2e6).orElse(reader.assumedWatts());
+    double watts = typed.number("watts", 0.1, 2e6).orElse(reader.assumedWatts()) / reader.parts();
     Optional<ModelColumns> ofPreset = reader.chosen().preset().map(p -> p.columns(watts, volts));
     OptionalDouble given = ofPreset.map(field::of).orElse(OptionalDouble.empty());
     if (given.isPresent()) {

@@ -68,7 +68,9 @@ final class LoadPageMaker {
     if (question.units() > 1) {
       said.add(
           words.of(
-              question.threeLines() ? "loads.together.three" : "loads.together",
+              question.threeLines() || question.parts() > 1
+                  ? "loads.together.three"
+                  : "loads.together",
               Numbers.plain(question.units(), ""),
               Numbers.of(all.first().rms(), "A")));
     }
@@ -127,6 +129,9 @@ final class LoadPageMaker {
             Numbers.plain(question.ratedW(), "W"),
             Numbers.plain(question.source().nominalV(), "V"),
             Numbers.plain(question.request().frequencyHz(), "Hz")));
+    if (question.parts() > 1) {
+      parts.add(words.of("loads.about.parts"));
+    }
     if (question.request().demand() < 1) {
       parts.add(
           words.of("loads.about.level", Numbers.plain(100 * question.request().demand(), "%")));
@@ -146,13 +151,11 @@ final class LoadPageMaker {
   }
 
   private LoadPage.Answer answer(TrialResult unit) {
-    Map<Conductor, Spectrum> currents = new EnumMap<>(Conductor.class);
+    Map<Conductor, Spectrum> currents = conductors(unit);
     List<LoadPage.Key> keys = new ArrayList<>();
-    for (int k = 0; k < unit.current().size(); k++) {
-      Conductor line = LINES.get(k);
-      currents.put(line, unit.current().get(k));
-      String name = unit.threeLines() ? line.name() : words.of("loads.key.current");
-      keys.add(new LoadPage.Key(Shapes.sample(line), name));
+    for (Conductor c : currents.keySet()) {
+      String name = currents.size() > 1 ? c.name() : words.of("loads.key.current");
+      keys.add(new LoadPage.Key(Shapes.sample(c), name));
     }
     keys.add(new LoadPage.Key(Shapes.backdrop(), voltageKey(unit)));
     return new LoadPage.Answer(
@@ -169,9 +172,27 @@ final class LoadPageMaker {
         limits.table(unit.first()));
   }
 
+  /** What flows in each conductor; three equal parts return through N. */
+  private Map<Conductor, Spectrum> conductors(TrialResult unit) {
+    Map<Conductor, Spectrum> currents = new EnumMap<>(Conductor.class);
+    int lines = Math.max(unit.current().size(), question.parts());
+    for (int k = 0; k < lines; k++) {
+      int line = k;
+      currents.put(
+          LINES.get(k),
+          unit.threeLines()
+              ? unit.current().get(k)
+              : Spectrum.of(h -> unit.first().at(h).turned(-120.0 * h * line)));
+    }
+    if (question.parts() > 1) {
+      currents.put(Conductor.N, currents.values().stream().reduce(Spectrum.ZERO, Spectrum::plus));
+    }
+    return currents;
+  }
+
   private String voltageKey(TrialResult unit) {
     return words.of(
-        unit.threeLines() ? "loads.key.voltage.three" : "loads.key.voltage",
+        unit.threeLines() || question.parts() > 1 ? "loads.key.voltage.three" : "loads.key.voltage",
         Numbers.of(Waveform.of(unit.voltage().get(0), SAMPLES).peak(), "V"));
   }
 
@@ -234,18 +255,30 @@ final class LoadPageMaker {
   }
 
   private Grid currents(TrialResult unit) {
+    Map<Conductor, Spectrum> currents = conductors(unit);
+    List<Spectrum> spectra = List.copyOf(currents.values());
     List<String> heads = new ArrayList<>(List.of(words.of("loads.figure")));
-    for (int k = 0; k < unit.current().size(); k++) {
-      heads.add(unit.threeLines() ? LINES.get(k).name() : words.of("loads.value"));
-    }
+    currents
+        .keySet()
+        .forEach(c -> heads.add(currents.size() > 1 ? c.name() : words.of("loads.value")));
     Grids grid = new Grids(words, words.of("loads.currents"), heads);
-    row(grid, "loads.rms", unit.current(), s -> Figure.of(s.rms()));
-    row(grid, "loads.fundamental", unit.current(), s -> Figure.of(s.magnitude(1)));
-    row(grid, "loads.peak", unit.current(), s -> Figure.of(Waveform.of(s, SAMPLES).peak()));
-    row(grid, "loads.crest", unit.current(), s -> Waveform.of(s, SAMPLES).crestFactor());
-    row(grid, "loads.thd", unit.current(), Distortion::thdPercent);
-    row(grid, "loads.loss-factor", unit.current(), HarmonicLoss::harmonicLossFactor);
+    row(grid, "loads.rms", spectra, s -> Figure.of(s.rms()));
+    row(grid, "loads.fundamental", spectra, s -> Figure.of(settled(s.magnitude(1), s)));
+    row(grid, "loads.peak", spectra, s -> Figure.of(Waveform.of(s, SAMPLES).peak()));
+    row(grid, "loads.crest", spectra, s -> Waveform.of(s, SAMPLES).crestFactor());
+    row(grid, "loads.thd", spectra, LoadPageMaker::thd);
+    row(grid, "loads.loss-factor", spectra, HarmonicLoss::harmonicLossFactor);
     return grid.done();
+  }
+
+  /** A neutral's fundamental that is only rounding is none. */
+  private static double settled(double amps, Spectrum s) {
+    return amps < 1e-9 * s.rms() ? 0 : amps;
+  }
+
+  /** Left out where there is no fundamental to take it on. */
+  private static Figure thd(Spectrum s) {
+    return settled(s.magnitude(1), s) > 0 ? Distortion.thdPercent(s) : Figure.unknown("");
   }
 
   private Grid powers(PowerFigures power) {
@@ -255,7 +288,7 @@ final class LoadPageMaker {
             words.of("loads.powers"),
             List.of(words.of("loads.figure"), words.of("loads.value")));
     boolean kilo = question.ratedW() >= 10_000;
-    double scale = kilo ? 1e-3 : 1;
+    double scale = question.parts() * (kilo ? 1e-3 : 1);
     String of = kilo ? ".kilo" : "";
     grid.row(words.of("loads.active" + of), List.of(power.activeW().map(x -> x * scale)));
     grid.row(
@@ -321,7 +354,7 @@ final class LoadPageMaker {
       OptionalDouble given = field.of(question.request().columns());
       OptionalDouble otherwise =
           LoadDefaults.of(
-              field, question.kind(), question.request().nominalPortV(), question.ratedW());
+              field, question.kind(), question.request().nominalPortV(), question.partW());
       if (given.isPresent()) {
         facts.add(fact(field, words.of("loads.granted.given", Typed.bound(given.getAsDouble()))));
       } else if (otherwise.isPresent()) {

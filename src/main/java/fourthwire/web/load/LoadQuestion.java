@@ -12,13 +12,15 @@ import java.util.Optional;
  * What the form asks, understood.
  *
  * @param name the preset's or the kind's words
- * @param request all units at the asked level
+ * @param request all units at the asked level, of one part where there are several
+ * @param parts 1, or 3 equal ones between a line and the neutral each
  * @param use what the equipment is for, as said or as its name says
  */
 record LoadQuestion(
     String name,
     Optional<Preset> preset,
     LoadRequest request,
+    int parts,
     TrialSource source,
     EquipmentUse use) {
 
@@ -26,7 +28,13 @@ record LoadQuestion(
     return request.kind();
   }
 
+  /** Of one unit, all its parts together. */
   double ratedW() {
+    return parts * partW();
+  }
+
+  /** Of one unit's part on one line. */
+  double partW() {
     return ((LoadRequest.Rating.Watts) request.rating()).w();
   }
 
@@ -61,6 +69,6 @@ record LoadQuestion(
    * @throws IllegalArgumentException where no equipment has these parameters
    */
   LoadQuestion sized() {
-    return new LoadQuestion(name, preset, LoadModels.sized(request), source, use);
+    return new LoadQuestion(name, preset, LoadModels.sized(request), parts, source, use);
   }
 }

@@ -58,6 +58,14 @@ final class QuestionReader {
     };
   }
 
+  /** Equal parts it is made of, each on a line of its own: a single-phase kind on three lines. */
+  int parts() {
+    boolean single = chosen.kind().family() == LoadKind.Family.SINGLE_PHASE;
+    String lines = typed.text("lines");
+    boolean three = lines.isEmpty() ? chosen.name().contains("three-phase") : lines.equals("three");
+    return single && three ? 3 : 1;
+  }
+
   double hertz() {
     return typed.text("hz").equals("60") ? 60 : 50;
   }
@@ -88,7 +96,7 @@ final class QuestionReader {
       typed.error("units", words.of("loads.error.whole", typed.text("units")));
     }
     OptionalDouble displacement = displacement();
-    ModelColumns columns = columns(watts, volts);
+    ModelColumns columns = columns(watts / parts(), volts);
     Optional<Spectrum> spectrum = spectrum(displacement);
     Optional<TrialSource> source = source(volts);
     if (!typed.errors().isEmpty() || source.isEmpty()) {
@@ -100,7 +108,7 @@ final class QuestionReader {
             threeLines() ? 3 : 1,
             hertz(),
             volts,
-            new LoadRequest.Rating.Watts(watts),
+            new LoadRequest.Rating.Watts(watts / parts()),
             units,
             chosen.kind().runsAtLowerPower() ? level / 100 : 1,
             chosen.kind().runsAtLowerPower(),
@@ -108,7 +116,7 @@ final class QuestionReader {
             columns,
             spectrum);
     return Optional.of(
-        new LoadQuestion(chosen.name(), chosen.preset(), request, source.get(), use()));
+        new LoadQuestion(chosen.name(), chosen.preset(), request, parts(), source.get(), use()));
   }
 
   private void checkChoices() {
@@ -148,7 +156,7 @@ final class QuestionReader {
       typed.number(field.column(), field.low(), field.high()).ifPresent(v -> values.put(field, v));
     }
     ModelColumns own = ModelField.columns(values);
-    return chosen.preset().map(p -> own.orElse(p.columns(watts, volts))).orElse(own);
+    return chosen.preset().map(p -> own.orElse(p.columns(watts / parts(), volts))).orElse(own);
   }
 
   /** Of a measured load, on a fundamental of 1. */

@@ -22,7 +22,6 @@ import org.junit.jupiter.params.provider.MethodSource;
 class LoadDefaultsTest {
   static Stream<Arguments> fields() {
     return Stream.of(LoadKind.values())
-        .filter(kind -> kind != LoadKind.TWELVE_PULSE)
         .flatMap(kind -> ModelField.of(kind).stream().map(field -> Arguments.of(kind, field)));
   }
 

@@ -36,7 +36,7 @@ class LoadPageTest extends ServiceTest {
   }
 
   @ParameterizedTest
-  @EnumSource(value = LoadKind.class, names = "TWELVE_PULSE", mode = EnumSource.Mode.EXCLUDE)
+  @EnumSource(LoadKind.class)
   void everyKindHasItsPage(LoadKind kind) {
     String more = kind == LoadKind.MEASURED ? "&spectrum=1+100+-20;3+60+170" : "";
     complete(page("/loads?load=" + kind.word() + "&r_ohm=0.05&x_ohm=0.03&background=flat" + more));
@@ -170,6 +170,33 @@ class LoadPageTest extends ServiceTest {
     assertThat(page(asked))
         .contains("THD\u00a0" + thd + ", power\u00a0factor\u00a0" + factor)
         .contains(Numbers.of(result.first().rms() / units));
+  }
+
+  /** Three equal parts: N carries three times the triplens, √(Σ (3·I_h)²) over h = 3, 9, 15 … */
+  @Test
+  void threeEqualPartsReturnThroughTheNeutral() {
+    TrialResult part =
+        LoadTrial.solve(
+            new LoadRequest(
+                LoadKind.CAPACITOR_INPUT,
+                1,
+                50,
+                230,
+                new LoadRequest.Rating.Watts(100),
+                1,
+                1,
+                true,
+                OptionalDouble.empty(),
+                ModelColumns.NONE,
+                Optional.empty()),
+            TrialSource.ideal(230));
+    double square = 0;
+    for (int h = 3; h <= Spectrum.HIGHEST_ORDER; h += 3) {
+      square += 9 * Math.pow(part.first().magnitude(h), 2);
+    }
+    assertThat(page("/loads?load=capacitor-input&watts=300&lines=three"))
+        .contains("three equal parts", "trace n", Numbers.of(Math.sqrt(square)));
+    assertThat(page("/loads?load=EV+charger,+three-phase")).contains("three equal parts");
   }
 
   /** The spectrum can be put into a survey as it is: order 1 at 100, degrees of the contract. */
