@@ -24,18 +24,27 @@ public final class LoadModels {
    *     user
    */
   public static LoadModel of(LoadRequest request) {
+    return of(request, new DesignPowers());
+  }
+
+  /**
+   * Likewise, for many rows.
+   *
+   * @param known the powers found for rows before
+   */
+  public static LoadModel of(LoadRequest request, DesignPowers known) {
     RequestCheck.check(request);
     return switch (request.kind()) {
       case RESISTIVE -> constantImpedance(request, 1);
       case LINEAR -> constantImpedance(request, request.displacementFactor().orElse(1));
       case MEASURED -> GivenSpectra.measured(request);
-      case CAPACITOR_INPUT, CAPACITOR_INPUT_CHOKE -> Rectifiers.capacitorInput(request);
-      case SIX_PULSE -> Rectifiers.sixPulse(request);
-      case PFC_CONTINUOUS, PFC_CRITICAL -> PfcSupplies.of(request);
+      case CAPACITOR_INPUT, CAPACITOR_INPUT_CHOKE -> Rectifiers.capacitorInput(request, known);
+      case SIX_PULSE -> Rectifiers.sixPulse(request, known);
+      case PFC_CONTINUOUS, PFC_CRITICAL -> PfcSupplies.of(request, known);
       case MOTOR -> motor(request);
       case PHASE_DIMMER -> dimmer(request);
       case MAGNETIC_BALLAST, ACTIVE_FRONT_END -> GivenSpectra.published(request);
-      case TWELVE_PULSE -> Rectifiers.twelvePulse(request);
+      case TWELVE_PULSE -> Rectifiers.twelvePulse(request, known);
     };
   }
 

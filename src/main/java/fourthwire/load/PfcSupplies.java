@@ -19,11 +19,11 @@ final class PfcSupplies {
 
   private PfcSupplies() {}
 
-  static LoadModel of(LoadRequest request) {
+  static LoadModel of(LoadRequest request, DesignPowers known) {
     double rated =
         request.rating() instanceof LoadRequest.Rating.Watts w
             ? w.w()
-            : new DesignPower(request).find(p -> model(request, p, 1, 1));
+            : known.of(request, p -> model(request, p, 1, 1));
     double share = request.lowerPower() ? request.demand() : 1;
     double units = request.lowerPower() ? request.units() : request.units() * request.demand();
     return model(request, rated, share, units);

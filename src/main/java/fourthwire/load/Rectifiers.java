@@ -39,9 +39,9 @@ final class Rectifiers {
 
   private Rectifiers() {}
 
-  static LoadModel capacitorInput(LoadRequest request) {
+  static LoadModel capacitorInput(LoadRequest request, DesignPowers known) {
     DoubleFunction<BridgeLoad> unit = power -> singlePhaseUnit(request, power);
-    BridgeLoad load = sized(request, unit, l -> new CapacitorInput(l, request.frequencyHz()));
+    BridgeLoad load = sized(request, known, unit, l -> new CapacitorInput(l, request.frequencyHz()));
     return new CapacitorInput(load, request.frequencyHz());
   }
 
@@ -69,17 +69,21 @@ final class Rectifiers {
         diode(c));
   }
 
-  static LoadModel sixPulse(LoadRequest request) {
-    return threeLine(request, 1, load -> new SixPulse(load, request.frequencyHz()));
+  static LoadModel sixPulse(LoadRequest request, DesignPowers known) {
+    return threeLine(request, known, 1, load -> new SixPulse(load, request.frequencyHz()));
   }
 
-  static LoadModel twelvePulse(LoadRequest request) {
-    return threeLine(request, 2, load -> new TwelvePulse(load, request.frequencyHz()));
+  static LoadModel twelvePulse(LoadRequest request, DesignPowers known) {
+    return threeLine(request, known, 2, load -> new TwelvePulse(load, request.frequencyHz()));
   }
 
   private static LoadModel threeLine(
-      LoadRequest request, int bridges, Function<BridgeLoad, LoadModel> model) {
-    return model.apply(sized(request, power -> threeLineUnit(request, bridges, power), model));
+      LoadRequest request,
+      DesignPowers known,
+      int bridges,
+      Function<BridgeLoad, LoadModel> model) {
+    return model.apply(
+        sized(request, known, power -> threeLineUnit(request, bridges, power), model));
   }
 
   /** The lead is common to all bridges, each has a line choke for its share of the power. */
@@ -117,13 +121,16 @@ final class Rectifiers {
    * @param unit one unit by its rated direct-current power
    */
   static BridgeLoad sized(
-      LoadRequest request, DoubleFunction<BridgeLoad> unit, Function<BridgeLoad, LoadModel> model) {
+      LoadRequest request,
+      DesignPowers known,
+      DoubleFunction<BridgeLoad> unit,
+      Function<BridgeLoad, LoadModel> model) {
     OptionalDouble efficiency = request.columns().efficiency();
     double rated;
     if (efficiency.isPresent() && request.rating() instanceof LoadRequest.Rating.Watts w) {
       rated = w.w() * efficiency.getAsDouble();
     } else {
-      rated = new DesignPower(request).find(p -> model.apply(unit.apply(p)));
+      rated = known.of(request, p -> model.apply(unit.apply(p)));
     }
     BridgeLoad one = unit.apply(rated);
     return request.lowerPower()

@@ -1,6 +1,7 @@
 package fourthwire.audit.plan;
 
 import fourthwire.audit.AuditFailedException;
+import fourthwire.load.DesignPowers;
 import fourthwire.load.LoadModels;
 import fourthwire.load.LoadRequest.Rating;
 import fourthwire.load.model.LoadModel;
@@ -13,10 +14,14 @@ import fourthwire.load.model.NoSteadyStateException;
  * @param model what it draws
  */
 public record Device(LoadPlacement placement, LoadModel model) {
-  /** Makes the model; says which load it is if that can't be done. */
-  public static Device of(LoadPlacement placement) {
+  /**
+   * Makes the model; says which load it is if that can't be done.
+   *
+   * @param known powers found for loads before
+   */
+  public static Device of(LoadPlacement placement, DesignPowers known) {
     try {
-      return new Device(placement, LoadModels.of(placement.request()));
+      return new Device(placement, LoadModels.of(placement.request(), known));
     } catch (IllegalArgumentException | NoSteadyStateException e) {
       throw new AuditFailedException(
           "Load \"%s\" on %s: %s"

@@ -16,6 +16,7 @@ import fourthwire.audit.plan.Place;
 import fourthwire.audit.solve.CoupledSolver;
 import fourthwire.audit.solve.SiteSolution;
 import fourthwire.limits.LimitEditions;
+import fourthwire.load.DesignPowers;
 import fourthwire.site.SiteTree;
 import fourthwire.site.Supply;
 import fourthwire.site.Survey;
@@ -44,7 +45,9 @@ public final class HarmonicAudit implements Audit {
     Supply supply = supply(survey, request.supply());
     progress.at(0.02, "Building the load models");
     SiteTree tree = SiteTree.of(survey, supply);
-    List<Device> devices = LoadPlacements.of(survey, tree).stream().map(Device::of).toList();
+    DesignPowers known = new DesignPowers();
+    List<Device> devices =
+        LoadPlacements.of(survey, tree).stream().map(p -> Device.of(p, known)).toList();
     NetworkPlan plan = NetworkPlan.of(survey, supply, tree, devices, true);
     SiteSolution solution =
         new CoupledSolver(survey, plan, devices)

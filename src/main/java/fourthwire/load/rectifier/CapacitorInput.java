@@ -16,6 +16,10 @@ import fourthwire.load.model.LoadSolver;
  * latter is in series with the former as long as its current ends before the voltage behind the
  * bridge crosses zero, and is refused beyond.
  *
+ * <p>A small capacitor behind a choke may have no stable state that repeats in mirrored halves; the
+ * one that repeats after the whole cycle, with even orders, is then found, or it is said that none
+ * settles.
+ *
  * <p>Assumed: constant power between crests, an ideal capacitor (its loss resistance counts in the
  * diode's), no inrush limiter drift. Valid from stiff to soft sources, in discontinuous and
  * continuous conduction, under any voltage of orders 1 to 50. Checked against circuit-simulator

@@ -30,6 +30,12 @@ final class CapacitorInputSolver implements LoadSolver {
 
   private static final double COARSEST = 5e-7;
 
+  /** No source rings a loaded capacitor up to so many times the crest. */
+  private static final double MOST_RESONANCE = 10;
+
+  /** Defect at which a coarse search ends, as a share of the crest. */
+  private static final double NEAR = 2e-3;
+
   /** A capacitor that rings with its source can be charged over the crest, less than to twice. */
   private static final double MOST_CHARGE = 2;
 
@@ -42,8 +48,14 @@ final class CapacitorInputSolver implements LoadSolver {
   /** Largest multiplier of a stable state; a little over 1 for its own error. */
   private static final double MOST_MULTIPLIER = 1.001;
 
+  /**
+   * Where a pulse just parts in two the map may jump by the error of a time step: this share of the
+   * energy is accepted where the voltage can't be told any nearer.
+   */
+  private static final double JUMP = 2e-4;
+
   private static final int MOST_STEPS = 40;
-  private static final int MOST_SUBSTITUTIONS = 600;
+  private static final int MOST_SUBSTITUTIONS = 200;
 
   private static final String FREEWHEELS =
       "the direct-current choke of a capacitor-input rectifier carries its current past the"
@@ -58,6 +70,7 @@ final class CapacitorInputSolver implements LoadSolver {
   private PairBridge bridge = WORKSPACE.get();
   private double peak;
   private double toleranceV;
+  private double jumpV;
   private double section;
   private boolean halfWave;
   private double lastV;
@@ -108,10 +121,12 @@ final class CapacitorInputSolver implements LoadSolver {
     if (!(peak > 0) || Double.isInfinite(peak)) {
       throw new NoSteadyStateException("a capacitor-input rectifier has no voltage to draw from");
     }
-    double share =
-        TOLERANCE * load.powerW() / (2 * frequencyHz * load.capacitanceF() * peak * peak);
-    toleranceV = peak * Math.max(FINEST, Math.min(COARSEST, share));
+    double perEnergy = load.powerW() / (2 * frequencyHz * load.capacitanceF() * peak);
+    toleranceV =
+        Math.max(FINEST * peak, Math.min(COARSEST * peak, TOLERANCE * perEnergy));
+    jumpV = Math.max(toleranceV, JUMP * perEnergy);
     bridge.floorV = LEAST_SHARE * peak;
+    bridge.ceilingV = MOST_RESONANCE * peak;
     double cellSeconds = 1 / (frequencyHz * CycleTable.CELLS);
     double henry = load.lineHenry() + seriesHenry;
     bridge.path.set(
@@ -152,31 +167,57 @@ final class CapacitorInputSolver implements LoadSolver {
     return square > 0.2 * peak * peak ? Math.sqrt(square) : 0.7 * peak;
   }
 
-  /** One unknown, by Newton steps kept between bounds; false where current flows at the section. */
+  /** One unknown; false where current flows at the section. */
   private boolean discontinuous() {
+    double v = firstGuess();
+    if (lastV == 0) {
+      bridge.path.coarse();
+      double near = newton(v, NEAR * peak, NEAR * peak);
+      bridge.path.fine();
+      v = near > 0 ? near - (bridge.v - near) / slope() : v;
+    }
+    double found = newton(v, toleranceV, jumpV);
+    return found > 0 && found(0, found);
+  }
+
+  /**
+   * Newton steps in the voltage alone, kept between bounds.
+   *
+   * @param closeV accepted defect
+   * @param jumpV accepted defect where the bounds have met
+   * @return the voltage that was marched last; 0 where there is none, or current flows at the
+   *     section
+   */
+  private double newton(double start, double closeV, double jumpV) {
     double high = MOST_CHARGE * peak;
     double low = 0;
-    double v = firstGuess();
+    double v = start;
     for (int n = 0; n < MOST_STEPS; n++) {
       if (!march(0, v) || bridge.i != 0) {
-        return false;
+        return 0;
       }
       double defect = bridge.v - v;
-      if (Math.abs(defect) < toleranceV) {
-        return found(0, v);
+      boolean pinched = high - low < toleranceV;
+      if (Math.abs(defect) < (pinched ? jumpV : closeV)) {
+        return v;
       }
       if (defect > 0) {
         low = Math.max(low, v);
       } else {
         high = Math.min(high, v);
       }
-      double next = v - defect / Math.min(-0.02, Math.max(-3, bridge.tangent.vv - 1));
+      double next = v - defect / slope();
       if (next >= high || next <= low) {
         next = defect > 0 ? 0.5 * (v + high) : low > 0 ? 0.5 * (v + low) : v + defect;
       }
       v = next;
     }
-    return false;
+    return 0;
+  }
+
+  /** Derivative of the defect of the last march, within what is sensible. */
+  private double slope() {
+    return Math.min(-0.02, Math.max(-3, bridge.tangent.vv - 1));
   }
 
   private boolean found(double i, double v) {
@@ -236,7 +277,8 @@ final class CapacitorInputSolver implements LoadSolver {
       if (!march(i, v)) {
         return false;
       }
-      if (closes(i, endI() - i, bridge.v - v)) {
+      double slack = n < MOST_SUBSTITUTIONS / 2 ? 1 : jumpV / toleranceV;
+      if (closes(i, (endI() - i) / slack, (bridge.v - v) / slack)) {
         return found(i, v);
       }
       i = endI();

@@ -1,7 +1,5 @@
 package fourthwire.load.rectifier;
 
-import java.util.function.DoubleUnaryOperator;
-
 /**
  * The capacitor alone with its load while no diode conducts: v² falls linearly under constant
  * power, until the driving voltage passes v and the diodes' thresholds.
@@ -16,13 +14,24 @@ final class Discharge {
    */
   private static final double REST = 0.1;
 
-  private final DoubleUnaryOperator drive;
+  private final Drive drive;
   private final PathStep path;
   private final EventFinder.Margin excess = this::excess;
 
   private double from;
   private double square;
   private double fall;
+
+  /** What would drive a current. */
+  interface Drive {
+    /** Volts at a position in cells. */
+    double at(double position);
+
+    /** Volts at a node. */
+    default double atNode(int node) {
+      return at(node);
+    }
+  }
 
   /** Where the discharge ended, in cells. */
   double u;
@@ -36,9 +45,9 @@ final class Discharge {
   /**
    * Of a path.
    *
-   * @param drive the voltage that would drive a current at a position in cells
+   * @param drive the voltage that would drive a current
    */
-  Discharge(DoubleUnaryOperator drive, PathStep path) {
+  Discharge(Drive drive, PathStep path) {
     this.drive = drive;
     this.path = path;
   }
@@ -55,17 +64,31 @@ final class Discharge {
     fall = 2 * path.power / path.capacitance;
     u = Math.min(to, justLeft && excess(from) < path.slopeV ? from + REST : from);
     turnedOn = u < to && excess(u) >= 0;
-    boolean alive = true;
-    while (!turnedOn && u < to && alive) {
-      double node = Math.min(Math.floor(u) + 1, to);
-      double left = square - fall * (node - from);
-      double free = drive.applyAsDouble(node) - path.onsetV;
-      alive = left > floorV * floorV;
-      turnedOn = free > 0 && free * free >= left;
-      u = turnedOn ? turnOn(node) : node;
-    }
+    boolean alive = turnedOn || toNextTurnOn(to, floorV * floorV);
     v = alive ? Math.sqrt(square - fall * (u - from)) : 0;
     return alive;
+  }
+
+  /** From node to node, comparing squares; false where the voltage falls to the floor. */
+  private boolean toNextTurnOn(double to, double floor) {
+    int node = (int) u;
+    while (u < to) {
+      node++;
+      boolean last = node >= to;
+      double place = last ? to : node;
+      double left = square - fall * (place - from);
+      double free = (last ? drive.at(to) : drive.atNode(node)) - path.onsetV;
+      if (left <= floor) {
+        return false;
+      }
+      if (free > 0 && free * free >= left) {
+        turnedOn = true;
+        u = turnOn(place);
+        return true;
+      }
+      u = place;
+    }
+    return true;
   }
 
   /** Where between u and a node the drive passes. */
@@ -74,7 +97,7 @@ final class Discharge {
   }
 
   private double excess(double at) {
-    return drive.applyAsDouble(at)
+    return drive.at(at)
         - path.onsetV
         - Math.sqrt(Math.max(0, square - fall * (at - from)));
   }

@@ -11,7 +11,7 @@ package fourthwire.load.rectifier;
  */
 final class PairBridge {
   /** First steps after a turn-on, as shares of the way to a node: the current starts like t². */
-  private static final double[] GRADING = {0.02, 0.06, 0.16, 0.36, 1};
+  private static final double[] GRADING = {0.02, 0.06, 0.14, 0.3, 0.6, 1};
 
   private static final int MOST_SWITCHINGS = 200;
   private static final double EVENT_CELLS = 1e-7;
@@ -23,6 +23,9 @@ final class PairBridge {
 
   /** Capacitor voltage under which the load counts as having emptied it. */
   double floorV;
+
+  /** Capacitor voltage beyond which a march is a runaway of a guess, no state of the circuit. */
+  double ceilingV;
 
   /** Share of the path's inductance that lies between bridge and capacitor. */
   double directShare;
@@ -39,7 +42,7 @@ final class PairBridge {
   /** Capacitor voltage. */
   double v;
 
-  private final Discharge discharge = new Discharge(at -> Math.abs(emf.at(at)), path);
+  private final Discharge discharge = new Discharge(new Size(), path);
   private final EventFinder.Margin shortfall = this::shortfall;
 
   /** Position in cells. */
@@ -50,12 +53,20 @@ final class PairBridge {
 
   private double amps;
 
+  /** The electromotive force in the current's direction and its slope per cell there. */
+  private double drive;
+
+  private double driveSlope;
+
+  /** And at the end of the step. */
+  private double driveAfter;
+
   /**
    * Marches from a position with signed current i0 and voltage v0 over a number of cells, keeping
    * the current in {@link #trace} and the derivatives of the end by the start in {@link #tangent}.
    *
-   * @return false where the load empties the capacitor, or the current breaks up without end as it
-   *     does so
+   * @return false where the load empties the capacitor, the voltage runs away, or the current breaks
+   *     up without end
    */
   boolean march(double from, double cells, double i0, double v0) {
     u = from;
@@ -74,12 +85,25 @@ final class PairBridge {
       if (u < to) {
         conduct(to);
         justLeft = true;
-        if (v <= floorV || ++switchings > MOST_SWITCHINGS) {
+        if (!(v > floorV && v < ceilingV) || ++switchings > MOST_SWITCHINGS) {
           return false;
         }
       }
     }
     return true;
+  }
+
+  /** The size of the electromotive force. */
+  private final class Size implements Discharge.Drive {
+    @Override
+    public double at(double position) {
+      return Math.abs(emf.at(position));
+    }
+
+    @Override
+    public double atNode(int node) {
+      return Math.abs(emf.value[node]);
+    }
   }
 
   /** Off until |e| passes the capacitor; leaves u at the turn-on or at the end. */
@@ -103,10 +127,11 @@ final class PairBridge {
     sign = (starting ? emf.at(u) : i) >= 0 ? 1 : -1;
     amps = starting ? path.threshold : Math.abs(i);
     trace.start(u, sign * amps);
+    driveAfter = sign * emf.at(u);
     double base = u;
     double span = Math.min(path.nextNode(path.nextNode(u)), to) - u;
     int graded = starting ? 0 : GRADING.length;
-    while (u < to && amps > 0 && v > floorV) {
+    while (u < to && amps > 0 && v > floorV && v < ceilingV) {
       advance(
           graded < GRADING.length
               ? base + GRADING[graded++] * span
@@ -118,6 +143,8 @@ final class PairBridge {
   /** One step to a position, or to where the current ends before. */
   private void advance(double next) {
     double h = next - u;
+    drive = driveAfter;
+    driveSlope = sign * emf.slopeAt(u);
     double missing = shortfall(h);
     boolean ends = missing > 0;
     if (ends) {
@@ -130,13 +157,14 @@ final class PairBridge {
     u = ends ? u + h : next;
     v = path.v;
     amps = end;
-    freewheels |= directShare * sign * emf.at(u) + (1 - directShare) * v < 0;
+    freewheels |= directShare > 0 && directShare * driveAfter + (1 - directShare) * v < 0;
     trace.next(u, sign * end, sign * charge);
   }
 
   /** Steps by h cells; by how much the current falls short of the threshold then. */
   private double shortfall(double h) {
-    path.step(h, amps, v, sign * emf.at(u), sign * emf.slopeAt(u), sign * emf.at(u + h));
+    driveAfter = sign * emf.at(u + h);
+    path.step(h, amps, v, drive, driveSlope, driveAfter);
     return path.threshold - path.i;
   }
 }

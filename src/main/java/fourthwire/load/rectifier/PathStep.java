@@ -46,7 +46,9 @@ final class PathStep {
 
   private int division;
 
-  /** Cells from one place to step to to the next. */
+  /** Places to step to in a cell, and the cells from one to the next. */
+  private double perCell;
+
   private double stride;
 
   /** Result of the last step: amps. */
@@ -64,12 +66,24 @@ final class PathStep {
     this.saturation = load.diode().saturationA();
     double ring = Math.sqrt(this.inductance * this.capacitance);
     this.division = (int) Math.min(MOST_DIVISIONS, Math.ceil(1 / (STEP_OF_RING * ring + 1e-9)));
-    this.stride = 1.0 / division;
+    fine();
+  }
+
+  /** Steps as long as accuracy bears. */
+  void fine() {
+    perCell = division;
+    stride = 1.0 / division;
+  }
+
+  /** Steps of two cells: good enough to come near a steady state. */
+  void coarse() {
+    perCell = 0.5;
+    stride = 2;
   }
 
   /** The next place to step to: cells are divided where the path would ring within one. */
   double nextNode(double position) {
-    return (Math.floor(position * division + 1e-9) + 1) * stride;
+    return (Math.floor(position * perCell + 1e-9) + 1) * stride;
   }
 
   void threshold(double amps) {

@@ -66,6 +66,36 @@ record RandomRectifier(
     return behindSource(seed, r, load, r.nextBoolean() ? 50 : 60, emf(r, 1, volts), base / 2);
   }
 
+  /**
+   * Any supply a survey may hold, sensible or not: 1 W to 10 kW at 1 to 100 % load, 0.1 to 20 µF/W,
+   * behind 0.001 to 50 % of its own impedance, some with a line choke of up to 30 %; odd orders, or
+   * all, of up to 30 %/h.
+   */
+  static RandomRectifier anything(long seed, boolean choke) {
+    Random r = new Random(seed * 15485863 + 7);
+    double watts = between(r, 1, 1e4);
+    double volts = r.nextBoolean() ? 230 : 120;
+    double hertz = r.nextBoolean() ? 50 : 60;
+    double base = volts * volts / watts;
+    double line = choke ? base * between(r, 0.005, 0.3) : 0;
+    BridgeLoad load =
+        new BridgeLoad(
+            watts * between(r, 0.01, 1),
+            watts * between(r, 0.1e-6, 20e-6),
+            0.02 * base * r.nextInt(2) + line / 15,
+            line / (2 * Math.PI * hertz),
+            0,
+            0,
+            DIODE);
+    PortSpectra emf = emf(r, 1, volts);
+    int step = r.nextBoolean() ? 1 : 2;
+    for (int h = step == 1 ? 2 : 3; h <= 50; h += step) {
+      emf.re[0][h] += volts * 0.3 / h * (r.nextDouble() - 0.5);
+      emf.im[0][h] += volts * 0.3 / h * (r.nextDouble() - 0.5);
+    }
+    return behindSource(seed, r, load, hertz, emf, base * between(r, 0.01, 5));
+  }
+
   private static RandomRectifier behindSource(
       long seed, Random r, BridgeLoad load, double hertz, PortSpectra emf, double base) {
     double ohms = base * between(r, 1e-4, 0.1);

@@ -66,6 +66,26 @@ class RectifierLawsTest {
     assertThat(unsettled).as("supplies whose current does not settle").isLessThan(SETS / 50);
   }
 
+  @ParameterizedTest(name = "with a choke: {0}")
+  @ValueSource(booleans = {false, true})
+  void anySupplyConvergesOrSaysWhy(boolean choke) {
+    PortSpectra current = new PortSpectra(1);
+    int converged = 0;
+    for (int n = 0; n < 10_000; n++) {
+      RandomRectifier given = RandomRectifier.anything(n, choke);
+      CapacitorInputSolver solver = new CapacitorInputSolver(given.load(), given.hertz());
+      try {
+        solver.solve(given.emf(), given.ohm(), given.henry(), current);
+        converged++;
+        double rms = current.spectrum(0).rms();
+        assertThat(rms).as(given.toString()).isFinite().isPositive();
+      } catch (NoSteadyStateException none) {
+        assertThat(none).as(given.toString()).hasMessageContaining("finds no steady state");
+      }
+    }
+    assertThat(converged).isGreaterThan(8_000);
+  }
+
   private interface Traces {
     PulseTrace of(int port);
   }
