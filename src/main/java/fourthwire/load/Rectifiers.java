@@ -41,7 +41,8 @@ final class Rectifiers {
 
   static LoadModel capacitorInput(LoadRequest request, DesignPowers known) {
     DoubleFunction<BridgeLoad> unit = power -> singlePhaseUnit(request, power);
-    BridgeLoad load = sized(request, known, unit, l -> new CapacitorInput(l, request.frequencyHz()));
+    BridgeLoad load =
+        sized(request, known, unit, l -> new CapacitorInput(l, request.frequencyHz()));
     return new CapacitorInput(load, request.frequencyHz());
   }
 
@@ -78,10 +79,7 @@ final class Rectifiers {
   }
 
   private static LoadModel threeLine(
-      LoadRequest request,
-      DesignPowers known,
-      int bridges,
-      Function<BridgeLoad, LoadModel> model) {
+      LoadRequest request, DesignPowers known, int bridges, Function<BridgeLoad, LoadModel> model) {
     return model.apply(
         sized(request, known, power -> threeLineUnit(request, bridges, power), model));
   }

@@ -21,10 +21,10 @@ import org.openjdk.jmh.runner.RunnerException;
 import org.openjdk.jmh.runner.options.OptionsBuilder;
 
 /**
- * How long one load takes to its steady state, on one thread, and what it allocates: capacitor-input
- * supplies ({@link RectifierFleet}) from cold under odd orders to 49 and under all orders to 50, and
- * again after their voltage moved by 1e-4; corrected supplies and dimmers under odd orders. Look at
- * p0.50 (the median) and gc.alloc.rate.norm. About a minute.
+ * How long one load takes to its steady state, on one thread, and what it allocates:
+ * capacitor-input supplies ({@link RectifierFleet}) from cold under odd orders to 49 and under all
+ * orders to 50, and again after their voltage moved by 1e-4; corrected supplies and dimmers under
+ * odd orders. Look at p0.50 (the median) and gc.alloc.rate.norm. About a minute.
  *
  * <pre>{@code
  * mvn -q test-compile dependency:build-classpath -Dmdep.outputFile=target/classpath

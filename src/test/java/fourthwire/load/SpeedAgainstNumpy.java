@@ -10,8 +10,8 @@ import java.util.Arrays;
 
 /**
  * How many times faster a cold capacitor-input solution is than the vectorised numpy reference
- * {@code ../shared/peers/rectifiers/batch_speed.py}, over 1,000 cases of the same ranges on the same
- * sinusoidal voltage, the two taking turns in one run. Prints each round and the median; the
+ * {@code ../shared/peers/rectifiers/batch_speed.py}, over 1,000 cases of the same ranges on the
+ * same sinusoidal voltage, the two taking turns in one run. Prints each round and the median; the
  * reference's diodes are ideal and its step is fixed. About half a minute; the argument names a
  * Python with numpy (default {@code python3}).
  *

@@ -122,8 +122,7 @@ final class CapacitorInputSolver implements LoadSolver {
       throw new NoSteadyStateException("a capacitor-input rectifier has no voltage to draw from");
     }
     double perEnergy = load.powerW() / (2 * frequencyHz * load.capacitanceF() * peak);
-    toleranceV =
-        Math.max(FINEST * peak, Math.min(COARSEST * peak, TOLERANCE * perEnergy));
+    toleranceV = Math.max(FINEST * peak, Math.min(COARSEST * peak, TOLERANCE * perEnergy));
     jumpV = Math.max(toleranceV, JUMP * perEnergy);
     bridge.floorV = LEAST_SHARE * peak;
     bridge.ceilingV = MOST_RESONANCE * peak;

@@ -97,8 +97,6 @@ final class Discharge {
   }
 
   private double excess(double at) {
-    return drive.at(at)
-        - path.onsetV
-        - Math.sqrt(Math.max(0, square - fall * (at - from)));
+    return drive.at(at) - path.onsetV - Math.sqrt(Math.max(0, square - fall * (at - from)));
   }
 }

@@ -65,8 +65,8 @@ final class PairBridge {
    * Marches from a position with signed current i0 and voltage v0 over a number of cells, keeping
    * the current in {@link #trace} and the derivatives of the end by the start in {@link #tangent}.
    *
-   * @return false where the load empties the capacitor, the voltage runs away, or the current breaks
-   *     up without end
+   * @return false where the load empties the capacitor, the voltage runs away, or the current
+   *     breaks up without end
    */
   boolean march(double from, double cells, double i0, double v0) {
     u = from;
