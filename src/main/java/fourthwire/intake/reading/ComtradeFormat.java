@@ -1,5 +1,6 @@
 package fourthwire.intake.reading;
 
+import fourthwire.intake.reading.channel.ChannelNames;
 import fourthwire.intake.reading.comtrade.AnalogChannel;
 import fourthwire.intake.reading.comtrade.Comtrade;
 import fourthwire.intake.reading.comtrade.ComtradeException;
@@ -22,6 +23,7 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.function.BiPredicate;
+import java.util.function.Function;
 import java.util.function.Supplier;
 
 /** A COMTRADE record: its channels proposed as quantities, its samples as a capture. */
@@ -31,9 +33,10 @@ final class ComtradeFormat implements Format {
       "a capture holds L1.v, L1-L2.v, N.v … in volts and L1.i, N.i … in amps";
 
   private final Supplier<byte[]> configuration;
-  private final Supplier<Comtrade> record;
+  private final Function<OptionalDouble, Comtrade> record;
 
-  private ComtradeFormat(Supplier<byte[]> configuration, Supplier<Comtrade> record) {
+  private ComtradeFormat(
+      Supplier<byte[]> configuration, Function<OptionalDouble, Comtrade> record) {
     this.configuration = configuration;
     this.record = record;
   }
@@ -41,13 +44,13 @@ final class ComtradeFormat implements Format {
   static ComtradeFormat of(Part configuration, Part data) {
     return new ComtradeFormat(
         () -> configuration.bytes(MOST_BYTES),
-        () -> Comtrade.of(configuration.bytes(MOST_BYTES), data.bytes(MOST_BYTES)));
+        rate -> Comtrade.of(configuration.bytes(MOST_BYTES), data.bytes(MOST_BYTES), rate));
   }
 
   static ComtradeFormat ofCombined(Part file) {
     return new ComtradeFormat(
         () -> Comtrade.configurationOf(file.bytes(MOST_BYTES)),
-        () -> Comtrade.ofCombined(file.bytes(MOST_BYTES)));
+        rate -> Comtrade.ofCombined(file.bytes(MOST_BYTES), rate));
   }
 
   @Override
@@ -59,6 +62,11 @@ final class ComtradeFormat implements Format {
     Mappings known = Mappings.of(setting, layout);
     ChannelMapping mapping =
         ChannelMapping.settle(names, known.mapping(), known.whence(), words(channels));
+    OptionalDouble rate =
+        known.mapping().map(ReadingMapping::sampleRateHz).orElse(OptionalDouble.empty());
+    if (rate.isEmpty() && guarded(() -> Comtrade.statesNoRate(configuration.get()))) {
+      askWhereUntimed(names);
+    }
     List<String> notes = new ArrayList<>();
     if (!mapping.unmapped().isEmpty()) {
       notes.add("Channels not read: " + String.join(", ", mapping.unmapped()) + ".");
@@ -69,23 +77,37 @@ final class ComtradeFormat implements Format {
         new ReadingMapping(
             Optional.of(ReadingKind.CAPTURE),
             known.mapping().map(ReadingMapping::time).orElse(ReadingMapping.Time.FROM_FILE),
-            OptionalDouble.empty(),
+            rate,
             mapping.columns()),
         names,
         mapping.confidence(),
         notes);
   }
 
+  private void askWhereUntimed(List<String> names) {
+    try {
+      record.apply(OptionalDouble.empty());
+    } catch (ComtradeException.NoRate e) {
+      throw new ReadingRefusedException(
+          String.valueOf(e.getMessage()),
+          names,
+          List.of(
+              new ReadingRefusedException.Question(
+                  "sample_rate_hz", "give the samples a second")));
+    } catch (ComtradeException e) {
+      throw new ReadingRefusedException(String.valueOf(e.getMessage()));
+    }
+  }
+
   private static ChannelMapping.Words words(Map<String, AnalogChannel> channels) {
+    List<Heading> headings =
+        ChannelNames.read(
+            channels.values().stream()
+                .map(c -> new ChannelNames.Channel(c.name(), c.phase(), c.unit()))
+                .toList());
+    List<String> names = List.copyOf(channels.keySet());
     return new ChannelMapping.Words(
-        name -> {
-          AnalogChannel c = channels.get(name);
-          return c == null
-              ? Heading.ofCapture(name, "", "")
-              : Heading.ofCapture(name, c.phase(), c.unit());
-        },
-        MeasuredQuantity::ofCapture,
-        EXAMPLES);
+        name -> headings.get(names.indexOf(name)), MeasuredQuantity::ofCapture, EXAMPLES);
   }
 
   /** Channels by name; a name that stands there twice gets its number. */
@@ -103,7 +125,7 @@ final class ComtradeFormat implements Format {
   public Reading read(
       ReadingPlan plan, ReadingSetting setting, BiPredicate<Double, String> progress) {
     CaptureReading.go(progress, 0, "reading the record");
-    Comtrade comtrade = guarded(record);
+    Comtrade comtrade = guarded(() -> record.apply(plan.mapping().sampleRateHz()));
     List<String> notes = new ArrayList<>(plan.notes());
     notes.addAll(comtrade.notes());
     List<Capture.Channel> channels = new ArrayList<>();

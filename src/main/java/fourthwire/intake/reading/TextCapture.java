@@ -1,5 +1,6 @@
 package fourthwire.intake.reading;
 
+import fourthwire.intake.reading.channel.ChannelNames;
 import fourthwire.intake.reading.heading.Heading;
 import fourthwire.intake.reading.table.DateOrder;
 import fourthwire.intake.reading.table.TextTable;
@@ -25,11 +26,8 @@ import java.util.function.BiPredicate;
 
 /** A capture of instantaneous values as a text table. */
 final class TextCapture {
-  private static final ChannelMapping.Words WORDS =
-      new ChannelMapping.Words(
-          h -> Heading.ofCapture(h, "", ""),
-          MeasuredQuantity::ofCapture,
-          "a capture holds L1.v, L1-L2.v, N.v … in volts and L1.i, N.i … in amps");
+  private static final String EXAMPLES =
+      "a capture holds L1.v, L1-L2.v, N.v … in volts and L1.i, N.i … in amps";
 
   private final TextTable table;
   private final TimeColumns time;
@@ -42,7 +40,7 @@ final class TextCapture {
   ReadingPlan plan(ReadingSetting setting, String layout, Mappings known) {
     List<String> timeNames = time.columns().stream().map(table.headings()::get).toList();
     List<String> others = table.headings().stream().filter(h -> !timeNames.contains(h)).toList();
-    ChannelMapping mapping = ChannelMapping.settle(others, known.mapping(), known.whence(), WORDS);
+    ChannelMapping mapping = ChannelMapping.settle(others, known.mapping(), known.whence(), words(others));
     OptionalDouble rate =
         known.mapping().map(ReadingMapping::sampleRateHz).orElse(OptionalDouble.empty());
     if (time.columns().isEmpty() && rate.isEmpty()) {
@@ -72,6 +70,14 @@ final class TextCapture {
         table.headings(),
         mapping.confidence(),
         notes);
+  }
+
+  private static ChannelMapping.Words words(List<String> names) {
+    List<Heading> headings =
+        ChannelNames.read(
+            names.stream().map(n -> new ChannelNames.Channel(n, "", "")).toList());
+    return new ChannelMapping.Words(
+        name -> headings.get(names.indexOf(name)), MeasuredQuantity::ofCapture, EXAMPLES);
   }
 
   private void checkFormat(ReadingMapping.Time given) {

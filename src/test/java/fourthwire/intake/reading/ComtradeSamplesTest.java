@@ -10,6 +10,7 @@ import java.io.IOException;
 import java.io.UncheckedIOException;
 import java.time.LocalDateTime;
 import java.util.Arrays;
+import java.util.OptionalDouble;
 import org.junit.jupiter.api.Test;
 
 /**
@@ -30,7 +31,7 @@ class ComtradeSamplesTest {
   }
 
   private static Comtrade read(String stem) {
-    return Comtrade.of(bytes(stem + ".cfg"), bytes(stem + ".dat"));
+    return Comtrade.of(bytes(stem + ".cfg"), bytes(stem + ".dat"), OptionalDouble.empty());
   }
 
   private static double[] values(Comtrade record, int channel) {
@@ -52,12 +53,12 @@ class ComtradeSamplesTest {
 
   @Test
   void missingValuesAreNotNumbers() {
-    Comtrade c = Comtrade.of(bytes("sample_ascii.cfg"), bytes("sample_ascii_missing.dat"));
+    Comtrade c = Comtrade.of(bytes("sample_ascii.cfg"), bytes("sample_ascii_missing.dat"), OptionalDouble.empty());
     assertThat(c.samples(0).at(1)).isNaN();
     assertThat(c.samples(1).at(2)).isNaN();
     assertThat(c.samples(2).at(3)).isNaN();
     assertThat(c.samples(0).at(0)).isEqualTo(-83 * A + B, within(1e-5));
-    Comtrade binary = Comtrade.of(bytes("sample_bin.cfg"), bytes("sample_bin_missing.dat"));
+    Comtrade binary = Comtrade.of(bytes("sample_bin.cfg"), bytes("sample_bin_missing.dat"), OptionalDouble.empty());
     assertThat(Arrays.stream(values(binary, 0)).filter(Double::isNaN).count()).isPositive();
   }
 
@@ -65,9 +66,9 @@ class ComtradeSamplesTest {
   void oddEncodingsAndSubstituteCharacters() {
     double[] plain = values(read("sample_ascii"), 0);
     assertThat(values(read("sample_iso8859-1"), 0)).containsExactly(plain);
-    assertThat(values(Comtrade.of(bytes("sample_ascii_utf-8.cfg"), bytes("sample_ascii.dat")), 0))
+    assertThat(values(Comtrade.of(bytes("sample_ascii_utf-8.cfg"), bytes("sample_ascii.dat"), OptionalDouble.empty()), 0))
         .containsExactly(plain);
-    assertThat(values(Comtrade.of(bytes("sample_sub_char.cfg"), bytes("sample_ascii.dat")), 0))
+    assertThat(values(Comtrade.of(bytes("sample_sub_char.cfg"), bytes("sample_ascii.dat"), OptionalDouble.empty()), 0))
         .containsExactly(plain);
   }
 
@@ -84,9 +85,9 @@ class ComtradeSamplesTest {
 
   @Test
   void singleFiles() {
-    assertThat(values(Comtrade.ofCombined(bytes("sample_ascii.cff")), 3))
+    assertThat(values(Comtrade.ofCombined(bytes("sample_ascii.cff"), OptionalDouble.empty()), 3))
         .containsExactly(values(read("sample_ascii"), 3));
-    Comtrade f = Comtrade.ofCombined(bytes("sample_float32.cff"));
+    Comtrade f = Comtrade.ofCombined(bytes("sample_float32.cff"), OptionalDouble.empty());
     assertThat(f.time().count()).isEqualTo(301);
     assertThat(Arrays.stream(values(f, 0)).allMatch(Double::isFinite)).isTrue();
   }

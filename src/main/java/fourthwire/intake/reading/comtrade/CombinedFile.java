@@ -25,13 +25,9 @@ record CombinedFile(byte[] configuration, byte[] data) {
       more = part.find(length == null ? from : Math.min(text.length(), from + bytes(length)));
       int to = length != null ? from + bytes(length) : more ? part.start() : text.length();
       if (kind.startsWith("CFG")) {
-        configuration = Arrays.copyOfRange(file, from, Math.min(to, file.length));
+        configuration = Arrays.copyOfRange(file, from, Math.max(from, Math.min(to, file.length)));
       } else if (kind.startsWith("DAT")) {
-        if (to > file.length) {
-          throw new ComtradeException(
-              "The data part should hold " + length + " bytes but the file ends before.");
-        }
-        data = Arrays.copyOfRange(file, from, to);
+        data = Arrays.copyOfRange(file, from, Math.max(from, Math.min(to, file.length)));
       }
     }
     if (configuration.length == 0 || data.length == 0) {

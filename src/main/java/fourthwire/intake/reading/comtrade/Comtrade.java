@@ -27,11 +27,17 @@ public final class Comtrade {
   /**
    * Reads a configuration and its data.
    *
+   * @param rateHz samples a second where the record is known not to tell them
    * @throws ComtradeException where it can't be read
    */
-  public static Comtrade of(byte[] configuration, byte[] data) {
+  public static Comtrade of(byte[] configuration, byte[] data, OptionalDouble rateHz) {
     Configuration c = new ConfigurationReader(configuration).read();
-    return new DataReader(c, data).read();
+    return new DataReader(rateHz.isPresent() ? c.at(rateHz.getAsDouble()) : c, data).read();
+  }
+
+  /** Whether a configuration leaves the sample rate to the data's own times. */
+  public static boolean statesNoRate(byte[] configuration) {
+    return new ConfigurationReader(configuration).read().rates().isEmpty();
   }
 
   /** The analogue channels of a configuration alone. */
@@ -44,9 +50,9 @@ public final class Comtrade {
    *
    * @throws ComtradeException where it can't be read
    */
-  public static Comtrade ofCombined(byte[] file) {
+  public static Comtrade ofCombined(byte[] file, OptionalDouble rateHz) {
     CombinedFile parts = CombinedFile.of(file);
-    return of(parts.configuration(), parts.data());
+    return of(parts.configuration(), parts.data(), rateHz);
   }
 
   /** The configuration part of a single file that holds all parts. */

@@ -14,7 +14,7 @@ import java.util.Optional;
  * @param rates sample rates; empty where the data's own times rule
  * @param start time of the first sample, as written
  * @param utcOffset offset of the times from UTC (2013), as {@code +05:30}; empty if not written
- * @param format of the data
+ * @param format of the data; empty where not stated
  * @param timeMultiplier of the data's own times
  * @param nanoseconds whether times are written to the nanosecond, so the data's own count
  *     nanoseconds, not microseconds
@@ -27,7 +27,7 @@ record Configuration(
     List<Rate> rates,
     Optional<LocalDateTime> start,
     Optional<String> utcOffset,
-    DataFormat format,
+    Optional<DataFormat> format,
     double timeMultiplier,
     boolean nanoseconds) {
   /**
@@ -37,4 +37,19 @@ record Configuration(
    * @param lastSample number of its last sample, from 1
    */
   record Rate(double hertz, long lastSample) {}
+
+  /** The same at one rate from outside. */
+  Configuration at(double hertz) {
+    return new Configuration(
+        revision,
+        channels,
+        digital,
+        lineHz,
+        List.of(new Rate(hertz, Long.MAX_VALUE)),
+        start,
+        utcOffset,
+        format,
+        timeMultiplier,
+        nanoseconds);
+  }
 }

@@ -1,87 +1,83 @@
 package fourthwire.intake.reading.comtrade;
 
-import java.nio.ByteBuffer;
-import java.nio.charset.CharacterCodingException;
-import java.nio.charset.StandardCharsets;
-import java.time.LocalDateTime;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
-import java.util.regex.Matcher;
-import java.util.regex.Pattern;
 
 /**
  * Reads a configuration file line by line (IEEE C37.111-1999, clause 5; -1991 has no revision year,
- * no primary and secondary and writes dates month first; -2013 adds time codes).
+ * no primary and secondary and writes dates month first; -2013 adds time codes). What recorders
+ * leave out at the end takes its default; what they write wrongly in a place that no figure hangs
+ * on is passed over.
  */
 final class ConfigurationReader {
-  private static final Pattern DATE_TIME =
-      Pattern.compile(
-          "(\\d{1,2})/(\\d{1,2})/(\\d{2,4})\\s*,\\s*(\\d{1,2}):(\\d{2}):(\\d{2})(?:[.,](\\d{1,9}))?");
-  private static final Pattern OFFSET = Pattern.compile("([+-]?)(\\d{1,2})(?:h(\\d{2}))?");
   private static final int MOST_CHANNELS = 10_000;
+  private static final int LEAST_FIELDS = 7;
+  private static final int FIELDS = 13;
 
   private final List<String> lines;
   private int next;
 
   ConfigurationReader(byte[] file) {
-    this.lines = text(file).lines().toList();
-  }
-
-  /** UTF-8 where it is that, else ISO 8859-1; what follows a substitute character is padding. */
-  private static String text(byte[] file) {
-    String text;
-    try {
-      text = StandardCharsets.UTF_8.newDecoder().decode(ByteBuffer.wrap(file)).toString();
-    } catch (CharacterCodingException e) {
-      text = new String(file, StandardCharsets.ISO_8859_1);
-    }
-    int end = text.indexOf(0x1A);
-    String whole = end < 0 ? text : text.substring(0, end);
-    return whole.startsWith("\uFEFF") ? whole.substring(1) : whole;
+    this.lines = ConfigurationText.of(file).lines().toList();
   }
 
   Configuration read() {
+    skipBlank();
     String[] station = fields();
-    int revision = station.length > 2 && !station[2].isEmpty() ? revision(station[2]) : 1991;
+    int revision = station.length > 2 ? revision(station[2]) : 1991;
     String[] counts = fields();
-    int analog = count(counts, 'A');
-    int digital = count(counts, 'D');
+    int analog = count(counts, 'A', 1);
+    int digital = count(counts, 'D', 2);
     List<AnalogChannel> channels = new ArrayList<>();
     for (int k = 0; k < analog; k++) {
-      channels.add(channel(fields()));
+      skipBlank();
+      channels.add(channel(whole(fields())));
     }
-    for (int k = 0; k < digital; k++) {
+    for (int k = 0; k < digital && more(); k++) {
+      skipBlank();
       fields();
     }
-    double lineHz = number(fields(), 0, "the line frequency", 0);
+    return rest(revision, channels, digital);
+  }
+
+  /** What stands below the channels; each part may be missing from some line on. */
+  private Configuration rest(int revision, List<AnalogChannel> channels, int digital) {
+    double lineHz = more() ? loose(fields(), 0, 0) : 0;
     List<Configuration.Rate> rates = rates();
-    String first = line();
-    line();
-    DataFormat format = DataFormat.of(line(), next);
-    double multiplier = next < lines.size() ? number(fields(), 0, "the time multiplier", 1) : 1;
-    Optional<String> offset = next < lines.size() ? offset(fields()[0]) : Optional.empty();
-    Matcher start = DATE_TIME.matcher(first);
-    boolean dated = start.find();
-    boolean nanoseconds = dated && start.group(7) != null && start.group(7).length() > 6;
+    Optional<Stamp> start = stamp(revision);
+    stamp(revision);
+    Optional<DataFormat> format = more() ? DataFormat.find(line(), next) : Optional.empty();
+    double multiplier = more() ? loose(fields(), 0, 1) : 1;
+    Optional<String> offset = more() ? Stamp.offset(fields()[0]) : Optional.empty();
     return new Configuration(
         revision,
         List.copyOf(channels),
         digital,
         lineHz,
         rates,
-        dated ? start(start, revision) : Optional.empty(),
+        start.flatMap(Stamp::local),
         offset,
         format,
         multiplier,
-        nanoseconds);
+        start.map(Stamp::isToTheNanosecond).orElse(false));
+  }
+
+  private boolean more() {
+    return next < lines.size();
+  }
+
+  private void skipBlank() {
+    while (more() && lines.get(next).isBlank()) {
+      next++;
+    }
   }
 
   private String line() {
-    if (next >= lines.size()) {
+    if (!more()) {
       throw new ComtradeException(
-          "The configuration ends after line " + next + ", before all of its parts were there.");
+          "The configuration ends after line " + next + ", before all of its channels were there.");
     }
     return lines.get(next++);
   }
@@ -109,29 +105,48 @@ final class ConfigurationReader {
 
   private int revision(String word) {
     return switch (word) {
-      case "1991" -> 1991;
-      case "1999" -> 1999;
+      case "", "1991" -> 1991;
+      case "1997", "1999", "2000" -> 1999;
       case "2001", "2013" -> 2013;
       default -> throw wrong("revision year", word, "1991, 1999 or 2013");
     };
   }
 
-  private int count(String[] counts, char letter) {
+  /** By its letter; without letters, by its place behind the total. */
+  private int count(String[] counts, char letter, int place) {
     for (String count : counts) {
       String upper = count.toUpperCase(Locale.ROOT);
       if (!upper.isEmpty() && upper.charAt(upper.length() - 1) == letter) {
-        String digits = upper.substring(0, upper.length() - 1).trim();
-        if (digits.matches("\\d{1,5}") && Integer.parseInt(digits) <= MOST_CHANNELS) {
-          return Integer.parseInt(digits);
-        }
-        throw wrong("number of channels", count, "a number up to " + MOST_CHANNELS);
+        return count(count, upper.substring(0, upper.length() - 1).trim());
       }
+    }
+    if (counts.length > 2 && counts[place].matches("\\d+")) {
+      return count(counts[place], counts[place]);
     }
     throw wrong("line", String.join(",", counts), "the numbers of channels, as in 8,8A,0D");
   }
 
+  private int count(String written, String digits) {
+    if (digits.matches("\\d{1,5}") && Integer.parseInt(digits) <= MOST_CHANNELS) {
+      return Integer.parseInt(digits);
+    }
+    throw wrong("number of channels", written, "a number up to " + MOST_CHANNELS);
+  }
+
+  /** A name with commas in it made the line longer: its parts are put together again. */
+  private static String[] whole(String[] f) {
+    int more = f.length - FIELDS;
+    if (more <= 0 || !f[f.length - 1].matches("(?i)[ps]\\w*")) {
+      return f;
+    }
+    List<String> whole = new ArrayList<>(List.of(f[0]));
+    whole.add(String.join(",", List.of(f).subList(1, 2 + more)));
+    whole.addAll(List.of(f).subList(2 + more, f.length));
+    return whole.toArray(String[]::new);
+  }
+
   private AnalogChannel channel(String[] f) {
-    if (f.length < 10) {
+    if (f.length < LEAST_FIELDS) {
       throw wrong("analogue channel", String.join(",", f), "a line of at least 10 fields");
     }
     String side = f.length > 12 ? f[12].toUpperCase(Locale.ROOT) : "P";
@@ -141,10 +156,10 @@ final class ConfigurationReader {
         f[4],
         number(f, 5, "the multiplier", 1),
         number(f, 6, "the offset", 0),
-        number(f, 7, "the skew", 0) * 1e-6,
-        number(f, 9, "the end of the range", 99999),
-        number(f, 10, "the primary rating", 1),
-        number(f, 11, "the secondary rating", 1),
+        loose(f, 7, 0) * 1e-6,
+        loose(f, 9, 99999),
+        loose(f, 10, 1),
+        loose(f, 11, 1),
         side.startsWith("S"));
   }
 
@@ -152,62 +167,39 @@ final class ConfigurationReader {
     if (at >= f.length || f[at].isEmpty()) {
       return whenEmpty;
     }
-    try {
-      double value = Double.parseDouble(f[at]);
-      if (Double.isFinite(value)) {
-        return value;
-      }
-    } catch (NumberFormatException e) {
+    double value = loose(f, at, Double.NaN);
+    if (Double.isNaN(value)) {
       throw wrong(what, f[at], "a number");
     }
-    throw wrong(what, f[at], "a number");
+    return value;
   }
 
+  /** A number that may be missing or no number. */
+  private static double loose(String[] f, int at, double otherwise) {
+    try {
+      double value = at < f.length ? Double.parseDouble(f[at]) : otherwise;
+      return Double.isFinite(value) ? value : otherwise;
+    } catch (NumberFormatException e) {
+      return otherwise;
+    }
+  }
+
+  /** No rate at all is written as one line of rate 0, or not at all: the data's own times rule. */
   private List<Configuration.Rate> rates() {
-    int count = (int) number(fields(), 0, "the number of sample rates", 0);
+    int count = more() ? (int) loose(fields(), 0, 0) : 0;
     List<Configuration.Rate> rates = new ArrayList<>();
-    for (int k = 0; k < Math.max(1, count); k++) {
+    for (int k = 0; k < Math.max(1, count) && more() && !Stamp.isOne(lines.get(next)); k++) {
       String[] f = fields();
-      // No rate at all is written as one line of rate 0: the data's own times rule.
-      rates.add(
-          new Configuration.Rate(
-              number(f, 0, "the sample rate", 0), (long) number(f, 1, "the last sample", 0)));
+      rates.add(new Configuration.Rate(loose(f, 0, 0), (long) loose(f, 1, 0)));
     }
     return List.copyOf(rates.stream().filter(r -> r.hertz() > 0).toList());
   }
 
-  private static Optional<LocalDateTime> start(Matcher m, int revision) {
-    int first = Integer.parseInt(m.group(1));
-    int second = Integer.parseInt(m.group(2));
-    int year = Integer.parseInt(m.group(3));
-    boolean monthFirst = revision == 1991;
-    String fraction = m.group(7) == null ? "0" : m.group(7);
-    int nanos = Integer.parseInt((fraction + "000000000").substring(0, 9));
-    try {
-      return Optional.of(
-          LocalDateTime.of(
-              year < 100 ? year + (year < 70 ? 2000 : 1900) : year,
-              monthFirst ? first : second,
-              monthFirst ? second : first,
-              Integer.parseInt(m.group(4)),
-              Integer.parseInt(m.group(5)),
-              Integer.parseInt(m.group(6)),
-              nanos));
-    } catch (java.time.DateTimeException e) {
+  /** A line of date and time; a data format in its place is left for later. */
+  private Optional<Stamp> stamp(int revision) {
+    if (!more() || DataFormat.isOne(lines.get(next))) {
       return Optional.empty();
     }
-  }
-
-  private static Optional<String> offset(String code) {
-    Matcher m = OFFSET.matcher(code);
-    if (!m.matches()) {
-      return Optional.empty();
-    }
-    String minutes = m.group(3) == null ? "00" : m.group(3);
-    return Optional.of(
-        ("-".equals(m.group(1)) ? "-" : "+")
-            + String.format(Locale.ROOT, "%02d", Integer.parseInt(m.group(2)))
-            + ":"
-            + minutes);
+    return Stamp.of(line(), revision == 1991);
   }
 }

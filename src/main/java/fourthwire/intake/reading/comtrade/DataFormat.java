@@ -2,6 +2,7 @@ package fourthwire.intake.reading.comtrade;
 
 import java.util.Arrays;
 import java.util.Locale;
+import java.util.Optional;
 import java.util.stream.Collectors;
 
 /** How samples are written. */
@@ -10,6 +11,8 @@ enum DataFormat {
   BINARY(2),
   BINARY32(4),
   FLOAT32(4);
+
+  private static final int LOOKED_AT = 4000;
 
   private final int bytes;
 
@@ -22,19 +25,40 @@ enum DataFormat {
     return bytes;
   }
 
-  static DataFormat of(String word, int line) {
+  static boolean isOne(String word) {
+    return named(word).isPresent();
+  }
+
+  private static Optional<DataFormat> named(String word) {
+    String upper = word.trim().toUpperCase(Locale.ROOT);
     return Arrays.stream(values())
-        .filter(f -> f.name().equals(word.trim().toUpperCase(Locale.ROOT)))
-        .findFirst()
-        .orElseThrow(
-            () ->
-                new ComtradeException(
-                    "configuration, line "
-                        + line
-                        + ": data format \""
-                        + word.trim()
-                        + "\" is not one of "
-                        + Arrays.stream(values()).map(Enum::name).collect(Collectors.joining(", "))
-                        + "."));
+        .filter(f -> f.name().equals(upper) || f == BINARY && upper.equals("BINARY16"))
+        .findFirst();
+  }
+
+  /** The one of this word; none is told by an empty line. */
+  static Optional<DataFormat> find(String word, int line) {
+    Optional<DataFormat> named = named(word);
+    if (named.isEmpty() && !word.isBlank()) {
+      throw new ComtradeException(
+          "configuration, line "
+              + line
+              + ": data format \""
+              + word.trim()
+              + "\" is not one of "
+              + Arrays.stream(values()).map(Enum::name).collect(Collectors.joining(", "))
+              + ".");
+    }
+    return named;
+  }
+
+  /** By the look of the data: text is digits, signs and separators only. */
+  static DataFormat guessed(byte[] data) {
+    for (int k = 0; k < Math.min(data.length, LOOKED_AT); k++) {
+      if ("0123456789+-.,eE \t\r\n\u001A".indexOf(data[k] & 0xFF) < 0) {
+        return BINARY;
+      }
+    }
+    return ASCII;
   }
 }

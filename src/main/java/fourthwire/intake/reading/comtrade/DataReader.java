@@ -25,25 +25,30 @@ final class DataReader {
   private final List<String> notes = new ArrayList<>();
   private final List<Samples.Gatherer> samples = new ArrayList<>();
   private final OwnTimes ownTimes;
+  private final DataFormat format;
   private int rows;
 
   DataReader(Configuration configuration, byte[] data) {
     this.c = configuration;
     this.data = data;
     this.ownTimes = new OwnTimes(configuration);
+    this.format = configuration.format().orElseGet(() -> DataFormat.guessed(data));
   }
 
   Comtrade read() {
     if (c.channels().isEmpty()) {
       throw new ComtradeException("The record has no analogue channel.");
     }
-    if (c.format() == DataFormat.ASCII) {
+    if (format == DataFormat.ASCII) {
       text();
     } else {
       binary();
     }
     if (rows < 2) {
       throw new ComtradeException("The data holds " + rows + " samples: at least two are needed.");
+    }
+    if (c.format().isEmpty()) {
+      notes.add("The configuration does not state the data's format; read as " + format + ".");
     }
     SampleTimes times = new SampleTimes(c, ownTimes, rows);
     return new Comtrade(
@@ -178,7 +183,7 @@ final class DataReader {
    * the status words left out.
    */
   private int rowLength(ByteBuffer in) {
-    int analog = NUMBER_AND_TIME + c.format().bytes() * c.channels().size();
+    int analog = NUMBER_AND_TIME + format.bytes() * c.channels().size();
     int stated = analog + 2 * ((c.digital() + 15) / 16);
     if (stated != analog && !countsUp(in, stated) && countsUp(in, analog)) {
       notes.add("The data holds no status words although the configuration names status channels.");
@@ -194,7 +199,7 @@ final class DataReader {
   }
 
   private double binaryValue(int channel, ByteBuffer in) {
-    switch (c.format()) {
+    switch (format) {
       case BINARY -> {
         short x = in.getShort();
         return x == Short.MIN_VALUE ? Double.NaN : scaled(channel, x);

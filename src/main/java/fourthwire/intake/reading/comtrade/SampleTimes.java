@@ -55,12 +55,19 @@ final class SampleTimes {
     double[] t = new double[rows];
     int rate = 0;
     for (int k = 1; k < rows; k++) {
+      double before = 1 / rates.get(rate).hertz();
       while (rate < rates.size() - 1 && k >= rates.get(rate).lastSample()) {
         rate++;
       }
-      t[k] = t[k - 1] + 1 / rates.get(rate).hertz();
+      t[k] = t[k - 1] + step(k, before, 1 / rates.get(rate).hertz());
     }
     return TimeAxis.told(t);
+  }
+
+  /** Where the rate changes, the step is of either; the data's own times, if any, tell which. */
+  private double step(int k, double before, double after) {
+    double told = own.at(k) - own.at(k - 1);
+    return Math.abs(told - before) < Math.abs(told - after) ? before : after;
   }
 
   /** The stated rate rules; where the data's own times tell otherwise it is said. */

@@ -71,21 +71,6 @@ public record Heading(
         .map(q -> new Heading(Meaning.EXACT, text, Statistic.MEAN, 1, ""));
   }
 
-  /**
-   * Of a channel of a capture.
-   *
-   * @param phase phase identifier beside the name; empty text for none
-   * @param unit unit beside the name; empty text where the name may hold it
-   */
-  public static Heading ofCapture(String text, String phase, String unit) {
-    Optional<MeasuredQuantity> exact = MeasuredQuantity.ofCapture(text.trim());
-    if (exact.isPresent()) {
-      double factor = Unit.find(unit).map(Unit::factor).orElse(1.0);
-      return new Heading(Meaning.EXACT, text.trim(), Statistic.INSTANT, factor, "");
-    }
-    return new CaptureHeading(Words.of(text, unit), phase).read();
-  }
-
   /** Nothing a log holds. */
   public static Heading none() {
     return NONE;

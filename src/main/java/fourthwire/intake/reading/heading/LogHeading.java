@@ -194,10 +194,10 @@ final class LogHeading {
     boolean summed = measure.matches("active_w|reactive_var|apparent_va|.*_factor|energy_wh");
     Optional<String> named = places.of(words.places());
     if (words.says(Sense.NEUTRAL)) {
-      named = named.filter(p -> !p.equals(Place.TOTAL)).or(() -> Optional.of("N"));
+      named = named.filter(p -> !p.equals(LogPlace.TOTAL)).or(() -> Optional.of("N"));
     }
     if (named.isEmpty() && (summed || words.says(Sense.TOTAL))) {
-      named = Optional.of(Place.TOTAL);
+      named = Optional.of(LogPlace.TOTAL);
     }
     if (named.isEmpty()) {
       return Heading.placeless(measure, "which conductor this is (L1, L2, L3, N), or total");

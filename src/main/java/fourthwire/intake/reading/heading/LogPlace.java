@@ -10,6 +10,8 @@ import java.util.Set;
  * B. Which letters those are shows in the file as a whole.
  */
 final class LogPlace {
+  static final String TOTAL = "total";
+
   private final boolean rst;
   private final boolean ryb;
 
@@ -33,10 +35,10 @@ final class LogPlace {
       }
     }
     if (places.contains("total") && conductors.size() <= 1) {
-      return Optional.of(conductors.isEmpty() ? Place.TOTAL : conductors.get(0));
+      return Optional.of(conductors.isEmpty() ? TOTAL : conductors.get(0));
     }
     if (conductors.isEmpty()) {
-      return total ? Optional.of(Place.TOTAL) : Optional.empty();
+      return total ? Optional.of(TOTAL) : Optional.empty();
     }
     return conductors.size() > 2 ? Optional.empty() : Optional.of(pair(conductors));
   }
