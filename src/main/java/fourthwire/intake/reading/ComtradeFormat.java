@@ -92,8 +92,7 @@ final class ComtradeFormat implements Format {
           String.valueOf(e.getMessage()),
           names,
           List.of(
-              new ReadingRefusedException.Question(
-                  "sample_rate_hz", "give the samples a second")));
+              new ReadingRefusedException.Question("sample_rate_hz", "give the samples a second")));
     } catch (ComtradeException e) {
       throw new ReadingRefusedException(String.valueOf(e.getMessage()));
     }

@@ -36,6 +36,15 @@ record Part(String name, Source source) {
     }
   }
 
+  /** Its first bytes, fewer where it is shorter. */
+  byte[] start(int count) {
+    try (InputStream in = open()) {
+      return in.readNBytes(count);
+    } catch (IOException e) {
+      throw new UncheckedIOException(e);
+    }
+  }
+
   /** All its bytes; refused above this many. */
   byte[] bytes(int most) {
     try (InputStream in = open()) {

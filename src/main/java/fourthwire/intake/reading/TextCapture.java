@@ -40,7 +40,8 @@ final class TextCapture {
   ReadingPlan plan(ReadingSetting setting, String layout, Mappings known) {
     List<String> timeNames = time.columns().stream().map(table.headings()::get).toList();
     List<String> others = table.headings().stream().filter(h -> !timeNames.contains(h)).toList();
-    ChannelMapping mapping = ChannelMapping.settle(others, known.mapping(), known.whence(), words(others));
+    ChannelMapping mapping =
+        ChannelMapping.settle(others, known.mapping(), known.whence(), words(others));
     OptionalDouble rate =
         known.mapping().map(ReadingMapping::sampleRateHz).orElse(OptionalDouble.empty());
     if (time.columns().isEmpty() && rate.isEmpty()) {
@@ -74,8 +75,7 @@ final class TextCapture {
 
   private static ChannelMapping.Words words(List<String> names) {
     List<Heading> headings =
-        ChannelNames.read(
-            names.stream().map(n -> new ChannelNames.Channel(n, "", "")).toList());
+        ChannelNames.read(names.stream().map(n -> new ChannelNames.Channel(n, "", "")).toList());
     return new ChannelMapping.Words(
         name -> headings.get(names.indexOf(name)), MeasuredQuantity::ofCapture, EXAMPLES);
   }

@@ -1,5 +1,6 @@
 package fourthwire.intake.reading;
 
+import fourthwire.intake.reading.pqdif.Pqdif;
 import fourthwire.metering.RawFile;
 import java.io.ByteArrayInputStream;
 import java.io.IOException;
@@ -118,10 +119,12 @@ final class Upload {
               + " of them.");
     }
     if (parts.size() == 1) {
-      return TextFormat.of(parts.get(0));
+      Part only = parts.get(0);
+      return Pqdif.isOne(only.start(16)) ? PqdifFormat.of(only) : TextFormat.of(only);
     }
     throw new ReadingRefusedException(
-        "One reading at a time: one CSV file, one xlsx workbook, one CFF file, or one CFG file with its DAT file;"
+        "One reading at a time: one CSV file, one xlsx workbook, one PQDIF file, one CFF file, or one"
+            + " CFG file with its DAT file;"
             + " found "
             + (parts.isEmpty()
                 ? "none"

@@ -89,30 +89,28 @@ class ComtradeRecordsTest {
     checked(bent(w -> w.skewS = 60e-6).files());
     checked(bent(w -> w.statesRate = false).files());
     checked(
-        bent(
-                w -> {
-                  w.format = "ASCII";
-                  w.ownTimes = false;
-                })
+        bent(w -> {
+              w.format = "ASCII";
+              w.ownTimes = false;
+            })
             .files());
     checked(
-        bent(
-                w -> {
-                  w.format = "ASCII";
-                  w.statesRate = false;
-                  w.timeMultiplier = 1.5;
-                })
+        bent(w -> {
+              w.format = "ASCII";
+              w.statesRate = false;
+              w.timeMultiplier = 1.5;
+            })
             .files());
   }
 
   @Test
   void twoRatesAreFittedAndSaidSo() {
-    CaptureResult r = checked(
-            bent(
-                    w -> {
-                      w.secondRateHz = 12800;
-                      w.samples = 3200;
-                    })
+    CaptureResult r =
+        checked(
+            bent(w -> {
+                  w.secondRateHz = 12800;
+                  w.samples = 3200;
+                })
                 .files());
     assertThat(r.basis()).contains("uneven");
     assertThat(r.windows()).isEmpty();
@@ -135,7 +133,9 @@ class ComtradeRecordsTest {
     }
   }
 
-  /** Lines cut from the end, garbage behind the data, text in other encodings, names with commas. */
+  /**
+   * Lines cut from the end, garbage behind the data, text in other encodings, names with commas.
+   */
   @Test
   void whatIsMissingOrWrongWhereNoFigureHangsOnIt() {
     RecordWriter w = new RecordWriter();
@@ -153,9 +153,7 @@ class ComtradeRecordsTest {
     RecordWriter text = bent(t -> t.format = "ASCII");
     String rows = new String(text.data(), StandardCharsets.US_ASCII);
     for (String end : List.of("\u001A", "\r\n\r\n", "end of data\r\n", "1601,250000,1,2\r\n")) {
-      checked(
-          List.of(
-              Files.of("r.cfg", text.configurationBytes()), Files.of("r.dat", rows + end)));
+      checked(List.of(Files.of("r.cfg", text.configurationBytes()), Files.of("r.dat", rows + end)));
     }
     assertThatThrownBy(
             () ->
@@ -170,7 +168,8 @@ class ComtradeRecordsTest {
   void statusWordsThatAreNotThere() {
     RecordWriter with = new RecordWriter();
     RecordWriter without = bent(w -> w.digital = 0);
-    checked(List.of(Files.of("r.cfg", with.configurationBytes()), Files.of("r.dat", without.data())));
+    checked(
+        List.of(Files.of("r.cfg", with.configurationBytes()), Files.of("r.dat", without.data())));
   }
 
   @Test
@@ -207,7 +206,9 @@ class ComtradeRecordsTest {
   void channelsThatAreNotClearAreAsked() {
     RecordWriter w = new RecordWriter();
     String cfg =
-        String.join("\n", w.configuration()).replace("4,IA,A,", "4,Feeder,,").replace(",IB,B", ",IB,C");
+        String.join("\n", w.configuration())
+            .replace("4,IA,A,", "4,Feeder,,")
+            .replace(",IB,B", ",IB,C");
     try {
       new FormatReader()
           .plan(List.of(Files.of("r.cfg", cfg), Files.of("r.dat", w.data())), Files.setting(50));

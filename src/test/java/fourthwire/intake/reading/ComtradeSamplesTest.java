@@ -53,12 +53,16 @@ class ComtradeSamplesTest {
 
   @Test
   void missingValuesAreNotNumbers() {
-    Comtrade c = Comtrade.of(bytes("sample_ascii.cfg"), bytes("sample_ascii_missing.dat"), OptionalDouble.empty());
+    Comtrade c =
+        Comtrade.of(
+            bytes("sample_ascii.cfg"), bytes("sample_ascii_missing.dat"), OptionalDouble.empty());
     assertThat(c.samples(0).at(1)).isNaN();
     assertThat(c.samples(1).at(2)).isNaN();
     assertThat(c.samples(2).at(3)).isNaN();
     assertThat(c.samples(0).at(0)).isEqualTo(-83 * A + B, within(1e-5));
-    Comtrade binary = Comtrade.of(bytes("sample_bin.cfg"), bytes("sample_bin_missing.dat"), OptionalDouble.empty());
+    Comtrade binary =
+        Comtrade.of(
+            bytes("sample_bin.cfg"), bytes("sample_bin_missing.dat"), OptionalDouble.empty());
     assertThat(Arrays.stream(values(binary, 0)).filter(Double::isNaN).count()).isPositive();
   }
 
@@ -66,9 +70,21 @@ class ComtradeSamplesTest {
   void oddEncodingsAndSubstituteCharacters() {
     double[] plain = values(read("sample_ascii"), 0);
     assertThat(values(read("sample_iso8859-1"), 0)).containsExactly(plain);
-    assertThat(values(Comtrade.of(bytes("sample_ascii_utf-8.cfg"), bytes("sample_ascii.dat"), OptionalDouble.empty()), 0))
+    assertThat(
+            values(
+                Comtrade.of(
+                    bytes("sample_ascii_utf-8.cfg"),
+                    bytes("sample_ascii.dat"),
+                    OptionalDouble.empty()),
+                0))
         .containsExactly(plain);
-    assertThat(values(Comtrade.of(bytes("sample_sub_char.cfg"), bytes("sample_ascii.dat"), OptionalDouble.empty()), 0))
+    assertThat(
+            values(
+                Comtrade.of(
+                    bytes("sample_sub_char.cfg"),
+                    bytes("sample_ascii.dat"),
+                    OptionalDouble.empty()),
+                0))
         .containsExactly(plain);
   }
 

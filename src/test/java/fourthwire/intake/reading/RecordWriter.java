@@ -37,9 +37,7 @@ final class RecordWriter {
   /** Time of a sample. */
   private double time(int k) {
     int half = samples / 2;
-    return secondRateHz == 0 || k < half
-        ? k / rateHz
-        : half / rateHz + (k - half) / secondRateHz;
+    return secondRateHz == 0 || k < half ? k / rateHz : half / rateHz + (k - half) / secondRateHz;
   }
 
   /** What channel c shows at sample k, volts or primary amps. */
@@ -177,7 +175,12 @@ final class RecordWriter {
     out.writeBytes(("--- file type: CFG ---" + lineEnd).getBytes(StandardCharsets.US_ASCII));
     out.writeBytes(configurationBytes());
     out.writeBytes(
-        ("--- file type: INF ---" + lineEnd + "--- file type: HDR ---" + lineEnd + "a note" + lineEnd)
+        ("--- file type: INF ---"
+                + lineEnd
+                + "--- file type: HDR ---"
+                + lineEnd
+                + "a note"
+                + lineEnd)
             .getBytes(StandardCharsets.US_ASCII));
     out.writeBytes(
         ("--- file type: DAT " + format + length + " ---" + lineEnd)

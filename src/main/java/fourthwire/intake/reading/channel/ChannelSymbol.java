@@ -100,7 +100,10 @@ record ChannelSymbol(
   }
 
   private static String residualLetter(List<String> words) {
-    return first(words, RESIDUAL).map(m -> m.group(1)).map(l -> l.equals("i") ? "i" : "v").orElse("");
+    return first(words, RESIDUAL)
+        .map(m -> m.group(1))
+        .map(l -> l.equals("i") ? "i" : "v")
+        .orElse("");
   }
 
   /** A second token that is a number behind a letter is a feeder's number, as in {@code IA2}. */
@@ -113,7 +116,8 @@ record ChannelSymbol(
   /** A second conductor behind a hyphen, written as the first is: {@code UL1-L2}, {@code VA-B}. */
   private static String joined(String name, Matcher symbol) {
     Matcher m =
-        Pattern.compile(Pattern.quote(symbol.group()) + "\\s*[-/]\\s*(" + TOKEN + ")(?![\\p{L}\\p{N}])")
+        Pattern.compile(
+                Pattern.quote(symbol.group()) + "\\s*[-/]\\s*(" + TOKEN + ")(?![\\p{L}\\p{N}])")
             .matcher(name.toLowerCase(Locale.ROOT));
     boolean digit = symbol.group(2).matches("\\d");
     return m.find() && m.group(1).matches("\\d") == digit ? m.group(1) : "";
@@ -128,10 +132,12 @@ record ChannelSymbol(
       Matcher m = CONDUCTOR.matcher(words.get(k));
       boolean led =
           k > 0 && words.get(k - 1).matches("[iuvl]|ph|phase|line|current|curr?|voltage|volts?");
-      boolean named = words.get(k).matches("l[123].*|(ph|phase).+|[abcrstyn]|[abc][abcn]|[rst][rstn]");
+      boolean named =
+          words.get(k).matches("l[123].*|(ph|phase).+|[abcrstyn]|[abc][abcn]|[rst][rstn]");
       if (m.matches() && (led || named) && !isLetter(words, k)) {
         boolean two = k + 1 < words.size() && words.get(k + 1).matches("(" + TOKEN + ")");
-        return new Tokens(m.group(1), two && second(m, 2).isEmpty() ? words.get(k + 1) : second(m, 2));
+        return new Tokens(
+            m.group(1), two && second(m, 2).isEmpty() ? words.get(k + 1) : second(m, 2));
       }
     }
     return Tokens.NONE;

@@ -47,7 +47,9 @@ class ChannelNamesTest {
     List<ChannelNames.Channel> asked =
         Arrays.stream(channels.trim().split(" ")).map(ChannelNamesTest::channel).toList();
     String read =
-        ChannelNames.read(asked).stream().map(ChannelNamesTest::text).collect(Collectors.joining(" "));
+        ChannelNames.read(asked).stream()
+            .map(ChannelNamesTest::text)
+            .collect(Collectors.joining(" "));
     assertThat(read).isEqualTo(expected.trim());
   }
 
@@ -74,8 +76,12 @@ class ChannelNamesTest {
   /** Units in the headings of a table of samples. */
   @ParameterizedTest
   @CsvSource({
-    "U1 [V], L1.v, 1", "I1 [mA], L1.i, 0.001", "Ia (A), L1.i, 1", "Voltage L2 (kV), L2.v, 1000",
-    "I L1 A, L1.i, 1", "v_ab, L1-L2.v, 1"
+    "U1 [V], L1.v, 1",
+    "I1 [mA], L1.i, 0.001",
+    "Ia (A), L1.i, 1",
+    "Voltage L2 (kV), L2.v, 1000",
+    "I L1 A, L1.i, 1",
+    "v_ab, L1-L2.v, 1"
   })
   void readsUnitsInHeadings(String heading, String quantity, double factor) {
     Heading h = ChannelNames.read(List.of(new ChannelNames.Channel(heading, "", ""))).get(0);

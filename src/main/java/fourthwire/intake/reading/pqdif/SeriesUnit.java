@@ -1,0 +1,32 @@
+package fourthwire.intake.reading.pqdif;
+
+/** Units of series by their number; those that a building's readings come in (from memory). */
+public enum SeriesUnit {
+  MOMENT(1),
+  SECONDS(2),
+  VOLTS(6),
+  AMPS(7),
+  VOLT_AMPERES(8),
+  WATTS(9),
+  VARS(10),
+  HERTZ(15),
+  DEGREES(17),
+  PER_UNIT(20),
+  PERCENT(21),
+  OTHER(-1);
+
+  private final int number;
+
+  SeriesUnit(int number) {
+    this.number = number;
+  }
+
+  static SeriesUnit of(double number) {
+    for (SeriesUnit u : values()) {
+      if (u.number == number) {
+        return u;
+      }
+    }
+    return OTHER;
+  }
+}

@@ -1,0 +1,9 @@
+/**
+ * PQDIF files (IEEE 1159.3-2003): the chain of tagged records, their trees of elements, and in them
+ * channels' values. Layout and identifiers are from memory of the standard; an identifier that is
+ * not known here leaves its element unread, never guessed.
+ *
+ * <p>Door: {@link fourthwire.intake.reading.pqdif.Pqdif}. Uses nothing else of ours.
+ */
+@org.jspecify.annotations.NullMarked
+package fourthwire.intake.reading.pqdif;
