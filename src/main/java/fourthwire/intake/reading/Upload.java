@@ -123,9 +123,8 @@ final class Upload {
       return Pqdif.isOne(only.start(16)) ? PqdifFormat.of(only) : TextFormat.of(only);
     }
     throw new ReadingRefusedException(
-        "One reading at a time: one CSV file, one xlsx workbook, one PQDIF file, one CFF file, or one"
-            + " CFG file with its DAT file;"
-            + " found "
+        "One reading at a time: one CSV file, one xlsx workbook, one PQDIF file, one CFF file, or"
+            + " one CFG file with its DAT file; found "
             + (parts.isEmpty()
                 ? "none"
                 : String.join(", ", parts.stream().map(Part::name).toList()))

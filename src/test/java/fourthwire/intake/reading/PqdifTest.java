@@ -122,8 +122,7 @@ class PqdifTest {
   @ValueSource(booleans = {false, true})
   void theLongestWaveformsBecomeACapture(boolean compressed) {
     PqdifWriter w = writer(compressed);
-    byte[] file =
-        w.file(List.of(trend(w, 10), waves(w, "first", 640), waves(w, "second", 6400)));
+    byte[] file = w.file(List.of(trend(w, 10), waves(w, "first", 640), waves(w, "second", 6400)));
     Reading r = read(file, Optional.of(ReadingKind.CAPTURE));
     CaptureResult c = r.capture().orElseThrow();
     assertThat(r.count()).isEqualTo(6400);

@@ -158,13 +158,13 @@ final class PqdifWriter {
     Instance even(int count, double stepS) {
       series.add(
           collection(
-              "3d786f95-f76e", List.of(PqdifWriter.reals("3d786f99-f76e", new double[] {1, count, stepS}))));
+              "3d786f95-f76e",
+              List.of(PqdifWriter.reals("3d786f99-f76e", new double[] {1, count, stepS}))));
       return this;
     }
 
     Instance reals(double... values) {
-      series.add(
-          collection("3d786f95-f76e", List.of(PqdifWriter.reals("3d786f99-f76e", values))));
+      series.add(collection("3d786f95-f76e", List.of(PqdifWriter.reals("3d786f99-f76e", values))));
       return this;
     }
 
@@ -202,9 +202,11 @@ final class PqdifWriter {
     List<byte[]> bodies = new ArrayList<>();
     List<UUID> types = new ArrayList<>();
     types.add(tag("89738606-f1c3"));
-    bodies.add(body(List.of(text("89738608-f1c3", "test"), number("8973861c-f1c3", compressed ? 1 : 0))));
+    bodies.add(
+        body(List.of(text("89738608-f1c3", "test"), number("8973861c-f1c3", compressed ? 1 : 0))));
     types.add(tag("89738619-f1c3"));
-    bodies.add(body(List.of(text("b48d8587-f5f5", "meter"), collection("b48d858d-f5f5", definitions))));
+    bodies.add(
+        body(List.of(text("b48d8587-f5f5", "meter"), collection("b48d858d-f5f5", definitions))));
     for (Observation o : observations) {
       types.add(tag("8973861a-f1c3"));
       bodies.add(

@@ -29,7 +29,8 @@ class ChannelNamesTest {
         "IA//A IB//A IC//A IR//A IG//A | L1.i L2.i L3.i N.i N.i",
         "IU//A IV//A IW//A | L1.i L2.i L3.i",
         "VAB//V VBC//V VCA//V VAN//V | L1-L2.v L2-L3.v L3-L1.v L1.v",
-        "Current/A/A Current/B/A Current/C/A Voltage/A-B/V Voltage/N/V | L1.i L2.i L3.i L1-L2.v N.v",
+        "Current/A/A Current/B/A Current/C/A Voltage/A-B/V Voltage/N/V | L1.i L2.i L3.i L1-L2.v"
+            + " N.v",
         "Phase_A_Current//A Phase_B_Voltage//V Neutral_Current//A | L1.i L2.v N.i",
         "Line_1_IA//Amps Line_1_VA//Volts | L1.i L1.v",
         "CT1/A/A CT2/B/A VT1/C/kV | L1.i L2.i L3.v*1000",
