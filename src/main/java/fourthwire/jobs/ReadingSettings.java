@@ -7,6 +7,7 @@ import fourthwire.metering.ReadingRepository;
 import fourthwire.metering.ReadingRepository.MeterRef;
 import fourthwire.site.Meter;
 import fourthwire.site.SiteRepository;
+import fourthwire.site.SiteTree;
 import fourthwire.site.Survey;
 import java.time.DateTimeException;
 import java.time.ZoneId;
@@ -36,7 +37,11 @@ public final class ReadingSettings {
         mapping,
         layout -> readings.mapping(siteId, ref.name(), layout),
         meter.map(Meter::ctReversed).orElse(List.of()),
-        meter.map(Meter::ctRatio).orElse(OptionalDouble.empty()));
+        meter.map(Meter::ctRatio).orElse(OptionalDouble.empty()),
+        SiteTree.of(survey).nodes().stream()
+            .filter(n -> n.name().equals(ref.node()))
+            .mapToDouble(SiteTree.Node::lineToNeutralV)
+            .findFirst());
   }
 
   /**
@@ -57,7 +62,8 @@ public final class ReadingSettings {
                       + entry.id()
                       + " of "
                       + ref.name()
-                      + ", read by another mapping; delete that reading first to read it otherwise");
+                      + ", read by another mapping; delete that reading first to read it"
+                      + " otherwise");
             });
   }
 

@@ -7,10 +7,8 @@ import fourthwire.metering.CaptureWindows.HarmonicGroups;
 import fourthwire.metering.VoltageEvents;
 import fourthwire.metering.VoltageEvents.Event;
 import fourthwire.metering.WaveformPicture;
-import fourthwire.quantity.Figure;
 import java.util.Arrays;
 import java.util.List;
-import java.util.Map;
 import java.util.Optional;
 import tools.jackson.databind.JsonNode;
 import tools.jackson.databind.node.ArrayNode;
@@ -102,15 +100,9 @@ final class WaveformJson {
 
   private static ObjectNode write(VoltageEvents e) {
     ObjectNode o = Json.object().put("basis", e.basis());
-    o.set("lowest_v", volts(e.lowestV()));
-    o.set("highest_v", volts(e.highestV()));
+    o.set("lowest_v", Json.map(e.lowestV(), DoubleNode::valueOf));
+    o.set("highest_v", Json.map(e.highestV(), DoubleNode::valueOf));
     o.set("list", Json.list(e.events(), WaveformJson::write));
-    return o;
-  }
-
-  private static ObjectNode volts(Map<String, Figure> figures) {
-    ObjectNode o = Json.object();
-    figures.forEach((place, figure) -> Json.put(o, place, figure));
     return o;
   }
 
@@ -129,21 +121,9 @@ final class WaveformJson {
     JsonNode o = capture.path(EVENTS);
     return new VoltageEvents(
         o.path("basis").asString(""),
-        volts(o, "lowest_v"),
-        volts(o, "highest_v"),
+        Json.map(o, "lowest_v", JsonNode::doubleValue),
+        Json.map(o, "highest_v", JsonNode::doubleValue),
         Json.list(o, "list", WaveformJson::event));
-  }
-
-  private static Map<String, Figure> volts(JsonNode o, String key) {
-    Map<String, Figure> volts = new java.util.LinkedHashMap<>();
-    Json.entries(
-        o.path(key),
-        (place, value) -> {
-          if (!value.isString()) {
-            volts.put(place, Json.figure(o.path(key), place));
-          }
-        });
-    return volts;
   }
 
   private static Event event(JsonNode o) {

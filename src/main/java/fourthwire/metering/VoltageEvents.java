@@ -1,6 +1,5 @@
 package fourthwire.metering;
 
-import fourthwire.quantity.Figure;
 import java.util.List;
 import java.util.Map;
 
@@ -9,12 +8,13 @@ import java.util.Map;
  * (IEC 61000-4-30:2015, 5.4 and 5.5).
  *
  * @param basis thresholds and reference, in sentences; or why none were looked for
- * @param lowestV lowest half-cycle rms by line ({@code L1}) or pair, volts
+ * @param lowestV lowest half-cycle rms by line ({@code L1}) or pair, volts; none of a record that
+ *     is shorter than a cycle
  * @param highestV highest likewise
  * @param events in time
  */
 public record VoltageEvents(
-    String basis, Map<String, Figure> lowestV, Map<String, Figure> highestV, List<Event> events) {
+    String basis, Map<String, Double> lowestV, Map<String, Double> highestV, List<Event> events) {
   /** Copies the list. */
   public VoltageEvents {
     events = List.copyOf(events);

@@ -45,10 +45,14 @@ final class WaveformShapes {
   static Schema<?> events() {
     return Shape.of("Of a capture: dips, swells and interruptions")
         .text("basis", "Thresholds and reference, or why none were looked for")
-        .part("lowest_v", Shape.of("Lowest half-cycle rms by L1 or L1-L2").schema())
-        .part("highest_v", Shape.of("Highest likewise").schema())
+        .part("lowest_v", volts("Lowest half-cycle rms by L1 or L1-L2"))
+        .part("highest_v", volts("Highest likewise"))
         .list("list", "Events in time", event())
         .schema();
+  }
+
+  private static Schema<?> volts(String meaning) {
+    return Shape.of(meaning).others(Shape.number("Volts")).schema();
   }
 
   private static Schema<?> event() {

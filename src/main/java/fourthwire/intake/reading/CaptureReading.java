@@ -32,7 +32,10 @@ final class CaptureReading {
     }
     try {
       return CaptureAnalysis.of(
-          capture.turned(reversed.stream().map(c -> c + ".i").toList()), setting.nominalHz(), all);
+          capture.turned(reversed.stream().map(c -> c + ".i").toList()),
+          setting.nominalHz(),
+          setting.nominalV(),
+          all);
     } catch (NoFundamentalException e) {
       throw new ReadingRefusedException(String.valueOf(e.getMessage()));
     }

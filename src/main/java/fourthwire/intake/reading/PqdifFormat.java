@@ -1,10 +1,12 @@
 package fourthwire.intake.reading;
 
+import fourthwire.intake.reading.pqdif.IntervalTable;
 import fourthwire.intake.reading.pqdif.Pqdif;
 import fourthwire.intake.reading.pqdif.PqdifException;
 import fourthwire.metering.Reading;
 import fourthwire.metering.ReadingKind;
 import fourthwire.metering.ReadingMapping;
+import java.io.ByteArrayInputStream;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -23,7 +25,9 @@ final class PqdifFormat implements Format {
 
   private PqdifFormat(Pqdif file, String name) {
     this.file = file;
-    this.log = PqdifLog.of(file, name).map(TextFormat::of);
+    this.log =
+        IntervalTable.of(file)
+            .map(csv -> TextFormat.of(new Part(name, () -> new ByteArrayInputStream(csv))));
     this.capture = PqdifCapture.of(file).map(c -> c);
   }
 

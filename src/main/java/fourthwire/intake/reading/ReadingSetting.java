@@ -17,6 +17,7 @@ import java.util.function.Function;
  * @param remembered the mapping confirmed before for this meter and a layout
  * @param ctReversed conductors whose current transformer is known to point the wrong way
  * @param ctRatio of the meter, applied to currents a file marks as secondary without a ratio
+ * @param nominalV line-to-neutral voltage of the site at the meter
  */
 public record ReadingSetting(
     Optional<ZoneId> siteZone,
@@ -24,4 +25,17 @@ public record ReadingSetting(
     Optional<ReadingMapping> mapping,
     Function<String, Optional<ReadingMapping>> remembered,
     List<Conductor> ctReversed,
-    OptionalDouble ctRatio) {}
+    OptionalDouble ctRatio,
+    OptionalDouble nominalV) {
+
+  /** Of a meter at a node whose nominal voltage is not known. */
+  public ReadingSetting(
+      Optional<ZoneId> siteZone,
+      double nominalHz,
+      Optional<ReadingMapping> mapping,
+      Function<String, Optional<ReadingMapping>> remembered,
+      List<Conductor> ctReversed,
+      OptionalDouble ctRatio) {
+    this(siteZone, nominalHz, mapping, remembered, ctReversed, ctRatio, OptionalDouble.empty());
+  }
+}

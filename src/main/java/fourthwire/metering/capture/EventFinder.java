@@ -4,7 +4,6 @@ import fourthwire.metering.VoltageEvents;
 import fourthwire.metering.VoltageEvents.Event;
 import fourthwire.metering.VoltageEvents.Kind;
 import fourthwire.metering.capture.window.PhaseTrack;
-import fourthwire.quantity.Figure;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.LinkedHashMap;
@@ -100,28 +99,24 @@ final class EventFinder {
     events.addAll(events(Kind.SWELL, 1.1));
     events.addAll(events(Kind.INTERRUPTION, 0.1));
     events.sort(Comparator.comparingDouble(Event::fromS));
-    Map<String, Figure> lowest = new LinkedHashMap<>();
-    Map<String, Figure> highest = new LinkedHashMap<>();
+    Map<String, Double> lowest = new LinkedHashMap<>();
+    Map<String, Double> highest = new LinkedHashMap<>();
     halves.forEach(
         (place, h) -> {
-          lowest.put(place, extreme(h, Kind.DIP, 0, h.count()));
-          highest.put(place, extreme(h, Kind.SWELL, 0, h.count()));
+          if (h.count() > 0) {
+            lowest.put(place, extreme(h, Kind.DIP, 0, h.count()));
+            highest.put(place, extreme(h, Kind.SWELL, 0, h.count()));
+          }
         });
     return new VoltageEvents(basis, lowest, highest, events);
   }
 
-  private static Figure extreme(HalfCycles h, Kind kind, int from, int to) {
-    OptionalDouble extreme = OptionalDouble.empty();
-    for (int k = from; k < to; k++) {
-      double rms = h.rms(k);
-      boolean further =
-          extreme.isEmpty()
-              || (kind == Kind.SWELL ? rms > extreme.getAsDouble() : rms < extreme.getAsDouble());
-      extreme = further ? OptionalDouble.of(rms) : extreme;
+  private static double extreme(HalfCycles h, Kind kind, int from, int to) {
+    double extreme = h.rms(from);
+    for (int k = from + 1; k < to; k++) {
+      extreme = kind == Kind.SWELL ? Math.max(extreme, h.rms(k)) : Math.min(extreme, h.rms(k));
     }
-    return extreme.isPresent()
-        ? Figure.of(extreme.getAsDouble())
-        : Figure.unknown("the record is shorter than one cycle of the voltage");
+    return extreme;
   }
 
   private List<Event> events(Kind kind, double threshold) {
@@ -163,7 +158,7 @@ final class EventFinder {
     String place = "";
     double furthest = kind == Kind.SWELL ? 0 : Double.POSITIVE_INFINITY;
     for (Map.Entry<String, HalfCycles> e : halves.entrySet()) {
-      double extreme = extreme(e.getValue(), kind, from, to).value().orElseThrow();
+      double extreme = extreme(e.getValue(), kind, from, to);
       if (kind == Kind.SWELL ? extreme > furthest : extreme < furthest) {
         furthest = extreme;
         place = e.getKey();

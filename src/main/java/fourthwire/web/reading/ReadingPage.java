@@ -12,6 +12,7 @@ import java.util.Optional;
  * @param quantities of a log
  * @param capture of a capture: its currents, voltages and powers
  * @param orders of a capture: the spectrum in figures
+ * @param view of a capture: what no node's page has
  */
 record ReadingPage(
     long id,
@@ -27,7 +28,31 @@ record ReadingPage(
     String spectrum,
     String cycle,
     List<NodePage.Key> keys,
-    String basis) {
+    String basis,
+    Optional<CaptureView> view) {
+  /**
+   * What only the page of a capture shows.
+   *
+   * @param voltages waveforms over the record; empty text for none
+   * @param currents likewise
+   * @param phasors the fundamentals
+   * @param tables unbalance and standard intervals
+   * @param folded harmonic groups, opened on demand
+   * @param eventsBasis thresholds of the events
+   */
+  record CaptureView(
+      String voltages,
+      String currents,
+      String phasors,
+      List<NodePage.Grid> tables,
+      List<NodePage.Grid> folded,
+      String eventsBasis,
+      List<EventRow> events) {}
+
+  /** A dip, swell or interruption. */
+  record EventRow(
+      String kind, String from, String duration, String place, String extreme, String percent) {}
+
   /** A fact about the file. */
   record Fact(String key, String text) {}
 

@@ -84,7 +84,8 @@ class ReadingPageMaker {
         reading.capture().map(c -> new CaptureTables(words, names).spectrum(c)).orElse(""),
         reading.capture().map(this::cycle).orElse(""),
         reading.capture().map(c -> keys(c, names)).orElse(List.of()),
-        reading.capture().map(c -> names.in(c.basis() + " " + c.neutralBasis())).orElse(""));
+        reading.capture().map(c -> names.in(c.basis() + " " + c.neutralBasis())).orElse(""),
+        reading.capture().map(c -> new CaptureViewMaker(words, names).of(c)));
   }
 
   private static String kindKey(Reading reading) {

@@ -42,6 +42,7 @@ class MessagesTest {
           "audit.state.",
           "spectrum.of.",
           "reading.kind.",
+          "reading.event.kind.",
           "reading.fact.",
           "loads.kind.",
           "loads.model.",

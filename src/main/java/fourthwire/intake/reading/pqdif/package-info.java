@@ -3,7 +3,8 @@
  * channels' values. Layout and identifiers are from memory of the standard; an identifier that is
  * not known here leaves its element unread, never guessed.
  *
- * <p>Door: {@link fourthwire.intake.reading.pqdif.Pqdif}. Uses nothing else of ours.
+ * <p>Doors: {@link fourthwire.intake.reading.pqdif.Pqdif}, {@link
+ * fourthwire.intake.reading.pqdif.IntervalTable}. May use {@code metering}.
  */
 @org.jspecify.annotations.NullMarked
 package fourthwire.intake.reading.pqdif;

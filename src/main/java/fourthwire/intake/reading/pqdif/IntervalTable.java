@@ -1,8 +1,5 @@
-package fourthwire.intake.reading;
+package fourthwire.intake.reading.pqdif;
 
-import fourthwire.intake.reading.pqdif.Pqdif;
-import fourthwire.intake.reading.pqdif.ValueSeries;
-import java.io.ByteArrayInputStream;
 import java.nio.charset.StandardCharsets;
 import java.time.Duration;
 import java.time.Instant;
@@ -17,35 +14,34 @@ import java.util.TreeMap;
  * The interval data of a PQDIF file as a table: a column a series, named by its quantity, a row a
  * moment. From there it is read like any other log.
  */
-final class PqdifLog {
+public final class IntervalTable {
   private static final long MOST_CELLS = 20_000_000;
 
   private final Map<String, Integer> columns = new LinkedHashMap<>();
   private final TreeMap<Instant, double[]> rows = new TreeMap<>();
 
-  private PqdifLog() {}
+  private IntervalTable() {}
 
-  /** The table of a file; empty where it holds no interval data. */
-  static Optional<Part> of(Pqdif file, String name) {
+  /** The table of a file as CSV in UTF-8; empty where it holds no interval data. */
+  public static Optional<byte[]> of(Pqdif file) {
     List<ValueSeries> logged =
         file.series().stream().filter(s -> !s.origin().isWaveform() && s.count() > 0).toList();
     if (logged.isEmpty()) {
       return Optional.empty();
     }
-    PqdifLog log = new PqdifLog();
-    logged.forEach(s -> log.columns.putIfAbsent(PqdifNames.column(s.origin()), log.columns.size()));
+    IntervalTable log = new IntervalTable();
+    logged.forEach(s -> log.columns.putIfAbsent(ColumnName.of(s.origin()), log.columns.size()));
     logged.forEach(log::add);
-    byte[] csv = log.csv();
-    return Optional.of(new Part(name, () -> new ByteArrayInputStream(csv)));
+    return Optional.of(log.csv());
   }
 
   private void add(ValueSeries s) {
-    int column = columns.get(PqdifNames.column(s.origin()));
+    int column = columns.get(ColumnName.of(s.origin()));
     for (int k = 0; k < s.count(); k++) {
       Instant at = s.origin().start().plus(Duration.ofMillis(Math.round(1000 * s.secondsAt(k))));
-      rows.computeIfAbsent(at, t -> blank())[column] = s.at(k) * PqdifNames.factor(s.origin());
+      rows.computeIfAbsent(at, t -> blank())[column] = s.at(k) * ColumnName.factor(s.origin());
       if ((long) rows.size() * columns.size() > MOST_CELLS) {
-        throw new ReadingRefusedException(
+        throw new PqdifException(
             "The PQDIF file holds more than " + MOST_CELLS + " values: cut it into shorter files.");
       }
     }

@@ -1,19 +1,17 @@
-package fourthwire.intake.reading;
+package fourthwire.intake.reading.pqdif;
 
-import fourthwire.intake.reading.pqdif.SeriesUnit;
-import fourthwire.intake.reading.pqdif.ValueSeries;
 import fourthwire.metering.MeasuredQuantity;
 import fourthwire.metering.ReadingMapping.Statistic;
 import java.util.Optional;
 
 /** What the interval data of a PQDIF file are called here. */
-final class PqdifNames {
-  private PqdifNames() {}
+final class ColumnName {
+  private ColumnName() {}
 
   /**
    * The quantity's name with its statistic, or the channel's own name where that is not settled.
    */
-  static String column(ValueSeries.Origin o) {
+  static String of(ValueSeries.Origin o) {
     Statistic statistic =
         switch (o.statistic()) {
           case MIN -> Statistic.MIN;
