@@ -62,12 +62,12 @@ final class ComtradeFormat implements Format {
     Mappings known = Mappings.of(setting, layout);
     ChannelMapping mapping =
         ChannelMapping.settle(names, known.mapping(), known.whence(), words(channels));
+    List<String> notes = new ArrayList<>();
     OptionalDouble rate =
         known.mapping().map(ReadingMapping::sampleRateHz).orElse(OptionalDouble.empty());
     if (rate.isEmpty() && guarded(() -> Comtrade.statesNoRate(configuration.get()))) {
-      askWhereUntimed(names);
+      askWhereUntimed(names, notes);
     }
-    List<String> notes = new ArrayList<>();
     if (!mapping.unmapped().isEmpty()) {
       notes.add("Channels not read: " + String.join(", ", mapping.unmapped()) + ".");
     }
@@ -84,9 +84,14 @@ final class ComtradeFormat implements Format {
         notes);
   }
 
-  private void askWhereUntimed(List<String> names) {
+  private void askWhereUntimed(List<String> names, List<String> notes) {
     try {
-      record.apply(OptionalDouble.empty());
+      Comtrade timed = record.apply(OptionalDouble.empty());
+      notes.add(
+          String.format(
+              Locale.ROOT,
+              "The record states no sample rate; its samples' own times were used%s.",
+              timed.time().isEven() ? ", which are even" : ""));
     } catch (ComtradeException.NoRate e) {
       throw new ReadingRefusedException(
           String.valueOf(e.getMessage()),

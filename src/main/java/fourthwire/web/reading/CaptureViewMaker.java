@@ -14,7 +14,11 @@ import fourthwire.web.support.Words;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.function.Function;
+import java.util.stream.DoubleStream;
 
 /** Makes what only the page of a capture shows: waveforms, phasors, windows, events. */
 final class CaptureViewMaker {
@@ -73,30 +77,23 @@ final class CaptureViewMaker {
       grid.row(
           names.in(quantity),
           List.of(
-              lowest(shortest, i -> i.rms().get(quantity)),
-              highest(shortest, i -> i.rms().get(quantity)),
-              lowest(shortest, i -> i.thdPercent().get(quantity)),
-              highest(shortest, i -> i.thdPercent().get(quantity))));
+              figure(values(shortest, Interval::rms, quantity).min()),
+              figure(values(shortest, Interval::rms, quantity).max()),
+              figure(values(shortest, Interval::thdPercent, quantity).min()),
+              figure(values(shortest, Interval::thdPercent, quantity).max())));
     }
     return grid.done();
   }
 
-  private static Figure lowest(List<Interval> of, Function<Interval, Double> value) {
+  private static DoubleStream values(
+      List<Interval> of, Function<Interval, Map<String, Double>> values, String quantity) {
     return of.stream()
-        .map(value)
-        .filter(java.util.Objects::nonNull)
-        .min(Double::compare)
-        .map(Figure::of)
-        .orElse(Figure.unknown(""));
+        .flatMap(i -> Optional.ofNullable(values.apply(i).get(quantity)).stream())
+        .mapToDouble(Double::doubleValue);
   }
 
-  private static Figure highest(List<Interval> of, Function<Interval, Double> value) {
-    return of.stream()
-        .map(value)
-        .filter(java.util.Objects::nonNull)
-        .max(Double::compare)
-        .map(Figure::of)
-        .orElse(Figure.unknown(""));
+  private static Figure figure(OptionalDouble value) {
+    return value.isPresent() ? Figure.of(value.getAsDouble()) : Figure.unknown("");
   }
 
   /** A table for currents and one for voltages: by order, each quantity's subgroups. */
@@ -119,11 +116,11 @@ final class CaptureViewMaker {
       heads.add(words.of("reading.groups.between", place, unit));
     }
     Grids grid = new Grids(words, words.of("reading.groups.table"), heads);
-    int orders = w.groups().get(shown.get(0)).subgroups().size();
+    int orders = groups(w, shown.get(0)).subgroups().size();
     for (int order = 1; order <= orders; order++) {
       List<Figure> row = new ArrayList<>();
       for (String q : shown) {
-        HarmonicGroups g = w.groups().get(q);
+        HarmonicGroups g = groups(w, q);
         row.add(Figure.of(g.subgroups().get(order - 1)));
         row.add(
             order < orders ? Figure.of(g.interharmonicSubgroups().get(order)) : Figure.unknown(""));
@@ -131,6 +128,10 @@ final class CaptureViewMaker {
       grid.row(Numbers.ordinal(order), row);
     }
     return grid.done();
+  }
+
+  private static HarmonicGroups groups(CaptureWindows w, String quantity) {
+    return java.util.Objects.requireNonNull(w.groups().get(quantity));
   }
 
   private ReadingPage.EventRow row(VoltageEvents.Event e) {

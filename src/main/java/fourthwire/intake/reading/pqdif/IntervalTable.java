@@ -36,7 +36,7 @@ public final class IntervalTable {
   }
 
   private void add(ValueSeries s) {
-    int column = columns.get(ColumnName.of(s.origin()));
+    int column = columns.computeIfAbsent(ColumnName.of(s.origin()), n -> columns.size());
     for (int k = 0; k < s.count(); k++) {
       Instant at = s.origin().start().plus(Duration.ofMillis(Math.round(1000 * s.secondsAt(k))));
       rows.computeIfAbsent(at, t -> blank())[column] = s.at(k) * ColumnName.factor(s.origin());
