@@ -55,6 +55,7 @@ final class TextCapture {
     ReadingMapping.Time given =
         known.mapping().map(ReadingMapping::time).orElse(ReadingMapping.Time.FROM_FILE);
     checkFormat(given);
+    Optional<String> format = given.format().or(this::format);
     List<String> notes = new ArrayList<>(List.of(table.note()));
     if (!mapping.unmapped().isEmpty()) {
       notes.add("Columns not read: " + String.join(", ", mapping.unmapped()) + ".");
@@ -65,12 +66,28 @@ final class TextCapture {
         new ReadingMapping(
             Optional.of(ReadingKind.CAPTURE),
             new ReadingMapping.Time(
-                timeNames, given.format(), given.zone(), given.stamp(), given.intervalS()),
+                timeNames, format, given.zone(), given.stamp(), given.intervalS()),
             rate,
             mapping.columns()),
         table.headings(),
         mapping.confidence(),
         notes);
+  }
+
+  /** The order of clock times' dates; asked where the file does not settle it. */
+  private Optional<String> format() {
+    if (time.columns().isEmpty() || time.elapsed()) {
+      return Optional.empty();
+    }
+    Optional<TimeColumns.Order> order = time.order(table);
+    if (order.isEmpty()) {
+      throw new ReadingRefusedException(
+          "The dates of the samples can be read in two ways.",
+          table.headings(),
+          List.of(
+              new ReadingRefusedException.Question("time.format", "say dd/MM/yyyy or MM/dd/yyyy")));
+    }
+    return order.map(o -> o.order().pattern());
   }
 
   private static ChannelMapping.Words words(List<String> names) {

@@ -55,13 +55,25 @@ final class TextFormat implements Format {
 
   private TimeColumns time(Optional<ReadingMapping> mapping) {
     List<String> named = mapping.map(m -> m.time().columns()).orElse(List.of());
-    return named.isEmpty() ? TimeColumns.find(table) : TimeColumns.named(table, named);
+    if (!named.isEmpty()) {
+      return told(TimeColumns.named(table, named));
+    }
+    TimeColumns found = TimeColumns.find(table);
+    return found.columns().isEmpty() ? SampleClock.find(table).orElse(found) : found;
+  }
+
+  /** A column that was named may be an elapsed time that its heading does not tell. */
+  private TimeColumns told(TimeColumns named) {
+    return SampleClock.find(table)
+        .filter(t -> t.columns().equals(named.columns()))
+        .filter(t -> named.kind() == TimeColumns.Kind.CALENDAR)
+        .orElse(named);
   }
 
   /** As told, else by what the file shows: elapsed seconds or a capture's names are a capture. */
   private ReadingKind kind(Optional<ReadingMapping> mapping, TimeColumns time) {
     Optional<ReadingKind> told = mapping.flatMap(ReadingMapping::kind);
-    if (told.isEmpty() && time.elapsed() && SampleStep.isOfALog(table, time)) {
+    if (told.isEmpty() && time.elapsed() && SampleClock.isOfALog(table, time)) {
       return ReadingKind.LOG;
     }
     boolean rate = mapping.map(m -> m.sampleRateHz().isPresent()).orElse(false);
@@ -71,6 +83,8 @@ final class TextFormat implements Format {
                 .anyMatch(c -> MeasuredQuantity.ofCapture(c.quantity()).isPresent())
             || table.headings().stream().anyMatch(h -> MeasuredQuantity.ofCapture(h).isPresent());
     return told.orElse(
-        time.elapsed() || rate || captureNames ? ReadingKind.CAPTURE : ReadingKind.LOG);
+        time.elapsed() || rate || captureNames || SampleClock.isOfAWaveform(table, time)
+            ? ReadingKind.CAPTURE
+            : ReadingKind.LOG);
   }
 }

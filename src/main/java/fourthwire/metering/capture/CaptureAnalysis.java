@@ -147,7 +147,7 @@ public final class CaptureAnalysis {
         unbalance(),
         windows.map(w -> new WindowFigures(w, extent, capture).of()),
         EventFinder.of(whole, clock(), nominalV),
-        PictureMaker.of(capture));
+        PictureMaker.of(capture, extent.cycles()));
   }
 
   /** The fundamental's clock, of any evenly sampled record. */

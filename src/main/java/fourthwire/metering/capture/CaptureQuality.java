@@ -76,8 +76,8 @@ final class CaptureQuality {
       add(
           NEUTRAL_NOT_SUM,
           "N is taken from the sum of the line currents; the channel is not used.",
-          "Channel %s, mapped as N, reads %.2f A rms, but the three line currents sum to %.2f A rms:"
-              + " it is not the neutral of these lines.",
+          "Channel %s, mapped as N, reads %.2f A rms, but the three line currents sum to %.2f A"
+              + " rms: it is not the neutral of these lines.",
           name("N.i"),
           neutral.channel().orElseThrow().rms(),
           channels.sumOfLines().orElseThrow().rms());
@@ -158,7 +158,7 @@ final class CaptureQuality {
       add(
           SHORT_RECORD,
           "The figures are of these cycles only, a snapshot.",
-          "%s, so no standard aggregation: the measuring extent of IEC 61000-4-30 is %d cycles.",
+          "%s, so no standard aggregation: the measuring window of IEC 61000-4-30 is %d cycles.",
           extent.count(),
           extent.standardCycles());
     }

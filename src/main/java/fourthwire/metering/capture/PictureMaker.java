@@ -10,12 +10,15 @@ import java.util.Map;
 /** Reduces waveforms to what a picture can show. */
 final class PictureMaker {
   private static final int MOST_STRETCHES = 600;
+  private static final int FEW_CYCLES = 15;
 
   private PictureMaker() {}
 
-  static WaveformPicture of(Capture capture) {
+  /** A long record's stretches hold whole cycles, or their ends would dance. */
+  static WaveformPicture of(Capture capture, int cycles) {
     int n = capture.count();
-    int each = (n + MOST_STRETCHES - 1) / MOST_STRETCHES;
+    int stretches = cycles > FEW_CYCLES ? Math.min(MOST_STRETCHES, cycles) : MOST_STRETCHES;
+    int each = (n + stretches - 1) / stretches;
     Map<String, WaveformPicture.Trace> channels = new LinkedHashMap<>();
     List<WaveformPicture.Trace> traces =
         capture.channels().parallelStream().map(c -> trace(capture.of(c), each)).toList();

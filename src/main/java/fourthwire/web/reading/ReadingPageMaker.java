@@ -110,11 +110,14 @@ class ReadingPageMaker {
         .sampleRateHz()
         .ifPresent(rate -> facts.add(fact("rate", Numbers.plain(rate, words.of("reading.hz")))));
     reading.log().ifPresent(l -> facts.add(fact("interval", seconds(l))));
-    reading
-        .capture()
-        .ifPresent(c -> facts.add(fact("frequency", Numbers.of(c.frequencyHz(), "Hz"))));
+    reading.capture().ifPresent(c -> facts.add(fact("frequency", frequency(c))));
     facts.add(fact("sha", entry.sha256()));
     return facts;
+  }
+
+  /** To the millihertz that it is found to. */
+  private static String frequency(CaptureResult c) {
+    return Numbers.withDecimals(c.frequencyHz(), 3) + Numbers.THIN_SPACE + "Hz";
   }
 
   private static String seconds(LogResult log) {
