@@ -96,6 +96,62 @@ record RandomRectifier(
     return behindSource(seed, r, load, hertz, emf, base * between(r, 0.01, 5));
   }
 
+  /**
+   * Anything that the survey lets in: 100 W to 1 MW at 1 to 100 % load, capacitors from next to
+   * none to huge, chokes to 10 % and 30 %, sources from nothing to a fifth of V²/P, resistive or
+   * inductive, voltage balanced, unbalanced to 20 %, with a line missing, distorted, or with even
+   * orders.
+   */
+  static RandomRectifier anyDrive(long seed) {
+    Random r = new Random(seed * 15485863 + 7);
+    double watts = between(r, 100, 1e6);
+    double volts = between(r, 100, 1000);
+    double hertz = r.nextBoolean() ? 50 : 60;
+    double base = volts * volts / watts;
+    double omega = 2 * Math.PI * hertz;
+    double line = r.nextInt(2) * between(r, 1e-4, 0.1) * base;
+    double direct = r.nextInt(3) / 2 * between(r, 1e-3, 0.3) * base;
+    BridgeLoad load =
+        new BridgeLoad(
+            watts * between(r, 0.01, 1),
+            between(r, 1e-2, 1e2) / (omega * base),
+            r.nextInt(2) * between(r, 1e-4, 0.05) * base,
+            r.nextInt(2) * between(r, 1e-4, 0.05) * base / omega,
+            line / 15,
+            line / omega,
+            direct / 10,
+            direct / omega,
+            DIODE);
+    double ohms = base * between(r, 1e-5, 0.2);
+    int kind = r.nextInt(5);
+    return new RandomRectifier(
+        seed,
+        load,
+        hertz,
+        anyEmf(r, volts / Math.sqrt(3)),
+        kind < 2 ? 0 : ohms * r.nextDouble(),
+        kind % 2 == 0 ? 0 : ohms / omega);
+  }
+
+  private static PortSpectra anyEmf(Random r, double volts) {
+    PortSpectra emf = new PortSpectra(3);
+    int kind = r.nextInt(5);
+    int missing = kind == 3 && r.nextInt(4) == 0 ? r.nextInt(3) : -1;
+    for (int h = 1; h <= 49; h += kind == 4 ? 1 : 2) {
+      boolean there = h == 1 || kind > 1 && r.nextInt(4) == 0;
+      double amount = h == 1 ? 1 : there ? 0.3 / h * r.nextDouble() : 0;
+      double angle = 2 * Math.PI * r.nextDouble();
+      for (int k = 0; k < 3; k++) {
+        double off = kind == 0 || kind == 2 ? 0 : 0.2 * (r.nextDouble() - 0.5);
+        double x = angle + off - h * k * 2 * Math.PI / 3;
+        double rms = k == missing ? 0 : volts * amount * (1 + off);
+        emf.re[k][h] = rms * Math.cos(x);
+        emf.im[k][h] = rms * Math.sin(x);
+      }
+    }
+    return emf;
+  }
+
   private static RandomRectifier behindSource(
       long seed, Random r, BridgeLoad load, double hertz, PortSpectra emf, double base) {
     double ohms = base * between(r, 1e-4, 0.1);
