@@ -4,6 +4,7 @@ import fourthwire.intake.reading.ReadingPlan;
 import fourthwire.intake.reading.ReadingReader;
 import fourthwire.intake.reading.ReadingRefusedException;
 import fourthwire.intake.reading.ReadingSetting;
+import fourthwire.metering.LogResult;
 import fourthwire.metering.RawFile;
 import fourthwire.metering.Reading;
 import fourthwire.metering.ReadingRepository;
@@ -65,17 +66,21 @@ public final class ReadingRun {
     ReadingPlan plan = reader.plan(files, setting);
     settings.checkNotReadOtherwise(upload.siteId(), upload.meter(), files, plan.mapping());
     Reading reading = reader.read(files, plan, setting, listener(upload.id()));
-    uploads.finish(
-        upload.id(),
-        readings.add(
-            new ReadingRepository.Addition(
-                upload.siteId(),
-                upload.meter(),
-                files,
-                plan.layout(),
-                plan.mapping(),
-                upload.mapping(),
-                reading)));
+    try {
+      uploads.finish(
+          upload.id(),
+          readings.add(
+              new ReadingRepository.Addition(
+                  upload.siteId(),
+                  upload.meter(),
+                  files,
+                  plan.layout(),
+                  plan.mapping(),
+                  upload.mapping(),
+                  reading)));
+    } finally {
+      reading.log().flatMap(LogResult::detail).ifPresent(d -> d.series().close());
+    }
   }
 
   private BiPredicate<Double, String> listener(long uploadId) {

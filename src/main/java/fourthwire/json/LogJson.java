@@ -6,6 +6,7 @@ import fourthwire.metering.QuantitySummary;
 import java.time.Duration;
 import java.time.OffsetDateTime;
 import java.time.ZoneId;
+import java.util.Optional;
 import tools.jackson.databind.JsonNode;
 import tools.jackson.databind.node.ObjectNode;
 
@@ -43,7 +44,8 @@ final class LogJson {
     return new LogResult(
         Duration.ofNanos(Math.round(o.path("interval_s").doubleValue() * NANOS)),
         Json.map(o, "quantities", LogJson::summary),
-        Json.list(o, "key_intervals", LogJson::keyInterval));
+        Json.list(o, "key_intervals", LogJson::keyInterval),
+        Optional.empty());
   }
 
   private static QuantitySummary summary(JsonNode o) {

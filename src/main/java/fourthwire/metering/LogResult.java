@@ -1,9 +1,12 @@
 package fourthwire.metering;
 
+import fourthwire.metering.series.LogSeries;
+import fourthwire.metering.series.SeriesStatistics;
 import java.time.Duration;
 import java.time.Instant;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 
 /**
  * What an interval log says.
@@ -14,7 +17,19 @@ import java.util.Map;
  * @param keyIntervals the rows that stand for the log beside computed figures
  */
 public record LogResult(
-    Duration interval, Map<String, QuantitySummary> quantities, List<KeyInterval> keyIntervals) {
+    Duration interval,
+    Map<String, QuantitySummary> quantities,
+    List<KeyInterval> keyIntervals,
+    Optional<Detail> detail) {
+  /**
+   * What a log holds beside its summary, kept in tables of its own: it is there only when the log
+   * has just been read.
+   *
+   * @param series its rows; whoever takes the result closes it
+   * @param statistics by week and by hour of the week
+   */
+  public record Detail(LogSeries series, SeriesStatistics statistics) {}
+
   /** Key interval in which the neutral, or without one the largest line, carried most. */
   public static final String PEAK_CURRENT = "peak-current";
 

@@ -7,7 +7,7 @@ import java.util.regex.Pattern;
 /**
  * The name of what a column or channel holds; the public contract, section 4.
  *
- * @param place {@code L1}, {@code N}, {@code L1-L2}, {@code total}; empty for the frequency
+ * @param place {@code L1}, {@code N}, {@code L1-L2}, {@code total}; empty for the frequency and unbalance
  * @param measure {@code rms_a}, {@code current_h3_percent} …; of a capture {@code v} or {@code i}
  */
 public record MeasuredQuantity(String place, String measure) {
@@ -27,7 +27,7 @@ public record MeasuredQuantity(String place, String measure) {
               + "_(?:v|percent|deg))|(?:"
               + LINE
               + "|total)\\.(?:active_w|reactive_var|apparent_va|power_factor|displacement_factor"
-              + "|energy_wh)|frequency_hz");
+              + "|energy_wh)|frequency_hz|(?:voltage|current)_unbalance_percent");
   private static final Pattern CAPTURED =
       Pattern.compile("(?:L[123]|N)\\.i|(?:" + LINE + "|N|" + PAIR + ")\\.v");
 

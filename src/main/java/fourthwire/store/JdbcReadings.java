@@ -2,6 +2,7 @@ package fourthwire.store;
 
 import fourthwire.json.MappingJson;
 import fourthwire.json.ReadingJson;
+import fourthwire.metering.LogResult;
 import fourthwire.metering.RawFile;
 import fourthwire.metering.ReadingMapping;
 import fourthwire.metering.ReadingRepository;
@@ -33,9 +34,16 @@ final class JdbcReadings implements ReadingRepository {
   private final JdbcClient jdbc;
   private final TransactionTemplate transaction;
   private final FileStore files;
+  private final SeriesTables series;
   private final Clock clock;
 
-  JdbcReadings(JdbcClient jdbc, TransactionTemplate transaction, FileStore files, Clock clock) {
+  JdbcReadings(
+      JdbcClient jdbc,
+      TransactionTemplate transaction,
+      FileStore files,
+      SeriesTables series,
+      Clock clock) {
+    this.series = series;
     this.jdbc = jdbc;
     this.transaction = transaction;
     this.files = files;
@@ -128,15 +136,23 @@ final class JdbcReadings implements ReadingRepository {
     for (int i = 0; i < addition.files().size(); i++) {
       addFile(id, i, addition.files().get(i));
     }
+    addition.reading().log().flatMap(LogResult::detail).ifPresent(d -> series.add(id, d));
     return id;
   }
 
   private void addFile(long readingId, int position, RawFile file) {
+    jdbc.sql("insert into reading_files (reading_id, position, name, file_id) values (?, ?, ?, ?)")
+        .params(readingId, position, file.name(), stored(file))
+        .update();
+  }
+
+  /** A file that an upload brought into the database stays where it is. */
+  private long stored(RawFile file) {
+    if (file instanceof StoredRawFile there) {
+      return there.stored().id();
+    }
     try (InputStream in = file.open()) {
-      jdbc.sql(
-              "insert into reading_files (reading_id, position, name, file_id) values (?, ?, ?, ?)")
-          .params(readingId, position, file.name(), files.save(in).id())
-          .update();
+      return files.save(in).id();
     } catch (IOException e) {
       throw new UncheckedIOException(e);
     }

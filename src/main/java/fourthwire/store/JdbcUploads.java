@@ -186,9 +186,14 @@ final class JdbcUploads implements ReadingUploads {
         });
   }
 
+  /** What became a reading's file is the reading's. */
   private void letGo(long uploadId) {
     List<Long> owned =
-        jdbc.sql("select file_id from reading_upload_files where upload_id = ?")
+        jdbc.sql(
+                """
+                select u.file_id from reading_upload_files u where u.upload_id = ?
+                and not exists (select 1 from reading_files r where r.file_id = u.file_id)
+                """)
             .param(uploadId)
             .query(Long.class)
             .list();

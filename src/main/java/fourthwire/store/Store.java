@@ -3,6 +3,7 @@ package fourthwire.store;
 import fourthwire.audit.AuditRepository;
 import fourthwire.metering.ReadingRepository;
 import fourthwire.metering.ReadingUploads;
+import fourthwire.metering.SeriesRepository;
 import fourthwire.site.SiteRepository;
 import fourthwire.site.SurveyCodec;
 import java.time.Clock;
@@ -45,7 +46,12 @@ public final class Store {
 
   /** Readings and their files. */
   public ReadingRepository readings() {
-    return new JdbcReadings(jdbc, transaction, files(), clock);
+    return new JdbcReadings(jdbc, transaction, files(), new SeriesTables(jdbc, template), clock);
+  }
+
+  /** Rows of logs. */
+  public SeriesRepository series() {
+    return new SeriesTables(jdbc, template);
   }
 
   /** Uploads that wait to be read. */

@@ -6,19 +6,21 @@ import fourthwire.intake.reading.table.TextTable;
 import fourthwire.intake.reading.table.TimeColumns;
 import fourthwire.intake.reading.table.ZoneNamed;
 import fourthwire.metering.MeasuredQuantity;
-import fourthwire.metering.QualityFinding;
 import fourthwire.metering.Reading;
 import fourthwire.metering.ReadingKind;
 import fourthwire.metering.ReadingMapping;
 import fourthwire.metering.ReadingMapping.Stamp;
-import fourthwire.metering.log.IntervalLog;
 import fourthwire.metering.log.LogAnalysis;
+import fourthwire.metering.series.LogSeries;
 import java.time.DateTimeException;
 import java.time.ZoneId;
+import java.time.ZoneOffset;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.concurrent.ExecutorService;
+import java.util.concurrent.Executors;
 import java.util.function.BiPredicate;
 
 /** An interval log as a text table. */
@@ -28,11 +30,18 @@ final class LogFormat {
           + " L1.current_h3_a … (contract, section 4)";
 
   private final TextTable table;
-  private final TimeColumns time;
+  private static final int WORKERS = 2;
 
-  LogFormat(TextTable table, TimeColumns time) {
+  private final TimeColumns time;
+  private final long bytes;
+
+  /**
+   * @param bytes length of the file
+   */
+  LogFormat(TextTable table, TimeColumns time, long bytes) {
     this.table = table;
     this.time = time;
+    this.bytes = bytes;
   }
 
   ReadingPlan plan(ReadingSetting setting, String layout, Mappings known) {
@@ -200,12 +209,30 @@ final class LogFormat {
   }
 
   Reading read(ReadingPlan plan, ReadingSetting setting, BiPredicate<Double, String> progress) {
-    LogRows rows = new LogRows(table, time, plan);
-    IntervalLog log = rows.read(progress);
-    CaptureReading.go(progress, 0.8, "forming the statistics");
-    List<String> notes = new ArrayList<>(plan.notes());
-    notes.addAll(rows.notes());
-    List<QualityFinding> seen = rows.findings();
-    return LogAnalysis.of(log, setting.nominalHz(), notes, seen);
+    LogColumns columns = new LogColumns(table, time, plan.mapping());
+    LogSeries series =
+        new LogSeries(columns.quantities(), new SpilledParts(), mostHeldValues());
+    ExecutorService workers = Executors.newFixedThreadPool(WORKERS);
+    try {
+      LogRows rows = new LogRows(table, columns, plan.mapping(), series, workers);
+      rows.read(new RowProgress(progress, bytes, System::nanoTime));
+      CaptureReading.go(progress, RowProgress.SHARE, "forming the statistics");
+      List<String> notes = new ArrayList<>(plan.notes());
+      notes.addAll(rows.notes());
+      ZoneId zone = plan.mapping().time().zone().map(ZoneId::of).orElse(ZoneOffset.UTC);
+      return LogAnalysis.of(
+          series, rows.intervalMillis(), zone, setting.nominalHz(), notes, rows.findings());
+    } catch (RuntimeException | Error e) {
+      workers.shutdown();
+      series.close();
+      throw e;
+    } finally {
+      workers.shutdown();
+    }
+  }
+
+  /** A quarter of the memory there is may hold values as numbers. */
+  private static long mostHeldValues() {
+    return Runtime.getRuntime().maxMemory() / 4 / Double.BYTES;
   }
 }

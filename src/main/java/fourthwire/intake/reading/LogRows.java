@@ -1,85 +1,152 @@
 package fourthwire.intake.reading;
 
-import fourthwire.intake.reading.table.DateOrder;
+import fourthwire.intake.reading.table.RowTime;
 import fourthwire.intake.reading.table.TextTable;
-import fourthwire.intake.reading.table.TimeColumns;
 import fourthwire.metering.QualityFinding;
 import fourthwire.metering.ReadingMapping;
-import fourthwire.metering.ReadingMapping.Column;
 import fourthwire.metering.ReadingMapping.Stamp;
-import fourthwire.metering.ReadingMapping.Statistic;
-import fourthwire.metering.log.IntervalLog;
-import java.time.Instant;
+import fourthwire.metering.log.LogSteps;
+import fourthwire.metering.series.LogChunk;
+import fourthwire.metering.series.LogSeries;
 import java.time.ZoneId;
 import java.time.ZoneOffset;
+import java.util.ArrayDeque;
 import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.Deque;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
-import java.util.function.BiPredicate;
-import java.util.regex.Pattern;
+import java.util.concurrent.CompletableFuture;
+import java.util.concurrent.CompletionException;
+import java.util.concurrent.Executor;
 
-/** Reads the rows of a log as planned. */
+/**
+ * Reads the rows of a log as planned: blocks of bytes are parsed by workers, put in order here, and
+ * handed on in chunks.
+ */
 final class LogRows {
-  private static final int TOLD = 3;
-  private static final Pattern SUMMARY =
-      Pattern.compile(
-          "(?i)\\W*(min|max|avg|average|mean|total|sum|summe|std|stdev|p\\d\\d|median|mittel|moy|count|peak|end|statisti|summary|note|comment|remark|#|//|\\*).*");
+  private static final int BLOCKS_AHEAD = 4;
 
   private final TextTable table;
-  private final TimeColumns time;
-  private final ReadingPlan plan;
-  private final DateOrder order;
+  private final LogColumns columns;
+  private final Optional<Long> toldInterval;
+  private final boolean stampedAtEnd;
   private final LocalClock clock;
-  private final int[] at;
-  private final Factor[] factor;
-  private final double[] values;
-  private final IntervalLog.Builder log;
-  private final List<String> leftOut = new ArrayList<>();
+  private final LogSeries series;
+  private final Executor workers;
+  private final LogSteps steps = new LogSteps();
+  private final List<String> passedOver = new ArrayList<>();
   private final List<String> unreadable = new ArrayList<>();
-  private long leftOutRows;
+  private long[] times = new long[LogChunk.ROWS];
+  private double[][] values;
+  private int filled;
+  private long fileRows;
+  private long passedOverRows;
   private long unreadableCells;
 
-  LogRows(TextTable table, TimeColumns time, ReadingPlan plan) {
+  LogRows(
+      TextTable table,
+      LogColumns columns,
+      ReadingMapping mapping,
+      LogSeries series,
+      Executor workers) {
     this.table = table;
-    this.time = time;
-    this.plan = plan;
-    ReadingMapping mapping = plan.mapping();
-    this.order = mapping.time().format().map(DateOrder::of).orElse(DateOrder.YEAR_MONTH_DAY);
-    this.clock = new LocalClock(mapping.time().zone().map(ZoneId::of).orElse(ZoneOffset.UTC));
-    List<Column> columns = List.copyOf(mapping.columns().values());
-    this.at = mapping.columns().keySet().stream().mapToInt(table.headings()::indexOf).toArray();
-    this.factor = columns.stream().map(c -> Factor.of(c.factor())).toArray(Factor[]::new);
-    this.values = new double[at.length];
-    this.log = new IntervalLog.Builder(columns.stream().map(LogRows::key).toList());
+    this.columns = columns;
+    this.series = series;
+    this.workers = workers;
+    ReadingMapping.Time time = mapping.time();
+    this.toldInterval =
+        time.intervalS().isPresent()
+            ? Optional.of(Math.round(1000 * time.intervalS().getAsDouble()))
+            : Optional.empty();
+    this.stampedAtEnd = time.stamp().orElse(Stamp.START) == Stamp.END;
+    this.clock = new LocalClock(time.zone().map(ZoneId::of).orElse(ZoneOffset.UTC));
+    this.values = new double[columns.count()][LogChunk.ROWS];
   }
 
-  /** Lowest and highest values stand beside the mean under their own names. */
-  private static String key(Column column) {
-    Statistic s = column.statistic();
-    return s == Statistic.MIN || s == Statistic.MAX
-        ? column.quantity() + "." + s.word()
-        : column.quantity();
-  }
-
-  IntervalLog read(BiPredicate<Double, String> progress) {
-    table.forEach(
-        row -> {
-          if (log.rows() % 5000 == 0) {
-            CaptureReading.go(progress, 0.1, "reading rows, " + log.rows() + " so far");
-          }
-          row(row);
-          return true;
-        });
-    if (log.rows() == 0) {
+  /** Reads all rows into the series. */
+  void read(RowProgress progress) {
+    Deque<CompletableFuture<ParsedRows>> ahead = new ArrayDeque<>();
+    try (TextTable.RowBlocks blocks = table.inBlocks()) {
+      Optional<TextTable.RowBlock> block = blocks.next();
+      while (block.isPresent() || !ahead.isEmpty()) {
+        if (block.isPresent()) {
+          TextTable.RowBlock rows = block.get();
+          ahead.add(CompletableFuture.supplyAsync(() -> ParsedRows.of(rows, columns), workers));
+          block = blocks.next();
+        }
+        if (ahead.size() > BLOCKS_AHEAD || block.isEmpty()) {
+          take(joined(ahead.remove()));
+          progress.at(series.rows() + filled, blocks.bytesRead());
+        }
+      }
+    }
+    flush();
+    if (series.rows() == 0) {
       throw new ReadingRefusedException(
           "No row has a time that can be read.", table.headings(), List.of());
     }
-    ReadingMapping.Time told = plan.mapping().time();
-    long interval =
-        told.intervalS().isPresent()
-            ? Math.round(1000 * told.intervalS().getAsDouble())
-            : log.usualStepMillis().orElse(0);
+  }
+
+  private static ParsedRows joined(CompletableFuture<ParsedRows> parsed) {
+    try {
+      return parsed.join();
+    } catch (CompletionException e) {
+      if (e.getCause() instanceof RuntimeException cause) {
+        throw cause;
+      }
+      throw e;
+    }
+  }
+
+  private void take(ParsedRows block) {
+    notes(block);
+    int from = 0;
+    while (from < block.rows()) {
+      int count = Math.min(block.rows() - from, LogChunk.ROWS - filled);
+      for (int k = 0; k < count; k++) {
+        times[filled + k] = instant(block, from + k);
+        steps.take(times[filled + k]);
+      }
+      block.copy(from, values, filled, count);
+      from += count;
+      filled += count;
+      if (filled == LogChunk.ROWS) {
+        flush();
+      }
+    }
+  }
+
+  private long instant(ParsedRows block, int row) {
+    int offset = block.offsetSeconds(row);
+    return offset == RowTime.NO_OFFSET
+        ? clock.at(block.localMillis(row))
+        : block.localMillis(row) - 1000L * offset;
+  }
+
+  /** Hands on what was gathered; a chunk is never changed afterwards. */
+  private void flush() {
+    if (filled == 0) {
+      return;
+    }
+    long back = stampedAtEnd ? intervalMillis() : 0;
+    long[] start = Arrays.copyOf(times, filled);
+    for (int k = 0; k < filled && back > 0; k++) {
+      start[k] -= back;
+    }
+    double[][] chunk = values;
+    for (int k = 0; k < chunk.length && filled < LogChunk.ROWS; k++) {
+      chunk[k] = Arrays.copyOf(chunk[k], filled);
+    }
+    series.add(new LogChunk(start, chunk), workers);
+    values = new double[columns.count()][LogChunk.ROWS];
+    filled = 0;
+  }
+
+  /** Length of a row: as told, else the usual step so far. */
+  long intervalMillis() {
+    long interval = toldInterval.orElseGet(() -> steps.usualMillis().orElse(0));
     if (interval <= 0) {
       throw new ReadingRefusedException(
           "The interval can't be told from the rows.",
@@ -88,86 +155,50 @@ final class LogRows {
               new ReadingRefusedException.Question(
                   "time.interval_s", "give the length of a row in seconds")));
     }
-    return log.build(interval, told.stamp().orElse(Stamp.START) == Stamp.END);
+    return interval;
   }
 
-  private void row(TextTable.Row row) {
-    Optional<Instant> when = time.at(row, order).map(this::instant);
-    boolean any = false;
-    for (int k = 0; k < at.length; k++) {
-      double value = row.value(at[k], factor[k].shift());
-      if (value == Double.NEGATIVE_INFINITY) {
-        value = Double.NaN;
-        if (when.isPresent()) {
-          unreadable(row, at[k]);
-        }
-      }
-      any = any || !Double.isNaN(value);
-      values[k] = value * factor[k].rest();
-    }
-    if (when.isEmpty() && isNote(row)) {
-      any = false;
-    }
-    if (when.isPresent()) {
-      log.add(when.get().toEpochMilli(), values);
-    } else if (any) {
+  private void notes(ParsedRows block) {
+    for (ParsedRows.Trouble t : block.timeless()) {
       throw new ReadingRefusedException(
           "Row "
-              + row.number()
+              + (fileRows + t.row())
               + ": \""
-              + time.text(row)
+              + t.text()
               + "\" is no time in the order "
-              + order.pattern()
+              + columns.order().pattern()
               + ", but the row holds values.",
           table.headings(),
           List.of(
               new ReadingRefusedException.Question(
                   "time.format", "say how times are written, or mend the row")));
-    } else {
-      leftOutRows++;
-      if (leftOut.size() < TOLD) {
-        leftOut.add("row " + row.number());
-      }
     }
+    for (ParsedRows.Trouble t : block.passedOver()) {
+      tell(passedOver, "row " + (fileRows + t.row()));
+    }
+    for (ParsedRows.Trouble t : block.unreadable()) {
+      tell(unreadable, "row " + (fileRows + t.row()) + ", " + t.text());
+    }
+    passedOverRows += block.passedOverRows();
+    unreadableCells += block.unreadableCells();
+    fileRows += block.fileRows();
   }
 
-  /** A line below or between the values: a sum, a remark, a header that comes again. */
-  private boolean isNote(TextTable.Row row) {
-    String first = row.text(time.columns().get(0));
-    return first.isEmpty()
-        ? 2 * row.cells() < table.headings().size()
-        : SUMMARY.matcher(first).matches() || table.headings().contains(first) || row.cells() < 3;
-  }
-
-  private Instant instant(TimeColumns.At when) {
-    return when.offset()
-        .map(offset -> when.local().toInstant(offset))
-        .orElseGet(() -> clock.at(when.local()));
-  }
-
-  private void unreadable(TextTable.Row row, int column) {
-    unreadableCells++;
-    if (unreadable.size() < TOLD) {
-      unreadable.add(
-          "row "
-              + row.number()
-              + ", "
-              + table.headings().get(column)
-              + ": \""
-              + row.text(column)
-              + "\"");
+  private static void tell(List<String> told, String what) {
+    if (told.size() < ParsedRows.TOLD) {
+      told.add(what);
     }
   }
 
   /** What was passed over. */
   List<String> notes() {
-    return leftOutRows == 0
+    return passedOverRows == 0
         ? List.of()
         : List.of(
-            leftOutRows
+            passedOverRows
                 + " rows without a time were passed over: "
-                + String.join(", ", leftOut)
-                + (leftOutRows > leftOut.size() ? " …" : "")
+                + String.join(", ", passedOver)
+                + (passedOverRows > passedOver.size() ? " …" : "")
                 + ".");
   }
 

@@ -9,8 +9,9 @@ import java.util.Locale;
  * One file of an upload, taken out of its zip where it came in one.
  *
  * @param name without folders
+ * @param length bytes
  */
-record Part(String name, Source source) {
+record Part(String name, long length, Source source) {
   /** Where its bytes are. */
   interface Source {
     /** Opens them from the start. */

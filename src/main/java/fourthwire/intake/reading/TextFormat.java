@@ -13,15 +13,17 @@ import java.util.function.BiPredicate;
 
 /** A text file of rows: an interval log, or a capture of instantaneous values. */
 final class TextFormat implements Format {
+  private final Part part;
   private final TextTable table;
 
-  private TextFormat(TextTable table) {
+  private TextFormat(Part part, TextTable table) {
+    this.part = part;
     this.table = table;
   }
 
   static TextFormat of(Part part) {
     try {
-      return new TextFormat(TextTable.of(part::open));
+      return new TextFormat(part, TextTable.of(part::open));
     } catch (TableException e) {
       throw new ReadingRefusedException(part.name() + ": " + e.getMessage());
     }
@@ -35,7 +37,7 @@ final class TextFormat implements Format {
       TimeColumns time = time(known.mapping());
       return kind(known.mapping(), time) == ReadingKind.CAPTURE
           ? new TextCapture(table, time).plan(setting, layout, known)
-          : new LogFormat(table, time).plan(setting, layout, known);
+          : new LogFormat(table, time, part.length()).plan(setting, layout, known);
     } catch (TableException e) {
       throw new ReadingRefusedException(
           "The time of the rows can't be read.",
@@ -50,7 +52,7 @@ final class TextFormat implements Format {
     TimeColumns time = time(Optional.of(plan.mapping()));
     return plan.kind() == ReadingKind.CAPTURE
         ? new TextCapture(table, time).read(plan, setting, progress)
-        : new LogFormat(table, time).read(plan, setting, progress);
+        : new LogFormat(table, time, part.length()).read(plan, setting, progress);
   }
 
   private TimeColumns time(Optional<ReadingMapping> mapping) {

@@ -40,7 +40,7 @@ final class Upload {
         parts.add(sheet);
       }
     } else {
-      parts.add(new Part(file.name(), file::open));
+      parts.add(new Part(file.name(), file.length(), file::open));
     }
   }
 
@@ -60,8 +60,8 @@ final class Upload {
             file.name() + " names a column that no workbook has. Save its sheet as CSV.");
       }
     }
-    byte[] csv = FirstSheet.csv(file.name(), new Part(file.name(), file::open).bytes(MOST_BYTES));
-    return new Part(file.name(), () -> new ByteArrayInputStream(csv));
+    byte[] csv = FirstSheet.csv(file.name(), new Part(file.name(), file.length(), file::open).bytes(MOST_BYTES));
+    return new Part(file.name(), csv.length, () -> new ByteArrayInputStream(csv));
   }
 
   /** By its first bytes: a name may say anything. */
@@ -81,7 +81,7 @@ final class Upload {
         String name = e.getName().substring(e.getName().replace('\\', '/').lastIndexOf('/') + 1);
         if (!e.isDirectory() && !name.startsWith(".")) {
           byte[] bytes = unpacked(zip, file.name());
-          parts.add(new Part(name, () -> new ByteArrayInputStream(bytes)));
+          parts.add(new Part(name, bytes.length, () -> new ByteArrayInputStream(bytes)));
         }
       }
     } catch (IOException e) {

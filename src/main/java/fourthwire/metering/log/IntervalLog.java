@@ -24,6 +24,21 @@ public final class IntervalLog {
     this.columns = columns;
   }
 
+  /** Of a series. */
+  static IntervalLog of(fourthwire.metering.series.LogSeries series, long intervalMillis) {
+    long[] start = new long[(int) series.rows()];
+    int at = 0;
+    for (int k = 0; k < series.chunks(); k++) {
+      System.arraycopy(series.startMillis(k), 0, start, at, series.rows(k));
+      at += series.rows(k);
+    }
+    Map<String, double[]> columns = new LinkedHashMap<>();
+    for (int q = 0; q < series.quantities().size(); q++) {
+      columns.put(series.quantities().get(q), series.all(q));
+    }
+    return new IntervalLog(start, intervalMillis, columns);
+  }
+
   /** Gathers rows; not thread-safe. Memory: eight bytes a value. */
   public static final class Builder {
     private final List<String> quantities;

@@ -7,7 +7,11 @@ import fourthwire.metering.QualityFinding;
 import fourthwire.metering.QuantitySummary;
 import fourthwire.metering.Reading;
 import fourthwire.metering.ReadingKind;
+import fourthwire.metering.series.LogSeries;
+import fourthwire.metering.series.QuantityStatistics;
+import fourthwire.metering.series.SeriesStatistics;
 import java.time.Instant;
+import java.time.ZoneId;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -37,19 +41,32 @@ public final class LogAnalysis {
    * @param seen what was already found wrong while reading it
    */
   public static Reading of(
-      IntervalLog log, double nominalHz, List<String> notes, List<QualityFinding> seen) {
+      LogSeries series,
+      long intervalMillis,
+      ZoneId zone,
+      double nominalHz,
+      List<String> notes,
+      List<QualityFinding> seen) {
+    SeriesStatistics statistics = SeriesStatistics.of(series, zone);
+    IntervalLog log = IntervalLog.of(series, intervalMillis);
     List<QualityFinding> quality = new ArrayList<>();
     quality.addAll(new LogWiring(log).findings());
     quality.addAll(new LogValues(log, nominalHz).findings());
     quality.addAll(new LogClock(log).findings());
     quality.addAll(seen);
-    return new LogAnalysis(log).reading(notes, quality);
+    return new LogAnalysis(log).reading(new LogResult.Detail(series, statistics), notes, quality);
   }
 
-  private Reading reading(List<String> notes, List<QualityFinding> quality) {
+  private Reading reading(
+      LogResult.Detail detail, List<String> notes, List<QualityFinding> quality) {
     Map<String, QuantitySummary> quantities = new LinkedHashMap<>();
-    for (String quantity : log.quantities()) {
-      Statistics.summary(log.values(quantity)).ifPresent(s -> quantities.put(quantity, s));
+    for (int q = 0; q < detail.series().quantities().size(); q++) {
+      QuantityStatistics s = detail.statistics().quantities().get(q);
+      if (s.count() > 0) {
+        quantities.put(
+            detail.series().quantities().get(q),
+            new QuantitySummary(s.count(), s.min(), s.mean(), s.max(), s.p95(), s.p99()));
+      }
     }
     return new Reading(
         ReadingKind.LOG,
@@ -58,7 +75,7 @@ public final class LogAnalysis {
         OptionalDouble.of(1000.0 / log.intervalMillis()),
         notes,
         quality,
-        Optional.of(new LogResult(log.interval(), quantities, keyIntervals())),
+        Optional.of(new LogResult(log.interval(), quantities, keyIntervals(), Optional.of(detail))),
         Optional.empty());
   }
 

@@ -85,7 +85,7 @@ class MoreLayoutsTest {
             LayoutWriter.of(";", ',').time("Zeit", "dd.MM.yyyy HH:mm"))
         .lines("U L# [V]", "rms_v")
         .lines("I L# [A]", "rms_a")
-        .column("Unsymmetrie U [%]", "")
+        .column("Drehfeld", "")
         .column("Pst L1", "")
         .column("CF I L1", "")
         .column("K-Faktor L1", "")

@@ -24,6 +24,9 @@ final class LogHeading {
     if (words.says(Sense.OTHER) || peak || words.saysNothing()) {
       return Heading.none();
     }
+    if (words.says(Sense.UNBALANCE)) {
+      return unbalance();
+    }
     if (words.order() > 0
         || words.says(Sense.HARMONIC)
         || words.says(Sense.INDIVIDUAL_DISTORTION)) {
@@ -66,6 +69,13 @@ final class LogHeading {
         || words.says(Sense.ACTIVE)
         || words.says(Sense.REACTIVE)
         || words.says(Sense.APPARENT);
+  }
+
+  private Heading unbalance() {
+    boolean percent = unit.isEmpty() || is(Unit.Kind.SHARE);
+    return percent && words.places().isEmpty() && current() != voltage()
+        ? settled((current() ? "current" : "voltage") + "_unbalance_percent", unit.isPresent())
+        : Heading.none();
   }
 
   private Heading harmonic(int order) {

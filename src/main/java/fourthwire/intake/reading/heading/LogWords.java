@@ -139,8 +139,15 @@ final class LogWords {
       unit = Unit.find(all.get(k));
     } else if (Vocabulary.sense(word).isPresent()) {
       senses.add(Vocabulary.sense(word).get());
+      takeUnbalanceOf(word);
     } else {
       Symbol.of(word).ifPresentOrElse(this::take, () -> unknown.add(word));
+    }
+  }
+
+  private void takeUnbalanceOf(String word) {
+    if (word.equals("vunb") || word.equals("iunb")) {
+      senses.add(word.startsWith("v") ? Sense.VOLTAGE : Sense.CURRENT);
     }
   }
 

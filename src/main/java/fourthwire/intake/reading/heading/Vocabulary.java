@@ -35,7 +35,8 @@ final class Vocabulary {
     MEAN,
     INSTANT,
     PEAK,
-    /** Something no quantity of a log is: unbalance, flicker, crest, temperature, counts. */
+    UNBALANCE,
+    /** Something no quantity of a log is: flicker, crest, temperature, counts. */
     OTHER,
     /** Adds nothing. */
     NOTHING
@@ -84,8 +85,11 @@ final class Vocabulary {
     put(Sense.INSTANT, "inst instantaneous momentan instant");
     put(Sense.PEAK, "peak pk spitze crest");
     put(
+        Sense.UNBALANCE,
+        "unbalance imbalance unbal unb asymmetry unsymmetrie desequilibre onbalans squilibrio vunb iunb");
+    put(
         Sense.OTHER,
-        "unbalance imbalance unbal unb vunb iunb asymmetry unsymmetrie flicker pst plt ifl cf kf kfactor"
+        "flicker pst plt ifl cf kf kfactor"
             + " k tdd temp temperature battery status event events flag flags dip swell sag record rec count"
             + " index sequence seq positive negative zero interharmonic interharmonics ripple std stdev stddev deviation"
             + " sigma dc thdr tif distortionpower nonactive signalling rvc quality samples sample no nr number id"

@@ -14,6 +14,7 @@ final class Blocks {
   private final boolean quotes;
   private byte[] carry = new byte[0];
   private boolean ended;
+  private long read;
 
   /**
    * Whole rows.
@@ -39,6 +40,7 @@ final class Blocks {
     while (true) {
       int n = ended ? 0 : in.readNBytes(block, length, block.length - length);
       length += n;
+      read += n;
       ended = ended || length < block.length;
       int cut = ended ? length : cut(block, length);
       if (cut > 0 || ended) {
@@ -51,6 +53,11 @@ final class Blocks {
       }
       block = Arrays.copyOf(block, 2 * block.length);
     }
+  }
+
+  /** Bytes read so far. */
+  long bytesRead() {
+    return read;
   }
 
   /** The byte after the last line end that is in no quotes; 0 for none. */

@@ -62,7 +62,7 @@ record CellTime(Numerals date, long nanoOfDay, OptionalInt offsetSeconds) {
   }
 
   private static boolean couldBeTime(String cell) {
-    if (cell.length() < 4 || cell.length() > 60) {
+    if (cell.length() < 4 || cell.length() > 60 || cell.length() < 8 && Numbers.isPlain(cell)) {
       return false;
     }
     int digits = 0;

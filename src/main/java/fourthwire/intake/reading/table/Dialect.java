@@ -149,6 +149,6 @@ record Dialect(
   }
 
   private static boolean isValue(String cell) {
-    return NUMBER.matcher(cell).matches() || CellTime.isTime(cell);
+    return Numbers.isPlain(cell) || NUMBER.matcher(cell).matches() || CellTime.isTime(cell);
   }
 }

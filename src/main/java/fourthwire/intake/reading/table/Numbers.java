@@ -75,10 +75,10 @@ final class Numbers {
           "<null>",
           "undef",
           "undefined",
-          "1.#inf",
-          "1.#qnan",
-          "1.#ind",
-          "1.#snan",
+          
+          
+          
+          
           "not available",
           "not measured");
 
@@ -178,8 +178,26 @@ final class Numbers {
         : plain;
   }
 
+  /** Whether a text is digits with at most one mark between them, as nearly all cells are. */
+  static boolean isPlain(String text) {
+    int marks = 0;
+    int length = text.length();
+    for (int k = 0; k < length; k++) {
+      char c = text.charAt(k);
+      if (c == '.' || c == ',') {
+        marks++;
+      } else if (c < '0' || c > '9') {
+        return false;
+      }
+    }
+    return length > 0 && marks <= 1 && marks < length;
+  }
+
   /** Whether a text stands for "not measured" or "beyond the range". */
   static boolean isMark(String text) {
+    if (text.isEmpty() || Character.isDigit(text.charAt(0))) {
+      return text.isEmpty() || text.startsWith("1.#");
+    }
     String word = text.toLowerCase(Locale.ROOT).trim();
     String bare = word.replaceAll("^[-+]+|[!*]+$", "").trim();
     return SIGNS.matcher(word).matches() || MARKS.contains(bare) || BEYOND.matcher(word).matches();

@@ -128,6 +128,11 @@ final class RowCutter {
     return true;
   }
 
+  /** The bytes that the cells stand in. */
+  byte[] bytes() {
+    return bytes;
+  }
+
   /** First byte of a cell. */
   int start(int cell) {
     return start[cell];

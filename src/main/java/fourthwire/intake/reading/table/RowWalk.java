@@ -28,6 +28,11 @@ final class RowWalk implements TextTable.Row {
     return true;
   }
 
+  /** The cells of this row. */
+  RowCutter cutter() {
+    return cutter;
+  }
+
   @Override
   public long number() {
     return number;

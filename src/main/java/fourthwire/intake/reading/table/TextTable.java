@@ -4,6 +4,7 @@ import java.io.IOException;
 import java.io.InputStream;
 import java.io.UncheckedIOException;
 import java.util.List;
+import java.util.Optional;
 import java.util.function.Supplier;
 
 /**
@@ -134,6 +135,74 @@ public final class TextTable {
           return;
         }
       }
+    } catch (IOException e) {
+      throw new UncheckedIOException(e);
+    }
+  }
+
+  /**
+   * Rows of values in blocks, to be gone through on any thread. Row numbers are counted from the
+   * block's first row.
+   */
+  public final class RowBlocks implements AutoCloseable {
+    private final InputStream in;
+    private final Blocks blocks;
+    private boolean begun;
+
+    private RowBlocks(InputStream in) {
+      this.in = in;
+      this.blocks = blocks(in);
+    }
+
+    /** The next block; empty at the end. */
+    public Optional<RowBlock> next() {
+      try {
+        Blocks.Block block = blocks.next();
+        long first = begun ? 1 : dialect.firstData();
+        begun = true;
+        return block.length() == 0 ? Optional.empty() : Optional.of(new RowBlock(block, first));
+      } catch (IOException e) {
+        throw new UncheckedIOException(e);
+      }
+    }
+
+    /** Bytes of the file taken in so far. */
+    public long bytesRead() {
+      return blocks.bytesRead();
+    }
+
+    @Override
+    public void close() {
+      try {
+        in.close();
+      } catch (IOException e) {
+        throw new UncheckedIOException(e);
+      }
+    }
+  }
+
+  /** Some rows of the table. */
+  public final class RowBlock {
+    private final Blocks.Block block;
+    private final long first;
+
+    private RowBlock(Blocks.Block block, long first) {
+      this.block = block;
+      this.first = first;
+    }
+
+    /** Passes its rows by; returns how many rows it has, empty ones and headings counted. */
+    public long forEach(Visitor visitor) {
+      RowWalk walk = new RowWalk(cutter(), dialect.numbers().decimalComma(), 0);
+      walk.through(block, first, visitor);
+      return walk.number();
+    }
+  }
+
+  /** Opens the rows in blocks; the caller closes. */
+  public RowBlocks inBlocks() {
+    try {
+      return new RowBlocks(open());
     } catch (IOException e) {
       throw new UncheckedIOException(e);
     }

@@ -1,0 +1,128 @@
+package fourthwire.metering.series;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.concurrent.CompletableFuture;
+import java.util.concurrent.Executor;
+
+/**
+ * The rows of a log as read, in chunks, each column coded: to be gone through as often as needed, in
+ * memory that does not grow with the log. Chunks are held decoded as long as they are few.
+ */
+public final class LogSeries implements AutoCloseable {
+  private final List<String> quantities;
+  private final Parts parts;
+  private final long mostHeldValues;
+  private final List<Chunk> chunks = new ArrayList<>();
+  private final List<LogChunk> held = new ArrayList<>();
+  private long rows;
+  private boolean holding = true;
+
+  /** A chunk: its rows and the numbers of its coded columns, the first that of the times. */
+  private record Chunk(int rows, CompletableFuture<int[]> columns) {}
+
+  /**
+   * An empty series.
+   *
+   * @param quantities names of its columns
+   * @param parts takes the coded columns
+   * @param mostHeldValues how many values may be held decoded
+   */
+  public LogSeries(List<String> quantities, Parts parts, long mostHeldValues) {
+    this.quantities = List.copyOf(quantities);
+    this.parts = parts;
+    this.mostHeldValues = mostHeldValues;
+  }
+
+  /**
+   * Adds rows behind those that are there.
+   *
+   * @param worker codes the columns
+   */
+  public void add(LogChunk chunk, Executor worker) {
+    if (chunks.size() > 3) {
+      chunks.get(chunks.size() - 3).columns().join();
+    }
+    chunks.add(
+        new Chunk(chunk.rows(), CompletableFuture.supplyAsync(() -> encoded(chunk), worker)));
+    rows += chunk.rows();
+    holding = holding && rows * quantities.size() <= mostHeldValues;
+    if (holding) {
+      held.add(chunk);
+    } else {
+      held.clear();
+    }
+  }
+
+  private int[] encoded(LogChunk chunk) {
+    int[] numbers = new int[quantities.size() + 1];
+    numbers[0] = parts.add(ColumnCodec.encode(chunk.startMillis()));
+    for (int q = 0; q < quantities.size(); q++) {
+      numbers[q + 1] = parts.add(ColumnCodec.encode(chunk.values()[q]));
+    }
+    return numbers;
+  }
+
+  /** Names of the columns. */
+  public List<String> quantities() {
+    return quantities;
+  }
+
+  /** Position of a quantity; -1 where it is not logged. */
+  public int indexOf(String quantity) {
+    return quantities.indexOf(quantity);
+  }
+
+  /** Rows, repeated ones included. */
+  public long rows() {
+    return rows;
+  }
+
+  /** Chunks so far. */
+  public int chunks() {
+    return chunks.size();
+  }
+
+  /** Rows of a chunk. */
+  public int rows(int chunk) {
+    return chunks.get(chunk).rows();
+  }
+
+  /** When the rows of a chunk begin, milliseconds of the epoch; not to be changed. */
+  public long[] startMillis(int chunk) {
+    return holding
+        ? held.get(chunk).startMillis()
+        : ColumnCodec.decodeWhole(coded(chunk, -1), rows(chunk));
+  }
+
+  /** A quantity's values in a chunk; not to be changed. */
+  public double[] values(int chunk, int quantity) {
+    return holding
+        ? held.get(chunk).values()[quantity]
+        : ColumnCodec.decode(coded(chunk, quantity), rows(chunk));
+  }
+
+  /** A column of a chunk as it is stored; the times are quantity -1. */
+  public byte[] coded(int chunk, int quantity) {
+    return parts.get(chunks.get(chunk).columns().join()[quantity + 1]);
+  }
+
+  /** All values of a quantity in one array; for logs whose rows an array holds. */
+  public double[] all(int quantity) {
+    double[] all = new double[Math.toIntExact(rows)];
+    int at = 0;
+    for (int k = 0; k < chunks.size(); k++) {
+      System.arraycopy(values(k, quantity), 0, all, at, rows(k));
+      at += rows(k);
+    }
+    return all;
+  }
+
+  /** Lets go of what it holds. */
+  @Override
+  public void close() {
+    chunks.forEach(c -> c.columns().exceptionally(e -> new int[0]).join());
+    held.clear();
+    parts.close();
+  }
+}

@@ -1,0 +1,29 @@
+package fourthwire.metering.series;
+
+import java.time.ZoneId;
+import java.util.List;
+import java.util.stream.IntStream;
+
+/**
+ * Statistics of every quantity of a series: over all rows, by week and by hour of the week.
+ *
+ * @param firstWeek the week of the first row, as {@link WeekClock#week} counts
+ * @param quantities in the order of the series
+ */
+public record SeriesStatistics(long firstWeek, int weeks, List<QuantityStatistics> quantities) {
+  /** Most rows whose columns are taken into one array each. */
+  static final int MOST_IN_ARRAY = 4_000_000;
+
+  /** Of all rows; the quantities are shared among the processors. */
+  public static SeriesStatistics of(LogSeries series, ZoneId zone) {
+    RowWeeks rows = RowWeeks.of(series, zone);
+    boolean inArray = series.rows() <= MOST_IN_ARRAY;
+    ColumnStatistics column = new ColumnStatistics(series, rows);
+    List<QuantityStatistics> all =
+        IntStream.range(0, series.quantities().size())
+            .parallel()
+            .mapToObj(q -> inArray ? column.inArray(q) : column.inPasses(q, zone))
+            .toList();
+    return new SeriesStatistics(rows.firstWeek(), rows.weeks(), all);
+  }
+}

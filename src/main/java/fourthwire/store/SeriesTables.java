@@ -1,0 +1,158 @@
+package fourthwire.store;
+
+import fourthwire.metering.LogResult;
+import fourthwire.metering.SeriesRepository;
+import fourthwire.metering.series.ColumnCodec;
+import fourthwire.metering.series.LogSeries;
+import fourthwire.metering.series.QuantityStatistics;
+import fourthwire.metering.series.SeriesStatistics;
+import fourthwire.metering.series.WeekClock;
+import java.sql.ResultSet;
+import java.sql.SQLException;
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+import java.util.Objects;
+import java.util.Optional;
+import java.util.stream.DoubleStream;
+import org.springframework.jdbc.core.JdbcTemplate;
+import org.springframework.jdbc.core.simple.JdbcClient;
+
+/** The rows of logs as coded columns, written a chunk of all columns at a time. */
+final class SeriesTables implements SeriesRepository {
+  private static final int TIMES = -1;
+
+  private final JdbcClient jdbc;
+  private final JdbcTemplate template;
+
+  SeriesTables(JdbcClient jdbc, JdbcTemplate template) {
+    this.jdbc = jdbc;
+    this.template = template;
+  }
+
+  /** Stores a log's rows; the caller keeps the transaction. */
+  void add(long readingId, LogResult.Detail detail) {
+    addQuantities(readingId, detail.series().quantities(), detail.statistics());
+    for (int chunk = 0; chunk < detail.series().chunks(); chunk++) {
+      addChunk(readingId, detail.series(), chunk);
+    }
+  }
+
+  private void addQuantities(long readingId, List<String> names, SeriesStatistics statistics) {
+    List<Object[]> rows = new ArrayList<>();
+    for (int q = 0; q < names.size(); q++) {
+      rows.add(
+          new Object[] {
+            readingId,
+            q,
+            names.get(q),
+            statistics.firstWeek(),
+            statistics.weeks(),
+            coded(statistics.quantities().get(q))
+          });
+    }
+    template.batchUpdate(
+        """
+        insert into series_quantities (reading_id, quantity, name, first_week, weeks, statistics)
+        values (?, ?, ?, ?, ?, ?)
+        """,
+        rows);
+  }
+
+  private static byte[] coded(QuantityStatistics s) {
+    DoubleStream counts = Arrays.stream(s.weekCount()).asDoubleStream();
+    DoubleStream percentiles =
+        DoubleStream.concat(Arrays.stream(s.weekP95()), Arrays.stream(s.weekP99()));
+    return ColumnCodec.encode(
+        DoubleStream.concat(
+                DoubleStream.concat(counts, percentiles), Arrays.stream(s.hourOfWeekMean()))
+            .toArray());
+  }
+
+  private void addChunk(long readingId, LogSeries series, int chunk) {
+    List<Object[]> rows = new ArrayList<>();
+    for (int q = TIMES; q < series.quantities().size(); q++) {
+      rows.add(
+          new Object[] {readingId, q, chunk, series.rows(chunk), series.coded(chunk, q)});
+    }
+    template.batchUpdate(
+        """
+        insert into series_chunks (reading_id, quantity, chunk, row_count, bytes)
+        values (?, ?, ?, ?, ?)
+        """,
+        rows);
+  }
+
+  @Override
+  public List<String> quantities(long readingId) {
+    return jdbc.sql("select name from series_quantities where reading_id = ? order by quantity")
+        .param(readingId)
+        .query(String.class)
+        .list();
+  }
+
+  private Optional<Integer> number(long readingId, String quantity) {
+    return jdbc.sql("select quantity from series_quantities where reading_id = ? and name = ?")
+        .params(readingId, quantity)
+        .query(Integer.class)
+        .optional();
+  }
+
+  @Override
+  public Optional<Column> column(long readingId, String quantity) {
+    return number(readingId, quantity)
+        .map(q -> new Column(times(readingId), values(readingId, q)));
+  }
+
+  private record Coded(int rows, byte[] bytes) {}
+
+  private List<Coded> chunks(long readingId, int quantity) {
+    return jdbc.sql(
+            """
+            select row_count, bytes from series_chunks where reading_id = ? and quantity = ?
+            order by chunk
+            """)
+        .params(readingId, quantity)
+        .query(
+            (row, number) ->
+                new Coded(row.getInt("row_count"), Objects.requireNonNull(row.getBytes("bytes"))))
+        .list();
+  }
+
+  private long[] times(long readingId) {
+    return chunks(readingId, TIMES).stream()
+        .flatMapToLong(c -> Arrays.stream(ColumnCodec.decodeWhole(c.bytes(), c.rows())))
+        .toArray();
+  }
+
+  private double[] values(long readingId, int quantity) {
+    return chunks(readingId, quantity).stream()
+        .flatMapToDouble(c -> Arrays.stream(ColumnCodec.decode(c.bytes(), c.rows())))
+        .toArray();
+  }
+
+  @Override
+  public Optional<Weeks> weeks(long readingId, String quantity) {
+    return jdbc.sql(
+            """
+            select first_week, weeks, statistics from series_quantities
+            where reading_id = ? and name = ?
+            """)
+        .params(readingId, quantity)
+        .query(SeriesTables::weeks)
+        .optional();
+  }
+
+  private static Weeks weeks(ResultSet row, int number) throws SQLException {
+    int n = row.getInt("weeks");
+    double[] all =
+        ColumnCodec.decode(
+            Objects.requireNonNull(row.getBytes("statistics")), 3 * n + WeekClock.HOURS);
+    return new Weeks(
+        row.getLong("first_week"),
+        Arrays.copyOfRange(all, 0, n),
+        Arrays.copyOfRange(all, n, 2 * n),
+        Arrays.copyOfRange(all, 2 * n, 3 * n),
+        Arrays.copyOfRange(all, 3 * n, all.length));
+  }
+}
