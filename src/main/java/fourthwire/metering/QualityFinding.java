@@ -23,6 +23,9 @@ public record QualityFinding(String code, Optional<Period> period, String effect
   /** Active power is not what volts times amps allow: a wrong ratio or unit. */
   public static final String WRONG_RATIO = "wrong-ratio";
 
+  /** A distortion that its own harmonics do not make: averaged otherwise, or on another base. */
+  public static final String DISTORTION_MISREAD = "distortion-misread";
+
   /** Rows are missing. */
   public static final String GAP = "gap";
 

@@ -15,64 +15,26 @@ import java.util.Locale;
 import java.util.Optional;
 
 /** What the times of a log's rows tell: gaps, repeats, a clock that was set. */
-final class LogClock {
+final class LogClock implements DayCheck {
   /** Longest gaps told one by one; the rest are counted. */
   private static final int MOST_GAPS = 10;
 
-  private final IntervalLog log;
-  private final List<QualityFinding> findings = new ArrayList<>();
+  private static final int MOST_JUMPS = 50;
 
-  LogClock(IntervalLog log) {
-    this.log = log;
-  }
+  private final List<QualityFinding> jumps = new ArrayList<>();
+  private final List<Gap> gaps = new ArrayList<>();
+  private long gapCount;
+  private long missing;
+  private long first = Long.MIN_VALUE;
+  private long before = Long.MIN_VALUE;
+  private double[] rowBefore = new double[0];
+  private final Repeats run = new Repeats();
 
-  List<QualityFinding> findings() {
-    jumps();
-    gaps();
-    repeats();
-    return findings;
-  }
-
-  private static Instant at(long millis) {
-    return Instant.ofEpochMilli(millis);
-  }
-
-  private void add(String code, long from, long to, String effect, String sentence) {
-    findings.add(
-        new QualityFinding(
-            code, Optional.of(new Period(at(from), at(Math.max(from, to)))), effect, sentence));
-  }
-
-  /** Time that runs back, or a step that is no whole number of intervals. */
-  private void jumps() {
-    long interval = log.intervalMillis();
-    for (int k = 1; k < log.rows(); k++) {
-      long before = log.startMillis(k - 1);
-      long step = log.startMillis(k) - before;
-      // Loggers stamp to the second: a step off the grid by less than a tenth is jitter.
-      long off = Math.abs(step - Math.round((double) step / interval) * interval);
-      if (step < 0) {
-        add(
-            CLOCK_JUMP,
-            log.startMillis(k),
-            before,
-            "Rows overlap: the same time is counted twice.",
-            "The clock runs back by " + words(-step) + " after row " + k + " of the data.");
-      } else if (off > interval / 10) {
-        add(
-            CLOCK_JUMP,
-            before,
-            log.startMillis(k),
-            "One interval is not of the stated length.",
-            "The step after row "
-                + k
-                + " of the data is "
-                + words(step)
-                + ", no multiple of the interval of "
-                + words(interval)
-                + ": the clock was set, or the logging began anew.");
-      }
-    }
+  private static final class Repeats {
+    private int same;
+    private int different;
+    private long from;
+    private long to;
   }
 
   private record Gap(long from, long to) {
@@ -81,72 +43,139 @@ final class LogClock {
     }
   }
 
-  private void gaps() {
-    List<Gap> gaps = new ArrayList<>();
-    for (int k = 1; k < log.rows(); k++) {
-      long end = log.startMillis(k - 1) + log.intervalMillis();
-      if (log.startMillis(k) - end > log.intervalMillis() / 2) {
-        gaps.add(new Gap(end, log.startMillis(k)));
+  @Override
+  public void take(LogDay day) {
+    for (int row = 0; row < day.rows(); row++) {
+      long at = day.startMillis(row);
+      if (before == Long.MIN_VALUE) {
+        first = at;
+      } else {
+        step(day, row, at);
       }
+      before = at;
     }
-    long missing = gaps.stream().mapToLong(Gap::length).sum();
+    rowBefore = row(day, day.rows() - 1);
+  }
+
+  private static double[] row(LogDay day, int row) {
+    double[] values = new double[day.quantities().size()];
+    for (int q = 0; q < values.length; q++) {
+      values[q] = day.of(q)[row];
+    }
+    return values;
+  }
+
+  private void step(LogDay day, int row, long at) {
+    long interval = day.intervalMillis();
+    long step = at - before;
+    // Loggers stamp to the second: a step off the grid by less than a tenth is jitter.
+    long off = Math.abs(step - Math.round((double) step / interval) * interval);
+    if (step == 0) {
+      repeat(day, row, at);
+    } else if (step < 0) {
+      jump(
+          at,
+          before,
+          "Rows overlap: the same time is counted twice.",
+          "The clock runs back by "
+              + words(-step)
+              + " after row "
+              + (day.firstRow() + row)
+              + " of the data.");
+    } else if (off > interval / 10) {
+      jump(
+          before,
+          at,
+          "One interval is not of the stated length.",
+          "The step after row "
+              + (day.firstRow() + row)
+              + " of the data is "
+              + words(step)
+              + ", no multiple of the interval of "
+              + words(interval)
+              + ": the clock was set, or the logging began anew.");
+    }
+    if (step - interval > interval / 2) {
+      gap(new Gap(before + interval, at));
+    }
+  }
+
+  private void jump(long from, long to, String effect, String sentence) {
+    if (jumps.size() < MOST_JUMPS) {
+      jumps.add(finding(CLOCK_JUMP, from, to, effect, sentence));
+    }
+  }
+
+  private void gap(Gap gap) {
+    gapCount++;
+    missing += gap.length();
+    gaps.add(gap);
+    if (gaps.size() > 4 * MOST_GAPS) {
+      gaps.sort(Comparator.comparingLong(Gap::length).reversed());
+      gaps.subList(MOST_GAPS, gaps.size()).clear();
+    }
+  }
+
+  private void repeat(LogDay day, int row, long at) {
+    boolean alike = java.util.Arrays.equals(row(day, row), row > 0 ? row(day, row - 1) : rowBefore);
+    run.same += alike ? 1 : 0;
+    run.different += alike ? 0 : 1;
+    run.from = run.same + run.different == 1 ? at : run.from;
+    run.to = at + day.intervalMillis();
+  }
+
+  @Override
+  public List<QualityFinding> findings() {
+    List<QualityFinding> all = new ArrayList<>(jumps);
     gaps.sort(Comparator.comparingLong(Gap::length).reversed());
     for (Gap gap : gaps.subList(0, Math.min(MOST_GAPS, gaps.size()))) {
-      add(
-          GAP,
-          gap.from(),
-          gap.to(),
-          "Nothing is known of this time; it counts in no statistic.",
-          "No rows for " + words(gap.length()) + ".");
+      all.add(
+          finding(
+              GAP,
+              gap.from(),
+              gap.to(),
+              "Nothing is known of this time; it counts in no statistic.",
+              "No rows for " + words(gap.length()) + "."));
     }
-    if (gaps.size() > MOST_GAPS) {
-      add(
-          GAP,
-          log.startMillis(0),
-          log.startMillis(log.rows() - 1),
-          "Nothing is known of these times; they count in no statistic.",
-          gaps.size() + " gaps in all, " + words(missing) + " together; the longest are listed.");
+    if (gapCount > MOST_GAPS) {
+      all.add(
+          finding(
+              GAP,
+              first,
+              before,
+              "Nothing is known of these times; they count in no statistic.",
+              gapCount
+                  + " gaps in all, "
+                  + words(missing)
+                  + " together; the longest are listed."));
     }
+    if (run.same + run.different > 0) {
+      all.add(
+          finding(
+              REPEATED_ROWS,
+              run.from,
+              run.to,
+              "They count twice in statistics over the rows as read.",
+              String.format(
+                  Locale.ROOT,
+                  "%d rows repeat the time of the row before: %d with the same values, %d with"
+                      + " others.",
+                  run.same + run.different,
+                  run.same,
+                  run.different)));
+    }
+    return all;
   }
 
-  private void repeats() {
-    int same = 0;
-    int different = 0;
-    int first = -1;
-    int last = -1;
-    for (int k = 1; k < log.rows(); k++) {
-      if (log.startMillis(k) == log.startMillis(k - 1)) {
-        first = first < 0 ? k : first;
-        last = k;
-        if (alike(k)) {
-          same++;
-        } else {
-          different++;
-        }
-      }
-    }
-    if (first >= 0) {
-      add(
-          REPEATED_ROWS,
-          log.startMillis(first),
-          log.startMillis(last) + log.intervalMillis(),
-          "They count twice in statistics over the rows as read.",
-          String.format(
-              Locale.ROOT,
-              "%d rows repeat the time of the row before: %d with the same values, %d with others.",
-              same + different,
-              same,
-              different));
-    }
-  }
-
-  private boolean alike(int row) {
-    for (String quantity : log.quantities()) {
-      if (Double.compare(log.at(quantity, row), log.at(quantity, row - 1)) != 0) {
-        return false;
-      }
-    }
-    return true;
+  private static QualityFinding finding(
+      String code, long from, long to, String effect, String sentence) {
+    return new QualityFinding(
+        code,
+        Optional.of(
+            new Period(
+                Instant.ofEpochMilli(Math.min(from, to)), Instant.ofEpochMilli(Math.max(from, to)))),
+        effect,
+        sentence);
   }
 
   /** A length in the largest unit that leaves it readable. */

@@ -93,9 +93,9 @@ public final class ColumnCodec {
   private static void block(long[] whole, int from, int to, BitWriter out) {
     long low = Long.MAX_VALUE;
     long high = Long.MIN_VALUE;
-    long lowStep = 0;
-    long highStep = 0;
-    boolean full = true;
+    long lowStep = Long.MAX_VALUE;
+    long highStep = Long.MIN_VALUE;
+    boolean full = to - from > 1;
     for (int k = from; k < to; k++) {
       full &= whole[k] != NONE;
       low = whole[k] == NONE ? low : Math.min(low, whole[k]);

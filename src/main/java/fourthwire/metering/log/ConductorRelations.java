@@ -1,0 +1,255 @@
+package fourthwire.metering.log;
+
+import static fourthwire.metering.QualityFinding.DISTORTION_MISREAD;
+import static fourthwire.metering.QualityFinding.NEUTRAL_NOT_SUM;
+import static fourthwire.metering.QualityFinding.WRONG_RATIO;
+
+import fourthwire.metering.QualityFinding;
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Locale;
+import java.util.Map;
+import java.util.Optional;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
+
+/**
+ * What the currents and voltages tell about each other day by day: a neutral that the lines can't
+ * add up to, an rms that its harmonics do not make, a distortion that is not theirs, volts between
+ * lines that are not those to the neutral. Thresholds are common practice, no source.
+ */
+final class ConductorRelations implements DayCheck {
+  private static final Pattern HARMONIC =
+      Pattern.compile("(.+)\\.(current|voltage)_h(\\d+)_(a|v|percent)");
+  private static final int FEWEST_ROWS = 4;
+
+  private final FlaggedDays flagged = new FlaggedDays();
+  private final Map<String, Map<Integer, Integer>> harmonics = new LinkedHashMap<>();
+
+  ConductorRelations(List<String> names) {
+    for (int q = 0; q < names.size(); q++) {
+      Matcher m = HARMONIC.matcher(names.get(q));
+      if (m.matches()) {
+        harmonics
+            .computeIfAbsent(
+                m.group(1) + "." + m.group(2) + " " + m.group(4), key -> new LinkedHashMap<>())
+            .put(Integer.parseInt(m.group(3)), q);
+      }
+    }
+  }
+
+  @Override
+  public void take(LogDay day) {
+    if (day.rows() < FEWEST_ROWS) {
+      return;
+    }
+    neutral(day);
+    betweenLines(day);
+    harmonics.forEach((key, orders) -> harmonics(day, key, orders));
+  }
+
+  private void flag(LogDay day, String code, String subject, String effect, String sentence) {
+    flagged.add(day, new FlaggedDays.Fault(code, subject, effect, sentence));
+  }
+
+  /** For any waveforms the rms of a sum lies between the largest less the rest, and the sum. */
+  private void neutral(LogDay day) {
+    Optional<double[]> neutral = day.find("N.rms_a");
+    Optional<double[][]> lines = new LineDay(day).all("rms_a");
+    if (neutral.isEmpty() || lines.isEmpty()) {
+      return;
+    }
+    int there = 0;
+    int above = 0;
+    int below = 0;
+    for (int k = 0; k < day.rows(); k++) {
+      double n = neutral.get()[k];
+      double a = lines.get()[0][k];
+      double b = lines.get()[1][k];
+      double c = lines.get()[2][k];
+      double sum = a + b + c;
+      double least = Math.max(0, 2 * Math.max(a, Math.max(b, c)) - sum);
+      if (!Double.isNaN(sum + n)) {
+        there++;
+        above += n > 1.03 * sum + 0.1 ? 1 : 0;
+        below += n < 0.9 * least - 0.02 * sum ? 1 : 0;
+      }
+    }
+    int thirds = thirds(day);
+    if (there >= FEWEST_ROWS && above + below > there / 5 || thirds != 0) {
+      flag(
+          day,
+          NEUTRAL_NOT_SUM,
+          "N",
+          "The column mapped as N is not to be trusted.",
+          thirds != 0
+              ? "The third harmonic of N is "
+                  + (thirds > 0 ? "above that of all lines together." : "far below that of the lines.")
+              : String.format(
+                  Locale.ROOT,
+                  "N.rms_a can't be the sum of the line currents: above all three together in %d of"
+                      + " %d rows of the day, below what they must leave in %d.",
+                  above,
+                  there,
+                  below));
+    }
+  }
+
+  /** Third harmonics of the lines add up in the neutral: 1 where it has more, -1 far less. */
+  private static int thirds(LogDay day) {
+    Optional<double[]> neutral = day.find("N.current_h3_a");
+    Optional<double[][]> lines = new LineDay(day).all("current_h3_a");
+    if (neutral.isEmpty() || lines.isEmpty()) {
+      return 0;
+    }
+    double[][] l = lines.get();
+    double share =
+        Rows.median(day.rows(), k -> neutral.get()[k] / (l[0][k] + l[1][k] + l[2][k]));
+    return share > 1.08 ? 1 : share < 0.1 ? -1 : 0;
+  }
+
+  /** Volts between lines are √3 times those to the neutral where these are alike. */
+  private void betweenLines(LogDay day) {
+    Optional<double[][]> lines = new LineDay(day).all("rms_v");
+    if (lines.isEmpty()) {
+      return;
+    }
+    double[] usual = new double[3];
+    for (int k = 0; k < 3; k++) {
+      usual[k] = Rows.median(lines.get()[k]);
+    }
+    double mean = (usual[0] + usual[1] + usual[2]) / 3;
+    for (int k = 0; k < 3; k++) {
+      double others = (3 * mean - usual[k]) / 2;
+      // One line far off while the other two agree: an interruption does not last a day.
+      boolean agree = Math.abs(usual[(k + 1) % 3] - usual[(k + 2) % 3]) < 0.05 * others;
+      if (agree && Math.abs(usual[k] / others - 1) > 0.15) {
+        flag(
+            day,
+            WRONG_RATIO,
+            LineDay.LINES[k] + ".rms_v",
+            "Volts of this line, and what is formed from them, are wrong by that factor.",
+            String.format(
+                Locale.ROOT,
+                "Volts of %s are %.3g times those of the other lines (median of the day).",
+                LineDay.LINES[k],
+                usual[k] / others));
+      }
+    }
+    Optional<double[]> pair = day.find("L1-L2.rms_v");
+    if (pair.isPresent()) {
+      double ratio = Rows.median(pair.get()) / mean;
+      if (ratio < 1.5 || ratio > 2.1) {
+        flag(
+            day,
+            WRONG_RATIO,
+            "L1-L2.rms_v",
+            "Either the volts between lines or those to the neutral are wrong.",
+            String.format(
+                Locale.ROOT,
+                "Volts between lines are %.3g times those to the neutral, not about 1.73.",
+                ratio));
+      }
+    }
+  }
+
+  private void harmonics(LogDay day, String key, Map<Integer, Integer> orders) {
+    String place = key.substring(0, key.lastIndexOf('.'));
+    boolean current = key.contains(".current");
+    boolean percent = key.endsWith("percent");
+    Optional<double[]> rms = day.find(place + (current ? ".rms_a" : ".rms_v"));
+    double[] first = orders.containsKey(1) ? day.of(orders.get(1)) : new double[0];
+    List<double[]> above = new ArrayList<>();
+    orders.forEach(
+        (order, q) -> {
+          if (order > 1) {
+            above.add(day.of(q));
+          }
+        });
+    if (above.size() < 3) {
+      return;
+    }
+    double[] sum = rootSum(above, day.rows());
+    if (!percent && first.length > 0 && rms.isPresent()) {
+      againstRms(day, place, current, first, sum, rms.get());
+    }
+    distortion(day, place + (current ? ".current" : ".voltage"), percent, first, sum, rms);
+  }
+
+  private static double[] rootSum(List<double[]> all, int rows) {
+    double[] sum = new double[rows];
+    for (double[] x : all) {
+      for (int k = 0; k < rows; k++) {
+        sum[k] += Double.isNaN(x[k]) ? 0 : x[k] * x[k];
+      }
+    }
+    java.util.Arrays.setAll(sum, k -> Math.sqrt(sum[k]));
+    return sum;
+  }
+
+  private void againstRms(
+      LogDay day, String place, boolean current, double[] first, double[] sum, double[] rms) {
+    double ratio =
+        Rows.median(day.rows(), k -> rms[k] / Math.hypot(first[k], sum[k]));
+    if (ratio < 0.93 || ratio > 1.15) {
+      flag(
+          day,
+          WRONG_RATIO,
+          place + (current ? " rms" : " rms_v"),
+          "Either this rms or its harmonics are wrong by that factor.",
+          String.format(
+              Locale.ROOT,
+              "The rms %s of %s is %.3g times what its harmonics make (median of the day): a wrong"
+                  + " ratio, a line under another's name, or an average-responding instrument.",
+              current ? "current" : "voltage",
+              place,
+              ratio));
+    }
+  }
+
+  /** The distortion logged against the one that the harmonics make. */
+  private void distortion(
+      LogDay day,
+      String measured,
+      boolean percent,
+      double[] first,
+      double[] sum,
+      Optional<double[]> rms) {
+    Optional<double[]> logged = day.find(measured + "_thd_percent");
+    if (logged.isEmpty() || !percent && first.length == 0 && rms.isEmpty()) {
+      return;
+    }
+    double ratio =
+        Rows.median(
+            day.rows(),
+            k -> {
+              double base =
+                  percent
+                      ? 100
+                      : first.length > 0
+                          ? first[k]
+                          : Math.sqrt(Math.max(0, rms.get()[k] * rms.get()[k] - sum[k] * sum[k]));
+              return logged.get()[k] / (100 * sum[k] / base);
+            });
+    if (ratio < 0.8 || ratio > 1.5) {
+      flag(
+          day,
+          DISTORTION_MISREAD,
+          measured,
+          "Its means and percentiles can't be held against limits; the harmonics can.",
+          String.format(
+              Locale.ROOT,
+              "%s_thd_percent is %.3g times the distortion that the harmonics make (median of the"
+                  + " day): it is averaged otherwise, or taken on another base than the"
+                  + " fundamental.",
+              measured,
+              ratio));
+    }
+  }
+
+  @Override
+  public List<QualityFinding> findings() {
+    return flagged.findings();
+  }
+}

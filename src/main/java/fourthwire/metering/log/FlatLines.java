@@ -1,0 +1,163 @@
+package fourthwire.metering.log;
+
+import static fourthwire.metering.QualityFinding.FLAT_LINE;
+
+import fourthwire.metering.Amount;
+import fourthwire.metering.Period;
+import fourthwire.metering.QualityFinding;
+import java.time.Instant;
+import java.util.ArrayList;
+import java.util.HashMap;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Locale;
+import java.util.Map;
+import java.util.Optional;
+
+/**
+ * Values that stand still although they usually move. How often a quantity moves by more than its last
+ * digits from row to row is
+ * counted by the level it stands at, so that a small load printed in few digits may rest: a run is a
+ * fault when chance would hold the value so long less than once in a hundred million.
+ */
+final class FlatLines implements DayCheck {
+  private static final int FEWEST_ROWS = 8;
+  private static final long SHORTEST_MILLIS = 60_000;
+  private static final int MOST_RUNS = 2000;
+  private static final double CHANCE = 1e-8;
+
+  /** A quantity that moves by a digit or two at a time may well rest on one value. */
+  private static final double FEW_STEPS = 2.5;
+
+  private final List<String> names;
+  private final Column[] columns;
+
+  private static final class Column {
+    private final Map<Long, int[]> steps = new HashMap<>();
+    private final List<Run> runs = new ArrayList<>();
+    private double before = Double.NaN;
+    private double leastStep = Double.MAX_VALUE;
+    private long runRows;
+    private long runFrom;
+    private long last;
+  }
+
+  private record Run(double value, long rows, long from, long to) {}
+
+  FlatLines(List<String> names) {
+    this.names = names;
+    this.columns = new Column[names.size()];
+    java.util.Arrays.setAll(columns, k -> new Column());
+  }
+
+  @Override
+  public void take(LogDay day) {
+    for (int q = 0; q < columns.length; q++) {
+      if (isWatched(names.get(q))) {
+        take(day, columns[q], day.of(q));
+      }
+    }
+  }
+
+  private static boolean isWatched(String name) {
+    return !name.contains("energy_wh") && !name.endsWith("_deg") && !name.contains("_h1_percent");
+  }
+
+  private static void take(LogDay day, Column c, double[] x) {
+    findLeastStep(c, x);
+    for (int row = 0; row < x.length; row++) {
+      double v = x[row];
+      double moved = Math.abs(v - c.before);
+      long at = day.startMillis(row);
+      if (v == c.before) {
+        if (at != c.last) {
+          c.runRows++;
+        }
+      } else {
+        endRun(c, day.intervalMillis());
+        c.before = v;
+        c.runRows = 1;
+        c.runFrom = at;
+      }
+      if (c.before == c.before) {
+        int[] step = c.steps.computeIfAbsent(level(v), l -> new int[2]);
+        step[moved > FEW_STEPS * c.leastStep ? 1 : 0]++;
+      }
+      c.last = at;
+    }
+  }
+
+  /** The last digit of the column, as its smallest step shows. */
+  private static void findLeastStep(Column c, double[] x) {
+    for (int row = 1; row < x.length; row++) {
+      double step = Math.abs(x[row] - x[row - 1]);
+      if (step > 0 && step < c.leastStep) {
+        c.leastStep = step;
+      }
+    }
+  }
+
+  /** Levels a third apart. */
+  private static long level(double v) {
+    return v == 0 ? Long.MIN_VALUE : Math.round(3 * Math.log(Math.abs(v)));
+  }
+
+  private static void endRun(Column c, long intervalMillis) {
+    long to = c.last + intervalMillis;
+    // A load that is off reads nothing for hours; an interruption is no fault of the meter.
+    boolean lasting = c.runRows >= FEWEST_ROWS && to - c.runFrom >= SHORTEST_MILLIS;
+    if (lasting && c.before != 0 && c.before == c.before && c.runs.size() < MOST_RUNS) {
+      c.runs.add(new Run(c.before, c.runRows, c.runFrom, Math.max(c.runFrom, to)));
+    }
+  }
+
+  @Override
+  public List<QualityFinding> findings() {
+    Map<String, List<String>> together = new LinkedHashMap<>();
+    Map<String, Run> runs = new LinkedHashMap<>();
+    for (int q = 0; q < columns.length; q++) {
+      endRun(columns[q], 0);
+      for (Run run : columns[q].runs) {
+        if (isFault(columns[q], run)) {
+          String key = run.from() + " " + run.to();
+          together.computeIfAbsent(key, k -> new ArrayList<>()).add(names.get(q));
+          runs.putIfAbsent(key, run);
+        }
+      }
+    }
+    List<QualityFinding> findings = new ArrayList<>();
+    together.forEach((key, all) -> findings.add(finding(runs.get(key), all)));
+    return findings;
+  }
+
+  /** Other rows at this level, or where there are few all others, tell how often it moves. */
+  private static boolean isFault(Column c, Run run) {
+    int[] here = c.steps.getOrDefault(level(run.value()), new int[2]);
+    double still = here[0] - (run.rows() - 1.0);
+    double moved = here[1];
+    if (still + moved < 30) {
+      still = 1 - run.rows();
+      moved = 0;
+      for (int[] step : c.steps.values()) {
+        still += step[0];
+        moved += step[1];
+      }
+    }
+    double rest = (Math.max(0, still) + 0.5) / (Math.max(0, still) + moved + 1);
+    return moved > 20 && Math.pow(rest, run.rows() - 1.0) < CHANCE;
+  }
+
+  private static QualityFinding finding(
+      @org.jspecify.annotations.Nullable Run found, List<String> names) {
+    Run run = java.util.Objects.requireNonNull(found);
+    String what =
+        names.size() == 1
+            ? names.get(0) + " stands still at " + Amount.read(run.value(), names.get(0))
+            : names.size() + " quantities stand still, the first " + names.get(0);
+    return new QualityFinding(
+        FLAT_LINE,
+        Optional.of(new Period(Instant.ofEpochMilli(run.from()), Instant.ofEpochMilli(run.to()))),
+        "The instrument repeated its last value: nothing is known of this time.",
+        String.format(Locale.ROOT, "%s for %d rows.", what, run.rows()));
+  }
+}

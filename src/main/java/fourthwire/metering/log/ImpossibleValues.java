@@ -1,0 +1,183 @@
+package fourthwire.metering.log;
+
+import static fourthwire.metering.QualityFinding.IMPOSSIBLE_VALUE;
+import static fourthwire.metering.QualityFinding.MISSING_VALUES;
+
+import fourthwire.metering.Amount;
+import fourthwire.metering.Period;
+import fourthwire.metering.QualityFinding;
+import fourthwire.metering.series.QuantityStatistics;
+import java.time.Instant;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+
+/**
+ * Values that can't be, and blanks. What can be is bounded by physics where it is (no rms is below
+ * zero, no power factor above one) and by the column itself where it is not: an overflow mark stands
+ * far above all the rest, and alone. Thresholds are common practice, no source.
+ */
+final class ImpossibleValues implements DayCheck {
+  private final double nominalHz;
+  private final List<QuantityStatistics> statistics;
+  private final Seen[] seen;
+  private final Seen blank = new Seen();
+
+  private static final class Seen {
+    private long count;
+    private double example;
+    private Instant from = Instant.MAX;
+    private Instant to = Instant.MIN;
+
+    void take(LogDay day, int row, double value) {
+      Instant at = Instant.ofEpochMilli(day.startMillis(row));
+      Instant end = at.plusMillis(day.intervalMillis());
+      example = count == 0 ? value : example;
+      count++;
+      from = at.isBefore(from) ? at : from;
+      to = end.isAfter(to) ? end : to;
+    }
+  }
+
+  private final List<String> names;
+  private long values;
+
+  ImpossibleValues(List<String> names, List<QuantityStatistics> statistics, double nominalHz) {
+    this.names = names;
+    this.statistics = statistics;
+    this.nominalHz = nominalHz;
+    this.seen = new Seen[names.size()];
+    java.util.Arrays.setAll(seen, k -> new Seen());
+  }
+
+  @Override
+  public void take(LogDay day) {
+    for (int q = 0; q < seen.length; q++) {
+      double[] x = day.of(q);
+      values += x.length;
+      Bounds bounds = bounds(q, x);
+      for (int row = 0; row < x.length; row++) {
+        if (Double.isNaN(x[row])) {
+          blank.take(day, row, Double.NaN);
+        } else if (!bounds.holds(x, row)) {
+          seen[q].take(day, row, x[row]);
+        }
+      }
+      againstOthers(day, q, x);
+    }
+  }
+
+  /** What a value may be; {@code alone} is the bound of one that neither neighbour comes near. */
+  private record Bounds(double low, double high, double alone) {
+    boolean holds(double[] x, int row) {
+      double v = x[row];
+      if (v < low || v > high) {
+        return false;
+      }
+      return Math.abs(v) <= alone
+          || row > 0 && Math.abs(x[row - 1]) > alone / 3
+          || row + 1 < x.length && Math.abs(x[row + 1]) > alone / 3;
+    }
+  }
+
+  private Bounds bounds(int q, double[] x) {
+    String name = names.get(q).replaceFirst("\\.(min|max)$", "");
+    double none = Double.MAX_VALUE;
+    if (name.endsWith("_factor")) {
+      return new Bounds(-1.005, 1.005, none);
+    }
+    if (name.equals("frequency_hz")) {
+      return new Bounds(0.85 * nominalHz, 1.15 * nominalHz, none);
+    }
+    if (name.endsWith("_deg")) {
+      return new Bounds(-360, 360, none);
+    }
+    if (name.endsWith("energy_wh")) {
+      return new Bounds(-none, none, none);
+    }
+    QuantityStatistics s = statistics.get(q);
+    double usual = Math.max(Math.abs(s.p99()), s.p99() < 0 ? Math.abs(s.min()) : 0);
+    if (name.endsWith(".rms_v")) {
+      double median = Rows.median(x);
+      return new Bounds(0, 2 * Math.max(median, 0.5 * s.p95()) + 1, none);
+    }
+    if (name.endsWith("_w") || name.endsWith("_var")) {
+      double bound = 20 * Math.max(usual, 100);
+      return new Bounds(-bound, bound, 6 * Math.max(usual, 1000));
+    }
+    if (name.endsWith("_percent")) {
+      return new Bounds(0, 1e4, 12 * Math.max(usual, 5));
+    }
+    return new Bounds(0, 20 * Math.max(usual, 1), 6 * Math.max(usual, 2));
+  }
+
+  /** A mean lies between its lowest and highest; no volts where amps and watts flow. */
+  private void againstOthers(LogDay day, int q, double[] x) {
+    String name = names.get(q);
+    Optional<double[]> low = day.find(name + ".min");
+    Optional<double[]> high = day.find(name + ".max");
+    for (int row = 0; row < x.length; row++) {
+      double slack = 1e-6 + 0.002 * Math.abs(x[row]);
+      boolean below = low.isPresent() && x[row] < low.get()[row] - slack;
+      boolean above = high.isPresent() && x[row] > high.get()[row] + slack;
+      if (below || above) {
+        seen[q].take(day, row, x[row]);
+      }
+    }
+    if (name.matches("L[123]\\.rms_v")) {
+      dead(day, q, x, name.substring(0, 2));
+    }
+  }
+
+  private void dead(LogDay day, int q, double[] volts, String line) {
+    Optional<double[]> amps = day.find(line + ".rms_a");
+    double usual = statistics.get(q).p95();
+    int a = names.indexOf(line + ".rms_a");
+    for (int row = 0; row < volts.length && amps.isPresent(); row++) {
+      boolean flows = amps.get()[row] > 0.2 * statistics.get(a).p95();
+      if (volts[row] >= 0 && volts[row] < 0.05 * usual && flows) {
+        seen[q].take(day, row, volts[row]);
+      }
+    }
+  }
+
+  @Override
+  public List<QualityFinding> findings() {
+    List<QualityFinding> findings = new ArrayList<>();
+    for (int q = 0; q < seen.length; q++) {
+      Seen s = seen[q];
+      if (s.count > 0) {
+        findings.add(
+            finding(
+                IMPOSSIBLE_VALUE,
+                s,
+                "They stand in the statistics over the rows as read.",
+                String.format(
+                    Locale.ROOT,
+                    "%s: %d %s can't be, as %s.",
+                    names.get(q),
+                    s.count,
+                    s.count == 1 ? "value" : "values",
+                    Amount.read(s.example, names.get(q)))));
+      }
+    }
+    if (blank.count > 0) {
+      findings.add(
+          finding(
+              MISSING_VALUES,
+              blank,
+              "They are left out of the statistics.",
+              String.format(
+                  Locale.ROOT,
+                  "%d of %d values are blank or marked as not measured.",
+                  blank.count,
+                  values)));
+    }
+    return findings;
+  }
+
+  private static QualityFinding finding(String code, Seen s, String effect, String sentence) {
+    return new QualityFinding(code, Optional.of(new Period(s.from, s.to)), effect, sentence);
+  }
+}
