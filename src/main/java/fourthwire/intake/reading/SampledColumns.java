@@ -11,7 +11,7 @@ import java.util.function.IntToDoubleFunction;
 
 /** Values of the first rows of a table, column by column, as written. */
 final class SampledColumns {
-  private static final int ROWS = 2000;
+  private static final int ROWS = 1000;
 
   private final Map<String, double[]> columns = new LinkedHashMap<>();
   private final List<String> openNumbers;

@@ -7,7 +7,7 @@ import fourthwire.metering.Period;
 import fourthwire.metering.QualityFinding;
 import java.time.Instant;
 import java.util.ArrayList;
-import java.util.HashMap;
+import java.util.Arrays;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
@@ -24,6 +24,7 @@ final class FlatLines implements DayCheck {
   private static final int FEWEST_ROWS = 8;
   private static final long SHORTEST_MILLIS = 60_000;
   private static final int MOST_RUNS = 2000;
+  private static final int LEVELS = 128;
   private static final double CHANCE = 1e-8;
 
   /** A quantity that moves by a digit or two at a time may well rest on one value. */
@@ -33,7 +34,8 @@ final class FlatLines implements DayCheck {
   private final Column[] columns;
 
   private static final class Column {
-    private final Map<Long, int[]> steps = new HashMap<>();
+    private final int[] rested = new int[LEVELS];
+    private final int[] moved = new int[LEVELS];
     private final List<Run> runs = new ArrayList<>();
     private double before = Double.NaN;
     private double leastStep = Double.MAX_VALUE;
@@ -47,7 +49,7 @@ final class FlatLines implements DayCheck {
   FlatLines(List<String> names) {
     this.names = names;
     this.columns = new Column[names.size()];
-    java.util.Arrays.setAll(columns, k -> new Column());
+    Arrays.setAll(columns, k -> new Column());
   }
 
   @Override
@@ -80,8 +82,7 @@ final class FlatLines implements DayCheck {
         c.runFrom = at;
       }
       if (c.before == c.before) {
-        int[] step = c.steps.computeIfAbsent(level(v), l -> new int[2]);
-        step[moved > FEW_STEPS * c.leastStep ? 1 : 0]++;
+        (moved > FEW_STEPS * c.leastStep ? c.moved : c.rested)[level(v)]++;
       }
       c.last = at;
     }
@@ -97,9 +98,9 @@ final class FlatLines implements DayCheck {
     }
   }
 
-  /** Levels a third apart. */
-  private static long level(double v) {
-    return v == 0 ? Long.MIN_VALUE : Math.round(3 * Math.log(Math.abs(v)));
+  /** Levels a factor of two apart. */
+  private static int level(double v) {
+    return Math.max(0, Math.min(LEVELS - 1, Math.getExponent(v) + LEVELS / 2));
   }
 
   private static void endRun(Column c, long intervalMillis) {
@@ -132,16 +133,12 @@ final class FlatLines implements DayCheck {
 
   /** Other rows at this level, or where there are few all others, tell how often it moves. */
   private static boolean isFault(Column c, Run run) {
-    int[] here = c.steps.getOrDefault(level(run.value()), new int[2]);
-    double still = here[0] - (run.rows() - 1.0);
-    double moved = here[1];
+    int level = level(run.value());
+    double still = c.rested[level] - (run.rows() - 1.0);
+    double moved = c.moved[level];
     if (still + moved < 30) {
-      still = 1 - run.rows();
-      moved = 0;
-      for (int[] step : c.steps.values()) {
-        still += step[0];
-        moved += step[1];
-      }
+      still = Arrays.stream(c.rested).sum() - (run.rows() - 1.0);
+      moved = Arrays.stream(c.moved).sum();
     }
     double rest = (Math.max(0, still) + 0.5) / (Math.max(0, still) + moved + 1);
     return moved > 20 && Math.pow(rest, run.rows() - 1.0) < CHANCE;

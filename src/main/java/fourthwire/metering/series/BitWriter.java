@@ -22,19 +22,28 @@ final class BitWriter {
     }
     held = held << bits | value & (1L << bits) - 1;
     heldBits += bits;
-    while (heldBits >= 8) {
-      if (at == bytes.length) {
-        bytes = Arrays.copyOf(bytes, 2 * at);
-      }
-      heldBits -= 8;
-      bytes[at++] = (byte) (held >>> heldBits);
+    if (heldBits >= 32) {
+      flush();
     }
   }
 
+  private void flush() {
+    if (at + 4 > bytes.length) {
+      bytes = Arrays.copyOf(bytes, 2 * bytes.length);
+    }
+    heldBits -= 32;
+    int word = (int) (held >>> heldBits);
+    bytes[at++] = (byte) (word >>> 24);
+    bytes[at++] = (byte) (word >>> 16);
+    bytes[at++] = (byte) (word >>> 8);
+    bytes[at++] = (byte) word;
+  }
+
   byte[] bytes() {
-    byte[] all = Arrays.copyOf(bytes, heldBits > 0 ? at + 1 : at);
-    if (heldBits > 0) {
-      all[at] = (byte) (held << 8 - heldBits);
+    byte[] all = Arrays.copyOf(bytes, at + (heldBits + 7) / 8);
+    for (int k = at; heldBits > 0; k++) {
+      heldBits -= 8;
+      all[k] = (byte) (heldBits >= 0 ? held >>> heldBits : held << -heldBits);
     }
     return all;
   }

@@ -19,6 +19,7 @@ record Dialect(
     char separator, NumberStyle numbers, HeaderRows header, long firstData, List<String> preamble) {
   private static final char[] SEPARATORS = {',', ';', '\t', '|', ' '};
   private static final int MOST_ROWS = 1000;
+  private static final int MOST_CELLS = 8000;
   private static final Pattern NUMBER =
       Pattern.compile("[-+\u2212]?\\s?(\\d+([.,'’\\h]\\d+)*|[.,]\\d+)([eE][+-]?\\d+)?\\s*%?");
 
@@ -52,8 +53,10 @@ record Dialect(
     List<Line> lines = new ArrayList<>();
     RowCutter cutter = new RowCutter(separator, charset);
     int at = 0;
-    for (long row = 1; at < length && lines.size() < MOST_ROWS; row++) {
+    int cells = 0;
+    for (long row = 1; at < length && lines.size() < MOST_ROWS && cells < MOST_CELLS; row++) {
       at = cutter.next(head, at, length);
+      cells += cutter.cells();
       if (!cutter.isEmpty()) {
         lines.add(new Line(row, cutter.texts()));
       }

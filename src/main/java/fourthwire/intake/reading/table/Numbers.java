@@ -88,6 +88,8 @@ final class Numbers {
   /** A limit is no value: {@code >600}, {@code < 0.1}. */
   private static final Pattern BEYOND = Pattern.compile("[<>≤≥].*");
 
+  private static final Pattern BLANKS = Pattern.compile("[\\s\\h\\uFEFF\\u001A]+");
+  private static final Pattern ENDS = Pattern.compile("^[-+]+|[!*]+$");
   private static final Pattern PLAIN =
       Pattern.compile("[+-]?(\\d+\\.?\\d*|\\.\\d+)([eE][+-]?\\d{1,3})?");
 
@@ -137,12 +139,15 @@ final class Numbers {
       }
     }
     int count = k - first - (point < 0 ? 0 : 1);
+    if (from == to) {
+      return BLANK;
+    }
     if (count == 0 || count > 15) {
       return slow(text(text, from, to, charset), decimalComma, shift);
     }
     int decimals = (point < 0 ? 0 : k - point - 1) - shift;
     double value = scaled(digits, decimals);
-    return negative ? -value : value;
+    return negative && digits != 0 ? -value : value;
   }
 
   private static double scaled(long digits, int decimals) {
@@ -157,6 +162,9 @@ final class Numbers {
   }
 
   private static double slow(String text, boolean decimalComma, int shift) {
+    if (text.equals("NaN")) {
+      return BLANK;
+    }
     String plain = plain(text);
     if (isMark(plain)) {
       return BLANK;
@@ -171,7 +179,7 @@ final class Numbers {
 
   /** Blanks of every kind as one, a true minus as the hyphen, a percent sign behind taken off. */
   private static String plain(String text) {
-    String plain = text.replaceAll("[\\s\\h\\uFEFF\\u001A]+", " ").trim().replace('\u2212', '-');
+    String plain = BLANKS.matcher(text).replaceAll(" ").trim().replace('\u2212', '-');
     plain = plain.endsWith("%") ? plain.substring(0, plain.length() - 1).trim() : plain;
     return plain.startsWith("- ") || plain.startsWith("+ ")
         ? plain.charAt(0) + plain.substring(2)
@@ -199,7 +207,7 @@ final class Numbers {
       return text.isEmpty() || text.startsWith("1.#");
     }
     String word = text.toLowerCase(Locale.ROOT).trim();
-    String bare = word.replaceAll("^[-+]+|[!*]+$", "").trim();
+    String bare = ENDS.matcher(word).replaceAll("").trim();
     return SIGNS.matcher(word).matches() || MARKS.contains(bare) || BEYOND.matcher(word).matches();
   }
 
