@@ -7,7 +7,8 @@ import java.util.regex.Pattern;
 /**
  * The name of what a column or channel holds; the public contract, section 4.
  *
- * @param place {@code L1}, {@code N}, {@code L1-L2}, {@code total}; empty for the frequency and unbalance
+ * @param place {@code L1}, {@code N}, {@code L1-L2}, {@code total}; empty for the frequency and
+ *     unbalance
  * @param measure {@code rms_a}, {@code current_h3_percent} …; of a capture {@code v} or {@code i}
  */
 public record MeasuredQuantity(String place, String measure) {

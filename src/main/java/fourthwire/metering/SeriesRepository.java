@@ -6,8 +6,8 @@ import java.util.Optional;
 /** Where the rows of logs are kept, column by column. */
 public interface SeriesRepository {
   /**
-   * One quantity of a log, in the order of its rows. It hands out its own arrays: they are not to be
-   * changed.
+   * One quantity of a log, in the order of its rows. It hands out its own arrays: they are not to
+   * be changed.
    *
    * @param startMillis when each row's interval begins, milliseconds of the epoch
    * @param values in SI units; NaN for none

@@ -72,8 +72,7 @@ final class SeriesTables implements SeriesRepository {
   private void addChunk(long readingId, LogSeries series, int chunk) {
     List<Object[]> rows = new ArrayList<>();
     for (int q = TIMES; q < series.quantities().size(); q++) {
-      rows.add(
-          new Object[] {readingId, q, chunk, series.rows(chunk), series.coded(chunk, q)});
+      rows.add(new Object[] {readingId, q, chunk, series.rows(chunk), series.coded(chunk, q)});
     }
     template.batchUpdate(
         """
@@ -100,8 +99,7 @@ final class SeriesTables implements SeriesRepository {
 
   @Override
   public Optional<Column> column(long readingId, String quantity) {
-    return number(readingId, quantity)
-        .map(q -> new Column(times(readingId), values(readingId, q)));
+    return number(readingId, quantity).map(q -> new Column(times(readingId), values(readingId, q)));
   }
 
   private record Coded(int rows, byte[] bytes) {}

@@ -314,7 +314,8 @@ class StoreTest {
                 Map.of("L1.rms_a", new QuantitySummary(1006, 1, 2.5, 9, 8, 8.75)),
                 List.of(
                     new LogResult.KeyInterval(
-                        LogResult.PEAK_CURRENT, monday, "highest", Map.of("L1.rms_a", 9.0))), Optional.empty())),
+                        LogResult.PEAK_CURRENT, monday, "highest", Map.of("L1.rms_a", 9.0))),
+                Optional.empty())),
         Optional.empty());
   }
 

@@ -210,8 +210,7 @@ final class LogFormat {
 
   Reading read(ReadingPlan plan, ReadingSetting setting, BiPredicate<Double, String> progress) {
     LogColumns columns = new LogColumns(table, time, plan.mapping());
-    LogSeries series =
-        new LogSeries(columns.quantities(), new SpilledParts(), mostHeldValues());
+    LogSeries series = new LogSeries(columns.quantities(), new SpilledParts(), mostHeldValues());
     ExecutorService workers = Executors.newFixedThreadPool(WORKERS);
     try {
       LogRows rows = new LogRows(table, columns, plan.mapping(), series, workers);

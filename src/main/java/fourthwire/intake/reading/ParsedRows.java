@@ -2,7 +2,6 @@ package fourthwire.intake.reading;
 
 import fourthwire.intake.reading.table.RowTime;
 import fourthwire.intake.reading.table.TextTable;
-import fourthwire.intake.reading.table.TimeColumns;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
@@ -102,9 +101,7 @@ final class ParsedRows {
     String first = row.text(columns.time().columns().get(0));
     return first.isEmpty()
         ? 2 * row.cells() < columns.headings().size()
-        : SUMMARY.matcher(first).matches()
-            || columns.headings().contains(first)
-            || row.cells() < 3;
+        : SUMMARY.matcher(first).matches() || columns.headings().contains(first) || row.cells() < 3;
   }
 
   private void unreadable(TextTable.Row row, int column) {
@@ -112,7 +109,8 @@ final class ParsedRows {
     if (unreadable.size() < TOLD) {
       unreadable.add(
           new Trouble(
-              row.number(), columns.heading(column) + ": \"" + row.text(columns.at(column)) + "\""));
+              row.number(),
+              columns.heading(column) + ": \"" + row.text(columns.at(column)) + "\""));
     }
   }
 

@@ -32,6 +32,8 @@ final class RowProgress {
     String rate =
         seconds > 0.2 ? String.format(Locale.ROOT, ", %,.0f a second", rows / seconds) : "";
     CaptureReading.go(
-        listener, SHARE * share, String.format(Locale.ROOT, "reading rows: %,d", rows) + rate + left);
+        listener,
+        SHARE * share,
+        String.format(Locale.ROOT, "reading rows: %,d", rows) + rate + left);
   }
 }

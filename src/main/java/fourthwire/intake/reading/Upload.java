@@ -60,7 +60,9 @@ final class Upload {
             file.name() + " names a column that no workbook has. Save its sheet as CSV.");
       }
     }
-    byte[] csv = FirstSheet.csv(file.name(), new Part(file.name(), file.length(), file::open).bytes(MOST_BYTES));
+    byte[] csv =
+        FirstSheet.csv(
+            file.name(), new Part(file.name(), file.length(), file::open).bytes(MOST_BYTES));
     return new Part(file.name(), csv.length, () -> new ByteArrayInputStream(csv));
   }
 

@@ -85,7 +85,9 @@ final class ConductorRelations implements DayCheck {
           "The column mapped as N is not to be trusted.",
           thirds != 0
               ? "The third harmonic of N is "
-                  + (thirds > 0 ? "above that of all lines together." : "far below that of the lines.")
+                  + (thirds > 0
+                      ? "above that of all lines together."
+                      : "far below that of the lines.")
               : String.format(
                   Locale.ROOT,
                   "N.rms_a can't be the sum of the line currents: above all three together in %d of"
@@ -104,8 +106,7 @@ final class ConductorRelations implements DayCheck {
       return 0;
     }
     double[][] l = lines.get();
-    double share =
-        Rows.median(day.rows(), k -> neutral.get()[k] / (l[0][k] + l[1][k] + l[2][k]));
+    double share = Rows.median(day.rows(), k -> neutral.get()[k] / (l[0][k] + l[1][k] + l[2][k]));
     return share > 1.08 ? 1 : share < 0.1 ? -1 : 0;
   }
 
@@ -190,8 +191,7 @@ final class ConductorRelations implements DayCheck {
 
   private void againstRms(
       LogDay day, String place, boolean current, double[] first, double[] sum, double[] rms) {
-    double ratio =
-        Rows.median(day.rows(), k -> rms[k] / Math.hypot(first[k], sum[k]));
+    double ratio = Rows.median(day.rows(), k -> rms[k] / Math.hypot(first[k], sum[k]));
     if (ratio < 0.93 || ratio > 1.15) {
       flag(
           day,

@@ -15,10 +15,10 @@ import java.util.Map;
 import java.util.Optional;
 
 /**
- * Values that stand still although they usually move. How often a quantity moves by more than its last
- * digits from row to row is
- * counted by the level it stands at, so that a small load printed in few digits may rest: a run is a
- * fault when chance would hold the value so long less than once in a hundred million.
+ * Values that stand still although they usually move. How often a quantity moves by more than its
+ * last digits from row to row is counted by the level it stands at, so that a small load printed in
+ * few digits may rest: a run is a fault when chance would hold the value so long less than once in
+ * a hundred million.
  */
 final class FlatLines implements DayCheck {
   private static final int FEWEST_ROWS = 8;
@@ -81,7 +81,7 @@ final class FlatLines implements DayCheck {
         c.runRows = 1;
         c.runFrom = at;
       }
-      if (c.before == c.before) {
+      if (!Double.isNaN(c.before)) {
         (moved > FEW_STEPS * c.leastStep ? c.moved : c.rested)[level(v)]++;
       }
       c.last = at;
@@ -107,7 +107,7 @@ final class FlatLines implements DayCheck {
     long to = c.last + intervalMillis;
     // A load that is off reads nothing for hours; an interruption is no fault of the meter.
     boolean lasting = c.runRows >= FEWEST_ROWS && to - c.runFrom >= SHORTEST_MILLIS;
-    if (lasting && c.before != 0 && c.before == c.before && c.runs.size() < MOST_RUNS) {
+    if (lasting && c.before != 0 && !Double.isNaN(c.before) && c.runs.size() < MOST_RUNS) {
       c.runs.add(new Run(c.before, c.runRows, c.runFrom, Math.max(c.runFrom, to)));
     }
   }

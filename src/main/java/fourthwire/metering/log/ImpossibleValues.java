@@ -15,8 +15,8 @@ import java.util.Optional;
 
 /**
  * Values that can't be, and blanks. What can be is bounded by physics where it is (no rms is below
- * zero, no power factor above one) and by the column itself where it is not: an overflow mark stands
- * far above all the rest, and alone. Thresholds are common practice, no source.
+ * zero, no power factor above one) and by the column itself where it is not: an overflow mark
+ * stands far above all the rest, and alone. Thresholds are common practice, no source.
  */
 final class ImpossibleValues implements DayCheck {
   private final double nominalHz;

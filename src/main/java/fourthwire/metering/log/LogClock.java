@@ -144,10 +144,7 @@ final class LogClock implements DayCheck {
               first,
               before,
               "Nothing is known of these times; they count in no statistic.",
-              gapCount
-                  + " gaps in all, "
-                  + words(missing)
-                  + " together; the longest are listed."));
+              gapCount + " gaps in all, " + words(missing) + " together; the longest are listed."));
     }
     if (run.same + run.different > 0) {
       all.add(
@@ -173,7 +170,8 @@ final class LogClock implements DayCheck {
         code,
         Optional.of(
             new Period(
-                Instant.ofEpochMilli(Math.min(from, to)), Instant.ofEpochMilli(Math.max(from, to)))),
+                Instant.ofEpochMilli(Math.min(from, to)),
+                Instant.ofEpochMilli(Math.max(from, to)))),
         effect,
         sentence);
   }

@@ -28,8 +28,7 @@ final class LogDays {
     this.values = new double[series.quantities().size()][256];
   }
 
-  static void forEach(
-      LogSeries series, ZoneId zone, long intervalMillis, Consumer<LogDay> taker) {
+  static void forEach(LogSeries series, ZoneId zone, long intervalMillis, Consumer<LogDay> taker) {
     LogDays days = new LogDays(series, zone, intervalMillis, taker);
     for (int k = 0; k < series.chunks(); k++) {
       days.take(k);
@@ -81,8 +80,7 @@ final class LogDays {
       day[q] = Arrays.copyOf(values[q], rows);
     }
     taker.accept(
-        new LogDay(
-            series.quantities(), Arrays.copyOf(start, rows), day, passed, intervalMillis));
+        new LogDay(series.quantities(), Arrays.copyOf(start, rows), day, passed, intervalMillis));
     passed += rows;
     rows = 0;
   }

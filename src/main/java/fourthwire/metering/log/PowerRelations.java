@@ -11,15 +11,13 @@ import java.util.Optional;
 
 /**
  * What powers, volts and amps tell about each other day by day: a clamp that points the wrong way,
- * lines under each other's names, a ratio or unit that is wrong. Each judges a day's median, so that
- * a strange row is no finding. Thresholds are common practice, no source; the relations are P =
- * V·I·power factor and S = V·I of a line (IEEE 1459-2010, 3.1.2).
+ * lines under each other's names, a ratio or unit that is wrong. Each judges a day's median, so
+ * that a strange row is no finding. Thresholds are common practice, no source; the relations are P
+ * = V·I·power factor and S = V·I of a line (IEEE 1459-2010, 3.1.2).
  */
 final class PowerRelations implements DayCheck {
   private static final int FEWEST_ROWS = 4;
-  private static final int[][] ORDERS = {
-    {1, 0, 2}, {0, 2, 1}, {2, 1, 0}, {1, 2, 0}, {2, 0, 1}
-  };
+  private static final int[][] ORDERS = {{1, 0, 2}, {0, 2, 1}, {2, 1, 0}, {1, 2, 0}, {2, 0, 1}};
 
   private final FlaggedDays flagged = new FlaggedDays();
 
@@ -47,7 +45,8 @@ final class PowerRelations implements DayCheck {
   }
 
   private static boolean mostlyNegative(LogDay day, String line) {
-    Optional<double[]> watts = day.find(line + ".active_w").or(() -> day.find(line + ".power_factor"));
+    Optional<double[]> watts =
+        day.find(line + ".active_w").or(() -> day.find(line + ".power_factor"));
     int negative = 0;
     int there = 0;
     for (double p : watts.orElse(new double[0])) {
@@ -96,8 +95,7 @@ final class PowerRelations implements DayCheck {
     }
     Optional<double[]> factor = day.find(line + ".power_factor");
     if (factor.isPresent()) {
-      double median =
-          median(a, k -> Math.abs(watts.get()[k] / (v[k] * a[k] * factor.get()[k])));
+      double median = median(a, k -> Math.abs(watts.get()[k] / (v[k] * a[k] * factor.get()[k])));
       judge(
           day,
           line,
@@ -144,8 +142,7 @@ final class PowerRelations implements DayCheck {
       if (total.isPresent() && lines.isPresent()) {
         double[][] p = lines.get();
         double median =
-            Rows.median(
-                day.rows(), k -> total.get()[k] / (p[0][k] + p[1][k] + p[2][k]));
+            Rows.median(day.rows(), k -> total.get()[k] / (p[0][k] + p[1][k] + p[2][k]));
         // The effective apparent power of three lines is no sum: it may be larger by a half.
         double most = measure.equals("active_w") ? 1.05 : 1.6;
         if (median < 0.95 || median > most) {
@@ -186,8 +183,10 @@ final class PowerRelations implements DayCheck {
     if (expected.length == 0) {
       return false;
     }
-    return swapped(day, "currents", order -> misfit(expected, volts.get(), amps.get(), order, false))
-        || swapped(day, "voltages", order -> misfit(expected, volts.get(), amps.get(), order, true));
+    return swapped(
+            day, "currents", order -> misfit(expected, volts.get(), amps.get(), order, false))
+        || swapped(
+            day, "voltages", order -> misfit(expected, volts.get(), amps.get(), order, true));
   }
 
   private static double[][] quotient(double[][] p, double[][] factor) {
@@ -267,7 +266,8 @@ final class PowerRelations implements DayCheck {
     for (int straight = 0; straight < 3; straight++) {
       int a = (straight + 1) % 3;
       int b = (straight + 2) % 3;
-      if (cosine[straight] > 0.7 && isCrossed(cosine[a], cosine[b], Math.acos(Math.min(1, cosine[straight])))) {
+      if (cosine[straight] > 0.7
+          && isCrossed(cosine[a], cosine[b], Math.acos(Math.min(1, cosine[straight])))) {
         String pair = LineDay.LINES[Math.min(a, b)] + " and " + LineDay.LINES[Math.max(a, b)];
         flagged.add(
             day,
@@ -277,8 +277,8 @@ final class PowerRelations implements DayCheck {
                 "Powers and power factors of these lines are wrong.",
                 String.format(
                     Locale.ROOT,
-                    "Active powers of %s are %.2f and %.2f of their volts times amps, of %s %.2f: the"
-                        + " clamps of %s stand on each other's conductors.",
+                    "Active powers of %s are %.2f and %.2f of their volts times amps, of %s %.2f:"
+                        + " the clamps of %s stand on each other's conductors.",
                     pair,
                     cosine[Math.min(a, b)],
                     cosine[Math.max(a, b)],

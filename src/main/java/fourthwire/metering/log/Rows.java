@@ -12,7 +12,7 @@ final class Rows {
     double[] there = new double[x.length];
     int n = 0;
     for (double v : x) {
-      if (v == v) {
+      if (!Double.isNaN(v)) {
         there[n++] = v;
       }
     }

@@ -6,10 +6,10 @@ import java.util.Arrays;
 /**
  * Codes a column of values in few bytes, without loss.
  *
- * <p>Instruments print few decimals: values that all are whole multiples of a power of ten are coded
- * as those whole numbers, 128 to a block, each block by its smallest number and as many bits as its
- * range needs, or by the steps between its numbers where these are smaller. Any other column is kept
- * as it is.
+ * <p>Instruments print few decimals: values that all are whole multiples of a power of ten are
+ * coded as those whole numbers, 128 to a block, each block by its smallest number and as many bits
+ * as its range needs, or by the steps between its numbers where these are smaller. Any other column
+ * is kept as it is.
  */
 public final class ColumnCodec {
   private static final int BLOCK = 128;

@@ -70,7 +70,7 @@ final class ColumnStatistics {
     int row = 0;
     for (int k = 0; k < series.chunks(); k++) {
       for (double v : series.values(k, quantity)) {
-        if (v == v) {
+        if (!Double.isNaN(v)) {
           there[(int) sums.count] = v;
           sums.take(v, rows.hour()[row]);
           end[rows.week()[row] + 1]++;
@@ -96,7 +96,7 @@ final class ColumnStatistics {
     int row = 0;
     for (int k = 0; k < series.chunks(); k++) {
       for (double v : series.values(k, quantity)) {
-        if (v == v) {
+        if (!Double.isNaN(v)) {
           byWeek[next[rows.week()[row]]++] = v;
         }
         row++;
@@ -122,7 +122,7 @@ final class ColumnStatistics {
       long[] start = series.startMillis(k);
       for (int row = 0; row < values.length; row++) {
         double v = values[row];
-        if (v != v) {
+        if (Double.isNaN(v)) {
           continue;
         }
         sums.take(v, clock.hourOfWeek(start[row]));

@@ -6,8 +6,8 @@ import java.util.concurrent.CompletableFuture;
 import java.util.concurrent.Executor;
 
 /**
- * The rows of a log as read, in chunks, each column coded: to be gone through as often as needed, in
- * memory that does not grow with the log. Chunks are held decoded as long as they are few.
+ * The rows of a log as read, in chunks, each column coded: to be gone through as often as needed,
+ * in memory that does not grow with the log. Chunks are held decoded as long as they are few.
  */
 public final class LogSeries implements AutoCloseable {
   private final List<String> quantities;

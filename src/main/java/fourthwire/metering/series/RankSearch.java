@@ -1,8 +1,8 @@
 package fourthwire.metering.series;
 
 /**
- * Percentiles of a column of any length, exact, in four passes over its chunks: each pass counts the
- * values by sixteen more bits of their order until one value is left for each rank.
+ * Percentiles of a column of any length, exact, in four passes over its chunks: each pass counts
+ * the values by sixteen more bits of their order until one value is left for each rank.
  */
 final class RankSearch {
   private static final int STEP = 16;
@@ -20,7 +20,7 @@ final class RankSearch {
     long count = 0;
     for (int k = 0; k < series.chunks(); k++) {
       for (double v : series.values(k, quantity)) {
-        count += v == v ? 1 : 0;
+        count += Double.isNaN(v) ? 0 : 1;
       }
     }
     double[] found = new double[percent.length];
@@ -57,7 +57,7 @@ final class RankSearch {
     long[] counts = new long[1 << STEP];
     for (int k = 0; k < series.chunks(); k++) {
       for (double v : series.values(k, quantity)) {
-        if (v == v) {
+        if (!Double.isNaN(v)) {
           long key = key(v);
           if (shift == 64 - STEP || key >>> shift + STEP == prefix) {
             counts[(int) (key >>> shift) & (1 << STEP) - 1]++;

@@ -7,8 +7,8 @@ final class Selection {
   private Selection() {}
 
   /**
-   * Percentiles, linear between the ordered values: the value at position (n - 1)·p/100 counted from
-   * 0 (Hyndman and Fan, 1996, definition 7). Reorders the values.
+   * Percentiles, linear between the ordered values: the value at position (n - 1)·p/100 counted
+   * from 0 (Hyndman and Fan, 1996, definition 7). Reorders the values.
    *
    * @param from first of the values
    * @param to the position after the last; above {@code from}

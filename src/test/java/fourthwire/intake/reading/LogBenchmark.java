@@ -20,17 +20,18 @@ import java.util.concurrent.Executors;
  *
  * <pre>
  * java -Xmx1g -cp target/classes:target/test-classes:$(libraries) \
- *   fourthwire.intake.reading.LogBenchmark log.csv out [repetitions]
+ *   fourthwire.intake.reading.LogBenchmark log.csv out [repetitions [gigabytes]]
  * </pre>
  *
- * Writes {@code out_columns.csv}, {@code out_weekly.csv} and {@code out_hourweek.csv}.
+ * With a number of gigabytes the first rows of the log are read again and again until there are as
+ * many bytes. Writes {@code out_columns.csv}, {@code out_weekly.csv} and {@code out_hourweek.csv}.
  */
 final class LogBenchmark {
-  private final Path file;
+  private final RawFile raw;
   private final ReadingSetting setting = Files.setting(50);
 
-  private LogBenchmark(Path file) {
-    this.file = file;
+  private LogBenchmark(RawFile raw) {
+    this.raw = raw;
   }
 
   /** A file on disk; its digest is not asked for. */
@@ -57,7 +58,13 @@ final class LogBenchmark {
   }
 
   public static void main(String[] args) throws IOException {
-    LogBenchmark benchmark = new LogBenchmark(Path.of(args[0]));
+    Path file = Path.of(args[0]);
+    boolean endless = args.length > 3;
+    LogBenchmark benchmark =
+        new LogBenchmark(
+            endless
+                ? new EndlessLog(file, (long) (1e9 * Double.parseDouble(args[3])))
+                : new OnDisk(file));
     int repetitions = args.length > 2 ? Integer.parseInt(args[2]) : 1;
     for (int k = 0; k < repetitions; k++) {
       benchmark.run(args[1]);
@@ -66,7 +73,6 @@ final class LogBenchmark {
 
   private void run(String out) throws IOException {
     long t0 = now();
-    RawFile raw = new OnDisk(file);
     ReadingPlan plan = new FormatReader().plan(List.of(raw), setting);
     long t1 = now();
     ExecutorService workers = Executors.newFixedThreadPool(2);
@@ -77,10 +83,19 @@ final class LogBenchmark {
       write(out, series, statistics);
       long coded = coded(series);
       System.out.printf(
-          "cpu %.2f ", ((com.sun.management.OperatingSystemMXBean) java.lang.management.ManagementFactory.getOperatingSystemMXBean()).getProcessCpuTime() / 1e9);
+          "cpu %.2f ",
+          ((com.sun.management.OperatingSystemMXBean)
+                      java.lang.management.ManagementFactory.getOperatingSystemMXBean())
+                  .getProcessCpuTime()
+              / 1e9);
       System.out.printf(
           "rows %d plan %.2f read %.2f compute %.2f write %.2f; coded %.1f MB%n",
-          series.rows(), (t1 - t0) / 1e9, (t2 - t1) / 1e9, (t3 - t2) / 1e9, (now() - t3) / 1e9, coded / 1e6);
+          series.rows(),
+          (t1 - t0) / 1e9,
+          (t2 - t1) / 1e9,
+          (t3 - t2) / 1e9,
+          (now() - t3) / 1e9,
+          coded / 1e6);
     } finally {
       workers.shutdown();
     }
@@ -88,14 +103,18 @@ final class LogBenchmark {
 
   /** Processor time of all threads, so that other work on the machine does not count. */
   private static long now() {
-    return ((com.sun.management.OperatingSystemMXBean) java.lang.management.ManagementFactory.getOperatingSystemMXBean()).getProcessCpuTime();
+    return ((com.sun.management.OperatingSystemMXBean)
+            java.lang.management.ManagementFactory.getOperatingSystemMXBean())
+        .getProcessCpuTime();
   }
 
   private static LogSeries read(RawFile raw, ReadingMapping mapping, ExecutorService workers) {
     var table = fourthwire.intake.reading.table.TextTable.of(() -> open(raw));
     var time = fourthwire.intake.reading.table.TimeColumns.named(table, mapping.time().columns());
     LogColumns columns = new LogColumns(table, time, mapping);
-    LogSeries series = new LogSeries(columns.quantities(), new SpilledParts(), Runtime.getRuntime().maxMemory() / 4 / 8);
+    LogSeries series =
+        new LogSeries(
+            columns.quantities(), new SpilledParts(), Runtime.getRuntime().maxMemory() / 4 / 8);
     new LogRows(table, columns, mapping, series, workers)
         .read(new RowProgress((share, message) -> true, raw.length(), System::nanoTime));
     return series;
@@ -126,8 +145,15 @@ final class LogBenchmark {
       for (int q = 0; q < series.quantities().size(); q++) {
         QuantityStatistics s = all.quantities().get(q);
         String name = series.quantities().get(q);
-        columns.println(name + "," + s.count() + "," + s.min() + "," + s.mean() + "," + s.max() + "," + s.p95() + "," + s.p99());
-        weekly.println(name + "," + java.util.Arrays.toString(s.weekP95()) + "," + java.util.Arrays.toString(s.weekP99()));
+        columns.println(
+            name + "," + s.count() + "," + s.min() + "," + s.mean() + "," + s.max() + "," + s.p95()
+                + "," + s.p99());
+        weekly.println(
+            name
+                + ","
+                + java.util.Arrays.toString(s.weekP95())
+                + ","
+                + java.util.Arrays.toString(s.weekP99()));
         hours.println(name + "," + java.util.Arrays.toString(s.hourOfWeekMean()));
       }
     }

@@ -56,12 +56,17 @@ class PlantedFaultsTest {
         }
         put("N.current_h3_a", row, 0.93 * thirds, 3);
         put("N.rms_a", row, Math.hypot(0.93 * thirds, 0.08 * lines), decimals);
-        put("total.active_w", row, at("L1.active_w", row) + at("L2.active_w", row) + at("L3.active_w", row), 0);
+        put(
+            "total.active_w",
+            row,
+            at("L1.active_w", row) + at("L2.active_w", row) + at("L3.active_w", row),
+            0);
         put("frequency_hz", row, 50 + 0.02 * random.nextGaussian(), 3);
       }
     }
 
-    private void line(Random random, String line, int row, double first, double share, int decimals) {
+    private void line(
+        Random random, String line, int row, double first, double share, int decimals) {
       double third = first * share * (1 + 0.05 * random.nextGaussian());
       double fifth = first * share * 0.5 * (1 + 0.05 * random.nextGaussian());
       double seventh = first * share * 0.3 * (1 + 0.05 * random.nextGaussian());
@@ -160,42 +165,127 @@ class PlantedFaultsTest {
     int e = 14 * PER_DAY;
     return Stream.of(
         fault("gap", QualityFinding.GAP, d, d + 50, (b, p) -> b.remove(p[0], p[1])),
-        fault("repeated rows", QualityFinding.REPEATED_ROWS, d, d + 3, (b, p) -> {
-          b.repeat(p[0]);
-          b.repeat(p[0] + 2);
-        }),
-        fault("clock set back", QualityFinding.CLOCK_JUMP, d, d + 6, (b, p) -> b.times.replaceAll(t -> t >= START + STEP * p[1] ? t - 6 * STEP : t)),
-        fault("clock off the grid", QualityFinding.CLOCK_JUMP, d, d + 1, (b, p) -> b.times.replaceAll(t -> t >= START + STEP * p[1] ? t + 217_000 : t)),
-        fault("one quantity stands still", QualityFinding.FLAT_LINE, d + 60, d + 96, (b, p) -> java.util.Arrays.fill(b.columns.get("L2.rms_v"), p[0], p[1], 230.4)),
-        fault("the meter stands still", QualityFinding.FLAT_LINE, d + 60, d + 84, (b, p) -> b.columns.values().forEach(x -> java.util.Arrays.fill(x, p[0], p[1], x[p[0]]))),
-        fault("overflow marks", QualityFinding.IMPOSSIBLE_VALUE, d, d + 2, (b, p) -> b.columns.get("L1.rms_a")[p[0]] = 65535),
-        fault("power factor above one", QualityFinding.IMPOSSIBLE_VALUE, d, d + 2, (b, p) -> b.columns.get("L3.power_factor")[p[0]] = 1.31),
-        fault("negative volts", QualityFinding.IMPOSSIBLE_VALUE, d, d + 2, (b, p) -> b.columns.get("L3.rms_v")[p[0]] = -1),
-        fault("currents of two lines swapped", QualityFinding.SWAPPED_LINES, d, e, (b, p) -> b.swap("L1.rms_a", "L2.rms_a", p[0], p[1])),
-        fault("voltages of two lines swapped", QualityFinding.SWAPPED_LINES, d, e, (b, p) -> b.swap("L1.rms_v", "L2.rms_v", p[0], p[1])),
-        fault("clamps crossed", QualityFinding.SWAPPED_LINES, d, e, (b, p) -> {
-          for (int row = p[0]; row < p[1]; row++) {
-            double phi = Math.acos(0.92);
-            b.columns.get("L1.active_w")[row] = b.at("L1.rms_v", row) * b.at("L1.rms_a", row) * Math.cos(2 * Math.PI / 3 + phi);
-            b.columns.get("L2.active_w")[row] = b.at("L2.rms_v", row) * b.at("L2.rms_a", row) * Math.cos(2 * Math.PI / 3 - phi);
-            b.columns.get("L1.power_factor")[row] = Math.cos(2 * Math.PI / 3 + phi);
-            b.columns.get("L2.power_factor")[row] = Math.cos(2 * Math.PI / 3 - phi);
-            b.columns.get("L3.active_w")[row] = b.at("L3.rms_v", row) * b.at("L3.rms_a", row) * 0.92;
-          }
-        }),
-        fault("a clamp turned", QualityFinding.REVERSED_CLAMP, d, e, (b, p) -> {
-          b.scale("L2.active_w", p[0], p[1], -1);
-          b.scale("L2.power_factor", p[0], p[1], -1);
-        }),
-        fault("amps by a wrong ratio", QualityFinding.WRONG_RATIO, d, e, (b, p) -> b.scale("L3.rms_a", p[0], p[1], 0.5)),
-        fault("watts that are kilowatts", QualityFinding.WRONG_RATIO, d, e, (b, p) -> b.scale("L1.active_w", p[0], p[1], 0.001)),
-        fault("neutral above all lines", QualityFinding.NEUTRAL_NOT_SUM, d, e, (b, p) -> b.scale("N.rms_a", p[0], p[1], 15)),
-        fault("a distortion averaged otherwise", QualityFinding.DISTORTION_MISREAD, d, e, (b, p) -> b.scale("L1.current_thd_percent", p[0], p[1], 0.6)));
+        fault(
+            "repeated rows",
+            QualityFinding.REPEATED_ROWS,
+            d,
+            d + 3,
+            (b, p) -> {
+              b.repeat(p[0]);
+              b.repeat(p[0] + 2);
+            }),
+        fault(
+            "clock set back",
+            QualityFinding.CLOCK_JUMP,
+            d,
+            d + 6,
+            (b, p) -> b.times.replaceAll(t -> t >= START + STEP * p[1] ? t - 6 * STEP : t)),
+        fault(
+            "clock off the grid",
+            QualityFinding.CLOCK_JUMP,
+            d,
+            d + 1,
+            (b, p) -> b.times.replaceAll(t -> t >= START + STEP * p[1] ? t + 217_000 : t)),
+        fault(
+            "one quantity stands still",
+            QualityFinding.FLAT_LINE,
+            d + 60,
+            d + 96,
+            (b, p) -> java.util.Arrays.fill(b.columns.get("L2.rms_v"), p[0], p[1], 230.4)),
+        fault(
+            "the meter stands still",
+            QualityFinding.FLAT_LINE,
+            d + 60,
+            d + 84,
+            (b, p) ->
+                b.columns.values().forEach(x -> java.util.Arrays.fill(x, p[0], p[1], x[p[0]]))),
+        fault(
+            "overflow marks",
+            QualityFinding.IMPOSSIBLE_VALUE,
+            d,
+            d + 2,
+            (b, p) -> b.columns.get("L1.rms_a")[p[0]] = 65535),
+        fault(
+            "power factor above one",
+            QualityFinding.IMPOSSIBLE_VALUE,
+            d,
+            d + 2,
+            (b, p) -> b.columns.get("L3.power_factor")[p[0]] = 1.31),
+        fault(
+            "negative volts",
+            QualityFinding.IMPOSSIBLE_VALUE,
+            d,
+            d + 2,
+            (b, p) -> b.columns.get("L3.rms_v")[p[0]] = -1),
+        fault(
+            "currents of two lines swapped",
+            QualityFinding.SWAPPED_LINES,
+            d,
+            e,
+            (b, p) -> b.swap("L1.rms_a", "L2.rms_a", p[0], p[1])),
+        fault(
+            "voltages of two lines swapped",
+            QualityFinding.SWAPPED_LINES,
+            d,
+            e,
+            (b, p) -> b.swap("L1.rms_v", "L2.rms_v", p[0], p[1])),
+        fault(
+            "clamps crossed",
+            QualityFinding.SWAPPED_LINES,
+            d,
+            e,
+            (b, p) -> {
+              for (int row = p[0]; row < p[1]; row++) {
+                double phi = Math.acos(0.92);
+                b.columns.get("L1.active_w")[row] =
+                    b.at("L1.rms_v", row) * b.at("L1.rms_a", row) * Math.cos(2 * Math.PI / 3 + phi);
+                b.columns.get("L2.active_w")[row] =
+                    b.at("L2.rms_v", row) * b.at("L2.rms_a", row) * Math.cos(2 * Math.PI / 3 - phi);
+                b.columns.get("L1.power_factor")[row] = Math.cos(2 * Math.PI / 3 + phi);
+                b.columns.get("L2.power_factor")[row] = Math.cos(2 * Math.PI / 3 - phi);
+                b.columns.get("L3.active_w")[row] =
+                    b.at("L3.rms_v", row) * b.at("L3.rms_a", row) * 0.92;
+              }
+            }),
+        fault(
+            "a clamp turned",
+            QualityFinding.REVERSED_CLAMP,
+            d,
+            e,
+            (b, p) -> {
+              b.scale("L2.active_w", p[0], p[1], -1);
+              b.scale("L2.power_factor", p[0], p[1], -1);
+            }),
+        fault(
+            "amps by a wrong ratio",
+            QualityFinding.WRONG_RATIO,
+            d,
+            e,
+            (b, p) -> b.scale("L3.rms_a", p[0], p[1], 0.5)),
+        fault(
+            "watts that are kilowatts",
+            QualityFinding.WRONG_RATIO,
+            d,
+            e,
+            (b, p) -> b.scale("L1.active_w", p[0], p[1], 0.001)),
+        fault(
+            "neutral above all lines",
+            QualityFinding.NEUTRAL_NOT_SUM,
+            d,
+            e,
+            (b, p) -> b.scale("N.rms_a", p[0], p[1], 15)),
+        fault(
+            "a distortion averaged otherwise",
+            QualityFinding.DISTORTION_MISREAD,
+            d,
+            e,
+            (b, p) -> b.scale("L1.current_thd_percent", p[0], p[1], 0.6)));
   }
 
   @ParameterizedTest(name = "{0}")
   @MethodSource("faults")
-  void isFoundWhereItIs(String name, String code, int from, int to, BiConsumer<Board, int[]> plant) {
+  void isFoundWhereItIs(
+      String name, String code, int from, int to, BiConsumer<Board, int[]> plant) {
     for (long seed = 21; seed < 26; seed++) {
       Board board = new Board(seed, 2);
       plant.accept(board, new int[] {from, to});

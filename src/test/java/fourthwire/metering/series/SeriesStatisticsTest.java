@@ -40,8 +40,7 @@ class SeriesStatisticsTest {
   void percentilesAreLinear(int count, double p95, double p99, double mean) {
     double[] x = new double[count];
     Arrays.setAll(x, k -> (k * 7919 % 1009) / 3.0);
-    QuantityStatistics s =
-        SeriesStatistics.of(series(x, 1 << 20), AMSTERDAM).quantities().get(0);
+    QuantityStatistics s = SeriesStatistics.of(series(x, 1 << 20), AMSTERDAM).quantities().get(0);
     assertThat(s.p95()).isEqualTo(p95, within(1e-9));
     assertThat(s.p99()).isEqualTo(p99, within(1e-9));
     assertThat(s.mean()).isEqualTo(mean, within(1e-9));
@@ -55,7 +54,8 @@ class SeriesStatisticsTest {
     assertThat(s.count()).isEqualTo(4);
     assertThat(s.p95()).isEqualTo(3.85, within(1e-12));
     double[] none = {Double.NaN};
-    assertThat(SeriesStatistics.of(series(none, 9), AMSTERDAM).quantities().get(0).count()).isZero();
+    assertThat(SeriesStatistics.of(series(none, 9), AMSTERDAM).quantities().get(0).count())
+        .isZero();
   }
 
   /** Each week and hour as sorting tells; in one array and in passes alike. */
@@ -65,7 +65,8 @@ class SeriesStatisticsTest {
     Random random = new Random(seed);
     double[] x = new double[9000];
     Arrays.setAll(
-        x, k -> random.nextInt(50) == 0 ? Double.NaN : Math.round(random.nextGaussian() * 1e4) / 1e3);
+        x,
+        k -> random.nextInt(50) == 0 ? Double.NaN : Math.round(random.nextGaussian() * 1e4) / 1e3);
     LogSeries series = series(x, seed == 1 ? 0 : 1 << 20);
     QuantityStatistics s = SeriesStatistics.of(series, AMSTERDAM).quantities().get(0);
     QuantityStatistics passes =
@@ -78,7 +79,9 @@ class SeriesStatisticsTest {
               .toArray();
       double at = (rows.length - 1) * 0.95;
       double expected = rows[(int) at] + (at - (int) at) * (rows[(int) at + 1] - rows[(int) at]);
-      assertThat(s.weekP95()[week]).as("seed %d week %d", seed, week).isEqualTo(expected, within(1e-12));
+      assertThat(s.weekP95()[week])
+          .as("seed %d week %d", seed, week)
+          .isEqualTo(expected, within(1e-12));
       assertThat(s.weekCount()[week]).isEqualTo(rows.length);
     }
     assertThat(passes.weekP99()).containsExactly(s.weekP99());
@@ -97,7 +100,9 @@ class SeriesStatisticsTest {
       double v = Math.round(random.nextGaussian() * 1e6) / Math.pow(10, decimals);
       x[k] = random.nextInt(40) == 0 ? Double.NaN : seed == 9 ? v * Math.PI : v;
     }
-    assertThat(ColumnCodec.decode(ColumnCodec.encode(x), x.length)).as("seed %d", seed).containsExactly(x);
+    assertThat(ColumnCodec.decode(ColumnCodec.encode(x), x.length))
+        .as("seed %d", seed)
+        .containsExactly(x);
     long[] times = new long[x.length];
     Arrays.setAll(times, k -> 1_700_000_000_000L + 60_000L * k + (k > 500 ? 3_600_000 : 0));
     byte[] coded = ColumnCodec.encode(times);

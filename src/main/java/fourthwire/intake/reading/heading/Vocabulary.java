@@ -61,7 +61,8 @@ final class Vocabulary {
     put(Sense.DISTORTION, "thd thdf distortion klirrfaktor");
     put(
         Sense.HARMONIC,
-        "harmonic harmonics harm h order oberschwingung oberschwingungen harmonische harmonique armonico armonica ordnung ord hrm");
+        "harmonic harmonics harm h order oberschwingung oberschwingungen harmonische harmonique"
+            + " armonico armonica ordnung ord hrm");
     put(Sense.INDIVIDUAL_DISTORTION, "hd ihd");
     put(Sense.FUNDAMENTAL, "fundamental fund grundschwingung fondamental fond");
     put(Sense.ANGLE, "angle ang winkel angulo phaseangle");
@@ -72,7 +73,8 @@ final class Vocabulary {
         "export exported exp received generated rev reverse abgabe einspeisung out");
     put(
         Sense.TOTAL,
-        "total tot sum sys system summe gesamt totaal totale somme suma tt 3ph 3p 3phase threephase all σ σp");
+        "total tot sum sys system summe gesamt totaal totale somme suma tt 3ph 3p 3phase threephase"
+            + " all σ σp");
     put(Sense.NEUTRAL, "neutral neutre neutro neut nul neutralleiter nulleider");
     put(
         Sense.LINE,
@@ -86,18 +88,20 @@ final class Vocabulary {
     put(Sense.PEAK, "peak pk spitze crest");
     put(
         Sense.UNBALANCE,
-        "unbalance imbalance unbal unb asymmetry unsymmetrie desequilibre onbalans squilibrio vunb iunb");
+        "unbalance imbalance unbal unb asymmetry unsymmetrie desequilibre onbalans squilibrio vunb"
+            + " iunb");
     put(
         Sense.OTHER,
-        "flicker pst plt ifl cf kf kfactor"
-            + " k tdd temp temperature battery status event events flag flags dip swell sag record rec count"
-            + " index sequence seq positive negative zero interharmonic interharmonics ripple std stdev stddev deviation"
-            + " sigma dc thdr tif distortionpower nonactive signalling rvc quality samples sample no nr number id"
-            + " h0 rotation humidity speed alarm");
+        "flicker pst plt ifl cf kf kfactor k tdd temp temperature battery status event events flag"
+            + " flags dip swell sag record rec count index sequence seq positive negative zero"
+            + " interharmonic interharmonics ripple std stdev stddev deviation sigma dc thdr tif"
+            + " distortionpower nonactive signalling rvc quality samples sample no nr number id h0"
+            + " rotation humidity speed alarm");
     put(
         Sense.NOTHING,
         "rms trms true-rms eff efficace effektiv value values wert valeur measured to the of import"
-            + " demand imported imp delivered del consumption consumed bezug interval period conn node");
+            + " demand imported imp delivered del consumption consumed bezug interval period conn"
+            + " node");
   }
 
   private static final Set<String> CONNECTORS = Set.of("in", "en", "as", "and", "d", "de", "der");

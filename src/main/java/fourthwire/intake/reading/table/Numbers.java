@@ -75,10 +75,6 @@ final class Numbers {
           "<null>",
           "undef",
           "undefined",
-          
-          
-          
-          
           "not available",
           "not measured");
 
