@@ -27,7 +27,9 @@ final class PqdifFormat implements Format {
     this.file = file;
     this.log =
         IntervalTable.of(file)
-            .map(csv -> TextFormat.of(new Part(name, csv.length, () -> new ByteArrayInputStream(csv))));
+            .map(
+                csv ->
+                    TextFormat.of(new Part(name, csv.length, () -> new ByteArrayInputStream(csv))));
     this.capture = PqdifCapture.of(file).map(c -> c);
   }
 
