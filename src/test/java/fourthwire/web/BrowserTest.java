@@ -5,15 +5,22 @@ import static org.junit.jupiter.api.Assumptions.assumeTrue;
 
 import com.microsoft.playwright.Page;
 import com.microsoft.playwright.options.ColorScheme;
+import fourthwire.metering.ReadingMapping;
+import fourthwire.metering.ReadingRepository;
+import fourthwire.testsupport.SmallCapture;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.function.Predicate;
 import org.junit.jupiter.api.AfterAll;
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Tag;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
+import org.springframework.beans.factory.annotation.Autowired;
 import org.springframework.boot.test.web.server.LocalServerPort;
 
 /**
@@ -28,7 +35,9 @@ class BrowserTest extends PagesTest {
   private static final Predicate<String> FAINT = stop -> stop.endsWith(" without outline");
 
   @LocalServerPort int port;
+  @Autowired ReadingRepository readings;
   private Browser browser;
+  private long reading;
 
   @BeforeAll
   void open() {
@@ -36,6 +45,20 @@ class BrowserTest extends PagesTest {
         Browser.installed().isPresent(),
         "no Chromium is installed; set FOURTHWIRE_BROWSER to its path");
     browser = new Browser();
+    reading =
+        readings.add(
+            new ReadingRepository.Addition(
+                site,
+                new ReadingRepository.MeterRef("M9", "MSB"),
+                List.of(),
+                "made",
+                new ReadingMapping(
+                    Optional.empty(),
+                    ReadingMapping.Time.FROM_FILE,
+                    OptionalDouble.empty(),
+                    Map.of()),
+                Optional.empty(),
+                SmallCapture.reading()));
   }
 
   @AfterAll
@@ -53,10 +76,12 @@ class BrowserTest extends PagesTest {
     "audits, /sites/{site}/audits",
     "delete, /sites/{site}/delete",
     "help, /help",
-    "loads, /loads?load=desktop%20computer%2C%20no%20PFC&units=20&r_ohm=0.4&x_ohm=0.25&background=flat",
+    "loads,"
+        + " /loads?load=desktop%20computer%2C%20no%20PFC&units=20&r_ohm=0.4&x_ohm=0.25&background=flat",
     "loads-three, /loads?load=six-pulse&watts=20000&fault_mva=2",
     "loads-wrong, /loads?load=capacitor-input&watts=many&units=0&capacitance_uf_per_w=0",
     "readings, /sites/{site}/readings",
+    "capture, /readings/{reading}",
     "missing, /sites/999",
     "panel, /audits/{audit}/node?name=LP-2%20East%20offices",
     "transformer, /audits/{audit}/node?name=T1",
@@ -131,7 +156,9 @@ class BrowserTest extends PagesTest {
   private String address(String path) {
     return "http://localhost:"
         + port
-        + path.replace("{audit}", "" + audit).replace("{site}", "" + site);
+        + path.replace("{audit}", "" + audit)
+            .replace("{site}", "" + site)
+            .replace("{reading}", "" + reading);
   }
 
   private void check(String name, String path, int width, ColorScheme scheme) {

@@ -55,10 +55,12 @@ final class EventFinder {
     if (track.isEmpty()) {
       return none("No events were looked for: the sampling is uneven or has gaps.");
     }
+    List<HalfCycles> found =
+        voltages.parallelStream().map(c -> HalfCycles.of(capture.of(c), track.get())).toList();
     Map<String, HalfCycles> halves = new LinkedHashMap<>();
-    for (Capture.Channel c : voltages) {
-      String place = c.quantity().substring(0, c.quantity().length() - 2);
-      halves.put(place, HalfCycles.of(capture.of(c), track.get()));
+    for (int c = 0; c < found.size(); c++) {
+      String quantity = voltages.get(c).quantity();
+      halves.put(quantity.substring(0, quantity.length() - 2), found.get(c));
     }
     boolean pairs = voltages.get(0).quantity().contains("-");
     double rate = capture.time().rateHz().orElseThrow();

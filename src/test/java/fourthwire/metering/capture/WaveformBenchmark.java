@@ -1,5 +1,6 @@
 package fourthwire.metering.capture;
 
+import com.sun.management.OperatingSystemMXBean;
 import fourthwire.metering.CaptureResult;
 import fourthwire.metering.capture.wave.Samples;
 import fourthwire.metering.capture.wave.TimeAxis;
@@ -8,6 +9,7 @@ import fourthwire.quantity.Figure;
 import fourthwire.quantity.PowerFigures;
 import java.io.IOException;
 import java.io.InputStream;
+import java.lang.management.ManagementFactory;
 import java.nio.ByteBuffer;
 import java.nio.ByteOrder;
 import java.nio.charset.StandardCharsets;
@@ -58,21 +60,26 @@ public final class WaveformBenchmark {
       analysed(capture);
     }
     double[] seconds = new double[measured];
+    OperatingSystemMXBean system =
+        (OperatingSystemMXBean) ManagementFactory.getOperatingSystemMXBean();
+    long busy = system.getProcessCpuTime();
     for (int k = 0; k < measured; k++) {
       long from = System.nanoTime();
       analysed(capture);
       seconds[k] = (System.nanoTime() - from) * 1e-9;
     }
+    double cpu = (system.getProcessCpuTime() - busy) * 1e-9 / Math.max(1, measured);
     if (measured > 0) {
       Arrays.sort(seconds);
       Path truth = Path.of(file.toString().replace(".npz", ".truth.json"));
       System.out.printf(
           Locale.ROOT,
-          "%s wall %.4f s (median of %d, best %.4f)  %.2f Msamples/s %s%n",
+          "%s wall %.4f s (median of %d, best %.4f) cpu %.4f s  %.2f Msamples/s %s%n",
           file.getFileName(),
           seconds[measured / 2],
           measured,
           seconds[0],
+          cpu,
           x.length / seconds[measured / 2] * 1e-6,
           errors(analysed(capture), new JsonMapper().readTree(Files.readString(truth))));
     }

@@ -75,8 +75,9 @@ public final class Samples {
     float[] sum = new float[of.get(0).count()];
     for (int c = 0; c < factors.length; c++) {
       float[] x = of.get(c).values;
+      float factor = (float) factors[c];
       for (int k = 0; k < sum.length; k++) {
-        sum[k] += (float) (factors[c] * x[k]);
+        sum[k] += factor * x[k];
       }
     }
     return new Samples(sum);

@@ -40,14 +40,15 @@ final class Band {
     for (int k = 0; k < fitted; k++) {
       times[k] = k;
     }
-    double[][] values = new double[channels.size()][];
-    for (int c = 0; c < values.length; c++) {
-      double[] x = new double[fitted];
-      channels.get(c).copy(fitFrom, fitted, x, 0);
-      HarmonicFit fit = HarmonicFit.of(times, x, fitted, 1 / samplesPerCycle, orders);
-      values[c] = values(fit, valuesFrom, samplesPerCycle);
-    }
-    return values;
+    return channels.parallelStream()
+        .map(
+            channel -> {
+              double[] x = new double[fitted];
+              channel.copy(fitFrom, fitted, x, 0);
+              HarmonicFit fit = HarmonicFit.of(times, x, fitted, 1 / samplesPerCycle, orders);
+              return values(fit, valuesFrom, samplesPerCycle);
+            })
+        .toArray(double[][]::new);
   }
 
   private double[] values(HarmonicFit fit, int from, double samplesPerCycle) {
