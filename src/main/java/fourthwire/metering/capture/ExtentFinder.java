@@ -21,6 +21,7 @@ final class ExtentFinder {
 
   private static final int FOLLOWED_FROM_CYCLES = 30;
   private static final double ROUGH_S = 0.4;
+  private static final int PLACES = 5;
   private static final double LEAST_SHARE = 0.1;
 
   private final Capture capture;
@@ -92,21 +93,35 @@ final class ExtentFinder {
     return extent(hertz, Extent.Certainty.FOUND, Optional.of(track));
   }
 
-  /** In the middle of the record: it may begin before the supply does. */
+  /** Where the record is strongest: part of it may be without a supply. */
   private double rough(List<Samples> channels) {
     int n = (int) Math.min(time.count(), time.rateHz().orElseThrow() * ROUGH_S);
-    int from = (time.count() - n) / 2;
-    double[] t = time.first(n);
-    return RoughFrequency.hertz(
-        t,
-        channels.stream()
-            .map(
-                x -> {
-                  double[] some = new double[n];
-                  x.copy(from, n, some, 0);
-                  return some;
-                })
-            .toList());
+    List<double[]> strongest = List.of();
+    double most = -1;
+    for (int place = 0; place < PLACES; place++) {
+      int from = (int) ((long) (time.count() - n) * place / (PLACES - 1));
+      List<double[]> some = channels.stream().map(x -> part(x, from, n)).toList();
+      double energy = some.stream().mapToDouble(ExtentFinder::energy).sum();
+      if (energy > 1.1 * most) {
+        most = energy;
+        strongest = some;
+      }
+    }
+    return RoughFrequency.hertz(time.first(n), strongest);
+  }
+
+  private static double[] part(Samples x, int from, int count) {
+    double[] part = new double[count];
+    x.copy(from, count, part, 0);
+    return part;
+  }
+
+  private static double energy(double[] x) {
+    double energy = 0;
+    for (double value : x) {
+      energy += Double.isNaN(value) ? 0 : value * value;
+    }
+    return energy;
   }
 
   private Extent fitted(List<Samples> channels) {

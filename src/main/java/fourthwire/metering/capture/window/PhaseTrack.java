@@ -17,6 +17,9 @@ public final class PhaseTrack {
   private static final int STRETCH_CYCLES = 10;
   private static final double CLOSE = 1e-4;
 
+  /** Below this share of the strongest two stretches' energy there is nothing to follow. */
+  private static final double DEAD = 1e-4;
+
   private final double[] positions;
   private final double[] cycles;
   private final double share;
@@ -105,23 +108,38 @@ public final class PhaseTrack {
       int last = channels.get(0).count() - n;
       int steps = Math.max(1, (int) Math.ceil(last / (n / 2.0)));
       double[] positions = new double[steps + 1];
-      double[] cycles = new double[steps + 1];
+      double[][] products = new double[steps + 1][2];
       double[] before = new double[0];
       for (int m = 0; m <= steps; m++) {
         int start = (int) Math.round((double) m * last / steps);
         double[] phasors = phasors(start);
         positions[m] = start + (n - 1) / 2.0;
-        if (m > 0) {
-          double told = (positions[m] - positions[m - 1]) / samplesPerCycle;
-          cycles[m] = cycles[m - 1] + told + wrapped(advance(before, phasors) - told);
-        }
+        products[m] = m == 0 ? new double[2] : product(before, phasors);
         before = phasors;
       }
+      return new PhaseTrack(
+          positions, cycles(positions, products), all > 0 ? fundamental / all : 0);
+    }
+
+    /** Cycles run through at each middle; across a stretch without a voltage it runs as told. */
+    private double[] cycles(double[] positions, double[][] products) {
+      double strongest = 0;
+      for (double[] p : products) {
+        strongest = Math.max(strongest, Math.hypot(p[0], p[1]));
+      }
+      double[] cycles = new double[positions.length];
+      for (int m = 1; m < cycles.length; m++) {
+        double[] p = products[m];
+        double told = (positions[m] - positions[m - 1]) / samplesPerCycle;
+        boolean dead = Math.hypot(p[0], p[1]) < DEAD * strongest;
+        double found = Math.atan2(p[1], p[0]) / (2 * Math.PI);
+        cycles[m] = cycles[m - 1] + told + (dead ? 0 : wrapped(found - told));
+      }
       double first = positions[0] * (cycles[1] - cycles[0]) / (positions[1] - positions[0]);
-      for (int m = 0; m <= steps; m++) {
+      for (int m = 0; m < cycles.length; m++) {
         cycles[m] += first;
       }
-      return new PhaseTrack(positions, cycles, all > 0 ? fundamental / all : 0);
+      return cycles;
     }
 
     /** Re and Im of each channel, the angle at the stretch's middle. */
@@ -149,15 +167,15 @@ public final class PhaseTrack {
       return phasors;
     }
 
-    /** Cycles from one stretch to the next, up to a whole number. */
-    private static double advance(double[] from, double[] to) {
+    /** The sum of each channel's second phasor on its first: their advance, by their energy. */
+    private static double[] product(double[] from, double[] to) {
       double re = 0;
       double im = 0;
       for (int c = 0; c < from.length; c += 2) {
         re += to[c] * from[c] + to[c + 1] * from[c + 1];
         im += to[c + 1] * from[c] - to[c] * from[c + 1];
       }
-      return Math.atan2(im, re) / (2 * Math.PI);
+      return new double[] {re, im};
     }
 
     private static double wrapped(double cycles) {
