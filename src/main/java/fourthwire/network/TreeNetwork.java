@@ -40,6 +40,17 @@ public final class TreeNetwork {
   }
 
   /**
+   * The conductor of the feeding node, by its number there, that a feeder's conductor begins at.
+   */
+  public int joinedTo(int node, int conductor) {
+    int at = index(node, conductor);
+    if (!layout.isFeeder(node)) {
+      throw new IllegalArgumentException("node " + node + " is not fed by a feeder");
+    }
+    return layout.joinedTo[at] - layout.first[layout.parent[node]];
+  }
+
+  /**
    * Where a node's conductor stands among all conductors of the network: for hot loops that read
    * and write by index.
    */

@@ -4,6 +4,7 @@ import fourthwire.quantity.Conductor;
 import java.util.ArrayDeque;
 import java.util.ArrayList;
 import java.util.Deque;
+import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -19,9 +20,14 @@ import java.util.Optional;
  */
 public final class SiteTree {
   private final Map<String, Node> byName;
+  private final Map<String, List<Node>> children = new HashMap<>();
 
   private SiteTree(Map<String, Node> byName) {
     this.byName = byName;
+    for (Node node : byName.values()) {
+      node.parent()
+          .ifPresent(p -> children.computeIfAbsent(p, name -> new ArrayList<>()).add(node));
+    }
   }
 
   /** The tree on the normal supply. */
@@ -52,9 +58,7 @@ public final class SiteTree {
 
   /** The nodes fed directly from this one. */
   public List<Node> children(String name) {
-    return byName.values().stream()
-        .filter(n -> n.parent().filter(name::equals).isPresent())
-        .toList();
+    return List.copyOf(children.getOrDefault(name, List.of()));
   }
 
   /** The nodes from the supply down to this one, it included. */

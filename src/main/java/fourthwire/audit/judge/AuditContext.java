@@ -3,6 +3,7 @@ package fourthwire.audit.judge;
 import fourthwire.audit.plan.Device;
 import fourthwire.audit.plan.NetworkPlan;
 import fourthwire.audit.solve.SiteSolution;
+import fourthwire.audit.solve.Workers;
 import fourthwire.site.LoadKind;
 import fourthwire.site.Panel;
 import fourthwire.site.Practice;
@@ -40,7 +41,8 @@ public final class AuditContext {
       SiteTree tree,
       List<Device> devices,
       NetworkPlan plan,
-      SiteSolution solution) {
+      SiteSolution solution,
+      Workers workers) {
     this.survey = survey;
     this.supply = supply;
     this.tree = tree;
@@ -52,12 +54,13 @@ public final class AuditContext {
         new FaultLevels(
             NetworkPlan.of(survey, supply, tree, List.of(), false), supply.isGenerator());
     this.scan =
-        new ImpedanceScan(survey, plan, NetworkPlan.of(survey, supply, tree, devices, false));
+        new ImpedanceScan(
+            survey, plan, NetworkPlan.of(survey, supply, tree, devices, false), workers);
     this.banks = new BankFindings(survey, solution);
     this.sharedNeutrals = new SharedNeutralFindings(survey);
     survey.supplies().forEach(s -> demand(s.name(), s.demandA()));
-    survey.transformers().stream().forEach((Transformer t) -> demand(t.name(), t.demandA()));
-    survey.panels().stream().forEach((Panel p) -> demand(p.name(), p.demandA()));
+    survey.transformers().forEach((Transformer t) -> demand(t.name(), t.demandA()));
+    survey.panels().forEach((Panel p) -> demand(p.name(), p.demandA()));
     devices.stream()
         .map(Device::placement)
         .filter(p -> p.request().kind() == LoadKind.MOTOR)

@@ -3,6 +3,7 @@ package fourthwire.audit.judge;
 import fourthwire.audit.DesignState.Resonance;
 import fourthwire.audit.plan.NetworkPlan;
 import fourthwire.audit.plan.Place;
+import fourthwire.audit.solve.Workers;
 import fourthwire.network.DrivingPoints;
 import fourthwire.network.TreeNetwork;
 import fourthwire.site.SiteTree;
@@ -32,30 +33,43 @@ final class ImpedanceScan {
    * @param with the plan with its banks
    * @param without the same without
    */
-  ImpedanceScan(Survey survey, NetworkPlan with, NetworkPlan without) {
+  ImpedanceScan(Survey survey, NetworkPlan with, NetworkPlan without, Workers workers) {
     Map<String, String> banks = banks(survey, with);
     if (banks.isEmpty()) {
       return;
     }
     List<Place> places = with.places().stream().filter(ImpedanceScan::isScanned).toList();
-    double[][] ohm = scan(with.network(), places);
-    for (int p = 0; p < places.size(); p++) {
-      List<Resonance> peaks = new ArrayList<>();
-      for (int k = FIRST + 1; k < LAST; k++) {
-        double z = ohm[k - FIRST][p];
-        if (z > ohm[k - FIRST - 1][p]
-            && z >= ohm[k - FIRST + 1][p]
-            && z > bare(without, places.get(p), k / PER_ORDER)) {
-          peaks.add(new Resonance(k / PER_ORDER, z, maker(banks, places, ohm[k - FIRST])));
-        }
+    double[][] ohm = scan(with.network(), places, workers);
+    for (int k = FIRST + 1; k < LAST; k++) {
+      addPeaks(k, ohm, places, banks, without);
+    }
+  }
+
+  private void addPeaks(
+      int k, double[][] ohm, List<Place> places, Map<String, String> banks, NetworkPlan without) {
+    double[] here = ohm[k - FIRST];
+    int[] peaks =
+        IntStream.range(0, places.size())
+            .filter(p -> here[p] > ohm[k - FIRST - 1][p] && here[p] >= ohm[k - FIRST + 1][p])
+            .toArray();
+    if (peaks.length == 0) {
+      return;
+    }
+    DrivingPoints bare = without.network().factor(k / PER_ORDER).drivingPoints();
+    String maker = maker(banks, places, here);
+    for (int p : peaks) {
+      String node = places.get(p).name();
+      if (here[p] > bare.at(without.get(node).networkNode()).positiveSequence().magnitude()) {
+        byNode
+            .computeIfAbsent(node, n -> new ArrayList<>())
+            .add(new Resonance(k / PER_ORDER, here[p], maker));
       }
-      byNode.put(places.get(p).name(), List.copyOf(peaks));
     }
   }
 
   /** The parallel resonances seen from a node, lowest order first. */
   List<Resonance> at(String node) {
-    return byNode.getOrDefault(node, List.of());
+    return List.copyOf(byNode.getOrDefault(node, List.of()));
   }
 
   private static boolean isScanned(Place place) {
@@ -74,26 +88,18 @@ final class ImpedanceScan {
     return banks;
   }
 
-  private static double[][] scan(TreeNetwork network, List<Place> places) {
-    return IntStream.rangeClosed(FIRST, LAST)
-        .parallel()
-        .mapToObj(
-            k -> {
-              DrivingPoints points = network.factor(k / PER_ORDER).drivingPoints();
-              return places.stream()
+  private static double[][] scan(TreeNetwork network, List<Place> places, Workers workers) {
+    double[][] ohm = new double[LAST - FIRST + 1][];
+    workers.each(
+        ohm.length,
+        k -> {
+          DrivingPoints points = network.factor((FIRST + k) / PER_ORDER).drivingPoints();
+          ohm[k] =
+              places.stream()
                   .mapToDouble(p -> points.at(p.networkNode()).positiveSequence().magnitude())
                   .toArray();
-            })
-        .toArray(double[][]::new);
-  }
-
-  private static double bare(NetworkPlan without, Place place, double order) {
-    return without
-        .network()
-        .factor(order)
-        .drivingPoint(without.get(place.name()).networkNode())
-        .positiveSequence()
-        .magnitude();
+        });
+    return ohm;
   }
 
   /** The bank at whose panel the peak is highest. */

@@ -12,9 +12,9 @@ import fourthwire.audit.judge.NodeReport;
 import fourthwire.audit.plan.Device;
 import fourthwire.audit.plan.LoadPlacements;
 import fourthwire.audit.plan.NetworkPlan;
-import fourthwire.audit.plan.Place;
 import fourthwire.audit.solve.CoupledSolver;
 import fourthwire.audit.solve.SiteSolution;
+import fourthwire.audit.solve.Workers;
 import fourthwire.limits.LimitEditions;
 import fourthwire.load.DesignPowers;
 import fourthwire.site.SiteTree;
@@ -39,22 +39,40 @@ public final class HarmonicAudit implements Audit {
           "No-load loss and magnetising current of transformers are outside the network.",
           "Mutual coupling between conductors and the proximity effect are not modelled.");
 
+  private final int threads;
+
+  /** An audit that uses every processor of the machine. */
+  public HarmonicAudit() {
+    this(Runtime.getRuntime().availableProcessors());
+  }
+
+  /** An audit on so many threads; its figures do not depend on their number. */
+  public HarmonicAudit(int threads) {
+    this.threads = threads;
+  }
+
   @Override
   public AuditResult run(AuditRequest request, Progress progress) {
+    Reporter reporter = new Reporter(progress);
+    try (Workers workers = new Workers(threads, reporter::again)) {
+      return run(request, reporter, workers);
+    }
+  }
+
+  private static AuditResult run(AuditRequest request, Reporter progress, Workers workers) {
     Survey survey = request.survey();
     Supply supply = supply(survey, request.supply());
     progress.at(0.02, "Building the load models");
     SiteTree tree = SiteTree.of(survey, supply);
     DesignPowers known = new DesignPowers();
-    List<Device> devices =
-        LoadPlacements.of(survey, tree).stream().map(p -> Device.of(p, known)).toList();
+    List<Device> devices = workers.map(LoadPlacements.of(survey, tree), p -> Device.of(p, known));
     NetworkPlan plan = NetworkPlan.of(survey, supply, tree, devices, true);
     SiteSolution solution =
-        new CoupledSolver(survey, plan, devices)
-            .solve((share, message) -> progress.at(0.05 + 0.55 * share, message));
+        new CoupledSolver(survey, workers).solve(plan, devices, progress.part(0.05, 0.6));
     progress.at(0.6, "Scanning the impedance over the orders");
-    AuditContext context = new AuditContext(survey, supply, tree, devices, plan, solution);
-    List<NodeResult> nodes = report(context, request.measured(), progress);
+    AuditContext context = new AuditContext(survey, supply, tree, devices, plan, solution, workers);
+    progress.at(0.7, "Judging the nodes");
+    List<NodeResult> nodes = new ArrayList<>(report(context, request.measured(), workers));
     nodes.addAll(notSupplied(survey, tree, supply, request.measured()));
     progress.at(1, "Done");
     return new AuditResult(
@@ -73,16 +91,12 @@ public final class HarmonicAudit implements Audit {
   }
 
   private static List<NodeResult> report(
-      AuditContext context, Map<String, List<MeasuredState>> measured, Progress progress) {
-    List<NodeResult> nodes = new ArrayList<>();
-    List<Place> places = context.plan().places();
-    for (SiteTree.Node node : context.tree().nodes()) {
-      progress.at(0.7 + 0.3 * nodes.size() / places.size(), "Judging " + node.name());
-      nodes.add(
-          new NodeReport(context, context.plan().get(node.name()))
-              .result(measured.getOrDefault(node.name(), List.of())));
-    }
-    return nodes;
+      AuditContext context, Map<String, List<MeasuredState>> measured, Workers workers) {
+    return workers.map(
+        context.tree().nodes(),
+        node ->
+            new NodeReport(context, context.plan().get(node.name()))
+                .result(measured.getOrDefault(node.name(), List.of())));
   }
 
   /** The nodes that the supply in use does not feed, with the reason instead of figures. */

@@ -125,34 +125,38 @@ final class ActiveFilter {
    * What the filter answers to a small change, in its place of {@code into}: taken off there.
    *
    * @param response the change of the currents
-   * @param y the change of the whole state
+   * @param y the change of the filters' currents
+   * @param shift by how much later than in the whole state the filters' currents stand in y
    */
-  void subtractAnswer(OrdersInPlay orders, OrderSolution[] response, double[] y, double[] into) {
+  void subtractAnswer(
+      OrdersInPlay orders, OrderSolution[] response, double[] y, double[] into, int shift) {
     int perLine = 2 * orders.count();
-    double[] answer = new double[into.length];
+    double[] answer = new double[offset + lines.length * perLine];
     for (int line = 0; line < lines.length; line++) {
       for (int k = 0; k < orders.count(); k++) {
         int at = offset + line * perLine + 2 * k;
         int h = orders.at(k);
         boolean taken = h > 1 && h <= HIGHEST_ORDER;
-        answer[at] = taken ? parts[line] * (response[h].currentRe(lines[line]) + y[at]) : 0;
-        answer[at + 1] = taken ? parts[line] * (response[h].currentIm(lines[line]) + y[at + 1]) : 0;
+        double re = response[h].currentRe(lines[line]) + y[at + shift];
+        double im = response[h].currentIm(lines[line]) + y[at + 1 + shift];
+        answer[at] = taken ? parts[line] * re : 0;
+        answer[at + 1] = taken ? parts[line] * im : 0;
       }
     }
     if (neutral < 0) {
       removeZeroSequence(answer, perLine);
     }
-    for (int k = offset; k < offset + lines.length * perLine; k++) {
-      into[k] -= answer[k];
+    for (int k = offset; k < answer.length; k++) {
+      into[k + shift] -= answer[k];
     }
   }
 
   /**
    * Feeds the order at this position of the state into the panel, and takes it from the neutral.
    */
-  void feed(Excitation excitation, OrdersInPlay orders, int position, double[] x) {
+  void feed(Excitation excitation, OrdersInPlay orders, int position, double[] x, int shift) {
     for (int line = 0; line < lines.length; line++) {
-      int at = offset + 2 * (line * orders.count() + position);
+      int at = shift + offset + 2 * (line * orders.count() + position);
       excitation.inject(lines[line], x[at], x[at + 1]);
       if (neutral >= 0) {
         excitation.inject(neutral, -x[at], -x[at + 1]);

@@ -1,70 +1,72 @@
 package fourthwire.audit.solve;
 
 import fourthwire.audit.plan.Device;
-import fourthwire.audit.plan.LoadPlacement;
-import fourthwire.audit.plan.NetworkPlan;
-import fourthwire.audit.plan.Place;
 import fourthwire.load.model.LoadSolver;
 import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.load.model.PortSpectra;
 import fourthwire.network.Excitation;
 import fourthwire.network.OrderSolution;
 import fourthwire.network.TreeNetwork;
-import fourthwire.quantity.Conductor;
-import java.util.List;
+import java.util.Arrays;
+import java.util.Optional;
 
 /**
  * One load at its place in the network while the two are solved together: a mutable work block, for
  * one thread at a time.
  */
 final class DevicePort {
-  private static final int NONE = -1;
-
   /** Part of the nominal voltage by which one order is stepped to find a slope. */
   private static final double SLOPE_STEP = 1e-4;
+
+  /** A change of the current, on its rms, that need not be solved for: the slope tells enough. */
+  private static final double NOT_FELT = 2e-6;
 
   private static final double THIRD = 2 * Math.PI / 3;
 
   private final Device device;
+  private final PortPlace place;
+  private final PortPlace group;
   private final int[] from;
   private final int to;
   private final LoadSolver solver;
-  private final PortSpectra voltage;
   private final PortSpectra emf;
   private final PortSpectra drawn;
   private final int offset;
   private double seriesOhm;
   private double seriesHenry;
+  private double sharedOhm;
+  private double sharedHenry;
+  private double[] voltage = new double[0];
+  private double[] behind = new double[0];
+  private Optional<LoadSlope> slope = Optional.empty();
   private double voltageMovedV;
   private String failure = "";
-
-  private DevicePort(Device device, int[] from, int to, int offset) {
-    this.device = device;
-    this.from = from;
-    this.to = to;
-    this.offset = offset;
-    this.solver = device.model().newSolver();
-    this.voltage = new PortSpectra(from.length);
-    this.emf = new PortSpectra(from.length);
-    this.drawn = new PortSpectra(from.length);
-  }
 
   /**
    * The load at its place.
    *
+   * @param group where Newton's equations see it: its own place, or where its circuit begins if it
+   *     has that for itself
    * @param offset where its currents start in the whole state
    */
-  static DevicePort of(Device device, NetworkPlan plan, int offset) {
-    LoadPlacement placement = device.placement();
-    Place place = plan.get(placement.circuit());
-    int[] from = placement.from().stream().mapToInt(c -> index(plan.network(), place, c)).toArray();
-    List<Conductor> to = placement.to();
-    return new DevicePort(
-        device, from, to.isEmpty() ? NONE : index(plan.network(), place, to.get(0)), offset);
+  DevicePort(Device device, PortPlace place, PortPlace group, TreeNetwork network, int offset) {
+    this.device = device;
+    this.place = place;
+    this.group = group;
+    this.from = place.fromIndices(network);
+    this.to = place.toIndex(network);
+    this.offset = offset;
+    this.solver = device.model().newSolver();
+    this.emf = new PortSpectra(from.length);
+    this.drawn = new PortSpectra(from.length);
   }
 
-  private static int index(TreeNetwork network, Place place, Conductor conductor) {
-    return network.index(place.networkNode(), place.conductors().of(conductor));
+  PortPlace place() {
+    return place;
+  }
+
+  PortPlace group() {
+    return group;
   }
 
   Device device() {
@@ -86,6 +88,12 @@ final class DevicePort {
   void setSeries(double ohm, double henry) {
     seriesOhm = ohm;
     seriesHenry = henry;
+  }
+
+  /** Of the series R-L, what lies above the group. */
+  void setShared(double ohm, double henry) {
+    sharedOhm = ohm;
+    sharedHenry = henry;
   }
 
   double seriesOhm() {
@@ -113,62 +121,146 @@ final class DevicePort {
 
   /** Voltage of one port in one order's solution, real part. */
   double voltageRe(int port, OrderSolution s) {
-    return s.potentialRe(from[port]) - (to == NONE ? 0 : s.potentialRe(to));
+    return s.potentialRe(from[port]) - (to == PortPlace.NONE ? 0 : s.potentialRe(to));
   }
 
   /** Likewise, imaginary part. */
   double voltageIm(int port, OrderSolution s) {
-    return s.potentialIm(from[port]) - (to == NONE ? 0 : s.potentialIm(to));
+    return s.potentialIm(from[port]) - (to == PortPlace.NONE ? 0 : s.potentialIm(to));
   }
 
   /** Draws a current at one port: out of the line, back into the return conductor. */
   void draw(Excitation excitation, int port, double re, double im) {
     excitation.inject(from[port], -re, -im);
-    if (to != NONE) {
+    if (to != PortPlace.NONE) {
       excitation.inject(to, re, im);
     }
   }
 
   /** Takes the voltages of the solved orders. */
   void takeVoltages(OrdersInPlay orders, OrderSolution[] solutions) {
+    boolean first = voltage.length == 0;
+    voltage = first ? new double[length(orders)] : voltage;
     double moved = 0;
+    int at = 0;
     for (int port = 0; port < from.length; port++) {
       for (int k = 0; k < orders.count(); k++) {
-        int h = orders.at(k);
-        double re = voltageRe(port, solutions[h]);
-        double im = voltageIm(port, solutions[h]);
-        moved = Math.max(moved, Math.hypot(re - voltage.re[port][h], im - voltage.im[port][h]));
-        voltage.re[port][h] = re;
-        voltage.im[port][h] = im;
+        OrderSolution s = solutions[orders.at(k)];
+        double re = voltageRe(port, s);
+        double im = voltageIm(port, s);
+        moved = Math.max(moved, Math.hypot(re - voltage[at], im - voltage[at + 1]));
+        voltage[at++] = re;
+        voltage[at++] = im;
       }
     }
     voltageMovedV = moved;
   }
 
   /**
-   * Solves the load at the voltages taken.
+   * Solves the load at the voltages taken; where its slope says that its current hardly moves, by
+   * that slope.
    *
    * @param x the whole state, amps: what it drew when these voltages were solved
    * @param g receives what it draws now, in its place
    */
   void solve(OrdersInPlay orders, double omega, double[] x, double[] g) {
-    int at = offset;
+    double[] now = voltage.clone();
+    addDrop(orders, seriesOhm, omega * seriesHenry, x, offset, now);
+    if (slope.isEmpty()) {
+      solveAt(orders, now, g);
+      return;
+    }
+    double[] change = difference(now, behind);
+    double[] before = Arrays.copyOfRange(g, offset, offset + now.length);
+    double[] answer = new double[now.length];
+    slope.get().multiply(orders, change, answer);
+    if (failure.isEmpty() && Gmres.norm(answer) <= NOT_FELT * Gmres.norm(before)) {
+      for (int i = 0; i < answer.length; i++) {
+        g[offset + i] += answer[i];
+      }
+      behind = now;
+      return;
+    }
+    solveAt(orders, now, g);
+    if (failure.isEmpty()) {
+      double[] moved = difference(Arrays.copyOfRange(g, offset, offset + now.length), before);
+      addDrop(orders, -sharedOhm, -omega * sharedHenry, moved, 0, change);
+      slope.get().learn(orders, change, moved);
+    }
+  }
+
+  private static double[] difference(double[] a, double[] b) {
+    double[] d = new double[a.length];
+    for (int i = 0; i < d.length; i++) {
+      d[i] = a[i] - b[i];
+    }
+    return d;
+  }
+
+  /**
+   * How its current changes if what the network shows at the group stands still: g - x, and what
+   * follows from that behind the impedance above the group.
+   */
+  double[] stepAlone(OrdersInPlay orders, double omega, double[] x, double[] g) {
+    int size = length(orders);
+    double[] step = new double[size];
+    for (int i = 0; i < size; i++) {
+      step[i] = g[offset + i] - x[offset + i];
+    }
+    double[] drop = new double[size];
+    addDrop(orders, sharedOhm, omega * sharedHenry, step, 0, drop);
+    double[] answer = new double[size];
+    slope().multiply(orders, drop, answer);
+    for (int i = 0; i < size; i++) {
+      step[i] += answer[i];
+    }
+    return step;
+  }
+
+  private void solveAt(OrdersInPlay orders, double[] now, double[] g) {
+    int at = 0;
     for (int port = 0; port < from.length; port++) {
       for (int k = 0; k < orders.count(); k++) {
-        int h = orders.at(k);
-        double reactance = h * omega * seriesHenry;
-        emf.re[port][h] = voltage.re[port][h] + seriesOhm * x[at] - reactance * x[at + 1];
-        emf.im[port][h] = voltage.im[port][h] + seriesOhm * x[at + 1] + reactance * x[at];
-        at += 2;
+        emf.re[port][orders.at(k)] = now[at++];
+        emf.im[port][orders.at(k)] = now[at++];
       }
     }
     failure = "";
     try {
       solver.solve(emf, seriesOhm, seriesHenry, drawn);
       copyDrawn(orders, g, offset);
+      behind = now;
     } catch (NoSteadyStateException e) {
       failure = String.valueOf(e.getMessage());
     }
+  }
+
+  /** Adds what a current, from its place in a row, drops over a series R-X. */
+  private void addDrop(
+      OrdersInPlay orders, double ohm, double reactance, double[] amps, int start, double[] volts) {
+    int at = 0;
+    for (int port = 0; port < from.length; port++) {
+      for (int k = 0; k < orders.count(); k++) {
+        double re = amps[start + at];
+        double im = amps[start + at + 1];
+        double x = orders.at(k) * reactance;
+        volts[at++] += ohm * re - x * im;
+        volts[at++] += ohm * im + x * re;
+      }
+    }
+  }
+
+  /** The electromotive force last solved at. */
+  double[] lastEmf() {
+    return behind;
+  }
+
+  void setSlope(LoadSlope known) {
+    slope = Optional.of(known);
+  }
+
+  LoadSlope slope() {
+    return slope.orElseThrow();
   }
 
   private void copyDrawn(OrdersInPlay orders, double[] into, int start) {
@@ -187,7 +279,7 @@ final class DevicePort {
    * of a cycle gives the others, exactly on a balanced voltage and well enough to iterate with on
    * any other.
    */
-  DeviceSlope slope(OrdersInPlay orders) {
+  DeviceSlope findSlope(OrdersInPlay orders, double omega) {
     int size = length(orders);
     DeviceSlope slope = new DeviceSlope(size);
     double[] before = new double[size];
@@ -210,6 +302,7 @@ final class DevicePort {
     for (int port = 1; port < from.length; port++) {
       turn(slope, orders, port);
     }
+    slope.open(orders, sharedOhm, omega * sharedHenry);
     return slope;
   }
 

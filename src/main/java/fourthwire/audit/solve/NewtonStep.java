@@ -5,30 +5,45 @@ import fourthwire.network.FactoredOrder;
 import fourthwire.network.OrderSolution;
 import fourthwire.network.TreeNetwork;
 import fourthwire.quantity.Spectrum;
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.stream.IntStream;
+import java.util.Map;
 
 /**
- * Newton's step towards x = g(x): with J the loads' slopes, Z the network's answer to what they
- * draw and S the series R-L they are solved behind, (1 - J·(S - Z))·Δ = g(x) - x.
- *
- * <p>The slopes are worked out once and kept until the iteration slows down.
+ * Newton's step towards x = g(x). With K the loads' slopes seen from their groups ({@link
+ * LoadGroup}), V what the network answers there, and r what each load would draw more if V stood
+ * still, the step is Δ = r + K·V(Δ). Summed over each group that is an equation in the groups'
+ * currents alone, solved by minimal residuals ({@link Gmres}); each load's own step follows.
  */
 final class NewtonStep {
-  private static final double LINEAR_TOLERANCE = 1e-3;
+  /**
+   * Newton's equations need not be solved much better than the slopes are known; but loads without
+   * an impedance of their own make them ill-conditioned.
+   */
+  private static final double LINEAR_TOLERANCE = 3e-3;
+
   private static final int MOST_PRODUCTS = 120;
 
-  /** Slopes are worked out again where a pass leaves more than this part of the change before. */
-  private static final double SLOW = 0.2;
+  /** Above this change slopes are worked out again at every pass. */
+  private static final double FAR = 0.03;
+
+  /** And where a pass leaves more than this part of the change before. */
+  private static final double SLOW = 0.5;
 
   private final OrdersInPlay orders;
-  private final List<DevicePort> loads;
+  private final List<LoadGroup> groups = new ArrayList<>();
   private final List<ActiveFilter> filters;
   private final FactoredOrder[] factors;
   private final double omega;
+  private final Workers workers;
+  private final SlopeBook book;
   private final Excitation[] excitations = new Excitation[Spectrum.HIGHEST_ORDER + 1];
   private final OrderSolution[] responses = new OrderSolution[Spectrum.HIGHEST_ORDER + 1];
-  private List<DeviceSlope> slopes = List.of();
+  private final int groupsLength;
+  private final int filtersLength;
+  private final int filtersAt;
+  private boolean known;
   private double lastChange = Double.POSITIVE_INFINITY;
 
   NewtonStep(
@@ -37,12 +52,31 @@ final class NewtonStep {
       OrdersInPlay orders,
       List<DevicePort> loads,
       List<ActiveFilter> filters,
-      double omega) {
+      double omega,
+      Workers workers) {
     this.factors = factors;
     this.orders = orders;
-    this.loads = loads;
     this.filters = filters;
     this.omega = omega;
+    this.workers = workers;
+    this.book = new SlopeBook(orders, loads, omega, workers);
+    Map<PortPlace, LoadGroup> byPlace = new LinkedHashMap<>();
+    int at = 0;
+    int loadsEnd = 0;
+    for (DevicePort load : loads) {
+      LoadGroup group = byPlace.get(load.group());
+      if (group == null) {
+        group = new LoadGroup(load.group(), network, orders, at);
+        byPlace.put(load.group(), group);
+        groups.add(group);
+        at += group.size();
+      }
+      group.add(load);
+      loadsEnd = load.offset() + load.length(orders);
+    }
+    this.groupsLength = at;
+    this.filtersAt = loadsEnd;
+    this.filtersLength = filters.stream().mapToInt(f -> 2 * f.ports() * orders.count()).sum();
     for (int k = 0; k < orders.count(); k++) {
       int h = orders.at(k);
       excitations[h] = network.excitation();
@@ -50,64 +84,51 @@ final class NewtonStep {
     }
   }
 
-  /** Works the slopes out, at the voltages last solved, if there are none or they serve ill. */
-  void renewWhereSlow(double change) {
-    if (slopes.isEmpty() || change > SLOW * lastChange) {
-      slopes = loads.parallelStream().map(load -> load.slope(orders)).toList();
+  /** Works the slopes out, at the state last solved, if there are none or they serve ill. */
+  void renewWhereSlow(double change, double[] g) {
+    if (!known || change > FAR || change > SLOW * lastChange) {
+      groups.forEach(LoadGroup::forget);
+      book.renew(g);
+      known = true;
     }
     lastChange = change;
   }
 
   /** The step from x, where the loads answer g. */
   double[] step(double[] x, double[] g) {
-    double[] residual = new double[x.length];
-    for (int i = 0; i < x.length; i++) {
-      residual[i] = g[i] - x[i];
+    double[] step = new double[x.length];
+    double[] b = new double[groupsLength + filtersLength];
+    workers.each(groups.size(), k -> groups.get(k).gather(orders, omega, x, g, step, b));
+    for (int i = 0; i < filtersLength; i++) {
+      b[groupsLength + i] = g[filtersAt + i] - x[filtersAt + i];
     }
-    return new Gmres(this::product, LINEAR_TOLERANCE, MOST_PRODUCTS).solve(residual);
+    double[] y = new Gmres(this::product, LINEAR_TOLERANCE, MOST_PRODUCTS).solve(b);
+    respond(y);
+    workers.each(groups.size(), k -> groups.get(k).spread(orders, responses, step));
+    System.arraycopy(y, groupsLength, step, filtersAt, filtersLength);
+    return step;
   }
 
-  /** into = y - J·(S - Z)·y, and of the filters y less their answer. */
+  /** into = y - K·V(y), and of the filters y less their answer. */
   private void product(double[] y, double[] into) {
-    IntStream.range(0, orders.count()).parallel().forEach(k -> respond(k, y));
-    System.arraycopy(y, 0, into, 0, y.length);
-    IntStream.range(0, loads.size())
-        .parallel()
-        .forEach(
-            d -> slopes.get(d).subtractProduct(emf(loads.get(d), y), into, loads.get(d).offset()));
-    filters.forEach(filter -> filter.subtractAnswer(orders, responses, y, into));
+    respond(y);
+    workers.each(groups.size(), k -> groups.get(k).balance(orders, responses, y, into));
+    System.arraycopy(y, groupsLength, into, groupsLength, filtersLength);
+    for (ActiveFilter filter : filters) {
+      filter.subtractAnswer(orders, responses, y, into, groupsLength - filtersAt);
+    }
+  }
+
+  private void respond(double[] y) {
+    workers.each(orders.count(), k -> respond(k, y));
   }
 
   private void respond(int position, double[] y) {
     int h = orders.at(position);
     Excitation excitation = excitations[h].clear();
-    for (DevicePort load : loads) {
-      for (int port = 0; port < load.ports(); port++) {
-        int at = load.offset() + 2 * (port * orders.count() + position);
-        load.draw(excitation, port, y[at], y[at + 1]);
-      }
-    }
-    filters.forEach(filter -> filter.feed(excitation, orders, position, y));
+    groups.forEach(group -> group.draw(excitation, orders, position, y));
+    filters.forEach(
+        filter -> filter.feed(excitation, orders, position, y, groupsLength - filtersAt));
     factors[h].solve(excitation, responses[h]);
-  }
-
-  /**
-   * The change of the electromotive force before a load: of its voltage, and over its series R-L.
-   */
-  private double[] emf(DevicePort load, double[] y) {
-    double[] emf = new double[load.length(orders)];
-    int at = 0;
-    for (int port = 0; port < load.ports(); port++) {
-      for (int k = 0; k < orders.count(); k++) {
-        int h = orders.at(k);
-        double re = y[load.offset() + at];
-        double im = y[load.offset() + at + 1];
-        double reactance = h * omega * load.seriesHenry();
-        emf[at] = load.voltageRe(port, responses[h]) + load.seriesOhm() * re - reactance * im;
-        emf[at + 1] = load.voltageIm(port, responses[h]) + load.seriesOhm() * im + reactance * re;
-        at += 2;
-      }
-    }
-    return emf;
   }
 }

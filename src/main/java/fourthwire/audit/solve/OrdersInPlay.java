@@ -41,4 +41,26 @@ final class OrdersInPlay {
   int at(int position) {
     return orders[position];
   }
+
+  /**
+   * Turns a row of phasors, ports one after the other, by an angle of the fundamental: order h by h
+   * times it.
+   */
+  void turn(double[] phasors, double cos, double sin) {
+    int step = orders.length > 1 ? orders[1] - orders[0] : 1;
+    double stepCos = step == 1 ? cos : cos * cos - sin * sin;
+    double stepSin = step == 1 ? sin : 2 * cos * sin;
+    for (int at = 0; at < phasors.length; at += 2 * orders.length) {
+      double c = cos;
+      double s = sin;
+      for (int k = at; k < at + 2 * orders.length; k += 2) {
+        double re = phasors[k];
+        phasors[k] = re * c - phasors[k + 1] * s;
+        phasors[k + 1] = re * s + phasors[k + 1] * c;
+        double next = c * stepCos - s * stepSin;
+        s = s * stepCos + c * stepSin;
+        c = next;
+      }
+    }
+  }
 }

@@ -1,9 +1,5 @@
 package fourthwire.audit.solve;
 
-import fourthwire.audit.plan.LoadPlacement;
-import fourthwire.audit.plan.NetworkPlan;
-import fourthwire.audit.plan.Place;
-import fourthwire.network.DrivingPoint;
 import fourthwire.network.DrivingPoints;
 import fourthwire.network.Excitation;
 import fourthwire.network.FactoredOrder;
@@ -20,9 +16,9 @@ import java.util.List;
  * <p>Together: every load injects a current in proportion to its size, in step with its own
  * voltage; what voltage that makes at a load, over its own current, is the impedance that acts on
  * it: its own feeder's once, a shared riser's as often as loads share it, the neutral's thrice for
- * triplen orders. That makes a good first guess. Alone: the driving-point impedance, which leaves
- * Newton's equations well conditioned. The median over a few low orders is taken, so that a
- * resonance at one of them does not count.
+ * triplen orders. That makes a good first guess of all currents at once. Alone: the driving-point
+ * impedance, at the load and at its group, which leaves Newton's equations well conditioned. The
+ * median over a few low orders is taken, so that a resonance at one of them does not count.
  */
 final class SeriesEstimate {
   private static final int[] ORDERS = {1, 3, 5, 7, 9, 11, 13};
@@ -31,42 +27,45 @@ final class SeriesEstimate {
   private final FactoredOrder[] factors;
   private final List<DevicePort> ports;
   private final double omega;
+  private final Workers workers;
 
   SeriesEstimate(
-      TreeNetwork network, FactoredOrder[] factors, List<DevicePort> ports, double omega) {
+      TreeNetwork network,
+      FactoredOrder[] factors,
+      List<DevicePort> ports,
+      double omega,
+      Workers workers) {
     this.network = network;
     this.factors = factors;
     this.ports = ports;
     this.omega = omega;
+    this.workers = workers;
   }
 
   /** Sets every load's series R-L as it acts on the load alone. */
-  void applyAlone(NetworkPlan plan) {
+  void applyAlone() {
     double[][] ohm = new double[ports.size()][ORDERS.length];
     double[][] henry = new double[ports.size()][ORDERS.length];
-    for (int k = 0; k < ORDERS.length; k++) {
-      DrivingPoints points = factors[ORDERS[k]].drivingPoints();
-      for (int d = 0; d < ports.size(); d++) {
-        Phasor z = alone(ports.get(d), plan, points);
-        ohm[d][k] = z.re();
-        henry[d][k] = z.im() / (ORDERS[k] * omega);
-      }
-    }
+    double[][] sharedOhm = new double[ports.size()][ORDERS.length];
+    double[][] sharedHenry = new double[ports.size()][ORDERS.length];
+    workers.each(
+        ORDERS.length,
+        k -> {
+          DrivingPoints points = factors[ORDERS[k]].drivingPoints();
+          for (int d = 0; d < ports.size(); d++) {
+            DevicePort port = ports.get(d);
+            Phasor z = port.place().impedance(points.at(port.place().node()));
+            Phasor shared = port.group().impedance(points.at(port.group().node()));
+            ohm[d][k] = z.re();
+            henry[d][k] = z.im() / (ORDERS[k] * omega);
+            sharedOhm[d][k] = shared.re();
+            sharedHenry[d][k] = shared.im() / (ORDERS[k] * omega);
+          }
+        });
     for (int d = 0; d < ports.size(); d++) {
       ports.get(d).setSeries(median(ohm[d]), median(henry[d]));
+      ports.get(d).setShared(median(sharedOhm[d]), median(sharedHenry[d]));
     }
-  }
-
-  private static Phasor alone(DevicePort port, NetworkPlan plan, DrivingPoints points) {
-    LoadPlacement placement = port.device().placement();
-    Place place = plan.get(placement.circuit());
-    DrivingPoint point = points.at(place.networkNode());
-    if (port.ports() == 3) {
-      return point.positiveSequence();
-    }
-    return point.between(
-        place.conductors().of(placement.from().get(0)),
-        place.conductors().of(placement.to().get(0)));
   }
 
   /**

@@ -1,0 +1,275 @@
+package fourthwire.audit.solve;
+
+import fourthwire.audit.AuditFailedException;
+import fourthwire.audit.Progress;
+import fourthwire.audit.plan.Device;
+import fourthwire.audit.plan.NetworkPlan;
+import fourthwire.network.Excitation;
+import fourthwire.network.FactoredOrder;
+import fourthwire.network.OrderSolution;
+import fourthwire.network.SolutionCheck;
+import fourthwire.network.TreeNetwork;
+import fourthwire.network.UnsolvableOrderException;
+import fourthwire.quantity.Spectrum;
+import fourthwire.site.Filter;
+import fourthwire.site.Survey;
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+import java.util.Locale;
+import java.util.function.IntConsumer;
+import java.util.stream.IntStream;
+
+/** One state of a site being solved, from the first guess to where loads and network agree. */
+final class SiteIteration {
+  private static final int MOST_PASSES = 60;
+  private static final int SHORTEST_STEP = 10;
+
+  private final NetworkPlan plan;
+  private final TreeNetwork network;
+  private final OrdersInPlay orders;
+  private final List<DevicePort> loads = new ArrayList<>();
+  private final List<ActiveFilter> filters = new ArrayList<>();
+  private final FactoredOrder[] factors = new FactoredOrder[Spectrum.HIGHEST_ORDER + 1];
+  private final Excitation[] excitations = new Excitation[Spectrum.HIGHEST_ORDER + 1];
+  private final OrderSolution[] solutions = new OrderSolution[Spectrum.HIGHEST_ORDER + 1];
+  private final double omega;
+  private final Workers workers;
+  private final int length;
+  private double[] last = new double[0];
+
+  SiteIteration(Survey survey, NetworkPlan plan, List<Device> devices, Workers workers) {
+    this.plan = plan;
+    this.workers = workers;
+    this.network = plan.network();
+    this.omega = 2 * Math.PI * survey.settings().frequencyHz();
+    this.orders = OrdersInPlay.of(survey.background(), devices);
+    int at = addLoads(devices.stream().filter(d -> !d.model().isLinear()).toList());
+    for (Filter filter : survey.filters()) {
+      if (filter.type() == Filter.Type.ACTIVE && plan.find(filter.panel()).isPresent()) {
+        ActiveFilter active = ActiveFilter.of(filter, plan.get(filter.panel()), network, at);
+        filters.add(active);
+        at += 2 * active.ports() * orders.count();
+      }
+    }
+    this.length = at;
+  }
+
+  private int addLoads(List<Device> devices) {
+    List<PortPlace> places =
+        devices.stream()
+            .map(d -> PortPlace.of(d.placement(), plan.get(d.placement().circuit())))
+            .toList();
+    int[] loadsAt = new int[network.nodes()];
+    places.forEach(place -> loadsAt[place.node()]++);
+    int at = 0;
+    for (int d = 0; d < devices.size(); d++) {
+      PortPlace place = places.get(d);
+      PortPlace group = loadsAt[place.node()] == 1 ? place.feeding(network) : place;
+      DevicePort load = new DevicePort(devices.get(d), place, group, network, at);
+      loads.add(load);
+      at += load.length(orders);
+    }
+    return at;
+  }
+
+  /**
+   * Solves.
+   *
+   * @param guess what the loads draw, if something like it is known
+   */
+  SiteSolution solve(LoadCurrents guess, Progress progress) {
+    progress.at(0, "Eliminating the network");
+    eachOrder(this::factor);
+    double[] x = new double[length];
+    if (length > 0) {
+      begin(x, guess);
+      iterate(x, progress);
+    } else {
+      solveNetwork(x);
+    }
+    check();
+    return new SiteSolution(network, orders, solutions);
+  }
+
+  /** What the loads drew at last. */
+  LoadCurrents currents() {
+    return new LoadCurrents(orders, loads, last);
+  }
+
+  /**
+   * The first guess, and each load's series R-L. Where nothing is known each load is solved once at
+   * the voltages of a site that draws nothing, behind what all loads together see.
+   */
+  private void begin(double[] x, LoadCurrents guess) {
+    SeriesEstimate series = new SeriesEstimate(network, factors, loads, omega, workers);
+    if (!guess.fill(orders, loads, x)) {
+      solveNetwork(x);
+      series.applyTogether(solutions[1]);
+      image(x, x);
+    }
+    series.applyAlone();
+    solveNetwork(x);
+  }
+
+  private void iterate(double[] x, Progress progress) {
+    double[] g = new double[length];
+    refuse(image(x, g));
+    Settling settling = new Settling(loads, filters, orders);
+    NewtonStep newton = new NewtonStep(network, factors, orders, loads, filters, omega, workers);
+    for (int pass = 1; pass <= MOST_PASSES; pass++) {
+      settling.look(x, g);
+      progress.at(settling.share(), "Network and loads together, pass " + pass);
+      if (settling.loadsSettled() && conductorsSettled(g)) {
+        last = g;
+        return;
+      }
+      newton.renewWhereSlow(settling.change(), g);
+      advance(x, g, newton.step(x, g));
+    }
+    throw new AuditFailedException(
+        "The network and its loads did not settle in %d passes: %s"
+            .formatted(MOST_PASSES, settling.worst()));
+  }
+
+  /**
+   * Takes a Newton step, or the longest part of it (halved again and again) that brings the loads
+   * nearer to what was injected.
+   */
+  private void advance(double[] x, double[] g, double[] step) {
+    double[] start = x.clone();
+    double before = distance(x, g);
+    String failure = "";
+    double part = 1;
+    for (int halving = 0; halving < SHORTEST_STEP; halving++) {
+      for (int i = 0; i < length; i++) {
+        x[i] = start[i] + part * step[i];
+      }
+      solveNetwork(x);
+      failure = image(x, g);
+      if (failure.isEmpty() && distance(x, g) < before) {
+        return;
+      }
+      part /= 2;
+    }
+    // The shortest step stands: near the end rounding can keep the distance from falling.
+    refuse(failure);
+  }
+
+  private static void refuse(String failure) {
+    if (!failure.isEmpty()) {
+      throw new AuditFailedException(failure);
+    }
+  }
+
+  private static double distance(double[] x, double[] g) {
+    double sum = 0;
+    for (int i = 0; i < x.length; i++) {
+      sum += (g[i] - x[i]) * (g[i] - x[i]);
+    }
+    return Math.sqrt(sum);
+  }
+
+  /** What the loads draw at the solved voltages, into g; the reason where one can't. */
+  private String image(double[] x, double[] g) {
+    workers.each(
+        loads.size(),
+        d -> {
+          loads.get(d).takeVoltages(orders, solutions);
+          loads.get(d).solve(orders, omega, x, g);
+        });
+    filters.forEach(filter -> filter.solve(orders, solutions, x, g));
+    return loads.stream()
+        .filter(load -> !load.failure().isEmpty())
+        .findFirst()
+        .map(
+            load ->
+                "Load \"%s\" on %s: %s"
+                    .formatted(
+                        load.device().placement().load().name(),
+                        load.device().placement().circuit(),
+                        load.failure()))
+        .orElse("");
+  }
+
+  private void factor(int order) {
+    try {
+      factors[order] = network.factor(order);
+    } catch (UnsolvableOrderException e) {
+      throw new AuditFailedException(
+          "The network has no unique solution at order %d: %s".formatted(order, e.getMessage()), e);
+    }
+    excitations[order] = network.excitation();
+    solutions[order] = factors[order].solve(excitations[order]);
+  }
+
+  private void solveNetwork(double[] x) {
+    workers.each(orders.count(), k -> solveOrder(k, x));
+  }
+
+  private void solveOrder(int position, double[] x) {
+    int h = orders.at(position);
+    Excitation excitation = excitations[h].clear();
+    plan.supply().excite(h, excitation);
+    for (DevicePort load : loads) {
+      for (int port = 0; port < load.ports(); port++) {
+        int at = load.offset() + 2 * (port * orders.count() + position);
+        load.draw(excitation, port, x[at], x[at + 1]);
+      }
+    }
+    for (ActiveFilter filter : filters) {
+      filter.feed(excitation, orders, position, x, 0);
+    }
+    factors[h].solve(excitation, solutions[h]);
+  }
+
+  /** Solves the network for what the loads draw now, and says whether its currents stood still. */
+  private boolean conductorsSettled(double[] g) {
+    int conductors = network.conductors();
+    double[] square = new double[conductors];
+    double[] moved = new double[conductors];
+    double[] before = new double[2 * conductors];
+    for (int k = 0; k < orders.count(); k++) {
+      OrderSolution s = solutions[orders.at(k)];
+      for (int c = 0; c < conductors; c++) {
+        before[2 * c] = s.currentRe(c);
+        before[2 * c + 1] = s.currentIm(c);
+      }
+      solveOrder(k, g);
+      for (int c = 0; c < conductors; c++) {
+        double re = s.currentRe(c);
+        double im = s.currentIm(c);
+        square[c] += re * re + im * im;
+        double dRe = re - before[2 * c];
+        double dIm = im - before[2 * c + 1];
+        moved[c] += dRe * dRe + dIm * dIm;
+      }
+    }
+    double largest = Math.sqrt(Arrays.stream(square).max().orElse(0));
+    return IntStream.range(0, conductors)
+        .allMatch(
+            c ->
+                Math.sqrt(moved[c])
+                    <= CoupledSolver.CONDUCTOR_TOLERANCE * (Math.sqrt(square[c]) + largest / 100));
+  }
+
+  /** Nothing leaves here that breaks Kirchhoff's laws or the balance of power. */
+  private void check() {
+    eachOrder(
+        h -> {
+          SolutionCheck check = factors[h].check(excitations[h], solutions[h]);
+          if (!(check.worst() <= CoupledSolver.CHECK_TOLERANCE)) {
+            throw new AuditFailedException(
+                String.format(
+                    Locale.ROOT,
+                    "The solution of order %d does not balance (%.2e); no figure is given",
+                    h,
+                    check.worst()));
+          }
+        });
+  }
+
+  private void eachOrder(IntConsumer action) {
+    workers.each(orders.count(), k -> action.accept(orders.at(k)));
+  }
+}
