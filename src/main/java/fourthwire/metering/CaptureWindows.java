@@ -11,7 +11,8 @@ import java.util.OptionalDouble;
  * @param count full windows
  * @param cycles in each
  * @param groups by quantity, {@code L1.i}, {@code L1.v} …: rms over all windows
- * @param intervals the standard ones that lie whole within the record, by length, then in time
+ * @param intervals the standard ones that lie whole within the record, by length, then in time; of
+ *     more than an hour those of 3 s are left out
  */
 public record CaptureWindows(
     int count, int cycles, Map<String, HarmonicGroups> groups, List<Interval> intervals) {

@@ -13,7 +13,10 @@ final class WaveformShapes {
         .part(
             "groups",
             Shape.of("By quantity, L1.i, L1.v …: rms over all windows").others(groups()).schema())
-        .list("intervals", "Standard intervals that lie whole in the record", interval())
+        .list(
+            "intervals",
+            "Standard intervals that lie whole in the record; over an hour without 3 s",
+            interval())
         .schema();
   }
 

@@ -6,6 +6,7 @@ import fourthwire.metering.capture.fit.RoughFrequency;
 import fourthwire.metering.capture.wave.Samples;
 import fourthwire.metering.capture.wave.TimeAxis;
 import fourthwire.metering.capture.window.PhaseTrack;
+import fourthwire.metering.capture.window.WindowAnalysis;
 import fourthwire.quantity.Spectrum;
 import java.util.List;
 import java.util.Locale;
@@ -158,13 +159,14 @@ final class ExtentFinder {
     int end =
         (int) Math.round(track.map(t -> t.positionAt(cycles)).orElse(time.count() * cycles / run));
     int samples = Math.min(time.count(), end);
-    boolean windows = cycles >= Extent.standardCycles(nominal);
+    int inWindows = track.map(t -> WindowAnalysis.ordersAt(t.samplesPerCycle())).orElse(0);
+    boolean windows = cycles >= Extent.standardCycles(nominal) && inWindows > 0;
     return new Extent(
         hertz,
         certainty,
         cycles,
         samples,
-        orders(samples, hertz),
+        windows ? inWindows : orders(samples, hertz),
         nominal,
         track.filter(t -> windows));
   }

@@ -16,6 +16,9 @@ import java.util.stream.IntStream;
 
 /** Takes from the windows what a reading keeps. */
 final class WindowFigures {
+  /** An hour of them. */
+  private static final int MOST_SHORTEST = 1200;
+
   private final WindowAnalysis windows;
   private final Extent extent;
   private final List<String> quantities;
@@ -33,7 +36,19 @@ final class WindowFigures {
         windows.windows(),
         extent.standardCycles(),
         groups,
-        windows.intervals().stream().map(this::interval).toList());
+        kept(windows.intervals()).stream().map(this::interval).toList());
+  }
+
+  /** A record of hours has its 3 s intervals left out: ten minutes say enough of it. */
+  private static List<Interval> kept(List<Interval> intervals) {
+    long shortest = intervals.stream().filter(WindowFigures::isShortest).count();
+    return shortest <= MOST_SHORTEST
+        ? intervals
+        : intervals.stream().filter(i -> !isShortest(i)).toList();
+  }
+
+  private static boolean isShortest(Interval i) {
+    return i.length() == Interval.Length.VERY_SHORT;
   }
 
   private static HarmonicGroups groups(Groups g) {

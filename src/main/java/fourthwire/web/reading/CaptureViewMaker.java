@@ -35,7 +35,9 @@ final class CaptureViewMaker {
   ReadingPage.CaptureView of(CaptureResult c) {
     CapturePictures pictures = new CapturePictures(words, names);
     List<NodePage.Grid> tables = new ArrayList<>(List.of(balance(c)));
-    c.windows().filter(w -> !w.intervals().isEmpty()).ifPresent(w -> tables.add(intervals(w)));
+    c.windows()
+        .filter(w -> w.intervals().stream().anyMatch(i -> i.length().equals(SHORTEST)))
+        .ifPresent(w -> tables.add(intervals(w)));
     return new ReadingPage.CaptureView(
         pictures.waveforms(c, ".v", "V", "reading.waves.voltage.alternative"),
         pictures.waveforms(c, ".i", "A", "reading.waves.current.alternative"),

@@ -276,4 +276,24 @@ class CaptureAnalysisTest {
         .isInstanceOf(NoFundamentalException.class)
         .hasMessageContaining("at least one cycle");
   }
+
+  /** Three samples a cycle resolve the fundamental only, and no window of the standard. */
+  @Test
+  void aSparseRecordHasItsFundamentalAndNoWindows() {
+    CaptureResult r = result(capture(151, 2, Map.of("L1.v", sine(230, 50, 20))), 50);
+    assertThat(r.windows()).isEmpty();
+    assertThat(r.basis()).contains("too sparse");
+    assertThat(value(r.voltage().get("L1").fundamentalV())).isEqualTo(230, within(0.05));
+  }
+
+  /** What the basis says is resolved is what the spectrum holds. */
+  @Test
+  void ordersBeyondTheSamplingAreZeroAndNotClaimed() {
+    Map<String, DoubleUnaryOperator> s = new LinkedHashMap<>();
+    s.put("L1.v", sum(sine(230, 50, 0), sine(4, 650, 0)));
+    CaptureResult r = result(capture(1600, 1, s), 50);
+    assertThat(r.basis()).contains("orders 1 to 15");
+    assertThat(r.voltageSpectrum().get("L1").magnitude(13)).isEqualTo(4, within(1e-3));
+    assertThat(r.voltageSpectrum().get("L1").magnitude(16)).isZero();
+  }
 }

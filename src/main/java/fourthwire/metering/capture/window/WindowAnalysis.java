@@ -95,6 +95,15 @@ public final class WindowAnalysis {
     return sums;
   }
 
+  /**
+   * Highest order that windows of a sampling can hold, at most 50; below 1 where they hold none.
+   *
+   * @param samplesPerCycle of the fundamental
+   */
+  public static int ordersAt(double samplesPerCycle) {
+    return WindowPlan.orders(samplesPerCycle);
+  }
+
   /** Full windows. */
   public int windows() {
     return plan.windows();
