@@ -31,8 +31,7 @@ class RectifierSurveyTest {
 
   static Stream<RectifierReference> cases() {
     return RectifierReference.all().stream()
-        .filter(c -> !c.row().getField("emf").contains("a"))
-        .filter(c -> c.threePhase() || c.number("L_dc_uH") == 0);
+        .filter(c -> !c.row().getField("emf").contains("a"));
   }
 
   @ParameterizedTest
@@ -100,7 +99,8 @@ class RectifierSurveyTest {
     return switch (c.row().getField("kind")) {
       case "3ph_sixpulse" -> LoadKind.SIX_PULSE;
       case "3ph_twelvepulse" -> LoadKind.TWELVE_PULSE;
-      default -> LoadKind.CAPACITOR_INPUT;
+      default ->
+          c.number("L_dc_uH") > 0 ? LoadKind.CAPACITOR_INPUT_CHOKE : LoadKind.CAPACITOR_INPUT;
     };
   }
 
@@ -120,7 +120,9 @@ class RectifierSurveyTest {
         some(1.2),
         some(1e-3),
         three ? some(c.number("Lb_uH") * 1e-6 * percentPerHenry / bridges) : none,
-        three ? some(c.number("L_dc_uH") * 1e-6 * percentPerHenry) : none,
+        three || c.number("L_dc_uH") > 0
+            ? some(c.number("L_dc_uH") * 1e-6 * percentPerHenry)
+            : none,
         none,
         none,
         none,

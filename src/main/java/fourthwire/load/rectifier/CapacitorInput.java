@@ -14,7 +14,8 @@ import fourthwire.load.model.LoadSolver;
  *
  * <p>{@code capacitor-input-choke} is the same with a choke in the lead or behind the bridge; the
  * latter is in series with the former as long as its current ends before the voltage behind the
- * bridge crosses zero, and is refused beyond.
+ * bridge crosses zero. Where it flows on, both pairs of diodes carry it together and commutate
+ * ({@link TwoPathBridge}).
  *
  * <p>A small capacitor behind a choke may have no stable state that repeats in mirrored halves; the
  * one that repeats after the whole cycle, with even orders, is then found, or it is said that none

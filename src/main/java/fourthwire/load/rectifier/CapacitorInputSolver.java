@@ -4,6 +4,7 @@ import fourthwire.load.model.LoadSolver;
 import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.load.model.PortSpectra;
 import java.util.Locale;
+import java.util.Optional;
 
 /**
  * Periodic steady state of the capacitor-input rectifier, by shooting.
@@ -18,6 +19,9 @@ import java.util.Locale;
  * circle: Floquet). Where the state that repeats in mirrored halves is not, the circuit goes to one
  * that repeats only after the whole cycle, with even orders in its current; it is looked for, and
  * refused where it does not settle either.
+ *
+ * <p>Where the march shows that a choke behind the bridge drives its current past the voltage's
+ * crossing, one path is not enough and both pairs of diodes are followed ({@link TwoPathSolver}).
  *
  * <p>An instance is a few numbers (the last state, to start from); the workspace is the thread's.
  */
@@ -57,10 +61,13 @@ final class CapacitorInputSolver implements LoadSolver {
   private static final int MOST_STEPS = 40;
   private static final int MOST_SUBSTITUTIONS = 200;
 
-  private static final String FREEWHEELS =
-      "the direct-current choke of a capacitor-input rectifier carries its current past the"
-          + " voltage's crossing, which is not modelled: enter a smaller dc_choke_percent, or the"
-          + " choke as line_choke_percent";
+  private static final String UNSETTLED =
+      "the source cannot give what the load asks for, or the current does not repeat from cycle to"
+          + " cycle";
+
+  private static final String HUNTS =
+      "its choke and capacitor swing against its constant power, and the current does not repeat from"
+          + " cycle to cycle; more capacitance or a smaller choke behind the bridge settles it";
 
   private static final ThreadLocal<PairBridge> WORKSPACE = ThreadLocal.withInitial(PairBridge::new);
 
@@ -76,6 +83,9 @@ final class CapacitorInputSolver implements LoadSolver {
   private double lastV;
   private double lastI;
 
+  /** Follows both pairs of diodes where the choke's current was found to pass the crossing. */
+  private Optional<TwoPathSolver> twoPaths = Optional.empty();
+
   CapacitorInputSolver(BridgeLoad load, double frequencyHz) {
     this.load = load;
     this.frequencyHz = frequencyHz;
@@ -85,33 +95,47 @@ final class CapacitorInputSolver implements LoadSolver {
   public void solve(PortSpectra emf, double seriesOhm, double seriesHenry, PortSpectra current) {
     bridge = WORKSPACE.get();
     prepare(emf, seriesOhm, seriesHenry);
-    if (!(repeats() && stable()) && !(halfWave && repeatsAfterWholeCycle())) {
-      forget();
-      throw new NoSteadyStateException(refusal());
+    if (twoPaths.isEmpty() && onePath(current)) {
+      return;
     }
-    if (bridge.freewheels) {
+    if (twoPaths.isEmpty()
+        || !twoPaths.get().solve(emf, peak, seriesOhm, seriesHenry, current)) {
+      String reason = refusal();
       forget();
-      throw new NoSteadyStateException(FREEWHEELS);
+      throw new NoSteadyStateException(reason);
     }
-    bridge.trace.harmonics(halfWave, current.re[0], current.im[0]);
+  }
+
+  /** Whether one path at a time gives the current; else both are followed from here on. */
+  private boolean onePath(PortSpectra current) {
+    boolean found = repeats() && stable() || halfWave && repeatsAfterWholeCycle();
+    if (load.dcHenry() > 0 && (!found || bridge.freewheels)) {
+      twoPaths = Optional.of(new TwoPathSolver(load, frequencyHz));
+      return false;
+    }
+    if (found) {
+      bridge.trace.harmonics(halfWave, current.re[0], current.im[0]);
+    }
+    return found;
   }
 
   /** Forgets the last state: the next solution starts cold. */
   void forget() {
     lastV = 0;
     lastI = 0;
+    twoPaths = Optional.empty();
   }
 
   private String refusal() {
     return String.format(
         Locale.ROOT,
         "a capacitor-input rectifier of %.4g W finds no steady state at %.4g V peak behind %.4g ohm"
-            + " and %.4g mH: the source cannot give what the load asks for, or the current does not"
-            + " repeat from cycle to cycle",
+            + " and %.4g mH: %s",
         load.powerW(),
         peak,
         bridge.path.resistance,
-        bridge.path.inductance / (frequencyHz * CycleTable.CELLS) * 1e3);
+        bridge.path.inductance / (frequencyHz * CycleTable.CELLS) * 1e3,
+        twoPaths.isPresent() && twoPaths.get().hunts() ? HUNTS : UNSETTLED);
   }
 
   private void prepare(PortSpectra emf, double seriesOhm, double seriesHenry) {
@@ -301,11 +325,16 @@ final class CapacitorInputSolver implements LoadSolver {
 
   /** Whether that record is half a cycle, whose mirror image is the other. */
   boolean halfWave() {
-    return halfWave;
+    return twoPaths.map(TwoPathSolver::halfWave).orElse(halfWave);
   }
 
-  /** The recorded current of the last solution on this thread: amps at positions in cells. */
-  PulseTrace trace() {
-    return bridge.trace;
+  /** How many recorded currents make up the port's, the second counting against the first. */
+  int paths() {
+    return twoPaths.isPresent() ? 2 : 1;
+  }
+
+  /** A recorded current of the last solution on this thread: amps at positions in cells. */
+  PulseTrace trace(int path) {
+    return twoPaths.map(both -> both.trace(path)).orElse(bridge.trace);
   }
 }

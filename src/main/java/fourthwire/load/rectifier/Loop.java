@@ -26,6 +26,21 @@ final class Loop {
   int out;
   int sign;
 
+  /** Which bridge it runs through; those that run through the same share a diode. */
+  int bridge;
+
+  private final int linesOfOne;
+
+  /**
+   * A loop yet to be set.
+   *
+   * @param linesOfOne how many lines in sequence belong to one bridge: 3; 1 where every loop has a
+   *     pair of diodes to itself
+   */
+  Loop(int linesOfOne) {
+    this.linesOfOne = linesOfOne;
+  }
+
   private static double angle(int line) {
     return Math.toRadians(30 * (line / 3) - 120 * (line % 3));
   }
@@ -34,11 +49,7 @@ final class Loop {
     this.in = in;
     this.out = out;
     this.sign = sign;
-  }
-
-  /** Which bridge it runs through, 0 or 1. */
-  int bridge() {
-    return in / 3;
+    bridge = in / linesOfOne;
   }
 
   /** The scalar product with another loop: 2 with itself, 1 with one that shares a line. */

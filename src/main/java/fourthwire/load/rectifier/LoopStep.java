@@ -16,7 +16,7 @@ final class LoopStep {
   private static final double MOMENT = 1e-3;
 
   /** Loops, those of a bridge next to each other. */
-  final Loop[] loop = {new Loop(), new Loop(), new Loop(), new Loop()};
+  final Loop[] loop = new Loop[MOST];
 
   /** How many of them conduct. */
   int n;
@@ -59,6 +59,11 @@ final class LoopStep {
   private double fv;
   private double uv;
   private double c;
+
+  /** As {@link Loop#Loop}. */
+  LoopStep(int linesOfOne) {
+    java.util.Arrays.setAll(loop, a -> new Loop(linesOfOne));
+  }
 
   /**
    * Takes the circuit.
@@ -103,19 +108,19 @@ final class LoopStep {
   }
 
   private double mutualOhm(Loop a, Loop b) {
-    return (a.bridge() == b.bridge() ? ownOhm + sourceOhm : sourceOhm) * a.along(b) + dcOhm;
+    return (a.bridge == b.bridge ? ownOhm + sourceOhm : sourceOhm) * a.along(b) + dcOhm;
   }
 
   private double mutualHenry(Loop a, Loop b) {
-    return (a.bridge() == b.bridge() ? ownHenry + sourceHenry : sourceHenry) * a.along(b) + dcHenry;
+    return (a.bridge == b.bridge ? ownHenry + sourceHenry : sourceHenry) * a.along(b) + dcHenry;
   }
 
   /** All loops of this one's bridge together: the current in their common diode. */
   private double shared(int a, double[] amps) {
     double sum = amps[a];
-    if (a > 0 && loop[a - 1].bridge() == loop[a].bridge()) {
+    if (a > 0 && loop[a - 1].bridge == loop[a].bridge) {
       sum += amps[a - 1];
-    } else if (a + 1 < n && loop[a + 1].bridge() == loop[a].bridge()) {
+    } else if (a + 1 < n && loop[a + 1].bridge == loop[a].bridge) {
       sum += amps[a + 1];
     }
     return sum;
@@ -153,7 +158,7 @@ final class LoopStep {
       double common = conductance(shared(a, amps));
       for (int b = 0; b <= a; b++) {
         double sum = weight * henry[a * MOST + b] + ohm[a * MOST + b] + perC;
-        if (loop[a].bridge() == loop[b].bridge()) {
+        if (loop[a].bridge == loop[b].bridge) {
           sum += a == b ? common + conductance(amps[a]) : common;
         }
         for (int m = 0; m < b; m++) {
@@ -288,7 +293,7 @@ final class LoopStep {
     for (int a = 0; a < n; a++) {
       double r = mutualOhm(idle, loop[a]);
       double drop = r + mutualHenry(idle, loop[a]) / MOMENT;
-      if (loop[a].bridge() == idle.bridge()) {
+      if (loop[a].bridge == idle.bridge) {
         drop += common;
       }
       sum -= r * x[a] + drop * u[a];

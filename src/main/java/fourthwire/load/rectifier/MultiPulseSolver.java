@@ -72,7 +72,7 @@ final class MultiPulseSolver implements LoadSolver {
     this.bridges = bridges;
     this.load = load;
     this.frequencyHz = frequencyHz;
-    newton = new StateNewton(3 * bridges, this::map);
+    newton = new StateNewton(3 * bridges, 3, this::map);
   }
 
   @Override

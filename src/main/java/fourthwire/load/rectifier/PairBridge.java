@@ -32,7 +32,7 @@ final class PairBridge {
 
   /**
    * Whether in the last recorded march the choke behind the bridge drove its current on through
-   * both legs: the voltage behind the bridge would have been negative, which is outside the model.
+   * both legs: the voltage behind the bridge would have been negative, which one path can't tell.
    */
   boolean freewheels;
 

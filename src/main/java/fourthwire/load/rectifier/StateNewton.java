@@ -29,6 +29,9 @@ final class StateNewton {
   private static final int MOST_TURNS = 40;
   private static final int MOST_UNKNOWNS = 5;
 
+  /** Powers of the Jacobian to 2 to this many tell its largest multiplier to 0.1 %. */
+  private static final int SQUARINGS = 14;
+
   /** A kept Jacobian that brings the defect down by less than this is taken anew. */
   private static final double SLOW = 0.3;
 
@@ -37,6 +40,7 @@ final class StateNewton {
 
   private final Period period;
   private final int volts;
+  private final int linesOfOne;
   private final double[] image;
   private final double[] nudged;
   private final double[] nudgedImage;
@@ -63,9 +67,12 @@ final class StateNewton {
    * Of bridges.
    *
    * @param lines how many lines they have together
+   * @param linesOfOne how many of these in sequence add up to zero; 1 where each current is free,
+   *     and positive
    */
-  StateNewton(int lines, Period period) {
+  StateNewton(int lines, int linesOfOne, Period period) {
     this.period = period;
+    this.linesOfOne = linesOfOne;
     volts = lines;
     state = new double[lines + 1];
     image = new double[lines + 1];
@@ -89,6 +96,52 @@ final class StateNewton {
   /** The period has changed: what is known of its Jacobian does not hold. */
   void forget() {
     jacobianOf = -1;
+  }
+
+  /**
+   * How a small departure from the state, which has closed, grows from period to period: the largest
+   * size of the map's multipliers (Floquet), from high powers of its Jacobian; infinite where a
+   * neighbouring state does not get through the period.
+   */
+  double largestMultiplier() {
+    if (!period.map(state, image)) {
+      return Double.POSITIVE_INFINITY;
+    }
+    unknowns();
+    if (!differences()) {
+      return Double.POSITIVE_INFINITY;
+    }
+    double[][] power = new double[size][size];
+    for (int a = 0; a < size; a++) {
+      for (int b = 0; b < size; b++) {
+        power[a][b] = jacobian[a][b] + (a == b ? 1 : 0);
+      }
+    }
+    double log = 0;
+    double share = 1;
+    for (int n = 0; n < SQUARINGS; n++) {
+      double norm = 0;
+      for (double[] row : power) {
+        norm = Math.max(norm, norm(row));
+      }
+      log += share * Math.log(norm);
+      power = square(power, norm);
+      share /= 2;
+    }
+    return Math.exp(log);
+  }
+
+  private static double[][] square(double[][] a, double norm) {
+    int n = a.length;
+    double[][] square = new double[n][n];
+    for (int r = 0; r < n; r++) {
+      for (int c = 0; c < n; c++) {
+        for (int k = 0; k < n; k++) {
+          square[r][c] += a[r][k] / norm * (a[k][c] / norm);
+        }
+      }
+    }
+    return square;
   }
 
   /** Moves the state until it closes on itself; false where it does not. */
@@ -217,11 +270,9 @@ final class StateNewton {
   private void unknowns() {
     size = 0;
     lines = 0;
-    for (int k = 0; k < volts; k += 3) {
-      double balance =
-          Math.signum(state[k]) + Math.signum(state[k + 1]) + Math.signum(state[k + 2]);
-      int sign = balance >= 0 ? 1 : -1;
-      for (int m = k; m < k + 3; m++) {
+    for (int k = 0; k < volts; k += linesOfOne) {
+      int sign = balance(k) >= 0 ? 1 : -1;
+      for (int m = k; m < k + linesOfOne; m++) {
         lines = 3 * lines + 1 + (int) Math.signum(state[m]);
         if (state[m] * sign > 0) {
           unknown[size++] = m;
@@ -231,11 +282,19 @@ final class StateNewton {
     unknown[size++] = volts;
   }
 
+  private double balance(int first) {
+    double sum = 0;
+    for (int k = first; k < first + linesOfOne; k++) {
+      sum += Math.signum(state[k]);
+    }
+    return sum;
+  }
+
   /** Changes one unknown of the nudged state, keeping the bridge's sum of currents zero. */
   private void shift(int index, double step) {
     if (index < volts) {
-      int first = index - index % 3;
-      for (int k = first; k < first + 3; k++) {
+      int first = index - index % linesOfOne;
+      for (int k = first; k < first + linesOfOne; k++) {
         if (nudged[k] * nudged[index] < 0) {
           nudged[k] -= step;
           break;

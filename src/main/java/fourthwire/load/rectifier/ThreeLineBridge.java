@@ -11,58 +11,18 @@ import fourthwire.load.model.PortSpectra;
  * that current would grow; it leaves where its current falls through the threshold, handing it to
  * the line that stays. Workspace, not thread-safe.
  */
-final class ThreeLineBridge {
-  /** First steps after a change, as shares of the way to a node: the current starts like t². */
-  private static final double[] GRADING = {0.02, 0.06, 0.16, 0.36, 1};
-
-  private static final int MOST_SWITCHINGS = 600;
-  private static final double EVENT_CELLS = 1e-7;
-
-  /**
-   * After a line has left one may join only this many cells later, unless its margin is clear: a
-   * current of about the threshold's would else come and go without end.
-   */
-  private static final double REST_OF_LEAVER = 0.1;
-
-  final ThreeLineEmf emf = new ThreeLineEmf();
-  final PulseTrace[] trace = new PulseTrace[6];
-  final PathStep pair = new PathStep();
-
+final class ThreeLineBridge extends LoopBridge {
   /** Space for the spectra of a second bridge's windings. */
   final PortSpectra second = new PortSpectra(3);
 
-  /** Signed line currents, 0 where a line does not conduct; of a second bridge from 3 on. */
-  final double[] line = new double[6];
-
-  /** Capacitor voltage. */
-  double v;
-
-  /** Capacitor voltage under which the load counts as having emptied it. */
-  double floorV;
-
-  /** Line currents at the start of a step. */
-  private final double[] before = new double[6];
-
-  private final LoopStep loops = new LoopStep();
-  private final Loop idle = new Loop();
-  private final Loop joiner = new Loop();
-  private final Discharge discharge = new Discharge(this::spread, pair);
-  private final EventFinder.Margin shortfall = this::shortfall;
-  private final EventFinder.Margin joinMargin = this::marginAfter;
+  private final Loop idle = new Loop(3);
+  private final Loop joiner = new Loop(3);
 
   private int bridges = 1;
-  private boolean recording;
-  private int switchings;
-  private boolean justLeft;
-  private double joinsFrom;
 
-  /** Position in cells, and the end of the march. */
-  private double u;
-
-  private double to;
-
+  /** Signed line currents, 0 where a line does not conduct; of a second bridge from 3 on. */
   ThreeLineBridge() {
-    java.util.Arrays.setAll(trace, k -> new PulseTrace());
+    super(6, 3);
   }
 
   /**
@@ -89,101 +49,26 @@ final class ThreeLineBridge {
     loops.threshold(threshold);
   }
 
+  @Override
   int lines() {
     return 3 * bridges;
   }
 
-  private double spread(double position) {
+  @Override
+  double drive(double position) {
     double spread = emf.spread(0, position);
     return bridges == 1 ? spread : Math.max(spread, emf.spread(1, position));
   }
 
-  /**
-   * Marches over a number of cells from a position, starting with {@link #line} and {@link #v} as
-   * they stand.
-   *
-   * @return false where the load empties the capacitor, or the current breaks up without end
-   */
-  boolean march(double from, double cells, boolean record) {
-    recording = record;
-    switchings = 0;
-    justLeft = false;
-    joinsFrom = from;
-    u = from;
-    to = from + cells;
-    for (int k = 0; k < lines() && record; k++) {
-      trace[k].clear();
-    }
-    int earlier = conducting(0, lines());
-    while (u < to && v > floorV && switchings <= MOST_SWITCHINGS) {
-      int now = conducting(0, lines());
-      if (now == 0) {
-        rest();
-      } else {
-        begin();
-        conduct(now > earlier);
-      }
-      earlier = now;
-    }
-    return u >= to && v > floorV;
+  @Override
+  void turnOn() {
+    int b = bridges == 1 || emf.spread(0, u) >= emf.spread(1, u) ? 0 : 1;
+    line[emf.highest(b, u)] = pair.threshold;
+    line[emf.lowest(b, u)] = -pair.threshold;
   }
 
-  private int conducting(int from, int to) {
-    int count = 0;
-    for (int k = from; k < to; k++) {
-      count += line[k] != 0 ? 1 : 0;
-    }
-    return count;
-  }
-
-  private void begin() {
-    switchings++;
-    for (int k = 0; k < lines() && recording; k++) {
-      if (line[k] != 0) {
-        trace[k].start(u, line[k]);
-      }
-    }
-  }
-
-  private void rest() {
-    if (!discharge.run(u, v, justLeft, to, floorV)) {
-      v = 0;
-      return;
-    }
-    justLeft = false;
-    u = discharge.u;
-    v = discharge.v;
-    if (discharge.turnedOn) {
-      int b = bridges == 1 || emf.spread(0, u) >= emf.spread(1, u) ? 0 : 1;
-      line[emf.highest(b, u)] = pair.threshold;
-      line[emf.lowest(b, u)] = -pair.threshold;
-    }
-  }
-
-  /** Steps until the set of conducting lines changes. */
-  private void conduct(boolean fresh) {
-    arrange();
-    System.arraycopy(loops.from, 0, loops.x, 0, loops.n);
-    loops.v = v;
-    if (joins(margin(u), u)) {
-      join();
-      return;
-    }
-    double base = u;
-    double span = Math.min(pair.nextNode(pair.nextNode(u)), to) - u;
-    int graded = fresh ? 0 : GRADING.length;
-    boolean same = true;
-    while (same && u < to && v > floorV) {
-      double next =
-          graded < GRADING.length
-              ? base + GRADING[graded++] * span
-              : Math.min(pair.nextNode(u), to);
-      same = step(u < joinsFrom ? Math.min(next, joinsFrom) : next);
-    }
-  }
-
-  /** The loops in which the conducting lines share the current. */
-  private void arrange() {
+  @Override
+  void arrange() {
     loops.n = 0;
     for (int b = 0; b < bridges; b++) {
       int k = 3 * b;
@@ -205,76 +90,25 @@ final class ThreeLineBridge {
 
   /** The line of a loop's bridge that is not in it. */
   private static int third(Loop loop) {
-    return 9 * loop.bridge() + 3 - loop.in - loop.out;
+    return 9 * loop.bridge + 3 - loop.in - loop.out;
   }
 
-  /** One step; false where the set of conducting lines has changed. */
-  private boolean step(double next) {
-    double h = next - u;
-    double missing = shortfall(h);
-    boolean leaves = missing > 0;
-    if (leaves) {
-      double short0 = pair.threshold - least(loops.from);
-      h = EventFinder.find(shortfall, 0, short0, h, missing, EVENT_CELLS, 1e-3 * pair.threshold);
-    }
-    double margin = margin(u + h);
-    boolean joins = joins(margin, u + h);
-    if (joins) {
-      h = joinAfter(h, margin);
-      leaves = false;
-    }
-    put(leaves || joins ? u + h : next);
-    if (leaves) {
-      leave();
-    } else if (joins) {
-      join();
-    }
-    return !leaves && !joins;
-  }
-
-  private double joinAfter(double h, double margin) {
-    System.arraycopy(loops.from, 0, loops.x, 0, loops.n);
-    loops.v = v;
-    double atStart = margin(u);
-    if (atStart < 0 && u >= joinsFrom) {
-      return EventFinder.find(joinMargin, 0, atStart, h, margin, EVENT_CELLS, 0);
-    }
-    marginAfter(h);
-    return h;
-  }
-
-  /** Takes over what the last step has come to, which ends at a position. */
-  private void put(double end) {
-    System.arraycopy(line, 0, before, 0, lines());
-    double chargePerAmp = loops.chargePerAmp(end - u, v);
-    u = end;
-    v = loops.v;
+  @Override
+  void carry() {
     for (int a = 0; a < loops.n; a++) {
       line[loops.loop[a].out] = 0;
     }
     for (int a = 0; a < loops.n; a++) {
       Loop loop = loops.loop[a];
-      loops.from[a] = loops.x[a];
       line[loop.in] = loop.sign * loops.x[a];
       line[loop.out] -= line[loop.in];
     }
-    for (int k = 0; k < lines() && recording; k++) {
-      if (line[k] != 0) {
-        trace[k].next(u, line[k], chargePerAmp * (before[k] + line[k]));
-      }
-    }
   }
 
-  /** The smallest current leaves its line: to the line that stays, or with its whole pair. */
-  private void leave() {
-    int gone = 0;
-    for (int a = 1; a < loops.n; a++) {
-      if (loops.x[a] < loops.x[gone]) {
-        gone = a;
-      }
-    }
-    Loop loop = loops.loop[gone];
-    int k = 3 * loop.bridge();
+  /** To the line that stays, or with its whole pair. */
+  @Override
+  void leave(Loop loop) {
+    int k = 3 * loop.bridge;
     double rest = line[loop.in];
     line[loop.in] = 0;
     if (conducting(k, k + 3) == 2) {
@@ -282,49 +116,17 @@ final class ThreeLineBridge {
     } else {
       line[loop.out] = 0;
     }
-    justLeft = loops.n == 1;
-    joinsFrom = u + REST_OF_LEAVER;
-  }
-
-  /** Steps by h cells; by how much the smallest current falls short of the threshold then. */
-  private double shortfall(double h) {
-    if (loops.n > 1) {
-      loops.step(emf, u, h, v);
-    } else {
-      Loop one = loops.loop[0];
-      pair.step(
-          h, loops.from[0], v, one.drive(emf, u), one.driveSlope(emf, u), one.drive(emf, u + h));
-      loops.x[0] = pair.i;
-      loops.v = pair.v;
-    }
-    return pair.threshold - least(loops.x);
-  }
-
-  private double least(double[] amps) {
-    double least = amps[0];
-    for (int a = 1; a < loops.n; a++) {
-      least = Math.min(least, amps[a]);
-    }
-    return least;
-  }
-
-  private boolean joins(double margin, double at) {
-    return margin >= (at < joinsFrom ? pair.slopeV : 0);
-  }
-
-  private double marginAfter(double h) {
-    shortfall(h);
-    return margin(u + h);
   }
 
   /** The margin of the idle line that is the most willing to join, which becomes the joiner. */
-  private double margin(double at) {
+  @Override
+  double margin(double at) {
     double most = Double.NEGATIVE_INFINITY;
     if (loops.n < 2 * bridges) {
       loops.rates(emf, at);
       for (int b = 0, a = 0; b < bridges; b++) {
         int first = a;
-        while (a < loops.n && loops.loop[a].bridge() == b) {
+        while (a < loops.n && loops.loop[a].bridge == b) {
           a++;
         }
         if (a == first) {
@@ -368,8 +170,8 @@ final class ThreeLineBridge {
     return atLeast;
   }
 
-  /** Lets the joiner in with a threshold's share of the current. */
-  private void join() {
+  @Override
+  void join() {
     double amps = pair.threshold;
     double enter = line[joiner.in];
     double leave = line[joiner.out];

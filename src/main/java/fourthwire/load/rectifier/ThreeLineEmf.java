@@ -44,6 +44,16 @@ final class ThreeLineEmf {
     }
   }
 
+  /** Samples one port as line 0 against line 1, which stays at zero. */
+  void fillPort(PortSpectra spectra) {
+    line[0].fill(spectra.re[0], spectra.im[0]);
+  }
+
+  /** Whether half cycles of the port mirror each other. */
+  boolean portHalfWave() {
+    return line[0].halfWave;
+  }
+
   private void takeZeroSequenceOut(PortSpectra s) {
     for (int h = 1; h <= Spectrum.HIGHEST_ORDER; h++) {
       double meanRe = (s.re[0][h] + s.re[1][h] + s.re[2][h]) / 3;

@@ -5,8 +5,8 @@
  * fourthwire.load.rectifier.SixPulse} and {@link fourthwire.load.rectifier.TwelvePulse}, made from
  * a {@link fourthwire.load.rectifier.BridgeLoad}. Inside: {@code CycleTable} and {@code
  * ThreeLineEmf} hold the driving voltage; {@code PathStep} takes one step of a single path, {@code
- * LoopStep} of several that share a current; {@code PairBridge} and {@code ThreeLineBridge} string
- * steps together from event to event; the solvers close the cycle; {@code PathTangent} carries a
+ * LoopStep} of several that share a current; {@code PairBridge} and {@code LoopBridge} ({@code
+ * TwoPathBridge}, {@code ThreeLineBridge}) string steps together from event to event; the solvers close the cycle; {@code PathTangent} carries a
  * march's derivatives; {@code PulseTrace} and {@code FourierSum} take the harmonics. May use {@code
  * quantity} and {@code load.model}.
  *

@@ -152,6 +152,35 @@ record RandomRectifier(
     return emf;
   }
 
+  /**
+   * A supply with a choke of 5 to 100 % behind its bridge: 5 W to 5 kW at 20 to 100 % load, 0.5 to 10
+   * µF/W, behind 0.01 to 10 %; clean, odd orders, or even orders as well. All resistance lies in the
+   * diodes, so that each path's loss is its own current's.
+   */
+  static RandomRectifier behindChoke(long seed) {
+    Random r = new Random(seed * 32452843 + 11);
+    double watts = between(r, 5, 5e3);
+    double volts = r.nextBoolean() ? 230 : 120;
+    double hertz = r.nextBoolean() ? 50 : 60;
+    double base = volts * volts / watts;
+    BridgeLoad load =
+        new BridgeLoad(
+            watts * between(r, 0.2, 1),
+            watts * between(r, 0.5e-6, 10e-6),
+            0,
+            0,
+            0,
+            base * between(r, 0.05, 1) / (2 * Math.PI * hertz),
+            new Diode(3e-11, 1.2, base * between(r, 1e-4, 0.03)));
+    PortSpectra emf = emf(r, 1, volts);
+    for (int h = 2; h <= 4 && r.nextInt(3) == 0; h += 2) {
+      emf.re[0][h] = volts * 0.03 * (r.nextDouble() - 0.5);
+      emf.im[0][h] = volts * 0.03 * (r.nextDouble() - 0.5);
+    }
+    RandomRectifier given = behindSource(seed, r, load, hertz, emf, base);
+    return new RandomRectifier(seed, load, hertz, emf, 0, given.henry());
+  }
+
   private static RandomRectifier behindSource(
       long seed, Random r, BridgeLoad load, double hertz, PortSpectra emf, double base) {
     double ohms = base * between(r, 1e-4, 0.1);

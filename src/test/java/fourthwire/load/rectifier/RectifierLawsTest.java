@@ -7,6 +7,8 @@ import static org.assertj.core.api.Assertions.within;
 import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.load.model.PortSpectra;
 import fourthwire.quantity.Spectrum;
+import java.util.Arrays;
+import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
 
@@ -61,7 +63,7 @@ class RectifierLawsTest {
         unsettled++;
         continue;
       }
-      check(given, current, port -> solver.trace(), 1, solver.halfWave() ? 2 : 1);
+      check(given, current, solver::trace, solver.paths(), solver.halfWave() ? 2 : 1);
     }
     assertThat(unsettled).as("supplies whose current does not settle").isLessThan(SETS / 50);
   }
@@ -84,6 +86,30 @@ class RectifierLawsTest {
       }
     }
     assertThat(converged).isGreaterThan(8_000);
+  }
+
+  @Test
+  void everyChokeBehindASinglePhaseBridgeFindsItsStateOrSaysWhy() {
+    int pastTheCrossing = 0;
+    int unsettled = 0;
+    for (int n = 0; n < 3_000; n++) {
+      RandomRectifier given = RandomRectifier.behindChoke(n);
+      CapacitorInputSolver solver = new CapacitorInputSolver(given.load(), given.hertz());
+      PortSpectra current = new PortSpectra(1);
+      try {
+        solver.solve(given.emf(), given.ohm(), given.henry(), current);
+      } catch (NoSteadyStateException none) {
+        assertThat(none).as(given.toString()).hasMessageContaining("finds no steady state");
+        unsettled++;
+        continue;
+      }
+      if (solver.paths() == 2) {
+        check(given, current, solver::trace, 2, solver.halfWave() ? 2 : 1);
+        pastTheCrossing++;
+      }
+    }
+    assertThat(pastTheCrossing).isGreaterThan(500);
+    assertThat(unsettled).as("that hunt against constant power").isLessThan(500);
   }
 
   private interface Traces {
@@ -122,17 +148,29 @@ class RectifierLawsTest {
     assertThat(fourier - lost).as("balance, " + given).isCloseTo(watts, within(1e-4 * watts));
   }
 
-  /** A port's, or that of a winding 30° ahead: the difference of two lines over √3. */
+  /**
+   * A port's (negative for the second path through its bridge), or that of a winding 30° ahead: the
+   * difference of two lines over √3.
+   */
   private static CycleTable emfOf(RandomRectifier given, int line) {
     PortSpectra emf = given.emf();
+    CycleTable table = new CycleTable();
+    if (emf.ports() == 1) {
+      double sign = 1 - 2 * line;
+      table.fill(scaled(emf.re[0], sign), scaled(emf.im[0], sign));
+      return table;
+    }
     double[] re = emf.re[line % 3].clone();
     double[] im = emf.im[line % 3].clone();
     for (int h = 1; h < re.length && line > 2; h++) {
       re[h] = (re[h] - emf.re[(line + 1) % 3][h]) / Math.sqrt(3);
       im[h] = (im[h] - emf.im[(line + 1) % 3][h]) / Math.sqrt(3);
     }
-    CycleTable table = new CycleTable();
     table.fill(re, im);
     return table;
+  }
+
+  private static double[] scaled(double[] a, double by) {
+    return Arrays.stream(a).map(x -> by * x).toArray();
   }
 }
