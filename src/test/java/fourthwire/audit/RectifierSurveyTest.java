@@ -30,8 +30,7 @@ class RectifierSurveyTest {
   private static final double STIFF_MVA = 1e7;
 
   static Stream<RectifierReference> cases() {
-    return RectifierReference.all().stream()
-        .filter(c -> !c.row().getField("emf").contains("a"));
+    return RectifierReference.all().stream().filter(c -> !c.row().getField("emf").contains("a"));
   }
 
   @ParameterizedTest

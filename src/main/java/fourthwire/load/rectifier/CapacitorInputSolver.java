@@ -66,8 +66,9 @@ final class CapacitorInputSolver implements LoadSolver {
           + " cycle";
 
   private static final String HUNTS =
-      "its choke and capacitor swing against its constant power, and the current does not repeat from"
-          + " cycle to cycle; more capacitance or a smaller choke behind the bridge settles it";
+      "its choke and capacitor swing against its constant power, and the current does not repeat"
+          + " from cycle to cycle; more capacitance or a smaller choke behind the bridge settles"
+          + " it";
 
   private static final ThreadLocal<PairBridge> WORKSPACE = ThreadLocal.withInitial(PairBridge::new);
 
@@ -98,8 +99,7 @@ final class CapacitorInputSolver implements LoadSolver {
     if (twoPaths.isEmpty() && onePath(current)) {
       return;
     }
-    if (twoPaths.isEmpty()
-        || !twoPaths.get().solve(emf, peak, seriesOhm, seriesHenry, current)) {
+    if (twoPaths.isEmpty() || !twoPaths.get().solve(emf, peak, seriesOhm, seriesHenry, current)) {
       String reason = refusal();
       forget();
       throw new NoSteadyStateException(reason);

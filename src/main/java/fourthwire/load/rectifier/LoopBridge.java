@@ -1,8 +1,8 @@
 package fourthwire.load.rectifier;
 
 /**
- * A bridge on one capacitor followed through time, whichever of its diodes conduct: a subclass knows
- * the loops of current that there are ({@link LoopStep}); this strings their steps together.
+ * A bridge on one capacitor followed through time, whichever of its diodes conduct: a subclass
+ * knows the loops of current that there are ({@link LoopStep}); this strings their steps together.
  *
  * <p>Each change of the conducting set is found as an event. A loop's current starts where, with a
  * diode's threshold current in it and the direct current unchanged, it would grow; it ends where it

@@ -99,9 +99,9 @@ final class StateNewton {
   }
 
   /**
-   * How a small departure from the state, which has closed, grows from period to period: the largest
-   * size of the map's multipliers (Floquet), from high powers of its Jacobian; infinite where a
-   * neighbouring state does not get through the period.
+   * How a small departure from the state, which has closed, grows from period to period: the
+   * largest size of the map's multipliers (Floquet), from high powers of its Jacobian; infinite
+   * where a neighbouring state does not get through the period.
    */
   double largestMultiplier() {
     if (!period.map(state, image)) {

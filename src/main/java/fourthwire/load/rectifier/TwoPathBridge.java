@@ -29,11 +29,7 @@ final class TwoPathBridge extends LoopBridge {
    * @param sourceHenry inductance likewise
    */
   void set(
-      double sourceOhm,
-      double sourceHenry,
-      BridgeLoad load,
-      double cellSeconds,
-      double threshold) {
+      double sourceOhm, double sourceHenry, BridgeLoad load, double cellSeconds, double threshold) {
     BridgeLoad bare =
         new BridgeLoad(
             load.powerW(), load.capacitanceF(), 0, 0, load.dcOhm(), load.dcHenry(), load.diode());

@@ -153,9 +153,9 @@ record RandomRectifier(
   }
 
   /**
-   * A supply with a choke of 5 to 100 % behind its bridge: 5 W to 5 kW at 20 to 100 % load, 0.5 to 10
-   * µF/W, behind 0.01 to 10 %; clean, odd orders, or even orders as well. All resistance lies in the
-   * diodes, so that each path's loss is its own current's.
+   * A supply with a choke of 5 to 100 % behind its bridge: 5 W to 5 kW at 20 to 100 % load, 0.5 to
+   * 10 µF/W, behind 0.01 to 10 %; clean, odd orders, or even orders as well. All resistance lies in
+   * the diodes, so that each path's loss is its own current's.
    */
   static RandomRectifier behindChoke(long seed) {
     Random r = new Random(seed * 32452843 + 11);
