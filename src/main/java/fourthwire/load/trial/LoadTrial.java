@@ -17,12 +17,16 @@ import java.util.List;
  * <p>The equipment's injected current is solved behind the source's R-L; where it also has a linear
  * part (an input filter, a locked rotor) the electromotive force that its injecting part sees is u
  * = V + Z·I, with V = (E - Z·I)/(1 + Z·Y) and I = I(u): a fixed point, which without a linear part
- * is E itself. Three lines are taken in symmetrical components, order by order. N units are one
+ * is E itself. A filter that rings with the source would drive the repetition apart; so each turn
+ * takes it that the injecting part answers a change of voltage like a conductance that draws its
+ * power, which leaves the fixed point where it is. Three lines are taken in symmetrical components, order by order. N units are one
  * unit N times as large, as everywhere.
  */
 public final class LoadTrial {
   /** Of the electromotive force's fundamental; an audit asks for 1e-5 of the nominal voltage. */
   private static final double TOLERANCE = 1e-6;
+
+  private static final Phasor ONE = new Phasor(1, 0);
 
   private final double frequencyHz;
   private final TrialSource source;
@@ -34,6 +38,7 @@ public final class LoadTrial {
   private final PortSpectra injected;
   private final Phasor[][] voltage;
   private final Phasor[][] current;
+  private double conductance;
 
   private LoadTrial(LoadRequest request, TrialSource source) {
     this.frequencyHz = request.frequencyHz();
@@ -94,13 +99,20 @@ public final class LoadTrial {
     Phasor[] i = sequences(injected, h);
     Phasor[] v = new Phasor[ports];
     Phasor[] total = new Phasor[ports];
-    Phasor[] u = new Phasor[ports];
+    Phasor[] u = sequences(seen, h);
     for (int s = 0; s < ports; s++) {
       Phasor admittance = new Phasor(y[2 * s], y[2 * s + 1]);
       Phasor drop = z.times(i[s]);
-      v[s] = e[s].minus(drop).over(new Phasor(1, 0).plus(z.times(admittance)));
+      Phasor ring = ONE.plus(z.times(admittance));
+      v[s] = e[s].minus(drop).over(ring);
       total[s] = i[s].plus(admittance.times(v[s]));
-      u[s] = v[s].plus(drop);
+      if (h == 1 && s == 0) {
+        conductance = conductance(v[s], i[s]);
+      }
+      // what a change of u brings back through the linear part, were the rest a conductance
+      Phasor answer = new Phasor(conductance, 0).over(ONE.plus(z.times(conductance)));
+      Phasor echo = z.times(z).times(admittance).over(ring).times(answer);
+      u[s] = v[s].plus(drop).minus(echo.times(u[s])).over(ONE.minus(echo));
     }
     for (int port = 0; port < ports; port++) {
       voltage[port][h] = line(v, port);
@@ -109,6 +121,14 @@ public final class LoadTrial {
       next.re[port][h] = seenNext.re();
       next.im[port][h] = seenNext.im();
     }
+  }
+
+  /** What the injecting part draws at its terminals as a conductance, siemens. */
+  private static double conductance(Phasor volts, Phasor amps) {
+    double square = volts.re() * volts.re() + volts.im() * volts.im();
+    return square > 0
+        ? Math.max(0, (volts.re() * amps.re() + volts.im() * amps.im()) / square)
+        : 0;
   }
 
   /** Positive, negative, zero sequence of three ports; of one port itself. */

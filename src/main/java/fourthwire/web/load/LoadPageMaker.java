@@ -19,13 +19,13 @@ import fourthwire.web.panel.NodePage.Grid;
 import fourthwire.web.support.Numbers;
 import fourthwire.web.support.Words;
 import java.util.ArrayList;
-import java.util.Comparator;
 import java.util.EnumMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.function.IntPredicate;
 import java.util.stream.IntStream;
 
 /** Answers one question: solves it, draws it, says it. Figures are of one unit. */
@@ -224,21 +224,23 @@ final class LoadPageMaker {
         : of;
   }
 
-  /** The usual odd orders, and others that flow, strongest first; the fundamental stands apart. */
+  /** The usual odd orders up to the last that flows, and others that flow; the lowest of them. */
   private List<Integer> drawn(Spectrum current) {
     double strongest =
         IntStream.rangeClosed(2, Spectrum.HIGHEST_ORDER)
             .mapToDouble(current::magnitude)
             .max()
             .orElse(0);
+    IntPredicate flows = h -> current.magnitude(h) > 0.01 * strongest;
+    int last =
+        IntStream.rangeClosed(USUAL_HIGHEST, Spectrum.HIGHEST_ORDER)
+            .filter(h -> h == USUAL_HIGHEST || flows.test(h))
+            .max()
+            .orElseThrow();
     return IntStream.rangeClosed(2, Spectrum.HIGHEST_ORDER)
-        .filter(h -> usual(h) && h <= USUAL_HIGHEST || current.magnitude(h) >= 0.01 * strongest)
-        .boxed()
-        .sorted(
-            Comparator.comparing((Integer h) -> !(usual(h) && h <= USUAL_HIGHEST))
-                .thenComparing(h -> -current.magnitude(h)))
+        .filter(h -> usual(h) && h <= last || flows.test(h))
         .limit(MOST_ORDERS)
-        .sorted()
+        .boxed()
         .toList();
   }
 

@@ -16,6 +16,7 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.EnumSource;
 
 /**
@@ -78,6 +79,48 @@ class LoadTrialTest {
     TrialResult result =
         LoadTrial.solve(request(LoadKind.PFC_CRITICAL, 60, 60), source(230, 0.1, 0.35, FLAT));
     assertThat(result.power().activeW().value().orElseThrow()).isCloseTo(3600, within(1.0));
+  }
+
+  /**
+   * Supplies whose filters ring with the source between orders 22 and 35: Ohm's law over the source
+   * and the power asked for hold at what is found.
+   */
+  @ParameterizedTest
+  @CsvSource({"897, 4, 3.6, 0.087, 0.197", "716, 10, 4.7, 0.195, 0.187", "800, 10, 4, 0.05, 0.1"})
+  void filtersThatRingWithTheSource(double watts, double units, double nanofaradPerW, double ohm, double reactance) {
+    OptionalDouble none = OptionalDouble.empty();
+    ModelColumns filter =
+        new ModelColumns(
+            none,
+            none,
+            none,
+            none,
+            none,
+            none,
+            none,
+            none,
+            none,
+            none,
+            OptionalDouble.of(nanofaradPerW * 1e-3 * watts),
+            none,
+            OptionalDouble.of(1.5),
+            none);
+    TrialSource source = source(230, ohm, reactance, FLAT);
+    TrialResult result =
+        LoadTrial.solve(
+            request(LoadKind.PFC_CONTINUOUS, watts, units).withColumns(filter), source);
+    assertThat(result.power().activeW().value().orElseThrow())
+        .isCloseTo(watts * units, within(1e-5 * watts * units));
+    Spectrum v = result.voltage().get(0);
+    Spectrum emf =
+        Spectrum.of(h -> v.at(h).plus(result.first().at(h).times(source.impedance(h, 50))));
+    double angle = emf.at(1).degrees();
+    for (int h = 1; h <= Spectrum.HIGHEST_ORDER; h++) {
+      Phasor given = h == 1 ? new Phasor(230, 0) : FLAT.at(h).times(230);
+      assertThat(emf.at(h).turned(-h * angle).minus(given).magnitude())
+          .as("order %d", h)
+          .isLessThan(1e-5 * 230);
+    }
   }
 
   @Test

@@ -97,6 +97,22 @@ class LoadPageTest extends ServiceTest {
   }
 
   /** Parameters that no equipment can have are the engine's sentence, not a failure. */
+  /** Digits as the page itself writes them are read; a comma that may part thousands is asked for. */
+  @ParameterizedTest
+  @CsvSource(
+      delimiter = '|',
+      value = {"1%20200|1200 W", "1%E2%80%AF200|1200 W", "120,5|121 W", "0,125|0.125 W"})
+  void digitsInGroupsAndDecimalCommas(String watts, String shown) {
+    assertThat(page("/loads?watts=" + watts).replace('\u202f', ' ')).contains(shown);
+  }
+
+  @Test
+  void aCommaThatMayPartThousandsIsAskedFor() {
+    Answer answer = http().get("/loads?watts=1,200");
+    assertThat(answer.status()).isEqualTo(400);
+    assertThat(text(answer)).contains("1,200 may mean 1200 or 1.200");
+  }
+
   @Test
   void impossibleEquipmentIsSaidSo() {
     Answer answer = http().get("/loads?load=capacitor-input&watts=2000&source_resistance_ohm=500");
