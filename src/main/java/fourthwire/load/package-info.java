@@ -5,7 +5,8 @@
  * fourthwire.load.model.LoadModel} from a {@link fourthwire.load.LoadRequest}; {@link
  * fourthwire.load.Presets} in plain words. The physics of rectifiers lies in {@code rectifier},
  * that of controlled supplies and dimmers in {@code control}, what every model is in {@code model};
- * {@code trial} runs one by itself behind a source. May use {@code quantity} and {@code site} (kinds and model columns).
+ * {@code trial} runs one by itself behind a source. May use {@code quantity} and {@code site}
+ * (kinds and model columns).
  */
 @org.jspecify.annotations.NullMarked
 package fourthwire.load;

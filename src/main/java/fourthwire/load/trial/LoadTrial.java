@@ -19,8 +19,8 @@ import java.util.List;
  * = V + Z·I, with V = (E - Z·I)/(1 + Z·Y) and I = I(u): a fixed point, which without a linear part
  * is E itself. A filter that rings with the source would drive the repetition apart; so each turn
  * takes it that the injecting part answers a change of voltage like a conductance that draws its
- * power, which leaves the fixed point where it is. Three lines are taken in symmetrical components, order by order. N units are one
- * unit N times as large, as everywhere.
+ * power, which leaves the fixed point where it is. Three lines are taken in symmetrical components,
+ * order by order. N units are one unit N times as large, as everywhere.
  */
 public final class LoadTrial {
   /** Of the electromotive force's fundamental; an audit asks for 1e-5 of the nominal voltage. */
@@ -126,9 +126,7 @@ public final class LoadTrial {
   /** What the injecting part draws at its terminals as a conductance, siemens. */
   private static double conductance(Phasor volts, Phasor amps) {
     double square = volts.re() * volts.re() + volts.im() * volts.im();
-    return square > 0
-        ? Math.max(0, (volts.re() * amps.re() + volts.im() * amps.im()) / square)
-        : 0;
+    return square > 0 ? Math.max(0, (volts.re() * amps.re() + volts.im() * amps.im()) / square) : 0;
   }
 
   /** Positive, negative, zero sequence of three ports; of one port itself. */

@@ -44,7 +44,9 @@ final class Typed {
       return OptionalDouble.empty();
     }
     if (AMBIGUOUS.matcher(text).matches()) {
-      error(field, words.of("loads.error.comma", text, text.replace(",", ""), text.replace(',', '.')));
+      error(
+          field,
+          words.of("loads.error.comma", text, text.replace(",", ""), text.replace(',', '.')));
       return OptionalDouble.empty();
     }
     OptionalDouble value = parsed(text);

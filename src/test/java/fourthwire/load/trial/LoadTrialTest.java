@@ -87,7 +87,8 @@ class LoadTrialTest {
    */
   @ParameterizedTest
   @CsvSource({"897, 4, 3.6, 0.087, 0.197", "716, 10, 4.7, 0.195, 0.187", "800, 10, 4, 0.05, 0.1"})
-  void filtersThatRingWithTheSource(double watts, double units, double nanofaradPerW, double ohm, double reactance) {
+  void filtersThatRingWithTheSource(
+      double watts, double units, double nanofaradPerW, double ohm, double reactance) {
     OptionalDouble none = OptionalDouble.empty();
     ModelColumns filter =
         new ModelColumns(
@@ -107,8 +108,7 @@ class LoadTrialTest {
             none);
     TrialSource source = source(230, ohm, reactance, FLAT);
     TrialResult result =
-        LoadTrial.solve(
-            request(LoadKind.PFC_CONTINUOUS, watts, units).withColumns(filter), source);
+        LoadTrial.solve(request(LoadKind.PFC_CONTINUOUS, watts, units).withColumns(filter), source);
     assertThat(result.power().activeW().value().orElseThrow())
         .isCloseTo(watts * units, within(1e-5 * watts * units));
     Spectrum v = result.voltage().get(0);

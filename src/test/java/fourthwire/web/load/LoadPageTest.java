@@ -97,7 +97,9 @@ class LoadPageTest extends ServiceTest {
   }
 
   /** Parameters that no equipment can have are the engine's sentence, not a failure. */
-  /** Digits as the page itself writes them are read; a comma that may part thousands is asked for. */
+  /**
+   * Digits as the page itself writes them are read; a comma that may part thousands is asked for.
+   */
   @ParameterizedTest
   @CsvSource(
       delimiter = '|',
