@@ -76,7 +76,19 @@ final class FileStore {
   }
 
   void delete(Collection<Long> fileIds) {
-    fileIds.forEach(id -> jdbc.sql("delete from stored_files where id = ?").param(id).update());
+    fileIds.forEach(this::delete);
+  }
+
+  /**
+   * Part by part: outside a transaction no more than a part is then kept for an undo, however large
+   * the file.
+   */
+  private void delete(long fileId) {
+    String part = "delete from stored_file_parts where file_id = ? and position = ?";
+    for (int position = 0; jdbc.sql(part).params(fileId, position).update() > 0; position++) {
+      // goes on to the last part
+    }
+    jdbc.sql("delete from stored_files where id = ?").param(fileId).update();
   }
 
   private Optional<byte[]> part(long fileId, int position) {

@@ -14,6 +14,7 @@ import java.security.MessageDigest;
 import java.sql.ResultSet;
 import java.sql.SQLException;
 import java.time.Clock;
+import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.HexFormat;
 import java.util.List;
@@ -193,18 +194,21 @@ final class JdbcReadings implements ReadingRepository {
 
   @Override
   public boolean delete(long readingId) {
-    return Boolean.TRUE.equals(
-        transaction.execute(
-            status -> {
-              List<Long> owned =
-                  jdbc.sql("select file_id from reading_files where reading_id = ?")
-                      .param(readingId)
-                      .query(Long.class)
-                      .list();
-              int gone = jdbc.sql("delete from readings where id = ?").param(readingId).update();
-              files.delete(owned);
-              return gone == 1;
-            }));
+    List<Long> owned = new ArrayList<>();
+    boolean gone =
+        Boolean.TRUE.equals(
+            transaction.execute(
+                status -> {
+                  owned.addAll(
+                      jdbc.sql("select file_id from reading_files where reading_id = ?")
+                          .param(readingId)
+                          .query(Long.class)
+                          .list());
+                  return jdbc.sql("delete from readings where id = ?").param(readingId).update()
+                      == 1;
+                }));
+    files.delete(owned);
+    return gone;
   }
 
   @Override

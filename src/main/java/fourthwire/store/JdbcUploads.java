@@ -11,6 +11,7 @@ import java.io.UncheckedIOException;
 import java.sql.ResultSet;
 import java.sql.SQLException;
 import java.time.Clock;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.Objects;
@@ -158,6 +159,7 @@ final class JdbcUploads implements ReadingUploads {
 
   @Override
   public void finish(long uploadId, long readingId) {
+    List<Long> left = new ArrayList<>();
     transaction.executeWithoutResult(
         status -> {
           jdbc.sql(
@@ -167,12 +169,14 @@ final class JdbcUploads implements ReadingUploads {
                   """)
               .params(readingId, uploadId)
               .update();
-          letGo(uploadId);
+          left.addAll(letGo(uploadId));
         });
+    files.delete(left);
   }
 
   @Override
   public void end(long uploadId, State state, String message) {
+    List<Long> left = new ArrayList<>();
     transaction.executeWithoutResult(
         status -> {
           jdbc.sql(
@@ -182,12 +186,13 @@ final class JdbcUploads implements ReadingUploads {
                   """)
               .params(state.word(), message, uploadId)
               .update();
-          letGo(uploadId);
+          left.addAll(letGo(uploadId));
         });
+    files.delete(left);
   }
 
-  /** What became a reading's file is the reading's. */
-  private void letGo(long uploadId) {
+  /** Gives the files that are left; what became a reading's file is the reading's. */
+  private List<Long> letGo(long uploadId) {
     List<Long> owned =
         jdbc.sql(
                 """
@@ -198,7 +203,7 @@ final class JdbcUploads implements ReadingUploads {
             .query(Long.class)
             .list();
     jdbc.sql("delete from reading_upload_files where upload_id = ?").param(uploadId).update();
-    files.delete(owned);
+    return owned;
   }
 
   @Override
