@@ -15,7 +15,7 @@ import java.util.function.DoubleFunction;
  */
 final class DesignPower {
   private static final double CLOSE = 1e-7;
-  private static final int MOST_TRIES = 24;
+  private static final int MOST_TRIES = 40;
 
   /** A power with a steady state and one without, this near to each other, end the search. */
   private static final double NARROW = 3e-3;
@@ -63,6 +63,9 @@ final class DesignPower {
         return x;
       }
       x = next(x, drawn);
+      if (isPinned()) {
+        return x;
+      }
     }
     throw new IllegalArgumentException(
         String.format(
@@ -72,6 +75,11 @@ final class DesignPower {
             request.kind().word(),
             request.nominalPortV(),
             obstacle.isEmpty() ? "" : " (" + obstacle + ")"));
+  }
+
+  /** The rating lies in a jump of what is drawn, where a diode's pulse comes or goes. */
+  private boolean isPinned() {
+    return obstacle.isEmpty() && high - low < CLOSE * high;
   }
 
   private boolean hopeless() {
