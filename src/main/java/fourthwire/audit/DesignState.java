@@ -115,13 +115,14 @@ public record DesignState(
       Map<Conductor, Spectrum> currentSpectrum) {}
 
   /**
-   * A parallel resonance seen from this node.
+   * A resonance seen from this node.
    *
-   * @param order where the impedance peaks
-   * @param ohm how high
+   * @param order where the impedance peaks (parallel) or dips (series)
+   * @param ohm how high, or how low
    * @param bank the capacitor bank or filter that makes it
+   * @param series whether it is a series resonance, which draws the order in
    */
-  public record Resonance(double order, double ohm, String bank) {}
+  public record Resonance(double order, double ohm, String bank, boolean series) {}
 
   /**
    * What one child adds to this node's neutral current: the part of its neutral current in step

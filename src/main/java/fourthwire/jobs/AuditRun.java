@@ -10,14 +10,9 @@ import fourthwire.jobs.measured.MeasuredStates;
 import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.site.SiteRepository;
 import fourthwire.site.Survey;
-import java.util.ArrayList;
-import java.util.List;
 
 /** Runs one stored audit from queued to its end. */
 public final class AuditRun {
-  private static final String NO_SPREAD =
-      "Draws were asked for, but this version computes no spread: range is null at every node.";
-
   private final AuditRepository audits;
   private final SiteRepository sites;
   private final MeasuredStates measured;
@@ -49,7 +44,7 @@ public final class AuditRun {
           .ifPresent(
               entry -> {
                 AuditResult result = audit.run(request(entry), listener(auditId));
-                audits.finish(auditId, entry.draws() > 0 ? withoutSpread(result) : result);
+                audits.finish(auditId, result);
               });
     } catch (Progress.CancelledException e) {
       audits.end(auditId, AuditRepository.State.CANCELLED, "cancelled");
@@ -64,16 +59,15 @@ public final class AuditRun {
     }
   }
 
-  /** Draws were asked for: the result says that they were not made. */
-  private static AuditResult withoutSpread(AuditResult r) {
-    List<String> notes = new ArrayList<>(r.notes());
-    notes.add(NO_SPREAD);
-    return new AuditResult(r.supply(), r.engineVersion(), r.editions(), r.nodes(), notes);
-  }
-
   private AuditRequest request(AuditRepository.Entry entry) {
     Survey survey = sites.survey(entry.siteId(), entry.surveyRevision());
-    return new AuditRequest(survey, entry.supply(), measured.of(entry.siteId(), survey));
+    return new AuditRequest(
+        survey,
+        entry.supply(),
+        measured.of(entry.siteId(), survey),
+        true,
+        entry.draws(),
+        AuditRequest.SEED);
   }
 
   private Progress listener(long auditId) {

@@ -17,6 +17,7 @@ import tools.jackson.databind.node.ObjectNode;
 
 /** The design state of a node. */
 final class DesignJson {
+  private static final String SERIES = "series";
   private static final String NOT_A_TRANSFORMER = "not a transformer";
 
   private DesignJson() {}
@@ -77,7 +78,11 @@ final class DesignJson {
   }
 
   private static ObjectNode write(Resonance r) {
-    return Json.object().put("order", r.order()).put("ohm", r.ohm()).put("bank", r.bank());
+    return Json.object()
+        .put("order", r.order())
+        .put("ohm", r.ohm())
+        .put("bank", r.bank())
+        .put("kind", r.series() ? SERIES : "parallel");
   }
 
   private static ObjectNode write(NeutralAdder a) {
@@ -146,7 +151,10 @@ final class DesignJson {
 
   private static Resonance resonance(JsonNode o) {
     return new Resonance(
-        o.path("order").doubleValue(), o.path("ohm").doubleValue(), o.path("bank").asString());
+        o.path("order").doubleValue(),
+        o.path("ohm").doubleValue(),
+        o.path("bank").asString(),
+        o.path("kind").asString("").equals(SERIES));
   }
 
   private static NeutralAdder neutralAdder(JsonNode o) {

@@ -1,6 +1,5 @@
 package fourthwire.json;
 
-import fourthwire.audit.DesignState;
 import fourthwire.audit.NodeResult;
 import fourthwire.limits.Finding;
 import fourthwire.limits.Severity;
@@ -14,7 +13,11 @@ import tools.jackson.databind.node.ObjectNode;
 public final class NodeJson {
   private static final String DESIGN = "design";
   private static final String DESIGN_REASON = "design_reason";
-  private static final String LATER = "not computed by this version";
+  private static final String RANGE = "range";
+  private static final String DOUBT = "doubt";
+  private static final String WEEK = "week";
+  private static final String IMPEDANCE = "impedance";
+  private static final String NO_CURVE = "shown for supplies, transformers and panels";
 
   private NodeJson() {}
 
@@ -27,12 +30,28 @@ public final class NodeJson {
         .ifPresentOrElse(
             d -> o.set(DESIGN, DesignJson.write(d)),
             () -> Json.putAbsent(o, DESIGN, r.designReason()));
-    Json.putAbsent(o, "range", LATER);
-    Json.putAbsent(o, "week", LATER);
+    writeDoubt(o, r);
+    r.week()
+        .ifPresentOrElse(
+            w -> o.set(WEEK, WeekJson.write(w)), () -> Json.putAbsent(o, WEEK, r.weekReason()));
     MeasuredJson.write(o, r.measured());
     o.set("findings", Json.list(r.findings(), NodeJson::write));
     o.set("assumptions", Json.strings(r.assumptions()));
+    r.impedance()
+        .ifPresentOrElse(
+            c -> o.set(IMPEDANCE, ImpedanceJson.write(c)),
+            () -> Json.putAbsent(o, IMPEDANCE, NO_CURVE));
+    o.set("bank_steps", Json.list(r.bankSteps(), ImpedanceJson::write));
     return o;
+  }
+
+  private static void writeDoubt(ObjectNode o, NodeResult r) {
+    r.doubt()
+        .ifPresentOrElse(
+            d -> o.set(RANGE, DoubtJson.range(d)), () -> Json.putAbsent(o, RANGE, r.doubtReason()));
+    r.doubt()
+        .ifPresentOrElse(
+            d -> o.set(DOUBT, DoubtJson.write(d)), () -> Json.putAbsent(o, DOUBT, r.doubtReason()));
   }
 
   private static ObjectNode write(Finding f) {
@@ -52,15 +71,21 @@ public final class NodeJson {
         SiteTree.Kind.valueOf(word(o, "kind")),
         Json.text(o, "fed_from"),
         o.path("supply").asString(),
-        design(o),
+        object(o, DESIGN).map(DesignJson::read),
         o.path(DESIGN_REASON).asString(""),
+        object(o, IMPEDANCE).map(ImpedanceJson::curve),
+        Json.list(o, "bank_steps", ImpedanceJson::step),
+        object(o, DOUBT).map(d -> DoubtJson.read(o.path(RANGE), d)),
+        Json.text(o, RANGE + "_reason").orElse(""),
+        object(o, WEEK).map(WeekJson::read),
+        Json.text(o, WEEK + "_reason").orElse(""),
         MeasuredJson.read(o),
         Json.list(o, "findings", NodeJson::finding),
         Json.strings(o, "assumptions"));
   }
 
-  private static Optional<DesignState> design(JsonNode o) {
-    return Optional.of(o.path(DESIGN)).filter(JsonNode::isObject).map(DesignJson::read);
+  private static Optional<JsonNode> object(JsonNode o, String key) {
+    return Optional.of(o.path(key)).filter(JsonNode::isObject);
   }
 
   private static Finding finding(JsonNode o) {

@@ -1,9 +1,11 @@
 package fourthwire.limits;
 
 import fourthwire.quantity.Figure;
+import java.util.Collection;
+import java.util.List;
 import java.util.Optional;
 
-/** The one rule by which a figure is over, near or under a limit, and how a finding is made. */
+/** What findings are made from: checks that have something to say, and plain notes. */
 public final class Judgement {
   /** From here on a figure is near its limit (the public contract, section 6). */
   public static final double NEAR = 0.8;
@@ -12,33 +14,12 @@ public final class Judgement {
 
   private Judgement() {}
 
-  /** Act over the limit, watch over 80 % of it, else nothing. */
-  public static Optional<Severity> of(double figure, double limit) {
-    if (figure > limit) {
-      return Optional.of(Severity.ACT);
-    }
-    return figure > NEAR * limit ? Optional.of(Severity.WATCH) : Optional.empty();
+  /** The findings among checks, in their order, by the figures alone. */
+  public static List<Finding> findings(Collection<Check> checks) {
+    return checks.stream().map(Check::finding).flatMap(Optional::stream).toList();
   }
 
-  public static Finding finding(
-      FindingCode code,
-      Severity severity,
-      double figure,
-      double limit,
-      String unit,
-      String basis,
-      String sentence) {
-    return new Finding(
-        code.word(),
-        severity,
-        Figure.of(figure),
-        Figure.of(limit),
-        unit,
-        NO_SPREAD,
-        basis,
-        sentence);
-  }
-
+  /** Information, held against no limit. */
   public static Finding note(
       FindingCode code, double figure, String unit, String basis, String sentence) {
     return new Finding(

@@ -208,6 +208,11 @@ final class SurveyBuilder {
   }
 
   SurveyBuilder bank(String name, String panel, double kvar, double detuningPercent) {
+    return bank(name, panel, kvar, detuningPercent, OptionalInt.empty());
+  }
+
+  SurveyBuilder bank(
+      String name, String panel, double kvar, double detuningPercent, OptionalInt steps) {
     capacitors.add(
         new CapacitorBank(
             name,
@@ -216,7 +221,7 @@ final class SurveyBuilder {
             NOT_KNOWN,
             detuningPercent > 0 ? some(detuningPercent) : NOT_KNOWN,
             NOT_KNOWN,
-            OptionalInt.empty()));
+            steps));
     return this;
   }
 

@@ -48,7 +48,7 @@ class WholeServiceTest {
     JsonNode audits = http.get(site + "/audits").json();
     assertThat(audits).hasSize(1);
     String audit = "/api/v1/audits/" + audits.path(0).path("id").asLong();
-    JsonNode ended = http.ended(audit, 120);
+    JsonNode ended = http.ended(audit, 300);
     assertThat(ended.path("state").asString()).as(ended.toString()).isEqualTo("done");
     JsonNode worst = http.get(audit + "/nodes").json().path(0);
     assertThat(worst.at("/findings/act").asInt()).as(worst.toString()).isPositive();

@@ -6,6 +6,7 @@ import fourthwire.audit.Audit;
 import fourthwire.audit.AuditFailedException;
 import fourthwire.audit.AuditRepository;
 import fourthwire.audit.AuditRepository.State;
+import fourthwire.audit.AuditRequest;
 import fourthwire.audit.Progress;
 import fourthwire.intake.survey.ZipSurveyCodec;
 import fourthwire.jobs.measured.MeasuredStates;
@@ -63,13 +64,19 @@ class AuditRunTest {
   }
 
   @Test
-  void drawsAreAnsweredByANoteUntilTheyAreMade() {
+  void theAuditIsAskedForItsWeekAndItsDraws() {
     long id = audits.create(site, 1, Optional.empty(), 7);
-    auditRun(new SlowAudit().letGo()).run(id);
-    assertThat(audits.find(id).orElseThrow().draws()).isEqualTo(7);
-    assertThat(audits.find(id).orElseThrow().notes()).last().asString().contains("no spread");
-    long without = run(new SlowAudit().letGo());
-    assertThat(audits.find(without).orElseThrow().notes().toString()).doesNotContain("spread");
+    List<AuditRequest> asked = new ArrayList<>();
+    Audit audit = new SlowAudit().letGo();
+    auditRun(
+            (request, progress) -> {
+              asked.add(request);
+              return audit.run(request, progress);
+            })
+        .run(id);
+
+    assertThat(asked).extracting(AuditRequest::week).containsExactly(true);
+    assertThat(asked).extracting(AuditRequest::draws).containsExactly(7);
   }
 
   @Test

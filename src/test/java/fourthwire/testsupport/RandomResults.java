@@ -1,8 +1,14 @@
 package fourthwire.testsupport;
 
+import fourthwire.audit.BankStep;
 import fourthwire.audit.DesignState;
+import fourthwire.audit.HeadlineFigure;
+import fourthwire.audit.HourSeries;
+import fourthwire.audit.ImpedanceCurve;
 import fourthwire.audit.MeasuredState;
+import fourthwire.audit.NodeDoubt;
 import fourthwire.audit.NodeResult;
+import fourthwire.audit.WeekState;
 import fourthwire.limits.Finding;
 import fourthwire.limits.Severity;
 import fourthwire.quantity.Conductor;
@@ -13,6 +19,7 @@ import fourthwire.quantity.Spectrum;
 import fourthwire.site.SiteTree;
 import java.time.OffsetDateTime;
 import java.time.ZoneOffset;
+import java.util.Arrays;
 import java.util.EnumMap;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -35,6 +42,8 @@ public final class RandomResults {
   /** A node of this name. */
   public NodeResult node(String name) {
     boolean supplied = random.nextInt(5) > 0;
+    Optional<NodeDoubt> doubt = maybe(this::doubt);
+    Optional<WeekState> week = maybe(this::week);
     return new NodeResult(
         name,
         pick(SiteTree.Kind.values()),
@@ -42,9 +51,48 @@ public final class RandomResults {
         "GRID",
         supplied ? Optional.of(design()) : Optional.empty(),
         supplied ? "" : "not supplied in this state",
+        maybe(() -> ImpedanceCurve.of(shortNumbers(ImpedanceCurve.POINTS))),
+        list(3, () -> new BankStep(sentence(), 1, 2, number(), number(), number())),
+        doubt,
+        doubt.isPresent() ? "" : "no draws were asked for",
+        week,
+        week.isPresent() ? "" : "not supplied in this state",
         list(2, this::measured),
         list(3, this::finding),
         list(2, this::sentence));
+  }
+
+  private NodeDoubt doubt() {
+    Map<HeadlineFigure, NodeDoubt.Range> ranges = new EnumMap<>(HeadlineFigure.class);
+    for (HeadlineFigure figure : HeadlineFigure.values()) {
+      ranges.put(figure, new NodeDoubt.Range(number(), number(), number()));
+    }
+    return new NodeDoubt(
+        random.nextInt(1000),
+        random.nextLong(),
+        ranges,
+        pick(HeadlineFigure.values()),
+        list(3, () -> new NodeDoubt.InputShare(sentence(), number())),
+        list(3, () -> new NodeDoubt.ClampPoint(sentence(), number())));
+  }
+
+  private WeekState week() {
+    Map<HeadlineFigure, HourSeries> series = new EnumMap<>(HeadlineFigure.class);
+    series.put(pick(HeadlineFigure.values()), HourSeries.of(shortNumbers(HourSeries.HOURS)));
+    return new WeekState(
+        random.nextInt(168),
+        sentence(),
+        Map.of("code-" + random.nextInt(9), random.nextInt(168)),
+        series,
+        new WeekState.Energy(
+            number(), number(), number(), number(), number(), figure(), sentence()));
+  }
+
+  /** Numbers of few digits, as series are written. */
+  private double[] shortNumbers(int count) {
+    double[] numbers = new double[count];
+    Arrays.setAll(numbers, k -> random.nextInt(1000) / 4.0);
+    return numbers;
   }
 
   private DesignState design() {
@@ -73,7 +121,9 @@ public final class RandomResults {
         figure(),
         figure(),
         figure(),
-        list(2, () -> new DesignState.Resonance(number(), number(), sentence())),
+        list(
+            2,
+            () -> new DesignState.Resonance(number(), number(), sentence(), random.nextBoolean())),
         list(4, () -> new DesignState.NeutralAdder(sentence(), number())));
   }
 

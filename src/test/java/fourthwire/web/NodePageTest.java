@@ -53,6 +53,24 @@ class NodePageTest extends PagesTest {
     assertThat(page(audit, "T1")).doesNotContain("??").contains("Factor K");
   }
 
+  @Test
+  void aPanelShowsItsWeekHowSureItIsAndItsImpedance() {
+    String page = page(audit, "LP-2 East offices");
+    assertThat(page)
+        .contains("How sure", "200 sites drawn", "class=\"span\"")
+        .contains("Power of every capacitor-input load on the site", "46\u202f%")
+        .contains("The week", "over the limit in 38 of 168 hours", "EUR")
+        .contains("plot hours n", "plot impedance", "PFC-1, 1 of 2 steps");
+    assertThat(page(audit, "T1")).contains("No week: not computed.");
+  }
+
+  @Test
+  void theSitesPageSaysWhereToClampNext() {
+    Answer answer = http().get("/audits/" + audit);
+    assertThat(new String(answer.response().body(), StandardCharsets.UTF_8))
+        .contains("Where to clamp next", "64\u202f%");
+  }
+
   private String page(long of, String node) {
     Answer answer =
         http()

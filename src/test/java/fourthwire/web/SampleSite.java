@@ -86,7 +86,10 @@ public final class SampleSite {
   /** The results of every node, parents first. */
   public static List<NodeResult> results() {
     List<NodeResult> all = new ArrayList<>();
-    all.add(node("GRID", SiteTree.Kind.SUPPLY, Optional.empty(), threeWireState(21), List.of()));
+    DesignState supply = threeWireState(21);
+    all.add(
+        node("GRID", SiteTree.Kind.SUPPLY, Optional.empty(), supply, List.of())
+            .withDoubt(Optional.of(SampleStates.doubt(supply)), "", List.of()));
     all.add(
         node(
             "T1",
@@ -131,36 +134,41 @@ public final class SampleSite {
             Map.of(),
             power(26000),
             Map.of());
-    return new NodeResult(
-        "LP-2 East offices",
-        SiteTree.Kind.PANEL,
-        Optional.of("MSB"),
-        "GRID",
-        Optional.of(design),
-        "",
-        List.of(measured),
-        List.of(
-            new Finding(
-                "neutral-ampacity",
-                Severity.ACT,
-                design.neutral().rmsA(),
-                Figure.of(101),
-                "A",
-                Figure.of(0.94),
-                "IEC 60364-5-52:2009, Annex E",
-                "The neutral carries more than its conductor is rated for; third-order current"
-                    + " from computers without PFC makes most of its heat."),
-            new Finding(
-                "current-distortion",
-                Severity.WATCH,
-                Figure.of(26),
-                Figure.of(15),
-                "%",
-                Figure.unknown("no spread was computed"),
-                "IEEE 519-2022, table 2; guidance only away from the point of common coupling",
-                "The current distortion of L3 stands above the guidance for its short-circuit"
-                    + " ratio.")),
-        List.of("The feeder's reactance is taken as 0.08 Ω/km†."));
+    NodeResult result =
+        new NodeResult(
+                "LP-2 East offices",
+                SiteTree.Kind.PANEL,
+                Optional.of("MSB"),
+                "GRID",
+                Optional.of(design),
+                "",
+                List.of(measured),
+                List.of(
+                    new Finding(
+                        "neutral-ampacity",
+                        Severity.ACT,
+                        design.neutral().rmsA(),
+                        Figure.of(101),
+                        "A",
+                        Figure.of(0.94),
+                        "IEC 60364-5-52:2009, Annex E",
+                        "The neutral carries more than its conductor is rated for; third-order"
+                            + " current from computers without PFC makes most of its heat."),
+                    new Finding(
+                        "current-distortion",
+                        Severity.WATCH,
+                        Figure.of(26),
+                        Figure.of(15),
+                        "%",
+                        Figure.unknown("no spread was computed"),
+                        "IEEE 519-2022, table 2; guidance only away from the point of common"
+                            + " coupling",
+                        "The current distortion of L3 stands above the guidance for its"
+                            + " short-circuit ratio.")),
+                List.of("The feeder's reactance is taken as 0.08 Ω/km†."))
+            .withImpedance(Optional.of(SampleStates.curve()), SampleStates.steps())
+            .withWeek(Optional.of(SampleStates.week()), "");
+    return result.withDoubt(Optional.of(SampleStates.doubt(design)), "", result.findings());
   }
 
   private static List<Finding> watch() {

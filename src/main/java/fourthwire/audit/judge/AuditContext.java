@@ -1,23 +1,24 @@
 package fourthwire.audit.judge;
 
+import fourthwire.audit.judge.NodeCurrents.Demand;
 import fourthwire.audit.plan.Device;
 import fourthwire.audit.plan.NetworkPlan;
+import fourthwire.audit.plan.Place;
 import fourthwire.audit.solve.SiteSolution;
 import fourthwire.audit.solve.Workers;
+import fourthwire.quantity.Figure;
 import fourthwire.site.LoadKind;
-import fourthwire.site.Panel;
 import fourthwire.site.Practice;
 import fourthwire.site.SiteTree;
 import fourthwire.site.Supply;
 import fourthwire.site.Survey;
-import fourthwire.site.Transformer;
 import java.util.HashMap;
 import java.util.HashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import java.util.OptionalDouble;
 import java.util.Set;
+import java.util.concurrent.ConcurrentHashMap;
 
 /** What every node of one audit is judged with: the survey, the solution and what follows. */
 public final class AuditContext {
@@ -30,11 +31,15 @@ public final class AuditContext {
   private final NonlinearShare nonlinear;
   private final FaultLevels faults;
   private final ImpedanceScan scan;
+  private final BankSteps bankSteps;
   private final BankFindings banks;
   private final SharedNeutralFindings sharedNeutrals;
-  private final Map<String, Double> demandA = new HashMap<>();
-  private final Set<String> motorFeeders = new HashSet<>();
+  private final Map<String, Double> surveyedDemandA;
+  private final Set<String> motorFeeders;
+  private final Map<String, Demand> demands = new ConcurrentHashMap<>();
+  private final Optional<AuditContext> design;
 
+  /** The design state, or any state that is to be judged by itself. */
   public AuditContext(
       Survey survey,
       Supply supply,
@@ -56,19 +61,66 @@ public final class AuditContext {
     this.scan =
         new ImpedanceScan(
             survey, plan, NetworkPlan.of(survey, supply, tree, devices, false), workers);
+    this.bankSteps = new BankSteps(survey, supply, tree, devices, plan, workers);
     this.banks = new BankFindings(survey, solution);
     this.sharedNeutrals = new SharedNeutralFindings(survey);
-    survey.supplies().forEach(s -> demand(s.name(), s.demandA()));
-    survey.transformers().forEach((Transformer t) -> demand(t.name(), t.demandA()));
-    survey.panels().forEach((Panel p) -> demand(p.name(), p.demandA()));
+    this.surveyedDemandA = surveyedDemandA(survey);
+    this.motorFeeders = motorFeeders(tree, devices);
+    this.design = Optional.empty();
+  }
+
+  /** Another state of the same site; what does not depend on the state is the other's. */
+  private AuditContext(
+      AuditContext other,
+      NetworkPlan plan,
+      SiteSolution solution,
+      NonlinearShare nonlinear,
+      Optional<AuditContext> design) {
+    this.survey = other.survey;
+    this.supply = other.supply;
+    this.tree = other.tree;
+    this.plan = plan;
+    this.solution = solution;
+    this.ampacities = other.ampacities;
+    this.nonlinear = nonlinear;
+    this.faults = other.faults;
+    this.scan = other.scan;
+    this.bankSteps = other.bankSteps;
+    this.banks = new BankFindings(survey, solution);
+    this.sharedNeutrals = other.sharedNeutrals;
+    this.surveyedDemandA = other.surveyedDemandA;
+    this.motorFeeders = other.motorFeeders;
+    this.design = design;
+  }
+
+  /**
+   * The site at an hour: its demand currents and shares of kinds stay those of this design state.
+   */
+  public AuditContext hour(NetworkPlan hourPlan, SiteSolution hourSolution) {
+    return new AuditContext(this, hourPlan, hourSolution, nonlinear, Optional.of(this));
+  }
+
+  /** The site as its loads were drawn: a design state of its own on the same network. */
+  public AuditContext drawn(List<Device> devices, NetworkPlan drawnPlan, SiteSolution drawn) {
+    return new AuditContext(
+        this, drawnPlan, drawn, new NonlinearShare(tree, devices), Optional.empty());
+  }
+
+  private static Map<String, Double> surveyedDemandA(Survey survey) {
+    Map<String, Double> known = new HashMap<>();
+    survey.supplies().forEach(s -> s.demandA().ifPresent(a -> known.put(s.name(), a)));
+    survey.transformers().forEach(t -> t.demandA().ifPresent(a -> known.put(t.name(), a)));
+    survey.panels().forEach(p -> p.demandA().ifPresent(a -> known.put(p.name(), a)));
+    return known;
+  }
+
+  private static Set<String> motorFeeders(SiteTree tree, List<Device> devices) {
+    Set<String> feeders = new HashSet<>();
     devices.stream()
         .map(Device::placement)
         .filter(p -> p.request().kind() == LoadKind.MOTOR)
-        .forEach(p -> tree.path(p.circuit()).forEach(n -> motorFeeders.add(n.name())));
-  }
-
-  private void demand(String node, OptionalDouble amps) {
-    amps.ifPresent(a -> demandA.put(node, a));
+        .forEach(p -> tree.path(p.circuit()).forEach(n -> feeders.add(n.name())));
+    return feeders;
   }
 
   public Supply supply() {
@@ -103,6 +155,10 @@ public final class AuditContext {
     return scan;
   }
 
+  public BankSteps bankSteps() {
+    return bankSteps;
+  }
+
   public BankFindings banks() {
     return banks;
   }
@@ -120,8 +176,35 @@ public final class AuditContext {
     return survey.settings().pcc().orElse(survey.normalSupply().name());
   }
 
-  public Optional<Double> surveyedDemandA(String node) {
-    return Optional.ofNullable(demandA.get(node));
+  /** The demand current that TDD at a node stands on: the design state's at every hour. */
+  Demand demand(Place place) {
+    return design
+        .map(d -> d.demand(place))
+        .orElseGet(() -> demands.computeIfAbsent(place.name(), n -> newDemand(place)));
+  }
+
+  private Demand newDemand(Place place) {
+    if (supply.isGenerator()) {
+      return new Demand(Figure.unknown("no TDD on a generator"), "");
+    }
+    Optional<Double> surveyed = Optional.ofNullable(surveyedDemandA.get(place.name()));
+    if (surveyed.isPresent()) {
+      return new Demand(Figure.of(surveyed.get()), "Demand current as surveyed.");
+    }
+    double largest =
+        place.node().lines().stream()
+            .map(
+                line ->
+                    solution.current(
+                        plan.get(place.name()).networkNode(), place.conductors(), line))
+            .mapToDouble(s -> s.magnitude(1))
+            .max()
+            .orElse(0);
+    return largest > 0
+        ? new Demand(
+            Figure.of(largest),
+            "Largest line fundamental of the design state, none being surveyed.")
+        : new Demand(Figure.unknown("no line carries current"), "");
   }
 
   /** Whether motors that stand on the line without a drive hang below the node. */

@@ -3,7 +3,7 @@ package fourthwire.audit.judge;
 import fourthwire.audit.plan.Compensation;
 import fourthwire.audit.plan.Place;
 import fourthwire.audit.solve.SiteSolution;
-import fourthwire.limits.Finding;
+import fourthwire.limits.Check;
 import fourthwire.limits.loading.CapacitorLoading;
 import fourthwire.quantity.Conductor;
 import fourthwire.quantity.Phasor;
@@ -26,14 +26,14 @@ final class BankFindings {
   }
 
   /** Of the banks at a panel. */
-  List<Finding> at(Place place) {
-    List<Finding> findings = new ArrayList<>();
+  List<Check> at(Place place) {
+    List<Check> checks = new ArrayList<>();
     for (CapacitorBank bank : survey.capacitors()) {
       if (bank.panel().equals(place.name())) {
-        findings.addAll(CapacitorLoading.judge(worstPhase(bank, place), standard()));
+        checks.addAll(CapacitorLoading.checks(worstPhase(bank, place), standard()));
       }
     }
-    return findings;
+    return checks;
   }
 
   private CapacitorLoading.Standard standard() {

@@ -1,30 +1,48 @@
 package fourthwire.audit.judge;
 
 import fourthwire.audit.DesignState.Resonance;
+import fourthwire.audit.ImpedanceCurve;
 import fourthwire.audit.plan.NetworkPlan;
 import fourthwire.audit.plan.Place;
 import fourthwire.audit.solve.Workers;
+import fourthwire.network.DrivingPoint;
 import fourthwire.network.DrivingPoints;
-import fourthwire.network.TreeNetwork;
+import fourthwire.quantity.Phasor;
 import fourthwire.site.SiteTree;
 import fourthwire.site.Survey;
 import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.Comparator;
 import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Objects;
+import java.util.Optional;
 import java.util.stream.IntStream;
 
 /**
- * The positive-sequence impedance seen from every board and transformer against the order, 1 to 50
- * in steps of 0.1, and the parallel resonances in it: its peaks that stand above what the same
- * network shows without its banks.
+ * The impedance seen from every board, transformer and supply against the order, 1 to 50 in steps
+ * of 0.1: of the positive sequence on three lines, of line and return elsewhere. And the resonances
+ * that banks make on three lines: parallel ones, peaks above what the same network shows without
+ * its banks; series ones, dips to less than half of that (common practice, no source).
  */
 final class ImpedanceScan {
-  private static final int FIRST = 10;
-  private static final int LAST = 500;
   private static final double PER_ORDER = 10;
+  private static final int FIRST = 10;
+  private static final double DIP = 0.5;
 
+  /** A step is parted in so many to find a peak between two. */
+  private static final int FINER = 10;
+
+  private final NetworkPlan with;
+  private final NetworkPlan without;
+  private final Map<String, String> banks;
+  private final List<Place> places;
+  private final Workers workers;
+  private final double[][] ohm;
+  private final Map<Integer, double[]> bare = new HashMap<>();
+  private final Map<Integer, double[][]> finer = new HashMap<>();
   private final Map<String, List<Resonance>> byNode = new HashMap<>();
 
   /**
@@ -34,46 +52,59 @@ final class ImpedanceScan {
    * @param without the same without
    */
   ImpedanceScan(Survey survey, NetworkPlan with, NetworkPlan without, Workers workers) {
-    Map<String, String> banks = banks(survey, with);
-    if (banks.isEmpty()) {
-      return;
-    }
-    List<Place> places = with.places().stream().filter(ImpedanceScan::isScanned).toList();
-    double[][] ohm = scan(with.network(), places, workers);
-    for (int k = FIRST + 1; k < LAST; k++) {
-      addPeaks(k, ohm, places, banks, without);
-    }
-  }
-
-  private void addPeaks(
-      int k, double[][] ohm, List<Place> places, Map<String, String> banks, NetworkPlan without) {
-    double[] here = ohm[k - FIRST];
-    int[] peaks =
-        IntStream.range(0, places.size())
-            .filter(p -> here[p] > ohm[k - FIRST - 1][p] && here[p] >= ohm[k - FIRST + 1][p])
-            .toArray();
-    if (peaks.length == 0) {
-      return;
-    }
-    DrivingPoints bare = without.network().factor(k / PER_ORDER).drivingPoints();
-    String maker = maker(banks, places, here);
-    for (int p : peaks) {
-      String node = places.get(p).name();
-      if (here[p] > bare.at(without.get(node).networkNode()).positiveSequence().magnitude()) {
-        byNode
-            .computeIfAbsent(node, n -> new ArrayList<>())
-            .add(new Resonance(k / PER_ORDER, here[p], maker));
+    this.with = with;
+    this.without = without;
+    this.banks = banks(survey, with);
+    this.places =
+        with.places().stream().filter(p -> p.node().kind() != SiteTree.Kind.CIRCUIT).toList();
+    this.workers = workers;
+    this.ohm = new double[ImpedanceCurve.POINTS][];
+    workers.each(ohm.length, k -> ohm[k] = magnitudes(with, order(k)));
+    if (!banks.isEmpty()) {
+      for (int p = 0; p < places.size(); p++) {
+        if (hasSequences(places.get(p))) {
+          byNode.put(places.get(p).name(), resonances(p));
+        }
       }
     }
   }
 
-  /** The parallel resonances seen from a node, lowest order first. */
-  List<Resonance> at(String node) {
-    return List.copyOf(byNode.getOrDefault(node, List.of()));
+  private static double order(double point) {
+    return (FIRST + point) / PER_ORDER;
   }
 
-  private static boolean isScanned(Place place) {
-    return place.node().kind() != SiteTree.Kind.CIRCUIT && place.node().lines().size() == 3;
+  /** The resonances seen from a node, lowest order first. */
+  List<Resonance> at(String node) {
+    return byNode.getOrDefault(node, List.of());
+  }
+
+  /** The curve seen from a node; empty at circuits. */
+  Optional<ImpedanceCurve> curve(String node) {
+    return IntStream.range(0, places.size())
+        .filter(p -> places.get(p).name().equals(node))
+        .mapToObj(p -> ImpedanceCurve.of(Arrays.stream(ohm).mapToDouble(z -> z[p]).toArray()))
+        .findFirst();
+  }
+
+  static boolean hasSequences(Place place) {
+    return place.node().lines().size() == 3
+        && place.conductors().of(place.node().lines().get(0)) == 0;
+  }
+
+  private double[] magnitudes(NetworkPlan plan, double order) {
+    DrivingPoints points = plan.network().factor(order).drivingPoints();
+    return places.stream().mapToDouble(p -> seen(plan, p, points).magnitude()).toArray();
+  }
+
+  private static Phasor seen(NetworkPlan plan, Place place, DrivingPoints points) {
+    DrivingPoint point = points.at(plan.get(place.name()).networkNode());
+    if (hasSequences(place)) {
+      return point.positiveSequence();
+    }
+    int line = place.conductors().of(place.node().conductors().get(0));
+    int back =
+        place.conductors().of(place.node().conductors().get(place.node().conductors().size() - 1));
+    return point.between(line, back);
   }
 
   /** Bank or tuned filter by the panel it stands at. */
@@ -88,31 +119,55 @@ final class ImpedanceScan {
     return banks;
   }
 
-  private static double[][] scan(TreeNetwork network, List<Place> places, Workers workers) {
-    double[][] ohm = new double[LAST - FIRST + 1][];
-    workers.each(
-        ohm.length,
-        k -> {
-          DrivingPoints points = network.factor((FIRST + k) / PER_ORDER).drivingPoints();
-          ohm[k] =
-              places.stream()
-                  .mapToDouble(p -> points.at(p.networkNode()).positiveSequence().magnitude())
-                  .toArray();
-        });
-    return ohm;
-  }
-
-  /** The bank at whose panel the peak is highest. */
-  private static String maker(Map<String, String> banks, List<Place> places, double[] ohm) {
-    String maker = "";
-    double highest = -1;
-    for (int p = 0; p < places.size(); p++) {
-      String bank = banks.getOrDefault(places.get(p).name(), "");
-      if (!bank.isEmpty() && ohm[p] > highest) {
-        highest = ohm[p];
-        maker = bank;
+  private List<Resonance> resonances(int place) {
+    List<Resonance> found = new ArrayList<>();
+    for (int k : Peaks.maxima(ohm.length, k -> ohm[k][place])) {
+      if (ohm[k][place] > bare(k)[place]) {
+        found.add(parallel(k, place));
       }
     }
-    return maker;
+    for (int k : Peaks.maxima(ohm.length, k -> -ohm[k][place])) {
+      if (ohm[k][place] < DIP * bare(k)[place]) {
+        found.add(new Resonance(order(k), ohm[k][place], maker(k), true));
+      }
+    }
+    found.sort(Comparator.comparingDouble(Resonance::order));
+    return List.copyOf(found);
+  }
+
+  /** What the network shows without its banks. */
+  private double[] bare(int point) {
+    return bare.computeIfAbsent(point, k -> magnitudes(without, order(k)));
+  }
+
+  private Resonance parallel(int point, int place) {
+    double[][] near = finer.computeIfAbsent(point, this::near);
+    int top = 1;
+    for (int j = 1; j < near.length - 1; j++) {
+      top = near[j][place] > near[top][place] ? j : top;
+    }
+    Peaks.Vertex vertex =
+        Peaks.vertex(near[top - 1][place], near[top][place], near[top + 1][place]);
+    double steps = (top - FINER - 1 + vertex.steps()) / FINER;
+    return new Resonance(order(point + steps), vertex.ohm(), maker(point), false);
+  }
+
+  /** The impedances about a point of the scan, in finer steps. */
+  private double[][] near(int point) {
+    double[][] near = new double[2 * FINER + 3][];
+    workers.each(
+        near.length,
+        j -> near[j] = magnitudes(with, order(point + (double) (j - FINER - 1) / FINER)));
+    return near;
+  }
+
+  /** The bank at whose panel the impedance is highest there. */
+  private String maker(int point) {
+    return IntStream.range(0, places.size())
+        .filter(p -> banks.containsKey(places.get(p).name()))
+        .boxed()
+        .max(Comparator.comparingDouble(p -> ohm[point][p]))
+        .map(p -> Objects.requireNonNull(banks.get(places.get(p).name())))
+        .orElse("");
   }
 }

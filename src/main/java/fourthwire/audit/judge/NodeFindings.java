@@ -1,9 +1,8 @@
 package fourthwire.audit.judge;
 
-import fourthwire.audit.DesignState;
-import fourthwire.audit.judge.NodeCurrents.Demand;
 import fourthwire.audit.plan.Place;
 import fourthwire.audit.plan.TransformerPlate;
+import fourthwire.limits.Check;
 import fourthwire.limits.Finding;
 import fourthwire.limits.distortion.AssessmentPoint;
 import fourthwire.limits.distortion.CurrentDistortion519;
@@ -22,7 +21,6 @@ import fourthwire.quantity.Spectrum;
 import fourthwire.site.Practice;
 import fourthwire.site.SiteTree;
 import java.util.ArrayList;
-import java.util.Comparator;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -49,37 +47,50 @@ final class NodeFindings {
     this.voltages = voltages;
   }
 
-  /** All findings, worst first. */
-  List<Finding> all(DesignState state) {
-    List<Finding> findings = new ArrayList<>(loading());
-    if (place.node().kind() != SiteTree.Kind.CIRCUIT) {
-      findings.addAll(currentDistortion(state));
-      findings.addAll(voltageDistortion());
-      findings.addAll(VoltageQuality.unbalance(state.voltageUnbalancePercent()));
-      motorVoltage().ifPresent(findings::add);
-      findings.addAll(context.banks().at(place));
-      findings.addAll(resonances(state));
+  /** Every figure held against a limit, whether or not there is anything to say of it. */
+  List<Check> checks() {
+    List<Check> checks = new ArrayList<>();
+    if (place.transformer().isPresent()) {
+      checks.addAll(transformer().checks());
     }
-    findings.addAll(context.sharedNeutrals().at(place.name()));
-    findings.sort(Comparator.comparing(Finding::severity));
-    return List.copyOf(findings);
+    feeder().ifPresent(feeder -> checks.addAll(feeder.checks()));
+    if (place.node().kind() != SiteTree.Kind.CIRCUIT) {
+      checks.addAll(currentDistortion());
+      checks.addAll(voltageDistortion());
+      VoltageQuality.unbalance(voltages.unbalancePercent()).ifPresent(checks::add);
+      if (context.feedsMotors(place.name())) {
+        checks.add(VoltageQuality.motorVoltage(voltages.list()));
+      }
+      checks.addAll(context.banks().at(place));
+    }
+    return checks;
   }
 
-  private List<Finding> loading() {
+  /** What is said besides: what the cable factors do not cover, resonances, shared neutrals. */
+  List<Finding> notes() {
+    List<Finding> notes = new ArrayList<>();
+    feeder().ifPresent(feeder -> notes.addAll(feeder.notes()));
+    if (place.node().kind() != SiteTree.Kind.CIRCUIT) {
+      notes.addAll(resonances());
+    }
+    notes.addAll(context.sharedNeutrals().at(place.name()));
+    return notes;
+  }
+
+  /** The feeder's conductors (a transformer's: its primary's); a supply has none. */
+  private Optional<NeutralLoading> feeder() {
     if (place.transformer().isPresent()) {
-      List<Finding> findings = new ArrayList<>(transformer().findings());
-      findings.addAll(primaryFeeder().findings());
-      return findings;
+      return Optional.of(primaryFeeder());
     }
     if (place.node().kind() == SiteTree.Kind.SUPPLY) {
-      return List.of();
+      return Optional.empty();
     }
-    return ampacity(
+    return Optional.of(
+        ampacity(
             lines(currents),
             Optional.ofNullable(currents.get(Conductor.N)),
             context.ampacities().lines(place),
-            context.ampacities().neutral(place))
-        .findings();
+            context.ampacities().neutral(place)));
   }
 
   /** A transformer's loading by the published methods. */
@@ -125,27 +136,27 @@ final class NodeFindings {
             place.node().section() == SiteTree.Section.THREE_PHASE));
   }
 
-  private List<Finding> currentDistortion(DesignState state) {
-    Optional<Double> demand = known(state.demandA());
-    Optional<Double> fault = known(state.shortCircuitA());
+  private List<Check> currentDistortion() {
+    Optional<Double> demand = known(context.demand(place).amps());
+    Optional<Double> fault = known(context.faults().amps(place.name()));
     if (demand.isEmpty() || fault.isEmpty() || demand.get() <= 0) {
       return List.of();
     }
     return CurrentDistortion519.of(
             Edition519.IEEE_519_2022, place.node().nominalV(), fault.get(), demand.get())
-        .judge(lines(currents), demand.get(), where());
+        .checks(lines(currents), demand.get(), where());
   }
 
-  private List<Finding> voltageDistortion() {
-    List<Finding> findings =
+  private List<Check> voltageDistortion() {
+    List<Check> checks =
         new ArrayList<>(
             VoltageDistortion.ieee519(Edition519.IEEE_519_2022, place.node().nominalV())
-                .judge(voltages.spectra(), where()));
+                .checks(voltages.spectra(), where()));
     if (context.practice() == Practice.IEC) {
-      findings.addAll(
-          VoltageDistortion.iec61000x2x4(PLANT_CLASS).judge(voltages.spectra(), where()));
+      checks.addAll(
+          VoltageDistortion.iec61000x2x4(PLANT_CLASS).checks(voltages.spectra(), where()));
     }
-    return findings;
+    return checks;
   }
 
   private AssessmentPoint where() {
@@ -157,18 +168,28 @@ final class NodeFindings {
         : AssessmentPoint.INSIDE;
   }
 
-  private Optional<Finding> motorVoltage() {
-    return context.feedsMotors(place.name())
-        ? VoltageQuality.motorVoltage(voltages.list())
-        : Optional.empty();
-  }
-
-  private List<Finding> resonances(DesignState state) {
+  private List<Finding> resonances() {
     List<ResonanceCheck.Peak> peaks =
-        state.resonances().stream()
+        context.scan().at(place.name()).stream()
+            .filter(r -> !r.series())
             .map(r -> new ResonanceCheck.Peak(r.order(), r.ohm(), r.bank()))
             .toList();
-    return ResonanceCheck.judge(peaks, withoutZeroSequence());
+    List<Finding> findings = new ArrayList<>(ResonanceCheck.judge(peaks, withoutZeroSequence()));
+    findings.addAll(ResonanceCheck.judge(steps(), withoutZeroSequence()));
+    return findings;
+  }
+
+  /** The peaks of the switched banks here with some of their steps out. */
+  private List<ResonanceCheck.Peak> steps() {
+    return context.bankSteps().at(place.name()).stream()
+        .filter(s -> s.step() < s.steps())
+        .map(
+            s ->
+                new ResonanceCheck.Peak(
+                    s.order(),
+                    s.ohm(),
+                    "%s with %d of %d steps in".formatted(s.bank(), s.step(), s.steps())))
+        .toList();
   }
 
   /** A bank's star point is not earthed: zero sequence passes it by. */
@@ -182,7 +203,7 @@ final class NodeFindings {
     return figure.value().stream().boxed().findFirst();
   }
 
-  private static Map<Conductor, Spectrum> lines(Map<Conductor, Spectrum> all) {
+  static Map<Conductor, Spectrum> lines(Map<Conductor, Spectrum> all) {
     Map<Conductor, Spectrum> lines = new LinkedHashMap<>();
     all.forEach(
         (conductor, spectrum) -> {
@@ -191,23 +212,5 @@ final class NodeFindings {
           }
         });
     return lines;
-  }
-
-  /** The demand current this node's TDD stands on. */
-  static Demand demand(AuditContext context, Place place, Map<Conductor, Spectrum> currents) {
-    if (context.supply().isGenerator()) {
-      return new Demand(Figure.unknown("no TDD on a generator"), "");
-    }
-    Optional<Double> surveyed = context.surveyedDemandA(place.name());
-    if (surveyed.isPresent()) {
-      return new Demand(Figure.of(surveyed.get()), "Demand current as surveyed.");
-    }
-    double largest =
-        lines(currents).values().stream().mapToDouble(s -> s.magnitude(1)).max().orElse(0);
-    return largest > 0
-        ? new Demand(
-            Figure.of(largest),
-            "Largest line fundamental of the design state, none being surveyed.")
-        : new Demand(Figure.unknown("no line carries current"), "");
   }
 }

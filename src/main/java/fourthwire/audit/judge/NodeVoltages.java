@@ -9,6 +9,7 @@ import fourthwire.quantity.Conductor;
 import fourthwire.quantity.Distortion;
 import fourthwire.quantity.Figure;
 import fourthwire.quantity.Spectrum;
+import fourthwire.quantity.SymmetricalComponents;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -49,6 +50,13 @@ record NodeVoltages(Map<String, Spectrum> spectra, double nominalV, Figure neutr
 
   boolean toNeutral() {
     return neutralToEarthV.value().isPresent();
+  }
+
+  /** |V2|/|V1| at the fundamental. */
+  Figure unbalancePercent() {
+    return spectra.size() == 3
+        ? SymmetricalComponents.of(list()).negativePercent()
+        : NodeReport.NOT_THREE_LINES;
   }
 
   List<Spectrum> list() {

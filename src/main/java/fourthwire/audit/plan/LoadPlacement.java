@@ -16,4 +16,9 @@ import java.util.List;
  * @param request what its model is made from
  */
 public record LoadPlacement(
-    Load load, String circuit, List<Conductor> from, List<Conductor> to, LoadRequest request) {}
+    Load load, String circuit, List<Conductor> from, List<Conductor> to, LoadRequest request) {
+  /** The same load at the same place, as another request makes it. */
+  public LoadPlacement with(LoadRequest other) {
+    return new LoadPlacement(load, circuit, from, to, other);
+  }
+}

@@ -48,12 +48,14 @@ final class NodeShapes {
         .textOrNull("fed_from", "The node that feeds it; null for a supply")
         .text("supply", "The supply in use")
         .partOrReason("design", design())
-        .partOrReason(
-            "range", Shape.of("Spread of the figures; not computed by this version").schema())
-        .partOrReason("week", Shape.of("Figures of the hours of a week; not computed yet").schema())
+        .partOrReason("range", StateShapes.range())
+        .partOrReason("doubt", StateShapes.doubt())
+        .partOrReason("week", StateShapes.week())
         .partOrReason("measured", measured(true))
         .list("findings", "What is over a limit, near it, or worth a note", finding())
         .list("assumptions", "What was assumed for this node", Shape.text("A sentence"))
+        .partOrReason("impedance", StateShapes.impedance())
+        .list("bank_steps", "Resonances of the switched banks here", StateShapes.bankStep())
         .schema();
   }
 
@@ -101,6 +103,7 @@ final class NodeShapes {
         .number("order", "At this order; need not be whole")
         .number("ohm", "Impedance there")
         .text("bank", "The capacitor bank or filter")
+        .word("kind", "parallel: a peak of the impedance; series: a dip", "parallel", "series")
         .schema();
   }
 
@@ -131,11 +134,16 @@ final class NodeShapes {
   private static Schema<?> finding() {
     return Shape.of("A finding")
         .text("code", "What kind of finding")
-        .word("severity", "act: over the limit; watch: over 80 % of it", "act", "watch", "note")
+        .word(
+            "severity",
+            "act: over the limit, or so with probability 0.5; watch: over 80 % of it, or 0.1",
+            "act",
+            "watch",
+            "note")
         .figure("figure", "What was computed or measured, in unit")
         .figure("limit", "What it is held against, in unit")
         .text("unit", "The unit of both")
-        .figure("probability", "That it is over the limit; not computed by this version")
+        .figure("probability", "That it is over the limit, 0 to 1; by the draws")
         .text("basis", "Document, edition, clause")
         .text("sentence", "The finding in words")
         .schema();

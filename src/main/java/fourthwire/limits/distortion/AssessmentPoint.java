@@ -1,7 +1,6 @@
 package fourthwire.limits.distortion;
 
-import fourthwire.limits.Judgement;
-import fourthwire.limits.Severity;
+import fourthwire.limits.Check;
 import java.util.Optional;
 
 /**
@@ -21,11 +20,11 @@ public enum AssessmentPoint {
     return this == INSIDE ? " Guidance only, away from the point of common coupling." : "";
   }
 
-  /** Over the limit inside the site is watched; near it is nothing. */
-  Optional<Severity> judge(double figure, double limit) {
+  /** What being over the limit means here; empty where nothing is checked. */
+  Optional<Check.Rule> rule() {
     return switch (this) {
-      case COMMON_COUPLING -> Judgement.of(figure, limit);
-      case INSIDE -> figure > limit ? Optional.of(Severity.WATCH) : Optional.empty();
+      case COMMON_COUPLING -> Optional.of(Check.Rule.BINDING);
+      case INSIDE -> Optional.of(Check.Rule.GUIDE);
       case GENERATOR -> Optional.empty();
     };
   }

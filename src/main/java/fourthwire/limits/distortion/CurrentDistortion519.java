@@ -1,9 +1,9 @@
 package fourthwire.limits.distortion;
 
+import fourthwire.limits.Check;
 import fourthwire.limits.Finding;
 import fourthwire.limits.FindingCode;
 import fourthwire.limits.Judgement;
-import fourthwire.limits.Severity;
 import fourthwire.limits.Words;
 import fourthwire.quantity.Conductor;
 import fourthwire.quantity.Distortion;
@@ -13,7 +13,6 @@ import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Map;
-import java.util.Optional;
 import java.util.stream.IntStream;
 import java.util.stream.Stream;
 
@@ -87,54 +86,60 @@ public final class CurrentDistortion519 {
    */
   public List<Finding> judge(
       Map<Conductor, Spectrum> lines, double demandA, AssessmentPoint place) {
-    List<Finding> findings = new ArrayList<>();
-    judgeOrders(lines, demandA, place).ifPresent(findings::add);
-    judgeTdd(lines, demandA, place).ifPresent(findings::add);
-    return findings;
+    return Judgement.findings(checks(lines, demandA, place));
   }
 
-  private Optional<Finding> judgeOrders(
-      Map<Conductor, Spectrum> lines, double demandA, AssessmentPoint place) {
-    return orders(lines, demandA)
-        .max(Comparator.comparingDouble(OrderFigure::ofLimit))
-        .flatMap(
-            worst ->
-                place
-                    .judge(worst.percent(), worst.limit())
-                    .map(severity -> orderFinding(lines, demandA, place, worst, severity)));
+  /** The checks behind {@link #judge}: the worst order, and TDD; none on a generator. */
+  public List<Check> checks(Map<Conductor, Spectrum> lines, double demandA, AssessmentPoint place) {
+    List<Check> checks = new ArrayList<>();
+    place
+        .rule()
+        .ifPresent(
+            rule -> {
+              orders(lines, demandA)
+                  .max(Comparator.comparingDouble(OrderFigure::ofLimit))
+                  .map(worst -> orderCheck(lines, demandA, place, worst, rule))
+                  .ifPresent(checks::add);
+              checks.add(tddCheck(lines, demandA, place, rule));
+            });
+    return checks;
   }
 
-  private Finding orderFinding(
+  private Check orderCheck(
       Map<Conductor, Spectrum> lines,
       double demandA,
       AssessmentPoint place,
       OrderFigure worst,
-      Severity severity) {
+      Check.Rule rule) {
+    return new Check(
+        FindingCode.CURRENT_ORDER,
+        "",
+        rule,
+        worst.percent(),
+        worst.limit(),
+        "%",
+        basis(),
+        () -> orderSentence(lines, demandA, place, worst));
+  }
+
+  private String orderSentence(
+      Map<Conductor, Spectrum> lines, double demandA, AssessmentPoint place, OrderFigure worst) {
     long over =
         orders(lines, demandA)
             .filter(o -> o.percent() > o.limit())
             .mapToInt(OrderFigure::order)
             .distinct()
             .count();
-    String sentence =
-        "The %s harmonic of %s is %s %% of the demand current; %s allows %s %% at this short-circuit ratio (%s).%s%s"
-            .formatted(
-                Words.ordinal(worst.order()),
-                worst.line(),
-                Words.number(worst.percent()),
-                edition.document(),
-                Words.number(worst.limit()),
-                Words.number(ratio),
-                over > 1 ? " " + over + " orders are over their limits." : "",
-                place.remark());
-    return Judgement.finding(
-        FindingCode.CURRENT_ORDER,
-        severity,
-        worst.percent(),
-        worst.limit(),
-        "%",
-        basis(),
-        sentence);
+    return "The %s harmonic of %s is %s %% of the demand current; %s allows %s %% at this short-circuit ratio (%s).%s%s"
+        .formatted(
+            Words.ordinal(worst.order()),
+            worst.line(),
+            Words.number(worst.percent()),
+            edition.document(),
+            Words.number(worst.limit()),
+            Words.number(ratio),
+            over > 1 ? " " + over + " orders are over their limits." : "",
+            place.remark());
   }
 
   private Stream<OrderFigure> orders(Map<Conductor, Spectrum> lines, double demandA) {
@@ -151,32 +156,30 @@ public final class CurrentDistortion519 {
                                 orderLimitPercent(h))));
   }
 
-  private Optional<Finding> judgeTdd(
-      Map<Conductor, Spectrum> lines, double demandA, AssessmentPoint place) {
+  private Check tddCheck(
+      Map<Conductor, Spectrum> lines, double demandA, AssessmentPoint place, Check.Rule rule) {
     double limit = tddLimitPercent();
     double worst =
         lines.values().stream()
             .mapToDouble(line -> Distortion.tddPercent(line, demandA).value().orElse(0))
             .max()
             .orElse(0);
-    return place
-        .judge(worst, limit)
-        .map(
-            severity ->
-                Judgement.finding(
-                    FindingCode.CURRENT_TDD,
-                    severity,
-                    worst,
-                    limit,
-                    "%",
-                    basis(),
-                    "Total demand distortion is %s %%; %s allows %s %% at this short-circuit ratio (%s).%s"
-                        .formatted(
-                            Words.number(worst),
-                            edition.document(),
-                            Words.number(limit),
-                            Words.number(ratio),
-                            place.remark())));
+    return new Check(
+        FindingCode.CURRENT_TDD,
+        "",
+        rule,
+        worst,
+        limit,
+        "%",
+        basis(),
+        () ->
+            "Total demand distortion is %s %%; %s allows %s %% at this short-circuit ratio (%s).%s"
+                .formatted(
+                    Words.number(worst),
+                    edition.document(),
+                    Words.number(limit),
+                    Words.number(ratio),
+                    place.remark()));
   }
 
   private static String band(int order) {

@@ -1,9 +1,9 @@
 package fourthwire.limits.distortion;
 
+import fourthwire.limits.Check;
 import fourthwire.limits.Finding;
 import fourthwire.limits.FindingCode;
 import fourthwire.limits.Judgement;
-import fourthwire.limits.Severity;
 import fourthwire.limits.Words;
 import fourthwire.quantity.PublishedTable;
 import fourthwire.quantity.Spectrum;
@@ -114,26 +114,33 @@ public final class VoltageDistortion {
    * @param voltages by name, {@code L1} to neutral or {@code L1-L2}
    */
   public List<Finding> judge(Map<String, Spectrum> voltages, AssessmentPoint place) {
+    return Judgement.findings(checks(voltages, place));
+  }
+
+  /** The checks behind {@link #judge}: the worst order, and THD. */
+  public List<Check> checks(Map<String, Spectrum> voltages, AssessmentPoint place) {
     AssessmentPoint binding =
         everywhere && place != AssessmentPoint.COMMON_COUPLING
             ? AssessmentPoint.COMMON_COUPLING
             : place;
-    List<Finding> findings = new ArrayList<>();
-    judgeOrders(voltages, binding).ifPresent(findings::add);
-    judgeThd(voltages, binding).ifPresent(findings::add);
-    return findings;
+    List<Check> checks = new ArrayList<>();
+    binding
+        .rule()
+        .ifPresent(
+            rule -> {
+              worstOrder(voltages)
+                  .map(worst -> orderCheck(worst, binding, rule))
+                  .ifPresent(checks::add);
+              checks.add(thdCheck(voltages, binding, rule));
+            });
+    return checks;
   }
 
-  private Optional<Finding> judgeOrders(Map<String, Spectrum> voltages, AssessmentPoint place) {
+  private Optional<OrderFigure> worstOrder(Map<String, Spectrum> voltages) {
     return voltages.entrySet().stream()
         .filter(voltage -> voltage.getValue().magnitude(1) > 0)
         .flatMap(voltage -> figures(voltage.getKey(), voltage.getValue()))
-        .max(Comparator.comparingDouble(OrderFigure::ofLimit))
-        .flatMap(
-            worst ->
-                place
-                    .judge(worst.percent(), worst.limit())
-                    .map(severity -> orderFinding(worst, place, severity)));
+        .max(Comparator.comparingDouble(OrderFigure::ofLimit));
   }
 
   private Stream<OrderFigure> figures(String name, Spectrum voltage) {
@@ -149,36 +156,39 @@ public final class VoltageDistortion {
                     orderLimitPercent(h).getAsDouble()));
   }
 
-  private Finding orderFinding(OrderFigure worst, AssessmentPoint place, Severity severity) {
-    String sentence =
-        "The %s harmonic of the voltage %s is %s %%; %s allows %s %%.%s"
-            .formatted(
-                Words.ordinal(worst.order()),
-                worst.line(),
-                Words.number(worst.percent()),
-                document,
-                Words.number(worst.limit()),
-                place.remark());
-    return Judgement.finding(
-        FindingCode.VOLTAGE_ORDER, severity, worst.percent(), worst.limit(), "%", basis, sentence);
+  private Check orderCheck(OrderFigure worst, AssessmentPoint place, Check.Rule rule) {
+    return new Check(
+        FindingCode.VOLTAGE_ORDER,
+        document,
+        rule,
+        worst.percent(),
+        worst.limit(),
+        "%",
+        basis,
+        () ->
+            "The %s harmonic of the voltage %s is %s %%; %s allows %s %%.%s"
+                .formatted(
+                    Words.ordinal(worst.order()),
+                    worst.line(),
+                    Words.number(worst.percent()),
+                    document,
+                    Words.number(worst.limit()),
+                    place.remark()));
   }
 
-  private Optional<Finding> judgeThd(Map<String, Spectrum> voltages, AssessmentPoint place) {
+  private Check thdCheck(Map<String, Spectrum> voltages, AssessmentPoint place, Check.Rule rule) {
     double worst = voltages.values().stream().mapToDouble(this::thdPercent).max().orElse(0);
-    return place
-        .judge(worst, thd)
-        .map(
-            severity ->
-                Judgement.finding(
-                    FindingCode.VOLTAGE_THD,
-                    severity,
-                    worst,
-                    thd,
-                    "%",
-                    basis,
-                    "Total harmonic distortion of the voltage is %s %%; %s allows %s %%.%s"
-                        .formatted(
-                            Words.number(worst), document, Words.number(thd), place.remark())));
+    return new Check(
+        FindingCode.VOLTAGE_THD,
+        document,
+        rule,
+        worst,
+        thd,
+        "%",
+        basis,
+        () ->
+            "Total harmonic distortion of the voltage is %s %%; %s allows %s %%.%s"
+                .formatted(Words.number(worst), document, Words.number(thd), place.remark()));
   }
 
   /** To the highest order the document counts. */

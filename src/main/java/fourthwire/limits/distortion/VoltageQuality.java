@@ -1,15 +1,12 @@
 package fourthwire.limits.distortion;
 
-import fourthwire.limits.Finding;
+import fourthwire.limits.Check;
 import fourthwire.limits.FindingCode;
-import fourthwire.limits.Judgement;
-import fourthwire.limits.Severity;
 import fourthwire.limits.Words;
 import fourthwire.quantity.Distortion;
 import fourthwire.quantity.Figure;
 import fourthwire.quantity.Spectrum;
 import java.util.Collection;
-import java.util.List;
 import java.util.Optional;
 
 /** What a voltage does to motors: harmonic voltage factor and unbalance. */
@@ -25,49 +22,42 @@ public final class VoltageQuality {
    * The harmonic voltage factor at a node that feeds motors; above 0.03 a motor is to be derated.
    * The derating curve beyond is not applied: no printed figures were at hand.
    */
-  public static Optional<Finding> motorVoltage(Collection<Spectrum> voltages) {
+  public static Check motorVoltage(Collection<Spectrum> voltages) {
     double worst =
         voltages.stream()
             .map(Distortion::harmonicVoltageFactor)
             .mapToDouble(f -> f.value().orElse(0))
             .max()
             .orElse(0);
-    String sentence =
-        "The harmonic voltage factor at the motors is %s; above %s a motor is derated."
-            .formatted(Words.number(worst), Words.number(HVF_LIMIT));
-    return Judgement.of(worst, HVF_LIMIT)
-        .map(
-            severity ->
-                Judgement.finding(
-                    FindingCode.MOTOR_VOLTAGE,
-                    severity,
-                    worst,
-                    HVF_LIMIT,
-                    "",
-                    HVF_BASIS,
-                    sentence));
+    return new Check(
+        FindingCode.MOTOR_VOLTAGE,
+        "",
+        Check.Rule.BINDING,
+        worst,
+        HVF_LIMIT,
+        "",
+        HVF_BASIS,
+        () ->
+            "The harmonic voltage factor at the motors is %s; above %s a motor is derated."
+                .formatted(Words.number(worst), Words.number(HVF_LIMIT)));
   }
 
   /** Negative on positive sequence, percent; nothing where it is unknown. */
-  public static List<Finding> unbalance(Figure voltageUnbalancePercent) {
-    return voltageUnbalancePercent.value().stream()
-        .mapToObj(
-            percent ->
-                Judgement.of(percent, UNBALANCE_LIMIT_PERCENT)
-                    .map(severity -> unbalanceFinding(severity, percent)))
-        .flatMap(Optional::stream)
-        .toList();
+  public static Optional<Check> unbalance(Figure voltageUnbalancePercent) {
+    return voltageUnbalancePercent.value().stream().mapToObj(VoltageQuality::unbalance).findFirst();
   }
 
-  private static Finding unbalanceFinding(Severity severity, double percent) {
-    return Judgement.finding(
+  private static Check unbalance(double percent) {
+    return new Check(
         FindingCode.VOLTAGE_UNBALANCE,
-        severity,
+        "",
+        Check.Rule.BINDING,
         percent,
         UNBALANCE_LIMIT_PERCENT,
         "%",
         UNBALANCE_BASIS,
-        "The voltage's negative sequence is %s %% of its positive; %s %% is the usual bound."
-            .formatted(Words.number(percent), Words.number(UNBALANCE_LIMIT_PERCENT)));
+        () ->
+            "The voltage's negative sequence is %s %% of its positive; %s %% is the usual bound."
+                .formatted(Words.number(percent), Words.number(UNBALANCE_LIMIT_PERCENT)));
   }
 }

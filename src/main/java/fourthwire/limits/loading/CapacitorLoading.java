@@ -1,15 +1,14 @@
 package fourthwire.limits.loading;
 
+import fourthwire.limits.Check;
 import fourthwire.limits.Finding;
 import fourthwire.limits.FindingCode;
 import fourthwire.limits.Judgement;
-import fourthwire.limits.Severity;
 import fourthwire.limits.Words;
 import fourthwire.quantity.PublishedTable;
 import fourthwire.quantity.Spectrum;
 import java.util.ArrayList;
 import java.util.List;
-import java.util.Optional;
 
 /** A capacitor bank against the continuous overloads its standard makes it stand. */
 public final class CapacitorLoading {
@@ -62,84 +61,88 @@ public final class CapacitorLoading {
 
   /** Judges the most loaded phase of a bank: current, voltage and reactive power. */
   public static List<Finding> judge(Phase phase, Standard standard) {
-    List<Finding> findings = new ArrayList<>();
-    for (PublishedTable.Row row : TABLE.rows()) {
-      if (row.text("standard").equals(standard.document())) {
-        judge(phase, row, findings);
-      }
-    }
-    return findings;
+    return Judgement.findings(checks(phase, standard));
   }
 
-  private static void judge(Phase phase, PublishedTable.Row row, List<Finding> findings) {
-    switch (row.text("quantity")) {
+  /** The checks behind {@link #judge}. */
+  public static List<Check> checks(Phase phase, Standard standard) {
+    List<Check> checks = new ArrayList<>();
+    for (PublishedTable.Row row : TABLE.rows()) {
+      if (row.text("standard").equals(standard.document())) {
+        checks.add(check(phase, row));
+      }
+    }
+    return checks;
+  }
+
+  private static Check check(Phase phase, PublishedTable.Row row) {
+    return switch (row.text("quantity")) {
       case "current" ->
-          add(
+          check(
               phase,
               row,
-              findings,
               FindingCode.CAPACITOR_CURRENT,
               "current",
               phase.current().rms(),
               phase.ratedA(),
               "A");
       case "voltage" ->
-          add(
+          check(
               phase,
               row,
-              findings,
               FindingCode.CAPACITOR_VOLTAGE,
               "voltage",
               phase.voltage().rms(),
               phase.ratedV(),
               "V");
       default ->
-          add(
+          check(
               phase,
               row,
-              findings,
               FindingCode.CAPACITOR_POWER,
               "reactive power",
               phase.reactiveVar() / 1000,
               phase.ratedVar() / 1000,
               "kvar");
-    }
+    };
   }
 
-  private static void add(
+  private static Check check(
       Phase phase,
       PublishedTable.Row row,
-      List<Finding> findings,
       FindingCode code,
       String what,
       double figure,
       double rated,
       String unit) {
     double limit = rated * row.number("limit");
-    String sentence =
-        "Bank %s: %s %s %s a phase; it may stand %s times its rated %s %s, that is %s %s."
-            .formatted(
-                phase.bank(),
-                what,
-                Words.number(figure),
-                unit,
-                Words.number(row.number("limit")),
-                Words.number(rated),
-                unit,
-                Words.number(limit),
-                unit);
     String memory = row.text("provenance").equals("from memory") ? " (figures from memory)" : "";
-    String basis = row.text("standard") + ", " + row.text("clause") + memory;
-    severity(code, figure, limit)
-        .map(severity -> Judgement.finding(code, severity, figure, limit, unit, basis, sentence))
-        .ifPresent(findings::add);
+    return new Check(
+        code,
+        phase.bank(),
+        rule(code),
+        figure,
+        limit,
+        unit,
+        row.text("standard") + ", " + row.text("clause") + memory,
+        () ->
+            "Bank %s: %s %s %s a phase; it may stand %s times its rated %s %s, that is %s %s."
+                .formatted(
+                    phase.bank(),
+                    what,
+                    Words.number(figure),
+                    unit,
+                    Words.number(row.number("limit")),
+                    Words.number(rated),
+                    unit,
+                    Words.number(limit),
+                    unit));
   }
 
   /** At its rated voltage a bank stands at 91 % of the permissible: that is no news. */
-  private static Optional<Severity> severity(FindingCode code, double figure, double limit) {
-    if (code == FindingCode.CAPACITOR_VOLTAGE && figure <= limit) {
-      return Optional.empty();
-    }
-    return Judgement.of(figure, limit);
+  private static Check.Rule rule(FindingCode code) {
+    return code == FindingCode.CAPACITOR_VOLTAGE
+        ? Check.Rule.BINDING_FROM_THE_LIMIT
+        : Check.Rule.BINDING;
   }
 }

@@ -1,8 +1,7 @@
 package fourthwire.limits.loading;
 
-import fourthwire.limits.Finding;
+import fourthwire.limits.Check;
 import fourthwire.limits.FindingCode;
-import fourthwire.limits.Judgement;
 import fourthwire.limits.Words;
 import fourthwire.quantity.Figure;
 import java.util.Comparator;
@@ -52,23 +51,21 @@ public record ConductorLoading(
         Figure.of(100 * rmsA / adjustedA));
   }
 
-  /** Act, watch or nothing; nothing where no rating is known. */
-  Optional<Finding> finding(FindingCode code, String conductor, AmpacityFactors factors) {
+  /** The current against the adjusted rating; empty where no rating is known. */
+  Optional<Check> check(FindingCode code, String conductor, AmpacityFactors factors) {
     if (adjustedAmpacityA.value().isEmpty()) {
       return Optional.empty();
     }
-    double limit = adjustedAmpacityA.value().getAsDouble();
-    return Judgement.of(rmsA, limit)
-        .map(
-            severity ->
-                Judgement.finding(
-                    code,
-                    severity,
-                    rmsA,
-                    limit,
-                    "A",
-                    basis(factors),
-                    sentence(conductor, factors)));
+    return Optional.of(
+        new Check(
+            code,
+            "",
+            Check.Rule.BINDING,
+            rmsA,
+            adjustedAmpacityA.value().getAsDouble(),
+            "A",
+            basis(factors),
+            () -> sentence(conductor, factors)));
   }
 
   /** Whether it uses more of what it carries than the other does. */
@@ -90,7 +87,7 @@ public record ConductorLoading(
                     adjustedName,
                     Words.number(limit / factor),
                     Words.number(factor),
-                    factors.reason())
+                    factors.reason().get())
             : adjustedName;
     return "%s carries %s A, %s %% of the %s A that it is good for (%s)."
         .formatted(

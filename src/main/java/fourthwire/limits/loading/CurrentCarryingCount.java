@@ -35,10 +35,13 @@ public final class CurrentCarryingCount {
     boolean counts = counts(c);
     int count = c.lines().size() + (counts ? 1 : 0);
     double factor = percent(count) / 100;
-    String reason =
-        "%s (%d current-carrying conductor%s: factor %s)"
-            .formatted(reason(c, counts), count, count == 1 ? "" : "s", Words.number(factor));
-    return new AmpacityFactors(factor, factor, reason, BASIS);
+    return new AmpacityFactors(
+        factor,
+        factor,
+        () ->
+            "%s (%d current-carrying conductor%s: factor %s)"
+                .formatted(reason(c, counts), count, count == 1 ? "" : "s", Words.number(factor)),
+        BASIS);
   }
 
   private static boolean counts(NeutralCase c) {

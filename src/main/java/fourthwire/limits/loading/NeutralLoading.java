@@ -1,5 +1,6 @@
 package fourthwire.limits.loading;
 
+import fourthwire.limits.Check;
 import fourthwire.limits.Finding;
 import fourthwire.limits.FindingCode;
 import fourthwire.limits.Judgement;
@@ -10,6 +11,7 @@ import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalDouble;
 
 /**
  * A feeder's neutral and its most loaded line against their ampacities, with the harmonic factor
@@ -22,9 +24,9 @@ import java.util.Optional;
  * @param thirdHarmonicPercent I3/I1 of the most loaded line
  * @param requiredAmpacityA tabulated ampacity that a cable would need for these currents with these
  *     factors, amps
- * @param findings act over the limit, watch over 80 %, a note on other triplens; worst first. A
- *     circuit of one line says the same of line and neutral, so the neutral is left out there
- *     unless it is the tighter of the two
+ * @param checks the neutral's and the most loaded line's. A circuit of one line says the same of
+ *     line and neutral, so the neutral is left out there unless it is the tighter of the two
+ * @param otherTriplensPercent orders 6, 9, 12 … on the fundamental, where a rule asks for it
  */
 public record NeutralLoading(
     Optional<ConductorLoading> neutral,
@@ -33,7 +35,8 @@ public record NeutralLoading(
     AmpacityFactors factors,
     Figure thirdHarmonicPercent,
     double requiredAmpacityA,
-    List<Finding> findings) {
+    List<Check> checks,
+    OptionalDouble otherTriplensPercent) {
 
   /** Judges a feeder. */
   public static NeutralLoading of(NeutralCase c) {
@@ -43,14 +46,12 @@ public record NeutralLoading(
     ConductorLoading line = ConductorLoading.of(worst.rms(), c.lineRatings(), factors.line());
     Optional<ConductorLoading> neutral =
         c.neutral().map(n -> ConductorLoading.of(n.rms(), c.neutralRatings(), factors.neutral()));
-    List<Finding> findings = new ArrayList<>();
+    List<Check> checks = new ArrayList<>();
     neutral
         .filter(n -> c.lines().size() > 1 || n.isTighterThan(line))
-        .flatMap(n -> n.finding(FindingCode.NEUTRAL_AMPACITY, "The neutral", factors))
-        .ifPresent(findings::add);
-    line.finding(FindingCode.LINE_AMPACITY, lineName, factors).ifPresent(findings::add);
-    otherTriplens(c, worst, lineName).ifPresent(findings::add);
-    findings.sort(Comparator.comparing(Finding::severity));
+        .flatMap(n -> n.check(FindingCode.NEUTRAL_AMPACITY, "The neutral", factors))
+        .ifPresent(checks::add);
+    line.check(FindingCode.LINE_AMPACITY, lineName, factors).ifPresent(checks::add);
     return new NeutralLoading(
         neutral,
         line,
@@ -60,7 +61,21 @@ public record NeutralLoading(
         Math.max(
             line.rmsA() / factors.line(),
             neutral.map(n -> n.rmsA() / factors.neutral()).orElse(0.0)),
-        List.copyOf(findings));
+        List.copyOf(checks),
+        otherTriplens(c, worst));
+  }
+
+  /** Act over the limit, watch over 80 %, a note on other triplens; worst first. */
+  public List<Finding> findings() {
+    List<Finding> findings = new ArrayList<>(Judgement.findings(checks));
+    notes().forEach(findings::add);
+    findings.sort(Comparator.comparing(Finding::severity));
+    return findings;
+  }
+
+  /** What is said besides the checks: triplens that the cable factors do not cover. */
+  public List<Finding> notes() {
+    return otherTriplensPercent.stream().mapToObj(this::otherTriplens).toList();
   }
 
   private static Figure thirdPercent(Spectrum line) {
@@ -69,23 +84,25 @@ public record NeutralLoading(
         : Figure.unknown("no fundamental");
   }
 
-  private static Optional<Finding> otherTriplens(NeutralCase c, Spectrum worst, String lineName) {
+  private static OptionalDouble otherTriplens(NeutralCase c, Spectrum worst) {
     double percent = ThirdHarmonicContent.otherTriplensPercent(worst);
-    if (c.rule() != AmpacityRule.THIRD_HARMONIC_CONTENT
-        || !c.isFourWire()
-        || percent <= ThirdHarmonicContent.OTHER_TRIPLENS_PERCENT) {
-      return Optional.empty();
-    }
-    return Optional.of(
-        Judgement.note(
-            FindingCode.OTHER_TRIPLENS,
-            percent,
-            "%",
-            ThirdHarmonicContent.basis(),
-            "On %s the triplen harmonics beyond the third come to %s %% of the fundamental; above %s %% Annex E asks for a lower factor than its table gives."
-                .formatted(
-                    lineName,
-                    Words.number(percent),
-                    Words.number(ThirdHarmonicContent.OTHER_TRIPLENS_PERCENT))));
+    boolean told =
+        c.rule() == AmpacityRule.THIRD_HARMONIC_CONTENT
+            && c.isFourWire()
+            && percent > ThirdHarmonicContent.OTHER_TRIPLENS_PERCENT;
+    return told ? OptionalDouble.of(percent) : OptionalDouble.empty();
+  }
+
+  private Finding otherTriplens(double percent) {
+    return Judgement.note(
+        FindingCode.OTHER_TRIPLENS,
+        percent,
+        "%",
+        ThirdHarmonicContent.basis(),
+        "On %s the triplen harmonics beyond the third come to %s %% of the fundamental; above %s %% Annex E asks for a lower factor than its table gives."
+            .formatted(
+                lineName,
+                Words.number(percent),
+                Words.number(ThirdHarmonicContent.OTHER_TRIPLENS_PERCENT)));
   }
 }

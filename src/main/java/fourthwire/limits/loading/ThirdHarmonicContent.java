@@ -25,21 +25,25 @@ final class ThirdHarmonicContent {
 
   static AmpacityFactors factors(NeutralCase c) {
     if (!c.isFourWire()) {
-      return new AmpacityFactors(1, 1, "Annex E is for three lines and a neutral", TABLE.basis());
+      return new AmpacityFactors(
+          1, 1, () -> "Annex E is for three lines and a neutral", TABLE.basis());
     }
     double content = percent(c.mostLoadedLine().getValue());
     PublishedTable.Row row = row(content);
     double factor = row.number("factor");
     boolean onLine = row.text("size_on").equals("line");
-    String reason =
-        "the third harmonic is %s %% of the fundamental on %s (%s: factor %s on the %s)"
-            .formatted(
-                Words.number(content),
-                c.mostLoadedLine().getKey(),
-                band(row),
-                Words.number(factor),
-                onLine ? "line" : "neutral");
-    return new AmpacityFactors(onLine ? factor : 1, onLine ? 1 : factor, reason, TABLE.basis());
+    return new AmpacityFactors(
+        onLine ? factor : 1,
+        onLine ? 1 : factor,
+        () ->
+            "the third harmonic is %s %% of the fundamental on %s (%s: factor %s on the %s)"
+                .formatted(
+                    Words.number(content),
+                    c.mostLoadedLine().getKey(),
+                    band(row),
+                    Words.number(factor),
+                    onLine ? "line" : "neutral"),
+        TABLE.basis());
   }
 
   /** I3/I1, percent; 0 where no fundamental flows. */

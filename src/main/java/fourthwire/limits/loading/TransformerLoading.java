@@ -1,5 +1,6 @@
 package fourthwire.limits.loading;
 
+import fourthwire.limits.Check;
 import fourthwire.limits.Finding;
 import fourthwire.limits.FindingCode;
 import fourthwire.limits.Judgement;
@@ -12,6 +13,7 @@ import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
 import java.util.OptionalDouble;
+import java.util.function.Supplier;
 
 /**
  * What a transformer carries of a distorted current.
@@ -30,7 +32,7 @@ import java.util.OptionalDouble;
  * @param deratedLoadingPercent rms of the most loaded line on {@code deratedA}
  * @param factorK divisor of the rating by the European method
  * @param factorKKva rating on factor K, kVA
- * @param findings act over the limit, watch over 80 %
+ * @param checks the load against the derated rating, or against rating and K rating
  */
 public record TransformerLoading(
     Figure loadingPercent,
@@ -41,7 +43,7 @@ public record TransformerLoading(
     Figure deratedLoadingPercent,
     Figure factorK,
     Figure factorKKva,
-    List<Finding> findings) {
+    List<Check> checks) {
   private static final String C57_110 = "IEEE C57.110-2018, clause 5 (from memory)";
   private static final String UL_1561 = "UL 1561, K-factor (from memory)";
   private static final PublishedTable K_RATINGS =
@@ -72,7 +74,12 @@ public record TransformerLoading(
         deratedA.map(a -> 100 * rmsA / a),
         factorK,
         factorK.map(f -> t.ratedKva() / f),
-        findings(t, rmsA, k, deratedKva));
+        checks(t, rmsA, k, deratedKva));
+  }
+
+  /** Act over the limit, watch over 80 %. */
+  public List<Finding> findings() {
+    return Judgement.findings(checks);
   }
 
   /** Largest permissible current of this shape on the rated current (IEEE C57.110-2018). */
@@ -88,73 +95,65 @@ public record TransformerLoading(
         .min();
   }
 
-  private static List<Finding> findings(
-      TransformerCase t, double rmsA, double k, Figure deratedKva) {
-    List<Finding> findings = new ArrayList<>();
+  private static List<Check> checks(TransformerCase t, double rmsA, double k, Figure deratedKva) {
+    List<Check> checks = new ArrayList<>();
     double loadKva = t.ratedKva() * rmsA / t.ratedA();
     if (t.kRating().isPresent()) {
-      ratedLoading(t, loadKva, findings);
-      kRating(t.kRating().getAsDouble(), k, findings);
+      checks.add(ratedLoading(t, loadKva));
+      checks.add(kRating(t.kRating().getAsDouble(), k));
     } else {
-      deratedKva.value().ifPresent(limit -> deratedLoading(t, loadKva, limit, findings));
+      deratedKva.value().ifPresent(limit -> checks.add(deratedLoading(t, loadKva, limit)));
     }
-    return List.copyOf(findings);
+    return List.copyOf(checks);
   }
 
-  private static void deratedLoading(
-      TransformerCase t, double loadKva, double limit, List<Finding> findings) {
-    String sentence =
-        "The most loaded line puts %s kVA on the transformer; with this current's harmonics its rating of %s kVA is good for %s kVA."
-            .formatted(Words.number(loadKva), Words.number(t.ratedKva()), Words.number(limit));
-    Judgement.of(loadKva, limit)
-        .map(
-            severity ->
-                Judgement.finding(
-                    FindingCode.TRANSFORMER_LOADING,
-                    severity,
-                    loadKva,
-                    limit,
-                    "kVA",
-                    C57_110,
-                    sentence))
-        .ifPresent(findings::add);
+  private static Check deratedLoading(TransformerCase t, double loadKva, double limit) {
+    return loading(
+        loadKva,
+        limit,
+        C57_110,
+        () ->
+            "The most loaded line puts %s kVA on the transformer; with this current's harmonics its rating of %s kVA is good for %s kVA."
+                .formatted(Words.number(loadKva), Words.number(t.ratedKva()), Words.number(limit)));
+  }
+
+  private static Check loading(
+      double loadKva, double limitKva, String basis, Supplier<String> sentence) {
+    return new Check(
+        FindingCode.TRANSFORMER_LOADING,
+        "",
+        Check.Rule.BINDING,
+        loadKva,
+        limitKva,
+        "kVA",
+        basis,
+        sentence);
   }
 
   /** A K-rated transformer bears its rated current as long as the K-factor is within its rating. */
-  private static void ratedLoading(TransformerCase t, double loadKva, List<Finding> findings) {
-    String sentence =
-        "The most loaded line puts %s kVA on the transformer, which is rated %s kVA."
-            .formatted(Words.number(loadKva), Words.number(t.ratedKva()));
-    Judgement.of(loadKva, t.ratedKva())
-        .map(
-            severity ->
-                Judgement.finding(
-                    FindingCode.TRANSFORMER_LOADING,
-                    severity,
-                    loadKva,
-                    t.ratedKva(),
-                    "kVA",
-                    "rating as surveyed",
-                    sentence))
-        .ifPresent(findings::add);
+  private static Check ratedLoading(TransformerCase t, double loadKva) {
+    return loading(
+        loadKva,
+        t.ratedKva(),
+        "rating as surveyed",
+        () ->
+            "The most loaded line puts %s kVA on the transformer, which is rated %s kVA."
+                .formatted(Words.number(loadKva), Words.number(t.ratedKva())));
   }
 
-  private static void kRating(double rating, double k, List<Finding> findings) {
-    String sentence =
-        "The load's K-factor is %s; the transformer is rated K-%s."
-            .formatted(Words.number(k), Words.number(rating));
-    Judgement.of(k, rating)
-        .map(
-            severity ->
-                Judgement.finding(
-                    FindingCode.TRANSFORMER_K_RATING,
-                    severity,
-                    k,
-                    rating,
-                    "",
-                    UL_1561,
-                    sentence + adequate(k, rating)))
-        .ifPresent(findings::add);
+  private static Check kRating(double rating, double k) {
+    return new Check(
+        FindingCode.TRANSFORMER_K_RATING,
+        "",
+        Check.Rule.BINDING,
+        k,
+        rating,
+        "",
+        UL_1561,
+        () ->
+            "The load's K-factor is %s; the transformer is rated K-%s."
+                    .formatted(Words.number(k), Words.number(rating))
+                + adequate(k, rating));
   }
 
   private static String adequate(double k, double rating) {

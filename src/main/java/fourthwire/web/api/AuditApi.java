@@ -19,6 +19,7 @@ import java.net.URI;
 import java.time.Instant;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalInt;
 import org.jspecify.annotations.Nullable;
 import org.springframework.http.MediaType;
 import org.springframework.http.ResponseEntity;
@@ -53,7 +54,9 @@ class AuditApi {
       @Schema(description = "The supply to run on; left out: the normal one")
           @Nullable String supply,
       @Schema(
-              description = "Draws of the spread of the loads; this version computes no spread",
+              description =
+                  "How many sites to draw from what the survey leaves open; left out: 100 on a site"
+                      + " of up to 100 load rows, none on a larger one",
               type = "integer",
               minimum = "0",
               maximum = "10000")
@@ -73,7 +76,7 @@ class AuditApi {
               description = "The supply asked for; null: the normal one",
               types = {"string", "null"})
           Optional<String> supply,
-      @Schema(description = "Draws asked for of the spread of the loads") int draws,
+      @Schema(description = "How many sites are drawn from what the survey leaves open") int draws,
       @Schema(allowableValues = {"queued", "running", "done", "failed", "cancelled"}) String state,
       @Schema(description = "0 to 1") double progress,
       @Schema(description = "What is being done, or why it failed") String message,
@@ -94,7 +97,11 @@ class AuditApi {
   ResponseEntity<Queued> ask(
       @PathVariable long site, @RequestBody(required = false) @Nullable Order order) {
     Optional<String> supply = Optional.ofNullable(order).map(Order::supply);
-    int draws = Optional.ofNullable(order).map(Order::draws).map(AuditApi::draws).orElse(0);
+    OptionalInt draws =
+        Optional.ofNullable(order)
+            .map(Order::draws)
+            .map(d -> OptionalInt.of(draws(d)))
+            .orElse(OptionalInt.empty());
     long id = service.ask(site, supply, draws).orElseThrow(() -> MissingException.site(site));
     return ResponseEntity.accepted()
         .location(URI.create("/api/v1/audits/" + id))

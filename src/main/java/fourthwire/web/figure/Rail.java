@@ -3,6 +3,7 @@ package fourthwire.web.figure;
 import fourthwire.quantity.Conductor;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 
 /**
  * One conductor's rail, large: a bed, a bar as long as its current's share of the scale, a dashed
@@ -14,12 +15,27 @@ import java.util.Locale;
  * @param hollow drawn as an outline: its ampacity is not known
  * @param parts of a split bar, in order; empty: one piece
  * @param measured shares at which a diamond stands
+ * @param sure where the dark line goes from P5 to P95; empty: not known
  */
 public record Rail(
-    Conductor conductor, double share, boolean hollow, List<Part> parts, List<Double> measured) {
+    Conductor conductor,
+    double share,
+    boolean hollow,
+    List<Part> parts,
+    List<Double> measured,
+    Optional<Sure> sure) {
   private static final double LINE_PX = 12;
   private static final double NEUTRAL_PX = 26;
   private static final double SMALLEST_LABEL = 0.07;
+
+  /** Percentiles 5 and 95, as shares like the bar's. */
+  public record Sure(double low, double high) {}
+
+  /** A rail of which it is not known how sure it is. */
+  public Rail(
+      Conductor conductor, double share, boolean hollow, List<Part> parts, List<Double> measured) {
+    this(conductor, share, hollow, parts, measured, Optional.empty());
+  }
 
   /**
    * A piece of the neutral's bar.
@@ -77,6 +93,20 @@ public record Rail(
     } else {
       pieces(svg, scale, top, bar);
     }
+    sure.ifPresent(
+        s ->
+            svg.add(
+                "line",
+                "class",
+                "span",
+                "x1",
+                Svg.share(scale.at(s.low())),
+                "x2",
+                Svg.share(scale.at(s.high())),
+                "y1",
+                height / 2,
+                "y2",
+                height / 2));
     if (scale.marked()) {
       String x = Svg.share(scale.at(1));
       svg.add("line", "class", "full-mark", "x1", x, "x2", x, "y1", -3, "y2", height + 3);

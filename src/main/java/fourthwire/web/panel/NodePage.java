@@ -12,6 +12,7 @@ import java.util.Optional;
  * @param kindKey message key of what it is
  * @param facts what the survey says of it, one line
  * @param unsupplied why there is no design state, else empty text
+ * @param states how sure it is, its week, its impedance
  */
 public record NodePage(
     long siteId,
@@ -36,7 +37,8 @@ public record NodePage(
     List<Grid> measured,
     List<Branch> branches,
     List<Working.Line> addingWorking,
-    List<String> assumptions) {
+    List<String> assumptions,
+    StatesView states) {
 
   /** Whether what hangs here adds to a neutral. */
   public boolean adding() {

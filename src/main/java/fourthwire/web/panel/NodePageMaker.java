@@ -55,7 +55,19 @@ class NodePageMaker {
         tables.map(TablesMaker::measured).orElse(List.of()),
         new BranchesMaker(words, node, rows).make(),
         Working.lines(words, Working.ADDER),
-        node.node().assumptions().stream().map(node.names()::in).toList());
+        node.node().assumptions().stream().map(node.names()::in).toList(),
+        states(node));
+  }
+
+  private StatesView states(NodeCase node) {
+    return new StatesView(
+        node.node().doubt().map(d -> new SureMaker(words, node, d).make()),
+        node.node().doubtReason(),
+        node.node().week().map(w -> new WeekMaker(words, node, w).make()),
+        node.node().weekReason(),
+        node.design()
+            .flatMap(
+                d -> node.node().impedance().map(c -> new ImpedanceMaker(words, node, d).make(c))));
   }
 
   private static String kindKey(SiteTree.Kind kind) {
@@ -102,7 +114,7 @@ class NodePageMaker {
         .map(
             r ->
                 words.of(
-                    "resonances.sentence",
+                    r.series() ? "resonances.sentence.series" : "resonances.sentence",
                     r.bank(),
                     Numbers.of(r.order()),
                     Numbers.of(r.ohm(), "Ω"),

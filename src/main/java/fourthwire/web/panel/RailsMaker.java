@@ -1,6 +1,7 @@
 package fourthwire.web.panel;
 
 import fourthwire.audit.DesignState;
+import fourthwire.audit.HeadlineFigure;
 import fourthwire.audit.MeasuredState;
 import fourthwire.quantity.Conductor;
 import fourthwire.quantity.Figure;
@@ -66,7 +67,17 @@ final class RailsMaker {
             .map(a -> base > 0 ? a / base : 0)
             .boxed()
             .toList();
-    return new Rail(c, share, own.isEmpty() && anyAmpacity(), parts, measured);
+    return new Rail(c, share, own.isEmpty() && anyAmpacity(), parts, measured, sure(c, base));
+  }
+
+  private Optional<Rail.Sure> sure(Conductor c, double base) {
+    HeadlineFigure figure =
+        c == Conductor.N ? HeadlineFigure.NEUTRAL_RMS : HeadlineFigure.LINES.get(c.ordinal());
+    return node.node()
+        .doubt()
+        .filter(d -> base > 0)
+        .flatMap(d -> Optional.ofNullable(d.range().get(figure)))
+        .map(r -> new Rail.Sure(r.p5() / base, r.p95() / base));
   }
 
   /** What bars without an ampacity of their own stand against: the largest known, else the rms. */
@@ -85,7 +96,13 @@ final class RailsMaker {
   private Rail.Scale scale(List<Rail> rails) {
     List<Double> shares =
         rails.stream()
-            .flatMap(r -> Stream.concat(Stream.of(r.share()), r.measured().stream()))
+            .flatMap(
+                r ->
+                    Stream.of(
+                            Stream.of(r.share()),
+                            r.measured().stream(),
+                            r.sure().stream().map(Rail.Sure::high))
+                        .flatMap(s -> s))
             .toList();
     return Rail.Scale.holding(shares, anyAmpacity());
   }
@@ -106,6 +123,9 @@ final class RailsMaker {
     parts.add(words.of(scale.marked() ? "rails.caption.share" : "rails.caption.amps"));
     if (rails.stream().anyMatch(Rail::hollow)) {
       parts.add(words.of("rails.caption.hollow"));
+    }
+    if (rails.stream().anyMatch(r -> r.sure().isPresent())) {
+      parts.add(words.of("rails.caption.sure"));
     }
     return String.join(" ", parts);
   }

@@ -5,6 +5,7 @@ import fourthwire.audit.MeasuredState;
 import fourthwire.quantity.Conductor;
 import fourthwire.quantity.Figure;
 import fourthwire.quantity.PowerFigures;
+import fourthwire.site.Transformer;
 import fourthwire.web.support.Names;
 import fourthwire.web.support.Words;
 import java.util.ArrayList;
@@ -97,13 +98,30 @@ final class TablesMaker {
                     .row(words.of("transformer.k-factor"), List.of(t.kFactor()))
                     .row(words.of("transformer.loss-factor"), List.of(design.harmonicLossFactor()))
                     .row(words.of("transformer.derated"), List.of(t.deratedKva()))
+                    .row(words.of("transformer.left"), List.of(leftKva(t)))
+                    .row(words.of("transformer.losses"), List.of(design.lossesW()))
                     .row(words.of("transformer.factor-k"), List.of(t.factorK()))
                     .done(
                         Working.LOADING,
                         Working.K_FACTOR,
                         Working.LOSS_FACTOR,
                         Working.DERATED,
+                        Working.LOSSES,
                         Working.FACTOR_K));
+  }
+
+  /** What it can still take of this current's shape; below 0 where it has too much. */
+  private Figure leftKva(DesignState.TransformerState t) {
+    double ratedKva =
+        node.survey().transformers().stream()
+            .filter(plate -> plate.name().equals(node.node().node()))
+            .mapToDouble(Transformer::ratedKva)
+            .findFirst()
+            .orElse(Double.NaN);
+    double loadKva = ratedKva * t.loadingPercent().value().orElse(Double.NaN) / 100;
+    return Double.isNaN(loadKva)
+        ? Figure.unknown(t.loadingPercent().reason())
+        : t.deratedKva().map(derated -> derated - loadKva);
   }
 
   /** A transformer's primary side: its lines, and its neutral where it has one. */

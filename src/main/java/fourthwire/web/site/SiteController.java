@@ -16,12 +16,19 @@ class SiteController {
   private final AuditRepository audits;
   private final SitePageMaker pages;
   private final SiteList list;
+  private final SuppliesPageMaker supplies;
 
-  SiteController(SiteRepository sites, AuditRepository audits, SitePageMaker pages, SiteList list) {
+  SiteController(
+      SiteRepository sites,
+      AuditRepository audits,
+      SitePageMaker pages,
+      SiteList list,
+      SuppliesPageMaker supplies) {
     this.sites = sites;
     this.audits = audits;
     this.pages = pages;
     this.list = list;
+    this.supplies = supplies;
   }
 
   @GetMapping("/")
@@ -46,6 +53,13 @@ class SiteController {
     }
     model.addAttribute("page", pages.audited(existing(entry.siteId()), entry));
     return "site/site";
+  }
+
+  /** The newest finished audits on each supply, side by side. */
+  @GetMapping("/sites/{site}/supplies")
+  String supplies(@PathVariable("site") long site, Model model) {
+    model.addAttribute("page", supplies.of(existing(site)));
+    return "site/supplies";
   }
 
   @GetMapping("/sites/{site}/delete")

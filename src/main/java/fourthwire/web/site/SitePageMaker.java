@@ -3,6 +3,7 @@ package fourthwire.web.site;
 import fourthwire.audit.AuditRepository;
 import fourthwire.audit.NodeResult;
 import fourthwire.audit.NodeSummary;
+import fourthwire.jobs.AuditService;
 import fourthwire.limits.Severity;
 import fourthwire.site.SiteRepository;
 import fourthwire.site.SiteTree;
@@ -11,6 +12,7 @@ import fourthwire.site.SupplyRole;
 import fourthwire.site.Survey;
 import fourthwire.web.audit.AuditView;
 import fourthwire.web.panel.NodeRows;
+import fourthwire.web.panel.StatesView;
 import fourthwire.web.support.Headline;
 import fourthwire.web.support.Names;
 import fourthwire.web.support.Numbers;
@@ -62,9 +64,22 @@ class SitePageMaker {
         holds(survey),
         rows.of(shown, circuits, tree, survey),
         supplies(survey),
+        AuditService.usualDraws(survey),
         site.latestRevision() > audit.surveyRevision(),
+        clampNext(shown),
         audit.notes().stream().map(new Names(survey.settings().practice())::in).toList(),
         audit.editions());
+  }
+
+  /** What the supply's result says; it is the first of the tree. */
+  private Optional<List<StatesView.Share>> clampNext(List<NodeResult> shown) {
+    return shown.stream()
+        .filter(n -> n.kind() == SiteTree.Kind.SUPPLY)
+        .flatMap(n -> n.doubt().stream())
+        .findFirst()
+        .map(
+            d ->
+                d.clampNext().stream().map(c -> StatesView.Share.of(c.node(), c.share())).toList());
   }
 
   private List<NodeResult> nodes(AuditRepository.Entry audit, List<String> names) {
@@ -91,7 +106,9 @@ class SitePageMaker {
         holds(survey),
         List.of(),
         supplies(survey),
+        AuditService.usualDraws(survey),
         false,
+        Optional.empty(),
         List.of(),
         List.of());
   }

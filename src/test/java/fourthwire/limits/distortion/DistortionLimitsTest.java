@@ -3,6 +3,7 @@ package fourthwire.limits.distortion;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
+import fourthwire.limits.Check;
 import fourthwire.limits.Finding;
 import fourthwire.limits.Severity;
 import fourthwire.quantity.Conductor;
@@ -114,11 +115,11 @@ class DistortionLimitsTest {
   /** NEMA MG 1: 0.03; EN 50160: 2 % of negative sequence. */
   @Test
   void motorsAndUnbalance() {
-    assertThat(VoltageQuality.motorVoltage(List.of(with(100, 5, 7)))).isPresent();
-    assertThat(VoltageQuality.motorVoltage(List.of(with(100, 5, 2)))).isEmpty();
-    assertThat(VoltageQuality.unbalance(Figure.of(2.1)))
-        .extracting(Finding::severity)
-        .containsExactly(Severity.ACT);
+    assertThat(VoltageQuality.motorVoltage(List.of(with(100, 5, 7))).finding()).isPresent();
+    assertThat(VoltageQuality.motorVoltage(List.of(with(100, 5, 2))).finding()).isEmpty();
+    assertThat(VoltageQuality.unbalance(Figure.of(2.1)).flatMap(Check::finding))
+        .map(Finding::severity)
+        .hasValue(Severity.ACT);
     assertThat(VoltageQuality.unbalance(Figure.unknown("not supplied"))).isEmpty();
   }
 }

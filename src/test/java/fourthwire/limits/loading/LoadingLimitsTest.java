@@ -114,9 +114,9 @@ class LoadingLimitsTest {
     assertThat(northAmerican(balanced(AmpacityRule.CURRENT_CARRYING_COUNT, line, 0.5)))
         .isEqualTo(1.0);
     assertThat(northAmerican(twoLines(line, true))).isEqualTo(1.0);
-    assertThat(NeutralLoading.of(twoLines(line, true)).factors().reason())
+    assertThat(NeutralLoading.of(twoLines(line, true)).factors().reason().get())
         .contains("3 current-carrying");
-    assertThat(NeutralLoading.of(twoLines(line, false)).factors().reason())
+    assertThat(NeutralLoading.of(twoLines(line, false)).factors().reason().get())
         .contains("2 current-carrying");
   }
 

@@ -153,6 +153,54 @@ class FigureTest {
     assertThat(svg.getElementsByTagName("rect").getLength()).isEqualTo(3);
   }
 
+  /** One cell an hour, the darkest at the end of the scale, those over the limit crossed. */
+  @Test
+  void aWeekHasACellAnHourAndACrossOverTheLimit() throws Exception {
+    List<String> days = List.of("a", "b", "c", "d", "e", "f", "g");
+    Document svg =
+        parsed(
+            HourPicture.draw("n", h -> h == 0 ? Double.NaN : h % 24, 23, 21.5, days, "the week"));
+    NodeList cells = svg.getElementsByTagName("rect");
+    assertThat(cells.getLength()).isEqualTo(167);
+    assertThat(((Element) cells.item(22)).getAttribute("fill-opacity")).isEqualTo("1");
+    assertThat(count(svg, "line", "over")).isEqualTo(14);
+  }
+
+  @Test
+  void aRangeStandsBetweenItsPercentiles() throws Exception {
+    Document svg = parsed(RangeBar.draw(10, 20, 50, 25, 92.6, "range"));
+    assertThat(element(svg, "line", "span").getAttribute("x1")).isEqualTo("10%");
+    assertThat(element(svg, "line", "span").getAttribute("x2")).isEqualTo("50%");
+    assertThat(element(svg, "line", "half").getAttribute("x1")).isEqualTo("20%");
+    assertThat(element(svg, "circle", "computed").getAttribute("cx")).isEqualTo("25%");
+    assertThat(element(svg, "line", "full-mark").getAttribute("x1")).isEqualTo("92.59%");
+  }
+
+  @Test
+  void impedanceStandsOnALogarithmicScaleOverTheCurrents() throws Exception {
+    Document svg =
+        parsed(
+            ImpedancePlot.draw(
+                new ImpedancePlot.Curve(
+                    491,
+                    k -> 1 + k / 10.0,
+                    k -> k == 0 ? 10 : 100,
+                    List.of(3.0, 6.0),
+                    List.of(25.5)),
+                h -> h + "th",
+                "impedance"));
+    assertThat(element(svg, "path", "curve").getAttribute("d")).startsWith("M0 150L");
+    assertThat(element(svg, "line", "full-mark").getAttribute("x1")).isEqualTo("50%");
+    assertThat(count(svg, "line", "order-bar")).isEqualTo(2);
+  }
+
+  private static long count(Document svg, String name, String classes) {
+    NodeList all = svg.getElementsByTagName(name);
+    return java.util.stream.IntStream.range(0, all.getLength())
+        .filter(k -> ((Element) all.item(k)).getAttribute("class").equals(classes))
+        .count();
+  }
+
   private static String rail(
       Conductor c, double share, List<Rail.Part> parts, List<Double> measured) {
     return new Rail(c, share, false, parts, measured).draw(SCALE, "L1 <&> \"N\"");

@@ -41,6 +41,8 @@ class MessagesTest {
           "working.",
           "audit.state.",
           "spectrum.of.",
+          "headline-figure.",
+          "week.day.",
           "reading.kind.",
           "reading.event.kind.",
           "reading.fact.",
