@@ -6,6 +6,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.regex.Pattern;
 import java.util.stream.Collectors;
 
 /**
@@ -36,6 +37,7 @@ public record Heading(
     NONE
   }
 
+  private static final Pattern LETTERED = Pattern.compile("(?i)(?<![\\p{L}])vb(?![\\p{L}])");
   private static final Heading NONE = new Heading(Meaning.NONE, "", Statistic.MEAN, 1, "");
 
   /**
@@ -44,7 +46,8 @@ public record Heading(
    */
   public static Map<String, Heading> ofLog(List<String> headings) {
     Map<String, LogWords> words = new LinkedHashMap<>();
-    headings.forEach(h -> words.put(h, LogWords.of(h)));
+    boolean lettered = headings.stream().anyMatch(h -> LETTERED.matcher(h).find());
+    headings.forEach(h -> words.put(h, LogWords.of(h, lettered)));
     LogPlace places =
         new LogPlace(
             words.values().stream()

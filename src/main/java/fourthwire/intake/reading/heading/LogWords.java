@@ -33,11 +33,19 @@ final class LogWords {
   private String shareOf = "";
   private int order;
 
-  private LogWords() {}
+  private final boolean lettered;
 
-  /** Takes a heading apart. */
-  static LogWords of(String heading) {
-    LogWords words = new LogWords();
+  private LogWords(boolean lettered) {
+    this.lettered = lettered;
+  }
+
+  /**
+   * Takes a heading apart.
+   *
+   * @param lettered whether the file writes volts of lines as VA, VB, VC: elsewhere VA is the unit
+   */
+  static LogWords of(String heading, boolean lettered) {
+    LogWords words = new LogWords(lettered);
     String text = words.withoutUnit(plain(heading));
     List<String> all = new ArrayList<>();
     for (String part : BREAK.split(text)) {
@@ -135,6 +143,8 @@ final class LogWords {
       return;
     } else if (withMany && !(k == 0 && word.equals("s")) && STANDING.matcher(word).matches()) {
       places.add(word);
+    } else if (unit.isEmpty() && isSummed(word, all)) {
+      unit = Unit.find(word);
     } else if (unit.isEmpty() && word.length() > 1 && isUnitWord(all.get(k))) {
       unit = Unit.find(all.get(k));
     } else if (Vocabulary.sense(word).isPresent()) {
@@ -165,6 +175,13 @@ final class LogWords {
     return k + 1 < all.size()
         && Vocabulary.isConnector(all.get(k).toLowerCase(Locale.ROOT))
         && Unit.find(all.get(k + 1)).isPresent();
+  }
+
+  /** {@code VA_sum}, {@code W_total}; and VA where it is no voltage of line A. */
+  private boolean isSummed(String word, List<String> all) {
+    boolean total =
+        all.stream().flatMap(w -> Vocabulary.sense(w).stream()).anyMatch(s -> s == Sense.TOTAL);
+    return word.equals("va") && (total || !lettered) || word.equals("w") && total;
   }
 
   /** A unit that is no symbol of something on a line: VA may be the voltage of line A. */

@@ -39,7 +39,7 @@ record Symbol(List<Sense> senses, String place, int order, Optional<Unit> unit) 
               + ")?"
               + STATISTIC);
   private static final Pattern WITH_UNIT =
-      Pattern.compile("(kvar|kva|kwh|kw|mw|var|ka|kv|w|a)(l?[123]n?|n|tot|total|sum|sys)");
+      Pattern.compile("(kvar|kva|kwh|kw|mw|var|va|ka|kv|w|a)(l?[123]n?|n|tot|total|sum|sys)");
   private static final Pattern ORDER_WORD =
       Pattern.compile(
           "(?:h|harm|harmonic|order|ord|oh|harmonique)(\\d{1,2})|(\\d{1,2})(?:st|nd|rd|th|h|e|eme)");
