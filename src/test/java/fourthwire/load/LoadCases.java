@@ -28,6 +28,40 @@ final class LoadCases {
         Optional.empty());
   }
 
+  /** One rectifier at 230 V with a choke of so many percent behind its bridge. */
+  static LoadRequest choked(double watts, double demand, double dcPercent) {
+    OptionalDouble none = OptionalDouble.empty();
+    LoadRequest plain = request(LoadKind.CAPACITOR_INPUT_CHOKE, watts, 1, demand);
+    ModelColumns columns =
+        new ModelColumns(
+            none,
+            none,
+            none,
+            none,
+            none,
+            none,
+            none,
+            none,
+            OptionalDouble.of(dcPercent),
+            none,
+            none,
+            none,
+            none,
+            none);
+    return new LoadRequest(
+        plain.kind(),
+        plain.ports(),
+        plain.frequencyHz(),
+        plain.nominalPortV(),
+        plain.rating(),
+        1,
+        demand,
+        true,
+        none,
+        columns,
+        Optional.empty());
+  }
+
   /** A request of one unit of a preset at its usual figures. */
   static LoadRequest request(
       Preset preset, double watts, double portV, double hertz, double demand) {

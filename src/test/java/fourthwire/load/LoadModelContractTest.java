@@ -7,12 +7,14 @@ import static org.assertj.core.api.Assertions.within;
 import fourthwire.load.model.LoadModel;
 import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.load.model.PortSpectra;
+import fourthwire.quantity.Distortion;
 import fourthwire.quantity.Spectrum;
 import fourthwire.site.LoadKind;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
+import org.junit.jupiter.params.provider.ValueSource;
 
 /** What every load model owes: laws of scaling, of shifting in time, and its rated power. */
 class LoadModelContractTest {
@@ -69,6 +71,26 @@ class LoadModelContractTest {
           .as("order %d", h)
           .isLessThanOrEqualTo(0.001 * from.magnitude(1));
     }
+  }
+
+  /** Past the crossing at high load, before it at low load: no step where the paths part. */
+  @ParameterizedTest
+  @ValueSource(doubles = {20, 40, 80})
+  void aChokeBehindASinglePhaseBridgeIsSolvedAtEveryLevel(double percent) {
+    double before = 0;
+    for (int level = 10; level <= 100; level += 5) {
+      LoadModel model = LoadModels.of(LoadCases.choked(150, level / 100.0, percent));
+      Spectrum current = LoadCases.current(model, 230, 0.5, 1e-3).spectrum(0);
+      double distortion = Distortion.thdPercent(current).value().orElseThrow();
+      assertThat(current.magnitude(1)).as("at %d %%", level).isPositive();
+      if (level > 10) {
+        assertThat(distortion).as("at %d %%", level).isCloseTo(before, within(0.25 * before));
+      }
+      before = distortion;
+    }
+    LoadRequest rated = LoadCases.choked(150, 1, percent);
+    double watts = NominalDraw.of(LoadModels.of(rated), rated).watts();
+    assertThat(watts).isCloseTo(150, within(1e-6 * 150));
   }
 
   @Test
