@@ -16,5 +16,5 @@ for round in $(seq "$rounds"); do
   (cd "$work" && /usr/bin/python3 analyse.py | grep Msamples)
   echo "round $round: Fourthwire"
   java -cp "target/classes:target/test-classes:$(cat "$work/cp.txt")" \
-    fourthwire.metering.capture.WaveformBenchmark "$work" 40 5
+    fourthwire.metering.capture.WaveformBenchmark "$work" 80 9
 done
