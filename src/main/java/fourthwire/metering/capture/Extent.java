@@ -78,7 +78,7 @@ record Extent(
             + standardCycles()
             + "-cycle window of IEC 61000-4-7, so no standard aggregation."
         : "The sampling is uneven, too sparse or has gaps, so figures are fitted over these cycles"
-              + " and there are no windows of IEC 61000-4-7.";
+            + " and there are no windows of IEC 61000-4-7.";
   }
 
   private String windows() {
