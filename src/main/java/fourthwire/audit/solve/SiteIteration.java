@@ -83,8 +83,13 @@ final class SiteIteration {
     eachOrder(this::factor);
     double[] x = new double[length];
     if (length > 0) {
+      double[] g = new double[length];
       begin(x, guess);
-      iterate(x, progress);
+      if (!image(x, g).isEmpty()) {
+        begin(x, LoadCurrents.NONE);
+        refuse(image(x, g));
+      }
+      iterate(x, g, progress);
     } else {
       solveNetwork(x);
     }
@@ -103,6 +108,7 @@ final class SiteIteration {
    */
   private void begin(double[] x, LoadCurrents guess) {
     SeriesEstimate series = new SeriesEstimate(network, factors, loads, omega, workers);
+    Arrays.fill(x, 0);
     if (!guess.fill(orders, loads, x)) {
       solveNetwork(x);
       series.applyTogether(solutions[1]);
@@ -112,9 +118,7 @@ final class SiteIteration {
     solveNetwork(x);
   }
 
-  private void iterate(double[] x, Progress progress) {
-    double[] g = new double[length];
-    refuse(image(x, g));
+  private void iterate(double[] x, double[] g, Progress progress) {
     Settling settling = new Settling(loads, filters, orders);
     NewtonStep newton = new NewtonStep(network, factors, orders, loads, filters, omega, workers);
     for (int pass = 1; pass <= MOST_PASSES; pass++) {

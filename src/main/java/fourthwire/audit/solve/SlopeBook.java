@@ -16,6 +16,9 @@ final class SlopeBook {
   /** Shapes that differ by less than this, on the fundamental, count as alike. */
   private static final double ALIKE = 0.1;
 
+  /** So many shapes of a kind are enough; what differs from all borrows from the nearest. */
+  private static final int MOST_SHAPES = 48;
+
   /** Orders by which shapes are told apart. */
   private static final int HIGHEST_COMPARED = 15;
 
@@ -87,7 +90,7 @@ final class SlopeBook {
 
   private static Leader nearest(Leader own, List<Leader> known) {
     Leader nearest = own;
-    double least = ALIKE * ALIKE;
+    double least = known.size() < MOST_SHAPES ? ALIKE * ALIKE : Double.POSITIVE_INFINITY;
     for (Leader leader : known) {
       double square = 0;
       for (int i = 0; i < own.shape().length && square < least; i++) {
