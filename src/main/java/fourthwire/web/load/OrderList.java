@@ -16,22 +16,27 @@ import java.util.Set;
  * known, degrees, entry by entry; new lines separate as semicolons do.
  */
 final class OrderList {
-  private static final double MOST_PERCENT = 1000;
+  /** As the survey's tables have it: a voltage's order, and a current's. */
+  private static final double MOST_OF_VOLTAGE = 100;
+
+  private static final double MOST_OF_CURRENT = 1000;
 
   private final Map<Integer, Phasor> phasors = new HashMap<>();
   private final Set<Integer> seen = new HashSet<>();
   private final int lowest;
+  private final double mostPercent;
   private final double fundamentalDegrees;
   private String wrong = "";
 
-  private OrderList(int lowest, double fundamentalDegrees) {
+  private OrderList(int lowest, double mostPercent, double fundamentalDegrees) {
     this.lowest = lowest;
+    this.mostPercent = mostPercent;
     this.fundamentalDegrees = fundamentalDegrees;
   }
 
   /** A voltage's distortion; degrees left out are 0, as in the survey's background table. */
   static Optional<Spectrum> background(Typed typed, String field, Words words) {
-    return read(new OrderList(2, 0), typed, field, words);
+    return read(new OrderList(2, MOST_OF_VOLTAGE, 0), typed, field, words);
   }
 
   /**
@@ -41,7 +46,7 @@ final class OrderList {
    */
   static Optional<Spectrum> current(
       Typed typed, String field, double fundamentalDegrees, Words words) {
-    OrderList list = new OrderList(1, fundamentalDegrees);
+    OrderList list = new OrderList(1, MOST_OF_CURRENT, fundamentalDegrees);
     list.phasors.put(1, Phasor.polar(1, fundamentalDegrees));
     return read(list, typed, field, words).map(s -> s.times(1 / s.magnitude(1)));
   }
@@ -54,7 +59,7 @@ final class OrderList {
       }
     }
     if (!list.wrong.isEmpty()) {
-      typed.error(field, words.of("loads.error.orders", list.wrong, list.lowest));
+      typed.error(field, words.of("loads.error.orders", list.wrong, list.lowest, Typed.bound(list.mostPercent)));
       return Optional.empty();
     }
     return Optional.of(Spectrum.of(h -> list.phasors.getOrDefault(h, Phasor.ZERO)));
@@ -73,7 +78,7 @@ final class OrderList {
     if (order < lowest
         || order > Spectrum.HIGHEST_ORDER
         || degrees.isEmpty()
-        || !(share >= (order == 1 ? 1 : 0) && share <= MOST_PERCENT)
+        || !(share >= (order == 1 ? 1 : 0) && share <= mostPercent)
         || !seen.add(order)) {
       return false;
     }

@@ -115,6 +115,14 @@ class LoadPageTest extends ServiceTest {
     assertThat(text(answer)).contains("1,200 may mean 1200 or 1.200");
   }
 
+  /** The survey's background table takes no more than the fundamental itself either. */
+  @Test
+  void noOrderOfAVoltageIsOverItsFundamental() {
+    Answer answer = http().get("/loads?orders=3+101+0");
+    assertThat(answer.status()).isEqualTo(400);
+    assertThat(text(answer)).contains("“3 101 0” can’t be read").contains("at most 100,");
+  }
+
   @Test
   void impossibleEquipmentIsSaidSo() {
     Answer answer = http().get("/loads?load=capacitor-input&watts=2000&source_resistance_ohm=500");
