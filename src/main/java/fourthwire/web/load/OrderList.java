@@ -59,7 +59,9 @@ final class OrderList {
       }
     }
     if (!list.wrong.isEmpty()) {
-      typed.error(field, words.of("loads.error.orders", list.wrong, list.lowest, Typed.bound(list.mostPercent)));
+      typed.error(
+          field,
+          words.of("loads.error.orders", list.wrong, list.lowest, Typed.bound(list.mostPercent)));
       return Optional.empty();
     }
     return Optional.of(Spectrum.of(h -> list.phasors.getOrDefault(h, Phasor.ZERO)));
