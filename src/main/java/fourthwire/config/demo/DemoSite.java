@@ -12,6 +12,7 @@ import fourthwire.site.SiteRepository;
 import fourthwire.store.Settings;
 import java.io.IOException;
 import java.util.Optional;
+import java.util.OptionalInt;
 import org.slf4j.Logger;
 import org.slf4j.LoggerFactory;
 import org.springframework.boot.ApplicationArguments;
@@ -26,6 +27,9 @@ import org.springframework.stereotype.Component;
 class DemoSite implements ApplicationRunner {
   private static final Logger LOG = LoggerFactory.getLogger(DemoSite.class);
   private static final String LOADED = "demo-loaded";
+
+  /** Enough for the pages to show how sure they are, few enough for a start. */
+  private static final int DRAWS = 40;
 
   private final InstallationProperties installation;
   private final Settings settings;
@@ -68,7 +72,7 @@ class DemoSite implements ApplicationRunner {
       for (DemoFiles.Readings r : files.readings()) {
         read(site, r);
       }
-      audits.ask(site, Optional.empty());
+      audits.ask(site, Optional.empty(), OptionalInt.of(DRAWS));
       LOG.info(
           "the demo site \"{}\" is stored; its audit is queued", read.survey().settings().name());
     } else {
