@@ -5,7 +5,6 @@ import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.load.model.PortSpectra;
 import fourthwire.quantity.Spectrum;
 import java.util.Arrays;
-import java.util.Locale;
 
 /**
  * Steady state of a power-factor-corrected supply behind a series R-L, in the frequency domain.
@@ -104,16 +103,14 @@ final class PfcSolver implements LoadSolver {
   }
 
   private NoSteadyStateException none(String reason, double volts, double ohm, double reactance) {
-    return new NoSteadyStateException(
-        String.format(
-            Locale.ROOT,
-            "a power-factor-corrected supply of %.4g W has no steady state at %.4g V behind %.4g ohm"
-                + " and %.4g mH: %s",
-            powerW,
-            volts,
-            ohm,
-            reactance / (2 * Math.PI * frequencyHz) * 1e3,
-            reason));
+    return NoSteadyStateException.of(
+        "a power-factor-corrected supply of %s W has no steady state at %s V behind %s ohm"
+            + " and %s mH: %s",
+        powerW,
+        volts,
+        ohm,
+        reactance / (2 * Math.PI * frequencyHz) * 1e3,
+        reason);
   }
 
   private static boolean oddOnly(double[] re, double[] im) {

@@ -3,7 +3,6 @@ package fourthwire.load.rectifier;
 import fourthwire.load.model.LoadSolver;
 import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.load.model.PortSpectra;
-import java.util.Locale;
 import java.util.Optional;
 
 /**
@@ -100,9 +99,9 @@ final class CapacitorInputSolver implements LoadSolver {
       return;
     }
     if (twoPaths.isEmpty() || !twoPaths.get().solve(emf, peak, seriesOhm, seriesHenry, current)) {
-      String reason = refusal();
+      NoSteadyStateException refusal = refusal();
       forget();
-      throw new NoSteadyStateException(reason);
+      throw refusal;
     }
   }
 
@@ -126,11 +125,10 @@ final class CapacitorInputSolver implements LoadSolver {
     twoPaths = Optional.empty();
   }
 
-  private String refusal() {
-    return String.format(
-        Locale.ROOT,
-        "a capacitor-input rectifier of %.4g W finds no steady state at %.4g V peak behind %.4g ohm"
-            + " and %.4g mH: %s",
+  private NoSteadyStateException refusal() {
+    return NoSteadyStateException.of(
+        "a capacitor-input rectifier of %s W finds no steady state at %s V peak behind %s ohm"
+            + " and %s mH: %s",
         load.powerW(),
         peak,
         bridge.path.resistance,

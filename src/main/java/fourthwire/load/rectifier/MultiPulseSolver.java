@@ -5,7 +5,6 @@ import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.load.model.PortSpectra;
 import fourthwire.quantity.Phasor;
 import fourthwire.quantity.Spectrum;
-import java.util.Locale;
 
 /**
  * Periodic steady state of the six- and twelve-pulse rectifiers, by Newton's method on the state at
@@ -87,7 +86,7 @@ final class MultiPulseSolver implements LoadSolver {
     equip(load, seriesOhm, seriesHenry);
     warm = repeats(seriesOhm, seriesHenry);
     if (!warm) {
-      throw new NoSteadyStateException(refusal());
+      throw refusal();
     }
     write(current);
   }
@@ -106,10 +105,9 @@ final class MultiPulseSolver implements LoadSolver {
     cells = CycleTable.CELLS / parts;
   }
 
-  private String refusal() {
-    return String.format(
-        Locale.ROOT,
-        "a rectifier on three lines of %.4g W finds no steady state at %.4g V peak line to line"
+  private NoSteadyStateException refusal() {
+    return NoSteadyStateException.of(
+        "a rectifier on three lines of %s W finds no steady state at %s V peak line to line"
             + " behind its source impedance: %s",
         load.powerW(),
         peak,

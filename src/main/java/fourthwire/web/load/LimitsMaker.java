@@ -38,14 +38,15 @@ final class LimitsMaker {
     TrialResult test = LoadTrial.solve(question.tested(), TrialSource.ideal(volts));
     boolean three = question.threeLines();
     double amps = test.first().rms();
-    double apparentVa = volts * amps * (three ? Math.sqrt(3) : 1);
+    boolean parts = question.parts() == 3;
+    double apparentVa = volts * amps * (three ? Math.sqrt(3) : question.parts());
     double ohm = question.sourceOhm();
     this.equipment =
         new Equipment(
             question.use(),
             question.ratedW(),
             amps,
-            three,
+            three || parts,
             three ? volts / Math.sqrt(3) : volts,
             ohm > 0 ? OptionalDouble.of(volts * volts / ohm / apparentVa) : OptionalDouble.empty());
     this.tested = EquipmentLimits.judge(equipment, test.first());
