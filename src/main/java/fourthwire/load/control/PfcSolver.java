@@ -106,11 +106,7 @@ final class PfcSolver implements LoadSolver {
     return NoSteadyStateException.of(
         "a power-factor-corrected supply of %s W has no steady state at %s V behind %s ohm"
             + " and %s mH: %s",
-        powerW,
-        volts,
-        ohm,
-        reactance / (2 * Math.PI * frequencyHz) * 1e3,
-        reason);
+        powerW, volts, ohm, reactance / (2 * Math.PI * frequencyHz) * 1e3, reason);
   }
 
   private static boolean oddOnly(double[] re, double[] im) {

@@ -14,8 +14,8 @@ public final class NoSteadyStateException extends RuntimeException {
   }
 
   /**
-   * With the reason as a sentence whose figures stand as {@code %s}: written to four digits, without
-   * an exponent.
+   * With the reason as a sentence whose figures stand as {@code %s}: written to four digits,
+   * without an exponent.
    */
   public static NoSteadyStateException of(String reason, Object... parts) {
     Object[] words = parts.clone();
