@@ -134,7 +134,9 @@ final class WeekMaker {
   private NodePage.Grid energy() {
     WeekState.Energy e = week.energy();
     boolean priced = e.pricePerKwh().value().isPresent();
-    List<String> heads = new ArrayList<>(List.of("", words.of("week.kwh"), words.of("week.part")));
+    List<String> heads =
+        new ArrayList<>(
+            List.of(words.of("week.what"), words.of("week.kwh"), words.of("week.part")));
     if (priced) {
       heads.add(words.of("week.cost", e.currency()));
     }
