@@ -76,20 +76,7 @@ public final class CurvePlot {
                 0,
                 "y2",
                 HEIGHT_PX));
-    svg.open(
-        "svg",
-        "x",
-        0,
-        "y",
-        0,
-        "width",
-        "100%",
-        "height",
-        HEIGHT_PX,
-        "viewBox",
-        "0 0 " + UNITS_WIDE + " " + Svg.rounded(HEIGHT_PX, 0),
-        "preserveAspectRatio",
-        "none");
+    svg.stretched(UNITS_WIDE, HEIGHT_PX);
     curves.forEach(
         c -> svg.add("path", "class", "curve " + c.style().word(), "d", path(places, c, ticks)));
     return svg.done();

@@ -44,20 +44,7 @@ public final class CyclePlot {
     Ticks ticks = Ticks.upTo(peak, STEPS);
     Svg svg = Svg.picture("plot cycle", alternative);
     rules(svg, ticks, unit);
-    svg.open(
-        "svg",
-        "x",
-        0,
-        "y",
-        0,
-        "width",
-        "100%",
-        "height",
-        HEIGHT_PX,
-        "viewBox",
-        "0 0 " + UNITS_WIDE + " " + Svg.rounded(HEIGHT_PX, 0),
-        "preserveAspectRatio",
-        "none");
+    svg.stretched(UNITS_WIDE, HEIGHT_PX);
     backdrop.map(b -> Waveform.of(b, SAMPLES)).ifPresent(w -> backdrop(svg, w));
     for (Conductor conductor : NEUTRAL_FIRST) {
       Spectrum spectrum = spectra.get(conductor);

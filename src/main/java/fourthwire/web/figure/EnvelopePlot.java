@@ -46,20 +46,7 @@ public final class EnvelopePlot {
     rules(svg, ticks, unit);
     int stretches = traces.isEmpty() ? 0 : traces.get(0).values().lowest().size();
     seconds(svg, stretches * stepS);
-    svg.open(
-        "svg",
-        "x",
-        0,
-        "y",
-        0,
-        "width",
-        "100%",
-        "height",
-        HEIGHT_PX,
-        "viewBox",
-        "0 0 " + UNITS_WIDE + " " + Svg.rounded(HEIGHT_PX, 0),
-        "preserveAspectRatio",
-        "none");
+    svg.stretched(UNITS_WIDE, HEIGHT_PX);
     boolean curves = stretches * stepS < CURVES_BELOW_S;
     for (Trace t : traces) {
       String classes = "trace " + t.conductor().name().toLowerCase(Locale.ROOT);

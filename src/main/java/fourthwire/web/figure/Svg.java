@@ -22,6 +22,27 @@ final class Svg {
     return this;
   }
 
+  /**
+   * Opens an inner picture that fills the width whatever it is, so that curves stretch and letters
+   * outside it do not.
+   */
+  Svg stretched(int unitsWide, double heightPx) {
+    return open(
+        "svg",
+        "x",
+        0,
+        "y",
+        0,
+        "width",
+        "100%",
+        "height",
+        heightPx,
+        "viewBox",
+        "0 0 " + unitsWide + " " + rounded(heightPx, 0),
+        "preserveAspectRatio",
+        "none");
+  }
+
   /** An element without content. */
   Svg add(String element, Object... attributes) {
     start(element, attributes).append("/>");
