@@ -1,6 +1,6 @@
 package fourthwire.config;
 
-import fourthwire.intake.reading.FormatReader;
+import fourthwire.intake.reading.upload.FormatReader;
 import fourthwire.intake.reading.ReadingReader;
 import fourthwire.intake.survey.ZipSurveyCodec;
 import fourthwire.site.SurveyCodec;

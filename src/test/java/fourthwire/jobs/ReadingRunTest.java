@@ -3,23 +3,11 @@ package fourthwire.jobs;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.assertThatThrownBy;
 
-import fourthwire.intake.reading.FormatReader;
 import fourthwire.intake.reading.ReadingRefusedException;
-import fourthwire.intake.survey.ZipSurveyCodec;
-import fourthwire.metering.RawFile;
 import fourthwire.metering.ReadingMapping;
-import fourthwire.metering.ReadingRepository;
 import fourthwire.metering.ReadingUploads;
-import fourthwire.site.SiteRepository;
-import fourthwire.store.Store;
 import fourthwire.testsupport.Databases;
-import fourthwire.testsupport.SmallSite;
-import java.io.ByteArrayInputStream;
-import java.io.InputStream;
-import java.nio.charset.StandardCharsets;
-import java.security.GeneralSecurityException;
-import java.security.MessageDigest;
-import java.util.HexFormat;
+import fourthwire.testsupport.RawFiles;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -33,62 +21,11 @@ class ReadingRunTest {
       "Time,I1 (A)\n01/13/2026 00:00,10\n01/13/2026 00:10,20\n01/13/2026 00:20,30\n";
   private static final String DAY_2 = DAY_13.replace("/13/", "/02/");
 
-  private ReadingUploads uploads;
-  private ReadingRepository readings;
-  private ReadingService service;
-  private ReadingRun run;
-  private long site;
+  private ReadingDesk desk;
 
   @BeforeEach
   void open() {
-    Store store = new Store(Databases.H2.migrated());
-    SiteRepository sites = store.sites(new ZipSurveyCodec());
-    site = sites.create(SmallSite.survey("Works"), List.of());
-    uploads = store.uploads();
-    readings = store.readings();
-    ReadingSettings settings = new ReadingSettings(sites, readings);
-    FormatReader reader = new FormatReader();
-    service = new ReadingService(uploads, reader, settings, new NoQueue());
-    run = new ReadingRun(uploads, readings, reader, settings, new Stop());
-  }
-
-  /** The reading is started by hand. */
-  private static final class NoQueue implements JobQueue {
-    @Override
-    public void addAudit(long auditId) {}
-
-    @Override
-    public void addReading(long uploadId) {}
-  }
-
-  private record Text(String text) implements RawFile {
-    @Override
-    public String name() {
-      return "log.csv";
-    }
-
-    private byte[] bytes() {
-      return text.getBytes(StandardCharsets.UTF_8);
-    }
-
-    @Override
-    public String sha256() {
-      try {
-        return HexFormat.of().formatHex(MessageDigest.getInstance("SHA-256").digest(bytes()));
-      } catch (GeneralSecurityException e) {
-        throw new IllegalStateException(e);
-      }
-    }
-
-    @Override
-    public long length() {
-      return bytes().length;
-    }
-
-    @Override
-    public InputStream open() {
-      return new ByteArrayInputStream(bytes());
-    }
+    desk = new ReadingDesk(Databases.H2.migrated());
   }
 
   private static Optional<ReadingMapping> mapping(double factor, Optional<String> format) {
@@ -104,15 +41,11 @@ class ReadingRunTest {
   }
 
   private long queue(String text, Optional<ReadingMapping> mapping) {
-    return service.take(
-        new ReadingService.Upload(
-            site, Optional.empty(), Optional.of("LP-1"), List.of(new Text(text)), mapping));
+    return desk.take(RawFiles.of("log.csv", text), mapping);
   }
 
   private ReadingUploads.Entry read(String text, Optional<ReadingMapping> mapping) {
-    long id = queue(text, mapping);
-    run.run(id);
-    return uploads.find(id).orElseThrow();
+    return desk.read(queue(text, mapping));
   }
 
   @Test
@@ -122,7 +55,7 @@ class ReadingRunTest {
     assertThat(read(DAY_13, mapping(1, Optional.of("MM/dd/yyyy HH:mm"))).reading())
         .as("the same as resolved")
         .hasValue(first);
-    assertThat(readings.ofSite(site)).hasSize(1);
+    assertThat(desk.readings().ofSite(desk.site())).hasSize(1);
   }
 
   @Test
@@ -132,9 +65,9 @@ class ReadingRunTest {
         .isInstanceOf(RefusedException.class)
         .hasMessageContaining("reading " + first)
         .hasMessageContaining("delete");
-    readings.delete(first);
+    desk.readings().delete(first);
     long again = read(DAY_13, mapping(10, Optional.empty())).reading().orElseThrow();
-    assertThat(readings.find(again).orElseThrow().reading().log().orElseThrow().quantities())
+    assertThat(desk.readings().find(again).orElseThrow().reading().log().orElseThrow().quantities())
         .hasEntrySatisfying("L1.rms_a", s -> assertThat(s.mean()).isEqualTo(200));
   }
 
@@ -142,10 +75,10 @@ class ReadingRunTest {
   void twoMappingsQueuedAtOnceDoNotAnswerForEachOther() {
     long one = queue(DAY_13, mapping(1, Optional.empty()));
     long other = queue(DAY_13, mapping(10, Optional.empty()));
-    run.run(one);
-    run.run(other);
-    assertThat(uploads.find(other).orElseThrow().state()).isEqualTo(ReadingUploads.State.FAILED);
-    assertThat(uploads.find(other).orElseThrow().message()).contains("another mapping");
+    desk.read(one);
+    desk.read(other);
+    assertThat(desk.uploads().find(other).orElseThrow().state()).isEqualTo(ReadingUploads.State.FAILED);
+    assertThat(desk.uploads().find(other).orElseThrow().message()).contains("another mapping");
   }
 
   /** On day 13 the file itself says month first; on the 2nd it does not. */
@@ -160,12 +93,12 @@ class ReadingRunTest {
                     .extracting("part")
                     .containsExactly("time.format"));
     long given = read(DAY_2, mapping(1, Optional.of("dd/MM/yyyy"))).reading().orElseThrow();
-    assertThat(readings.find(given).orElseThrow().reading().notes())
+    assertThat(desk.readings().find(given).orElseThrow().reading().notes())
         .contains("Times are taken as the starts of the intervals.");
     // The format was given and is remembered; the note on the assumption comes again.
     String next = DAY_2.replace("00:20,30", "00:20,40");
     long remembered = read(next, Optional.empty()).reading().orElseThrow();
-    assertThat(readings.find(remembered).orElseThrow().reading().notes())
+    assertThat(desk.readings().find(remembered).orElseThrow().reading().notes())
         .contains("Times are taken as the starts of the intervals.");
     assertThatThrownBy(() -> queue(DAY_13.replace("10\n", "11\n"), Optional.empty()))
         .isInstanceOf(ReadingRefusedException.class);

@@ -1,11 +1,11 @@
 /**
- * The file formats of meters: interval logs as CSV or xlsx, waveform captures as COMTRADE (IEEE
- * C37.111), PQDIF (IEEE 1159.3) or CSV, and the mapping of their columns and channels to
- * quantities.
+ * Meters' files, as the rest of the service sees them: what is known beforehand, how a file is
+ * going to be read, what must be asked.
  *
- * <p>Door: {@link fourthwire.intake.reading.ReadingReader}. May use {@code quantity}, {@code site}
- * and {@code metering}. Sources: the public contract, section 4; IEEE C37.111-1991, -1999 and -2013
- * (IEC 60255-24).
+ * <p>Door: {@link fourthwire.intake.reading.ReadingReader}. Uses {@code metering}. The packages
+ * below do the work: {@code upload} finds the format, {@code log} and {@code wave} read rows and
+ * samples over {@code table}, {@code comtrade} and {@code pqdif}; {@code heading}, {@code channel}
+ * and {@code unit} say what a column holds. Sources: the public contract, section 4.
  */
 @org.jspecify.annotations.NullMarked
 package fourthwire.intake.reading;

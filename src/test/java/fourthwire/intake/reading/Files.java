@@ -3,16 +3,12 @@ package fourthwire.intake.reading;
 import static org.junit.jupiter.api.Assumptions.assumeTrue;
 
 import fourthwire.metering.RawFile;
-import java.io.ByteArrayInputStream;
+import fourthwire.testsupport.RawFiles;
 import java.io.IOException;
-import java.io.InputStream;
 import java.io.UncheckedIOException;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
-import java.security.MessageDigest;
-import java.security.NoSuchAlgorithmException;
 import java.time.ZoneId;
-import java.util.HexFormat;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -25,7 +21,7 @@ final class Files {
   private Files() {}
 
   static RawFile of(String name, byte[] bytes) {
-    return new Bytes(name, bytes);
+    return RawFiles.of(name, bytes);
   }
 
   static RawFile of(String name, String text) {
@@ -52,26 +48,5 @@ final class Files {
         layout -> Optional.empty(),
         List.of(),
         OptionalDouble.empty());
-  }
-
-  private record Bytes(String name, byte[] bytes) implements RawFile {
-    @Override
-    public String sha256() {
-      try {
-        return HexFormat.of().formatHex(MessageDigest.getInstance("SHA-256").digest(bytes));
-      } catch (NoSuchAlgorithmException e) {
-        throw new IllegalStateException(e);
-      }
-    }
-
-    @Override
-    public long length() {
-      return bytes.length;
-    }
-
-    @Override
-    public InputStream open() {
-      return new ByteArrayInputStream(bytes);
-    }
   }
 }

@@ -1,5 +1,6 @@
 package fourthwire.intake.reading;
 
+import fourthwire.intake.reading.upload.FormatReader;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.assertThatThrownBy;
 import static org.assertj.core.api.Assertions.within;

@@ -1,0 +1,15 @@
+package fourthwire.intake.reading.format;
+
+import fourthwire.intake.reading.ReadingPlan;
+import fourthwire.intake.reading.ReadingSetting;
+import fourthwire.metering.Reading;
+import java.util.function.BiPredicate;
+
+/** One upload in one format. */
+public interface Format {
+  /** Settles how it is read. */
+  ReadingPlan plan(ReadingSetting setting);
+
+  /** Reads and analyses it. */
+  Reading read(ReadingPlan plan, ReadingSetting setting, BiPredicate<Double, String> progress);
+}

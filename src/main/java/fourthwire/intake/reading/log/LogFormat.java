@@ -1,0 +1,231 @@
+package fourthwire.intake.reading.log;
+
+import fourthwire.intake.reading.format.Progress;
+import fourthwire.intake.reading.ReadingPlan;
+import fourthwire.intake.reading.ReadingSetting;
+import fourthwire.intake.reading.ReadingRefusedException;
+import fourthwire.intake.reading.format.DateQuestion;
+import fourthwire.intake.reading.format.Mappings;
+import fourthwire.intake.reading.format.ChannelMapping;
+import fourthwire.intake.reading.unit.OpenUnits;
+import fourthwire.intake.reading.unit.SampledColumns;
+import fourthwire.intake.reading.heading.Heading;
+import fourthwire.intake.reading.table.DateOrder;
+import fourthwire.intake.reading.table.TextTable;
+import fourthwire.intake.reading.table.TimeColumns;
+import fourthwire.intake.reading.table.ZoneNamed;
+import fourthwire.metering.MeasuredQuantity;
+import fourthwire.metering.Reading;
+import fourthwire.metering.ReadingKind;
+import fourthwire.metering.ReadingMapping;
+import fourthwire.metering.ReadingMapping.Stamp;
+import fourthwire.metering.log.LogAnalysis;
+import fourthwire.metering.series.LogSeries;
+import java.time.DateTimeException;
+import java.time.ZoneId;
+import java.time.ZoneOffset;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.concurrent.ExecutorService;
+import java.util.concurrent.Executors;
+import java.util.function.BiPredicate;
+
+/** An interval log as a text table. */
+public final class LogFormat {
+  private static final String EXAMPLES =
+      "a log holds L1.rms_a, N.rms_a, L1.rms_v, total.active_w, L1.current_thd_percent,"
+          + " L1.current_h3_a … (contract, section 4)";
+
+  private final TextTable table;
+  private static final int WORKERS = 2;
+
+  private final TimeColumns time;
+  private final long bytes;
+
+  /**
+   * @param bytes length of the file
+   */
+  public LogFormat(TextTable table, TimeColumns time, long bytes) {
+    this.table = table;
+    this.time = time;
+    this.bytes = bytes;
+  }
+
+  public ReadingPlan plan(ReadingSetting setting, String layout, Mappings known) {
+    List<ReadingRefusedException.Question> questions = new ArrayList<>();
+    List<String> notes = new ArrayList<>(List.of(table.note()));
+    ReadingMapping.Time given =
+        known.mapping().map(ReadingMapping::time).orElse(ReadingMapping.Time.FROM_FILE);
+    ChannelMapping mapping = columns(known, questions, notes);
+    if (time.columns().isEmpty() || time.elapsed()) {
+      questions.add(question("time.columns", "no column holds dates: say which one, or which two"));
+    }
+    Optional<DateOrder> order = order(given, questions, notes);
+    Optional<String> zone =
+        given.zone().or(() -> written(notes)).or(() -> setting.siteZone().map(ZoneId::getId));
+    zone(zone, order, questions);
+    if (!questions.isEmpty()) {
+      throw new ReadingRefusedException(
+          "The file can't be read without being told more.", table.headings(), questions);
+    }
+    if (!mapping.unmapped().isEmpty()) {
+      notes.add("Columns not read: " + String.join(", ", unmapped(mapping)) + ".");
+    }
+    ReadingMapping.Time settled =
+        new ReadingMapping.Time(
+            names(),
+            order.map(DateOrder::pattern),
+            zone,
+            Optional.of(stamp(given, notes)),
+            given.intervalS());
+    return new ReadingPlan(
+        ReadingKind.LOG,
+        layout,
+        new ReadingMapping(
+            Optional.of(ReadingKind.LOG), settled, OptionalDouble.empty(), mapping.columns()),
+        table.headings(),
+        mapping.confidence(),
+        notes);
+  }
+
+  private static ReadingRefusedException.Question question(String part, String message) {
+    return new ReadingRefusedException.Question(part, message);
+  }
+
+  /** What is open about the columns is asked together with what is open about the time. */
+  private ChannelMapping columns(
+      Mappings known, List<ReadingRefusedException.Question> questions, List<String> notes) {
+    List<String> names = names();
+    List<String> others = table.headings().stream().filter(h -> !names.contains(h)).toList();
+    try {
+      return ChannelMapping.settle(
+          others, known.mapping(), known.whence(), words(known, others, notes));
+    } catch (ReadingRefusedException e) {
+      questions.addAll(e.questions());
+      return new ChannelMapping(java.util.Map.of(), java.util.Map.of(), List.of());
+    }
+  }
+
+  private ChannelMapping.Words words(Mappings known, List<String> others, List<String> notes) {
+    if (known.mapping().filter(m -> !m.columns().isEmpty()).isPresent()) {
+      return new ChannelMapping.Words(h -> Heading.none(), MeasuredQuantity::ofLog, EXAMPLES);
+    }
+    OpenUnits.Settled read = OpenUnits.settle(Heading.ofLog(others), new SampledColumns(table));
+    notes.addAll(read.notes());
+    return new ChannelMapping.Words(
+        h -> read.headings().getOrDefault(h, Heading.none()), MeasuredQuantity::ofLog, EXAMPLES);
+  }
+
+  /** The zone that the file names. */
+  private Optional<String> written(List<String> notes) {
+    Optional<String> zone = ZoneNamed.of(table, names()).map(ZoneId::getId);
+    zone.ifPresent(z -> notes.add("Times are in the zone " + z + ", as the file says."));
+    return zone;
+  }
+
+  private List<String> names() {
+    return time.columns().stream().map(table.headings()::get).toList();
+  }
+
+  private List<String> unmapped(ChannelMapping mapping) {
+    return mapping.unmapped().stream().filter(h -> !names().contains(h)).toList();
+  }
+
+  private Optional<DateOrder> order(
+      ReadingMapping.Time given,
+      List<ReadingRefusedException.Question> questions,
+      List<String> notes) {
+    if (time.columns().isEmpty()) {
+      return Optional.empty();
+    }
+    if (given.format().isPresent()) {
+      DateOrder told = DateOrder.of(given.format().get());
+      DateQuestion.of(table, time, told).ifPresent(questions::add);
+      return Optional.of(told);
+    }
+    Optional<TimeColumns.Order> order = time.order(table);
+    order.map(TimeColumns.Order::reason).filter(r -> !r.isEmpty()).ifPresent(notes::add);
+    if (order.isEmpty()) {
+      questions.add(
+          question(
+              "time.format",
+              "the file does not settle whether day or month comes first: dd/MM/yyyy or"
+                  + " MM/dd/yyyy"));
+    }
+    return order.map(TimeColumns.Order::order);
+  }
+
+  private void zone(
+      Optional<String> zone,
+      Optional<DateOrder> order,
+      List<ReadingRefusedException.Question> questions) {
+    if (zone.isPresent()) {
+      try {
+        ZoneId.of(zone.get());
+      } catch (DateTimeException e) {
+        questions.add(
+            question(
+                "time.zone", "\"" + zone.get() + "\" is no time zone, as Europe/Amsterdam is"));
+      }
+    } else if (!time.columns().isEmpty() && !offsetsWritten(order)) {
+      questions.add(
+          question(
+              "time.zone",
+              "neither the file nor the site has a time zone: give one, as Europe/Amsterdam"));
+    }
+  }
+
+  private boolean offsetsWritten(Optional<DateOrder> order) {
+    boolean[] written = {false};
+    table.forEach(
+        row -> {
+          written[0] =
+              time.at(row, order.orElse(DateOrder.YEAR_MONTH_DAY))
+                  .flatMap(TimeColumns.At::offset)
+                  .isPresent();
+          return false;
+        });
+    return written[0];
+  }
+
+  private Stamp stamp(ReadingMapping.Time given, List<String> notes) {
+    if (given.stamp().isPresent()) {
+      return given.stamp().get();
+    }
+    boolean end = names().stream().anyMatch(TimeColumns::isEnd);
+    notes.add(
+        end
+            ? "Times mark the ends of the intervals, as their heading says."
+            : "Times are taken as the starts of the intervals.");
+    return end ? Stamp.END : Stamp.START;
+  }
+
+  public Reading read(ReadingPlan plan, ReadingSetting setting, BiPredicate<Double, String> progress) {
+    LogColumns columns = new LogColumns(table, time, plan.mapping());
+    LogSeries series = new LogSeries(columns.quantities(), new SpilledParts(), mostHeldValues());
+    ExecutorService workers = Executors.newFixedThreadPool(WORKERS);
+    try {
+      LogRows rows = new LogRows(table, columns, plan.mapping(), series, workers);
+      rows.read(new RowProgress(progress, bytes, System::nanoTime));
+      Progress.go(progress, RowProgress.SHARE, "forming the statistics");
+      List<String> notes = new ArrayList<>(plan.notes());
+      notes.addAll(rows.notes());
+      ZoneId zone = plan.mapping().time().zone().map(ZoneId::of).orElse(ZoneOffset.UTC);
+      return LogAnalysis.of(
+          series, rows.intervalMillis(), zone, setting.nominalHz(), notes, rows.findings());
+    } catch (RuntimeException | Error e) {
+      workers.shutdown();
+      series.close();
+      throw e;
+    } finally {
+      workers.shutdown();
+    }
+  }
+
+  /** A quarter of the memory there is may hold values as numbers. */
+  private static long mostHeldValues() {
+    return Runtime.getRuntime().maxMemory() / 4 / Double.BYTES;
+  }
+}
