@@ -1,7 +1,7 @@
 package fourthwire.config;
 
-import fourthwire.intake.reading.upload.FormatReader;
 import fourthwire.intake.reading.ReadingReader;
+import fourthwire.intake.reading.upload.FormatReader;
 import fourthwire.intake.survey.ZipSurveyCodec;
 import fourthwire.site.SurveyCodec;
 import org.springframework.context.annotation.Bean;

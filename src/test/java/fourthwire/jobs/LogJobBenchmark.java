@@ -8,7 +8,6 @@ import java.nio.file.Path;
 import org.flywaydb.core.Flyway;
 import org.h2.jdbcx.JdbcConnectionPool;
 
-
 /**
  * A log read as the service reads it, from the start of the job to the stored result, again and
  * again in one process:

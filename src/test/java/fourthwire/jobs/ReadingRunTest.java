@@ -77,7 +77,8 @@ class ReadingRunTest {
     long other = queue(DAY_13, mapping(10, Optional.empty()));
     desk.read(one);
     desk.read(other);
-    assertThat(desk.uploads().find(other).orElseThrow().state()).isEqualTo(ReadingUploads.State.FAILED);
+    assertThat(desk.uploads().find(other).orElseThrow().state())
+        .isEqualTo(ReadingUploads.State.FAILED);
     assertThat(desk.uploads().find(other).orElseThrow().message()).contains("another mapping");
   }
 

@@ -1,9 +1,9 @@
 package fourthwire.intake.reading;
 
-import fourthwire.intake.reading.upload.FormatReader;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
+import fourthwire.intake.reading.upload.FormatReader;
 import fourthwire.metering.CaptureResult;
 import fourthwire.metering.QualityFinding;
 import fourthwire.metering.RawFile;

@@ -1,11 +1,11 @@
 package fourthwire.intake.reading;
 
-import fourthwire.intake.reading.upload.FormatReader;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.assertThatThrownBy;
 import static org.assertj.core.api.Assertions.within;
 
 import fourthwire.intake.reading.comtrade.Comtrade;
+import fourthwire.intake.reading.upload.FormatReader;
 import fourthwire.metering.RawFile;
 import java.io.IOException;
 import java.io.UncheckedIOException;

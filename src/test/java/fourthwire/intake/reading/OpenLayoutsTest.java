@@ -1,9 +1,9 @@
 package fourthwire.intake.reading;
 
-import fourthwire.intake.reading.upload.FormatReader;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.catchThrowableOfType;
 
+import fourthwire.intake.reading.upload.FormatReader;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;

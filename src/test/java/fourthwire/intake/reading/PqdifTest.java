@@ -1,12 +1,12 @@
 package fourthwire.intake.reading;
 
-import fourthwire.intake.reading.upload.FormatReader;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 import static org.junit.jupiter.api.Assertions.assertTimeoutPreemptively;
 
 import fourthwire.intake.reading.PqdifWriter.Instance;
 import fourthwire.intake.reading.PqdifWriter.Observation;
+import fourthwire.intake.reading.upload.FormatReader;
 import fourthwire.metering.CaptureResult;
 import fourthwire.metering.RawFile;
 import fourthwire.metering.Reading;

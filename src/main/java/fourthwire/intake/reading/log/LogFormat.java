@@ -1,19 +1,19 @@
 package fourthwire.intake.reading.log;
 
-import fourthwire.intake.reading.format.Progress;
 import fourthwire.intake.reading.ReadingPlan;
-import fourthwire.intake.reading.ReadingSetting;
 import fourthwire.intake.reading.ReadingRefusedException;
+import fourthwire.intake.reading.ReadingSetting;
+import fourthwire.intake.reading.format.ChannelMapping;
 import fourthwire.intake.reading.format.DateQuestion;
 import fourthwire.intake.reading.format.Mappings;
-import fourthwire.intake.reading.format.ChannelMapping;
-import fourthwire.intake.reading.unit.OpenUnits;
-import fourthwire.intake.reading.unit.SampledColumns;
+import fourthwire.intake.reading.format.Progress;
 import fourthwire.intake.reading.heading.Heading;
 import fourthwire.intake.reading.table.DateOrder;
 import fourthwire.intake.reading.table.TextTable;
 import fourthwire.intake.reading.table.TimeColumns;
 import fourthwire.intake.reading.table.ZoneNamed;
+import fourthwire.intake.reading.unit.OpenUnits;
+import fourthwire.intake.reading.unit.SampledColumns;
 import fourthwire.metering.MeasuredQuantity;
 import fourthwire.metering.Reading;
 import fourthwire.metering.ReadingKind;
@@ -202,7 +202,8 @@ public final class LogFormat {
     return end ? Stamp.END : Stamp.START;
   }
 
-  public Reading read(ReadingPlan plan, ReadingSetting setting, BiPredicate<Double, String> progress) {
+  public Reading read(
+      ReadingPlan plan, ReadingSetting setting, BiPredicate<Double, String> progress) {
     LogColumns columns = new LogColumns(table, time, plan.mapping());
     LogSeries series = new LogSeries(columns.quantities(), new SpilledParts(), mostHeldValues());
     ExecutorService workers = Executors.newFixedThreadPool(WORKERS);

@@ -43,12 +43,13 @@ final class HarmonicUnits {
   private Map<Integer, double[]> orders(String place, String kind) {
     Map<Integer, double[]> orders = new LinkedHashMap<>();
     String start = place + "." + kind + "_h";
-    open.all().forEach(
-        (column, h) -> {
-          if (h.meaning() == Meaning.UNIT_OPEN && h.quantity().startsWith(start)) {
-            orders.put(order(h), open.values().of(column));
-          }
-        });
+    open.all()
+        .forEach(
+            (column, h) -> {
+              if (h.meaning() == Meaning.UNIT_OPEN && h.quantity().startsWith(start)) {
+                orders.put(order(h), open.values().of(column));
+              }
+            });
     return orders;
   }
 
@@ -62,23 +63,25 @@ final class HarmonicUnits {
 
   private void become(String start, boolean percent, String reason) {
     List<String> columns = new ArrayList<>();
-    open.all().replaceAll(
-        (column, h) -> {
-          boolean open = h.meaning() == Meaning.UNIT_OPEN && h.quantity().startsWith(start);
-          if (open) {
-            columns.add(column);
-          }
-          return open ? asHarmonic(h, percent) : h;
-        });
+    open.all()
+        .replaceAll(
+            (column, h) -> {
+              boolean open = h.meaning() == Meaning.UNIT_OPEN && h.quantity().startsWith(start);
+              if (open) {
+                columns.add(column);
+              }
+              return open ? asHarmonic(h, percent) : h;
+            });
     if (!columns.isEmpty()) {
       String base = start.contains("current") ? "A" : "V";
-      open.notes().add(
-          "Harmonics from "
-              + columns.get(0)
-              + " on are in "
-              + (percent ? "%" : base)
-              + ", "
-              + reason);
+      open.notes()
+          .add(
+              "Harmonics from "
+                  + columns.get(0)
+                  + " on are in "
+                  + (percent ? "%" : base)
+                  + ", "
+                  + reason);
     }
   }
 
@@ -110,12 +113,13 @@ final class HarmonicUnits {
   /** The distortion that harmonics of known unit make, percent. */
   Optional<double[]> distortionMade(String place, String kind) {
     List<double[]> percent = new ArrayList<>();
-    open.all().forEach(
-        (column, h) -> {
-          if (h.quantity().matches(place + "\\." + kind + "_h\\d+_percent") && order(h) > 1) {
-            percent.add(open.values().of(column));
-          }
-        });
+    open.all()
+        .forEach(
+            (column, h) -> {
+              if (h.quantity().matches(place + "\\." + kind + "_h\\d+_percent") && order(h) > 1) {
+                percent.add(open.values().of(column));
+              }
+            });
     return percent.isEmpty() ? Optional.empty() : Optional.of(SampledColumns.rootSum(percent));
   }
 }

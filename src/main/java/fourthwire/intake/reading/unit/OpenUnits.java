@@ -46,13 +46,14 @@ public final class OpenUnits {
 
   /** A mean over lines stands beside the lines; alone it may be any. */
   private void placeless() {
-    open.all().replaceAll(
-        (column, h) -> {
-          boolean beside =
-              open.all().values().stream()
-                  .anyMatch(o -> o != h && o.quantity().endsWith("." + h.quantity()));
-          return h.meaning() == Meaning.PLACELESS && beside ? Heading.none() : h;
-        });
+    open.all()
+        .replaceAll(
+            (column, h) -> {
+              boolean beside =
+                  open.all().values().stream()
+                      .anyMatch(o -> o != h && o.quantity().endsWith("." + h.quantity()));
+              return h.meaning() == Meaning.PLACELESS && beside ? Heading.none() : h;
+            });
   }
 
   private Heading voltage(String column) {
@@ -60,9 +61,7 @@ public final class OpenUnits {
     if (usual > 0.05 && usual < 1) {
       return open.scaled(column, 1e3, "kV, as no V could be that small");
     }
-    return usual > 50 || !(usual > 0)
-        ? open.of(column)
-        : ask("the unit of this voltage: V or kV");
+    return usual > 50 || !(usual > 0) ? open.of(column) : ask("the unit of this voltage: V or kV");
   }
 
   /** A distortion far below one percent may be a ratio. */
@@ -71,7 +70,8 @@ public final class OpenUnits {
     double least = h.quantity().contains("current") ? 1.5 : 0.3;
     double usual = open.values().median(column);
     Optional<double[]> made =
-        harmonics.distortionMade(OpenHeadings.place(h), h.quantity().contains("current") ? "current" : "voltage");
+        harmonics.distortionMade(
+            OpenHeadings.place(h), h.quantity().contains("current") ? "current" : "voltage");
     double ratio = open.values().ratio(Optional.of(open.values().of(column)), made);
     if (usual >= least || usual == 0 || OpenHeadings.within(ratio, 0.8, 1.25)) {
       return h;
@@ -99,8 +99,7 @@ public final class OpenUnits {
   /** Frequencies near 50 or 60 and volts of a low-voltage site show that points mark decimals. */
   private void openNumbers() {
     List<String> asked = open.values().openNumbers();
-    boolean decimals =
-        asked.stream().anyMatch(c -> isDecimal(open.of(c), open.values().median(c)));
+    boolean decimals = asked.stream().anyMatch(c -> isDecimal(open.of(c), open.values().median(c)));
     for (String column : asked) {
       if (!decimals && open.of(column).meaning() != Meaning.NONE) {
         open.all()

@@ -46,11 +46,13 @@ final class PowerUnits {
 
   private Heading power(String column) {
     Heading h = open.of(column);
-    double share = open.values().ratio(Optional.of(open.values().of(column)), voltAmps(OpenHeadings.place(h)));
+    double share =
+        open.values().ratio(Optional.of(open.values().of(column)), voltAmps(OpenHeadings.place(h)));
     double least = h.quantity().endsWith("apparent_va") ? 0.7 : 0.03;
     for (double prefix : PREFIXES) {
       if (OpenHeadings.within(prefix * share, least, 1.15)) {
-        return open.scaled(column, prefix, unit(prefix, h.quantity()) + ", as volts times amps show");
+        return open.scaled(
+            column, prefix, unit(prefix, h.quantity()) + ", as volts times amps show");
       }
     }
     return likeOthers(column).orElse(h);
@@ -80,7 +82,8 @@ final class PowerUnits {
   /** Never above volts times amps, and written as the other powers are. */
   private Heading reactive(String column) {
     Heading h = open.of(column);
-    double share = open.values().ratio(Optional.of(open.values().of(column)), voltAmps(OpenHeadings.place(h)));
+    double share =
+        open.values().ratio(Optional.of(open.values().of(column)), voltAmps(OpenHeadings.place(h)));
     Optional<Heading> alike = likeOthers(column);
     boolean can =
         alike.isPresent() && (Double.isNaN(share) || alike.get().factor() * share <= 1.15);

@@ -1,7 +1,7 @@
 package fourthwire.intake.reading.upload;
 
-import fourthwire.intake.reading.ReadingReader;
 import fourthwire.intake.reading.ReadingPlan;
+import fourthwire.intake.reading.ReadingReader;
 import fourthwire.intake.reading.ReadingSetting;
 import fourthwire.metering.RawFile;
 import fourthwire.metering.Reading;

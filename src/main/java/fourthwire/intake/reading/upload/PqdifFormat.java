@@ -1,14 +1,14 @@
 package fourthwire.intake.reading.upload;
 
 import fourthwire.intake.reading.ReadingPlan;
-import fourthwire.intake.reading.ReadingSetting;
 import fourthwire.intake.reading.ReadingRefusedException;
+import fourthwire.intake.reading.ReadingSetting;
 import fourthwire.intake.reading.format.Format;
 import fourthwire.intake.reading.format.Part;
-import fourthwire.intake.reading.wave.PqdifCapture;
 import fourthwire.intake.reading.pqdif.IntervalTable;
 import fourthwire.intake.reading.pqdif.Pqdif;
 import fourthwire.intake.reading.pqdif.PqdifException;
+import fourthwire.intake.reading.wave.PqdifCapture;
 import fourthwire.metering.Reading;
 import fourthwire.metering.ReadingKind;
 import fourthwire.metering.ReadingMapping;

@@ -1,18 +1,18 @@
 package fourthwire.intake.reading.upload;
 
 import fourthwire.intake.reading.ReadingPlan;
-import fourthwire.intake.reading.ReadingSetting;
 import fourthwire.intake.reading.ReadingRefusedException;
+import fourthwire.intake.reading.ReadingSetting;
 import fourthwire.intake.reading.format.Format;
-import fourthwire.intake.reading.format.Part;
 import fourthwire.intake.reading.format.Layout;
 import fourthwire.intake.reading.format.Mappings;
+import fourthwire.intake.reading.format.Part;
 import fourthwire.intake.reading.log.LogFormat;
-import fourthwire.intake.reading.wave.TextCapture;
-import fourthwire.intake.reading.wave.SampleClock;
 import fourthwire.intake.reading.table.TableException;
 import fourthwire.intake.reading.table.TextTable;
 import fourthwire.intake.reading.table.TimeColumns;
+import fourthwire.intake.reading.wave.SampleClock;
+import fourthwire.intake.reading.wave.TextCapture;
 import fourthwire.metering.MeasuredQuantity;
 import fourthwire.metering.Reading;
 import fourthwire.metering.ReadingKind;

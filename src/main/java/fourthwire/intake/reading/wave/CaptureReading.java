@@ -1,8 +1,8 @@
 package fourthwire.intake.reading.wave;
 
+import fourthwire.intake.reading.ReadingRefusedException;
 import fourthwire.intake.reading.ReadingSetting;
 import fourthwire.intake.reading.format.Progress;
-import fourthwire.intake.reading.ReadingRefusedException;
 import fourthwire.metering.Reading;
 import fourthwire.metering.capture.Capture;
 import fourthwire.metering.capture.CaptureAnalysis;

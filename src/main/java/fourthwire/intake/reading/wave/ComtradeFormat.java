@@ -1,18 +1,18 @@
 package fourthwire.intake.reading.wave;
 
-import fourthwire.intake.reading.format.Progress;
 import fourthwire.intake.reading.ReadingPlan;
-import fourthwire.intake.reading.ReadingSetting;
 import fourthwire.intake.reading.ReadingRefusedException;
-import fourthwire.intake.reading.format.Format;
-import fourthwire.intake.reading.format.Part;
-import fourthwire.intake.reading.format.Layout;
-import fourthwire.intake.reading.format.Mappings;
-import fourthwire.intake.reading.format.ChannelMapping;
+import fourthwire.intake.reading.ReadingSetting;
 import fourthwire.intake.reading.channel.ChannelNames;
 import fourthwire.intake.reading.comtrade.AnalogChannel;
 import fourthwire.intake.reading.comtrade.Comtrade;
 import fourthwire.intake.reading.comtrade.ComtradeException;
+import fourthwire.intake.reading.format.ChannelMapping;
+import fourthwire.intake.reading.format.Format;
+import fourthwire.intake.reading.format.Layout;
+import fourthwire.intake.reading.format.Mappings;
+import fourthwire.intake.reading.format.Part;
+import fourthwire.intake.reading.format.Progress;
 import fourthwire.intake.reading.heading.Heading;
 import fourthwire.metering.MeasuredQuantity;
 import fourthwire.metering.Reading;

@@ -1,13 +1,13 @@
 package fourthwire.intake.reading.wave;
 
 import fourthwire.intake.reading.ReadingPlan;
-import fourthwire.intake.reading.ReadingSetting;
 import fourthwire.intake.reading.ReadingRefusedException;
+import fourthwire.intake.reading.ReadingSetting;
+import fourthwire.intake.reading.channel.ChannelNames;
+import fourthwire.intake.reading.format.ChannelMapping;
 import fourthwire.intake.reading.format.Format;
 import fourthwire.intake.reading.format.Layout;
 import fourthwire.intake.reading.format.Mappings;
-import fourthwire.intake.reading.format.ChannelMapping;
-import fourthwire.intake.reading.channel.ChannelNames;
 import fourthwire.intake.reading.heading.Heading;
 import fourthwire.intake.reading.pqdif.Pqdif;
 import fourthwire.intake.reading.pqdif.SeriesUnit;

@@ -1,13 +1,13 @@
 package fourthwire.intake.reading.wave;
 
-import fourthwire.intake.reading.format.Progress;
 import fourthwire.intake.reading.ReadingPlan;
-import fourthwire.intake.reading.ReadingSetting;
 import fourthwire.intake.reading.ReadingRefusedException;
-import fourthwire.intake.reading.format.Mappings;
+import fourthwire.intake.reading.ReadingSetting;
+import fourthwire.intake.reading.channel.ChannelNames;
 import fourthwire.intake.reading.format.ChannelMapping;
 import fourthwire.intake.reading.format.DateQuestion;
-import fourthwire.intake.reading.channel.ChannelNames;
+import fourthwire.intake.reading.format.Mappings;
+import fourthwire.intake.reading.format.Progress;
 import fourthwire.intake.reading.heading.Heading;
 import fourthwire.intake.reading.table.DateOrder;
 import fourthwire.intake.reading.table.TextTable;
@@ -117,7 +117,8 @@ public final class TextCapture {
     }
   }
 
-  public Reading read(ReadingPlan plan, ReadingSetting setting, BiPredicate<Double, String> progress) {
+  public Reading read(
+      ReadingPlan plan, ReadingSetting setting, BiPredicate<Double, String> progress) {
     Progress.go(progress, 0, "reading the samples");
     Map<String, Column> columns = plan.mapping().columns();
     int[] at = columns.keySet().stream().mapToInt(table.headings()::indexOf).toArray();

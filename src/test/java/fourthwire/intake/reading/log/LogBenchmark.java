@@ -8,6 +8,8 @@ import fourthwire.metering.ReadingMapping;
 import fourthwire.metering.series.LogSeries;
 import fourthwire.metering.series.QuantityStatistics;
 import fourthwire.metering.series.SeriesStatistics;
+import fourthwire.testsupport.EndlessLog;
+import fourthwire.testsupport.RawFiles;
 import java.io.IOException;
 import java.io.InputStream;
 import java.io.PrintWriter;
@@ -16,8 +18,6 @@ import java.time.ZoneId;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
-import fourthwire.testsupport.EndlessLog;
-import fourthwire.testsupport.RawFiles;
 import java.util.concurrent.ExecutorService;
 import java.util.concurrent.Executors;
 
@@ -35,7 +35,7 @@ import java.util.concurrent.Executors;
  */
 final class LogBenchmark {
   private final RawFile raw;
-  private final ReadingSetting setting = 
+  private final ReadingSetting setting =
       new ReadingSetting(
           Optional.of(ZoneId.of("Europe/Amsterdam")),
           50,
