@@ -15,8 +15,10 @@ import fourthwire.jobs.ReadingSettings;
 import fourthwire.jobs.ScheduledJobs;
 import fourthwire.jobs.Stop;
 import fourthwire.jobs.measured.MeasuredStates;
+import fourthwire.jobs.series.StoredLogs;
 import fourthwire.metering.ReadingRepository;
 import fourthwire.metering.ReadingUploads;
+import fourthwire.metering.SeriesRepository;
 import fourthwire.site.SiteRepository;
 import fourthwire.store.Store;
 import java.time.Clock;
@@ -64,6 +66,11 @@ class JobConfiguration {
   @Bean
   Task<Void> auditTask(AuditRun run) {
     return ScheduledJobs.auditTask(run::run);
+  }
+
+  @Bean
+  StoredLogs storedLogs(ReadingRepository readings, SeriesRepository series) {
+    return new StoredLogs(readings, series);
   }
 
   @Bean

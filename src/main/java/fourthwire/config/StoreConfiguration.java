@@ -3,6 +3,7 @@ package fourthwire.config;
 import fourthwire.audit.AuditRepository;
 import fourthwire.metering.ReadingRepository;
 import fourthwire.metering.ReadingUploads;
+import fourthwire.metering.SeriesRepository;
 import fourthwire.site.SiteRepository;
 import fourthwire.site.SurveyCodec;
 import fourthwire.store.Settings;
@@ -41,6 +42,11 @@ class StoreConfiguration {
   @Bean
   ReadingRepository readingRepository(Store store) {
     return store.readings();
+  }
+
+  @Bean
+  SeriesRepository seriesRepository(Store store) {
+    return store.series();
   }
 
   @Bean

@@ -1,5 +1,6 @@
 package fourthwire.metering;
 
+import fourthwire.metering.reduce.LogSpan;
 import java.util.List;
 import java.util.Optional;
 
@@ -38,4 +39,7 @@ public interface SeriesRepository {
 
   /** What a quantity was by week. */
   Optional<Weeks> weeks(long readingId, String quantity);
+
+  /** The chunks of a reading's log; none for a capture. */
+  LogSpan.Source chunks(long readingId);
 }

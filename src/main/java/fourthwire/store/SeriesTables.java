@@ -2,6 +2,7 @@ package fourthwire.store;
 
 import fourthwire.metering.LogResult;
 import fourthwire.metering.SeriesRepository;
+import fourthwire.metering.reduce.LogSpan;
 import fourthwire.metering.series.ColumnCodec;
 import fourthwire.metering.series.LogSeries;
 import fourthwire.metering.series.QuantityStatistics;
@@ -127,6 +128,11 @@ final class SeriesTables implements SeriesRepository {
     return chunks(readingId, quantity).stream()
         .flatMapToDouble(c -> Arrays.stream(ColumnCodec.decode(c.bytes(), c.rows())))
         .toArray();
+  }
+
+  @Override
+  public LogSpan.Source chunks(long readingId) {
+    return new StoredChunks(jdbc, readingId);
   }
 
   @Override

@@ -46,7 +46,10 @@ class ApiDescription {
           .addSchemas("Node", NodeShapes.node())
           .addSchemas("ReadingRow", ReadingShapes.row())
           .addSchemas("Reading", ReadingShapes.reading())
-          .addSchemas("Mapping", ReadingShapes.mapping());
+          .addSchemas("Mapping", ReadingShapes.mapping())
+          .addSchemas("Series", SeriesShapes.series())
+          .addSchemas("SeriesWeeks", SeriesShapes.weeks())
+          .addSchemas("SeriesCoverage", SeriesShapes.coverage());
       api.getPaths().forEach(ApiDescription::complete);
     };
   }

@@ -55,6 +55,8 @@ final class Errors {
     boolean body = operation.getRequestBody() != null;
     if (body) {
       errors.put("400", "The body is malformed, or a part of the form is missing");
+    } else if (path.endsWith("/series") || path.endsWith("/weeks")) {
+      errors.put("400", "A parameter is missing or can't be read; the answer says which");
     }
     errors.put("403", "Sent by a page of another origin, or to a host name that is not allowed");
     if (path.contains("{")) {

@@ -61,9 +61,23 @@ class AnswersAsDescribedTest extends ServiceTest {
     JsonNode reading = http.get("/api/v1/readings/" + ended.path("result").asLong()).json();
     described.check("get", "/readings/{reading}", 200, reading);
     if (reading.has("rows")) {
+      checkSeries(http, "/api/v1/readings/" + ended.path("result").asLong());
       // SmallSite lies in the zone Europe/Vienna: an hour ahead of UTC in March
       assertThat(reading.at("/period/from").asString()).isEqualTo("2026-03-02T00:00:00+01:00");
     }
+  }
+
+  private void checkSeries(Http http, String reading) {
+    String quantity = "?quantity=N.rms_a";
+    described.check(
+        "get",
+        "/readings/{reading}/series",
+        200,
+        http.get(reading + "/series" + quantity + "&to=2026-03-03").json());
+    described.check(
+        "get", "/readings/{reading}/weeks", 200, http.get(reading + "/weeks" + quantity).json());
+    described.check(
+        "get", "/readings/{reading}/coverage", 200, http.get(reading + "/coverage").json());
   }
 
   private void checkAudits(Http http, String site) {

@@ -8,7 +8,7 @@ import java.util.TreeSet;
 import org.junit.jupiter.api.Test;
 import tools.jackson.databind.JsonNode;
 
-/** The description tells of every call of the public contract, section 5, and of no other. */
+/** The description tells of every call of the public contract, section 5, of a log's series, and of no other. */
 class ApiDescriptionTest extends ServiceTest {
   private static final Set<String> CONTRACT =
       Set.of(
@@ -21,6 +21,9 @@ class ApiDescriptionTest extends ServiceTest {
           "get /api/v1/sites/{site}/readings",
           "get /api/v1/readings/{reading}",
           "delete /api/v1/readings/{reading}",
+          "get /api/v1/readings/{reading}/series",
+          "get /api/v1/readings/{reading}/weeks",
+          "get /api/v1/readings/{reading}/coverage",
           "get /api/v1/jobs/{job}",
           "post /api/v1/jobs/{job}/cancel",
           "post /api/v1/sites/{site}/audits",

@@ -1,0 +1,30 @@
+package fourthwire.jobs.series;
+
+import fourthwire.metering.ReadingRepository;
+import fourthwire.metering.SeriesRepository;
+import fourthwire.site.Survey;
+import java.util.Optional;
+
+/** Finds the logs among the stored readings. */
+public final class StoredLogs {
+  private final ReadingRepository readings;
+  private final SeriesRepository series;
+
+  /** Of what is stored here. */
+  public StoredLogs(ReadingRepository readings, SeriesRepository series) {
+    this.readings = readings;
+    this.series = series;
+  }
+
+  /** The reading of this id with the rows of its log; empty where it is no log, or has no row. */
+  public Optional<StoredLog> find(long readingId, java.util.function.LongFunction<Survey> surveys) {
+    return readings.find(readingId).flatMap(r -> of(r, surveys.apply(r.siteId())));
+  }
+
+  /** The log of a reading; empty where it is none, or has no row. */
+  public Optional<StoredLog> of(ReadingRepository.Entry entry, Survey survey) {
+    return entry.reading().log().isPresent() && entry.reading().period().isPresent()
+        ? Optional.of(new StoredLog(entry, survey, series))
+        : Optional.empty();
+  }
+}
