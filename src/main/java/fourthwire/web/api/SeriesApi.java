@@ -79,8 +79,7 @@ class SeriesApi {
     known(log, quantity);
     Period span = span(log, from, to);
     TimeSteps steps = log.steps(span, points);
-    return SeriesJson.series(
-        quantity, log.values(List.of(quantity), steps).get(0), log.zone());
+    return SeriesJson.series(quantity, log.values(List.of(quantity), steps).get(0), log.zone());
   }
 
   @GetMapping("/weeks")
@@ -120,8 +119,7 @@ class SeriesApi {
   }
 
   private Survey survey(long site) {
-    SiteRepository.Entry entry =
-        sites.find(site).orElseThrow(() -> MissingException.site(site));
+    SiteRepository.Entry entry = sites.find(site).orElseThrow(() -> MissingException.site(site));
     return sites.survey(site, entry.latestRevision());
   }
 

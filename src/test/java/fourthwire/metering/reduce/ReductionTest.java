@@ -198,8 +198,7 @@ class ReductionTest {
     assertThat(bySize.shareAbove(2)).isEqualTo(0.5);
     assertThat(bySize.shareAbove(4)).isZero();
 
-    StepPercentiles days =
-        new StepPercentiles(TimeSteps.days(0, 5000, ZoneId.of("UTC")), 1000);
+    StepPercentiles days = new StepPercentiles(TimeSteps.days(0, 5000, ZoneId.of("UTC")), 1000);
     days.take(times, values);
     assertThat(days.of(0, 5, 95)).containsExactly(new double[] {1.15, 3.85}, within(1e-12));
   }

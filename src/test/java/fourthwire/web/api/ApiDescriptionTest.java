@@ -8,7 +8,10 @@ import java.util.TreeSet;
 import org.junit.jupiter.api.Test;
 import tools.jackson.databind.JsonNode;
 
-/** The description tells of every call of the public contract, section 5, of a log's series, and of no other. */
+/**
+ * The description tells of every call of the public contract, section 5, of a log's series, and of
+ * no other.
+ */
 class ApiDescriptionTest extends ServiceTest {
   private static final Set<String> CONTRACT =
       Set.of(
