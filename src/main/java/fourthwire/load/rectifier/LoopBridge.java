@@ -12,8 +12,18 @@ abstract class LoopBridge {
   /** First steps after a change, as shares of the way to a node: the current starts like t². */
   private static final double[] GRADING = {0.02, 0.06, 0.16, 0.36, 1};
 
+  private static final double[] COARSE_GRADING = {0.1, 0.4, 1};
+
+  /** Cells to a coarse step where the circuit does not ring within one. */
+  private static final double COARSE_CELLS = 4;
+
   private static final int MOST_SWITCHINGS = 600;
   private static final double EVENT_CELLS = 1e-7;
+
+  /** How near a start has to be found: its current begins with a slope of zero. */
+  private static final double JOIN_CELLS = 1e-5;
+
+  private static final double COARSE_EVENT_CELLS = 1e-3;
 
   /**
    * After a line has left one may join only this many cells later, unless its margin is clear: a
@@ -28,6 +38,9 @@ abstract class LoopBridge {
 
   final PathStep pair = new PathStep();
   final LoopStep loops;
+
+  /** How the state answers to that at the start of the march; no columns, no work. */
+  final LoopTangent tangent;
 
   /** The state's currents, 0 where none flows: signed currents of lines, or of paths. */
   final double[] line;
@@ -47,6 +60,11 @@ abstract class LoopBridge {
   private final Discharge discharge = new Discharge(this::drive, pair);
   private final EventFinder.Margin shortfall = this::shortfall;
   private final EventFinder.Margin joinMargin = this::marginAfter;
+
+  private double stride;
+  private double[] grading = GRADING;
+  private double leaveWidth;
+  private double joinWidth;
 
   private boolean recording;
   private int switchings;
@@ -68,6 +86,28 @@ abstract class LoopBridge {
     line = new double[currents];
     before = new double[currents];
     loops = new LoopStep(linesOfOne);
+    tangent = new LoopTangent(currents);
+  }
+
+  /** Steps as long as accuracy bears. */
+  final void fine() {
+    stride = pair.nextNode(0);
+    grading = GRADING;
+    leaveWidth = EVENT_CELLS;
+    joinWidth = JOIN_CELLS;
+  }
+
+  /** Longer steps: good enough to come near a steady state. */
+  final void coarse() {
+    double shortest = pair.nextNode(0);
+    stride = shortest < 1 ? 2 * shortest : COARSE_CELLS;
+    grading = COARSE_GRADING;
+    leaveWidth = COARSE_EVENT_CELLS;
+    joinWidth = COARSE_EVENT_CELLS;
+  }
+
+  private double nextNode(double position) {
+    return (Math.floor(position / stride + 1e-9) + 1) * stride;
   }
 
   /** How many currents there are in the state. */
@@ -82,8 +122,8 @@ abstract class LoopBridge {
   /** The loops in which the state's currents flow. */
   abstract void arrange();
 
-  /** Takes the loops' currents over into the state. */
-  abstract void carry();
+  /** Writes the loops' currents as those of the state. */
+  abstract void carry(double[] amps, double[] state);
 
   /** A loop's current, the smallest, ends. */
   abstract void leave(Loop loop);
@@ -146,6 +186,7 @@ abstract class LoopBridge {
       v = 0;
       return;
     }
+    tangent.rest(v, discharge.v);
     justLeft = false;
     u = discharge.u;
     v = discharge.v;
@@ -163,16 +204,22 @@ abstract class LoopBridge {
       join();
       return;
     }
+    tangent.enter(loops, emf, u);
+    follow(fresh);
+  }
+
+  private void follow(boolean fresh) {
     double base = u;
-    double span = Math.min(pair.nextNode(pair.nextNode(u)), to) - u;
-    int graded = fresh ? 0 : GRADING.length;
+    double span = Math.min(nextNode(nextNode(u)), to) - u;
+    int graded = fresh ? 0 : grading.length;
     boolean same = true;
     while (same && u < to && v > floorV) {
       double next =
-          graded < GRADING.length
-              ? base + GRADING[graded++] * span
-              : Math.min(pair.nextNode(u), to);
+          graded < grading.length ? base + grading[graded++] * span : Math.min(nextNode(u), to);
       same = step(u < joinsFrom ? Math.min(next, joinsFrom) : next);
+    }
+    if (same) {
+      tangent.exit(this);
     }
   }
 
@@ -183,7 +230,7 @@ abstract class LoopBridge {
     boolean leaves = missing > 0;
     if (leaves) {
       double short0 = pair.threshold - least(loops.from);
-      h = EventFinder.find(shortfall, 0, short0, h, missing, EVENT_CELLS, 1e-3 * pair.threshold);
+      h = EventFinder.find(shortfall, 0, short0, h, missing, leaveWidth, 1e-3 * pair.threshold);
     }
     double margin = margin(u + h);
     boolean joins = joins(margin, u + h);
@@ -195,6 +242,7 @@ abstract class LoopBridge {
     if (leaves) {
       leaveSmallest();
     } else if (joins) {
+      tangent.exit(this);
       join();
     }
     return !leaves && !joins;
@@ -205,7 +253,7 @@ abstract class LoopBridge {
     loops.v = v;
     double atStart = margin(u);
     if (atStart < 0 && u >= joinsFrom) {
-      return EventFinder.find(joinMargin, 0, atStart, h, margin, EVENT_CELLS, 0);
+      return EventFinder.find(joinMargin, 0, atStart, h, margin, joinWidth, 0);
     }
     marginAfter(h);
     return h;
@@ -215,10 +263,11 @@ abstract class LoopBridge {
   private void put(double end) {
     System.arraycopy(line, 0, before, 0, lines());
     double chargePerAmp = loops.chargePerAmp(end - u, v);
+    tangent.step(loops, end - u, v);
     u = end;
     v = loops.v;
     System.arraycopy(loops.x, 0, loops.from, 0, loops.n);
-    carry();
+    carry(loops.x, line);
     for (int k = 0; k < lines() && recording; k++) {
       if (line[k] != 0) {
         trace[k].next(u, line[k], chargePerAmp * (before[k] + line[k]));
@@ -233,6 +282,8 @@ abstract class LoopBridge {
         gone = a;
       }
     }
+    tangent.end(loops, gone, emf, u);
+    tangent.exit(this);
     leave(loops.loop[gone]);
     justLeft = loops.n == 1;
     joinsFrom = u + REST_OF_LEAVER;

@@ -15,6 +15,11 @@ final class LoopStep {
   /** Over this many cells the currents' rates are taken where a line may join. */
   private static final double MOMENT = 1e-3;
 
+  /** Of the tangent's method. */
+  private static final double GAMMA = 1 - Math.sqrt(0.5);
+
+  private static final double SECOND = (1 - GAMMA) / GAMMA;
+
   /** Loops, those of a bridge next to each other. */
   final Loop[] loop = new Loop[MOST];
 
@@ -59,6 +64,7 @@ final class LoopStep {
   private double fv;
   private double uv;
   private double c;
+  private double perStep;
 
   /** As {@link Loop#Loop}. */
   LoopStep(int linesOfOne) {
@@ -129,7 +135,7 @@ final class LoopStep {
   /** Logarithmic drop of two diodes. */
   private double drops(double one, double other) {
     return slopeV
-        * Math.log(
+        * QuickLog.of(
             (1 + Math.max(one, threshold) / saturation)
                 * (1 + Math.max(other, threshold) / saturation));
   }
@@ -167,6 +173,49 @@ final class LoopStep {
         factors[a * MOST + b] = a == b ? sum : sum / factors[b * MOST + b];
       }
     }
+  }
+
+  /** Whether nothing keeps a current going. */
+  boolean resistive() {
+    return resistive;
+  }
+
+  /**
+   * Makes ready for {@link #tangent} over the step just taken.
+   *
+   * @param volts of the capacitor in the middle of it
+   */
+  void prepareTangent(double h, double volts) {
+    perStep = 1 / (GAMMA * h);
+    c = capacitance * perStep - power / (volts * volts);
+    for (int a = 0; a < n; a++) {
+      k[a] = 0.5 * (from[a] + x[a]);
+    }
+    factor(perStep, k, 1 / c);
+  }
+
+  /** Carries small departures of the currents and of the voltage, which it returns, over it. */
+  double tangent(double[] amps, double volts) {
+    double side = capacitance * perStep;
+    for (int a = 0; a < n; a++) {
+      r[a] = perStep * inductive(a, amps);
+    }
+    solve(side * volts);
+    for (int a = 0; a < n; a++) {
+      k[a] = (1 - SECOND) * amps[a] + SECOND * u[a];
+    }
+    double middle = (1 - SECOND) * volts + SECOND * uv;
+    for (int a = 0; a < n; a++) {
+      r[a] = perStep * inductive(a, k);
+    }
+    solve(side * middle);
+    System.arraycopy(u, 0, amps, 0, n);
+    return uv;
+  }
+
+  /** How fast a loop's current changes, amps per cell, after {@link #rates}. */
+  double rate(int a) {
+    return u[a] / MOMENT;
   }
 
   /** Solves for {@link #u} and {@link #uv} from {@link #r} and the capacitor's side. */

@@ -94,13 +94,11 @@ final class MultiPulseSolver implements LoadSolver {
   /** Whether a state is found that repeats as early as the voltage allows. */
   private boolean repeats(double seriesOhm, double seriesHenry) {
     setPeriods(!bridge.emf.halfWave() ? 1 : bridge.emf.balanced ? SIXTHS : 2);
+    bridge.fine();
     return warm && newton.converge() || search() || inStages(seriesOhm, seriesHenry);
   }
 
   private void setPeriods(int parts) {
-    if (parts != periods) {
-      newton.forget();
-    }
     periods = parts;
     cells = CycleTable.CELLS / parts;
   }
@@ -143,6 +141,10 @@ final class MultiPulseSolver implements LoadSolver {
   }
 
   private boolean search() {
+    moveSection(0);
+    if (approach() && newton.converge()) {
+      return true;
+    }
     for (int shift : SECTIONS) {
       moveSection(shift);
       newton.start(0.95);
@@ -154,6 +156,15 @@ final class MultiPulseSolver implements LoadSolver {
     newton.start(1);
     starved = !newton.repeat(REPETITIONS);
     return !starved && newton.converge();
+  }
+
+  /** Comes near by coarse steps. */
+  private boolean approach() {
+    bridge.coarse();
+    newton.start(0.95);
+    boolean near = newton.approach();
+    bridge.fine();
+    return near;
   }
 
   /** Brings the power up where full power from rest empties the capacitor or does not settle. */
@@ -180,22 +191,28 @@ final class MultiPulseSolver implements LoadSolver {
   }
 
   /** The state a period later, seen from the section's lines. */
-  private boolean map(double[] from, double[] to) {
+  private boolean map(double[] from, double[] to, double[][] columns, int count) {
     put(from);
-    if (!bridge.march(section, cells, false)) {
+    bridge.tangent.start(columns, count);
+    if (!bridge.march(section, cells, true)) {
       return false;
     }
-    double[] i = bridge.line;
-    for (int k = 0; k < bridge.lines(); k++) {
-      to[k] = periods == 1 ? i[k] : periods == 2 ? -i[k] : -i[k - k % 3 + (k + 2) % 3];
-    }
+    seenFromSection(bridge.line, to);
     to[bridge.lines()] = bridge.v;
+    for (int c = 0; c < count; c++) {
+      seenFromSection(bridge.tangent.column[c], columns[c]);
+      columns[c][bridge.lines()] = bridge.tangent.volts(c);
+    }
     return true;
   }
 
+  private void seenFromSection(double[] i, double[] to) {
+    for (int k = 0; k < bridge.lines(); k++) {
+      to[k] = periods == 1 ? i[k] : periods == 2 ? -i[k] : -i[k - k % 3 + (k + 2) % 3];
+    }
+  }
+
   private void write(PortSpectra current) {
-    put(newton.state);
-    bridge.march(section, cells, true);
     takeHarmonics(0, current);
     if (bridges == 2) {
       takeHarmonics(3, bridge.second);

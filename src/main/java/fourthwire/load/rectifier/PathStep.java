@@ -88,12 +88,12 @@ final class PathStep {
 
   void threshold(double amps) {
     threshold = amps;
-    thresholdV = slopeV * Math.log(1 + amps / saturation);
+    thresholdV = slopeV * QuickLog.of(1 + amps / saturation);
     onsetV = thresholdV + resistance * amps;
   }
 
   private double drop(double amps) {
-    return amps > threshold ? slopeV * Math.log(1 + amps / saturation) : thresholdV;
+    return amps > threshold ? slopeV * QuickLog.of(1 + amps / saturation) : thresholdV;
   }
 
   /** Slope of both diodes' logarithmic drop, ohms. */

@@ -94,14 +94,14 @@ final class ThreeLineBridge extends LoopBridge {
   }
 
   @Override
-  void carry() {
+  void carry(double[] amps, double[] state) {
     for (int a = 0; a < loops.n; a++) {
-      line[loops.loop[a].out] = 0;
+      state[loops.loop[a].out] = 0;
     }
     for (int a = 0; a < loops.n; a++) {
       Loop loop = loops.loop[a];
-      line[loop.in] = loop.sign * loops.x[a];
-      line[loop.out] -= line[loop.in];
+      state[loop.in] = loop.sign * amps[a];
+      state[loop.out] -= state[loop.in];
     }
   }
 

@@ -66,9 +66,9 @@ final class TwoPathBridge extends LoopBridge {
   }
 
   @Override
-  void carry() {
+  void carry(double[] amps, double[] state) {
     for (int a = 0; a < loops.n; a++) {
-      line[loops.loop[a].in] = loops.x[a];
+      state[loops.loop[a].in] = amps[a];
     }
   }
 

@@ -65,6 +65,7 @@ final class TwoPathSolver {
     boolean mirrored = bridge.emf.portHalfWave();
     warm &= mirrored == halfWave;
     halfWave = mirrored;
+    bridge.fine();
     boolean found = warm && newton.converge() || search();
     warm = found && stable() || mirrored && wholeCycle();
     hunts = found && !warm;
@@ -122,25 +123,28 @@ final class TwoPathSolver {
     bridge.v = s[2];
   }
 
-  private boolean march(boolean record) {
-    return bridge.march(section, CycleTable.CELLS / (halfWave ? 2 : 1), record);
-  }
-
   /** The state a period later; after half a cycle the paths have changed places. */
-  private boolean map(double[] from, double[] to) {
+  private boolean map(double[] from, double[] to, double[][] columns, int count) {
     put(from);
-    if (!march(false)) {
+    bridge.tangent.start(columns, count);
+    if (!bridge.march(section, CycleTable.CELLS / (halfWave ? 2 : 1), true)) {
       return false;
     }
-    to[0] = bridge.line[halfWave ? 1 : 0];
-    to[1] = bridge.line[halfWave ? 0 : 1];
+    seenFromSection(bridge.line, to);
     to[2] = bridge.v;
+    for (int c = 0; c < count; c++) {
+      seenFromSection(bridge.tangent.column[c], columns[c]);
+      columns[c][2] = bridge.tangent.volts(c);
+    }
     return true;
   }
 
+  private void seenFromSection(double[] paths, double[] to) {
+    to[0] = paths[halfWave ? 1 : 0];
+    to[1] = paths[halfWave ? 0 : 1];
+  }
+
   private void write(PortSpectra current) {
-    put(newton.state);
-    march(true);
     bridge.trace[0].harmonics(halfWave, current.re[0], current.im[0]);
     PortSpectra second = bridge.second;
     bridge.trace[1].harmonics(halfWave, second.re[0], second.im[0]);
