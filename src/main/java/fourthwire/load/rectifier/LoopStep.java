@@ -65,6 +65,11 @@ final class LoopStep {
   private double uv;
   private double c;
   private double perStep;
+  private double side;
+  private double tii;
+  private double tiv;
+  private double tvi;
+  private double tvv;
 
   /** As {@link Loop#Loop}. */
   LoopStep(int linesOfOne) {
@@ -187,16 +192,42 @@ final class LoopStep {
    */
   void prepareTangent(double h, double volts) {
     perStep = 1 / (GAMMA * h);
-    c = capacitance * perStep - power / (volts * volts);
+    side = capacitance * perStep;
+    c = side - power / (volts * volts);
     for (int a = 0; a < n; a++) {
       k[a] = 0.5 * (from[a] + x[a]);
     }
-    factor(perStep, k, 1 / c);
+    if (n == 1) {
+      prepareLone();
+    } else {
+      factor(perStep, k, 1 / c);
+    }
+  }
+
+  /** Of a single loop both stages come to one matrix. */
+  private void prepareLone() {
+    double l = henry[0] * perStep;
+    double a = l + ohm[0] + 2 * conductance(k[0]);
+    double det = 1 / (a * c + 1);
+    double bii = c * l * det;
+    double biv = -side * det;
+    double bvi = l * det;
+    double bvv = a * side * det;
+    double kii = 1 - SECOND + SECOND * bii;
+    double kvv = 1 - SECOND + SECOND * bvv;
+    tii = kii * bii + SECOND * biv * bvi;
+    tiv = kii * biv + SECOND * biv * bvv;
+    tvi = SECOND * bvi * bii + kvv * bvi;
+    tvv = SECOND * bvi * biv + kvv * bvv;
   }
 
   /** Carries small departures of the currents and of the voltage, which it returns, over it. */
   double tangent(double[] amps, double volts) {
-    double side = capacitance * perStep;
+    if (n == 1) {
+      double i = amps[0];
+      amps[0] = tii * i + tiv * volts;
+      return tvi * i + tvv * volts;
+    }
     for (int a = 0; a < n; a++) {
       r[a] = perStep * inductive(a, amps);
     }
@@ -317,6 +348,12 @@ final class LoopStep {
     for (int a = 0; a < n; a++) {
       drive[a] = loop[a].drive(emf, position);
     }
+    if (n == 1) {
+      double amps = x[0];
+      double force = drive[0] - v - ohm[0] * amps - drops(amps, amps);
+      u[0] = force / (henry[0] / MOMENT + ohm[0] + 2 * conductance(amps));
+      return;
+    }
     factor(1 / MOMENT, x, 0);
     forces(x, v, drive);
     System.arraycopy(f, 0, r, 0, n);
@@ -325,20 +362,25 @@ final class LoopStep {
   }
 
   /**
+   * What a line that joins has its drops come to beside one that carries a current already: both
+   * diodes', with the threshold's current in its own.
+   */
+  double joiningDrop(double carried) {
+    double held = Math.max(carried, threshold);
+    return drops(0, held) + (carried > 0 ? slopeV * 2 * threshold / held : 0);
+  }
+
+  /**
    * How willingly an idle line would join, after {@link #rates}: by how much the voltage around its
    * loop exceeds the drops, the other loops' currents changing as they do.
    *
    * @param idle a loop through the idle line
    * @param carried what its other line carries already, amps
+   * @param joiningDrop for that, {@link #joiningDrop}
    */
-  double margin(Loop idle, ThreeLineEmf emf, double position, double carried) {
-    double held = Math.max(carried, threshold);
-    double sum =
-        idle.drive(emf, position)
-            - v
-            - drops(0, held)
-            - (carried > 0 ? slopeV * 2 * threshold / held : 0);
-    double common = carried > 0 ? conductance(held) : 0;
+  double margin(Loop idle, ThreeLineEmf emf, double position, double carried, double joiningDrop) {
+    double sum = idle.drive(emf, position) - v - joiningDrop;
+    double common = carried > 0 ? conductance(Math.max(carried, threshold)) : 0;
     for (int a = 0; a < n; a++) {
       double r = mutualOhm(idle, loop[a]);
       double drop = r + mutualHenry(idle, loop[a]) / MOMENT;

@@ -3,7 +3,6 @@ package fourthwire.load.rectifier;
 import fourthwire.load.model.LoadSolver;
 import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.load.model.PortSpectra;
-import fourthwire.quantity.Phasor;
 import fourthwire.quantity.Spectrum;
 
 /**
@@ -82,7 +81,7 @@ final class MultiPulseSolver implements LoadSolver {
     if (!(peak > 0) || Double.isInfinite(peak)) {
       throw new NoSteadyStateException("a rectifier on three lines has no voltage to draw from");
     }
-    firstSection = firstSection(emf.positiveSequence());
+    firstSection = firstSection(emf);
     equip(load, seriesOhm, seriesHenry);
     warm = repeats(seriesOhm, seriesHenry);
     if (!warm) {
@@ -115,8 +114,15 @@ final class MultiPulseSolver implements LoadSolver {
   }
 
   /** Just before the voltage of the first line passes the third's. */
-  private static double firstSection(Phasor positive) {
-    double turns = 1.0 / 12 - Math.atan2(positive.im(), positive.re()) / (2 * Math.PI) - 1e-9;
+  private static double firstSection(PortSpectra emf) {
+    double re = emf.re[0][1];
+    double im = emf.im[0][1];
+    for (int k = 1; k < 3; k++) {
+      double sin = k == 1 ? ROOT3 / 2 : -ROOT3 / 2;
+      re += -0.5 * emf.re[k][1] - sin * emf.im[k][1];
+      im += sin * emf.re[k][1] - 0.5 * emf.im[k][1];
+    }
+    double turns = 1.0 / 12 - Math.atan2(im, re) / (2 * Math.PI) - 1e-9;
     return Math.floor((turns - Math.floor(turns)) * CycleTable.CELLS);
   }
 

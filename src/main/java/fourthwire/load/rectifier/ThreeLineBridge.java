@@ -142,10 +142,11 @@ final class ThreeLineBridge extends LoopBridge {
   /** Of a bridge without current: each pair of its lines, both ways. */
   private double offMargin(int k, double at, double atLeast) {
     double most = atLeast;
+    double drop = loops.joiningDrop(0);
     for (int in = k; in < k + 3; in++) {
       for (int out = k; out < k + 3; out++) {
         if (in != out) {
-          most = candidate(in, out, 0, at, most);
+          most = candidate(in, out, 0, drop, at, most);
         }
       }
     }
@@ -156,13 +157,16 @@ final class ThreeLineBridge extends LoopBridge {
   private double thirdMargin(int a, double at, double atLeast) {
     Loop loop = loops.loop[a];
     int third = third(loop);
-    double up = candidate(third, loop.out, loops.x[a], at, atLeast);
-    return candidate(loop.in, third, loops.x[a], at, up);
+    double carried = loops.x[a];
+    double drop = loops.joiningDrop(carried);
+    double up = candidate(third, loop.out, carried, drop, at, atLeast);
+    return candidate(loop.in, third, carried, drop, at, up);
   }
 
-  private double candidate(int in, int out, double carried, double at, double atLeast) {
+  private double candidate(
+      int in, int out, double carried, double drop, double at, double atLeast) {
     idle.set(in, out, 1);
-    double margin = loops.margin(idle, emf, at, carried);
+    double margin = loops.margin(idle, emf, at, carried, drop);
     if (margin > atLeast) {
       joiner.set(in, out, 1);
       return margin;

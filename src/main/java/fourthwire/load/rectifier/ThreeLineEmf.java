@@ -153,10 +153,15 @@ final class ThreeLineEmf {
 
   /** Largest voltage between two lines of some bridge at a sample. */
   double peak(int bridges) {
+    int samples = CycleTable.CELLS / (balanced ? 3 : 1) / (halfWave() ? 2 : 1);
     double peak = 0;
-    for (int n = 0; n < CycleTable.CELLS; n++) {
-      for (int b = 0; b < bridges; b++) {
-        peak = Math.max(peak, spread(b, n));
+    for (int k = 0; k < 3 * bridges; k += 3) {
+      double[] a = line[k].value;
+      double[] b = line[k + 1].value;
+      double[] c = line[k + 2].value;
+      for (int n = 0; n < samples; n++) {
+        double spread = Math.max(a[n], Math.max(b[n], c[n])) - Math.min(a[n], Math.min(b[n], c[n]));
+        peak = Math.max(peak, spread);
       }
     }
     return peak;

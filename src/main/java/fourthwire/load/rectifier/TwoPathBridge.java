@@ -89,7 +89,7 @@ final class TwoPathBridge extends LoopBridge {
     Loop carrying = loops.loop[0];
     idle.set(carrying.out, carrying.in, 1);
     loops.rates(emf, at);
-    return loops.margin(idle, emf, at, 0);
+    return loops.margin(idle, emf, at, 0, loops.joiningDrop(0));
   }
 
   @Override
