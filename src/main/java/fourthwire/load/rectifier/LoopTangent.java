@@ -9,8 +9,8 @@ package fourthwire.load.rectifier;
  * Runge-Kutta methods for stiff O.D.E.'s", SIAM Journal on Numerical Analysis 14, 1977). Where a
  * current ends, a departure moves the moment of its end, and the currents that stay change their
  * rates there: δx becomes δx + (x' before - x' after)·δt (the saltation of Aizerman and Gantmakher,
- * "On the stability of periodic motions", Journal of Applied Mathematics and Mechanics 22, 1958).
- * A current that starts does so with a slope of zero and changes nothing. Serves Newton's steps and
+ * "On the stability of periodic motions", Journal of Applied Mathematics and Mechanics 22, 1958). A
+ * current that starts does so with a slope of zero and changes nothing. Serves Newton's steps and
  * the multipliers of a steady state; a solution's own accuracy does not hang on it.
  */
 final class LoopTangent {
