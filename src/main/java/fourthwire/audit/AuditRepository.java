@@ -73,8 +73,10 @@ public interface AuditRepository {
   /**
    * Stores the result and the state done, in one transaction. Stores nothing where a cancel was
    * asked for, or where the audit is gone together with its site.
+   *
+   * @param progress hears how far the results are made ready, and may stop before any is stored
    */
-  void finish(long auditId, AuditResult result);
+  void finish(long auditId, AuditResult result, Progress progress);
 
   /** Stores the reason and the state failed or cancelled. */
   void end(long auditId, State state, String message);

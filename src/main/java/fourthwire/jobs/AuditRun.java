@@ -4,7 +4,6 @@ import fourthwire.audit.Audit;
 import fourthwire.audit.AuditFailedException;
 import fourthwire.audit.AuditRepository;
 import fourthwire.audit.AuditRequest;
-import fourthwire.audit.AuditResult;
 import fourthwire.audit.Progress;
 import fourthwire.jobs.measured.MeasuredStates;
 import fourthwire.load.model.NoSteadyStateException;
@@ -43,8 +42,8 @@ public final class AuditRun {
           .find(auditId)
           .ifPresent(
               entry -> {
-                AuditResult result = audit.run(request(entry), listener(auditId));
-                audits.finish(auditId, result);
+                Progress listener = listener(auditId);
+                audits.finish(auditId, audit.run(request(entry), listener), listener);
               });
     } catch (Progress.CancelledException e) {
       audits.end(auditId, AuditRepository.State.CANCELLED, "cancelled");

@@ -4,8 +4,6 @@ import fourthwire.audit.HeadlineFigure;
 import fourthwire.audit.HourSeries;
 import fourthwire.audit.WeekState;
 import fourthwire.quantity.Figure;
-import java.math.BigDecimal;
-import java.math.MathContext;
 import java.util.Arrays;
 import java.util.EnumMap;
 import java.util.LinkedHashMap;
@@ -16,7 +14,10 @@ import tools.jackson.databind.node.ObjectNode;
 
 /** The week of a node: every figure's 168 values under its own name, to five digits. */
 final class WeekJson {
-  private static final MathContext DIGITS = new MathContext(5);
+  /** Where the percentiles stand, which the 168 values tell too. */
+  static final String PERCENTILES_KEY = "percentiles";
+
+  private static final int DIGITS = 5;
   private static final double[] PERCENTILES = {5, 50, 95, 99};
 
   private WeekJson() {}
@@ -27,7 +28,7 @@ final class WeekJson {
     ObjectNode over = o.putObject("hours_over_limit");
     w.hoursOverLimit().forEach(over::put);
     w.series().forEach((figure, series) -> o.set(figure.word(), write(series)));
-    ObjectNode percentiles = o.putObject("percentiles");
+    ObjectNode percentiles = o.putObject(PERCENTILES_KEY);
     w.series().forEach((figure, series) -> percentiles.set(figure.word(), spread(series)));
     write(o, w.energy());
     return o;
@@ -50,7 +51,7 @@ final class WeekJson {
   }
 
   static double rounded(double value) {
-    return new BigDecimal(value).round(DIGITS).doubleValue();
+    return Digits.rounded(value, DIGITS);
   }
 
   private static ObjectNode spread(HourSeries series) {

@@ -4,13 +4,15 @@ import fourthwire.audit.AuditRepository;
 import fourthwire.audit.AuditResult;
 import fourthwire.audit.NodeResult;
 import fourthwire.audit.NodeSummary;
+import fourthwire.audit.Progress;
 import fourthwire.json.Documents;
-import fourthwire.json.NodeJson;
+import fourthwire.json.StoredNode;
 import fourthwire.json.SummaryJson;
 import java.sql.PreparedStatement;
 import java.sql.ResultSet;
 import java.sql.SQLException;
 import java.time.Clock;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
@@ -19,13 +21,16 @@ import org.springframework.jdbc.core.JdbcTemplate;
 import org.springframework.jdbc.core.simple.JdbcClient;
 import org.springframework.transaction.support.TransactionTemplate;
 
-/** Audits, and each node's result as a gzipped document of its own. */
+/** Audits, and each node's result as a document of its own. */
 final class JdbcAudits implements AuditRepository {
   private static final String COLUMNS =
       """
       select id, site_id, revision, supply, draws, state, progress, message, asked, engine_version,
         editions, notes from audits
       """;
+
+  private static final double ALMOST_DONE = 0.99;
+  private static final int NODES_AT_A_TIME = 256;
 
   private final JdbcClient jdbc;
   private final JdbcTemplate template;
@@ -132,15 +137,34 @@ final class JdbcAudits implements AuditRepository {
   }
 
   @Override
-  public void finish(long auditId, AuditResult result) {
+  public void finish(long auditId, AuditResult result, Progress progress) {
+    List<StoredRow> nodes = madeReady(result.nodes(), progress);
     transaction.executeWithoutResult(
         status -> {
           if (markDone(auditId, result)) {
-            addNodes(auditId, result.nodes());
+            addNodes(auditId, nodes);
           } else {
             end(auditId, State.CANCELLED, "cancelled");
           }
         });
+  }
+
+  /** A node as its row holds it. */
+  private record StoredRow(String node, byte[] brief, byte[] document) {
+    static StoredRow of(NodeResult node) {
+      return new StoredRow(
+          node.node(), StoredNode.bytes(NodeSummary.of(node)), StoredNode.bytes(node));
+    }
+  }
+
+  private static List<StoredRow> madeReady(List<NodeResult> nodes, Progress progress) {
+    List<StoredRow> rows = new ArrayList<>();
+    while (rows.size() < nodes.size()) {
+      progress.at(ALMOST_DONE, "Storing the results, node " + (rows.size() + 1));
+      int end = Math.min(nodes.size(), rows.size() + NODES_AT_A_TIME);
+      rows.addAll(nodes.subList(rows.size(), end).parallelStream().map(StoredRow::of).toList());
+    }
+    return rows;
   }
 
   private boolean markDone(long auditId, AuditResult result) {
@@ -160,21 +184,21 @@ final class JdbcAudits implements AuditRepository {
         == 1;
   }
 
-  private void addNodes(long auditId, List<NodeResult> nodes) {
+  private void addNodes(long auditId, List<StoredRow> nodes) {
     template.batchUpdate(
         """
-        insert into audit_nodes (audit_id, position, node, summary, document)
+        insert into audit_nodes (audit_id, position, node, brief, document)
         values (?, ?, ?, ?, ?)
         """,
         new BatchPreparedStatementSetter() {
           @Override
           public void setValues(PreparedStatement insert, int i) throws SQLException {
-            NodeResult node = nodes.get(i);
+            StoredRow row = nodes.get(i);
             insert.setLong(1, auditId);
             insert.setInt(2, i);
-            insert.setString(3, node.node());
-            insert.setString(4, SummaryJson.write(NodeSummary.of(node)).toString());
-            insert.setBytes(5, Documents.zipped(NodeJson.write(node)));
+            insert.setString(3, row.node());
+            insert.setBytes(4, row.brief());
+            insert.setBytes(5, row.document());
           }
 
           @Override
@@ -198,14 +222,18 @@ final class JdbcAudits implements AuditRepository {
   @Override
   public List<NodeSummary> summaries(long auditId) {
     return jdbc
-        .sql("select summary from audit_nodes where audit_id = ? order by position")
+        .sql("select brief, summary from audit_nodes where audit_id = ? order by position")
         .param(auditId)
-        .query(String.class)
+        .query(JdbcAudits::summary)
         .list()
         .stream()
-        .map(SummaryJson::read)
         .sorted(NodeSummary.WORST_FIRST)
         .toList();
+  }
+
+  private static NodeSummary summary(ResultSet row, int number) throws SQLException {
+    byte[] brief = row.getBytes("brief");
+    return brief == null ? SummaryJson.read(Rows.text(row, "summary")) : StoredNode.row(brief);
   }
 
   @Override
@@ -225,6 +253,6 @@ final class JdbcAudits implements AuditRepository {
   }
 
   private static NodeResult node(ResultSet row, int number) throws SQLException {
-    return NodeJson.read(Documents.unzipped(row.getBytes("document")));
+    return StoredNode.result(row.getBytes("document"));
   }
 }

@@ -7,6 +7,7 @@ import fourthwire.audit.AuditRepository.State;
 import fourthwire.audit.AuditResult;
 import fourthwire.audit.NodeResult;
 import fourthwire.audit.NodeSummary;
+import fourthwire.audit.Progress;
 import fourthwire.intake.survey.ZipSurveyCodec;
 import fourthwire.limits.Severity;
 import fourthwire.metering.LogResult;
@@ -89,7 +90,7 @@ class StoreTest {
     long site = sites.create(SmallSite.survey("Works"), List.of());
     long audit = audits.create(site, 1, Optional.empty());
     audits.start(audit);
-    audits.finish(audit, result(new RandomResults(1), 3));
+    audits.finish(audit, result(new RandomResults(1), 3), Progress.SILENT);
     addReading(site);
     uploads.create(site, new MeterRef("M1", "LP-1"), List.of(file("b.csv", 10)), Optional.empty());
 
@@ -131,7 +132,7 @@ class StoreTest {
         .returns("solving", AuditRepository.Entry::message);
 
     AuditResult result = result(new RandomResults(7), 6);
-    audits.finish(audit, result);
+    audits.finish(audit, result, Progress.SILENT);
 
     AuditRepository.Entry done = audits.find(audit).orElseThrow();
     assertThat(done.state()).isEqualTo(State.DONE);
@@ -157,7 +158,7 @@ class StoreTest {
     long audit = audits.create(site, 1, Optional.empty());
     audits.start(audit);
     AuditResult result = result(new RandomResults(11), 40);
-    audits.finish(audit, result);
+    audits.finish(audit, result, Progress.SILENT);
 
     List<NodeSummary> rows = audits.summaries(audit);
 
@@ -182,7 +183,7 @@ class StoreTest {
     assertThat(audits.find(queued).orElseThrow().state()).isEqualTo(State.CANCELLED);
     assertThat(audits.start(queued)).isFalse();
     assertThat(audits.progress(running, 0.5, "solving")).isFalse();
-    audits.finish(running, result(new RandomResults(1), 2));
+    audits.finish(running, result(new RandomResults(1), 2), Progress.SILENT);
     assertThat(audits.find(running).orElseThrow().state()).isEqualTo(State.CANCELLED);
     assertThat(audits.nodes(running)).isEmpty();
   }

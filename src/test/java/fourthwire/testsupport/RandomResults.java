@@ -17,6 +17,8 @@ import fourthwire.quantity.Phasor;
 import fourthwire.quantity.PowerFigures;
 import fourthwire.quantity.Spectrum;
 import fourthwire.site.SiteTree;
+import java.math.BigDecimal;
+import java.math.MathContext;
 import java.time.OffsetDateTime;
 import java.time.ZoneOffset;
 import java.util.Arrays;
@@ -216,10 +218,15 @@ public final class RandomResults {
     return random.nextInt(4) == 0 ? Figure.unknown(sentence()) : Figure.of(number());
   }
 
+  /** Figures are stored to nine significant digits. */
+  private static double nineDigits(double value) {
+    return new BigDecimal(value).round(new MathContext(9)).doubleValue();
+  }
+
   private double number() {
     return random.nextInt(10) == 0
         ? 0
-        : random.nextGaussian() * Math.pow(10, random.nextInt(12) - 4);
+        : nineDigits(random.nextGaussian() * Math.pow(10, random.nextInt(12) - 4));
   }
 
   private String sentence() {

@@ -2,6 +2,7 @@ package fourthwire.web;
 
 import fourthwire.audit.AuditRepository;
 import fourthwire.audit.AuditResult;
+import fourthwire.audit.Progress;
 import fourthwire.site.Practice;
 import fourthwire.site.SiteRepository;
 import fourthwire.testsupport.ServiceTest;
@@ -38,7 +39,8 @@ abstract class PagesTest extends ServiceTest {
             "0.1.0",
             List.of("IEEE 519-2022", "IEC 60364-5-52:2009"),
             SampleSite.results(),
-            List.of("Mutual coupling between conductors is not modelled.")));
+            List.of("Mutual coupling between conductors is not modelled.")),
+        Progress.SILENT);
     return id;
   }
 }
