@@ -16,6 +16,7 @@ import java.util.List;
 import java.util.Objects;
 import java.util.Optional;
 import java.util.stream.DoubleStream;
+import java.util.stream.IntStream;
 import org.springframework.jdbc.core.JdbcTemplate;
 import org.springframework.jdbc.core.simple.JdbcClient;
 
@@ -70,11 +71,14 @@ final class SeriesTables implements SeriesRepository {
             .toArray());
   }
 
+  /** Columns are coded on all processors, for the database takes them one after the other. */
   private void addChunk(long readingId, LogSeries series, int chunk) {
-    List<Object[]> rows = new ArrayList<>();
-    for (int q = TIMES; q < series.quantities().size(); q++) {
-      rows.add(new Object[] {readingId, q, chunk, series.rows(chunk), series.coded(chunk, q)});
-    }
+    List<Object[]> rows =
+        IntStream.range(TIMES, series.quantities().size())
+            .parallel()
+            .mapToObj(
+                q -> new Object[] {readingId, q, chunk, series.rows(chunk), series.coded(chunk, q)})
+            .toList();
     template.batchUpdate(
         """
         insert into series_chunks (reading_id, quantity, chunk, row_count, bytes)

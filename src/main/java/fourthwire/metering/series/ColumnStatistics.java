@@ -25,10 +25,41 @@ final class ColumnStatistics {
     void take(double v, int hour) {
       count++;
       sum += v;
-      min = Math.min(min, v);
-      max = Math.max(max, v);
+      min = v < min ? v : min;
+      max = v > max ? v : max;
       hourSum[hour] += v;
       hourCount[hour]++;
+    }
+
+    /**
+     * Takes values of one hour.
+     *
+     * @return how many were there
+     */
+    int take(double[] x, int from, int to, int hour, double[] there) {
+      int before = (int) count;
+      int n = before;
+      double total = sum;
+      double ofHour = hourSum[hour];
+      double low = min;
+      double high = max;
+      for (int k = from; k < to; k++) {
+        double v = x[k];
+        if (!Double.isNaN(v)) {
+          there[n++] = v;
+          total += v;
+          ofHour += v;
+          low = v < low ? v : low;
+          high = v > high ? v : high;
+        }
+      }
+      min = low;
+      max = high;
+      sum = total;
+      count = n;
+      hourSum[hour] = ofHour;
+      hourCount[hour] += n - before;
+      return n - before;
     }
 
     double[] hourMeans() {
@@ -64,21 +95,19 @@ final class ColumnStatistics {
   }
 
   QuantityStatistics inArray(int quantity) {
-    double[] there = new double[rows.week().length];
+    double[] there = new double[(int) series.rows()];
     Sums sums = new Sums();
     int[] end = new int[rows.weeks() + 1];
-    int row = 0;
-    for (int k = 0; k < series.chunks(); k++) {
-      for (double v : series.values(k, quantity)) {
-        if (!Double.isNaN(v)) {
-          there[(int) sums.count] = v;
-          sums.take(v, rows.hour()[row]);
-          end[rows.week()[row] + 1]++;
-        }
-        row++;
-      }
+    forEachStretch(
+        quantity,
+        (x, from, to, stretch) ->
+            end[rows.week()[stretch] + 1] +=
+                sums.take(x, from, to, rows.hour()[stretch], there));
+    for (int w = 1; w < end.length; w++) {
+      end[w] += end[w - 1];
     }
-    Weeks weeks = weeks(quantity, end);
+    // The weeks' values stand together in the file's order, unless the clock ran back over a week.
+    Weeks weeks = weeks(rows.rising() ? there : byWeek(quantity, end), end);
     double[] all =
         sums.count == 0
             ? new double[] {Double.NaN, Double.NaN}
@@ -86,22 +115,44 @@ final class ColumnStatistics {
     return statistics(sums, all, weeks);
   }
 
-  /** Values sorted into their weeks, the place of each known from the counts. */
-  private Weeks weeks(int quantity, int[] end) {
-    for (int w = 1; w < end.length; w++) {
-      end[w] += end[w - 1];
+  private interface Stretch {
+    void take(double[] values, int from, int to, int stretch);
+  }
+
+  /** Passes stretches of one hour on, cut where chunks end. */
+  private void forEachStretch(int quantity, Stretch taker) {
+    int stretch = 0;
+    int first = 0;
+    for (int k = 0; k < series.chunks(); k++) {
+      double[] x = series.values(k, quantity);
+      int from = 0;
+      while (from < x.length) {
+        int to = Math.min(x.length, rows.end()[stretch] - first);
+        taker.take(x, from, to, stretch);
+        stretch += first + to == rows.end()[stretch] ? 1 : 0;
+        from = to;
+      }
+      first += x.length;
     }
+  }
+
+  /** Values sorted into their weeks, the place of each known from the counts. */
+  private double[] byWeek(int quantity, int[] end) {
     int[] next = end.clone();
     double[] byWeek = new double[end[end.length - 1]];
-    int row = 0;
-    for (int k = 0; k < series.chunks(); k++) {
-      for (double v : series.values(k, quantity)) {
-        if (!Double.isNaN(v)) {
-          byWeek[next[rows.week()[row]]++] = v;
-        }
-        row++;
-      }
-    }
+    forEachStretch(
+        quantity,
+        (x, from, to, stretch) -> {
+          for (int k = from; k < to; k++) {
+            if (!Double.isNaN(x[k])) {
+              byWeek[next[rows.week()[stretch]]++] = x[k];
+            }
+          }
+        });
+    return byWeek;
+  }
+
+  private Weeks weeks(double[] byWeek, int[] end) {
     Weeks weeks = new Weeks(rows.weeks());
     for (int w = 0; w < rows.weeks(); w++) {
       weeks.take(w, byWeek, end[w], end[w + 1]);

@@ -6,27 +6,30 @@ import java.util.concurrent.CompletableFuture;
 import java.util.concurrent.Executor;
 
 /**
- * The rows of a log as read, in chunks, each column coded: to be gone through as often as needed,
- * in memory that does not grow with the log. Chunks are held decoded as long as they are few.
+ * The rows of a log as read, in chunks: to be gone through as often as needed, in memory that does
+ * not grow with the log. Chunks are held as numbers as long as they are few; once they are many each
+ * column is coded and filed.
  */
 public final class LogSeries implements AutoCloseable {
+  private static final int CODED_AHEAD = 3;
+
   private final List<String> quantities;
   private final Parts parts;
   private final long mostHeldValues;
-  private final List<Chunk> chunks = new ArrayList<>();
+  private final List<Integer> lengths = new ArrayList<>();
   private final List<LogChunk> held = new ArrayList<>();
-  private long rows;
-  private boolean holding = true;
 
-  /** A chunk: its rows and the numbers of its coded columns, the first that of the times. */
-  private record Chunk(int rows, CompletableFuture<int[]> columns) {}
+  /** Of each chunk that is filed the numbers of its coded columns, the first that of the times. */
+  private final List<CompletableFuture<int[]>> filed = new ArrayList<>();
+
+  private long rows;
 
   /**
    * An empty series.
    *
    * @param quantities names of its columns
    * @param parts takes the coded columns
-   * @param mostHeldValues how many values may be held decoded
+   * @param mostHeldValues how many values may be held as numbers
    */
   public LogSeries(List<String> quantities, Parts parts, long mostHeldValues) {
     this.quantities = List.copyOf(quantities);
@@ -37,21 +40,23 @@ public final class LogSeries implements AutoCloseable {
   /**
    * Adds rows behind those that are there.
    *
-   * @param worker codes the columns
+   * @param worker codes columns that are filed
    */
   public void add(LogChunk chunk, Executor worker) {
-    if (chunks.size() > 3) {
-      chunks.get(chunks.size() - 3).columns().join();
-    }
-    chunks.add(
-        new Chunk(chunk.rows(), CompletableFuture.supplyAsync(() -> encoded(chunk), worker)));
+    lengths.add(chunk.rows());
     rows += chunk.rows();
-    holding = holding && rows * quantities.size() <= mostHeldValues;
-    if (holding) {
-      held.add(chunk);
-    } else {
+    held.add(chunk);
+    if (!filed.isEmpty() || rows * quantities.size() > mostHeldValues) {
+      held.forEach(c -> file(c, worker));
       held.clear();
     }
+  }
+
+  private void file(LogChunk chunk, Executor worker) {
+    if (filed.size() > CODED_AHEAD) {
+      filed.get(filed.size() - CODED_AHEAD).join();
+    }
+    filed.add(CompletableFuture.supplyAsync(() -> encoded(chunk), worker));
   }
 
   private int[] encoded(LogChunk chunk) {
@@ -61,6 +66,10 @@ public final class LogSeries implements AutoCloseable {
       numbers[q + 1] = parts.add(ColumnCodec.encode(chunk.values()[q]));
     }
     return numbers;
+  }
+
+  private boolean holding() {
+    return filed.isEmpty();
   }
 
   /** Names of the columns. */
@@ -80,38 +89,44 @@ public final class LogSeries implements AutoCloseable {
 
   /** Chunks so far. */
   public int chunks() {
-    return chunks.size();
+    return lengths.size();
   }
 
   /** Rows of a chunk. */
   public int rows(int chunk) {
-    return chunks.get(chunk).rows();
+    return lengths.get(chunk);
   }
 
   /** When the rows of a chunk begin, milliseconds of the epoch; not to be changed. */
   public long[] startMillis(int chunk) {
-    return holding
+    return holding()
         ? held.get(chunk).startMillis()
         : ColumnCodec.decodeWhole(coded(chunk, -1), rows(chunk));
   }
 
   /** A quantity's values in a chunk; not to be changed. */
   public double[] values(int chunk, int quantity) {
-    return holding
+    return holding()
         ? held.get(chunk).values()[quantity]
         : ColumnCodec.decode(coded(chunk, quantity), rows(chunk));
   }
 
   /** A column of a chunk as it is stored; the times are quantity -1. */
   public byte[] coded(int chunk, int quantity) {
-    return parts.get(chunks.get(chunk).columns().join()[quantity + 1]);
+    if (!holding()) {
+      return parts.get(filed.get(chunk).join()[quantity + 1]);
+    }
+    LogChunk there = held.get(chunk);
+    return quantity < 0
+        ? ColumnCodec.encode(there.startMillis())
+        : ColumnCodec.encode(there.values()[quantity]);
   }
 
   /** All values of a quantity in one array; for logs whose rows an array holds. */
   public double[] all(int quantity) {
     double[] all = new double[Math.toIntExact(rows)];
     int at = 0;
-    for (int k = 0; k < chunks.size(); k++) {
+    for (int k = 0; k < chunks(); k++) {
       System.arraycopy(values(k, quantity), 0, all, at, rows(k));
       at += rows(k);
     }
@@ -121,7 +136,7 @@ public final class LogSeries implements AutoCloseable {
   /** Lets go of what it holds. */
   @Override
   public void close() {
-    chunks.forEach(c -> c.columns().exceptionally(e -> new int[0]).join());
+    filed.forEach(f -> f.exceptionally(e -> new int[0]).join());
     held.clear();
     parts.close();
   }

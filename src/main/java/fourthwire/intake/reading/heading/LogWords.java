@@ -4,7 +4,9 @@ import fourthwire.intake.reading.heading.Vocabulary.Sense;
 import java.text.Normalizer;
 import java.util.ArrayList;
 import java.util.EnumSet;
+import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.Set;
@@ -23,6 +25,25 @@ final class LogWords {
   private static final Pattern STANDING =
       Pattern.compile(
           "l[123]|l[123]l[123]|l[123]n|l?[123]-?[123n]|[123][123n]|[abcrstnyb]|[abc][abcn]|[rst][rstn]|ry|yb|br|[yb]n");
+  /** Phrases and what stands for them, one after the other. */
+  private static final Map<Pattern, String> PHRASES = new LinkedHashMap<>();
+
+  static {
+    phrase("\\p{M}", "");
+    phrase("[Σ∑]", " total ");
+    phrase("total\\s+harmonic\\s+dist(ortion|\\.)?", " thd ");
+    phrase("harmonic\\s+distortion", " thd ");
+    phrase("power[\\s_-]*factor", " pf ");
+    phrase("cos\\s*[-_(]?\\s*(phi|φ)\\s*\\)?", " cosphi ");
+    phrase("line[\\s-]+to[\\s-]+(line|neutral)", " ");
+    phrase("k[\\s-]factor", " kfactor ");
+    phrase("thd[\\s-]?f\\b", " thd ");
+    phrase("thd[\\s-]r\\b(?=.*\\d|.*[abc]\\b)", " thdr ");
+  }
+
+  private static final Pattern RMS =
+      Pattern.compile("(?i)[\\s_]*\\b(rms|trms|eff)\\b|(?<=[AV])rms");
+  private static final Pattern SHARE = Pattern.compile("%\\s*(?:of|von|de|d')?\\s*(.*)");
   private static final Pattern DIGITS = Pattern.compile("0?\\d{1,2}");
 
   private final Set<Sense> senses = EnumSet.noneOf(Sense.class);
@@ -37,6 +58,10 @@ final class LogWords {
 
   private LogWords(boolean lettered) {
     this.lettered = lettered;
+  }
+
+  private static void phrase(String pattern, String words) {
+    PHRASES.put(Pattern.compile(pattern, Pattern.CASE_INSENSITIVE), words);
   }
 
   /**
@@ -67,18 +92,12 @@ final class LogWords {
   /** Accents, subscripts and Greek letters as plain ones; phrases as one word. */
   private static String plain(String heading) {
     String text =
-        Normalizer.normalize(heading.replace('\u03C6', 'φ').replace("ϕ", "φ"), Normalizer.Form.NFKD)
-            .replaceAll("\\p{M}", "")
-            .replaceAll("[Σ∑]", " total ")
-            .replace('º', '°');
-    return text.replaceAll("(?i)total\\s+harmonic\\s+dist(ortion|\\.)?", " thd ")
-        .replaceAll("(?i)harmonic\\s+distortion", " thd ")
-        .replaceAll("(?i)power[\\s_-]*factor", " pf ")
-        .replaceAll("(?i)cos\\s*[-_(]?\\s*(phi|φ)\\s*\\)?", " cosphi ")
-        .replaceAll("(?i)line[\\s-]+to[\\s-]+(line|neutral)", " ")
-        .replaceAll("(?i)k[\\s-]factor", " kfactor ")
-        .replaceAll("(?i)thd[\\s-]?f\\b", " thd ")
-        .replaceAll("(?i)thd[\\s-]r\\b(?=.*\\d|.*[abc]\\b)", " thdr ");
+        Normalizer.normalize(heading.replace('ϕ', 'φ').replace('º', '°'), Normalizer.Form.NFKD);
+    for (Map.Entry<Pattern, String> phrase : PHRASES.entrySet()) {
+      Matcher m = phrase.getKey().matcher(text);
+      text = m.find() ? m.replaceAll(phrase.getValue()) : text;
+    }
+    return text;
   }
 
   /** The unit in brackets, or behind the last slash, taken off. */
@@ -99,8 +118,8 @@ final class LogWords {
 
   /** {@code kW}, {@code A rms}, {@code % of fundamental}, {@code %r}. */
   private boolean takeUnit(String text) {
-    String bare = text.replaceAll("(?i)[\\s_]*\\b(rms|trms|eff)\\b|(?<=[AV])rms", "").trim();
-    Matcher share = Pattern.compile("%\\s*(?:of|von|de|d')?\\s*(.*)").matcher(bare);
+    String bare = RMS.matcher(text).replaceAll("").trim();
+    Matcher share = SHARE.matcher(bare);
     if (share.matches()) {
       shareOf = share.group(1).toLowerCase(Locale.ROOT);
       bare = "%";

@@ -1,7 +1,8 @@
 package fourthwire.intake.reading.heading;
 
-import java.util.Arrays;
+import java.util.HashMap;
 import java.util.Locale;
+import java.util.Map;
 import java.util.Optional;
 
 /** Units that columns come in, with the factor to the base unit of their kind. */
@@ -41,6 +42,16 @@ enum Unit {
     FREQUENCY
   }
 
+  private static final Map<String, Unit> BY_WORD = new HashMap<>();
+
+  static {
+    for (Unit unit : values()) {
+      for (String word : unit.words) {
+        BY_WORD.put(word, unit);
+      }
+    }
+  }
+
   private final Kind kind;
   private final double factor;
   private final String[] words;
@@ -59,12 +70,10 @@ enum Unit {
     return factor;
   }
 
+  /** The unit of this name; mW and mVA of a building are none, only MW and MVA. */
   static Optional<Unit> find(String text) {
-    String word = text.trim().toLowerCase(Locale.ROOT);
-    return Arrays.stream(values())
-        .filter(u -> Arrays.asList(u.words).contains(word))
-        // mW and mVA of a building are no milliwatts, but MW and mW differ by a letter's case.
-        .filter(u -> u.factor != 1e6 || text.trim().startsWith("M"))
-        .findFirst();
+    String name = text.trim();
+    return Optional.ofNullable(BY_WORD.get(name.toLowerCase(Locale.ROOT)))
+        .filter(u -> u.factor != 1e6 || name.startsWith("M"));
   }
 }

@@ -12,6 +12,8 @@ final class ParsedRows {
   /** What is told of each kind of trouble. */
   static final int TOLD = 3;
 
+  private static final int FIRST_ROWS = 256;
+
   private static final Pattern SUMMARY =
       Pattern.compile(
           "(?i)\\W*(min|max|avg|average|mean|total|sum|summe|std|stdev|p\\d\\d|median|mittel|moy"
@@ -22,8 +24,8 @@ final class ParsedRows {
   private final List<Trouble> unreadable = new ArrayList<>();
   private final List<Trouble> passedOver = new ArrayList<>();
   private final List<Trouble> timeless = new ArrayList<>();
-  private long[] localMillis = new long[1024];
-  private int[] offsetSeconds = new int[1024];
+  private long[] localMillis = new long[FIRST_ROWS];
+  private int[] offsetSeconds = new int[FIRST_ROWS];
   private double[][] values;
   private int rows;
   private long fileRows;
@@ -36,7 +38,7 @@ final class ParsedRows {
   private ParsedRows(LogColumns columns) {
     this.columns = columns;
     this.time = new RowTime(columns.time(), columns.order());
-    this.values = new double[columns.count()][1024];
+    this.values = new double[columns.count()][FIRST_ROWS];
   }
 
   static ParsedRows of(TextTable.RowBlock block, LogColumns columns) {

@@ -6,7 +6,8 @@ import java.util.Arrays;
 
 /** Reads bytes in blocks that end where a row ends. */
 final class Blocks {
-  private static final int SIZE = 1 << 20;
+  /** Small enough to stay near the processor and, for the collector, an array like any other. */
+  private static final int SIZE = 1 << 18;
   private static final int LONGEST_ROW = 1 << 20;
 
   private final InputStream in;

@@ -62,7 +62,7 @@ record CellTime(Numerals date, long nanoOfDay, OptionalInt offsetSeconds) {
   }
 
   private static boolean couldBeTime(String cell) {
-    if (cell.length() < 4 || cell.length() > 60 || cell.length() < 8 && Numbers.isPlain(cell)) {
+    if (cell.length() < 4 || cell.length() > 60 || isNumber(cell)) {
       return false;
     }
     int digits = 0;
@@ -73,6 +73,13 @@ record CellTime(Numerals date, long nanoOfDay, OptionalInt offsetSeconds) {
       mark = mark || ":/-. ".indexOf(c) >= 0 && k > 0;
     }
     return digits > 2 && (mark || digits >= 8);
+  }
+
+  /** A plain number; digits alone are one while they are too few for a date. */
+  private static boolean isNumber(String cell) {
+    boolean signed = cell.charAt(0) == '-';
+    return Numbers.isPlain(signed ? cell.substring(1) : cell)
+        && (cell.length() < 8 || signed || cell.indexOf('.') >= 0 || cell.indexOf(',') >= 0);
   }
 
   /** What this text says; empty where it is no date with or without a time of day. */

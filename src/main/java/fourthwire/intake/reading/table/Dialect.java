@@ -51,7 +51,7 @@ record Dialect(
 
   private static List<Line> lines(byte[] head, int length, char separator, Charset charset) {
     List<Line> lines = new ArrayList<>();
-    RowCutter cutter = new RowCutter(separator, charset);
+    RowCutter cutter = new RowCutter(separator, charset, false);
     int at = 0;
     int cells = 0;
     for (long row = 1; at < length && lines.size() < MOST_ROWS && cells < MOST_CELLS; row++) {

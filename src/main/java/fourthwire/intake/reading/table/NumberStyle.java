@@ -36,6 +36,29 @@ record NumberStyle(boolean decimalComma, List<Integer> openColumns) {
     private int small;
 
     void take(String cell) {
+      if (Numbers.isPlain(cell)) {
+        takePlain(cell, Math.max(cell.indexOf(','), cell.indexOf('.')));
+      } else {
+        takeOther(cell);
+      }
+    }
+
+    /** Digits with at most one mark between them. */
+    private void takePlain(String cell, int mark) {
+      int behind = cell.length() - 1 - mark;
+      boolean isComma = mark >= 0 && cell.charAt(mark) == ',';
+      if (mark < 0) {
+        small += cell.length() <= 3 ? 1 : 0;
+      } else if (mark >= 1 && mark <= 3 && behind == 3 && cell.charAt(0) != '0') {
+        threeByComma += isComma ? 1 : 0;
+        threeByPoint += isComma ? 0 : 1;
+      } else if (behind > 0) {
+        comma += isComma && mark > 0 ? 1 : 0;
+        point += isComma ? 0 : 1;
+      }
+    }
+
+    private void takeOther(String cell) {
       boolean twoGroups = TWO_GROUPS.matcher(cell).matches();
       if (THREE_BY_COMMA.matcher(cell).matches()) {
         threeByComma++;

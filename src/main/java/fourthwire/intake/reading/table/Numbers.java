@@ -78,6 +78,9 @@ final class Numbers {
           "not available",
           "not measured");
 
+  /** More digits than a double holds exactly in every case. */
+  static final int MOST_DIGITS = 15;
+
   /** Signs alone, in any number: {@code -}, {@code ----}, {@code ***}, {@code ?}. */
   private static final Pattern SIGNS = Pattern.compile("[-–—*?.#_/\\s]*");
 
@@ -110,21 +113,29 @@ final class Numbers {
   private Numbers() {}
 
   /**
-   * The number in these bytes times ten to the power of {@code shift}.
-   *
-   * <p>Up to 15 digits the result is one exact division or product, hence correctly rounded
-   * (Clinger, 1990); anything longer or stranger takes the slow way.
+   * The number in these bytes times ten to the power of {@code shift}: at once where it is plain
+   * digits with blanks around them, anything longer or stranger the slow way.
    */
   static double parse(
       byte[] text, int from, int to, Charset charset, boolean decimalComma, int shift) {
     byte mark = (byte) (decimalComma ? ',' : '.');
     int k = from;
-    boolean negative = k < to && text[k] == '-';
+    int end = to;
+    while (k < end && text[k] == ' ') {
+      k++;
+    }
+    while (end > k && text[end - 1] == ' ') {
+      end--;
+    }
+    if (k == end) {
+      return BLANK;
+    }
+    boolean negative = text[k] == '-';
     k += negative ? 1 : 0;
     long digits = 0;
     int first = k;
     int point = -1;
-    for (; k < to; k++) {
+    for (; k < end; k++) {
       int digit = text[k] - '0';
       if (digit >= 0 && digit <= 9) {
         digits = 10 * digits + digit;
@@ -135,18 +146,16 @@ final class Numbers {
       }
     }
     int count = k - first - (point < 0 ? 0 : 1);
-    if (from == to) {
-      return BLANK;
-    }
-    if (count == 0 || count > 15) {
-      return slow(text(text, from, to, charset), decimalComma, shift);
-    }
-    int decimals = (point < 0 ? 0 : k - point - 1) - shift;
-    double value = scaled(digits, decimals);
-    return negative && digits != 0 ? -value : value;
+    return count == 0 || count > MOST_DIGITS
+        ? slow(text(text, from, to, charset), decimalComma, shift)
+        : scaled(negative ? -digits : digits, (point < 0 ? 0 : k - point - 1) - shift);
   }
 
-  private static double scaled(long digits, int decimals) {
+  /**
+   * Digits with so many of them decimals: up to 15 digits one exact division or product, hence
+   * correctly rounded (Clinger, 1990).
+   */
+  static double scaled(long digits, int decimals) {
     if (decimals > 22 || decimals < -22) {
       return new BigDecimal(digits).scaleByPowerOfTen(-decimals).doubleValue();
     }

@@ -7,23 +7,34 @@ import java.util.List;
 
 /**
  * Cuts bytes into rows and cells (RFC 4180, with any separator of one ASCII character): one row at
- * a time, as positions in the bytes themselves, so that reading makes no object for a cell.
+ * a time, as positions in the bytes themselves, so that reading makes no object for a cell. Digits
+ * are added up on the way, so that a plain number is known when its end is found.
  *
  * <p>A blank as the separator stands for any number of blanks: columns that were lined up.
  */
 final class RowCutter {
   private static final byte QUOTE = '"';
 
+  /** A cell that is no plain number. */
+  private static final byte STRANGE = -1;
+
   private final byte separator;
   private final Charset charset;
+  private final boolean decimalComma;
+  private final byte mark;
   private byte[] bytes = new byte[0];
   private int[] start = new int[256];
   private int[] end = new int[256];
+  private long[] digits = new long[256];
+  private byte[] decimals = new byte[256];
   private int cells;
 
-  RowCutter(char separator, Charset charset) {
+  RowCutter(char separator, Charset charset, boolean decimalComma) {
     this.separator = (byte) separator;
     this.charset = charset;
+    this.decimalComma = decimalComma;
+    // A comma that separates cells is a decimal comma within quotes only.
+    this.mark = (byte) (!decimalComma ? '.' : separator == ',' ? 0 : ',');
   }
 
   /**
@@ -73,16 +84,37 @@ final class RowCutter {
 
   private int plain(int from, int to) {
     byte[] b = bytes;
-    byte s = separator;
-    int at = from;
+    int at = from < to && b[from] == '-' ? from + 1 : from;
+    int first = at;
+    int point = -1;
+    long sum = 0;
     while (at < to) {
-      byte c = b[at];
-      if (c == s || c == '\n' || c == '\r') {
+      int digit = b[at] - '0';
+      if (digit >= 0 && digit <= 9) {
+        sum = 10 * sum + digit;
+      } else if (b[at] == mark && point < 0) {
+        point = at;
+      } else {
         break;
       }
       at++;
     }
-    add(from, at);
+    int count = at - first - (point < 0 ? 0 : 1);
+    int end = rest(b, at, to);
+    add(from, end);
+    if (end == at && count > 0 && count <= Numbers.MOST_DIGITS) {
+      digits[cells - 1] = first == from ? sum : -sum;
+      decimals[cells - 1] = (byte) (point < 0 ? 0 : at - point - 1);
+    }
+    return end;
+  }
+
+  /** Passes over what is left of a cell. */
+  private int rest(byte[] b, int from, int to) {
+    int at = from;
+    while (at < to && b[at] != separator && b[at] != '\n' && b[at] != '\r') {
+      at++;
+    }
     return at;
   }
 
@@ -93,19 +125,18 @@ final class RowCutter {
       at += bytes[at] == QUOTE ? 2 : 1;
     }
     add(from + 1, Math.min(at, to));
-    at++;
-    while (at < to && bytes[at] != separator && bytes[at] != '\n' && bytes[at] != '\r') {
-      at++;
-    }
-    return Math.min(at, to);
+    return Math.min(rest(bytes, at + 1, to), to);
   }
 
   private void add(int from, int to) {
     if (cells == start.length) {
       start = Arrays.copyOf(start, 2 * cells);
       end = Arrays.copyOf(end, 2 * cells);
+      digits = Arrays.copyOf(digits, 2 * cells);
+      decimals = Arrays.copyOf(decimals, 2 * cells);
     }
     start[cells] = from;
+    decimals[cells] = STRANGE;
     end[cells++] = to;
   }
 
@@ -179,9 +210,12 @@ final class RowCutter {
   }
 
   /** A cell as a number times ten to the power of {@code shift}. */
-  double number(int cell, boolean decimalComma, int shift) {
-    return cell < cells
+  double number(int cell, int shift) {
+    if (cell >= cells) {
+      return Numbers.BLANK;
+    }
+    return decimals[cell] == STRANGE
         ? Numbers.parse(bytes, start[cell], end[cell], charset, decimalComma, shift)
-        : Numbers.BLANK;
+        : Numbers.scaled(digits[cell], decimals[cell] - shift);
   }
 }

@@ -3,15 +3,13 @@ package fourthwire.intake.reading.table;
 /** Goes through blocks of rows and shows each row. */
 final class RowWalk implements TextTable.Row {
   private final RowCutter cutter;
-  private final boolean decimalComma;
   private long number;
 
   /**
    * @param before rows of the file before the first block
    */
-  RowWalk(RowCutter cutter, boolean decimalComma, long before) {
+  RowWalk(RowCutter cutter, long before) {
     this.cutter = cutter;
-    this.decimalComma = decimalComma;
     this.number = before;
   }
 
@@ -50,6 +48,6 @@ final class RowWalk implements TextTable.Row {
 
   @Override
   public double value(int column, int shift) {
-    return cutter.number(column, decimalComma, shift);
+    return cutter.number(column, shift);
   }
 }

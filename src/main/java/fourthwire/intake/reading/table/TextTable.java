@@ -129,7 +129,7 @@ public final class TextTable {
   public void forEach(Visitor visitor) {
     try (InputStream in = open()) {
       Blocks blocks = blocks(in);
-      RowWalk walk = new RowWalk(cutter(), dialect.numbers().decimalComma(), 0);
+      RowWalk walk = new RowWalk(cutter(), 0);
       for (Blocks.Block b = blocks.next(); b.length() > 0; b = blocks.next()) {
         if (!walk.through(b, dialect.firstData(), visitor)) {
           return;
@@ -193,7 +193,7 @@ public final class TextTable {
 
     /** Passes its rows by; returns how many rows it has, empty ones and headings counted. */
     public long forEach(Visitor visitor) {
-      RowWalk walk = new RowWalk(cutter(), dialect.numbers().decimalComma(), 0);
+      RowWalk walk = new RowWalk(cutter(), 0);
       walk.through(block, first, visitor);
       return walk.number();
     }
@@ -217,6 +217,7 @@ public final class TextTable {
   }
 
   private RowCutter cutter() {
-    return new RowCutter(dialect.separator(), encoding.charset());
+    return new RowCutter(
+        dialect.separator(), encoding.charset(), dialect.numbers().decimalComma());
   }
 }

@@ -61,11 +61,15 @@ public final class SampledColumns {
   }
 
   static double percentile(double[] x, double percent) {
-    double[] there =
-        Arrays.stream(x).filter(v -> !Double.isNaN(v)).map(Math::abs).sorted().toArray();
-    return there.length == 0
-        ? Double.NaN
-        : there[(int) Math.round((there.length - 1) * percent / 100)];
+    double[] there = new double[x.length];
+    int count = 0;
+    for (double v : x) {
+      if (!Double.isNaN(v)) {
+        there[count++] = Math.abs(v);
+      }
+    }
+    Arrays.sort(there, 0, count);
+    return count == 0 ? Double.NaN : there[(int) Math.round((count - 1) * percent / 100)];
   }
 
   static double[] product(double[] a, double[] b) {

@@ -2,7 +2,9 @@ package fourthwire.intake.reading.log;
 
 import fourthwire.intake.reading.ReadingPlan;
 import fourthwire.intake.reading.ReadingSetting;
-import fourthwire.intake.reading.upload.FormatReader;
+import fourthwire.intake.reading.format.Mappings;
+import fourthwire.intake.reading.table.TextTable;
+import fourthwire.intake.reading.table.TimeColumns;
 import fourthwire.metering.RawFile;
 import fourthwire.metering.ReadingMapping;
 import fourthwire.metering.series.LogSeries;
@@ -64,29 +66,31 @@ final class LogBenchmark {
 
   private void run(String out) throws IOException {
     long t0 = now();
-    ReadingPlan plan = new FormatReader().plan(List.of(raw), setting);
+    TextTable table = TextTable.of(() -> open(raw));
+    TimeColumns time = TimeColumns.find(table);
+    ReadingMapping mapping =
+        new LogFormat(table, time, raw.length())
+            .plan(setting, "", new Mappings(Optional.empty(), ReadingPlan.Confidence.GIVEN))
+            .mapping();
     long t1 = now();
     ExecutorService workers = Executors.newFixedThreadPool(2);
-    try (LogSeries series = read(raw, plan.mapping(), workers)) {
+    LogColumns columns = new LogColumns(table, time, mapping);
+    long mostHeld = Runtime.getRuntime().maxMemory() / 4 / 8;
+    try (LogSeries series = new LogSeries(columns.quantities(), new SpilledParts(), mostHeld)) {
+      new LogRows(table, columns, mapping, series, workers)
+          .read(new RowProgress((share, message) -> true, raw.length(), System::nanoTime));
       long t2 = now();
       SeriesStatistics statistics = SeriesStatistics.of(series, ZoneId.of("Europe/Amsterdam"));
       long t3 = now();
       write(out, series, statistics);
-      long coded = coded(series);
       System.out.printf(
-          "cpu %.2f ",
-          ((com.sun.management.OperatingSystemMXBean)
-                      java.lang.management.ManagementFactory.getOperatingSystemMXBean())
-                  .getProcessCpuTime()
-              / 1e9);
-      System.out.printf(
-          "rows %d plan %.2f read %.2f compute %.2f write %.2f; coded %.1f MB%n",
+          "rows %d; processor seconds: start %.2f plan %.2f read %.2f compute %.2f write %.2f%n",
           series.rows(),
+          t0 / 1e9,
           (t1 - t0) / 1e9,
           (t2 - t1) / 1e9,
           (t3 - t2) / 1e9,
-          (now() - t3) / 1e9,
-          coded / 1e6);
+          (now() - t3) / 1e9);
     } finally {
       workers.shutdown();
     }
@@ -99,34 +103,12 @@ final class LogBenchmark {
         .getProcessCpuTime();
   }
 
-  private static LogSeries read(RawFile raw, ReadingMapping mapping, ExecutorService workers) {
-    var table = fourthwire.intake.reading.table.TextTable.of(() -> open(raw));
-    var time = fourthwire.intake.reading.table.TimeColumns.named(table, mapping.time().columns());
-    LogColumns columns = new LogColumns(table, time, mapping);
-    LogSeries series =
-        new LogSeries(
-            columns.quantities(), new SpilledParts(), Runtime.getRuntime().maxMemory() / 4 / 8);
-    new LogRows(table, columns, mapping, series, workers)
-        .read(new RowProgress((share, message) -> true, raw.length(), System::nanoTime));
-    return series;
-  }
-
   private static InputStream open(RawFile raw) {
     try {
       return raw.open();
     } catch (IOException e) {
       throw new java.io.UncheckedIOException(e);
     }
-  }
-
-  private static long coded(LogSeries series) {
-    long bytes = 0;
-    for (int k = 0; k < series.chunks(); k++) {
-      for (int q = -1; q < series.quantities().size(); q++) {
-        bytes += series.coded(k, q).length;
-      }
-    }
-    return bytes;
   }
 
   private static void write(String out, LogSeries series, SeriesStatistics all) throws IOException {
