@@ -101,8 +101,7 @@ final class ColumnStatistics {
     forEachStretch(
         quantity,
         (x, from, to, stretch) ->
-            end[rows.week()[stretch] + 1] +=
-                sums.take(x, from, to, rows.hour()[stretch], there));
+            end[rows.week()[stretch] + 1] += sums.take(x, from, to, rows.hour()[stretch], there));
     for (int w = 1; w < end.length; w++) {
       end[w] += end[w - 1];
     }

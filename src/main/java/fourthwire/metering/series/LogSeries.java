@@ -7,8 +7,8 @@ import java.util.concurrent.Executor;
 
 /**
  * The rows of a log as read, in chunks: to be gone through as often as needed, in memory that does
- * not grow with the log. Chunks are held as numbers as long as they are few; once they are many each
- * column is coded and filed.
+ * not grow with the log. Chunks are held as numbers as long as they are few; once they are many
+ * each column is coded and filed.
  */
 public final class LogSeries implements AutoCloseable {
   private static final int CODED_AHEAD = 3;

@@ -4,8 +4,8 @@ import java.time.ZoneId;
 import java.util.Arrays;
 
 /**
- * In which week and hour of the week the rows are, found once for all columns: stretches of rows
- * of the same hour.
+ * In which week and hour of the week the rows are, found once for all columns: stretches of rows of
+ * the same hour.
  *
  * @param end row after each stretch's last; empty where the rows are too many to be held
  * @param week of each stretch, counted from the first
@@ -25,9 +25,7 @@ record RowWeeks(long firstWeek, int weeks, int[] end, short[] week, short[] hour
       }
     }
     Stretches found = new Stretches(first, (int) Math.min(Short.MAX_VALUE, last - first + 1));
-    for (int k = 0;
-        series.rows() <= SeriesStatistics.MOST_IN_ARRAY && k < series.chunks();
-        k++) {
+    for (int k = 0; series.rows() <= SeriesStatistics.MOST_IN_ARRAY && k < series.chunks(); k++) {
       for (long millis : series.startMillis(k)) {
         found.take(clock.week(millis), clock.hourOfWeek(millis));
       }

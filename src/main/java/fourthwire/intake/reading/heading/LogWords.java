@@ -6,8 +6,8 @@ import java.util.ArrayList;
 import java.util.EnumSet;
 import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.Map;
 import java.util.Locale;
+import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
 import java.util.regex.Matcher;
@@ -25,6 +25,7 @@ final class LogWords {
   private static final Pattern STANDING =
       Pattern.compile(
           "l[123]|l[123]l[123]|l[123]n|l?[123]-?[123n]|[123][123n]|[abcrstnyb]|[abc][abcn]|[rst][rstn]|ry|yb|br|[yb]n");
+
   /** Phrases and what stands for them, one after the other. */
   private static final Map<Pattern, String> PHRASES = new LinkedHashMap<>();
 

@@ -8,6 +8,7 @@ import java.util.Arrays;
 final class Blocks {
   /** Small enough to stay near the processor and, for the collector, an array like any other. */
   private static final int SIZE = 1 << 18;
+
   private static final int LONGEST_ROW = 1 << 20;
 
   private final InputStream in;

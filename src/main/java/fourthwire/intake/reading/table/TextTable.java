@@ -217,7 +217,6 @@ public final class TextTable {
   }
 
   private RowCutter cutter() {
-    return new RowCutter(
-        dialect.separator(), encoding.charset(), dialect.numbers().decimalComma());
+    return new RowCutter(dialect.separator(), encoding.charset(), dialect.numbers().decimalComma());
   }
 }
