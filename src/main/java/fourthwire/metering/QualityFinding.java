@@ -1,5 +1,6 @@
 package fourthwire.metering;
 
+import java.util.List;
 import java.util.Optional;
 
 /**
@@ -9,8 +10,24 @@ import java.util.Optional;
  * @param period when; empty where it holds for the whole reading
  * @param effect what it does to the figures, one sentence
  * @param sentence what was seen, with the figures, one sentence
+ * @param corrections what would mend it, the likeliest first; none where nothing can
  */
-public record QualityFinding(String code, Optional<Period> period, String effect, String sentence) {
+public record QualityFinding(
+    String code,
+    Optional<Period> period,
+    String effect,
+    String sentence,
+    List<Correction> corrections) {
+  /** Copies the list. */
+  public QualityFinding {
+    corrections = List.copyOf(corrections);
+  }
+
+  /** One that nothing can mend. */
+  public QualityFinding(String code, Optional<Period> period, String effect, String sentence) {
+    this(code, period, effect, sentence, List.of());
+  }
+
   /** The channel or column taken as the neutral is not the sum of the line currents. */
   public static final String NEUTRAL_NOT_SUM = "neutral-not-sum-of-lines";
 

@@ -25,9 +25,13 @@ final class ConductorRelations implements DayCheck {
   private static final int FEWEST_ROWS = 4;
 
   private final FlaggedDays flagged = new FlaggedDays();
+  private final List<String> names;
+  private final List<String> neutralCurrents;
   private final Map<String, Map<Integer, Integer>> harmonics = new LinkedHashMap<>();
 
   ConductorRelations(List<String> names) {
+    this.names = names;
+    this.neutralCurrents = names.stream().filter(n -> n.matches("N\\.(rms_a|current_).*")).toList();
     for (int q = 0; q < names.size(); q++) {
       Matcher m = HARMONIC.matcher(names.get(q));
       if (m.matches()) {
@@ -49,8 +53,14 @@ final class ConductorRelations implements DayCheck {
     harmonics.forEach((key, orders) -> harmonics(day, key, orders));
   }
 
-  private void flag(LogDay day, String code, String subject, String effect, String sentence) {
-    flagged.add(day, new FlaggedDays.Fault(code, subject, effect, sentence));
+  private void flag(
+      LogDay day,
+      String code,
+      String subject,
+      String effect,
+      String sentence,
+      Offers.Of corrections) {
+    flagged.add(day, new FlaggedDays.Fault(code, subject, effect, sentence, corrections));
   }
 
   /** For any waveforms the rms of a sum lies between the largest less the rest, and the sum. */
@@ -94,7 +104,8 @@ final class ConductorRelations implements DayCheck {
                       + " %d rows of the day, below what they must leave in %d.",
                   above,
                   there,
-                  below));
+                  below),
+          rows -> List.of(Offers.leaveOut(neutralCurrents, rows)));
     }
   }
 
@@ -135,7 +146,8 @@ final class ConductorRelations implements DayCheck {
                 Locale.ROOT,
                 "Volts of %s are %.3g times those of the other lines (median of the day).",
                 LineDay.LINES[k],
-                usual[k] / others));
+                usual[k] / others),
+            scaled(List.of(LineDay.LINES[k] + ".rms_v"), usual[k] / others));
       }
     }
     Optional<double[]> pair = day.find("L1-L2.rms_v");
@@ -150,9 +162,14 @@ final class ConductorRelations implements DayCheck {
             String.format(
                 Locale.ROOT,
                 "Volts between lines are %.3g times those to the neutral, not about 1.73.",
-                ratio));
+                ratio),
+            rows -> List.of());
       }
     }
+  }
+
+  private static Offers.Of scaled(List<String> quantities, double ratio) {
+    return rows -> List.of(Offers.scale(quantities, ratio, rows));
   }
 
   private void harmonics(LogDay day, String key, Map<Integer, Integer> orders) {
@@ -204,8 +221,19 @@ final class ConductorRelations implements DayCheck {
                   + " ratio, a line under another's name, or an average-responding instrument.",
               current ? "current" : "voltage",
               place,
-              ratio));
+              ratio),
+          rows ->
+              List.of(
+                  Offers.scale(List.of(place + (current ? ".rms_a" : ".rms_v")), ratio, rows),
+                  Offers.scale(ordersOf(place, current), 1 / ratio, rows)));
     }
+  }
+
+  private List<String> ordersOf(String place, boolean current) {
+    String start = place + (current ? ".current_h" : ".voltage_h");
+    return names.stream()
+        .filter(n -> n.startsWith(start) && n.endsWith(current ? "_a" : "_v"))
+        .toList();
   }
 
   /** The distortion logged against the one that the harmonics make. */
@@ -244,7 +272,8 @@ final class ConductorRelations implements DayCheck {
                   + " day): it is averaged otherwise, or taken on another base than the"
                   + " fundamental.",
               measured,
-              ratio));
+              ratio),
+          rows -> List.of(Offers.formDistortion(measured + "_thd_percent", rows)));
     }
   }
 

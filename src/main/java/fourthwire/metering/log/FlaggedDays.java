@@ -1,5 +1,6 @@
 package fourthwire.metering.log;
 
+import fourthwire.metering.Correction;
 import fourthwire.metering.Period;
 import fourthwire.metering.QualityFinding;
 import java.time.Duration;
@@ -20,34 +21,38 @@ final class FlaggedDays {
   private final Map<String, List<Stretch>> byFault = new LinkedHashMap<>();
 
   /** What one day shows of a fault. */
-  record Fault(String code, String subject, String effect, String sentence) {}
+  record Fault(
+      String code, String subject, String effect, String sentence, Offers.Of corrections) {}
 
   private static final class Stretch {
     final Fault fault;
     final Instant from;
-    Instant to;
+    final long fromRow;
+    Instant to = Instant.MIN;
+    long toRow;
 
-    Stretch(Fault fault, Instant from, Instant to) {
+    Stretch(Fault fault, LogDay day) {
       this.fault = fault;
-      this.from = from;
-      this.to = to;
+      this.from = day.from().isBefore(day.to()) ? day.from() : day.to();
+      this.fromRow = day.firstRow();
+      add(day);
+    }
+
+    void add(LogDay day) {
+      to = day.to().isAfter(to) ? day.to() : to;
+      toRow = day.firstRow() + day.rows();
     }
   }
 
-  /** A fault of a whole day. */
+  /** A fault of a whole day; the first sentence of joined days is told. */
   void add(LogDay day, Fault fault) {
-    add(day.from(), day.to(), fault);
-  }
-
-  /** A fault of a stretch of time; the first sentence of joined stretches is told. */
-  void add(Instant from, Instant to, Fault fault) {
     List<Stretch> all =
         byFault.computeIfAbsent(fault.code() + fault.subject(), key -> new ArrayList<>());
     Stretch last = all.isEmpty() ? null : all.get(all.size() - 1);
-    if (last != null && !from.isAfter(last.to.plus(APART))) {
-      last.to = to.isAfter(last.to) ? to : last.to;
+    if (last != null && !day.from().isAfter(last.to.plus(APART))) {
+      last.add(day);
     } else {
-      all.add(new Stretch(fault, from.isBefore(to) ? from : to, to));
+      all.add(new Stretch(fault, day));
     }
   }
 
@@ -60,7 +65,8 @@ final class FlaggedDays {
                 s.fault.code(),
                 Optional.of(new Period(s.from, s.to)),
                 s.fault.effect(),
-                s.fault.sentence()));
+                s.fault.sentence(),
+                s.fault.corrections().rows(new Correction.Rows(s.fromRow, s.toRow))));
       }
     }
     return findings;

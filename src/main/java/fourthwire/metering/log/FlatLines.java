@@ -3,11 +3,13 @@ package fourthwire.metering.log;
 import static fourthwire.metering.QualityFinding.FLAT_LINE;
 
 import fourthwire.metering.Amount;
+import fourthwire.metering.Correction;
 import fourthwire.metering.Period;
 import fourthwire.metering.QualityFinding;
 import java.time.Instant;
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.Comparator;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
@@ -27,6 +29,11 @@ final class FlatLines implements DayCheck {
   private static final int LEVELS = 128;
   private static final double CHANCE = 1e-8;
 
+  private static final int SEVERAL = 3;
+
+  /** Rows by which columns that stand still together may differ. */
+  private static final long BY_CHANCE = 3;
+
   /** A quantity that moves by a digit or two at a time may well rest on one value. */
   private static final double FEW_STEPS = 2.5;
 
@@ -41,10 +48,12 @@ final class FlatLines implements DayCheck {
     private double leastStep = Double.MAX_VALUE;
     private long runRows;
     private long runFrom;
+    private long runFromRow;
+    private long lastRow;
     private long last;
   }
 
-  private record Run(double value, long rows, long from, long to) {}
+  private record Run(double value, long rows, long from, long to, Correction.Rows in) {}
 
   FlatLines(List<String> names) {
     this.names = names;
@@ -80,11 +89,13 @@ final class FlatLines implements DayCheck {
         c.before = v;
         c.runRows = 1;
         c.runFrom = at;
+        c.runFromRow = day.firstRow() + row;
       }
       if (!Double.isNaN(c.before)) {
         (moved > FEW_STEPS * c.leastStep ? c.moved : c.rested)[level(v)]++;
       }
       c.last = at;
+      c.lastRow = day.firstRow() + row;
     }
   }
 
@@ -108,27 +119,70 @@ final class FlatLines implements DayCheck {
     // A load that is off reads nothing for hours; an interruption is no fault of the meter.
     boolean lasting = c.runRows >= FEWEST_ROWS && to - c.runFrom >= SHORTEST_MILLIS;
     if (lasting && c.before != 0 && !Double.isNaN(c.before) && c.runs.size() < MOST_RUNS) {
-      c.runs.add(new Run(c.before, c.runRows, c.runFrom, Math.max(c.runFrom, to)));
+      c.runs.add(
+          new Run(
+              c.before,
+              c.runRows,
+              c.runFrom,
+              Math.max(c.runFrom, to),
+              new Correction.Rows(c.runFromRow, c.lastRow + 1)));
     }
   }
 
   @Override
   public List<QualityFinding> findings() {
-    Map<String, List<String>> together = new LinkedHashMap<>();
-    Map<String, Run> runs = new LinkedHashMap<>();
+    Map<Correction.Rows, List<String>> together = new LinkedHashMap<>();
+    Map<Correction.Rows, Run> runs = new LinkedHashMap<>();
     for (int q = 0; q < columns.length; q++) {
       endRun(columns[q], 0);
       for (Run run : columns[q].runs) {
         if (isFault(columns[q], run)) {
-          String key = run.from() + " " + run.to();
-          together.computeIfAbsent(key, k -> new ArrayList<>()).add(names.get(q));
-          runs.putIfAbsent(key, run);
+          together.computeIfAbsent(run.in(), k -> new ArrayList<>()).add(names.get(q));
+          runs.putIfAbsent(run.in(), run);
         }
       }
     }
     List<QualityFinding> findings = new ArrayList<>();
-    together.forEach((key, all) -> findings.add(finding(runs.get(key), all)));
+    joined(together)
+        .forEach((rows, all) -> findings.add(finding(runs.get(rows), withAlike(rows, all))));
     return findings;
+  }
+
+  /** Where several stand still, one that alone might rest by chance does not. */
+  private List<String> withAlike(Correction.Rows rows, List<String> all) {
+    List<String> still = new ArrayList<>(all);
+    for (int q = 0; q < columns.length && all.size() >= SEVERAL; q++) {
+      boolean rests = columns[q].runs.stream().anyMatch(run -> covers(run.in(), rows));
+      if (rests && !all.contains(names.get(q))) {
+        still.add(names.get(q));
+      }
+    }
+    return still;
+  }
+
+  /** Where a meter stands still, a column that rested a row longer by chance is one of them. */
+  private static Map<Correction.Rows, List<String>> joined(
+      Map<Correction.Rows, List<String>> together) {
+    Map<Correction.Rows, List<String>> joined = new LinkedHashMap<>();
+    together.forEach(
+        (rows, all) ->
+            joined
+                .computeIfAbsent(
+                    together.keySet().stream()
+                        .filter(other -> isNear(rows, other))
+                        .max(Comparator.comparingInt(other -> together.get(other).size()))
+                        .orElse(rows),
+                    k -> new ArrayList<>())
+                .addAll(all));
+    return joined;
+  }
+
+  private static boolean covers(Correction.Rows a, Correction.Rows b) {
+    return a.from() <= b.from() + BY_CHANCE && a.to() >= b.to() - BY_CHANCE;
+  }
+
+  private static boolean isNear(Correction.Rows a, Correction.Rows b) {
+    return Math.abs(a.from() - b.from()) <= BY_CHANCE && Math.abs(a.to() - b.to()) <= BY_CHANCE;
   }
 
   /** Other rows at this level, or where there are few all others, tell how often it moves. */
@@ -155,6 +209,7 @@ final class FlatLines implements DayCheck {
         FLAT_LINE,
         Optional.of(new Period(Instant.ofEpochMilli(run.from()), Instant.ofEpochMilli(run.to()))),
         "The instrument repeated its last value: nothing is known of this time.",
-        String.format(Locale.ROOT, "%s for %d rows.", what, run.rows()));
+        String.format(Locale.ROOT, "%s for %d rows.", what, run.rows()),
+        List.of(Offers.leaveOut(names, run.in())));
   }
 }

@@ -4,6 +4,7 @@ import static fourthwire.metering.QualityFinding.IMPOSSIBLE_VALUE;
 import static fourthwire.metering.QualityFinding.MISSING_VALUES;
 
 import fourthwire.metering.Amount;
+import fourthwire.metering.Correction;
 import fourthwire.metering.Period;
 import fourthwire.metering.QualityFinding;
 import fourthwire.metering.series.QuantityStatistics;
@@ -24,19 +25,60 @@ final class ImpossibleValues implements DayCheck {
   private final Seen[] seen;
   private final Seen blank = new Seen();
 
+  /** Stretches of rows told one by one where bounds do not part what can be from what can't. */
+  private static final int MOST_STRETCHES = 200;
+
   private static final class Seen {
+    private final List<Correction.Rows> stretches = new ArrayList<>();
+    private double low = Double.POSITIVE_INFINITY;
+    private double high = Double.NEGATIVE_INFINITY;
+    private double highestBelow = Double.NEGATIVE_INFINITY;
+    private double lowestAbove = Double.POSITIVE_INFINITY;
     private long count;
     private double example;
     private Instant from = Instant.MAX;
     private Instant to = Instant.MIN;
 
-    void take(LogDay day, int row, double value) {
+    /**
+     * A value that can't be.
+     *
+     * @param usual a value that can be
+     */
+    void take(LogDay day, int row, double value, double usual) {
       Instant at = Instant.ofEpochMilli(day.startMillis(row));
       Instant end = at.plusMillis(day.intervalMillis());
       example = count == 0 ? value : example;
       count++;
       from = at.isBefore(from) ? at : from;
       to = end.isAfter(to) ? end : to;
+      highestBelow = value < usual ? Math.max(highestBelow, value) : highestBelow;
+      lowestAbove = value > usual ? Math.min(lowestAbove, value) : lowestAbove;
+      note(day.firstRow() + row);
+    }
+
+    private void note(long row) {
+      int last = stretches.size() - 1;
+      if (last >= 0 && stretches.get(last).to() == row) {
+        stretches.set(last, new Correction.Rows(stretches.get(last).from(), row + 1));
+      } else if (last < MOST_STRETCHES) {
+        stretches.add(new Correction.Rows(row, row + 1));
+      }
+    }
+
+    /** A value that can be. */
+    void keep(double value) {
+      low = Math.min(low, value);
+      high = Math.max(high, value);
+    }
+
+    /** By bounds where they part what can be from what can't, else row by row where these are few. */
+    List<Correction> corrections(String quantity) {
+      if (highestBelow < low && lowestAbove > high) {
+        return low > high ? List.of() : List.of(Offers.keepWithin(quantity, low, high));
+      }
+      return stretches.size() < MOST_STRETCHES
+          ? List.of(Offers.leaveOut(quantity, stretches))
+          : List.of();
     }
   }
 
@@ -57,14 +99,17 @@ final class ImpossibleValues implements DayCheck {
       double[] x = day.of(q);
       values += x.length;
       Bounds bounds = bounds(q, x);
+      boolean[] wrong = againstOthers(day, q, x);
+      double usual = statistics.get(q).p95();
       for (int row = 0; row < x.length; row++) {
         if (Double.isNaN(x[row])) {
-          blank.take(day, row, Double.NaN);
-        } else if (!bounds.holds(x, row)) {
-          seen[q].take(day, row, x[row]);
+          blank.take(day, row, Double.NaN, Double.NaN);
+        } else if (wrong[row] || !bounds.holds(x, row)) {
+          seen[q].take(day, row, x[row], usual);
+        } else {
+          seen[q].keep(x[row]);
         }
       }
-      againstOthers(day, q, x);
     }
   }
 
@@ -113,7 +158,8 @@ final class ImpossibleValues implements DayCheck {
   }
 
   /** A mean lies between its lowest and highest; no volts where amps and watts flow. */
-  private void againstOthers(LogDay day, int q, double[] x) {
+  private boolean[] againstOthers(LogDay day, int q, double[] x) {
+    boolean[] wrong = new boolean[x.length];
     String name = names.get(q);
     Optional<double[]> low = day.find(name + ".min");
     Optional<double[]> high = day.find(name + ".max");
@@ -121,24 +167,22 @@ final class ImpossibleValues implements DayCheck {
       double slack = 1e-6 + 0.002 * Math.abs(x[row]);
       boolean below = low.isPresent() && x[row] < low.get()[row] - slack;
       boolean above = high.isPresent() && x[row] > high.get()[row] + slack;
-      if (below || above) {
-        seen[q].take(day, row, x[row]);
-      }
+      wrong[row] = below || above;
     }
     if (name.matches("L[123]\\.rms_v")) {
-      dead(day, q, x, name.substring(0, 2));
+      dead(day, q, x, wrong);
     }
+    return wrong;
   }
 
-  private void dead(LogDay day, int q, double[] volts, String line) {
+  private void dead(LogDay day, int q, double[] volts, boolean[] wrong) {
+    String line = names.get(q).substring(0, 2);
     Optional<double[]> amps = day.find(line + ".rms_a");
     double usual = statistics.get(q).p95();
     int a = names.indexOf(line + ".rms_a");
     for (int row = 0; row < volts.length && amps.isPresent(); row++) {
       boolean flows = amps.get()[row] > 0.2 * statistics.get(a).p95();
-      if (volts[row] >= 0 && volts[row] < 0.05 * usual && flows) {
-        seen[q].take(day, row, volts[row]);
-      }
+      wrong[row] |= volts[row] >= 0 && volts[row] < 0.05 * usual && flows;
     }
   }
 
@@ -159,7 +203,8 @@ final class ImpossibleValues implements DayCheck {
                     names.get(q),
                     s.count,
                     s.count == 1 ? "value" : "values",
-                    Amount.read(s.example, names.get(q)))));
+                    Amount.read(s.example, names.get(q))),
+                s.corrections(names.get(q))));
       }
     }
     if (blank.count > 0) {
@@ -172,12 +217,15 @@ final class ImpossibleValues implements DayCheck {
                   Locale.ROOT,
                   "%d of %d values are blank or marked as not measured.",
                   blank.count,
-                  values)));
+                  values),
+              List.of()));
     }
     return findings;
   }
 
-  private static QualityFinding finding(String code, Seen s, String effect, String sentence) {
-    return new QualityFinding(code, Optional.of(new Period(s.from, s.to)), effect, sentence);
+  private static QualityFinding finding(
+      String code, Seen s, String effect, String sentence, List<Correction> corrections) {
+    return new QualityFinding(
+        code, Optional.of(new Period(s.from, s.to)), effect, sentence, corrections);
   }
 }

@@ -15,6 +15,18 @@ import org.jspecify.annotations.Nullable;
 final class KeyRows {
   private static final String NEUTRAL = "N.rms_a";
 
+  /** The columns that choose the rows. */
+  static final List<String> COLUMNS =
+      List.of(
+          NEUTRAL,
+          "L1.rms_a",
+          "L2.rms_a",
+          "L3.rms_a",
+          "total.active_w",
+          "L1.active_w",
+          "L2.active_w",
+          "L3.active_w");
+
   private final Peak current = new Peak();
   private final Peak power = new Peak();
   private boolean neutral;

@@ -73,15 +73,6 @@ public final class LogAnalysis {
       long intervalMillis,
       List<String> notes,
       List<QualityFinding> quality) {
-    Map<String, QuantitySummary> quantities = new LinkedHashMap<>();
-    for (int q = 0; q < series.quantities().size(); q++) {
-      QuantityStatistics s = statistics.quantities().get(q);
-      if (s.count() > 0) {
-        quantities.put(
-            series.quantities().get(q),
-            new QuantitySummary(s.count(), s.min(), s.mean(), s.max(), s.p95(), s.p99()));
-      }
-    }
     return new Reading(
         ReadingKind.LOG,
         Optional.of(
@@ -94,9 +85,23 @@ public final class LogAnalysis {
         Optional.of(
             new LogResult(
                 Duration.ofMillis(intervalMillis),
-                quantities,
+                summaries(series.quantities(), statistics),
                 key.found(),
                 Optional.of(new LogResult.Detail(series, statistics)))),
         Optional.empty());
+  }
+
+  /** Statistics by quantity, without those that have no value. */
+  static Map<String, QuantitySummary> summaries(List<String> names, SeriesStatistics statistics) {
+    Map<String, QuantitySummary> quantities = new LinkedHashMap<>();
+    for (int q = 0; q < names.size(); q++) {
+      QuantityStatistics s = statistics.quantities().get(q);
+      if (s.count() > 0) {
+        quantities.put(
+            names.get(q),
+            new QuantitySummary(s.count(), s.min(), s.mean(), s.max(), s.p95(), s.p99()));
+      }
+    }
+    return quantities;
   }
 }

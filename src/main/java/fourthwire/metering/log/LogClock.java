@@ -4,6 +4,7 @@ import static fourthwire.metering.QualityFinding.CLOCK_JUMP;
 import static fourthwire.metering.QualityFinding.GAP;
 import static fourthwire.metering.QualityFinding.REPEATED_ROWS;
 
+import fourthwire.metering.Correction;
 import fourthwire.metering.Period;
 import fourthwire.metering.QualityFinding;
 import java.time.Duration;
@@ -35,6 +36,8 @@ final class LogClock implements DayCheck {
     private int different;
     private long from;
     private long to;
+    private long fromRow;
+    private long toRow;
   }
 
   private record Gap(long from, long to) {
@@ -81,7 +84,8 @@ final class LogClock implements DayCheck {
               + words(-step)
               + " after row "
               + (day.firstRow() + row)
-              + " of the data.");
+              + " of the data.",
+          Offers.shift(interval - step, day.firstRow() + row));
     } else if (off > interval / 10) {
       jump(
           before,
@@ -93,16 +97,23 @@ final class LogClock implements DayCheck {
               + words(step)
               + ", no multiple of the interval of "
               + words(interval)
-              + ": the clock was set, or the logging began anew.");
+              + ": the clock was set, or the logging began anew.",
+          Offers.shift(onGrid(step, interval) - step, day.firstRow() + row));
     }
     if (step - interval > interval / 2) {
       gap(new Gap(before + interval, at));
     }
   }
 
-  private void jump(long from, long to, String effect, String sentence) {
+  /** The nearest step of whole intervals. */
+  private static long onGrid(long step, long interval) {
+    return interval * Math.max(1, Math.round((double) step / interval));
+  }
+
+  private void jump(
+      long from, long to, String effect, String sentence, List<Correction> corrections) {
     if (jumps.size() < MOST_JUMPS) {
-      jumps.add(finding(CLOCK_JUMP, from, to, effect, sentence));
+      jumps.add(finding(CLOCK_JUMP, from, to, effect, sentence, corrections));
     }
   }
 
@@ -120,8 +131,11 @@ final class LogClock implements DayCheck {
     boolean alike = java.util.Arrays.equals(row(day, row), row > 0 ? row(day, row - 1) : rowBefore);
     run.same += alike ? 1 : 0;
     run.different += alike ? 0 : 1;
-    run.from = run.same + run.different == 1 ? at : run.from;
+    boolean begins = run.same + run.different == 1;
+    run.from = begins ? at : run.from;
+    run.fromRow = begins ? day.firstRow() + row : run.fromRow;
     run.to = at + day.intervalMillis();
+    run.toRow = day.firstRow() + row + 1;
   }
 
   @Override
@@ -135,7 +149,8 @@ final class LogClock implements DayCheck {
               gap.from(),
               gap.to(),
               "Nothing is known of this time; it counts in no statistic.",
-              "No rows for " + words(gap.length()) + "."));
+              "No rows for " + words(gap.length()) + ".",
+              List.of()));
     }
     if (gapCount > MOST_GAPS) {
       all.add(
@@ -144,7 +159,8 @@ final class LogClock implements DayCheck {
               first,
               before,
               "Nothing is known of these times; they count in no statistic.",
-              gapCount + " gaps in all, " + words(missing) + " together; the longest are listed."));
+              gapCount + " gaps in all, " + words(missing) + " together; the longest are listed.",
+              List.of()));
     }
     if (run.same + run.different > 0) {
       all.add(
@@ -159,13 +175,19 @@ final class LogClock implements DayCheck {
                       + " others.",
                   run.same + run.different,
                   run.same,
-                  run.different)));
+                  run.different),
+              List.of(Offers.dropRepeats(new Correction.Rows(run.fromRow, run.toRow)))));
     }
     return all;
   }
 
   private static QualityFinding finding(
-      String code, long from, long to, String effect, String sentence) {
+      String code,
+      long from,
+      long to,
+      String effect,
+      String sentence,
+      List<Correction> corrections) {
     return new QualityFinding(
         code,
         Optional.of(
@@ -173,7 +195,8 @@ final class LogClock implements DayCheck {
                 Instant.ofEpochMilli(Math.min(from, to)),
                 Instant.ofEpochMilli(Math.max(from, to)))),
         effect,
-        sentence);
+        sentence,
+        corrections);
   }
 
   /** A length in the largest unit that leaves it readable. */

@@ -1,6 +1,6 @@
 package fourthwire.metering.log;
 
-import fourthwire.metering.series.LogSeries;
+import fourthwire.metering.series.Series;
 import fourthwire.metering.series.WeekClock;
 import java.time.ZoneId;
 import java.util.Arrays;
@@ -11,7 +11,7 @@ final class LogDays {
   /** A day of more rows is passed on in parts. */
   private static final int MOST_ROWS = 20_000;
 
-  private final LogSeries series;
+  private final Series series;
   private final WeekClock clock;
   private final long intervalMillis;
   private final Consumer<LogDay> taker;
@@ -20,7 +20,7 @@ final class LogDays {
   private int rows;
   private long passed;
 
-  private LogDays(LogSeries series, ZoneId zone, long intervalMillis, Consumer<LogDay> taker) {
+  private LogDays(Series series, ZoneId zone, long intervalMillis, Consumer<LogDay> taker) {
     this.series = series;
     this.clock = new WeekClock(zone);
     this.intervalMillis = intervalMillis;
@@ -28,7 +28,7 @@ final class LogDays {
     this.values = new double[series.quantities().size()][256];
   }
 
-  static void forEach(LogSeries series, ZoneId zone, long intervalMillis, Consumer<LogDay> taker) {
+  static void forEach(Series series, ZoneId zone, long intervalMillis, Consumer<LogDay> taker) {
     LogDays days = new LogDays(series, zone, intervalMillis, taker);
     for (int k = 0; k < series.chunks(); k++) {
       days.take(k);

@@ -1,10 +1,11 @@
 package fourthwire.metering.log;
 
 import static fourthwire.metering.QualityFinding.REVERSED_CLAMP;
-import static fourthwire.metering.QualityFinding.SWAPPED_LINES;
 import static fourthwire.metering.QualityFinding.WRONG_RATIO;
 
+import fourthwire.metering.Correction;
 import fourthwire.metering.QualityFinding;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
@@ -17,16 +18,16 @@ import java.util.Optional;
  */
 final class PowerRelations implements DayCheck {
   private static final int FEWEST_ROWS = 4;
-  private static final int[][] ORDERS = {{1, 0, 2}, {0, 2, 1}, {2, 1, 0}, {1, 2, 0}, {2, 0, 1}};
 
   private final FlaggedDays flagged = new FlaggedDays();
+  private final LineOrder order = new LineOrder(flagged);
 
   @Override
   public void take(LogDay day) {
     if (day.rows() < FEWEST_ROWS) {
       return;
     }
-    if (swapped(day) || crossed(day)) {
+    if (order.isWrong(day)) {
       return;
     }
     boolean[] turned = new boolean[3];
@@ -45,11 +46,16 @@ final class PowerRelations implements DayCheck {
   }
 
   private static boolean mostlyNegative(LogDay day, String line) {
-    Optional<double[]> watts =
-        day.find(line + ".active_w").or(() -> day.find(line + ".power_factor"));
+    return negative(
+        day.find(line + ".active_w")
+            .or(() -> day.find(line + ".power_factor"))
+            .orElse(new double[0]));
+  }
+
+  private static boolean negative(double[] values) {
     int negative = 0;
     int there = 0;
-    for (double p : watts.orElse(new double[0])) {
+    for (double p : values) {
       there += Double.isNaN(p) || p == 0 ? 0 : 1;
       negative += p < 0 ? 1 : 0;
     }
@@ -57,6 +63,18 @@ final class PowerRelations implements DayCheck {
   }
 
   private void reversed(LogDay day, String line, boolean all) {
+    Offers offers = new Offers(day.quantities());
+    List<String> turned =
+        offers
+            .logged(
+                line + ".active_w",
+                line + ".power_factor",
+                line + ".displacement_factor",
+                line + ".reactive_var")
+            .stream()
+            .filter(q -> negative(day.find(q).orElseThrow()))
+            .toList();
+    boolean follows = totalIsSum(day);
     flagged.add(
         day,
         new FlaggedDays.Fault(
@@ -70,7 +88,25 @@ final class PowerRelations implements DayCheck {
                 + (all
                     ? ", as on all lines: all clamps point the wrong way, or the site feeds power"
                         + " back."
-                    : ": its clamp points the wrong way, or this line feeds power back.")));
+                    : ": its clamp points the wrong way, or this line feeds power back."),
+            rows -> List.of(offers.turn(turned, follows, rows))));
+  }
+
+  /** Whether the total was formed from the lines as they stand. */
+  static boolean totalIsSum(LogDay day) {
+    Optional<double[]> total = day.find("total.active_w");
+    Optional<double[][]> lines = new LineDay(day).all("active_w");
+    if (total.isEmpty() || lines.isEmpty()) {
+      return false;
+    }
+    double[][] p = lines.get();
+    double off =
+        Rows.median(
+            day.rows(),
+            k ->
+                Math.abs(total.get()[k] - p[0][k] - p[1][k] - p[2][k])
+                    / (Math.abs(p[0][k]) + Math.abs(p[1][k]) + Math.abs(p[2][k])));
+    return off < 0.02;
   }
 
   /** How far the median of a ratio may stand from one. */
@@ -110,7 +146,7 @@ final class PowerRelations implements DayCheck {
   }
 
   /** Rows of next to no current have no ratio: their digits are too few. */
-  private static double median(double[] amps, java.util.function.IntToDoubleFunction ratio) {
+  static double median(double[] amps, java.util.function.IntToDoubleFunction ratio) {
     double least = 0.1 * Rows.median(amps);
     return Rows.median(amps.length, k -> amps[k] > least ? ratio.applyAsDouble(k) : Double.NaN);
   }
@@ -131,8 +167,41 @@ final class PowerRelations implements DayCheck {
                   which,
                   line,
                   median,
-                  of)));
+                  of),
+              rows -> rescaled(day, line, which, median, rows)));
     }
+  }
+
+  /** The power where the ratio is a prefix of its unit; else the amps, or the power. */
+  private static List<Correction> rescaled(
+      LogDay day, String line, String which, double median, Correction.Rows rows) {
+    Offers offers = new Offers(day.quantities());
+    List<String> power =
+        offers.logged(line + (which.equals("Active") ? ".active_w" : ".apparent_va"));
+    Correction ofPower = Offers.scale(power, median, rows);
+    List<String> amps = new ArrayList<>(List.of(line + ".rms_a"));
+    day.quantities().stream()
+        .filter(q -> q.matches(line + "\\.current_h\\d+_a") && harmonicsAgree(day, line))
+        .forEach(amps::add);
+    return isPrefix(median)
+        ? List.of(ofPower)
+        : List.of(Offers.scale(amps, 1 / median, rows), ofPower);
+  }
+
+  private static boolean isPrefix(double ratio) {
+    double likely = Offers.likely(ratio);
+    return likely >= 1000 || likely <= 0.001;
+  }
+
+  /** Whether amps and fundamental are of one ratio. */
+  private static boolean harmonicsAgree(LogDay day, String line) {
+    Optional<double[]> first = day.find(line + ".current_h1_a");
+    Optional<double[]> amps = day.find(line + ".rms_a");
+    if (first.isEmpty() || amps.isEmpty()) {
+      return true;
+    }
+    double ratio = Rows.median(day.rows(), k -> first.get()[k] / amps.get()[k]);
+    return ratio > 0.6 && ratio < 1.05;
   }
 
   private void total(LogDay day) {
@@ -156,147 +225,18 @@ final class PowerRelations implements DayCheck {
                       Locale.ROOT,
                       "The total of %s is %.3g times the sum of the lines (median of the day).",
                       measure,
-                      median)));
+                      median),
+                  rows -> totalled(measure, median, rows)));
         }
       }
     }
   }
 
-  /** Amps, volts or watts fit each other far better in another order of the lines. */
-  private boolean swapped(LogDay day) {
-    LineDay lines = new LineDay(day);
-    Optional<double[][]> amps = lines.all("rms_a");
-    Optional<double[][]> volts = lines.all("rms_v");
-    Optional<double[][]> power = lines.all("apparent_va");
-    Optional<double[][]> factor = lines.all("power_factor");
-    if (amps.isEmpty() || volts.isEmpty()) {
-      return false;
+  private static List<Correction> totalled(String measure, double ratio, Correction.Rows rows) {
+    if (isPrefix(ratio)) {
+      return List.of(Offers.scale(List.of("total." + measure), ratio, rows));
     }
-    double[][] expected =
-        power.orElseGet(
-            () ->
-                lines
-                    .all("active_w")
-                    .filter(p -> factor.isPresent())
-                    .map(p -> quotient(p, factor.get()))
-                    .orElse(new double[0][]));
-    if (expected.length == 0) {
-      return false;
-    }
-    return swapped(
-            day, "currents", order -> misfit(expected, volts.get(), amps.get(), order, false))
-        || swapped(
-            day, "voltages", order -> misfit(expected, volts.get(), amps.get(), order, true));
-  }
-
-  private static double[][] quotient(double[][] p, double[][] factor) {
-    double[][] s = new double[p.length][];
-    for (int k = 0; k < p.length; k++) {
-      int line = k;
-      s[k] = new double[p[k].length];
-      java.util.Arrays.setAll(s[k], row -> Math.abs(p[line][row] / factor[line][row]));
-    }
-    return s;
-  }
-
-  /** How badly an order of the lines fits; NaN where nothing is known. */
-  private interface Misfit {
-    double of(int[] order);
-  }
-
-  private boolean swapped(LogDay day, String what, Misfit misfit) {
-    double straight = misfit.of(new int[] {0, 1, 2});
-    int[] best = ORDERS[0];
-    for (int[] order : ORDERS) {
-      best = misfit.of(order) < misfit.of(best) ? order : best;
-    }
-    boolean wrong = straight > 0.0015 && misfit.of(best) < straight / 3 && misfit.of(best) < 0.03;
-    if (wrong) {
-      int[] order = best;
-      flagged.add(
-          day,
-          new FlaggedDays.Fault(
-              SWAPPED_LINES,
-              what,
-              "Figures of single lines belong to other lines; sums are right.",
-              String.format(
-                  Locale.ROOT,
-                  "The %s under L1, L2 and L3 fit the powers as those of %s, %s and %s: lines stand"
-                      + " under each other's names.",
-                  what,
-                  LineDay.LINES[order[0]],
-                  LineDay.LINES[order[1]],
-                  LineDay.LINES[order[2]])));
-    }
-    return wrong;
-  }
-
-  private static double misfit(
-      double[][] expected, double[][] volts, double[][] amps, int[] order, boolean voltsMoved) {
-    double sum = 0;
-    for (int line = 0; line < 3; line++) {
-      double[] v = volts[voltsMoved ? order[line] : line];
-      double[] a = amps[voltsMoved ? line : order[line]];
-      double[] s = expected[line];
-      sum += Rows.median(s.length, k -> s[k] > 0 ? Math.abs(v[k] * a[k] / s[k] - 1) : Double.NaN);
-    }
-    return sum / 3;
-  }
-
-  /**
-   * Clamps of two lines on each other's conductors: the instrument then takes each current against
-   * a voltage a third of a cycle away, and finds V·I·cos(120° + φ) and V·I·cos(120° - φ).
-   */
-  private boolean crossed(LogDay day) {
-    LineDay lines = new LineDay(day);
-    Optional<double[][]> watts = lines.all("active_w");
-    Optional<double[][]> amps = lines.all("rms_a");
-    Optional<double[][]> volts = lines.all("rms_v");
-    if (watts.isEmpty() || amps.isEmpty() || volts.isEmpty()) {
-      return false;
-    }
-    double[] cosine = new double[3];
-    for (int line = 0; line < 3; line++) {
-      int k = line;
-      cosine[k] =
-          median(
-              amps.get()[k],
-              row -> watts.get()[k][row] / (volts.get()[k][row] * amps.get()[k][row]));
-    }
-    for (int straight = 0; straight < 3; straight++) {
-      int a = (straight + 1) % 3;
-      int b = (straight + 2) % 3;
-      if (cosine[straight] > 0.7
-          && isCrossed(cosine[a], cosine[b], Math.acos(Math.min(1, cosine[straight])))) {
-        String pair = LineDay.LINES[Math.min(a, b)] + " and " + LineDay.LINES[Math.max(a, b)];
-        flagged.add(
-            day,
-            new FlaggedDays.Fault(
-                SWAPPED_LINES,
-                pair,
-                "Powers and power factors of these lines are wrong.",
-                String.format(
-                    Locale.ROOT,
-                    "Active powers of %s are %.2f and %.2f of their volts times amps, of %s %.2f:"
-                        + " the clamps of %s stand on each other's conductors.",
-                    pair,
-                    cosine[Math.min(a, b)],
-                    cosine[Math.max(a, b)],
-                    LineDay.LINES[straight],
-                    cosine[straight],
-                    pair)));
-        return true;
-      }
-    }
-    return false;
-  }
-
-  private static boolean isCrossed(double one, double other, double angle) {
-    double third = 2 * Math.PI / 3;
-    double low = Math.cos(third + angle);
-    double high = Math.cos(third - angle);
-    return Math.abs(Math.min(one, other) - Math.min(low, high)) < 0.15
-        && Math.abs(Math.max(one, other) - Math.max(low, high)) < 0.15;
+    return measure.equals("active_w") ? List.of(Offers.sum(measure, rows)) : List.of();
   }
 
   @Override

@@ -5,10 +5,10 @@ import java.util.Arrays;
 
 /** Statistics of one column, in one array where it fits, else in passes over the chunks. */
 final class ColumnStatistics {
-  private final LogSeries series;
+  private final Series series;
   private final RowWeeks rows;
 
-  ColumnStatistics(LogSeries series, RowWeeks rows) {
+  ColumnStatistics(Series series, RowWeeks rows) {
     this.series = series;
     this.rows = rows;
   }

@@ -10,7 +10,7 @@ import java.util.concurrent.Executor;
  * not grow with the log. Chunks are held as numbers as long as they are few; once they are many
  * each column is coded and filed.
  */
-public final class LogSeries implements AutoCloseable {
+public final class LogSeries implements Series, AutoCloseable {
   private static final int CODED_AHEAD = 3;
 
   private final List<String> quantities;
@@ -73,31 +73,31 @@ public final class LogSeries implements AutoCloseable {
   }
 
   /** Names of the columns. */
+  @Override
   public List<String> quantities() {
     return quantities;
   }
 
-  /** Position of a quantity; -1 where it is not logged. */
-  public int indexOf(String quantity) {
-    return quantities.indexOf(quantity);
-  }
-
   /** Rows, repeated ones included. */
+  @Override
   public long rows() {
     return rows;
   }
 
   /** Chunks so far. */
+  @Override
   public int chunks() {
     return lengths.size();
   }
 
   /** Rows of a chunk. */
+  @Override
   public int rows(int chunk) {
     return lengths.get(chunk);
   }
 
   /** When the rows of a chunk begin, milliseconds of the epoch; not to be changed. */
+  @Override
   public long[] startMillis(int chunk) {
     return holding()
         ? held.get(chunk).startMillis()
@@ -105,6 +105,7 @@ public final class LogSeries implements AutoCloseable {
   }
 
   /** A quantity's values in a chunk; not to be changed. */
+  @Override
   public double[] values(int chunk, int quantity) {
     return holding()
         ? held.get(chunk).values()[quantity]

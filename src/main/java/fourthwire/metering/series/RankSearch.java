@@ -7,10 +7,10 @@ package fourthwire.metering.series;
 final class RankSearch {
   private static final int STEP = 16;
 
-  private final LogSeries series;
+  private final Series series;
   private final int quantity;
 
-  RankSearch(LogSeries series, int quantity) {
+  RankSearch(Series series, int quantity) {
     this.series = series;
     this.quantity = quantity;
   }

@@ -13,7 +13,7 @@ import java.util.Arrays;
  * @param rising whether no week comes again once the next has begun
  */
 record RowWeeks(long firstWeek, int weeks, int[] end, short[] week, short[] hour, boolean rising) {
-  static RowWeeks of(LogSeries series, ZoneId zone) {
+  static RowWeeks of(Series series, ZoneId zone) {
     WeekClock clock = new WeekClock(zone);
     long first = Long.MAX_VALUE;
     long last = Long.MIN_VALUE;

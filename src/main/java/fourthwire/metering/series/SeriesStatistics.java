@@ -2,6 +2,8 @@ package fourthwire.metering.series;
 
 import java.time.ZoneId;
 import java.util.List;
+import java.util.Optional;
+import java.util.function.IntFunction;
 import java.util.stream.IntStream;
 
 /**
@@ -15,14 +17,28 @@ public record SeriesStatistics(long firstWeek, int weeks, List<QuantityStatistic
   static final int MOST_IN_ARRAY = 4_000_000;
 
   /** Of all rows; the quantities are shared among the processors. */
-  public static SeriesStatistics of(LogSeries series, ZoneId zone) {
+  public static SeriesStatistics of(Series series, ZoneId zone) {
+    return of(series, zone, q -> Optional.empty());
+  }
+
+  /**
+   * Likewise, where those of some columns are known.
+   *
+   * @param known of a column by its position; its rows must be the same and at the same times
+   */
+  public static SeriesStatistics of(
+      Series series, ZoneId zone, IntFunction<Optional<QuantityStatistics>> known) {
     RowWeeks rows = RowWeeks.of(series, zone);
     boolean inArray = series.rows() <= MOST_IN_ARRAY;
     ColumnStatistics column = new ColumnStatistics(series, rows);
     List<QuantityStatistics> all =
         IntStream.range(0, series.quantities().size())
             .parallel()
-            .mapToObj(q -> inArray ? column.inArray(q) : column.inPasses(q, zone))
+            .mapToObj(
+                q ->
+                    known
+                        .apply(q)
+                        .orElseGet(() -> inArray ? column.inArray(q) : column.inPasses(q, zone)))
             .toList();
     return new SeriesStatistics(rows.firstWeek(), rows.weeks(), all);
   }

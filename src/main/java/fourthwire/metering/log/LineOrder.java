@@ -1,0 +1,226 @@
+package fourthwire.metering.log;
+
+import static fourthwire.metering.QualityFinding.SWAPPED_LINES;
+
+import fourthwire.metering.Correction;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+
+/**
+ * Lines under each other's names, day by day: amps or volts that fit the powers in another order,
+ * clamps on each other's conductors. Thresholds are common practice, no source.
+ */
+final class LineOrder {
+  private static final int[][] ORDERS = {{1, 0, 2}, {0, 2, 1}, {2, 1, 0}, {1, 2, 0}, {2, 0, 1}};
+
+  private final FlaggedDays flagged;
+
+  LineOrder(FlaggedDays flagged) {
+    this.flagged = flagged;
+  }
+
+  /** Whether they are; what was found is flagged. */
+  boolean isWrong(LogDay day) {
+    return swapped(day) || crossed(day);
+  }
+
+  /** Amps, volts or watts fit each other far better in another order of the lines. */
+  private boolean swapped(LogDay day) {
+    LineDay lines = new LineDay(day);
+    Optional<double[][]> amps = lines.all("rms_a");
+    Optional<double[][]> volts = lines.all("rms_v");
+    Optional<double[][]> power = lines.all("apparent_va");
+    Optional<double[][]> factor = lines.all("power_factor");
+    if (amps.isEmpty() || volts.isEmpty()) {
+      return false;
+    }
+    double[][] expected =
+        power.orElseGet(
+            () ->
+                lines
+                    .all("active_w")
+                    .filter(p -> factor.isPresent())
+                    .map(p -> quotient(p, factor.get()))
+                    .orElse(new double[0][]));
+    if (expected.length == 0) {
+      return false;
+    }
+    return swapped(
+            day, "currents", order -> misfit(expected, volts.get(), amps.get(), order, false))
+        || swapped(
+            day, "voltages", order -> misfit(expected, volts.get(), amps.get(), order, true));
+  }
+
+  private static double[][] quotient(double[][] p, double[][] factor) {
+    double[][] s = new double[p.length][];
+    for (int k = 0; k < p.length; k++) {
+      int line = k;
+      s[k] = new double[p[k].length];
+      java.util.Arrays.setAll(s[k], row -> Math.abs(p[line][row] / factor[line][row]));
+    }
+    return s;
+  }
+
+  /** How badly an order of the lines fits; NaN where nothing is known. */
+  private interface Misfit {
+    double of(int[] order);
+  }
+
+  private boolean swapped(LogDay day, String what, Misfit misfit) {
+    double straight = misfit.of(new int[] {0, 1, 2});
+    int[] best = ORDERS[0];
+    for (int[] order : ORDERS) {
+      best = misfit.of(order) < misfit.of(best) ? order : best;
+    }
+    boolean wrong = straight > 0.0015 && misfit.of(best) < straight / 3 && misfit.of(best) < 0.03;
+    if (wrong) {
+      int[] order = best;
+      flagged.add(
+          day,
+          new FlaggedDays.Fault(
+              SWAPPED_LINES,
+              what,
+              "Figures of single lines belong to other lines; sums are right.",
+              String.format(
+                  Locale.ROOT,
+                  "The %s under L1, L2 and L3 fit the powers as those of %s, %s and %s: lines stand"
+                      + " under each other's names.",
+                  what,
+                  LineDay.LINES[order[0]],
+                  LineDay.LINES[order[1]],
+                  LineDay.LINES[order[2]]),
+              rows -> List.of(reordered(day, what.equals("currents"), order, rows))));
+    }
+    return wrong;
+  }
+
+  private static Correction reordered(
+      LogDay day, boolean currents, int[] order, Correction.Rows rows) {
+    Offers offers = new Offers(day.quantities());
+    String rms = currents ? "rms_a" : "rms_v";
+    String first = currents ? "current_h1_a" : "voltage_h1_v";
+    boolean all = moveTogether(new LineDay(day), rms, first, order);
+    List<String> measures =
+        all ? offers.measures(rms, currents ? "current_" : "voltage_") : offers.measures(rms);
+    return Correction.of(
+        Offers.exchanged(order)
+            + (all ? " (" + (currents ? "currents" : "voltages") : " (" + rms)
+            + ")",
+        offers.reorder(order, measures, rows));
+  }
+
+  /** Whether the harmonics stand under the same names as the rms: then they move with it. */
+  private static boolean moveTogether(LineDay lines, String rms, String first, int[] order) {
+    Optional<double[][]> totals = lines.all(rms);
+    Optional<double[][]> fundamentals = lines.all(first);
+    if (totals.isEmpty() || fundamentals.isEmpty()) {
+      return true;
+    }
+    double straight = 0;
+    double moved = 0;
+    for (int line = 0; line < order.length; line++) {
+      double[] h = fundamentals.get()[line];
+      double[] same = totals.get()[line];
+      double[] other = totals.get()[order[line]];
+      straight += Rows.median(h.length, k -> Math.abs(h[k] / same[k] - 0.95));
+      moved += Rows.median(h.length, k -> Math.abs(h[k] / other[k] - 0.95));
+    }
+    return straight <= moved;
+  }
+
+  private static double misfit(
+      double[][] expected, double[][] volts, double[][] amps, int[] order, boolean voltsMoved) {
+    double sum = 0;
+    for (int line = 0; line < 3; line++) {
+      double[] v = volts[voltsMoved ? order[line] : line];
+      double[] a = amps[voltsMoved ? line : order[line]];
+      double[] s = expected[line];
+      sum += Rows.median(s.length, k -> s[k] > 0 ? Math.abs(v[k] * a[k] / s[k] - 1) : Double.NaN);
+    }
+    return sum / 3;
+  }
+
+  /**
+   * Clamps of two lines on each other's conductors: the instrument then takes each current against
+   * a voltage a third of a cycle away, and finds V·I·cos(120° + φ) and V·I·cos(120° - φ).
+   */
+  private boolean crossed(LogDay day) {
+    LineDay lines = new LineDay(day);
+    Optional<double[][]> watts = lines.all("active_w");
+    Optional<double[][]> amps = lines.all("rms_a");
+    Optional<double[][]> volts = lines.all("rms_v");
+    if (watts.isEmpty() || amps.isEmpty() || volts.isEmpty()) {
+      return false;
+    }
+    double[] cosine = new double[3];
+    for (int line = 0; line < 3; line++) {
+      int k = line;
+      cosine[k] =
+          PowerRelations.median(
+              amps.get()[k],
+              row -> watts.get()[k][row] / (volts.get()[k][row] * amps.get()[k][row]));
+    }
+    for (int straight = 0; straight < 3; straight++) {
+      int a = (straight + 1) % 3;
+      int b = (straight + 2) % 3;
+      if (cosine[straight] > 0.7
+          && isCrossed(cosine[a], cosine[b], Math.acos(Math.min(1, cosine[straight])))) {
+        String pair = LineDay.LINES[Math.min(a, b)] + " and " + LineDay.LINES[Math.max(a, b)];
+        flagged.add(
+            day,
+            new FlaggedDays.Fault(
+                SWAPPED_LINES,
+                pair,
+                "Powers and power factors of these lines are wrong.",
+                String.format(
+                    Locale.ROOT,
+                    "Active powers of %s are %.2f and %.2f of their volts times amps, of %s %.2f:"
+                        + " the clamps of %s stand on each other's conductors.",
+                    pair,
+                    cosine[Math.min(a, b)],
+                    cosine[Math.max(a, b)],
+                    LineDay.LINES[straight],
+                    cosine[straight],
+                    pair),
+                rows -> List.of(uncrossed(day, a, b, rows))));
+        return true;
+      }
+    }
+    return false;
+  }
+
+  /** Amps go where they belong; what the instrument formed from them with other volts is lost. */
+  private static Correction uncrossed(LogDay day, int a, int b, Correction.Rows rows) {
+    Offers offers = new Offers(day.quantities());
+    int[] order = {0, 1, 2};
+    order[a] = b;
+    order[b] = a;
+    boolean summed = PowerRelations.totalIsSum(day);
+    List<String> lost =
+        day.quantities().stream()
+            .filter(
+                q ->
+                    q.matches(
+                        "("
+                            + LineDay.LINES[a]
+                            + "|"
+                            + LineDay.LINES[b]
+                            + (summed ? "|total" : "")
+                            + ")\\.(active_w|reactive_var|apparent_va|power_factor"
+                            + "|displacement_factor|energy_wh).*"))
+            .toList();
+    return Correction.of(
+        Offers.exchanged(order) + " (currents), and leave out the powers formed from them",
+        offers.reorder(order, offers.measures("rms_a", "current_"), rows),
+        new Correction.LeaveOut(lost, rows));
+  }
+
+  private static boolean isCrossed(double one, double other, double angle) {
+    double third = 2 * Math.PI / 3;
+    double low = Math.cos(third + angle);
+    double high = Math.cos(third - angle);
+    return Math.abs(Math.min(one, other) - Math.min(low, high)) < 0.15
+        && Math.abs(Math.max(one, other) - Math.max(low, high)) < 0.15;
+  }
+}

@@ -1,0 +1,223 @@
+package fourthwire.metering.log;
+
+import fourthwire.metering.Correction;
+import fourthwire.metering.Correction.DropRepeats;
+import fourthwire.metering.Correction.FormDistortion;
+import fourthwire.metering.Correction.KeepWithin;
+import fourthwire.metering.Correction.LeaveOut;
+import fourthwire.metering.Correction.Reorder;
+import fourthwire.metering.Correction.Rows;
+import fourthwire.metering.Correction.Scale;
+import fourthwire.metering.Correction.ShiftClock;
+import fourthwire.metering.Correction.Step;
+import fourthwire.metering.Correction.SumLines;
+import fourthwire.metering.Correction.TurnSign;
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Locale;
+import java.util.Map;
+
+/** Words the corrections that are offered for faults of a log. */
+final class Offers {
+  private static final double NEAR = 0.02;
+
+  private final List<String> names;
+
+  Offers(List<String> names) {
+    this.names = names;
+  }
+
+  /** Corrections of rows that are known only when the fault has ended. */
+  interface Of {
+    List<Correction> rows(Rows rows);
+  }
+
+  /** Nothing known of these columns in these rows. */
+  static Correction leaveOut(List<String> quantities, Rows rows) {
+    String what =
+        quantities.size() == 1
+            ? quantities.get(0)
+            : quantities.size() < 4
+                ? joined(quantities)
+                : "these " + quantities.size() + " quantities";
+    return Correction.of(
+        "Leave out " + what + " in these " + rows.count() + " rows",
+        new LeaveOut(quantities, rows));
+  }
+
+  /** Nothing known of a column in some stretches. */
+  static Correction leaveOut(String quantity, List<Rows> stretches) {
+    List<Step> steps = new ArrayList<>();
+    stretches.forEach(rows -> steps.add(new LeaveOut(List.of(quantity), rows)));
+    return new Correction("Leave out the values of " + quantity + " that can't be", steps);
+  }
+
+  /** Only values between these count. */
+  static Correction keepWithin(String quantity, double low, double high) {
+    return Correction.of(
+        "Leave out the values of " + quantity + " that can't be",
+        new KeepWithin(quantity, low, high));
+  }
+
+  static Correction dropRepeats(Rows rows) {
+    return Correction.of(
+        "Count each of these times once: its first row", new DropRepeats(rows));
+  }
+
+  /** The rows from here on, or those before, moved so that they meet. */
+  static List<Correction> shift(long millis, long row) {
+    String by = LogClock.words(Math.abs(millis));
+    boolean later = millis > 0;
+    return List.of(
+        Correction.of(
+            "Set the rows after the jump " + by + (later ? " later" : " earlier"),
+            new ShiftClock(millis, new Rows(row, Long.MAX_VALUE))),
+        Correction.of(
+            "Set the rows before the jump " + by + (later ? " earlier" : " later"),
+            new ShiftClock(-millis, new Rows(0, row))));
+  }
+
+  /** The columns of these names that are logged. */
+  List<String> logged(String... wanted) {
+    List<String> there = new ArrayList<>();
+    for (String name : wanted) {
+      if (names.contains(name)) {
+        there.add(name);
+      }
+    }
+    return there;
+  }
+
+  /** A line's powers the other way round; totals that were summed from them with them. */
+  Correction turn(List<String> quantities, boolean totalFollows, Rows rows) {
+    List<Step> steps = new ArrayList<>();
+    steps.add(new TurnSign(quantities, rows));
+    if (totalFollows) {
+      steps.addAll(total(rows));
+    }
+    return new Correction(
+        "Turn the sign of "
+            + joined(quantities)
+            + (totalFollows ? ", and form the total as the sum of the lines" : ""),
+        steps);
+  }
+
+  /** The total of active power from the lines; what else is said of all lines is not known. */
+  List<Step> total(Rows rows) {
+    List<Step> steps = new ArrayList<>();
+    steps.add(new SumLines("active_w", rows));
+    List<String> rest =
+        logged(
+            "total.active_w.min",
+            "total.active_w.max",
+            "total.power_factor",
+            "total.displacement_factor");
+    if (!rest.isEmpty()) {
+      steps.add(new LeaveOut(rest, rows));
+    }
+    return steps;
+  }
+
+  static Correction sum(String measure, Rows rows) {
+    return Correction.of(
+        "Form total." + measure + " as the sum of the lines", new SumLines(measure, rows));
+  }
+
+  /** These columns by the factor that undoes a ratio. */
+  static Correction scale(List<String> quantities, double ratio, Rows rows) {
+    double factor = likely(1 / ratio);
+    return Correction.of(
+        "Multiply " + joined(quantities) + " by " + number(factor),
+        new Scale(quantities, factor, rows));
+  }
+
+  static Correction formDistortion(String quantity, Rows rows) {
+    return Correction.of(
+        "Form " + quantity + " from the harmonics", new FormDistortion(quantity, rows));
+  }
+
+  /**
+   * Columns of lines under each other's names.
+   *
+   * @param order the line whose column each line takes
+   * @param measures that move, such as {@code rms_a}
+   */
+  Reorder reorder(int[] order, List<String> measures, Rows rows) {
+    Map<String, String> from = new LinkedHashMap<>();
+    for (int line = 0; line < order.length; line++) {
+      for (String measure : measures) {
+        String to = LineDay.LINES[line] + "." + measure;
+        String of = LineDay.LINES[order[line]] + "." + measure;
+        if (order[line] != line && names.contains(to) && names.contains(of)) {
+          from.put(to, of);
+        }
+      }
+    }
+    return new Reorder(from, rows);
+  }
+
+  /** Measures of L1 whose names begin so, lowest and highest of intervals too. */
+  List<String> measures(String... starts) {
+    List<String> found = new ArrayList<>();
+    for (String name : names) {
+      for (String start : starts) {
+        if (name.startsWith("L1." + start)) {
+          found.add(name.substring("L1.".length()));
+        }
+      }
+    }
+    return found;
+  }
+
+  /** Which lines an order exchanges, in words. */
+  static String exchanged(int[] order) {
+    List<String> moved = new ArrayList<>();
+    List<String> from = new ArrayList<>();
+    for (int line = 0; line < order.length; line++) {
+      if (order[line] != line) {
+        moved.add(LineDay.LINES[line]);
+        from.add(LineDay.LINES[order[line]]);
+      }
+    }
+    return moved.size() == 2
+        ? "Exchange " + joined(moved)
+        : "Take " + joined(moved) + " from the columns of " + joined(from);
+  }
+
+  /** A ratio of instruments or units where one is near: whole numbers, √3, thousands. */
+  static double likely(double factor) {
+    for (double thousands : new double[] {1e-6, 1e-3, 1e3, 1e6}) {
+      if (Math.abs(factor / thousands - 1) < 0.2) {
+        return thousands;
+      }
+    }
+    double up = Math.max(factor, 1 / factor);
+    double size = Math.pow(10, Math.max(0, Math.floor(Math.log10(up))));
+    double whole = Math.rint(up / size) * size;
+    double near =
+        Math.abs(up / whole - 1) < NEAR
+            ? whole
+            : Math.abs(up / Math.sqrt(3) - 1) < NEAR
+                ? Math.sqrt(3)
+                : Double.parseDouble(String.format(Locale.ROOT, "%.3g", up));
+    return factor >= 1 ? near : 1 / near;
+  }
+
+  private static String number(double factor) {
+    return factor == Math.sqrt(3)
+        ? "√3"
+        : factor == 1 / Math.sqrt(3)
+            ? "1/√3"
+            : String.format(Locale.ROOT, "%.4g", factor)
+                .replaceFirst("(\\.\\d*?)0+$", "$1")
+                .replaceFirst("\\.$", "");
+  }
+
+  static String joined(List<String> words) {
+    int last = words.size() - 1;
+    return last < 1
+        ? String.join("", words)
+        : String.join(", ", words.subList(0, last)) + " and " + words.get(last);
+  }
+}
