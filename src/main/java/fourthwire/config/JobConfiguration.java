@@ -7,6 +7,7 @@ import fourthwire.audit.AuditRepository;
 import fourthwire.intake.reading.ReadingReader;
 import fourthwire.jobs.AuditRun;
 import fourthwire.jobs.AuditService;
+import fourthwire.jobs.CorrectionService;
 import fourthwire.jobs.JobQueue;
 import fourthwire.jobs.JobRecovery;
 import fourthwire.jobs.ReadingRun;
@@ -19,6 +20,7 @@ import fourthwire.jobs.series.StoredLogs;
 import fourthwire.metering.ReadingRepository;
 import fourthwire.metering.ReadingUploads;
 import fourthwire.metering.SeriesRepository;
+import fourthwire.metering.correction.CorrectionRepository;
 import fourthwire.site.SiteRepository;
 import fourthwire.store.Store;
 import java.time.Clock;
@@ -82,6 +84,12 @@ class JobConfiguration {
   ReadingService readingService(
       ReadingUploads uploads, ReadingReader reader, ReadingSettings settings, JobQueue queue) {
     return new ReadingService(uploads, reader, settings, queue);
+  }
+
+  @Bean
+  CorrectionService correctionService(
+      ReadingRepository readings, SeriesRepository series, CorrectionRepository corrections) {
+    return new CorrectionService(readings, series, corrections);
   }
 
   @Bean

@@ -4,6 +4,7 @@ import fourthwire.audit.AuditRepository;
 import fourthwire.metering.ReadingRepository;
 import fourthwire.metering.ReadingUploads;
 import fourthwire.metering.SeriesRepository;
+import fourthwire.metering.correction.CorrectionRepository;
 import fourthwire.site.SiteRepository;
 import fourthwire.site.SurveyCodec;
 import fourthwire.store.Settings;
@@ -47,6 +48,11 @@ class StoreConfiguration {
   @Bean
   SeriesRepository seriesRepository(Store store) {
     return store.series();
+  }
+
+  @Bean
+  CorrectionRepository correctionRepository(Store store) {
+    return store.corrections();
   }
 
   @Bean

@@ -12,6 +12,10 @@ import fourthwire.metering.Correction.ShiftClock;
 import fourthwire.metering.Correction.Step;
 import fourthwire.metering.Correction.SumLines;
 import fourthwire.metering.Correction.TurnSign;
+import fourthwire.metering.LogResult;
+import fourthwire.metering.correction.CorrectionRepository;
+import java.time.ZoneId;
+import java.time.ZoneOffset;
 import tools.jackson.databind.JsonNode;
 import tools.jackson.databind.node.ObjectNode;
 
@@ -27,6 +31,33 @@ public final class CorrectionJson {
     ObjectNode o = Json.object().put("sentence", c.sentence());
     o.set("steps", Json.list(c.steps(), CorrectionJson::write));
     return o;
+  }
+
+  /** A correction that was made. */
+  public static ObjectNode write(CorrectionRepository.Entry e, ZoneId zone) {
+    ObjectNode o = Json.object().put("id", e.id()).put("finding", e.finding());
+    o.setAll(write(e.correction()));
+    o.put("made", Moments.write(e.made(), zone));
+    e.undone()
+        .ifPresentOrElse(
+            at -> o.put("undone", Moments.write(at, zone)), () -> o.putNull("undone"));
+    return o;
+  }
+
+  /** What a log says as corrected, in the shape of what it says as read. */
+  public static ObjectNode write(LogResult log) {
+    return write(log, ZoneOffset.UTC);
+  }
+
+  static ObjectNode write(LogResult log, ZoneId zone) {
+    ObjectNode o = Json.object();
+    LogJson.write(o, log, zone);
+    return o;
+  }
+
+  /** The log that {@link #write(LogResult)} wrote. */
+  public static LogResult log(String document) {
+    return LogJson.read(Json.parse(document));
   }
 
   private static ObjectNode write(Step step) {

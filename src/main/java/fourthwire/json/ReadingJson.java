@@ -5,8 +5,10 @@ import fourthwire.metering.QualityFinding;
 import fourthwire.metering.Reading;
 import fourthwire.metering.ReadingKind;
 import fourthwire.metering.ReadingRepository;
+import fourthwire.metering.correction.CorrectionRepository;
 import java.time.ZoneId;
 import java.time.ZoneOffset;
+import java.util.List;
 import java.util.Optional;
 import tools.jackson.databind.JsonNode;
 import tools.jackson.databind.node.ObjectNode;
@@ -22,6 +24,36 @@ public final class ReadingJson {
     ObjectNode o = heading(entry, zone);
     writeResult(o, entry.reading(), zone);
     o.set("mapping", MappingJson.write(entry.mapping()));
+    return o;
+  }
+
+  /**
+   * The whole document of a stored reading with what was corrected.
+   *
+   * @param made all of its corrections, those taken back too
+   */
+  public static ObjectNode write(
+      ReadingRepository.Entry entry,
+      List<CorrectionRepository.Entry> made,
+      Optional<CorrectionRepository.Cleaned> cleaned,
+      ZoneId zone) {
+    ObjectNode o = write(entry, zone);
+    for (int finding = 0; finding < entry.reading().quality().size(); finding++) {
+      int of = finding;
+      Json.put(
+          (ObjectNode) o.path("quality").path(finding),
+          "corrected",
+          made.stream()
+              .filter(c -> c.holds() && c.finding() == of)
+              .mapToLong(CorrectionRepository.Entry::id)
+              .findFirst());
+    }
+    o.set("corrections", Json.list(made, c -> CorrectionJson.write(c, zone)));
+    cleaned.ifPresentOrElse(
+        c ->
+            o.set(
+                "cleaned", CorrectionJson.write(c.log(), zone).put("rows", c.rows())),
+        () -> o.putNull("cleaned"));
     return o;
   }
 
@@ -79,7 +111,9 @@ public final class ReadingJson {
   private static ObjectNode write(QualityFinding q, ZoneId zone) {
     ObjectNode o = Json.object().put("code", q.code());
     write(o, q.period(), zone);
-    return o.put("effect", q.effect()).put("sentence", q.sentence());
+    o.put("effect", q.effect()).put("sentence", q.sentence());
+    o.set("corrections", Json.list(q.corrections(), CorrectionJson::write));
+    return o;
   }
 
   /** The reading that {@link #write(Reading)} wrote. */
@@ -110,6 +144,7 @@ public final class ReadingJson {
         o.path("code").asString(),
         period(o),
         o.path("effect").asString(),
-        o.path("sentence").asString());
+        o.path("sentence").asString(),
+        Json.list(o, "corrections", CorrectionJson::read));
   }
 }

@@ -1,6 +1,7 @@
 package fourthwire.metering;
 
 import fourthwire.metering.reduce.LogSpan;
+import fourthwire.metering.series.Series;
 import java.util.List;
 import java.util.Optional;
 
@@ -42,4 +43,7 @@ public interface SeriesRepository {
 
   /** The chunks of a reading's log; none for a capture. */
   LogSpan.Source chunks(long readingId);
+
+  /** All rows of a reading's log, read as they are asked for; empty for a capture. */
+  Optional<Series> series(long readingId);
 }

@@ -6,6 +6,7 @@ import fourthwire.metering.reduce.LogSpan;
 import fourthwire.metering.series.ColumnCodec;
 import fourthwire.metering.series.LogSeries;
 import fourthwire.metering.series.QuantityStatistics;
+import fourthwire.metering.series.Series;
 import fourthwire.metering.series.SeriesStatistics;
 import fourthwire.metering.series.WeekClock;
 import java.sql.ResultSet;
@@ -61,7 +62,7 @@ final class SeriesTables implements SeriesRepository {
         rows);
   }
 
-  private static byte[] coded(QuantityStatistics s) {
+  static byte[] coded(QuantityStatistics s) {
     DoubleStream counts = Arrays.stream(s.weekCount()).asDoubleStream();
     DoubleStream percentiles =
         DoubleStream.concat(Arrays.stream(s.weekP95()), Arrays.stream(s.weekP99()));
@@ -137,6 +138,14 @@ final class SeriesTables implements SeriesRepository {
   @Override
   public LogSpan.Source chunks(long readingId) {
     return new StoredChunks(jdbc, readingId);
+  }
+
+  @Override
+  public Optional<Series> series(long readingId) {
+    List<String> names = quantities(readingId);
+    return names.isEmpty()
+        ? Optional.empty()
+        : Optional.of(new StoredSeries(jdbc, readingId, names));
   }
 
   @Override

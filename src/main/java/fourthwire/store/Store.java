@@ -4,6 +4,7 @@ import fourthwire.audit.AuditRepository;
 import fourthwire.metering.ReadingRepository;
 import fourthwire.metering.ReadingUploads;
 import fourthwire.metering.SeriesRepository;
+import fourthwire.metering.correction.CorrectionRepository;
 import fourthwire.site.SiteRepository;
 import fourthwire.site.SurveyCodec;
 import java.time.Clock;
@@ -47,6 +48,11 @@ public final class Store {
   /** Readings and their files. */
   public ReadingRepository readings() {
     return new JdbcReadings(jdbc, transaction, files(), new SeriesTables(jdbc, template), clock);
+  }
+
+  /** Corrections of logs. */
+  public CorrectionRepository corrections() {
+    return new JdbcCorrections(jdbc, template, transaction, clock);
   }
 
   /** Rows of logs. */

@@ -19,7 +19,7 @@ import org.springframework.context.annotation.Configuration;
 class ApiDescription {
   /** Records of which every key is always sent. */
   private static final List<String> WHOLE =
-      List.of("SiteRow", "StoredSurvey", "Audit", "QueuedAudit", "Job", "QueuedJob");
+      List.of("SiteRow", "StoredSurvey", "Audit", "QueuedAudit", "Job", "QueuedJob", "CorrectionMade");
 
   @Bean
   OpenAPI description() {
@@ -46,6 +46,7 @@ class ApiDescription {
           .addSchemas("Node", NodeShapes.node())
           .addSchemas("ReadingRow", ReadingShapes.row())
           .addSchemas("Reading", ReadingShapes.reading())
+          .addSchemas("Correction", ReadingShapes.correction())
           .addSchemas("Mapping", ReadingShapes.mapping())
           .addSchemas("Series", SeriesShapes.series())
           .addSchemas("SeriesWeeks", SeriesShapes.weeks())

@@ -34,6 +34,8 @@ final class ReadingShapes {
     return capture(log(heading("A reading")))
         .list("notes", "How it was read", Shape.text("A sentence"))
         .list("quality", "What is wrong with it", quality())
+        .list("corrections", "What was corrected, those taken back too", correction())
+        .part("cleaned", cleaned())
         .part("mapping", mapping())
         .schema();
   }
@@ -44,7 +46,40 @@ final class ReadingShapes {
         .part("period", Figures.period("When; null where it is of the whole reading"))
         .text("effect", "What it does to the figures")
         .text("sentence", "The finding in words")
+        .list("corrections", "What would mend it, the likeliest first", offered().schema())
+        .wholeOrNull("corrected", "Id of the correction that mends it; null while none does")
         .schema();
+  }
+
+  private static Shape offered() {
+    return Shape.of("A correction")
+        .text("sentence", "What it does")
+        .list(
+            "steps",
+            "What it does, step by step",
+            Shape.of("A step")
+                .text("kind", "leave-out, keep-within, drop-repeats, shift-clock, turn-sign, …")
+                .others(new Schema<>())
+                .schema());
+  }
+
+  /** A correction that was made. */
+  static Schema<?> correction() {
+    return offered()
+        .whole("id", "Its id")
+        .whole("finding", "Position in quality of what it mends")
+        .part("made", Figures.instant("When it was made"))
+        .textOrNull("undone", "When it was taken back; null while it holds")
+        .schema();
+  }
+
+  private static Schema<?> cleaned() {
+    Schema<?> cleaned =
+        log(Shape.of("A log as corrected, in the shape it has as read; null without corrections"))
+            .optional("rows", Shape.whole("Rows that are left"))
+            .schema();
+    cleaned.setTypes(new java.util.LinkedHashSet<>(java.util.List.of("object", "null")));
+    return cleaned;
   }
 
   private static Shape log(Shape into) {

@@ -5,6 +5,7 @@ import fourthwire.jobs.measured.SiteZone;
 import fourthwire.json.MappingJson;
 import fourthwire.json.ReadingJson;
 import fourthwire.metering.ReadingRepository;
+import fourthwire.metering.correction.CorrectionRepository;
 import fourthwire.site.SiteRepository;
 import io.swagger.v3.oas.annotations.Operation;
 import io.swagger.v3.oas.annotations.Parameter;
@@ -44,11 +45,17 @@ import tools.jackson.databind.node.ObjectNode;
 class ReadingApi {
   private final ReadingService service;
   private final ReadingRepository readings;
+  private final CorrectionRepository corrections;
   private final SiteRepository sites;
 
-  ReadingApi(ReadingService service, ReadingRepository readings, SiteRepository sites) {
+  ReadingApi(
+      ReadingService service,
+      ReadingRepository readings,
+      CorrectionRepository corrections,
+      SiteRepository sites) {
     this.service = service;
     this.readings = readings;
+    this.corrections = corrections;
     this.sites = sites;
   }
 
@@ -123,7 +130,13 @@ class ReadingApi {
   ObjectNode get(@PathVariable long reading) {
     return readings
         .find(reading)
-        .map(r -> ReadingJson.write(r, zone(existing(r.siteId()))))
+        .map(
+            r ->
+                ReadingJson.write(
+                    r,
+                    corrections.ofReading(reading),
+                    corrections.cleaned(reading),
+                    zone(existing(r.siteId()))))
         .orElseThrow(() -> MissingException.reading(reading));
   }
 

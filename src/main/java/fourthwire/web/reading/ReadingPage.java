@@ -8,8 +8,8 @@ import java.util.Optional;
  * What the page of a reading shows.
  *
  * @param facts what was read: files, period, length, digest
- * @param quality what is wrong with it, worst first
- * @param quantities of a log
+ * @param faults what is wrong with it, and what was done about it
+ * @param quantities of a log, as read and as corrected
  * @param capture of a capture: its currents, voltages and powers
  * @param orders of a capture: the spectrum in figures
  * @param view of a capture: what no node's page has
@@ -21,7 +21,7 @@ record ReadingPage(
     String kindKey,
     List<Fact> facts,
     List<String> notes,
-    List<Quality> quality,
+    Faults faults,
     Optional<NodePage.Grid> quantities,
     List<NodePage.Grid> capture,
     Optional<NodePage.Grid> orders,
@@ -55,9 +55,6 @@ record ReadingPage(
 
   /** A fact about the file. */
   record Fact(String key, String text) {}
-
-  /** Something wrong with the reading. */
-  record Quality(String sentence, String effect) {}
 
   /** A reading in the list. */
   record Row(

@@ -2,8 +2,10 @@ package fourthwire.web.reading;
 
 import fourthwire.metering.CaptureResult;
 import fourthwire.metering.LogResult;
+import fourthwire.metering.QuantitySummary;
 import fourthwire.metering.Reading;
 import fourthwire.metering.ReadingRepository;
+import fourthwire.metering.correction.CorrectionRepository;
 import fourthwire.quantity.Figure;
 import fourthwire.site.SiteTree;
 import fourthwire.site.Survey;
@@ -17,6 +19,7 @@ import fourthwire.web.support.Numbers;
 import fourthwire.web.support.Words;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import org.springframework.stereotype.Component;
 
 /** Makes a reading's page and its row in the list. */
@@ -26,9 +29,11 @@ class ReadingPageMaker {
   static final String METER = "meter ";
 
   private final Words words;
+  private final CorrectionRepository corrections;
 
-  ReadingPageMaker(Words words) {
+  ReadingPageMaker(Words words, CorrectionRepository corrections) {
     this.words = words;
+    this.corrections = corrections;
   }
 
   ReadingPage.Row row(ReadingRepository.Entry entry, Survey survey) {
@@ -72,10 +77,8 @@ class ReadingPageMaker {
         kindKey(reading),
         facts(entry, survey),
         reading.notes().stream().map(names::in).toList(),
-        reading.quality().stream()
-            .map(q -> new ReadingPage.Quality(names.in(q.sentence()), names.in(q.effect())))
-            .toList(),
-        reading.log().map(this::quantities),
+        new FaultsMaker(words, survey).make(entry, corrections.ofReading(entry.id())),
+        reading.log().map(l -> quantities(l, corrections.cleaned(entry.id()))),
         reading.capture().map(c -> new CaptureTables(words, names).of(c)).orElse(List.of()),
         reading
             .capture()
@@ -128,11 +131,13 @@ class ReadingPageMaker {
     return new ReadingPage.Fact("reading.fact." + key, text);
   }
 
-  private NodePage.Grid quantities(LogResult log) {
+  /** What corrections changed stands below what was read. */
+  private NodePage.Grid quantities(
+      LogResult log, Optional<CorrectionRepository.Cleaned> cleaned) {
     Grids grid =
         new Grids(
             words,
-            words.of("reading.quantities"),
+            words.of(cleaned.isPresent() ? "reading.quantities.both" : "reading.quantities"),
             List.of(
                 words.of("reading.quantity"),
                 words.of("reading.count"),
@@ -143,17 +148,29 @@ class ReadingPageMaker {
                 words.of("reading.p99")));
     log.quantities()
         .forEach(
-            (name, q) ->
-                grid.row(
-                    name,
-                    List.of(
-                        Figure.of(q.count()),
-                        Figure.of(q.min()),
-                        Figure.of(q.mean()),
-                        Figure.of(q.max()),
-                        Figure.of(q.p95()),
-                        Figure.of(q.p99()))));
+            (name, q) -> {
+              grid.row(name, figures(Optional.of(q)));
+              cleaned
+                  .map(c -> Optional.ofNullable(c.log().quantities().get(name)))
+                  .filter(c -> !c.equals(Optional.of(q)))
+                  .ifPresent(c -> grid.row(words.of("reading.corrected", name), figures(c)));
+            });
     return grid.done();
+  }
+
+  private List<Figure> figures(Optional<QuantitySummary> summary) {
+    Figure none = Figure.unknown(words.of("reading.corrected.none"));
+    return summary
+        .map(
+            q ->
+                List.of(
+                    Figure.of(q.count()),
+                    Figure.of(q.min()),
+                    Figure.of(q.mean()),
+                    Figure.of(q.max()),
+                    Figure.of(q.p95()),
+                    Figure.of(q.p99())))
+        .orElse(List.of(Figure.of(0), none, none, none, none, none));
   }
 
   private String cycle(CaptureResult capture) {
