@@ -21,6 +21,7 @@ import java.util.List;
 import java.util.Objects;
 import java.util.Optional;
 import java.util.stream.Collectors;
+import org.springframework.dao.DuplicateKeyException;
 import org.springframework.jdbc.core.simple.JdbcClient;
 import org.springframework.transaction.support.TransactionTemplate;
 
@@ -54,14 +55,21 @@ final class JdbcReadings implements ReadingRepository {
   @Override
   public long add(Addition addition) {
     String sha256 = sha256(addition.files());
-    return Objects.requireNonNull(
-        transaction.execute(
-            status -> {
-              putMeter(addition.siteId(), addition.meter());
-              addition.confirmed().ifPresent(mapping -> putLayout(addition, mapping));
-              return same(addition.siteId(), addition.meter().name(), sha256)
-                  .orElseGet(() -> insert(addition, sha256));
-            }));
+    transaction.executeWithoutResult(
+        status -> {
+          putMeter(addition.siteId(), addition.meter());
+          addition.confirmed().ifPresent(mapping -> putLayout(addition, mapping));
+        });
+    try {
+      return Objects.requireNonNull(
+          transaction.execute(
+              status ->
+                  same(addition.siteId(), addition.meter().name(), sha256)
+                      .orElseGet(() -> insert(addition, sha256))));
+    } catch (DuplicateKeyException meanwhile) {
+      return same(addition.siteId(), addition.meter().name(), sha256)
+          .orElseThrow(() -> meanwhile);
+    }
   }
 
   /** Of one file its own; of several, of their digests in name order. */
@@ -90,33 +98,35 @@ final class JdbcReadings implements ReadingRepository {
     return same(siteId, meter, sha256(same)).flatMap(this::find);
   }
 
+  /**
+   * Made and committed at once: two files of a new meter may come at the same time, and the rows of
+   * a large one take long to store.
+   */
   private void putMeter(long siteId, MeterRef meter) {
-    int changed =
-        jdbc.sql("update meters set node = ? where site_id = ? and name = ?")
-            .params(meter.node(), siteId, meter.name())
-            .update();
-    if (changed == 0) {
-      jdbc.sql("insert into meters (site_id, name, node) values (?, ?, ?)")
-          .params(siteId, meter.name(), meter.node())
-          .update();
-    }
+    jdbc.sql("insert into meters (site_id, name, node) values (?, ?, ?) on conflict do nothing")
+        .params(siteId, meter.name(), meter.node())
+        .update();
+    jdbc.sql("update meters set node = ? where site_id = ? and name = ?")
+        .params(meter.node(), siteId, meter.name())
+        .update();
   }
 
   private void putLayout(Addition a, ReadingMapping confirmed) {
     String mapping = MappingJson.write(confirmed).toString();
-    int changed =
-        jdbc.sql(
-                """
-                update meter_layouts set mapping = ?
-                where site_id = ? and meter = ? and layout = ?
-                """)
-            .params(mapping, a.siteId(), a.meter().name(), a.layout())
-            .update();
-    if (changed == 0) {
-      jdbc.sql("insert into meter_layouts (site_id, meter, layout, mapping) values (?, ?, ?, ?)")
-          .params(a.siteId(), a.meter().name(), a.layout(), mapping)
-          .update();
-    }
+    jdbc.sql(
+            """
+            insert into meter_layouts (site_id, meter, layout, mapping) values (?, ?, ?, ?)
+            on conflict do nothing
+            """)
+        .params(a.siteId(), a.meter().name(), a.layout(), mapping)
+        .update();
+    jdbc.sql(
+            """
+            update meter_layouts set mapping = ?
+            where site_id = ? and meter = ? and layout = ?
+            """)
+        .params(mapping, a.siteId(), a.meter().name(), a.layout())
+        .update();
   }
 
   private long insert(Addition addition, String sha256) {

@@ -31,6 +31,7 @@ import java.io.InputStream;
 import java.security.MessageDigest;
 import java.time.Duration;
 import java.time.Instant;
+import java.util.ArrayList;
 import java.util.HexFormat;
 import java.util.List;
 import java.util.Map;
@@ -38,6 +39,10 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.OptionalLong;
 import java.util.Random;
+import java.util.concurrent.Callable;
+import java.util.concurrent.ExecutorService;
+import java.util.concurrent.Executors;
+import java.util.concurrent.Future;
 import java.util.stream.IntStream;
 import javax.sql.DataSource;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -269,6 +274,44 @@ class StoreTest {
     settings.put("demo", "two");
     assertThat(settings.find("demo")).contains("two");
     assertThat(settings.find("other")).isEmpty();
+  }
+
+  /** Whoever comes second waits for no one and collides with no one. */
+  @ParameterizedTest
+  @EnumSource
+  void filesOfANewMeterAtTheSameTimeAreAllStored(Databases kind) throws Exception {
+    open(kind);
+    long site = sites.create(SmallSite.survey("Works"), List.of());
+    List<Callable<Long>> uploads = new ArrayList<>();
+    for (int k = 0; k < 12; k++) {
+      RawFile file = file("week" + k % 6 + ".csv", 20_000 + k % 6);
+      uploads.add(
+          () ->
+              readings.add(
+                  new ReadingRepository.Addition(
+                      site,
+                      new MeterRef("M1", "LP-1"),
+                      List.of(file),
+                      "layout",
+                      mapping(),
+                      Optional.of(mapping()),
+                      reading())));
+    }
+    ExecutorService people = Executors.newFixedThreadPool(12);
+    List<Long> ids = new ArrayList<>();
+    try {
+      for (Future<Long> stored : people.invokeAll(uploads)) {
+        ids.add(stored.get());
+      }
+    } finally {
+      people.shutdown();
+    }
+    for (int k = 0; k < 6; k++) {
+      assertThat(ids.get(k + 6)).as("the same file twice").isEqualTo(ids.get(k));
+    }
+    assertThat(readings.ofSite(site)).hasSize(6);
+    assertThat(readings.meters(site)).containsExactly(new MeterRef("M1", "LP-1"));
+    assertThat(readings.mapping(site, "M1", "layout")).contains(mapping());
   }
 
   private long addReading(long site) {

@@ -15,6 +15,7 @@ import io.swagger.v3.oas.annotations.tags.Tag;
 import java.net.URI;
 import java.time.ZoneId;
 import java.util.List;
+import org.jspecify.annotations.Nullable;
 import org.springframework.http.HttpStatus;
 import org.springframework.http.MediaType;
 import org.springframework.http.ResponseEntity;
@@ -56,7 +57,7 @@ class CorrectionApi {
   record Asked(
       @Schema(description = "The finding, as counted in quality from 0") int finding,
       @Schema(description = "Which of its corrections, from 0; left out: the first")
-          int correction) {}
+          @Nullable Integer correction) {}
 
   /** The correction that was made. */
   @Schema(name = "CorrectionMade", description = "The correction that was made")
@@ -84,7 +85,7 @@ class CorrectionApi {
   @ApiResponse(responseCode = "201", description = "It is made")
   ResponseEntity<Made> make(@PathVariable long reading, @RequestBody Asked asked) {
     existing(reading);
-    long id = service.make(reading, asked.finding(), asked.correction());
+    long id = service.make(reading, asked.finding(), asked.correction() == null ? 0 : asked.correction());
     return ResponseEntity.created(
             URI.create("/api/v1/readings/" + reading + "/corrections/" + id))
         .body(new Made(id));

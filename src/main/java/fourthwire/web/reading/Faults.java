@@ -11,7 +11,7 @@ import java.util.Optional;
  */
 record Faults(List<Fault> faults, List<Done> history) {
   /** How many corrections hold. */
-  long holding() {
+  public long holding() {
     return history.stream().filter(d -> d.undone().isEmpty()).count();
   }
 

@@ -13,17 +13,18 @@ import java.util.Random;
 import java.util.TreeMap;
 
 /** A month of an invented board in ten-minute rows: columns by name, and when each row is. */
-final class InventedBoard {
+public final class InventedBoard {
   static final int DAYS = 28;
-  static final int PER_DAY = 144;
-  static final long STEP = 600_000;
+  public static final int PER_DAY = 144;
+  public static final long STEP = 600_000;
   static final long START = Instant.parse("2025-02-02T23:00:00Z").toEpochMilli();
-  static final ZoneId ZONE = ZoneId.of("Europe/Amsterdam");
+  public static final ZoneId ZONE = ZoneId.of("Europe/Amsterdam");
 
   final Map<String, double[]> columns = new TreeMap<>();
   final List<Long> times = new ArrayList<>();
 
-  InventedBoard(long seed, int decimals) {
+  /** As the seed makes it, currents with so many decimals. */
+  public InventedBoard(long seed, int decimals) {
     Random random = new Random(seed);
     double size = 20 + random.nextInt(200);
     double share = 0.15 + 0.4 * random.nextDouble();
@@ -85,7 +86,8 @@ final class InventedBoard {
         Math.round(value * power) / power;
   }
 
-  void scale(String name, int from, int to, double factor) {
+  /** Multiplies a column in these rows. */
+  public void scale(String name, int from, int to, double factor) {
     for (int row = from; row < to; row++) {
       columns.get(name)[row] *= factor;
     }
@@ -110,7 +112,8 @@ final class InventedBoard {
         });
   }
 
-  void repeat(int row) {
+  /** Writes a row twice. */
+  public void repeat(int row) {
     times.add(row, times.get(row));
     columns.replaceAll(
         (name, x) -> {
@@ -137,7 +140,8 @@ final class InventedBoard {
     return series;
   }
 
-  Reading reading() {
+  /** What the log says. */
+  public Reading reading() {
     return LogAnalysis.of(series(), STEP, ZONE, 50, List.of(), List.of());
   }
 }

@@ -60,6 +60,11 @@ class AnswersAsDescribedTest extends ServiceTest {
     described.check("post", "/jobs/{job}/cancel", 200, http.post(path + "/cancel").json());
     JsonNode reading = http.get("/api/v1/readings/" + ended.path("result").asLong()).json();
     described.check("get", "/readings/{reading}", 200, reading);
+    described.check(
+        "get",
+        "/readings/{reading}/corrections",
+        200,
+        http.get("/api/v1/readings/" + ended.path("result").asLong() + "/corrections").json());
     if (reading.has("rows")) {
       checkSeries(http, "/api/v1/readings/" + ended.path("result").asLong());
       // SmallSite lies in the zone Europe/Vienna: an hour ahead of UTC in March
