@@ -39,8 +39,7 @@ public final class CorrectionJson {
     o.setAll(write(e.correction()));
     o.put("made", Moments.write(e.made(), zone));
     e.undone()
-        .ifPresentOrElse(
-            at -> o.put("undone", Moments.write(at, zone)), () -> o.putNull("undone"));
+        .ifPresentOrElse(at -> o.put("undone", Moments.write(at, zone)), () -> o.putNull("undone"));
     return o;
   }
 
@@ -139,8 +138,7 @@ public final class CorrectionJson {
       case "shift-clock" ->
           new ShiftClock(Math.round(1000 * o.path("seconds").doubleValue()), rows);
       case "turn-sign" -> new TurnSign(Json.strings(o, QUANTITIES), rows);
-      case "scale" ->
-          new Scale(Json.strings(o, QUANTITIES), o.path("factor").doubleValue(), rows);
+      case "scale" -> new Scale(Json.strings(o, QUANTITIES), o.path("factor").doubleValue(), rows);
       case "reorder" -> new Reorder(Json.map(o, "from", JsonNode::asString), rows);
       case "sum-lines" -> new SumLines(o.path("measure").asString(), rows);
       case "form-distortion" -> new FormDistortion(quantity, rows);

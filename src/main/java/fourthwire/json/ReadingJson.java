@@ -50,9 +50,7 @@ public final class ReadingJson {
     }
     o.set("corrections", Json.list(made, c -> CorrectionJson.write(c, zone)));
     cleaned.ifPresentOrElse(
-        c ->
-            o.set(
-                "cleaned", CorrectionJson.write(c.log(), zone).put("rows", c.rows())),
+        c -> o.set("cleaned", CorrectionJson.write(c.log(), zone).put("rows", c.rows())),
         () -> o.putNull("cleaned"));
     return o;
   }

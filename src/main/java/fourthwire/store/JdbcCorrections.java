@@ -37,12 +37,16 @@ final class JdbcCorrections implements CorrectionRepository {
 
   @Override
   public OptionalLong add(
-      long readingId, int finding, Correction correction, Function<List<Correction>, CleanedLog> make) {
+      long readingId,
+      int finding,
+      Correction correction,
+      Function<List<Correction>, CleanedLog> make) {
     return Objects.requireNonNull(
         transaction.execute(
             status -> {
               lock(readingId);
-              if (ofReading(readingId).stream().anyMatch(e -> e.holds() && e.finding() == finding)) {
+              if (ofReading(readingId).stream()
+                  .anyMatch(e -> e.holds() && e.finding() == finding)) {
                 return OptionalLong.empty();
               }
               long id = insert(readingId, finding, correction);
@@ -153,8 +157,7 @@ final class JdbcCorrections implements CorrectionRepository {
         .param(readingId)
         .query(
             (row, number) ->
-                new Cleaned(
-                    row.getLong("row_count"), CorrectionJson.log(Rows.text(row, "result"))))
+                new Cleaned(row.getLong("row_count"), CorrectionJson.log(Rows.text(row, "result"))))
         .optional();
   }
 }

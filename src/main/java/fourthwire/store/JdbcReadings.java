@@ -67,8 +67,7 @@ final class JdbcReadings implements ReadingRepository {
                   same(addition.siteId(), addition.meter().name(), sha256)
                       .orElseGet(() -> insert(addition, sha256))));
     } catch (DuplicateKeyException meanwhile) {
-      return same(addition.siteId(), addition.meter().name(), sha256)
-          .orElseThrow(() -> meanwhile);
+      return same(addition.siteId(), addition.meter().name(), sha256).orElseThrow(() -> meanwhile);
     }
   }
 

@@ -19,7 +19,8 @@ import org.springframework.context.annotation.Configuration;
 class ApiDescription {
   /** Records of which every key is always sent. */
   private static final List<String> WHOLE =
-      List.of("SiteRow", "StoredSurvey", "Audit", "QueuedAudit", "Job", "QueuedJob", "CorrectionMade");
+      List.of(
+          "SiteRow", "StoredSurvey", "Audit", "QueuedAudit", "Job", "QueuedJob", "CorrectionMade");
 
   @Bean
   OpenAPI description() {

@@ -71,7 +71,9 @@ final class Clock {
     long[] shifted = times.clone();
     for (ShiftClock shift : shifts) {
       int to = Columns.end(shift.rows(), firstRow[chunk], shifted.length);
-      for (int row = Columns.begin(shift.rows(), firstRow[chunk], shifted.length); row < to; row++) {
+      for (int row = Columns.begin(shift.rows(), firstRow[chunk], shifted.length);
+          row < to;
+          row++) {
         shifted[row] += shift.millis();
       }
     }

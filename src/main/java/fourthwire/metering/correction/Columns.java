@@ -193,7 +193,8 @@ final class Columns {
     }
     for (KeepWithin b : bounds) {
       if (b.quantity().equals(quantity)) {
-        Arrays.setAll(known, k -> known[k] < b.low() || known[k] > b.high() ? Double.NaN : known[k]);
+        Arrays.setAll(
+            known, k -> known[k] < b.low() || known[k] > b.high() ? Double.NaN : known[k]);
       }
     }
     return known;

@@ -46,7 +46,10 @@ public interface CorrectionRepository {
    * @return its id; empty where the finding is mended already
    */
   OptionalLong add(
-      long readingId, int finding, Correction correction, Function<List<Correction>, CleanedLog> make);
+      long readingId,
+      int finding,
+      Correction correction,
+      Function<List<Correction>, CleanedLog> make);
 
   /** Takes a correction back, likewise; false where it did not hold. */
   boolean undo(long readingId, long id, Function<List<Correction>, CleanedLog> make);

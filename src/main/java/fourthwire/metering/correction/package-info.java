@@ -3,8 +3,8 @@
  * whenever it is wanted, so that nothing is left of a correction that was taken back.
  *
  * <p>Doors: {@link fourthwire.metering.correction.CorrectedSeries}, {@link
- * fourthwire.metering.correction.CorrectionRepository}. May use {@code metering},
- * {@code metering.series} and {@code metering.log}.
+ * fourthwire.metering.correction.CorrectionRepository}. May use {@code metering}, {@code
+ * metering.series} and {@code metering.log}.
  */
 @org.jspecify.annotations.NullMarked
 package fourthwire.metering.correction;

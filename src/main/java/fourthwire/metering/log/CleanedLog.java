@@ -74,8 +74,7 @@ public record CleanedLog(
   /** Of rows of one time the one that was chosen. */
   private static boolean holds(Series series, int chunk, int row, Map<String, Double> values) {
     return values.entrySet().stream()
-        .allMatch(
-            v -> series.values(chunk, series.indexOf(v.getKey()))[row] == v.getValue());
+        .allMatch(v -> series.values(chunk, series.indexOf(v.getKey()))[row] == v.getValue());
   }
 
   private static Map<String, Double> row(Series series, int chunk, int row) {

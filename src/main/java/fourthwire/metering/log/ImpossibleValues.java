@@ -71,7 +71,9 @@ final class ImpossibleValues implements DayCheck {
       high = Math.max(high, value);
     }
 
-    /** By bounds where they part what can be from what can't, else row by row where these are few. */
+    /**
+     * By bounds where they part what can be from what can't, else row by row where these are few.
+     */
     List<Correction> corrections(String quantity) {
       if (highestBelow < low && lowestAbove > high) {
         return low > high ? List.of() : List.of(Offers.keepWithin(quantity, low, high));

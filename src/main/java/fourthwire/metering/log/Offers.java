@@ -61,8 +61,7 @@ final class Offers {
   }
 
   static Correction dropRepeats(Rows rows) {
-    return Correction.of(
-        "Count each of these times once: its first row", new DropRepeats(rows));
+    return Correction.of("Count each of these times once: its first row", new DropRepeats(rows));
   }
 
   /** The rows from here on, or those before, moved so that they meet. */

@@ -69,8 +69,7 @@ class CorrectionApi {
       responseCode = "200",
       description = "What was corrected, when, and from which finding",
       content =
-          @Content(
-              array = @ArraySchema(schema = @Schema(ref = "#/components/schemas/Correction"))))
+          @Content(array = @ArraySchema(schema = @Schema(ref = "#/components/schemas/Correction"))))
   List<ObjectNode> list(@PathVariable long reading) {
     ZoneId zone = zone(existing(reading));
     return corrections.ofReading(reading).stream().map(c -> CorrectionJson.write(c, zone)).toList();
@@ -85,9 +84,9 @@ class CorrectionApi {
   @ApiResponse(responseCode = "201", description = "It is made")
   ResponseEntity<Made> make(@PathVariable long reading, @RequestBody Asked asked) {
     existing(reading);
-    long id = service.make(reading, asked.finding(), asked.correction() == null ? 0 : asked.correction());
-    return ResponseEntity.created(
-            URI.create("/api/v1/readings/" + reading + "/corrections/" + id))
+    long id =
+        service.make(reading, asked.finding(), asked.correction() == null ? 0 : asked.correction());
+    return ResponseEntity.created(URI.create("/api/v1/readings/" + reading + "/corrections/" + id))
         .body(new Made(id));
   }
 
@@ -108,9 +107,7 @@ class CorrectionApi {
 
   private ZoneId zone(ReadingRepository.Entry reading) {
     SiteRepository.Entry site =
-        sites
-            .find(reading.siteId())
-            .orElseThrow(() -> MissingException.site(reading.siteId()));
+        sites.find(reading.siteId()).orElseThrow(() -> MissingException.site(reading.siteId()));
     return SiteZone.of(sites.survey(site.id(), site.latestRevision()));
   }
 }

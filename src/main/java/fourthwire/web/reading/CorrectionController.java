@@ -36,8 +36,7 @@ class CorrectionController {
   }
 
   @PostMapping("/readings/{reading}/corrections/{correction}/undo")
-  String undo(
-      @PathVariable("reading") long reading, @PathVariable("correction") long correction) {
+  String undo(@PathVariable("reading") long reading, @PathVariable("correction") long correction) {
     check(reading);
     service.undo(reading, correction);
     return shown(reading);

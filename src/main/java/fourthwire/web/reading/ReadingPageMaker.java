@@ -132,8 +132,7 @@ class ReadingPageMaker {
   }
 
   /** What corrections changed stands below what was read. */
-  private NodePage.Grid quantities(
-      LogResult log, Optional<CorrectionRepository.Cleaned> cleaned) {
+  private NodePage.Grid quantities(LogResult log, Optional<CorrectionRepository.Cleaned> cleaned) {
     Grids grid =
         new Grids(
             words,

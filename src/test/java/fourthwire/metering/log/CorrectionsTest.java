@@ -142,7 +142,8 @@ class CorrectionsTest {
   /** Each clamp's current against the other's voltage; what is formed from all lines follows. */
   private static void cross(InventedBoard b) {
     for (int row = D; row < E; row++) {
-      double phi = Math.acos(b.at("L3.active_w", row) / b.at("L3.rms_v", row) / b.at("L3.rms_a", row));
+      double phi =
+          Math.acos(b.at("L3.active_w", row) / b.at("L3.rms_v", row) / b.at("L3.rms_a", row));
       for (int line = 1; line <= 2; line++) {
         double cosine = Math.cos(2 * Math.PI / 3 + (line == 1 ? phi : -phi));
         String other = line == 1 ? "L2.rms_a" : "L1.rms_a";
@@ -153,7 +154,14 @@ class CorrectionsTest {
       b.columns.get("total.active_w")[row] =
           b.at("L1.active_w", row) + b.at("L2.active_w", row) + b.at("L3.active_w", row);
     }
-    for (String measure : List.of("rms_a", "current_h1_a", "current_h3_a", "current_h5_a", "current_h7_a", "current_thd_percent")) {
+    for (String measure :
+        List.of(
+            "rms_a",
+            "current_h1_a",
+            "current_h3_a",
+            "current_h5_a",
+            "current_h7_a",
+            "current_thd_percent")) {
       b.swap("L1." + measure, "L2." + measure, D, E);
     }
   }
@@ -215,8 +223,7 @@ class CorrectionsTest {
     Correction offered = faulty.reading().quality().get(0).corrections().get(0);
     QuantitySummary c =
         cleaned(faulty, List.of(offered)).log().quantities().get("L1.current_thd_percent");
-    QuantitySummary t =
-        truth(new InventedBoard(seed, 2), NOTHING).get("L1.current_thd_percent");
+    QuantitySummary t = truth(new InventedBoard(seed, 2), NOTHING).get("L1.current_thd_percent");
     assertThat(Math.abs(c.mean() - t.mean())).as("seed %d", seed).isLessThan(0.05);
     assertThat(Math.abs(c.p95() - t.p95())).as("seed %d", seed).isLessThan(0.1);
   }

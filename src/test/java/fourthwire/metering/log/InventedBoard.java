@@ -55,8 +55,7 @@ public final class InventedBoard {
     }
   }
 
-  private void line(
-      Random random, String line, int row, double first, double share, int decimals) {
+  private void line(Random random, String line, int row, double first, double share, int decimals) {
     double third = first * share * (1 + 0.05 * random.nextGaussian());
     double fifth = first * share * 0.5 * (1 + 0.05 * random.nextGaussian());
     double seventh = first * share * 0.3 * (1 + 0.05 * random.nextGaussian());

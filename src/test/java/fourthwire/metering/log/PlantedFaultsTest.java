@@ -22,7 +22,9 @@ class PlantedFaultsTest {
   @ParameterizedTest
   @ValueSource(longs = {1, 2, 3, 4, 5, 6, 7, 8, 9, 10, 11, 12, 13, 14, 15, 16, 17, 18, 19, 20})
   void cleanDaysRaiseNoAlarm(long seed) {
-    assertThat(new InventedBoard(seed, (int) (seed % 3)).reading().quality()).as("seed %d", seed).isEmpty();
+    assertThat(new InventedBoard(seed, (int) (seed % 3)).reading().quality())
+        .as("seed %d", seed)
+        .isEmpty();
   }
 
   private static Arguments fault(

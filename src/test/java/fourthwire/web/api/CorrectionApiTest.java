@@ -65,7 +65,8 @@ class CorrectionApiTest extends ServiceTest {
     JsonNode corrected = http.get(path).json();
     assertThat(corrected.path("quantities")).isEqualTo(asRead.path("quantities"));
     assertThat(corrected.at("/cleaned/rows").asInt()).isEqualTo(288);
-    assertThat(corrected.path("cleaned").path("quantities").path("L1.active_w").path("min").asDouble())
+    assertThat(
+            corrected.path("cleaned").path("quantities").path("L1.active_w").path("min").asDouble())
         .isPositive();
     assertThat(corrected.path("quality").path(finding).path("corrected").asLong()).isEqualTo(id);
     assertThat(http.get(path + "/corrections").json().path(0).path("undone").isNull()).isTrue();
