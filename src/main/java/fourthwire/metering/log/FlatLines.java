@@ -170,7 +170,9 @@ final class FlatLines implements DayCheck {
                 .computeIfAbsent(
                     together.keySet().stream()
                         .filter(other -> isNear(rows, other))
-                        .max(Comparator.comparingInt(other -> together.getOrDefault(other, List.of()).size()))
+                        .max(
+                            Comparator.comparingInt(
+                                other -> together.getOrDefault(other, List.of()).size()))
                         .orElse(rows),
                     k -> new ArrayList<>())
                 .addAll(all));
