@@ -74,22 +74,7 @@ public final class LoadModels {
   }
 
   private static ModelColumns efficient(double efficiency) {
-    OptionalDouble none = OptionalDouble.empty();
-    return new ModelColumns(
-        OptionalDouble.of(efficiency),
-        none,
-        none,
-        none,
-        none,
-        none,
-        none,
-        none,
-        none,
-        none,
-        none,
-        none,
-        none,
-        none);
+    return ModelColumns.NONE.with(ModelColumns.Column.EFFICIENCY, efficiency);
   }
 
   private static LoadModel constantImpedance(LoadRequest request, double displacementFactor) {

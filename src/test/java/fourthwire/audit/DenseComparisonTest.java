@@ -12,7 +12,6 @@ import fourthwire.site.Survey;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import java.util.OptionalDouble;
 import java.util.Random;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
@@ -261,21 +260,10 @@ class DenseComparisonTest {
   @Test
   void aUnitWithNoImpedanceOfItsOwnDrawsWhatItsTerminalVoltageAsks() {
     ModelColumns stiff =
-        new ModelColumns(
-            OptionalDouble.empty(),
-            OptionalDouble.of(1.5),
-            OptionalDouble.of(0),
-            OptionalDouble.of(0),
-            OptionalDouble.empty(),
-            OptionalDouble.empty(),
-            OptionalDouble.empty(),
-            OptionalDouble.empty(),
-            OptionalDouble.empty(),
-            OptionalDouble.empty(),
-            OptionalDouble.empty(),
-            OptionalDouble.empty(),
-            OptionalDouble.empty(),
-            OptionalDouble.empty());
+        ModelColumns.NONE
+            .with(ModelColumns.Column.CAPACITANCE_UF_PER_W, 1.5)
+            .with(ModelColumns.Column.SOURCE_RESISTANCE_OHM, 0)
+            .with(ModelColumns.Column.SOURCE_INDUCTANCE_UH, 0);
     SurveyBuilder b = new SurveyBuilder(50).supply("GRID", 400, 1.2, 1.5);
     b.panel("LP", "GRID", ohms(0.1, 0.02, 0.1, 0.02));
     for (int k = 0; k < 9; k++) {

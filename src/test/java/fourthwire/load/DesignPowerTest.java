@@ -31,23 +31,10 @@ class DesignPowerTest {
   private static LoadRequest supply(SplittableRandom random) {
     double watts = random.nextDouble(25, 120);
     double ohm = random.nextDouble(.01, .03) * 230 * 230 / watts;
-    OptionalDouble none = OptionalDouble.empty();
     ModelColumns columns =
-        new ModelColumns(
-            none,
-            OptionalDouble.of(random.nextDouble(.7, 1.6)),
-            OptionalDouble.of(ohm),
-            none,
-            none,
-            none,
-            none,
-            none,
-            none,
-            none,
-            none,
-            none,
-            none,
-            none);
+        ModelColumns.NONE
+            .with(ModelColumns.Column.CAPACITANCE_UF_PER_W, random.nextDouble(.7, 1.6))
+            .with(ModelColumns.Column.SOURCE_RESISTANCE_OHM, ohm);
     return new LoadRequest(
         LoadKind.CAPACITOR_INPUT,
         1,
@@ -57,7 +44,7 @@ class DesignPowerTest {
         1,
         1,
         true,
-        none,
+        OptionalDouble.empty(),
         columns,
         Optional.empty());
   }

@@ -30,24 +30,9 @@ final class LoadCases {
 
   /** One rectifier at 230 V with a choke of so many percent behind its bridge. */
   static LoadRequest choked(double watts, double demand, double dcPercent) {
-    OptionalDouble none = OptionalDouble.empty();
     LoadRequest plain = request(LoadKind.CAPACITOR_INPUT_CHOKE, watts, 1, demand);
     ModelColumns columns =
-        new ModelColumns(
-            none,
-            none,
-            none,
-            none,
-            none,
-            none,
-            none,
-            none,
-            OptionalDouble.of(dcPercent),
-            none,
-            none,
-            none,
-            none,
-            none);
+        ModelColumns.NONE.with(ModelColumns.Column.DC_CHOKE_PERCENT, dcPercent);
     return new LoadRequest(
         plain.kind(),
         plain.ports(),
@@ -57,7 +42,7 @@ final class LoadCases {
         1,
         demand,
         true,
-        none,
+        OptionalDouble.empty(),
         columns,
         Optional.empty());
   }

@@ -12,6 +12,7 @@ import fourthwire.quantity.Conductor;
 import fourthwire.quantity.Figure;
 import fourthwire.quantity.Spectrum;
 import fourthwire.quantity.SymmetricalComponents;
+import fourthwire.site.SiteTree;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
@@ -35,6 +36,10 @@ public final class NodeReport {
   public NodeResult result(List<MeasuredState> measured) {
     List<String> assumptions = new ArrayList<>(place.feeder().assumptions());
     place.transformer().ifPresent(t -> assumptions.addAll(t.plate().assumptions()));
+    assumptions.addAll(context.solution().remarks(place.name()));
+    for (SiteTree.Node circuit : context.tree().children(place.name())) {
+      assumptions.addAll(context.solution().remarks(circuit.name()));
+    }
     return bare(measured, assumptions)
         .withImpedance(context.scan().curve(place.name()), context.bankSteps().at(place.name()));
   }

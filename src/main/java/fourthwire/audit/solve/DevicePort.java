@@ -8,6 +8,7 @@ import fourthwire.network.Excitation;
 import fourthwire.network.OrderSolution;
 import fourthwire.network.TreeNetwork;
 import java.util.Arrays;
+import java.util.List;
 import java.util.Optional;
 
 /**
@@ -117,6 +118,13 @@ final class DevicePort {
   /** Why the last solution failed; empty if it did not. */
   String failure() {
     return failure;
+  }
+
+  /** What has to be known of the current that it draws, in sentences that name the load. */
+  List<String> remarks() {
+    return solver.remarks().stream()
+        .map(said -> device.placement().load().name() + ": " + said)
+        .toList();
   }
 
   /** Voltage of one port in one order's solution, real part. */

@@ -15,8 +15,10 @@ import fourthwire.site.Filter;
 import fourthwire.site.Survey;
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.HashMap;
 import java.util.List;
 import java.util.Locale;
+import java.util.Map;
 import java.util.function.IntConsumer;
 import java.util.stream.IntStream;
 
@@ -94,7 +96,20 @@ final class SiteIteration {
       solveNetwork(x);
     }
     check();
-    return new SiteSolution(network, orders, solutions);
+    return new SiteSolution(network, orders, solutions, remarks());
+  }
+
+  /** What has to be known of loads' currents, by circuit. */
+  private Map<String, List<String>> remarks() {
+    Map<String, List<String>> byCircuit = new HashMap<>();
+    for (DevicePort load : loads) {
+      for (String said : load.remarks()) {
+        byCircuit
+            .computeIfAbsent(load.device().placement().circuit(), c -> new ArrayList<>())
+            .add(said);
+      }
+    }
+    return byCircuit;
   }
 
   /** What the loads drew at last. */

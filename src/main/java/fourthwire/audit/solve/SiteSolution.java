@@ -5,22 +5,36 @@ import fourthwire.network.OrderSolution;
 import fourthwire.network.TreeNetwork;
 import fourthwire.quantity.Conductor;
 import fourthwire.quantity.Spectrum;
+import java.util.List;
+import java.util.Map;
 
 /** The solved network of a site: potentials and feeding currents of every node at every order. */
 public final class SiteSolution {
   private final TreeNetwork network;
   private final OrdersInPlay orders;
   private final OrderSolution[] solutions;
+  private final Map<String, List<String>> remarks;
 
   /**
    * Holds solved orders.
    *
    * @param solutions by whole order; those in play are there
+   * @param remarks what has to be known of loads' currents, in sentences, by circuit
    */
-  public SiteSolution(TreeNetwork network, OrdersInPlay orders, OrderSolution[] solutions) {
+  public SiteSolution(
+      TreeNetwork network,
+      OrdersInPlay orders,
+      OrderSolution[] solutions,
+      Map<String, List<String>> remarks) {
     this.network = network;
     this.orders = orders;
     this.solutions = solutions.clone();
+    this.remarks = Map.copyOf(remarks);
+  }
+
+  /** What has to be known of the currents that the loads of a circuit draw, in sentences. */
+  public List<String> remarks(String circuit) {
+    return remarks.getOrDefault(circuit, List.of());
   }
 
   /** Potential to earth of a conductor of a network node, volts. */

@@ -1,5 +1,7 @@
 package fourthwire.load.model;
 
+import java.util.List;
+
 /** Finds the injected current of one load model, again and again as its voltage settles. */
 public interface LoadSolver {
   /**
@@ -17,4 +19,12 @@ public interface LoadSolver {
    *     the solution does not converge
    */
   void solve(PortSpectra emf, double seriesOhm, double seriesHenry, PortSpectra current);
+
+  /**
+   * What a reader has to know of the current last solved, in sentences; none as a rule. Nothing is
+   * given in silence that holds under a condition only.
+   */
+  default List<String> remarks() {
+    return List.of();
+  }
 }

@@ -4,6 +4,8 @@ import fourthwire.load.model.LoadSolver;
 import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.load.model.PortSpectra;
 import fourthwire.quantity.Spectrum;
+import java.util.List;
+import java.util.Locale;
 
 /**
  * Periodic steady state of the six- and twelve-pulse rectifiers, by Newton's method on the state at
@@ -20,8 +22,9 @@ import fourthwire.quantity.Spectrum;
  * circle): ideal constant power is a negative resistance to small changes, and a simulated circuit
  * then hunts, or settles with even orders after the whole cycle. Real converters, whose control is
  * slower than that and whose chokes and capacitors lose more, are measured with odd orders only
- * (the reactor tables that the presets are held to); so that state is given, and no other looked
- * for.
+ * (the reactor tables that the presets are held to); so that state is given, no other looked for,
+ * and {@link #remarks} says so. Single-phase supplies, which have no such control, are refused in
+ * that case ({@link CapacitorInputSolver}).
  *
  * <p>An instance holds the last state only, to start from; the workspace is the thread's.
  */
@@ -41,6 +44,9 @@ final class MultiPulseSolver implements LoadSolver {
   private static final ThreadLocal<ThreeLineBridge> WORK =
       ThreadLocal.withInitial(ThreeLineBridge::new);
   private static final double ROOT3 = Math.sqrt(3);
+
+  /** Largest multiplier of a stable state; a little over 1 for its own error. */
+  private static final double MOST_MULTIPLIER = 1.002;
 
   private final BridgeLoad load;
   private final double frequencyHz;
@@ -283,6 +289,22 @@ final class MultiPulseSolver implements LoadSolver {
         line[k][h] += (winding[k][h] - winding[(k + 2) % 3][h]) / ROOT3;
       }
     }
+  }
+
+  @Override
+  public List<String> remarks() {
+    double multiplier = newton.largestMultiplier();
+    return multiplier < MOST_MULTIPLIER ? List.of() : List.of(unstable(multiplier));
+  }
+
+  private String unstable(double multiplier) {
+    return String.format(
+        Locale.ROOT,
+        "the computed current repeats, but would not hold by itself: behind its chokes the"
+            + " capacitor is so small that with a load of constant power a small swing grows by"
+            + " %.2g %% in each %s. Figures are those of a drive whose control damps this.",
+        100 * (multiplier - 1),
+        periods == SIXTHS ? "sixth of a cycle" : periods == 2 ? "half cycle" : "cycle");
   }
 
   /** The recorded current of a line of the last solution. */

@@ -76,7 +76,7 @@ public final class LoadTrial {
       amps.add(Spectrum.of(h -> i[h]));
       volts.add(Spectrum.of(h -> v[h]));
     }
-    return TrialResult.of(amps, volts);
+    return TrialResult.of(amps, volts, solver.remarks());
   }
 
   /** One turn: the current at what is seen, the voltages it leaves, what is seen then. */

@@ -6,7 +6,6 @@ import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.site.ModelColumns;
 import java.util.List;
 import java.util.Optional;
-import java.util.OptionalDouble;
 import java.util.function.DoubleFunction;
 
 /** The same equipment in a row of states, each solved for itself. */
@@ -55,9 +54,6 @@ public final class Sweep {
   }
 
   private static ModelColumns fired(double degrees) {
-    OptionalDouble none = OptionalDouble.empty();
-    OptionalDouble firing = OptionalDouble.of(degrees);
-    return new ModelColumns(
-        none, none, none, none, none, none, none, none, none, firing, none, none, none, none);
+    return ModelColumns.NONE.with(ModelColumns.Column.FIRING_DEGREES, degrees);
   }
 }

@@ -17,22 +17,26 @@ import java.util.List;
  *
  * @param current of each line, rms amps
  * @param voltage of each port, rms volts; on three lines of each line to the common point
+ * @param remarks what has to be known of the current besides, in sentences
  */
-public record TrialResult(List<Spectrum> current, List<Spectrum> voltage) {
+public record TrialResult(
+    List<Spectrum> current, List<Spectrum> voltage, List<String> remarks) {
   /** Copies the lists. */
   public TrialResult {
     current = List.copyOf(current);
     voltage = List.copyOf(voltage);
+    remarks = List.copyOf(remarks);
   }
 
   /** Takes spectra of any time origin. */
-  static TrialResult of(List<Spectrum> current, List<Spectrum> voltage) {
+  static TrialResult of(
+      List<Spectrum> current, List<Spectrum> voltage, List<String> remarks) {
     Phasor reference =
         voltage.size() == 3
             ? SymmetricalComponents.of(voltage).positive().at(1)
             : voltage.get(0).at(1);
     double degrees = reference.degrees();
-    return new TrialResult(turned(current, degrees), turned(voltage, degrees));
+    return new TrialResult(turned(current, degrees), turned(voltage, degrees), remarks);
   }
 
   private static List<Spectrum> turned(List<Spectrum> spectra, double degrees) {

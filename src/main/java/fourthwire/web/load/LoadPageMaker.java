@@ -65,6 +65,7 @@ final class LoadPageMaker {
   private LoadPage page(String query, TrialResult all) {
     TrialResult unit = ofOneUnit(all);
     List<String> said = new ArrayList<>();
+    all.remarks().forEach(remark -> said.add(sentence(remark)));
     if (question.units() > 1) {
       said.add(
           words.of(
@@ -106,7 +107,8 @@ final class LoadPageMaker {
 
   private TrialResult ofOneUnit(TrialResult all) {
     double share = 1 / question.units();
-    return new TrialResult(all.current().stream().map(s -> s.times(share)).toList(), all.voltage());
+    return new TrialResult(
+        all.current().stream().map(s -> s.times(share)).toList(), all.voltage(), all.remarks());
   }
 
   /** The equipment's words with a capital. */

@@ -89,23 +89,10 @@ class LoadTrialTest {
   @CsvSource({"897, 4, 3.6, 0.087, 0.197", "716, 10, 4.7, 0.195, 0.187", "800, 10, 4, 0.05, 0.1"})
   void filtersThatRingWithTheSource(
       double watts, double units, double nanofaradPerW, double ohm, double reactance) {
-    OptionalDouble none = OptionalDouble.empty();
     ModelColumns filter =
-        new ModelColumns(
-            none,
-            none,
-            none,
-            none,
-            none,
-            none,
-            none,
-            none,
-            none,
-            none,
-            OptionalDouble.of(nanofaradPerW * 1e-3 * watts),
-            none,
-            OptionalDouble.of(1.5),
-            none);
+        ModelColumns.NONE
+            .with(ModelColumns.Column.INPUT_FILTER_UF, nanofaradPerW * 1e-3 * watts)
+            .with(ModelColumns.Column.RESIDUAL_PERCENT, 1.5);
     TrialSource source = source(230, ohm, reactance, FLAT);
     TrialResult result =
         LoadTrial.solve(request(LoadKind.PFC_CONTINUOUS, watts, units).withColumns(filter), source);

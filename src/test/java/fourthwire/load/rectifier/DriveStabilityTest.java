@@ -1,0 +1,62 @@
+package fourthwire.load.rectifier;
+
+import static org.assertj.core.api.Assertions.assertThat;
+
+import fourthwire.load.model.PortSpectra;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvSource;
+
+/**
+ * Where a drive's state is stable, against the averaged circuit of a bridge with constant power
+ * behind it: L·di/dt = V - R·i - v, C·dv/dt = i - P/v has R·C·v² > L·P as the condition of
+ * Routh and Hurwitz, with R the circuit's resistances, both diodes' slope and 6·f·L of each line
+ * for the overlap (the commutation drop of power electronics' textbooks), L two lines' and the
+ * choke's. It holds where the ring is slow against the ripple of six pulses.
+ */
+class DriveStabilityTest {
+  private static final double WATTS = 11e3;
+  private static final double HERTZ = 50;
+  private static final double BASE_OHM = 400 * 400 / WATTS;
+  private static final double OMEGA = 2 * Math.PI * HERTZ;
+  private static final Diode DIODE = new Diode(3e-11, 1.2, 1e-3);
+
+  /** How far from the averaged circuit's capacitor the true limit may lie. */
+  private static final double BAND = 0.08;
+
+  @ParameterizedTest(name = "line choke {0} %, direct {1} %, resistance {2} %")
+  @CsvSource({"0, 4, 0.3", "0, 4, 0.5", "0, 8, 1", "3, 4, 0.3"})
+  void aDriveIsStableAsFarAsItsAveragedCircuitIs(double line, double direct, double resistance) {
+    double lineOhm = line / 100 * BASE_OHM;
+    double directOhm = direct / 100 * BASE_OHM;
+    double ohm = resistance / 100 * BASE_OHM;
+    double limit = limitF(lineOhm / OMEGA, directOhm / OMEGA, ohm);
+    assertThat(remarks(lineOhm, directOhm, ohm, limit * (1 + BAND))).isEmpty();
+    assertThat(remarks(lineOhm, directOhm, ohm, limit * (1 - BAND)))
+        .singleElement()
+        .asString()
+        .contains("would not hold by itself");
+  }
+
+  private static java.util.List<String> remarks(
+      double lineOhm, double directOhm, double ohm, double farad) {
+    BridgeLoad load =
+        new BridgeLoad(WATTS, farad, ohm, lineOhm / OMEGA, 0, directOhm / OMEGA, DIODE);
+    MultiPulseSolver solver = new MultiPulseSolver(1, load, HERTZ);
+    PortSpectra emf = new PortSpectra(3);
+    for (int k = 0; k < 3; k++) {
+      emf.re[k][1] = 400 / Math.sqrt(3) * Math.cos(2 * Math.PI / 3 * k);
+      emf.im[k][1] = -400 / Math.sqrt(3) * Math.sin(2 * Math.PI / 3 * k);
+    }
+    solver.solve(emf, 0, 0, new PortSpectra(3));
+    return solver.remarks();
+  }
+
+  private static double limitF(double lineHenry, double directHenry, double ohm) {
+    double overlapOhm = 6 * HERTZ * lineHenry;
+    double mean = 3 / Math.PI * Math.sqrt(2) * 400 - 2 * DIODE.drop(WATTS / 540);
+    double volts = mean - (overlapOhm + 2 * ohm) * WATTS / mean;
+    double diodeOhm = 2 * (DIODE.slopeV() * volts / WATTS + DIODE.ohm());
+    double henry = 2 * lineHenry + directHenry;
+    return WATTS * henry / ((2 * ohm + overlapOhm + diodeOhm) * volts * volts);
+  }
+}
