@@ -40,7 +40,7 @@ class UnstableDriveTest {
     SurveyBuilder b =
         new SurveyBuilder(50).supply("S", 400, 10, 10).panel("P", "S", ohms(0.02, 0.02, 0, 0));
     drive(b, "fan", ModelColumns.NONE.with(Column.DC_CHOKE_PERCENT, 4));
-    drive(b, "pump", ModelColumns.NONE.with(Column.LINE_CHOKE_PERCENT, 3));
+    drive(b, "pump", ModelColumns.NONE);
     return new HarmonicAudit()
         .run(new AuditRequest(b.build(), Optional.empty(), Map.of()), Progress.SILENT);
   }

@@ -19,8 +19,9 @@ import java.util.Locale;
  *
  * <p>The state given repeats as the voltage does: with mirrored halves where the voltage has them.
  * With a small capacitor behind chokes it may be unstable (a multiplier of the map beyond the unit
- * circle): ideal constant power is a negative resistance to small changes, and a simulated circuit
- * then hunts, or settles with even orders after the whole cycle. Real converters, whose control is
+ * circle): ideal constant power is a negative resistance to small changes, and where chokes and
+ * capacitor ring at half the ripple's frequency every other pulse grows. A simulated circuit then
+ * hunts, or settles with even orders after the whole cycle. Real converters, whose control is
  * slower than that and whose chokes and capacitors lose more, are measured with odd orders only
  * (the reactor tables that the presets are held to); so that state is given, no other looked for,
  * and {@link #remarks} says so. Single-phase supplies, which have no such control, are refused in
@@ -300,9 +301,9 @@ final class MultiPulseSolver implements LoadSolver {
   private String unstable(double multiplier) {
     return String.format(
         Locale.ROOT,
-        "the computed current repeats, but would not hold by itself: behind its chokes the"
-            + " capacitor is so small that with a load of constant power a small swing grows by"
-            + " %.2g %% in each %s. Figures are those of a drive whose control damps this.",
+        "the computed current repeats, but would not hold by itself: with a load of constant power"
+            + " chokes and capacitor swing, a small departure growing by %.2g %% in each %s."
+            + " Figures are those of a drive whose control damps this.",
         100 * (multiplier - 1),
         periods == SIXTHS ? "sixth of a cycle" : periods == 2 ? "half cycle" : "cycle");
   }

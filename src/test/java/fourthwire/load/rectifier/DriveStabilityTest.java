@@ -3,6 +3,7 @@ package fourthwire.load.rectifier;
 import static org.assertj.core.api.Assertions.assertThat;
 
 import fourthwire.load.model.PortSpectra;
+import java.util.List;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 
@@ -37,7 +38,7 @@ class DriveStabilityTest {
         .contains("would not hold by itself");
   }
 
-  private static java.util.List<String> remarks(
+  private static List<String> remarks(
       double lineOhm, double directOhm, double ohm, double farad) {
     BridgeLoad load =
         new BridgeLoad(WATTS, farad, ohm, lineOhm / OMEGA, 0, directOhm / OMEGA, DIODE);
