@@ -14,6 +14,11 @@ abstract class LoopBridge {
 
   private static final double[] COARSE_GRADING = {0.1, 0.4, 1};
 
+  /** Longest step as a share of √(LC). */
+  private static final double STEP_OF_RING = 0.3;
+
+  private static final double MOST_DIVISIONS = 4;
+
   /** Cells to a coarse step where the circuit does not ring within one. */
   private static final double COARSE_CELLS = 4;
 
@@ -91,7 +96,7 @@ abstract class LoopBridge {
 
   /** Steps as long as accuracy bears. */
   final void fine() {
-    stride = pair.nextNode(0);
+    stride = longest();
     grading = GRADING;
     leaveWidth = EVENT_CELLS;
     joinWidth = JOIN_CELLS;
@@ -99,11 +104,17 @@ abstract class LoopBridge {
 
   /** Longer steps: good enough to come near a steady state. */
   final void coarse() {
-    double shortest = pair.nextNode(0);
-    stride = shortest < 1 ? 2 * shortest : COARSE_CELLS;
+    double fine = longest();
+    stride = fine < 1 ? 2 * fine : COARSE_CELLS;
     grading = COARSE_GRADING;
     leaveWidth = COARSE_EVENT_CELLS;
     joinWidth = COARSE_EVENT_CELLS;
+  }
+
+  /** A cell, divided where the circuit would ring within one. */
+  private double longest() {
+    double ring = Math.sqrt(pair.inductance * pair.capacitance);
+    return 1 / Math.min(MOST_DIVISIONS, Math.ceil(1 / (STEP_OF_RING * ring + 1e-9)));
   }
 
   private double nextNode(double position) {

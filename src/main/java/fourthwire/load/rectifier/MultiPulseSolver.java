@@ -313,6 +313,11 @@ final class MultiPulseSolver implements LoadSolver {
     return bridge.trace[line];
   }
 
+  /** Currents of the second bridge's windings in the last solution on this thread. */
+  PortSpectra secondBridge() {
+    return bridge.second;
+  }
+
   /** How many times what was recorded, with the lines exchanged, makes up the cycle. */
   int periods() {
     return periods;

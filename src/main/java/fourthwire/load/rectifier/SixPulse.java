@@ -1,8 +1,5 @@
 package fourthwire.load.rectifier;
 
-import fourthwire.load.model.LoadModel;
-import fourthwire.load.model.LoadSolver;
-
 /**
  * {@code six-pulse}: three-phase diode bridge with line and direct-current chokes, a smoothing
  * capacitor and a constant-power load: the input of most drives.
@@ -20,32 +17,9 @@ import fourthwire.load.model.LoadSolver;
  * the same diodes (test resources {@code load/rectifiers}); expected error 0.4 % of the fundamental
  * at each order to 39.
  */
-public final class SixPulse implements LoadModel {
-  private final BridgeLoad load;
-  private final double frequencyHz;
-
+public final class SixPulse extends ThreeLineRectifier {
+  /** All units of a row together. */
   public SixPulse(BridgeLoad load, double frequencyHz) {
-    this.load = load;
-    this.frequencyHz = frequencyHz;
-  }
-
-  @Override
-  public int ports() {
-    return 3;
-  }
-
-  @Override
-  public void linearSiemens(double order, double[] y) {
-    java.util.Arrays.fill(y, 0, 6, 0);
-  }
-
-  @Override
-  public boolean isLinear() {
-    return false;
-  }
-
-  @Override
-  public LoadSolver newSolver() {
-    return new MultiPulseSolver(1, load, frequencyHz);
+    super(1, load, frequencyHz);
   }
 }

@@ -1,8 +1,5 @@
 package fourthwire.load.rectifier;
 
-import fourthwire.load.model.LoadModel;
-import fourthwire.load.model.LoadSolver;
-
 /**
  * {@code twelve-pulse}: two six-pulse bridges on one capacitor with a constant-power load, behind
  * lossless windings of 0° and 30°: the input of large drives and supplies.
@@ -22,32 +19,9 @@ import fourthwire.load.model.LoadSolver;
  * same diodes (test resources {@code load/rectifiers}); expected error 0.4 % of the fundamental at
  * each order to 39.
  */
-public final class TwelvePulse implements LoadModel {
-  private final BridgeLoad load;
-  private final double frequencyHz;
-
+public final class TwelvePulse extends ThreeLineRectifier {
+  /** All units of a row together. */
   public TwelvePulse(BridgeLoad load, double frequencyHz) {
-    this.load = load;
-    this.frequencyHz = frequencyHz;
-  }
-
-  @Override
-  public int ports() {
-    return 3;
-  }
-
-  @Override
-  public void linearSiemens(double order, double[] y) {
-    java.util.Arrays.fill(y, 0, 6, 0);
-  }
-
-  @Override
-  public boolean isLinear() {
-    return false;
-  }
-
-  @Override
-  public LoadSolver newSolver() {
-    return new MultiPulseSolver(2, load, frequencyHz);
+    super(2, load, frequencyHz);
   }
 }

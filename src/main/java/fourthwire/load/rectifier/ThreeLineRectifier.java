@@ -1,0 +1,37 @@
+package fourthwire.load.rectifier;
+
+import fourthwire.load.model.LoadModel;
+import fourthwire.load.model.LoadSolver;
+
+/** Bridges on three lines as the network sees them: a current that is injected, nothing linear. */
+abstract class ThreeLineRectifier implements LoadModel {
+  private final int bridges;
+  private final BridgeLoad load;
+  private final double frequencyHz;
+
+  ThreeLineRectifier(int bridges, BridgeLoad load, double frequencyHz) {
+    this.bridges = bridges;
+    this.load = load;
+    this.frequencyHz = frequencyHz;
+  }
+
+  @Override
+  public final int ports() {
+    return 3;
+  }
+
+  @Override
+  public final void linearSiemens(double order, double[] y) {
+    java.util.Arrays.fill(y, 0, 6, 0);
+  }
+
+  @Override
+  public final boolean isLinear() {
+    return false;
+  }
+
+  @Override
+  public final LoadSolver newSolver() {
+    return new MultiPulseSolver(bridges, load, frequencyHz);
+  }
+}
