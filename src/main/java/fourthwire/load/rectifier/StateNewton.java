@@ -35,6 +35,9 @@ final class StateNewton {
   private static final int MOST_TURNS = 40;
   private static final int MOST_COARSE_TURNS = 10;
 
+  /** A step that leads away is halved, at most so often. */
+  private static final int MOST_HALVINGS = 3;
+
   /** Currents of the lines, then the voltage. */
   final double[] state;
 
@@ -42,6 +45,12 @@ final class StateNewton {
   private final int volts;
   private final int linesOfOne;
   private final double[] image;
+
+  /** Where the last step was taken from, what it was to better, and whether it was Newton's. */
+  private final double[] origin;
+
+  private double before;
+  private boolean stepped;
   private final double[] nudged;
 
   /** Departures of the state along each unknown, then of its image. */
@@ -69,6 +78,7 @@ final class StateNewton {
     volts = lines;
     state = new double[lines + 1];
     image = new double[lines + 1];
+    origin = new double[lines + 1];
     nudged = new double[lines + 1];
     columns = new double[LoopTangent.MOST][lines + 1];
   }
@@ -102,16 +112,42 @@ final class StateNewton {
 
   /** Moves the state until it closes on itself; false where it does not. */
   boolean converge() {
+    stepped = false;
+    int halvings = 0;
     for (int n = 0; n < MOST_TURNS; n++) {
-      if (!follow()) {
-        return false;
-      }
-      if (closed(n < MOST_TURNS - 1 ? 1 : AT_A_JUMP)) {
+      boolean through = follow();
+      if (through && closed(n < MOST_TURNS - 1 ? 1 : AT_A_JUMP)) {
         return true;
       }
-      advance();
+      if (stepped && halvings < MOST_HALVINGS && !(through && defect() < before)) {
+        halvings++;
+        stepHalf();
+      } else if (through) {
+        halvings = 0;
+        before = defect();
+        advance();
+      } else {
+        return false;
+      }
     }
     return false;
+  }
+
+  /** How far the image is from the state, in units of {@link #scaleOf}. */
+  private double defect() {
+    double sum = 0;
+    for (int k = 0; k <= volts; k++) {
+      double part = (image[k] - state[k]) / scaleOf(k);
+      sum += part * part;
+    }
+    return Math.sqrt(sum);
+  }
+
+  /** Half way back to where the last step was taken. */
+  private void stepHalf() {
+    for (int k = 0; k <= volts; k++) {
+      state[k] = 0.5 * (state[k] + origin[k]);
+    }
   }
 
   /**
@@ -151,7 +187,9 @@ final class StateNewton {
 
   /** By Newton's step where that can be taken, else to the image. */
   private void advance() {
-    if (!(sameLines() && solve() && accept())) {
+    System.arraycopy(state, 0, origin, 0, volts + 1);
+    stepped = sameLines() && solve() && accept();
+    if (!stepped) {
       System.arraycopy(image, 0, state, 0, volts + 1);
     }
   }
