@@ -80,7 +80,6 @@ public record ModelColumns(
 
   /** These columns, and where one is empty the other's. */
   public ModelColumns orElse(ModelColumns other) {
-    return of(
-        column -> column.in(this).isPresent() ? column.in(this) : column.in(other));
+    return of(column -> column.in(this).isPresent() ? column.in(this) : column.in(other));
   }
 }

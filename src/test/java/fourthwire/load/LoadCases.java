@@ -31,8 +31,7 @@ final class LoadCases {
   /** One rectifier at 230 V with a choke of so many percent behind its bridge. */
   static LoadRequest choked(double watts, double demand, double dcPercent) {
     LoadRequest plain = request(LoadKind.CAPACITOR_INPUT_CHOKE, watts, 1, demand);
-    ModelColumns columns =
-        ModelColumns.NONE.with(ModelColumns.Column.DC_CHOKE_PERCENT, dcPercent);
+    ModelColumns columns = ModelColumns.NONE.with(ModelColumns.Column.DC_CHOKE_PERCENT, dcPercent);
     return new LoadRequest(
         plain.kind(),
         plain.ports(),

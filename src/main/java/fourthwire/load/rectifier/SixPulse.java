@@ -12,10 +12,10 @@ package fourthwire.load.rectifier;
  * cycle ({@link MultiPulseSolver}).
  *
  * <p>Assumed: constant power on the direct-current side, linear chokes. Overlap of four lines (a
- * short-circuited drive) is outside its validity. A capacitor so small that the state would not hold
- * at constant power is given with a remark (stable where R·C·v² > L·P, about). Checked against circuit-simulator results with
- * the same diodes (test resources {@code load/rectifiers}); expected error 0.4 % of the fundamental
- * at each order to 39.
+ * short-circuited drive) is outside its validity. A capacitor so small that the state would not
+ * hold at constant power is given with a remark (stable where R·C·v² > L·P, about). Checked against
+ * circuit-simulator results with the same diodes (test resources {@code load/rectifiers}); expected
+ * error 0.4 % of the fundamental at each order to 39.
  */
 public final class SixPulse extends ThreeLineRectifier {
   /** All units of a row together. */

@@ -19,8 +19,7 @@ import java.util.List;
  * @param voltage of each port, rms volts; on three lines of each line to the common point
  * @param remarks what has to be known of the current besides, in sentences
  */
-public record TrialResult(
-    List<Spectrum> current, List<Spectrum> voltage, List<String> remarks) {
+public record TrialResult(List<Spectrum> current, List<Spectrum> voltage, List<String> remarks) {
   /** Copies the lists. */
   public TrialResult {
     current = List.copyOf(current);
@@ -29,8 +28,7 @@ public record TrialResult(
   }
 
   /** Takes spectra of any time origin. */
-  static TrialResult of(
-      List<Spectrum> current, List<Spectrum> voltage, List<String> remarks) {
+  static TrialResult of(List<Spectrum> current, List<Spectrum> voltage, List<String> remarks) {
     Phasor reference =
         voltage.size() == 3
             ? SymmetricalComponents.of(voltage).positive().at(1)

@@ -9,10 +9,10 @@ import org.junit.jupiter.params.provider.CsvSource;
 
 /**
  * Where a drive's state is stable, against the averaged circuit of a bridge with constant power
- * behind it: L·di/dt = V - R·i - v, C·dv/dt = i - P/v has R·C·v² > L·P as the condition of
- * Routh and Hurwitz, with R the circuit's resistances, both diodes' slope and 6·f·L of each line
- * for the overlap (the commutation drop of power electronics' textbooks), L two lines' and the
- * choke's. It holds where the ring is slow against the ripple of six pulses.
+ * behind it: L·di/dt = V - R·i - v, C·dv/dt = i - P/v has R·C·v² > L·P as the condition of Routh
+ * and Hurwitz, with R the circuit's resistances, both diodes' slope and 6·f·L of each line for the
+ * overlap (the commutation drop of power electronics' textbooks), L two lines' and the choke's. It
+ * holds where the ring is slow against the ripple of six pulses.
  */
 class DriveStabilityTest {
   private static final double WATTS = 11e3;
@@ -38,8 +38,7 @@ class DriveStabilityTest {
         .contains("would not hold by itself");
   }
 
-  private static List<String> remarks(
-      double lineOhm, double directOhm, double ohm, double farad) {
+  private static List<String> remarks(double lineOhm, double directOhm, double ohm, double farad) {
     BridgeLoad load =
         new BridgeLoad(WATTS, farad, ohm, lineOhm / OMEGA, 0, directOhm / OMEGA, DIODE);
     MultiPulseSolver solver = new MultiPulseSolver(1, load, HERTZ);
