@@ -33,11 +33,23 @@ final class CapacitorInputSolver implements LoadSolver {
 
   private static final double COARSEST = 5e-7;
 
+  /** A pulse's current, times power over crest. */
+  private static final double PULSE = 3;
+
   /** No source rings a loaded capacitor up to so many times the crest. */
   private static final double MOST_RESONANCE = 10;
 
-  /** Defect at which a coarse search ends, as a share of the crest. */
-  private static final double NEAR = 2e-3;
+  /** Defect of energy at which a coarse search ends, as a share of what the load draws in a half. */
+  private static final double NEAR = 0.03;
+
+  /** Steps of that search, times the accurate ones. */
+  private static final double COARSE = 2;
+
+  /**
+   * A defect in that measure from which on the march is taken to the state by its derivatives: what
+   * that leaves out is of second order, about a millionth.
+   */
+  private static final double SHIFT = 2e-3;
 
   /** A capacitor that rings with its source can be charged over the crest, less than to twice. */
   private static final double MOST_CHARGE = 2;
@@ -78,6 +90,8 @@ final class CapacitorInputSolver implements LoadSolver {
   private double peak;
   private double toleranceV;
   private double jumpV;
+  private double nearV;
+  private double shiftV;
   private double section;
   private boolean halfWave;
   private double lastV;
@@ -145,6 +159,8 @@ final class CapacitorInputSolver implements LoadSolver {
     }
     double perEnergy = load.powerW() / (2 * frequencyHz * load.capacitanceF() * peak);
     toleranceV = Math.max(FINEST * peak, Math.min(COARSEST * peak, TOLERANCE * perEnergy));
+    nearV = NEAR * perEnergy;
+    shiftV = SHIFT * perEnergy;
     jumpV = Math.max(toleranceV, JUMP * perEnergy);
     bridge.floorV = LEAST_SHARE * peak;
     bridge.ceilingV = MOST_RESONANCE * peak;
@@ -154,6 +170,7 @@ final class CapacitorInputSolver implements LoadSolver {
         load.lineOhm() + seriesOhm + load.dcOhm(), henry + load.dcHenry(), load, cellSeconds);
     bridge.directShare = load.dcHenry() > 0 ? load.dcHenry() / (henry + load.dcHenry()) : 0;
     bridge.path.threshold(1e-3 * load.powerW() / peak);
+    bridge.length.set(PULSE * load.powerW() / peak);
     halfWave = table.halfWave;
     section = sectionAfterCrossing(emf.re[0][1], emf.im[0][1]);
   }
@@ -192,12 +209,17 @@ final class CapacitorInputSolver implements LoadSolver {
   private boolean discontinuous() {
     double v = firstGuess();
     if (lastV == 0) {
-      bridge.path.coarse();
-      double near = newton(v, NEAR * peak, NEAR * peak);
-      bridge.path.fine();
+      bridge.length.scale(COARSE);
+      double near = newton(v, nearV, nearV);
+      bridge.length.scale(1);
       v = near > 0 ? near - (bridge.v - near) / slope() : v;
     }
-    double found = newton(v, toleranceV, jumpV);
+    double found = newton(v, shiftV, shiftV);
+    if (found > 0) {
+      double shift = (found - bridge.v) / slope();
+      bridge.trace.shift(shift);
+      found += shift;
+    }
     return found > 0 && found(0, found);
   }
 

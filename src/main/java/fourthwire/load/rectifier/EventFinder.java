@@ -3,8 +3,9 @@ package fourthwire.load.rectifier;
 /**
  * Finds where a margin rises through zero: the moment at which a diode starts or ends conducting.
  *
- * <p>Regula falsi with halving of the side that stands still (the Illinois rule; Dowell and
- * Jarratt, "A modified regula falsi method", BIT 11, 1971).
+ * <p>Regula falsi, the side that stands still being weighed down by a parabola through the last
+ * three points (Anderson and Björck, "A new high order method of regula falsi type for computing a
+ * root of an equation", BIT 13, 1973).
  */
 final class EventFinder {
   private static final int MOST_TRIES = 60;
@@ -43,23 +44,30 @@ final class EventFinder {
     for (int n = 0; n < MOST_TRIES && b - a > width; n++) {
       double x = b - gb * (b - a) / (gb - ga);
       double g = margin.at(x);
+      boolean again = lastIsHigh == g >= 0;
       lastIsHigh = g >= 0;
       if (lastIsHigh) {
+        ga *= again ? left(g, gb) : 1;
         b = x;
         gb = g;
-        ga /= 2;
         if (g <= close) {
           break;
         }
       } else {
+        gb *= again ? left(g, ga) : 1;
         a = x;
         ga = g;
-        gb /= 2;
       }
     }
     if (!lastIsHigh) {
       margin.at(b);
     }
     return b;
+  }
+
+  /** What is left of the far side's margin when the near side's goes from one value to another. */
+  private static double left(double to, double from) {
+    double share = 1 - to / from;
+    return share > 0 ? share : 0.5;
   }
 }

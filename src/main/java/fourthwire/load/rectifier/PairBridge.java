@@ -10,14 +10,15 @@ package fourthwire.load.rectifier;
  * thread-safe.
  */
 final class PairBridge {
-  /** First steps after a turn-on, as shares of the way to a node: the current starts like t². */
-  private static final double[] GRADING = {0.02, 0.06, 0.14, 0.3, 0.6, 1};
-
   private static final int MOST_SWITCHINGS = 200;
   private static final double EVENT_CELLS = 1e-7;
 
+  /** Cells since the turn-on of a current that flows already: no step is short for that. */
+  private static final double LONG_AGO = 10;
+
   final CycleTable emf = new CycleTable();
   final PathStep path = new PathStep();
+  final StepLength length = new StepLength(path);
   final PulseTrace trace = new PulseTrace();
   final PathTangent tangent = new PathTangent();
 
@@ -42,11 +43,15 @@ final class PairBridge {
   /** Capacitor voltage. */
   double v;
 
+  private final SmoothStep smooth = new SmoothStep(path);
   private final Discharge discharge = new Discharge(new Size(), path);
   private final EventFinder.Margin shortfall = this::shortfall;
 
   /** Position in cells. */
   private double u;
+
+  /** Where the pulse began. */
+  private double began;
 
   /** Direction of the current and its size at the start of a step. */
   private int sign;
@@ -128,43 +133,46 @@ final class PairBridge {
     amps = starting ? path.threshold : Math.abs(i);
     trace.start(u, sign * amps);
     driveAfter = sign * emf.at(u);
-    double base = u;
-    double span = Math.min(path.nextNode(path.nextNode(u)), to) - u;
-    int graded = starting ? 0 : GRADING.length;
+    began = starting ? u : u - LONG_AGO;
     while (u < to && amps > 0 && v > floorV && v < ceilingV) {
-      advance(
-          graded < GRADING.length
-              ? base + GRADING[graded++] * span
-              : Math.min(path.nextNode(u), to));
+      advance(to);
     }
     i = sign * amps;
   }
 
-  /** One step to a position, or to where the current ends before. */
-  private void advance(double next) {
-    double h = next - u;
+  /** One step towards a position, or to where the current ends before. */
+  private void advance(double to) {
     drive = driveAfter;
     driveSlope = sign * emf.slopeAt(u);
+    double h = Math.min(length.next(u - began, amps, path.push(amps, v, drive)), to - u);
     double missing = shortfall(h);
     boolean ends = missing > 0;
     if (ends) {
-      double close = 0.1 * path.threshold;
+      double close = path.threshold;
       h = EventFinder.find(shortfall, 0, path.threshold - amps, h, missing, EVENT_CELLS, close);
     }
     double end = ends ? 0 : path.i;
     double charge = path.charge(h, v);
+    double gain = tangent.vv;
     tangent.step(path, sign, h, 0.5 * (amps + path.i), 0.5 * (v + path.v));
-    u = ends ? u + h : next;
+    u = ends || h < to - u ? u + h : to;
     v = path.v;
     amps = end;
     freewheels |= directShare > 0 && directShare * driveAfter + (1 - directShare) * v < 0;
     trace.next(u, sign * end, sign * charge);
+    trace.gains(tangent.iv, sign * path.capacitance * (tangent.vv - gain));
   }
 
   /** Steps by h cells; by how much the current falls short of the threshold then. */
   private double shortfall(double h) {
     driveAfter = sign * emf.at(u + h);
-    path.step(h, amps, v, drive, driveSlope, driveAfter);
+    if (length.stiff) {
+      path.step(h, amps, v, drive, driveSlope, driveAfter);
+    } else {
+      double second = sign * emf.at(u + SmoothStep.SECOND * h);
+      double third = sign * emf.at(u + SmoothStep.THIRD * h);
+      smooth.step(h, amps, v, drive, driveSlope, second, third);
+    }
     return path.threshold - path.i;
   }
 }

@@ -17,6 +17,9 @@ final class PathStep {
 
   private static final int MOST_DIVISIONS = 4;
 
+  /** A share by which a current may change for the series of its drop: left out are 1e-8 of nVt. */
+  private static final double NEAR = 0.03;
+
   /** Ohms: inductance over the length of a cell. */
   double inductance;
 
@@ -35,6 +38,8 @@ final class PathStep {
   /** Amps of saturation. */
   double saturation;
 
+  private double perSaturation;
+
   /** Amps under which a path counts as open; below it the drop is held. */
   double threshold;
 
@@ -44,18 +49,21 @@ final class PathStep {
   /** Both diodes' logarithmic drop at the threshold, volts. */
   private double thresholdV;
 
+  /** Cells in a radian of the swing between inductance and capacitor: √(LC). */
+  double ring;
+
   private int division;
-
-  /** Places to step to in a cell, and the cells from one to the next. */
-  private double perCell;
-
-  private double stride;
 
   /** Result of the last step: amps. */
   double i;
 
   /** Result of the last step: capacitor volts. */
   double v;
+
+  /** A current whose drop is known: that of the last step's end, or of its start. */
+  private double knownAmps = Double.NaN;
+
+  private double knownDrop;
 
   void set(double resistance, double inductance, BridgeLoad load, double cellSeconds) {
     this.resistance = resistance + 2 * load.diode().ohm();
@@ -64,36 +72,38 @@ final class PathStep {
     this.power = load.powerW();
     this.slopeV = 2 * load.diode().slopeV();
     this.saturation = load.diode().saturationA();
-    double ring = Math.sqrt(this.inductance * this.capacitance);
+    this.perSaturation = 1 / saturation;
+    this.knownAmps = Double.NaN;
+    ring = Math.sqrt(this.inductance * this.capacitance);
     this.division = (int) Math.min(MOST_DIVISIONS, Math.ceil(1 / (STEP_OF_RING * ring + 1e-9)));
-    fine();
-  }
-
-  /** Steps as long as accuracy bears. */
-  void fine() {
-    perCell = division;
-    stride = 1.0 / division;
-  }
-
-  /** Steps of two cells: good enough to come near a steady state. */
-  void coarse() {
-    perCell = 0.5;
-    stride = 2;
   }
 
   /** The next place to step to: cells are divided where the path would ring within one. */
   double nextNode(double position) {
-    return (Math.floor(position * perCell + 1e-9) + 1) * stride;
+    return (Math.floor(position * division + 1e-9) + 1) / division;
   }
 
   void threshold(double amps) {
     threshold = amps;
-    thresholdV = slopeV * QuickLog.of(1 + amps / saturation);
+    thresholdV = slopeV * Math.log(1 + amps / saturation);
+    knownAmps = Double.NaN;
     onsetV = thresholdV + resistance * amps;
   }
 
-  private double drop(double amps) {
-    return amps > threshold ? slopeV * QuickLog.of(1 + amps / saturation) : thresholdV;
+  /** Volts that both diodes take but for their resistance; below the threshold as at it. */
+  double drop(double amps) {
+    return amps > threshold ? slopeV * QuickLog.of(1 + amps * perSaturation) : thresholdV;
+  }
+
+  /**
+   * The drop near a current at which it is known: ln(1 + x) by its series where x is small, which
+   * is there sooner than a logarithm.
+   */
+  double drop(double amps, double near, double dropThere) {
+    double x = (amps - near) / (near + saturation);
+    return amps > threshold && near > threshold && Math.abs(x) < NEAR
+        ? dropThere + slopeV * (x - x * x * (0.5 - x * (1.0 / 3 - 0.25 * x)))
+        : drop(amps);
   }
 
   /** Slope of both diodes' logarithmic drop, ohms. */
@@ -101,17 +111,35 @@ final class PathStep {
     return amps >= threshold ? slopeV / (amps + saturation) : 0;
   }
 
+  /** What is left of a drive for the inductance: L·di/dt, volts. */
+  double push(double amps, double volts, double drive) {
+    if (amps != knownAmps) {
+      knownAmps = amps;
+      knownDrop = drop(amps);
+    }
+    return drive - volts - resistance * amps - knownDrop;
+  }
+
+  /** Sets a step's result, with the drop of its current. */
+  void end(double amps, double volts, double drop) {
+    i = amps;
+    v = volts;
+    knownAmps = amps;
+    knownDrop = drop;
+  }
+
   /** Steps from (i0, v0) over h cells while the drive goes from e0 (slope d0 per cell) to e1. */
   void step(double h, double i0, double v0, double e0, double d0, double e1) {
     double rate = 1 / h;
     double lh = inductance * rate;
     double ch = capacitance * rate;
-    double drawn = power / v0;
+    double perVolt = 1 / v0;
+    double drawn = power * perVolt;
     double a = 2 * lh + resistance + diodeOhm(i0);
-    double d = 2 * ch - drawn / v0;
+    double d = 2 * ch - drawn * perVolt;
     double det = 1 / (a * d + 1);
 
-    double f1 = e0 - v0 - resistance * i0 - drop(i0);
+    double f1 = push(i0, v0, e0);
     double f2 = i0 - drawn;
     double hd = h * d0;
     double r1 = f1 + 0.5 * hd;
@@ -126,17 +154,20 @@ final class PathStep {
 
     double yi = i0 + 2 * u1i;
     double yv = v0 + 2 * u1v;
-    r1 = e1 - yv - resistance * yi - drop(yi) + lh * (u1i - u2i);
+    double drop3 = drop(yi);
+    r1 = e1 - yv - resistance * yi - drop3 + lh * (u1i - u2i);
     r2 = yi - power / yv + ch * (u1v - u2v);
     double u3i = (r1 * d - r2) * det;
     double u3v = (a * r2 + r1) * det;
 
+    double y3i = yi;
     yi += u3i;
     yv += u3v;
-    r1 = e1 - yv - resistance * yi - drop(yi) + lh * (u1i - u2i - (8.0 / 3) * u3i);
+    double drop4 = drop(yi, y3i, drop3);
+    r1 = e1 - yv - resistance * yi - drop4 + lh * (u1i - u2i - (8.0 / 3) * u3i);
     r2 = yi - power / yv + ch * (u1v - u2v - (8.0 / 3) * u3v);
-    i = yi + (r1 * d - r2) * det;
-    v = yv + (a * r2 + r1) * det;
+    double u4i = (r1 * d - r2) * det;
+    end(yi + u4i, yv + (a * r2 + r1) * det, drop(yi + u4i, yi, drop4));
   }
 
   /** Charge of the last step from its voltages, in amp-cells: C·Δv and what the load took. */

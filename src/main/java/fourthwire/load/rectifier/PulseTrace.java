@@ -30,6 +30,8 @@ final class PulseTrace {
   private boolean[] starts = new boolean[256];
   private double[] slope = new double[256];
   private double[] charge = new double[256];
+  private double[] ampsGain = new double[256];
+  private double[] chargeGain = new double[256];
   private int size;
 
   /** The polynomial of one interval: its origin, what a cell is to it, and its coefficients. */
@@ -61,6 +63,23 @@ final class PulseTrace {
     charge[size - 1] = ampCells;
   }
 
+  /**
+   * Gives the derivatives of the last node's current and charge by the voltage at the start, for
+   * {@link #shift}.
+   */
+  void gains(double ampsPerVolt, double ampCellsPerVolt) {
+    ampsGain[size - 1] = ampsPerVolt;
+    chargeGain[size - 1] = ampCellsPerVolt;
+  }
+
+  /** Takes the record to a voltage at the start that is a little higher, to first order. */
+  void shift(double volts) {
+    for (int n = 0; n < size; n++) {
+      amps[n] += ampsGain[n] * volts;
+      charge[n] += chargeGain[n] * volts;
+    }
+  }
+
   private void append(double at, double value, boolean start) {
     if (size == position.length) {
       grow();
@@ -68,6 +87,8 @@ final class PulseTrace {
     position[size] = at;
     amps[size] = value;
     starts[size] = start;
+    ampsGain[size] = 0;
+    chargeGain[size] = 0;
     size++;
   }
 
@@ -80,6 +101,8 @@ final class PulseTrace {
     starts = Arrays.copyOf(starts, 2 * size);
     slope = Arrays.copyOf(slope, 2 * size);
     charge = Arrays.copyOf(charge, 2 * size);
+    ampsGain = Arrays.copyOf(ampsGain, 2 * size);
+    chargeGain = Arrays.copyOf(chargeGain, 2 * size);
   }
 
   /**
