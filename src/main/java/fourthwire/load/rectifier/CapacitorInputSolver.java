@@ -39,7 +39,9 @@ final class CapacitorInputSolver implements LoadSolver {
   /** No source rings a loaded capacitor up to so many times the crest. */
   private static final double MOST_RESONANCE = 10;
 
-  /** Defect of energy at which a coarse search ends, as a share of what the load draws in a half. */
+  /**
+   * Defect of energy at which a coarse search ends, as a share of what the load draws in a half.
+   */
   private static final double NEAR = 0.03;
 
   /** Steps of that search, times the accurate ones. */

@@ -2,8 +2,8 @@ package fourthwire.load.rectifier;
 
 /**
  * How long the steps of a pulse are: short after a turn-on, growing with the time since; short
- * where the current nears zero, that its end is found and a pulse that just parts in two is seen to;
- * a share of the ring between inductance and capacitor until that has died out.
+ * where the current nears zero, that its end is found and a pulse that just parts in two is seen
+ * to; a share of the ring between inductance and capacitor until that has died out.
  *
  * <p>Lengths follow from the state alone, without jumps, so that the march is a smooth function of
  * its start for Newton's steps. In cells of {@link CycleTable}.
@@ -26,7 +26,9 @@ final class StepLength {
 
   private static final double LEAST_OF_RING = 0.25;
 
-  /** The ring falls by e^-damping a cell; for equal errors of fourth order steps grow by its fifth. */
+  /**
+   * The ring falls by e^-damping a cell; for equal errors of fourth order steps grow by its fifth.
+   */
   private static final double SHARE_OF_DAMPING = 0.2;
 
   /** The current may fall by this share of itself in a step, or rise by the other. */
