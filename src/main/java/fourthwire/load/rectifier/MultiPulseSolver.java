@@ -168,7 +168,7 @@ final class MultiPulseSolver implements LoadSolver {
     moveSection(0);
     newton.start(1);
     starved = !newton.repeat(REPETITIONS);
-    return !starved && newton.converge();
+    return !starved && newton.settle();
   }
 
   /** Comes near by coarse steps. */
@@ -185,7 +185,7 @@ final class MultiPulseSolver implements LoadSolver {
     newton.start(0.95);
     for (double share : STAGES) {
       equip(load.atPower(share * load.powerW()), seriesOhm, seriesHenry);
-      if (!newton.converge()) {
+      if (!newton.settle()) {
         equip(load, seriesOhm, seriesHenry);
         return false;
       }

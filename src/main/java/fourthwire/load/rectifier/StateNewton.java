@@ -32,7 +32,8 @@ final class StateNewton {
    */
   private static final double AT_A_JUMP = 300;
 
-  private static final int MOST_TURNS = 40;
+  private static final int MOST_TURNS = 15;
+  private static final int MOST_PATIENT_TURNS = 40;
   private static final int MOST_COARSE_TURNS = 10;
 
   /** A step that leads away is halved, at most so often. */
@@ -110,13 +111,22 @@ final class StateNewton {
     return false;
   }
 
-  /** Moves the state until it closes on itself; false where it does not. */
+  /** Moves the state until it closes on itself; false where it does not soon. */
   boolean converge() {
+    return close(MOST_TURNS, 1);
+  }
+
+  /** Likewise with patience, and where the map jumps at the state as near as any state gets. */
+  boolean settle() {
+    return close(MOST_PATIENT_TURNS, AT_A_JUMP);
+  }
+
+  private boolean close(int turns, double lastTimes) {
     stepped = false;
     int halvings = 0;
-    for (int n = 0; n < MOST_TURNS; n++) {
+    for (int n = 0; n < turns; n++) {
       boolean through = follow();
-      if (through && closed(n < MOST_TURNS - 1 ? 1 : AT_A_JUMP)) {
+      if (through && closed(n < turns - 1 ? 1 : lastTimes)) {
         return true;
       }
       if (stepped && halvings < MOST_HALVINGS && !(through && defect() < before)) {

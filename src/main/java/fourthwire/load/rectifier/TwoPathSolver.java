@@ -104,7 +104,7 @@ final class TwoPathSolver {
     }
     section = (crossing + SECTIONS[0]) % CycleTable.CELLS;
     newton.start(1);
-    return newton.repeat(REPETITIONS) && newton.converge();
+    return newton.repeat(REPETITIONS) && newton.settle();
   }
 
   private boolean stable() {
@@ -115,7 +115,7 @@ final class TwoPathSolver {
   private boolean wholeCycle() {
     halfWave = false;
     newton.start(0.9);
-    return newton.repeat(REPETITIONS) && newton.converge() && stable();
+    return newton.repeat(REPETITIONS) && newton.settle() && stable();
   }
 
   private void put(double[] s) {
