@@ -1,9 +1,9 @@
 package fourthwire.load;
 
 import fourthwire.load.model.LoadModel;
-import fourthwire.load.rectifier.BridgeLoad;
+import fourthwire.load.rectifier.path.BridgeLoad;
 import fourthwire.load.rectifier.CapacitorInput;
-import fourthwire.load.rectifier.Diode;
+import fourthwire.load.rectifier.path.Diode;
 import fourthwire.load.rectifier.SixPulse;
 import fourthwire.load.rectifier.TwelvePulse;
 import fourthwire.site.LoadKind;

@@ -2,20 +2,21 @@ package fourthwire.load.rectifier;
 
 import fourthwire.load.model.LoadModel;
 import fourthwire.load.model.LoadSolver;
+import fourthwire.load.rectifier.path.BridgeLoad;
 
 /**
  * {@code capacitor-input}: single-phase diode bridge, source R-L, smoothing capacitor and a
  * constant-power load: the supply of nearly everything electronic without power factor correction.
  *
  * <p>While |e| exceeds the capacitor's voltage v: L·di/dt = |e| - R·i - 2·v_d(i) - v and C·dv/dt =
- * i - P/v, with v_d the exponential law of {@link Diode}; otherwise i = 0. R and L are the
+ * i - P/v, with v_d the exponential law of {@code Diode}; otherwise i = 0. R and L are the
  * equipment's own and the network's together. The periodic state is found by shooting ({@link
  * CapacitorInputSolver}).
  *
  * <p>{@code capacitor-input-choke} is the same with a choke in the lead or behind the bridge; the
  * latter is in series with the former as long as its current ends before the voltage behind the
  * bridge crosses zero. Where it flows on, both pairs of diodes carry it together and commutate
- * ({@link TwoPathBridge}).
+ * ({@code TwoPathBridge}).
  *
  * <p>A small capacitor behind a choke may have no stable state that repeats in mirrored halves; the
  * one that repeats after the whole cycle, with even orders, is then found, or it is said that none

@@ -3,6 +3,12 @@ package fourthwire.load.rectifier;
 import fourthwire.load.model.LoadSolver;
 import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.load.model.PortSpectra;
+import fourthwire.load.rectifier.loop.TwoPathSolver;
+import fourthwire.load.rectifier.path.BridgeLoad;
+import fourthwire.load.rectifier.path.CycleTable;
+import fourthwire.load.rectifier.path.PairBridge;
+import fourthwire.load.rectifier.path.PathTangent;
+import fourthwire.load.rectifier.path.PulseTrace;
 import java.util.Optional;
 
 /**

@@ -2,6 +2,8 @@ package fourthwire.load.rectifier;
 
 import fourthwire.load.model.LoadModel;
 import fourthwire.load.model.LoadSolver;
+import fourthwire.load.rectifier.loop.MultiPulseSolver;
+import fourthwire.load.rectifier.path.BridgeLoad;
 
 /** Bridges on three lines as the network sees them: a current that is injected, nothing linear. */
 abstract class ThreeLineRectifier implements LoadModel {

@@ -1,5 +1,7 @@
 package fourthwire.load.rectifier;
 
+import fourthwire.load.rectifier.path.BridgeLoad;
+
 /**
  * {@code twelve-pulse}: two six-pulse bridges on one capacitor with a constant-power load, behind
  * lossless windings of 0° and 30°: the input of large drives and supplies.
@@ -7,7 +9,7 @@ package fourthwire.load.rectifier;
  * <p>With i' and i'' the line currents of the bridges, T the windings' matrix, w = T·u, w_a = (u_a
  * - u_b)/√3, the source sees i = i' + Tᵀ·i''. Each conducting bridge draws its direct current
  * through its own line choke, both through what lies ahead of the windings (network and lead) and,
- * joined, through the direct-current choke; all their loops are solved together ({@link LoopStep}),
+ * joined, through the direct-current choke; all their loops are solved together ({@code LoopStep}),
  * so that each bridge sees the voltage that the other's current leaves. Windings 30° behind would
  * be the same circuit with its rails exchanged.
  *

@@ -4,6 +4,7 @@ import static org.assertj.core.api.Assertions.assertThat;
 
 import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.load.model.PortSpectra;
+import fourthwire.load.rectifier.loop.MultiPulseSolver;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
 

@@ -3,6 +3,9 @@ package fourthwire.load.rectifier;
 import static org.assertj.core.api.Assertions.assertThat;
 
 import fourthwire.load.model.PortSpectra;
+import fourthwire.load.rectifier.loop.MultiPulseSolver;
+import fourthwire.load.rectifier.path.BridgeLoad;
+import fourthwire.load.rectifier.path.Diode;
 import java.util.List;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;

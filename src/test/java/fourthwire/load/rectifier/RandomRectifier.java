@@ -1,6 +1,8 @@
 package fourthwire.load.rectifier;
 
 import fourthwire.load.model.PortSpectra;
+import fourthwire.load.rectifier.path.BridgeLoad;
+import fourthwire.load.rectifier.path.Diode;
 import java.util.Random;
 
 /**

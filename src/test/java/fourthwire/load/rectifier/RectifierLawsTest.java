@@ -6,6 +6,9 @@ import static org.assertj.core.api.Assertions.within;
 
 import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.load.model.PortSpectra;
+import fourthwire.load.rectifier.loop.MultiPulseSolver;
+import fourthwire.load.rectifier.path.CycleTable;
+import fourthwire.load.rectifier.path.PulseTrace;
 import fourthwire.quantity.Spectrum;
 import java.util.Arrays;
 import org.junit.jupiter.api.Test;

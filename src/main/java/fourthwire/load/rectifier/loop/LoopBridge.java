@@ -1,4 +1,9 @@
-package fourthwire.load.rectifier;
+package fourthwire.load.rectifier.loop;
+
+import fourthwire.load.rectifier.path.Discharge;
+import fourthwire.load.rectifier.path.EventFinder;
+import fourthwire.load.rectifier.path.PathStep;
+import fourthwire.load.rectifier.path.PulseTrace;
 
 /**
  * A bridge on one capacitor followed through time, whichever of its diodes conduct: a subclass

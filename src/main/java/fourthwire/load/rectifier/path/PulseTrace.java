@@ -1,4 +1,4 @@
-package fourthwire.load.rectifier;
+package fourthwire.load.rectifier.path;
 
 import fourthwire.load.model.NoSteadyStateException;
 import java.util.Arrays;
@@ -12,7 +12,7 @@ import java.util.Arrays;
  * gives its moments ({@link FourierSum}) by the three-point Gauss-Legendre rule. Workspace of one
  * thread.
  */
-final class PulseTrace {
+public final class PulseTrace {
   private static final int MOST_NODES = 8192;
 
   /** An interval this much shorter than its neighbour tells nothing about slopes. */
@@ -43,12 +43,12 @@ final class PulseTrace {
   private double c2;
   private double c3;
 
-  void clear() {
+  public void clear() {
     size = 0;
   }
 
   /** Opens a smooth piece at its first node. */
-  void start(double position, double amps) {
+  public void start(double position, double amps) {
     append(position, amps, true);
   }
 
@@ -58,7 +58,7 @@ final class PulseTrace {
    * @param ampCells the charge since the node before: a stiff path's current is less sure than the
    *     capacitor's voltage, and the charge comes from that; NaN where it is not known
    */
-  void next(double position, double amps, double ampCells) {
+  public void next(double position, double amps, double ampCells) {
     append(position, amps, false);
     charge[size - 1] = ampCells;
   }
@@ -73,7 +73,7 @@ final class PulseTrace {
   }
 
   /** Takes the record to a voltage at the start that is a little higher, to first order. */
-  void shift(double volts) {
+  public void shift(double volts) {
     for (int n = 0; n < size; n++) {
       amps[n] += ampsGain[n] * volts;
       charge[n] += chargeGain[n] * volts;
@@ -110,7 +110,7 @@ final class PulseTrace {
    *
    * @param halfWave the record is half a cycle whose mirror image follows: odd orders only
    */
-  void harmonics(boolean halfWave, double[] re, double[] im) {
+  public void harmonics(boolean halfWave, double[] re, double[] im) {
     slopes();
     fourier.clear(halfWave);
     for (int n = 0; n + 1 < size; n++) {
@@ -209,13 +209,13 @@ final class PulseTrace {
   }
 
   /** What is averaged over a cycle. */
-  interface Integrand {
+  public interface Integrand {
     /** At a position in cells, where the current is so large. */
     double at(double position, double amps);
   }
 
   /** Mean over the cycle of a function that is zero where no current flows. */
-  double mean(boolean halfWave, Integrand f) {
+  public double mean(boolean halfWave, Integrand f) {
     slopes();
     double sum = 0;
     for (int n = 0; n + 1 < size; n++) {

@@ -1,4 +1,4 @@
-package fourthwire.load.rectifier;
+package fourthwire.load.rectifier.path;
 
 /**
  * The natural logarithm for the diode's law, inlined into a time step and some times quicker than
@@ -10,7 +10,7 @@ package fourthwire.load.rectifier;
  * Transactions on Mathematical Software 16, 1990). With |r| ≤ 1/256 the error is under 2e-15 of the
  * larger of ln x and 1.
  */
-final class QuickLog {
+public final class QuickLog {
   private static final int BITS = 7;
   private static final int PARTS = 1 << BITS;
 
@@ -35,7 +35,7 @@ final class QuickLog {
   private QuickLog() {}
 
   /** The logarithm, of anything that {@link Math#log} takes. */
-  static double of(double x) {
+  public static double of(double x) {
     if (!(x >= Double.MIN_NORMAL && x <= Double.MAX_VALUE)) {
       return Math.log(x);
     }

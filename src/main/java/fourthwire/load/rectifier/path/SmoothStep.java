@@ -1,4 +1,4 @@
-package fourthwire.load.rectifier;
+package fourthwire.load.rectifier.path;
 
 /**
  * A longer step of a conducting path where it is not stiff, in the middle of a pulse.

@@ -1,4 +1,4 @@
-package fourthwire.load.rectifier;
+package fourthwire.load.rectifier.loop;
 
 /**
  * How the state of a {@link LoopBridge} at a moment answers to small departures of the one its

@@ -1,8 +1,11 @@
-package fourthwire.load.rectifier;
+package fourthwire.load.rectifier.loop;
 
 import fourthwire.load.model.LoadSolver;
 import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.load.model.PortSpectra;
+import fourthwire.load.rectifier.path.BridgeLoad;
+import fourthwire.load.rectifier.path.CycleTable;
+import fourthwire.load.rectifier.path.PulseTrace;
 import fourthwire.quantity.Spectrum;
 import java.util.List;
 import java.util.Locale;
@@ -25,11 +28,11 @@ import java.util.Locale;
  * slower than that and whose chokes and capacitors lose more, are measured with odd orders only
  * (the reactor tables that the presets are held to); so that state is given, no other looked for,
  * and {@link #remarks} says so. Single-phase supplies, which have no such control, are refused in
- * that case ({@link CapacitorInputSolver}).
+ * that case ({@code CapacitorInputSolver}).
  *
  * <p>An instance holds the last state only, to start from; the workspace is the thread's.
  */
-final class MultiPulseSolver implements LoadSolver {
+public final class MultiPulseSolver implements LoadSolver {
   /**
    * With a direct-current choke, or a source common to two bridges, and no inductance of a bridge's
    * own, commutation would take no time; a lead's least share keeps it finite (0.001 % of V²/P).
@@ -73,7 +76,7 @@ final class MultiPulseSolver implements LoadSolver {
   /** Whether the capacitor ran empty when the bridges were left to themselves. */
   private boolean starved;
 
-  MultiPulseSolver(int bridges, BridgeLoad load, double frequencyHz) {
+  public MultiPulseSolver(int bridges, BridgeLoad load, double frequencyHz) {
     this.bridges = bridges;
     this.load = load;
     this.frequencyHz = frequencyHz;
@@ -309,22 +312,22 @@ final class MultiPulseSolver implements LoadSolver {
   }
 
   /** The recorded current of a line of the last solution. */
-  PulseTrace trace(int line) {
+  public PulseTrace trace(int line) {
     return bridge.trace[line];
   }
 
   /** Currents of the second bridge's windings in the last solution on this thread. */
-  PortSpectra secondBridge() {
+  public PortSpectra secondBridge() {
     return bridge.second;
   }
 
   /** How many times what was recorded, with the lines exchanged, makes up the cycle. */
-  int periods() {
+  public int periods() {
     return periods;
   }
 
   /** Number of lines of all bridges. */
-  int lines() {
+  public int lines() {
     return 3 * bridges;
   }
 }

@@ -1,4 +1,4 @@
-package fourthwire.load.rectifier;
+package fourthwire.load.rectifier.path;
 
 /**
  * Finds where a margin rises through zero: the moment at which a diode starts or ends conducting.
@@ -7,11 +7,11 @@ package fourthwire.load.rectifier;
  * three points (Anderson and Björck, "A new high order method of regula falsi type for computing a
  * root of an equation", BIT 13, 1973).
  */
-final class EventFinder {
+public final class EventFinder {
   private static final int MOST_TRIES = 60;
 
   /** By how much something is past the event; negative before it. */
-  interface Margin {
+  public interface Margin {
     /** At a place; may leave the caller's workspace as it is there. */
     double at(double place);
   }
@@ -28,7 +28,7 @@ final class EventFinder {
    * @param width how near to the event the place has to be
    * @param close a margin of zero to this much ends the search
    */
-  static double find(
+  public static double find(
       Margin margin,
       double low,
       double atLow,

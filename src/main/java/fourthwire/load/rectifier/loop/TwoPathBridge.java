@@ -1,6 +1,7 @@
-package fourthwire.load.rectifier;
+package fourthwire.load.rectifier.loop;
 
 import fourthwire.load.model.PortSpectra;
+import fourthwire.load.rectifier.path.BridgeLoad;
 
 /**
  * A single-phase bridge whose two pairs of diodes may conduct together, as they do where a choke
@@ -12,7 +13,7 @@ import fourthwire.load.model.PortSpectra;
  * P/v. By the symmetry of the four diodes both of a pair carry the same. {@link #line} holds x and
  * y; one leaves to the other, the choke's current unchanged.
  */
-final class TwoPathBridge extends LoopBridge {
+public final class TwoPathBridge extends LoopBridge {
   /** Space for the second path's spectrum. */
   final PortSpectra second = new PortSpectra(1);
 

@@ -1,4 +1,4 @@
-package fourthwire.load.rectifier;
+package fourthwire.load.rectifier.loop;
 
 /**
  * A path of current through a bridge: in by one line, through the direct-current side, out by

@@ -1,4 +1,7 @@
-package fourthwire.load.rectifier;
+package fourthwire.load.rectifier.loop;
+
+import fourthwire.load.rectifier.path.BridgeLoad;
+import fourthwire.load.rectifier.path.QuickLog;
 
 /**
  * One time step of all loops of current that conduct in one bridge or in two on one capacitor.
@@ -6,9 +9,9 @@ package fourthwire.load.rectifier;
  * <p>With x the loops' currents, M and R the matrices of what they share of the source, the line
  * chokes and the direct-current choke: M·x' = e - R·x - v_d - v and C·v' = Σx - P/v, where v_d is
  * the drop of the diode that a loop has for itself plus that of the one which carries all loops of
- * its bridge. Method and units as in {@link PathStep}; M may be singular (no inductance).
+ * its bridge. Method and units as in {@code PathStep}; M may be singular (no inductance).
  */
-final class LoopStep {
+public final class LoopStep {
   /** Two lines of each bridge share a current. */
   static final int MOST = 4;
 

@@ -1,4 +1,4 @@
-package fourthwire.load.rectifier;
+package fourthwire.load.rectifier.loop;
 
 /**
  * A square matrix of a few rows: linear equations by Gauss and Jordan's elimination with row

@@ -1,6 +1,7 @@
-package fourthwire.load.rectifier;
+package fourthwire.load.rectifier.loop;
 
 import fourthwire.load.model.PortSpectra;
+import fourthwire.load.rectifier.path.CycleTable;
 import fourthwire.quantity.Spectrum;
 
 /**

@@ -1,4 +1,4 @@
-package fourthwire.load.rectifier;
+package fourthwire.load.rectifier.path;
 
 /**
  * A single-phase bridge followed through time from a section of the cycle: off, conducting with one
@@ -9,39 +9,39 @@ package fourthwire.load.rectifier;
  * the threshold, by repeating the step with another length. Workspace of one solver, not
  * thread-safe.
  */
-final class PairBridge {
+public final class PairBridge {
   private static final int MOST_SWITCHINGS = 200;
   private static final double EVENT_CELLS = 1e-7;
 
   /** Cells since the turn-on of a current that flows already: no step is short for that. */
   private static final double LONG_AGO = 10;
 
-  final CycleTable emf = new CycleTable();
-  final PathStep path = new PathStep();
-  final StepLength length = new StepLength(path);
-  final PulseTrace trace = new PulseTrace();
-  final PathTangent tangent = new PathTangent();
+  public final CycleTable emf = new CycleTable();
+  public final PathStep path = new PathStep();
+  public final StepLength length = new StepLength(path);
+  public final PulseTrace trace = new PulseTrace();
+  public final PathTangent tangent = new PathTangent();
 
   /** Capacitor voltage under which the load counts as having emptied it. */
-  double floorV;
+  public double floorV;
 
   /** Capacitor voltage beyond which a march is a runaway of a guess, no state of the circuit. */
-  double ceilingV;
+  public double ceilingV;
 
   /** Share of the path's inductance that lies between bridge and capacitor. */
-  double directShare;
+  public double directShare;
 
   /**
    * Whether in the last recorded march the choke behind the bridge drove its current on through
    * both legs: the voltage behind the bridge would have been negative, which one path can't tell.
    */
-  boolean freewheels;
+  public boolean freewheels;
 
   /** Signed current into the port, amps; 0 while off. */
-  double i;
+  public double i;
 
   /** Capacitor voltage. */
-  double v;
+  public double v;
 
   private final SmoothStep smooth = new SmoothStep(path);
   private final Discharge discharge = new Discharge(new Size(), path);
@@ -73,7 +73,7 @@ final class PairBridge {
    * @return false where the load empties the capacitor, the voltage runs away, or the current
    *     breaks up without end
    */
-  boolean march(double from, double cells, double i0, double v0) {
+  public boolean march(double from, double cells, double i0, double v0) {
     u = from;
     i = i0;
     v = v0;

@@ -1,4 +1,4 @@
-package fourthwire.load.rectifier;
+package fourthwire.load.rectifier.path;
 
 /**
  * The capacitor alone with its load while no diode conducts: v² falls linearly under constant
@@ -7,7 +7,7 @@ package fourthwire.load.rectifier;
  * <p>At the threshold's current the path's equation then starts with a slope of zero or more, so
  * that a conduction that begins does not end at once. Workspace of one solver, not thread-safe.
  */
-final class Discharge {
+public final class Discharge {
   /**
    * After an end of conduction a start is looked for only this many cells later, unless the drive
    * is clearly past: a current of about the threshold's would else come and go without end.
@@ -23,7 +23,7 @@ final class Discharge {
   private double fall;
 
   /** What would drive a current. */
-  interface Drive {
+  public interface Drive {
     /** Volts at a position in cells. */
     double at(double position);
 
@@ -34,20 +34,20 @@ final class Discharge {
   }
 
   /** Where the discharge ended, in cells. */
-  double u;
+  public double u;
 
   /** The capacitor's voltage there. */
-  double v;
+  public double v;
 
   /** Whether it ended because conduction begins. */
-  boolean turnedOn;
+  public boolean turnedOn;
 
   /**
    * Of a path.
    *
    * @param drive the voltage that would drive a current
    */
-  Discharge(Drive drive, PathStep path) {
+  public Discharge(Drive drive, PathStep path) {
     this.drive = drive;
     this.path = path;
   }
@@ -58,7 +58,7 @@ final class Discharge {
    * @param justLeft whether a conduction has ended at this very position
    * @return false where the voltage falls to the floor
    */
-  boolean run(double position, double volts, boolean justLeft, double to, double floorV) {
+  public boolean run(double position, double volts, boolean justLeft, double to, double floorV) {
     from = position;
     square = volts * volts;
     fall = 2 * path.power / path.capacitance;

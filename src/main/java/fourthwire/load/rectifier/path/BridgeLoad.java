@@ -1,4 +1,4 @@
-package fourthwire.load.rectifier;
+package fourthwire.load.rectifier.path;
 
 /**
  * The electrical data of a rectifier with a smoothing capacitor and a constant-power load, all

@@ -1,4 +1,4 @@
-package fourthwire.load.rectifier;
+package fourthwire.load.rectifier.path;
 
 /**
  * How long the steps of a pulse are: short after a turn-on, growing with the time since; short
@@ -8,7 +8,7 @@ package fourthwire.load.rectifier;
  * <p>Lengths follow from the state alone, without jumps, so that the march is a smooth function of
  * its start for Newton's steps. In cells of {@link CycleTable}.
  */
-final class StepLength {
+public final class StepLength {
   /** First step after a turn-on. */
   private static final double FIRST = 0.03;
 
@@ -62,7 +62,7 @@ final class StepLength {
    *
    * @param amps a current as it flows in the pulse
    */
-  void set(double amps) {
+  public void set(double amps) {
     ringCells = Math.max(LEAST_OF_RING, RADIANS * path.ring);
     double ohm = path.resistance + path.diodeOhm(amps);
     damping = path.inductance > 0 ? ohm / (2 * path.inductance) : 0;
@@ -70,7 +70,7 @@ final class StepLength {
   }
 
   /** All steps so many times as long, while a march need not be accurate. */
-  void scale(double times) {
+  public void scale(double times) {
     scale = times;
   }
 

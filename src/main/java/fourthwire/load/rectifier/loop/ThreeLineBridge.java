@@ -1,6 +1,7 @@
-package fourthwire.load.rectifier;
+package fourthwire.load.rectifier.loop;
 
 import fourthwire.load.model.PortSpectra;
+import fourthwire.load.rectifier.path.BridgeLoad;
 
 /**
  * One six-pulse bridge, or two on one capacitor, followed through time: of each bridge no line

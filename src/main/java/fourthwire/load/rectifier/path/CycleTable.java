@@ -1,4 +1,4 @@
-package fourthwire.load.rectifier;
+package fourthwire.load.rectifier.path;
 
 import fourthwire.quantity.Spectrum;
 
@@ -9,9 +9,9 @@ import fourthwire.quantity.Spectrum;
  * <p>Positions are counted in cells from t = 0; between samples a cubic Hermite polynomial is taken
  * (at order 50 its error is 0.1 % of that order). Workspace of one solver, not thread-safe.
  */
-final class CycleTable {
+public final class CycleTable {
   /** Cells to a cycle: a multiple of 12, so that sixths and halves of a cycle are whole. */
-  static final int CELLS = 384;
+  public static final int CELLS = 384;
 
   private static final int HALF = CELLS / 2;
   private static final int QUARTER = CELLS / 4;
@@ -33,10 +33,10 @@ final class CycleTable {
   }
 
   /** Samples at positions 0 to 2·CELLS, so that a cycle may start anywhere in the first. */
-  final double[] value = new double[2 * CELLS + 1];
+  public final double[] value = new double[2 * CELLS + 1];
 
   /** Slope per cell likewise. */
-  final double[] slope = new double[2 * CELLS + 1];
+  public final double[] slope = new double[2 * CELLS + 1];
 
   /** Sine and cosine parts of value and slope over a quarter cycle, one parity at a time. */
   private final double[] sines = new double[QUARTER + 1];
@@ -46,10 +46,10 @@ final class CycleTable {
   private final double[] cosineSlopes = new double[QUARTER + 1];
 
   /** Whether the last fill held odd orders only, so that half cycles mirror each other. */
-  boolean halfWave;
+  public boolean halfWave;
 
   /** Samples rms phasors of the orders 1 to 50. */
-  void fill(double[] re, double[] im) {
+  public void fill(double[] re, double[] im) {
     addOrders(1, re, im);
     for (int k = 0; k <= QUARTER; k++) {
       value[k] = sines[k] + cosines[k];
@@ -112,7 +112,7 @@ final class CycleTable {
   }
 
   /** The sample at a position between 0 and 2·CELLS. */
-  double at(double position) {
+  public double at(double position) {
     int k = (int) position;
     double x = position - k;
     if (x == 0) {
@@ -124,7 +124,7 @@ final class CycleTable {
   }
 
   /** Slope per cell at a position between 0 and 2·CELLS. */
-  double slopeAt(double position) {
+  public double slopeAt(double position) {
     int k = (int) position;
     double x = position - k;
     if (x == 0) {
@@ -137,7 +137,7 @@ final class CycleTable {
   }
 
   /** Largest absolute sample. */
-  double peak() {
+  public double peak() {
     double peak = 0;
     for (int k = 0; k < (halfWave ? HALF : CELLS); k++) {
       double size = Math.abs(value[k]);

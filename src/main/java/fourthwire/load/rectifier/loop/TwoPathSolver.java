@@ -1,6 +1,9 @@
-package fourthwire.load.rectifier;
+package fourthwire.load.rectifier.loop;
 
 import fourthwire.load.model.PortSpectra;
+import fourthwire.load.rectifier.path.BridgeLoad;
+import fourthwire.load.rectifier.path.CycleTable;
+import fourthwire.load.rectifier.path.PulseTrace;
 import fourthwire.quantity.Spectrum;
 
 /**
@@ -14,7 +17,7 @@ import fourthwire.quantity.Spectrum;
  * power is a negative resistance to small changes: with little capacitance and little resistance
  * the choke swings with the capacitor for ever, and no state is given.
  */
-final class TwoPathSolver {
+public final class TwoPathSolver {
   /**
    * With no inductance ahead of the bridge, commutation would take no time; a lead's least share
    * keeps it finite (0.0001 % of V²/P).
@@ -44,7 +47,7 @@ final class TwoPathSolver {
   private boolean warm;
   private boolean hunts;
 
-  TwoPathSolver(BridgeLoad load, double frequencyHz) {
+  public TwoPathSolver(BridgeLoad load, double frequencyHz) {
     this.load = load;
     this.frequencyHz = frequencyHz;
   }
@@ -55,7 +58,7 @@ final class TwoPathSolver {
    * @param peak of the electromotive force, volts
    * @return false where no stable state is found
    */
-  boolean solve(
+  public boolean solve(
       PortSpectra emf, double peak, double seriesOhm, double seriesHenry, PortSpectra current) {
     bridge = WORK.get();
     bridge.emf.fillPort(emf);
@@ -76,7 +79,7 @@ final class TwoPathSolver {
   }
 
   /** Whether the last solution failed because the state found is not stable. */
-  boolean hunts() {
+  public boolean hunts() {
     return hunts;
   }
 
@@ -155,12 +158,12 @@ final class TwoPathSolver {
   }
 
   /** Whether that record is half a cycle, whose mirror image is the other. */
-  boolean halfWave() {
+  public boolean halfWave() {
     return halfWave;
   }
 
   /** The recorded current of a path in the last solution on this thread. */
-  PulseTrace trace(int path) {
+  public PulseTrace trace(int path) {
     return bridge.trace[path];
   }
 }

@@ -1,4 +1,4 @@
-package fourthwire.load.rectifier;
+package fourthwire.load.rectifier.path;
 
 /**
  * One time step of a conducting path: source, R-L, two diodes, capacitor with a constant-power
@@ -11,7 +11,7 @@ package fourthwire.load.rectifier;
  * algebraic. Its stages need the electromotive force at both ends of a step only. Time is counted
  * in cells of {@link CycleTable}.
  */
-final class PathStep {
+public final class PathStep {
   /** Longest step as a share of √(LC). */
   private static final double STEP_OF_RING = 0.3;
 
@@ -21,19 +21,19 @@ final class PathStep {
   private static final double NEAR = 0.03;
 
   /** Ohms: inductance over the length of a cell. */
-  double inductance;
+  public double inductance;
 
   /** Ohms in the path, the diodes' own included. */
-  double resistance;
+  public double resistance;
 
   /** Siemens: capacitance over the length of a cell. */
-  double capacitance;
+  public double capacitance;
 
   /** Watts drawn from the capacitor. */
   double power;
 
   /** Volts by which both diodes' drop grows with each e-fold of current. */
-  double slopeV;
+  public double slopeV;
 
   /** Amps of saturation. */
   double saturation;
@@ -41,7 +41,7 @@ final class PathStep {
   private double perSaturation;
 
   /** Amps under which a path counts as open; below it the drop is held. */
-  double threshold;
+  public double threshold;
 
   /** What a drive has to have over the capacitor's voltage for a current to start, volts. */
   double onsetV;
@@ -55,17 +55,17 @@ final class PathStep {
   private int division;
 
   /** Result of the last step: amps. */
-  double i;
+  public double i;
 
   /** Result of the last step: capacitor volts. */
-  double v;
+  public double v;
 
   /** A current whose drop is known: that of the last step's end, or of its start. */
   private double knownAmps = Double.NaN;
 
   private double knownDrop;
 
-  void set(double resistance, double inductance, BridgeLoad load, double cellSeconds) {
+  public void set(double resistance, double inductance, BridgeLoad load, double cellSeconds) {
     this.resistance = resistance + 2 * load.diode().ohm();
     this.inductance = inductance / cellSeconds;
     this.capacitance = load.capacitanceF() / cellSeconds;
@@ -83,7 +83,7 @@ final class PathStep {
     return (Math.floor(position * division + 1e-9) + 1) / division;
   }
 
-  void threshold(double amps) {
+  public void threshold(double amps) {
     threshold = amps;
     thresholdV = slopeV * Math.log(1 + amps / saturation);
     knownAmps = Double.NaN;
@@ -129,7 +129,7 @@ final class PathStep {
   }
 
   /** Steps from (i0, v0) over h cells while the drive goes from e0 (slope d0 per cell) to e1. */
-  void step(double h, double i0, double v0, double e0, double d0, double e1) {
+  public void step(double h, double i0, double v0, double e0, double d0, double e1) {
     double rate = 1 / h;
     double lh = inductance * rate;
     double ch = capacitance * rate;

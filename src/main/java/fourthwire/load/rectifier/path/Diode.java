@@ -1,4 +1,4 @@
-package fourthwire.load.rectifier;
+package fourthwire.load.rectifier.path;
 
 /**
  * The exponential diode law of the rectifier models: v = n·25.86 mV·ln(1 + i/Is) + i·R.

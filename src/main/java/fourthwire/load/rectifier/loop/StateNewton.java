@@ -1,4 +1,4 @@
-package fourthwire.load.rectifier;
+package fourthwire.load.rectifier.loop;
 
 /**
  * Newton's method on the state of bridges at a section of the cycle: the currents of their lines,
