@@ -1,11 +1,11 @@
 package fourthwire.load;
 
 import fourthwire.load.model.LoadModel;
-import fourthwire.load.rectifier.path.BridgeLoad;
 import fourthwire.load.rectifier.CapacitorInput;
-import fourthwire.load.rectifier.path.Diode;
 import fourthwire.load.rectifier.SixPulse;
 import fourthwire.load.rectifier.TwelvePulse;
+import fourthwire.load.rectifier.path.BridgeLoad;
+import fourthwire.load.rectifier.path.Diode;
 import fourthwire.site.LoadKind;
 import fourthwire.site.ModelColumns;
 import java.util.OptionalDouble;

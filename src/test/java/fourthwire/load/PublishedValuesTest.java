@@ -5,9 +5,9 @@ import static org.assertj.core.api.Assertions.within;
 
 import fourthwire.load.control.PhaseDimmer;
 import fourthwire.load.model.LoadModel;
+import fourthwire.load.rectifier.SixPulse;
 import fourthwire.load.rectifier.path.BridgeLoad;
 import fourthwire.load.rectifier.path.Diode;
-import fourthwire.load.rectifier.SixPulse;
 import fourthwire.quantity.Spectrum;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;

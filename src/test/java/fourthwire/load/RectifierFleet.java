@@ -2,8 +2,8 @@ package fourthwire.load;
 
 import fourthwire.load.model.LoadModel;
 import fourthwire.load.model.PortSpectra;
-import fourthwire.load.rectifier.path.BridgeLoad;
 import fourthwire.load.rectifier.CapacitorInput;
+import fourthwire.load.rectifier.path.BridgeLoad;
 import fourthwire.load.rectifier.path.Diode;
 import java.util.Random;
 
