@@ -39,6 +39,16 @@ public final class FactoredOrder {
     sweep.run(excitation, into);
   }
 
+  /**
+   * Solves where currents are injected at nodes of a trunk only: potentials and currents of those
+   * nodes, in linear time of their number. What the excitation and the solution hold of all other
+   * nodes is neither read nor written.
+   */
+  public void solve(Excitation excitation, OrderSolution into, Trunk trunk) {
+    requireOwn(excitation, into);
+    sweep.run(excitation, into, trunk);
+  }
+
   /** The impedance between a node's conductors and earth, as an injected current meets it. */
   public DrivingPoint drivingPoint(int node) {
     return new ImpedanceWalk(network.layout(), network.plan(), factors).at(node);

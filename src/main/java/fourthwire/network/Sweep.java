@@ -53,6 +53,31 @@ final class Sweep {
     }
   }
 
+  /** Likewise over a part of the nodes, the others carrying no injection. */
+  void run(Excitation excitation, OrderSolution s, Trunk trunk) {
+    int[] nodes = trunk.nodes;
+    for (int n : nodes) {
+      int at = 2 * layout.first[n];
+      System.arraycopy(excitation.injected, at, s.current, at, 2 * layout.size(n));
+    }
+    for (int k = nodes.length - 1; k >= 0; k--) {
+      if (plan.role[nodes[k]] == Plan.PAIR) {
+        gatherPair(nodes[k], s.current, s.current);
+      }
+      gather(nodes[k], s);
+    }
+    System.arraycopy(excitation.emf, 0, s.potential, 0, excitation.emf.length);
+    for (int n : nodes) {
+      if (n > 0) {
+        takeIdealPotential(n, s.potential);
+      }
+      descend(n, s);
+      if (plan.role[n] == Plan.PAIR) {
+        descendPair(n, s.potential, s.current);
+      }
+    }
+  }
+
   private void gatherCircuits(int span, double[] injected, double[] current) {
     int end = layout.first[plan.span[span + 1]];
     passUp(layout.first[plan.span[span]], end, injected, current);

@@ -39,6 +39,11 @@ public final class TreeNetwork {
     return layout.parent[node];
   }
 
+  /** Whether a feeder feeds the node: not a transformer, and not the source itself. */
+  public boolean isFedByFeeder(int node) {
+    return layout.isFeeder(node);
+  }
+
   /**
    * The conductor of the feeding node, by its number there, that a feeder's conductor begins at.
    */

@@ -20,13 +20,15 @@ import java.util.List;
 final class ActiveFilter {
   private static final int HIGHEST_ORDER = 25;
 
+  private final int node;
   private final double ratedA;
   private final int[] lines;
   private final int neutral;
   private final int offset;
   private final double[] parts;
 
-  private ActiveFilter(double ratedA, int[] lines, int neutral, int offset) {
+  private ActiveFilter(int node, double ratedA, int[] lines, int neutral, int offset) {
+    this.node = node;
     this.ratedA = ratedA;
     this.lines = lines;
     this.neutral = neutral;
@@ -43,6 +45,7 @@ final class ActiveFilter {
   static ActiveFilter of(Filter filter, Place place, TreeNetwork network, int offset) {
     List<Conductor> lines = place.node().lines();
     return new ActiveFilter(
+        place.networkNode(),
         filter.ratedA().orElseThrow(),
         lines.stream()
             .mapToInt(l -> network.index(place.networkNode(), place.conductors().of(l)))
@@ -51,6 +54,11 @@ final class ActiveFilter {
             ? network.index(place.networkNode(), place.conductors().of(N))
             : -1,
         offset);
+  }
+
+  /** The network's node it feeds. */
+  int node() {
+    return node;
   }
 
   int ports() {
@@ -79,19 +87,19 @@ final class ActiveFilter {
       }
     }
     if (neutral < 0) {
-      removeZeroSequence(g, perLine);
+      removeZeroSequence(g, offset, perLine);
     }
     clip(g, perLine);
   }
 
-  private void removeZeroSequence(double[] g, int perLine) {
+  private void removeZeroSequence(double[] g, int start, int perLine) {
     for (int k = 0; k < perLine; k++) {
       double mean = 0;
       for (int line = 0; line < lines.length; line++) {
-        mean += g[offset + line * perLine + k] / lines.length;
+        mean += g[start + line * perLine + k] / lines.length;
       }
       for (int line = 0; line < lines.length; line++) {
-        g[offset + line * perLine + k] -= mean;
+        g[start + line * perLine + k] -= mean;
       }
     }
   }
@@ -122,32 +130,29 @@ final class ActiveFilter {
   }
 
   /**
-   * What the filter answers to a small change, in its place of {@code into}: taken off there.
+   * What the filter answers to a small change.
    *
    * @param response the change of the currents
    * @param y the change of the filters' currents
-   * @param shift by how much later than in the whole state the filters' currents stand in y
+   * @param into receives the answer, in its place
+   * @param shift by how much later than in the whole state the filters' currents stand in both
    */
-  void subtractAnswer(
-      OrdersInPlay orders, OrderSolution[] response, double[] y, double[] into, int shift) {
+  void answer(OrdersInPlay orders, OrderSolution[] response, double[] y, double[] into, int shift) {
     int perLine = 2 * orders.count();
-    double[] answer = new double[offset + lines.length * perLine];
+    int start = offset + shift;
     for (int line = 0; line < lines.length; line++) {
       for (int k = 0; k < orders.count(); k++) {
-        int at = offset + line * perLine + 2 * k;
+        int at = start + line * perLine + 2 * k;
         int h = orders.at(k);
         boolean taken = h > 1 && h <= HIGHEST_ORDER;
-        double re = response[h].currentRe(lines[line]) + y[at + shift];
-        double im = response[h].currentIm(lines[line]) + y[at + 1 + shift];
-        answer[at] = taken ? parts[line] * re : 0;
-        answer[at + 1] = taken ? parts[line] * im : 0;
+        double re = response[h].currentRe(lines[line]) + y[at];
+        double im = response[h].currentIm(lines[line]) + y[at + 1];
+        into[at] = taken ? parts[line] * re : 0;
+        into[at + 1] = taken ? parts[line] * im : 0;
       }
     }
     if (neutral < 0) {
-      removeZeroSequence(answer, perLine);
-    }
-    for (int k = offset; k < answer.length; k++) {
-      into[k + shift] -= answer[k];
+      removeZeroSequence(into, start, perLine);
     }
   }
 

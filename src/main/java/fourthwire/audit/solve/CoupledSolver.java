@@ -5,6 +5,7 @@ import fourthwire.audit.plan.Device;
 import fourthwire.audit.plan.NetworkPlan;
 import fourthwire.site.Survey;
 import java.util.List;
+import java.util.Optional;
 
 /**
  * Solves the network and its loads together, state by state: voltages shape the currents and
@@ -45,6 +46,7 @@ public final class CoupledSolver {
   private final Survey survey;
   private final Workers workers;
   private LoadCurrents before = LoadCurrents.NONE;
+  private Optional<SlopeBook> book = Optional.empty();
 
   /** A solver for states of this survey. */
   public CoupledSolver(Survey survey, Workers workers) {
@@ -62,7 +64,9 @@ public final class CoupledSolver {
    */
   public SiteSolution solve(NetworkPlan plan, List<Device> devices, Progress progress) {
     SiteIteration iteration = new SiteIteration(survey, plan, devices, workers);
-    SiteSolution solution = iteration.solve(before, progress);
+    SlopeBook slopes = book.filter(iteration::canUse).orElseGet(iteration::newBook);
+    book = Optional.of(slopes);
+    SiteSolution solution = iteration.solve(before, slopes, progress);
     before = iteration.currents();
     return solution;
   }

@@ -40,6 +40,7 @@ final class DevicePort {
   private double[] voltage = new double[0];
   private double[] behind = new double[0];
   private Optional<LoadSlope> slope = Optional.empty();
+  private boolean ownSlope;
   private double voltageMovedV;
   private String failure = "";
 
@@ -263,8 +264,14 @@ final class DevicePort {
     return behind;
   }
 
-  void setSlope(LoadSlope known) {
+  void setSlope(LoadSlope known, boolean own) {
     slope = Optional.of(known);
+    ownSlope = own;
+  }
+
+  /** Whether its slope was worked out for itself alone. */
+  boolean hasOwnSlope() {
+    return ownSlope;
   }
 
   LoadSlope slope() {
@@ -284,34 +291,33 @@ final class DevicePort {
   /**
    * The slope at the electromotive force last solved (which it follows at once), by small steps of
    * it. Of a load on three lines only the first line's columns are stepped: turning all by a third
-   * of a cycle gives the others, exactly on a balanced voltage and well enough to iterate with on
-   * any other.
+   * of a cycle gives the others, exactly on a balanced voltage and mostly well enough to iterate
+   * with on any other.
+   *
+   * @param wholly steps all lines' columns
    */
-  DeviceSlope findSlope(OrdersInPlay orders, double omega) {
+  void findSlope(OrdersInPlay orders, double omega, boolean wholly, DeviceSlope slope) {
     int size = length(orders);
-    DeviceSlope slope = new DeviceSlope(size);
     double[] before = new double[size];
     double[] after = new double[size];
     double step = SLOPE_STEP * nominalV();
     copyDrawn(orders, before, 0);
-    for (int k = 0; k < orders.count(); k++) {
-      for (int part = 0; part < 2; part++) {
-        double[] stepped = part == 0 ? emf.re[0] : emf.im[0];
-        double taken = stepped(stepped, orders.at(k), step);
-        if (taken == 0) {
-          continue;
-        }
+    int stepped = wholly ? size : size / from.length;
+    for (int column = 0; column < stepped; column++) {
+      int port = column / (2 * orders.count());
+      double[] part = column % 2 == 0 ? emf.re[port] : emf.im[port];
+      double taken = stepped(part, orders.at(column / 2 % orders.count()), step);
+      if (taken != 0) {
         copyDrawn(orders, after, 0);
         for (int row = 0; row < size; row++) {
-          slope.set(row, 2 * k + part, (after[row] - before[row]) / taken);
+          slope.set(row, column, (after[row] - before[row]) / taken);
         }
       }
     }
-    for (int port = 1; port < from.length; port++) {
+    for (int port = 1; port < from.length && !wholly; port++) {
       turn(slope, orders, port);
     }
     slope.open(orders, sharedOhm, omega * sharedHenry);
-    return slope;
   }
 
   /**

@@ -55,6 +55,17 @@ final class LoadSlope {
     }
   }
 
+  /** Whether it was added to the sum over its group. */
+  boolean isAdded() {
+    return added;
+  }
+
+  /** The sum is made anew. */
+  void forgetAdded() {
+    added = false;
+    addedChanges = 0;
+  }
+
   /** Adds the matrix to another: the whole of it, or what was learned since the last time. */
   void addTo(OrdersInPlay orders, float[] byColumn) {
     if (!added) {

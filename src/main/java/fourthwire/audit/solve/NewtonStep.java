@@ -1,20 +1,16 @@
 package fourthwire.audit.solve;
 
-import fourthwire.network.Excitation;
 import fourthwire.network.FactoredOrder;
-import fourthwire.network.OrderSolution;
 import fourthwire.network.TreeNetwork;
-import fourthwire.quantity.Spectrum;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 
 /**
- * Newton's step towards x = g(x). With K the loads' slopes seen from their groups ({@link
- * LoadGroup}), V what the network answers there, and r what each load would draw more if V stood
- * still, the step is Δ = r + K·V(Δ). Summed over each group that is an equation in the groups'
- * currents alone, solved by minimal residuals ({@link Gmres}); each load's own step follows.
+ * Newton's step towards x = g(x). With K a load's slope seen from its group ({@link LoadGroup}), u
+ * the change of the potentials there, and r what it would draw more if they stood still, its step
+ * is r + K·u; the potentials follow from all loads' steps together ({@link BoardEquations}).
  */
 final class NewtonStep {
   /**
@@ -23,26 +19,21 @@ final class NewtonStep {
    */
   private static final double LINEAR_TOLERANCE = 3e-3;
 
-  private static final int MOST_PRODUCTS = 120;
+  /** Above this change the loads are not yet what they will be: slopes from there mislead. */
+  private static final double FAR = 0.2;
 
-  /** Above this change slopes are worked out again at every pass. */
-  private static final double FAR = 0.03;
-
-  /** And where a pass leaves more than this part of the change before. */
+  /** A pass that leaves more than this part of the change before is held up by some loads. */
   private static final double SLOW = 0.5;
 
   private final OrdersInPlay orders;
-  private final List<LoadGroup> groups = new ArrayList<>();
-  private final List<ActiveFilter> filters;
-  private final FactoredOrder[] factors;
+  private final List<DevicePort> loads;
+  private final List<LoadGroup> groups;
+  private final BoardEquations boards;
+  private final int loadsLength;
+  private final int filtersLength;
   private final double omega;
   private final Workers workers;
   private final SlopeBook book;
-  private final Excitation[] excitations = new Excitation[Spectrum.HIGHEST_ORDER + 1];
-  private final OrderSolution[] responses = new OrderSolution[Spectrum.HIGHEST_ORDER + 1];
-  private final int groupsLength;
-  private final int filtersLength;
-  private final int filtersAt;
   private boolean known;
   private double lastChange = Double.POSITIVE_INFINITY;
 
@@ -53,82 +44,63 @@ final class NewtonStep {
       List<DevicePort> loads,
       List<ActiveFilter> filters,
       double omega,
+      SlopeBook book,
       Workers workers) {
-    this.factors = factors;
     this.orders = orders;
-    this.filters = filters;
+    this.loads = loads;
     this.omega = omega;
     this.workers = workers;
-    this.book = new SlopeBook(orders, loads, omega, workers);
-    Map<PortPlace, LoadGroup> byPlace = new LinkedHashMap<>();
-    int at = 0;
-    int loadsEnd = 0;
-    for (DevicePort load : loads) {
-      LoadGroup group = byPlace.get(load.group());
-      if (group == null) {
-        group = new LoadGroup(load.group(), network, orders, at);
-        byPlace.put(load.group(), group);
-        groups.add(group);
-        at += group.size();
-      }
-      group.add(load);
-      loadsEnd = load.offset() + load.length(orders);
-    }
-    this.groupsLength = at;
-    this.filtersAt = loadsEnd;
+    this.book = book;
+    Map<PortPlace, List<DevicePort>> members = new LinkedHashMap<>();
+    loads.forEach(l -> members.computeIfAbsent(l.group(), g -> new ArrayList<>()).add(l));
+    this.boards =
+        new BoardEquations(
+            new BoardResponse(network, factors, orders, workers), members.keySet(), filters);
+    this.groups =
+        members.entrySet().stream()
+            .map(e -> new LoadGroup(boards.slope(e.getKey()), e.getValue()))
+            .toList();
+    this.loadsLength = loads.stream().mapToInt(load -> load.length(orders)).sum();
     this.filtersLength = filters.stream().mapToInt(f -> 2 * f.ports() * orders.count()).sum();
-    for (int k = 0; k < orders.count(); k++) {
-      int h = orders.at(k);
-      excitations[h] = network.excitation();
-      responses[h] = factors[h].solve(excitations[h]);
-    }
   }
 
-  /** Works the slopes out, at the state last solved, if there are none or they serve ill. */
-  void renewWhereSlow(double change, double[] g) {
-    if (!known || change > FAR || change > SLOW * lastChange) {
-      groups.forEach(LoadGroup::forget);
-      book.renew(g);
-      known = true;
+  /**
+   * Works slopes out at the state last solved: for all loads where that is far from settled, else
+   * for those that hold the others up.
+   */
+  void renewSlopes(Settling settling, double[] g) {
+    double change = settling.change();
+    if (change > FAR) {
+      book.forget();
     }
+    if (!known || change > FAR) {
+      book.lend(loads.stream().filter(load -> !load.hasOwnSlope()).toList(), g, workers);
+    }
+    if (known) {
+      book.giveOwn(settling.last(change > SLOW * lastChange), workers);
+    }
+    known = true;
     lastChange = change;
   }
 
   /** The step from x, where the loads answer g. */
   double[] step(double[] x, double[] g) {
     double[] step = new double[x.length];
-    double[] b = new double[groupsLength + filtersLength];
-    workers.each(groups.size(), k -> groups.get(k).gather(orders, omega, x, g, step, b));
+    double[][] sums = new double[groups.size()][];
+    workers.each(
+        groups.size(), k -> sums[k] = groups.get(k).gather(orders, omega, x, g, step));
+    double[] drawn = new double[boards.row().length()];
+    for (int k = 0; k < sums.length; k++) {
+      groups.get(k).slope().draw(sums[k], drawn);
+    }
+    double[] fed = new double[filtersLength];
     for (int i = 0; i < filtersLength; i++) {
-      b[groupsLength + i] = g[filtersAt + i] - x[filtersAt + i];
+      fed[i] = g[loadsLength + i] - x[loadsLength + i];
     }
-    double[] y = new Gmres(this::product, LINEAR_TOLERANCE, MOST_PRODUCTS).solve(b);
-    respond(y);
-    workers.each(groups.size(), k -> groups.get(k).spread(orders, responses, step));
-    System.arraycopy(y, groupsLength, step, filtersAt, filtersLength);
+    boards.renew();
+    double[] y = boards.solve(drawn, fed, LINEAR_TOLERANCE);
+    workers.each(groups.size(), k -> groups.get(k).spread(orders, y, step));
+    System.arraycopy(y, boards.row().length(), step, loadsLength, filtersLength);
     return step;
-  }
-
-  /** into = y - K·V(y), and of the filters y less their answer. */
-  private void product(double[] y, double[] into) {
-    respond(y);
-    workers.each(groups.size(), k -> groups.get(k).balance(orders, responses, y, into));
-    System.arraycopy(y, groupsLength, into, groupsLength, filtersLength);
-    for (ActiveFilter filter : filters) {
-      filter.subtractAnswer(orders, responses, y, into, groupsLength - filtersAt);
-    }
-  }
-
-  private void respond(double[] y) {
-    workers.each(orders.count(), k -> respond(k, y));
-  }
-
-  private void respond(int position, double[] y) {
-    int h = orders.at(position);
-    Excitation excitation = excitations[h].clear();
-    groups.forEach(group -> group.draw(excitation, orders, position, y));
-    filters.forEach(
-        filter -> filter.feed(excitation, orders, position, y, groupsLength - filtersAt));
-    factors[h].solve(excitation, responses[h]);
   }
 }

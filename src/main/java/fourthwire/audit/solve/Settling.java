@@ -1,13 +1,25 @@
 package fourthwire.audit.solve;
 
+import java.util.Arrays;
+import java.util.Comparator;
 import java.util.List;
 import java.util.Locale;
+import java.util.stream.IntStream;
 
 /** Watches the loads settle: what they draw against what was injected, and how voltages move. */
 final class Settling {
+  /** Of the worst change: what counts as nearly as bad. */
+  private static final double NEARLY = 0.2;
+
+  /** Above what nine loads of ten change at most. */
+  private static final double FAR_BEHIND = 4;
+
+  private static final int MOST = 8;
+
   private final List<DevicePort> loads;
   private final List<ActiveFilter> filters;
   private final OrdersInPlay orders;
+  private final double[] changes;
   private double worstChange;
   private double worstMove;
   private double firstChange;
@@ -17,6 +29,7 @@ final class Settling {
     this.loads = loads;
     this.filters = filters;
     this.orders = orders;
+    this.changes = new double[loads.size()];
   }
 
   /**
@@ -28,8 +41,9 @@ final class Settling {
   void look(double[] x, double[] g) {
     worstChange = 0;
     worstMove = 0;
-    for (DevicePort load : loads) {
-      look(load, x, g);
+    for (int d = 0; d < changes.length; d++) {
+      DevicePort load = loads.get(d);
+      changes[d] = look(load, x, g);
       worstMove = Math.max(worstMove, load.voltageMovedV() / load.nominalV());
     }
     for (ActiveFilter filter : filters) {
@@ -39,12 +53,13 @@ final class Settling {
     firstChange = Math.max(firstChange, worstChange);
   }
 
-  private void look(DevicePort load, double[] x, double[] g) {
+  private double look(DevicePort load, double[] x, double[] g) {
     double change = change(load.offset(), 2 * load.ports() * orders.count(), x, g);
     if (change >= worstChange) {
       worstChange = change;
       worst = sentence(load, x, g, change);
     }
+    return change;
   }
 
   /** Rms of the change over rms of the current. */
@@ -87,6 +102,26 @@ final class Settling {
   /** The largest change of a load's current, on its rms. */
   double change() {
     return worstChange;
+  }
+
+  /**
+   * The few loads that are far behind the others: what they draw does not follow their voltage as
+   * their slopes say.
+   *
+   * @param slow whether the last pass brought little: then the very last ones in any case
+   */
+  List<DevicePort> last(boolean slow) {
+    double[] sorted = changes.clone();
+    Arrays.sort(sorted);
+    double most = sorted.length == 0 ? 0 : sorted[sorted.length * 9 / 10];
+    double behind = slow ? worstChange * NEARLY : Math.max(FAR_BEHIND * most, worstChange * NEARLY);
+    return IntStream.range(0, changes.length)
+        .filter(d -> changes[d] >= behind && changes[d] > CoupledSolver.LOAD_TOLERANCE)
+        .boxed()
+        .sorted(Comparator.comparingDouble((Integer d) -> changes[d]).reversed())
+        .limit(MOST)
+        .map(loads::get)
+        .toList();
   }
 
   /** How far the way to the tolerance is gone, on a logarithmic scale, 0 to 1. */

@@ -79,8 +79,9 @@ final class SiteIteration {
    * Solves.
    *
    * @param guess what the loads draw, if something like it is known
+   * @param book slopes found in other states, over the same orders
    */
-  SiteSolution solve(LoadCurrents guess, Progress progress) {
+  SiteSolution solve(LoadCurrents guess, SlopeBook book, Progress progress) {
     progress.at(0, "Eliminating the network");
     eachOrder(this::factor);
     double[] x = new double[length];
@@ -91,7 +92,7 @@ final class SiteIteration {
         begin(x, LoadCurrents.NONE);
         refuse(image(x, g));
       }
-      iterate(x, g, progress);
+      iterate(x, g, book, progress);
     } else {
       solveNetwork(x);
     }
@@ -110,6 +111,16 @@ final class SiteIteration {
       }
     }
     return byCircuit;
+  }
+
+  /** An empty book of slopes over this state's orders. */
+  SlopeBook newBook() {
+    return new SlopeBook(orders, omega);
+  }
+
+  /** Whether a book's slopes are over this state's orders. */
+  boolean canUse(SlopeBook book) {
+    return book.covers(orders);
   }
 
   /** What the loads drew at last. */
@@ -133,9 +144,10 @@ final class SiteIteration {
     solveNetwork(x);
   }
 
-  private void iterate(double[] x, double[] g, Progress progress) {
+  private void iterate(double[] x, double[] g, SlopeBook book, Progress progress) {
     Settling settling = new Settling(loads, filters, orders);
-    NewtonStep newton = new NewtonStep(network, factors, orders, loads, filters, omega, workers);
+    NewtonStep newton =
+        new NewtonStep(network, factors, orders, loads, filters, omega, book, workers);
     for (int pass = 1; pass <= MOST_PASSES; pass++) {
       settling.look(x, g);
       progress.at(settling.share(), "Network and loads together, pass " + pass);
@@ -143,7 +155,7 @@ final class SiteIteration {
         last = g;
         return;
       }
-      newton.renewWhereSlow(settling.change(), g);
+      newton.renewSlopes(settling, g);
       advance(x, g, newton.step(x, g));
     }
     throw new AuditFailedException(

@@ -5,75 +5,112 @@ import java.util.ArrayList;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
-import java.util.Objects;
+import java.util.Optional;
 
 /**
- * Finds the slopes of all loads. A slope costs a hundred solutions of its load, so it is worked out
- * for some and lent to those of the same kind whose current has nearly the same shape, turned and
- * scaled.
+ * Finds the slopes of loads. A slope costs a hundred solutions of its load, so it is worked out for
+ * some and lent to those of the same kind whose current has nearly the same shape, turned and
+ * scaled. What was worked out once is kept, for all states of a site.
  */
 final class SlopeBook {
   /** Shapes that differ by less than this, on the fundamental, count as alike. */
   private static final double ALIKE = 0.1;
 
   /** So many shapes of a kind are enough; what differs from all borrows from the nearest. */
-  private static final int MOST_SHAPES = 48;
+  private static final int MOST_SHAPES = 64;
 
   /** Orders by which shapes are told apart. */
   private static final int HIGHEST_COMPARED = 15;
 
   private final OrdersInPlay orders;
-  private final List<DevicePort> loads;
-  private final Workers workers;
   private final double omega;
+  private final Map<Kind, List<Leader>> leaders = new HashMap<>();
 
-  SlopeBook(OrdersInPlay orders, List<DevicePort> loads, double omega, Workers workers) {
+  SlopeBook(OrdersInPlay orders, double omega) {
     this.orders = orders;
-    this.loads = loads;
-    this.workers = workers;
     this.omega = omega;
   }
 
-  /** A load whose slope others borrow, with its current's shape. */
-  private record Leader(DevicePort load, double[] shape, double angle, double siemens) {}
-
-  /** Gives every load a slope at the state last solved, where it drew g. */
-  void renew(double[] g) {
-    Map<LoadKind, List<Leader>> leaders = new HashMap<>();
-    List<Leader> all = new ArrayList<>();
-    Leader[] own = new Leader[loads.size()];
-    Leader[] of = new Leader[loads.size()];
-    for (int d = 0; d < loads.size(); d++) {
-      own[d] = look(loads.get(d), g);
-      List<Leader> known =
-          leaders.computeIfAbsent(
-              loads.get(d).device().placement().request().kind(), k -> new ArrayList<>());
-      Leader nearest = nearest(own[d], known);
-      if (nearest == own[d]) {
-        known.add(nearest);
-        all.add(nearest);
-      }
-      of[d] = nearest;
-    }
-    DeviceSlope[] slopes = new DeviceSlope[all.size()];
-    workers.each(slopes.length, k -> slopes[k] = all.get(k).load().findSlope(orders, omega));
-    Map<Leader, DeviceSlope> slopeOf = new HashMap<>();
-    for (int k = 0; k < slopes.length; k++) {
-      slopeOf.put(all.get(k), slopes[k]);
-    }
-    for (int d = 0; d < own.length; d++) {
-      loads
-          .get(d)
-          .setSlope(
-              new LoadSlope(
-                  Objects.requireNonNull(slopeOf.get(of[d])),
-                  own[d].siemens() / of[d].siemens(),
-                  own[d].angle() - of[d].angle()));
+  /** What loads must have in common to borrow from each other at all. */
+  private record Kind(LoadKind kind, int ports) {
+    static Kind of(DevicePort load) {
+      return new Kind(load.device().placement().request().kind(), load.ports());
     }
   }
 
-  /** The current as it would be with the voltage at 0° and a fundamental of 1. */
-  private Leader look(DevicePort load, double[] g) {
+  /** A slope that others borrow, and what the current of its load looked like. */
+  private record Leader(DeviceSlope slope, Look look) {}
+
+  /**
+   * A load's current at a state.
+   *
+   * @param shape as it would be with the voltage at 0° and a fundamental of 1
+   * @param angle the voltage's, radians
+   * @param siemens the fundamental current on the fundamental voltage
+   */
+  private record Look(double[] shape, double angle, double siemens) {
+    double squareTo(Look other, double enough) {
+      double square = 0;
+      for (int i = 0; i < shape.length && square < enough; i++) {
+        double d = shape[i] - other.shape[i];
+        square += d * d;
+      }
+      return square;
+    }
+  }
+
+  /** Whether it holds slopes over so many orders. */
+  boolean covers(OrdersInPlay others) {
+    return orders.count() == others.count();
+  }
+
+  /** Forgets what was worked out so far. */
+  void forget() {
+    leaders.clear();
+  }
+
+  /** Gives loads a slope at the state last solved, where they drew g. */
+  void lend(List<DevicePort> loads, double[] g, Workers workers) {
+    Look[] looks = new Look[loads.size()];
+    workers.each(looks.length, d -> looks[d] = look(loads.get(d), g));
+    Leader[] of = new Leader[looks.length];
+    List<Integer> first = new ArrayList<>();
+    for (int d = 0; d < looks.length; d++) {
+      List<Leader> alike = leaders.computeIfAbsent(Kind.of(loads.get(d)), k -> new ArrayList<>());
+      Optional<Leader> nearest = nearest(looks[d], alike);
+      of[d] = nearest.orElse(new Leader(new DeviceSlope(loads.get(d).length(orders)), looks[d]));
+      if (nearest.isEmpty()) {
+        alike.add(of[d]);
+        first.add(d);
+      }
+    }
+    workers.each(
+        first.size(),
+        k -> {
+          int d = first.get(k);
+          loads.get(d).findSlope(orders, omega, false, of[d].slope());
+        });
+    for (int d = 0; d < of.length; d++) {
+      Look look = of[d].look();
+      double scale = looks[d].siemens() / look.siemens();
+      double turn = looks[d].angle() - look.angle();
+      loads.get(d).setSlope(new LoadSlope(of[d].slope(), scale, turn), false);
+    }
+  }
+
+  /** Gives loads that resemble no other a slope of their own. */
+  void giveOwn(List<DevicePort> loads, Workers workers) {
+    workers.each(
+        loads.size(),
+        k -> {
+          DevicePort load = loads.get(k);
+          DeviceSlope slope = new DeviceSlope(load.length(orders));
+          load.findSlope(orders, omega, true, slope);
+          load.setSlope(new LoadSlope(slope, 1, 0), true);
+        });
+  }
+
+  private Look look(DevicePort load, double[] g) {
     double[] e = load.lastEmf();
     double angle = Math.atan2(e[1], e[0]);
     double[] shape = new double[load.length(orders)];
@@ -85,21 +122,17 @@ final class SlopeBook {
       compared[2 * k] = shape[2 * k] / amps;
       compared[2 * k + 1] = shape[2 * k + 1] / amps;
     }
-    return new Leader(load, compared, angle, amps / Math.hypot(e[0], e[1]));
+    return new Look(compared, angle, amps / Math.hypot(e[0], e[1]));
   }
 
-  private static Leader nearest(Leader own, List<Leader> known) {
-    Leader nearest = own;
+  private static Optional<Leader> nearest(Look own, List<Leader> known) {
+    Optional<Leader> nearest = Optional.empty();
     double least = known.size() < MOST_SHAPES ? ALIKE * ALIKE : Double.POSITIVE_INFINITY;
     for (Leader leader : known) {
-      double square = 0;
-      for (int i = 0; i < own.shape().length && square < least; i++) {
-        double d = own.shape()[i] - leader.shape()[i];
-        square += d * d;
-      }
-      if (square < least && leader.load().ports() == own.load().ports()) {
+      double square = own.squareTo(leader.look(), least);
+      if (square < least) {
         least = square;
-        nearest = leader;
+        nearest = Optional.of(leader);
       }
     }
     return nearest;
