@@ -39,8 +39,7 @@ final class BoardEquations {
    *
    * @param filters the active filters, whose currents are unknowns too
    */
-  BoardEquations(
-      BoardResponse response, Collection<PortPlace> places, List<ActiveFilter> filters) {
+  BoardEquations(BoardResponse response, Collection<PortPlace> places, List<ActiveFilter> filters) {
     TreeNetwork network = response.network();
     this.response = response;
     this.filters = filters;
@@ -58,10 +57,8 @@ final class BoardEquations {
     this.row = new BoardRow(network, response.orders(), boards);
     this.trunk =
         Trunk.of(
-            network,
-            IntStream.concat(row.nodes(), filters.stream().mapToInt(ActiveFilter::node)));
-    places.forEach(
-        place -> slopes.computeIfAbsent(place, p -> new PlaceSlope(p, network, row)));
+            network, IntStream.concat(row.nodes(), filters.stream().mapToInt(ActiveFilter::node)));
+    places.forEach(place -> slopes.computeIfAbsent(place, p -> new PlaceSlope(p, network, row)));
     this.byBoard =
         slopes.values().stream()
             .collect(

@@ -87,8 +87,7 @@ final class NewtonStep {
   double[] step(double[] x, double[] g) {
     double[] step = new double[x.length];
     double[][] sums = new double[groups.size()][];
-    workers.each(
-        groups.size(), k -> sums[k] = groups.get(k).gather(orders, omega, x, g, step));
+    workers.each(groups.size(), k -> sums[k] = groups.get(k).gather(orders, omega, x, g, step));
     double[] drawn = new double[boards.row().length()];
     for (int k = 0; k < sums.length; k++) {
       groups.get(k).slope().draw(sums[k], drawn);

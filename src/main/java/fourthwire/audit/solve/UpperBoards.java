@@ -76,8 +76,7 @@ final class UpperBoards {
     Map<PortPlace, PortPlace> leads = new LinkedHashMap<>();
     for (PortPlace place : places) {
       PortPlace lead = place;
-      while (below[lead.node()] < Math.sqrt(boards.length)
-          && network.isFedByFeeder(lead.node())) {
+      while (below[lead.node()] < Math.sqrt(boards.length) && network.isFedByFeeder(lead.node())) {
         lead = lead.feeding(network);
       }
       leads.put(place, lead);
