@@ -14,26 +14,7 @@ import fourthwire.load.rectifier.path.PulseTrace;
  * falls through the threshold. Workspace, not thread-safe.
  */
 abstract class LoopBridge {
-  /** First steps after a change, as shares of the way to a node: the current starts like t². */
-  private static final double[] GRADING = {0.02, 0.06, 0.16, 0.36, 1};
-
-  private static final double[] COARSE_GRADING = {0.1, 0.4, 1};
-
-  /** Longest step as a share of √(LC). */
-  private static final double STEP_OF_RING = 0.3;
-
-  private static final double MOST_DIVISIONS = 4;
-
-  /** Cells to a coarse step where the circuit does not ring within one. */
-  private static final double COARSE_CELLS = 4;
-
   private static final int MOST_SWITCHINGS = 600;
-  private static final double EVENT_CELLS = 1e-7;
-
-  /** How near a start has to be found: its current begins with a slope of zero. */
-  private static final double JOIN_CELLS = 1e-5;
-
-  private static final double COARSE_EVENT_CELLS = 1e-3;
 
   /**
    * After a line has left one may join only this many cells later, unless its margin is clear: a
@@ -47,6 +28,10 @@ abstract class LoopBridge {
   final PulseTrace[] trace;
 
   final PathStep pair = new PathStep();
+
+  /** How long steps are; to be made fine or coarse after the circuit is set. */
+  final StepGrid grid = new StepGrid(pair);
+
   final LoopStep loops;
 
   /** How the state answers to that at the start of the march; no columns, no work. */
@@ -71,11 +56,6 @@ abstract class LoopBridge {
   private final EventFinder.Margin shortfall = this::shortfall;
   private final EventFinder.Margin joinMargin = this::marginAfter;
 
-  private double stride;
-  private double[] grading = GRADING;
-  private double leaveWidth;
-  private double joinWidth;
-
   private boolean recording;
   private int switchings;
   private boolean justLeft;
@@ -97,33 +77,6 @@ abstract class LoopBridge {
     before = new double[currents];
     loops = new LoopStep(linesOfOne);
     tangent = new LoopTangent(currents);
-  }
-
-  /** Steps as long as accuracy bears. */
-  final void fine() {
-    stride = longest();
-    grading = GRADING;
-    leaveWidth = EVENT_CELLS;
-    joinWidth = JOIN_CELLS;
-  }
-
-  /** Longer steps: good enough to come near a steady state. */
-  final void coarse() {
-    double fine = longest();
-    stride = fine < 1 ? 2 * fine : COARSE_CELLS;
-    grading = COARSE_GRADING;
-    leaveWidth = COARSE_EVENT_CELLS;
-    joinWidth = COARSE_EVENT_CELLS;
-  }
-
-  /** A cell, divided where the circuit would ring within one. */
-  private double longest() {
-    double ring = Math.sqrt(pair.inductance * pair.capacitance);
-    return 1 / Math.min(MOST_DIVISIONS, Math.ceil(1 / (STEP_OF_RING * ring + 1e-9)));
-  }
-
-  private double nextNode(double position) {
-    return (Math.floor(position / stride + 1e-9) + 1) * stride;
   }
 
   /** How many currents there are in the state. */
@@ -225,13 +178,10 @@ abstract class LoopBridge {
   }
 
   private void follow(boolean fresh) {
-    double base = u;
-    double span = Math.min(nextNode(nextNode(u)), to) - u;
-    int graded = fresh ? 0 : grading.length;
+    grid.start(u, to, fresh);
     boolean same = true;
     while (same && u < to && v > floorV) {
-      double next =
-          graded < grading.length ? base + grading[graded++] * span : Math.min(nextNode(u), to);
+      double next = grid.next(u, to);
       same = step(u < joinsFrom ? Math.min(next, joinsFrom) : next);
     }
     if (same) {
@@ -246,7 +196,7 @@ abstract class LoopBridge {
     boolean leaves = missing > 0;
     if (leaves) {
       double short0 = pair.threshold - least(loops.from);
-      h = EventFinder.find(shortfall, 0, short0, h, missing, leaveWidth, 1e-3 * pair.threshold);
+      h = EventFinder.find(shortfall, 0, short0, h, missing, grid.leaveWidth, 1e-3 * pair.threshold);
     }
     double margin = margin(u + h);
     boolean joins = joins(margin, u + h);
@@ -269,7 +219,7 @@ abstract class LoopBridge {
     loops.v = v;
     double atStart = margin(u);
     if (atStart < 0 && u >= joinsFrom) {
-      return EventFinder.find(joinMargin, 0, atStart, h, margin, joinWidth, 0);
+      return EventFinder.find(joinMargin, 0, atStart, h, margin, grid.joinWidth, 0);
     }
     marginAfter(h);
     return h;

@@ -1,20 +1,11 @@
 package fourthwire.load.rectifier.loop;
 
-import fourthwire.load.rectifier.path.BridgeLoad;
-import fourthwire.load.rectifier.path.QuickLog;
-
 /**
  * One time step of all loops of current that conduct in one bridge or in two on one capacitor.
  *
- * <p>With x the loops' currents, M and R the matrices of what they share of the source, the line
- * chokes and the direct-current choke: M·x' = e - R·x - v_d - v and C·v' = Σx - P/v, where v_d is
- * the drop of the diode that a loop has for itself plus that of the one which carries all loops of
- * its bridge. Method and units as in {@code PathStep}; M may be singular (no inductance).
+ * <p>The method is {@code PathStep}'s, RODAS3, with the circuit's matrices in place of numbers.
  */
-public final class LoopStep {
-  /** Two lines of each bridge share a current. */
-  static final int MOST = 4;
-
+final class LoopStep extends LoopCircuit {
   /** Over this many cells the currents' rates are taken where a line may join. */
   private static final double MOMENT = 1e-3;
 
@@ -22,12 +13,6 @@ public final class LoopStep {
   private static final double GAMMA = 1 - Math.sqrt(0.5);
 
   private static final double SECOND = (1 - GAMMA) / GAMMA;
-
-  /** Loops, those of a bridge next to each other. */
-  final Loop[] loop = new Loop[MOST];
-
-  /** How many of them conduct. */
-  int n;
 
   /** Their currents, amps: where a step starts, and where it has ended. */
   final double[] from = new double[MOST];
@@ -37,21 +22,6 @@ public final class LoopStep {
   /** Capacitor's voltage after a step. */
   double v;
 
-  private double sourceOhm;
-  private double sourceHenry;
-  private double ownOhm;
-  private double ownHenry;
-  private double dcOhm;
-  private double dcHenry;
-  private boolean resistive;
-  private double capacitance;
-  private double power;
-  private double slopeV;
-  private double saturation;
-  private double threshold;
-
-  private final double[] ohm = new double[MOST * MOST];
-  private final double[] henry = new double[MOST * MOST];
   private final double[] factors = new double[MOST * MOST];
 
   /** Drives at the start of a step, their change over it, and at its end. */
@@ -76,32 +46,7 @@ public final class LoopStep {
 
   /** As {@link Loop#Loop}. */
   LoopStep(int linesOfOne) {
-    java.util.Arrays.setAll(loop, a -> new Loop(linesOfOne));
-  }
-
-  /**
-   * Takes the circuit.
-   *
-   * @param sourceOhm resistance per line ahead of both bridges
-   * @param sourceHenry inductance likewise
-   */
-  void set(
-      double sourceOhm, double sourceHenry, double ownHenry, BridgeLoad load, double cellSeconds) {
-    this.sourceOhm = sourceOhm;
-    this.sourceHenry = sourceHenry / cellSeconds;
-    ownOhm = load.lineOhm() + load.diode().ohm();
-    this.ownHenry = ownHenry / cellSeconds;
-    dcOhm = load.dcOhm();
-    dcHenry = load.dcHenry() / cellSeconds;
-    resistive = sourceHenry + ownHenry + load.dcHenry() == 0;
-    capacitance = load.capacitanceF() / cellSeconds;
-    power = load.powerW();
-    slopeV = load.diode().slopeV();
-    saturation = load.diode().saturationA();
-  }
-
-  void threshold(double amps) {
-    threshold = amps;
+    super(linesOfOne);
   }
 
   /** Takes note of another loop; {@link #couple} has to follow. */
@@ -109,47 +54,6 @@ public final class LoopStep {
     loop[n].set(in, out, sign);
     from[n] = amps;
     n++;
-  }
-
-  /** The matrices of the loops as they stand. */
-  void couple() {
-    for (int a = 0; a < n; a++) {
-      for (int b = 0; b <= a; b++) {
-        ohm[a * MOST + b] = ohm[b * MOST + a] = mutualOhm(loop[a], loop[b]);
-        henry[a * MOST + b] = henry[b * MOST + a] = mutualHenry(loop[a], loop[b]);
-      }
-    }
-  }
-
-  private double mutualOhm(Loop a, Loop b) {
-    return (a.bridge == b.bridge ? ownOhm + sourceOhm : sourceOhm) * a.along(b) + dcOhm;
-  }
-
-  private double mutualHenry(Loop a, Loop b) {
-    return (a.bridge == b.bridge ? ownHenry + sourceHenry : sourceHenry) * a.along(b) + dcHenry;
-  }
-
-  /** All loops of this one's bridge together: the current in their common diode. */
-  private double shared(int a, double[] amps) {
-    double sum = amps[a];
-    if (a > 0 && loop[a - 1].bridge == loop[a].bridge) {
-      sum += amps[a - 1];
-    } else if (a + 1 < n && loop[a + 1].bridge == loop[a].bridge) {
-      sum += amps[a + 1];
-    }
-    return sum;
-  }
-
-  /** Logarithmic drop of two diodes. */
-  private double drops(double one, double other) {
-    return slopeV
-        * QuickLog.of(
-            (1 + Math.max(one, threshold) / saturation)
-                * (1 + Math.max(other, threshold) / saturation));
-  }
-
-  private double conductance(double amps) {
-    return amps >= threshold ? slopeV / (amps + saturation) : 0;
   }
 
   /** What drives each loop's current on: {@link #f}, and the capacitor's: {@link #fv}. */
@@ -181,11 +85,6 @@ public final class LoopStep {
         factors[a * MOST + b] = a == b ? sum : sum / factors[b * MOST + b];
       }
     }
-  }
-
-  /** Whether nothing keeps a current going. */
-  boolean resistive() {
-    return resistive;
   }
 
   /**
@@ -279,7 +178,7 @@ public final class LoopStep {
    * charge in a way that their currents tell better.
    */
   double chargePerAmp(double h, double v0) {
-    if (n > 1 && !resistive) {
+    if (n > 1 && !resistive()) {
       return Double.NaN;
     }
     double sum = 0;
@@ -287,14 +186,6 @@ public final class LoopStep {
       sum += from[a] + x[a];
     }
     return (capacitance * (v - v0) + 2 * power * h / (v + v0)) / sum;
-  }
-
-  private double inductive(int a, double[] rates) {
-    double sum = 0;
-    for (int b = 0; b < n; b++) {
-      sum += henry[a * MOST + b] * rates[b];
-    }
-    return sum;
   }
 
   /** Steps from {@link #from} and a voltage at a position over h cells. */
@@ -362,15 +253,6 @@ public final class LoopStep {
     System.arraycopy(f, 0, r, 0, n);
     c = Double.POSITIVE_INFINITY;
     solve(0);
-  }
-
-  /**
-   * What a line that joins has its drops come to beside one that carries a current already: both
-   * diodes', with the threshold's current in its own.
-   */
-  double joiningDrop(double carried) {
-    double held = Math.max(carried, threshold);
-    return drops(0, held) + (carried > 0 ? slopeV * 2 * threshold / held : 0);
   }
 
   /**

@@ -6,7 +6,6 @@ import fourthwire.load.model.PortSpectra;
 import fourthwire.load.rectifier.path.BridgeLoad;
 import fourthwire.load.rectifier.path.CycleTable;
 import fourthwire.load.rectifier.path.PulseTrace;
-import fourthwire.quantity.Spectrum;
 import java.util.List;
 import java.util.Locale;
 
@@ -44,10 +43,10 @@ public final class MultiPulseSolver implements LoadSolver {
 
   private static final double[] STAGES = {0.1, 0.2, 0.35, 0.5, 0.65, 0.8, 0.9, 1};
   private static final int REPETITIONS = 50;
-  private static final int SIXTHS = 6;
+  private static final int SIXTHS = LineSpectra.SIXTHS;
+  private static final double SIN_120 = Math.sqrt(3) / 2;
   private static final ThreadLocal<ThreeLineBridge> WORK =
       ThreadLocal.withInitial(ThreeLineBridge::new);
-  private static final double ROOT3 = Math.sqrt(3);
 
   /** Largest multiplier of a stable state; a little over 1 for its own error. */
   private static final double MOST_MULTIPLIER = 1.002;
@@ -103,7 +102,7 @@ public final class MultiPulseSolver implements LoadSolver {
   /** Whether a state is found that repeats as early as the voltage allows. */
   private boolean repeats(double seriesOhm, double seriesHenry) {
     setPeriods(!bridge.emf.halfWave() ? 1 : bridge.emf.balanced ? SIXTHS : 2);
-    bridge.fine();
+    bridge.grid.fine();
     return warm && newton.converge() || search() || inStages(seriesOhm, seriesHenry);
   }
 
@@ -128,7 +127,7 @@ public final class MultiPulseSolver implements LoadSolver {
     double re = emf.re[0][1];
     double im = emf.im[0][1];
     for (int k = 1; k < 3; k++) {
-      double sin = k == 1 ? ROOT3 / 2 : -ROOT3 / 2;
+      double sin = k == 1 ? SIN_120 : -SIN_120;
       re += -0.5 * emf.re[k][1] - sin * emf.im[k][1];
       im += sin * emf.re[k][1] - 0.5 * emf.im[k][1];
     }
@@ -176,10 +175,10 @@ public final class MultiPulseSolver implements LoadSolver {
 
   /** Comes near by coarse steps. */
   private boolean approach() {
-    bridge.coarse();
+    bridge.grid.coarse();
     newton.start(0.95);
     boolean near = newton.approach();
-    bridge.fine();
+    bridge.grid.fine();
     return near;
   }
 
@@ -229,70 +228,7 @@ public final class MultiPulseSolver implements LoadSolver {
   }
 
   private void write(PortSpectra current) {
-    takeHarmonics(0, current);
-    if (bridges == 2) {
-      takeHarmonics(3, bridge.second);
-      addShifted(bridge.second.re, current.re);
-      addShifted(bridge.second.im, current.im);
-    }
-  }
-
-  /** Of the three lines of a bridge. */
-  private void takeHarmonics(int first, PortSpectra to) {
-    for (int k = 0; k < 2; k++) {
-      bridge.trace[first + k].harmonics(periods > 1, to.re[k], to.im[k]);
-    }
-    for (int h = 1; h <= Spectrum.HIGHEST_ORDER; h++) {
-      to.re[2][h] = -to.re[0][h] - to.re[1][h];
-      to.im[2][h] = -to.im[0][h] - to.im[1][h];
-      if (periods == SIXTHS) {
-        addSixths(to, h);
-      }
-    }
-  }
-
-  /**
-   * A half cycle from its first sixth: in the next each line carries the negative of what the line
-   * after it did.
-   */
-  private static void addSixths(PortSpectra to, int h) {
-    boolean positive = h % 6 == 1;
-    if (!positive && h % 6 != 5) {
-      clear(to, h);
-      return;
-    }
-    // Σ over m of (-1)^m·F(k + m)·e^(-jhmπ/3): for h = 6n ± 1 the sequence component, three times.
-    double half = positive ? ROOT3 / 2 : -ROOT3 / 2;
-    double re = 0;
-    double im = 0;
-    for (int m = 0; m < 3; m++) {
-      double cos = m == 0 ? 1 : -0.5;
-      double sin = m == 0 ? 0 : m == 1 ? half : -half;
-      re += to.re[m][h] * cos - to.im[m][h] * sin;
-      im += to.re[m][h] * sin + to.im[m][h] * cos;
-    }
-    for (int k = 0; k < 3; k++) {
-      double cos = k == 0 ? 1 : -0.5;
-      double sin = k == 0 ? 0 : k == 1 ? -half : half;
-      to.re[k][h] = re * cos - im * sin;
-      to.im[k][h] = re * sin + im * cos;
-    }
-  }
-
-  private static void clear(PortSpectra to, int h) {
-    for (int k = 0; k < 3; k++) {
-      to.re[k][h] = 0;
-      to.im[k][h] = 0;
-    }
-  }
-
-  /** What currents in the shifted windings take from the lines: each winding lies across two. */
-  private static void addShifted(double[][] winding, double[][] line) {
-    for (int k = 0; k < 3; k++) {
-      for (int h = 1; h <= Spectrum.HIGHEST_ORDER; h++) {
-        line[k][h] += (winding[k][h] - winding[(k + 2) % 3][h]) / ROOT3;
-      }
-    }
+    LineSpectra.write(bridge, periods, current);
   }
 
   @Override

@@ -44,7 +44,6 @@ final class StateNewton {
 
   private final Period period;
   private final int volts;
-  private final int linesOfOne;
   private final double[] image;
 
   /** Where the last step was taken from, what it was to better, and whether it was Newton's. */
@@ -59,8 +58,7 @@ final class StateNewton {
 
   private final SmallMatrix jacobian = new SmallMatrix(LoopTangent.MOST);
   private final double[] step = new double[LoopTangent.MOST];
-  private final int[] unknown = new int[LoopTangent.MOST];
-  private int size;
+  private final StateUnknowns unknowns;
 
   private double peak;
   private double ampsScale;
@@ -75,12 +73,12 @@ final class StateNewton {
    */
   StateNewton(int lines, int linesOfOne, Period period) {
     this.period = period;
-    this.linesOfOne = linesOfOne;
     volts = lines;
     state = new double[lines + 1];
     image = new double[lines + 1];
     origin = new double[lines + 1];
     nudged = new double[lines + 1];
+    unknowns = new StateUnknowns(lines, linesOfOne);
     columns = new double[LoopTangent.MOST][lines + 1];
   }
 
@@ -182,17 +180,17 @@ final class StateNewton {
    */
   double largestMultiplier() {
     takeMap();
-    return jacobian.spectralRadius(size);
+    return jacobian.spectralRadius(unknowns.size);
   }
 
   /** A period on, with what departures along the unknowns come to. */
   private boolean follow() {
-    findUnknowns();
-    for (int b = 0; b < size; b++) {
+    unknowns.find(state);
+    for (int b = 0; b < unknowns.size; b++) {
       java.util.Arrays.fill(columns[b], 0);
-      shift(columns[b], unknown[b], 1);
+      unknowns.shift(columns[b], state, unknowns.at[b], 1);
     }
-    return period.map(state, image, columns, size);
+    return period.map(state, image, columns, unknowns.size);
   }
 
   /** By Newton's step where that can be taken, else to the image. */
@@ -228,9 +226,9 @@ final class StateNewton {
 
   /** The map's derivative by the unknowns, in units of {@link #scaleOf}. */
   private void takeMap() {
-    for (int a = 0; a < size; a++) {
-      for (int b = 0; b < size; b++) {
-        jacobian.set(a, b, columns[b][unknown[a]] * scaleOf(unknown[b]) / scaleOf(unknown[a]));
+    for (int a = 0; a < unknowns.size; a++) {
+      for (int b = 0; b < unknowns.size; b++) {
+        jacobian.set(a, b, columns[b][unknowns.at[a]] * scaleOf(unknowns.at[b]) / scaleOf(unknowns.at[a]));
       }
     }
   }
@@ -238,66 +236,28 @@ final class StateNewton {
   /** The step at which image and state would agree. */
   private boolean solve() {
     takeMap();
-    for (int a = 0; a < size; a++) {
+    for (int a = 0; a < unknowns.size; a++) {
       jacobian.set(a, a, jacobian.get(a, a) - 1);
-      step[a] = (state[unknown[a]] - image[unknown[a]]) / scaleOf(unknown[a]);
+      step[a] = (state[unknowns.at[a]] - image[unknowns.at[a]]) / scaleOf(unknowns.at[a]);
     }
-    return jacobian.solve(size, step);
-  }
-
-  /**
-   * The independent unknowns of each bridge: one current of a pair, the two like-signed of three.
-   */
-  private void findUnknowns() {
-    size = 0;
-    for (int k = 0; k < volts; k += linesOfOne) {
-      int sign = balance(k) >= 0 ? 1 : -1;
-      for (int m = k; m < k + linesOfOne; m++) {
-        if (state[m] * sign > 0) {
-          unknown[size++] = m;
-        }
-      }
-    }
-    unknown[size++] = volts;
-  }
-
-  private double balance(int first) {
-    double sum = 0;
-    for (int k = first; k < first + linesOfOne; k++) {
-      sum += Math.signum(state[k]);
-    }
-    return sum;
-  }
-
-  /** Changes one unknown, keeping the bridge's sum of currents zero. */
-  private void shift(double[] of, int index, double by) {
-    if (index < volts) {
-      int first = index - index % linesOfOne;
-      for (int k = first; k < first + linesOfOne; k++) {
-        if (state[k] * state[index] < 0) {
-          of[k] -= by;
-          break;
-        }
-      }
-    }
-    of[index] += by;
+    return jacobian.solve(unknowns.size, step);
   }
 
   /** Takes the step, shortened to what is sensible; false where it would leave the lines' set. */
   private boolean accept() {
     double shrink = 1;
-    for (int r = 0; r < size; r++) {
-      double most = unknown[r] == volts ? 0.2 : 5;
+    for (int r = 0; r < unknowns.size; r++) {
+      double most = unknowns.at[r] == volts ? 0.2 : 5;
       shrink = Math.min(shrink, most / Math.max(Math.abs(step[r]), 1e-300));
     }
     System.arraycopy(state, 0, nudged, 0, volts + 1);
-    for (int r = 0; r < size; r++) {
-      int k = unknown[r];
+    for (int r = 0; r < unknowns.size; r++) {
+      int k = unknowns.at[r];
       double change = shrink * step[r] * scaleOf(k);
       if (k < volts && Math.abs(nudged[k]) + change * Math.signum(nudged[k]) <= threshold) {
         return false;
       }
-      shift(nudged, k, change);
+      unknowns.shift(nudged, state, k, change);
     }
     if (!(nudged[volts] > 0.05 * peak)) {
       return false;

@@ -13,7 +13,7 @@ import fourthwire.load.rectifier.path.BridgeLoad;
  * P/v. By the symmetry of the four diodes both of a pair carry the same. {@link #line} holds x and
  * y; one leaves to the other, the choke's current unchanged.
  */
-public final class TwoPathBridge extends LoopBridge {
+final class TwoPathBridge extends LoopBridge {
   /** Space for the second path's spectrum. */
   final PortSpectra second = new PortSpectra(1);
 

@@ -68,7 +68,7 @@ public final class TwoPathSolver {
     boolean mirrored = bridge.emf.portHalfWave();
     warm &= mirrored == halfWave;
     halfWave = mirrored;
-    bridge.fine();
+    bridge.grid.fine();
     boolean found = warm && newton.converge() || search();
     warm = found && stable() || mirrored && wholeCycle();
     hunts = found && !warm;
