@@ -196,7 +196,9 @@ abstract class LoopBridge {
     boolean leaves = missing > 0;
     if (leaves) {
       double short0 = pair.threshold - least(loops.from);
-      h = EventFinder.find(shortfall, 0, short0, h, missing, grid.leaveWidth, 1e-3 * pair.threshold);
+      h =
+          EventFinder.find(
+              shortfall, 0, short0, h, missing, grid.leaveWidth, 1e-3 * pair.threshold);
     }
     double margin = margin(u + h);
     boolean joins = joins(margin, u + h);

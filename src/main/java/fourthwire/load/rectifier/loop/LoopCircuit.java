@@ -37,6 +37,7 @@ abstract class LoopCircuit {
 
   /** The matrices R and M, M per cell, row by row. */
   final double[] ohm = new double[MOST * MOST];
+
   final double[] henry = new double[MOST * MOST];
 
   /** As {@link Loop#Loop}. */

@@ -228,7 +228,8 @@ final class StateNewton {
   private void takeMap() {
     for (int a = 0; a < unknowns.size; a++) {
       for (int b = 0; b < unknowns.size; b++) {
-        jacobian.set(a, b, columns[b][unknowns.at[a]] * scaleOf(unknowns.at[b]) / scaleOf(unknowns.at[a]));
+        jacobian.set(
+            a, b, columns[b][unknowns.at[a]] * scaleOf(unknowns.at[b]) / scaleOf(unknowns.at[a]));
       }
     }
   }

@@ -84,8 +84,6 @@ final class StepGrid {
 
   /** Where the next step leads. */
   double next(double position, double to) {
-    return graded < grading.length
-        ? base + grading[graded++] * span
-        : Math.min(node(position), to);
+    return graded < grading.length ? base + grading[graded++] * span : Math.min(node(position), to);
   }
 }
