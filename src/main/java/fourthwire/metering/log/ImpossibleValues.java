@@ -13,6 +13,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import java.util.function.Function;
 
 /**
  * Values that can't be, and blanks. What can be is bounded by physics where it is (no rms is below
@@ -20,10 +21,12 @@ import java.util.Optional;
  * stands far above all the rest, and alone. Thresholds are common practice, no source.
  */
 final class ImpossibleValues implements DayCheck {
-  private final double nominalHz;
+  private final List<String> names;
   private final List<QuantityStatistics> statistics;
+  private final List<Column> columns = new ArrayList<>();
   private final Seen[] seen;
   private final Seen blank = new Seen();
+  private long values;
 
   /** Stretches of rows told one by one where bounds do not part what can be from what can't. */
   private static final int MOST_STRETCHES = 200;
@@ -84,15 +87,31 @@ final class ImpossibleValues implements DayCheck {
     }
   }
 
-  private final List<String> names;
-  private long values;
+  /**
+   * What is known of a column beforehand.
+   *
+   * @param bounds from its values of a day
+   * @param low position of its lowest values; -1 for none
+   * @param high position of its highest values; -1 for none
+   * @param amps where it is the volts of a line, position of that line's amps; -1 for none
+   */
+  private record Column(Function<double[], Bounds> bounds, int low, int high, int amps) {}
 
   ImpossibleValues(List<String> names, List<QuantityStatistics> statistics, double nominalHz) {
     this.names = names;
     this.statistics = statistics;
-    this.nominalHz = nominalHz;
     this.seen = new Seen[names.size()];
-    java.util.Arrays.setAll(seen, k -> new Seen());
+    for (int q = 0; q < seen.length; q++) {
+      String name = names.get(q);
+      String amps = name.matches("L[123]\\.rms_v") ? name.replace("rms_v", "rms_a") : "";
+      seen[q] = new Seen();
+      columns.add(
+          new Column(
+              bounds(name.replaceFirst("\\.(min|max)$", ""), statistics.get(q), nominalHz),
+              names.indexOf(name + ".min"),
+              names.indexOf(name + ".max"),
+              names.indexOf(amps)));
+    }
   }
 
   @Override
@@ -100,8 +119,8 @@ final class ImpossibleValues implements DayCheck {
     for (int q = 0; q < seen.length; q++) {
       double[] x = day.of(q);
       values += x.length;
-      Bounds bounds = bounds(q, x);
-      boolean[] wrong = againstOthers(day, q, x);
+      Bounds bounds = columns.get(q).bounds().apply(x);
+      boolean[] wrong = againstOthers(day, q, columns.get(q));
       double usual = statistics.get(q).p95();
       for (int row = 0; row < x.length; row++) {
         if (Double.isNaN(x[row])) {
@@ -128,8 +147,17 @@ final class ImpossibleValues implements DayCheck {
     }
   }
 
-  private Bounds bounds(int q, double[] x) {
-    String name = names.get(q).replaceFirst("\\.(min|max)$", "");
+  private static Function<double[], Bounds> bounds(
+      String name, QuantityStatistics s, double nominalHz) {
+    double none = Double.MAX_VALUE;
+    if (name.endsWith(".rms_v")) {
+      return x -> new Bounds(0, 2 * Math.max(Rows.median(x), 0.5 * s.p95()) + 1, none);
+    }
+    Bounds fixed = fixed(name, s, nominalHz);
+    return x -> fixed;
+  }
+
+  private static Bounds fixed(String name, QuantityStatistics s, double nominalHz) {
     double none = Double.MAX_VALUE;
     if (name.endsWith("_factor")) {
       return new Bounds(-1.005, 1.005, none);
@@ -143,12 +171,7 @@ final class ImpossibleValues implements DayCheck {
     if (name.endsWith("energy_wh")) {
       return new Bounds(-none, none, none);
     }
-    QuantityStatistics s = statistics.get(q);
     double usual = Math.max(Math.abs(s.p99()), s.p99() < 0 ? Math.abs(s.min()) : 0);
-    if (name.endsWith(".rms_v")) {
-      double median = Rows.median(x);
-      return new Bounds(0, 2 * Math.max(median, 0.5 * s.p95()) + 1, none);
-    }
     if (name.endsWith("_w") || name.endsWith("_var")) {
       double bound = 20 * Math.max(usual, 100);
       return new Bounds(-bound, bound, 6 * Math.max(usual, 1000));
@@ -160,31 +183,31 @@ final class ImpossibleValues implements DayCheck {
   }
 
   /** A mean lies between its lowest and highest; no volts where amps and watts flow. */
-  private boolean[] againstOthers(LogDay day, int q, double[] x) {
+  private boolean[] againstOthers(LogDay day, int q, Column column) {
+    double[] x = day.of(q);
     boolean[] wrong = new boolean[x.length];
-    String name = names.get(q);
-    Optional<double[]> low = day.find(name + ".min");
-    Optional<double[]> high = day.find(name + ".max");
-    for (int row = 0; row < x.length; row++) {
+    for (int row = 0; row < x.length && column.low() + column.high() > -2; row++) {
       double slack = 1e-6 + 0.002 * Math.abs(x[row]);
-      boolean below = low.isPresent() && x[row] < low.get()[row] - slack;
-      boolean above = high.isPresent() && x[row] > high.get()[row] + slack;
+      boolean below = column.low() >= 0 && x[row] < day.of(column.low())[row] - slack;
+      boolean above = column.high() >= 0 && x[row] > day.of(column.high())[row] + slack;
       wrong[row] = below || above;
     }
-    if (name.matches("L[123]\\.rms_v")) {
-      dead(day, q, x, wrong);
+    if (column.amps() >= 0) {
+      dead(x, statistics.get(q), day.of(column.amps()), statistics.get(column.amps()), wrong);
     }
     return wrong;
   }
 
-  private void dead(LogDay day, int q, double[] volts, boolean[] wrong) {
-    String line = names.get(q).substring(0, 2);
-    Optional<double[]> amps = day.find(line + ".rms_a");
-    double usual = statistics.get(q).p95();
-    int a = names.indexOf(line + ".rms_a");
-    for (int row = 0; row < volts.length && amps.isPresent(); row++) {
-      boolean flows = amps.get()[row] > 0.2 * statistics.get(a).p95();
-      wrong[row] |= volts[row] >= 0 && volts[row] < 0.05 * usual && flows;
+  private static void dead(
+      double[] volts,
+      QuantityStatistics usualVolts,
+      double[] amps,
+      QuantityStatistics usualAmps,
+      boolean[] wrong) {
+    double most = 0.05 * usualVolts.p95();
+    double least = 0.2 * usualAmps.p95();
+    for (int row = 0; row < volts.length; row++) {
+      wrong[row] |= volts[row] >= 0 && volts[row] < most && amps[row] > least;
     }
   }
 

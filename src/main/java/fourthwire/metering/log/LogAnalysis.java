@@ -52,14 +52,16 @@ public final class LogAnalysis {
             new FlatLines(names),
             new LogClock());
     KeyRows key = new KeyRows();
+    DayBatch batch = new DayBatch(checks);
     LogDays.forEach(
         series,
         zone,
         intervalMillis,
         day -> {
-          checks.parallelStream().forEach(check -> check.take(day));
+          batch.take(day);
           key.take(day);
         });
+    batch.pass();
     List<QualityFinding> quality = new ArrayList<>();
     checks.forEach(check -> quality.addAll(check.findings()));
     quality.addAll(seen);

@@ -2,6 +2,7 @@ package fourthwire.metering.log;
 
 import java.time.Instant;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 
 /**
@@ -10,18 +11,28 @@ import java.util.Optional;
  */
 final class LogDay {
   private final List<String> quantities;
+  private final Map<String, Integer> numbers;
   private final long[] startMillis;
   private final double[][] values;
   private final long firstRow;
   private final long intervalMillis;
 
+  /**
+   * Rows in the file's order.
+   *
+   * @param quantities names of the columns
+   * @param numbers positions of the quantities by name
+   * @param firstRow number of the first row in the log, from 0
+   */
   LogDay(
       List<String> quantities,
+      Map<String, Integer> numbers,
       long[] startMillis,
       double[][] values,
       long firstRow,
       long intervalMillis) {
     this.quantities = quantities;
+    this.numbers = numbers;
     this.startMillis = startMillis;
     this.values = values;
     this.firstRow = firstRow;
@@ -65,7 +76,6 @@ final class LogDay {
 
   /** A quantity's values; empty where it is not logged. */
   Optional<double[]> find(String quantity) {
-    int q = quantities.indexOf(quantity);
-    return q < 0 ? Optional.empty() : Optional.of(values[q]);
+    return Optional.ofNullable(numbers.get(quantity)).map(q -> values[q]);
   }
 }

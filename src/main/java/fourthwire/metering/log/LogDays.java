@@ -4,6 +4,8 @@ import fourthwire.metering.series.Series;
 import fourthwire.metering.series.WeekClock;
 import java.time.ZoneId;
 import java.util.Arrays;
+import java.util.HashMap;
+import java.util.Map;
 import java.util.function.Consumer;
 
 /** Goes through a series by local days. */
@@ -12,6 +14,7 @@ final class LogDays {
   private static final int MOST_ROWS = 20_000;
 
   private final Series series;
+  private final Map<String, Integer> numbers = new HashMap<>();
   private final WeekClock clock;
   private final long intervalMillis;
   private final Consumer<LogDay> taker;
@@ -26,6 +29,9 @@ final class LogDays {
     this.intervalMillis = intervalMillis;
     this.taker = taker;
     this.values = new double[series.quantities().size()][256];
+    for (int q = 0; q < values.length; q++) {
+      numbers.putIfAbsent(series.quantities().get(q), q);
+    }
   }
 
   static void forEach(Series series, ZoneId zone, long intervalMillis, Consumer<LogDay> taker) {
@@ -80,7 +86,7 @@ final class LogDays {
       day[q] = Arrays.copyOf(values[q], rows);
     }
     taker.accept(
-        new LogDay(series.quantities(), Arrays.copyOf(start, rows), day, passed, intervalMillis));
+        new LogDay(series.quantities(), numbers, Arrays.copyOf(start, rows), day, passed, intervalMillis));
     passed += rows;
     rows = 0;
   }

@@ -1,5 +1,6 @@
 package fourthwire.metering.log;
 
+import fourthwire.metering.series.Selection;
 import java.util.Arrays;
 import java.util.function.IntToDoubleFunction;
 
@@ -7,31 +8,27 @@ import java.util.function.IntToDoubleFunction;
 final class Rows {
   private Rows() {}
 
-  /** The values that are there, rising. */
-  static double[] sorted(double[] x) {
-    double[] there = new double[x.length];
+  /** Median, the upper of two in the middle; NaN without any value. */
+  static double median(double[] x) {
+    return medianOf(x.clone());
+  }
+
+  /** Median of values that may be reordered. */
+  private static double medianOf(double[] x) {
     int n = 0;
     for (double v : x) {
       if (!Double.isNaN(v)) {
-        there[n++] = v;
+        x[n++] = v;
       }
     }
-    double[] sorted = Arrays.copyOf(there, n);
-    Arrays.sort(sorted);
-    return sorted;
-  }
-
-  /** Median; NaN without any value. */
-  static double median(double[] x) {
-    double[] sorted = sorted(x);
-    return sorted.length == 0 ? Double.NaN : sorted[sorted.length / 2];
+    return n == 0 ? Double.NaN : Selection.ofRank(x, 0, n, n / 2);
   }
 
   /** Median of a figure over rows; NaN where it is nowhere. */
   static double median(int rows, IntToDoubleFunction figure) {
     double[] x = new double[rows];
     Arrays.setAll(x, figure);
-    return median(x);
+    return medianOf(x);
   }
 
   /** How many rows a figure is there. */

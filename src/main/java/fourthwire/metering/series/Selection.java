@@ -1,7 +1,7 @@
 package fourthwire.metering.series;
 
 /** Finds order statistics without sorting (Hoare, 1961). Values must hold no NaN. */
-final class Selection {
+public final class Selection {
   private static final int SMALL = 24;
 
   private Selection() {}
@@ -27,6 +27,17 @@ final class Selection {
       low = below;
     }
     return found;
+  }
+
+  /**
+   * The value of a rank, 0 for the smallest. Reorders the values.
+   *
+   * @param from first of the values
+   * @param to the position after the last; above {@code from + rank}
+   */
+  public static double ofRank(double[] x, int from, int to, int rank) {
+    select(x, from, to - 1, from + rank);
+    return x[from + rank];
   }
 
   private static double least(double[] x, int from, int to) {
