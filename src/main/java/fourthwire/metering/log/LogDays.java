@@ -56,7 +56,11 @@ final class LogDays {
       while (to < times.length && to - from + rows < MOST_ROWS && clock.day(times[to]) == day) {
         to++;
       }
-      append(times, columns, from, to);
+      if (rows == 0 && to < times.length) {
+        pass(times, columns, from, to);
+      } else {
+        append(times, columns, from, to);
+      }
       from = to;
     }
   }
@@ -78,16 +82,25 @@ final class LogDays {
   }
 
   private void pass() {
-    if (rows == 0) {
-      return;
+    if (rows > 0) {
+      pass(start, values, 0, rows);
+      rows = 0;
     }
-    double[][] day = new double[values.length][];
-    for (int q = 0; q < values.length; q++) {
-      day[q] = Arrays.copyOf(values[q], rows);
+  }
+
+  private void pass(long[] times, double[][] columns, int from, int to) {
+    double[][] day = new double[columns.length][];
+    for (int q = 0; q < columns.length; q++) {
+      day[q] = Arrays.copyOfRange(columns[q], from, to);
     }
     taker.accept(
-        new LogDay(series.quantities(), numbers, Arrays.copyOf(start, rows), day, passed, intervalMillis));
-    passed += rows;
-    rows = 0;
+        new LogDay(
+            series.quantities(),
+            numbers,
+            Arrays.copyOfRange(times, from, to),
+            day,
+            passed,
+            intervalMillis));
+    passed += to - from;
   }
 }

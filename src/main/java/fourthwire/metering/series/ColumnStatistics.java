@@ -3,10 +3,14 @@ package fourthwire.metering.series;
 import java.time.ZoneId;
 import java.util.Arrays;
 
-/** Statistics of one column, in one array where it fits, else in passes over the chunks. */
+/**
+ * Statistics of a column, in one array where it fits, else in passes over the chunks. Not
+ * thread-safe: the array is used again for the next column.
+ */
 final class ColumnStatistics {
   private final Series series;
   private final RowWeeks rows;
+  private double[] there = new double[0];
 
   ColumnStatistics(Series series, RowWeeks rows) {
     this.series = series;
@@ -95,7 +99,7 @@ final class ColumnStatistics {
   }
 
   QuantityStatistics inArray(int quantity) {
-    double[] there = new double[(int) series.rows()];
+    there = there.length == 0 ? new double[(int) series.rows()] : there;
     Sums sums = new Sums();
     int[] end = new int[rows.weeks() + 1];
     forEachStretch(

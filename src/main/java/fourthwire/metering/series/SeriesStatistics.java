@@ -16,6 +16,9 @@ public record SeriesStatistics(long firstWeek, int weeks, List<QuantityStatistic
   /** Most rows whose columns are taken into one array each. */
   static final int MOST_IN_ARRAY = 4_000_000;
 
+  /** Shares of work, each with a workplace of its own. */
+  private static final int SHARES = 16;
+
   /** Of all rows; the quantities are shared among the processors. */
   public static SeriesStatistics of(Series series, ZoneId zone) {
     return of(series, zone, q -> Optional.empty());
@@ -30,15 +33,24 @@ public record SeriesStatistics(long firstWeek, int weeks, List<QuantityStatistic
       Series series, ZoneId zone, IntFunction<Optional<QuantityStatistics>> known) {
     RowWeeks rows = RowWeeks.of(series, zone);
     boolean inArray = series.rows() <= MOST_IN_ARRAY;
-    ColumnStatistics column = new ColumnStatistics(series, rows);
+    int quantities = series.quantities().size();
+    int share = Math.max(1, quantities / SHARES);
     List<QuantityStatistics> all =
-        IntStream.range(0, series.quantities().size())
+        IntStream.range(0, (quantities + share - 1) / share)
             .parallel()
-            .mapToObj(
-                q ->
-                    known
-                        .apply(q)
-                        .orElseGet(() -> inArray ? column.inArray(q) : column.inPasses(q, zone)))
+            .boxed()
+            .flatMap(
+                k -> {
+                  ColumnStatistics column = new ColumnStatistics(series, rows);
+                  return IntStream.range(share * k, Math.min(quantities, share * (k + 1)))
+                      .mapToObj(
+                          q ->
+                              known
+                                  .apply(q)
+                                  .orElseGet(
+                                      () ->
+                                          inArray ? column.inArray(q) : column.inPasses(q, zone)));
+                })
             .toList();
     return new SeriesStatistics(rows.firstWeek(), rows.weeks(), all);
   }

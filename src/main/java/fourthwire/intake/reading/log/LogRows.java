@@ -37,6 +37,7 @@ final class LogRows {
   private final LogSeries series;
   private final Executor workers;
   private final LogSteps steps = new LogSteps();
+  private final Deque<ParsedRows> spare = new ArrayDeque<>();
   private final List<String> passedOver = new ArrayList<>();
   private final List<String> unreadable = new ArrayList<>();
   private long[] times = new long[LogChunk.ROWS];
@@ -68,17 +69,20 @@ final class LogRows {
 
   /** Reads all rows into the series. */
   void read(RowProgress progress) {
-    Deque<CompletableFuture<ParsedRows>> ahead = new ArrayDeque<>();
+    Deque<Ahead> ahead = new ArrayDeque<>();
     try (TextTable.RowBlocks blocks = table.inBlocks()) {
       Optional<TextTable.RowBlock> block = blocks.next();
       while (block.isPresent() || !ahead.isEmpty()) {
         if (block.isPresent()) {
-          TextTable.RowBlock rows = block.get();
-          ahead.add(CompletableFuture.supplyAsync(() -> ParsedRows.of(rows, columns), workers));
+          ahead.add(parsing(block.get()));
           block = blocks.next();
         }
         if (ahead.size() > BLOCKS_AHEAD || block.isEmpty()) {
-          take(joined(ahead.remove()));
+          Ahead next = ahead.remove();
+          ParsedRows parsed = joined(next.rows());
+          take(parsed);
+          spare.add(parsed);
+          blocks.useAgain(next.block());
           progress.at(series.rows() + filled, blocks.bytesRead());
         }
       }
@@ -88,6 +92,14 @@ final class LogRows {
       throw new ReadingRefusedException(
           "No row has a time that can be read.", table.headings(), List.of());
     }
+  }
+
+  /** A block and its rows, which a worker is reading. */
+  private record Ahead(TextTable.RowBlock block, CompletableFuture<ParsedRows> rows) {}
+
+  private Ahead parsing(TextTable.RowBlock block) {
+    ParsedRows rows = spare.isEmpty() ? new ParsedRows(columns) : spare.remove();
+    return new Ahead(block, CompletableFuture.supplyAsync(() -> rows.fill(block), workers));
   }
 
   private static ParsedRows joined(CompletableFuture<ParsedRows> parsed) {

@@ -7,7 +7,10 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.regex.Pattern;
 
-/** The rows of one block as numbers, with what could not be read. Made by one worker. */
+/**
+ * The rows of one block as numbers, with what could not be read. Filled by one worker; once its
+ * rows are copied it may be filled again.
+ */
 final class ParsedRows {
   /** What is told of each kind of trouble. */
   static final int TOLD = 3;
@@ -35,21 +38,25 @@ final class ParsedRows {
   /** A row of the block, counted from 1, and what stands there. */
   record Trouble(long row, String text) {}
 
-  private ParsedRows(LogColumns columns) {
+  ParsedRows(LogColumns columns) {
     this.columns = columns;
     this.time = new RowTime(columns.time(), columns.order());
     this.values = new double[columns.count()][FIRST_ROWS];
   }
 
-  static ParsedRows of(TextTable.RowBlock block, LogColumns columns) {
-    ParsedRows parsed = new ParsedRows(columns);
-    parsed.fileRows =
+  /** Takes in the rows of a block in place of what it holds. */
+  ParsedRows fill(TextTable.RowBlock block) {
+    rows = 0;
+    unreadableCells = 0;
+    passedOverRows = 0;
+    List.of(unreadable, passedOver, timeless).forEach(List::clear);
+    fileRows =
         block.forEach(
             row -> {
-              parsed.take(row);
-              return parsed.timeless.isEmpty();
+              take(row);
+              return timeless.isEmpty();
             });
-    return parsed;
+    return this;
   }
 
   private void take(TextTable.Row row) {

@@ -15,6 +15,7 @@ final class Blocks {
   private final byte lineEnd;
   private final boolean quotes;
   private byte[] carry = new byte[0];
+  private byte[] spare = new byte[0];
   private boolean ended;
   private long read;
 
@@ -37,7 +38,8 @@ final class Blocks {
 
   /** The next block; of length 0 at the end. */
   Block next() throws IOException {
-    byte[] block = Arrays.copyOf(carry, Math.max(SIZE, 2 * carry.length));
+    byte[] block = room(2 * carry.length);
+    System.arraycopy(carry, 0, block, 0, carry.length);
     int length = carry.length;
     while (true) {
       int n = ended ? 0 : in.readNBytes(block, length, block.length - length);
@@ -55,6 +57,17 @@ final class Blocks {
       }
       block = Arrays.copyOf(block, 2 * block.length);
     }
+  }
+
+  private byte[] room(int least) {
+    byte[] there = spare;
+    spare = new byte[0];
+    return there.length >= least && there.length >= SIZE ? there : new byte[Math.max(SIZE, least)];
+  }
+
+  /** Lets a block's bytes be overwritten. */
+  void useAgain(Block block) {
+    spare = block.bytes();
   }
 
   /** Bytes read so far. */

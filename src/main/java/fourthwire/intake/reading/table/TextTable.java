@@ -166,6 +166,11 @@ public final class TextTable {
       }
     }
 
+    /** Lets a block's memory be used for the next; its rows must not be gone through any more. */
+    public void useAgain(RowBlock block) {
+      blocks.useAgain(block.block);
+    }
+
     /** Bytes of the file taken in so far. */
     public long bytesRead() {
       return blocks.bytesRead();
