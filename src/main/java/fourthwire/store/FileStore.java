@@ -17,7 +17,7 @@ import org.springframework.jdbc.core.simple.JdbcClient;
  * part is ever held in memory.
  */
 final class FileStore {
-  private static final int PART_BYTES = 512 * 1024;
+  private static final int PART_BYTES = 256 * 1024;
 
   private final JdbcClient jdbc;
 

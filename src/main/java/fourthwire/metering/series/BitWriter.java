@@ -1,9 +1,15 @@
 package fourthwire.metering.series;
 
+import java.lang.invoke.MethodHandles;
+import java.lang.invoke.VarHandle;
+import java.nio.ByteOrder;
 import java.util.Arrays;
 
 /** Writes numbers of few bits one behind the other. */
 final class BitWriter {
+  private static final VarHandle WORDS =
+      MethodHandles.byteArrayViewVarHandle(int[].class, ByteOrder.BIG_ENDIAN);
+
   private byte[] bytes;
   private int at;
   private long held;
@@ -27,16 +33,44 @@ final class BitWriter {
     }
   }
 
-  private void flush() {
-    if (at + 4 > bytes.length) {
-      bytes = Arrays.copyOf(bytes, 2 * bytes.length);
+  /** The lowest bits of each of these values, at most 64. */
+  void putAll(long[] values, int count, int bits) {
+    if (bits > 32) {
+      for (int k = 0; k < count; k++) {
+        put(values[k], bits);
+      }
+      return;
     }
+    room(4 + count * bits / 8);
+    long mask = (1L << bits) - 1;
+    long word = held;
+    int there = heldBits;
+    int to = at;
+    for (int k = 0; k < count; k++) {
+      word = word << bits | values[k] & mask;
+      there += bits;
+      if (there >= 32) {
+        there -= 32;
+        WORDS.set(bytes, to, (int) (word >>> there));
+        to += 4;
+      }
+    }
+    held = word;
+    heldBits = there;
+    at = to;
+  }
+
+  private void room(int more) {
+    if (at + more > bytes.length) {
+      bytes = Arrays.copyOf(bytes, 2 * bytes.length + more);
+    }
+  }
+
+  private void flush() {
+    room(4);
     heldBits -= 32;
-    int word = (int) (held >>> heldBits);
-    bytes[at++] = (byte) (word >>> 24);
-    bytes[at++] = (byte) (word >>> 16);
-    bytes[at++] = (byte) (word >>> 8);
-    bytes[at++] = (byte) word;
+    WORDS.set(bytes, at, (int) (held >>> heldBits));
+    at += 4;
   }
 
   byte[] bytes() {

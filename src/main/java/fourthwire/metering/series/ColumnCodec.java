@@ -82,45 +82,66 @@ public final class ColumnCodec {
 
   private static byte[] packed(long[] whole, byte decimals) {
     BitWriter out = new BitWriter(2 + whole.length * 3);
+    long[] codes = new long[BLOCK];
     out.put(decimals, 8);
     for (int from = 0; from < whole.length; from += BLOCK) {
-      block(whole, from, Math.min(whole.length, from + BLOCK), out);
+      block(whole, from, Math.min(whole.length, from + BLOCK), codes, out);
     }
     return out.bytes();
   }
 
   /** The smallest number (64 bits), how many bits, and the numbers above it, 0 for none. */
-  private static void block(long[] whole, int from, int to, BitWriter out) {
+  private static void block(long[] whole, int from, int to, long[] codes, BitWriter out) {
     long low = Long.MAX_VALUE;
     long high = Long.MIN_VALUE;
-    long lowStep = Long.MAX_VALUE;
-    long highStep = Long.MIN_VALUE;
     boolean full = to - from > 1;
     for (int k = from; k < to; k++) {
-      full &= whole[k] != NONE;
-      low = whole[k] == NONE ? low : Math.min(low, whole[k]);
-      high = Math.max(high, whole[k]);
-      if (k > from) {
-        lowStep = Math.min(lowStep, whole[k] - whole[k - 1]);
-        highStep = Math.max(highStep, whole[k] - whole[k - 1]);
+      long w = whole[k];
+      if (w == NONE) {
+        full = false;
+      } else {
+        low = Math.min(low, w);
+        high = Math.max(high, w);
       }
     }
     int bits = low > high ? 0 : bits(high - low + 1);
-    int stepBits = full ? bits(highStep - lowStep) : 64;
-    if (full && stepBits * (to - from) + 64 < bits * (to - from)) {
-      out.put(DELTA + stepBits, 8);
-      out.put(whole[from], 64);
-      out.put(lowStep, 64);
-      for (int k = from + 1; k < to; k++) {
-        out.put(whole[k] - whole[k - 1] - lowStep, stepBits);
-      }
+    if (full && steps(whole, from, to, high - low, codes, out)) {
       return;
     }
     out.put(bits, 8);
     out.put(low, 64);
     for (int k = from; k < to; k++) {
-      out.put(whole[k] == NONE ? 0 : whole[k] - low + 1, bits);
+      long w = whole[k];
+      codes[k - from] = w == NONE ? 0 : w - low + 1;
     }
+    out.putAll(codes, to - from, bits);
+  }
+
+  /** The first number and the steps from there, where these are smaller; whether they are. */
+  private static boolean steps(
+      long[] whole, int from, int to, long range, long[] codes, BitWriter out) {
+    long low = Long.MAX_VALUE;
+    long high = Long.MIN_VALUE;
+    for (int k = from + 1; k < to; k++) {
+      long step = whole[k] - whole[k - 1];
+      low = Math.min(low, step);
+      high = Math.max(high, step);
+      if (high - low > range) {
+        return false;
+      }
+    }
+    int bits = bits(high - low);
+    if (bits * (to - from) + 64 >= bits(range + 1) * (to - from)) {
+      return false;
+    }
+    out.put(DELTA + bits, 8);
+    out.put(whole[from], 64);
+    out.put(low, 64);
+    for (int k = from + 1; k < to; k++) {
+      codes[k - from - 1] = whole[k] - whole[k - 1] - low;
+    }
+    out.putAll(codes, to - from - 1, bits);
+    return true;
   }
 
   private static int bits(long largest) {
