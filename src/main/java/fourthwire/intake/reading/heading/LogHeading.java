@@ -4,10 +4,13 @@ import fourthwire.intake.reading.heading.Vocabulary.Sense;
 import fourthwire.metering.MeasuredQuantity;
 import fourthwire.metering.ReadingMapping.Statistic;
 import java.util.Optional;
+import java.util.Set;
 
 /** Reads the heading of a column of an interval log. */
 final class LogHeading {
   private static final int HIGHEST_ORDER = 50;
+  private static final Set<String> SUMMED =
+      Set.of("active_w", "reactive_var", "apparent_va", "energy_wh");
 
   private final LogWords words;
   private final LogPlace places;
@@ -201,7 +204,7 @@ final class LogHeading {
 
   /** At the place it names; powers and energies of no named line are the total. */
   private Heading at(String measure, boolean unitNamed) {
-    boolean summed = measure.matches("active_w|reactive_var|apparent_va|.*_factor|energy_wh");
+    boolean summed = SUMMED.contains(measure) || measure.endsWith("_factor");
     Optional<String> named = places.of(words.places());
     if (words.says(Sense.NEUTRAL)) {
       named = named.filter(p -> !p.equals(LogPlace.TOTAL)).or(() -> Optional.of("N"));

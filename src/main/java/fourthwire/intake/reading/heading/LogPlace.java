@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.Set;
+import java.util.regex.Pattern;
 
 /**
  * Conductors as headings of one file write them: by number, or by the letters A B C, R S T or R Y
@@ -11,6 +12,9 @@ import java.util.Set;
  */
 final class LogPlace {
   static final String TOTAL = "total";
+
+  /** Letters beside the one that names a conductor. */
+  private static final Pattern BESIDE = Pattern.compile("l(?=[123])|-|eut(ral)?");
 
   private final boolean rst;
   private final boolean ryb;
@@ -30,7 +34,7 @@ final class LogPlace {
     for (String place : places) {
       total = total || place.equals("total") || place.equals("t") && !rst;
       for (String c :
-          (place.equals("total") ? "" : place).replaceAll("l(?=[123])|-|eut(ral)?", "").split("")) {
+          BESIDE.matcher(place.equals("total") ? "" : place).replaceAll("").split("")) {
         conductor(c).filter(found -> !conductors.contains(found)).ifPresent(conductors::add);
       }
     }

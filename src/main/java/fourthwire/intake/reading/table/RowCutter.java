@@ -84,6 +84,7 @@ final class RowCutter {
 
   private int plain(int from, int to) {
     byte[] b = bytes;
+    byte decimal = mark;
     int at = from < to && b[from] == '-' ? from + 1 : from;
     int first = at;
     int point = -1;
@@ -92,7 +93,7 @@ final class RowCutter {
       int digit = b[at] - '0';
       if (digit >= 0 && digit <= 9) {
         sum = 10 * sum + digit;
-      } else if (b[at] == mark && point < 0) {
+      } else if (b[at] == decimal && point < 0) {
         point = at;
       } else {
         break;
@@ -111,8 +112,9 @@ final class RowCutter {
 
   /** Passes over what is left of a cell. */
   private int rest(byte[] b, int from, int to) {
+    byte end = separator;
     int at = from;
-    while (at < to && b[at] != separator && b[at] != '\n' && b[at] != '\r') {
+    while (at < to && b[at] != end && b[at] != '\n' && b[at] != '\r') {
       at++;
     }
     return at;

@@ -7,6 +7,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.regex.Pattern;
 
 /** Units of harmonics: those of a line make its THD in amps or in percent, not in both. */
 final class HarmonicUnits {
@@ -54,7 +55,8 @@ final class HarmonicUnits {
   }
 
   private static int order(Heading h) {
-    return Integer.parseInt(h.quantity().replaceAll(".*_h(\\d+)_.*", "$1"));
+    int from = h.quantity().lastIndexOf("_h") + 2;
+    return Integer.parseInt(h.quantity(), from, h.quantity().indexOf('_', from), 10);
   }
 
   private void settle(String place, String kind, HarmonicUnit unit) {
@@ -92,14 +94,10 @@ final class HarmonicUnits {
 
   /** Harmonics of one kind are written alike on all conductors of a file. */
   private void shareUnit(String kind) {
+    Pattern harmonic = Pattern.compile(".*\\." + kind + "_h\\d+_(?:[av]|percent).*");
     List<Boolean> units =
         open.all().values().stream()
-            .filter(
-                h ->
-                    h.meaning() == Meaning.LIKELY
-                        && h.quantity()
-                            .matches(
-                                ".*\\." + kind + "_h\\d+_[av%].*|.*\\." + kind + "_h\\d+_percent"))
+            .filter(h -> h.meaning() == Meaning.LIKELY && harmonic.matcher(h.quantity()).matches())
             .map(h -> h.quantity().endsWith("_percent"))
             .distinct()
             .toList();
@@ -113,10 +111,11 @@ final class HarmonicUnits {
   /** The distortion that harmonics of known unit make, percent. */
   Optional<double[]> distortionMade(String place, String kind) {
     List<double[]> percent = new ArrayList<>();
+    String start = place + "." + kind + "_h";
     open.all()
         .forEach(
             (column, h) -> {
-              if (h.quantity().matches(place + "\\." + kind + "_h\\d+_percent") && order(h) > 1) {
+              if (h.quantity().startsWith(start) && h.quantity().endsWith("_percent") && order(h) > 1) {
                 percent.add(open.values().of(column));
               }
             });

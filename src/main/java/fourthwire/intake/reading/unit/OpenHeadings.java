@@ -2,14 +2,20 @@ package fourthwire.intake.reading.unit;
 
 import fourthwire.intake.reading.heading.Heading;
 import fourthwire.intake.reading.heading.Heading.Meaning;
+import fourthwire.metering.ReadingMapping.Statistic;
 import java.util.ArrayList;
+import java.util.EnumSet;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.Set;
+import java.util.regex.Pattern;
 
 /** The headings of a log while its units are being settled, and its first values. */
 final class OpenHeadings {
+  private static final Set<Statistic> EXTREMES = EnumSet.of(Statistic.MIN, Statistic.MAX);
+
   private final Map<String, Heading> headings;
   private final SampledColumns values;
   private final List<String> notes = new ArrayList<>();
@@ -43,9 +49,10 @@ final class OpenHeadings {
 
   /** Puts a rule to every column that is as clear as told and of this quantity. */
   void each(Meaning meaning, String quantity, Rule rule) {
+    Pattern such = Pattern.compile(quantity);
     for (Map.Entry<String, Heading> e : headings.entrySet()) {
       Heading h = e.getValue();
-      if (h.meaning() == meaning && h.quantity().matches(quantity)) {
+      if (h.meaning() == meaning && such.matcher(h.quantity()).matches()) {
         e.setValue(rule.of(e.getKey()));
       }
     }
@@ -56,7 +63,7 @@ final class OpenHeadings {
     return headings.entrySet().stream()
         .filter(e -> e.getValue().quantity().equals(quantity))
         .filter(e -> e.getValue().meaning() != Meaning.UNIT_OPEN)
-        .filter(e -> !e.getValue().statistic().word().matches("min|max"))
+        .filter(e -> !EXTREMES.contains(e.getValue().statistic()))
         .findFirst()
         .map(e -> SampledColumns.times(values.of(e.getKey()), e.getValue().factor()));
   }

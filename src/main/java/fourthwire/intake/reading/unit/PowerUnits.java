@@ -73,7 +73,7 @@ final class PowerUnits {
   private List<Double> prefixes() {
     return open.all().values().stream()
         .filter(o -> o.meaning() == Meaning.LIKELY || o.meaning() == Meaning.CLEAR)
-        .filter(o -> o.quantity().matches(".*\\.(active_w|apparent_va)"))
+        .filter(o -> o.quantity().endsWith(".active_w") || o.quantity().endsWith(".apparent_va"))
         .map(Heading::factor)
         .distinct()
         .toList();
