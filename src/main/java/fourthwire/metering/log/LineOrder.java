@@ -69,11 +69,17 @@ final class LineOrder {
 
   private boolean swapped(LogDay day, String what, Misfit misfit) {
     double straight = misfit.of(new int[] {0, 1, 2});
-    int[] best = ORDERS[0];
-    for (int[] order : ORDERS) {
-      best = misfit.of(order) < misfit.of(best) ? order : best;
+    if (!(straight > 0.0015)) {
+      return false;
     }
-    boolean wrong = straight > 0.0015 && misfit.of(best) < straight / 3 && misfit.of(best) < 0.03;
+    int[] best = ORDERS[0];
+    double least = misfit.of(best);
+    for (int[] order : ORDERS) {
+      double other = misfit.of(order);
+      best = other < least ? order : best;
+      least = other < least ? other : least;
+    }
+    boolean wrong = least < straight / 3 && least < 0.03;
     if (wrong) {
       int[] order = best;
       flagged.add(
