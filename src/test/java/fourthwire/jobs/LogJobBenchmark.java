@@ -75,7 +75,8 @@ final class LogJobBenchmark {
   }
 
   private static void compare(double[] jobs, double[] others) {
-    double[] ratios = IntStream.range(0, jobs.length).mapToDouble(k -> others[k] / jobs[k]).toArray();
+    double[] ratios =
+        IntStream.range(0, jobs.length).mapToDouble(k -> others[k] / jobs[k]).toArray();
     System.out.printf(
         "first job %.2f s; quickest %.2f s, of the other program %.2f s: %.2f times as fast; median"
             + " of the pairs %.2f%n",

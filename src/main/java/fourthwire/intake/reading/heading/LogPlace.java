@@ -33,8 +33,7 @@ final class LogPlace {
     boolean total = false;
     for (String place : places) {
       total = total || place.equals("total") || place.equals("t") && !rst;
-      for (String c :
-          BESIDE.matcher(place.equals("total") ? "" : place).replaceAll("").split("")) {
+      for (String c : BESIDE.matcher(place.equals("total") ? "" : place).replaceAll("").split("")) {
         conductor(c).filter(found -> !conductors.contains(found)).ifPresent(conductors::add);
       }
     }

@@ -115,7 +115,9 @@ final class HarmonicUnits {
     open.all()
         .forEach(
             (column, h) -> {
-              if (h.quantity().startsWith(start) && h.quantity().endsWith("_percent") && order(h) > 1) {
+              if (h.quantity().startsWith(start)
+                  && h.quantity().endsWith("_percent")
+                  && order(h) > 1) {
                 percent.add(open.values().of(column));
               }
             });
