@@ -4,20 +4,19 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.junit.jupiter.api.Assumptions.assumeTrue;
 
 import com.microsoft.playwright.Page;
+import com.microsoft.playwright.options.BoundingBox;
 import com.microsoft.playwright.options.ColorScheme;
-import fourthwire.metering.ReadingMapping;
 import fourthwire.metering.ReadingRepository;
 import fourthwire.testsupport.SmallCapture;
+import fourthwire.testsupport.SmallLog;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
-import java.util.Map;
-import java.util.Optional;
-import java.util.OptionalDouble;
 import java.util.function.Predicate;
 import org.junit.jupiter.api.AfterAll;
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Tag;
+import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.springframework.beans.factory.annotation.Autowired;
@@ -38,6 +37,7 @@ class BrowserTest extends PagesTest {
   @Autowired ReadingRepository readings;
   private Browser browser;
   private long reading;
+  private long log;
 
   @BeforeAll
   void open() {
@@ -45,20 +45,8 @@ class BrowserTest extends PagesTest {
         Browser.installed().isPresent(),
         "no Chromium is installed; set FOURTHWIRE_BROWSER to its path");
     browser = new Browser();
-    reading =
-        readings.add(
-            new ReadingRepository.Addition(
-                site,
-                new ReadingRepository.MeterRef("M9", "MSB"),
-                List.of(),
-                "made",
-                new ReadingMapping(
-                    Optional.empty(),
-                    ReadingMapping.Time.FROM_FILE,
-                    OptionalDouble.empty(),
-                    Map.of()),
-                Optional.empty(),
-                SmallCapture.reading()));
+    reading = readings.add(SeriesPagesTest.addition("M9", SmallCapture.reading(), site));
+    log = readings.add(SeriesPagesTest.addition("M8", SmallLog.reading(), site));
   }
 
   @AfterAll
@@ -82,6 +70,12 @@ class BrowserTest extends PagesTest {
     "loads-wrong, /loads?load=capacitor-input&watts=many&units=0&capacitance_uf_per_w=0",
     "readings, /sites/{site}/readings",
     "capture, /readings/{reading}",
+    "log, /readings/{log}",
+    "log-over-time, /readings/{log}/series?also=rms_v",
+    "log-part, /readings/{log}/series?together=true&from=2025-03-26&to=2025-03-29",
+    "log-spread, /readings/{log}/spread",
+    "log-orders, /readings/{log}/orders?of=N.current_a",
+    "log-limits, /readings/{log}/orders?of=L1.voltage_percent&scale=common",
     "missing, /sites/999",
     "panel, /audits/{audit}/node?name=LP-2%20East%20offices",
     "transformer, /audits/{audit}/node?name=T1",
@@ -103,6 +97,8 @@ class BrowserTest extends PagesTest {
     "panel, /audits/{audit}/node?name=LP-2%20East%20offices, '#page|summary|name=LP-2'",
     "loads, /loads, '#page|id=\"load\"|id=\"watts\"|Compute|spectra.csv'",
     "readings, /sites/{site}/readings, '#page|input[type=file]|Read it'",
+    "log, /readings/{log}/series?from=2025-03-26&to=2025-03-29,"
+        + " '#page|id=\"show\"|id=\"from\"|>Show|Closer|The whole log'",
     "delete, /sites/{site}/delete, '#page|Delete it|Keep it'",
   })
   void everythingIsReachedByTheKeyboardInOrder(String name, String path, String stops) {
@@ -153,12 +149,30 @@ class BrowserTest extends PagesTest {
     return -1;
   }
 
+  /** A drag along the picture shows that part; the readout follows the pointer. */
+  @Test
+  void aDragAlongThePictureLooksCloser() {
+    try (Page page = browser.page(WIDTHS[2], ColorScheme.LIGHT)) {
+      page.navigate(address("/readings/{log}/series"));
+      BoundingBox box = page.locator("svg.series").first().boundingBox();
+      page.mouse().move(box.x + box.width * 0.4, box.y + 60);
+      page.mouse().down();
+      page.mouse().move(box.x + box.width * 0.5, box.y + 60);
+      assertThat(page.locator(".brush:visible").count()).isEqualTo(1);
+      page.mouse().move(box.x + box.width * 0.6, box.y + 60);
+      page.mouse().up();
+      page.waitForURL("**from=2025-03-**to=2025-04-**");
+      assertThat(page.locator("svg.overview .window").count()).isEqualTo(1);
+    }
+  }
+
   private String address(String path) {
     return "http://localhost:"
         + port
         + path.replace("{audit}", "" + audit)
             .replace("{site}", "" + site)
-            .replace("{reading}", "" + reading);
+            .replace("{reading}", "" + reading)
+            .replace("{log}", "" + log);
   }
 
   private void check(String name, String path, int width, ColorScheme scheme) {

@@ -73,10 +73,20 @@ public final class StoredLog {
 
   /** Least, mean and largest values in each step; one for each quantity. */
   public List<StepValues> values(List<String> quantities, TimeSteps steps) {
-    LogSpan span = span(steps.from(), steps.to());
-    List<StepValues> all = new ArrayList<>();
+    return values(quantities, List.of(steps)).stream().map(of -> of.get(0)).toList();
+  }
+
+  /** The same in steps of several lengths at once; for each quantity one of each. */
+  public List<List<StepValues>> values(List<String> quantities, List<TimeSteps> lengths) {
+    long from = lengths.stream().mapToLong(TimeSteps::from).min().orElseThrow();
+    long to = lengths.stream().mapToLong(TimeSteps::to).max().orElseThrow();
+    LogSpan span = span(from, to);
+    List<List<StepValues>> all = new ArrayList<>();
     for (String quantity : quantities) {
-      all.add(taken(span, quantity, new StepValues(steps, intervalMillis())));
+      List<StepValues> each =
+          lengths.stream().map(steps -> new StepValues(steps, intervalMillis())).toList();
+      span.rows(quantity, (times, values) -> each.forEach(e -> e.take(times, values)));
+      all.add(each);
     }
     return all;
   }

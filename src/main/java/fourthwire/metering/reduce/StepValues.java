@@ -28,18 +28,42 @@ public final class StepValues implements RowTaker {
 
   @Override
   public void take(long[] startMillis, double[] values) {
+    int row = 0;
     int k = 0;
-    for (int row = 0; row < values.length; row++) {
-      double v = values[row];
-      int at = Double.isNaN(v) ? -1 : steps.indexOf(startMillis[row] + halfRow, k);
-      if (at >= 0) {
+    while (row < values.length) {
+      int at = steps.indexOf(startMillis[row] + halfRow, k);
+      if (at < 0) {
+        row++;
+      } else {
         k = at;
-        count[k]++;
-        sum[k] += v;
-        min[k] = Math.min(min[k], v);
-        max[k] = Math.max(max[k], v);
+        row = takeStep(k, startMillis, values, row);
       }
     }
+  }
+
+  /** The rows from one on that lie in one step; returns the first that does not. */
+  private int takeStep(int step, long[] startMillis, double[] values, int from) {
+    long first = steps.edge(step) - halfRow;
+    long end = steps.edge(step + 1) - halfRow;
+    double least = min[step];
+    double largest = max[step];
+    double total = sum[step];
+    int there = 0;
+    int row = from;
+    while (row < values.length && startMillis[row] >= first && startMillis[row] < end) {
+      double v = values[row++];
+      if (!Double.isNaN(v)) {
+        there++;
+        total += v;
+        least = v < least ? v : least;
+        largest = v > largest ? v : largest;
+      }
+    }
+    count[step] += there;
+    sum[step] = total;
+    min[step] = least;
+    max[step] = largest;
+    return row;
   }
 
   /** The steps. */

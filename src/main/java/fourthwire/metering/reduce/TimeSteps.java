@@ -65,6 +65,11 @@ public final class TimeSteps {
     return of(fromMillis, toMillis, Period.ofDays(1), zone);
   }
 
+  /** Whole local weeks, from Monday on. */
+  public static TimeSteps weeks(long fromMillis, long toMillis, ZoneId zone) {
+    return of(fromMillis, toMillis, Period.ofWeeks(1), zone);
+  }
+
   private static List<TemporalAmount> lengths(long intervalMillis) {
     List<TemporalAmount> all = new ArrayList<>();
     all.add(Duration.ofMillis(intervalMillis));

@@ -10,9 +10,13 @@ final class Svg {
   private final StringBuilder out = new StringBuilder();
   private final Deque<String> open = new ArrayDeque<>();
 
-  /** A picture of these classes with a text alternative. */
-  static Svg picture(String classes, String alternative) {
-    return new Svg().open("svg", "class", classes, "role", "img", "aria-label", alternative);
+  /** A picture of these classes with a text alternative; more attributes as name, value. */
+  static Svg picture(String classes, String alternative, Object... more) {
+    Svg svg = new Svg();
+    svg.start("svg", "class", classes, "role", "img", "aria-label", alternative);
+    svg.attributes(more).append('>');
+    svg.open.push("svg");
+    return svg;
   }
 
   /** Opens an element; attributes come as name, value, name, value … */
@@ -95,6 +99,10 @@ final class Svg {
 
   private StringBuilder start(String element, Object... attributes) {
     out.append('<').append(element);
+    return attributes(attributes);
+  }
+
+  private StringBuilder attributes(Object... attributes) {
     for (int i = 0; i + 1 < attributes.length; i += 2) {
       Object value = attributes[i + 1];
       String text =

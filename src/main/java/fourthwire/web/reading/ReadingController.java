@@ -9,6 +9,7 @@ import fourthwire.metering.ReadingUploads;
 import fourthwire.site.SiteRepository;
 import fourthwire.site.Survey;
 import fourthwire.web.api.UploadedFile;
+import fourthwire.web.reading.series.CoverageMaker;
 import fourthwire.web.support.NotFoundException;
 import jakarta.servlet.http.HttpServletResponse;
 import java.util.List;
@@ -30,18 +31,21 @@ class ReadingController {
   private final ReadingUploads uploads;
   private final SiteRepository sites;
   private final ReadingPageMaker pages;
+  private final CoverageMaker coverage;
 
   ReadingController(
       ReadingService service,
       ReadingRepository readings,
       ReadingUploads uploads,
       SiteRepository sites,
-      ReadingPageMaker pages) {
+      ReadingPageMaker pages,
+      CoverageMaker coverage) {
     this.service = service;
     this.readings = readings;
     this.uploads = uploads;
     this.sites = sites;
     this.pages = pages;
+    this.coverage = coverage;
   }
 
   @GetMapping("/sites/{site}/readings")
@@ -138,8 +142,9 @@ class ReadingController {
     SiteRepository.Entry entry = existing(site);
     Survey survey = survey(entry);
     model.addAttribute("site", entry);
-    model.addAttribute(
-        "readings", readings.ofSite(site).stream().map(r -> pages.row(r, survey)).toList());
+    List<ReadingRepository.Entry> all = readings.ofSite(site);
+    model.addAttribute("readings", all.stream().map(r -> pages.row(r, survey)).toList());
+    model.addAttribute("coverage", coverage.of(all, survey));
     model.addAttribute("places", pages.places(survey));
   }
 

@@ -3,6 +3,7 @@ package fourthwire.web.support;
 import fourthwire.site.Survey;
 import java.time.DateTimeException;
 import java.time.Instant;
+import java.time.LocalDate;
 import java.time.ZoneId;
 import java.time.ZoneOffset;
 import java.time.format.DateTimeFormatter;
@@ -12,6 +13,9 @@ import java.util.Locale;
 public final class Moments {
   private static final DateTimeFormatter MINUTE =
       DateTimeFormatter.ofPattern("d MMMM uuuu, HH:mm", Locale.ENGLISH);
+
+  private static final DateTimeFormatter DAY =
+      DateTimeFormatter.ofPattern("d MMMM uuuu", Locale.ENGLISH);
 
   private final ZoneId zone;
 
@@ -39,5 +43,10 @@ public final class Moments {
   /** To the minute: 27 January 2026, 09:30. */
   public String minute(Instant moment) {
     return MINUTE.format(moment.atZone(zone)) + (zone.equals(ZoneOffset.UTC) ? " UTC" : "");
+  }
+
+  /** A local day: 27 January 2026. */
+  public static String day(LocalDate date) {
+    return DAY.format(date);
   }
 }

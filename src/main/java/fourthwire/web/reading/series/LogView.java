@@ -1,0 +1,96 @@
+package fourthwire.web.reading.series;
+
+import fourthwire.jobs.series.StoredLog;
+import fourthwire.quantity.Conductor;
+import fourthwire.web.figure.Shapes;
+import fourthwire.web.panel.NodePage;
+import fourthwire.web.support.Moments;
+import fourthwire.web.support.Names;
+import fourthwire.web.support.Words;
+import java.util.List;
+import java.util.Locale;
+
+/** What the pages of a log share: the part shown, its limits, its names and words. */
+final class LogView {
+  private final StoredLog log;
+  private final Span span;
+  private final Words words;
+  private final Names names;
+  private final Moments moments;
+  private final LogLimits limits;
+
+  LogView(StoredLog log, Span span, Words words) {
+    this.log = log;
+    this.span = span;
+    this.words = words;
+    this.names = new Names(log.survey().settings().practice());
+    this.moments = Moments.of(log.survey());
+    this.limits = new LogLimits(log.survey(), log.entry().meter().node(), words);
+  }
+
+  StoredLog log() {
+    return log;
+  }
+
+  Span span() {
+    return span;
+  }
+
+  Words words() {
+    return words;
+  }
+
+  Names names() {
+    return names;
+  }
+
+  Moments moments() {
+    return moments;
+  }
+
+  LogLimits limits() {
+    return limits;
+  }
+
+  Measures measures() {
+    return new Measures(log.quantities());
+  }
+
+  /** The heading; {@code verdict} empty where there is none to tell. */
+  SeriesPage.Head head(String verdict, String view) {
+    String meter = log.entry().meter().name();
+    return new SeriesPage.Head(
+        log.entry().id(),
+        meter,
+        log.entry().meter().node(),
+        verdict.isEmpty() ? words.of("log.title", meter, words.of("log." + view)) : verdict,
+        words.of(
+            "reading.period",
+            moments.minute(span.shown().from()),
+            moments.minute(span.shown().to())),
+        span.from(),
+        span.to(),
+        span.isUnderstood(),
+        span.ways());
+  }
+
+  /** Where a quantity is measured, as the site's people call it. */
+  String place(String quantity) {
+    String place = Measure.parsed(quantity).place();
+    return place.isEmpty() || place.equals("total")
+        ? words.of("series.place.whole")
+        : names.of(place);
+  }
+
+  /** What the lines of a measure's places look like. */
+  List<NodePage.Key> keys(Measure measure) {
+    return measure.quantities().stream()
+        .filter(q -> !Measure.classes(q).equals(Measure.WHOLE))
+        .map(q -> new NodePage.Key(Shapes.sample(conductor(q)), place(q)))
+        .toList();
+  }
+
+  private static Conductor conductor(String quantity) {
+    return Conductor.valueOf(Measure.classes(quantity).toUpperCase(Locale.ROOT));
+  }
+}

@@ -1,0 +1,39 @@
+package fourthwire.web.reading.series;
+
+import java.util.List;
+
+/**
+ * What the page of a log's orders over time shows.
+ *
+ * @param sources whose orders there are to choose from
+ * @param about what a step is, in words
+ * @param when over the days of the highest
+ * @param unit of the figures
+ * @param axis the time below the strips
+ */
+record OrdersPage(
+    SeriesPage.Head head,
+    List<Measures.Option> sources,
+    String of,
+    boolean common,
+    String title,
+    String about,
+    String when,
+    String unit,
+    String axis,
+    List<Row> rows) {
+  /**
+   * An order.
+   *
+   * @param svg its 95th percentile over time
+   * @param typical the median of the steps
+   * @param when the step of the highest
+   */
+  record Row(
+      String order, String svg, String typical, String highest, String when, String limit) {}
+
+  /** Whether any order has a limit. */
+  public boolean limited() {
+    return rows.stream().anyMatch(r -> !r.limit().isEmpty());
+  }
+}

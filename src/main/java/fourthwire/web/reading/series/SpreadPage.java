@@ -1,0 +1,29 @@
+package fourthwire.web.reading.series;
+
+import fourthwire.web.panel.NodePage;
+import java.util.List;
+
+/**
+ * What the page of a measure in order of size shows.
+ *
+ * @param curve the picture
+ * @param figures percentiles, and the share of the time over the limit
+ * @param hours of each quantity its week
+ */
+record SpreadPage(
+    SeriesPage.Head head,
+    List<Measures.Group> measures,
+    String show,
+    String title,
+    String curve,
+    List<NodePage.Key> keys,
+    List<String> limits,
+    NodePage.Grid figures,
+    List<Hours> hours) {
+  /**
+   * Means by hour of the week.
+   *
+   * @param figures the same as a table, hours down, days across
+   */
+  record Hours(String name, String svg, String caption, NodePage.Grid figures) {}
+}

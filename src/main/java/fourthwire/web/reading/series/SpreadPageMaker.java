@@ -1,0 +1,193 @@
+package fourthwire.web.reading.series;
+
+import fourthwire.metering.reduce.HourMeans;
+import fourthwire.metering.reduce.ValuesBySize;
+import fourthwire.metering.series.WeekClock;
+import fourthwire.web.figure.DurationPlot;
+import fourthwire.web.figure.HourPicture;
+import fourthwire.web.figure.SeriesPlot;
+import fourthwire.web.panel.NodePage;
+import fourthwire.web.support.Numbers;
+import fourthwire.web.support.Words;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.OptionalInt;
+import java.util.stream.DoubleStream;
+import java.util.stream.IntStream;
+
+/** Makes the page of a measure in order of size and by hour of the week. */
+final class SpreadPageMaker {
+  private static final List<Integer> PERCENTS = List.of(5, 50, 95, 99);
+
+  private final LogView view;
+  private final Words words;
+  private final LogLimits limits;
+
+  SpreadPageMaker(LogView view) {
+    this.view = view;
+    this.words = view.words();
+    this.limits = view.limits();
+  }
+
+  SpreadPage make(String show) {
+    Measures measures = view.measures();
+    Measure measure = measures.orFirst(show);
+    List<ValuesBySize> values =
+        measure.quantities().stream().map(q -> view.log().bySize(q, view.span().shown())).toList();
+    double largest =
+        values.stream()
+            .filter(v -> v.count() > 0)
+            .mapToDouble(v -> Math.max(Math.abs(v.percentile(0)), Math.abs(v.percentile(100))))
+            .max()
+            .orElse(0);
+    double factor = measure.factor(largest);
+    String unit = measure.unit(largest);
+    String title = measure.label(words);
+    return new SpreadPage(
+        view.head(verdict(measure, values, factor, unit), "spread"),
+        measures.groups(words),
+        measure.word(),
+        title,
+        curve(measure, values, factor, unit, title),
+        view.keys(measure),
+        limits.sentences(measure, factor, unit),
+        figures(measure, values, factor, unit),
+        measure.quantities().stream().map(q -> hours(q, factor, unit)).toList());
+  }
+
+  /** What was longest outside its limit, as a sentence; empty where no limit is known. */
+  private String verdict(
+      Measure measure, List<ValuesBySize> values, double factor, String unit) {
+    int worst = -1;
+    double most = -1;
+    for (int k = 0; k < values.size(); k++) {
+      double outside = outside(measure.quantities().get(k), values.get(k));
+      if (outside > most) {
+        worst = k;
+        most = outside;
+      }
+    }
+    if (worst < 0 || most == 0) {
+      return worst < 0 ? "" : words.of("series.verdict.inside", measure.label(words));
+    }
+    String quantity = measure.quantities().get(worst);
+    List<LogLimits.Limit> of = limits.of(quantity);
+    String place = view.place(quantity);
+    String share = words.of("spread.share", Numbers.of(most, "%"));
+    return of.size() == 1
+        ? words.of("series.verdict.for", place, of.get(0).bound(factor, unit).label(), share)
+        : words.of("series.verdict.outside.for", place, measure.label(words), share);
+  }
+
+  private String curve(
+      Measure measure, List<ValuesBySize> values, double factor, String unit, String title) {
+    List<DurationPlot.Curve> curves =
+        IntStream.range(0, values.size())
+            .mapToObj(
+                k ->
+                    new DurationPlot.Curve(
+                        Measure.classes(measure.quantities().get(k)), values.get(k)))
+            .toList();
+    List<SeriesPlot.Bound> bounds =
+        measure.quantities().stream()
+            .flatMap(q -> limits.of(q).stream())
+            .map(l -> l.bound(factor, unit))
+            .distinct()
+            .toList();
+    return DurationPlot.draw(
+        curves, bounds, factor, unit, words.of("spread.alternative", title));
+  }
+
+  private NodePage.Grid figures(
+      Measure measure, List<ValuesBySize> values, double factor, String unit) {
+    List<String> heads = new ArrayList<>(List.of(words.of("spread.of", unit)));
+    PERCENTS.forEach(p -> heads.add("P" + p));
+    heads.add(words.of("spread.highest"));
+    heads.add(words.of("spread.outside"));
+    Digits written = Digits.of(least(values, factor), most(values, factor));
+    FigureGrid grid =
+        new FigureGrid(
+            words.of("spread.figures"),
+            heads,
+            c -> c <= PERCENTS.size() ? written : new Digits(OptionalInt.empty()));
+    for (int k = 0; k < values.size(); k++) {
+      ValuesBySize v = values.get(k);
+      String quantity = measure.quantities().get(k);
+      DoubleStream percentiles =
+          PERCENTS.stream().mapToDouble(p -> factor * v.percentile(p));
+      DoubleStream rest = DoubleStream.of(factor * v.percentile(100), outside(quantity, v));
+      grid.row(view.place(quantity), DoubleStream.concat(percentiles, rest).toArray());
+    }
+    return grid.done();
+  }
+
+  private static double least(List<ValuesBySize> values, double factor) {
+    return values.stream().mapToDouble(v -> factor * v.percentile(0)).min().orElse(0);
+  }
+
+  private static double most(List<ValuesBySize> values, double factor) {
+    return values.stream().mapToDouble(v -> factor * v.percentile(100)).max().orElse(0);
+  }
+
+  /** Percent of the time outside the limits; NaN where there are none. */
+  private double outside(String quantity, ValuesBySize values) {
+    List<LogLimits.Limit> of = limits.of(quantity);
+    double share = of.isEmpty() ? Double.NaN : 0;
+    for (LogLimits.Limit limit : of) {
+      double above = values.shareAbove(limit.value());
+      share += limit.upper() ? above : 1 - above;
+    }
+    return 100 * share;
+  }
+
+  private SpreadPage.Hours hours(String quantity, double factor, String unit) {
+    HourMeans means = view.log().hours(quantity, view.span().shown());
+    double low = all(means, factor).min().orElse(0);
+    double high = all(means, factor).max().orElse(0);
+    double lightest = low >= 0 && low < high / 2 ? 0 : low;
+    List<String> days = days("week.day.short.");
+    String caption =
+        words.of(
+            "spread.hours.caption",
+            Digits.of(low, high).text(lightest, unit),
+            Digits.of(low, high).text(high, unit));
+    return new SpreadPage.Hours(
+        view.place(quantity),
+        HourPicture.numbered(
+            Measure.classes(quantity),
+            h -> factor * means.mean(h),
+            lightest,
+            high,
+            Digits.ofCells(low, high)::text,
+            days,
+            words.of("spread.hours.alternative", view.place(quantity))),
+        caption,
+        table(means, factor, unit, quantity, Digits.of(low, high)));
+  }
+
+  private static DoubleStream all(HourMeans means, double factor) {
+    return IntStream.range(0, WeekClock.HOURS)
+        .mapToDouble(h -> factor * means.mean(h))
+        .filter(v -> !Double.isNaN(v));
+  }
+
+  private NodePage.Grid table(
+      HourMeans means, double factor, String unit, String quantity, Digits written) {
+    List<String> heads = new ArrayList<>(List.of(words.of("spread.hour", unit)));
+    heads.addAll(days("week.day.short."));
+    FigureGrid grid =
+        new FigureGrid(
+            words.of("spread.hours.table", view.place(quantity)), heads, column -> written);
+    for (int hour = 0; hour < 24; hour++) {
+      int of = hour;
+      grid.row(
+          "%02d".formatted(hour),
+          IntStream.range(0, 7).mapToDouble(day -> factor * means.mean(24 * day + of)).toArray());
+    }
+    return grid.done();
+  }
+
+  private List<String> days(String key) {
+    return IntStream.range(0, 7).mapToObj(d -> words.of(key + d)).toList();
+  }
+}
