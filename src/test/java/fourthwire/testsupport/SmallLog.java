@@ -41,8 +41,7 @@ public final class SmallLog {
 
   /** The reading, with its rows. */
   public static Reading reading() {
-    int[] rows =
-        IntStream.range(0, ROWS).filter(k -> k < GAP_FROM || k >= GAP_TO).toArray();
+    int[] rows = IntStream.range(0, ROWS).filter(k -> k < GAP_FROM || k >= GAP_TO).toArray();
     long[] times =
         IntStream.of(rows).mapToLong(k -> FROM.toEpochMilli() + k * INTERVAL_MILLIS).toArray();
     double[][] values = new double[QUANTITIES.size()][rows.length];

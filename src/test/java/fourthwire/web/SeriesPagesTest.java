@@ -66,7 +66,10 @@ class SeriesPagesTest extends PagesTest {
   @Test
   void aPartOfItIsShownLargerWithWaysToOthers() {
     String page =
-        page("/readings/" + log + "/series?show=rms_v&also=frequency_hz&from=2025-03-30&to=2025-03-31");
+        page(
+            "/readings/"
+                + log
+                + "/series?show=rms_v&also=frequency_hz&from=2025-03-30&to=2025-03-31");
     assertThat(page)
         .contains("Voltage, rms", "Frequency", "30 March 2025, 00:00", "31 March 2025, 00:00")
         .contains("At most 254", "class=\"window\"", "Earlier", "Later", "Wider", "The whole log")
@@ -78,12 +81,14 @@ class SeriesPagesTest extends PagesTest {
 
   @Test
   void whatCannotBeShownIsSaidAndTheWholeIsShown() {
-    for (String span : List.of("from=yesterday", "from=2031-01-01", "from=2025-04-02&to=2025-04-01")) {
+    for (String span :
+        List.of("from=yesterday", "from=2031-01-01", "from=2025-04-02&to=2025-04-01")) {
       assertThat(page("/readings/" + log + "/series?" + span))
           .contains("can’t be read or is not in the log")
           .contains("24 March 2025, 00:00");
     }
-    assertThat(page("/readings/" + log + "/series?show=colour&also=colour")).contains("Current, rms");
+    assertThat(page("/readings/" + log + "/series?show=colour&also=colour"))
+        .contains("Current, rms");
     for (String view : List.of("series", "spread", "orders")) {
       assertThat(http().get("/readings/" + capture + "/" + view, "Accept", "text/html").status())
           .isEqualTo(404);

@@ -48,8 +48,7 @@ public final class CoveragePicture {
   }
 
   private static void month(Svg svg, Month month, double top) {
-    svg.text(
-        month.label(), "x", 0, "dx", -8, "y", top + CELL_PX - 2, "text-anchor", "end");
+    svg.text(month.label(), "x", 0, "dx", -8, "y", top + CELL_PX - 2, "text-anchor", "end");
     StringBuilder bed = new StringBuilder();
     StringBuilder fill = new StringBuilder();
     int height = (int) (UNITS_A_PX * CELL_PX);

@@ -35,7 +35,11 @@ public final class DurationPlot {
    * @param bounds drawn where they are not far off the values
    */
   public static String draw(
-      List<Curve> curves, List<SeriesPlot.Bound> bounds, double factor, String unit, String alternative) {
+      List<Curve> curves,
+      List<SeriesPlot.Bound> bounds,
+      double factor,
+      String unit,
+      String alternative) {
     double low = extreme(curves, 0, factor).min().orElse(Double.NaN);
     double high = extreme(curves, 100, factor).max().orElse(Double.NaN);
     double to =

@@ -89,8 +89,7 @@ public final class HourPicture {
       svg.close();
     }
     for (int day = 0; day < DAYS; day++) {
-      svg.text(
-          days.get(day), "x", 0, "dx", -6, "y", day * NUMBERED_PX + 17, "text-anchor", "end");
+      svg.text(days.get(day), "x", 0, "dx", -6, "y", day * NUMBERED_PX + 17, "text-anchor", "end");
     }
     for (int hour = 0; hour < HOURS; hour++) {
       svg.text(

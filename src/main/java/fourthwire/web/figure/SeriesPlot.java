@@ -90,7 +90,10 @@ public final class SeriesPlot {
     double depth = drawn + (lanes.isEmpty() ? 0 : LANES_GAP_PX) + LANE_PX * lanes.size();
     Svg svg =
         brushed(
-            manner.together() ? "plot series together" : "plot series", alternative, depth + AXIS_PX, axis);
+            manner.together() ? "plot series together" : "plot series",
+            alternative,
+            depth + AXIS_PX,
+            axis);
     axis.draw(svg, depth);
     scale(strips, manner.factor()).ifPresent(s -> new SeriesPlot(s, manner, svg).strips(strips));
     for (int lane = 0; lane < lanes.size(); lane++) {
@@ -224,7 +227,15 @@ public final class SeriesPlot {
         .forEach(
             l ->
                 svg.text(
-                    l.text(), "class", "limit-label", "x", "100%", "y", l.y(), "text-anchor", "end"));
+                    l.text(),
+                    "class",
+                    "limit-label",
+                    "x",
+                    "100%",
+                    "y",
+                    l.y(),
+                    "text-anchor",
+                    "end"));
   }
 
   private void values(Strip strip, double top, double height) {

@@ -89,8 +89,7 @@ class SeriesFigureTest {
         new CoveragePicture.Month("May 2025", List.of(1.0, 0.5, 0.0, Double.NaN), List.of(2));
     String svg = CoveragePicture.draw(List.of(month), "May");
     assertThat(path(svg, "bed")).isEqualTo("M0 0h16v48h-16zM20 0h16v48h-16zM40 0h16v48h-16z");
-    assertThat(path(svg, "measured"))
-        .isEqualTo("M0 0h16v48h-16zM20 24h16v24h-16zM40 48h16v0h-16z");
+    assertThat(path(svg, "measured")).isEqualTo("M0 0h16v48h-16zM20 24h16v24h-16zM40 48h16v0h-16z");
     assertThat(svg).contains("<svg x=\"4.84%\" y=\"6\"><path class=\"diamond\"");
   }
 
@@ -107,7 +106,10 @@ class SeriesFigureTest {
             1,
             "A",
             "curve");
-    assertThat(path(svg, "trace l1")).startsWith("M0 0L").contains("L1000 440L").endsWith("2000 880");
+    assertThat(path(svg, "trace l1"))
+        .startsWith("M0 0L")
+        .contains("L1000 440L")
+        .endsWith("2000 880");
     assertThat(svg).contains("x1=\"5%\"", ">P95</text>", ">80 A</text>");
   }
 

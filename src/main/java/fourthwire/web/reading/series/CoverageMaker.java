@@ -74,7 +74,8 @@ public final class CoverageMaker {
         entry
             .reading()
             .period()
-            .ifPresent(p -> days.captures().merge(LocalDate.ofInstant(p.from(), zone), 1, Integer::sum));
+            .ifPresent(
+                p -> days.captures().merge(LocalDate.ofInstant(p.from(), zone), 1, Integer::sum));
       }
     }
     List<Calendar> calendars = new ArrayList<>();

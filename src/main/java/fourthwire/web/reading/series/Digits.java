@@ -13,8 +13,7 @@ record Digits(OptionalInt decimals) {
   /** For figures from one to another. */
   static Digits of(double low, double high) {
     boolean nearZero = low <= 0 || low < high / 2 || !(high > low);
-    return new Digits(
-        nearZero ? OptionalInt.empty() : OptionalInt.of(decimals(high - low)));
+    return new Digits(nearZero ? OptionalInt.empty() : OptionalInt.of(decimals(high - low)));
   }
 
   /** Alike in every cell of a picture, as few as tell its cells apart. */

@@ -8,7 +8,9 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.function.IntFunction;
 
-/** Puts a table of figures together whose columns each have their digits; NaN leaves a cell empty. */
+/**
+ * Puts a table of figures together whose columns each have their digits; NaN leaves a cell empty.
+ */
 final class FigureGrid {
   private final String title;
   private final List<String> heads;

@@ -121,8 +121,7 @@ final class LogLimits {
 
   private static List<Limit> band(double nominal, double share, String basis) {
     return List.of(
-        new Limit(nominal * (1 - share), false, basis),
-        upper(nominal * (1 + share), basis));
+        new Limit(nominal * (1 - share), false, basis), upper(nominal * (1 + share), basis));
   }
 
   private List<Limit> distortion(MeasuredQuantity q, OptionalDouble thd) {
@@ -138,12 +137,11 @@ final class LogLimits {
     OptionalDouble limit =
         thd.isPresent()
             ? OptionalDouble.of(limits.thdLimitPercent())
-            : Measure.of(q.name())
-                .order().stream()
-                    .filter(h -> h > 1)
-                    .mapToObj(limits::orderLimitPercent)
-                    .findFirst()
-                    .orElse(OptionalDouble.empty());
+            : Measure.of(q.name()).order().stream()
+                .filter(h -> h > 1)
+                .mapToObj(limits::orderLimitPercent)
+                .findFirst()
+                .orElse(OptionalDouble.empty());
     return limit.stream().mapToObj(l -> upper(l, limits.basis())).toList();
   }
 

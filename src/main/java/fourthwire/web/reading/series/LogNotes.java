@@ -32,8 +32,7 @@ final class LogNotes {
     List<SeriesPlot.Note> bars = new ArrayList<>();
     numbers.forEach(
         (p, of) ->
-            bars.add(
-                new SeriesPlot.Note(of, p.from().toEpochMilli(), p.to().toEpochMilli())));
+            bars.add(new SeriesPlot.Note(of, p.from().toEpochMilli(), p.to().toEpochMilli())));
     return bars;
   }
 
@@ -44,8 +43,7 @@ final class LogNotes {
       QualityFinding q = quality.get(k);
       if (q.period().isEmpty() || isInside(q.period().get())) {
         rows.add(
-            new SeriesPage.Note(
-                String.valueOf(k + 1), when(q), view.names().in(q.sentence())));
+            new SeriesPage.Note(String.valueOf(k + 1), when(q), view.names().in(q.sentence())));
       }
     }
     return rows;

@@ -57,9 +57,7 @@ record Measure(String word, List<String> quantities) {
   /** Of one harmonic order: which. */
   OptionalInt order() {
     Matcher order = ORDER.matcher(word);
-    return order.matches()
-        ? OptionalInt.of(Integer.parseInt(order.group(2)))
-        : OptionalInt.empty();
+    return order.matches() ? OptionalInt.of(Integer.parseInt(order.group(2))) : OptionalInt.empty();
   }
 
   /** Its unit, with kilo where its values are large. */

@@ -29,8 +29,7 @@ record OrdersPage(
    * @param typical the median of the steps
    * @param when the step of the highest
    */
-  record Row(
-      String order, String svg, String typical, String highest, String when, String limit) {}
+  record Row(String order, String svg, String typical, String highest, String when, String limit) {}
 
   /** Whether any order has a limit. */
   public boolean limited() {

@@ -50,8 +50,7 @@ final class OrdersPageMaker {
 
   OrdersPage make(String of, boolean common) {
     Map<String, List<String>> sources = sources();
-    String chosen =
-        sources.containsKey(of) ? of : sources.keySet().stream().findFirst().orElse("");
+    String chosen = sources.containsKey(of) ? of : sources.keySet().stream().findFirst().orElse("");
     TimeSteps steps = steps();
     boolean weeks = ((Period) steps.length()).getDays() == 7;
     List<Line> lines =
@@ -98,18 +97,13 @@ final class OrdersPageMaker {
       if (measure.order().orElse(0) > 1 && !measure.word().endsWith("_deg")) {
         String kind = measure.word().replaceAll("_h\\d+", "");
         sources
-            .computeIfAbsent(
-                Measure.parsed(quantity).place() + "." + kind, s -> new ArrayList<>())
+            .computeIfAbsent(Measure.parsed(quantity).place() + "." + kind, s -> new ArrayList<>())
             .add(quantity);
       }
     }
     sources
         .values()
-        .forEach(
-            all ->
-                all.sort(
-                    Comparator.comparingInt(
-                        q -> Measure.of(q).order().orElse(0))));
+        .forEach(all -> all.sort(Comparator.comparingInt(q -> Measure.of(q).order().orElse(0))));
     return sources;
   }
 
@@ -154,8 +148,7 @@ final class OrdersPageMaker {
   private List<OrdersPage.Row> rows(List<Line> lines, TimeSteps steps, boolean common) {
     List<Line> known = lines.stream().filter(l -> !Double.isNaN(l.highest())).toList();
     double end = known.stream().mapToDouble(Line::highest).max().orElse(0);
-    List<String> typical =
-        Column.aligned(known.stream().map(l -> median(l.p95())).toList());
+    List<String> typical = Column.aligned(known.stream().map(l -> median(l.p95())).toList());
     List<String> highest = Column.aligned(known.stream().map(Line::highest).toList());
     List<OrdersPage.Row> rows = new ArrayList<>();
     for (int k = 0; k < known.size(); k++) {

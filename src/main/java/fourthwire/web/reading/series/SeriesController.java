@@ -35,8 +35,7 @@ class SeriesController {
       @RequestParam(name = "to", defaultValue = "") String to,
       Model model) {
     StoredLog log = log(reading, model);
-    model.addAttribute(
-        "page", new SeriesPageMaker(view(log, from, to)).make(show, also, together));
+    model.addAttribute("page", new SeriesPageMaker(view(log, from, to)).make(show, also, together));
     return "reading/series";
   }
 
@@ -48,8 +47,7 @@ class SeriesController {
       @RequestParam(name = "to", defaultValue = "") String to,
       Model model) {
     StoredLog log = log(reading, model);
-    model.addAttribute(
-        "page", new SpreadPageMaker(view(log, from, to)).make(show));
+    model.addAttribute("page", new SpreadPageMaker(view(log, from, to)).make(show));
     return "reading/spread";
   }
 
@@ -63,8 +61,7 @@ class SeriesController {
       Model model) {
     StoredLog log = log(reading, model);
     model.addAttribute(
-        "page",
-        new OrdersPageMaker(view(log, from, to)).make(of, scale.equals("common")));
+        "page", new OrdersPageMaker(view(log, from, to)).make(of, scale.equals("common")));
     return "reading/orders";
   }
 

@@ -68,8 +68,7 @@ record SeriesPage(
    * @param places their names, likewise
    * @param factor what values are multiplied by to be in {@code unit}
    */
-  record Readout(
-      String address, String quantities, String places, double factor, String unit) {}
+  record Readout(String address, String quantities, String places, double factor, String unit) {}
 
   /** Something wrong with the log, numbered as on the time axis. */
   record Note(String number, String when, String sentence) {}

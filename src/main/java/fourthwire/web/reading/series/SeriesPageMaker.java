@@ -41,8 +41,7 @@ final class SeriesPageMaker {
     }
 
     Digits digits() {
-      return Digits.of(
-          factor * extremes().min().orElse(0), factor * extremes().max().orElse(0));
+      return Digits.of(factor * extremes().min().orElse(0), factor * extremes().max().orElse(0));
     }
 
     private DoubleStream extremes() {
@@ -139,8 +138,7 @@ final class SeriesPageMaker {
     return words.of("series.share", count, StepWords.counted(steps.count(), steps, words));
   }
 
-  private SeriesPage.Picture picture(
-      Values values, List<SeriesPlot.Note> notes, boolean together) {
+  private SeriesPage.Picture picture(Values values, List<SeriesPlot.Note> notes, boolean together) {
     List<SeriesPlot.Strip> strips =
         IntStream.range(0, values.fine().size()).mapToObj(k -> strip(values, k)).toList();
     Measure measure = values.measure();

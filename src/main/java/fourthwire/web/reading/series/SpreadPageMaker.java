@@ -56,8 +56,7 @@ final class SpreadPageMaker {
   }
 
   /** What was longest outside its limit, as a sentence; empty where no limit is known. */
-  private String verdict(
-      Measure measure, List<ValuesBySize> values, double factor, String unit) {
+  private String verdict(Measure measure, List<ValuesBySize> values, double factor, String unit) {
     int worst = -1;
     double most = -1;
     for (int k = 0; k < values.size(); k++) {
@@ -94,8 +93,7 @@ final class SpreadPageMaker {
             .map(l -> l.bound(factor, unit))
             .distinct()
             .toList();
-    return DurationPlot.draw(
-        curves, bounds, factor, unit, words.of("spread.alternative", title));
+    return DurationPlot.draw(curves, bounds, factor, unit, words.of("spread.alternative", title));
   }
 
   private NodePage.Grid figures(
@@ -113,8 +111,7 @@ final class SpreadPageMaker {
     for (int k = 0; k < values.size(); k++) {
       ValuesBySize v = values.get(k);
       String quantity = measure.quantities().get(k);
-      DoubleStream percentiles =
-          PERCENTS.stream().mapToDouble(p -> factor * v.percentile(p));
+      DoubleStream percentiles = PERCENTS.stream().mapToDouble(p -> factor * v.percentile(p));
       DoubleStream rest = DoubleStream.of(factor * v.percentile(100), outside(quantity, v));
       grid.row(view.place(quantity), DoubleStream.concat(percentiles, rest).toArray());
     }
