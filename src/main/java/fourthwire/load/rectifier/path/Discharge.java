@@ -93,7 +93,7 @@ public final class Discharge {
 
   /** Where between u and a node the drive passes. */
   private double turnOn(double node) {
-    return EventFinder.find(excess, u, excess(u), node, excess(node), 1e-9, 1e-10);
+    return EventFinder.find(excess, u, excess(u), node, excess(node), 1e-7, 1e-8);
   }
 
   private double excess(double at) {

@@ -9,39 +9,39 @@ package fourthwire.load.rectifier.path;
  * the threshold, by repeating the step with another length. Workspace of one solver, not
  * thread-safe.
  */
-public final class PairBridge {
+final class PairBridge {
   private static final int MOST_SWITCHINGS = 200;
   private static final double EVENT_CELLS = 1e-7;
 
   /** Cells since the turn-on of a current that flows already: no step is short for that. */
   private static final double LONG_AGO = 10;
 
-  public final CycleTable emf = new CycleTable();
-  public final PathStep path = new PathStep();
-  public final StepLength length = new StepLength(path);
-  public final PulseTrace trace = new PulseTrace();
-  public final PathTangent tangent = new PathTangent();
+  final CycleTable emf = new CycleTable();
+  final PathStep path = new PathStep();
+  final StepLength length = new StepLength(path);
+  final PulseTrace trace = new PulseTrace();
+  final PathTangent tangent = new PathTangent();
 
   /** Capacitor voltage under which the load counts as having emptied it. */
-  public double floorV;
+  double floorV;
 
   /** Capacitor voltage beyond which a march is a runaway of a guess, no state of the circuit. */
-  public double ceilingV;
+  double ceilingV;
 
   /** Share of the path's inductance that lies between bridge and capacitor. */
-  public double directShare;
+  double directShare;
 
   /**
    * Whether in the last recorded march the choke behind the bridge drove its current on through
    * both legs: the voltage behind the bridge would have been negative, which one path can't tell.
    */
-  public boolean freewheels;
+  boolean freewheels;
 
   /** Signed current into the port, amps; 0 while off. */
-  public double i;
+  double i;
 
   /** Capacitor voltage. */
-  public double v;
+  double v;
 
   private final SmoothStep smooth = new SmoothStep(path);
   private final Discharge discharge = new Discharge(new Size(), path);
@@ -73,7 +73,7 @@ public final class PairBridge {
    * @return false where the load empties the capacitor, the voltage runs away, or the current
    *     breaks up without end
    */
-  public boolean march(double from, double cells, double i0, double v0) {
+  boolean march(double from, double cells, double i0, double v0) {
     u = from;
     i = i0;
     v = v0;

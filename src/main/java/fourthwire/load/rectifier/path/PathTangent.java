@@ -10,19 +10,19 @@ package fourthwire.load.rectifier.path;
  * diodes' slope r_d at the mean current. It serves the Newton steps of the solver and tells whether
  * a steady state is stable; a solution's own accuracy does not hang on it.
  */
-public final class PathTangent {
+final class PathTangent {
   private static final double GAMMA = 1 - Math.sqrt(0.5);
   private static final double SECOND = (1 - GAMMA) / GAMMA;
 
   /** Derivatives of the signed current by the starting current and by the starting voltage. */
-  public double ii;
+  double ii;
 
-  public double iv;
+  double iv;
 
   /** Derivatives of the voltage likewise. */
-  public double vi;
+  double vi;
 
-  public double vv;
+  double vv;
 
   /** At the start of a march. */
   void clear(boolean conducting) {
@@ -70,7 +70,7 @@ public final class PathTangent {
    *
    * @param sign -1 where the current has to come back with the other sign, else 1
    */
-  public double largestMultiplier(double sign) {
+  double largestMultiplier(double sign) {
     double half = (sign * ii + vv) / 2;
     double product = sign * (ii * vv - iv * vi);
     double square = half * half - product;

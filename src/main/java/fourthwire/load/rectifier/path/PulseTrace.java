@@ -9,8 +9,7 @@ import java.util.Arrays;
  *
  * <p>Inside a piece the current is a cubic Hermite polynomial between nodes, its slopes from
  * parabolas through neighbouring nodes, plus a parabola that makes its charge right; each interval
- * gives its moments ({@link FourierSum}) by the three-point Gauss-Legendre rule. Workspace of one
- * thread.
+ * goes into the integrals of all orders at once ({@link FourierSum}). Workspace of one thread.
  */
 public final class PulseTrace {
   private static final int MOST_NODES = 8192;
@@ -115,32 +114,12 @@ public final class PulseTrace {
     fourier.clear(halfWave);
     for (int n = 0; n + 1 < size; n++) {
       if (!starts[n + 1]) {
-        addInterval(n);
+        fit(n);
+        fourier.add(position[n], position[n + 1], origin, perCell, c0, c1, c2, c3);
       }
     }
-    fourier.close();
     // (2/T)·∫ i·sin and cos give peak values; over √2 they are rms; a half record counts twice.
     fourier.write(Math.sqrt(2) / CycleTable.CELLS * (halfWave ? 2 : 1), re, im);
-  }
-
-  /** One interval, cell by cell. */
-  private void addInterval(int n) {
-    fit(n);
-    double from = position[n];
-    double end = position[n + 1];
-    while (from < end) {
-      int cell = (int) from;
-      double to = Math.min(cell + 1, end);
-      if (cell != fourier.cell()) {
-        fourier.close();
-        fourier.open(cell);
-      }
-      for (int g = 0; g < 3; g++) {
-        double at = from + GAUSS_X[g] * (to - from);
-        fourier.add(at, inside(at) * (to - from) * GAUSS_W[g]);
-      }
-      from = to;
-    }
   }
 
   /** The polynomial of the interval between nodes n and n + 1. */

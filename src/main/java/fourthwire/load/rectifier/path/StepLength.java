@@ -8,7 +8,7 @@ package fourthwire.load.rectifier.path;
  * <p>Lengths follow from the state alone, without jumps, so that the march is a smooth function of
  * its start for Newton's steps. In cells of {@link CycleTable}.
  */
-public final class StepLength {
+final class StepLength {
   /** First step after a turn-on. */
   private static final double FIRST = 0.03;
 
@@ -62,7 +62,7 @@ public final class StepLength {
    *
    * @param amps a current as it flows in the pulse
    */
-  public void set(double amps) {
+  void set(double amps) {
     ringCells = Math.max(LEAST_OF_RING, RADIANS * path.ring);
     double ohm = path.resistance + path.diodeOhm(amps);
     damping = path.inductance > 0 ? ohm / (2 * path.inductance) : 0;
@@ -70,7 +70,7 @@ public final class StepLength {
   }
 
   /** All steps so many times as long, while a march need not be accurate. */
-  public void scale(double times) {
+  void scale(double times) {
     scale = times;
   }
 
