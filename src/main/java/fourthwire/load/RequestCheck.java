@@ -53,7 +53,7 @@ final class RequestCheck {
     r.columns().diodeEmission().ifPresent(x -> range(kind, "diode_emission", x, 0.1, 10));
     r.columns().diodeResistanceOhm().ifPresent(x -> range(kind, "diode_resistance_ohm", x, 0, 1e4));
     r.columns().lineChokePercent().ifPresent(x -> range(kind, "line_choke_percent", x, 0, 100));
-    r.columns().dcChokePercent().ifPresent(x -> range(kind, "dc_choke_percent", x, 0, 1000));
+    r.columns().dcChokePercent().ifPresent(x -> range(kind, "dc_choke_percent", x, 0, 100));
     r.columns().firingDegrees().ifPresent(x -> range(kind, "firing_degrees", x, 0, 179));
     r.columns().inputFilterUf().ifPresent(x -> range(kind, "input_filter_uf", x, 0, 1e5));
     r.columns().deadAngleDegrees().ifPresent(x -> range(kind, "dead_angle_degrees", x, 0, 80));

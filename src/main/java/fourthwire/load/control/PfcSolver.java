@@ -1,6 +1,5 @@
 package fourthwire.load.control;
 
-import fourthwire.load.model.LoadSolver;
 import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.load.model.PortSpectra;
 import fourthwire.quantity.Spectrum;
@@ -13,9 +12,9 @@ import java.util.Arrays;
  * + G·Z·D·v - Z·residual). D is a projection and |G·Z/(1 + G·Z)| below 1 for every passive Z, so
  * that repetition converges; the crossings and G are renewed in each turn. Behind a soft source the
  * voltage may ring at its crossing so that no crossing is consistent with the current it causes;
- * then the fundamental's is taken, as a control's own filter does.
+ * then the fundamental's is taken, as a control's own filter does. Workspace of one thread.
  */
-final class PfcSolver implements LoadSolver {
+final class PfcSolver {
   private static final int ORDERS = Spectrum.HIGHEST_ORDER;
 
   /**
@@ -30,10 +29,13 @@ final class PfcSolver implements LoadSolver {
   /** What a hundred turns must leave of a move at most; slower than that it does not settle. */
   private static final double LEAST_PROGRESS = 0.2;
 
-  private final double powerW;
-  private final double frequencyHz;
-  private final double residual;
-  private final DeadZone zone;
+  private static final ThreadLocal<PfcSolver> OF_THREAD =
+      ThreadLocal.withInitial(PfcSolver::new);
+
+  private double powerW;
+  private double frequencyHz;
+  private double residual;
+  private DeadZone zone = new DeadZone(0);
 
   private final double[] vRe = new double[ORDERS + 1];
   private final double[] vIm = new double[ORDERS + 1];
@@ -49,15 +51,20 @@ final class PfcSolver implements LoadSolver {
   private double residualRe;
   private double residualIm;
 
-  PfcSolver(double powerW, double frequencyHz, double residual, DeadZone zone) {
-    this.powerW = powerW;
-    this.frequencyHz = frequencyHz;
-    this.residual = residual;
-    this.zone = zone;
+  private PfcSolver() {}
+
+  /** The thread's, for this supply. */
+  static PfcSolver of(double powerW, double frequencyHz, double residual, DeadZone zone) {
+    PfcSolver solver = OF_THREAD.get();
+    solver.powerW = powerW;
+    solver.frequencyHz = frequencyHz;
+    solver.residual = residual;
+    solver.zone = zone;
+    return solver;
   }
 
-  @Override
-  public void solve(PortSpectra emf, double seriesOhm, double seriesHenry, PortSpectra current) {
+  /** As {@link fourthwire.load.model.LoadSolver#solve}. */
+  void solve(PortSpectra emf, double seriesOhm, double seriesHenry, PortSpectra current) {
     double[] eRe = emf.re[0];
     double[] eIm = emf.im[0];
     double strength = Math.hypot(eRe[1], eIm[1]);

@@ -72,6 +72,7 @@ public final class PowerFactorCorrected implements LoadModel {
 
   @Override
   public LoadSolver newSolver() {
-    return new PfcSolver(powerW, frequencyHz, residual, zone);
+    return (emf, ohm, henry, current) ->
+        PfcSolver.of(powerW, frequencyHz, residual, zone).solve(emf, ohm, henry, current);
   }
 }
