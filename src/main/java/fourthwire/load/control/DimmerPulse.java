@@ -7,10 +7,10 @@ import fourthwire.quantity.Spectrum;
  * The current of a fired R-L from its firing to its end, and what it adds to each order.
  *
  * <p>With p the steady current that all orders would drive, i(x) = p(x) - p(a)·exp(-(x - a)·R/X)
- * from the firing a on, until it falls to zero at b. Its integrals with sines and cosines are closed
- * forms: products of two orders leave ∫ cos kx = (sin kb - sin ka)/k and ∫ sin kx = (cos ka - cos
- * kb)/k at their sum and difference, the exponential (e^(-D + jhb) - e^(jha))/(jh - R/X), D = (b -
- * a)·R/X. Angles in radians of the fundamental. Workspace of one thread.
+ * from the firing a on, until it falls to zero at b. Its integrals with sines and cosines are
+ * closed forms: products of two orders leave ∫ cos kx = (sin kb - sin ka)/k and ∫ sin kx = (cos ka
+ * - cos kb)/k at their sum and difference, the exponential (e^(-D + jhb) - e^(jha))/(jh - R/X), D =
+ * (b - a)·R/X. Angles in radians of the fundamental. Workspace of one thread.
  */
 final class DimmerPulse {
   private static final int ORDERS = Spectrum.HIGHEST_ORDER;
@@ -155,7 +155,9 @@ final class DimmerPulse {
     for (int n = 1; n <= places; n++) {
       double at = fired + n * width;
       if (sign * current(at) <= 0) {
-        return n == 1 && sign * current(fired + 0.1 * width) <= 0 ? fired : bisect(before, at, sign);
+        return n == 1 && sign * current(fired + 0.1 * width) <= 0
+            ? fired
+            : bisect(before, at, sign);
       }
       before = at;
     }

@@ -29,8 +29,7 @@ final class PfcSolver {
   /** What a hundred turns must leave of a move at most; slower than that it does not settle. */
   private static final double LEAST_PROGRESS = 0.2;
 
-  private static final ThreadLocal<PfcSolver> OF_THREAD =
-      ThreadLocal.withInitial(PfcSolver::new);
+  private static final ThreadLocal<PfcSolver> OF_THREAD = ThreadLocal.withInitial(PfcSolver::new);
 
   private double powerW;
   private double frequencyHz;

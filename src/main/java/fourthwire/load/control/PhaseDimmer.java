@@ -12,11 +12,10 @@ import fourthwire.quantity.Spectrum;
  *
  * <p>From firing at x_f: i(x) = p(x) - p(x_f)·exp(-(x - x_f)·R/X), p the steady current of the R-L
  * (network's and load's) under the electromotive force, all orders at once: a closed form, and so
- * are its harmonics ({@link DimmerPulse}). Between
- * pulses no current flows, so the terminal voltage is the electromotive force and its crossing the
- * trigger's reference. A current that has not ended at the next firing flows all the time: a linear
- * load. The rating is the load's at full conduction (the lamps' nameplate); firing lowers what is
- * drawn.
+ * are its harmonics ({@link DimmerPulse}). Between pulses no current flows, so the terminal voltage
+ * is the electromotive force and its crossing the trigger's reference. A current that has not ended
+ * at the next firing flows all the time: a linear load. The rating is the load's at full conduction
+ * (the lamps' nameplate); firing lowers what is drawn.
  *
  * <p>Valid for leading-edge control with two like pulses a cycle, at orders to 50. Exact for R (the
  * closed form to 1e-6 at any angle and distortion) and R-L (an independent integration to 0.1 %);
@@ -66,8 +65,7 @@ public final class PhaseDimmer implements LoadModel {
     return this::solve;
   }
 
-  private void solve(
-      PortSpectra emf, double seriesOhm, double seriesHenry, PortSpectra current) {
+  private void solve(PortSpectra emf, double seriesOhm, double seriesHenry, PortSpectra current) {
     double[] eRe = emf.re[0];
     double[] eIm = emf.im[0];
     if (!(Math.hypot(eRe[1], eIm[1]) > 0)) {

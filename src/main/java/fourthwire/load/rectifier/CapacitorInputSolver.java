@@ -12,10 +12,10 @@ import java.util.Optional;
 /**
  * Periodic steady state of the capacitor-input rectifier, by shooting.
  *
- * <p>Where one pair of diodes conducts at a time, the state is found by {@link OnePathSearch}. Where
- * the state that repeats in mirrored halves is not stable, the circuit goes to one that repeats only
- * after the whole cycle, with even orders in its current; it is looked for, and refused where it does
- * not settle either.
+ * <p>Where one pair of diodes conducts at a time, the state is found by {@link OnePathSearch}.
+ * Where the state that repeats in mirrored halves is not stable, the circuit goes to one that
+ * repeats only after the whole cycle, with even orders in its current; it is looked for, and
+ * refused where it does not settle either.
  *
  * <p>Where the march shows that a choke behind the bridge drives its current past the voltage's
  * crossing, one path is not enough and both pairs of diodes are followed ({@link TwoPathSolver}).

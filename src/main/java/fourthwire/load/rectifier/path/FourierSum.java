@@ -77,8 +77,8 @@ final class FourierSum {
   }
 
   /**
-   * Adds a polynomial c0 + c1·y + c2·y² + c3·y³ of y = (position - origin)·perCell from one position
-   * to another. Pieces come in the order of time.
+   * Adds a polynomial c0 + c1·y + c2·y² + c3·y³ of y = (position - origin)·perCell from one
+   * position to another. Pieces come in the order of time.
    */
   void add(
       double from,

@@ -4,12 +4,12 @@ import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.load.model.PortSpectra;
 
 /**
- * The search for the periodic state of a single-phase bridge in which one pair of diodes conducts at
- * a time: Newton's method on the state at a section of the cycle.
+ * The search for the periodic state of a single-phase bridge in which one pair of diodes conducts
+ * at a time: Newton's method on the state at a section of the cycle.
  *
- * <p>The state is the capacitor's voltage, and the current where conduction is continuous. It has to
- * repeat after half a cycle, mirrored, or after the whole one where the electromotive force has even
- * orders. With nothing to start from, marches of long steps come near it; the last march, of
+ * <p>The state is the capacitor's voltage, and the current where conduction is continuous. It has
+ * to repeat after half a cycle, mirrored, or after the whole one where the electromotive force has
+ * even orders. With nothing to start from, marches of long steps come near it; the last march, of
  * accurate ones, is taken from where it began to the state itself by the derivatives it carries
  * ({@link PathTangent}).
  *
@@ -132,8 +132,8 @@ public final class OnePathSearch {
   }
 
   /**
-   * Whether in the last march the choke behind the bridge drove its current on through both legs, so
-   * that one path is not enough.
+   * Whether in the last march the choke behind the bridge drove its current on through both legs,
+   * so that one path is not enough.
    */
   public boolean freewheels() {
     return bridge.freewheels;
