@@ -1,6 +1,7 @@
 package fourthwire.audit;
 
 import fourthwire.quantity.Conductor;
+import fourthwire.quantity.Figure;
 import fourthwire.quantity.PowerFigures;
 import fourthwire.quantity.Spectrum;
 import java.time.OffsetDateTime;
@@ -19,6 +20,7 @@ import java.util.OptionalLong;
  * @param basis what the figures are: means, highest interval, one capture …, one sentence
  * @param neutral the measured neutral current, unknown where none was measured
  * @param currentSpectrum from a capture; empty for a log
+ * @param demand the node's demand current I_L, unknown where the reading is too short for it
  */
 public record MeasuredState(
     String meter,
@@ -29,7 +31,34 @@ public record MeasuredState(
     DesignState.NeutralCurrent neutral,
     Map<String, DesignState.LineVoltage> voltage,
     PowerFigures power,
-    Map<Conductor, Spectrum> currentSpectrum) {
+    Map<Conductor, Spectrum> currentSpectrum,
+    Demand demand) {
+  /** A reading that tells no demand current. */
+  public MeasuredState(
+      String meter,
+      OptionalLong reading,
+      Optional<Span> period,
+      String basis,
+      Map<Conductor, DesignState.LineCurrent> lines,
+      DesignState.NeutralCurrent neutral,
+      Map<String, DesignState.LineVoltage> voltage,
+      PowerFigures power,
+      Map<Conductor, Spectrum> currentSpectrum) {
+    this(
+        meter, reading, period, basis, lines, neutral, voltage, power, currentSpectrum, Demand.NONE);
+  }
+
+  /**
+   * The demand current I_L (IEEE 519-2022, 3.1).
+   *
+   * @param amps fundamental, rms
+   * @param basis from what it was formed, a few words; empty where there is none
+   */
+  public record Demand(Figure amps, String basis) {
+    /** Of what is too short for one. */
+    public static final Demand NONE = new Demand(Figure.unknown("too short for a demand"), "");
+  }
+
   /** From when to when, in the site's time; both alike for a single moment. */
   public record Span(OffsetDateTime from, OffsetDateTime to) {
     private static final DateTimeFormatter MOMENT =

@@ -60,9 +60,11 @@ class JobConfiguration {
       AuditRepository audits,
       SiteRepository sites,
       ReadingRepository readings,
+      SeriesRepository series,
+      CorrectionRepository corrections,
       Audit audit,
       Stop stop) {
-    return new AuditRun(audits, sites, new MeasuredStates(readings), audit, stop);
+    return new AuditRun(audits, sites, new MeasuredStates(readings, series, corrections), audit, stop);
   }
 
   @Bean

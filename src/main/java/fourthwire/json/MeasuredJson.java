@@ -36,6 +36,8 @@ final class MeasuredJson {
     Json.put(o, "reading", m.reading());
     writePeriod(o, m.period());
     o.put("basis", m.basis());
+    Json.put(o, "demand_a", m.demand().amps());
+    o.put("demand_basis", m.demand().basis());
     o.set("current", ConductorJson.write(m.lines(), m.neutral()));
     o.set("voltage", ConductorJson.write(m.voltage()));
     o.set("power", PowerJson.write(m.power()));
@@ -79,6 +81,10 @@ final class MeasuredJson {
         ConductorJson.neutral(o.path("current")),
         ConductorJson.voltage(o.path("voltage")),
         PowerJson.read(o.path("power")),
-        DesignJson.currentSpectrum(o));
+        DesignJson.currentSpectrum(o),
+        o.has("demand_a")
+            ? new MeasuredState.Demand(
+                Json.figure(o, "demand_a"), o.path("demand_basis").asString(""))
+            : MeasuredState.Demand.NONE);
   }
 }

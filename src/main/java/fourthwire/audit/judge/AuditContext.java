@@ -1,5 +1,6 @@
 package fourthwire.audit.judge;
 
+import fourthwire.audit.MeasuredState;
 import fourthwire.audit.judge.NodeCurrents.Demand;
 import fourthwire.audit.plan.Device;
 import fourthwire.audit.plan.NetworkPlan;
@@ -35,6 +36,7 @@ public final class AuditContext {
   private final BankFindings banks;
   private final SharedNeutralFindings sharedNeutrals;
   private final Map<String, Double> surveyedDemandA;
+  private final Map<String, List<MeasuredState>> measured;
   private final Set<String> motorFeeders;
   private final Map<String, Demand> demands = new ConcurrentHashMap<>();
   private final Optional<AuditContext> design;
@@ -48,6 +50,24 @@ public final class AuditContext {
       NetworkPlan plan,
       SiteSolution solution,
       Workers workers) {
+    this(survey, supply, tree, devices, plan, solution, Map.of(), workers);
+  }
+
+  /**
+   * Likewise, with what readings say.
+   *
+   * @param measured by node
+   */
+  public AuditContext(
+      Survey survey,
+      Supply supply,
+      SiteTree tree,
+      List<Device> devices,
+      NetworkPlan plan,
+      SiteSolution solution,
+      Map<String, List<MeasuredState>> measured,
+      Workers workers) {
+    this.measured = Map.copyOf(measured);
     this.survey = survey;
     this.supply = supply;
     this.tree = tree;
@@ -89,6 +109,7 @@ public final class AuditContext {
     this.banks = new BankFindings(survey, solution);
     this.sharedNeutrals = other.sharedNeutrals;
     this.surveyedDemandA = other.surveyedDemandA;
+    this.measured = other.measured;
     this.motorFeeders = other.motorFeeders;
     this.design = design;
   }
@@ -191,6 +212,18 @@ public final class AuditContext {
     if (surveyed.isPresent()) {
       return new Demand(Figure.of(surveyed.get()), "Demand current as surveyed.");
     }
+    return measuredDemand(place.name()).orElseGet(() -> computedDemand(place));
+  }
+
+  /** Of the first meter at the node that was there long enough. */
+  private Optional<Demand> measuredDemand(String node) {
+    return measured.getOrDefault(node, List.of()).stream()
+        .filter(m -> m.demand().amps().value().isPresent())
+        .map(m -> new Demand(m.demand().amps(), "As measured by " + m.meter() + ": " + m.demand().basis() + "."))
+        .findFirst();
+  }
+
+  private Demand computedDemand(Place place) {
     double largest =
         place.node().lines().stream()
             .map(

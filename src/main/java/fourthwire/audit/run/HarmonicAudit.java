@@ -78,7 +78,15 @@ public final class HarmonicAudit implements Audit {
     SiteState state = states.solve(devices, progress.part(0.05, 0.3));
     progress.at(0.3, "Scanning the impedance over the orders");
     AuditContext context =
-        new AuditContext(survey, supply, tree, devices, state.plan(), state.solution(), workers);
+        new AuditContext(
+            survey,
+            supply,
+            tree,
+            devices,
+            state.plan(),
+            state.solution(),
+            request.measured(),
+            workers);
     progress.at(0.38, "Judging the nodes");
     List<NodeResult> nodes = new ArrayList<>(report(context, request.measured(), workers));
     addWeek(

@@ -23,9 +23,15 @@ final class LogStates {
 
   private LogStates() {}
 
-  /** Empty where the log has no current and no power to choose an interval by. */
-  static Optional<MeasuredState> of(ReadingRepository.Entry entry, Survey survey) {
-    return key(entry.reading().log().orElseThrow()).map(k -> state(entry, k, survey));
+  /**
+   * Empty where the log has no current and no power to choose an interval by.
+   *
+   * @param set the log as read, or as corrected
+   * @param demand its demand current
+   */
+  static Optional<MeasuredState> of(
+      ReadingRepository.Entry entry, LogSet set, MeasuredState.Demand demand, Survey survey) {
+    return key(set.log()).map(k -> state(entry, k, set, demand, survey));
   }
 
   private static Optional<KeyInterval> key(LogResult log) {
@@ -36,18 +42,23 @@ final class LogStates {
   }
 
   private static MeasuredState state(
-      ReadingRepository.Entry entry, KeyInterval key, Survey survey) {
+      ReadingRepository.Entry entry,
+      KeyInterval key,
+      LogSet set,
+      MeasuredState.Demand demand,
+      Survey survey) {
     Map<Conductor, LineCurrent> lines = lines(key);
     return new MeasuredState(
         entry.meter().name(),
         OptionalLong.of(entry.id()),
         Measured.span(entry.reading().period(), survey),
-        key.reason(),
+        key.reason() + ", " + set.words(),
         lines,
         Measured.neutral(value(key, "N.rms_a"), lines.values()),
         voltage(key),
         power(key),
-        Map.of());
+        Map.of(),
+        demand);
   }
 
   private static Map<Conductor, LineCurrent> lines(KeyInterval key) {
