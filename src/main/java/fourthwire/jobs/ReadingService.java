@@ -1,5 +1,6 @@
 package fourthwire.jobs;
 
+import fourthwire.intake.reading.LogProposal;
 import fourthwire.intake.reading.ReadingPlan;
 import fourthwire.intake.reading.ReadingReader;
 import fourthwire.metering.RawFile;
@@ -63,6 +64,56 @@ public final class ReadingService {
     ReadingPlan plan = reader.plan(files, settings.of(upload.siteId(), meter, upload.mapping()));
     settings.checkNotReadOtherwise(upload.siteId(), meter, files, plan.mapping());
     return uploads.create(upload.siteId(), meter, files, upload.mapping());
+  }
+
+  /**
+   * Takes files as {@link #take} does, but a log of a layout that nobody has confirmed at its meter
+   * waits until somebody has.
+   *
+   * @return the upload's id
+   */
+  public long takeOrAsk(Upload upload) {
+    if (upload.mapping().isPresent()) {
+      return take(upload);
+    }
+    MeterRef meter = meter(upload);
+    List<RawFile> files = List.copyOf(upload.files());
+    boolean ask =
+        reader
+            .propose(files, settings.of(upload.siteId(), meter, upload.mapping()))
+            .filter(p -> !p.isSettled())
+            .isPresent();
+    return ask ? uploads.createWaiting(upload.siteId(), meter, files) : take(upload);
+  }
+
+  /**
+   * How a waiting log would be read.
+   *
+   * @param edited what a person made of the proposal so far
+   */
+  public LogProposal proposal(ReadingUploads.Entry waiting, Optional<ReadingMapping> edited) {
+    return reader
+        .propose(
+            uploads.files(waiting.id()), settings.of(waiting.siteId(), waiting.meter(), edited))
+        .orElseThrow();
+  }
+
+  /**
+   * Queues a waiting log to be read by this mapping, which its meter's next files of the layout are
+   * then read by too. Nothing happens where it waits no more.
+   *
+   * @throws RefusedException where the same file was read by another mapping before
+   * @throws fourthwire.intake.reading.ReadingRefusedException where the mapping leaves something
+   *     open
+   */
+  public void confirm(ReadingUploads.Entry waiting, ReadingMapping mapping) {
+    List<RawFile> files = uploads.files(waiting.id());
+    ReadingPlan plan =
+        reader.plan(files, settings.of(waiting.siteId(), waiting.meter(), Optional.of(mapping)));
+    settings.checkNotReadOtherwise(waiting.siteId(), waiting.meter(), files, plan.mapping());
+    if (uploads.confirm(waiting.id(), mapping)) {
+      queue.addReading(waiting.id());
+    }
   }
 
   private MeterRef meter(Upload upload) {

@@ -127,7 +127,8 @@ public final class CorrectionJson {
 
   private static Step step(JsonNode o) {
     Rows rows =
-        new Rows(o.path("from_row").longValue(), Json.whole(o, "to_row").orElse(Long.MAX_VALUE));
+        new Rows(
+            Json.whole(o, "from_row").orElse(0), Json.whole(o, "to_row").orElse(Long.MAX_VALUE));
     String quantity = o.path(QUANTITY).asString("");
     String kind = o.path("kind").asString();
     return switch (kind) {

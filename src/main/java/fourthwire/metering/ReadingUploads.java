@@ -10,6 +10,8 @@ import java.util.OptionalLong;
 public interface ReadingUploads {
   /** State of an upload. */
   enum State {
+    /** Its columns are to be confirmed first. */
+    WAITING,
     QUEUED,
     RUNNING,
     DONE,
@@ -43,10 +45,19 @@ public interface ReadingUploads {
   long create(
       long siteId, MeterRef meter, List<? extends RawFile> files, Optional<ReadingMapping> mapping);
 
+  /** Stores files whose columns a person confirms before they are read; returns the upload's id. */
+  long createWaiting(long siteId, MeterRef meter, List<? extends RawFile> files);
+
+  /** Queues a waiting upload with the mapping that was confirmed; false where it waits no more. */
+  boolean confirm(long uploadId, ReadingMapping mapping);
+
+  /** Uploads of a site that wait to be confirmed, oldest first. */
+  List<Entry> waiting(long siteId);
+
   /** One upload. */
   Optional<Entry> find(long uploadId);
 
-  /** Its files, while it has not ended. */
+  /** Its files, in the order they came, while it has not ended. */
   List<RawFile> files(long uploadId);
 
   /** Takes a queued or interrupted upload into work; false if it was cancelled or finished. */

@@ -21,6 +21,12 @@ import org.springframework.transaction.support.TransactionTemplate;
 
 /** Uploads of readings, their files kept until they have been read. */
 final class JdbcUploads implements ReadingUploads {
+  private static final String COLUMNS =
+      """
+      select id, site_id, meter, node, mapping, state, progress, message, asked, reading_id
+      from reading_uploads
+      """;
+
   private final JdbcClient jdbc;
   private final TransactionTemplate transaction;
   private final FileStore files;
@@ -41,10 +47,24 @@ final class JdbcUploads implements ReadingUploads {
       MeterRef meter,
       List<? extends RawFile> uploaded,
       Optional<ReadingMapping> mapping) {
+    return create(siteId, meter, uploaded, mapping, State.QUEUED);
+  }
+
+  @Override
+  public long createWaiting(long siteId, MeterRef meter, List<? extends RawFile> uploaded) {
+    return create(siteId, meter, uploaded, Optional.empty(), State.WAITING);
+  }
+
+  private long create(
+      long siteId,
+      MeterRef meter,
+      List<? extends RawFile> uploaded,
+      Optional<ReadingMapping> mapping,
+      State state) {
     return Objects.requireNonNull(
         transaction.execute(
             status -> {
-              long id = insert(siteId, meter, mapping);
+              long id = insert(siteId, meter, mapping, state);
               for (int i = 0; i < uploaded.size(); i++) {
                 addFile(id, i, uploaded.get(i));
               }
@@ -52,16 +72,38 @@ final class JdbcUploads implements ReadingUploads {
             }));
   }
 
-  private long insert(long siteId, MeterRef meter, Optional<ReadingMapping> mapping) {
+  @Override
+  public boolean confirm(long uploadId, ReadingMapping mapping) {
+    return jdbc.sql(
+                """
+                update reading_uploads set state = 'queued', mapping = ?
+                where id = ? and state = 'waiting'
+                """)
+            .params(MappingJson.write(mapping).toString(), uploadId)
+            .update()
+        == 1;
+  }
+
+  @Override
+  public List<Entry> waiting(long siteId) {
+    return jdbc.sql(COLUMNS + " where site_id = ? and state = 'waiting' order by id")
+        .param(siteId)
+        .query(JdbcUploads::entry)
+        .list();
+  }
+
+  private long insert(
+      long siteId, MeterRef meter, Optional<ReadingMapping> mapping, State state) {
     return Rows.insert(
         jdbc.sql(
                 """
                 insert into reading_uploads (site_id, meter, node, mapping, state, progress,
                   message, cancel_asked, asked)
-                values (?, ?, ?, ?, 'queued', 0, 'waiting', false, ?)
+                values (?, ?, ?, ?, ?, 0, 'waiting', false, ?)
                 """)
             .params(siteId, meter.name(), meter.node())
             .param(mapping.map(m -> MappingJson.write(m).toString()).orElse(null))
+            .param(state.word())
             .param(Rows.now(clock)));
   }
 
@@ -81,11 +123,7 @@ final class JdbcUploads implements ReadingUploads {
 
   @Override
   public Optional<Entry> find(long uploadId) {
-    return jdbc.sql(
-            """
-            select id, site_id, meter, node, mapping, state, progress, message, asked, reading_id
-            from reading_uploads where id = ?
-            """)
+    return jdbc.sql(COLUMNS + " where id = ?")
         .param(uploadId)
         .query(JdbcUploads::entry)
         .optional();
@@ -146,13 +184,13 @@ final class JdbcUploads implements ReadingUploads {
         jdbc.sql(
                     """
                     update reading_uploads set cancel_asked = true
-                    where id = ? and state in ('queued', 'running')
+                    where id = ? and state in ('waiting', 'queued', 'running')
                     """)
                 .param(uploadId)
                 .update()
             == 1;
     find(uploadId)
-        .filter(u -> u.state() == State.QUEUED)
+        .filter(u -> u.state() == State.QUEUED || u.state() == State.WAITING)
         .ifPresent(u -> end(uploadId, State.CANCELLED, "cancelled before it began"));
     return asked;
   }
@@ -182,7 +220,7 @@ final class JdbcUploads implements ReadingUploads {
           jdbc.sql(
                   """
                   update reading_uploads set state = ?, message = ?
-                  where id = ? and state in ('queued', 'running')
+                  where id = ? and state in ('waiting', 'queued', 'running')
                   """)
               .params(state.word(), message, uploadId)
               .update();

@@ -75,7 +75,7 @@ class CorrectionStoreTest {
     List<String> read = table("series_quantities", "statistics");
     Map<String, QuantitySummary> before = summaries();
     int turned = finding("Active power");
-    int repeated = finding("repeat the time");
+    int repeated = finding("the time of the row before");
 
     long first = service.make(reading, turned, 0);
     List<String> onlyFirst = table("cleaned_quantities", "statistics");

@@ -7,6 +7,9 @@ import com.microsoft.playwright.Page;
 import com.microsoft.playwright.options.BoundingBox;
 import com.microsoft.playwright.options.ColorScheme;
 import fourthwire.metering.ReadingRepository;
+import fourthwire.metering.ReadingUploads;
+import fourthwire.metering.log.InventedBoard;
+import fourthwire.testsupport.RawFiles;
 import fourthwire.testsupport.SmallCapture;
 import fourthwire.testsupport.SmallLog;
 import java.nio.file.Path;
@@ -33,11 +36,23 @@ class BrowserTest extends PagesTest {
   private static final int MOST_STOPS = 80;
   private static final Predicate<String> FAINT = stop -> stop.endsWith(" without outline");
 
+  /** A log with a column that must be asked for. */
+  private static final String OPEN =
+      """
+      Date,Current A,IN [A],H5 L1
+      2026-03-02 00:10:00,10,3,1.2
+      2026-03-02 00:20:00,20,4,1.3
+      2026-03-02 00:30:00,30,5,1.4
+      """;
+
   @LocalServerPort int port;
   @Autowired ReadingRepository readings;
+  @Autowired ReadingUploads uploads;
   private Browser browser;
   private long reading;
   private long log;
+  private long faulty;
+  private long upload;
 
   @BeforeAll
   void open() {
@@ -47,6 +62,13 @@ class BrowserTest extends PagesTest {
     browser = new Browser();
     reading = readings.add(SeriesPagesTest.addition("M9", SmallCapture.reading(), site));
     log = readings.add(SeriesPagesTest.addition("M8", SmallLog.reading(), site));
+    InventedBoard board = new InventedBoard(4, 2);
+    board.scale("L2.active_w", 1440, 2016, -1);
+    board.repeat(1440);
+    faulty = readings.add(SeriesPagesTest.addition("M6", board.reading(), site));
+    upload =
+        uploads.createWaiting(
+            site, new ReadingRepository.MeterRef("M7", "MSB"), List.of(RawFiles.of("a.csv", OPEN)));
   }
 
   @AfterAll
@@ -76,6 +98,8 @@ class BrowserTest extends PagesTest {
     "log-spread, /readings/{log}/spread",
     "log-orders, /readings/{log}/orders?of=N.current_a",
     "log-limits, /readings/{log}/orders?of=L1.voltage_percent&scale=common",
+    "faults, /readings/{faulty}",
+    "columns, /uploads/{upload}/columns",
     "missing, /sites/999",
     "panel, /audits/{audit}/node?name=LP-2%20East%20offices",
     "transformer, /audits/{audit}/node?name=T1",
@@ -99,6 +123,9 @@ class BrowserTest extends PagesTest {
     "readings, /sites/{site}/readings, '#page|input[type=file]|Read it'",
     "log, /readings/{log}/series?from=2025-03-26&to=2025-03-29,"
         + " '#page|id=\"show\"|id=\"from\"|>Show|Closer|The whole log'",
+    "faults, /readings/{faulty}",
+    "faults, /readings/{faulty}, '#page|Turn the sign|Count each|Delete this reading'",
+    "columns, /uploads/{upload}/columns, '#page|id=\"date\"|id=\"zone\"|name=\"m2\"|Read the file so'",
     "delete, /sites/{site}/delete, '#page|Delete it|Keep it'",
   })
   void everythingIsReachedByTheKeyboardInOrder(String name, String path, String stops) {
@@ -173,6 +200,9 @@ class BrowserTest extends PagesTest {
             .replace("{site}", "" + site)
             .replace("{reading}", "" + reading)
             .replace("{log}", "" + log);
+            .replace("{log}", "" + log)
+            .replace("{upload}", "" + upload)
+            .replace("{faulty}", "" + faulty);
   }
 
   private void check(String name, String path, int width, ColorScheme scheme) {

@@ -14,6 +14,7 @@ import org.junit.jupiter.api.Test;
 /** Meters' files through the pages: taken in, shown in figures, refused with what is missing. */
 class ReadingPagesTest extends ServiceTest {
   private static final String HTML = "text/html";
+  private static final String FORM = "application/x-www-form-urlencoded";
 
   private String readings = "";
 
@@ -54,19 +55,82 @@ class ReadingPagesTest extends ServiceTest {
   }
 
   @Test
-  void aFileThatCantBeReadIsRefusedWithItsColumnsAndTheQuestions() {
-    Answer refused = add("odd.csv", "Moment,Foo,Bar\nyesterday,1,2\n", "LP-1", "");
+  void aFileThatCantBeReadIsRefused() {
+    Answer refused = add("odd.dat", "no configuration beside it", "LP-1", "");
     assertThat(refused.status()).isEqualTo(422);
     assertThat(text(refused))
-        .contains("The file was not read", "What must be said", "Foo", "Bar")
+        .contains("The file was not read", "configuration file")
         .doesNotContain("??", "Exception");
+  }
+
+  /** A layout nobody has confirmed is shown; what is open is asked for; then it is remembered. */
+  @Test
+  void aNewLayoutIsConfirmedOnceAndNeverAgain() throws InterruptedException {
+    String file =
+        """
+        Date,Current A,IN [A],H5 L1
+        03/02/2026 00:10:00,10,3,1.2
+        03/02/2026 00:20:00,20,4,1.3
+        03/02/2026 00:30:00,30,5,1.4
+        """;
+    Answer taken = add("week.csv", file, "LP-1", "");
+    assertThat(taken.status()).isEqualTo(302);
+    String upload = taken.header("Location").replaceAll(".*(/uploads/\\d+).*", "$1");
+    String columns = upload + "/columns";
+    assertThat(http().get(upload).header("Location")).endsWith(columns);
+    assertThat(text(http().get(readings, "Accept", HTML))).contains("wait until their columns");
+    String asked = text(http().get(columns, "Accept", HTML));
+    assertThat(asked)
+        .contains("What each column holds", "must be settled", "harmonic is of current or voltage")
+        .contains("does not settle whether day or month comes first", "Europe/Vienna")
+        .contains("20 A", "not settled by the file")
+        .doesNotContain("??", "Monday 2 March", "Tuesday 3 February");
+
+    Answer looked = http().send("POST", columns, FORM, fields("dd/MM/yyyy", "") + "&act=look");
+    assertThat(looked.status()).isEqualTo(200);
+    assertThat(text(looked)).contains("Tuesday 3 February 2026, 00:10:00 (Europe/Vienna)");
+    Answer open = http().send("POST", columns, FORM, fields("", "voltage_h_v") + "&act=read");
+    assertThat(open.status()).as("nobody said which of day and month comes first").isEqualTo(422);
+    Answer read =
+        http().send("POST", columns, FORM, fields("dd/MM/yyyy", "voltage_h_v") + "&act=read");
+    assertThat(read.status()).as(text(read)).isEqualTo(302);
+    assertThat(shown(upload))
+        .contains("3 February 2026, 00:10", "L1.voltage_h5_v", "N.rms_a")
+        .doesNotContain("??");
+
+    Answer second = add("next.csv", file.replace("/2026", "/2027"), "LP-1", "");
+    String next = second.header("Location").replaceAll(".*(/uploads/\\d+).*", "$1");
+    assertThat(shown(next)).contains("3 February 2027, 00:10", "L1.voltage_h5_v");
+  }
+
+  private static String fields(String format, String third) {
+    return "date=Date&clock=&format="
+        + format
+        + "&zone=Europe/Vienna&stamp=start&interval="
+        + "&h0=Current+A&m0=rms_a&p0=L1&o0=&s0=mean&f0=1"
+        + "&h1=IN+%5BA%5D&m1=rms_a&p1=N&o1=&s1=mean&f1=1"
+        + "&h2=H5+L1&m2="
+        + third
+        + "&p2=L1&o2=5&s2=mean&f2=1";
+  }
+
+  @Test
+  void aWaitingFileIsDiscarded() {
+    Answer taken = add("week.csv", "Date,Foo\n2026-03-02 00:10,1\n2026-03-02 00:20,2\n", "LP-1", "");
+    String upload = taken.header("Location").replaceAll(".*(/uploads/\\d+).*", "$1");
+    assertThat(http().post(upload + "/cancel").status()).isEqualTo(302);
+    assertThat(text(http().get(upload, "Accept", HTML))).contains("cancelled");
+    assertThat(text(http().get(readings, "Accept", HTML))).doesNotContain("wait until");
   }
 
   private String read(String name, String file, String at, String mapping)
       throws InterruptedException {
     Answer taken = add(name, file, at, mapping);
     assertThat(taken.status()).as(text(taken)).isEqualTo(302);
-    String upload = taken.header("Location").replaceAll(".*(/uploads/\\d+).*", "$1");
+    return shown(taken.header("Location").replaceAll(".*(/uploads/\\d+).*", "$1"));
+  }
+
+  private String shown(String upload) throws InterruptedException {
     Answer progress = http().get(upload, "Accept", HTML);
     for (int tries = 0; progress.status() != 302 && tries < 600; tries++) {
       assertThat(text(progress)).doesNotContain("failed");

@@ -3,6 +3,7 @@ package fourthwire.intake.reading;
 import fourthwire.metering.RawFile;
 import fourthwire.metering.Reading;
 import java.util.List;
+import java.util.Optional;
 import java.util.function.BiPredicate;
 
 /** Reads meters' files. */
@@ -14,6 +15,14 @@ public interface ReadingReader {
    * @throws ReadingRefusedException with the columns found and what must be mapped
    */
   ReadingPlan plan(List<RawFile> files, ReadingSetting setting);
+
+  /**
+   * How a log would be read, for a person to confirm; empty for a capture, whose channels are asked
+   * for by a refusal alone.
+   *
+   * @throws ReadingRefusedException where the files hold no table
+   */
+  Optional<LogProposal> propose(List<RawFile> files, ReadingSetting setting);
 
   /**
    * Reads and analyses files as planned.

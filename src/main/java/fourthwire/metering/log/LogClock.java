@@ -171,9 +171,9 @@ final class LogClock implements DayCheck {
               "They count twice in statistics over the rows as read.",
               String.format(
                   Locale.ROOT,
-                  "%d rows repeat the time of the row before: %d with the same values, %d with"
-                      + " others.",
+                  "%d %s the time of the row before: %d with the same values, %d with others.",
                   run.same + run.different,
+                  run.same + run.different == 1 ? "row repeats" : "rows repeat",
                   run.same,
                   run.different),
               List.of(Offers.dropRepeats(new Correction.Rows(run.fromRow, run.toRow)))));

@@ -55,6 +55,12 @@ class JobApi {
   }
 
   private static State state(ReadingUploads.Entry e) {
-    return new State(e.id(), e.state().word(), e.progress(), e.message(), e.reading());
+    boolean waits = e.state() == ReadingUploads.State.WAITING;
+    return new State(
+        e.id(),
+        waits ? ReadingUploads.State.QUEUED.word() : e.state().word(),
+        e.progress(),
+        waits ? "waits until its columns are confirmed on its page" : e.message(),
+        e.reading());
   }
 }

@@ -64,7 +64,7 @@ class ReadingController {
       HttpServletResponse response) {
     show(site, model);
     try {
-      long job = service.take(upload(site, files, at, mapping));
+      long job = service.takeOrAsk(upload(site, files, at, mapping));
       return "redirect:/uploads/" + job;
     } catch (ReadingRefusedException refused) {
       model.addAttribute("columns", refused.columns());
@@ -81,6 +81,9 @@ class ReadingController {
         uploads.find(upload).orElseThrow(() -> new NotFoundException("upload " + upload));
     if (entry.reading().isPresent()) {
       return "redirect:/readings/" + entry.reading().getAsLong();
+    }
+    if (entry.state() == ReadingUploads.State.WAITING) {
+      return "redirect:/uploads/" + upload + "/columns";
     }
     boolean open =
         entry.state() == ReadingUploads.State.QUEUED
@@ -145,6 +148,7 @@ class ReadingController {
     List<ReadingRepository.Entry> all = readings.ofSite(site);
     model.addAttribute("readings", all.stream().map(r -> pages.row(r, survey)).toList());
     model.addAttribute("coverage", coverage.of(all, survey));
+    model.addAttribute("waiting", uploads.waiting(site));
     model.addAttribute("places", pages.places(survey));
   }
 

@@ -1,5 +1,6 @@
 package fourthwire.intake.reading.log;
 
+import fourthwire.intake.reading.LogProposal;
 import fourthwire.intake.reading.ReadingPlan;
 import fourthwire.intake.reading.ReadingRefusedException;
 import fourthwire.intake.reading.ReadingSetting;
@@ -88,6 +89,42 @@ public final class LogFormat {
         table.headings(),
         mapping.confidence(),
         notes);
+  }
+
+  /** How it would be read, what is open included. */
+  public LogProposal propose(ReadingSetting setting, String layout, Mappings known) {
+    List<ReadingRefusedException.Question> questions = new ArrayList<>();
+    Optional<ReadingMapping.Time> planned = Optional.empty();
+    try {
+      planned = Optional.of(plan(setting, layout, known).mapping().time());
+    } catch (ReadingRefusedException e) {
+      questions.addAll(e.questions());
+    }
+    ReadingMapping.Time given =
+        known.mapping().map(ReadingMapping::time).orElse(ReadingMapping.Time.FROM_FILE);
+    List<String> notes = new ArrayList<>();
+    Optional<DateOrder> order = order(given, new ArrayList<>(), notes);
+    ReadingMapping.Time time =
+        new ReadingMapping.Time(
+            names(),
+            order.map(DateOrder::pattern),
+            planned
+                .flatMap(ReadingMapping.Time::zone)
+                .or(given::zone)
+                .or(() -> setting.siteZone().map(ZoneId::getId)),
+            Optional.of(stamp(given, new ArrayList<>())),
+            given.intervalS());
+    List<String> names = names();
+    List<String> others = table.headings().stream().filter(h -> !names.contains(h)).toList();
+    return new ProposalMaker(table, this.time, order)
+        .make(
+            others,
+            known,
+            new LogProposal.Time(
+                time,
+                this.time.kind() == TimeColumns.Kind.CALENDAR,
+                String.join(" ", notes)),
+            questions);
   }
 
   private static ReadingRefusedException.Question question(String part, String message) {

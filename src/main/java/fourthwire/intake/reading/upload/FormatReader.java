@@ -1,11 +1,13 @@
 package fourthwire.intake.reading.upload;
 
+import fourthwire.intake.reading.LogProposal;
 import fourthwire.intake.reading.ReadingPlan;
 import fourthwire.intake.reading.ReadingReader;
 import fourthwire.intake.reading.ReadingSetting;
 import fourthwire.metering.RawFile;
 import fourthwire.metering.Reading;
 import java.util.List;
+import java.util.Optional;
 import java.util.function.BiPredicate;
 
 /** The reader of every format that is supported: interval logs and captures as CSV, COMTRADE. */
@@ -16,6 +18,11 @@ public final class FormatReader implements ReadingReader {
   @Override
   public ReadingPlan plan(List<RawFile> files, ReadingSetting setting) {
     return Upload.format(files).plan(setting);
+  }
+
+  @Override
+  public Optional<LogProposal> propose(List<RawFile> files, ReadingSetting setting) {
+    return Upload.format(files).propose(setting);
   }
 
   @Override

@@ -1,5 +1,6 @@
 package fourthwire.intake.reading.upload;
 
+import fourthwire.intake.reading.LogProposal;
 import fourthwire.intake.reading.ReadingPlan;
 import fourthwire.intake.reading.ReadingRefusedException;
 import fourthwire.intake.reading.ReadingSetting;
@@ -63,6 +64,11 @@ final class PqdifFormat implements Format {
             + " unknown here stand under their channel's own name.");
     return new ReadingPlan(
         plan.kind(), plan.layout(), plan.mapping(), plan.columns(), plan.confidence(), notes);
+  }
+
+  @Override
+  public Optional<LogProposal> propose(ReadingSetting setting) {
+    return of(setting.mapping()).propose(setting);
   }
 
   private Format of(Optional<ReadingMapping> mapping) {

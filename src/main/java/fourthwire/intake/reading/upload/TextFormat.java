@@ -1,5 +1,6 @@
 package fourthwire.intake.reading.upload;
 
+import fourthwire.intake.reading.LogProposal;
 import fourthwire.intake.reading.ReadingPlan;
 import fourthwire.intake.reading.ReadingRefusedException;
 import fourthwire.intake.reading.ReadingSetting;
@@ -41,7 +42,7 @@ final class TextFormat implements Format {
 
   @Override
   public ReadingPlan plan(ReadingSetting setting) {
-    String layout = Layout.of("text", table.headings());
+    String layout = layout();
     Mappings known = Mappings.of(setting, layout).under(table::heading);
     try {
       TimeColumns time = time(known.mapping());
@@ -49,10 +50,33 @@ final class TextFormat implements Format {
           ? new TextCapture(table, time).plan(setting, layout, known)
           : new LogFormat(table, time, part.length()).plan(setting, layout, known);
     } catch (TableException e) {
-      throw new ReadingRefusedException(
-          "The time of the rows can't be read.",
-          table.headings(),
-          List.of(new ReadingRefusedException.Question("time", String.valueOf(e.getMessage()))));
+      throw timeRefused(e);
+    }
+  }
+
+  private String layout() {
+    return Layout.of("text", table.headings());
+  }
+
+  private ReadingRefusedException timeRefused(TableException e) {
+    return new ReadingRefusedException(
+        "The time of the rows can't be read.",
+        table.headings(),
+        List.of(new ReadingRefusedException.Question("time", String.valueOf(e.getMessage()))));
+  }
+
+  @Override
+  public Optional<LogProposal> propose(ReadingSetting setting) {
+    String layout = layout();
+    Mappings known = Mappings.of(setting, layout).under(table::heading);
+    try {
+      TimeColumns time = time(known.mapping());
+      return kind(known.mapping(), time) == ReadingKind.CAPTURE
+          ? Optional.empty()
+          : Optional.of(
+              new LogFormat(table, time, part.length()).propose(setting, layout, known));
+    } catch (TableException e) {
+      throw timeRefused(e);
     }
   }
 
