@@ -45,7 +45,16 @@ public record MeasuredState(
       PowerFigures power,
       Map<Conductor, Spectrum> currentSpectrum) {
     this(
-        meter, reading, period, basis, lines, neutral, voltage, power, currentSpectrum, Demand.NONE);
+        meter,
+        reading,
+        period,
+        basis,
+        lines,
+        neutral,
+        voltage,
+        power,
+        currentSpectrum,
+        Demand.NONE);
   }
 
   /**

@@ -64,7 +64,8 @@ class JobConfiguration {
       CorrectionRepository corrections,
       Audit audit,
       Stop stop) {
-    return new AuditRun(audits, sites, new MeasuredStates(readings, series, corrections), audit, stop);
+    return new AuditRun(
+        audits, sites, new MeasuredStates(readings, series, corrections), audit, stop);
   }
 
   @Bean

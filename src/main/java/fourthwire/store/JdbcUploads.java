@@ -92,8 +92,7 @@ final class JdbcUploads implements ReadingUploads {
         .list();
   }
 
-  private long insert(
-      long siteId, MeterRef meter, Optional<ReadingMapping> mapping, State state) {
+  private long insert(long siteId, MeterRef meter, Optional<ReadingMapping> mapping, State state) {
     return Rows.insert(
         jdbc.sql(
                 """
@@ -123,10 +122,7 @@ final class JdbcUploads implements ReadingUploads {
 
   @Override
   public Optional<Entry> find(long uploadId) {
-    return jdbc.sql(COLUMNS + " where id = ?")
-        .param(uploadId)
-        .query(JdbcUploads::entry)
-        .optional();
+    return jdbc.sql(COLUMNS + " where id = ?").param(uploadId).query(JdbcUploads::entry).optional();
   }
 
   private static Entry entry(ResultSet row, int number) throws SQLException {

@@ -168,7 +168,12 @@ class AuditRunTest {
   }
 
   private AuditRun auditRun(Audit audit) {
-    return new AuditRun(audits, sites, new MeasuredStates(store.readings(), store.series(), store.corrections()), audit, stop);
+    return new AuditRun(
+        audits,
+        sites,
+        new MeasuredStates(store.readings(), store.series(), store.corrections()),
+        audit,
+        stop);
   }
 
   private static JobQueue queue(List<Long> into) {

@@ -123,7 +123,6 @@ class BrowserTest extends PagesTest {
     "readings, /sites/{site}/readings, '#page|input[type=file]|Read it'",
     "log, /readings/{log}/series?from=2025-03-26&to=2025-03-29,"
         + " '#page|id=\"show\"|id=\"from\"|>Show|Closer|The whole log'",
-    "faults, /readings/{faulty}",
     "faults, /readings/{faulty}, '#page|Turn the sign|Count each|Delete this reading'",
     "columns, /uploads/{upload}/columns, '#page|id=\"date\"|id=\"zone\"|name=\"m2\"|Read the file so'",
     "delete, /sites/{site}/delete, '#page|Delete it|Keep it'",
@@ -199,7 +198,6 @@ class BrowserTest extends PagesTest {
         + path.replace("{audit}", "" + audit)
             .replace("{site}", "" + site)
             .replace("{reading}", "" + reading)
-            .replace("{log}", "" + log);
             .replace("{log}", "" + log)
             .replace("{upload}", "" + upload)
             .replace("{faulty}", "" + faulty);

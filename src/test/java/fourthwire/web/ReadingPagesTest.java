@@ -116,7 +116,8 @@ class ReadingPagesTest extends ServiceTest {
 
   @Test
   void aWaitingFileIsDiscarded() {
-    Answer taken = add("week.csv", "Date,Foo\n2026-03-02 00:10,1\n2026-03-02 00:20,2\n", "LP-1", "");
+    Answer taken =
+        add("week.csv", "Date,Foo\n2026-03-02 00:10,1\n2026-03-02 00:20,2\n", "LP-1", "");
     String upload = taken.header("Location").replaceAll(".*(/uploads/\\d+).*", "$1");
     assertThat(http().post(upload + "/cancel").status()).isEqualTo(302);
     assertThat(text(http().get(upload, "Accept", HTML))).contains("cancelled");

@@ -219,7 +219,11 @@ public final class AuditContext {
   private Optional<Demand> measuredDemand(String node) {
     return measured.getOrDefault(node, List.of()).stream()
         .filter(m -> m.demand().amps().value().isPresent())
-        .map(m -> new Demand(m.demand().amps(), "As measured by " + m.meter() + ": " + m.demand().basis() + "."))
+        .map(
+            m ->
+                new Demand(
+                    m.demand().amps(),
+                    "As measured by " + m.meter() + ": " + m.demand().basis() + "."))
         .findFirst();
   }
 

@@ -119,7 +119,9 @@ final class NodeShapes {
         Shape.of("What a meter or clamp reading says of the node")
             .text("meter", "The meter, or \"clamp reading\"")
             .wholeOrNull("reading", "Id of the reading; null for one in the survey")
-            .figure("demand_a", "I_L of the standard's definition, amps; null where the log is too short")
+            .figure(
+                "demand_a",
+                "I_L of the standard's definition, amps; null where the log is too short")
             .text("demand_basis", "From what demand_a was formed, and from which set of rows")
             .part("period", Figures.period("When it was measured; null where it is not known"))
             .optional("period_reason", Shape.text("Why period is null"))

@@ -6,8 +6,8 @@ import java.util.Map;
 import java.util.Optional;
 
 /**
- * How a log would be read, and what of that must be asked: what a person looks at before
- * confirming it.
+ * How a log would be read, and what of that must be asked: what a person looks at before confirming
+ * it.
  *
  * @param headings all of them, in order
  * @param columns all but those of the time

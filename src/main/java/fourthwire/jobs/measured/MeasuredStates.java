@@ -42,8 +42,7 @@ public final class MeasuredStates {
     List<ReadingRepository.Entry> stored = readings.ofSite(siteId);
     Map<String, List<MeasuredState>> byNode = new LinkedHashMap<>();
     captures(stored).forEach(e -> add(byNode, e.meter().node(), CaptureStates.of(e, survey)));
-    logs(stored)
-        .forEach(e -> log(e, survey).ifPresent(s -> add(byNode, e.meter().node(), s)));
+    logs(stored).forEach(e -> log(e, survey).ifPresent(s -> add(byNode, e.meter().node(), s)));
     ZoneId zone = SiteZone.of(survey);
     survey.spotReadings().forEach(r -> add(byNode, r.at(), ClampStates.of(r, zone)));
     return byNode;

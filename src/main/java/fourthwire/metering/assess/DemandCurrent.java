@@ -159,7 +159,9 @@ public record DemandCurrent(Figure amps, String basis) {
       if (least < LEAST_SHARE) {
         return unknown(
             String.format(
-                Locale.ROOT, "in one of its months only %.0f %% of the demand is there", 100 * least));
+                Locale.ROOT,
+                "in one of its months only %.0f %% of the demand is there",
+                100 * least));
       }
       return new DemandCurrent(
           Figure.of(all / MONTHS),

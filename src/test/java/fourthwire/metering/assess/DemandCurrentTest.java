@@ -70,8 +70,7 @@ class DemandCurrentTest {
   @CsvSource({"5", "10", "15", "30"})
   void aYearGivesTheMeanOfItsTwelvePeaks(int minutes) {
     DemandCurrent found =
-        DemandCurrent.of(
-            log(minutes, 12, true, PEAKS), Duration.ofMinutes(minutes), ZONE);
+        DemandCurrent.of(log(minutes, 12, true, PEAKS), Duration.ofMinutes(minutes), ZONE);
     assertThat(found.amps().value().orElseThrow())
         .isCloseTo(Arrays.stream(PEAKS).average().orElseThrow(), within(1e-9));
     assertThat(found.basis()).contains(minutes % 10 == 0 ? "30 min" : "15 min", "as logged");
@@ -85,16 +84,14 @@ class DemandCurrentTest {
     peaks[0] = 500;
     peaks[1] = 400;
     peaks[13] = 62;
-    DemandCurrent found =
-        DemandCurrent.of(log(15, 14, true, peaks), Duration.ofMinutes(15), ZONE);
+    DemandCurrent found = DemandCurrent.of(log(15, 14, true, peaks), Duration.ofMinutes(15), ZONE);
     assertThat(found.amps().value().orElseThrow()).isCloseTo(51, within(1e-9));
   }
 
   /** I1 = I / √(1 + THD²): 75 % makes 0.8. */
   @Test
   void withoutFundamentalsRmsIsClearedOfItsDistortion() {
-    DemandCurrent found =
-        DemandCurrent.of(log(15, 12, false, PEAKS), Duration.ofMinutes(15), ZONE);
+    DemandCurrent found = DemandCurrent.of(log(15, 12, false, PEAKS), Duration.ofMinutes(15), ZONE);
     double mean = Arrays.stream(PEAKS).average().orElseThrow();
     assertThat(found.amps().value().orElseThrow())
         .as("L2 has no distortion logged and half the amps")
@@ -104,9 +101,7 @@ class DemandCurrentTest {
   @Test
   void whatIsTooShortOrTooCoarseOrHasHolesSaysSo() {
     assertThat(
-            DemandCurrent.of(log(15, 3, true, PEAKS), Duration.ofMinutes(15), ZONE)
-                .amps()
-                .reason())
+            DemandCurrent.of(log(15, 3, true, PEAKS), Duration.ofMinutes(15), ZONE).amps().reason())
         .contains("of the twelve months");
     assertThat(
             DemandCurrent.of(log(60, 12, true, PEAKS), Duration.ofMinutes(60), ZONE)

@@ -121,9 +121,7 @@ public final class LogFormat {
             others,
             known,
             new LogProposal.Time(
-                time,
-                this.time.kind() == TimeColumns.Kind.CALENDAR,
-                String.join(" ", notes)),
+                time, this.time.kind() == TimeColumns.Kind.CALENDAR, String.join(" ", notes)),
             questions);
   }
 

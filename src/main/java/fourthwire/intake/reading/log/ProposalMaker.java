@@ -62,7 +62,8 @@ final class ProposalMaker {
     return questions.stream()
         .filter(
             q ->
-                q.part().equals(COLUMNS + heading) || q.part().equals(COLUMNS + heading + ".factor"))
+                q.part().equals(COLUMNS + heading)
+                    || q.part().equals(COLUMNS + heading + ".factor"))
         .map(Question::message)
         .findFirst()
         .orElse("");

@@ -73,8 +73,7 @@ final class TextFormat implements Format {
       TimeColumns time = time(known.mapping());
       return kind(known.mapping(), time) == ReadingKind.CAPTURE
           ? Optional.empty()
-          : Optional.of(
-              new LogFormat(table, time, part.length()).propose(setting, layout, known));
+          : Optional.of(new LogFormat(table, time, part.length()).propose(setting, layout, known));
     } catch (TableException e) {
       throw timeRefused(e);
     }
