@@ -124,7 +124,8 @@ class BrowserTest extends PagesTest {
     "log, /readings/{log}/series?from=2025-03-26&to=2025-03-29,"
         + " '#page|id=\"show\"|id=\"from\"|>Show|Closer|The whole log'",
     "faults, /readings/{faulty}, '#page|Turn the sign|Count each|Delete this reading'",
-    "columns, /uploads/{upload}/columns, '#page|id=\"date\"|id=\"zone\"|name=\"m2\"|Read the file so'",
+    "columns, /uploads/{upload}/columns, '#page|id=\"date\"|id=\"zone\"|name=\"m2\"|Read the file"
+        + " so'",
     "delete, /sites/{site}/delete, '#page|Delete it|Keep it'",
   })
   void everythingIsReachedByTheKeyboardInOrder(String name, String path, String stops) {
