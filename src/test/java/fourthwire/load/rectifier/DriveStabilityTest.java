@@ -1,6 +1,7 @@
 package fourthwire.load.rectifier;
 
 import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.within;
 
 import fourthwire.load.model.PortSpectra;
 import fourthwire.load.rectifier.loop.MultiPulseSolver;
@@ -41,17 +42,46 @@ class DriveStabilityTest {
         .contains("would not hold by itself");
   }
 
-  private static List<String> remarks(double lineOhm, double directOhm, double ohm, double farad) {
+  /**
+   * A slim drive's state is given from nothing as from its neighbour: the capacitor follows the
+   * bridge's voltage, and the load's power sets the current.
+   */
+  @ParameterizedTest(name = "{0} µF/kW behind a line choke of 1 %")
+  @CsvSource({"2", "3", "5"})
+  void aSlimDriveHasOneState(double microfaradPerKw) {
+    double ohm = 0.01 * BASE_OHM;
+    MultiPulseSolver warm = solver(ohm, 0, 0.003 * BASE_OHM, microfaradPerKw * 1e-9 * WATTS);
+    PortSpectra before = new PortSpectra(3);
+    PortSpectra after = new PortSpectra(3);
+    for (int volts = 380; volts <= 440; volts += 5) {
+      MultiPulseSolver cold = solver(ohm, 0, 0.003 * BASE_OHM, microfaradPerKw * 1e-9 * WATTS);
+      warm.solve(emf(volts), 0, 0, before);
+      cold.solve(emf(volts), 0, 0, after);
+      assertThat(after.re[0]).as("at %d V", volts).containsExactly(before.re[0], within(1e-4));
+    }
+  }
+
+  private static List<String> remarks(
+      double lineOhm, double directOhm, double ohm, double farad) {
+    MultiPulseSolver solver = solver(lineOhm, directOhm, ohm, farad);
+    solver.solve(emf(400), 0, 0, new PortSpectra(3));
+    return solver.remarks();
+  }
+
+  private static MultiPulseSolver solver(
+      double lineOhm, double directOhm, double ohm, double farad) {
     BridgeLoad load =
         new BridgeLoad(WATTS, farad, ohm, lineOhm / OMEGA, 0, directOhm / OMEGA, DIODE);
-    MultiPulseSolver solver = new MultiPulseSolver(1, load, HERTZ);
+    return new MultiPulseSolver(1, load, HERTZ);
+  }
+
+  private static PortSpectra emf(double volts) {
     PortSpectra emf = new PortSpectra(3);
     for (int k = 0; k < 3; k++) {
-      emf.re[k][1] = 400 / Math.sqrt(3) * Math.cos(2 * Math.PI / 3 * k);
-      emf.im[k][1] = -400 / Math.sqrt(3) * Math.sin(2 * Math.PI / 3 * k);
+      emf.re[k][1] = volts / Math.sqrt(3) * Math.cos(2 * Math.PI / 3 * k);
+      emf.im[k][1] = -volts / Math.sqrt(3) * Math.sin(2 * Math.PI / 3 * k);
     }
-    solver.solve(emf, 0, 0, new PortSpectra(3));
-    return solver.remarks();
+    return emf;
   }
 
   private static double limitF(double lineHenry, double directHenry, double ohm) {

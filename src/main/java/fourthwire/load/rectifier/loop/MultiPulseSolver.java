@@ -41,6 +41,9 @@ public final class MultiPulseSolver implements LoadSolver {
   /** Cells by which the section moves on in each attempt. */
   private static final int[] SECTIONS = {0, 21, 43};
 
+  /** Likewise where lines are taken to carry current at the section. */
+  private static final int[] CARRYING_SECTIONS = {21, 32, 43, 10};
+
   private static final double[] STAGES = {0.1, 0.2, 0.35, 0.5, 0.65, 0.8, 0.9, 1};
   private static final int REPETITIONS = 50;
   private static final int SIXTHS = LineSpectra.SIXTHS;
@@ -160,6 +163,12 @@ public final class MultiPulseSolver implements LoadSolver {
     if (approach() && newton.converge()) {
       return true;
     }
+    for (int shift : CARRYING_SECTIONS) {
+      moveSection(shift);
+      if (carrying() && newton.converge()) {
+        return true;
+      }
+    }
     for (int shift : SECTIONS) {
       moveSection(shift);
       newton.start(0.95);
@@ -171,6 +180,20 @@ public final class MultiPulseSolver implements LoadSolver {
     newton.start(1);
     starved = !newton.repeat(REPETITIONS);
     return !starved && newton.settle();
+  }
+
+  /**
+   * Starts with the highest and the lowest line carrying what the load draws: near the state where
+   * the capacitor is so small that its voltage follows the bridge's.
+   */
+  private boolean carrying() {
+    newton.start(1);
+    double v = 0.98 * bridge.emf.spread(0, section);
+    for (int b = 0; b < bridges && v > 0; b++) {
+      double amps = load.powerW() / v / bridges;
+      newton.carry(bridge.emf.highest(b, section), bridge.emf.lowest(b, section), amps, v);
+    }
+    return v > 0;
   }
 
   /** Comes near by coarse steps. */

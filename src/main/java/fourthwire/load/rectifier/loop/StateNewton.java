@@ -94,6 +94,13 @@ final class StateNewton {
     state[volts] = share * peak;
   }
 
+  /** Lets a pair of lines carry a current, at a voltage. */
+  void carry(int in, int out, double amps, double v) {
+    state[in] = amps;
+    state[out] = -amps;
+    state[volts] = v;
+  }
+
   /** Moves the state near to where it closes on itself; false where that is not soon reached. */
   boolean approach() {
     for (int n = 0; n < MOST_COARSE_TURNS; n++) {
