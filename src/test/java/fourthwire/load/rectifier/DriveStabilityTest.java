@@ -61,8 +61,7 @@ class DriveStabilityTest {
     }
   }
 
-  private static List<String> remarks(
-      double lineOhm, double directOhm, double ohm, double farad) {
+  private static List<String> remarks(double lineOhm, double directOhm, double ohm, double farad) {
     MultiPulseSolver solver = solver(lineOhm, directOhm, ohm, farad);
     solver.solve(emf(400), 0, 0, new PortSpectra(3));
     return solver.remarks();
