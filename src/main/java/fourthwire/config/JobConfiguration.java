@@ -15,6 +15,7 @@ import fourthwire.jobs.ReadingService;
 import fourthwire.jobs.ReadingSettings;
 import fourthwire.jobs.ScheduledJobs;
 import fourthwire.jobs.Stop;
+import fourthwire.jobs.measured.LogAssessments;
 import fourthwire.jobs.measured.MeasuredStates;
 import fourthwire.jobs.series.StoredLogs;
 import fourthwire.metering.ReadingRepository;
@@ -93,6 +94,12 @@ class JobConfiguration {
   CorrectionService correctionService(
       ReadingRepository readings, SeriesRepository series, CorrectionRepository corrections) {
     return new CorrectionService(readings, series, corrections);
+  }
+
+  @Bean
+  LogAssessments logAssessments(
+      SeriesRepository series, CorrectionRepository corrections, AuditRepository audits) {
+    return new LogAssessments(series, corrections, audits);
   }
 
   @Bean

@@ -48,6 +48,7 @@ class ApiDescription {
           .addSchemas("ReadingRow", ReadingShapes.row())
           .addSchemas("Reading", ReadingShapes.reading())
           .addSchemas("Correction", ReadingShapes.correction())
+          .addSchemas("LogLimits", LimitShapes.limits())
           .addSchemas("Mapping", ReadingShapes.mapping())
           .addSchemas("Series", SeriesShapes.series())
           .addSchemas("SeriesWeeks", SeriesShapes.weeks())

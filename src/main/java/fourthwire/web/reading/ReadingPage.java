@@ -9,6 +9,7 @@ import java.util.Optional;
  *
  * @param facts what was read: files, period, length, digest
  * @param faults what is wrong with it, and what was done about it
+ * @param limits of a log: its percentiles against the limits of measured values
  * @param quantities of a log, as read and as corrected
  * @param capture of a capture: its currents, voltages and powers
  * @param orders of a capture: the spectrum in figures
@@ -22,6 +23,7 @@ record ReadingPage(
     List<Fact> facts,
     List<String> notes,
     Faults faults,
+    Optional<LimitsView> limits,
     Optional<NodePage.Grid> quantities,
     List<NodePage.Grid> capture,
     Optional<NodePage.Grid> orders,

@@ -1,5 +1,6 @@
 package fourthwire.web.reading;
 
+import fourthwire.jobs.measured.LogAssessments;
 import fourthwire.metering.CaptureResult;
 import fourthwire.metering.LogResult;
 import fourthwire.metering.QuantitySummary;
@@ -30,10 +31,13 @@ class ReadingPageMaker {
 
   private final Words words;
   private final CorrectionRepository corrections;
+  private final LogAssessments assessments;
 
-  ReadingPageMaker(Words words, CorrectionRepository corrections) {
+  ReadingPageMaker(
+      Words words, CorrectionRepository corrections, LogAssessments assessments) {
     this.words = words;
     this.corrections = corrections;
+    this.assessments = assessments;
   }
 
   ReadingPage.Row row(ReadingRepository.Entry entry, Survey survey) {
@@ -78,6 +82,7 @@ class ReadingPageMaker {
         facts(entry, survey),
         reading.notes().stream().map(names::in).toList(),
         new FaultsMaker(words, survey).make(entry, corrections.ofReading(entry.id())),
+        assessments.of(entry, survey).map(new LimitsMaker(words, survey)::make),
         reading.log().map(l -> quantities(l, corrections.cleaned(entry.id()))),
         reading.capture().map(c -> new CaptureTables(words, names).of(c)).orElse(List.of()),
         reading

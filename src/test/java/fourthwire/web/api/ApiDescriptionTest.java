@@ -27,6 +27,7 @@ class ApiDescriptionTest extends ServiceTest {
           "get /api/v1/readings/{reading}/corrections",
           "post /api/v1/readings/{reading}/corrections",
           "delete /api/v1/readings/{reading}/corrections/{correction}",
+          "get /api/v1/readings/{reading}/limits",
           "get /api/v1/readings/{reading}/series",
           "get /api/v1/readings/{reading}/weeks",
           "get /api/v1/readings/{reading}/coverage",

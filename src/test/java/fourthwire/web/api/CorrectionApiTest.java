@@ -115,6 +115,28 @@ class CorrectionApiTest extends ServiceTest {
     assertThat(text(http, page)).doesNotContain("L1.active_w, corrected");
   }
 
+  /** Two days are no week: what is there is told, and no verdict is made of it. */
+  @Test
+  void aLogIsHeldAgainstLimitsWithWhatWasThere() {
+    Http http = http();
+    String path = read(http);
+    JsonNode limits = http.get(path + "/limits").json();
+    assertThat(limits.path("set").asString()).isEqualTo("as read");
+    JsonNode volts = limits.path("limits").path(0);
+    assertThat(volts.path("code").asString()).isEqualTo("rms-voltage");
+    assertThat(volts.path("outcome").asString()).isEqualTo("open");
+    assertThat(volts.at("/worst/share_percent").asDouble())
+        .isEqualTo(100 * 288 / 1008.0, org.assertj.core.api.Assertions.within(1e-9));
+    assertThat(text(http, path.replace("/api/v1", "")))
+        .contains("Held against limits", "29 % of the period there", "Open in one week")
+        .doesNotContain("??");
+    int finding = finding(http.get(path).json(), "reversed-clamp");
+    http.postJson(path + "/corrections", "{\"finding\":" + finding + "}");
+    assertThat(http.get(path + "/limits").json().path("set").asString())
+        .isEqualTo("as corrected (one correction)");
+    ProblemShape.check(http.get("/api/v1/readings/999/limits"), 404);
+  }
+
   private static int finding(JsonNode reading, String code) {
     for (int k = 0; k < reading.path("quality").size(); k++) {
       if (reading.path("quality").path(k).path("code").asString().equals(code)) {
