@@ -92,9 +92,7 @@ final class LogColumnsHeld {
 
   private Optional<Column> amps(String line, String order, boolean percent) {
     Optional<Column> column = find(order);
-    return percent
-        ? column.flatMap(c -> fundamental(line).map(f -> product(c, f, 0.01)))
-        : column;
+    return percent ? column.flatMap(c -> fundamental(line).map(f -> product(c, f, 0.01))) : column;
   }
 
   /** As logged, else the rms without its distortion. */

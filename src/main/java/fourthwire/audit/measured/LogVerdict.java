@@ -66,5 +66,4 @@ public record LogVerdict(String code, MeasuredBand band, String unit, List<Perio
         .max(Comparator.comparingDouble(Period::ofLimit))
         .orElseThrow();
   }
-
 }

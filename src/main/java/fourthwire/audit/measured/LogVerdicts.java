@@ -83,13 +83,13 @@ public final class LogVerdicts {
         .forEach(
             (place, column) -> {
               List<MeasuredBand> bands =
-                  new ArrayList<>(
-                      MeasuredBands.voltage519(ieee.thdLimitPercent(), ieee.basis()));
+                  new ArrayList<>(MeasuredBands.voltage519(ieee.thdLimitPercent(), ieee.basis()));
               weekly.forEach(
                   d -> bands.addAll(MeasuredBands.weekly95(d.thdLimitPercent(), d.basis())));
               hold(FindingCode.VOLTAGE_THD.word(), place, 0, bands, column);
             });
-    columns.voltageOrders((place, order, column) -> voltageOrder(ieee, weekly, place, order, column));
+    columns.voltageOrders(
+        (place, order, column) -> voltageOrder(ieee, weekly, place, order, column));
     rms();
   }
 
@@ -105,8 +105,7 @@ public final class LogVerdicts {
     weekly.forEach(
         d ->
             d.orderLimitPercent(order)
-                .ifPresent(
-                    limit -> bands.addAll(MeasuredBands.weekly95(limit, d.basis()))));
+                .ifPresent(limit -> bands.addAll(MeasuredBands.weekly95(limit, d.basis()))));
     hold(FindingCode.VOLTAGE_ORDER.word(), place, order, bands, column);
   }
 
@@ -170,11 +169,7 @@ public final class LogVerdicts {
   }
 
   private void hold(
-      String code,
-      String place,
-      int order,
-      List<MeasuredBand> bands,
-      PeriodFigures.Column column) {
+      String code, String place, int order, List<MeasuredBand> bands, PeriodFigures.Column column) {
     if (bands.isEmpty()) {
       return;
     }
@@ -207,16 +202,16 @@ public final class LogVerdicts {
         outcome);
   }
 
-  /** Bands of one document, percentile and quantity are one limit; their orders differ in height. */
+  /**
+   * Bands of one document, percentile and quantity are one limit; their orders differ in height.
+   */
   private void note(String code, MeasuredBand band, LogVerdict.Period period) {
     boolean pair = band.isTwoSided() && period.place().contains("-");
     String key = code + band.weekly() + band.percent() + band.basis() + pair;
     Found into =
         found.computeIfAbsent(
             key,
-            k ->
-                new Found(
-                    code, band, band.isTwoSided() ? "% of values" : "%", new TreeMap<>()));
+            k -> new Found(code, band, band.isTwoSided() ? "% of values" : "%", new TreeMap<>()));
     into.periods().merge(period.from(), period, LogVerdicts::worse);
   }
 

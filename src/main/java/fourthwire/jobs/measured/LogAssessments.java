@@ -87,8 +87,7 @@ public final class LogAssessments {
             .findFirst();
     Currents currents = currents(entry);
     Key key =
-        new Key(
-            entry.id(), set, node, currents.audit(), survey.settings().practice().toString());
+        new Key(entry.id(), set, node, currents.audit(), survey.settings().practice().toString());
     synchronized (kept) {
       Result there = kept.get(key);
       if (there != null) {
@@ -103,11 +102,7 @@ public final class LogAssessments {
   }
 
   private static Result make(
-      Survey survey,
-      Series read,
-      LogSet set,
-      Optional<SiteTree.Node> node,
-      Currents currents) {
+      Survey survey, Series read, LogSet set, Optional<SiteTree.Node> node, Currents currents) {
     if (node.isEmpty()) {
       return new Result(
           set.words(), List.of(), List.of("The survey has this meter’s node no more."));

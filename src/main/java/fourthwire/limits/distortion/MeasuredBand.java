@@ -9,8 +9,7 @@ package fourthwire.limits.distortion;
  * @param high largest value
  * @param basis document, edition, clause, and whether figures are from memory
  */
-public record MeasuredBand(
-    boolean weekly, double percent, double low, double high, String basis) {
+public record MeasuredBand(boolean weekly, double percent, double low, double high, String basis) {
   /** A limit from above alone. */
   static MeasuredBand upTo(boolean weekly, double percent, double high, String basis) {
     return new MeasuredBand(weekly, percent, Double.NEGATIVE_INFINITY, high, basis);

@@ -53,7 +53,8 @@ public final class MeasuredBands {
   }
 
   /**
-   * Rms of a public supply: 95 % of the week within 10 % of nominal, all of it within +10 and -15 %.
+   * Rms of a public supply: 95 % of the week within 10 % of nominal, all of it within +10 and -15
+   * %.
    *
    * @param nominalV of the same voltage, to neutral or between lines
    */

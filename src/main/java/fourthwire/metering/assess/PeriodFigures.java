@@ -194,8 +194,7 @@ public final class PeriodFigures {
         double[] sorted = Arrays.copyOf(values, count);
         Arrays.sort(sorted);
         periods.add(
-            new PeriodFigures(
-                Instant.ofEpochMilli(origin + period * span.period), needed, sorted));
+            new PeriodFigures(Instant.ofEpochMilli(origin + period * span.period), needed, sorted));
         count = 0;
       }
     }

@@ -105,8 +105,7 @@ final class LimitsMaker {
       if (count > 0) {
         String word = o.name().toLowerCase(Locale.ROOT);
         parts.add(
-            words.of(
-                "reading.limits." + word + (v.band().weekly() ? ".weeks" : ".days"), count));
+            words.of("reading.limits." + word + (v.band().weekly() ? ".weeks" : ".days"), count));
       }
     }
     String text = String.join(", ", parts);

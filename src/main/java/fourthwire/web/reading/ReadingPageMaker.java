@@ -33,8 +33,7 @@ class ReadingPageMaker {
   private final CorrectionRepository corrections;
   private final LogAssessments assessments;
 
-  ReadingPageMaker(
-      Words words, CorrectionRepository corrections, LogAssessments assessments) {
+  ReadingPageMaker(Words words, CorrectionRepository corrections, LogAssessments assessments) {
     this.words = words;
     this.corrections = corrections;
     this.assessments = assessments;

@@ -82,7 +82,9 @@ class LogVerdictsTest {
     assertThat(all).noneMatch(v -> v.code().startsWith("current"));
   }
 
-  /** IEEE 519-2022, Table 2, I_SC/I_L 50 to 100: 10 % below the 11th, TDD 12 %; 1.5 times for 99 %. */
+  /**
+   * IEEE 519-2022, Table 2, I_SC/I_L 50 to 100: 10 % below the 11th, TDD 12 %; 1.5 times for 99 %.
+   */
   @Test
   void currentsAreHeldAgainstTheDemandCurrent() {
     Map<String, double[]> columns = new LinkedHashMap<>();
@@ -102,7 +104,6 @@ class LogVerdictsTest {
     assertThat(weekly99.outcome()).as("30 of 1,008 are at 16 %").isEqualTo(Outcome.OVER);
     LogVerdict tdd = find(all, "current-tdd", "IEEE 519", 95);
     assertThat(tdd.worst().limit()).isEqualTo(12);
-    assertThat(tdd.worst().figure())
-        .isCloseTo(Math.sqrt(9 * 9 + 4 * 4 + 2 * 2), within(1e-9));
+    assertThat(tdd.worst().figure()).isCloseTo(Math.sqrt(9 * 9 + 4 * 4 + 2 * 2), within(1e-9));
   }
 }

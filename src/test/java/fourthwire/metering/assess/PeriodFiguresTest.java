@@ -20,7 +20,8 @@ import org.junit.jupiter.params.provider.ValueSource;
 
 /**
  * Values and periods of IEEE 519-2022 (4.2 to 4.5) and IEC 61000-4-30:2015 (4.5): 200 values of 3 s
- * make one of 10 min by root mean square; a day has 28,800 of the first, a week 1,008 of the second.
+ * make one of 10 min by root mean square; a day has 28,800 of the first, a week 1,008 of the
+ * second.
  */
 class PeriodFiguresTest {
   private static final Instant START = Instant.parse("2026-03-03T10:40:00Z");
@@ -79,8 +80,7 @@ class PeriodFiguresTest {
   @Test
   void tenMinutesOfWhichMuchIsMissingAreNone() {
     List<PeriodFigures> weeks =
-        figures(
-            log(60, 30, k -> k >= 10 && k < 12 ? Double.NaN : 1), 60, Span.WEEK);
+        figures(log(60, 30, k -> k >= 10 && k < 12 ? Double.NaN : 1), 60, Span.WEEK);
     assertThat(weeks.get(0).there()).isEqualTo(2);
   }
 
@@ -119,9 +119,7 @@ class PeriodFiguresTest {
             .judge(Double.NEGATIVE_INFINITY, 8, 95);
     Outcome low = filled(seen, 5);
     Outcome high = filled(seen, 9);
-    assertThat(partly)
-        .as("seed %d", seed)
-        .isEqualTo(low == high ? low : Outcome.OPEN);
+    assertThat(partly).as("seed %d", seed).isEqualTo(low == high ? low : Outcome.OPEN);
   }
 
   private static Outcome filled(double[] seen, double value) {

@@ -73,8 +73,7 @@ class AnswersAsDescribedTest extends ServiceTest {
   }
 
   private void checkSeries(Http http, String reading) {
-    described.check(
-        "get", "/readings/{reading}/limits", 200, http.get(reading + "/limits").json());
+    described.check("get", "/readings/{reading}/limits", 200, http.get(reading + "/limits").json());
     String quantity = "?quantity=N.rms_a";
     described.check(
         "get",
