@@ -65,6 +65,7 @@ public final class OnePathSearch {
 
   private static final int MOST_STEPS = 40;
   private static final int MOST_SUBSTITUTIONS = 200;
+  private static final int REPETITIONS_TO_NEAR = 40;
 
   private final PairBridge bridge = new PairBridge();
 
@@ -296,7 +297,10 @@ public final class OnePathSearch {
         && Math.abs(defectI) < TOLERANCE_OF_CURRENT * (Math.abs(i) + powerW / peak);
   }
 
-  /** Plain repetition: slow, but it reaches the stable state if there is one. */
+  /**
+   * Plain repetition: slow, but it reaches the stable state if there is one; near it, and with no
+   * current at the section, Newton's method goes the rest of the way.
+   */
   private boolean substitution(double startI, double startV) {
     double i = startI;
     double v = startV;
@@ -310,6 +314,12 @@ public final class OnePathSearch {
       }
       i = endI();
       v = bridge.v;
+      if (n == REPETITIONS_TO_NEAR && i == 0) {
+        double rest = newton(v, toleranceV, jumpV);
+        if (rest > 0) {
+          return found(0, rest);
+        }
+      }
     }
     return false;
   }
