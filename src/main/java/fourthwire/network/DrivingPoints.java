@@ -27,8 +27,9 @@ public final class DrivingPoints {
 
   /** The impedance at a node. */
   public DrivingPoint at(int node) {
-    double[] known = ohm[node];
+    int n = layout.position[node];
+    double[] known = ohm[n];
     return new DrivingPoint(
-        known.length == 0 ? walk.step(node, ohm[layout.parent[node]]) : known, layout.size(node));
+        known.length == 0 ? walk.step(n, ohm[layout.parent[n]]) : known, layout.size(n));
   }
 }

@@ -113,7 +113,7 @@ final class Elimination {
     double qRe = (re * dRe + im * dIm) / square;
     double qIm = (im * dRe - re * dIm) / square;
     if (!Double.isFinite(qRe) || !Double.isFinite(qIm)) {
-      throw new UnsolvableOrderException(order, n);
+      throw new UnsolvableOrderException(order, layout.number[n]);
     }
     blocks[plan.block[n]] = qRe;
     blocks[plan.block[n] + 1] = qIm;
@@ -137,7 +137,7 @@ final class Elimination {
             ? Blocks.solve(left, size, blocks, at, size)
             : Blocks.isFinite(blocks, at, 2 * size * size);
     if (!solved) {
-      throw new UnsolvableOrderException(order, n);
+      throw new UnsolvableOrderException(order, layout.number[n]);
     }
     if (n > 0) {
       if (layout.isFeeder(n)) {

@@ -64,6 +64,13 @@ public final class Excitation {
     return this;
   }
 
+  /** Makes a current the only one injected there, by the conductor's index. */
+  public Excitation set(int index, double re, double im) {
+    injected[2 * index] = re;
+    injected[2 * index + 1] = im;
+    return this;
+  }
+
   /** Adds a load's current: out of one conductor of a node, and back into another. */
   public Excitation draw(int node, int from, int to, Phasor amps) {
     inject(network.index(node, from), -amps.re(), -amps.im());

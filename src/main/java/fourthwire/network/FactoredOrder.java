@@ -51,7 +51,8 @@ public final class FactoredOrder {
 
   /** The impedance between a node's conductors and earth, as an injected current meets it. */
   public DrivingPoint drivingPoint(int node) {
-    return new ImpedanceWalk(network.layout(), network.plan(), factors).at(node);
+    return new ImpedanceWalk(network.layout(), network.plan(), factors)
+        .at(network.layout().position[node]);
   }
 
   /** The driving-point impedances of every node, in linear time. */

@@ -5,16 +5,28 @@ import fourthwire.network.element.SeriesImpedance;
 import fourthwire.network.element.Shunt;
 import fourthwire.network.element.SourceImpedance;
 import fourthwire.network.element.Transformer;
+import java.util.ArrayDeque;
+import java.util.ArrayList;
 import java.util.Collection;
+import java.util.Deque;
 import java.util.List;
+import java.util.stream.IntStream;
 
 /**
- * The network as flat arrays, parents before children: what every order shares. Conductors of all
- * nodes stand in one row; node n has those from {@code first[n]} to {@code first[n + 1]}.
+ * The network as flat arrays: what every order shares. Nodes stand depth first, each with its leaves
+ * right behind it, so that a sweep goes through memory as it goes through the tree. Conductors of
+ * all nodes stand in one row; node n has those from {@code first[n]} to {@code first[n + 1]}.
  */
 final class Layout {
   final SourceImpedance source;
   final int nodes;
+
+  /** Where each node stands, by its number as it was added. */
+  final int[] position;
+
+  /** The number of the node that stands here, as it was added. */
+  final int[] number;
+
   final int[] parent;
   final int[] first;
 
@@ -49,13 +61,22 @@ final class Layout {
     this.source = source;
     this.laws = laws.toArray(NetworkBuilder.Laws[]::new);
     nodes = drafts.size();
-    parent = drafts.stream().mapToInt(NetworkBuilder.Draft::parent).toArray();
+    number = depthFirst(drafts);
+    position = new int[nodes];
+    for (int n = 0; n < nodes; n++) {
+      position[number[n]] = n;
+    }
+    parent =
+        IntStream.of(number)
+            .map(k -> drafts.get(k).parent())
+            .map(up -> up < 0 ? up : position[up])
+            .toArray();
     first = new int[nodes + 1];
     firstShunt = new int[nodes + 1];
     transformerOf = new int[nodes];
     int count = 0;
     for (int n = 0; n < nodes; n++) {
-      NetworkBuilder.Draft draft = drafts.get(n);
+      NetworkBuilder.Draft draft = drafts.get(number[n]);
       first[n + 1] = first[n] + draft.conductors();
       firstShunt[n + 1] = firstShunt[n] + draft.shunts().size();
       transformerOf[n] = draft.transformer().isPresent() ? count++ : -1;
@@ -68,8 +89,34 @@ final class Layout {
     turns = new double[count][];
     shunts = new Shunt[firstShunt[nodes]];
     for (int n = 0; n < nodes; n++) {
-      place(n, drafts.get(n));
+      place(n, drafts.get(number[n]));
     }
+  }
+
+  /** Numbers of the nodes, each before what it feeds, leaves before what feeds others. */
+  private static int[] depthFirst(List<NetworkBuilder.Draft> drafts) {
+    List<List<Integer>> fed = new ArrayList<>();
+    for (int k = 0; k < drafts.size(); k++) {
+      fed.add(new ArrayList<>(0));
+      if (k > 0) {
+        fed.get(drafts.get(k).parent()).add(k);
+      }
+    }
+    int[] order = new int[drafts.size()];
+    int count = 0;
+    Deque<Integer> next = new ArrayDeque<>(List.of(0));
+    while (!next.isEmpty()) {
+      int node = next.pop();
+      order[count++] = node;
+      for (int child : fed.get(node)) {
+        if (fed.get(child).isEmpty()) {
+          order[count++] = child;
+        } else {
+          next.push(child);
+        }
+      }
+    }
+    return order;
   }
 
   private void place(int n, NetworkBuilder.Draft draft) {

@@ -51,7 +51,7 @@ public final class OrderSolution {
     network.index(network.parent(node), parentConductor);
     Phasor sum = Phasor.ZERO;
     for (int k = 0; k < network.conductors(node); k++) {
-      double part = network.layout().coupling(node, k, parentConductor);
+      double part = network.coupling(node, k, parentConductor);
       sum = sum.plus(current(node, k).times(part));
     }
     return sum;

@@ -23,7 +23,7 @@ public final class TreeNetwork {
 
   /** How many conductors a node has. */
   public int conductors(int node) {
-    return layout.size(node);
+    return layout.size(layout.position[node]);
   }
 
   /** How many conductors all nodes have together. */
@@ -36,12 +36,12 @@ public final class TreeNetwork {
     if (node == SOURCE) {
       throw new IllegalArgumentException("nothing feeds the source's terminals");
     }
-    return layout.parent[node];
+    return layout.number[layout.parent[layout.position[node]]];
   }
 
   /** Whether a feeder feeds the node: not a transformer, and not the source itself. */
   public boolean isFedByFeeder(int node) {
-    return layout.isFeeder(node);
+    return layout.isFeeder(layout.position[node]);
   }
 
   /**
@@ -49,10 +49,10 @@ public final class TreeNetwork {
    */
   public int joinedTo(int node, int conductor) {
     int at = index(node, conductor);
-    if (!layout.isFeeder(node)) {
+    if (!isFedByFeeder(node)) {
       throw new IllegalArgumentException("node " + node + " is not fed by a feeder");
     }
-    return layout.joinedTo[at] - layout.first[layout.parent[node]];
+    return layout.joinedTo[at] - layout.first[layout.parent[layout.position[node]]];
   }
 
   /**
@@ -60,11 +60,12 @@ public final class TreeNetwork {
    * and write by index.
    */
   public int index(int node, int conductor) {
-    int at = layout.first[node] + conductor;
-    if (conductor < 0 || at >= layout.first[node + 1]) {
+    int position = layout.position[node];
+    int at = layout.first[position] + conductor;
+    if (conductor < 0 || at >= layout.first[position + 1]) {
       throw new IllegalArgumentException(
           "node %d has no conductor %d; it has %d, counted from 0"
-              .formatted(node, conductor, layout.size(node)));
+              .formatted(node, conductor, layout.size(position)));
     }
     return at;
   }
@@ -85,6 +86,11 @@ public final class TreeNetwork {
   /** An excitation of this network that is zero everywhere. */
   public Excitation excitation() {
     return new Excitation(this, layout.size(SOURCE));
+  }
+
+  /** See {@link Layout#coupling}. */
+  double coupling(int node, int k, int m) {
+    return layout.coupling(layout.position[node], k, m);
   }
 
   Layout layout() {

@@ -12,7 +12,7 @@ import java.util.stream.IntStream;
 public final class Trunk {
   private final TreeNetwork network;
 
-  /** Parents first. */
+  /** Where they stand in the layout, parents first. */
   final int[] nodes;
 
   private Trunk(TreeNetwork network, int[] nodes) {
@@ -30,7 +30,8 @@ public final class Trunk {
             in.set(n);
           }
         });
-    return new Trunk(network, in.stream().toArray());
+    return new Trunk(
+        network, in.stream().map(n -> network.layout().position[n]).sorted().toArray());
   }
 
   /** The network this is a part of. */

@@ -1,5 +1,6 @@
 package fourthwire.audit.solve;
 
+import fourthwire.network.Excitation;
 import fourthwire.network.TreeNetwork;
 import fourthwire.network.Trunk;
 import java.util.Collection;
@@ -23,7 +24,7 @@ import java.util.stream.IntStream;
  * Active filters' currents are further unknowns, behind the potentials.
  */
 final class BoardEquations {
-  private static final int MOST_PRODUCTS = 80;
+  private static final int MOST_PRODUCTS = 120;
 
   private final BoardResponse response;
   private final BoardRow row;
@@ -132,12 +133,17 @@ final class BoardEquations {
         trunk,
         row,
         drawn,
-        (excitation, position) ->
-            filters.forEach(f -> f.feed(excitation, response.orders(), position, y, shift(f))),
+        filters.isEmpty()
+            ? Optional.empty()
+            : Optional.of((excitation, position) -> feed(excitation, position, y)),
         into);
     for (ActiveFilter filter : filters) {
       filter.answer(response.orders(), response.solutions(), y, into, shift(filter));
     }
+  }
+
+  private void feed(Excitation excitation, int position, double[] y) {
+    filters.forEach(f -> f.feed(excitation, response.orders(), position, y, shift(f)));
   }
 
   /** By how much later a filter's currents stand here than in the whole state. */

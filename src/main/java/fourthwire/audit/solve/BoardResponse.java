@@ -6,6 +6,7 @@ import fourthwire.network.OrderSolution;
 import fourthwire.network.TreeNetwork;
 import fourthwire.network.Trunk;
 import fourthwire.quantity.Spectrum;
+import java.util.Optional;
 import java.util.function.BiConsumer;
 
 /** What the network answers, order by order, to currents that change at some of its boards. */
@@ -52,32 +53,42 @@ final class BoardResponse {
    *
    * @param trunk reaches all boards of the row, and where else something is fed
    * @param drawn row of what is drawn
-   * @param feed adds what else is fed into an order, by its position
+   * @param feed adds what else is fed into an order, by its position, if anything is
    * @param potentials receives the row of potentials
    */
   void find(
       Trunk trunk,
       BoardRow row,
       double[] drawn,
-      BiConsumer<Excitation, Integer> feed,
+      Optional<BiConsumer<Excitation, Integer>> feed,
       double[] potentials) {
     workers.each(
         orders.count(),
         position -> {
-          int h = orders.at(position);
-          Excitation excitation = excitations[h].clear();
+          Excitation excitation = excitations[orders.at(position)];
           for (int c = 0; c < row.count(); c++) {
             int at = c * row.perConductor() + 2 * position;
-            excitation.inject(row.conductor(c), -drawn[at], -drawn[at + 1]);
+            excitation.set(row.conductor(c), -drawn[at], -drawn[at + 1]);
           }
-          feed.accept(excitation, position);
-          OrderSolution solution = solutions[h];
-          factors[h].solve(excitation, solution, trunk);
+          feed.ifPresent(more -> more.accept(excitation, position));
+          OrderSolution solution = solutions[orders.at(position)];
+          factors[orders.at(position)].solve(excitation, solution, trunk);
           for (int c = 0; c < row.count(); c++) {
             int at = c * row.perConductor() + 2 * position;
             potentials[at] = solution.potentialRe(row.conductor(c));
             potentials[at + 1] = solution.potentialIm(row.conductor(c));
           }
+          leaveEmpty(excitation, row, feed.isPresent());
         });
+  }
+
+  private static void leaveEmpty(Excitation excitation, BoardRow row, boolean more) {
+    if (more) {
+      excitation.clear();
+    } else {
+      for (int c = 0; c < row.count(); c++) {
+        excitation.set(row.conductor(c), 0, 0);
+      }
+    }
   }
 }

@@ -27,6 +27,8 @@ final class DevicePort {
   private final Device device;
   private final PortPlace place;
   private final PortPlace group;
+  private final PortPlace home;
+  private final double weight;
   private final int[] from;
   private final int to;
   private final LoadSolver solver;
@@ -52,9 +54,22 @@ final class DevicePort {
    * @param offset where its currents start in the whole state
    */
   DevicePort(Device device, PortPlace place, PortPlace group, TreeNetwork network, int offset) {
+    this(device, place, group, place, 1, network, offset);
+  }
+
+  private DevicePort(
+      Device device,
+      PortPlace place,
+      PortPlace group,
+      PortPlace home,
+      double weight,
+      TreeNetwork network,
+      int offset) {
     this.device = device;
     this.place = place;
     this.group = group;
+    this.home = home;
+    this.weight = weight;
     this.from = place.fromIndices(network);
     this.to = place.toIndex(network);
     this.offset = offset;
@@ -63,8 +78,29 @@ final class DevicePort {
     this.drawn = new PortSpectra(from.length);
   }
 
+  /**
+   * The same load, standing for many like it.
+   *
+   * @param count how many
+   * @param lead where the network sees them all, each behind its own way from there
+   */
+  DevicePort speakingFor(double count, PortPlace lead, TreeNetwork network, int at) {
+    return new DevicePort(device, lead, lead, home, count, network, at);
+  }
+
+  /** Where the network sees it. */
   PortPlace place() {
     return place;
+  }
+
+  /** Where it really stands. */
+  PortPlace home() {
+    return home;
+  }
+
+  /** How many loads like it stand here. */
+  double weight() {
+    return weight;
   }
 
   PortPlace group() {
@@ -140,9 +176,9 @@ final class DevicePort {
 
   /** Draws a current at one port: out of the line, back into the return conductor. */
   void draw(Excitation excitation, int port, double re, double im) {
-    excitation.inject(from[port], -re, -im);
+    excitation.inject(from[port], -weight * re, -weight * im);
     if (to != PortPlace.NONE) {
-      excitation.inject(to, re, im);
+      excitation.inject(to, weight * re, weight * im);
     }
   }
 

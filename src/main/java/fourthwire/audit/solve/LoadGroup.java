@@ -36,9 +36,9 @@ final class LoadGroup {
       double[] step = member.stepAlone(orders, omega, x, g);
       System.arraycopy(step, 0, alone, member.offset(), step.length);
       for (int i = 0; i < total.length; i++) {
-        total[i] += step[i];
+        total[i] += member.weight() * step[i];
       }
-      slope.add(orders, member.slope());
+      slope.add(orders, member.slope(), member.weight());
     }
     return total;
   }

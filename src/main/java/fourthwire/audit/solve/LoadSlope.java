@@ -66,10 +66,13 @@ final class LoadSlope {
     addedChanges = 0;
   }
 
-  /** Adds the matrix to another: the whole of it, or what was learned since the last time. */
-  void addTo(OrdersInPlay orders, float[] byColumn) {
+  /**
+   * Adds the matrix, so many times, to another: the whole of it, or what was learned since the last
+   * time.
+   */
+  void addTo(OrdersInPlay orders, double count, float[] byColumn) {
     if (!added) {
-      addShape(orders, byColumn);
+      addShape(orders, count * scale, byColumn);
       added = true;
     }
     for (; addedChanges < changes.size(); addedChanges++) {
@@ -78,13 +81,13 @@ final class LoadSlope {
       int at = 0;
       for (double along : change) {
         for (double siemens : correction) {
-          byColumn[at++] += (float) (along * siemens);
+          byColumn[at++] += (float) (count * along * siemens);
         }
       }
     }
   }
 
-  private void addShape(OrdersInPlay orders, float[] byColumn) {
+  private void addShape(OrdersInPlay orders, double factor, float[] byColumn) {
     int size = shape.size();
     double[] angles = new double[size];
     for (int i = 0; i < size; i += 2) {
@@ -94,8 +97,8 @@ final class LoadSlope {
     double[] re = new double[size];
     double[] im = new double[size];
     for (int column = 0; column < size; column += 2) {
-      double c = scale * angles[column];
-      double s = scale * angles[column + 1];
+      double c = factor * angles[column];
+      double s = factor * angles[column + 1];
       shape.combine(column, c, -s, re);
       shape.combine(column, s, c, im);
       addTurned(re, angles, byColumn, column * size);

@@ -35,8 +35,9 @@ final class PlaceSlope {
     Arrays.fill(byColumn, 0);
   }
 
-  void add(OrdersInPlay orders, LoadSlope load) {
-    load.addTo(orders, byColumn);
+  /** So many loads of this slope more; only what was learned of it, once it has been added. */
+  void add(OrdersInPlay orders, LoadSlope load, double count) {
+    load.addTo(orders, count, byColumn);
   }
 
   void add(PlaceSlope part) {

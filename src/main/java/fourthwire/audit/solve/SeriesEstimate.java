@@ -42,30 +42,46 @@ final class SeriesEstimate {
     this.workers = workers;
   }
 
-  /** Sets every load's series R-L as it acts on the load alone. */
+  /**
+   * Sets every load's series R-L as it acts on the load alone; on one that speaks for many, as it
+   * acts on them together.
+   */
   void applyAlone() {
-    double[][] ohm = new double[ports.size()][ORDERS.length];
-    double[][] henry = new double[ports.size()][ORDERS.length];
-    double[][] sharedOhm = new double[ports.size()][ORDERS.length];
-    double[][] sharedHenry = new double[ports.size()][ORDERS.length];
+    double[][] whole = new double[2 * ports.size()][ORDERS.length];
+    double[][] shared = new double[2 * ports.size()][ORDERS.length];
+    look(
+        (k, points, d) -> {
+          DevicePort port = ports.get(d);
+          Phasor above = port.group().impedance(points.at(port.group().node()));
+          Phasor home = port.home().impedance(points.at(port.home().node()));
+          put(home.plus(above.times(port.weight() - 1)), d, k, whole);
+          put(above.times(port.weight()), d, k, shared);
+        });
+    for (int d = 0; d < ports.size(); d++) {
+      ports.get(d).setSeries(median(whole[2 * d]), median(whole[2 * d + 1]));
+      ports.get(d).setShared(median(shared[2 * d]), median(shared[2 * d + 1]));
+    }
+  }
+
+  /** Called for the number of an order, the network's impedances there, the number of a load. */
+  private interface Look {
+    void at(int k, DrivingPoints points, int load);
+  }
+
+  private void look(Look look) {
     workers.each(
         ORDERS.length,
         k -> {
           DrivingPoints points = factors[ORDERS[k]].drivingPoints();
           for (int d = 0; d < ports.size(); d++) {
-            DevicePort port = ports.get(d);
-            Phasor z = port.place().impedance(points.at(port.place().node()));
-            Phasor shared = port.group().impedance(points.at(port.group().node()));
-            ohm[d][k] = z.re();
-            henry[d][k] = z.im() / (ORDERS[k] * omega);
-            sharedOhm[d][k] = shared.re();
-            sharedHenry[d][k] = shared.im() / (ORDERS[k] * omega);
+            look.at(k, points, d);
           }
         });
-    for (int d = 0; d < ports.size(); d++) {
-      ports.get(d).setSeries(median(ohm[d]), median(henry[d]));
-      ports.get(d).setShared(median(sharedOhm[d]), median(sharedHenry[d]));
-    }
+  }
+
+  private void put(Phasor z, int load, int k, double[][] ohmAndHenry) {
+    ohmAndHenry[2 * load][k] = z.re();
+    ohmAndHenry[2 * load + 1][k] = z.im() / (ORDERS[k] * omega);
   }
 
   /**

@@ -12,7 +12,7 @@ final class Settling {
   private static final double NEARLY = 0.2;
 
   /** Above what nine loads of ten change at most. */
-  private static final double FAR_BEHIND = 4;
+  private static final double FAR_BEHIND = 10;
 
   private static final int MOST = 8;
 

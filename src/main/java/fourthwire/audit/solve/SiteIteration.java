@@ -9,6 +9,7 @@ import fourthwire.network.FactoredOrder;
 import fourthwire.network.OrderSolution;
 import fourthwire.network.SolutionCheck;
 import fourthwire.network.TreeNetwork;
+import fourthwire.network.Trunk;
 import fourthwire.network.UnsolvableOrderException;
 import fourthwire.quantity.Spectrum;
 import fourthwire.site.Filter;
@@ -19,6 +20,7 @@ import java.util.HashMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
+import java.util.Optional;
 import java.util.function.IntConsumer;
 import java.util.stream.IntStream;
 
@@ -27,14 +29,27 @@ final class SiteIteration {
   private static final int MOST_PASSES = 60;
   private static final int SHORTEST_STEP = 10;
 
+  /** Below this part of a step that all loads can follow, none shorter is tried. */
+  private static final double SHORTER = 0.2;
+
+  /** A sample must have so many times fewer loads. */
+  private static final int FEWER = 4;
+
+  /** How well a sample settles. */
+  private static final double ROUGHLY = 0.01;
+
   private final NetworkPlan plan;
   private final TreeNetwork network;
   private final OrdersInPlay orders;
-  private final List<DevicePort> loads = new ArrayList<>();
+  private final List<DevicePort> loads;
   private final List<ActiveFilter> filters = new ArrayList<>();
-  private final FactoredOrder[] factors = new FactoredOrder[Spectrum.HIGHEST_ORDER + 1];
-  private final Excitation[] excitations = new Excitation[Spectrum.HIGHEST_ORDER + 1];
-  private final OrderSolution[] solutions = new OrderSolution[Spectrum.HIGHEST_ORDER + 1];
+  private final FactoredOrder[] factors;
+  private final Excitation[] excitations;
+  private final OrderSolution[] solutions;
+
+  /** Of a few loads that speak for all: where they stand. */
+  private final Optional<Trunk> few;
+
   private final double omega;
   private final Workers workers;
   private final int length;
@@ -46,6 +61,11 @@ final class SiteIteration {
     this.network = plan.network();
     this.omega = 2 * Math.PI * survey.settings().frequencyHz();
     this.orders = OrdersInPlay.of(survey.background(), devices);
+    this.loads = new ArrayList<>();
+    this.factors = new FactoredOrder[Spectrum.HIGHEST_ORDER + 1];
+    this.excitations = new Excitation[Spectrum.HIGHEST_ORDER + 1];
+    this.solutions = new OrderSolution[Spectrum.HIGHEST_ORDER + 1];
+    this.few = Optional.empty();
     int at = addLoads(devices.stream().filter(d -> !d.model().isLinear()).toList());
     for (Filter filter : survey.filters()) {
       if (filter.type() == Filter.Type.ACTIVE && plan.find(filter.panel()).isPresent()) {
@@ -55,6 +75,21 @@ final class SiteIteration {
       }
     }
     this.length = at;
+  }
+
+  /** The same state with a few loads that speak for all; active filters stand still. */
+  private SiteIteration(SiteIteration whole, List<DevicePort> sample) {
+    this.plan = whole.plan;
+    this.workers = whole.workers;
+    this.network = whole.network;
+    this.omega = whole.omega;
+    this.orders = whole.orders;
+    this.loads = sample;
+    this.factors = whole.factors;
+    this.excitations = whole.excitations;
+    this.solutions = whole.solutions;
+    this.few = Optional.of(Trunk.of(network, sample.stream().mapToInt(l -> l.place().node())));
+    this.length = sample.stream().mapToInt(load -> load.length(orders)).sum();
   }
 
   private int addLoads(List<Device> devices) {
@@ -87,9 +122,13 @@ final class SiteIteration {
     double[] x = new double[length];
     if (length > 0) {
       double[] g = new double[length];
-      begin(x, guess);
+      if (!begin(x, guess) && !beginWithFew(x, book, progress)) {
+        beginTogether(x);
+      }
+      takeUp(x);
       if (!image(x, g).isEmpty()) {
-        begin(x, LoadCurrents.NONE);
+        beginTogether(x);
+        takeUp(x);
         refuse(image(x, g));
       }
       iterate(x, g, book, progress);
@@ -128,20 +167,61 @@ final class SiteIteration {
     return new LoadCurrents(orders, loads, last);
   }
 
+  /** The first guess, if something is known. */
+  private boolean begin(double[] x, LoadCurrents guess) {
+    return guess.fill(orders, loads, x);
+  }
+
   /**
-   * The first guess, and each load's series R-L. Where nothing is known each load is solved once at
-   * the voltages of a site that draws nothing, behind what all loads together see.
+   * The first guess where nothing is known: each load is solved once at the voltages of a site that
+   * draws nothing, behind what all loads together see.
    */
-  private void begin(double[] x, LoadCurrents guess) {
-    SeriesEstimate series = new SeriesEstimate(network, factors, loads, omega, workers);
+  private void beginTogether(double[] x) {
     Arrays.fill(x, 0);
-    if (!guess.fill(orders, loads, x)) {
-      solveNetwork(x);
-      series.applyTogether(solutions[1]);
-      image(x, x);
-    }
-    series.applyAlone();
     solveNetwork(x);
+    series().applyTogether(solutions[1]);
+    image(x, x);
+  }
+
+  /**
+   * The first guess on a large site: a few loads that speak for all settle with the network first.
+   *
+   * @return false where that helps nothing or leads nowhere
+   */
+  private boolean beginWithFew(double[] x, SlopeBook book, Progress progress) {
+    Map<PortPlace, PortPlace> leads =
+        UpperBoards.leads(network, loads.stream().map(DevicePort::group).toList());
+    LoadSample sample = new LoadSample(loads, leads, network, orders);
+    if (leads.isEmpty() || sample.spokesmen().size() * FEWER > loads.size()) {
+      return false;
+    }
+    try {
+      SiteIteration few = new SiteIteration(this, sample.spokesmen());
+      few.settle(book, progress);
+      sample.spread(orders, few.last, x);
+      return true;
+    } catch (AuditFailedException notSoEasily) {
+      return false;
+    }
+  }
+
+  private void settle(SlopeBook book, Progress progress) {
+    double[] x = new double[length];
+    double[] g = new double[length];
+    beginTogether(x);
+    takeUp(x);
+    refuse(image(x, g));
+    iterate(x, g, book, progress);
+  }
+
+  /** From here every load is solved behind what it sees alone. */
+  private void takeUp(double[] x) {
+    series().applyAlone();
+    solveNetwork(x);
+  }
+
+  private SeriesEstimate series() {
+    return new SeriesEstimate(network, factors, loads, omega, workers);
   }
 
   private void iterate(double[] x, double[] g, SlopeBook book, Progress progress) {
@@ -150,8 +230,14 @@ final class SiteIteration {
         new NewtonStep(network, factors, orders, loads, filters, omega, book, workers);
     for (int pass = 1; pass <= MOST_PASSES; pass++) {
       settling.look(x, g);
-      progress.at(settling.share(), "Network and loads together, pass " + pass);
-      if (settling.loadsSettled() && conductorsSettled(g)) {
+      if (few.isPresent()) {
+        progress.at(0, "Network and a few loads for all, pass " + pass);
+      } else {
+        progress.at(settling.share(), "Network and loads together, pass " + pass);
+      }
+      if (few.isPresent()
+          ? settling.change() <= ROUGHLY
+          : settling.loadsSettled() && conductorsSettled(g)) {
         last = g;
         return;
       }
@@ -165,26 +251,32 @@ final class SiteIteration {
 
   /**
    * Takes a Newton step, or the longest part of it (halved again and again) that brings the loads
-   * nearer to what was injected.
+   * nearer to what was injected. Where no part does, a load's current jumps: then the longest part
+   * stands that every load can follow.
    */
   private void advance(double[] x, double[] g, double[] step) {
     double[] start = x.clone();
     double before = distance(x, g);
-    String failure = "";
+    double longest = 0;
     double part = 1;
-    for (int halving = 0; halving < SHORTEST_STEP; halving++) {
-      for (int i = 0; i < length; i++) {
-        x[i] = start[i] + part * step[i];
-      }
-      solveNetwork(x);
-      failure = image(x, g);
+    String failure = "";
+    for (int halving = 0; halving < SHORTEST_STEP && part > longest * SHORTER; halving++) {
+      failure = tryPart(part, start, step, x, g);
       if (failure.isEmpty() && distance(x, g) < before) {
         return;
       }
+      longest = failure.isEmpty() ? Math.max(longest, part) : longest;
       part /= 2;
     }
-    // The shortest step stands: near the end rounding can keep the distance from falling.
-    refuse(failure);
+    refuse(longest > 0 ? tryPart(longest, start, step, x, g) : failure);
+  }
+
+  private String tryPart(double part, double[] start, double[] step, double[] x, double[] g) {
+    for (int i = 0; i < length; i++) {
+      x[i] = start[i] + part * step[i];
+    }
+    solveNetwork(x);
+    return image(x, g);
   }
 
   private static void refuse(String failure) {
@@ -251,7 +343,11 @@ final class SiteIteration {
     for (ActiveFilter filter : filters) {
       filter.feed(excitation, orders, position, x, 0);
     }
-    factors[h].solve(excitation, solutions[h]);
+    if (few.isPresent()) {
+      factors[h].solve(excitation, solutions[h], few.get());
+    } else {
+      factors[h].solve(excitation, solutions[h]);
+    }
   }
 
   /** Solves the network for what the loads draw now, and says whether its currents stood still. */
