@@ -13,9 +13,10 @@ import java.util.List;
 import java.util.stream.IntStream;
 
 /**
- * The network as flat arrays: what every order shares. Nodes stand depth first, each with its leaves
- * right behind it, so that a sweep goes through memory as it goes through the tree. Conductors of
- * all nodes stand in one row; node n has those from {@code first[n]} to {@code first[n + 1]}.
+ * The network as flat arrays: what every order shares. Nodes stand depth first, each with its
+ * leaves right behind it, so that a sweep goes through memory as it goes through the tree.
+ * Conductors of all nodes stand in one row; node n has those from {@code first[n]} to {@code
+ * first[n + 1]}.
  */
 final class Layout {
   final SourceImpedance source;

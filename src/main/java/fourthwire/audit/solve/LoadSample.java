@@ -43,8 +43,7 @@ final class LoadSample {
         DevicePort middle = part.get(part.size() / 2);
         double amps = part.stream().mapToDouble(load -> load.device().roughA()).sum();
         DevicePort spokesman =
-            middle.speakingFor(
-                amps / middle.device().roughA(), entry.getKey().lead(), network, at);
+            middle.speakingFor(amps / middle.device().roughA(), entry.getKey().lead(), network, at);
         spokesmen.add(spokesman);
         part.forEach(load -> spokesmanOf.put(load, spokesman));
         at += spokesman.length(orders);
