@@ -13,7 +13,7 @@ import java.util.Map;
 
 /** Channels of a record that holds standard windows. */
 final class WindowChannels {
-  private static final long TICK_S = 600;
+  private static final long TWO_HOURS_S = 7200;
 
   private WindowChannels() {}
 
@@ -36,13 +36,13 @@ final class WindowChannels {
             capture.time().rateHz().orElseThrow(),
             extent.standardCycles(),
             extent.cycles(),
-            capture.start().map(WindowChannels::secondsToTick).orElse(0.0)));
+            capture.start().map(WindowChannels::secondsToEvenHour).orElse(0.0)));
   }
 
-  /** From a moment to the next full ten minutes. */
-  private static double secondsToTick(Instant at) {
-    double into = Math.floorMod(at.getEpochSecond(), TICK_S) + at.getNano() * 1e-9;
-    return into == 0 ? 0 : TICK_S - into;
+  /** From a moment to the next full even hour (UTC): two hours begin there (IEC 61000-4-30). */
+  private static double secondsToEvenHour(Instant at) {
+    double into = Math.floorMod(at.getEpochSecond(), TWO_HOURS_S) + at.getNano() * 1e-9;
+    return into == 0 ? 0 : TWO_HOURS_S - into;
   }
 
   static Channels of(WindowAnalysis windows, Capture capture) {

@@ -12,6 +12,7 @@ import fourthwire.quantity.Spectrum;
 import java.util.List;
 import java.util.Optional;
 import java.util.Random;
+import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 
@@ -125,6 +126,27 @@ class WindowAccuracyTest {
             });
     assertThat(w.intervals())
         .allSatisfy(i -> assertThat(i.frequencyHz()).isEqualTo(hz, within(1e-3)));
+  }
+
+  /** Two hours begin at even hours of the clock (IEC 61000-4-30:2015, 4.5), here at 10:00 UTC. */
+  @Test
+  void twoHoursBeginAtAnEvenHour() {
+    int rate = 400;
+    double[] x = new double[rate * 11_460];
+    for (int k = 0; k < x.length; k++) {
+      x[k] = 325 * Math.sin(2 * Math.PI * 50 * k / rate);
+    }
+    Optional<java.time.Instant> start = Optional.of(java.time.Instant.parse("2026-03-02T08:50:00Z"));
+    CaptureWindows w = analysed(x, rate, start).windows().orElseThrow();
+    assertThat(w.intervals()).filteredOn(i -> i.length().equals("10min")).hasSize(19);
+    assertThat(w.intervals())
+        .filteredOn(i -> i.length().equals("2h"))
+        .singleElement()
+        .satisfies(
+            i -> {
+              assertThat(i.fromS()).isEqualTo(4200, within(0.2));
+              assertThat(i.toS()).isEqualTo(11_400, within(0.4));
+            });
   }
 
   private static CaptureResult analysed(double[] x, double rateHz) {

@@ -10,18 +10,18 @@ import java.util.Map;
  * very short one; those that begin within ten minutes of the clock make a short one, twelve of
  * which make a long one. Fifteen are counted anew from each full ten minutes. (The standard lets
  * the window that begins at the full ten minutes overlap the one before; here windows stay gapless
- * and one that crosses the mark belongs where it begins.)
+ * and one that crosses the mark belongs where it begins.) Long ones begin at even hours.
  */
 final class Intervals {
   private static final double TEN_MINUTES_S = 600;
   private static final int IN_TWO_HOURS = 12;
 
   private final WindowPlan plan;
-  private final double secondsToTick;
+  private final double secondsToEvenHour;
 
-  Intervals(WindowPlan plan, double secondsToTick) {
+  Intervals(WindowPlan plan, double secondsToEvenHour) {
     this.plan = plan;
-    this.secondsToTick = secondsToTick;
+    this.secondsToEvenHour = secondsToEvenHour;
   }
 
   /** Windows that are summed together: at most fifteen, of one ten minutes. */
@@ -47,7 +47,7 @@ final class Intervals {
 
   private long tenMinutes(int cycle) {
     return (long)
-        Math.floor((plan.position(cycle) / plan.rateHz() - secondsToTick) / TEN_MINUTES_S + 1e-9);
+        Math.floor((plan.position(cycle) / plan.rateHz() - secondsToEvenHour) / TEN_MINUTES_S + 1e-9);
   }
 
   /** The whole ones: of fifteen windows, of a full ten minutes, of twelve of those. */
@@ -63,7 +63,7 @@ final class Intervals {
     Map<Long, List<Interval>> byHours = new LinkedHashMap<>();
     byTick.forEach(
         (tick, of) -> {
-          double begins = secondsToTick + tick * TEN_MINUTES_S;
+          double begins = secondsToEvenHour + tick * TEN_MINUTES_S;
           double window = plan.cycles() * plan.track().samplesPerCycle() / plan.rateHz();
           if (begins > -window / 2 && begins + TEN_MINUTES_S < end + window) {
             Interval short10 = merged(Interval.Length.TEN_MINUTES, of);

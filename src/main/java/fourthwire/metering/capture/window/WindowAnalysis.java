@@ -38,8 +38,8 @@ public final class WindowAnalysis {
    * @param track the fundamental's clock
    * @param rateHz samples a second
    * @param cycles of a full window
-   * @param secondsToTick from the first sample to the next full ten minutes of the clock; 0 where
-   *     the record has no clock
+   * @param secondsToEvenHour from the first sample to the next full even hour of the clock, from
+   *     which ten minutes and two hours are counted both ways; 0 where the record has no clock
    */
   public record Request(
       List<Signal.Channel> channels,
@@ -49,7 +49,7 @@ public final class WindowAnalysis {
       double rateHz,
       int cycles,
       int totalCycles,
-      double secondsToTick) {}
+      double secondsToEvenHour) {}
 
   /** Analyses a record of at least one full window. */
   public static WindowAnalysis of(Request r) {
@@ -62,7 +62,7 @@ public final class WindowAnalysis {
             r.rateHz(),
             r.cycles(),
             r.totalCycles());
-    Intervals intervals = new Intervals(plan, r.secondsToTick());
+    Intervals intervals = new Intervals(plan, r.secondsToEvenHour());
     WindowSums whole = plan.sums();
     List<Interval> kept = new ArrayList<>();
     List<Intervals.Stretch> stretches = intervals.stretches();
