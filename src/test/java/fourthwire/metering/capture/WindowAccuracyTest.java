@@ -136,7 +136,8 @@ class WindowAccuracyTest {
     for (int k = 0; k < x.length; k++) {
       x[k] = 325 * Math.sin(2 * Math.PI * 50 * k / rate);
     }
-    Optional<java.time.Instant> start = Optional.of(java.time.Instant.parse("2026-03-02T08:50:00Z"));
+    Optional<java.time.Instant> start =
+        Optional.of(java.time.Instant.parse("2026-03-02T08:50:00Z"));
     CaptureWindows w = analysed(x, rate, start).windows().orElseThrow();
     assertThat(w.intervals()).filteredOn(i -> i.length().equals("10min")).hasSize(19);
     assertThat(w.intervals())

@@ -47,7 +47,8 @@ final class Intervals {
 
   private long tenMinutes(int cycle) {
     return (long)
-        Math.floor((plan.position(cycle) / plan.rateHz() - secondsToEvenHour) / TEN_MINUTES_S + 1e-9);
+        Math.floor(
+            (plan.position(cycle) / plan.rateHz() - secondsToEvenHour) / TEN_MINUTES_S + 1e-9);
   }
 
   /** The whole ones: of fifteen windows, of a full ten minutes, of twelve of those. */
