@@ -122,7 +122,7 @@ class BrowserTest extends PagesTest {
     "loads, /loads, '#page|id=\"load\"|id=\"watts\"|Compute|spectra.csv'",
     "readings, /sites/{site}/readings, '#page|input[type=file]|Read it'",
     "log, /readings/{log}/series?from=2025-03-26&to=2025-03-29,"
-        + " '#page|id=\"show\"|id=\"from\"|>Show|Closer|The whole log'",
+        + " '#page|id=\"show\"|id=\"from\"|> Show|Closer|The whole log'",
     "faults, /readings/{faulty}, '#page|Turn the sign|Count each|Delete this reading'",
     "columns, /uploads/{upload}/columns, '#page|id=\"date\"|id=\"zone\"|name=\"m2\"|Read the file"
         + " so'",

@@ -59,20 +59,7 @@ public final class CoveragePicture {
         cell(fill, day, height, (int) Math.ceil(share * height));
       }
     }
-    svg.open(
-        "svg",
-        "x",
-        0,
-        "y",
-        top,
-        "width",
-        "100%",
-        "height",
-        CELL_PX,
-        "viewBox",
-        "0 0 " + DAYS * CELL + " " + height,
-        "preserveAspectRatio",
-        "none");
+    svg.stretched(top, CELL_PX, DAYS * CELL, height);
     svg.add("path", "class", "bed", "d", bed).add("path", "class", "measured", "d", fill).close();
     for (int day : month.captures()) {
       svg.open("svg", "x", Svg.share((day - 0.5) / DAYS), "y", top + CELL_PX / 2)

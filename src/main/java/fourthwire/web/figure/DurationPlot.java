@@ -49,25 +49,12 @@ public final class DurationPlot {
             .reduce(high, Math::max);
     Svg svg = Svg.picture("plot duration", alternative, "height", HEIGHT_PX + 66);
     Optional<Scale> scale = Scale.holding(low, to, STEPS);
-    scale.ifPresent(s -> rules(svg, s, unit));
+    scale.ifPresent(s -> s.draw(svg, 0, HEIGHT_PX, unit));
     marks(svg);
     scale.ifPresent(
         s -> {
           bounds.forEach(b -> limit(svg, s, factor * b.value(), b.label()));
-          svg.open(
-              "svg",
-              "x",
-              0,
-              "y",
-              0,
-              "width",
-              "100%",
-              "height",
-              HEIGHT_PX,
-              "viewBox",
-              "0 0 " + UNITS_WIDE + " " + Math.round(UNITS_A_PX * HEIGHT_PX),
-              "preserveAspectRatio",
-              "none");
+          svg.stretched(0, HEIGHT_PX, UNITS_WIDE, Math.round(UNITS_A_PX * HEIGHT_PX));
           curves.stream()
               .filter(c -> c.values().count() > 0)
               .forEach(
@@ -87,26 +74,6 @@ public final class DurationPlot {
     return curves.stream()
         .mapToDouble(c -> factor * c.values().percentile(percent))
         .filter(v -> !Double.isNaN(v));
-  }
-
-  private static void rules(Svg svg, Scale scale, String unit) {
-    List<Double> values = scale.values();
-    for (double value : values) {
-      double y = scale.down(value, HEIGHT_PX);
-      String classes = value == scale.low() ? "axis" : "rule";
-      svg.add("line", "class", classes, "x1", 0, "x2", "100%", "y1", y, "y2", y);
-      boolean last = value == values.get(values.size() - 1);
-      svg.text(
-          scale.text(value) + (last ? "\u202f" + unit : ""),
-          "x",
-          0,
-          "dx",
-          -6,
-          "y",
-          y + 4,
-          "text-anchor",
-          "end");
-    }
   }
 
   /** The percentiles above the picture, the shares of the time below it. */

@@ -48,4 +48,17 @@ record Scale(double low, Ticks ticks) {
   double down(double value, double height) {
     return height * (1 - (value - low) / ticks.end());
   }
+
+  /** Draws its values as hairlines from one height on, named at the left, the unit at the top. */
+  void draw(Svg svg, double topPx, double heightPx, String unit) {
+    List<Double> values = values();
+    for (double value : values) {
+      double y = topPx + down(value, heightPx);
+      String classes = value == low ? "axis" : "rule";
+      svg.add("line", "class", classes, "x1", 0, "x2", "100%", "y1", y, "y2", y);
+      boolean last = value == values.get(values.size() - 1);
+      String text = last ? text(value) + "\u202f" + unit : text(value);
+      svg.text(text, "x", 0, "dx", -6, "y", y + 4, "text-anchor", "end");
+    }
+  }
 }

@@ -27,6 +27,7 @@ public final class SeriesPlot {
   private static final int MOST_LANES = 5;
   private static final int PASSED_UNITS = 14;
   private static final double OVERVIEW_PX = 34;
+  private static final double LABEL_PX = 12;
 
   private final Scale scale;
   private final Manner manner;
@@ -163,7 +164,7 @@ public final class SeriesPlot {
     for (int k = 0; k < strips.size(); k++) {
       Strip strip = strips.get(k);
       if (k == 0 || !manner.together()) {
-        rules(top, height);
+        scale.draw(svg, top, height, manner.unit());
       }
       if (!manner.together()) {
         head(strip, top - 7);
@@ -180,42 +181,13 @@ public final class SeriesPlot {
     svg.text(strip.about(), "x", "100%", "y", y, "text-anchor", "end");
   }
 
-  private void rules(double top, double height) {
-    for (double value : scale.values()) {
-      double y = top + scale.down(value, height);
-      svg.add(
-          "line",
-          "class",
-          value == scale.low() ? "axis" : "rule",
-          "x1",
-          0,
-          "x2",
-          "100%",
-          "y1",
-          y,
-          "y2",
-          y);
-      boolean last = value == scale.values().get(scale.values().size() - 1);
-      svg.text(
-          scale.text(value) + (last ? "\u202f" + manner.unit() : ""),
-          "x",
-          0,
-          "dx",
-          -6,
-          "y",
-          y + 4,
-          "text-anchor",
-          "end");
-    }
-  }
-
   private void bounds(Strip strip, double top, double height) {
     for (Bound bound : strip.bounds()) {
       double value = manner.factor() * bound.value();
       if (value <= scale.high() && value >= scale.low()) {
         double y = top + scale.down(value, height);
         svg.add("line", "class", "full-mark", "x1", 0, "x2", "100%", "y1", y, "y2", y);
-        labels.add(new Label(bound.label(), y - 3));
+        labels.add(new Label(bound.label(), y - top < LABEL_PX ? y + LABEL_PX : y - 3));
       }
     }
   }
@@ -241,22 +213,8 @@ public final class SeriesPlot {
   private void values(Strip strip, double top, double height) {
     StepValues v = strip.values();
     StepPath path = new StepPath(v.steps(), x -> depth(manner.factor() * x, height));
-    svg.open(
-        "svg",
-        "x",
-        0,
-        "y",
-        top,
-        "width",
-        "100%",
-        "height",
-        height,
-        "viewBox",
-        "0 0 " + path.width() + " " + Math.round(UNITS_A_PX * height),
-        "preserveAspectRatio",
-        "none",
-        "class",
-        strip.classes());
+    svg.stretched(
+        top, height, path.width(), Math.round(UNITS_A_PX * height), "class", strip.classes());
     svg.add("path", "class", "spread", "d", path.band(v::max, v::min));
     svg.add("path", "class", "trace", "d", path.line(v::mean));
     String passed =

@@ -31,20 +31,17 @@ final class Svg {
    * outside it do not.
    */
   Svg stretched(int unitsWide, double heightPx) {
-    return open(
-        "svg",
-        "x",
-        0,
-        "y",
-        0,
-        "width",
-        "100%",
-        "height",
-        heightPx,
-        "viewBox",
-        "0 0 " + unitsWide + " " + rounded(heightPx, 0),
-        "preserveAspectRatio",
-        "none");
+    return stretched(0, heightPx, unitsWide, Math.round(heightPx));
+  }
+
+  /** The same so far down, in units of any size; more attributes as name, value. */
+  Svg stretched(
+      double topPx, double heightPx, long unitsWide, long unitsHigh, Object... more) {
+    start("svg", "x", 0, "y", topPx, "width", "100%", "height", heightPx);
+    attributes("viewBox", "0 0 " + unitsWide + " " + unitsHigh, "preserveAspectRatio", "none");
+    attributes(more).append('>');
+    open.push("svg");
+    return this;
   }
 
   /** An element without content. */

@@ -22,7 +22,9 @@ public record TimeAxis(long from, long to, ZoneId zone) {
   private static final long MINUTE = 60_000;
 
   /** What a letter needs, on the distance of marks. */
-  private static final double ROOM = 0.15;
+  private static final double ROOM = 0.16;
+
+  private static final double FIRST_ROOM = 0.22;
 
   private static final double FIRST = 0.02;
   private static final double LAST = 0.97;
@@ -46,7 +48,8 @@ public record TimeAxis(long from, long to, ZoneId zone) {
         double at = at(edge);
         String text = text(edge, steps, marks.isEmpty());
         boolean room = at >= free;
-        free = room ? at + ROOM * text.length() / most : free;
+        double letters = at < FIRST ? FIRST_ROOM : ROOM;
+        free = room ? at + letters * text.length() / most : free;
         marks.add(new Mark(at, room ? text : ""));
       }
     }
