@@ -27,8 +27,7 @@ class StoredChunksTest {
   @EnumSource
   void theRowsComeBackQuantityByQuantity(Databases kind) {
     Store store = new Store(kind.migrated());
-    long site =
-        store.sites(new ZipSurveyCodec()).create(SmallSite.survey("Works"), List.of());
+    long site = store.sites(new ZipSurveyCodec()).create(SmallSite.survey("Works"), List.of());
     Reading log = SmallLog.reading();
     LogSeries series =
         log.log().flatMap(LogResult::detail).map(LogResult.Detail::series).orElseThrow();
@@ -57,7 +56,8 @@ class StoredChunksTest {
     stored.values("N.rms_a", 0, series.chunks() - 1, (chunk, values) -> neutral.add(values));
     assertThat(neutral).hasSize(series.chunks());
     assertThat(neutral.get(0)).isEqualTo(series.values(0, series.indexOf("N.rms_a")));
-    stored.values("L2.rms_v", 0, 9, (chunk, values) -> assertThat(values).as("not logged").isNull());
+    stored.values(
+        "L2.rms_v", 0, 9, (chunk, values) -> assertThat(values).as("not logged").isNull());
     stored.values("N.rms_a", 1, 9, (chunk, values) -> assertThat(chunk).isPositive());
   }
 }

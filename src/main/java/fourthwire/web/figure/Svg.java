@@ -35,8 +35,7 @@ final class Svg {
   }
 
   /** The same so far down, in units of any size; more attributes as name, value. */
-  Svg stretched(
-      double topPx, double heightPx, long unitsWide, long unitsHigh, Object... more) {
+  Svg stretched(double topPx, double heightPx, long unitsWide, long unitsHigh, Object... more) {
     start("svg", "x", 0, "y", topPx, "width", "100%", "height", heightPx);
     attributes("viewBox", "0 0 " + unitsWide + " " + unitsHigh, "preserveAspectRatio", "none");
     attributes(more).append('>');

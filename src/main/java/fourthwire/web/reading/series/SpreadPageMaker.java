@@ -98,7 +98,9 @@ final class SpreadPageMaker {
 
   private NodePage.Grid figures(
       Measure measure, List<ValuesBySize> values, double factor, String unit) {
-    List<String> heads = new ArrayList<>(List.of(unit.isEmpty() ? words.of("spread.place") : words.of("spread.of", unit)));
+    List<String> heads =
+        new ArrayList<>(
+            List.of(unit.isEmpty() ? words.of("spread.place") : words.of("spread.of", unit)));
     PERCENTS.forEach(p -> heads.add("P" + p));
     heads.add(words.of("spread.highest"));
     heads.add(words.of("spread.outside"));
