@@ -4,6 +4,7 @@ import fourthwire.audit.AuditRepository;
 import fourthwire.audit.DesignState;
 import fourthwire.audit.measured.LogVerdict;
 import fourthwire.audit.measured.LogVerdicts;
+import fourthwire.metering.Amount;
 import fourthwire.metering.ReadingRepository;
 import fourthwire.metering.SeriesRepository;
 import fourthwire.metering.assess.PeriodFigures.Span;
@@ -166,7 +167,7 @@ public final class LogAssessments {
 
   private static String amps(Figure figure) {
     return figure.value().isPresent()
-        ? String.format(Locale.ROOT, "%.4g A", figure.value().getAsDouble())
+        ? Amount.of(figure.value().getAsDouble(), "A")
         : "unknown size";
   }
 }

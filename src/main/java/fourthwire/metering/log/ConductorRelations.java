@@ -45,6 +45,11 @@ final class ConductorRelations implements DayCheck {
 
   @Override
   public void take(LogDay day) {
+    look(day);
+    flagged.endDay(day);
+  }
+
+  private void look(LogDay day) {
     if (day.rows() < FEWEST_ROWS) {
       return;
     }

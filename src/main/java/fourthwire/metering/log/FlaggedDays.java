@@ -22,7 +22,17 @@ final class FlaggedDays {
 
   /** What one day shows of a fault. */
   record Fault(
-      String code, String subject, String effect, String sentence, Offers.Of corrections) {}
+      String code,
+      String subject,
+      String effect,
+      String sentence,
+      Offers.Of corrections,
+      RowTest rows) {
+    /** One of whole days. */
+    Fault(String code, String subject, String effect, String sentence, Offers.Of corrections) {
+      this(code, subject, effect, sentence, corrections, RowTest.NONE);
+    }
+  }
 
   private static final class Stretch {
     final Fault fault;
@@ -30,19 +40,30 @@ final class FlaggedDays {
     final long fromRow;
     Instant to = Instant.MIN;
     long toRow;
+    Optional<LogDay> last = Optional.empty();
 
-    Stretch(Fault fault, LogDay day) {
+    Stretch(Fault fault, LogDay before, LogDay day) {
       this.fault = fault;
       this.from = day.from().isBefore(day.to()) ? day.from() : day.to();
-      this.fromRow = day.firstRow();
+      this.fromRow = RowTest.begin(fault.rows(), before, day, day.firstRow());
       add(day);
     }
 
     void add(LogDay day) {
       to = day.to().isAfter(to) ? day.to() : to;
-      toRow = day.firstRow() + day.rows();
+      last = Optional.of(day);
+    }
+
+    /** The day after its last, or that itself where the log ends. */
+    void end(LogDay after) {
+      LogDay day = last.orElse(after);
+      long whole = day.firstRow() + day.rows();
+      toRow = Math.max(fromRow, RowTest.end(fault.rows(), day, after, whole));
+      last = Optional.empty();
     }
   }
+
+  private Optional<LogDay> before = Optional.empty();
 
   /** A fault of a whole day; the first sentence of joined days is told. */
   void add(LogDay day, Fault fault) {
@@ -52,14 +73,26 @@ final class FlaggedDays {
     if (last != null && !day.from().isAfter(last.to.plus(APART))) {
       last.add(day);
     } else {
-      all.add(new Stretch(fault, day));
+      all.add(new Stretch(fault, before.orElse(day), day));
     }
+  }
+
+  /** A day has been looked at: what was not seen on it has ended on it or the day before. */
+  void endDay(LogDay day) {
+    for (List<Stretch> all : byFault.values()) {
+      Stretch s = all.get(all.size() - 1);
+      if (s.last.isPresent() && s.last.get() != day) {
+        s.end(day);
+      }
+    }
+    before = Optional.of(day);
   }
 
   List<QualityFinding> findings() {
     List<QualityFinding> findings = new ArrayList<>();
     for (List<Stretch> all : byFault.values()) {
       for (Stretch s : all.subList(0, Math.min(MOST, all.size()))) {
+        s.last.ifPresent(s::end);
         findings.add(
             new QualityFinding(
                 s.fault.code(),

@@ -62,6 +62,32 @@ final class LineOrder {
     return s;
   }
 
+  /** 1 where a row fits its powers better in this order of the lines, -1 where as it stands. */
+  private static int fits(LogDay day, int row, int[] order, boolean voltsMoved) {
+    double straight = misfit(day, row, new int[] {0, 1, 2}, voltsMoved);
+    double moved = misfit(day, row, order, voltsMoved);
+    return moved < straight ? 1 : moved > straight ? -1 : 0;
+  }
+
+  private static double misfit(LogDay day, int row, int[] order, boolean voltsMoved) {
+    double sum = 0;
+    for (int line = 0; line < order.length; line++) {
+      String name = LineDay.LINES[line];
+      String other = LineDay.LINES[order[line]];
+      double volts = at(day, (voltsMoved ? other : name) + ".rms_v", row);
+      double amps = at(day, (voltsMoved ? name : other) + ".rms_a", row);
+      double apparent = at(day, name + ".apparent_va", row);
+      double made =
+          Math.abs(at(day, name + ".active_w", row) / at(day, name + ".power_factor", row));
+      sum += Math.abs(volts * amps / (Double.isNaN(apparent) ? made : apparent) - 1);
+    }
+    return sum;
+  }
+
+  private static double at(LogDay day, String quantity, int row) {
+    return day.find(quantity).map(x -> x[row]).orElse(Double.NaN);
+  }
+
   /** How badly an order of the lines fits; NaN where nothing is known. */
   private interface Misfit {
     double of(int[] order);
@@ -96,7 +122,8 @@ final class LineOrder {
                   LineDay.LINES[order[0]],
                   LineDay.LINES[order[1]],
                   LineDay.LINES[order[2]]),
-              rows -> List.of(reordered(day, what.equals("currents"), order, rows))));
+              rows -> List.of(reordered(day, what.equals("currents"), order, rows)),
+              (other, row) -> fits(other, row, order, what.equals("voltages"))));
     }
     return wrong;
   }

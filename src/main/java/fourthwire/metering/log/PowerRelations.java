@@ -24,6 +24,11 @@ final class PowerRelations implements DayCheck {
 
   @Override
   public void take(LogDay day) {
+    look(day);
+    flagged.endDay(day);
+  }
+
+  private void look(LogDay day) {
     if (day.rows() < FEWEST_ROWS) {
       return;
     }
@@ -89,7 +94,15 @@ final class PowerRelations implements DayCheck {
                     ? ", as on all lines: all clamps point the wrong way, or the site feeds power"
                         + " back."
                     : ": its clamp points the wrong way, or this line feeds power back."),
-            rows -> List.of(offers.turn(turned, follows, rows))));
+            rows -> List.of(offers.turn(turned, follows, rows)),
+            (other, row) -> negative(other, line, row)));
+  }
+
+  /** Whether a line's power is below zero in a row. */
+  private static int negative(LogDay day, String line, int row) {
+    Optional<double[]> power =
+        day.find(line + ".active_w").or(() -> day.find(line + ".power_factor"));
+    return (int) -Math.signum(power.map(p -> p[row]).filter(p -> !p.isNaN()).orElse(0.0));
   }
 
   /** Whether the total was formed from the lines as they stand. */
@@ -168,8 +181,26 @@ final class PowerRelations implements DayCheck {
                   line,
                   median,
                   of),
-              rows -> rescaled(day, line, which, median, rows)));
+              rows -> rescaled(day, line, which, median, rows),
+              RowTest.ofRatio((other, row) -> ratio(other, line, row), median)));
     }
+  }
+
+  /** Power on volts times amps in a row, times power factor where only that tells. */
+  private static double ratio(LogDay day, String line, int row) {
+    Optional<double[]> volts = new LineDay(day).volts(line);
+    Optional<double[]> amps = day.find(line + ".rms_a");
+    Optional<double[]> apparent = day.find(line + ".apparent_va");
+    Optional<double[]> watts = day.find(line + ".active_w");
+    if (volts.isEmpty() || amps.isEmpty()) {
+      return Double.NaN;
+    }
+    double va = volts.get()[row] * amps.get()[row];
+    double factor = day.find(line + ".power_factor").map(f -> Math.abs(f[row])).orElse(1.0);
+    return apparent
+        .map(s -> s[row] / va)
+        .or(() -> watts.map(p -> Math.abs(p[row]) / (va * factor)))
+        .orElse(Double.NaN);
   }
 
   /** The power where the ratio is a prefix of its unit; else the amps, or the power. */

@@ -123,6 +123,24 @@ class CorrectionsTest {
             b -> b.scale("L1.active_w", D, E, 0.001),
             NOTHING),
         fault(
+            "a clamp turned from mid-morning to another day's evening",
+            QualityFinding.REVERSED_CLAMP,
+            b -> {
+              b.scale("L2.active_w", D + 63, E + 110, -1);
+              b.scale("L2.power_factor", D + 63, E + 110, -1);
+            },
+            NOTHING),
+        fault(
+            "amps by a wrong ratio from an evening to a morning",
+            QualityFinding.WRONG_RATIO,
+            b -> b.scale("L3.rms_a", D + 100, E + 40, 0.5),
+            NOTHING),
+        fault(
+            "currents swapped within one day",
+            QualityFinding.SWAPPED_LINES,
+            b -> b.swap("L1.rms_a", "L2.rms_a", D + 10, D + 133),
+            NOTHING),
+        fault(
             "clamps on each other's conductors",
             QualityFinding.SWAPPED_LINES,
             CorrectionsTest::cross,
