@@ -3,11 +3,10 @@ package fourthwire.web.figure;
 import java.util.List;
 import java.util.Locale;
 import java.util.OptionalDouble;
+import java.util.function.DoubleUnaryOperator;
 
 /** A few curves over one quantity, told apart by their strokes; a gap where there is no value. */
 public final class CurvePlot {
-  private static final double HEIGHT_PX = 168;
-  private static final int STEPS = 4;
   private static final int UNITS_WIDE = 1000;
 
   private CurvePlot() {}
@@ -16,8 +15,7 @@ public final class CurvePlot {
   public enum Style {
     SOLID,
     DASHED,
-    DOTTED,
-    HEAVY;
+    DOTTED;
 
     /** Its class in the style sheet. */
     String word() {
@@ -41,16 +39,40 @@ public final class CurvePlot {
   public record Place(double at, String label) {}
 
   /**
-   * The picture.
+   * What values are read from: an axis from zero to a round value.
    *
-   * @param here share of the width at which a line marks the state that is shown; empty: none
+   * @param classes of the picture in the style sheet, which sets its height
+   * @param heightPx from zero to the end, pixels
+   * @param steps about so many
+   * @param least the axis reaches at least to this
    * @param unit of the values
    */
+  private record Axis(String classes, double heightPx, int steps, double least, String unit) {}
+
+  private static final Axis PERCENT = new Axis("plot curves", 168, 4, 0, "%");
+  private static final Axis FACTOR = new Axis("plot curves low", 70, 2, 1, "");
+
+  /**
+   * The picture of percentages.
+   *
+   * @param here share of the width at which a line marks the state that is shown; empty: none
+   */
   public static String draw(
+      List<Place> places, List<Curve> curves, OptionalDouble here, String alternative) {
+    return draw(PERCENT, places, curves, here, alternative);
+  }
+
+  /** A low picture of a factor from 0 to 1, to stand under another over the same places. */
+  public static String drawFactor(
+      List<Place> places, Curve curve, OptionalDouble here, String alternative) {
+    return draw(FACTOR, places, List.of(curve), here, alternative);
+  }
+
+  private static String draw(
+      Axis axis,
       List<Place> places,
       List<Curve> curves,
       OptionalDouble here,
-      String unit,
       String alternative) {
     double highest =
         curves.stream()
@@ -58,10 +80,10 @@ public final class CurvePlot {
             .flatMapToDouble(OptionalDouble::stream)
             .max()
             .orElse(0);
-    Ticks ticks = Ticks.upTo(highest, STEPS);
-    Svg svg = Svg.picture("plot curves", alternative);
-    rules(svg, ticks, unit);
-    places.forEach(p -> label(svg, p));
+    Ticks ticks = Ticks.upTo(Math.max(axis.least(), highest), axis.steps());
+    Svg svg = Svg.picture(axis.classes(), alternative);
+    rules(svg, axis, ticks);
+    places.forEach(p -> label(svg, axis, p));
     here.ifPresent(
         x ->
             svg.add(
@@ -75,32 +97,39 @@ public final class CurvePlot {
                 "y1",
                 0,
                 "y2",
-                HEIGHT_PX));
-    svg.stretched(UNITS_WIDE, HEIGHT_PX);
+                axis.heightPx()));
+    svg.stretched(UNITS_WIDE, axis.heightPx());
     curves.forEach(
-        c -> svg.add("path", "class", "curve " + c.style().word(), "d", path(places, c, ticks)));
+        c ->
+            svg.add(
+                "path",
+                "class",
+                "curve " + c.style().word(),
+                "d",
+                path(places, c, v -> y(axis, ticks, v))));
     return svg.done();
   }
 
-  private static void label(Svg svg, Place place) {
+  private static void label(Svg svg, Axis axis, Place place) {
     if (!place.label().isEmpty()) {
       String anchor = place.at() == 0 ? "start" : place.at() == 1 ? "end" : "middle";
       svg.text(
-          place.label(), "x", Svg.share(place.at()), "y", HEIGHT_PX + 18, "text-anchor", anchor);
+          place.label(), "x", Svg.share(place.at()), "y", axis.heightPx() + 18, "text-anchor", anchor);
     }
   }
 
-  private static void rules(Svg svg, Ticks ticks, String unit) {
+  private static void rules(Svg svg, Axis axis, Ticks ticks) {
     for (double value : ticks.values()) {
-      double y = y(ticks, value);
+      double y = y(axis, ticks, value);
       String classes = value == 0 ? "axis" : "rule";
       svg.add("line", "class", classes, "x1", 0, "x2", "100%", "y1", y, "y2", y);
-      String text = value == ticks.end() ? ticks.text(value) + "\u202f" + unit : ticks.text(value);
+      boolean named = value == ticks.end() && !axis.unit().isEmpty();
+      String text = ticks.text(value) + (named ? "\u202f" + axis.unit() : "");
       svg.text(text, "x", 0, "dx", -6, "y", y + 4, "text-anchor", "end");
     }
   }
 
-  private static String path(List<Place> places, Curve curve, Ticks ticks) {
+  private static String path(List<Place> places, Curve curve, DoubleUnaryOperator y) {
     StringBuilder d = new StringBuilder();
     boolean pen = false;
     for (int i = 0; i < places.size(); i++) {
@@ -109,14 +138,14 @@ public final class CurvePlot {
         d.append(pen ? 'L' : 'M')
             .append(Svg.rounded(UNITS_WIDE * places.get(i).at(), 1))
             .append(' ')
-            .append(Svg.rounded(y(ticks, value.getAsDouble()), 1));
+            .append(Svg.rounded(y.applyAsDouble(value.getAsDouble()), 1));
       }
       pen = value.isPresent();
     }
     return d.toString();
   }
 
-  private static double y(Ticks ticks, double value) {
-    return HEIGHT_PX * (1 - value / ticks.end());
+  private static double y(Axis axis, Ticks ticks, double value) {
+    return axis.heightPx() * (1 - value / ticks.end());
   }
 }

@@ -18,6 +18,7 @@ import java.util.OptionalDouble;
 import java.util.function.DoubleUnaryOperator;
 import java.util.function.Function;
 import java.util.stream.IntStream;
+import java.util.stream.Stream;
 
 /** Draws how a question's figures move with load level, firing angle and number of units. */
 final class ChartMaker {
@@ -26,10 +27,16 @@ final class ChartMaker {
 
   private final Words words;
   private final LoadQuestion question;
+
+  /** The curves in percent. */
   private final List<Line> lines;
 
-  /** One curve: what it is of, and its figure in percent. */
-  private record Line(Style style, String name, Function<TrialResult, Figure> percent) {}
+  /** The one from 0 to 1, whatever the direction of power. */
+  private final Line factor;
+
+  /** One curve: what it is of, the heading of its figures, and the figure. */
+  private record Line(
+      Style style, String name, String heading, Function<TrialResult, Figure> figure) {}
 
   ChartMaker(Words words, LoadQuestion question) {
     this.words = words;
@@ -38,18 +45,20 @@ final class ChartMaker {
     int second = question.threeLines() ? 7 : 5;
     this.lines =
         List.of(
-            new Line(Style.SOLID, "THD", r -> Distortion.thdPercent(r.first())),
+            percent(Style.SOLID, "THD", r -> Distortion.thdPercent(r.first())),
             order(Style.DASHED, first),
-            order(Style.DOTTED, second),
-            new Line(
-                Style.HEAVY,
-                words.of("loads.chart.power-factor"),
-                r -> r.powerFactor().map(f -> 100 * Math.abs(f))));
+            order(Style.DOTTED, second));
+    String name = words.of("power.factor");
+    this.factor = new Line(Style.SOLID, name, name, r -> r.powerFactor().map(Math::abs));
   }
 
   private static Line order(Style style, int order) {
-    return new Line(
+    return percent(
         style, Numbers.ordinal(order), r -> Distortion.percentOfFundamental(r.first(), order));
+  }
+
+  private static Line percent(Style style, String name, Function<TrialResult, Figure> figure) {
+    return new Line(style, name, name + ", %", figure);
   }
 
   List<LoadPage.Chart> make() {
@@ -112,17 +121,19 @@ final class ChartMaker {
             .toList();
     List<CurvePlot.Curve> curves =
         lines.stream().map(l -> new CurvePlot.Curve(l.style(), values(points, l))).toList();
+    List<CurvePlot.Place> shown = thinned(places);
     double x = place.applyAsDouble(here);
+    OptionalDouble mark = x >= 0 && x <= 1 ? OptionalDouble.of(x) : OptionalDouble.empty();
     String title = words.of("loads.chart." + id);
     return new LoadPage.Chart(
         id,
         title,
-        CurvePlot.draw(
-            thinned(places),
-            curves,
-            x >= 0 && x <= 1 ? OptionalDouble.of(x) : OptionalDouble.empty(),
-            "%",
-            words.of("loads.chart.alternative", title)),
+        CurvePlot.draw(shown, curves, mark, words.of("loads.chart.alternative", title)),
+        CurvePlot.drawFactor(
+            shown,
+            new CurvePlot.Curve(factor.style(), values(points, factor)),
+            mark,
+            words.of("loads.chart.alternative.factor", title)),
         lines.stream().map(l -> new LoadPage.Key(Shapes.sample(l.style()), l.name())).toList(),
         sentence(id, points, label),
         table(title, points, label));
@@ -142,7 +153,7 @@ final class ChartMaker {
 
   private static List<OptionalDouble> values(List<Sweep.Point> points, Line line) {
     return points.stream()
-        .map(p -> p.result().map(line.percent()).map(Figure::value).orElse(OptionalDouble.empty()))
+        .map(p -> p.result().map(line.figure()).map(Figure::value).orElse(OptionalDouble.empty()))
         .toList();
   }
 
@@ -185,16 +196,17 @@ final class ChartMaker {
   private fourthwire.web.panel.NodePage.Grid table(
       String title, List<Sweep.Point> points, Function<Double, String> label) {
     List<String> heads = new ArrayList<>(List.of(title));
-    lines.forEach(l -> heads.add(l.name() + ", %"));
+    List<Line> columns = Stream.concat(lines.stream(), Stream.of(factor)).toList();
+    columns.forEach(l -> heads.add(l.heading()));
     Grids grid = new Grids(words, title, heads);
     for (Sweep.Point p : points) {
       grid.row(
           label.apply(p.at()),
-          lines.stream()
+          columns.stream()
               .map(
                   l ->
                       p.result()
-                          .map(l.percent())
+                          .map(l.figure())
                           .orElse(Figure.unknown(words.of("loads.chart.reason"))))
               .toList());
     }

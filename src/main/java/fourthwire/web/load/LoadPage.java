@@ -42,9 +42,15 @@ record LoadPage(
   /** An entry of a picture's key. */
   record Key(String svg, String name) {}
 
-  /** How figures move with one quantity. */
+  /** How figures move with one quantity: percentages, and the power factor under them. */
   record Chart(
-      String id, String title, String svg, List<Key> keys, String sentence, Grid figures) {}
+      String id,
+      String title,
+      String svg,
+      String factor,
+      List<Key> keys,
+      String sentence,
+      Grid figures) {}
 
   /**
    * Every order beside its limit.

@@ -124,10 +124,22 @@ class FigureTest {
                             OptionalDouble.empty(),
                             OptionalDouble.of(50)))),
                 OptionalDouble.of(0.5),
-                "%",
                 "curves"));
     assertThat(element(svg, "path", "curve solid").getAttribute("d")).isEqualTo("M0 0M1000 84");
     assertThat(element(svg, "line", "here").getAttribute("x1")).isEqualTo("50%");
+  }
+
+  /** Whatever its values, so that two charts of it are alike. */
+  @Test
+  void aFactorIsDrawnFromZeroToOne() throws Exception {
+    List<CurvePlot.Place> places =
+        List.of(new CurvePlot.Place(0, "10"), new CurvePlot.Place(1, "100"));
+    CurvePlot.Curve curve =
+        new CurvePlot.Curve(
+            CurvePlot.Style.SOLID, List.of(OptionalDouble.of(0.5), OptionalDouble.of(0.6)));
+    Document svg = parsed(CurvePlot.drawFactor(places, curve, OptionalDouble.empty(), "factor"));
+    assertThat(element(svg, "path", "curve solid").getAttribute("d")).isEqualTo("M0 35L1000 28");
+    assertThat(svg.getDocumentElement().getTextContent()).startsWith("00.51");
   }
 
   /** The curve behind others fills the height whatever its unit. */
