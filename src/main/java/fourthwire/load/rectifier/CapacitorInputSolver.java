@@ -76,7 +76,7 @@ final class CapacitorInputSolver implements LoadSolver {
     if (found) {
       lastV = search.lastV;
       lastI = search.lastI;
-      search.trace().harmonics(search.halfWave, current.re[0], current.im[0]);
+      search.trace().harmonics(search.halfWave(), current.re[0], current.im[0]);
     }
     return found;
   }
@@ -84,7 +84,7 @@ final class CapacitorInputSolver implements LoadSolver {
   private boolean followBoth(
       PortSpectra emf, double seriesOhm, double seriesHenry, PortSpectra current) {
     return twoPaths.isPresent()
-        && twoPaths.get().solve(emf, search.peak, seriesOhm, seriesHenry, current);
+        && twoPaths.get().solve(emf, search.peak(), seriesOhm, seriesHenry, current);
   }
 
   /** Forgets the last state: the next solution starts cold. */
@@ -99,7 +99,7 @@ final class CapacitorInputSolver implements LoadSolver {
         "a capacitor-input rectifier of %s W finds no steady state at %s V peak behind %s ohm"
             + " and %s mH: %s",
         load.powerW(),
-        search.peak,
+        search.peak(),
         search.ohm(),
         search.henry() * 1e3,
         twoPaths.isPresent() && twoPaths.get().hunts() ? HUNTS : UNSETTLED);
@@ -107,7 +107,7 @@ final class CapacitorInputSolver implements LoadSolver {
 
   /** Whether that record is half a cycle, whose mirror image is the other. */
   boolean halfWave() {
-    return twoPaths.map(TwoPathSolver::halfWave).orElse(search.halfWave);
+    return twoPaths.map(TwoPathSolver::halfWave).orElse(search.halfWave());
   }
 
   /** How many recorded currents make up the port's, the second counting against the first. */

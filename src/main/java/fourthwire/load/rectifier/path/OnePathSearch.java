@@ -1,6 +1,5 @@
 package fourthwire.load.rectifier.path;
 
-import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.load.model.PortSpectra;
 
 /**
@@ -17,20 +16,6 @@ import fourthwire.load.model.PortSpectra;
  * circle: Floquet). Workspace of one thread.
  */
 public final class OnePathSearch {
-  /** Accepted defect of the capacitor's energy in a cycle, as a share of what the load draws. */
-  private static final double TOLERANCE = 1e-5;
-
-  /** Bounds of the defect of its voltage that this gives, as shares of the crest. */
-  private static final double FINEST = 1e-9;
-
-  private static final double COARSEST = 5e-7;
-
-  /** A pulse's current, times power over crest. */
-  private static final double PULSE = 3;
-
-  /** No source rings a loaded capacitor up to so many times the crest. */
-  private static final double MOST_RESONANCE = 10;
-
   /**
    * Defect of energy at which a coarse search ends, as a share of what the load draws in a half.
    */
@@ -48,47 +33,18 @@ public final class OnePathSearch {
   /** A capacitor that rings with its source can be charged over the crest, less than to twice. */
   private static final double MOST_CHARGE = 2;
 
-  /** Accepted defect of the current, as a share of itself and the load's. */
-  private static final double TOLERANCE_OF_CURRENT = 1e-6;
-
-  /** A capacitor under this share of the crest is empty: no supply runs on it. */
-  private static final double LEAST_SHARE = 0.05;
-
-  /** Largest multiplier of a stable state; a little over 1 for its own error. */
-  private static final double MOST_MULTIPLIER = 1.001;
-
-  /**
-   * Where a pulse just parts in two the map may jump by the error of a time step: this share of the
-   * energy is accepted where the voltage can't be told any nearer.
-   */
-  private static final double JUMP = 2e-4;
-
   private static final int MOST_STEPS = 40;
   private static final int MOST_SUBSTITUTIONS = 200;
   private static final int REPETITIONS_TO_NEAR = 40;
 
-  private final PairBridge bridge = new PairBridge();
-
-  /** Largest electromotive force, volts. */
-  public double peak;
-
-  /** Whether half cycles mirror each other. */
-  public boolean halfWave;
+  private final OnePathCycle cycle = new OnePathCycle();
+  private final PairBridge bridge = cycle.bridge;
 
   /** The state found: the capacitor's voltage at the section, volts. */
   public double lastV;
 
   /** And the current there, amps; 0 while none flows. */
   public double lastI;
-
-  private double powerW;
-  private double capacitanceF;
-  private double frequencyHz;
-  private double toleranceV;
-  private double jumpV;
-  private double nearV;
-  private double shiftV;
-  private double section;
 
   /**
    * Takes a circuit, its voltage, and a state to start from.
@@ -103,33 +59,19 @@ public final class OnePathSearch {
       double seriesHenry,
       double startV,
       double startI) {
-    powerW = load.powerW();
-    capacitanceF = load.capacitanceF();
-    this.frequencyHz = frequencyHz;
     lastV = startV;
     lastI = startI;
-    CycleTable table = bridge.emf;
-    table.fill(emf.re[0], emf.im[0]);
-    peak = table.peak();
-    if (!(peak > 0) || Double.isInfinite(peak)) {
-      throw new NoSteadyStateException("a capacitor-input rectifier has no voltage to draw from");
-    }
-    double perEnergy = load.powerW() / (2 * frequencyHz * load.capacitanceF() * peak);
-    toleranceV = Math.max(FINEST * peak, Math.min(COARSEST * peak, TOLERANCE * perEnergy));
-    nearV = NEAR * perEnergy;
-    shiftV = SHIFT * perEnergy;
-    jumpV = Math.max(toleranceV, JUMP * perEnergy);
-    bridge.floorV = LEAST_SHARE * peak;
-    bridge.ceilingV = MOST_RESONANCE * peak;
-    double cellSeconds = 1 / (frequencyHz * CycleTable.CELLS);
-    double henry = load.lineHenry() + seriesHenry;
-    bridge.path.set(
-        load.lineOhm() + seriesOhm + load.dcOhm(), henry + load.dcHenry(), load, cellSeconds);
-    bridge.directShare = load.dcHenry() > 0 ? load.dcHenry() / (henry + load.dcHenry()) : 0;
-    bridge.path.threshold(1e-3 * load.powerW() / peak);
-    bridge.length.set(PULSE * load.powerW() / peak);
-    halfWave = table.halfWave;
-    section = sectionAfterCrossing(emf.re[0][1], emf.im[0][1]);
+    cycle.prepare(load, frequencyHz, emf, seriesOhm, seriesHenry);
+  }
+
+  /** Largest electromotive force, volts. */
+  public double peak() {
+    return cycle.peak;
+  }
+
+  /** Whether half cycles of the state mirror each other. */
+  public boolean halfWave() {
+    return cycle.halfWave;
   }
 
   /**
@@ -152,42 +94,27 @@ public final class OnePathSearch {
 
   /** Henries of the whole path. */
   public double henry() {
-    return bridge.path.inductance / (frequencyHz * CycleTable.CELLS);
+    return bridge.path.inductance / (cycle.frequencyHz * CycleTable.CELLS);
   }
 
   /** Whether a stable state is found; the bridge has marched it then. */
   public boolean find() {
-    return repeats() && stable() || halfWave && repeatsAfterWholeCycle();
-  }
-
-  /** The node 15° after the fundamental's upward zero crossing, usually without current. */
-  private static double sectionAfterCrossing(double re, double im) {
-    double turns = -Math.atan2(im, re) / (2 * Math.PI) + 15.0 / 360;
-    return Math.floor((turns - Math.floor(turns)) * CycleTable.CELLS);
-  }
-
-  /** Marches once through what has to repeat; false where the capacitor empties. */
-  private boolean march(double i, double v) {
-    return bridge.march(section, halfWave ? CycleTable.CELLS / 2.0 : CycleTable.CELLS, i, v);
-  }
-
-  /** The current at the end as it has to be at the start. */
-  private double endI() {
-    return halfWave ? -bridge.i : bridge.i;
+    return repeats() && cycle.stable() || cycle.halfWave && repeatsAfterWholeCycle();
   }
 
   /** Whether a state was found that repeats; it is the last, and the bridge has marched it. */
   private boolean repeats() {
-    return (lastI == 0 && discontinuous()) || continuous() || substitution(0, peak);
+    return (lastI == 0 && discontinuous()) || continuous() || substitution(0, cycle.peak);
   }
 
+  /** The last state's voltage; else what is left of the crest after most of a half cycle. */
   private double firstGuess() {
-    if (lastV > 0 && lastV < MOST_CHARGE * peak) {
+    if (lastV > 0 && lastV < MOST_CHARGE * cycle.peak) {
       return lastV;
     }
-    double fall = 2 * powerW / capacitanceF * 0.15 / frequencyHz;
-    double square = 0.97 * peak * peak - fall;
-    return square > 0.2 * peak * peak ? Math.sqrt(square) : 0.7 * peak;
+    double fall = 2 * cycle.powerW / cycle.capacitanceF * 0.15 / cycle.frequencyHz;
+    double square = 0.97 * cycle.peak * cycle.peak - fall;
+    return square > 0.2 * cycle.peak * cycle.peak ? Math.sqrt(square) : 0.7 * cycle.peak;
   }
 
   /** One unknown; false where current flows at the section. */
@@ -195,11 +122,11 @@ public final class OnePathSearch {
     double v = firstGuess();
     if (lastV == 0) {
       bridge.length.scale(COARSE);
-      double near = newton(v, nearV, nearV);
+      double near = newton(v, NEAR * cycle.perEnergyV, NEAR * cycle.perEnergyV);
       bridge.length.scale(1);
       v = near > 0 ? near - (bridge.v - near) / slope() : v;
     }
-    double found = newton(v, shiftV, shiftV);
+    double found = newton(v, SHIFT * cycle.perEnergyV, SHIFT * cycle.perEnergyV);
     if (found > 0) {
       double shift = (found - bridge.v) / slope();
       bridge.trace.shift(shift);
@@ -212,21 +139,21 @@ public final class OnePathSearch {
    * Newton steps in the voltage alone, kept between bounds.
    *
    * @param closeV accepted defect
-   * @param jumpV accepted defect where the bounds have met
+   * @param pinchedV accepted defect where the bounds have met
    * @return the voltage that was marched last; 0 where there is none, or current flows at the
    *     section
    */
-  private double newton(double start, double closeV, double jumpV) {
-    double high = MOST_CHARGE * peak;
+  private double newton(double start, double closeV, double pinchedV) {
+    double high = MOST_CHARGE * cycle.peak;
     double low = 0;
     double v = start;
     for (int n = 0; n < MOST_STEPS; n++) {
-      if (!march(0, v) || bridge.i != 0) {
+      if (!cycle.march(0, v) || bridge.i != 0) {
         return 0;
       }
       double defect = bridge.v - v;
-      boolean pinched = high - low < toleranceV;
-      if (Math.abs(defect) < (pinched ? jumpV : closeV)) {
+      boolean pinched = high - low < cycle.toleranceV;
+      if (Math.abs(defect) < (pinched ? pinchedV : closeV)) {
         return v;
       }
       if (defect > 0) {
@@ -258,14 +185,14 @@ public final class OnePathSearch {
   private boolean continuous() {
     boolean cold = lastI == 0;
     double i = lastI;
-    double v = cold ? peak * 0.95 : lastV;
+    double v = cold ? cycle.peak * 0.95 : lastV;
     for (int n = 0; n < MOST_STEPS; n++) {
-      if (!march(i, v)) {
+      if (!cycle.march(i, v)) {
         return false;
       }
-      double defectI = endI() - i;
+      double defectI = cycle.endI() - i;
       double defectV = bridge.v - v;
-      if (closes(i, defectI, defectV)) {
+      if (cycle.closes(i, defectI, defectV)) {
         return found(i, v);
       }
       if ((cold && n < 6) || i == 0 || bridge.i == 0) {
@@ -273,7 +200,7 @@ public final class OnePathSearch {
         v += defectV;
         continue;
       }
-      double sign = halfWave ? -1 : 1;
+      double sign = cycle.sign();
       PathTangent t = bridge.tangent;
       double ii = sign * t.ii - 1;
       double iv = sign * t.iv;
@@ -281,7 +208,7 @@ public final class OnePathSearch {
       double det = ii * vv - iv * t.vi;
       double stepI = (iv * defectV - vv * defectI) / det;
       double stepV = (t.vi * defectI - ii * defectV) / det;
-      double most = Math.max(Math.abs(stepV) / (0.3 * peak), Math.abs(stepI / (2 * i)));
+      double most = Math.max(Math.abs(stepV) / (0.3 * cycle.peak), Math.abs(stepI / (2 * i)));
       double share = most > 1 ? 1 / most : 1;
       i += share * stepI;
       v += share * stepV;
@@ -292,11 +219,6 @@ public final class OnePathSearch {
     return false;
   }
 
-  private boolean closes(double i, double defectI, double defectV) {
-    return Math.abs(defectV) < toleranceV
-        && Math.abs(defectI) < TOLERANCE_OF_CURRENT * (Math.abs(i) + powerW / peak);
-  }
-
   /**
    * Plain repetition: slow, but it reaches the stable state if there is one; near it, and with no
    * current at the section, Newton's method goes the rest of the way.
@@ -305,17 +227,17 @@ public final class OnePathSearch {
     double i = startI;
     double v = startV;
     for (int n = 0; n < MOST_SUBSTITUTIONS; n++) {
-      if (!march(i, v)) {
+      if (!cycle.march(i, v)) {
         return false;
       }
-      double slack = n < MOST_SUBSTITUTIONS / 2 ? 1 : jumpV / toleranceV;
-      if (closes(i, (endI() - i) / slack, (bridge.v - v) / slack)) {
+      double slack = n < MOST_SUBSTITUTIONS / 2 ? 1 : cycle.jumpV / cycle.toleranceV;
+      if (cycle.closes(i, (cycle.endI() - i) / slack, (bridge.v - v) / slack)) {
         return found(i, v);
       }
-      i = endI();
+      i = cycle.endI();
       v = bridge.v;
       if (n == REPETITIONS_TO_NEAR && i == 0) {
-        double rest = newton(v, toleranceV, jumpV);
+        double rest = newton(v, cycle.toleranceV, cycle.jumpV);
         if (rest > 0) {
           return found(0, rest);
         }
@@ -324,16 +246,9 @@ public final class OnePathSearch {
     return false;
   }
 
-  /** Whether small departures from the state just marched die out. */
-  private boolean stable() {
-    PathTangent t = bridge.tangent;
-    double sign = halfWave ? -1 : 1;
-    return t.largestMultiplier(sign) < MOST_MULTIPLIER;
-  }
-
   /** From a small departure on to a state that repeats after the whole cycle only. */
   private boolean repeatsAfterWholeCycle() {
-    halfWave = false;
-    return substitution(lastI, 1.01 * (lastV > 0 ? lastV : 0.9 * peak)) && stable();
+    cycle.halfWave = false;
+    return substitution(lastI, 1.01 * (lastV > 0 ? lastV : 0.9 * cycle.peak)) && cycle.stable();
   }
 }
