@@ -69,11 +69,7 @@ public final class CurvePlot {
   }
 
   private static String draw(
-      Axis axis,
-      List<Place> places,
-      List<Curve> curves,
-      OptionalDouble here,
-      String alternative) {
+      Axis axis, List<Place> places, List<Curve> curves, OptionalDouble here, String alternative) {
     double highest =
         curves.stream()
             .flatMap(c -> c.values().stream())
@@ -114,7 +110,13 @@ public final class CurvePlot {
     if (!place.label().isEmpty()) {
       String anchor = place.at() == 0 ? "start" : place.at() == 1 ? "end" : "middle";
       svg.text(
-          place.label(), "x", Svg.share(place.at()), "y", axis.heightPx() + 18, "text-anchor", anchor);
+          place.label(),
+          "x",
+          Svg.share(place.at()),
+          "y",
+          axis.heightPx() + 18,
+          "text-anchor",
+          anchor);
     }
   }
 

@@ -51,7 +51,9 @@ final class OnePathCycle {
   double capacitanceF;
   double frequencyHz;
 
-  /** Volts by which the capacitor's voltage changes where the load's energy of a half is missing. */
+  /**
+   * Volts by which the capacitor's voltage changes where the load's energy of a half is missing.
+   */
   double perEnergyV;
 
   /** Accepted defect of voltage, volts; and where a pulse just parts in two. */
@@ -64,11 +66,7 @@ final class OnePathCycle {
 
   /** Takes a circuit and its voltage. */
   void prepare(
-      BridgeLoad load,
-      double frequencyHz,
-      PortSpectra emf,
-      double seriesOhm,
-      double seriesHenry) {
+      BridgeLoad load, double frequencyHz, PortSpectra emf, double seriesOhm, double seriesHenry) {
     powerW = load.powerW();
     capacitanceF = load.capacitanceF();
     this.frequencyHz = frequencyHz;
