@@ -11,6 +11,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.function.Function;
+import java.util.function.UnaryOperator;
 
 /** Writes the truth in one layout. */
 final class LayoutWriter {
@@ -35,6 +36,8 @@ final class LayoutWriter {
   private boolean quoted;
   private boolean trailing;
   private boolean stripZeros;
+  private boolean withUnits;
+  private UnaryOperator<String> form = n -> n;
 
   static LayoutWriter of(String separator, char decimal) {
     LayoutWriter w = new LayoutWriter();
@@ -138,6 +141,29 @@ final class LayoutWriter {
     return this;
   }
 
+  /** Every number above zero with its sign. */
+  LayoutWriter plusSigns() {
+    form = n -> n.startsWith("-") ? n : "+" + n;
+    return this;
+  }
+
+  /** Numbers as multiples of a power of ten. */
+  LayoutWriter exponents() {
+    form =
+        n -> {
+          BigDecimal value = new BigDecimal(n);
+          int power = value.precision() - value.scale() - 1;
+          return value.movePointLeft(power).toPlainString() + "E" + (power < 0 ? "-0" : "+0") + Math.abs(power);
+        };
+    return this;
+  }
+
+  /** The unit in the heading's brackets behind every number too. */
+  LayoutWriter cellUnits() {
+    withUnits = true;
+    return this;
+  }
+
   int rowCount() {
     return rows;
   }
@@ -211,9 +237,13 @@ final class LayoutWriter {
               ? marks.get(row)
               : c.quantity().isEmpty()
                   ? "OK"
-                  : written(value(truth, c.quantity(), row), c.shift()));
+                  : form.apply(written(value(truth, c.quantity(), row), c.shift())) + unit(c));
     }
     append(text, cells);
+  }
+
+  private String unit(Column c) {
+    return withUnits ? " " + c.heads().get(0).replaceAll(".*\\(|\\).*", "") : "";
   }
 
   private String written(BigDecimal value, int shift) {

@@ -83,6 +83,18 @@ class OpenLayoutsTest {
         "name and unit disagree",
         "columns.Voltage L1 (A)",
         dated().lines("Voltage L# (A)", "rms_v").column("I N (A)", "N.rms_a"));
+    layout(
+        "VAB as volts between lines or volt-amperes of a line",
+        "columns.VAA",
+        dated().lines("V@", "rms_v").lines("I@", "rms_a").lines("VA@", "apparent_va"));
+    layout(
+        "hours and minutes in columns of their own",
+        "time.columns",
+        LayoutWriter.of(",", '.')
+            .time("Date", "yyyy-MM-dd")
+            .time("Hour", "H")
+            .time("Minute", "m")
+            .lines("V# (V)", "rms_v"));
   }
 
   static Stream<String> layouts() {

@@ -45,7 +45,9 @@ final class LogWords {
   private static final Pattern RMS =
       Pattern.compile("(?i)[\\s_]*\\b(rms|trms|eff)\\b|(?<=[AV])rms");
   private static final Pattern SHARE = Pattern.compile("%\\s*(?:of|von|de|d')?\\s*(.*)");
-  private static final Pattern DIGITS = Pattern.compile("0?\\d{1,2}");
+  private static final Pattern PERCENTILE = Pattern.compile("c?p\\d\\d|\\d\\d%|percentile|quantile|median");
+  private static final Pattern NUMBERED = Pattern.compile("(?i)(?:l|ph|phase)?[123]");
+  private static final Pattern DIGITS = Pattern.compile("0{0,2}\\d{1,2}");
 
   private final Set<Sense> senses = EnumSet.noneOf(Sense.class);
   private final List<String> places = new ArrayList<>();
@@ -161,12 +163,14 @@ final class LogWords {
       takeNumber(Integer.parseInt(word), k > 0 ? all.get(k - 1) : "");
     } else if (isConnecting(all, k)) {
       return;
-    } else if (withMany && !(k == 0 && word.equals("s")) && STANDING.matcher(word).matches()) {
+    } else if (withMany && !isApparent(all, k) && STANDING.matcher(word).matches()) {
       places.add(word);
     } else if (unit.isEmpty() && isSummed(word, all)) {
       unit = Unit.find(word);
     } else if (unit.isEmpty() && word.length() > 1 && isUnitWord(all.get(k))) {
       unit = Unit.find(all.get(k));
+    } else if (PERCENTILE.matcher(word).matches()) {
+      senses.add(Sense.OTHER);
     } else if (Vocabulary.sense(word).isPresent()) {
       senses.add(Vocabulary.sense(word).get());
       takeUnbalanceOf(word);
@@ -188,6 +192,12 @@ final class LogWords {
     } else {
       numbers.add(number);
     }
+  }
+
+  /** The letter S begins a heading, or stands beside a numbered line, as the apparent power. */
+  private static boolean isApparent(List<String> all, int k) {
+    boolean numbered = all.stream().anyMatch(w -> NUMBERED.matcher(w).matches());
+    return all.get(k).equalsIgnoreCase("s") && (k == 0 || numbered);
   }
 
   /** The word "in" before a unit; elsewhere it is the neutral's current. */
@@ -235,6 +245,10 @@ final class LogWords {
     if (harmonic && order == 0 && !left.isEmpty()) {
       order = left.remove(left.size() - 1);
     }
+    if (isShareOfFundamental() && left.size() == 1 && left.get(0) > 1) {
+      order = left.remove(0);
+      senses.add(Sense.HARMONIC);
+    }
     if (places.size() == 1
         && places.get(0).matches("l?[1-3]")
         && left.size() == 1
@@ -247,6 +261,15 @@ final class LogWords {
       left.stream().limit(2).forEach(place::append);
       places.add(place.toString());
     }
+  }
+
+  /** A percentage of the current or voltage of a line that is not named a harmonic. */
+  private boolean isShareOfFundamental() {
+    boolean share = unit.filter(u -> u.kind() == Unit.Kind.SHARE).isPresent();
+    return share
+        && places.size() == 1
+        && senses.size() == 1
+        && (says(Sense.CURRENT) || says(Sense.VOLTAGE));
   }
 
   /** The letter A beside a numbered line is the unit: {@code A_L1}. */

@@ -42,10 +42,10 @@ record Symbol(List<Sense> senses, String place, int order, Optional<Unit> unit) 
       Pattern.compile("(kvar|kva|kwh|kw|mw|var|va|ka|kv|w|a)(l?[123]n?|n|tot|total|sum|sys)");
   private static final Pattern ORDER_WORD =
       Pattern.compile(
-          "(?:h|harm|harmonic|order|ord|oh|harmonique)(\\d{1,2})|(\\d{1,2})(?:st|nd|rd|th|h|e|eme)");
+          "(?:h|harm|har|harmonic|order|ord|oh|harmonique)(\\d{1,3})|(\\d{1,2})(?:st|nd|rd|th|h|e|eme)");
   private static final Pattern WITH_ORDER =
-      Pattern.compile("(hd|ihd)?(i|u|v)(" + PLACE + ")?h(\\d{1,2})|(hd|ihd|hrm)(i|u|v)?(\\d{1,2})");
-  private static final Pattern ORDER_FIRST = Pattern.compile("h(\\d{1,2})(i|u|v)(" + PLACE + ")?");
+      Pattern.compile("(hd|ihd)?(i|u|v)(" + PLACE + ")?h(\\d{1,3})|(hd|ihd|hrm)(i|u|v)?(\\d{1,3})");
+  private static final Pattern ORDER_FIRST = Pattern.compile("h(\\d{1,3})(i|u|v)(" + PLACE + ")?");
   private static final Pattern LINE = Pattern.compile("(?:ph|phase|line|fase|ch)(" + PLACE + ")");
   private static final Pattern SPELT =
       Pattern.compile("(current|voltage|amps|volts|strom|spannung|irms|urms|vrms)(" + PLACE + ")");

@@ -10,6 +10,7 @@ import fourthwire.intake.reading.format.Mappings;
 import fourthwire.intake.reading.format.Progress;
 import fourthwire.intake.reading.heading.Heading;
 import fourthwire.intake.reading.table.DateOrder;
+import fourthwire.intake.reading.table.RowTime;
 import fourthwire.intake.reading.table.TextTable;
 import fourthwire.intake.reading.table.TimeColumns;
 import fourthwire.intake.reading.table.ZoneNamed;
@@ -41,6 +42,7 @@ public final class LogFormat {
 
   private final TextTable table;
   private static final int WORKERS = 2;
+  private static final int LOOK_ROWS = 300;
 
   private final TimeColumns time;
   private final long bytes;
@@ -67,6 +69,13 @@ public final class LogFormat {
     Optional<String> zone =
         given.zone().or(() -> written(notes)).or(() -> setting.siteZone().map(ZoneId::getId));
     zone(zone, order, questions);
+    if (order.isPresent() && standsStill(order.get())) {
+      questions.add(
+          question(
+              "time.columns",
+              "most rows stand at the same time as the row before: name the column of the time of"
+                  + " day too"));
+    }
     if (!questions.isEmpty()) {
       throw new ReadingRefusedException(
           "The file can't be read without being told more.", table.headings(), questions);
@@ -223,6 +232,23 @@ public final class LogFormat {
           return false;
         });
     return written[0];
+  }
+
+  /** Whether the first rows' times tell few of them apart. */
+  private boolean standsStill(DateOrder order) {
+    RowTime at = new RowTime(time, order);
+    long[] before = {Long.MIN_VALUE};
+    int[] rows = {0, 0};
+    table.forEach(
+        row -> {
+          if (at.read(row)) {
+            rows[1] += at.localMillis() == before[0] ? 1 : 0;
+            before[0] = at.localMillis();
+            rows[0]++;
+          }
+          return rows[0] < LOOK_ROWS;
+        });
+    return 2 * rows[1] > rows[0];
   }
 
   private Stamp stamp(ReadingMapping.Time given, List<String> notes) {

@@ -13,7 +13,7 @@ import java.util.regex.Pattern;
  */
 record NumberStyle(boolean decimalComma, List<Integer> openColumns) {
   private static final String SIGN = "[-+\u2212]?\\s?";
-  private static final String END = "([eE][+-]?\\d+)?\\s*%?";
+  private static final String END = "([eE][+-]?\\d+)?\\s*" + Numbers.UNIT + "?";
 
   /** Three digits behind the only mark, or marks all alike: thousands, or three decimals. */
   private static final Pattern THREE_BY_COMMA = Pattern.compile(SIGN + "[1-9]\\d{0,2}(,\\d{3})+");

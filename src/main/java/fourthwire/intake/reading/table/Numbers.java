@@ -87,6 +87,10 @@ final class Numbers {
   /** A limit is no value: {@code >600}, {@code < 0.1}. */
   private static final Pattern BEYOND = Pattern.compile("[<>≤≥].*");
 
+  /** A unit that some write behind every number; one with a prefix is not passed over. */
+  static final String UNIT = "(?:%|VA|V|A|W|[vV][aA][rR]|Hz|°)";
+
+  private static final Pattern UNIT_BEHIND = Pattern.compile("(?<=[\\d.,])\\s?" + UNIT + "$");
   private static final Pattern BLANKS = Pattern.compile("[\\s\\h\\uFEFF\\u001A]+");
   private static final Pattern ENDS = Pattern.compile("^[-+]+|[!*]+$");
   private static final Pattern PLAIN =
@@ -182,10 +186,10 @@ final class Numbers {
     return Double.isFinite(value) ? value : UNREADABLE;
   }
 
-  /** Blanks of every kind as one, a true minus as the hyphen, a percent sign behind taken off. */
+  /** Blanks of every kind as one, a true minus as the hyphen, a unit behind taken off. */
   private static String plain(String text) {
     String plain = BLANKS.matcher(text).replaceAll(" ").trim().replace('\u2212', '-');
-    plain = plain.endsWith("%") ? plain.substring(0, plain.length() - 1).trim() : plain;
+    plain = UNIT_BEHIND.matcher(plain).replaceFirst("");
     return plain.startsWith("- ") || plain.startsWith("+ ")
         ? plain.charAt(0) + plain.substring(2)
         : plain;

@@ -1,0 +1,79 @@
+#!/bin/bash
+# A log of gigabytes through the running service with 512 MB of heap: uploaded, read, asked for,
+# handed in again, deleted. Prints what the job says of itself on the way, and how much memory the
+# service took. The rows are those of a short log again and again, a minute apart.
+# usage: deploy/try-large-log.sh <log.csv> [gigabytes] [port]
+# RUN starts the service; without it target/fourthwire.jar is run.
+set -e
+cd "$(dirname "$0")/.."
+log=${1:?a log with a row of headings and times in the first column}
+gigabytes=${2:-4}
+port=${3:-8099}
+work=$(mktemp -d)
+run=${RUN:-java -jar target/fourthwire.jar}
+trap 'kill $service 2> /dev/null; wait $service 2> /dev/null; rm -rf "$work"' EXIT
+/usr/bin/python3 - "$log" "$gigabytes" "$work/large.csv" << 'PYTHON'
+import datetime, itertools, sys
+lines = [line for _, line in zip(range(2001), open(sys.argv[1]))]
+rows = [line[line.index(","):] for line in lines[1:]]
+left = int(float(sys.argv[2]) * 1e9)
+at = datetime.datetime(2015, 1, 1)
+with open(sys.argv[3], "w", buffering=1 << 22) as out:
+    out.write("Time (UTC)" + lines[0][lines[0].index(","):])
+    for row in itertools.cycle(rows):
+        text = at.strftime("%Y-%m-%d %H:%M:%S") + row
+        out.write(text)
+        at += datetime.timedelta(minutes=1)
+        left -= len(text)
+        if left <= 0:
+            break
+PYTHON
+ls -l "$work/large.csv" | awk '{printf "file of %.2f GB\n", $5 / 1e9}'
+JAVA_TOOL_OPTIONS="-Xmx512m -Xlog:gc:file=$work/gc.log -XX:+HeapDumpOnOutOfMemoryError -XX:HeapDumpPath=$work" \
+  $run --server.port=$port --fourthwire.data-dir="$work/data" --fourthwire.demo=false \
+  > "$work/service.out" 2>&1 &
+service=$!
+address=http://127.0.0.1:$port/api/v1
+until curl -sf "$address/sites" > /dev/null; do sleep 1; done
+field() { /usr/bin/python3 -c "import json,sys; d=json.load(sys.stdin); print(eval(sys.argv[1]))" "$1"; }
+memory() { awk '/VmHWM/ {printf "  resident at most %.0f MB\n", $2 / 1024}' "/proc/$service/status"; }
+/usr/bin/python3 -c 'import shutil, sys; shutil.make_archive(sys.argv[1], "zip", "sample-data/survey")' "$work/survey"
+site=$(curl -s -F "survey=@$work/survey.zip" "$address/sites" | field 'd["id"]')
+node=$(/usr/bin/python3 -c 'import csv; print(next(csv.DictReader(open("sample-data/survey/panels.csv")))["panel"])')
+send() { curl -s -F "file=@$work/large.csv" -F "at=$node" "$address/sites/$site/readings"; }
+watch() {
+  local job=$1 state message last=""
+  while true; do
+    state=$(curl -s "$address/jobs/$job")
+    message=$(echo "$state" | field '"%s %.3f %s" % (d["state"], d.get("progress", 0), d.get("message", ""))')
+    [ "$message" = "$last" ] || echo "  $(date +%T) $message"
+    last=$message
+    case $message in done* | failed* | cancelled*) break ;; esac
+    sleep 10
+  done
+  reading=$(echo "$state" | field 'd.get("reading", d.get("result", ""))')
+}
+SECONDS=0
+answer=$(send)
+echo "uploaded in $SECONDS s: $answer"
+memory
+SECONDS=0
+watch "$(echo "$answer" | field 'd["job"]')"
+echo "read in $SECONDS s"
+memory
+curl -s "$address/sites/$site/readings" | field '[(r["id"], r.get("rows")) for r in d]'
+SECONDS=0
+answer=$(send)
+echo "the same file again, $SECONDS s: $answer"
+watch "$(echo "$answer" | field 'd["job"]')"
+count=$(curl -s "$address/sites/$site/readings" | field 'len([r for r in d if r.get("rows", 0) > 0])')
+echo "large readings: $count"
+SECONDS=0
+for id in $(curl -s "$address/sites/$site/readings" | field '" ".join(str(r["id"]) for r in d if r.get("rows", 0) > 0)'); do
+  curl -s -o /dev/null -w "delete: %{http_code}" -X DELETE "$address/readings/$id"
+done
+echo " in $SECONDS s"
+memory
+du -sm "$work/data" | awk '{print "database " $1 " MB"}'
+grep -c java.lang.OutOfMemoryError "$work/service.out" || true
+awk -F'->' '/Pause/ {split($2, a, "M"); if (a[1] + 0 > most) most = a[1] + 0} END {print "heap in use after a collection, at most: " most " MB"}' "$work/gc.log"
