@@ -39,7 +39,9 @@ class FurtherLayoutsTest {
         .column("IY (A)", "L2.rms_a")
         .column("IB (A)", "L3.rms_a")
         .column("IN (A)", "N.rms_a");
-    layout("small letters and cosines", LayoutWriter.of(";", ',').time("Datum Zeit", "dd.MM.yyyy HH:mm"))
+    layout(
+            "small letters and cosines",
+            LayoutWriter.of(";", ',').time("Datum Zeit", "dd.MM.yyyy HH:mm"))
         .column("Uab", "L1-L2.rms_v")
         .column("Ubc", "L2-L3.rms_v")
         .column("Uca", "L3-L1.rms_v")
@@ -54,7 +56,9 @@ class FurtherLayoutsTest {
         .column("Pc (kW)", "L3.active_w", 3);
     layout(
             "units in square brackets below, blank line below them",
-            LayoutWriter.of(";", ',').time("Date|[dd.mm.yyyy]", "dd.MM.yyyy").time("Time|[hh:mm:ss]", "HH:mm:ss"))
+            LayoutWriter.of(";", ',')
+                .time("Date|[dd.mm.yyyy]", "dd.MM.yyyy")
+                .time("Time|[hh:mm:ss]", "HH:mm:ss"))
         .lines("U#N|[V]", "rms_v")
         .lines("I#|[A]", "rms_a")
         .column("IN|[A]", "N.rms_a")
@@ -81,15 +85,11 @@ class FurtherLayoutsTest {
     layout("twelve hours, points", LayoutWriter.of(";", ',').time("Date", "dd.MM.yyyy hh:mm:ss a"))
         .lines("Voltage L# (V)", "rms_v")
         .lines("Current L# (A)", "rms_a");
-    layout(
-            "offset without colon",
-            LayoutWriter.of(",", '.').time("t", t -> t + ":00.000+0100"))
+    layout("offset without colon", LayoutWriter.of(",", '.').time("t", t -> t + ":00.000+0100"))
         .lines("V_RMS_L#", "rms_v")
         .lines("I_RMS_L#", "rms_a")
         .column("I_RMS_N", "N.rms_a");
-    layout(
-            "ISO without marks",
-            LayoutWriter.of(",", '.').time("timestamp", "yyyyMMdd'T'HHmmss"))
+    layout("ISO without marks", LayoutWriter.of(",", '.').time("timestamp", "yyyyMMdd'T'HHmmss"))
         .lines("u_l#n", "rms_v")
         .lines("i_l#", "rms_a")
         .column("i_n", "N.rms_a");
@@ -147,7 +147,9 @@ class FurtherLayoutsTest {
         .lines("U L#-N (V)", "rms_v")
         .lines("I L# (A)", "rms_a")
         .trailingSeparator();
-    layout("hash before the header", LayoutWriter.of(",", '.').time("# Time", "yyyy-MM-dd HH:mm:ss"))
+    layout(
+            "hash before the header",
+            LayoutWriter.of(",", '.').time("# Time", "yyyy-MM-dd HH:mm:ss"))
         .lines("V L# (V)", "rms_v")
         .lines("I L# (A)", "rms_a");
     layout(
@@ -173,7 +175,9 @@ class FurtherLayoutsTest {
         .lines("I L# (A)", "rms_a")
         .column("I N (A)", "N.rms_a")
         .column("I PE (A)", "");
-    layout("THD first letters", LayoutWriter.of(";", ',').time("Zeitstempel", "dd.MM.yyyy HH:mm:ss"))
+    layout(
+            "THD first letters",
+            LayoutWriter.of(";", ',').time("Zeitstempel", "dd.MM.yyyy HH:mm:ss"))
         .lines("THDu L# [%]", "voltage_thd_percent")
         .lines("THDi L# [%]", "current_thd_percent")
         .lines("PF L#", "power_factor");
@@ -235,7 +239,9 @@ class FurtherLayoutsTest {
         .lines("meter.l#.voltage", "rms_v")
         .lines("meter.l#.current", "rms_a")
         .column("meter.total.active_power_w", "total.active_w");
-    layout("units first in brackets", LayoutWriter.of(";", ',').time("[dd.mm.yy] Datum", "dd.MM.yy HH:mm"))
+    layout(
+            "units first in brackets",
+            LayoutWriter.of(";", ',').time("[dd.mm.yy] Datum", "dd.MM.yy HH:mm"))
         .lines("[V] U#", "rms_v")
         .lines("[A] I#", "rms_a");
     layout("averages by prefix", dated())
@@ -254,13 +260,18 @@ class FurtherLayoutsTest {
         .column("I1 (Avg)", "L1.rms_a")
         .column("I1 (Min)", "L1.rms_a.min")
         .column("I1 (Max)", "L1.rms_a.max");
-    layout("Spanish in groups", LayoutWriter.of(";", ',').time("Fecha|", "dd/MM/yyyy").time("Hora|", "H:mm:ss"))
+    layout(
+            "Spanish in groups",
+            LayoutWriter.of(";", ',').time("Fecha|", "dd/MM/yyyy").time("Hora|", "H:mm:ss"))
         .lines("Tensión L#|V", "rms_v")
         .lines("Corriente L#|A", "rms_a")
         .column("Corriente neutro|A", "N.rms_a")
         .column("Potencia activa total|kW", "total.active_w", 3)
         .column("Factor de potencia total|", "total.power_factor");
-    layout("demand words", LayoutWriter.of(",", '.').time("Interval End", t -> t.plusMinutes(10).toString().replace('T', ' ')))
+    layout(
+            "demand words",
+            LayoutWriter.of(",", '.')
+                .time("Interval End", t -> t.plusMinutes(10).toString().replace('T', ' ')))
         .lines("Current Demand L# (A)", "rms_a")
         .column("kW Demand Total", "total.active_w", 3);
     layout("orders of three digits", dated())
@@ -281,7 +292,9 @@ class FurtherLayoutsTest {
         .lines("HD3 I# (%)", "current_h3_percent")
         .lines("HD5 I# (%)", "current_h5_percent")
         .lines("I# (A)", "rms_a");
-    layout("quoted semicolons, text with separators", LayoutWriter.of(";", ',').time("Zeit", "dd.MM.yyyy HH:mm:ss").quoted())
+    layout(
+            "quoted semicolons, text with separators",
+            LayoutWriter.of(";", ',').time("Zeit", "dd.MM.yyyy HH:mm:ss").quoted())
         .lines("U L#; Mittelwert [V]", "rms_v")
         .lines("I L#; Mittelwert [A]", "rms_a");
     layout("apparent and reactive by line first", dated())
@@ -295,21 +308,39 @@ class FurtherLayoutsTest {
         .column("QT (kvar)", "total.reactive_var", 3)
         .column("ST (kVA)", "total.apparent_va", 3)
         .column("PFT", "total.power_factor");
-    layout("seconds with thousandths behind commas", LayoutWriter.of(";", ',').time("Zeit", "dd.MM.yyyy HH:mm:ss,SSS"))
+    layout(
+            "seconds with thousandths behind commas",
+            LayoutWriter.of(";", ',').time("Zeit", "dd.MM.yyyy HH:mm:ss,SSS"))
         .lines("U# [V]", "rms_v")
         .lines("I# [A]", "rms_a");
-    layout("header twice at the top", LayoutWriter.of(",", '.').time("Time", "yyyy-MM-dd HH:mm")
-            .preamble("Time,V L1 (V),V L2 (V),V L3 (V),I L1 (A),I L2 (A),I L3 (A)"))
+    layout(
+            "header twice at the top",
+            LayoutWriter.of(",", '.')
+                .time("Time", "yyyy-MM-dd HH:mm")
+                .preamble("Time,V L1 (V),V L2 (V),V L3 (V),I L1 (A),I L2 (A),I L3 (A)"))
         .lines("V L# (V)", "rms_v")
         .lines("I L# (A)", "rms_a");
-    layout("zone offset in its own words", LayoutWriter.of(",", '.').time("Time", t -> t.toString().replace('T', ' ') + " UTC+01:00"))
+    layout(
+            "zone offset in its own words",
+            LayoutWriter.of(",", '.')
+                .time("Time", t -> t.toString().replace('T', ' ') + " UTC+01:00"))
         .lines("V L# (V)", "rms_v")
         .lines("I L# (A)", "rms_a");
-    layout("day of the week in front, German", LayoutWriter.of(";", ',').time("Tag", t -> "Mo Di Mi Do Fr Sa So".split(" ")[t.getDayOfWeek().getValue() - 1])
-            .time("Datum", "dd.MM.yyyy").time("Uhrzeit", "HH:mm"))
+    layout(
+            "day of the week in front, German",
+            LayoutWriter.of(";", ',')
+                .time(
+                    "Tag", t -> "Mo Di Mi Do Fr Sa So".split(" ")[t.getDayOfWeek().getValue() - 1])
+                .time("Datum", "dd.MM.yyyy")
+                .time("Uhrzeit", "HH:mm"))
         .lines("U L# [V]", "rms_v")
         .lines("I L# [A]", "rms_a");
-    layout("German month names", LayoutWriter.of(";", ',').time("Zeit", t -> t.getDayOfMonth() + ". Februar " + t.getYear() + " " + t.toLocalTime()))
+    layout(
+            "German month names",
+            LayoutWriter.of(";", ',')
+                .time(
+                    "Zeit",
+                    t -> t.getDayOfMonth() + ". Februar " + t.getYear() + " " + t.toLocalTime()))
         .lines("U L# [V]", "rms_v")
         .lines("I L# [A]", "rms_a");
     layout("things that no quantity is", dated())
@@ -322,7 +353,9 @@ class FurtherLayoutsTest {
         .column("V L1 Peak (V)", "")
         .column("I L1 Crest factor", "")
         .column("Residual current (A)", "");
-    layout("lines of one voltage meter", LayoutWriter.of(",", '.').time("Date Time", "yyyy-MM-dd hh:mm:ss a"))
+    layout(
+            "lines of one voltage meter",
+            LayoutWriter.of(",", '.').time("Date Time", "yyyy-MM-dd hh:mm:ss a"))
         .column("CH1 V", "L1.rms_v")
         .column("CH2 V", "L2.rms_v")
         .column("CH3 V", "L3.rms_v");

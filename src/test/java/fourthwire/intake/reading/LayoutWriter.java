@@ -153,7 +153,10 @@ final class LayoutWriter {
         n -> {
           BigDecimal value = new BigDecimal(n);
           int power = value.precision() - value.scale() - 1;
-          return value.movePointLeft(power).toPlainString() + "E" + (power < 0 ? "-0" : "+0") + Math.abs(power);
+          return value.movePointLeft(power).toPlainString()
+              + "E"
+              + (power < 0 ? "-0" : "+0")
+              + Math.abs(power);
         };
     return this;
   }

@@ -45,7 +45,8 @@ final class LogWords {
   private static final Pattern RMS =
       Pattern.compile("(?i)[\\s_]*\\b(rms|trms|eff)\\b|(?<=[AV])rms");
   private static final Pattern SHARE = Pattern.compile("%\\s*(?:of|von|de|d')?\\s*(.*)");
-  private static final Pattern PERCENTILE = Pattern.compile("c?p\\d\\d|\\d\\d%|percentile|quantile|median");
+  private static final Pattern PERCENTILE =
+      Pattern.compile("c?p\\d\\d|\\d\\d%|percentile|quantile|median");
   private static final Pattern NUMBERED = Pattern.compile("(?i)(?:l|ph|phase)?[123]");
   private static final Pattern DIGITS = Pattern.compile("0{0,2}\\d{1,2}");
 

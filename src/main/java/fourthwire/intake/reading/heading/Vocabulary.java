@@ -61,8 +61,8 @@ final class Vocabulary {
     put(Sense.DISTORTION, "thd thdf distortion klirrfaktor");
     put(
         Sense.HARMONIC,
-        "harmonic harmonics harm har harmon h order oberschwingung oberschwingungen harmonische harmonique"
-            + " armonico armonica ordnung ord hrm");
+        "harmonic harmonics harm har harmon h order oberschwingung oberschwingungen harmonische"
+            + " harmonique armonico armonica ordnung ord hrm");
     put(Sense.INDIVIDUAL_DISTORTION, "hd ihd");
     put(Sense.FUNDAMENTAL, "fundamental fund grundschwingung fondamental fond");
     put(Sense.ANGLE, "angle ang winkel angulo phaseangle");
@@ -96,8 +96,8 @@ final class Vocabulary {
             + " flags dip swell sag record rec count index sequence seq positive negative zero"
             + " interharmonic interharmonics ripple std stdev stddev deviation sigma dc thdr tif"
             + " distortionpower nonactive signalling rvc quality samples sample no nr number id h0"
-            + " rotation humidity speed alarm ground earth gnd pe residual leakage erde erdstrom tierra"
-            + " terre nominal rated setpoint limit threshold target delta difference diff");
+            + " rotation humidity speed alarm ground earth gnd pe residual leakage erde erdstrom"
+            + " tierra terre nominal rated setpoint limit threshold target delta difference diff");
     put(
         Sense.NOTHING,
         "rms trms true-rms eff efficace effektiv value values wert valeur measured to the of import"

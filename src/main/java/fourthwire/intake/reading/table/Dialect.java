@@ -21,7 +21,10 @@ record Dialect(
   private static final int MOST_ROWS = 1000;
   private static final int MOST_CELLS = 8000;
   private static final Pattern NUMBER =
-      Pattern.compile("[-+\u2212]?\\s?(\\d+([.,'’\\h]\\d+)*|[.,]\\d+)([eE][+-]?\\d+)?\\s*" + Numbers.UNIT + "?");
+      Pattern.compile(
+          "[-+\u2212]?\\s?(\\d+([.,'’\\h]\\d+)*|[.,]\\d+)([eE][+-]?\\d+)?\\s*"
+              + Numbers.UNIT
+              + "?");
 
   private record Line(long row, List<String> cells) {}
 
