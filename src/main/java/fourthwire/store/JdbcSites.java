@@ -7,7 +7,10 @@ import fourthwire.site.SurveyCodec;
 import java.sql.ResultSet;
 import java.sql.SQLException;
 import java.time.Clock;
+import java.util.Collections;
+import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.Objects;
 import java.util.Optional;
 import java.util.OptionalInt;
@@ -26,10 +29,24 @@ final class JdbcSites implements SiteRepository {
         join reading_uploads u on u.id = f.upload_id where u.site_id = :site
       """;
 
+  /** Surveys kept decoded. */
+  private static final int MOST_DECODED = 4;
+
   private final JdbcClient jdbc;
   private final TransactionTemplate transaction;
   private final FileStore files;
   private final SurveyCodec codec;
+
+  /** The surveys used last, by the id of their file, which never changes. */
+  private final Map<Long, Survey> decoded =
+      Collections.synchronizedMap(
+          new LinkedHashMap<>(16, 0.75f, true) {
+            @Override
+            protected boolean removeEldestEntry(Map.Entry<Long, Survey> eldest) {
+              return size() > MOST_DECODED;
+            }
+          });
+
   private final Clock clock;
 
   JdbcSites(
@@ -140,7 +157,7 @@ final class JdbcSites implements SiteRepository {
             .params(siteId, revision)
             .query(Long.class)
             .single();
-    return codec.decode(files.bytes(file));
+    return decoded.computeIfAbsent(file, id -> codec.decode(files.bytes(id)));
   }
 
   @Override

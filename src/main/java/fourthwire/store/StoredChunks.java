@@ -8,12 +8,13 @@ import java.util.List;
 import java.util.Objects;
 import org.springframework.jdbc.core.simple.JdbcClient;
 
-/** Reads the chunks of one log, only those that are asked for. */
+/** Reads the chunks of one log, only those that are asked for; the times once. Not thread-safe. */
 final class StoredChunks implements LogSpan.Source {
   private static final int TIMES = -1;
 
   private final JdbcClient jdbc;
   private final long readingId;
+  private List<long[]> times = List.of();
 
   StoredChunks(JdbcClient jdbc, long readingId) {
     this.jdbc = jdbc;
@@ -22,6 +23,13 @@ final class StoredChunks implements LogSpan.Source {
 
   @Override
   public List<long[]> times() {
+    if (times.isEmpty()) {
+      times = readTimes();
+    }
+    return times;
+  }
+
+  private List<long[]> readTimes() {
     return jdbc.sql(
             """
             select row_count, bytes from series_chunks where reading_id = ? and quantity = ?

@@ -8,7 +8,6 @@ import fourthwire.metering.SeriesRepository;
 import fourthwire.metering.reduce.DayCoverage;
 import fourthwire.metering.reduce.HourMeans;
 import fourthwire.metering.reduce.LogSpan;
-import fourthwire.metering.reduce.RowTaker;
 import fourthwire.metering.reduce.StepPercentiles;
 import fourthwire.metering.reduce.StepValues;
 import fourthwire.metering.reduce.TimeSteps;
@@ -19,11 +18,14 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 
-/** A log and what is asked of its rows as read; its days and hours are the site's. */
+/**
+ * A log and what is asked of its rows as read; its days and hours are the site's. Not thread-safe.
+ */
 public final class StoredLog {
   private final ReadingRepository.Entry entry;
   private final Survey survey;
   private final SeriesRepository series;
+  private final LogSpan.Source chunks;
   private final LogResult log;
   private final ZoneId zone;
 
@@ -31,6 +33,7 @@ public final class StoredLog {
     this.entry = entry;
     this.survey = survey;
     this.series = series;
+    this.chunks = series.chunks(entry.id());
     this.log = entry.reading().log().orElseThrow();
     this.zone = SiteZone.of(survey);
   }
@@ -93,28 +96,39 @@ public final class StoredLog {
 
   /** Percentiles of a quantity in each step. */
   public StepPercentiles percentiles(String quantity, TimeSteps steps) {
-    return taken(
-        span(steps.from(), steps.to()), quantity, new StepPercentiles(steps, intervalMillis()));
+    StepPercentiles percentiles = new StepPercentiles(steps, intervalMillis());
+    span(steps.from(), steps.to()).rows(quantity, percentiles);
+    return percentiles;
   }
 
-  /** The values of a span in order of size. */
-  public ValuesBySize bySize(String quantity, Period span) {
-    long from = span.from().toEpochMilli();
-    long to = span.to().toEpochMilli();
-    return taken(span(from, to), quantity, new ValuesBySize(from, to, intervalMillis()));
-  }
+  /** A quantity over a span: its values in order of size, and its means by hour of the week. */
+  public record Spread(ValuesBySize bySize, HourMeans hours) {}
 
-  /** Means by hour of the week over a span. */
-  public HourMeans hours(String quantity, Period span) {
-    long from = span.from().toEpochMilli();
-    long to = span.to().toEpochMilli();
-    return taken(span(from, to), quantity, new HourMeans(from, to, zone));
+  /** Each of these quantities over a span. */
+  public List<Spread> spreads(List<String> quantities, Period over) {
+    long from = over.from().toEpochMilli();
+    long to = over.to().toEpochMilli();
+    LogSpan span = span(from, to);
+    List<Spread> all = new ArrayList<>();
+    for (String quantity : quantities) {
+      Spread spread =
+          new Spread(
+              new ValuesBySize(from, to, intervalMillis()), new HourMeans(from, to, zone));
+      span.rows(
+          quantity,
+          (times, values) -> {
+            spread.bySize().take(times, values);
+            spread.hours().take(times, values);
+          });
+      all.add(spread);
+    }
+    return all;
   }
 
   /** Every day from its first to its last. */
   public List<DayCoverage.Day> days() {
     return DayCoverage.of(
-        LogSpan.whole(series.chunks(entry.id())),
+        LogSpan.whole(chunks),
         period().from().toEpochMilli(),
         period().to().toEpochMilli(),
         intervalMillis(),
@@ -128,11 +142,7 @@ public final class StoredLog {
 
   private LogSpan span(long fromMillis, long toMillis) {
     return LogSpan.of(
-        series.chunks(entry.id()), fromMillis - intervalMillis(), toMillis + intervalMillis());
+        chunks, fromMillis - intervalMillis(), toMillis + intervalMillis());
   }
 
-  private static <T extends RowTaker> T taken(LogSpan span, String quantity, T taker) {
-    span.rows(quantity, taker);
-    return taker;
-  }
 }

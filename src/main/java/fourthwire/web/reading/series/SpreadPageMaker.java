@@ -1,5 +1,6 @@
 package fourthwire.web.reading.series;
 
+import fourthwire.jobs.series.StoredLog;
 import fourthwire.metering.reduce.HourMeans;
 import fourthwire.metering.reduce.ValuesBySize;
 import fourthwire.metering.series.WeekClock;
@@ -32,8 +33,9 @@ final class SpreadPageMaker {
   SpreadPage make(String show) {
     Measures measures = view.measures();
     Measure measure = measures.orFirst(show);
-    List<ValuesBySize> values =
-        measure.quantities().stream().map(q -> view.log().bySize(q, view.span().shown())).toList();
+    List<StoredLog.Spread> spreads =
+        view.log().spreads(measure.quantities(), view.span().shown());
+    List<ValuesBySize> values = spreads.stream().map(StoredLog.Spread::bySize).toList();
     double largest =
         values.stream()
             .filter(v -> v.count() > 0)
@@ -52,7 +54,10 @@ final class SpreadPageMaker {
         view.keys(measure),
         limits.sentences(measure, factor, unit),
         figures(measure, values, factor, unit),
-        measure.quantities().stream().map(q -> hours(q, factor, unit)).toList());
+        IntStream.range(0, spreads.size())
+            .mapToObj(
+                k -> hours(measure.quantities().get(k), spreads.get(k).hours(), factor, unit))
+            .toList());
   }
 
   /** What was longest outside its limit, as a sentence; empty where no limit is known. */
@@ -139,8 +144,8 @@ final class SpreadPageMaker {
     return 100 * share;
   }
 
-  private SpreadPage.Hours hours(String quantity, double factor, String unit) {
-    HourMeans means = view.log().hours(quantity, view.span().shown());
+  private SpreadPage.Hours hours(
+      String quantity, HourMeans means, double factor, String unit) {
     double low = all(means, factor).min().orElse(0);
     double high = all(means, factor).max().orElse(0);
     double lightest = low >= 0 && low < high / 2 ? 0 : low;
