@@ -112,8 +112,7 @@ public final class StoredLog {
     List<Spread> all = new ArrayList<>();
     for (String quantity : quantities) {
       Spread spread =
-          new Spread(
-              new ValuesBySize(from, to, intervalMillis()), new HourMeans(from, to, zone));
+          new Spread(new ValuesBySize(from, to, intervalMillis()), new HourMeans(from, to, zone));
       span.rows(
           quantity,
           (times, values) -> {
@@ -141,8 +140,6 @@ public final class StoredLog {
   }
 
   private LogSpan span(long fromMillis, long toMillis) {
-    return LogSpan.of(
-        chunks, fromMillis - intervalMillis(), toMillis + intervalMillis());
+    return LogSpan.of(chunks, fromMillis - intervalMillis(), toMillis + intervalMillis());
   }
-
 }

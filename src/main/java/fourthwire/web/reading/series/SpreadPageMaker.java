@@ -33,8 +33,7 @@ final class SpreadPageMaker {
   SpreadPage make(String show) {
     Measures measures = view.measures();
     Measure measure = measures.orFirst(show);
-    List<StoredLog.Spread> spreads =
-        view.log().spreads(measure.quantities(), view.span().shown());
+    List<StoredLog.Spread> spreads = view.log().spreads(measure.quantities(), view.span().shown());
     List<ValuesBySize> values = spreads.stream().map(StoredLog.Spread::bySize).toList();
     double largest =
         values.stream()
@@ -55,8 +54,7 @@ final class SpreadPageMaker {
         limits.sentences(measure, factor, unit),
         figures(measure, values, factor, unit),
         IntStream.range(0, spreads.size())
-            .mapToObj(
-                k -> hours(measure.quantities().get(k), spreads.get(k).hours(), factor, unit))
+            .mapToObj(k -> hours(measure.quantities().get(k), spreads.get(k).hours(), factor, unit))
             .toList());
   }
 
@@ -144,8 +142,7 @@ final class SpreadPageMaker {
     return 100 * share;
   }
 
-  private SpreadPage.Hours hours(
-      String quantity, HourMeans means, double factor, String unit) {
+  private SpreadPage.Hours hours(String quantity, HourMeans means, double factor, String unit) {
     double low = all(means, factor).min().orElse(0);
     double high = all(means, factor).max().orElse(0);
     double lightest = low >= 0 && low < high / 2 ? 0 : low;
