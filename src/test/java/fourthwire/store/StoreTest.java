@@ -276,6 +276,35 @@ class StoreTest {
     assertThat(settings.find("other")).isEmpty();
   }
 
+  @ParameterizedTest
+  @EnumSource
+  void anUploadWaitsUntilItsColumnsAreConfirmed(Databases kind) {
+    open(kind);
+    long site = sites.create(SmallSite.survey("Works"), List.of());
+    MeterRef meter = new MeterRef("M1", "LP-1");
+    long upload = uploads.createWaiting(site, meter, List.of(file("a.csv", 5000)));
+    long dropped = uploads.createWaiting(site, meter, List.of(file("b.csv", 5000)));
+    assertThat(uploads.waiting(site))
+        .extracting(ReadingUploads.Entry::id)
+        .containsExactly(upload, dropped);
+    assertThat(uploads.start(upload)).as("nobody has confirmed it").isFalse();
+    assertThat(uploads.recover()).as("a restart does not read it").isEmpty();
+
+    assertThat(uploads.confirm(upload, mapping())).isTrue();
+    assertThat(uploads.confirm(upload, mapping())).as("once").isFalse();
+    assertThat(uploads.find(upload).orElseThrow())
+        .returns(ReadingUploads.State.QUEUED, ReadingUploads.Entry::state)
+        .returns(Optional.of(mapping()), ReadingUploads.Entry::mapping);
+    assertThat(uploads.start(upload)).isTrue();
+
+    assertThat(uploads.cancel(dropped)).isTrue();
+    assertThat(uploads.find(dropped).orElseThrow().state())
+        .isEqualTo(ReadingUploads.State.CANCELLED);
+    assertThat(uploads.files(dropped)).isEmpty();
+    assertThat(uploads.waiting(site)).isEmpty();
+    assertThat(count("stored_files")).as("the survey's and the running upload's").isEqualTo(2);
+  }
+
   /** Whoever comes second waits for no one and collides with no one. */
   @ParameterizedTest
   @EnumSource

@@ -71,6 +71,9 @@ class CorrectionApiTest extends ServiceTest {
     assertThat(corrected.path("quality").path(finding).path("corrected").asLong()).isEqualTo(id);
     assertThat(http.get(path + "/corrections").json().path(0).path("undone").isNull()).isTrue();
     ProblemShape.check(http.postJson(path + "/corrections", "{\"finding\":" + finding + "}"), 422);
+    String site = "/api/v1/sites/" + asRead.path("site").asLong();
+    assertThat(measured(http, site).path("basis").asString())
+        .endsWith("as corrected (one correction)");
 
     assertThat(http.delete(path + "/corrections/" + id).status()).isEqualTo(204);
     ProblemShape.check(http.delete(path + "/corrections/" + id), 404);
@@ -78,6 +81,16 @@ class CorrectionApiTest extends ServiceTest {
     assertThat(back.path("cleaned").isNull()).isTrue();
     assertThat(back.path("quantities")).isEqualTo(asRead.path("quantities"));
     assertThat(back.path("corrections").path(0).path("undone").isString()).isTrue();
+    assertThat(measured(http, site).path("basis").asString()).endsWith("as read");
+    assertThat(measured(http, site).path("demand_a_reason").asString()).contains("too short");
+  }
+
+  /** What an audit sets beside the figures of the meter's node. */
+  private static JsonNode measured(Http http, String site) {
+    String audits = site + "/audits";
+    long audit = http.postJson(audits, "{\"draws\":0}").json().path("id").asLong();
+    assertThat(http.ended("/api/v1/audits/" + audit).path("state").asString()).isEqualTo("done");
+    return http.get("/api/v1/audits/" + audit + "/nodes/LP-1").json().path("measured");
   }
 
   @Test
