@@ -38,16 +38,6 @@ final class MeasuredSpectrum implements LoadModel {
   }
 
   @Override
-  public void linearSiemens(double order, double[] y) {
-    java.util.Arrays.fill(y, 0, ports == 3 ? 6 : 2, 0);
-  }
-
-  @Override
-  public boolean isLinear() {
-    return false;
-  }
-
-  @Override
   public LoadSolver newSolver() {
     return this::inject;
   }

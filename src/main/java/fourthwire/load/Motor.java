@@ -56,11 +56,6 @@ final class Motor implements LoadModel {
   }
 
   @Override
-  public boolean isLinear() {
-    return false;
-  }
-
-  @Override
   public LoadSolver newSolver() {
     return this::inject;
   }

@@ -50,17 +50,6 @@ public final class PhaseDimmer implements LoadModel {
   }
 
   @Override
-  public void linearSiemens(double order, double[] y) {
-    y[0] = 0;
-    y[1] = 0;
-  }
-
-  @Override
-  public boolean isLinear() {
-    return false;
-  }
-
-  @Override
   public LoadSolver newSolver() {
     return this::solve;
   }

@@ -66,11 +66,6 @@ public final class PowerFactorCorrected implements LoadModel {
   }
 
   @Override
-  public boolean isLinear() {
-    return false;
-  }
-
-  @Override
   public LoadSolver newSolver() {
     return (emf, ohm, henry, current) ->
         PfcSolver.of(powerW, frequencyHz, residual, zone).solve(emf, ohm, henry, current);

@@ -1,5 +1,7 @@
 package fourthwire.load.model;
 
+import java.util.Arrays;
+
 /**
  * Equipment as the network sees it: a linear part that goes into the network's matrix, and a
  * current that follows from the voltage and is injected.
@@ -19,12 +21,16 @@ public interface LoadModel {
    * @param order 1 to 50, also between whole orders for impedance scans
    * @param y receives re, im of the port's admittance (one port), or of the positive-, negative-
    *     and zero-sequence admittances one after the other (three ports, length 6); all zero where
-   *     the model has no linear part
+   *     the model has no linear part, as most have none
    */
-  void linearSiemens(double order, double[] y);
+  default void linearSiemens(double order, double[] y) {
+    Arrays.fill(y, 0, 2 * ports(), 0);
+  }
 
   /** Whether the linear part is all there is: such a model injects nothing. */
-  boolean isLinear();
+  default boolean isLinear() {
+    return false;
+  }
 
   /**
    * A solver for the injected current, with its own workspace and warm start; not for use by two

@@ -43,17 +43,6 @@ public final class CapacitorInput implements LoadModel {
   }
 
   @Override
-  public void linearSiemens(double order, double[] y) {
-    y[0] = 0;
-    y[1] = 0;
-  }
-
-  @Override
-  public boolean isLinear() {
-    return false;
-  }
-
-  @Override
   public LoadSolver newSolver() {
     return new CapacitorInputSolver(load, frequencyHz);
   }

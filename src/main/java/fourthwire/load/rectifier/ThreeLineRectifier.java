@@ -23,16 +23,6 @@ abstract class ThreeLineRectifier implements LoadModel {
   }
 
   @Override
-  public final void linearSiemens(double order, double[] y) {
-    java.util.Arrays.fill(y, 0, 6, 0);
-  }
-
-  @Override
-  public final boolean isLinear() {
-    return false;
-  }
-
-  @Override
   public final LoadSolver newSolver() {
     return new MultiPulseSolver(bridges, load, frequencyHz);
   }

@@ -41,6 +41,11 @@ public record TrialResult(List<Spectrum> current, List<Spectrum> voltage, List<S
     return spectra.stream().map(s -> Spectrum.of(h -> s.at(h).turned(-h * degrees))).toList();
   }
 
+  /** So many times the current at the same voltage. */
+  public TrialResult times(double factor) {
+    return new TrialResult(current.stream().map(s -> s.times(factor)).toList(), voltage, remarks);
+  }
+
   /** The current of the first line. */
   public Spectrum first() {
     return current.get(0);

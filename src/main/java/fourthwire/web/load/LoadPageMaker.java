@@ -63,7 +63,7 @@ final class LoadPageMaker {
   }
 
   private LoadPage page(String query, TrialResult all) {
-    TrialResult unit = ofOneUnit(all);
+    TrialResult unit = all.times(1 / question.units());
     List<String> said = new ArrayList<>();
     all.remarks().forEach(remark -> said.add(sentence(remark)));
     if (question.units() > 1) {
@@ -103,12 +103,6 @@ final class LoadPageMaker {
         model(),
         granted(),
         query);
-  }
-
-  private TrialResult ofOneUnit(TrialResult all) {
-    double share = 1 / question.units();
-    return new TrialResult(
-        all.current().stream().map(s -> s.times(share)).toList(), all.voltage(), all.remarks());
   }
 
   /** The equipment's words with a capital. */
