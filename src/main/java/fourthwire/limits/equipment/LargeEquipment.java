@@ -38,7 +38,11 @@ final class LargeEquipment {
     }
     return equipment.balancedThreePhase()
         ? judge(
-            BALANCED, equipment, current, "it is balanced three-phase equipment over 16 A a line")
+            BALANCED,
+            equipment,
+            current,
+            "it is balanced three-phase equipment over 16 A a line, and neither condition a nor c of"
+                + " Table 4 holds (condition b and Table 5 are not judged here)")
         : judge(OTHER, equipment, current, "it is over 16 A a line and not balanced three-phase");
   }
 

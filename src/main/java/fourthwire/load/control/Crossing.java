@@ -10,11 +10,7 @@ final class Crossing {
 
   private Crossing() {}
 
-  /** The wave over √2 at an angle. */
-  static double value(double[] re, double[] im, double at) {
-    return value(re, im, at, Spectrum.HIGHEST_ORDER);
-  }
-
+  /** The wave over √2 at an angle, to an order. */
   private static double value(double[] re, double[] im, double at, int highest) {
     double sin1 = Math.sin(at);
     double cos1 = Math.cos(at);

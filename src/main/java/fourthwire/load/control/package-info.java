@@ -3,6 +3,8 @@
  *
  * <p>Doors: {@link fourthwire.load.control.PowerFactorCorrected}, {@link
  * fourthwire.load.control.PhaseDimmer}. May use {@code quantity} and {@code load.model}.
+ *
+ * <p>Sources stand at each class: closed forms, and fits to published ranges.
  */
 @org.jspecify.annotations.NullMarked
 package fourthwire.load.control;

@@ -10,7 +10,8 @@ import fourthwire.load.rectifier.path.BridgeLoad;
  *
  * <p>While |e| exceeds the capacitor's voltage v: L·di/dt = |e| - R·i - 2·v_d(i) - v and C·dv/dt =
  * i - P/v, with v_d the exponential law of {@code Diode}; otherwise i = 0. R and L are the
- * equipment's own and the network's together. The periodic state is found by shooting ({@link
+ * equipment's own and the network's together. The periodic state is found by shooting: Newton's
+ * method on the state at a section, first with long steps, then with accurate ones ({@link
  * CapacitorInputSolver}).
  *
  * <p>{@code capacitor-input-choke} is the same with a choke in the lead or behind the bridge; the
@@ -22,11 +23,12 @@ import fourthwire.load.rectifier.path.BridgeLoad;
  * one that repeats after the whole cycle, with even orders, is then found, or it is said that none
  * settles.
  *
- * <p>Assumed: constant power between crests, an ideal capacitor (its loss resistance counts in the
- * diode's), no inrush limiter drift. Valid from stiff to soft sources, in discontinuous and
- * continuous conduction, under any voltage of orders 1 to 50. Checked against circuit-simulator
- * results with the same diode (test resources {@code load/rectifiers}); expected error 0.4 % of the
- * fundamental at each order to 39.
+ * <p>Assumed: constant power at every instant, an ideal capacitor (its loss resistance counts in the
+ * diode's), a linear choke, no drift of an inrush limiter. Valid from stiff to soft sources, in discontinuous and
+ * continuous conduction, under any voltage of orders 1 to 50. Source: the circuit's own
+ * equations; checked against circuit-simulator results with the same diode (test resources {@code
+ * load/rectifiers}). Expected error 0.4 % of the fundamental at each order to 39; of real equipment
+ * its data's spread, which the presets state.
  */
 public final class CapacitorInput implements LoadModel {
   private final BridgeLoad load;

@@ -7,7 +7,9 @@
  * a time through a bridge; {@code loop}, several that share a current. May use {@code quantity} and
  * {@code load.model}.
  *
- * <p>Sources: the circuit equations stand at each class; the stepping methods are RODAS3 and GRK4T.
+ * <p>Sources: the circuit equations stand at each class. Steps are RODAS3's and, where one path is
+ * not stiff, GRK4T's; the periodic state is Newton's method's, on the state at a section of the
+ * cycle.
  */
 @org.jspecify.annotations.NullMarked
 package fourthwire.load.rectifier;

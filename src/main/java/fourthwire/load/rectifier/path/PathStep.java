@@ -12,11 +12,6 @@ package fourthwire.load.rectifier.path;
  * in cells of {@link CycleTable}.
  */
 public final class PathStep {
-  /** Longest step as a share of √(LC). */
-  private static final double STEP_OF_RING = 0.3;
-
-  private static final int MOST_DIVISIONS = 4;
-
   /** A share by which a current may change for the series of its drop: left out are 1e-8 of nVt. */
   private static final double NEAR = 0.03;
 
@@ -52,8 +47,6 @@ public final class PathStep {
   /** Cells in a radian of the swing between inductance and capacitor: √(LC). */
   double ring;
 
-  private int division;
-
   /** Result of the last step: amps. */
   public double i;
 
@@ -65,6 +58,13 @@ public final class PathStep {
 
   private double knownDrop;
 
+  /**
+   * Takes a circuit.
+   *
+   * @param resistance of the path but for the diodes, ohms
+   * @param inductance of the path, henries
+   * @param cellSeconds length of a cell, seconds
+   */
   public void set(double resistance, double inductance, BridgeLoad load, double cellSeconds) {
     this.resistance = resistance + 2 * load.diode().ohm();
     this.inductance = inductance / cellSeconds;
@@ -75,14 +75,9 @@ public final class PathStep {
     this.perSaturation = 1 / saturation;
     this.knownAmps = Double.NaN;
     ring = Math.sqrt(this.inductance * this.capacitance);
-    this.division = (int) Math.min(MOST_DIVISIONS, Math.ceil(1 / (STEP_OF_RING * ring + 1e-9)));
   }
 
-  /** The next place to step to: cells are divided where the path would ring within one. */
-  double nextNode(double position) {
-    return (Math.floor(position * division + 1e-9) + 1) / division;
-  }
-
+  /** Takes the current under which the path counts as open, amps. */
   public void threshold(double amps) {
     threshold = amps;
     thresholdV = slopeV * Math.log(1 + amps / saturation);

@@ -7,8 +7,9 @@ package fourthwire.load.rectifier.path;
  * <p>Along a conducting step the linearised path L·δi' = -(R + r_d)·δi - δv, C·δv' = δi + (P/v²)·δv
  * is taken by the two-stage, second-order, L-stable SDIRK method (Alexander, "Diagonally implicit
  * Runge-Kutta methods for stiff O.D.E.'s", SIAM Journal on Numerical Analysis 14, 1977), the
- * diodes' slope r_d at the mean current. It serves the Newton steps of the solver and tells whether
- * a steady state is stable; a solution's own accuracy does not hang on it.
+ * diodes' slope r_d at the mean current. It serves the Newton steps of the solver, tells whether a
+ * steady state is stable, and takes the last march over what little is left to the state ({@code
+ * OnePathSearch}): there its own error counts, times that little.
  */
 final class PathTangent {
   private static final double GAMMA = 1 - Math.sqrt(0.5);
