@@ -41,8 +41,8 @@ final class LargeEquipment {
             BALANCED,
             equipment,
             current,
-            "it is balanced three-phase equipment over 16 A a line, and neither condition a nor c of"
-                + " Table 4 holds (condition b and Table 5 are not judged here)")
+            "it is balanced three-phase equipment over 16 A a line, and neither condition a nor c"
+                + " of Table 4 holds (condition b and Table 5 are not judged here)")
         : judge(OTHER, equipment, current, "it is over 16 A a line and not balanced three-phase");
   }
 

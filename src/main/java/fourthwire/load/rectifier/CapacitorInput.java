@@ -23,12 +23,12 @@ import fourthwire.load.rectifier.path.BridgeLoad;
  * one that repeats after the whole cycle, with even orders, is then found, or it is said that none
  * settles.
  *
- * <p>Assumed: constant power at every instant, an ideal capacitor (its loss resistance counts in the
- * diode's), a linear choke, no drift of an inrush limiter. Valid from stiff to soft sources, in discontinuous and
- * continuous conduction, under any voltage of orders 1 to 50. Source: the circuit's own
- * equations; checked against circuit-simulator results with the same diode (test resources {@code
- * load/rectifiers}). Expected error 0.4 % of the fundamental at each order to 39; of real equipment
- * its data's spread, which the presets state.
+ * <p>Assumed: constant power at every instant, an ideal capacitor (its loss resistance counts in
+ * the diode's), a linear choke, no drift of an inrush limiter. Valid from stiff to soft sources, in
+ * discontinuous and continuous conduction, under any voltage of orders 1 to 50. Source: the
+ * circuit's own equations; checked against circuit-simulator results with the same diode (test
+ * resources {@code load/rectifiers}). Expected error 0.4 % of the fundamental at each order to 39;
+ * of real equipment its data's spread, which the presets state.
  */
 public final class CapacitorInput implements LoadModel {
   private final BridgeLoad load;

@@ -8,10 +8,10 @@
  * open fields, for the solvers of {@code load.rectifier} and {@code load.rectifier.loop} only. May
  * use {@code quantity} and {@code load.model}.
  *
- * <p>How it goes: {@code OnePathSearch} looks for the state that repeats, {@code OnePathCycle} marches
- * what has to repeat, {@code PairBridge} strings steps from event to event. A step is RODAS3 where
- * the path is stiff ({@code PathStep}), else GRK4T ({@code SmoothStep}), as long as {@code
- * StepLength} has it.
+ * <p>How it goes: {@code OnePathSearch} looks for the state that repeats, {@code OnePathCycle}
+ * marches what has to repeat, {@code PairBridge} strings steps from event to event. A step is
+ * RODAS3 where the path is stiff ({@code PathStep}), else GRK4T ({@code SmoothStep}), as long as
+ * {@code StepLength} has it.
  *
  * <p>Sources: Sandu et al., Atmospheric Environment 31, 1997 (RODAS3); Kaps and Rentrop, Numerische
  * Mathematik 33, 1979 (GRK4T); Alexander, SIAM Journal on Numerical Analysis 14, 1977 ({@code
