@@ -4,6 +4,7 @@ import com.sun.management.OperatingSystemMXBean;
 import fourthwire.audit.plan.Device;
 import fourthwire.audit.plan.LoadPlacements;
 import fourthwire.audit.plan.NetworkPlan;
+import fourthwire.audit.run.HarmonicAudit;
 import fourthwire.audit.solve.CoupledSolver;
 import fourthwire.audit.solve.Workers;
 import fourthwire.load.DesignPowers;
@@ -14,11 +15,14 @@ import java.lang.management.ManagementFactory;
 import java.lang.management.MemoryPoolMXBean;
 import java.lang.management.MemoryType;
 import java.util.List;
+import java.util.Map;
+import java.util.Optional;
 
 /**
  * How long a mixed site ({@link MixedSite}) takes, step by step: wall time and processor time, the
- * latter less disturbed by what else runs. Arguments: panels, circuits, repetitions, threads; the
- * last repetition is warm.
+ * latter less disturbed by what else runs. Arguments: panels, circuits, repetitions of the design
+ * state, threads; the last repetition is warm. With a fifth one, a number of draws, a whole audit
+ * follows: the week, and the draws.
  *
  * <pre>{@code
  * mvn -q test-compile dependency:build-classpath -Dmdep.outputFile=target/classpath
@@ -32,6 +36,7 @@ public final class SiteBenchmark {
 
   private long wall = System.nanoTime();
   private long processor = MACHINE.getProcessCpuTime();
+  private String stage = "start";
 
   private SiteBenchmark() {}
 
@@ -40,6 +45,10 @@ public final class SiteBenchmark {
     Survey survey = MixedSite.survey(Integer.parseInt(args[0]), Integer.parseInt(args[1]), 1);
     for (int n = 0; n < Integer.parseInt(args[2]); n++) {
       new SiteBenchmark().run(survey, Integer.parseInt(args[3]));
+    }
+    if (args.length > 4) {
+      new SiteBenchmark()
+          .audit(survey, Integer.parseInt(args[3]), Integer.parseInt(args[4]));
     }
     long peak =
         ManagementFactory.getMemoryPoolMXBeans().stream()
@@ -63,6 +72,23 @@ public final class SiteBenchmark {
       lap("  until the end");
       solver.solve(plan, devices, Progress.SILENT);
       lap("the same state again");
+    }
+  }
+
+  private void audit(Survey survey, int threads, int draws) {
+    AuditRequest request =
+        new AuditRequest(
+            survey, Optional.empty(), Map.of(), true, draws, AuditRequest.SEED);
+    new HarmonicAudit(threads).run(request, (share, message) -> stage(message));
+    lap(stage);
+  }
+
+  /** A lap where another stage begins; a stage's messages differ in their numbers only. */
+  private void stage(String message) {
+    String next = message.replaceAll("\\d+", "#");
+    if (!next.equals(stage)) {
+      lap(stage);
+      stage = next;
     }
   }
 

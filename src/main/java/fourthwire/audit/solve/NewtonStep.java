@@ -19,8 +19,8 @@ final class NewtonStep {
    */
   private static final double LINEAR_TOLERANCE = 3e-3;
 
-  /** Above this change the loads are not yet what they will be: slopes from there mislead. */
-  private static final double FAR = 0.2;
+  /** Where most loads change by more they are not yet what they will be: slopes there mislead. */
+  private static final double FAR = 0.1;
 
   /** A pass that leaves more than this part of the change before is held up by some loads. */
   private static final double SLOW = 0.5;
@@ -70,10 +70,11 @@ final class NewtonStep {
    */
   void renewSlopes(Settling settling, double[] g) {
     double change = settling.change();
-    if (change > FAR) {
+    boolean far = settling.usualChange() > FAR;
+    if (known && far) {
       book.forget();
     }
-    if (!known || change > FAR) {
+    if (!known || far) {
       book.lend(loads.stream().filter(load -> !load.hasOwnSlope()).toList(), g, workers);
     }
     if (known) {

@@ -124,6 +124,13 @@ final class Settling {
         .toList();
   }
 
+  /** What nineteen loads of twenty change at most. */
+  double usualChange() {
+    double[] sorted = changes.clone();
+    Arrays.sort(sorted);
+    return sorted.length == 0 ? 0 : sorted[(sorted.length - 1) * 19 / 20];
+  }
+
   /** How far the way to the tolerance is gone, on a logarithmic scale, 0 to 1. */
   double share() {
     double whole = Math.log(firstChange / CoupledSolver.LOAD_TOLERANCE);

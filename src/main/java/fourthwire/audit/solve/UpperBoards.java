@@ -20,7 +20,7 @@ final class UpperBoards {
   private static final int TIMES_FEWER = 3;
 
   /** How well their own equations are solved, each time they lead. */
-  private static final double ROUGH = 0.1;
+  private static final double ROUGH = 0.3;
 
   private final BoardEquations equations;
   private final Map<PlaceSlope, List<PlaceSlope>> parts = new LinkedHashMap<>();
