@@ -22,8 +22,6 @@ final class DevicePort {
   /** A change of the current, on its rms, that need not be solved for: the slope tells enough. */
   private static final double NOT_FELT = 2e-6;
 
-  private static final double THIRD = 2 * Math.PI / 3;
-
   private final Device device;
   private final PortPlace place;
   private final PortPlace group;
@@ -273,7 +271,7 @@ final class DevicePort {
     failure = "";
     try {
       solver.solve(emf, seriesOhm, seriesHenry, drawn);
-      copyDrawn(orders, g, offset);
+      orders.copy(drawn, g, offset);
       behind = now;
     } catch (NoSteadyStateException e) {
       failure = String.valueOf(e.getMessage());
@@ -314,110 +312,15 @@ final class DevicePort {
     return slope.orElseThrow();
   }
 
-  private void copyDrawn(OrdersInPlay orders, double[] into, int start) {
-    int at = start;
-    for (int port = 0; port < from.length; port++) {
-      for (int k = 0; k < orders.count(); k++) {
-        into[at++] = drawn.re[port][orders.at(k)];
-        into[at++] = drawn.im[port][orders.at(k)];
-      }
-    }
-  }
-
   /**
-   * The slope at the electromotive force last solved (which it follows at once), by small steps of
-   * it. Of a load on three lines only the first line's columns are stepped: turning all by a third
-   * of a cycle gives the others, exactly on a balanced voltage and mostly well enough to iterate
-   * with on any other.
+   * The slope at the electromotive force last solved (which it follows at once), as it is before
+   * the impedance above the group.
    *
-   * @param wholly steps all lines' columns
+   * @param wholly steps all lines of a load on three ({@link SlopeFinder})
    */
   void findSlope(OrdersInPlay orders, double omega, boolean wholly, DeviceSlope slope) {
-    int size = length(orders);
-    double[] before = new double[size];
-    double[] after = new double[size];
-    double step = SLOPE_STEP * nominalV();
-    copyDrawn(orders, before, 0);
-    int stepped = wholly ? size : size / from.length;
-    for (int column = 0; column < stepped; column++) {
-      int port = column / (2 * orders.count());
-      double[] part = column % 2 == 0 ? emf.re[port] : emf.im[port];
-      double taken = stepped(part, orders.at(column / 2 % orders.count()), step);
-      if (taken != 0) {
-        copyDrawn(orders, after, 0);
-        for (int row = 0; row < size; row++) {
-          slope.set(row, column, (after[row] - before[row]) / taken);
-        }
-      }
-    }
-    for (int port = 1; port < from.length && !wholly; port++) {
-      turn(slope, orders, port);
-    }
+    new SlopeFinder(solver, emf, drawn, seriesOhm, seriesHenry)
+        .find(orders, SLOPE_STEP * nominalV(), wholly, slope);
     slope.open(orders, sharedOhm, omega * sharedHenry);
-  }
-
-  /**
-   * Solves with one part of the electromotive force stepped, forwards, else backwards; 0 where the
-   * load has no steady state on either side: that part then counts as not felt, which costs passes
-   * and no exactness.
-   */
-  private double stepped(double[] part, int order, double step) {
-    double unstepped = part[order];
-    for (double signed : new double[] {step, -step}) {
-      part[order] = unstepped + signed;
-      try {
-        solver.solve(emf, seriesOhm, seriesHenry, drawn);
-        return signed;
-      } catch (NoSteadyStateException onThisSide) {
-        // The other side is tried.
-      } finally {
-        part[order] = unstepped;
-      }
-    }
-    return 0;
-  }
-
-  /** Columns of a port from those of the port before: delayed by a third of a cycle. */
-  private void turn(DeviceSlope slope, OrdersInPlay orders, int port) {
-    int perPort = 2 * orders.count();
-    for (int row = 0; row < orders.count(); row++) {
-      for (int column = 0; column < orders.count(); column++) {
-        double out = -orders.at(row) * THIRD;
-        double in = -orders.at(column) * THIRD;
-        for (int line = 0; line < from.length; line++) {
-          int fromRow = Math.floorMod(line - 1, from.length) * perPort + 2 * row;
-          int fromColumn = (port - 1) * perPort + 2 * column;
-          turnBlock(
-              slope,
-              fromRow,
-              fromColumn,
-              line * perPort + 2 * row,
-              port * perPort + 2 * column,
-              out,
-              in);
-        }
-      }
-    }
-  }
-
-  /** A two-by-two block B becomes T(out)·B·T(-in), T turning a phasor. */
-  private static void turnBlock(
-      DeviceSlope s, int fromRow, int fromColumn, int row, int column, double out, double in) {
-    double a = s.get(fromRow, fromColumn);
-    double b = s.get(fromRow, fromColumn + 1);
-    double c = s.get(fromRow + 1, fromColumn);
-    double d = s.get(fromRow + 1, fromColumn + 1);
-    double co = Math.cos(out);
-    double so = Math.sin(out);
-    double ci = Math.cos(in);
-    double si = Math.sin(in);
-    double topRe = co * a - so * c;
-    double topIm = co * b - so * d;
-    double lowRe = so * a + co * c;
-    double lowIm = so * b + co * d;
-    s.set(row, column, topRe * ci - topIm * si);
-    s.set(row, column + 1, topRe * si + topIm * ci);
-    s.set(row + 1, column, lowRe * ci - lowIm * si);
-    s.set(row + 1, column + 1, lowRe * si + lowIm * ci);
   }
 }

@@ -1,6 +1,7 @@
 package fourthwire.audit.solve;
 
 import fourthwire.audit.plan.Device;
+import fourthwire.load.model.PortSpectra;
 import fourthwire.quantity.Spectrum;
 import fourthwire.site.Background;
 import java.util.List;
@@ -40,6 +41,17 @@ final class OrdersInPlay {
 
   int at(int position) {
     return orders[position];
+  }
+
+  /** Writes these orders of a block of spectra into a row from its start on. */
+  void copy(PortSpectra spectra, double[] row, int start) {
+    int at = start;
+    for (int port = 0; port < spectra.ports(); port++) {
+      for (int order : orders) {
+        row[at++] = spectra.re[port][order];
+        row[at++] = spectra.im[port][order];
+      }
+    }
   }
 
   /**

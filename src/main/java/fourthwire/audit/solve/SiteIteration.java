@@ -4,25 +4,16 @@ import fourthwire.audit.AuditFailedException;
 import fourthwire.audit.Progress;
 import fourthwire.audit.plan.Device;
 import fourthwire.audit.plan.NetworkPlan;
-import fourthwire.network.Excitation;
-import fourthwire.network.FactoredOrder;
-import fourthwire.network.OrderSolution;
-import fourthwire.network.SolutionCheck;
 import fourthwire.network.TreeNetwork;
 import fourthwire.network.Trunk;
-import fourthwire.network.UnsolvableOrderException;
-import fourthwire.quantity.Spectrum;
 import fourthwire.site.Filter;
 import fourthwire.site.Survey;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.HashMap;
 import java.util.List;
-import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
-import java.util.function.IntConsumer;
-import java.util.stream.IntStream;
 
 /** One state of a site being solved, from the first guess to where loads and network agree. */
 final class SiteIteration {
@@ -43,9 +34,7 @@ final class SiteIteration {
   private final OrdersInPlay orders;
   private final List<DevicePort> loads;
   private final List<ActiveFilter> filters = new ArrayList<>();
-  private final FactoredOrder[] factors;
-  private final Excitation[] excitations;
-  private final OrderSolution[] solutions;
+  private final StateNetwork state;
 
   /** Of a few loads that speak for all: where they stand. */
   private final Optional<Trunk> few;
@@ -62,9 +51,7 @@ final class SiteIteration {
     this.omega = 2 * Math.PI * survey.settings().frequencyHz();
     this.orders = OrdersInPlay.of(survey.background(), devices);
     this.loads = new ArrayList<>();
-    this.factors = new FactoredOrder[Spectrum.HIGHEST_ORDER + 1];
-    this.excitations = new Excitation[Spectrum.HIGHEST_ORDER + 1];
-    this.solutions = new OrderSolution[Spectrum.HIGHEST_ORDER + 1];
+    this.state = new StateNetwork(plan, orders, workers);
     this.few = Optional.empty();
     int at = addLoads(devices.stream().filter(d -> !d.model().isLinear()).toList());
     for (Filter filter : survey.filters()) {
@@ -85,9 +72,7 @@ final class SiteIteration {
     this.omega = whole.omega;
     this.orders = whole.orders;
     this.loads = sample;
-    this.factors = whole.factors;
-    this.excitations = whole.excitations;
-    this.solutions = whole.solutions;
+    this.state = whole.state;
     this.few = Optional.of(Trunk.of(network, sample.stream().mapToInt(l -> l.place().node())));
     this.length = sample.stream().mapToInt(load -> load.length(orders)).sum();
   }
@@ -118,7 +103,7 @@ final class SiteIteration {
    */
   SiteSolution solve(LoadCurrents guess, SlopeBook book, Progress progress) {
     progress.at(0, "Eliminating the network");
-    eachOrder(this::factor);
+    state.factor();
     double[] x = new double[length];
     if (length > 0) {
       double[] g = new double[length];
@@ -135,8 +120,8 @@ final class SiteIteration {
     } else {
       solveNetwork(x);
     }
-    check();
-    return new SiteSolution(network, orders, solutions, remarks());
+    state.check();
+    return new SiteSolution(network, orders, state.solutions(), remarks());
   }
 
   /** What has to be known of loads' currents, by circuit. */
@@ -179,7 +164,7 @@ final class SiteIteration {
   private void beginTogether(double[] x) {
     Arrays.fill(x, 0);
     solveNetwork(x);
-    series().applyTogether(solutions[1]);
+    series().applyTogether(state.solutions()[1]);
     image(x, x);
   }
 
@@ -221,13 +206,13 @@ final class SiteIteration {
   }
 
   private SeriesEstimate series() {
-    return new SeriesEstimate(network, factors, loads, omega, workers);
+    return new SeriesEstimate(network, state.factors(), loads, omega, workers);
   }
 
   private void iterate(double[] x, double[] g, SlopeBook book, Progress progress) {
     Settling settling = new Settling(loads, filters, orders);
     NewtonStep newton =
-        new NewtonStep(network, factors, orders, loads, filters, omega, book, workers);
+        new NewtonStep(network, state.factors(), orders, loads, filters, omega, book, workers);
     for (int pass = 1; pass <= MOST_PASSES; pass++) {
       settling.look(x, g);
       if (few.isPresent()) {
@@ -237,7 +222,7 @@ final class SiteIteration {
       }
       if (few.isPresent()
           ? settling.change() <= ROUGHLY
-          : settling.loadsSettled() && conductorsSettled(g)) {
+          : settling.loadsSettled() && state.settled(g, loads, filters)) {
         last = g;
         return;
       }
@@ -298,10 +283,10 @@ final class SiteIteration {
     workers.each(
         loads.size(),
         d -> {
-          loads.get(d).takeVoltages(orders, solutions);
+          loads.get(d).takeVoltages(orders, state.solutions());
           loads.get(d).solve(orders, omega, x, g);
         });
-    filters.forEach(filter -> filter.solve(orders, solutions, x, g));
+    filters.forEach(filter -> filter.solve(orders, state.solutions(), x, g));
     return loads.stream()
         .filter(load -> !load.failure().isEmpty())
         .findFirst()
@@ -315,88 +300,7 @@ final class SiteIteration {
         .orElse("");
   }
 
-  private void factor(int order) {
-    try {
-      factors[order] = network.factor(order);
-    } catch (UnsolvableOrderException e) {
-      throw new AuditFailedException(
-          "The network has no unique solution at order %d: %s".formatted(order, e.getMessage()), e);
-    }
-    excitations[order] = network.excitation();
-    solutions[order] = factors[order].solve(excitations[order]);
-  }
-
   private void solveNetwork(double[] x) {
-    workers.each(orders.count(), k -> solveOrder(k, x));
-  }
-
-  private void solveOrder(int position, double[] x) {
-    int h = orders.at(position);
-    Excitation excitation = excitations[h].clear();
-    plan.supply().excite(h, excitation);
-    for (DevicePort load : loads) {
-      for (int port = 0; port < load.ports(); port++) {
-        int at = load.offset() + 2 * (port * orders.count() + position);
-        load.draw(excitation, port, x[at], x[at + 1]);
-      }
-    }
-    for (ActiveFilter filter : filters) {
-      filter.feed(excitation, orders, position, x, 0);
-    }
-    if (few.isPresent()) {
-      factors[h].solve(excitation, solutions[h], few.get());
-    } else {
-      factors[h].solve(excitation, solutions[h]);
-    }
-  }
-
-  /** Solves the network for what the loads draw now, and says whether its currents stood still. */
-  private boolean conductorsSettled(double[] g) {
-    int conductors = network.conductors();
-    double[] square = new double[conductors];
-    double[] moved = new double[conductors];
-    double[] before = new double[2 * conductors];
-    for (int k = 0; k < orders.count(); k++) {
-      OrderSolution s = solutions[orders.at(k)];
-      for (int c = 0; c < conductors; c++) {
-        before[2 * c] = s.currentRe(c);
-        before[2 * c + 1] = s.currentIm(c);
-      }
-      solveOrder(k, g);
-      for (int c = 0; c < conductors; c++) {
-        double re = s.currentRe(c);
-        double im = s.currentIm(c);
-        square[c] += re * re + im * im;
-        double dRe = re - before[2 * c];
-        double dIm = im - before[2 * c + 1];
-        moved[c] += dRe * dRe + dIm * dIm;
-      }
-    }
-    double largest = Math.sqrt(Arrays.stream(square).max().orElse(0));
-    return IntStream.range(0, conductors)
-        .allMatch(
-            c ->
-                Math.sqrt(moved[c])
-                    <= CoupledSolver.CONDUCTOR_TOLERANCE * (Math.sqrt(square[c]) + largest / 100));
-  }
-
-  /** Nothing leaves here that breaks Kirchhoff's laws or the balance of power. */
-  private void check() {
-    eachOrder(
-        h -> {
-          SolutionCheck check = factors[h].check(excitations[h], solutions[h]);
-          if (!(check.worst() <= CoupledSolver.CHECK_TOLERANCE)) {
-            throw new AuditFailedException(
-                String.format(
-                    Locale.ROOT,
-                    "The solution of order %d does not balance (%.2e); no figure is given",
-                    h,
-                    check.worst()));
-          }
-        });
-  }
-
-  private void eachOrder(IntConsumer action) {
-    workers.each(orders.count(), k -> action.accept(orders.at(k)));
+    state.solve(x, loads, filters, few);
   }
 }
