@@ -47,8 +47,7 @@ public final class SiteBenchmark {
       new SiteBenchmark().run(survey, Integer.parseInt(args[3]));
     }
     if (args.length > 4) {
-      new SiteBenchmark()
-          .audit(survey, Integer.parseInt(args[3]), Integer.parseInt(args[4]));
+      new SiteBenchmark().audit(survey, Integer.parseInt(args[3]), Integer.parseInt(args[4]));
     }
     long peak =
         ManagementFactory.getMemoryPoolMXBeans().stream()
@@ -77,8 +76,7 @@ public final class SiteBenchmark {
 
   private void audit(Survey survey, int threads, int draws) {
     AuditRequest request =
-        new AuditRequest(
-            survey, Optional.empty(), Map.of(), true, draws, AuditRequest.SEED);
+        new AuditRequest(survey, Optional.empty(), Map.of(), true, draws, AuditRequest.SEED);
     new HarmonicAudit(threads).run(request, (share, message) -> stage(message));
     lap(stage);
   }

@@ -4,7 +4,9 @@ import fourthwire.load.model.LoadSolver;
 import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.load.model.PortSpectra;
 
-/** Finds a load's slope by small steps of its electromotive force, from where it was solved last. */
+/**
+ * Finds a load's slope by small steps of its electromotive force, from where it was solved last.
+ */
 final class SlopeFinder {
   private static final double THIRD = 2 * Math.PI / 3;
 
@@ -21,11 +23,7 @@ final class SlopeFinder {
    * @param drawn what it drew then; used as a work block
    */
   SlopeFinder(
-      LoadSolver solver,
-      PortSpectra emf,
-      PortSpectra drawn,
-      double seriesOhm,
-      double seriesHenry) {
+      LoadSolver solver, PortSpectra emf, PortSpectra drawn, double seriesOhm, double seriesHenry) {
     this.solver = solver;
     this.emf = emf;
     this.drawn = drawn;

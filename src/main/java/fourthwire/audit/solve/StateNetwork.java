@@ -63,8 +63,7 @@ final class StateNetwork {
    * @param x what loads draw and filters feed
    * @param part where all loads stand, if only that is to be solved
    */
-  void solve(
-      double[] x, List<DevicePort> loads, List<ActiveFilter> filters, Optional<Trunk> part) {
+  void solve(double[] x, List<DevicePort> loads, List<ActiveFilter> filters, Optional<Trunk> part) {
     workers.each(orders.count(), k -> solve(k, x, loads, filters, part));
   }
 
