@@ -21,9 +21,6 @@ import java.util.List;
  * takes it that the injecting part answers a change of voltage like a conductance that draws its
  * power, which leaves the fixed point where it is. Three lines are taken in symmetrical components,
  * order by order. N units are one unit N times as large, as everywhere.
- *
- * <p>In a row of states each starts from the one before; where it does not get there from that, it
- * starts afresh.
  */
 public final class LoadTrial {
   /** Of the electromotive force's fundamental; an audit asks for 1e-5 of the nominal voltage. */
@@ -32,27 +29,23 @@ public final class LoadTrial {
   private static final Phasor ONE = new Phasor(1, 0);
 
   private final double frequencyHz;
+  private final TrialSource source;
+  private final LoadModel model;
+  private final LoadSolver solver;
   private final int ports;
-  private TrialSource source;
-  private LoadModel model;
-  private LoadSolver solver;
-  private PortSpectra emf;
+  private final PortSpectra emf;
   private final PortSpectra seen;
   private final PortSpectra injected;
   private final Phasor[][] voltage;
   private final Phasor[][] current;
   private double conductance;
 
-  /** Whether what is seen is a state to start from. */
-  private boolean warm;
-
-  /** For states of this equipment behind this source. */
-  LoadTrial(LoadRequest request, TrialSource source) {
+  private LoadTrial(LoadRequest request, TrialSource source) {
     this.frequencyHz = request.frequencyHz();
+    this.source = source;
     this.model = LoadModels.of(request);
     this.solver = model.newSolver();
     this.ports = model.ports();
-    this.source = source;
     this.emf = source.emf(ports);
     this.seen = new PortSpectra(ports);
     this.injected = new PortSpectra(ports);
@@ -71,42 +64,8 @@ public final class LoadTrial {
     return new LoadTrial(request, source).solved();
   }
 
-  /** Takes the same equipment in another state. */
-  void take(LoadRequest state) {
-    model = LoadModels.of(state);
-    solver = model.newSolver();
-  }
-
-  /** Takes another impedance or background of the source. */
-  void take(TrialSource next) {
-    source = next;
-    emf = next.emf(ports);
-  }
-
-  /**
-   * The steady state of what was taken.
-   *
-   * @throws NoSteadyStateException as {@link #solve}
-   */
-  TrialResult solved() {
-    boolean fromLast = warm;
-    warm = false;
-    TrialResult result;
-    try {
-      result = from(fromLast ? packed(seen) : packed(emf));
-    } catch (NoSteadyStateException none) {
-      conductance = 0;
-      solver = model.newSolver();
-      if (!fromLast) {
-        throw none;
-      }
-      result = from(packed(emf));
-    }
-    warm = true;
-    return result;
-  }
-
-  private TrialResult from(double[] start) {
+  private TrialResult solved() {
+    double[] start = packed(emf);
     double fundamental = Math.hypot(emf.re[0][1], emf.im[0][1]);
     FixedPoint.of(this::image, start, TOLERANCE * fundamental);
     List<Spectrum> amps = new ArrayList<>();

@@ -8,7 +8,7 @@ import java.util.List;
 import java.util.Optional;
 import java.util.function.DoubleFunction;
 
-/** The same equipment in a row of states, each solved from the one before. */
+/** The same equipment in a row of states, each solved for itself. */
 public final class Sweep {
   private Sweep() {}
 
@@ -24,46 +24,30 @@ public final class Sweep {
   public static List<Point> overLevel(
       LoadRequest request, TrialSource source, List<Double> levels) {
     LoadRequest sized = LoadModels.sized(request);
-    LoadTrial trial = new LoadTrial(sized, source);
-    return over(
-        levels,
-        level -> {
-          trial.take(sized.inState(sized.units(), level));
-          return trial.solved();
-        });
+    return over(levels, level -> sized.inState(sized.units(), level), source);
   }
 
-  /** Over the number of equal units behind the one source: I(N, Z) = N/M·I(M, N/M·Z). */
+  /** Over the number of equal units behind the one source. */
   public static List<Point> overUnits(LoadRequest request, TrialSource source, List<Double> units) {
-    LoadTrial trial = new LoadTrial(LoadModels.sized(request), source);
-    return over(
-        units,
-        n -> {
-          double times = n / request.units();
-          trial.take(source.times(times));
-          return trial.solved().times(times);
-        });
+    LoadRequest sized = LoadModels.sized(request);
+    return over(units, n -> sized.inState(n, sized.demand()), source);
   }
 
   /** Over a dimmer's firing angle, degrees. */
   public static List<Point> overFiring(
       LoadRequest request, TrialSource source, List<Double> degrees) {
-    LoadTrial trial = new LoadTrial(request, source);
-    return over(
-        degrees,
-        d -> {
-          trial.take(request.withColumns(fired(d)));
-          return trial.solved();
-        });
+    return over(degrees, d -> request.withColumns(fired(d)), source);
   }
 
-  private static List<Point> over(List<Double> values, DoubleFunction<TrialResult> solved) {
-    return values.stream().map(v -> new Point(v, tried(v, solved))).toList();
+  /** Each state by itself; the equipment is sized once. */
+  private static List<Point> over(
+      List<Double> values, DoubleFunction<LoadRequest> request, TrialSource source) {
+    return values.stream().map(v -> new Point(v, tried(request.apply(v), source))).toList();
   }
 
-  private static Optional<TrialResult> tried(double at, DoubleFunction<TrialResult> solved) {
+  private static Optional<TrialResult> tried(LoadRequest request, TrialSource source) {
     try {
-      return Optional.of(solved.apply(at));
+      return Optional.of(LoadTrial.solve(request, source));
     } catch (NoSteadyStateException none) {
       return Optional.empty();
     }

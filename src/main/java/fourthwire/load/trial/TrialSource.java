@@ -20,11 +20,6 @@ public record TrialSource(double nominalV, double ohm, double henry, Spectrum ba
     return new TrialSource(nominalV, 0, 0, Spectrum.ZERO);
   }
 
-  /** The same behind so many times the impedance. */
-  TrialSource times(double factor) {
-    return new TrialSource(nominalV, factor * ohm, factor * henry, background);
-  }
-
   /** Impedance at an order, ohms. */
   Phasor impedance(int order, double frequencyHz) {
     return new Phasor(ohm, 2 * Math.PI * frequencyHz * order * henry);

@@ -4,7 +4,6 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.assertThatThrownBy;
 import static org.assertj.core.api.Assertions.within;
 
-import fourthwire.load.LoadModels;
 import fourthwire.load.LoadRequest;
 import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.quantity.Distortion;
@@ -150,29 +149,6 @@ class LoadTrialTest {
     // closed form at 90 degrees, orders 2 to 50: √(rms² - I1²) on I1 is 65.1 % over all orders
     assertThat(thd(firing.get(0).result().orElseThrow())).isLessThan(0.01);
     assertThat(thd(firing.get(1).result().orElseThrow())).isBetween(63.0, 65.1);
-  }
-
-  /** Starting from the state before changes nothing of what is found: as each solved by itself. */
-  @ParameterizedTest
-  @EnumSource(value = LoadKind.class, names = "MEASURED", mode = EnumSource.Mode.EXCLUDE)
-  void aSweepFindsWhatEachStateByItselfDoes(LoadKind kind) {
-    LoadRequest three = request(kind, 100, 3);
-    TrialSource source = source(volts(kind), 0.3, 0.2, FLAT);
-    for (Sweep.Point p : Sweep.overUnits(three, source, List.of(1.0, 8.0, 30.0, 5.0))) {
-      same(p, LoadTrial.solve(three.inState(p.at(), 1), source));
-    }
-    for (Sweep.Point p : Sweep.overLevel(three, source, List.of(0.1, 1.0, 0.4))) {
-      same(p, LoadTrial.solve(LoadModels.sized(three).inState(3, p.at()), source));
-    }
-  }
-
-  private static void same(Sweep.Point point, TrialResult alone) {
-    TrialResult swept = point.result().orElseThrow();
-    for (int h = 1; h <= Spectrum.HIGHEST_ORDER; h++) {
-      assertThat(swept.first().at(h).minus(alone.first().at(h)).magnitude())
-          .as("at %s, order %d", point.at(), h)
-          .isLessThan(1e-4 * alone.first().magnitude(1));
-    }
   }
 
   private static double thd(TrialResult result) {
