@@ -17,6 +17,9 @@ import java.util.stream.Stream;
 
 /** Reads one stored upload from queued to its end. */
 public final class ReadingRun {
+  /** Share of the work that is done once the file is read and analysed. */
+  private static final double STORING = 0.9;
+
   private final ReadingUploads uploads;
   private final ReadingRepository readings;
   private final ReadingReader reader;
@@ -67,6 +70,10 @@ public final class ReadingRun {
     settings.checkNotReadOtherwise(upload.siteId(), upload.meter(), files, plan.mapping());
     Reading reading = reader.read(files, plan, setting, listener(upload.id()));
     try {
+      stop.check();
+      if (!uploads.progress(upload.id(), STORING, "storing what was read")) {
+        throw new CancellationException("stopped before it was stored");
+      }
       uploads.finish(
           upload.id(),
           readings.add(

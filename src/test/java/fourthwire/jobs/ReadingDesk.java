@@ -1,5 +1,6 @@
 package fourthwire.jobs;
 
+import fourthwire.intake.reading.ReadingReader;
 import fourthwire.intake.reading.upload.FormatReader;
 import fourthwire.intake.survey.ZipSurveyCodec;
 import fourthwire.metering.RawFile;
@@ -25,15 +26,23 @@ final class ReadingDesk {
    * @param database with its tables
    */
   ReadingDesk(DataSource database) {
+    this(database, new FormatReader(), new Stop());
+  }
+
+  /**
+   * With a reader that may fail in its own ways.
+   *
+   * @param database with its tables
+   */
+  ReadingDesk(DataSource database, ReadingReader reader, Stop stop) {
     Store store = new Store(database);
     SiteRepository sites = store.sites(new ZipSurveyCodec());
     site = sites.create(SmallSite.survey("Works"), List.of());
     uploads = store.uploads();
     readings = store.readings();
     ReadingSettings settings = new ReadingSettings(sites, readings);
-    FormatReader reader = new FormatReader();
     service = new ReadingService(uploads, reader, settings, new NoQueue());
-    run = new ReadingRun(uploads, readings, reader, settings, new Stop());
+    run = new ReadingRun(uploads, readings, reader, settings, stop);
   }
 
   /** The reading is started by hand. */
@@ -76,9 +85,5 @@ final class ReadingDesk {
 
   ReadingUploads uploads() {
     return uploads;
-  }
-
-  ReadingService service() {
-    return service;
   }
 }

@@ -44,6 +44,7 @@ final class ColumnName {
           case POWER_FACTOR -> "power_factor";
           case DISPLACEMENT_FACTOR -> "displacement_factor";
           case FREQUENCY -> "frequency_hz";
+          case ENERGY -> o.unit() == SeriesUnit.WATT_HOURS ? "energy_wh" : "";
           case INSTANTANEOUS, OTHER -> "";
         };
     String name = measure.equals("frequency_hz") ? measure : o.phase().place() + "." + measure;

@@ -20,16 +20,18 @@ final class ObservationReader {
           Tags.TYPE_MEAN, Statistic.MEAN);
 
   private static final Map<UUID, ValueSeries.Kind> KINDS =
-      Map.of(
-          Tags.IS_INSTANTANEOUS, ValueSeries.Kind.INSTANTANEOUS,
-          Tags.IS_RMS, ValueSeries.Kind.RMS,
-          Tags.IS_TOTAL_DISTORTION, ValueSeries.Kind.DISTORTION,
-          Tags.IS_ACTIVE_POWER, ValueSeries.Kind.ACTIVE_POWER,
-          Tags.IS_REACTIVE_POWER, ValueSeries.Kind.REACTIVE_POWER,
-          Tags.IS_APPARENT_POWER, ValueSeries.Kind.APPARENT_POWER,
-          Tags.IS_POWER_FACTOR, ValueSeries.Kind.POWER_FACTOR,
-          Tags.IS_DISPLACEMENT_FACTOR, ValueSeries.Kind.DISPLACEMENT_FACTOR,
-          Tags.IS_FREQUENCY, ValueSeries.Kind.FREQUENCY);
+      Map.ofEntries(
+          Map.entry(Tags.IS_INSTANTANEOUS, ValueSeries.Kind.INSTANTANEOUS),
+          Map.entry(Tags.IS_RMS, ValueSeries.Kind.RMS),
+          Map.entry(Tags.IS_TOTAL_DISTORTION, ValueSeries.Kind.DISTORTION),
+          Map.entry(Tags.IS_ACTIVE_POWER, ValueSeries.Kind.ACTIVE_POWER),
+          Map.entry(Tags.IS_REACTIVE_POWER, ValueSeries.Kind.REACTIVE_POWER),
+          Map.entry(Tags.IS_APPARENT_POWER, ValueSeries.Kind.APPARENT_POWER),
+          Map.entry(Tags.IS_POWER_FACTOR, ValueSeries.Kind.POWER_FACTOR),
+          Map.entry(Tags.IS_DISPLACEMENT_FACTOR, ValueSeries.Kind.DISPLACEMENT_FACTOR),
+          Map.entry(Tags.IS_FREQUENCY, ValueSeries.Kind.FREQUENCY),
+          Map.entry(Tags.IS_ENERGY, ValueSeries.Kind.ENERGY),
+          Map.entry(Tags.IS_ENERGY_TAKEN, ValueSeries.Kind.ENERGY));
 
   private final List<Element.Collection> definitions;
   private final Element.Collection observation;
@@ -81,12 +83,12 @@ final class ObservationReader {
     List<Element.Collection> defined = series(definition);
     Optional<SeriesValues> times = Optional.empty();
     for (int k = 0; k < defined.size(); k++) {
-      if (defined.get(k).identifier(Tags.VALUE_TYPE).filter(Tags.TYPE_TIME::equals).isPresent()) {
+      if (isTime(defined.get(k))) {
         times = values(instance, defined.get(k), k);
       }
     }
     if (times.isEmpty()) {
-      notes.add("Channel " + name + " has no times and was left out.");
+      notes.add("Channel " + name + " has no times in seconds or dates and was left out.");
       return;
     }
     double[] seconds = times.get().seconds(start);
@@ -100,6 +102,14 @@ final class ObservationReader {
             .ifPresent(v -> found.add(new ValueSeries(origin, seconds, v)));
       }
     }
+  }
+
+  /** Times counted in cycles tell no seconds. */
+  private static boolean isTime(Element.Collection definition) {
+    boolean cycles =
+        SeriesUnit.of(definition.number(Tags.UNITS).orElse(-1)) == SeriesUnit.CYCLES;
+    return !cycles
+        && definition.identifier(Tags.VALUE_TYPE).filter(Tags.TYPE_TIME::equals).isPresent();
   }
 
   private ValueSeries.Origin origin(

@@ -1,6 +1,10 @@
 package fourthwire.intake.reading.pqdif;
 
-/** Conductors of channels by their number (from memory). */
+/**
+ * Conductors of channels by their number (IEEE 1159.3, the task force's list of standard
+ * identifiers, version 1.5, phases). The sum of lines and neutral is no total: it is nothing in a
+ * four-wire network.
+ */
 public enum Phase {
   NONE("", ""),
   AN("A", "L1"),
@@ -11,7 +15,7 @@ public enum Phase {
   BC("BC", "L2-L3"),
   CA("CA", "L3-L1"),
   RESIDUAL("RES", "N"),
-  NET("", "total"),
+  NET("", ""),
   POSITIVE("", ""),
   NEGATIVE("", ""),
   ZERO("", ""),

@@ -2,7 +2,11 @@ package fourthwire.intake.reading.pqdif;
 
 import java.util.UUID;
 
-/** Identifiers of records and elements (IEEE 1159.3-2003, logical structure; from memory). */
+/**
+ * Identifiers of records, elements and characteristics. What values may be (quantity and value
+ * types, characteristics) is held against the IEEE 1159.3 task force's list of standard
+ * identifiers, version 1.5; records and elements are those of IEEE 1159.3-2003, from memory.
+ */
 final class Tags {
   static final UUID CONTAINER = of("89738606-f1c3");
   static final UUID DATA_SOURCE = of("89738619-f1c3");
@@ -54,6 +58,8 @@ final class Tags {
   static final UUID IS_APPARENT_POWER = characteristic("a6b31ae6");
   static final UUID IS_DISPLACEMENT_FACTOR = characteristic("a6b31ad3");
   static final UUID IS_FREQUENCY = UUID.fromString("07ef68af-9ff5-11d2-b30b-006008b37183");
+  static final UUID IS_ENERGY = UUID.fromString("07ef68a6-9ff5-11d2-b30b-006008b37183");
+  static final UUID IS_ENERGY_TAKEN = UUID.fromString("07ef68a7-9ff5-11d2-b30b-006008b37183");
 
   private Tags() {}
 

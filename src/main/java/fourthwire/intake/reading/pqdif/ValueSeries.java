@@ -52,6 +52,7 @@ public final class ValueSeries {
     POWER_FACTOR,
     DISPLACEMENT_FACTOR,
     FREQUENCY,
+    ENERGY,
     /** An identifier that is not known here. */
     OTHER
   }
