@@ -2,9 +2,9 @@ package fourthwire.jobs;
 
 import static org.assertj.core.api.Assertions.assertThat;
 
+import fourthwire.intake.reading.LogProposal;
 import fourthwire.intake.reading.ReadingPlan;
 import fourthwire.intake.reading.ReadingReader;
-import fourthwire.intake.reading.LogProposal;
 import fourthwire.intake.reading.ReadingSetting;
 import fourthwire.intake.reading.upload.FormatReader;
 import fourthwire.metering.RawFile;

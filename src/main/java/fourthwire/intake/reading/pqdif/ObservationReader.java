@@ -106,8 +106,7 @@ final class ObservationReader {
 
   /** Times counted in cycles tell no seconds. */
   private static boolean isTime(Element.Collection definition) {
-    boolean cycles =
-        SeriesUnit.of(definition.number(Tags.UNITS).orElse(-1)) == SeriesUnit.CYCLES;
+    boolean cycles = SeriesUnit.of(definition.number(Tags.UNITS).orElse(-1)) == SeriesUnit.CYCLES;
     return !cycles
         && definition.identifier(Tags.VALUE_TYPE).filter(Tags.TYPE_TIME::equals).isPresent();
   }
