@@ -1,5 +1,6 @@
 package fourthwire.audit.solve;
 
+import fourthwire.audit.AuditFailedException;
 import fourthwire.audit.Progress;
 import fourthwire.audit.plan.Device;
 import fourthwire.audit.plan.NetworkPlan;
@@ -23,8 +24,8 @@ import java.util.Optional;
  * {@value #LOAD_TOLERANCE} of its rms, no load's voltage moved by more than {@value
  * #VOLTAGE_TOLERANCE} of nominal, and no conductor's current by more than {@value
  * #CONDUCTOR_TOLERANCE} of its rms (and a hundredth of that of the site's largest). Otherwise
- * {@link fourthwire.audit.AuditFailedException} names the load and the order; the last iterate is
- * never a result. Kirchhoff's laws and the balance of power are checked on every result.
+ * {@link AuditFailedException} names the load and the order; the last iterate is never a result.
+ * Kirchhoff's laws and the balance of power are checked on every result.
  *
  * <p>One solver serves many states of a site, one after the other: hours, draws, supplies. Each
  * starts from what the loads drew in the one before, whatever of them is still there, and so takes
@@ -45,6 +46,7 @@ public final class CoupledSolver {
 
   private final Survey survey;
   private final Workers workers;
+  private boolean allOrders;
   private LoadCurrents before = LoadCurrents.NONE;
   private Optional<SlopeBook> book = Optional.empty();
 
@@ -60,14 +62,35 @@ public final class CoupledSolver {
    * @param plan the network of this state
    * @param devices every load of this state; their linear parts stand in the plan's network already
    * @param progress told of every pass; what it throws ends the solution
-   * @throws fourthwire.audit.AuditFailedException where network and loads do not settle
+   * @throws AuditFailedException where network and loads do not settle
    */
   public SiteSolution solve(NetworkPlan plan, List<Device> devices, Progress progress) {
-    SiteIteration iteration = new SiteIteration(survey, plan, devices, workers);
+    OrdersInPlay orders =
+        allOrders ? OrdersInPlay.all() : OrdersInPlay.of(survey.background(), devices);
+    SiteIteration iteration = new SiteIteration(survey, plan, devices, orders, workers);
     SlopeBook slopes = book.filter(iteration::canUse).orElseGet(iteration::newBook);
     book = Optional.of(slopes);
-    SiteSolution solution = iteration.solve(before, slopes, progress);
+    SiteSolution solution;
+    try {
+      solution = iteration.solve(before, slopes, progress);
+    } catch (AuditFailedException e) {
+      if (iteration.losesEvenOrders()) {
+        return withAllOrders(plan, devices, progress);
+      }
+      throw e;
+    }
+    if (iteration.losesEvenOrders()) {
+      return withAllOrders(plan, devices, progress);
+    }
     before = iteration.currents();
     return solution;
+  }
+
+  /**
+   * Once a load has shown half-waves that differ, this state and those to come are solved whole.
+   */
+  private SiteSolution withAllOrders(NetworkPlan plan, List<Device> devices, Progress progress) {
+    allOrders = true;
+    return solve(plan, devices, progress);
   }
 }

@@ -7,6 +7,7 @@ import fourthwire.load.model.PortSpectra;
 import fourthwire.network.Excitation;
 import fourthwire.network.OrderSolution;
 import fourthwire.network.TreeNetwork;
+import fourthwire.quantity.Spectrum;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
@@ -291,6 +292,20 @@ final class DevicePort {
         volts[at++] += ohm * im + x * re;
       }
     }
+  }
+
+  /** Whether the two half-waves of what it drew last differ. */
+  boolean drawsEvenOrders() {
+    double even = 0;
+    double odd = 0;
+    for (int port = 0; port < drawn.ports(); port++) {
+      for (int h = 1; h <= Spectrum.HIGHEST_ORDER; h++) {
+        double amps = Math.hypot(drawn.re[port][h], drawn.im[port][h]);
+        even = Math.max(even, h % 2 == 0 ? amps : 0);
+        odd = Math.max(odd, h % 2 == 1 ? amps : 0);
+      }
+    }
+    return even > CoupledSolver.LOAD_TOLERANCE * odd;
   }
 
   /** The electromotive force last solved at. */

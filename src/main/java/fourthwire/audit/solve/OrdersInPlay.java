@@ -9,8 +9,10 @@ import java.util.Optional;
 import java.util.stream.IntStream;
 
 /**
- * The orders that can occur: all of 1 to 50 where a source or a given spectrum has an even one,
- * else the odd ones, since every computed load then draws alike half-waves.
+ * The orders that can occur: all of 1 to 50 where a source, a given spectrum or a load has an even
+ * one, else the odd ones. Computed loads draw alike half-waves as a rule; a bridge with a small
+ * capacitor behind a soft source may hold a state only whose half-waves differ, which shows when it
+ * is solved.
  */
 final class OrdersInPlay {
   private final int[] orders;
@@ -26,8 +28,21 @@ final class OrdersInPlay {
                 .map(d -> d.placement().request().spectrum())
                 .flatMap(Optional::stream)
                 .anyMatch(OrdersInPlay::hasEven);
-    return new OrdersInPlay(
-        IntStream.rangeClosed(1, Spectrum.HIGHEST_ORDER).filter(h -> even || h % 2 == 1).toArray());
+    return even ? all() : new OrdersInPlay(whole().filter(h -> h % 2 == 1).toArray());
+  }
+
+  /** All orders. */
+  static OrdersInPlay all() {
+    return new OrdersInPlay(whole().toArray());
+  }
+
+  private static IntStream whole() {
+    return IntStream.rangeClosed(1, Spectrum.HIGHEST_ORDER);
+  }
+
+  /** Whether currents of even orders would be lost. */
+  boolean oddOnly() {
+    return orders[orders.length - 1] == Spectrum.HIGHEST_ORDER - 1;
   }
 
   private static boolean hasEven(Spectrum spectrum) {

@@ -44,12 +44,13 @@ final class SiteIteration {
   private final int length;
   private double[] last = new double[0];
 
-  SiteIteration(Survey survey, NetworkPlan plan, List<Device> devices, Workers workers) {
+  SiteIteration(
+      Survey survey, NetworkPlan plan, List<Device> devices, OrdersInPlay orders, Workers workers) {
     this.plan = plan;
     this.workers = workers;
     this.network = plan.network();
     this.omega = 2 * Math.PI * survey.settings().frequencyHz();
-    this.orders = OrdersInPlay.of(survey.background(), devices);
+    this.orders = orders;
     this.loads = new ArrayList<>();
     this.state = new StateNetwork(plan, orders, workers);
     this.few = Optional.empty();
@@ -135,6 +136,11 @@ final class SiteIteration {
       }
     }
     return byCircuit;
+  }
+
+  /** Whether a load draws even orders that are not among this state's. */
+  boolean losesEvenOrders() {
+    return orders.oddOnly() && loads.stream().anyMatch(DevicePort::drawsEvenOrders);
   }
 
   /** An empty book of slopes over this state's orders. */
