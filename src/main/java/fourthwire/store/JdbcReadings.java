@@ -204,6 +204,7 @@ final class JdbcReadings implements ReadingRepository {
   @Override
   public boolean delete(long readingId) {
     List<Long> owned = new ArrayList<>();
+    series.delete(readingId);
     boolean gone =
         Boolean.TRUE.equals(
             transaction.execute(

@@ -88,6 +88,23 @@ final class SeriesTables implements SeriesRepository {
         rows);
   }
 
+  /**
+   * Removes a log's rows, a quantity at a time: outside a transaction no more than that is then
+   * kept for an undo, however long the log.
+   */
+  void delete(long readingId) {
+    int most =
+        jdbc.sql("select coalesce(max(quantity), -2) from series_quantities where reading_id = ?")
+            .param(readingId)
+            .query(Integer.class)
+            .single();
+    for (int q = TIMES; q <= most; q++) {
+      jdbc.sql("delete from series_chunks where reading_id = ? and quantity = ?")
+          .params(readingId, q)
+          .update();
+    }
+  }
+
   @Override
   public List<String> quantities(long readingId) {
     return jdbc.sql("select name from series_quantities where reading_id = ? order by quantity")
