@@ -100,7 +100,7 @@ public final class DurationPlot {
     if (value >= scale.low() && value <= scale.high()) {
       double y = scale.down(value, HEIGHT_PX);
       svg.add("line", "class", "full-mark", "x1", 0, "x2", "100%", "y1", y, "y2", y);
-      svg.text(label, "class", "limit-label", "x", "100%", "y", y - 3, "text-anchor", "end");
+      svg.text(label, "class", "limit-label", "x", "100%", "y", y + 13, "text-anchor", "end");
     }
   }
 

@@ -113,9 +113,11 @@ class ReadingPageMaker {
     facts.add(fact("files", String.join(", ", entry.files())));
     facts.add(fact("when", period(reading, survey)));
     facts.add(fact("count." + reading.kind().word(), Numbers.withDecimals(reading.count(), 0)));
-    reading
-        .sampleRateHz()
-        .ifPresent(rate -> facts.add(fact("rate", Numbers.plain(rate, words.of("reading.hz")))));
+    if (reading.capture().isPresent()) {
+      reading
+          .sampleRateHz()
+          .ifPresent(rate -> facts.add(fact("rate", Numbers.plain(rate, words.of("reading.hz")))));
+    }
     reading.log().ifPresent(l -> facts.add(fact("interval", seconds(l))));
     reading.capture().ifPresent(c -> facts.add(fact("frequency", frequency(c))));
     facts.add(fact("sha", entry.sha256()));
