@@ -68,7 +68,8 @@ final class MeasuredSpectrum implements LoadModel {
     double v = square > 0 ? Math.sqrt(square) - w.re() : 0;
     if (!(v > 0)) {
       throw new NoSteadyStateException(
-          "the measured current drops more than the source's whole voltage in its impedance");
+              "the measured current drops more than the source's whole voltage in its impedance")
+          .since(NoSteadyStateException.Why.TOO_MUCH);
     }
     return Math.atan2(e.im(), e.re()) - Math.atan2(w.im(), v + w.re());
   }

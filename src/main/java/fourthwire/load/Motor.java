@@ -70,7 +70,8 @@ final class Motor implements LoadModel {
     double root = half * half - drop.re() * drop.re() - drop.im() * drop.im();
     if (!(root >= 0) || !(half > 0)) {
       throw new NoSteadyStateException(
-          "a motor asks for more power than its source impedance lets through");
+              "a motor asks for more power than its source impedance lets through")
+          .since(NoSteadyStateException.Why.TOO_MUCH);
     }
     double voltsSquared = half + Math.sqrt(root);
     Phasor i = perLine.times(e).over(new Phasor(voltsSquared, 0).plus(drop));

@@ -1,5 +1,7 @@
 package fourthwire.quantity;
 
+import java.util.Arrays;
+
 /**
  * One cycle of a current or voltage as equally spaced instantaneous values: amps or volts, as the
  * name of its holder says.
@@ -48,6 +50,11 @@ public final class Waveform {
       at += step;
       at -= at >= values.length ? values.length : 0;
     }
+  }
+
+  /** Every sample raised by a direct component. */
+  public Waveform raised(double direct) {
+    return new Waveform(Arrays.stream(values).map(v -> v + direct).toArray());
   }
 
   /** Number of samples. */

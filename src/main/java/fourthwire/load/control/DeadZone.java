@@ -24,6 +24,15 @@ final class DeadZone {
     }
   }
 
+  /** Mean over the cycle of the inside part of such a voltage, volts. */
+  double mean(double[] vIm) {
+    double sum = 0;
+    for (int n = 1; n <= ORDERS; n++) {
+      sum += share[n] * vIm[n];
+    }
+    return Math.sqrt(2) * sum;
+  }
+
   /**
    * Adds the inside part of a voltage whose crossing lies at t = 0.
    *

@@ -75,6 +75,9 @@ final class DimmerPulse {
     for (int h = 1; h <= ORDERS; h += step) {
       addOrder(h, end, into);
     }
+    if (!halfWave) {
+      addDirect(end, into);
+    }
     return true;
   }
 
@@ -116,6 +119,18 @@ final class DimmerPulse {
     if (decay < Double.POSITIVE_INFINITY) {
       addDecay(h, end, share * atFiring, into);
     }
+  }
+
+  /** Mean over the cycle, amps. */
+  private void addDirect(double end, PortSpectra into) {
+    double charge = 0;
+    for (int n = 1; n <= highest; n++) {
+      charge += re[n] * sines[n] + im[n] * cosines[n];
+    }
+    if (decay < Double.POSITIVE_INFINITY) {
+      charge -= atFiring * (1 - Math.exp(-(end - fired) * decay)) / decay;
+    }
+    into.direct[0] += Math.sqrt(2) * charge / (2 * Math.PI);
   }
 
   private void addDecay(int h, double end, double size, PortSpectra into) {

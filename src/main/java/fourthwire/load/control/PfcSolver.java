@@ -47,6 +47,9 @@ final class PfcSolver {
 
   private int step;
   private boolean lockedToFundamental;
+  /** Mean over the cycle of the voltage inside the dead zones, volts. */
+  private double insideMean;
+
   private double residualRe;
   private double residualIm;
 
@@ -80,6 +83,7 @@ final class PfcSolver {
       current.re[0][h] = g * (vRe[h] - insideRe[h]);
       current.im[0][h] = g * (vIm[h] - insideIm[h]);
     }
+    current.direct[0] = -g * insideMean;
     current.re[0][3] += g * residualRe;
     current.im[0][3] += g * residualIm;
   }
@@ -92,7 +96,8 @@ final class PfcSolver {
       lockedToFundamental = turn >= TURNS_ON_CROSSING;
       double g = conductance();
       if (!(g > 0) || !(Math.hypot(vRe[1], vIm[1]) > 0.2 * volts)) {
-        throw none("the source cannot give what the load asks for", volts, ohm, reactance);
+        throw none("the source cannot give what the load asks for", volts, ohm, reactance)
+            .since(NoSteadyStateException.Why.TOO_MUCH);
       }
       moved = renew(eRe, eIm, g, ohm, reactance);
       if (turn > TURNS_ON_CROSSING && turn % TURNS_ON_CROSSING == 0) {
@@ -128,6 +133,7 @@ final class PfcSolver {
   private double conductance() {
     Arrays.fill(insideRe, 0);
     Arrays.fill(insideIm, 0);
+    insideMean = 0;
     double first = -Math.atan2(vIm[1], vRe[1]);
     addZone(trigger(first));
     if (step == 1) {
@@ -173,6 +179,7 @@ final class PfcSolver {
       zoneIm[h] = 0;
     }
     zone.add(turnedRe, turnedIm, step, step, zoneRe, zoneIm);
+    insideMean += step == 1 ? zone.mean(turnedIm) : 0;
     c = 1;
     s = 0;
     for (int h = 1; h <= ORDERS; h++) {

@@ -14,7 +14,8 @@ public interface LoadSolver {
    * @param emf electromotive force by port and order, rms volts
    * @param seriesOhm series resistance per line, ohms (0 or more); for one port the whole loop's
    * @param seriesHenry series inductance likewise, henries
-   * @param current receives the current into each port, rms amps
+   * @param current receives the current into each port, rms amps, and its direct component where it
+   *     has one
    * @throws NoSteadyStateException where the equipment asks for more than the source can give, or
    *     the solution does not converge
    */

@@ -15,10 +15,17 @@ public final class PortSpectra {
   /** Imaginary parts likewise. */
   public final double[][] im;
 
+  /**
+   * Direct component of a current by port, amps: left where the two half-waves of what a load draws
+   * differ. It stays beside the orders; a network is solved for these only.
+   */
+  public final double[] direct;
+
   /** A block of zeros for this many ports. */
   public PortSpectra(int ports) {
     re = new double[ports][Spectrum.HIGHEST_ORDER + 1];
     im = new double[ports][Spectrum.HIGHEST_ORDER + 1];
+    direct = new double[ports];
   }
 
   /** Number of ports. */
@@ -26,8 +33,9 @@ public final class PortSpectra {
     return re.length;
   }
 
-  /** Sets every phasor to zero. */
+  /** Sets every phasor and direct component to zero. */
   public void clear() {
+    Arrays.fill(direct, 0);
     for (int p = 0; p < re.length; p++) {
       Arrays.fill(re[p], 0);
       Arrays.fill(im[p], 0);

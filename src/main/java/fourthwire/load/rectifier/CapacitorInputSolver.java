@@ -2,6 +2,7 @@ package fourthwire.load.rectifier;
 
 import fourthwire.load.model.LoadSolver;
 import fourthwire.load.model.NoSteadyStateException;
+import fourthwire.load.model.NoSteadyStateException.Why;
 import fourthwire.load.model.PortSpectra;
 import fourthwire.load.rectifier.loop.TwoPathSolver;
 import fourthwire.load.rectifier.path.BridgeLoad;
@@ -23,9 +24,9 @@ import java.util.Optional;
  * <p>An instance is a few numbers (the last state, to start from); the workspace is the thread's.
  */
 final class CapacitorInputSolver implements LoadSolver {
-  private static final String UNSETTLED =
-      "the source cannot give what the load asks for, or the current does not repeat from cycle to"
-          + " cycle";
+  private static final String TOO_MUCH = "the source cannot give what the load asks for";
+
+  private static final String NO_REPEAT = "the current does not repeat from cycle to cycle";
 
   private static final String HUNTS =
       "its choke and capacitor swing against its constant power, and the current does not repeat"
@@ -77,6 +78,7 @@ final class CapacitorInputSolver implements LoadSolver {
       lastV = search.lastV;
       lastI = search.lastI;
       search.trace().harmonics(search.halfWave(), current.re[0], current.im[0]);
+      current.direct[0] = search.trace().direct(search.halfWave());
     }
     return found;
   }
@@ -95,6 +97,8 @@ final class CapacitorInputSolver implements LoadSolver {
   }
 
   private NoSteadyStateException refusal() {
+    boolean emptied = twoPaths.map(TwoPathSolver::emptied).orElse(search.emptied());
+    boolean hunts = twoPaths.isPresent() && twoPaths.get().hunts();
     return NoSteadyStateException.of(
         "a capacitor-input rectifier of %s W finds no steady state at %s V peak behind %s ohm"
             + " and %s mH: %s",
@@ -102,7 +106,8 @@ final class CapacitorInputSolver implements LoadSolver {
         search.peak(),
         search.ohm(),
         search.henry() * 1e3,
-        twoPaths.isPresent() && twoPaths.get().hunts() ? HUNTS : UNSETTLED);
+        hunts ? HUNTS : emptied ? TOO_MUCH : NO_REPEAT)
+        .since(emptied ? Why.TOO_MUCH : Why.NO_REPEAT);
   }
 
   /** Whether that record is half a cycle, whose mirror image is the other. */

@@ -9,6 +9,7 @@ import fourthwire.load.model.PortSpectra;
 import fourthwire.quantity.Phasor;
 import fourthwire.quantity.Spectrum;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 
 /**
@@ -76,7 +77,8 @@ public final class LoadTrial {
       amps.add(Spectrum.of(h -> i[h]));
       volts.add(Spectrum.of(h -> v[h]));
     }
-    return TrialResult.of(amps, volts, solver.remarks());
+    List<Double> direct = Arrays.stream(injected.direct).boxed().toList();
+    return TrialResult.of(amps, direct, volts, solver.remarks());
   }
 
   /** One turn: the current at what is seen, the voltages it leaves, what is seen then. */

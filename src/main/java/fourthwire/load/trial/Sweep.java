@@ -3,6 +3,7 @@ package fourthwire.load.trial;
 import fourthwire.load.LoadModels;
 import fourthwire.load.LoadRequest;
 import fourthwire.load.model.NoSteadyStateException;
+import fourthwire.load.model.NoSteadyStateException.Why;
 import fourthwire.site.ModelColumns;
 import java.util.List;
 import java.util.Optional;
@@ -17,8 +18,9 @@ public final class Sweep {
    *
    * @param at load level, number of units or firing angle, as its row says
    * @param result empty where there is no steady state
+   * @param why there is none; empty where there is one
    */
-  public record Point(double at, Optional<TrialResult> result) {}
+  public record Point(double at, Optional<TrialResult> result, Optional<Why> why) {}
 
   /** Over the share of rated power, each in (0, 1]. */
   public static List<Point> overLevel(
@@ -42,14 +44,14 @@ public final class Sweep {
   /** Each state by itself; the equipment is sized once. */
   private static List<Point> over(
       List<Double> values, DoubleFunction<LoadRequest> request, TrialSource source) {
-    return values.stream().map(v -> new Point(v, tried(request.apply(v), source))).toList();
+    return values.stream().map(v -> tried(v, request.apply(v), source)).toList();
   }
 
-  private static Optional<TrialResult> tried(LoadRequest request, TrialSource source) {
+  private static Point tried(double at, LoadRequest request, TrialSource source) {
     try {
-      return Optional.of(LoadTrial.solve(request, source));
+      return new Point(at, Optional.of(LoadTrial.solve(request, source)), Optional.empty());
     } catch (NoSteadyStateException none) {
-      return Optional.empty();
+      return new Point(at, Optional.empty(), Optional.of(none.why()));
     }
   }
 

@@ -16,25 +16,30 @@ import java.util.List;
  * crossing of the terminal voltage's own fundamental (on three lines of its positive sequence).
  *
  * @param current of each line, rms amps
+ * @param direct component of each line's current, amps; 0 where its half-waves mirror each other.
+ *     It is in none of the orders, and in no figure taken from these
  * @param voltage of each port, rms volts; on three lines of each line to the common point
  * @param remarks what has to be known of the current besides, in sentences
  */
-public record TrialResult(List<Spectrum> current, List<Spectrum> voltage, List<String> remarks) {
+public record TrialResult(
+    List<Spectrum> current, List<Double> direct, List<Spectrum> voltage, List<String> remarks) {
   /** Copies the lists. */
   public TrialResult {
     current = List.copyOf(current);
+    direct = List.copyOf(direct);
     voltage = List.copyOf(voltage);
     remarks = List.copyOf(remarks);
   }
 
   /** Takes spectra of any time origin. */
-  static TrialResult of(List<Spectrum> current, List<Spectrum> voltage, List<String> remarks) {
+  static TrialResult of(
+      List<Spectrum> current, List<Double> direct, List<Spectrum> voltage, List<String> remarks) {
     Phasor reference =
         voltage.size() == 3
             ? SymmetricalComponents.of(voltage).positive().at(1)
             : voltage.get(0).at(1);
     double degrees = reference.degrees();
-    return new TrialResult(turned(current, degrees), turned(voltage, degrees), remarks);
+    return new TrialResult(turned(current, degrees), direct, turned(voltage, degrees), remarks);
   }
 
   private static List<Spectrum> turned(List<Spectrum> spectra, double degrees) {
@@ -43,7 +48,11 @@ public record TrialResult(List<Spectrum> current, List<Spectrum> voltage, List<S
 
   /** So many times the current at the same voltage. */
   public TrialResult times(double factor) {
-    return new TrialResult(current.stream().map(s -> s.times(factor)).toList(), voltage, remarks);
+    return new TrialResult(
+        current.stream().map(s -> s.times(factor)).toList(),
+        direct.stream().map(amps -> amps * factor).toList(),
+        voltage,
+        remarks);
   }
 
   /** The current of the first line. */

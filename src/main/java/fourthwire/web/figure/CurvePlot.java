@@ -5,9 +5,15 @@ import java.util.Locale;
 import java.util.OptionalDouble;
 import java.util.function.DoubleUnaryOperator;
 
-/** A few curves over one quantity, told apart by their strokes; a gap where there is no value. */
+/**
+ * A few curves over one quantity, told apart by their strokes; a gap where there is no value, and a
+ * short stroke where one stands between gaps.
+ */
 public final class CurvePlot {
   private static final int UNITS_WIDE = 1000;
+
+  /** Half the stroke of a value by itself. */
+  private static final double ALONE = 8;
 
   private CurvePlot() {}
 
@@ -133,18 +139,29 @@ public final class CurvePlot {
 
   private static String path(List<Place> places, Curve curve, DoubleUnaryOperator y) {
     StringBuilder d = new StringBuilder();
-    boolean pen = false;
     for (int i = 0; i < places.size(); i++) {
       OptionalDouble value = curve.values().get(i);
       if (value.isPresent()) {
-        d.append(pen ? 'L' : 'M')
-            .append(Svg.rounded(UNITS_WIDE * places.get(i).at(), 1))
-            .append(' ')
-            .append(Svg.rounded(y.applyAsDouble(value.getAsDouble()), 1));
+        double x = UNITS_WIDE * places.get(i).at();
+        double height = y.applyAsDouble(value.getAsDouble());
+        boolean before = has(curve, i - 1);
+        if (before || has(curve, i + 1)) {
+          point(d, before ? 'L' : 'M', x, height);
+        } else {
+          point(d, 'M', Math.max(0, x - ALONE), height);
+          point(d, 'L', Math.min(UNITS_WIDE, x + ALONE), height);
+        }
       }
-      pen = value.isPresent();
     }
     return d.toString();
+  }
+
+  private static boolean has(Curve curve, int place) {
+    return place >= 0 && place < curve.values().size() && curve.values().get(place).isPresent();
+  }
+
+  private static void point(StringBuilder d, char stroke, double x, double y) {
+    d.append(stroke).append(Svg.rounded(x, 1)).append(' ').append(Svg.rounded(y, 1));
   }
 
   private static double y(Axis axis, Ticks ticks, double value) {

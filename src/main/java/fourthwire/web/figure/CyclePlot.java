@@ -3,6 +3,7 @@ package fourthwire.web.figure;
 import fourthwire.quantity.Conductor;
 import fourthwire.quantity.Spectrum;
 import fourthwire.quantity.Waveform;
+import java.util.EnumMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
@@ -26,35 +27,42 @@ public final class CyclePlot {
    * @param unit of the spectra, {@code A} or {@code V}
    */
   public static String draw(Map<Conductor, Spectrum> spectra, String unit, String alternative) {
-    return draw(spectra, unit, Optional.empty(), alternative);
+    Map<Conductor, Waveform> waves = new EnumMap<>(Conductor.class);
+    spectra.forEach((conductor, s) -> waves.put(conductor, Waveform.of(s, SAMPLES)));
+    return draw(Optional.empty(), waves, unit, alternative);
   }
 
   /**
    * The picture over another curve, faint and on a scale of its own: the voltage behind currents.
    *
-   * @param unit of the spectra
+   * @param waves each conductor's, with any direct component it has
+   * @param unit of the waves
    */
-  public static String draw(
-      Map<Conductor, Spectrum> spectra,
-      String unit,
+  public static String drawOver(
+      Spectrum backdrop, Map<Conductor, Waveform> waves, String unit, String alternative) {
+    return draw(Optional.of(backdrop), waves, unit, alternative);
+  }
+
+  private static String draw(
       Optional<Spectrum> backdrop,
+      Map<Conductor, Waveform> waves,
+      String unit,
       String alternative) {
-    double peak =
-        spectra.values().stream().mapToDouble(s -> Waveform.of(s, SAMPLES).peak()).max().orElse(0);
+    double peak = waves.values().stream().mapToDouble(Waveform::peak).max().orElse(0);
     Ticks ticks = Ticks.upTo(peak, STEPS);
     Svg svg = Svg.picture("plot cycle", alternative);
     rules(svg, ticks, unit);
     svg.stretched(UNITS_WIDE, HEIGHT_PX);
     backdrop.map(b -> Waveform.of(b, SAMPLES)).ifPresent(w -> backdrop(svg, w));
     for (Conductor conductor : NEUTRAL_FIRST) {
-      Spectrum spectrum = spectra.get(conductor);
-      if (spectrum != null) {
+      Waveform wave = waves.get(conductor);
+      if (wave != null) {
         svg.add(
             "path",
             "class",
             "trace " + conductor.name().toLowerCase(Locale.ROOT),
             "d",
-            path(Waveform.of(spectrum, SAMPLES), ticks.end()));
+            path(wave, ticks.end()));
       }
     }
     return svg.close().done();

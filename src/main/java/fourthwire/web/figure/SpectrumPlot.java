@@ -60,8 +60,10 @@ public final class SpectrumPlot {
     rules(svg, ticks, unit);
     for (int i = 0; i < groups.size(); i++) {
       group(svg, ticks, series, groups.get(i), (double) i / groups.size(), 1.0 / groups.size());
-      String middle = Svg.share((i + 0.5) / groups.size());
-      svg.ordinal(ordinal.apply(groups.get(i).order()), middle, HEIGHT_PX + 18);
+      String written = ordinal.apply(groups.get(i).order());
+      if (!written.isEmpty()) {
+        svg.ordinal(written, Svg.share((i + 0.5) / groups.size()), HEIGHT_PX + 18);
+      }
     }
     return svg.done();
   }

@@ -1,5 +1,6 @@
 package fourthwire.web.load;
 
+import fourthwire.load.model.NoSteadyStateException.Why;
 import fourthwire.load.trial.Sweep;
 import fourthwire.load.trial.TrialResult;
 import fourthwire.quantity.Distortion;
@@ -13,16 +14,19 @@ import fourthwire.web.support.Numbers;
 import fourthwire.web.support.Words;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Locale;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.function.DoubleUnaryOperator;
 import java.util.function.Function;
+import java.util.stream.DoubleStream;
 import java.util.stream.IntStream;
 import java.util.stream.Stream;
 
 /** Draws how a question's figures move with load level, firing angle and number of units. */
 final class ChartMaker {
-  private static final List<Double> UNITS = List.of(1.0, 2.0, 5.0, 10.0, 20.0, 50.0, 100.0);
+  private static final double LAST_UNITS = 100;
+  private static final List<Double> UNITS = List.of(1.0, 2.0, 5.0, 10.0, 20.0, 50.0, LAST_UNITS);
   private static final String UNKNOWN = "–";
 
   private final Words words;
@@ -75,11 +79,17 @@ final class ChartMaker {
   }
 
   private LoadPage.Chart level() {
-    List<Double> levels = IntStream.rangeClosed(1, 10).mapToObj(k -> k / 10.0).toList();
+    double lowest = Math.min(0.1, question.request().demand());
+    List<Double> levels =
+        DoubleStream.concat(
+                DoubleStream.of(lowest), IntStream.rangeClosed(1, 10).mapToDouble(k -> k / 10.0))
+            .distinct()
+            .boxed()
+            .toList();
     return chart(
         "level",
         Sweep.overLevel(question.request(), question.source(), levels),
-        level -> (level - 0.1) / 0.9,
+        level -> (level - lowest) / (1 - lowest),
         level -> Numbers.plain(100 * level, "%"),
         question.request().demand());
   }
@@ -101,10 +111,13 @@ final class ChartMaker {
   }
 
   private LoadPage.Chart units() {
+    double most = Math.max(LAST_UNITS, question.units());
+    List<Double> units =
+        Stream.concat(UNITS.stream().filter(n -> 1.5 * n < most), Stream.of(most)).toList();
     return chart(
         "units",
-        Sweep.overUnits(question.request(), question.source(), UNITS),
-        n -> Math.log10(n) / 2,
+        Sweep.overUnits(question.request(), question.source(), units),
+        n -> Math.log(n) / Math.log(most),
         n -> Numbers.plain(n, ""),
         question.units());
   }
@@ -139,13 +152,13 @@ final class ChartMaker {
         table(title, points, label));
   }
 
-  /** Every second label is left out where there are many. */
+  /** The first, the last and every third from there, where there are many. */
   private static List<CurvePlot.Place> thinned(List<CurvePlot.Place> places) {
     int last = places.size() - 1;
     return IntStream.rangeClosed(0, last)
         .mapToObj(
             i ->
-                last < 8 || (last - i) % 3 == 0
+                last < 9 || i == 0 || i > 1 && (last - i) % 3 == 0
                     ? places.get(i)
                     : new CurvePlot.Place(places.get(i).at(), ""))
         .toList();
@@ -157,7 +170,7 @@ final class ChartMaker {
         .toList();
   }
 
-  /** First and last solved state in words, and where none was found. */
+  /** First and last solved state in words, and where there is none for which reason. */
   private String sentence(String id, List<Sweep.Point> points, Function<Double, String> label) {
     List<Sweep.Point> solved = points.stream().filter(p -> p.result().isPresent()).toList();
     if (solved.isEmpty()) {
@@ -174,9 +187,29 @@ final class ChartMaker {
             label.apply(last.at()),
             thd(last),
             factor(last));
-    Optional<Sweep.Point> none = points.stream().filter(p -> p.result().isEmpty()).findFirst();
-    return none.map(p -> said + " " + words.of("loads.chart.unsolved", label.apply(p.at())))
-        .orElse(said);
+    StringBuilder all = new StringBuilder(said);
+    for (Why why : Why.values()) {
+      List<String> at =
+          points.stream()
+              .filter(p -> p.why().equals(Optional.of(why)))
+              .map(p -> label.apply(p.at()))
+              .toList();
+      if (!at.isEmpty()) {
+        all.append(' ').append(words.of("loads.chart.unsolved." + word(why), listed(at)));
+      }
+    }
+    return all.toString();
+  }
+
+  private String listed(List<String> parts) {
+    int last = parts.size() - 1;
+    return last == 0
+        ? parts.get(0)
+        : words.of("loads.chart.and", String.join(", ", parts.subList(0, last)), parts.get(last));
+  }
+
+  private static String word(Why why) {
+    return why.name().toLowerCase(Locale.ROOT).replace('_', '-');
   }
 
   private static String thd(Sweep.Point point) {
@@ -193,6 +226,10 @@ final class ChartMaker {
     return value.isPresent() ? Numbers.of(value.getAsDouble(), "%") : UNKNOWN;
   }
 
+  private String reason(Sweep.Point point) {
+    return words.of("loads.chart.reason." + word(point.why().orElse(Why.OTHER)));
+  }
+
   private fourthwire.web.panel.NodePage.Grid table(
       String title, List<Sweep.Point> points, Function<Double, String> label) {
     List<String> heads = new ArrayList<>(List.of(title));
@@ -207,7 +244,7 @@ final class ChartMaker {
                   l ->
                       p.result()
                           .map(l.figure())
-                          .orElse(Figure.unknown(words.of("loads.chart.reason"))))
+                          .orElse(Figure.unknown(reason(p))))
               .toList());
     }
     return grid.done();

@@ -60,11 +60,20 @@ final class LimitsMaker {
     return tested.met() ? Verdict.NONE : Verdict.ACT;
   }
 
-  String standing() {
+  /** The test's verdict, and beside it that of the state that is shown where it is another state. */
+  String standing(Optional<Spectrum> unit) {
     if (!tested.limited()) {
       return tested.standing();
     }
-    return words.of(tested.met() ? "loads.within" : "loads.over", tested.standing());
+    String verdict = words.of(tested.met() ? "loads.within" : "loads.over", tested.standing());
+    if (question.asTested()) {
+      return verdict;
+    }
+    String said = words.of("loads.as-tested", verdict);
+    return unit.map(this::judge)
+        .filter(shown -> shown.met() != tested.met())
+        .map(shown -> words.of(shown.met() ? "loads.but.within" : "loads.but.over", said))
+        .orElse(said);
   }
 
   /** Why these limits hold, how the test comes out, and how the state that is shown does. */

@@ -48,7 +48,7 @@ class LoadController {
         model.addAttribute(
             "page", new LoadPageMaker(words, question.get()).make(query == null ? "" : query));
       } catch (IllegalArgumentException impossible) {
-        failure = String.valueOf(impossible.getMessage());
+        failure = Refusal.set(String.valueOf(impossible.getMessage()));
       }
     }
     FormView form = new FormMaker(words, typed, reader).make(failure);

@@ -1,6 +1,5 @@
 package fourthwire.web.load;
 
-import fourthwire.limits.equipment.EquipmentJudgement;
 import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.load.trial.LoadTrial;
 import fourthwire.load.trial.TrialResult;
@@ -13,30 +12,24 @@ import fourthwire.quantity.Spectrum;
 import fourthwire.quantity.Waveform;
 import fourthwire.web.figure.CyclePlot;
 import fourthwire.web.figure.Shapes;
-import fourthwire.web.figure.SpectrumPlot;
 import fourthwire.web.panel.Grids;
 import fourthwire.web.panel.NodePage.Grid;
 import fourthwire.web.support.Numbers;
 import fourthwire.web.support.Words;
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.EnumMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
-import java.util.function.IntPredicate;
-import java.util.stream.IntStream;
+import java.util.function.Function;
 
 /** Answers one question: solves it, draws it, says it. Figures are of one unit. */
 final class LoadPageMaker {
   private static final int SAMPLES = 720;
-  private static final int MOST_ORDERS = 14;
-  private static final int USUAL_HIGHEST = 15;
-
-  /** A limit up to so many times the tallest bar has its place in the picture. */
-  private static final double ROOM = 2.5;
-
+  private static final int DRAWN = 240;
   private static final List<Conductor> LINES = List.of(Conductor.L1, Conductor.L2, Conductor.L3);
 
   private final Words words;
@@ -56,7 +49,7 @@ final class LoadPageMaker {
       return page(
           query,
           words.of("loads.title.none", named()),
-          List.of(words.of("loads.none", sentence(String.valueOf(none.getMessage())))),
+          List.of(new Refusal(words, question).said(none)),
           Optional.empty(),
           Optional.empty());
     }
@@ -65,7 +58,8 @@ final class LoadPageMaker {
   private LoadPage page(String query, TrialResult all) {
     TrialResult unit = all.times(1 / question.units());
     List<String> said = new ArrayList<>();
-    all.remarks().forEach(remark -> said.add(sentence(remark)));
+    all.remarks().forEach(remark -> said.add(Refusal.sentence(Refusal.set(remark))));
+    Flow first = new Flow(all.first(), all.direct().get(0));
     if (question.units() > 1) {
       said.add(
           words.of(
@@ -73,8 +67,12 @@ final class LoadPageMaker {
                   ? "loads.together.three"
                   : "loads.together",
               Numbers.plain(question.units(), ""),
-              Numbers.of(all.first().rms(), "A")));
+              Numbers.of(first.rms(), "A")));
     }
+    conductors(unit).values().stream()
+        .max(Comparator.comparingDouble(flow -> Math.abs(flow.direct())))
+        .filter(Flow::hasDirect)
+        .ifPresent(flow -> said.add(direct(flow)));
     String thd = percent(Distortion.thdPercent(unit.first()));
     String factor = text(unit.powerFactor(), "");
     return page(
@@ -97,12 +95,16 @@ final class LoadPageMaker {
         title,
         about(),
         limits.verdict(),
-        limits.standing(),
+        limits.standing(unit),
         sentences,
         answer,
         model(),
         granted(),
         query);
+  }
+
+  private String direct(Flow flow) {
+    return words.of("loads.direct.said", Numbers.of(Math.abs(flow.direct()), "A"));
   }
 
   /** The equipment's words with a capital. */
@@ -147,7 +149,10 @@ final class LoadPageMaker {
   }
 
   private LoadPage.Answer answer(TrialResult unit) {
-    Map<Conductor, Spectrum> currents = conductors(unit);
+    Map<Conductor, Flow> currents = conductors(unit);
+    SpectrumMaker spectrum =
+        new SpectrumMaker(
+            words, unit.first(), limits.judge(unit.first()), question.threeLines());
     List<LoadPage.Key> keys = new ArrayList<>();
     for (Conductor c : currents.keySet()) {
       String name = currents.size() > 1 ? c.name() : words.of("loads.key.current");
@@ -155,93 +160,51 @@ final class LoadPageMaker {
     }
     keys.add(new LoadPage.Key(Shapes.backdrop(), voltageKey(unit)));
     return new LoadPage.Answer(
-        CyclePlot.draw(
-            currents,
+        CyclePlot.drawOver(
+            unit.voltage().get(0),
+            waves(currents),
             "A",
-            Optional.of(unit.voltage().get(0)),
             words.of("loads.cycle.alternative", named())),
         keys,
-        spectrum(unit.first()),
-        spectrumOf(unit.first()),
+        spectrum.draw(named()),
+        spectrum.about(),
         figures(unit),
         new ChartMaker(words, question).make(),
         limits.table(unit.first()));
   }
 
   /** What flows in each conductor; three equal parts return through N. */
-  private Map<Conductor, Spectrum> conductors(TrialResult unit) {
-    Map<Conductor, Spectrum> currents = new EnumMap<>(Conductor.class);
+  private Map<Conductor, Flow> conductors(TrialResult unit) {
+    Map<Conductor, Flow> currents = new EnumMap<>(Conductor.class);
     int lines = Math.max(unit.current().size(), question.parts());
     for (int k = 0; k < lines; k++) {
       int line = k;
       currents.put(
           LINES.get(k),
           unit.threeLines()
-              ? unit.current().get(k)
-              : Spectrum.of(h -> unit.first().at(h).turned(-120.0 * h * line)));
+              ? new Flow(unit.current().get(k), unit.direct().get(k))
+              : new Flow(
+                  Spectrum.of(h -> unit.first().at(h).turned(-120.0 * h * line)),
+                  unit.direct().get(0)));
     }
     if (question.parts() > 1) {
-      currents.put(Conductor.N, currents.values().stream().reduce(Spectrum.ZERO, Spectrum::plus));
+      currents.values().stream()
+          .reduce(Flow::plus)
+          .ifPresent(neutral -> currents.put(Conductor.N, neutral));
     }
     return currents;
+  }
+
+  private static Map<Conductor, Waveform> waves(Map<Conductor, Flow> currents) {
+    Map<Conductor, Waveform> waves = new EnumMap<>(Conductor.class);
+    currents.forEach((conductor, flow) -> waves.put(conductor, flow.wave(DRAWN)));
+    return waves;
   }
 
   private String voltageKey(TrialResult unit) {
     return words.of(
         unit.threeLines() || question.parts() > 1 ? "loads.key.voltage.three" : "loads.key.voltage",
         Numbers.of(Waveform.of(unit.voltage().get(0), SAMPLES).peak(), "V"));
-  }
-
-  private String spectrum(Spectrum current) {
-    EquipmentJudgement judgement = limits.judge(current);
-    List<SpectrumPlot.Group> groups =
-        drawn(current).stream()
-            .map(
-                h ->
-                    new SpectrumPlot.Group(
-                        h,
-                        List.of(current.magnitude(h)),
-                        judgement.order(h).stream().mapToDouble(o -> o.limitA()).findFirst()))
-            .toList();
-    return SpectrumPlot.draw(
-        List.of(Conductor.L1),
-        groups,
-        ROOM,
-        Numbers::ordinal,
-        "A",
-        words.of("loads.spectrum.alternative", named()));
-  }
-
-  private String spectrumOf(Spectrum current) {
-    String of = words.of("loads.spectrum.of", Numbers.of(current.magnitude(1), "A"));
-    EquipmentJudgement judgement = limits.judge(current);
-    return judgement.limited()
-        ? of + "; " + words.of("loads.spectrum.limit", judgement.standing())
-        : of;
-  }
-
-  /** The usual odd orders up to the last that flows, and others that flow; the lowest of them. */
-  private List<Integer> drawn(Spectrum current) {
-    double strongest =
-        IntStream.rangeClosed(2, Spectrum.HIGHEST_ORDER)
-            .mapToDouble(current::magnitude)
-            .max()
-            .orElse(0);
-    IntPredicate flows = h -> current.magnitude(h) > 0.01 * strongest;
-    int last =
-        IntStream.rangeClosed(USUAL_HIGHEST, Spectrum.HIGHEST_ORDER)
-            .filter(h -> h == USUAL_HIGHEST || flows.test(h))
-            .max()
-            .orElseThrow();
-    return IntStream.rangeClosed(2, Spectrum.HIGHEST_ORDER)
-        .filter(h -> usual(h) && h <= last || flows.test(h))
-        .limit(MOST_ORDERS)
-        .boxed()
-        .toList();
-  }
-
-  private boolean usual(int order) {
-    return order % 2 == 1 && (!question.threeLines() || order % 3 != 0);
   }
 
   private List<Grid> figures(TrialResult unit) {
@@ -253,17 +216,21 @@ final class LoadPageMaker {
   }
 
   private Grid currents(TrialResult unit) {
-    Map<Conductor, Spectrum> currents = conductors(unit);
-    List<Spectrum> spectra = List.copyOf(currents.values());
+    Map<Conductor, Flow> currents = conductors(unit);
+    List<Flow> flows = List.copyOf(currents.values());
+    List<Spectrum> spectra = flows.stream().map(Flow::orders).toList();
     List<String> heads = new ArrayList<>(List.of(words.of("loads.figure")));
     currents
         .keySet()
         .forEach(c -> heads.add(currents.size() > 1 ? c.name() : words.of("loads.value")));
     Grids grid = new Grids(words, words.of("loads.currents"), heads);
-    row(grid, "loads.rms", spectra, s -> Figure.of(s.rms()));
+    row(grid, "loads.rms", flows, flow -> Figure.of(flow.rms()));
+    if (flows.stream().anyMatch(Flow::hasDirect)) {
+      row(grid, "loads.direct", flows, flow -> Figure.of(flow.direct()));
+    }
     row(grid, "loads.fundamental", spectra, s -> Figure.of(settled(s.magnitude(1), s)));
-    row(grid, "loads.peak", spectra, s -> Figure.of(Waveform.of(s, SAMPLES).peak()));
-    row(grid, "loads.crest", spectra, s -> Waveform.of(s, SAMPLES).crestFactor());
+    row(grid, "loads.peak", flows, flow -> Figure.of(flow.wave(SAMPLES).peak()));
+    row(grid, "loads.crest", flows, flow -> flow.wave(SAMPLES).crestFactor());
     row(grid, "loads.thd", spectra, LoadPageMaker::thd);
     row(grid, "loads.loss-factor", spectra, HarmonicLoss::harmonicLossFactor);
     return grid.done();
@@ -325,12 +292,8 @@ final class LoadPageMaker {
     return Math.abs(percent) < 1e-9 ? 0 : percent;
   }
 
-  private void row(
-      Grids grid,
-      String key,
-      List<Spectrum> spectra,
-      java.util.function.Function<Spectrum, Figure> figure) {
-    grid.row(words.of(key), spectra.stream().map(figure).toList());
+  private <T> void row(Grids grid, String key, List<T> of, Function<T, Figure> figure) {
+    grid.row(words.of(key), of.stream().map(figure).toList());
   }
 
   private LoadPage.Model model() {
@@ -342,7 +305,7 @@ final class LoadPageMaker {
         words.of("loads.model." + kind + ".source"),
         question
             .preset()
-            .map(p -> words.of("loads.preset", p.name(), sentence(p.source())))
+            .map(p -> words.of("loads.preset", p.name(), Refusal.sentence(p.source())))
             .orElse(""));
   }
 
@@ -365,11 +328,6 @@ final class LoadPageMaker {
 
   private LoadPage.Fact fact(ModelField field, String text) {
     return new LoadPage.Fact(words.of("loads.field." + field.column()), text);
-  }
-
-  private static String sentence(String text) {
-    String first = text.substring(0, 1).toUpperCase(Locale.ROOT) + text.substring(1);
-    return first.endsWith(".") ? first : first + ".";
   }
 
   private static String percent(Figure figure) {

@@ -9,6 +9,7 @@ import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.quantity.Distortion;
 import fourthwire.quantity.Phasor;
 import fourthwire.quantity.Spectrum;
+import fourthwire.quantity.Waveform;
 import fourthwire.site.LoadKind;
 import fourthwire.site.ModelColumns;
 import java.util.List;
@@ -108,6 +109,102 @@ class LoadTrialTest {
           .as("order %d", h)
           .isLessThan(1e-5 * 230);
     }
+  }
+
+  /**
+   * Where half-waves differ a direct component belongs to the current: with it the wave rests at
+   * zero while the diodes block, round the voltage's crossings.
+   */
+  @ParameterizedTest
+  @CsvSource({
+    "CAPACITOR_INPUT,100,100,0.05,0.3,0.2,0",
+    "CAPACITOR_INPUT,100,50,0.05,0.5,0.2,0",
+    "CAPACITOR_INPUT,100,1,0.05,0.1,1,1",
+    "CAPACITOR_INPUT_CHOKE,300,1,0.05,0.05,1,1"
+  })
+  void betweenPulsesThereIsNoCurrent(
+      LoadKind kind, double watts, int units, double ohm, double x, double uf, double second) {
+    ModelColumns sized = ModelColumns.NONE.with(ModelColumns.Column.CAPACITANCE_UF_PER_W, uf);
+    TrialResult result =
+        LoadTrial.solve(
+            request(kind, watts, units).withColumns(sized),
+            source(230, ohm, x, second(second / 100)));
+    double direct = result.direct().get(0);
+    Waveform wave = Waveform.of(result.first(), 720).raised(direct);
+    assertThat(Math.abs(direct)).isGreaterThan(0.01 * wave.peak());
+    for (int start : new int[] {20, 380}) {
+      double resting = 0;
+      for (int k = 0; k < 40; k++) {
+        resting += wave.at(start + k) / 40;
+      }
+      assertThat(resting).isCloseTo(0, within(2e-4 * wave.peak()));
+    }
+  }
+
+  /**
+   * A second order shifts the crossings: what a dimmer of a resistance (90° on) and a supply with
+   * PFC (11° on both sides off) let through is integrated by the midpoint rule.
+   */
+  @ParameterizedTest
+  @CsvSource({"PHASE_DIMMER,0,90", "PFC_CONTINUOUS,-11,11"})
+  void unlikeHalvesLeaveADirectComponent(LoadKind kind, double offFrom, double offTo) {
+    TrialSource source = source(230, 0, 0, second(0.05));
+    double direct = LoadTrial.solve(request(kind, 300, 1), source).direct().get(0);
+    double[] crossings = {crossing(-0.2), crossing(Math.PI - 0.2), crossing(2 * Math.PI - 0.2)};
+    double mean = 0;
+    double square = 0;
+    int parts = 200_000;
+    for (int k = 0; k < parts; k++) {
+      double at = crossings[0] + 2 * Math.PI * (k + 0.5) / parts;
+      double v = volts(at);
+      boolean off = false;
+      for (double c : crossings) {
+        double degrees = Math.toDegrees(at - c);
+        off |= degrees > offFrom && degrees < offTo;
+      }
+      mean += off ? 0 : v / parts;
+      square += off ? 0 : v * v / parts;
+    }
+    double siemens = kind == LoadKind.PHASE_DIMMER ? 300 / 52_900.0 : 300 / square;
+    assertThat(direct).isCloseTo(siemens * mean, within(5e-3 * Math.abs(siemens * mean)));
+  }
+
+  private static Spectrum second(double share) {
+    return Spectrum.of(h -> h == 2 ? Phasor.polar(share, 40) : Phasor.ZERO);
+  }
+
+  private static double volts(double at) {
+    return 230 * Math.sqrt(2) * (Math.sin(at) + 0.05 * Math.sin(2 * at + Math.toRadians(40)));
+  }
+
+  /** The first within 0.4 radians. */
+  private static double crossing(double from) {
+    double low = from;
+    double high = from + 0.4;
+    for (int n = 0; n < 60; n++) {
+      double middle = (low + high) / 2;
+      if (volts(low) * volts(middle) > 0) {
+        low = middle;
+      } else {
+        high = middle;
+      }
+    }
+    return low;
+  }
+
+  /** What a larger load is fed, a smaller is not refused for want of power. */
+  @Test
+  void aRefusalBelowAStateThatIsFedIsOfTheCurrentNotOfTheSource() {
+    LoadRequest small =
+        request(LoadKind.CAPACITOR_INPUT, 150, 1)
+            .withColumns(ModelColumns.NONE.with(ModelColumns.Column.CAPACITANCE_UF_PER_W, 0.2));
+    List<Sweep.Point> points =
+        Sweep.overUnits(
+            small, source(230, 0.05, 2, Spectrum.ZERO), List.of(10.0, 20.0, 50.0, 100.0));
+    assertThat(points.stream().map(p -> p.result().isPresent()))
+        .containsExactly(true, false, true, false);
+    assertThat(points.get(1).why()).contains(NoSteadyStateException.Why.NO_REPEAT);
+    assertThat(points.get(3).why()).contains(NoSteadyStateException.Why.TOO_MUCH);
   }
 
   @Test

@@ -5,10 +5,10 @@ import static org.assertj.core.api.Assertions.assertThat;
 import fourthwire.quantity.Conductor;
 import fourthwire.quantity.Phasor;
 import fourthwire.quantity.Spectrum;
+import fourthwire.quantity.Waveform;
 import java.io.StringReader;
 import java.util.List;
 import java.util.Map;
-import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
@@ -105,6 +105,7 @@ class FigureTest {
         .isEqualTo("104");
   }
 
+  /** A value between two gaps has no neighbour to be joined to, and is a short stroke. */
   @Test
   void aCurveBreaksWhereThereIsNoValue() throws Exception {
     List<CurvePlot.Place> places =
@@ -125,7 +126,7 @@ class FigureTest {
                             OptionalDouble.of(50)))),
                 OptionalDouble.of(0.5),
                 "curves"));
-    assertThat(element(svg, "path", "curve solid").getAttribute("d")).isEqualTo("M0 0M1000 84");
+    assertThat(element(svg, "path", "curve solid").getAttribute("d")).isEqualTo("M0 0L8 0M992 84L1000 84");
     assertThat(element(svg, "line", "here").getAttribute("x1")).isEqualTo("50%");
   }
 
@@ -149,8 +150,11 @@ class FigureTest {
     Spectrum volts = Spectrum.of(h -> h == 1 ? new Phasor(230, 0) : Phasor.ZERO);
     Document svg =
         parsed(
-            CyclePlot.draw(
-                Map.of(Conductor.L1, amps), "A", Optional.of(volts), "voltage and current"));
+            CyclePlot.drawOver(
+                volts,
+                Map.of(Conductor.L1, Waveform.of(amps, 240)),
+                "A",
+                "voltage and current"));
     assertThat(element(svg, "path", "backdrop").getAttribute("d")).contains("L250 8.3L");
   }
 

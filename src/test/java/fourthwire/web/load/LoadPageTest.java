@@ -135,8 +135,71 @@ class LoadPageTest extends ServiceTest {
     String page = page("/loads?load=capacitor-input&watts=1500&units=20&r_ohm=5&x_ohm=5");
     assertThat(page)
         .contains("no steady state", "the source cannot give what the load asks for")
-        .contains("No figure is shown")
+        .contains("Try a stiffer source, fewer units or a lower load level. No figure is shown")
+        .containsPattern("of 28\u202f\\d{3}\u202fW finds")
+        .containsPattern("behind 5\\.\\d+\u202fΩ")
         .doesNotContain("<svg class=\"plot");
+  }
+
+  /**
+   * Where the current of 20 units does not repeat and 50 are fed, and 100 are not: each has its
+   * reason, and what stands between gaps is drawn, a stroke by itself.
+   */
+  @Test
+  void everyPointWithoutAStateHasItsReason() {
+    String soft = "/loads?load=capacitor-input&watts=150&r_ohm=0.05&x_ohm=2";
+    String page = page(soft + "&capacitance_uf_per_w=0.2&units=50");
+    assertThat(page)
+        .contains("For 1 unit THD is", "; for 50,")
+        .contains("At 20 there is no steady state: the current doesn’t repeat")
+        .contains("At 100 there is no steady state: the source can’t give")
+        .containsPattern("class=\"curve solid\" d=\"[^\"]*M841[.\\d]* ([.\\d]+)L857[.\\d]* \\1\"");
+    assertThat(page(soft + "&capacitance_uf_per_w=0.2&units=20"))
+        .contains("the current does not repeat from cycle to cycle. Try a stiffer source, a larger")
+        .doesNotContain("the source cannot give");
+  }
+
+  /** What is direct of a current belongs to its rms: √(Σ I_h² + I_0²). */
+  @Test
+  void aDirectComponentIsSaidAndCounted() {
+    String asked =
+        "/loads?load=capacitor-input&watts=150&units=50&r_ohm=0.05&x_ohm=2&capacitance_uf_per_w=0.2";
+    assertThat(page(asked)).contains("is direct current", "Direct component, A");
+    assertThat(page("/loads?load=capacitor-input&watts=150"))
+        .doesNotContain("of it is direct current", "Direct component");
+    ModelColumns small = ModelColumns.NONE.with(ModelColumns.Column.CAPACITANCE_UF_PER_W, 0.2);
+    TrialResult result =
+        LoadTrial.solve(
+            new LoadRequest(
+                LoadKind.CAPACITOR_INPUT,
+                1,
+                50,
+                230,
+                new LoadRequest.Rating.Watts(150),
+                50,
+                1,
+                true,
+                OptionalDouble.empty(),
+                small,
+                Optional.empty()),
+            new TrialSource(230, 0.05, 2 / (100 * Math.PI), Spectrum.ZERO));
+    assertThat(page(asked))
+        .contains(
+            "draw " + Numbers.of(Math.hypot(result.first().rms(), result.direct().get(0)), "A"));
+  }
+
+  /** One order high up is over its limit at a light load, while the test at rated load is passed. */
+  @Test
+  void theChartReachesTheLastOrderOverItsLimit() {
+    String page =
+        page(
+            "/loads?load=server+supply&watts=800&units=10&level=5&r_ohm=0.05&x_ohm=0.1"
+                + "&orders=3+1.5+0;5+3+180;2+1+0");
+    assertThat(page)
+        .contains("class A, as tested at rated load; over it as shown here")
+        .contains("the 31st is 0.09", "every order keeps within its limit")
+        .contains(">31<tspan class=\"letters\">st</tspan>")
+        .contains("At 5\u202f% of its power THD is", ">5\u202f%</text>");
   }
 
   @Test

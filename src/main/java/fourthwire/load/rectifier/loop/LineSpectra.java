@@ -22,6 +22,7 @@ final class LineSpectra {
    */
   static void write(ThreeLineBridge bridge, int periods, PortSpectra current) {
     takeHarmonics(bridge, 0, periods, current);
+    takeDirect(bridge, periods, current);
     if (bridge.lines() > 3) {
       takeHarmonics(bridge, 3, periods, bridge.second);
       addShifted(bridge.second.re, current.re);
@@ -41,6 +42,13 @@ final class LineSpectra {
       if (periods == SIXTHS) {
         addSixths(to, h);
       }
+    }
+  }
+
+  /** Of one bridge on the lines themselves: windings between bridge and lines pass none on. */
+  private static void takeDirect(ThreeLineBridge bridge, int periods, PortSpectra to) {
+    for (int k = 0; k < 3; k++) {
+      to.direct[k] = bridge.lines() > 3 ? 0 : bridge.trace[k].direct(periods > 1);
     }
   }
 

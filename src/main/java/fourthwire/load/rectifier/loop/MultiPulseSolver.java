@@ -2,6 +2,7 @@ package fourthwire.load.rectifier.loop;
 
 import fourthwire.load.model.LoadSolver;
 import fourthwire.load.model.NoSteadyStateException;
+import fourthwire.load.model.NoSteadyStateException.Why;
 import fourthwire.load.model.PortSpectra;
 import fourthwire.load.rectifier.path.BridgeLoad;
 import fourthwire.load.rectifier.path.CycleTable;
@@ -122,7 +123,8 @@ public final class MultiPulseSolver implements LoadSolver {
         peak,
         starved
             ? "the source cannot give what the load asks for"
-            : "the current does not repeat from cycle to cycle");
+            : "the current does not repeat from cycle to cycle")
+        .since(starved ? Why.TOO_MUCH : Why.NO_REPEAT);
   }
 
   /** Just before the voltage of the first line passes the third's. */

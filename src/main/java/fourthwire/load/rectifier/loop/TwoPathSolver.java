@@ -46,6 +46,7 @@ public final class TwoPathSolver {
   private boolean halfWave;
   private boolean warm;
   private boolean hunts;
+  private boolean emptied;
 
   public TwoPathSolver(BridgeLoad load, double frequencyHz) {
     this.load = load;
@@ -69,6 +70,7 @@ public final class TwoPathSolver {
     warm &= mirrored == halfWave;
     halfWave = mirrored;
     bridge.grid.fine();
+    emptied = false;
     boolean found = warm && newton.converge() || search();
     warm = found && stable() || mirrored && wholeCycle();
     hunts = found && !warm;
@@ -81,6 +83,11 @@ public final class TwoPathSolver {
   /** Whether the last solution failed because the state found is not stable. */
   public boolean hunts() {
     return hunts;
+  }
+
+  /** Whether the capacitor ran empty when the bridge was left to itself. */
+  public boolean emptied() {
+    return emptied;
   }
 
   private void equip(double peak, double seriesOhm, double seriesHenry) {
@@ -107,7 +114,8 @@ public final class TwoPathSolver {
     }
     section = (crossing + SECTIONS[0]) % CycleTable.CELLS;
     newton.start(1);
-    return newton.repeat(REPETITIONS) && newton.settle();
+    emptied = !newton.repeat(REPETITIONS);
+    return !emptied && newton.settle();
   }
 
   private boolean stable() {
@@ -155,6 +163,7 @@ public final class TwoPathSolver {
       current.re[0][h] -= second.re[0][h];
       current.im[0][h] -= second.im[0][h];
     }
+    current.direct[0] = bridge.trace[0].direct(halfWave) - bridge.trace[1].direct(halfWave);
   }
 
   /** Whether that record is half a cycle, whose mirror image is the other. */

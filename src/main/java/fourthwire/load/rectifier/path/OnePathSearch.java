@@ -40,6 +40,8 @@ public final class OnePathSearch {
   private final OnePathCycle cycle = new OnePathCycle();
   private final PairBridge bridge = cycle.bridge;
 
+  private boolean emptied;
+
   /** The state found: the capacitor's voltage at the section, volts. */
   public double lastV;
 
@@ -61,6 +63,7 @@ public final class OnePathSearch {
       double startI) {
     lastV = startV;
     lastI = startI;
+    emptied = false;
     cycle.prepare(load, frequencyHz, emf, seriesOhm, seriesHenry);
   }
 
@@ -80,6 +83,11 @@ public final class OnePathSearch {
    */
   public boolean freewheels() {
     return bridge.freewheels;
+  }
+
+  /** Whether the capacitor ran empty when the bridge was left to itself, charged to the crest. */
+  public boolean emptied() {
+    return emptied;
   }
 
   /** The current of the state found: amps at positions in cells. */
@@ -228,6 +236,7 @@ public final class OnePathSearch {
     double v = startV;
     for (int n = 0; n < MOST_SUBSTITUTIONS; n++) {
       if (!cycle.march(i, v)) {
+        emptied = true;
         return false;
       }
       double slack = n < MOST_SUBSTITUTIONS / 2 ? 1 : cycle.jumpV / cycle.toleranceV;

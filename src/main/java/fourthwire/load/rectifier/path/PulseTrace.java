@@ -187,6 +187,11 @@ public final class PulseTrace {
     return (amps[n + 1] - amps[n]) / (position[n + 1] - position[n]);
   }
 
+  /** Direct component, amps: none where the halves mirror each other. */
+  public double direct(boolean halfWave) {
+    return halfWave ? 0 : mean(false, (position, amps) -> amps);
+  }
+
   /** What is averaged over a cycle. */
   public interface Integrand {
     /** At a position in cells, where the current is so large. */
