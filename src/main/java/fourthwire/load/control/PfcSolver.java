@@ -47,6 +47,7 @@ final class PfcSolver {
 
   private int step;
   private boolean lockedToFundamental;
+
   /** Mean over the cycle of the voltage inside the dead zones, volts. */
   private double insideMean;
 

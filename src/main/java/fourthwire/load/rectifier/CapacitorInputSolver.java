@@ -100,13 +100,13 @@ final class CapacitorInputSolver implements LoadSolver {
     boolean emptied = twoPaths.map(TwoPathSolver::emptied).orElse(search.emptied());
     boolean hunts = twoPaths.isPresent() && twoPaths.get().hunts();
     return NoSteadyStateException.of(
-        "a capacitor-input rectifier of %s W finds no steady state at %s V peak behind %s ohm"
-            + " and %s mH: %s",
-        load.powerW(),
-        search.peak(),
-        search.ohm(),
-        search.henry() * 1e3,
-        hunts ? HUNTS : emptied ? TOO_MUCH : NO_REPEAT)
+            "a capacitor-input rectifier of %s W finds no steady state at %s V peak behind %s ohm"
+                + " and %s mH: %s",
+            load.powerW(),
+            search.peak(),
+            search.ohm(),
+            search.henry() * 1e3,
+            hunts ? HUNTS : emptied ? TOO_MUCH : NO_REPEAT)
         .since(emptied ? Why.TOO_MUCH : Why.NO_REPEAT);
   }
 

@@ -240,11 +240,7 @@ final class ChartMaker {
       grid.row(
           label.apply(p.at()),
           columns.stream()
-              .map(
-                  l ->
-                      p.result()
-                          .map(l.figure())
-                          .orElse(Figure.unknown(reason(p))))
+              .map(l -> p.result().map(l.figure()).orElse(Figure.unknown(reason(p))))
               .toList());
     }
     return grid.done();

@@ -60,7 +60,9 @@ final class LimitsMaker {
     return tested.met() ? Verdict.NONE : Verdict.ACT;
   }
 
-  /** The test's verdict, and beside it that of the state that is shown where it is another state. */
+  /**
+   * The test's verdict, and beside it that of the state that is shown where it is another state.
+   */
   String standing(Optional<Spectrum> unit) {
     if (!tested.limited()) {
       return tested.standing();

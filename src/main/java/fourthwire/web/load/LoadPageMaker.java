@@ -151,8 +151,7 @@ final class LoadPageMaker {
   private LoadPage.Answer answer(TrialResult unit) {
     Map<Conductor, Flow> currents = conductors(unit);
     SpectrumMaker spectrum =
-        new SpectrumMaker(
-            words, unit.first(), limits.judge(unit.first()), question.threeLines());
+        new SpectrumMaker(words, unit.first(), limits.judge(unit.first()), question.threeLines());
     List<LoadPage.Key> keys = new ArrayList<>();
     for (Conductor c : currents.keySet()) {
       String name = currents.size() > 1 ? c.name() : words.of("loads.key.current");

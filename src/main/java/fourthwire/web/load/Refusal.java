@@ -52,8 +52,7 @@ final class Refusal {
     int last = parts.size() - 1;
     return last == 0
         ? parts.get(0)
-        : words.of(
-            "loads.remedy.or", String.join(", ", parts.subList(0, last)), parts.get(last));
+        : words.of("loads.remedy.or", String.join(", ", parts.subList(0, last)), parts.get(last));
   }
 
   /** The engine's words as a page sets them: units, and digits in groups. */

@@ -31,8 +31,7 @@ final class SpectrumMaker {
   private final boolean threeLines;
   private final double strongest;
 
-  SpectrumMaker(
-      Words words, Spectrum current, EquipmentJudgement judgement, boolean threeLines) {
+  SpectrumMaker(Words words, Spectrum current, EquipmentJudgement judgement, boolean threeLines) {
     this.words = words;
     this.current = current;
     this.judgement = judgement;

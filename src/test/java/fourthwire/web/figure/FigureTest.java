@@ -126,7 +126,8 @@ class FigureTest {
                             OptionalDouble.of(50)))),
                 OptionalDouble.of(0.5),
                 "curves"));
-    assertThat(element(svg, "path", "curve solid").getAttribute("d")).isEqualTo("M0 0L8 0M992 84L1000 84");
+    assertThat(element(svg, "path", "curve solid").getAttribute("d"))
+        .isEqualTo("M0 0L8 0M992 84L1000 84");
     assertThat(element(svg, "line", "here").getAttribute("x1")).isEqualTo("50%");
   }
 
@@ -151,10 +152,7 @@ class FigureTest {
     Document svg =
         parsed(
             CyclePlot.drawOver(
-                volts,
-                Map.of(Conductor.L1, Waveform.of(amps, 240)),
-                "A",
-                "voltage and current"));
+                volts, Map.of(Conductor.L1, Waveform.of(amps, 240)), "A", "voltage and current"));
     assertThat(element(svg, "path", "backdrop").getAttribute("d")).contains("L250 8.3L");
   }
 

@@ -188,7 +188,9 @@ class LoadPageTest extends ServiceTest {
             "draw " + Numbers.of(Math.hypot(result.first().rms(), result.direct().get(0)), "A"));
   }
 
-  /** One order high up is over its limit at a light load, while the test at rated load is passed. */
+  /**
+   * One order high up is over its limit at a light load, while the test at rated load is passed.
+   */
   @Test
   void theChartReachesTheLastOrderOverItsLimit() {
     String page =

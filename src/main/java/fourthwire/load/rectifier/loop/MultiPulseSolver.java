@@ -117,13 +117,13 @@ public final class MultiPulseSolver implements LoadSolver {
 
   private NoSteadyStateException refusal() {
     return NoSteadyStateException.of(
-        "a rectifier on three lines of %s W finds no steady state at %s V peak line to line"
-            + " behind its source impedance: %s",
-        load.powerW(),
-        peak,
-        starved
-            ? "the source cannot give what the load asks for"
-            : "the current does not repeat from cycle to cycle")
+            "a rectifier on three lines of %s W finds no steady state at %s V peak line to line"
+                + " behind its source impedance: %s",
+            load.powerW(),
+            peak,
+            starved
+                ? "the source cannot give what the load asks for"
+                : "the current does not repeat from cycle to cycle")
         .since(starved ? Why.TOO_MUCH : Why.NO_REPEAT);
   }
 
