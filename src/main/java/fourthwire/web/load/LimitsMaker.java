@@ -5,8 +5,8 @@ import fourthwire.limits.equipment.EquipmentJudgement;
 import fourthwire.limits.equipment.EquipmentLimits;
 import fourthwire.limits.equipment.OrderLimit;
 import fourthwire.limits.equipment.TotalLimit;
+import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.load.trial.LoadTrial;
-import fourthwire.load.trial.TrialResult;
 import fourthwire.load.trial.TrialSource;
 import fourthwire.quantity.Spectrum;
 import fourthwire.web.support.Column;
@@ -28,16 +28,23 @@ final class LimitsMaker {
   private final Words words;
   private final LoadQuestion question;
   private final Equipment equipment;
+
+  /** Of the test's state: its standing and reason hold without one too. */
   private final EquipmentJudgement tested;
+
+  /** Whether the test has a steady state to be judged. */
+  private final boolean testable;
 
   /** Solves the state of the standards' test. */
   LimitsMaker(Words words, LoadQuestion question) {
     this.words = words;
     this.question = question;
     double volts = question.source().nominalV();
-    TrialResult test = LoadTrial.solve(question.tested(), TrialSource.ideal(volts));
+    Optional<Spectrum> test = test(question);
     boolean three = question.threeLines();
-    double amps = test.first().rms();
+    double amps =
+        test.map(Spectrum::rms)
+            .orElse(question.partW() / volts / (three ? Math.sqrt(3) : 1));
     boolean parts = question.parts() == 3;
     double apparentVa = volts * amps * (three ? Math.sqrt(3) : question.parts());
     double ohm = question.sourceOhm();
@@ -49,7 +56,17 @@ final class LimitsMaker {
             three || parts,
             three ? volts / Math.sqrt(3) : volts,
             ohm > 0 ? OptionalDouble.of(volts * volts / ohm / apparentVa) : OptionalDouble.empty());
-    this.tested = EquipmentLimits.judge(equipment, test.first());
+    this.testable = test.isPresent();
+    this.tested = EquipmentLimits.judge(equipment, test.orElse(Spectrum.ZERO));
+  }
+
+  private static Optional<Spectrum> test(LoadQuestion question) {
+    try {
+      TrialSource stiff = TrialSource.ideal(question.source().nominalV());
+      return Optional.of(LoadTrial.solve(question.tested(), stiff).first());
+    } catch (NoSteadyStateException none) {
+      return Optional.empty();
+    }
   }
 
   EquipmentJudgement judge(Spectrum unit) {
@@ -57,7 +74,7 @@ final class LimitsMaker {
   }
 
   Verdict verdict() {
-    return tested.met() ? Verdict.NONE : Verdict.ACT;
+    return tested.met() || !testable ? Verdict.NONE : Verdict.ACT;
   }
 
   /**
@@ -66,6 +83,9 @@ final class LimitsMaker {
   String standing(Optional<Spectrum> unit) {
     if (!tested.limited()) {
       return tested.standing();
+    }
+    if (!testable) {
+      return words.of("loads.untested", tested.standing());
     }
     String verdict = words.of(tested.met() ? "loads.within" : "loads.over", tested.standing());
     if (question.asTested()) {
@@ -87,7 +107,10 @@ final class LimitsMaker {
             tested.standing(),
             tested.reason()));
     if (tested.limited()) {
-      said.add(words.of("loads.tested", outcome(tested)));
+      said.add(
+          testable
+              ? words.of("loads.tested", outcome(tested))
+              : words.of("loads.tested.none"));
       if (!question.asTested() && unit.isPresent()) {
         said.add(words.of("loads.here", outcome(judge(unit.get()))));
       }

@@ -130,6 +130,15 @@ class LoadPageTest extends ServiceTest {
     assertThat(text(answer)).contains("check the rating").doesNotContain("reference");
   }
 
+  /** A typed efficiency is not sought, so that the state itself is the first to be missing. */
+  @Test
+  void aTestWithoutASteadyStateIsNotJudged() {
+    assertThat(
+            page("/loads?load=capacitor-input&watts=2000&efficiency=0.9&source_resistance_ohm=500"))
+        .contains("no steady state", "class A: not judged", "nothing is judged")
+        .doesNotContain("every order keeps", "??");
+  }
+
   @Test
   void noSteadyStateIsAPlainSentenceWithoutFigures() {
     String page = page("/loads?load=capacitor-input&watts=1500&units=20&r_ohm=5&x_ohm=5");
