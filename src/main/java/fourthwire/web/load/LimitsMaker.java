@@ -43,8 +43,7 @@ final class LimitsMaker {
     Optional<Spectrum> test = test(question);
     boolean three = question.threeLines();
     double amps =
-        test.map(Spectrum::rms)
-            .orElse(question.partW() / volts / (three ? Math.sqrt(3) : 1));
+        test.map(Spectrum::rms).orElse(question.partW() / volts / (three ? Math.sqrt(3) : 1));
     boolean parts = question.parts() == 3;
     double apparentVa = volts * amps * (three ? Math.sqrt(3) : question.parts());
     double ohm = question.sourceOhm();
@@ -108,9 +107,7 @@ final class LimitsMaker {
             tested.reason()));
     if (tested.limited()) {
       said.add(
-          testable
-              ? words.of("loads.tested", outcome(tested))
-              : words.of("loads.tested.none"));
+          testable ? words.of("loads.tested", outcome(tested)) : words.of("loads.tested.none"));
       if (!question.asTested() && unit.isPresent()) {
         said.add(words.of("loads.here", outcome(judge(unit.get()))));
       }
