@@ -1,6 +1,5 @@
 package fourthwire.load.control;
 
-
 /**
  * Values and zero crossings of a wave given by its phasors; angles in radians of the fundamental.
  */
