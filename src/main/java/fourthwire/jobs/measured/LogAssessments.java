@@ -119,7 +119,11 @@ public final class LogAssessments {
                 survey.settings().practice(),
                 currents.demandA(),
                 currents.faultA()));
-    return new Result(set.words(), verdicts, notes(interval, currents));
+    List<String> notes = notes(interval, currents);
+    if (read.indexOf("frequency_hz") >= 0) {
+      notes.add(frequency(interval));
+    }
+    return new Result(set.words(), verdicts, notes);
   }
 
   private static List<String> notes(Duration interval, Currents currents) {
@@ -134,6 +138,14 @@ public final class LogAssessments {
     }
     notes.add(currents.note());
     return notes;
+  }
+
+  /** Why nothing is said of it; the band is of EN 50160:2010, clause 4.2.1. */
+  private static String frequency(Duration interval) {
+    return "Frequency is not held against a limit: EN 50160, clause 4.2.1, counts means over 10 s, "
+        + (interval.toMillis() > 10_000
+            ? "which can’t be made of rows of " + interval.toSeconds() + " s."
+            : "which are not formed here.");
   }
 
   /** From the latest audit that is done. */

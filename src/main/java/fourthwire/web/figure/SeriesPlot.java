@@ -42,11 +42,17 @@ public final class SeriesPlot {
    *
    * @param name written above its strip
    * @param about its figures, written beside the name
+   * @param brief the same for a narrow picture
    * @param classes {@code l1} to {@code n}, or others
    * @param bounds drawn where they are not far off the values
    */
   public record Strip(
-      String name, String about, String classes, StepValues values, List<Bound> bounds) {}
+      String name,
+      String about,
+      String brief,
+      String classes,
+      StepValues values,
+      List<Bound> bounds) {}
 
   /** A limit; steps that pass it are marked along the top of the strip. */
   public record Bound(double value, boolean upper, String label) {
@@ -116,7 +122,7 @@ public final class SeriesPlot {
     Svg svg = brushed("plot overview", alternative, OVERVIEW_PX + AXIS_PX, axis);
     axis.draw(svg, OVERVIEW_PX);
     Manner manner = new Manner(zone, 1, "", false);
-    Strip strip = new Strip("", "", classes, whole, List.of());
+    Strip strip = new Strip("", "", "", classes, whole, List.of());
     scale(List.of(strip), 1)
         .ifPresent(s -> new SeriesPlot(s, manner, svg).values(strip, 0, OVERVIEW_PX));
     double left = Math.max(0, axis.at(from));
@@ -178,7 +184,12 @@ public final class SeriesPlot {
 
   private void head(Strip strip, double y) {
     svg.text(strip.name(), "class", "name", "x", 0, "y", y);
-    svg.text(strip.about(), "x", "100%", "y", y, "text-anchor", "end");
+    if (strip.brief().equals(strip.about())) {
+      svg.text(strip.about(), "x", "100%", "y", y, "text-anchor", "end");
+    } else {
+      svg.text(strip.about(), "class", "roomy", "x", "100%", "y", y, "text-anchor", "end");
+      svg.text(strip.brief(), "class", "brief", "x", "100%", "y", y, "text-anchor", "end");
+    }
   }
 
   private void bounds(Strip strip, double top, double height) {

@@ -4,16 +4,19 @@ import fourthwire.intake.reading.ReadingRefusedException;
 import fourthwire.jobs.ReadingService;
 import fourthwire.jobs.RefusedException;
 import fourthwire.json.MappingJson;
+import fourthwire.metering.RawFile;
 import fourthwire.metering.ReadingRepository;
 import fourthwire.metering.ReadingUploads;
 import fourthwire.site.SiteRepository;
 import fourthwire.site.Survey;
 import fourthwire.web.api.UploadedFile;
 import fourthwire.web.reading.series.CoverageMaker;
+import fourthwire.web.support.Moments;
 import fourthwire.web.support.NotFoundException;
 import jakarta.servlet.http.HttpServletResponse;
 import java.util.List;
 import java.util.Optional;
+import java.util.stream.Collectors;
 import org.springframework.http.HttpStatus;
 import org.springframework.stereotype.Controller;
 import org.springframework.ui.Model;
@@ -148,8 +151,16 @@ class ReadingController {
     List<ReadingRepository.Entry> all = readings.ofSite(site);
     model.addAttribute("readings", all.stream().map(r -> pages.row(r, survey)).toList());
     model.addAttribute("coverage", coverage.of(all, survey));
-    model.addAttribute("waiting", uploads.waiting(site));
+    model.addAttribute("waiting", uploads.waiting(site).stream().map(w -> waits(w, survey)).toList());
     model.addAttribute("places", pages.places(survey));
+  }
+
+  private ReadingPage.Waiting waits(ReadingUploads.Entry upload, Survey survey) {
+    return new ReadingPage.Waiting(
+        upload.id(),
+        upload.meter(),
+        uploads.files(upload.id()).stream().map(RawFile::name).collect(Collectors.joining(", ")),
+        Moments.of(survey).minute(upload.asked()));
   }
 
   private Survey survey(SiteRepository.Entry site) {

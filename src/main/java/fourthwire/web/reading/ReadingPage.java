@@ -1,5 +1,6 @@
 package fourthwire.web.reading;
 
+import fourthwire.metering.ReadingRepository;
 import fourthwire.web.panel.NodePage;
 import java.util.List;
 import java.util.Optional;
@@ -61,6 +62,9 @@ record ReadingPage(
   /** A reading in the list. */
   record Row(
       long id, String meter, String node, String kindKey, String period, String files, int found) {}
+
+  /** Files whose columns are to be confirmed. */
+  record Waiting(long id, ReadingRepository.MeterRef meter, String files, String asked) {}
 
   /** A place a file can come from. */
   record Place(String value, String text) {}

@@ -7,8 +7,6 @@ import java.util.List;
  *
  * @param sources whose orders there are to choose from
  * @param about what a step is, in words
- * @param when over the days of the highest
- * @param unit of the figures
  * @param axis the time below the strips
  */
 record OrdersPage(
@@ -18,15 +16,17 @@ record OrdersPage(
     boolean common,
     String title,
     String about,
-    String when,
-    String unit,
+    Heads heads,
     String axis,
     List<Row> rows) {
+  /** Column heads: which steps' percentiles the figures are. */
+  record Heads(String typical, String highest, String when) {}
+
   /**
    * An order.
    *
    * @param svg its 95th percentile over time
-   * @param typical the median of the steps
+   * @param typical the median of the steps' 95th percentiles
    * @param when the step of the highest
    */
   record Row(String order, String svg, String typical, String highest, String when, String limit) {}

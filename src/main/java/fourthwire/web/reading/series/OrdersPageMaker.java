@@ -1,6 +1,8 @@
 package fourthwire.web.reading.series;
 
 import fourthwire.jobs.series.StoredLog;
+import fourthwire.metering.LogResult;
+import fourthwire.metering.QuantitySummary;
 import fourthwire.metering.SeriesRepository;
 import fourthwire.metering.reduce.StepPercentiles;
 import fourthwire.metering.reduce.TimeSteps;
@@ -50,22 +52,25 @@ final class OrdersPageMaker {
 
   OrdersPage make(String of, boolean common) {
     Map<String, List<String>> sources = sources();
-    String chosen = sources.containsKey(of) ? of : sources.keySet().stream().findFirst().orElse("");
+    String chosen = sources.containsKey(of) ? of : heaviest(sources);
     TimeSteps steps = steps();
     boolean weeks = ((Period) steps.length()).getDays() == 7;
+    String step = weeks ? "week" : "day";
     List<Line> lines =
         sources.getOrDefault(chosen, List.of()).stream().map(q -> line(q, steps, weeks)).toList();
     List<Measures.Option> options =
         sources.keySet().stream().map(s -> new Measures.Option(s, sourceName(s))).toList();
     return new OrdersPage(
-        view.head(verdict(lines, chosen), "orders"),
+        view.head(verdict(lines, chosen, step), "orders"),
         options,
         chosen,
         common,
         chosen.isEmpty() ? "" : sourceName(chosen),
-        words.of("orders.step." + (weeks ? "week" : "day")),
-        words.of("orders.when." + (weeks ? "week" : "day")),
-        unit(chosen),
+        words.of("orders.step." + step),
+        new OrdersPage.Heads(
+            words.of("orders.typical." + step, unit(chosen)),
+            words.of("orders.highest." + step, unit(chosen)),
+            words.of("orders.when." + step)),
         StepStrip.axis(steps, log.zone(), words.of("orders.axis")),
         rows(lines, steps, common));
   }
@@ -75,18 +80,38 @@ final class OrdersPageMaker {
   }
 
   /** Which order is strongest; empty without any. */
-  private String verdict(List<Line> lines, String source) {
+  private String verdict(List<Line> lines, String source, String step) {
     return lines.stream()
         .filter(l -> !Double.isNaN(l.highest()))
         .max(Comparator.comparingDouble(Line::highest))
         .map(
             l ->
                 words.of(
-                    "orders.verdict",
+                    "orders.verdict." + step,
                     Numbers.ordinal(l.order()),
                     view.place(l.quantity()),
                     Numbers.of(l.highest(), unit(source))))
         .orElse("");
+  }
+
+  /** The conductor with the largest 95th percentile of a current's order in the whole log. */
+  private String heaviest(Map<String, List<String>> sources) {
+    return sources.keySet().stream()
+        .filter(s -> s.endsWith(".current_a"))
+        .max(Comparator.comparingDouble(s -> largest(sources.get(s))))
+        .or(() -> sources.keySet().stream().findFirst())
+        .orElse("");
+  }
+
+  private double largest(List<String> quantities) {
+    Map<String, QuantitySummary> known =
+        log.entry().reading().log().map(LogResult::quantities).orElse(Map.of());
+    return quantities.stream()
+        .flatMap(q -> Optional.ofNullable(known.get(q)).stream())
+        .mapToDouble(QuantitySummary::p95)
+        .filter(v -> !Double.isNaN(v))
+        .max()
+        .orElse(0);
   }
 
   /** Quantities by what they are orders of: {@code N.current_a}; the fundamental left out. */

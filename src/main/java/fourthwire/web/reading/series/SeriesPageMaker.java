@@ -177,25 +177,25 @@ final class SeriesPageMaker {
   private SeriesPlot.Strip strip(Values values, int k) {
     StepValues v = values.fine().get(k);
     List<SeriesPlot.Bound> bounds = bounds(values, k);
+    String range = range(v, values);
+    long passed = passed(bounds, v);
+    int all = v.steps().count();
     return new SeriesPlot.Strip(
         view.place(quantity(values, k)),
-        about(v, bounds, values),
+        passed == 0 ? range : words.of("series.passed", range, share(passed, v.steps())),
+        passed == 0 ? range : words.of("series.passed.brief", range, passed, all),
         Measure.classes(quantity(values, k)),
         v,
         bounds);
   }
 
-  private String about(StepValues v, List<SeriesPlot.Bound> bounds, Values values) {
-    if (Double.isNaN(v.max())) {
-      return words.of("series.none");
-    }
-    String range =
-        words.of(
+  private String range(StepValues v, Values values) {
+    return Double.isNaN(v.max())
+        ? words.of("series.none")
+        : words.of(
             "series.range",
             values.digits().text(values.factor() * v.min()),
             values.digits().text(values.factor() * v.max(), values.unit()));
-    long passed = passed(bounds, v);
-    return passed == 0 ? range : words.of("series.passed", range, share(passed, v.steps()));
   }
 
   /** The same in a few steps, for who can't see the picture or wants numbers. */
