@@ -151,7 +151,8 @@ class ReadingController {
     List<ReadingRepository.Entry> all = readings.ofSite(site);
     model.addAttribute("readings", all.stream().map(r -> pages.row(r, survey)).toList());
     model.addAttribute("coverage", coverage.of(all, survey));
-    model.addAttribute("waiting", uploads.waiting(site).stream().map(w -> waits(w, survey)).toList());
+    model.addAttribute(
+        "waiting", uploads.waiting(site).stream().map(w -> waits(w, survey)).toList());
     model.addAttribute("places", pages.places(survey));
   }
 
