@@ -96,9 +96,10 @@ final class OrdersPageMaker {
 
   /** The conductor with the largest 95th percentile of a current's order in the whole log. */
   private String heaviest(Map<String, List<String>> sources) {
-    return sources.keySet().stream()
-        .filter(s -> s.endsWith(".current_a"))
-        .max(Comparator.comparingDouble(s -> largest(sources.get(s))))
+    return sources.entrySet().stream()
+        .filter(s -> s.getKey().endsWith(".current_a"))
+        .max(Comparator.comparingDouble(s -> largest(s.getValue())))
+        .map(Map.Entry::getKey)
         .or(() -> sources.keySet().stream().findFirst())
         .orElse("");
   }
