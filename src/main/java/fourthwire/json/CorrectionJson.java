@@ -2,6 +2,7 @@ package fourthwire.json;
 
 import fourthwire.metering.Correction;
 import fourthwire.metering.Correction.DropRepeats;
+import fourthwire.metering.Correction.DropRows;
 import fourthwire.metering.Correction.FormDistortion;
 import fourthwire.metering.Correction.KeepWithin;
 import fourthwire.metering.Correction.LeaveOut;
@@ -74,6 +75,9 @@ public final class CorrectionJson {
     if (step instanceof DropRepeats s) {
       return kind("drop-repeats", s.rows());
     }
+    if (step instanceof DropRows s) {
+      return kind("drop-rows", s.rows());
+    }
     if (step instanceof ShiftClock s) {
       return kind("shift-clock", s.rows()).put("seconds", s.millis() / 1000.0);
     }
@@ -136,6 +140,7 @@ public final class CorrectionJson {
       case "keep-within" ->
           new KeepWithin(quantity, o.path("low").doubleValue(), o.path("high").doubleValue());
       case "drop-repeats" -> new DropRepeats(rows);
+      case "drop-rows" -> new DropRows(rows);
       case "shift-clock" ->
           new ShiftClock(Math.round(1000 * o.path("seconds").doubleValue()), rows);
       case "turn-sign" -> new TurnSign(Json.strings(o, QUANTITIES), rows);

@@ -67,6 +67,9 @@ public record Correction(String sentence, List<Step> steps) {
   /** Rows that repeat the time of the row before are left out. */
   public record DropRepeats(Rows rows) implements Step {}
 
+  /** These rows are left out. */
+  public record DropRows(Rows rows) implements Step {}
+
   /** Rows are so many milliseconds later than they say; earlier below zero. */
   public record ShiftClock(long millis, Rows rows) implements Step {}
 

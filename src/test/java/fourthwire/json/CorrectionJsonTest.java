@@ -20,6 +20,7 @@ class CorrectionJsonTest {
             new Correction.LeaveOut(List.of("L1.rms_a", "N.rms_a"), some),
             new Correction.KeepWithin("L1.rms_v", -0.5, 412.25),
             new Correction.DropRepeats(some),
+            new Correction.DropRows(some),
             new Correction.ShiftClock(-217_000, rest),
             new Correction.TurnSign(List.of("L2.active_w"), some),
             new Correction.Scale(List.of("L3.rms_a"), Math.sqrt(3), rest),

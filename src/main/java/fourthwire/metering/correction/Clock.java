@@ -1,6 +1,7 @@
 package fourthwire.metering.correction;
 
 import fourthwire.metering.Correction.DropRepeats;
+import fourthwire.metering.Correction.DropRows;
 import fourthwire.metering.Correction.Rows;
 import fourthwire.metering.Correction.ShiftClock;
 import fourthwire.metering.Correction.Step;
@@ -22,15 +23,16 @@ final class Clock {
     this.read = read;
     this.firstRow = CorrectedSeries.firstRows(read);
     this.shifts = Columns.of(steps, ShiftClock.class);
-    List<DropRepeats> drops = Columns.of(steps, DropRepeats.class);
+    List<DropRepeats> repeats = Columns.of(steps, DropRepeats.class);
+    List<DropRows> drops = Columns.of(steps, DropRows.class);
     this.dropped = new int[read.chunks()][];
     long before = Long.MIN_VALUE;
     long left = read.rows();
     for (int chunk = 0; chunk < dropped.length; chunk++) {
       dropped[chunk] = NONE;
-      if (!drops.isEmpty()) {
+      if (!repeats.isEmpty() || !drops.isEmpty()) {
         long[] times = read.startMillis(chunk);
-        dropped[chunk] = repeats(chunk, times, before, drops);
+        dropped[chunk] = dropped(chunk, times, before, repeats, drops);
         before = times.length == 0 ? before : times[times.length - 1];
         left -= dropped[chunk].length;
       }
@@ -38,10 +40,16 @@ final class Clock {
     this.rows = left;
   }
 
-  private int[] repeats(int chunk, long[] times, long before, List<DropRepeats> drops) {
+  private int[] dropped(
+      int chunk, long[] times, long before, List<DropRepeats> repeats, List<DropRows> drops) {
     return IntStream.range(0, times.length)
-        .filter(row -> times[row] == (row == 0 ? before : times[row - 1]))
-        .filter(row -> drops.stream().anyMatch(d -> holds(d.rows(), firstRow[chunk] + row)))
+        .filter(
+            k -> {
+              long row = firstRow[chunk] + k;
+              return drops.stream().anyMatch(d -> holds(d.rows(), row))
+                  || times[k] == (k == 0 ? before : times[k - 1])
+                      && repeats.stream().anyMatch(d -> holds(d.rows(), row));
+            })
         .toArray();
   }
 

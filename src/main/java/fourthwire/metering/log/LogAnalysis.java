@@ -50,7 +50,7 @@ public final class LogAnalysis {
             new ConductorRelations(names),
             new ImpossibleValues(names, statistics.quantities(), nominalHz),
             new FlatLines(names),
-            new LogClock());
+            new LogClock(series));
     KeyRows key = new KeyRows();
     DayBatch batch = new DayBatch(checks);
     LogDays.forEach(

@@ -7,6 +7,7 @@ import static fourthwire.metering.QualityFinding.REPEATED_ROWS;
 import fourthwire.metering.Correction;
 import fourthwire.metering.Period;
 import fourthwire.metering.QualityFinding;
+import fourthwire.metering.series.Series;
 import java.time.Duration;
 import java.time.Instant;
 import java.util.ArrayList;
@@ -21,6 +22,15 @@ final class LogClock implements DayCheck {
   private static final int MOST_GAPS = 10;
 
   private static final int MOST_JUMPS = 50;
+
+  /** Steps back that are looked at for a block written twice. */
+  private static final int MOST_BLOCKS = 100;
+
+  private final EarlierRows earlier;
+  private final List<Correction.Rows> blocks = new ArrayList<>();
+  private int stepsBack;
+  private long blocksFrom = Long.MAX_VALUE;
+  private long blocksTo = Long.MIN_VALUE;
 
   private final List<QualityFinding> jumps = new ArrayList<>();
   private final List<Gap> gaps = new ArrayList<>();
@@ -46,10 +56,18 @@ final class LogClock implements DayCheck {
     }
   }
 
+  /** Of a log whose rows it may look up again. */
+  LogClock(Series series) {
+    this.earlier = new EarlierRows(series);
+  }
+
   @Override
   public void take(LogDay day) {
     for (int row = 0; row < day.rows(); row++) {
       long at = day.startMillis(row);
+      if (isRepeated(day, row, at)) {
+        continue;
+      }
       if (before == Long.MIN_VALUE) {
         first = at;
       } else {
@@ -58,6 +76,28 @@ final class LogClock implements DayCheck {
       before = at;
     }
     rowBefore = row(day, day.rows() - 1);
+  }
+
+  /** Whether a row is of a block that is written twice; it then tells nothing of the clock. */
+  private boolean isRepeated(LogDay day, int row, long at) {
+    long number = day.firstRow() + row;
+    if (at < before && number >= blocksEnd() && stepsBack < MOST_BLOCKS) {
+      stepsBack++;
+      long rows = earlier.repeated(number, at);
+      if (rows > 0) {
+        blocks.add(new Correction.Rows(number, number + rows));
+      }
+    }
+    boolean repeated = number < blocksEnd();
+    if (repeated) {
+      blocksFrom = Math.min(blocksFrom, at);
+      blocksTo = Math.max(blocksTo, at + day.intervalMillis());
+    }
+    return repeated;
+  }
+
+  private long blocksEnd() {
+    return blocks.isEmpty() ? 0 : blocks.get(blocks.size() - 1).to();
   }
 
   private static double[] row(LogDay day, int row) {
@@ -162,6 +202,28 @@ final class LogClock implements DayCheck {
               gapCount + " gaps in all, " + words(missing) + " together; the longest are listed.",
               List.of()));
     }
+    repeats(all);
+    return all;
+  }
+
+  private void repeats(List<QualityFinding> all) {
+    if (!blocks.isEmpty()) {
+      long rows = blocks.stream().mapToLong(Correction.Rows::count).sum();
+      all.add(
+          finding(
+              REPEATED_ROWS,
+              blocksFrom,
+              blocksTo,
+              "They count twice in statistics over the rows as read.",
+              String.format(
+                  Locale.ROOT,
+                  "%d %s in the file a second time, the first at row %d of the data: the same times"
+                      + " with the same values.",
+                  rows,
+                  rows == 1 ? "row stands" : "rows stand",
+                  blocks.get(0).from() + 1),
+              List.of(Offers.dropRows(blocks))));
+    }
     if (run.same + run.different > 0) {
       all.add(
           finding(
@@ -178,7 +240,6 @@ final class LogClock implements DayCheck {
                   run.different),
               List.of(Offers.dropRepeats(new Correction.Rows(run.fromRow, run.toRow)))));
     }
-    return all;
   }
 
   private static QualityFinding finding(

@@ -2,6 +2,7 @@ package fourthwire.metering.log;
 
 import fourthwire.metering.Correction;
 import fourthwire.metering.Correction.DropRepeats;
+import fourthwire.metering.Correction.DropRows;
 import fourthwire.metering.Correction.FormDistortion;
 import fourthwire.metering.Correction.KeepWithin;
 import fourthwire.metering.Correction.LeaveOut;
@@ -62,6 +63,13 @@ final class Offers {
 
   static Correction dropRepeats(Rows rows) {
     return Correction.of("Count each of these times once: its first row", new DropRepeats(rows));
+  }
+
+  /** Blocks of rows that stand in the file before. */
+  static Correction dropRows(List<Rows> blocks) {
+    List<Step> steps = new ArrayList<>();
+    blocks.forEach(rows -> steps.add(new DropRows(rows)));
+    return new Correction("Count each of these rows once: where it stands first", steps);
   }
 
   /** The rows from here on, or those before, moved so that they meet. */

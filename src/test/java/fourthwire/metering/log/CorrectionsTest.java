@@ -59,6 +59,16 @@ class CorrectionsTest {
             },
             NOTHING),
         fault(
+            "a block written twice",
+            QualityFinding.REPEATED_ROWS,
+            b -> b.repeat(D, D + 20),
+            NOTHING),
+        fault(
+            "a day written twice",
+            QualityFinding.REPEATED_ROWS,
+            b -> b.repeat(D, D + 144),
+            NOTHING),
+        fault(
             "clock set back",
             QualityFinding.CLOCK_JUMP,
             b -> setClock(b, D + 6, -6 * InventedBoard.STEP),

@@ -113,12 +113,17 @@ public final class InventedBoard {
 
   /** Writes a row twice. */
   public void repeat(int row) {
-    times.add(row, times.get(row));
+    repeat(row, row + 1);
+  }
+
+  /** Writes a block of rows twice, the second time right behind the first. */
+  public void repeat(int from, int to) {
+    times.addAll(to, List.copyOf(times.subList(from, to)));
     columns.replaceAll(
         (name, x) -> {
-          double[] more = new double[x.length + 1];
-          System.arraycopy(x, 0, more, 0, row + 1);
-          System.arraycopy(x, row, more, row + 1, x.length - row);
+          double[] more = new double[x.length + to - from];
+          System.arraycopy(x, 0, more, 0, to);
+          System.arraycopy(x, from, more, to, x.length - from);
           return more;
         });
   }

@@ -47,6 +47,18 @@ class PlantedFaultsTest {
               b.repeat(p[0] + 2);
             }),
         fault(
+            "a block of rows written twice",
+            QualityFinding.REPEATED_ROWS,
+            d + 40,
+            d + 60,
+            (b, p) -> b.repeat(p[0], p[1])),
+        fault(
+            "a day written twice",
+            QualityFinding.REPEATED_ROWS,
+            d,
+            d + PER_DAY,
+            (b, p) -> b.repeat(p[0], p[1])),
+        fault(
             "clock set back",
             QualityFinding.CLOCK_JUMP,
             d,
@@ -176,6 +188,24 @@ class PlantedFaultsTest {
           .as("seed %d", seed)
           .allSatisfy(f -> assertThat(overlaps(f.period().orElseThrow(), planted)).isTrue());
     }
+  }
+
+  /** Blocks written twice are no clock set back, and leave no gap. */
+  @ParameterizedTest
+  @ValueSource(longs = {21, 22, 23})
+  void aBlockWrittenTwiceIsToldOnce(long seed) {
+    InventedBoard board = new InventedBoard(seed, 2);
+    board.repeat(480, 500);
+    board.repeat(2000, 2000 + PER_DAY);
+    assertThat(board.reading().quality())
+        .as("seed %d", seed)
+        .singleElement()
+        .satisfies(
+            f -> {
+              assertThat(f.code()).isEqualTo(QualityFinding.REPEATED_ROWS);
+              assertThat(f.sentence()).startsWith("164 rows stand in the file a second time");
+              assertThat(f.corrections()).hasSize(1);
+            });
   }
 
   /** They share time, and neither begins a day before the other. */
