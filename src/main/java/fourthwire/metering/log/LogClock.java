@@ -23,6 +23,9 @@ final class LogClock implements DayCheck {
 
   private static final int MOST_JUMPS = 50;
 
+  /** A step off the grid that is longer is a pause as well. */
+  private static final long LONGEST_SET_MILLIS = Duration.ofDays(1).toMillis();
+
   /** Steps back that are looked at for a block written twice. */
   private static final int MOST_BLOCKS = 100;
 
@@ -113,36 +116,61 @@ final class LogClock implements DayCheck {
     long step = at - before;
     // Loggers stamp to the second: a step off the grid by less than a tenth is jitter.
     long off = Math.abs(step - Math.round((double) step / interval) * interval);
+    boolean onGrid = off <= interval / 10;
     if (step == 0) {
       repeat(day, row, at);
     } else if (step < 0) {
-      jump(
-          at,
-          before,
-          "Rows overlap: the same time is counted twice.",
-          "The clock runs back by "
-              + words(-step)
-              + " after row "
-              + (day.firstRow() + row)
-              + " of the data.",
-          Offers.shift(interval - step, day.firstRow() + row));
-    } else if (off > interval / 10) {
-      jump(
-          before,
-          at,
-          "One interval is not of the stated length.",
-          "The step after row "
-              + (day.firstRow() + row)
-              + " of the data is "
-              + words(step)
-              + ", no multiple of the interval of "
-              + words(interval)
-              + ": the clock was set, or the logging began anew.",
-          Offers.shift(onGrid(step, interval) - step, day.firstRow() + row));
+      setBack(day.firstRow() + row, at, interval);
+    } else if (!onGrid) {
+      offGrid(day.firstRow() + row, at, interval);
     }
-    if (step - interval > interval / 2) {
+    if (step - interval > interval / 2 && (onGrid || step > LONGEST_SET_MILLIS)) {
       gap(new Gap(before + interval, at));
     }
+  }
+
+  private void setBack(long row, long at, long interval) {
+    long by = interval - (at - before);
+    jump(
+        at,
+        before,
+        "Rows overlap: the same time is counted twice.",
+        String.format(
+            Locale.ROOT,
+            "Row %d of the data is %s before the row ahead of it, where a step of %s is due: the"
+                + " clock was set back by %s.",
+            row + 1,
+            words(before - at),
+            words(interval),
+            words(by)),
+        Offers.shift(by, 0, row));
+  }
+
+  /** Nothing need be missing; or rows are, and the clock is off by what is no whole interval. */
+  private void offGrid(long row, long at, long interval) {
+    long step = at - before;
+    List<Correction> offers = new ArrayList<>();
+    if (step <= LONGEST_SET_MILLIS) {
+      offers.addAll(Offers.shift(interval - step, 0, row));
+    }
+    long whole = onGrid(step, interval);
+    if (whole > interval || offers.isEmpty()) {
+      offers.addAll(Offers.shift(whole - step, whole - interval, row));
+    }
+    jump(
+        before,
+        at,
+        "One interval is not of the stated length.",
+        String.format(
+            Locale.ROOT,
+            "The step after row %d of the data is %s, no multiple of the interval of %s: the clock"
+                + " was set %s by %s, or the logging began anew.",
+            row,
+            words(step),
+            words(interval),
+            step > interval ? "forward" : "back",
+            words(Math.abs(step - interval))),
+        offers);
   }
 
   /** The nearest step of whole intervals. */

@@ -72,16 +72,17 @@ final class Offers {
     return new Correction("Count each of these rows once: where it stands first", steps);
   }
 
-  /** The rows from here on, or those before, moved so that they meet. */
-  static List<Correction> shift(long millis, long row) {
+  /** The rows from here on, or those before, moved so that they meet but for a gap. */
+  static List<Correction> shift(long millis, long gapMillis, long row) {
     String by = LogClock.words(Math.abs(millis));
+    String gap = gapMillis > 0 ? ", which leaves a gap of " + LogClock.words(gapMillis) : "";
     boolean later = millis > 0;
     return List.of(
         Correction.of(
-            "Set the rows after the jump " + by + (later ? " later" : " earlier"),
+            "Set the rows after the jump " + by + (later ? " later" : " earlier") + gap,
             new ShiftClock(millis, new Rows(row, Long.MAX_VALUE))),
         Correction.of(
-            "Set the rows before the jump " + by + (later ? " earlier" : " later"),
+            "Set the rows before the jump " + by + (later ? " earlier" : " later") + gap,
             new ShiftClock(-millis, new Rows(0, row))));
   }
 

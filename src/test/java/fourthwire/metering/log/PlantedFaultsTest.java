@@ -190,6 +190,41 @@ class PlantedFaultsTest {
     }
   }
 
+  /** A clock set forward by what is no whole interval is told once, and the way back offered. */
+  @ParameterizedTest
+  @ValueSource(longs = {21, 22, 23})
+  void aClockSetForwardIsToldOnce(long seed) {
+    InventedBoard board = new InventedBoard(seed, 2);
+    board.times.replaceAll(t -> t >= START + STEP * 500 ? t + 13 * 60_000 : t);
+    assertThat(board.reading().quality())
+        .as("seed %d", seed)
+        .singleElement()
+        .satisfies(
+            f -> {
+              assertThat(f.code()).isEqualTo(QualityFinding.CLOCK_JUMP);
+              assertThat(f.sentence()).contains("set forward by 13 min");
+              assertThat(f.corrections().get(0).sentence())
+                  .isEqualTo("Set the rows after the jump 13 min earlier");
+            });
+  }
+
+  /** The sentence of a clock set back names what its button does. */
+  @ParameterizedTest
+  @ValueSource(longs = {21, 22, 23})
+  void aClockSetBackIsTimedFromTheStepThatIsDue(long seed) {
+    InventedBoard board = new InventedBoard(seed, 2);
+    board.times.replaceAll(t -> t >= START + STEP * 500 ? t - 47 * 60_000 : t);
+    assertThat(board.reading().quality())
+        .as("seed %d", seed)
+        .singleElement()
+        .satisfies(
+            f -> {
+              assertThat(f.sentence()).contains("a step of 10 min is due", "set back by 47 min");
+              assertThat(f.corrections().get(0).sentence())
+                  .isEqualTo("Set the rows after the jump 47 min later");
+            });
+  }
+
   /** Blocks written twice are no clock set back, and leave no gap. */
   @ParameterizedTest
   @ValueSource(longs = {21, 22, 23})
