@@ -39,13 +39,14 @@ final class FlaggedDays {
     final Instant from;
     final long fromRow;
     Instant to = Instant.MIN;
+    Instant end = Instant.MIN;
     long toRow;
     Optional<LogDay> last = Optional.empty();
 
     Stretch(Fault fault, LogDay before, LogDay day) {
       this.fault = fault;
-      this.from = day.from().isBefore(day.to()) ? day.from() : day.to();
       this.fromRow = RowTest.begin(fault.rows(), before, day, day.firstRow());
+      this.from = start(fromRow, before, day).orElse(day.from());
       add(day);
     }
 
@@ -59,7 +60,24 @@ final class FlaggedDays {
       LogDay day = last.orElse(after);
       long whole = day.firstRow() + day.rows();
       toRow = Math.max(fromRow, RowTest.end(fault.rows(), day, after, whole));
+      Duration interval = Duration.ofMillis(day.intervalMillis());
+      end = start(toRow - 1, day, after).map(t -> t.plus(interval)).orElse(to);
       last = Optional.empty();
+    }
+
+    /** From the first row that has the fault to the last, as its correction has it. */
+    Period period() {
+      return from.isBefore(end) ? new Period(from, end) : new Period(end, from);
+    }
+
+    private static Optional<Instant> start(long row, LogDay... days) {
+      for (LogDay day : days) {
+        long k = row - day.firstRow();
+        if (k >= 0 && k < day.rows()) {
+          return Optional.of(Instant.ofEpochMilli(day.startMillis((int) k)));
+        }
+      }
+      return Optional.empty();
     }
   }
 
@@ -96,7 +114,7 @@ final class FlaggedDays {
         findings.add(
             new QualityFinding(
                 s.fault.code(),
-                Optional.of(new Period(s.from, s.to)),
+                Optional.of(s.period()),
                 s.fault.effect(),
                 s.fault.sentence(),
                 s.fault.corrections().rows(new Correction.Rows(s.fromRow, s.toRow))));

@@ -140,6 +140,18 @@ final class Offers {
         new Scale(quantities, factor, rows));
   }
 
+  /** A line's power by the factor that undoes a ratio; totals that were summed from it with it. */
+  Correction rescale(String power, double ratio, boolean totalFollows, Rows rows) {
+    Correction alone = scale(List.of(power), ratio, rows);
+    if (!totalFollows) {
+      return alone;
+    }
+    List<Step> steps = new ArrayList<>(alone.steps());
+    steps.addAll(total(rows));
+    return new Correction(
+        alone.sentence() + ", and form the total as the sum of the lines", steps);
+  }
+
   static Correction formDistortion(String quantity, Rows rows) {
     return Correction.of(
         "Form " + quantity + " from the harmonics", new FormDistortion(quantity, rows));

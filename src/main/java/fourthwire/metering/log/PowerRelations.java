@@ -18,6 +18,7 @@ import java.util.Optional;
  */
 final class PowerRelations implements DayCheck {
   private static final int FEWEST_ROWS = 4;
+  private static final String ACTIVE = "Active";
 
   private final FlaggedDays flagged = new FlaggedDays();
   private final LineOrder order = new LineOrder(flagged);
@@ -135,8 +136,11 @@ final class PowerRelations implements DayCheck {
     Optional<double[]> apparent = day.find(line + ".apparent_va");
     if (apparent.isPresent()) {
       double median = median(a, k -> apparent.get()[k] / (v[k] * a[k]));
-      judge(day, line, "Apparent", median, "volts times amps", median < 0.93 || median > 1.07);
-      return;
+      boolean wrong = median < 0.93 || median > 1.07;
+      judge(day, line, "Apparent", median, "volts times amps", wrong);
+      if (wrong) {
+        return;
+      }
     }
     Optional<double[]> watts = day.find(line + ".active_w");
     if (watts.isEmpty()) {
@@ -148,13 +152,13 @@ final class PowerRelations implements DayCheck {
       judge(
           day,
           line,
-          "Active",
+          ACTIVE,
           median,
           "volts times amps times power factor",
           median < 0.9 || median > 1.1);
     } else {
       double median = median(a, k -> Math.abs(watts.get()[k] / (v[k] * a[k])));
-      judge(day, line, "Active", median, "volts times amps", median > 1.05 || median < 0.02);
+      judge(day, line, ACTIVE, median, "volts times amps", median > 1.05 || median < 0.02);
     }
   }
 
@@ -182,41 +186,66 @@ final class PowerRelations implements DayCheck {
                   median,
                   of),
               rows -> rescaled(day, line, which, median, rows),
-              RowTest.ofRatio((other, row) -> ratio(other, line, row), median)));
+              RowTest.ofRatio((other, row) -> ratio(other, line, which, row), median)));
     }
   }
 
-  /** Power on volts times amps in a row, times power factor where only that tells. */
-  private static double ratio(LogDay day, String line, int row) {
+  /** A power on volts times amps in a row; the active on that times power factor if logged. */
+  private static double ratio(LogDay day, String line, String which, int row) {
     Optional<double[]> volts = new LineDay(day).volts(line);
     Optional<double[]> amps = day.find(line + ".rms_a");
-    Optional<double[]> apparent = day.find(line + ".apparent_va");
-    Optional<double[]> watts = day.find(line + ".active_w");
-    if (volts.isEmpty() || amps.isEmpty()) {
+    Optional<double[]> power = day.find(line + measure(which));
+    if (volts.isEmpty() || amps.isEmpty() || power.isEmpty()) {
       return Double.NaN;
     }
-    double va = volts.get()[row] * amps.get()[row];
-    double factor = day.find(line + ".power_factor").map(f -> Math.abs(f[row])).orElse(1.0);
-    return apparent
-        .map(s -> s[row] / va)
-        .or(() -> watts.map(p -> Math.abs(p[row]) / (va * factor)))
-        .orElse(Double.NaN);
+    double factor =
+        which.equals(ACTIVE)
+            ? day.find(line + ".power_factor").map(f -> Math.abs(f[row])).orElse(1.0)
+            : 1;
+    return Math.abs(power.get()[row]) / (volts.get()[row] * amps.get()[row] * factor);
+  }
+
+  private static String measure(String which) {
+    return which.equals(ACTIVE) ? ".active_w" : ".apparent_va";
   }
 
   /** The power where the ratio is a prefix of its unit; else the amps, or the power. */
   private static List<Correction> rescaled(
       LogDay day, String line, String which, double median, Correction.Rows rows) {
     Offers offers = new Offers(day.quantities());
-    List<String> power =
-        offers.logged(line + (which.equals("Active") ? ".active_w" : ".apparent_va"));
-    Correction ofPower = Offers.scale(power, median, rows);
+    boolean active = which.equals(ACTIVE);
+    double ratio = active ? againstOthers(day, line, median) : median;
+    Correction ofPower =
+        offers.rescale(line + measure(which), ratio, active && totalIsSum(day), rows);
     List<String> amps = new ArrayList<>(List.of(line + ".rms_a"));
     day.quantities().stream()
         .filter(q -> q.matches(line + "\\.current_h\\d+_a") && harmonicsAgree(day, line))
         .forEach(amps::add);
-    return isPrefix(median)
+    // Where the apparent power fits volts and amps, the active power alone is wrong.
+    boolean alone = active && day.find(line + ".apparent_va").isPresent();
+    return alone || isPrefix(ratio)
         ? List.of(ofPower)
-        : List.of(Offers.scale(amps, 1 / median, rows), ofPower);
+        : List.of(Offers.scale(amps, 1 / ratio, rows), ofPower);
+  }
+
+  /** A ratio of more than can be, without a power factor: held against that of the other lines. */
+  private static double againstOthers(LogDay day, String line, double ratio) {
+    if (day.find(line + ".power_factor").isPresent()) {
+      return ratio;
+    }
+    double sum = 0;
+    int count = 0;
+    for (String other : LineDay.LINES) {
+      double usual =
+          other.equals(line)
+              ? Double.NaN
+              : Rows.median(day.rows(), row -> ratio(day, other, ACTIVE, row));
+      if (usual > 0.3 && usual < 1.05) {
+        sum += usual;
+        count++;
+      }
+    }
+    return count == 0 ? ratio : ratio * count / sum;
   }
 
   private static boolean isPrefix(double ratio) {

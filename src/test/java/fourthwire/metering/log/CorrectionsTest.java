@@ -115,6 +115,17 @@ class CorrectionsTest {
             },
             NOTHING),
         fault(
+            "a power ten times what it can be, the total formed from it",
+            QualityFinding.WRONG_RATIO,
+            b -> {
+              b.apparent();
+              for (int row = D; row < E; row++) {
+                b.columns.get("total.active_w")[row] += 9 * b.at("L2.active_w", row);
+              }
+              b.scale("L2.active_w", D, E, 10);
+            },
+            NOTHING),
+        fault(
             "a clamp turned, the total right",
             QualityFinding.REVERSED_CLAMP,
             b -> {

@@ -92,6 +92,15 @@ public final class InventedBoard {
     }
   }
 
+  /** Logs apparent powers too: volts times amps. */
+  void apparent() {
+    for (String line : LineDay.LINES) {
+      for (int row = 0; row < times.size(); row++) {
+        put(line + ".apparent_va", row, at(line + ".rms_v", row) * at(line + ".rms_a", row), 0);
+      }
+    }
+  }
+
   void swap(String a, String b, int from, int to) {
     for (int row = from; row < to; row++) {
       double v = columns.get(a)[row];

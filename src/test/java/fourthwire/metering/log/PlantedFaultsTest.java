@@ -153,6 +153,17 @@ class PlantedFaultsTest {
             e,
             (b, p) -> b.scale("L1.active_w", p[0], p[1], 0.001)),
         fault(
+            "a power ten times what it can be, beside an apparent power",
+            QualityFinding.WRONG_RATIO,
+            d,
+            e,
+            (b, p) -> {
+              b.apparent();
+              b.columns.keySet().removeIf(name -> name.endsWith("power_factor"));
+              b.scale("L1.active_w", p[0], p[1], 10);
+              b.columns.remove("total.active_w");
+            }),
+        fault(
             "neutral above all lines",
             QualityFinding.NEUTRAL_NOT_SUM,
             d,
@@ -188,6 +199,19 @@ class PlantedFaultsTest {
           .as("seed %d", seed)
           .allSatisfy(f -> assertThat(overlaps(f.period().orElseThrow(), planted)).isTrue());
     }
+  }
+
+  /** A fault's time is that of the rows which its correction mends, not of whole days. */
+  @ParameterizedTest
+  @ValueSource(longs = {21, 22, 23})
+  void aFaultLastsAsLongAsTheRowsMended(long seed) {
+    InventedBoard board = new InventedBoard(seed, 2);
+    board.scale("L2.active_w", 400, 820, -1);
+    board.scale("L2.power_factor", 400, 820, -1);
+    board.columns.remove("total.active_w");
+    Period period = board.reading().quality().get(0).period().orElseThrow();
+    assertThat(period.from()).isEqualTo(Instant.ofEpochMilli(START + STEP * 400));
+    assertThat(period.to()).isEqualTo(Instant.ofEpochMilli(START + STEP * 820));
   }
 
   /** A clock set forward by what is no whole interval is told once, and the way back offered. */
