@@ -148,8 +148,7 @@ final class Offers {
     }
     List<Step> steps = new ArrayList<>(alone.steps());
     steps.addAll(total(rows));
-    return new Correction(
-        alone.sentence() + ", and form the total as the sum of the lines", steps);
+    return new Correction(alone.sentence() + ", and form the total as the sum of the lines", steps);
   }
 
   static Correction formDistortion(String quantity, Rows rows) {
