@@ -362,6 +362,16 @@ class FurtherLayoutsTest {
     layout("percent signs in the cells", dated().cellUnits())
         .lines("THD I L# (%)", "current_thd_percent")
         .lines("THD V L# (%)", "voltage_thd_percent");
+    layout("lines over a row of units", LayoutWriter.of(",", '.').time("Time|", "yyyy-MM-dd HH:mm"))
+        .lines("L#|V", "rms_v")
+        .lines("L#|A", "rms_a")
+        .lines("L#|kW", "active_w", 3);
+    layout("lines and units alone", dated())
+        .lines("L# V", "rms_v")
+        .lines("L# A", "rms_a")
+        .lines("L#_kW", "active_w", 3)
+        .lines("L# [kvar]", "reactive_var", 3)
+        .column("W total", "total.active_w");
     layout("voltage harmonics and others", dated())
         .lines("U L# H5 phase (°)", "")
         .lines("U L# interharmonic 5 (%)", "")

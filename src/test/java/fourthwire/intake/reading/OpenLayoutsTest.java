@@ -84,6 +84,9 @@ class OpenLayoutsTest {
         "columns.Voltage L1 (A)",
         dated().lines("Voltage L# (A)", "rms_v").column("I N (A)", "N.rms_a"));
     layout(
+        "volts of alternating current, of no conductor", "columns.AC (V)",
+        dated().column("AC (V)", "L1.rms_v"));
+    layout(
         "VAB as volts between lines or volt-amperes of a line",
         "columns.VAA",
         dated().lines("V@", "rms_v").lines("I@", "rms_a").lines("VA@", "apparent_va"));

@@ -209,7 +209,8 @@ final class LogHeading {
     if (words.says(Sense.NEUTRAL)) {
       named = named.filter(p -> !p.equals(LogPlace.TOTAL)).or(() -> Optional.of("N"));
     }
-    if (named.isEmpty() && (summed || words.says(Sense.TOTAL))) {
+    boolean placeless = words.places().isEmpty();
+    if (named.isEmpty() && (summed && placeless || words.says(Sense.TOTAL))) {
       named = Optional.of(LogPlace.TOTAL);
     }
     if (named.isEmpty()) {

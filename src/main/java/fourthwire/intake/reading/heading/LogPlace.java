@@ -24,7 +24,8 @@ final class LogPlace {
    */
   LogPlace(Set<String> written) {
     this.ryb = written.stream().anyMatch(p -> p.matches("y[bn]?|ry"));
-    this.rst = !ryb && written.stream().anyMatch(p -> p.matches("s[tn]?|rs"));
+    boolean third = written.contains("r") && written.contains("t");
+    this.rst = !ryb && (third || written.stream().anyMatch(p -> p.matches("s[tn]?|rs")));
   }
 
   /** The line, pair, N or total; empty for none. */

@@ -24,7 +24,7 @@ final class LogWords {
           "(?<=\\p{Ll}{3})(?=\\p{Lu})|(?<=\\p{Lu}{3})(?=\\p{Lu}\\p{Ll}{2})|(?<=\\d)(?=[kM]?(?:W|VA|VAr|var|VAR|A|V)$)");
   private static final Pattern STANDING =
       Pattern.compile(
-          "l[123]|l[123]l[123]|l[123]n|l?[123]-?[123n]|[123][123n]|[abcrstnyb]|[abc][abcn]|[rst][rstn]|ry|yb|br|[yb]n");
+          "l[123]|l[123]l[123]|l[123]n|l?[123]-?[123n]|[123][123n]|[abcrstnyb]|a[abn]|[bc][abcn]|[rst][rstn]|ry|yb|br|[yb]n");
 
   /** Phrases and what stands for them, one after the other. */
   private static final Map<Pattern, String> PHRASES = new LinkedHashMap<>();
@@ -159,7 +159,7 @@ final class LogWords {
 
   private void take(List<String> all, int k) {
     String word = all.get(k).toLowerCase(Locale.ROOT);
-    boolean withMany = all.size() > 1;
+    boolean withMany = all.size() > 1 || unit.isPresent();
     if (DIGITS.matcher(word).matches()) {
       takeNumber(Integer.parseInt(word), k > 0 ? all.get(k - 1) : "");
     } else if (isConnecting(all, k)) {
@@ -208,11 +208,11 @@ final class LogWords {
         && Unit.find(all.get(k + 1)).isPresent();
   }
 
-  /** {@code VA_sum}, {@code W_total}; and VA where it is no voltage of line A. */
+  /** {@code VA_sum}, {@code W_total}, {@code W L1}; and VA where it is no voltage of line A. */
   private boolean isSummed(String word, List<String> all) {
     boolean total =
         all.stream().flatMap(w -> Vocabulary.sense(w).stream()).anyMatch(s -> s == Sense.TOTAL);
-    return word.equals("va") && (total || !lettered) || word.equals("w") && total;
+    return word.equals("va") && (total || !lettered) || word.equals("w") && all.stream().anyMatch(LogWords::namesPlace);
   }
 
   /** A unit that is no symbol of something on a line: VA may be the voltage of line A. */

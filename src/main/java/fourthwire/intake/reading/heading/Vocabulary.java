@@ -102,7 +102,7 @@ final class Vocabulary {
         Sense.NOTHING,
         "rms trms true-rms eff efficace effektiv value values wert valeur measured to the of import"
             + " demand imported imp delivered del consumption consumed bezug interval period conn"
-            + " node");
+            + " node ac");
   }
 
   private static final Set<String> CONNECTORS = Set.of("in", "en", "as", "and", "d", "de", "der");
