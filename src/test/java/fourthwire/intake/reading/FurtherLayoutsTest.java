@@ -372,6 +372,11 @@ class FurtherLayoutsTest {
         .lines("L#_kW", "active_w", 3)
         .lines("L# [kvar]", "reactive_var", 3)
         .column("W total", "total.active_w");
+    layout("demand beside power, transients beside volts", dated())
+        .column("kW demand", "")
+        .column("kW total", "total.active_w", 3)
+        .lines("Transient L# (V)", "")
+        .lines("V L# (V)", "rms_v");
     layout("voltage harmonics and others", dated())
         .lines("U L# H5 phase (°)", "")
         .lines("U L# interharmonic 5 (%)", "")

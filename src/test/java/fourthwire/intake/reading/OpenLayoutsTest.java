@@ -87,6 +87,14 @@ class OpenLayoutsTest {
         "volts of alternating current, of no conductor", "columns.AC (V)",
         dated().column("AC (V)", "L1.rms_v"));
     layout(
+        "power sent out",
+        "columns.kW export",
+        dated().column("kW export", "total.active_w", 3).lines("V# (V)", "rms_v"));
+    layout(
+        "two feeders in one file",
+        "columns.Feeder 3 L1 A",
+        dated().lines("Feeder 2 L# A", "rms_a").lines("Feeder 3 L# A", "rms_a"));
+    layout(
         "VAB as volts between lines or volt-amperes of a line",
         "columns.VAA",
         dated().lines("V@", "rms_v").lines("I@", "rms_a").lines("VA@", "apparent_va"));

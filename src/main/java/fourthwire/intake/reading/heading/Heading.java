@@ -6,6 +6,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.Set;
 import java.util.regex.Pattern;
 import java.util.stream.Collectors;
 
@@ -57,7 +58,35 @@ public record Heading(
     words.forEach(
         (heading, w) ->
             read.put(heading, exact(heading).orElseGet(() -> new LogHeading(w, places).read())));
+    askCircuits(read);
+    Set<String> plain =
+        read.entrySet().stream()
+            .filter(e -> !isDemand(words, e.getKey()))
+            .map(e -> e.getValue().named())
+            .collect(Collectors.toUnmodifiableSet());
+    read.replaceAll((name, h) -> isDemand(words, name) && plain.contains(h.named()) ? NONE : h);
     return read;
+  }
+
+  /** Beside the plain quantity its mean over a longer interval is not read. */
+  private static boolean isDemand(Map<String, LogWords> words, String heading) {
+    return words.get(heading).says(Vocabulary.Sense.DEMAND);
+  }
+
+  /** Of several panels or feeders in one file only one can be what this meter measures. */
+  private static void askCircuits(Map<String, Heading> read) {
+    Set<String> circuits =
+        read.entrySet().stream()
+            .filter(e -> e.getValue().quantity().contains("."))
+            .map(e -> Circuit.of(e.getKey()))
+            .collect(Collectors.toUnmodifiableSet());
+    if (circuits.size() > 1) {
+      read.replaceAll(
+          (name, h) ->
+              Circuit.of(name).isEmpty() || h.meaning() == Meaning.NONE
+                  ? h
+                  : unclear("whether this meter measures " + Circuit.of(name)));
+    }
   }
 
   /** A quantity's name, perhaps with the statistic behind it as results write it. */
@@ -72,6 +101,10 @@ public record Heading(
     }
     return MeasuredQuantity.ofLog(text)
         .map(q -> new Heading(Meaning.EXACT, text, Statistic.MEAN, 1, ""));
+  }
+
+  private String named() {
+    return quantity + " " + statistic;
   }
 
   /** Nothing a log holds. */

@@ -144,9 +144,10 @@ final class LogHeading {
       return Heading.none();
     }
     boolean angle = words.says(Sense.ANGLE) || is(Unit.Kind.ANGLE);
+    boolean ofFundamental = words.says(Sense.DISPLACEMENT) || words.says(Sense.FUNDAMENTAL);
     return angle
         ? Heading.none()
-        : at(words.says(Sense.DISPLACEMENT) ? "displacement_factor" : "power_factor", true);
+        : at(ofFundamental ? "displacement_factor" : "power_factor", true);
   }
 
   /** Volts, amps and powers; what words and unit say must agree. */
@@ -159,6 +160,10 @@ final class LogHeading {
     }
     if (voltage()) {
       return at("rms_v", unit.isPresent());
+    }
+    if (words.says(Sense.EXPORTED)) {
+      return Heading.unclear(
+          "whether this is power drawn, with a sign: named as sent out, it counts as negative");
     }
     Optional<String> named = named();
     Optional<String> measured = unit.flatMap(LogHeading::powerOf);

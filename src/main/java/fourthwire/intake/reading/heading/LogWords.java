@@ -39,7 +39,8 @@ final class LogWords {
     phrase("line[\\s-]+to[\\s-]+(line|neutral)", " ");
     phrase("k[\\s-]factor", " kfactor ");
     phrase("thd[\\s-]?f\\b", " thd ");
-    phrase("thd[\\s-]r\\b(?=.*\\d|.*[abc]\\b)", " thdr ");
+    phrase("thd[\\s_-]r(?![\\p{L}\\d])(?=.*\\d|.*[abc]\\b)", " thdr ");
+    phrase("(?<=\\b(?:l|phase |ph)[123abc]\\b.{0,40})thd[\\s_-]r\\b", " thdr ");
   }
 
   private static final Pattern RMS =
@@ -75,7 +76,7 @@ final class LogWords {
    */
   static LogWords of(String heading, boolean lettered) {
     LogWords words = new LogWords(lettered);
-    String text = words.withoutUnit(plain(heading));
+    String text = words.withoutUnit(plain(Circuit.without(heading)));
     List<String> all = new ArrayList<>();
     for (String part : BREAK.split(text)) {
       for (String word : CAMEL.split(part)) {
@@ -159,12 +160,12 @@ final class LogWords {
 
   private void take(List<String> all, int k) {
     String word = all.get(k).toLowerCase(Locale.ROOT);
-    boolean withMany = all.size() > 1 || unit.isPresent();
+    boolean standing = all.size() > 1 || standsAlone(word);
     if (DIGITS.matcher(word).matches()) {
       takeNumber(Integer.parseInt(word), k > 0 ? all.get(k - 1) : "");
     } else if (isConnecting(all, k)) {
       return;
-    } else if (withMany && !isApparent(all, k) && STANDING.matcher(word).matches()) {
+    } else if (standing && !isApparent(all, k) && STANDING.matcher(word).matches()) {
       places.add(word);
     } else if (unit.isEmpty() && isSummed(word, all)) {
       unit = Unit.find(word);
@@ -178,6 +179,13 @@ final class LogWords {
     } else {
       Symbol.of(word).ifPresentOrElse(this::take, () -> unknown.add(word));
     }
+  }
+
+  /** A line with nothing but its unit; two letters are a pair in volts, else ST is a symbol. */
+  private boolean standsAlone(String word) {
+    return unit.isPresent()
+        && (word.matches("l?[123]|[a-z]")
+            || unit.filter(u -> u.kind() == Unit.Kind.VOLTAGE).isPresent());
   }
 
   private void takeUnbalanceOf(String word) {

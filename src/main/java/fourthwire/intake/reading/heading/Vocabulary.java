@@ -27,6 +27,7 @@ final class Vocabulary {
     FREQUENCY,
     ENERGY,
     EXPORTED,
+    DEMAND,
     TOTAL,
     NEUTRAL,
     LINE,
@@ -71,6 +72,7 @@ final class Vocabulary {
     put(
         Sense.EXPORTED,
         "export exported exp received generated rev reverse abgabe einspeisung out");
+    put(Sense.DEMAND, "demand");
     put(
         Sense.TOTAL,
         "total tot sum sys system summe gesamt totaal totale somme suma tt 3ph 3p 3phase threephase"
@@ -96,12 +98,13 @@ final class Vocabulary {
             + " flags dip swell sag record rec count index sequence seq positive negative zero"
             + " interharmonic interharmonics ripple std stdev stddev deviation sigma dc thdr tif"
             + " distortionpower nonactive signalling rvc quality samples sample no nr number id h0"
+            + " transient transients impulse impulses surge surges inrush"
             + " rotation humidity speed alarm ground earth gnd pe residual leakage erde erdstrom"
             + " tierra terre nominal rated setpoint limit threshold target delta difference diff");
     put(
         Sense.NOTHING,
         "rms trms true-rms eff efficace effektiv value values wert valeur measured to the of import"
-            + " demand imported imp delivered del consumption consumed bezug interval period conn"
+            + " imported imp delivered del consumption consumed bezug interval period conn"
             + " node ac");
   }
 
