@@ -377,6 +377,16 @@ class FurtherLayoutsTest {
         .column("kW total", "total.active_w", 3)
         .lines("Transient L# (V)", "")
         .lines("V L# (V)", "rms_v");
+    layout("newest row first", dated().newestFirst())
+        .lines("V L# (V)", "rms_v")
+        .lines("I L# (A)", "rms_a");
+    layout(
+            "newest row first, offsets written",
+            LayoutWriter.of(";", '.')
+                .time("Time", t -> t + ":00+01:00")
+                .newestFirst())
+        .lines("V L# (V)", "rms_v")
+        .lines("I L# (A)", "rms_a");
     layout("voltage harmonics and others", dated())
         .lines("U L# H5 phase (°)", "")
         .lines("U L# interharmonic 5 (%)", "")

@@ -34,6 +34,7 @@ final class LayoutWriter {
   private int repeatHeader;
   private int rows = LayoutTruth.ROWS;
   private boolean quoted;
+  private boolean newestFirst;
   private boolean trailing;
   private boolean stripZeros;
   private boolean withUnits;
@@ -126,6 +127,11 @@ final class LayoutWriter {
     return this;
   }
 
+  LayoutWriter newestFirst() {
+    newestFirst = true;
+    return this;
+  }
+
   LayoutWriter quoted() {
     quoted = true;
     return this;
@@ -207,7 +213,7 @@ final class LayoutWriter {
       if (repeatHeader > 0 && row > 0 && row % repeatHeader == 0) {
         header(text);
       }
-      row(text, truth, row);
+      row(text, truth, newestFirst ? rows - 1 - row : row);
     }
     footer.forEach(line -> text.append(line).append(lineEnd));
     return text.toString().getBytes(charset);

@@ -163,6 +163,21 @@ class LogReadingTest {
   }
 
   @Test
+  void theRepeatedHourOfAutumnIsTwoHoursWhenTheNewestRowStandsFirst() {
+    StringBuilder text = new StringBuilder("time,L1.rms_a\n");
+    java.time.ZonedDateTime last =
+        LocalDateTime.of(2025, 10, 27, 12, 0).atZone(ZoneId.of("Europe/Amsterdam"));
+    for (int k = 0; k < 96; k++) {
+      text.append(last.minusMinutes(30L * k).toLocalDateTime()).append(",").append(k).append("\n");
+    }
+    Reading r = read(text.toString());
+    assertThat(r.quality()).isEmpty();
+    assertThat(r.notes()).anySatisfy(n -> assertThat(n).contains("newest row stands first"));
+    assertThat(r.period().orElseThrow().length()).isEqualTo(Duration.ofHours(48));
+    assertThat(r.period().orElseThrow().to()).isEqualTo(last.plusMinutes(30).toInstant());
+  }
+
+  @Test
   void gapsRepeatsBlanksAndOverflowsAreFound() {
     StringBuilder text = new StringBuilder("time,L1.rms_a,L1.power_factor\n");
     for (int k = 0; k < 200; k++) {

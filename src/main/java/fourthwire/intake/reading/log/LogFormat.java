@@ -76,6 +76,9 @@ public final class LogFormat {
               "most rows stand at the same time as the row before: name the column of the time of"
                   + " day too"));
     }
+    if (order.filter(o -> NewestFirst.is(table, time, o)).isPresent()) {
+      notes.add("The newest row stands first: rows were read from the last to the first.");
+    }
     if (!questions.isEmpty()) {
       throw new ReadingRefusedException(
           "The file can't be read without being told more.", table.headings(), questions);
@@ -267,9 +270,14 @@ public final class LogFormat {
       ReadingPlan plan, ReadingSetting setting, BiPredicate<Double, String> progress) {
     LogColumns columns = new LogColumns(table, time, plan.mapping());
     LogSeries series = new LogSeries(columns.quantities(), new SpilledParts(), mostHeldValues());
+    Optional<LogSeries> newestFirst =
+        NewestFirst.is(table, time, columns.order())
+            ? Optional.of(
+                new LogSeries(columns.quantities(), new SpilledParts(), mostHeldValues() / 2))
+            : Optional.empty();
     ExecutorService workers = Executors.newFixedThreadPool(WORKERS);
     try {
-      LogRows rows = new LogRows(table, columns, plan.mapping(), series, workers);
+      LogRows rows = new LogRows(table, columns, plan.mapping(), series, newestFirst, workers);
       rows.read(new RowProgress(progress, bytes, System::nanoTime));
       Progress.go(progress, RowProgress.SHARE, "forming the statistics");
       List<String> notes = new ArrayList<>(plan.notes());
@@ -282,6 +290,7 @@ public final class LogFormat {
       series.close();
       throw e;
     } finally {
+      newestFirst.ifPresent(LogSeries::close);
       workers.shutdown();
     }
   }

@@ -35,6 +35,7 @@ final class LogRows {
   private final boolean stampedAtEnd;
   private final LocalClock clock;
   private final LogSeries series;
+  private final Optional<LogSeries> newestFirst;
   private final Executor workers;
   private final LogSteps steps = new LogSteps();
   private final Deque<ParsedRows> spare = new ArrayDeque<>();
@@ -43,19 +44,25 @@ final class LogRows {
   private long[] times = new long[LogChunk.ROWS];
   private double[][] values;
   private int filled;
+  private long rowsWithOffset;
   private long fileRows;
   private long passedOverRows;
   private long unreadableCells;
 
+  /**
+   * @param newestFirst takes the rows as they stand where the newest is the first
+   */
   LogRows(
       TextTable table,
       LogColumns columns,
       ReadingMapping mapping,
       LogSeries series,
+      Optional<LogSeries> newestFirst,
       Executor workers) {
     this.table = table;
     this.columns = columns;
     this.series = series;
+    this.newestFirst = newestFirst;
     this.workers = workers;
     ReadingMapping.Time time = mapping.time();
     this.toldInterval =
@@ -83,11 +90,11 @@ final class LogRows {
           take(parsed);
           spare.add(parsed);
           blocks.useAgain(next.block());
-          progress.at(series.rows() + filled, blocks.bytesRead());
+          progress.at(newestFirst.orElse(series).rows() + filled, blocks.bytesRead());
         }
       }
     }
-    flush();
+    newestFirst.ifPresentOrElse(this::turn, this::flush);
     if (series.rows() == 0) {
       throw new ReadingRefusedException(
           "No row has a time that can be read.", table.headings(), List.of());
@@ -119,16 +126,64 @@ final class LogRows {
     while (from < block.rows()) {
       int count = Math.min(block.rows() - from, LogChunk.ROWS - filled);
       for (int k = 0; k < count; k++) {
-        times[filled + k] = instant(block, from + k);
-        steps.take(times[filled + k]);
+        times[filled + k] = time(block, from + k);
       }
       block.copy(from, values, filled, count);
       from += count;
       filled += count;
       if (filled == LogChunk.ROWS) {
-        flush();
+        newestFirst.ifPresentOrElse(this::keep, this::flush);
       }
     }
+  }
+
+  /** The instant; of rows to be turned the time as written where no offset is. */
+  private long time(ParsedRows block, int row) {
+    int offset = block.offsetSeconds(row);
+    rowsWithOffset += offset == RowTime.NO_OFFSET ? 0 : 1;
+    if (newestFirst.isPresent()) {
+      return block.localMillis(row) - (offset == RowTime.NO_OFFSET ? 0 : 1000L * offset);
+    }
+    long instant = instant(block, row);
+    steps.take(instant);
+    return instant;
+  }
+
+  /** Puts rows aside as they stand. */
+  private void keep(LogSeries asWritten) {
+    if (filled > 0) {
+      asWritten.add(new LogChunk(Arrays.copyOf(times, filled), gathered()), workers);
+      filled = 0;
+    }
+  }
+
+  /** Hands on the rows put aside, the last first. */
+  private void turn(LogSeries asWritten) {
+    keep(asWritten);
+    boolean instants = rowsWithOffset > 0;
+    if (instants && rowsWithOffset < asWritten.rows()) {
+      throw new ReadingRefusedException(
+          "The newest row stands first, and only some times have their offset from UTC written:"
+              + " sort the rows by time and upload again.");
+    }
+    for (int k = asWritten.chunks() - 1; k >= 0; k--) {
+      long[] written = asWritten.startMillis(k);
+      double[][] before = new double[values.length][];
+      for (int q = 0; q < before.length; q++) {
+        before[q] = asWritten.values(k, q);
+      }
+      for (int row = written.length - 1; row >= 0; row--) {
+        times[filled] = instants ? written[row] : clock.at(written[row]);
+        steps.take(times[filled]);
+        for (int q = 0; q < before.length; q++) {
+          values[q][filled] = before[q][row];
+        }
+        if (++filled == LogChunk.ROWS) {
+          flush();
+        }
+      }
+    }
+    flush();
   }
 
   private long instant(ParsedRows block, int row) {
@@ -148,13 +203,18 @@ final class LogRows {
     for (int k = 0; k < filled && back > 0; k++) {
       start[k] -= back;
     }
+    series.add(new LogChunk(start, gathered()), workers);
+    filled = 0;
+  }
+
+  /** The values gathered, given away. */
+  private double[][] gathered() {
     double[][] chunk = values;
     for (int k = 0; k < chunk.length && filled < LogChunk.ROWS; k++) {
       chunk[k] = Arrays.copyOf(chunk[k], filled);
     }
-    series.add(new LogChunk(start, chunk), workers);
     values = new double[columns.count()][LogChunk.ROWS];
-    filled = 0;
+    return chunk;
   }
 
   /** Length of a row: as told, else the usual step so far. */

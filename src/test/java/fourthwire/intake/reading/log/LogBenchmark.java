@@ -77,7 +77,7 @@ final class LogBenchmark {
     LogColumns columns = new LogColumns(table, time, mapping);
     long mostHeld = Runtime.getRuntime().maxMemory() / 4 / 8;
     try (LogSeries series = new LogSeries(columns.quantities(), new SpilledParts(), mostHeld)) {
-      new LogRows(table, columns, mapping, series, workers)
+      new LogRows(table, columns, mapping, series, java.util.Optional.empty(), workers)
           .read(new RowProgress((share, message) -> true, raw.length(), System::nanoTime));
       long t2 = now();
       SeriesStatistics statistics = SeriesStatistics.of(series, ZoneId.of("Europe/Amsterdam"));
