@@ -382,9 +382,7 @@ class FurtherLayoutsTest {
         .lines("I L# (A)", "rms_a");
     layout(
             "newest row first, offsets written",
-            LayoutWriter.of(";", '.')
-                .time("Time", t -> t + ":00+01:00")
-                .newestFirst())
+            LayoutWriter.of(";", '.').time("Time", t -> t + ":00+01:00").newestFirst())
         .lines("V L# (V)", "rms_v")
         .lines("I L# (A)", "rms_a");
     layout("voltage harmonics and others", dated())

@@ -84,7 +84,8 @@ class OpenLayoutsTest {
         "columns.Voltage L1 (A)",
         dated().lines("Voltage L# (A)", "rms_v").column("I N (A)", "N.rms_a"));
     layout(
-        "volts of alternating current, of no conductor", "columns.AC (V)",
+        "volts of alternating current, of no conductor",
+        "columns.AC (V)",
         dated().column("AC (V)", "L1.rms_v"));
     layout(
         "power sent out",

@@ -16,9 +16,7 @@ final class Circuit {
   /** As written, in one form; empty text for none. */
   static String of(String heading) {
     Matcher m = NUMBERED.matcher(heading);
-    return m.find()
-        ? m.group(1).toLowerCase(Locale.ROOT) + " " + Integer.parseInt(m.group(2))
-        : "";
+    return m.find() ? m.group(1).toLowerCase(Locale.ROOT) + " " + Integer.parseInt(m.group(2)) : "";
   }
 
   /** The heading without it. */

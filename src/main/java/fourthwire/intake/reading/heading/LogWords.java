@@ -220,7 +220,8 @@ final class LogWords {
   private boolean isSummed(String word, List<String> all) {
     boolean total =
         all.stream().flatMap(w -> Vocabulary.sense(w).stream()).anyMatch(s -> s == Sense.TOTAL);
-    return word.equals("va") && (total || !lettered) || word.equals("w") && all.stream().anyMatch(LogWords::namesPlace);
+    return word.equals("va") && (total || !lettered)
+        || word.equals("w") && all.stream().anyMatch(LogWords::namesPlace);
   }
 
   /** A unit that is no symbol of something on a line: VA may be the voltage of line A. */
