@@ -96,6 +96,16 @@ class OpenLayoutsTest {
         "columns.Feeder 3 L1 A",
         dated().lines("Feeder 2 L# A", "rms_a").lines("Feeder 3 L# A", "rms_a"));
     layout(
+        "an abbreviated zone",
+        "time.zone",
+        LayoutWriter.of(",", '.')
+            .time("Time (EST)", "yyyy-MM-dd HH:mm")
+            .lines("V# (V)", "rms_v"));
+    layout(
+        "an abbreviated zone above the table",
+        "time.zone",
+        dated().preamble("Time zone: CET").lines("V# (V)", "rms_v"));
+    layout(
         "VAB as volts between lines or volt-amperes of a line",
         "columns.VAA",
         dated().lines("V@", "rms_v").lines("I@", "rms_a").lines("VA@", "apparent_va"));

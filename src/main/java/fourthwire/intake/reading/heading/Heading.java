@@ -59,18 +59,23 @@ public record Heading(
         (heading, w) ->
             read.put(heading, exact(heading).orElseGet(() -> new LogHeading(w, places).read())));
     askCircuits(read);
-    Set<String> plain =
-        read.entrySet().stream()
-            .filter(e -> !isDemand(words, e.getKey()))
-            .map(e -> e.getValue().named())
-            .collect(Collectors.toUnmodifiableSet());
-    read.replaceAll((name, h) -> isDemand(words, name) && plain.contains(h.named()) ? NONE : h);
+    passOverDemand(words, read);
     return read;
   }
 
   /** Beside the plain quantity its mean over a longer interval is not read. */
-  private static boolean isDemand(Map<String, LogWords> words, String heading) {
-    return words.get(heading).says(Vocabulary.Sense.DEMAND);
+  private static void passOverDemand(Map<String, LogWords> words, Map<String, Heading> read) {
+    Set<String> demand =
+        words.entrySet().stream()
+            .filter(e -> e.getValue().says(Vocabulary.Sense.DEMAND))
+            .map(Map.Entry::getKey)
+            .collect(Collectors.toUnmodifiableSet());
+    Set<String> plain =
+        read.entrySet().stream()
+            .filter(e -> !demand.contains(e.getKey()))
+            .map(e -> e.getValue().named())
+            .collect(Collectors.toUnmodifiableSet());
+    read.replaceAll((name, h) -> demand.contains(name) && plain.contains(h.named()) ? NONE : h);
   }
 
   /** Of several panels or feeders in one file only one can be what this meter measures. */

@@ -66,9 +66,12 @@ public final class LogFormat {
       questions.add(question("time.columns", "no column holds dates: say which one, or which two"));
     }
     Optional<DateOrder> order = order(given, questions, notes);
+    Optional<String> told = given.zone().or(() -> written(notes));
+    Optional<String> unclear =
+        told.isPresent() ? Optional.empty() : ZoneNamed.abbreviation(table, names());
     Optional<String> zone =
-        given.zone().or(() -> written(notes)).or(() -> setting.siteZone().map(ZoneId::getId));
-    zone(zone, order, questions);
+        unclear.isPresent() ? told : told.or(() -> setting.siteZone().map(ZoneId::getId));
+    zone(zone, unclear, order, questions);
     if (order.isPresent() && standsStill(order.get())) {
       questions.add(
           question(
@@ -206,6 +209,7 @@ public final class LogFormat {
 
   private void zone(
       Optional<String> zone,
+      Optional<String> unclear,
       Optional<DateOrder> order,
       List<ReadingRefusedException.Question> questions) {
     if (zone.isPresent()) {
@@ -220,7 +224,16 @@ public final class LogFormat {
       questions.add(
           question(
               "time.zone",
-              "neither the file nor the site has a time zone: give one, as Europe/Amsterdam"));
+              unclear
+                  .map(
+                      z ->
+                          "the file's times are in "
+                              + z
+                              + ", which leaves summer time open: give the zone, as"
+                              + " Europe/Amsterdam, or an offset, as -05:00")
+                  .orElse(
+                      "neither the file nor the site has a time zone: give one, as"
+                          + " Europe/Amsterdam")));
     }
   }
 
