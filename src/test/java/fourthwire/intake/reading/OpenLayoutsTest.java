@@ -98,9 +98,7 @@ class OpenLayoutsTest {
     layout(
         "an abbreviated zone",
         "time.zone",
-        LayoutWriter.of(",", '.')
-            .time("Time (EST)", "yyyy-MM-dd HH:mm")
-            .lines("V# (V)", "rms_v"));
+        LayoutWriter.of(",", '.').time("Time (EST)", "yyyy-MM-dd HH:mm").lines("V# (V)", "rms_v"));
     layout(
         "an abbreviated zone above the table",
         "time.zone",
