@@ -58,6 +58,39 @@ class TextCaptureTest {
     throw new AssertionError("was not refused");
   }
 
+  @ParameterizedTest
+  @CsvSource(
+      delimiter = '|',
+      value = {
+        "Sample rate: 6400 Hz",
+        "Sample rate,6400",
+        "Sampling frequency (kHz),6.4",
+        "# sample_rate = 6.4 kHz"
+      })
+  void theSampleRateIsReadAboveTheTable(String line) {
+    String csv = line + "\n\n" + csv("U1 [V],I1 [A]", false);
+    List<RawFile> files = List.of(Files.of("scope.csv", csv));
+    ReadingReader reader = new FormatReader();
+    ReadingPlan plan = reader.plan(files, Files.setting(50));
+    assertThat(plan.kind()).isEqualTo(ReadingKind.CAPTURE);
+    assertThat(plan.mapping().sampleRateHz().orElseThrow()).isEqualTo(6400);
+    Reading r = reader.read(files, plan, Files.setting(50), (share, message) -> true);
+    assertThat(r.capture().orElseThrow().frequencyHz()).isEqualTo(50, within(1e-3));
+  }
+
+  @Test
+  void rowsWithoutAnyTimeAreAskedForItsColumnOrTheSampleRate() {
+    List<RawFile> files = List.of(Files.of("scope.csv", csv("U1 [V],I1 [A]", false)));
+    try {
+      new FormatReader().plan(files, Files.setting(50));
+    } catch (ReadingRefusedException e) {
+      assertThat(e.questions())
+          .anySatisfy(q -> assertThat(q.message()).contains("sample_rate_hz"));
+      return;
+    }
+    throw new AssertionError("was not refused");
+  }
+
   private static String rows(String head, double fromS, double unitS, String separator, int count) {
     StringBuilder text = new StringBuilder(head).append("\r\n");
     for (int k = 0; k < count; k++) {

@@ -63,7 +63,11 @@ public final class LogFormat {
         known.mapping().map(ReadingMapping::time).orElse(ReadingMapping.Time.FROM_FILE);
     ChannelMapping mapping = columns(known, questions, notes);
     if (time.columns().isEmpty() || time.elapsed()) {
-      questions.add(question("time.columns", "no column holds dates: say which one, or which two"));
+      questions.add(
+          question(
+              "time.columns",
+              "no column holds dates: say which one, or which two; of a capture of samples give"
+                  + " sample_rate_hz instead"));
     }
     Optional<DateOrder> order = order(given, questions, notes);
     Optional<String> told = given.zone().or(() -> written(notes));

@@ -14,6 +14,7 @@ import fourthwire.intake.reading.table.TextTable;
 import fourthwire.intake.reading.table.TimeColumns;
 import fourthwire.intake.reading.wave.SampleClock;
 import fourthwire.intake.reading.wave.TextCapture;
+import fourthwire.intake.reading.wave.WrittenRate;
 import fourthwire.metering.MeasuredQuantity;
 import fourthwire.metering.Reading;
 import fourthwire.metering.ReadingKind;
@@ -111,7 +112,9 @@ final class TextFormat implements Format {
     if (told.isEmpty() && time.elapsed() && SampleClock.isOfALog(table, time)) {
       return ReadingKind.LOG;
     }
-    boolean rate = mapping.map(m -> m.sampleRateHz().isPresent()).orElse(false);
+    boolean rate =
+        mapping.map(m -> m.sampleRateHz().isPresent()).orElse(false)
+            || time.columns().isEmpty() && WrittenRate.of(table).isPresent();
     boolean captureNames =
         mapping.stream()
                 .flatMap(m -> m.columns().values().stream())

@@ -49,8 +49,10 @@ public final class TextCapture {
     List<String> others = table.headings().stream().filter(h -> !timeNames.contains(h)).toList();
     ChannelMapping mapping =
         ChannelMapping.settle(others, known.mapping(), known.whence(), words(others));
-    OptionalDouble rate =
+    OptionalDouble told =
         known.mapping().map(ReadingMapping::sampleRateHz).orElse(OptionalDouble.empty());
+    boolean written = told.isEmpty() && time.columns().isEmpty();
+    OptionalDouble rate = written ? WrittenRate.of(table) : told;
     if (time.columns().isEmpty() && rate.isEmpty()) {
       throw new ReadingRefusedException(
           "The capture has no time column.",
@@ -64,6 +66,9 @@ public final class TextCapture {
     checkFormat(given);
     Optional<String> format = given.format().or(this::format);
     List<String> notes = new ArrayList<>(List.of(table.note()));
+    if (written) {
+      notes.add("Samples stand " + rate.getAsDouble() + " to the second, as the file says.");
+    }
     if (!mapping.unmapped().isEmpty()) {
       notes.add("Columns not read: " + String.join(", ", mapping.unmapped()) + ".");
     }
