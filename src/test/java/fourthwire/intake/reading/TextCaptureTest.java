@@ -84,8 +84,7 @@ class TextCaptureTest {
     try {
       new FormatReader().plan(files, Files.setting(50));
     } catch (ReadingRefusedException e) {
-      assertThat(e.questions())
-          .anySatisfy(q -> assertThat(q.message()).contains("sample_rate_hz"));
+      assertThat(e.questions()).anySatisfy(q -> assertThat(q.message()).contains("sample_rate_hz"));
       return;
     }
     throw new AssertionError("was not refused");

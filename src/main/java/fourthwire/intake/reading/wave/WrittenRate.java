@@ -38,7 +38,8 @@ public final class WrittenRate {
   }
 
   private static OptionalDouble rate(String text) {
-    Matcher m = NUMBER.matcher(text.toLowerCase(Locale.ROOT).replaceAll("^[\\W_]+|[\\s)\\]]+$", ""));
+    Matcher m =
+        NUMBER.matcher(text.toLowerCase(Locale.ROOT).replaceAll("^[\\W_]+|[\\s)\\]]+$", ""));
     if (!m.matches()) {
       return OptionalDouble.empty();
     }
