@@ -8,6 +8,8 @@ import java.util.Optional;
 /**
  * What the page of a reading shows.
  *
+ * @param heading of a log: its verdict in words; empty of a capture
+ * @param neutral what a logged neutral carried, a sentence; else empty
  * @param facts what was read: files, period, length, digest
  * @param faults what is wrong with it, and what was done about it
  * @param limits of a log: its percentiles against the limits of measured values
@@ -20,12 +22,14 @@ record ReadingPage(
     long id,
     String meter,
     String node,
+    String heading,
+    String neutral,
     String kindKey,
     List<Fact> facts,
     List<String> notes,
     Faults faults,
     Optional<LimitsView> limits,
-    Optional<NodePage.Grid> quantities,
+    Optional<Quantities> quantities,
     List<NodePage.Grid> capture,
     Optional<NodePage.Grid> orders,
     String spectrum,
@@ -55,6 +59,13 @@ record ReadingPage(
   /** A dip, swell or interruption. */
   record EventRow(
       String kind, String from, String duration, String place, String extreme, String percent) {}
+
+  /**
+   * Statistics of a log's quantities.
+   *
+   * @param codes the public name of each row's quantity; empty for figures as corrected
+   */
+  record Quantities(NodePage.Grid grid, List<String> codes) {}
 
   /** A fact about the file. */
   record Fact(String key, String text) {}

@@ -3,16 +3,13 @@ package fourthwire.web.reading;
 import fourthwire.jobs.measured.LogAssessments;
 import fourthwire.metering.CaptureResult;
 import fourthwire.metering.LogResult;
-import fourthwire.metering.QuantitySummary;
 import fourthwire.metering.Reading;
 import fourthwire.metering.ReadingRepository;
 import fourthwire.metering.correction.CorrectionRepository;
-import fourthwire.quantity.Figure;
 import fourthwire.site.SiteTree;
 import fourthwire.site.Survey;
 import fourthwire.web.figure.CyclePlot;
 import fourthwire.web.figure.Shapes;
-import fourthwire.web.panel.Grids;
 import fourthwire.web.panel.NodePage;
 import fourthwire.web.support.Moments;
 import fourthwire.web.support.Names;
@@ -73,16 +70,22 @@ class ReadingPageMaker {
   ReadingPage make(ReadingRepository.Entry entry, Survey survey) {
     Reading reading = entry.reading();
     Names names = new Names(survey.settings().practice());
+    QuantitiesMaker quantities = new QuantitiesMaker(words, names);
+    Faults faults = new FaultsMaker(words, survey).make(entry, corrections.ofReading(entry.id()));
+    Optional<LimitsView> limits =
+        assessments.of(entry, survey).map(new LimitsMaker(words, survey)::make);
     return new ReadingPage(
         entry.id(),
         entry.meter().name(),
         entry.meter().node(),
+        reading.log().isPresent() ? new ReadingHeading(words).of(limits, faults) : "",
+        reading.log().map(quantities::neutral).orElse(""),
         kindKey(reading),
         facts(entry, survey),
         reading.notes().stream().map(names::in).toList(),
-        new FaultsMaker(words, survey).make(entry, corrections.ofReading(entry.id())),
-        assessments.of(entry, survey).map(new LimitsMaker(words, survey)::make),
-        reading.log().map(l -> quantities(l, corrections.cleaned(entry.id()))),
+        faults,
+        limits,
+        reading.log().map(l -> quantities.make(l, corrections.cleaned(entry.id()))),
         reading.capture().map(c -> new CaptureTables(words, names).of(c)).orElse(List.of()),
         reading
             .capture()
@@ -135,47 +138,6 @@ class ReadingPageMaker {
 
   private static ReadingPage.Fact fact(String key, String text) {
     return new ReadingPage.Fact("reading.fact." + key, text);
-  }
-
-  /** What corrections changed stands below what was read. */
-  private NodePage.Grid quantities(LogResult log, Optional<CorrectionRepository.Cleaned> cleaned) {
-    Grids grid =
-        new Grids(
-            words,
-            words.of(cleaned.isPresent() ? "reading.quantities.both" : "reading.quantities"),
-            List.of(
-                words.of("reading.quantity"),
-                words.of("reading.count"),
-                words.of("reading.min"),
-                words.of("reading.mean"),
-                words.of("reading.max"),
-                words.of("reading.p95"),
-                words.of("reading.p99")));
-    log.quantities()
-        .forEach(
-            (name, q) -> {
-              grid.row(name, figures(Optional.of(q)));
-              cleaned
-                  .map(c -> Optional.ofNullable(c.log().quantities().get(name)))
-                  .filter(c -> !c.equals(Optional.of(q)))
-                  .ifPresent(c -> grid.row(words.of("reading.corrected", name), figures(c)));
-            });
-    return grid.done();
-  }
-
-  private List<Figure> figures(Optional<QuantitySummary> summary) {
-    Figure none = Figure.unknown(words.of("reading.corrected.none"));
-    return summary
-        .map(
-            q ->
-                List.of(
-                    Figure.of(q.count()),
-                    Figure.of(q.min()),
-                    Figure.of(q.mean()),
-                    Figure.of(q.max()),
-                    Figure.of(q.p95()),
-                    Figure.of(q.p99())))
-        .orElse(List.of(Figure.of(0), none, none, none, none, none));
   }
 
   private String cycle(CaptureResult capture) {
