@@ -40,15 +40,8 @@ public final class DurationPlot {
       double factor,
       String unit,
       String alternative) {
-    double low = extreme(curves, 0, factor).min().orElse(Double.NaN);
-    double high = extreme(curves, 100, factor).max().orElse(Double.NaN);
-    double to =
-        bounds.stream()
-            .mapToDouble(b -> factor * b.value())
-            .filter(l -> l <= FURTHEST_LIMIT * high)
-            .reduce(high, Math::max);
     Svg svg = Svg.picture("plot duration", alternative, "height", HEIGHT_PX + 66);
-    Optional<Scale> scale = Scale.holding(low, to, STEPS);
+    Optional<Scale> scale = scale(curves, bounds, factor);
     scale.ifPresent(s -> s.draw(svg, 0, HEIGHT_PX, unit));
     marks(svg);
     scale.ifPresent(
@@ -67,6 +60,25 @@ public final class DurationPlot {
                           path(c.values(), s, factor)));
         });
     return svg.done();
+  }
+
+  /** Whether the curves' picture shows a limit: those far off the values are not drawn. */
+  public static boolean draws(List<Curve> curves, SeriesPlot.Bound bound, double factor) {
+    return scale(curves, List.of(bound), factor)
+        .filter(s -> s.holds(factor * bound.value()))
+        .isPresent();
+  }
+
+  private static Optional<Scale> scale(
+      List<Curve> curves, List<SeriesPlot.Bound> bounds, double factor) {
+    double low = extreme(curves, 0, factor).min().orElse(Double.NaN);
+    double high = extreme(curves, 100, factor).max().orElse(Double.NaN);
+    double to =
+        bounds.stream()
+            .mapToDouble(b -> factor * b.value())
+            .filter(l -> l <= FURTHEST_LIMIT * high)
+            .reduce(high, Math::max);
+    return Scale.holding(low, to, STEPS);
   }
 
   private static java.util.stream.DoubleStream extreme(
@@ -97,7 +109,7 @@ public final class DurationPlot {
   }
 
   private static void limit(Svg svg, Scale scale, double value, String label) {
-    if (value >= scale.low() && value <= scale.high()) {
+    if (scale.holds(value)) {
       double y = scale.down(value, HEIGHT_PX);
       svg.add("line", "class", "full-mark", "x1", 0, "x2", "100%", "y1", y, "y2", y);
       svg.text(label, "class", "limit-label", "x", "100%", "y", y + 13, "text-anchor", "end");

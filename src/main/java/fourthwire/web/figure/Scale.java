@@ -32,6 +32,11 @@ record Scale(double low, Ticks ticks) {
     return low + ticks.end();
   }
 
+  /** Whether a value lies on it. */
+  boolean holds(double value) {
+    return value >= low && value <= high();
+  }
+
   /** The round values on it, lowest first. */
   List<Double> values() {
     List<Double> values = new ArrayList<>();

@@ -164,6 +164,11 @@ public final class SeriesPlot {
     return Scale.holding(from, to, STEPS);
   }
 
+  /** Whether the strips' picture shows a limit: those far off the values are not drawn. */
+  public static boolean draws(List<Strip> strips, Bound bound, double factor) {
+    return scale(strips, factor).filter(s -> s.holds(factor * bound.value())).isPresent();
+  }
+
   private void strips(List<Strip> strips) {
     double top = HEAD_PX;
     double height = manner.together() ? TOGETHER_PX : STRIP_PX;
@@ -195,7 +200,7 @@ public final class SeriesPlot {
   private void bounds(Strip strip, double top, double height) {
     for (Bound bound : strip.bounds()) {
       double value = manner.factor() * bound.value();
-      if (value <= scale.high() && value >= scale.low()) {
+      if (scale.holds(value)) {
         double y = top + scale.down(value, height);
         svg.add("line", "class", "full-mark", "x1", 0, "x2", "100%", "y1", y, "y2", y);
         labels.add(new Label(bound.label(), y - top < LABEL_PX ? y + LABEL_PX : y - 3));

@@ -15,9 +15,12 @@ import fourthwire.web.support.Numbers;
 import fourthwire.web.support.Words;
 import java.util.ArrayList;
 import java.util.Comparator;
+import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.function.Predicate;
 
 /**
  * What a logged quantity is held against at its node: the smallest known rating of a current's
@@ -149,23 +152,39 @@ final class LogLimits {
     return new Limit(value, true, basis);
   }
 
+  /**
+   * A limit below a picture.
+   *
+   * @param drawn whether the picture shows it
+   */
+  record Line(String sentence, boolean drawn) {}
+
   /** The limits of these quantities in sentences, equal ones once. */
-  List<String> sentences(Measure measure, double factor, String unit) {
-    return measure.quantities().stream()
-        .flatMap(q -> of(q).stream().map(l -> sentence(q, l, factor, unit)))
-        .distinct()
-        .toList();
+  List<Line> lines(Measure measure, double factor, String unit, Predicate<Bound> drawn) {
+    Map<Limit, List<String>> held = new LinkedHashMap<>();
+    for (String quantity : measure.quantities()) {
+      of(quantity).forEach(l -> held.computeIfAbsent(l, k -> new ArrayList<>()).add(quantity));
+    }
+    List<Line> lines = new ArrayList<>();
+    held.forEach(
+        (limit, quantities) -> {
+          String value = Numbers.plain(factor * limit.value(), unit);
+          String sentence = words.of(key(measure, limit, quantities), value, limit.basis());
+          boolean seen = drawn.test(limit.bound(factor, unit));
+          lines.add(new Line(seen ? sentence : words.of("series.limit.far", sentence), seen));
+        });
+    return lines;
   }
 
-  private String sentence(String quantity, Limit limit, double factor, String unit) {
-    String value = Numbers.plain(factor * limit.value(), unit);
-    boolean current = Measure.parsed(quantity).measure().equals("rms_a");
-    boolean neutral = Measure.parsed(quantity).place().equals(Conductor.N.name());
-    return words.of(
-        current
-            ? neutral ? "series.limit.of-neutral" : "series.limit.of-lines"
-            : limit.upper() ? "series.limit.upper" : "series.limit.lower",
-        value,
-        limit.basis());
+  private static String key(Measure measure, Limit limit, List<String> quantities) {
+    if (!measure.word().equals("rms_a")) {
+      return limit.upper() ? "series.limit.upper" : "series.limit.lower";
+    }
+    boolean neutral =
+        quantities.stream()
+            .anyMatch(q -> Measure.parsed(q).place().equals(Conductor.N.name()));
+    return !neutral
+        ? "series.limit.of-lines"
+        : quantities.size() == 1 ? "series.limit.of-neutral" : "series.limit.of-all";
   }
 }

@@ -55,7 +55,7 @@ record SeriesPage(
       String title,
       String about,
       String svg,
-      List<String> limits,
+      List<LogLimits.Line> limits,
       List<NodePage.Key> keys,
       NodePage.Grid figures,
       Readout readout) {}

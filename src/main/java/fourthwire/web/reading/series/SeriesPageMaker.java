@@ -152,7 +152,12 @@ final class SeriesPageMaker {
             notes,
             new SeriesPlot.Manner(view.log().zone(), values.factor(), values.unit(), one),
             words.of("series.alternative", title, strips.size())),
-        view.limits().sentences(measure, values.factor(), values.unit()),
+        view.limits()
+            .lines(
+                measure,
+                values.factor(),
+                values.unit(),
+                b -> SeriesPlot.draws(strips, b, values.factor())),
         one ? view.keys(measure) : List.of(),
         figures(values),
         readout(values));

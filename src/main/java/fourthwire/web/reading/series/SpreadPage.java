@@ -17,7 +17,7 @@ record SpreadPage(
     String title,
     String curve,
     List<NodePage.Key> keys,
-    List<String> limits,
+    List<LogLimits.Line> limits,
     NodePage.Grid figures,
     List<Hours> hours) {
   /**

@@ -44,14 +44,15 @@ final class SpreadPageMaker {
     double factor = measure.factor(largest);
     String unit = measure.unit(largest);
     String title = measure.label(words);
+    List<DurationPlot.Curve> curves = curves(measure, values);
     return new SpreadPage(
         view.head(verdict(measure, values, factor, unit), "spread"),
         measures.groups(words),
         measure.word(),
         title,
-        curve(measure, values, factor, unit, title),
+        curve(measure, curves, factor, unit, title),
         view.keys(measure),
-        limits.sentences(measure, factor, unit),
+        limits.lines(measure, factor, unit, b -> DurationPlot.draws(curves, b, factor)),
         figures(measure, values, factor, unit),
         IntStream.range(0, spreads.size())
             .mapToObj(k -> hours(measure.quantities().get(k), spreads.get(k).hours(), factor, unit))
@@ -81,15 +82,20 @@ final class SpreadPageMaker {
         : words.of("series.verdict.outside.for", place, measure.label(words), share);
   }
 
+  private static List<DurationPlot.Curve> curves(Measure measure, List<ValuesBySize> values) {
+    return IntStream.range(0, values.size())
+        .mapToObj(
+            k ->
+                new DurationPlot.Curve(Measure.classes(measure.quantities().get(k)), values.get(k)))
+        .toList();
+  }
+
   private String curve(
-      Measure measure, List<ValuesBySize> values, double factor, String unit, String title) {
-    List<DurationPlot.Curve> curves =
-        IntStream.range(0, values.size())
-            .mapToObj(
-                k ->
-                    new DurationPlot.Curve(
-                        Measure.classes(measure.quantities().get(k)), values.get(k)))
-            .toList();
+      Measure measure,
+      List<DurationPlot.Curve> curves,
+      double factor,
+      String unit,
+      String title) {
     List<SeriesPlot.Bound> bounds =
         measure.quantities().stream()
             .flatMap(q -> limits.of(q).stream())
