@@ -30,12 +30,15 @@ final class ReadingHeading {
     int all = rows.size();
     int over = count(rows, Verdict.ACT);
     int open = count(rows, Verdict.NOTE);
+    String alone = all == 1 ? ".one" : "";
     if (over > 0) {
-      return words.of("reading.verdict.over", over, words.count(over), all, words.count(all));
+      return words.of(
+          "reading.verdict.over" + alone, over, words.count(over), all, words.count(all));
     }
     return open == 0
-        ? words.of("reading.verdict.within", all, words.count(all))
-        : words.of("reading.verdict.open", open, words.count(open), all, words.count(all));
+        ? words.of("reading.verdict.within" + alone, all, words.count(all))
+        : words.of(
+            "reading.verdict.open" + alone, open, words.count(open), all, words.count(all));
   }
 
   private static int count(List<LimitsView.Row> rows, Verdict verdict) {
