@@ -121,11 +121,11 @@ class CorrectionApiTest extends ServiceTest {
     assertThat(pressed.status()).isEqualTo(302);
     assertThat(pressed.header("Location")).endsWith(page + "#quality");
     assertThat(text(http, page))
-        .contains("Corrected:", "Take it back", "One correction holds", "L1.active_w, corrected")
+        .contains("Corrected:", "Take it back", "One correction holds", "L1: Active power, W, corrected")
         .doesNotContain("??");
     long id = http.get(api + "/corrections").json().path(0).path("id").asLong();
     assertThat(http.post(page + "/corrections/" + id + "/undo").status()).isEqualTo(302);
-    assertThat(text(http, page)).doesNotContain("L1.active_w, corrected");
+    assertThat(text(http, page)).doesNotContain("L1: Active power, W, corrected");
   }
 
   /** Two days are no week: what is there is told, and no verdict is made of it. */
