@@ -37,8 +37,7 @@ final class ReadingHeading {
     }
     return open == 0
         ? words.of("reading.verdict.within" + alone, all, words.count(all))
-        : words.of(
-            "reading.verdict.open" + alone, open, words.count(open), all, words.count(all));
+        : words.of("reading.verdict.open" + alone, open, words.count(open), all, words.count(all));
   }
 
   private static int count(List<LimitsView.Row> rows, Verdict verdict) {

@@ -121,7 +121,8 @@ class CorrectionApiTest extends ServiceTest {
     assertThat(pressed.status()).isEqualTo(302);
     assertThat(pressed.header("Location")).endsWith(page + "#quality");
     assertThat(text(http, page))
-        .contains("Corrected:", "Take it back", "One correction holds", "L1: Active power, W, corrected")
+        .contains(
+            "Corrected:", "Take it back", "One correction holds", "L1: Active power, W, corrected")
         .doesNotContain("??");
     long id = http.get(api + "/corrections").json().path(0).path("id").asLong();
     assertThat(http.post(page + "/corrections/" + id + "/undo").status()).isEqualTo(302);

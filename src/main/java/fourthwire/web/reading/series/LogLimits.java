@@ -181,8 +181,7 @@ final class LogLimits {
       return limit.upper() ? "series.limit.upper" : "series.limit.lower";
     }
     boolean neutral =
-        quantities.stream()
-            .anyMatch(q -> Measure.parsed(q).place().equals(Conductor.N.name()));
+        quantities.stream().anyMatch(q -> Measure.parsed(q).place().equals(Conductor.N.name()));
     return !neutral
         ? "series.limit.of-lines"
         : quantities.size() == 1 ? "series.limit.of-neutral" : "series.limit.of-all";

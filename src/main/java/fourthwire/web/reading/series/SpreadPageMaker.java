@@ -91,11 +91,7 @@ final class SpreadPageMaker {
   }
 
   private String curve(
-      Measure measure,
-      List<DurationPlot.Curve> curves,
-      double factor,
-      String unit,
-      String title) {
+      Measure measure, List<DurationPlot.Curve> curves, double factor, String unit, String title) {
     List<SeriesPlot.Bound> bounds =
         measure.quantities().stream()
             .flatMap(q -> limits.of(q).stream())
