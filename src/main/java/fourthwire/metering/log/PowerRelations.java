@@ -22,11 +22,13 @@ final class PowerRelations implements DayCheck {
 
   private final FlaggedDays flagged = new FlaggedDays();
   private final LineOrder order = new LineOrder(flagged);
+  private final TurnedRuns runs = new TurnedRuns();
 
   @Override
   public void take(LogDay day) {
     look(day);
     flagged.endDay(day);
+    runs.take(day);
   }
 
   private void look(LogDay day) {
@@ -301,6 +303,8 @@ final class PowerRelations implements DayCheck {
 
   @Override
   public List<QualityFinding> findings() {
-    return flagged.findings();
+    List<QualityFinding> all = new ArrayList<>(flagged.findings());
+    all.addAll(runs.findings(all));
+    return all;
   }
 }

@@ -126,6 +126,14 @@ class CorrectionsTest {
             },
             NOTHING),
         fault(
+            "a clamp turned for four hours",
+            QualityFinding.REVERSED_CLAMP,
+            b -> {
+              b.scale("L2.active_w", D + 50, D + 74, -1);
+              b.scale("L2.power_factor", D + 50, D + 74, -1);
+            },
+            NOTHING),
+        fault(
             "a clamp turned, the total right",
             QualityFinding.REVERSED_CLAMP,
             b -> {

@@ -141,6 +141,24 @@ class PlantedFaultsTest {
               b.scale("L2.power_factor", p[0], p[1], -1);
             }),
         fault(
+            "a clamp turned for four hours",
+            QualityFinding.REVERSED_CLAMP,
+            d + 50,
+            d + 74,
+            PlantedFaultsTest::turn),
+        fault(
+            "a clamp turned for seventeen hours across midnight",
+            QualityFinding.REVERSED_CLAMP,
+            d + 112,
+            d + 212,
+            PlantedFaultsTest::turn),
+        fault(
+            "a clamp turned for fifteen hours",
+            QualityFinding.REVERSED_CLAMP,
+            d + 30,
+            d + 120,
+            PlantedFaultsTest::turn),
+        fault(
             "amps by a wrong ratio",
             QualityFinding.WRONG_RATIO,
             d,
@@ -175,6 +193,41 @@ class PlantedFaultsTest {
             d,
             e,
             (b, p) -> b.scale("L1.current_thd_percent", p[0], p[1], 0.6)));
+  }
+
+  private static void turn(InventedBoard b, int[] p) {
+    b.scale("L2.active_w", p[0], p[1], -1);
+    b.scale("L2.power_factor", p[0], p[1], -1);
+    for (int row = p[0]; row < p[1]; row++) {
+      b.columns.get("total.active_w")[row] += 2 * b.at("L2.active_w", row);
+    }
+  }
+
+  /** Power fed back around noon, on all lines or from a source on one, is no clamp. */
+  @ParameterizedTest
+  @ValueSource(longs = {21, 22, 23, 24, 25})
+  void powerFedBackIsNoTurnedClamp(long seed) {
+    for (List<String> fed : List.of(List.of("L1", "L2", "L3"), List.of("L2"))) {
+      InventedBoard board = new InventedBoard(seed, 2);
+      board.columns.keySet().removeIf(name -> name.matches(".*(_factor|_h\\d_a|_thd.*)|N.*"));
+      for (int row = 0; row < board.times.size(); row++) {
+        double sun = 2.5 * Math.max(0, Math.sin(Math.PI * (row % PER_DAY - 45) / 54.0));
+        sun = row % PER_DAY < 45 || row % PER_DAY > 99 ? 0 : sun;
+        for (String line : fed) {
+          double volts = board.at(line + ".rms_v", row);
+          double before = board.at(line + ".active_w", row);
+          double after = Math.rint(before * (1 - sun));
+          double amps = board.at(line + ".rms_a", row) * volts;
+          double rest = Math.sqrt(Math.max(0, amps * amps - before * before));
+          board.put(line + ".active_w", row, after, 0);
+          board.put(line + ".rms_a", row, Math.hypot(after, rest) / volts, 2);
+          board.columns.get("total.active_w")[row] += after - before;
+        }
+      }
+      assertThat(board.reading().quality())
+          .as("seed %d, %s", seed, fed)
+          .noneMatch(f -> f.code().equals(QualityFinding.REVERSED_CLAMP));
+    }
   }
 
   @ParameterizedTest(name = "{0}")
