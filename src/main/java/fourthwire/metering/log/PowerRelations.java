@@ -18,6 +18,7 @@ import java.util.Optional;
  */
 final class PowerRelations implements DayCheck {
   private static final int FEWEST_ROWS = 4;
+  private static final double RATIOS_ALIKE = 0.03;
   private static final String ACTIVE = "Active";
 
   private final FlaggedDays flagged = new FlaggedDays();
@@ -39,6 +40,7 @@ final class PowerRelations implements DayCheck {
       return;
     }
     boolean[] turned = new boolean[3];
+    double[] wrong = new double[3];
     for (int k = 0; k < 3; k++) {
       turned[k] = mostlyNegative(day, LineDay.LINES[k]);
     }
@@ -46,8 +48,9 @@ final class PowerRelations implements DayCheck {
       if (turned[k]) {
         reversed(day, LineDay.LINES[k], turned[0] && turned[1] && turned[2]);
       }
-      ratio(day, LineDay.LINES[k]);
+      wrong[k] = ratio(day, LineDay.LINES[k]);
     }
+    neutralToo(day, wrong);
     if (!turned[0] && !turned[1] && !turned[2]) {
       total(day);
     }
@@ -125,13 +128,13 @@ final class PowerRelations implements DayCheck {
     return off < 0.02;
   }
 
-  /** How far the median of a ratio may stand from one. */
-  private void ratio(LogDay day, String line) {
+  /** How far the median of a ratio stands from one, where that is too far; else NaN. */
+  private double ratio(LogDay day, String line) {
     LineDay lines = new LineDay(day);
     Optional<double[]> volts = lines.volts(line);
     Optional<double[]> amps = day.find(line + ".rms_a");
     if (volts.isEmpty() || amps.isEmpty()) {
-      return;
+      return Double.NaN;
     }
     double[] v = volts.get();
     double[] a = amps.get();
@@ -141,27 +144,58 @@ final class PowerRelations implements DayCheck {
       boolean wrong = median < 0.93 || median > 1.07;
       judge(day, line, "Apparent", median, "volts times amps", wrong);
       if (wrong) {
-        return;
+        return median;
       }
     }
     Optional<double[]> watts = day.find(line + ".active_w");
     if (watts.isEmpty()) {
-      return;
+      return Double.NaN;
     }
     Optional<double[]> factor = day.find(line + ".power_factor");
     if (factor.isPresent()) {
       double median = median(a, k -> Math.abs(watts.get()[k] / (v[k] * a[k] * factor.get()[k])));
-      judge(
-          day,
-          line,
-          ACTIVE,
-          median,
-          "volts times amps times power factor",
-          median < 0.9 || median > 1.1);
-    } else {
-      double median = median(a, k -> Math.abs(watts.get()[k] / (v[k] * a[k])));
-      judge(day, line, ACTIVE, median, "volts times amps", median > 1.05 || median < 0.02);
+      boolean wrong = median < 0.9 || median > 1.1;
+      judge(day, line, ACTIVE, median, "volts times amps times power factor", wrong);
+      return wrong ? median : Double.NaN;
     }
+    double median = median(a, k -> Math.abs(watts.get()[k] / (v[k] * a[k])));
+    judge(day, line, ACTIVE, median, "volts times amps", median > 1.05 || median < 0.02);
+    return Double.NaN;
+  }
+
+  /**
+   * Where the amps of all lines are off by one factor, those of N, which no power tells of, were
+   * read by the same instrument.
+   */
+  private void neutralToo(LogDay day, double[] wrong) {
+    double ratio = (wrong[0] + wrong[1] + wrong[2]) / 3;
+    boolean alike =
+        java.util.Arrays.stream(wrong).allMatch(r -> Math.abs(r / ratio - 1) < RATIOS_ALIKE);
+    if (!alike || isPrefix(ratio) || day.find("N.rms_a").isEmpty()) {
+      return;
+    }
+    List<String> amps =
+        day.quantities().stream()
+            .filter(
+                q ->
+                    q.equals("N.rms_a")
+                        || q.matches("N\\.current_h\\d+_a") && harmonicsAgree(day, "L1"))
+            .toList();
+    String line = LineDay.LINES[0];
+    String which = day.find(line + ".apparent_va").isPresent() ? "Apparent" : ACTIVE;
+    flagged.add(
+        day,
+        new FlaggedDays.Fault(
+            WRONG_RATIO,
+            "N.rms_a",
+            "If the amps of the lines are wrong by that factor, those of N are too.",
+            String.format(
+                Locale.ROOT,
+                "All three lines are off by one factor (%.3g): if it is that of their amps, N has it"
+                    + " too, which no power can show. Correct N together with the lines.",
+                ratio),
+            rows -> List.of(Offers.scale(amps, 1 / ratio, rows)),
+            RowTest.ofRatio((other, row) -> ratio(other, line, which, row), ratio)));
   }
 
   /** Rows of next to no current have no ratio: their digits are too few. */

@@ -267,6 +267,29 @@ class PlantedFaultsTest {
     assertThat(period.to()).isEqualTo(Instant.ofEpochMilli(START + STEP * 820));
   }
 
+  /** Where all amps are five times too large, N is offered the same factor as the lines. */
+  @ParameterizedTest
+  @ValueSource(longs = {21, 22, 23})
+  void allClampsOfOneRatioAreMendedWithN(long seed) {
+    InventedBoard board = new InventedBoard(seed, 2);
+    board.apparent();
+    board.columns.forEach(
+        (name, x) -> {
+          if (name.matches(".*\\.(rms_a|current_h\\d_a)")) {
+            board.scale(name, 0, x.length, 5);
+          }
+        });
+    List<QualityFinding> found = board.reading().quality();
+    assertThat(found)
+        .as("seed %d: %s", seed, found)
+        .anyMatch(
+            f ->
+                f.corrections().stream()
+                    .anyMatch(
+                        c -> c.sentence().matches("Multiply N\\.current.* and N.rms_a by 0.2")));
+    assertThat(found).filteredOn(f -> f.code().equals(QualityFinding.WRONG_RATIO)).hasSize(4);
+  }
+
   /** A clock set forward by what is no whole interval is told once, and the way back offered. */
   @ParameterizedTest
   @ValueSource(longs = {21, 22, 23})
