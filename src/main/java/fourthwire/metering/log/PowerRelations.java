@@ -191,8 +191,8 @@ final class PowerRelations implements DayCheck {
             "If the amps of the lines are wrong by that factor, those of N are too.",
             String.format(
                 Locale.ROOT,
-                "All three lines are off by one factor (%.3g): if it is that of their amps, N has it"
-                    + " too, which no power can show. Correct N together with the lines.",
+                "All three lines are off by one factor (%.3g): if it is that of their amps, N has"
+                    + " it too, which no power can show. Correct N together with the lines.",
                 ratio),
             rows -> List.of(Offers.scale(amps, 1 / ratio, rows)),
             RowTest.ofRatio((other, row) -> ratio(other, line, which, row), ratio)));

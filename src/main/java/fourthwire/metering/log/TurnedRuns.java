@@ -94,8 +94,7 @@ final class TurnedRuns {
       line.begun.ifPresent(
           day ->
               line.runs.add(
-                  new Run(
-                      day, new Correction.Rows(line.fromRow, line.toRow), line.from, line.to)));
+                  new Run(day, new Correction.Rows(line.fromRow, line.toRow), line.from, line.to)));
     }
     line.rows = 0;
     line.begun = Optional.empty();
@@ -124,9 +123,7 @@ final class TurnedRuns {
   private static boolean tells(QualityFinding f, Run run, String line) {
     boolean shared =
         f.period()
-            .filter(
-                p ->
-                    p.from().toEpochMilli() < run.to() && p.to().toEpochMilli() > run.from())
+            .filter(p -> p.from().toEpochMilli() < run.to() && p.to().toEpochMilli() > run.from())
             .isPresent();
     boolean same = f.code().equals(REVERSED_CLAMP) && f.sentence().contains(" " + line + " ");
     return shared && (same || f.code().equals(QualityFinding.SWAPPED_LINES));
