@@ -4,8 +4,9 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
 import fourthwire.audit.run.HarmonicAudit;
-import fourthwire.intake.survey.SurveyImport;
 import fourthwire.quantity.Conductor;
+import fourthwire.site.SiteTree;
+import fourthwire.site.Survey;
 import fourthwire.testsupport.SmallSite;
 import java.util.List;
 import java.util.Map;
@@ -41,14 +42,14 @@ class EvenOrdersTest {
   @Test
   @DisplayName("Three small supplies on 7.5 Ω: second harmonic, rms and power factor as marched")
   void halfWavesDiffer() {
-    SurveyImport.Read read = (SurveyImport.Read) SurveyImport.read(SmallSite.zip(TABLES));
+    Survey survey = SmallSite.survey(TABLES);
     List<NodeResult> nodes =
         new HarmonicAudit(1)
-            .run(new AuditRequest(read.survey(), Optional.empty(), Map.of()), Progress.SILENT)
+            .run(new AuditRequest(survey, Optional.empty(), Map.of()), Progress.SILENT)
             .nodes();
     DesignState circuit =
         nodes.stream()
-            .filter(n -> n.kind() == fourthwire.site.SiteTree.Kind.CIRCUIT)
+            .filter(n -> n.kind() == SiteTree.Kind.CIRCUIT)
             .findFirst()
             .flatMap(NodeResult::design)
             .orElseThrow();

@@ -4,7 +4,6 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
 import fourthwire.audit.run.HarmonicAudit;
-import fourthwire.intake.survey.SurveyImport;
 import fourthwire.quantity.Conductor;
 import fourthwire.site.Survey;
 import fourthwire.testsupport.SmallSite;
@@ -150,9 +149,7 @@ class WeekTest {
   }
 
   private static AuditResult audit(Map<String, String> tables, Optional<String> supply) {
-    SurveyImport.Outcome outcome = SurveyImport.read(SmallSite.zip(tables));
-    assertThat(outcome).isInstanceOf(SurveyImport.Read.class);
-    Survey survey = ((SurveyImport.Read) outcome).survey();
+    Survey survey = SmallSite.survey(tables);
     return new HarmonicAudit()
         .run(
             new AuditRequest(survey, supply, Map.of(), true, 0, AuditRequest.SEED),

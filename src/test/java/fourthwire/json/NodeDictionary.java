@@ -5,11 +5,9 @@ import fourthwire.audit.NodeResult;
 import fourthwire.audit.NodeSummary;
 import fourthwire.audit.Progress;
 import fourthwire.audit.run.HarmonicAudit;
-import fourthwire.intake.survey.SurveyImport;
-import fourthwire.testsupport.SmallSite;
+import fourthwire.sample.DemoSurvey;
 import java.io.IOException;
 import java.nio.charset.StandardCharsets;
-import java.nio.file.DirectoryStream;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.Comparator;
@@ -40,21 +38,11 @@ final class NodeDictionary {
 
   /** Writes the file named. */
   public static void main(String[] args) throws IOException {
-    SurveyImport.Read read = (SurveyImport.Read) SurveyImport.read(SmallSite.zip(tables()));
     AuditRequest request =
-        new AuditRequest(read.survey(), Optional.empty(), Map.of(), true, DRAWS, AuditRequest.SEED);
+        new AuditRequest(
+            DemoSurvey.read(), Optional.empty(), Map.of(), true, DRAWS, AuditRequest.SEED);
     List<NodeResult> nodes = new HarmonicAudit().run(request, Progress.SILENT).nodes();
     Files.writeString(Path.of(args[0]), of(nodes), StandardCharsets.UTF_8);
-  }
-
-  private static Map<String, String> tables() throws IOException {
-    Map<String, String> tables = new TreeMap<>();
-    try (DirectoryStream<Path> files = Files.newDirectoryStream(Path.of("sample-data/survey"))) {
-      for (Path file : files) {
-        tables.put(file.getFileName().toString(), Files.readString(file));
-      }
-    }
-    return tables;
   }
 
   private static String of(List<NodeResult> nodes) {

@@ -20,14 +20,14 @@ import java.util.zip.ZipEntry;
 import java.util.zip.ZipOutputStream;
 
 /** The demo site's survey as it stands in {@code sample-data}, and its audit. */
-final class DemoSurvey {
+public final class DemoSurvey {
   /** The folder of everything that belongs to the demo site. */
   static final Path FOLDER = Path.of("sample-data");
 
   private DemoSurvey() {}
 
   /** The survey; it must be read without an error or a warning. */
-  static Survey read() {
+  public static Survey read() {
     SurveyImport.Outcome outcome = SurveyImport.read(zip());
     if (outcome instanceof SurveyImport.Read read && read.warnings().isEmpty()) {
       return read.survey();

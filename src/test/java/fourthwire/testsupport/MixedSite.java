@@ -1,6 +1,5 @@
 package fourthwire.testsupport;
 
-import fourthwire.intake.survey.SurveyImport;
 import fourthwire.site.Survey;
 import java.util.LinkedHashMap;
 import java.util.Locale;
@@ -56,11 +55,7 @@ public final class MixedSite {
 
   /** The same as a survey. */
   public static Survey survey(int panels, int circuits, long seed) {
-    SurveyImport.Outcome outcome = SurveyImport.read(zip(panels, circuits, seed));
-    if (outcome instanceof SurveyImport.Read read) {
-      return read.survey();
-    }
-    throw new IllegalStateException(outcome.toString());
+    return SmallSite.survey(tables(panels, circuits, seed));
   }
 
   private Map<String, String> make() {

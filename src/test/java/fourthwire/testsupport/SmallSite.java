@@ -64,7 +64,12 @@ public final class SmallSite {
 
   /** The site's survey. */
   public static Survey survey(String name) {
-    SurveyImport.Outcome outcome = SurveyImport.read(zip(name));
+    return survey(tables(name));
+  }
+
+  /** A survey of tables by file name. */
+  public static Survey survey(Map<String, String> tables) {
+    SurveyImport.Outcome outcome = SurveyImport.read(zip(tables));
     if (outcome instanceof SurveyImport.Read read) {
       return read.survey();
     }

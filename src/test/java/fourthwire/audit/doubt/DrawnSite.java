@@ -7,7 +7,6 @@ import fourthwire.audit.judge.SiteState;
 import fourthwire.audit.plan.Device;
 import fourthwire.audit.plan.LoadPlacements;
 import fourthwire.audit.solve.Workers;
-import fourthwire.intake.survey.SurveyImport;
 import fourthwire.load.DesignPowers;
 import fourthwire.site.SiteTree;
 import fourthwire.site.Supply;
@@ -56,10 +55,7 @@ final class DrawnSite {
     tables.put("circuits.csv", "circuit,panel,lines\n" + circuits);
     tables.put("loads.csv", loads);
     tables.put("spectra.csv", "spectrum,order,percent,degrees\npulse,1,100,0\npulse,3,60,180\n");
-    if (SurveyImport.read(SmallSite.zip(tables)) instanceof SurveyImport.Read read) {
-      return new DrawnSite(read.survey(), 2);
-    }
-    throw new IllegalStateException(SurveyImport.read(SmallSite.zip(tables)).toString());
+    return new DrawnSite(SmallSite.survey(tables), 2);
   }
 
   /** The same site worked on by so many threads. */
