@@ -7,6 +7,7 @@ import fourthwire.testsupport.Http.Part;
 import fourthwire.testsupport.ServiceTest;
 import fourthwire.testsupport.SmallSite;
 import java.nio.charset.StandardCharsets;
+import java.util.List;
 import java.util.Locale;
 import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
@@ -61,6 +62,17 @@ class ReadingPagesTest extends ServiceTest {
     assertThat(text(refused))
         .contains("The file was not read", "configuration file")
         .doesNotContain("??", "Exception");
+  }
+
+  @Test
+  void withoutAFileThePageAsksForOne() {
+    for (Answer without :
+        List.of(
+            http().form("POST", readings, Part.field("at", "LP-1")),
+            http().send("POST", readings, FORM, "at=LP-1"))) {
+      assertThat(without.status()).isEqualTo(422);
+      assertThat(text(without)).contains("No file was sent").doesNotContain("Exception");
+    }
   }
 
   /** A layout nobody has confirmed is shown; what is open is asked for; then it is remembered. */

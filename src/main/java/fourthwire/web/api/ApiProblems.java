@@ -13,9 +13,11 @@ import org.slf4j.LoggerFactory;
 import org.springframework.beans.factory.annotation.Value;
 import org.springframework.core.Ordered;
 import org.springframework.http.HttpStatus;
+import org.springframework.http.MediaType;
 import org.springframework.http.converter.HttpMessageNotReadableException;
 import org.springframework.stereotype.Component;
 import org.springframework.web.ErrorResponse;
+import org.springframework.web.HttpMediaTypeNotSupportedException;
 import org.springframework.web.bind.annotation.PathVariable;
 import org.springframework.web.context.request.async.AsyncRequestNotUsableException;
 import org.springframework.web.method.annotation.MethodArgumentTypeMismatchException;
@@ -111,7 +113,10 @@ final class ApiProblems implements HandlerExceptionResolver, Ordered {
       return problem(TOO_LARGE, "the upload is larger than " + uploadCap + ", the most accepted");
     }
     if (error instanceof MissingServletRequestPartException missing) {
-      return bad("the part \"" + missing.getRequestPartName() + "\" of the form is missing");
+      return noFile(missing.getRequestPartName());
+    }
+    if (error instanceof HttpMediaTypeNotSupportedException type && lacksFile(type)) {
+      return noFile(request.getRequestURI().endsWith("/readings") ? "file" : "survey");
     }
     if (error instanceof MultipartException) {
       return bad("the body is not a complete multipart/form-data form");
@@ -126,6 +131,19 @@ final class ApiProblems implements HandlerExceptionResolver, Ordered {
       return ofStatus(request, described);
     }
     return unforeseen(request, error);
+  }
+
+  /** A form that can hold no file, or nothing at all, where a form with a file is asked. */
+  private static boolean lacksFile(HttpMediaTypeNotSupportedException type) {
+    MediaType sent = type.getContentType();
+    return type.getSupportedMediaTypes().contains(MediaType.MULTIPART_FORM_DATA)
+        && (sent == null || MediaType.APPLICATION_FORM_URLENCODED.isCompatibleWith(sent));
+  }
+
+  private static Problem noFile(String part) {
+    return problem(
+        UNPROCESSABLE,
+        "no file was sent: send a multipart/form-data form with it in the part \"" + part + "\"");
   }
 
   private static Problem ofArgument(MethodArgumentTypeMismatchException mismatch) {
@@ -143,7 +161,8 @@ final class ApiProblems implements HandlerExceptionResolver, Ordered {
           case METHOD_NOT_ALLOWED ->
               request.getMethod() + " is not possible here; Allow names what is";
           case NOT_ACCEPTABLE -> "what Accept asks for is not what this call answers";
-          case UNSUPPORTED_MEDIA_TYPE -> "the body's Content-Type is not what this call takes";
+          case UNSUPPORTED_MEDIA_TYPE ->
+              "the body's Content-Type is not what this call takes; Accept names what is";
           default -> String.valueOf(described.getBody().getDetail());
         };
     return problem(status, detail);

@@ -1,7 +1,6 @@
 package fourthwire.web.figure;
 
 import java.util.List;
-import java.util.function.DoubleFunction;
 import java.util.function.IntToDoubleFunction;
 
 /**
@@ -15,8 +14,6 @@ public final class HourPicture {
   private static final double ROW_PX = 22;
   private static final double GAP_PX = 2;
   private static final double LIGHTEST = 0.07;
-  private static final double FAINT = 0.48;
-  private static final double NUMBERED_PX = 26;
 
   private HourPicture() {}
 
@@ -59,62 +56,6 @@ public final class HourPicture {
           anchor);
     }
     return svg.done();
-  }
-
-  /**
-   * The picture with its figures in the cells: tints faint enough for ink to stand on them.
-   *
-   * @param low the figure that is lightest
-   * @param high the figure that is darkest
-   * @param figure a value's text
-   */
-  public static String numbered(
-      String classes,
-      IntToDoubleFunction byHour,
-      double low,
-      double high,
-      DoubleFunction<String> figure,
-      List<String> days,
-      String alternative) {
-    Svg svg = Svg.picture("plot hours numbered " + classes, alternative);
-    for (int day = 0; day < DAYS; day++) {
-      svg.open("g", "transform", "translate(0 " + Math.round(day * NUMBERED_PX) + ")");
-      for (int hour = 0; hour < HOURS; hour++) {
-        double value = byHour.applyAsDouble(day * HOURS + hour);
-        if (!Double.isNaN(value)) {
-          double part = high > low ? (value - low) / (high - low) : 0;
-          numbered(svg, hour, part, figure.apply(value));
-        }
-      }
-      svg.close();
-    }
-    for (int day = 0; day < DAYS; day++) {
-      svg.text(days.get(day), "x", 0, "dx", -6, "y", day * NUMBERED_PX + 17, "text-anchor", "end");
-    }
-    for (int hour = 0; hour < HOURS; hour++) {
-      svg.text(
-          "%02d".formatted(hour),
-          "class",
-          hour % EVERY == 0 ? "time" : "crowded",
-          "x",
-          Svg.share((hour + 0.47) / HOURS),
-          "y",
-          DAYS * NUMBERED_PX + 14,
-          "text-anchor",
-          "middle");
-    }
-    return svg.done();
-  }
-
-  /** A cell's width and height stand in the style sheet. */
-  private static void numbered(Svg svg, int hour, double part, String figure) {
-    svg.add(
-        "rect",
-        "x",
-        Svg.share((double) hour / HOURS),
-        "fill-opacity",
-        Svg.rounded(LIGHTEST + (FAINT - LIGHTEST) * part, 2));
-    svg.text(figure, "x", Svg.share((hour + 0.475) / HOURS), "y", 17);
   }
 
   private static void cell(Svg svg, int hour, double top, double part, boolean over) {

@@ -108,7 +108,8 @@ final class Svg {
     return out;
   }
 
-  private static String escaped(String text) {
+  /** A text as it may stand in markup. */
+  static String escaped(String text) {
     return text.replace("&", "&amp;")
         .replace("<", "&lt;")
         .replace(">", "&gt;")

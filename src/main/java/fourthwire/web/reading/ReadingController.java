@@ -17,6 +17,7 @@ import jakarta.servlet.http.HttpServletResponse;
 import java.util.List;
 import java.util.Optional;
 import java.util.stream.Collectors;
+import org.jspecify.annotations.Nullable;
 import org.springframework.http.HttpStatus;
 import org.springframework.stereotype.Controller;
 import org.springframework.ui.Model;
@@ -60,13 +61,16 @@ class ReadingController {
   @PostMapping("/sites/{site}/readings")
   String add(
       @PathVariable("site") long site,
-      @RequestParam("file") List<MultipartFile> files,
+      @RequestParam(name = "file", required = false) @Nullable List<MultipartFile> files,
       @RequestParam(name = "at", defaultValue = "") String at,
       @RequestParam(name = "mapping", defaultValue = "") String mapping,
       Model model,
       HttpServletResponse response) {
     show(site, model);
     try {
+      if (files == null || files.isEmpty()) {
+        throw new RefusedException("No file was sent: choose the meter’s file first.");
+      }
       long job = service.takeOrAsk(upload(site, files, at, mapping));
       return "redirect:/uploads/" + job;
     } catch (ReadingRefusedException refused) {

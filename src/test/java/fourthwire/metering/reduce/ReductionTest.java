@@ -18,6 +18,7 @@ import java.util.Random;
 import java.util.TreeMap;
 import java.util.function.Function;
 import java.util.stream.IntStream;
+import java.util.stream.LongStream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
@@ -201,6 +202,38 @@ class ReductionTest {
     StepPercentiles days = new StepPercentiles(TimeSteps.days(0, 5000, ZoneId.of("UTC")), 1000);
     days.take(times, values);
     assertThat(days.of(0, 5, 95)).containsExactly(new double[] {1.15, 3.85}, within(1e-12));
+  }
+
+  /** Against the whole array in order; values in steps, far off, alike and of both signs. */
+  @ParameterizedTest(name = "seed {0}")
+  @ValueSource(longs = {1, 2, 3, 4, 5, 6, 7, 8})
+  void ranksAreThoseOfAllInOrder(long seed) {
+    Random random = new Random(seed);
+    int count = 1 + random.nextInt(20_000);
+    double[] values = new double[count];
+    Arrays.setAll(
+        values,
+        k ->
+            switch ((int) (seed % 4)) {
+              case 0 -> Math.rint(10 * random.nextGaussian());
+              case 1 -> k == 0 ? 1e12 : random.nextDouble();
+              case 2 -> -7.5;
+              default -> 230 + random.nextGaussian();
+            });
+    ValuesBySize bySize = new ValuesBySize(0, 1000L * count, 1000);
+    bySize.take(LongStream.range(0, count).map(k -> 1000 * k).toArray(), values);
+    double[] ordered = values.clone();
+    Arrays.sort(ordered);
+    for (int k = 0; k <= 200; k++) {
+      double position = (count - 1) * (k / 2.0) / 100;
+      int below = (int) position;
+      double above = ordered[Math.min(below + 1, count - 1)];
+      assertThat(bySize.percentile(k / 2.0))
+          .isEqualTo(ordered[below] + (position - below) * (above - ordered[below]));
+      double limit = ordered[below] + (k % 3 - 1) * 0.1;
+      assertThat(bySize.shareAbove(limit))
+          .isEqualTo((double) Arrays.stream(values).filter(v -> v > limit).count() / count);
+    }
   }
 
   @Test

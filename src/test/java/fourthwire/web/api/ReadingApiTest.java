@@ -9,6 +9,7 @@ import fourthwire.testsupport.Http.Part;
 import fourthwire.testsupport.ServiceTest;
 import fourthwire.testsupport.SmallSite;
 import java.nio.charset.StandardCharsets;
+import java.util.List;
 import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
 import tools.jackson.databind.JsonNode;
@@ -103,7 +104,15 @@ class ReadingApiTest extends ServiceTest {
     ProblemShape.check(http.form("POST", readings, log()), 422);
     ProblemShape.check(http.form("POST", readings, log(), field("meter", "M9")), 422);
     ProblemShape.check(http.form("POST", readings, log(), field("at", "nowhere")), 422);
-    ProblemShape.check(http.form("POST", readings, field("meter", "M1")), 400);
+    for (Answer without :
+        List.of(
+            http.form("POST", readings, field("meter", "M1")),
+            http.form("POST", readings, field("meter", "M1"), field("file", "no file")),
+            http.send("POST", readings, "application/x-www-form-urlencoded", "meter=M1"),
+            http.post(readings))) {
+      ProblemShape.check(without, 422);
+      assertThat(without.json().path("detail").asString()).contains("in the part \"file\"");
+    }
     ProblemShape.check(
         http.form("POST", readings, log(), field("meter", "M1"), field("mapping", "{")), 422);
     ProblemShape.check(

@@ -116,8 +116,8 @@ class SeriesFigureTest {
 
   @Test
   void hoursCarryTheirFigures() {
-    String svg =
-        HourPicture.numbered(
+    String table =
+        HourTable.draw(
             "n",
             h -> h == 0 ? 10 : h == 1 ? Double.NaN : 5,
             0,
@@ -125,8 +125,9 @@ class SeriesFigureTest {
             v -> "%.0f".formatted(v),
             List.of("Mon", "Tue", "Wed", "Thu", "Fri", "Sat", "Sun"),
             "week");
-    assertThat(svg).contains("fill-opacity=\"0.48\"", ">10</text>").doesNotContain("NaN");
-    assertThat(svg.split("<rect", -1)).hasSize(168);
+    assertThat(table).contains("<td class=\"t11\">10</td><td></td><td class=\"t6\">5</td>");
+    assertThat(table.split("<td class", -1)).hasSize(168);
+    assertThat(table).doesNotContain("NaN");
   }
 
   @Test

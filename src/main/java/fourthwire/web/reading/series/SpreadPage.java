@@ -23,7 +23,7 @@ record SpreadPage(
   /**
    * Means by hour of the week.
    *
-   * @param figures the same as a table, hours down, days across
+   * @param table days down, hours across, tinted by size
    */
-  record Hours(String name, String svg, String caption, NodePage.Grid figures) {}
+  record Hours(String name, String table, String caption) {}
 }

@@ -5,7 +5,7 @@ import fourthwire.metering.reduce.HourMeans;
 import fourthwire.metering.reduce.ValuesBySize;
 import fourthwire.metering.series.WeekClock;
 import fourthwire.web.figure.DurationPlot;
-import fourthwire.web.figure.HourPicture;
+import fourthwire.web.figure.HourTable;
 import fourthwire.web.figure.SeriesPlot;
 import fourthwire.web.panel.NodePage;
 import fourthwire.web.support.Numbers;
@@ -148,7 +148,6 @@ final class SpreadPageMaker {
     double low = all(means, factor).min().orElse(0);
     double high = all(means, factor).max().orElse(0);
     double lightest = low >= 0 && low < high / 2 ? 0 : low;
-    List<String> days = days("week.day.short.");
     String caption =
         words.of(
             "spread.hours.caption",
@@ -156,38 +155,21 @@ final class SpreadPageMaker {
             Digits.of(low, high).text(high, unit));
     return new SpreadPage.Hours(
         view.place(quantity),
-        HourPicture.numbered(
+        HourTable.draw(
             Measure.classes(quantity),
             h -> factor * means.mean(h),
             lightest,
             high,
             Digits.ofCells(low, high)::text,
-            days,
-            words.of("spread.hours.alternative", view.place(quantity))),
-        caption,
-        table(means, factor, unit, quantity, Digits.of(low, high)));
+            days("week.day.short."),
+            words.of("spread.hours.table", view.place(quantity), unit)),
+        caption);
   }
 
   private static DoubleStream all(HourMeans means, double factor) {
     return IntStream.range(0, WeekClock.HOURS)
         .mapToDouble(h -> factor * means.mean(h))
         .filter(v -> !Double.isNaN(v));
-  }
-
-  private NodePage.Grid table(
-      HourMeans means, double factor, String unit, String quantity, Digits written) {
-    List<String> heads = new ArrayList<>(List.of(words.of("spread.hour", unit)));
-    heads.addAll(days("week.day.short."));
-    FigureGrid grid =
-        new FigureGrid(
-            words.of("spread.hours.table", view.place(quantity)), heads, column -> written);
-    for (int hour = 0; hour < 24; hour++) {
-      int of = hour;
-      grid.row(
-          "%02d".formatted(hour),
-          IntStream.range(0, 7).mapToDouble(day -> factor * means.mean(24 * day + of)).toArray());
-    }
-    return grid.done();
   }
 
   private List<String> days(String key) {
