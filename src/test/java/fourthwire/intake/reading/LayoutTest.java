@@ -373,7 +373,7 @@ class LayoutTest {
     assertThat(reading.count()).isEqualTo(layout.rowCount());
     assertThat(reading.log().orElseThrow().interval()).isEqualTo(Duration.ofMinutes(10));
     assertThat(reading.period().orElseThrow().from())
-        .isEqualTo(LayoutTruth.START.atZone(ZoneId.of("Europe/Amsterdam")).toInstant());
+        .isEqualTo(layout.start().atZone(ZoneId.of("Europe/Amsterdam")).toInstant());
     assertThat(found.keySet()).containsExactlyInAnyOrderElementsOf(expected.keySet());
     expected.forEach((quantity, values) -> check(quantity, found.get(quantity), values));
   }

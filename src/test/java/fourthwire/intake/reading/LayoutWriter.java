@@ -33,6 +33,7 @@ final class LayoutWriter {
   private String bom = "";
   private int repeatHeader;
   private int rows = LayoutTruth.ROWS;
+  private LocalDateTime start = LayoutTruth.START;
   private boolean quoted;
   private boolean newestFirst;
   private boolean trailing;
@@ -173,6 +174,15 @@ final class LayoutWriter {
     return this;
   }
 
+  LayoutWriter from(LocalDateTime first) {
+    start = first;
+    return this;
+  }
+
+  LocalDateTime start() {
+    return start;
+  }
+
   int rowCount() {
     return rows;
   }
@@ -235,7 +245,7 @@ final class LayoutWriter {
   }
 
   private void row(StringBuilder text, Map<String, BigDecimal[]> truth, int row) {
-    LocalDateTime at = LayoutTruth.START.plus(LayoutTruth.STEP.multipliedBy(row));
+    LocalDateTime at = start.plus(LayoutTruth.STEP.multipliedBy(row));
     List<String> cells = new ArrayList<>();
     times.forEach(t -> cells.add(t.apply(at)));
     for (int k = 0; k < columns.size(); k++) {

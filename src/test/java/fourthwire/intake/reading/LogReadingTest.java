@@ -16,6 +16,7 @@ import java.time.Duration;
 import java.time.Instant;
 import java.time.LocalDateTime;
 import java.time.ZoneId;
+import java.time.ZoneOffset;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -323,6 +324,58 @@ class LogReadingTest {
     assertThat(r.log().orElseThrow().interval()).isEqualTo(Duration.ofMinutes(10));
     assertThat(r.period().orElseThrow().from()).isEqualTo(Instant.parse("2025-01-31T23:00:00Z"));
     assertThat(r.notes()).anySatisfy(n -> assertThat(n).contains("row 4"));
+  }
+
+  @Test
+  void coverAndEventsOfAWorkbookAreNotTakenForItsRows() throws IOException {
+    ByteArrayOutputStream bytes = new ByteArrayOutputStream();
+    try (Workbook workbook = new Workbook(bytes, "test", null)) {
+      Worksheet cover = workbook.newWorksheet("cover");
+      cover.value(0, 0, "Survey of a board");
+      cover.value(1, 0, "From");
+      cover.value(1, 1, "2025-02-01 00:00");
+      Worksheet events = workbook.newWorksheet("events");
+      Worksheet rows = workbook.newWorksheet("trend");
+      rows.value(0, 0, "Time");
+      rows.value(0, 1, "I L1 (A)");
+      List.of("Time", "Kind", "Lasted (s)").forEach(h -> events.value(0, "TKL".indexOf(h.charAt(0)), h));
+      for (int k = 0; k < 4; k++) {
+        String time = "2025-02-01 00:" + k + "0";
+        events.value(1 + k, 0, time);
+        events.value(1 + k, 1, "dip");
+        events.value(1 + k, 2, 0.2 * k);
+        rows.value(1 + k, 0, time);
+        rows.value(1 + k, 1, 10 + k);
+      }
+    }
+    Reading r = read(bytes.toByteArray(), Files.setting(50));
+    assertThat(r.count()).isEqualTo(4);
+    assertThat(mean(r, "L1.rms_a")).isEqualTo(11.5);
+  }
+
+  /** Amsterdam's clocks went on at 2:00 on 30 March 2025 and back at 3:00 on 26 October. */
+  @ParameterizedTest
+  @CsvSource({"2025-03-30T00:00", "2025-10-26T00:00"})
+  void aClockThatNeverChangesKeepsStandardTime(LocalDateTime from) {
+    StringBuilder text = new StringBuilder("Time,I L1 (A)\n");
+    for (int k = 0; k < 60; k++) {
+      text.append(from.plusMinutes(10L * k)).append(',').append(k).append('\n');
+    }
+    Reading r = read(text.toString());
+    assertThat(r.period().orElseThrow().from()).isEqualTo(from.toInstant(ZoneOffset.ofHours(1)));
+    assertThat(r.quality()).isEmpty();
+    assertThat(r.notes()).anySatisfy(n -> assertThat(n).contains("standard time all year"));
+  }
+
+  @Test
+  void theRepeatedHourOfAutumnIsTwoRowsOfAnHour() {
+    String text = "Time,I L1 (A)\n";
+    for (String hour : List.of("00", "01", "02", "02", "03", "04")) {
+      text += "2025-10-26 " + hour + ":00," + (10 + text.length()) + "\n";
+    }
+    Reading r = read(text);
+    assertThat(r.quality()).isEmpty();
+    assertThat(r.period().orElseThrow().to()).isEqualTo(Instant.parse("2025-10-26T04:00:00Z"));
   }
 
   @Test

@@ -180,21 +180,40 @@ class MoreLayoutsTest {
         .lines("V L#", "rms_v")
         .lines("I L#", "rms_a");
     layout(
-            "midnight as 24:00",
+            "ends of intervals, midnight as 24:00",
             LayoutWriter.of(";", ',')
-                .time(
-                    "Datum",
-                    t ->
-                        DateTimeFormatter.ofPattern("dd.MM.yyyy")
-                            .format(t.toLocalTime().toSecondOfDay() == 0 ? t.minusDays(1) : t))
-                .time(
-                    "Zeit",
-                    t ->
-                        t.toLocalTime().toSecondOfDay() == 0
-                            ? "24:00"
-                            : DateTimeFormatter.ofPattern("HH:mm").format(t)))
+                .time("Datum", t -> DateTimeFormatter.ofPattern("dd.MM.yyyy").format(t))
+                .time("Zeit", t ->
+                        DateTimeFormatter.ofPattern("HH:mm")
+                            .format(t.plusMinutes(10))
+                            .replace("00:00", "24:00")))
         .lines("U L# [V]", "rms_v")
         .lines("I L# [A]", "rms_a");
+    layout(
+            "year, month, day, hour and minute in columns of their own",
+            LayoutWriter.of(",", '.')
+                .time("Year", "yyyy")
+                .time("Month", "M")
+                .time("Day", "d")
+                .time("Hour", "H")
+                .time("Minute", "m"))
+        .lines("V# (V)", "rms_v")
+        .lines("I# (A)", "rms_a");
+    layout(
+            "a date, and hours and minutes in columns of their own",
+            LayoutWriter.of(";", ',')
+                .time("Datum", "dd.MM.yyyy")
+                .time("Stunde", "HH")
+                .time("Minute", "mm"))
+        .lines("U L# [V]", "rms_v")
+        .lines("P L# [kW]", "active_w", 3);
+    layout(
+            "newest first, days that may be months",
+            LayoutWriter.of(",", '.')
+                .time("Time", "dd/MM/yyyy HH:mm")
+                .from(LayoutTruth.START.minusDays(6))
+                .newestFirst())
+        .lines("V# (V)", "rms_v");
     layout(
             "time before date",
             LayoutWriter.of(",", '.').time("Time", "HH:mm:ss").time("Date", "dd/MM/yyyy"))

@@ -108,12 +108,12 @@ class OpenLayoutsTest {
         "columns.VAA",
         dated().lines("V@", "rms_v").lines("I@", "rms_a").lines("VA@", "apparent_va"));
     layout(
-        "hours and minutes in columns of their own",
-        "time.columns",
+        "newest first, one day that may be a month",
+        "time.format",
         LayoutWriter.of(",", '.')
-            .time("Date", "yyyy-MM-dd")
-            .time("Hour", "H")
-            .time("Minute", "m")
+            .time("Time", "dd/MM/yyyy HH:mm")
+            .rows(18)
+            .newestFirst()
             .lines("V# (V)", "rms_v"));
   }
 

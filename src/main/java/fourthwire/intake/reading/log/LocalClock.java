@@ -18,6 +18,7 @@ final class LocalClock {
 
   private final ZoneRules rules;
   private long before = Long.MIN_VALUE;
+  private long step;
   private boolean second;
   private long skipped;
   private long plainFrom = Long.MAX_VALUE;
@@ -37,6 +38,7 @@ final class LocalClock {
     } else {
       at = look(localMillis);
     }
+    step = localMillis - before;
     before = localMillis;
     return at;
   }
@@ -57,8 +59,10 @@ final class LocalClock {
       skipped++;
       return localMillis - millis(rules.getTransition(local).getOffsetBefore());
     }
-    // Back by no more than the hour that is repeated.
-    boolean ranBack = localMillis < before && before - localMillis <= HOUR_MILLIS;
+    // Back by no more than the hour that is repeated; rows of an hour stand there again.
+    boolean ranBack =
+        localMillis < before && before - localMillis <= HOUR_MILLIS
+            || localMillis == before && step == HOUR_MILLIS;
     second = second || ranBack;
     return localMillis - millis(offsets.get(second ? 1 : 0));
   }

@@ -2,6 +2,7 @@ package fourthwire.intake.reading.log;
 
 import fourthwire.intake.reading.LogProposal;
 import fourthwire.intake.reading.ReadingPlan;
+import fourthwire.intake.reading.ReadingPlan.Confidence;
 import fourthwire.intake.reading.ReadingRefusedException;
 import fourthwire.intake.reading.ReadingSetting;
 import fourthwire.intake.reading.format.ChannelMapping;
@@ -33,6 +34,7 @@ import java.util.OptionalDouble;
 import java.util.concurrent.ExecutorService;
 import java.util.concurrent.Executors;
 import java.util.function.BiPredicate;
+import java.util.regex.Pattern;
 
 /** An interval log as a text table. */
 public final class LogFormat {
@@ -43,6 +45,8 @@ public final class LogFormat {
   private final TextTable table;
   private static final int WORKERS = 2;
   private static final int LOOK_ROWS = 300;
+  private static final int LOOK_FOR_DAY_END = 2000;
+  private static final Pattern DAY_END = Pattern.compile("(?<![\\d:.])24[:.]00");
 
   private final TimeColumns time;
   private final long bytes;
@@ -76,6 +80,10 @@ public final class LogFormat {
     Optional<String> zone =
         unclear.isPresent() ? told : told.or(() -> setting.siteZone().map(ZoneId::getId));
     zone(zone, unclear, order, questions);
+    boolean remembered = given.zone().isPresent() && known.whence() == Confidence.REMEMBERED;
+    if ((told.isEmpty() || remembered) && order.isPresent() && questions.isEmpty()) {
+      zone = zone.map(z -> kept(z, order.get(), notes));
+    }
     if (order.isPresent() && standsStill(order.get())) {
       questions.add(
           question(
@@ -140,7 +148,7 @@ public final class LogFormat {
             others,
             known,
             new LogProposal.Time(
-                time, this.time.kind() == TimeColumns.Kind.CALENDAR, String.join(" ", notes)),
+                time, this.time.isCalendar(), String.join(" ", notes)),
             questions);
   }
 
@@ -241,6 +249,20 @@ public final class LogFormat {
     }
   }
 
+  /** The zone, or the offset that the meter's clock keeps all year. */
+  private String kept(String zone, DateOrder order, List<String> notes) {
+    Optional<ZoneOffset> kept = StandardTime.kept(table, time, order, ZoneId.of(zone));
+    kept.ifPresent(
+        offset ->
+            notes.add(
+                "Rows run on through the hour in which the clocks of "
+                    + zone
+                    + " change: the meter keeps standard time all year, and times are read at "
+                    + offset
+                    + ". If it does not, give time.zone."));
+    return kept.map(ZoneOffset::getId).orElse(zone);
+  }
+
   private boolean offsetsWritten(Optional<DateOrder> order) {
     boolean[] written = {false};
     table.forEach(
@@ -275,12 +297,27 @@ public final class LogFormat {
     if (given.stamp().isPresent()) {
       return given.stamp().get();
     }
-    boolean end = names().stream().anyMatch(TimeColumns::isEnd);
+    boolean named = names().stream().anyMatch(TimeColumns::isEnd);
+    boolean end = named || dayEnds();
     notes.add(
-        end
+        named
             ? "Times mark the ends of the intervals, as their heading says."
-            : "Times are taken as the starts of the intervals.");
+            : end
+                ? "Times mark the ends of the intervals: days end at 24:00."
+                : "Times are taken as the starts of the intervals.");
     return end ? Stamp.END : Stamp.START;
+  }
+
+  /** Whether a time of 24:00 stands in the first rows: no interval begins then. */
+  private boolean dayEnds() {
+    int[] rows = {0};
+    boolean[] found = {false};
+    table.forEach(
+        row -> {
+          found[0] = time.columns().size() > 0 && DAY_END.matcher(time.text(row)).find();
+          return !found[0] && ++rows[0] < LOOK_FOR_DAY_END;
+        });
+    return found[0];
   }
 
   public Reading read(

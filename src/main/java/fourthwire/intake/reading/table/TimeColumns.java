@@ -23,6 +23,8 @@ public record TimeColumns(List<Integer> columns, Kind kind, double unitS) {
   public enum Kind {
     /** Dates with times of day. */
     CALENDAR,
+    /** Year, month, day, hour, minute and second, or a date and what follows, each a column. */
+    PARTS,
     /** Time from the start of the record. */
     ELAPSED,
     /** Days since the end of 1899, as spreadsheets count them. */
@@ -58,9 +60,17 @@ public record TimeColumns(List<Integer> columns, Kind kind, double unitS) {
         dates.add(k);
       }
     }
-    return dates.isEmpty()
-        ? NumericTime.find(table, rows)
-        : new TimeColumns(withClock(rows, start(table, dates), width), Kind.CALENDAR, 1);
+    if (dates.isEmpty()) {
+      return TimeParts.find(table.headings(), rows)
+          .orElseGet(() -> NumericTime.find(table, rows));
+    }
+    int date = start(table, dates);
+    boolean whole = isWhole(rows, date);
+    List<Integer> columns = whole ? List.of(date) : withClock(rows, date, width);
+    TimeColumns calendar = new TimeColumns(columns, Kind.CALENDAR, 1);
+    return whole || columns.size() > 1
+        ? calendar
+        : TimeParts.hours(table.headings(), rows, columns).orElse(calendar);
   }
 
   private static List<List<String>> sample(TextTable table) {
@@ -98,10 +108,13 @@ public record TimeColumns(List<Integer> columns, Kind kind, double unitS) {
         .matches(".*\\b(end|ende|ending|to|until|stop|fin)\\b.*");
   }
 
+  private static boolean isWhole(List<List<String>> rows, int date) {
+    return most(rows, r -> r.get(date).matches("(?i).*\\d:\\d\\d.*|.*\\d[t ]\\d{4,6}z?"));
+  }
+
   /** A date alone has its time of day in the column that looks like one, the nearest behind it. */
   private static List<Integer> withClock(List<List<String>> rows, int date, int width) {
-    boolean whole = most(rows, r -> r.get(date).matches("(?i).*\\d:\\d\\d.*|.*\\d[t ]\\d{4,6}z?"));
-    for (int k = 0; !whole && k < width; k++) {
+    for (int k = 0; k < width; k++) {
       int column = (date + 1 + k) % width;
       if (column != date && most(rows, r -> isClock(r.get(column), r.get(date)))) {
         return List.of(date, column);
@@ -131,7 +144,8 @@ public record TimeColumns(List<Integer> columns, Kind kind, double unitS) {
     return found.columns().equals(columns)
         ? found
         : NumericTime.of(table, sample(table), columns)
-            .orElse(new TimeColumns(columns, Kind.CALENDAR, 1));
+            .orElse(
+                new TimeColumns(columns, columns.size() > 2 ? Kind.PARTS : Kind.CALENDAR, 1));
   }
 
   /** Whether time is counted from the start of the record. */
@@ -139,15 +153,23 @@ public record TimeColumns(List<Integer> columns, Kind kind, double unitS) {
     return kind == Kind.ELAPSED;
   }
 
+  /** Whether times are written as dates. */
+  public boolean isCalendar() {
+    return kind == Kind.CALENDAR || kind == Kind.PARTS;
+  }
+
   /** The text of a row's time. */
   public String text(TextTable.Row row) {
+    if (kind == Kind.PARTS) {
+      return TimeParts.text(row, columns);
+    }
     String first = row.text(columns.get(0));
     return columns.size() == 1 ? first : first + " " + row.text(columns.get(1));
   }
 
   /** A row's time; empty where it is none in this order. */
   public Optional<At> at(TextTable.Row row, DateOrder order) {
-    if (kind == Kind.CALENDAR) {
+    if (isCalendar()) {
       return CellTime.of(text(row))
           .flatMap(t -> t.local(order).map(local -> new At(local, offset(t.offsetSeconds()))));
     }
@@ -189,12 +211,12 @@ public record TimeColumns(List<Integer> columns, Kind kind, double unitS) {
           boolean plain = time.isEmpty() || time.get().plain();
           return found.isEmpty() && !(plain && ++plainRows[0] > LOOK_PLAIN);
         });
-    return kind == Kind.CALENDAR ? found.stream().findFirst() : Optional.empty();
+    return isCalendar() ? found.stream().findFirst() : Optional.empty();
   }
 
   /** The order of the dates and why it is that; empty where the file does not settle it. */
   public Optional<Order> order(TextTable table) {
-    if (kind != Kind.CALENDAR) {
+    if (!isCalendar()) {
       return Optional.of(new Order(DateOrder.YEAR_MONTH_DAY, NumericTime.note(kind)));
     }
     OrderSearch search = new OrderSearch();

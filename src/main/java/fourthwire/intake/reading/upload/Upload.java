@@ -38,7 +38,7 @@ final class Upload {
       int before = parts.size();
       unpack(file);
       List<Part> unpackedParts = parts.subList(before, parts.size());
-      if (unpackedParts.stream().anyMatch(p -> p.name().equals(FirstSheet.CONTENT_TYPES))) {
+      if (unpackedParts.stream().anyMatch(p -> p.name().equals(LogSheet.CONTENT_TYPES))) {
         Part sheet = sheet(file, List.copyOf(unpackedParts));
         unpackedParts.clear();
         parts.add(sheet);
@@ -59,13 +59,13 @@ final class Upload {
                 + " is a workbook in UTF-16 or declares a document type, which is refused. Save it"
                 + " again as xlsx, or its sheet as CSV.");
       }
-      if (FirstSheet.namesNoColumn(text)) {
+      if (LogSheet.namesNoColumn(text)) {
         throw new ReadingRefusedException(
             file.name() + " names a column that no workbook has. Save its sheet as CSV.");
       }
     }
     byte[] csv =
-        FirstSheet.csv(
+        LogSheet.csv(
             file.name(), new Part(file.name(), file.length(), file::open).bytes(MOST_BYTES));
     return new Part(file.name(), csv.length, () -> new ByteArrayInputStream(csv));
   }

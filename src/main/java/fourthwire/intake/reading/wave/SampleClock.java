@@ -122,7 +122,7 @@ public final class SampleClock {
 
   /** Whether clock times stand so close that the rows are samples of a waveform. */
   public static boolean isOfAWaveform(TextTable table, TimeColumns time) {
-    boolean clock = time.kind() == TimeColumns.Kind.CALENDAR && !time.columns().isEmpty();
+    boolean clock = time.isCalendar() && !time.columns().isEmpty();
     return clock
         && Arrays.stream(DateOrder.values()).anyMatch(order -> isClose(table, time, order));
   }

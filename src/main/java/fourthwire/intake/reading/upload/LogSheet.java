@@ -1,6 +1,10 @@
 package fourthwire.intake.reading.upload;
 
 import fourthwire.intake.reading.ReadingRefusedException;
+import fourthwire.intake.reading.heading.Heading;
+import fourthwire.intake.reading.table.TableException;
+import fourthwire.intake.reading.table.TextTable;
+import fourthwire.intake.reading.table.TimeColumns;
 import java.io.ByteArrayInputStream;
 import java.io.IOException;
 import java.math.BigDecimal;
@@ -8,6 +12,7 @@ import java.nio.charset.StandardCharsets;
 import java.time.LocalDateTime;
 import java.time.format.DateTimeFormatter;
 import java.time.temporal.ChronoUnit;
+import java.util.List;
 import java.util.Locale;
 import java.util.regex.Pattern;
 import java.util.stream.Stream;
@@ -17,18 +22,20 @@ import org.dhatim.fastexcel.reader.ExcelReaderException;
 import org.dhatim.fastexcel.reader.ReadableWorkbook;
 import org.dhatim.fastexcel.reader.ReadingOptions;
 import org.dhatim.fastexcel.reader.Row;
+import org.dhatim.fastexcel.reader.Sheet;
 import org.jspecify.annotations.Nullable;
 
 /**
- * The first sheet of an xlsx workbook (ECMA-376) as the text table it stands for, so that it is
- * read as a CSV file is: dates as ISO 8601, numbers with a decimal point, of a formula the value
- * the workbook last held. Rows keep their numbers.
+ * The sheet of an xlsx workbook (ECMA-376) that holds the rows, as the text table it stands for, so
+ * that it is read as a CSV file is: dates as ISO 8601, numbers with a decimal point, of a formula
+ * the value the workbook last held. Rows keep their numbers.
  */
-final class FirstSheet {
+final class LogSheet {
   /** The part that every workbook has and no other zip. */
   static final String CONTENT_TYPES = "[Content_Types].xml";
 
   private static final ReadingOptions WITH_FORMATS = new ReadingOptions(true, false);
+  private static final int OF_A_LOG = 3;
   private static final int MOST_ROWS = 1_100_000;
   private static final DateTimeFormatter TIME =
       DateTimeFormatter.ofPattern("yyyy-MM-dd HH:mm:ss", Locale.ROOT);
@@ -40,25 +47,60 @@ final class FirstSheet {
   private static final Pattern COLUMN_BEYOND_XFD =
       Pattern.compile("<c\\s[^>]*\\br\\s*=\\s*[\"'][A-Za-z]{4,}");
 
-  private FirstSheet() {}
+  private LogSheet() {}
 
   /** Whether a part's text names a cell in a column that no workbook has. */
   static boolean namesNoColumn(String part) {
     return COLUMN_BEYOND_XFD.matcher(part).find();
   }
 
-  /** The sheet as CSV with commas. */
+  /**
+   * The first sheet that has a table of times with a quantity beside them, else the first that
+   * comes nearest to that, as CSV with commas: covers, notes and events may stand before it.
+   */
   static byte[] csv(String name, byte[] workbook) {
-    FirstSheet sheet = new FirstSheet();
     try (ReadableWorkbook book =
-            new ReadableWorkbook(new ByteArrayInputStream(workbook), WITH_FORMATS);
-        Stream<Row> rows = book.getFirstSheet().openStream()) {
-      rows.forEach(sheet::row);
-    } catch (IOException | ExcelReaderException | NumberFormatException e) {
+        new ReadableWorkbook(new ByteArrayInputStream(workbook), WITH_FORMATS)) {
+      List<Sheet> sheets = book.getSheets().toList();
+      byte[] best = csv(sheets.get(0));
+      int likely = sheets.size() == 1 ? OF_A_LOG : likely(best);
+      for (int k = 1; k < sheets.size() && likely < OF_A_LOG; k++) {
+        byte[] next = csv(sheets.get(k));
+        int such = likely(next);
+        best = such > likely ? next : best;
+        likely = Math.max(likely, such);
+      }
+      return best;
+    } catch (IOException
+        | ExcelReaderException
+        | NumberFormatException
+        | IndexOutOfBoundsException e) {
       throw new ReadingRefusedException(
           name + " is a workbook that can't be read. Save it again as xlsx, or its sheet as CSV.");
     }
-    return sheet.text.toString().getBytes(StandardCharsets.UTF_8);
+  }
+
+  private static byte[] csv(Sheet sheet) throws IOException {
+    LogSheet text = new LogSheet();
+    try (Stream<Row> rows = sheet.openStream()) {
+      rows.forEach(text::row);
+    }
+    return text.text.toString().getBytes(StandardCharsets.UTF_8);
+  }
+
+  /** 0 for no table, 1 for one without times, 2 for one without quantities. */
+  private static int likely(byte[] csv) {
+    try {
+      TextTable table = TextTable.of(() -> new ByteArrayInputStream(csv));
+      TimeColumns time = TimeColumns.find(table);
+      boolean timed = !time.columns().isEmpty() && !time.elapsed();
+      boolean named =
+          Heading.ofLog(table.headings()).values().stream()
+              .anyMatch(h -> h.meaning() != Heading.Meaning.NONE);
+      return timed ? named ? OF_A_LOG : 2 : 1;
+    } catch (TableException e) {
+      return 0;
+    }
   }
 
   private void row(Row row) {
