@@ -338,7 +338,8 @@ class LogReadingTest {
       Worksheet rows = workbook.newWorksheet("trend");
       rows.value(0, 0, "Time");
       rows.value(0, 1, "I L1 (A)");
-      List.of("Time", "Kind", "Lasted (s)").forEach(h -> events.value(0, "TKL".indexOf(h.charAt(0)), h));
+      List.of("Time", "Kind", "Lasted (s)")
+          .forEach(h -> events.value(0, "TKL".indexOf(h.charAt(0)), h));
       for (int k = 0; k < 4; k++) {
         String time = "2025-02-01 00:" + k + "0";
         events.value(1 + k, 0, time);

@@ -183,7 +183,9 @@ class MoreLayoutsTest {
             "ends of intervals, midnight as 24:00",
             LayoutWriter.of(";", ',')
                 .time("Datum", t -> DateTimeFormatter.ofPattern("dd.MM.yyyy").format(t))
-                .time("Zeit", t ->
+                .time(
+                    "Zeit",
+                    t ->
                         DateTimeFormatter.ofPattern("HH:mm")
                             .format(t.plusMinutes(10))
                             .replace("00:00", "24:00")))

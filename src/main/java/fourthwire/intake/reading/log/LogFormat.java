@@ -147,8 +147,7 @@ public final class LogFormat {
         .make(
             others,
             known,
-            new LogProposal.Time(
-                time, this.time.isCalendar(), String.join(" ", notes)),
+            new LogProposal.Time(time, this.time.isCalendar(), String.join(" ", notes)),
             questions);
   }
 

@@ -128,9 +128,7 @@ final class StandardTime {
     }
 
     private static boolean isNear(long earlier, long later) {
-      return earlier != Long.MIN_VALUE
-          && later != Long.MAX_VALUE
-          && later - earlier <= HOUR_MILLIS;
+      return earlier != Long.MIN_VALUE && later != Long.MAX_VALUE && later - earlier <= HOUR_MILLIS;
     }
 
     /** The rows run through the hour as if there were no change. */

@@ -61,8 +61,7 @@ public record TimeColumns(List<Integer> columns, Kind kind, double unitS) {
       }
     }
     if (dates.isEmpty()) {
-      return TimeParts.find(table.headings(), rows)
-          .orElseGet(() -> NumericTime.find(table, rows));
+      return TimeParts.find(table.headings(), rows).orElseGet(() -> NumericTime.find(table, rows));
     }
     int date = start(table, dates);
     boolean whole = isWhole(rows, date);
@@ -144,8 +143,7 @@ public record TimeColumns(List<Integer> columns, Kind kind, double unitS) {
     return found.columns().equals(columns)
         ? found
         : NumericTime.of(table, sample(table), columns)
-            .orElse(
-                new TimeColumns(columns, columns.size() > 2 ? Kind.PARTS : Kind.CALENDAR, 1));
+            .orElse(new TimeColumns(columns, columns.size() > 2 ? Kind.PARTS : Kind.CALENDAR, 1));
   }
 
   /** Whether time is counted from the start of the record. */
