@@ -1,14 +1,16 @@
 #!/bin/bash
-# A log of gigabytes through the running service with 512 MB of heap: uploaded, read, asked for,
-# handed in again, deleted. Prints what the job says of itself on the way, and how much memory the
-# service took. The rows are those of a short log again and again, a minute apart.
-# usage: deploy/try-large-log.sh <log.csv> [gigabytes] [port]
+# A log of gigabytes through the running service with 512 MB of heap: uploaded, its reading cancelled;
+# uploaded and read; handed in again; deleted; read once more and deleted with its site. Prints what
+# the job says of itself on the way, how large the database is and how much memory the service took.
+# The rows are those of a short log again and again, a minute apart.
+# usage: deploy/try-large-log.sh <log.csv> [gigabytes] [port] [heap]
 # RUN starts the service; without it target/fourthwire.jar is run.
 set -e
 cd "$(dirname "$0")/.."
 log=${1:?a log with a row of headings and times in the first column}
 gigabytes=${2:-4}
 port=${3:-8099}
+heap=${4:-512m}
 work=$(mktemp -d)
 run=${RUN:-java -jar target/fourthwire.jar}
 trap 'kill $service 2> /dev/null; wait $service 2> /dev/null; rm -rf "$work"' EXIT
@@ -29,7 +31,7 @@ with open(sys.argv[3], "w", buffering=1 << 22) as out:
             break
 PYTHON
 ls -l "$work/large.csv" | awk '{printf "file of %.2f GB\n", $5 / 1e9}'
-JAVA_TOOL_OPTIONS="-Xmx512m -Xlog:gc:file=$work/gc.log -XX:+HeapDumpOnOutOfMemoryError -XX:HeapDumpPath=$work" \
+JAVA_TOOL_OPTIONS="-Xmx$heap -Xlog:gc:file=$work/gc.log -XX:+HeapDumpOnOutOfMemoryError -XX:HeapDumpPath=$work" \
   $run --server.port=$port --fourthwire.data-dir="$work/data" --fourthwire.demo=false \
   > "$work/service.out" 2>&1 &
 service=$!
@@ -53,27 +55,40 @@ watch() {
   done
   reading=$(echo "$state" | field 'd.get("reading", d.get("result", ""))')
 }
-SECONDS=0
-answer=$(send)
-echo "uploaded in $SECONDS s: $answer"
-memory
-SECONDS=0
-watch "$(echo "$answer" | field 'd["job"]')"
-echo "read in $SECONDS s"
-memory
-curl -s "$address/sites/$site/readings" | field '[(r["id"], r.get("rows")) for r in d]'
-SECONDS=0
-answer=$(send)
-echo "the same file again, $SECONDS s: $answer"
-watch "$(echo "$answer" | field 'd["job"]')"
-count=$(curl -s "$address/sites/$site/readings" | field 'len([r for r in d if r.get("rows", 0) > 0])')
-echo "large readings: $count"
-SECONDS=0
-for id in $(curl -s "$address/sites/$site/readings" | field '" ".join(str(r["id"]) for r in d if r.get("rows", 0) > 0)'); do
-  curl -s -o /dev/null -w "delete: %{http_code}" -X DELETE "$address/readings/$id"
-done
-echo " in $SECONDS s"
-memory
-du -sm "$work/data" | awk '{print "database " $1 " MB"}'
+size() { du -sm "$work/data" | awk '{print "  database " $1 " MB"}'; }
+upload() {
+  SECONDS=0
+  answer=$(send)
+  echo "$1: answered after $SECONDS s: $answer"
+  memory
+  size
+}
+read_on() {
+  SECONDS=0
+  watch "$(echo "$answer" | field 'd["job"]')"
+  echo "read in $SECONDS s"
+  memory
+  size
+  curl -s "$address/sites/$site/readings" | field '"readings " + str([(r["id"], r.get("rows")) for r in d])'
+}
+remove() {
+  SECONDS=0
+  curl -s -o /dev/null -w "delete $1: %{http_code}" -X DELETE "$address/$1"
+  echo " in $SECONDS s"
+  memory
+  size
+}
+upload "to be cancelled"
+sleep 10
+curl -s -X POST -o /dev/null -w "cancel: %{http_code}\n" "$address/jobs/$(echo "$answer" | field 'd["job"]')/cancel"
+read_on
+upload "uploaded"
+read_on
+upload "the same file again"
+read_on
+remove "readings/$reading"
+upload "uploaded"
+read_on
+remove "sites/$site"
 grep -c java.lang.OutOfMemoryError "$work/service.out" || true
 awk -F'->' '/Pause/ {split($2, a, "M"); if (a[1] + 0 > most) most = a[1] + 0} END {print "heap in use after a collection, at most: " most " MB"}' "$work/gc.log"

@@ -10,6 +10,7 @@ import fourthwire.metering.Reading;
 import fourthwire.metering.ReadingRepository;
 import fourthwire.metering.ReadingUploads;
 import java.util.List;
+import java.util.OptionalLong;
 import java.util.concurrent.CancellationException;
 import java.util.function.BiPredicate;
 import java.util.stream.Collectors;
@@ -67,7 +68,13 @@ public final class ReadingRun {
     List<RawFile> files = uploads.files(upload.id());
     ReadingSetting setting = settings.of(upload.siteId(), upload.meter(), upload.mapping());
     ReadingPlan plan = reader.plan(files, setting);
-    settings.checkNotReadOtherwise(upload.siteId(), upload.meter(), files, plan.mapping());
+    OptionalLong before =
+        settings.readBefore(upload.siteId(), upload.meter(), files, plan.mapping());
+    if (before.isPresent()) {
+      readings.remember(upload.siteId(), upload.meter(), plan.layout(), upload.mapping());
+      uploads.finish(upload.id(), before.getAsLong());
+      return;
+    }
     Reading reading = reader.read(files, plan, setting, listener(upload.id()));
     try {
       stop.check();

@@ -12,6 +12,7 @@ import fourthwire.site.SiteTree;
 import fourthwire.site.Survey;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalLong;
 
 /** Takes in meters' files. */
 public final class ReadingService {
@@ -57,12 +58,19 @@ public final class ReadingService {
     return id;
   }
 
-  /** Checks and stores the files as a queued upload, which the caller reads himself. */
+  /**
+   * Checks and stores the files as a queued upload, which the caller reads himself; files that were
+   * read before are not stored again.
+   */
   public long store(Upload upload) {
     MeterRef meter = meter(upload);
     List<RawFile> files = List.copyOf(upload.files());
     ReadingPlan plan = reader.plan(files, settings.of(upload.siteId(), meter, upload.mapping()));
-    settings.checkNotReadOtherwise(upload.siteId(), meter, files, plan.mapping());
+    OptionalLong before = settings.readBefore(upload.siteId(), meter, files, plan.mapping());
+    if (before.isPresent()) {
+      settings.remember(upload.siteId(), meter, plan.layout(), upload.mapping());
+      return uploads.createDone(upload.siteId(), meter, before.getAsLong());
+    }
     return uploads.create(upload.siteId(), meter, files, upload.mapping());
   }
 
@@ -110,7 +118,7 @@ public final class ReadingService {
     List<RawFile> files = uploads.files(waiting.id());
     ReadingPlan plan =
         reader.plan(files, settings.of(waiting.siteId(), waiting.meter(), Optional.of(mapping)));
-    settings.checkNotReadOtherwise(waiting.siteId(), waiting.meter(), files, plan.mapping());
+    settings.readBefore(waiting.siteId(), waiting.meter(), files, plan.mapping());
     if (uploads.confirm(waiting.id(), mapping)) {
       queue.addReading(waiting.id());
     }

@@ -14,6 +14,7 @@ import java.time.ZoneId;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.OptionalLong;
 
 /** What is known about a meter's file from the site's latest survey and its earlier files. */
 public final class ReadingSettings {
@@ -45,15 +46,15 @@ public final class ReadingSettings {
   }
 
   /**
-   * Refuses files that are there already and were read by another mapping: the earlier reading
-   * would be answered as if it were this one.
+   * The reading that these files became before. Where they were read by another mapping they are
+   * refused: the earlier reading would be answered as if it were this one.
    *
+   * @return its id
    * @throws RefusedException naming the earlier reading
    */
-  void checkNotReadOtherwise(
-      long siteId, MeterRef ref, List<RawFile> files, ReadingMapping mapping) {
-    readings
-        .same(siteId, ref.name(), files)
+  OptionalLong readBefore(long siteId, MeterRef ref, List<RawFile> files, ReadingMapping mapping) {
+    Optional<ReadingRepository.Entry> before = readings.same(siteId, ref.name(), files);
+    before
         .filter(entry -> !entry.mapping().equals(mapping))
         .ifPresent(
             entry -> {
@@ -65,6 +66,12 @@ public final class ReadingSettings {
                       + ", read by another mapping; delete that reading first to read it"
                       + " otherwise");
             });
+    return before.stream().mapToLong(ReadingRepository.Entry::id).findFirst();
+  }
+
+  /** Remembers what files that were read before say of their meter. */
+  void remember(long siteId, MeterRef meter, String layout, Optional<ReadingMapping> confirmed) {
+    readings.remember(siteId, meter, layout, confirmed);
   }
 
   /** The site's latest survey; the site must be there. */

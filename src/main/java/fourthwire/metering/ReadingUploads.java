@@ -48,6 +48,9 @@ public interface ReadingUploads {
   /** Stores files whose columns a person confirms before they are read; returns the upload's id. */
   long createWaiting(long siteId, MeterRef meter, List<? extends RawFile> files);
 
+  /** Notes files that were read before, which are not kept again; returns the upload's id. */
+  long createDone(long siteId, MeterRef meter, long readingId);
+
   /** Queues a waiting upload with the mapping that was confirmed; false where it waits no more. */
   boolean confirm(long uploadId, ReadingMapping mapping);
 

@@ -7,22 +7,31 @@ import java.io.UncheckedIOException;
 import java.security.DigestInputStream;
 import java.security.MessageDigest;
 import java.security.NoSuchAlgorithmException;
+import java.util.ArrayList;
 import java.util.Collection;
 import java.util.HexFormat;
+import java.util.List;
+import java.util.Objects;
 import java.util.Optional;
 import org.springframework.jdbc.core.simple.JdbcClient;
+import org.springframework.transaction.support.TransactionTemplate;
 
 /**
  * Files in the database, in parts: H2 holds at most 1 MiB in one {@code bytea}, and no more than a
- * part is ever held in memory.
+ * few parts are ever held in memory. Outside a transaction they are stored and deleted a few at a
+ * time: a database keeps what it may have to undo. What a broken-off process left is deleted at the
+ * next start.
  */
 final class FileStore {
   private static final int PART_BYTES = 256 * 1024;
+  private static final int PARTS_AT_ONCE = 16;
 
   private final JdbcClient jdbc;
+  private final TransactionTemplate transaction;
 
-  FileStore(JdbcClient jdbc) {
+  FileStore(JdbcClient jdbc, TransactionTemplate transaction) {
     this.jdbc = jdbc;
+    this.transaction = transaction;
   }
 
   /**
@@ -40,26 +49,63 @@ final class FileStore {
     }
   }
 
-  /** Stores all that the stream gives; the caller closes it and keeps the transaction. */
+  /** Stores all that the stream gives, or nothing; the caller closes it. */
   Stored save(InputStream stream) throws IOException {
-    long id = Rows.insert(jdbc.sql("insert into stored_files (byte_count, sha256) values (0, '')"));
+    long id =
+        Rows.insert(
+            jdbc.sql(
+                "insert into stored_files (byte_count, sha256, packed) values (0, '', true)"));
+    try {
+      return save(id, stream);
+    } catch (IOException | RuntimeException | Error e) {
+      takeBack(id, e);
+      throw e;
+    }
+  }
+
+  private Stored save(long id, InputStream stream) throws IOException {
     MessageDigest digest = sha256();
     DigestInputStream in = new DigestInputStream(stream, digest);
     long length = 0;
     int position = 0;
+    List<byte[]> parts = new ArrayList<>();
     for (byte[] part = in.readNBytes(PART_BYTES);
         part.length > 0;
         part = in.readNBytes(PART_BYTES)) {
-      jdbc.sql("insert into stored_file_parts (file_id, position, bytes) values (?, ?, ?)")
-          .params(id, position++, part)
-          .update();
       length += part.length;
+      parts.add(FilePart.pack(part));
+      if (parts.size() == PARTS_AT_ONCE) {
+        save(id, position, parts);
+        position += parts.size();
+        parts.clear();
+      }
     }
+    save(id, position, parts);
     String sha256 = HexFormat.of().formatHex(digest.digest());
     jdbc.sql("update stored_files set byte_count = ?, sha256 = ? where id = ?")
         .params(length, sha256, id)
         .update();
     return new Stored(id, length, sha256);
+  }
+
+  private void save(long id, int first, List<byte[]> parts) {
+    transaction.executeWithoutResult(
+        status -> {
+          for (int k = 0; k < parts.size(); k++) {
+            jdbc.sql("insert into stored_file_parts (file_id, position, bytes) values (?, ?, ?)")
+                .params(id, first + k, parts.get(k))
+                .update();
+          }
+        });
+  }
+
+  /** Deletes what was stored of a file that could not be stored whole. */
+  private void takeBack(long id, Throwable why) {
+    try {
+      delete(id);
+    } catch (RuntimeException again) {
+      why.addSuppressed(again);
+    }
   }
 
   byte[] bytes(long fileId) {
@@ -79,22 +125,42 @@ final class FileStore {
     fileIds.forEach(this::delete);
   }
 
-  /**
-   * Part by part: outside a transaction no more than a part is then kept for an undo, however large
-   * the file.
-   */
   private void delete(long fileId) {
-    String part = "delete from stored_file_parts where file_id = ? and position = ?";
-    for (int position = 0; jdbc.sql(part).params(fileId, position).update() > 0; position++) {
-      // goes on to the last part
+    String parts =
+        "delete from stored_file_parts where file_id = ? and position >= ? and position < ?";
+    int from = 0;
+    while (jdbc.sql(parts).params(fileId, from, from + PARTS_AT_ONCE).update() > 0) {
+      from += PARTS_AT_ONCE;
     }
     jdbc.sql("delete from stored_files where id = ?").param(fileId).update();
   }
 
+  /** Deletes files that nothing refers to: only while nothing is being stored. */
+  void deleteUnowned() {
+    delete(
+        jdbc.sql(
+                """
+                select id from stored_files f
+                where not exists (select 1 from survey_revisions s where s.file_id = f.id)
+                and not exists (select 1 from reading_files r where r.file_id = f.id)
+                and not exists (select 1 from reading_upload_files u where u.file_id = f.id)
+                """)
+            .query(Long.class)
+            .list());
+  }
+
   private Optional<byte[]> part(long fileId, int position) {
-    return jdbc.sql("select bytes from stored_file_parts where file_id = ? and position = ?")
+    return jdbc.sql(
+            """
+            select p.bytes, f.packed from stored_file_parts p join stored_files f on f.id = p.file_id
+            where p.file_id = ? and p.position = ?
+            """)
         .params(fileId, position)
-        .query((row, n) -> row.getBytes(1))
+        .query(
+            (row, n) -> {
+              byte[] bytes = Objects.requireNonNull(row.getBytes(1));
+              return row.getBoolean(2) ? FilePart.unpack(bytes) : bytes;
+            })
         .optional();
   }
 

@@ -55,11 +55,7 @@ final class JdbcReadings implements ReadingRepository {
   @Override
   public long add(Addition addition) {
     String sha256 = sha256(addition.files());
-    transaction.executeWithoutResult(
-        status -> {
-          putMeter(addition.siteId(), addition.meter());
-          addition.confirmed().ifPresent(mapping -> putLayout(addition, mapping));
-        });
+    remember(addition.siteId(), addition.meter(), addition.layout(), addition.confirmed());
     try {
       return Objects.requireNonNull(
           transaction.execute(
@@ -69,6 +65,16 @@ final class JdbcReadings implements ReadingRepository {
     } catch (DuplicateKeyException meanwhile) {
       return same(addition.siteId(), addition.meter().name(), sha256).orElseThrow(() -> meanwhile);
     }
+  }
+
+  @Override
+  public void remember(
+      long siteId, MeterRef meter, String layout, Optional<ReadingMapping> confirmed) {
+    transaction.executeWithoutResult(
+        status -> {
+          putMeter(siteId, meter);
+          confirmed.ifPresent(mapping -> putLayout(siteId, meter.name(), layout, mapping));
+        });
   }
 
   /** Of one file its own; of several, of their digests in name order. */
@@ -110,21 +116,21 @@ final class JdbcReadings implements ReadingRepository {
         .update();
   }
 
-  private void putLayout(Addition a, ReadingMapping confirmed) {
+  private void putLayout(long siteId, String meter, String layout, ReadingMapping confirmed) {
     String mapping = MappingJson.write(confirmed).toString();
     jdbc.sql(
             """
             insert into meter_layouts (site_id, meter, layout, mapping) values (?, ?, ?, ?)
             on conflict do nothing
             """)
-        .params(a.siteId(), a.meter().name(), a.layout(), mapping)
+        .params(siteId, meter, layout, mapping)
         .update();
     jdbc.sql(
             """
             update meter_layouts set mapping = ?
             where site_id = ? and meter = ? and layout = ?
             """)
-        .params(mapping, a.siteId(), a.meter().name(), a.layout())
+        .params(mapping, siteId, meter, layout)
         .update();
   }
 

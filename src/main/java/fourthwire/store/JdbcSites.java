@@ -7,6 +7,7 @@ import fourthwire.site.SurveyCodec;
 import java.sql.ResultSet;
 import java.sql.SQLException;
 import java.time.Clock;
+import java.util.ArrayList;
 import java.util.Collections;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -29,12 +30,15 @@ final class JdbcSites implements SiteRepository {
         join reading_uploads u on u.id = f.upload_id where u.site_id = :site
       """;
 
+  private static final int NODES_AT_ONCE = 500;
+
   /** Surveys kept decoded. */
   private static final int MOST_DECODED = 4;
 
   private final JdbcClient jdbc;
   private final TransactionTemplate transaction;
   private final FileStore files;
+  private final SeriesTables series;
   private final SurveyCodec codec;
 
   /** The surveys used last, by the id of their file, which never changes. */
@@ -53,11 +57,13 @@ final class JdbcSites implements SiteRepository {
       JdbcClient jdbc,
       TransactionTemplate transaction,
       FileStore files,
+      SeriesTables series,
       SurveyCodec codec,
       Clock clock) {
     this.jdbc = jdbc;
     this.transaction = transaction;
     this.files = files;
+    this.series = series;
     this.codec = codec;
     this.clock = clock;
   }
@@ -160,16 +166,39 @@ final class JdbcSites implements SiteRepository {
     return decoded.computeIfAbsent(file, id -> codec.decode(files.bytes(id)));
   }
 
+  /**
+   * What is large goes first and in pieces, as a database keeps what it may have to undo: rows of
+   * logs, then results of audits; the files last, when nothing refers to them.
+   */
   @Override
   public boolean delete(long siteId) {
-    return Boolean.TRUE.equals(
-        transaction.execute(
-            status -> {
-              List<Long> owned =
-                  jdbc.sql(FILES_OF_SITE).param("site", siteId).query(Long.class).list();
-              int gone = jdbc.sql("delete from sites where id = ?").param(siteId).update();
-              files.delete(owned);
-              return gone == 1;
-            }));
+    jdbc.sql("update reading_uploads set cancel_asked = true where site_id = ?")
+        .param(siteId)
+        .update();
+    ids("select id from readings where site_id = ?", siteId).forEach(series::delete);
+    ids("select id from audits where site_id = ?", siteId).forEach(this::deleteNodes);
+    List<Long> owned = new ArrayList<>();
+    boolean gone =
+        Boolean.TRUE.equals(
+            transaction.execute(
+                status -> {
+                  owned.addAll(
+                      jdbc.sql(FILES_OF_SITE).param("site", siteId).query(Long.class).list());
+                  return jdbc.sql("delete from sites where id = ?").param(siteId).update() == 1;
+                }));
+    files.delete(owned);
+    return gone;
+  }
+
+  private List<Long> ids(String sql, long siteId) {
+    return jdbc.sql(sql).param(siteId).query(Long.class).list();
+  }
+
+  private void deleteNodes(long auditId) {
+    String nodes = "delete from audit_nodes where audit_id = ? and position >= ? and position < ?";
+    int from = 0;
+    while (jdbc.sql(nodes).params(auditId, from, from + NODES_AT_ONCE).update() > 0) {
+      from += NODES_AT_ONCE;
+    }
   }
 }

@@ -55,19 +55,48 @@ final class JdbcUploads implements ReadingUploads {
     return create(siteId, meter, uploaded, Optional.empty(), State.WAITING);
   }
 
+  /** The files come first, in pieces: they may be larger than what a transaction should hold. */
   private long create(
       long siteId,
       MeterRef meter,
       List<? extends RawFile> uploaded,
       Optional<ReadingMapping> mapping,
       State state) {
+    List<Long> saved = new ArrayList<>();
+    try {
+      for (RawFile file : uploaded) {
+        saved.add(save(file));
+      }
+      return Objects.requireNonNull(
+          transaction.execute(
+              status -> {
+                long id = insert(siteId, meter, mapping, state);
+                for (int i = 0; i < uploaded.size(); i++) {
+                  addFile(id, i, uploaded.get(i).name(), saved.get(i));
+                }
+                return id;
+              }));
+    } catch (RuntimeException | Error e) {
+      files.delete(saved);
+      throw e;
+    }
+  }
+
+  private long save(RawFile file) {
+    try (InputStream in = file.open()) {
+      return files.save(in).id();
+    } catch (IOException e) {
+      throw new UncheckedIOException(e);
+    }
+  }
+
+  @Override
+  public long createDone(long siteId, MeterRef meter, long readingId) {
     return Objects.requireNonNull(
         transaction.execute(
             status -> {
-              long id = insert(siteId, meter, mapping, state);
-              for (int i = 0; i < uploaded.size(); i++) {
-                addFile(id, i, uploaded.get(i));
-              }
+              long id = insert(siteId, meter, Optional.empty(), State.RUNNING);
+              finish(id, readingId);
               return id;
             }));
   }
@@ -106,18 +135,14 @@ final class JdbcUploads implements ReadingUploads {
             .param(Rows.now(clock)));
   }
 
-  private void addFile(long uploadId, int position, RawFile file) {
-    try (InputStream in = file.open()) {
-      jdbc.sql(
-              """
-              insert into reading_upload_files (upload_id, position, name, file_id)
-              values (?, ?, ?, ?)
-              """)
-          .params(uploadId, position, file.name(), files.save(in).id())
-          .update();
-    } catch (IOException e) {
-      throw new UncheckedIOException(e);
-    }
+  private void addFile(long uploadId, int position, String name, long fileId) {
+    jdbc.sql(
+            """
+            insert into reading_upload_files (upload_id, position, name, file_id)
+            values (?, ?, ?, ?)
+            """)
+        .params(uploadId, position, name, fileId)
+        .update();
   }
 
   @Override
@@ -246,6 +271,7 @@ final class JdbcUploads implements ReadingUploads {
         .query(Long.class)
         .list()
         .forEach(id -> end(id, State.CANCELLED, "cancelled"));
+    files.deleteUnowned();
     return rows.requeue("waiting to be read again after a restart");
   }
 }

@@ -37,7 +37,8 @@ public final class Store {
 
   /** Sites and their surveys. */
   public SiteRepository sites(SurveyCodec codec) {
-    return new JdbcSites(jdbc, transaction, files(), codec, clock);
+    return new JdbcSites(
+        jdbc, transaction, files(), new SeriesTables(jdbc, template), codec, clock);
   }
 
   /** Audits and their results. */
@@ -79,6 +80,6 @@ public final class Store {
   }
 
   private FileStore files() {
-    return new FileStore(jdbc);
+    return new FileStore(jdbc, transaction);
   }
 }

@@ -12,6 +12,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.OptionalLong;
 import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
 
@@ -55,6 +56,27 @@ class ReadingRunTest {
     assertThat(read(DAY_13, mapping(1, Optional.of("MM/dd/yyyy HH:mm"))).reading())
         .as("the same as resolved")
         .hasValue(first);
+    assertThat(desk.readings().ofSite(desk.site())).hasSize(1);
+  }
+
+  @Test
+  void theSameFileIsNeitherStoredNorReadAgain() {
+    long first = read(DAY_13, Optional.empty()).reading().orElseThrow();
+    long again = queue(DAY_13, Optional.empty());
+    assertThat(desk.uploads().find(again).orElseThrow())
+        .returns(ReadingUploads.State.DONE, ReadingUploads.Entry::state)
+        .returns(OptionalLong.of(first), ReadingUploads.Entry::reading);
+    assertThat(desk.uploads().files(again)).isEmpty();
+  }
+
+  /** Both were stored before either was read. */
+  @Test
+  void theSameFileQueuedTwiceIsReadOnce() {
+    long one = queue(DAY_13, Optional.empty());
+    long other = queue(DAY_13, Optional.empty());
+    long first = desk.read(one).reading().orElseThrow();
+    assertThat(desk.read(other).reading()).hasValue(first);
+    assertThat(desk.uploads().files(other)).isEmpty();
     assertThat(desk.readings().ofSite(desk.site())).hasSize(1);
   }
 

@@ -1,6 +1,7 @@
 package fourthwire.store;
 
 import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.assertThatThrownBy;
 
 import fourthwire.audit.AuditRepository;
 import fourthwire.audit.AuditRepository.State;
@@ -28,6 +29,8 @@ import fourthwire.testsupport.SmallSite;
 import java.io.ByteArrayInputStream;
 import java.io.IOException;
 import java.io.InputStream;
+import java.io.SequenceInputStream;
+import java.io.UncheckedIOException;
 import java.security.MessageDigest;
 import java.time.Duration;
 import java.time.Instant;
@@ -48,6 +51,8 @@ import javax.sql.DataSource;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.EnumSource;
 import org.springframework.jdbc.core.simple.JdbcClient;
+import org.springframework.jdbc.support.JdbcTransactionManager;
+import org.springframework.transaction.support.TransactionTemplate;
 
 /** What is stored comes back, on both databases. */
 class StoreTest {
@@ -268,6 +273,47 @@ class StoreTest {
 
   @ParameterizedTest
   @EnumSource
+  void aFileThatBreaksOffLeavesNothing(Databases kind) {
+    open(kind);
+    long site = sites.create(SmallSite.survey("Works"), List.of());
+    long parts = count("stored_file_parts");
+    RawFile whole = file("a.dat", 300_000);
+    RawFile broken = new BrokenFile(file("b.dat", 6_000_000));
+    MeterRef meter = new MeterRef("M1", "LP-1");
+
+    assertThatThrownBy(
+            () -> uploads.create(site, meter, List.of(whole, broken), Optional.empty()))
+        .isInstanceOf(UncheckedIOException.class);
+
+    assertThat(count("stored_file_parts")).isEqualTo(parts);
+    assertThat(count("stored_files")).as("the survey's only").isOne();
+    assertThat(count("reading_uploads")).isZero();
+  }
+
+  /** The process ended while a file was being stored. */
+  @ParameterizedTest
+  @EnumSource
+  void aStartDeletesFilesThatNothingRefersTo(Databases kind) throws IOException {
+    open(kind);
+    long site = sites.create(SmallSite.survey("Works"), List.of());
+    addReading(site);
+    uploads.create(site, new MeterRef("M1", "LP-1"), List.of(file("b.csv", 10)), Optional.empty());
+    long files = count("stored_files");
+    long parts = count("stored_file_parts");
+    JdbcClient jdbc = JdbcClient.create(database);
+    TransactionTemplate transaction =
+        new TransactionTemplate(new JdbcTransactionManager(database));
+    new FileStore(jdbc, transaction).save(new byte[700_000]);
+    assertThat(count("stored_files")).isEqualTo(files + 1);
+
+    uploads.recover();
+
+    assertThat(count("stored_files")).isEqualTo(files);
+    assertThat(count("stored_file_parts")).isEqualTo(parts);
+  }
+
+  @ParameterizedTest
+  @EnumSource
   void settingsAreReplaced(Databases kind) {
     Settings settings = new Store(kind.migrated()).settings();
     settings.put("demo", "one");
@@ -353,6 +399,36 @@ class StoreTest {
             mapping(),
             Optional.of(mapping()),
             reading()));
+  }
+
+  /** Its bytes end in an error. */
+  private record BrokenFile(RawFile whole) implements RawFile {
+    @Override
+    public String name() {
+      return whole.name();
+    }
+
+    @Override
+    public String sha256() {
+      return whole.sha256();
+    }
+
+    @Override
+    public long length() {
+      return whole.length();
+    }
+
+    @Override
+    public InputStream open() throws IOException {
+      InputStream end =
+          new InputStream() {
+            @Override
+            public int read() throws IOException {
+              throw new IOException("the disk is gone");
+            }
+          };
+      return new SequenceInputStream(whole.open(), end);
+    }
   }
 
   private static ReadingMapping mapping() {

@@ -1,0 +1,117 @@
+package fourthwire.store;
+
+import java.util.Arrays;
+
+/**
+ * A part of a file in about half its space where it is a table of figures: digits, marks and line
+ * ends are so few different bytes that two of them fit in one. Far quicker than to look for
+ * repetitions, of which figures have few, and no larger.
+ *
+ * <p>Packed: the length in four bytes, the fifteen commonest bytes, then the part two bytes at a
+ * time, each pair the two numbers of its bytes in that list, or {@link #OTHER} and the pair as it
+ * is. A first byte says whether a part is packed.
+ */
+final class FilePart {
+  private static final byte PLAIN = 0;
+  private static final byte PACKED = 1;
+  private static final int COMMON = 15;
+  private static final int HEAD = 1 + Integer.BYTES + COMMON;
+
+  /** No pair of two of the fifteen. */
+  private static final byte OTHER = (byte) 0xff;
+
+  private FilePart() {}
+
+  /** Packs these bytes, or keeps them as they are where that takes less. */
+  static byte[] pack(byte[] part) {
+    byte[] packed = new byte[1 + part.length];
+    int length = pack(part, packed);
+    if (length > 0) {
+      return Arrays.copyOf(packed, length);
+    }
+    packed[0] = PLAIN;
+    System.arraycopy(part, 0, packed, 1, part.length);
+    return packed;
+  }
+
+  /** The length of what was written; 0 where there is no room for it. */
+  private static int pack(byte[] part, byte[] into) {
+    if (into.length < HEAD) {
+      return 0;
+    }
+    byte[] common = common(part);
+    into[0] = PACKED;
+    for (int k = 0; k < Integer.BYTES; k++) {
+      into[1 + k] = (byte) (part.length >>> 8 * k);
+    }
+    System.arraycopy(common, 0, into, 1 + Integer.BYTES, COMMON);
+    int[] number = new int[256];
+    Arrays.fill(number, COMMON);
+    for (int k = 0; k < COMMON; k++) {
+      number[common[k] & 0xff] = k;
+    }
+    int at = HEAD;
+    for (int k = 0; k < part.length; k += 2) {
+      byte second = k + 1 < part.length ? part[k + 1] : common[0];
+      int high = number[part[k] & 0xff];
+      int low = number[second & 0xff];
+      boolean pair = high < COMMON && low < COMMON;
+      if (at + (pair ? 1 : 3) > into.length) {
+        return 0;
+      }
+      into[at++] = pair ? (byte) (high << 4 | low) : OTHER;
+      if (!pair) {
+        into[at++] = part[k];
+        into[at++] = second;
+      }
+    }
+    return at;
+  }
+
+  private static byte[] common(byte[] part) {
+    long[] count = new long[256];
+    for (byte b : part) {
+      count[b & 0xff]++;
+    }
+    // A count and its byte in one number, sorted together.
+    for (int k = 0; k < count.length; k++) {
+      count[k] = count[k] << 8 | k;
+    }
+    Arrays.sort(count);
+    byte[] common = new byte[COMMON];
+    for (int k = 0; k < COMMON; k++) {
+      common[k] = (byte) count[count.length - 1 - k];
+    }
+    return common;
+  }
+
+  /** What {@link #pack} packed. */
+  static byte[] unpack(byte[] packed) {
+    if (packed[0] == PLAIN) {
+      return Arrays.copyOfRange(packed, 1, packed.length);
+    }
+    int length = 0;
+    for (int k = 0; k < Integer.BYTES; k++) {
+      length |= (packed[1 + k] & 0xff) << 8 * k;
+    }
+    byte[] first = new byte[256];
+    byte[] second = new byte[256];
+    for (int pair = 0; pair < COMMON << 4; pair++) {
+      first[pair] = packed[1 + Integer.BYTES + (pair >>> 4)];
+      second[pair] = packed[1 + Integer.BYTES + Math.min(pair & 0xf, COMMON - 1)];
+    }
+    byte[] part = new byte[length + length % 2];
+    int at = HEAD;
+    for (int k = 0; k < length; k += 2) {
+      byte pair = packed[at++];
+      if (pair == OTHER) {
+        part[k] = packed[at++];
+        part[k + 1] = packed[at++];
+      } else {
+        part[k] = first[pair & 0xff];
+        part[k + 1] = second[pair & 0xff];
+      }
+    }
+    return length % 2 == 0 ? part : Arrays.copyOf(part, length);
+  }
+}
