@@ -63,8 +63,7 @@ public interface ReadingRepository {
   long add(Addition addition);
 
   /** Remembers where a meter is, and a mapping that was confirmed for its files of a layout. */
-  void remember(
-      long siteId, MeterRef meter, String layout, Optional<ReadingMapping> confirmed);
+  void remember(long siteId, MeterRef meter, String layout, Optional<ReadingMapping> confirmed);
 
   /** A site's readings, newest first. */
   List<Entry> ofSite(long siteId);

@@ -53,8 +53,7 @@ final class FileStore {
   Stored save(InputStream stream) throws IOException {
     long id =
         Rows.insert(
-            jdbc.sql(
-                "insert into stored_files (byte_count, sha256, packed) values (0, '', true)"));
+            jdbc.sql("insert into stored_files (byte_count, sha256, packed) values (0, '', true)"));
     try {
       return save(id, stream);
     } catch (IOException | RuntimeException | Error e) {

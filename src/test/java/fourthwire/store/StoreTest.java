@@ -281,8 +281,7 @@ class StoreTest {
     RawFile broken = new BrokenFile(file("b.dat", 6_000_000));
     MeterRef meter = new MeterRef("M1", "LP-1");
 
-    assertThatThrownBy(
-            () -> uploads.create(site, meter, List.of(whole, broken), Optional.empty()))
+    assertThatThrownBy(() -> uploads.create(site, meter, List.of(whole, broken), Optional.empty()))
         .isInstanceOf(UncheckedIOException.class);
 
     assertThat(count("stored_file_parts")).isEqualTo(parts);
@@ -301,8 +300,7 @@ class StoreTest {
     long files = count("stored_files");
     long parts = count("stored_file_parts");
     JdbcClient jdbc = JdbcClient.create(database);
-    TransactionTemplate transaction =
-        new TransactionTemplate(new JdbcTransactionManager(database));
+    TransactionTemplate transaction = new TransactionTemplate(new JdbcTransactionManager(database));
     new FileStore(jdbc, transaction).save(new byte[700_000]);
     assertThat(count("stored_files")).isEqualTo(files + 1);
 
