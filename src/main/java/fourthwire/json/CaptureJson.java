@@ -74,7 +74,8 @@ final class CaptureJson {
         WaveformJson.unbalance(o),
         WaveformJson.windows(o),
         WaveformJson.events(o),
-        WaveformJson.picture(o));
+        WaveformJson.picture(o),
+        WaveformJson.closeUp(o));
   }
 
   private static CurrentFigures current(JsonNode o) {

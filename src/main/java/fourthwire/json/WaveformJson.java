@@ -23,6 +23,7 @@ final class WaveformJson {
   private static final String WINDOWS = "windows";
   private static final String EVENTS = "events";
   private static final String WAVEFORMS = "waveforms";
+  private static final String CLOSE_UP = "first_cycles";
 
   private WaveformJson() {}
 
@@ -33,6 +34,7 @@ final class WaveformJson {
     c.windows().ifPresent(w -> o.set(WINDOWS, write(w)));
     o.set(EVENTS, write(c.events()));
     o.set(WAVEFORMS, write(c.picture()));
+    o.set(CLOSE_UP, write(c.closeUp()));
   }
 
   static Unbalance unbalance(JsonNode o) {
@@ -155,9 +157,18 @@ final class WaveformJson {
   }
 
   static WaveformPicture picture(JsonNode capture) {
-    JsonNode o = capture.path(WAVEFORMS);
+    return picture(capture, WAVEFORMS);
+  }
+
+  /** Without channels of a reading stored before it was made. */
+  static WaveformPicture closeUp(JsonNode capture) {
+    return picture(capture, CLOSE_UP);
+  }
+
+  private static WaveformPicture picture(JsonNode capture, String key) {
+    JsonNode o = capture.path(key);
     return new WaveformPicture(
-        o.path("step_s").doubleValue(),
+        o.path("step_s").asDouble(0),
         Json.map(
             o, "channels", t -> new WaveformPicture.Trace(numbers(t, "min"), numbers(t, "max"))));
   }

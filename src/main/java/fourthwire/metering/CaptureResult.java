@@ -29,7 +29,8 @@ import java.util.Optional;
  * @param unbalance of the fundamentals
  * @param windows the standard windows' groups and intervals; empty where there are none
  * @param events dips, swells and interruptions
- * @param picture the waveforms as they are drawn
+ * @param picture the waveforms of the whole record as they are drawn
+ * @param closeUp those of its first two cycles
  */
 public record CaptureResult(
     double frequencyHz,
@@ -48,7 +49,8 @@ public record CaptureResult(
     Unbalance unbalance,
     Optional<CaptureWindows> windows,
     VoltageEvents events,
-    WaveformPicture picture) {
+    WaveformPicture picture,
+    WaveformPicture closeUp) {
 
   /**
    * How unequal three lines are, percent of the positive sequence at the fundamental.

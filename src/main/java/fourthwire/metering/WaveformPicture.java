@@ -11,6 +11,11 @@ import java.util.Map;
  */
 public record WaveformPicture(double stepS, Map<String, Trace> channels) {
 
+  /** How long it is, seconds; to a stretch. */
+  public double lengthS() {
+    return stepS * channels.values().stream().mapToInt(t -> t.lowest().size()).max().orElse(0);
+  }
+
   /**
    * One channel, as many values as stretches.
    *

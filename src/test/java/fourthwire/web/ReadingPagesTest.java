@@ -33,7 +33,19 @@ class ReadingPagesTest extends ServiceTest {
     assertThat(page)
         .contains("waveform capture", "Every order in figures", "50th")
         .contains("30.0", "10.4", "3.00", "Crest factor")
+        .contains("L1 carried most: 10.4\u202fA, distorted by 30.0\u202f%")
+        .contains("Voltages L1; currents L1. 12 whole cycles were analysed", "The file")
         .doesNotContain("??");
+  }
+
+  /** Two of twelve cycles come first; the whole record, where it is more, after the spectrum. */
+  @Test
+  void aCapturesFirstCyclesComeFirst() throws InterruptedException {
+    String page = read("record.csv", capture(), "LP-1", "");
+    int first = page.indexOf("The first two cycles");
+    assertThat(first).isPositive().isLessThan(page.indexOf("Fundamentals"));
+    assertThat(page.indexOf("Harmonic amps by order")).isLessThan(page.indexOf("The whole record"));
+    assertThat(page.substring(first)).contains(">40\u202fms</text>", ">200\u202fms</text>");
   }
 
   @Test

@@ -116,8 +116,10 @@ class SeriesPagesTest extends PagesTest {
   /** One day has half its rows: 12 of 24 hours. */
   @Test
   void theListSaysWhichDaysAreCovered() {
-    assertThat(page("/sites/" + site + "/readings"))
-        .contains("Which days were measured", "13 of 14 days are complete")
+    String page = page("/sites/" + site + "/readings");
+    assertThat(page.indexOf("Add a meter’s file")).isLessThan(page.indexOf("By meter"));
+    assertThat(page)
+        .contains("By meter", "13 of 14 days are complete")
         .contains("27 March 2025: 50\u202f%", "One waveform capture")
         .doesNotContain("??");
     assertThat(page("/readings/" + log)).contains("/readings/" + log + "/series");

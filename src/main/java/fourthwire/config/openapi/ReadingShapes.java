@@ -130,7 +130,8 @@ final class ReadingShapes {
         .figureOfSome("zero_sequence_percent", "Of a capture: zero on positive sequence current")
         .optional("windows", WaveformShapes.windows())
         .optional("events", WaveformShapes.events())
-        .optional("waveforms", WaveformShapes.waveforms());
+        .optional("waveforms", WaveformShapes.waveforms("the whole record"))
+        .optional("first_cycles", WaveformShapes.waveforms("its first two cycles"));
   }
 
   private static Schema<?> captureCurrent() {

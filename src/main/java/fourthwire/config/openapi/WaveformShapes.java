@@ -70,8 +70,11 @@ final class WaveformShapes {
         .schema();
   }
 
-  static Schema<?> waveforms() {
-    return Shape.of("Of a capture: of each short stretch the lowest and the highest sample")
+  static Schema<?> waveforms(String part) {
+    return Shape.of(
+            "Of a capture, "
+                + part
+                + ": of each short stretch the lowest and the highest sample")
         .number("step_s", "Length of a stretch, seconds")
         .part("channels", Shape.of("By quantity").others(trace()).schema())
         .schema();

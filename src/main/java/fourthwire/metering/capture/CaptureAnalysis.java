@@ -147,7 +147,8 @@ public final class CaptureAnalysis {
         unbalance(),
         windows.map(w -> new WindowFigures(w, extent, capture).of()),
         EventFinder.of(whole, clock(), nominalV),
-        PictureMaker.of(capture, extent.cycles()));
+        PictureMaker.of(capture, extent.cycles()),
+        PictureMaker.closeUp(capture, extent.frequencyHz()));
   }
 
   /** The fundamental's clock, of any evenly sampled record. */

@@ -11,30 +11,45 @@ import java.util.Map;
 final class PictureMaker {
   private static final int MOST_STRETCHES = 600;
   private static final int FEW_CYCLES = 15;
+  private static final int CLOSE_UP_CYCLES = 2;
 
   private PictureMaker() {}
 
   /** A long record's stretches hold whole cycles, or their ends would dance. */
   static WaveformPicture of(Capture capture, int cycles) {
-    int n = capture.count();
-    int stretches = cycles > FEW_CYCLES ? Math.min(MOST_STRETCHES, cycles) : MOST_STRETCHES;
+    return of(
+        capture,
+        capture.count(),
+        cycles > FEW_CYCLES ? Math.min(MOST_STRETCHES, cycles) : MOST_STRETCHES);
+  }
+
+  /** The record's first cycles, of a shorter one all. */
+  static WaveformPicture closeUp(Capture capture, double frequencyHz) {
+    double samples = capture.count() / capture.time().spanS(capture.count()) / frequencyHz;
+    return of(
+        capture,
+        (int) Math.min(capture.count(), Math.ceil(CLOSE_UP_CYCLES * samples) + 1),
+        MOST_STRETCHES);
+  }
+
+  private static WaveformPicture of(Capture capture, int n, int stretches) {
     int each = (n + stretches - 1) / stretches;
     Map<String, WaveformPicture.Trace> channels = new LinkedHashMap<>();
     List<WaveformPicture.Trace> traces =
-        capture.channels().parallelStream().map(c -> trace(capture.of(c), each)).toList();
+        capture.channels().parallelStream().map(c -> trace(capture.of(c), n, each)).toList();
     for (int c = 0; c < traces.size(); c++) {
       channels.put(capture.channels().get(c).quantity(), traces.get(c));
     }
     return new WaveformPicture(each * capture.time().spanS(n) / n, channels);
   }
 
-  private static WaveformPicture.Trace trace(Samples x, int each) {
+  private static WaveformPicture.Trace trace(Samples x, int n, int each) {
     List<Double> lowest = new ArrayList<>();
     List<Double> highest = new ArrayList<>();
-    for (int from = 0; from < x.count(); from += each) {
+    for (int from = 0; from < n; from += each) {
       double low = Double.POSITIVE_INFINITY;
       double high = Double.NEGATIVE_INFINITY;
-      for (int k = from; k < Math.min(x.count(), from + each); k++) {
+      for (int k = from; k < Math.min(n, from + each); k++) {
         double value = x.at(k);
         low = value < low ? value : low;
         high = value > high ? value : high;

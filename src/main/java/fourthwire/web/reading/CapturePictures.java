@@ -11,7 +11,7 @@ import fourthwire.web.support.Words;
 import java.util.ArrayList;
 import java.util.List;
 
-/** Draws a capture: its waveforms over the record, and its fundamental phasors. */
+/** Draws a capture: its waveforms, and its fundamental phasors. */
 final class CapturePictures {
   private static final double SMALLEST_ARROW = 0.01;
 
@@ -23,29 +23,38 @@ final class CapturePictures {
     this.names = names;
   }
 
-  /** Waveforms of one kind, {@code .v} or {@code .i}; empty text where none was recorded. */
-  String waveforms(CaptureResult capture, String kind, String unit, String alternative) {
+  /** Those of the first cycles. */
+  ReadingPage.Waves first(WaveformPicture picture) {
+    return new ReadingPage.Waves(
+        waves(picture, ".v", "V", "reading.waves.first.voltage"),
+        waves(picture, ".i", "A", "reading.waves.first.current"));
+  }
+
+  /** Those of the whole record. */
+  ReadingPage.Waves whole(WaveformPicture picture) {
+    return new ReadingPage.Waves(
+        waves(picture, ".v", "V", "reading.waves.whole.voltage"),
+        waves(picture, ".i", "A", "reading.waves.whole.current"));
+  }
+
+  private String waves(WaveformPicture picture, String kind, String unit, String alternative) {
     List<EnvelopePlot.Trace> traces =
-        capture.picture().channels().entrySet().stream()
+        picture.channels().entrySet().stream()
             .filter(e -> e.getKey().endsWith(kind))
             .map(e -> trace(e.getKey(), e.getValue()))
             .toList();
     return traces.isEmpty()
         ? ""
-        : EnvelopePlot.draw(traces, capture.picture().stepS(), unit, words.of(alternative));
+        : EnvelopePlot.draw(traces, picture.stepS(), unit, words.of(alternative));
   }
 
   private static EnvelopePlot.Trace trace(String quantity, WaveformPicture.Trace values) {
-    return new EnvelopePlot.Trace(conductor(place(quantity)), values);
+    return new EnvelopePlot.Trace(conductor(quantity), values);
   }
 
-  private static String place(String quantity) {
-    return quantity.substring(0, quantity.lastIndexOf('.'));
-  }
-
-  /** Of two lines, the first. */
-  private static Conductor conductor(String place) {
-    return Conductor.valueOf(place.split("-")[0]);
+  /** Of a place or a quantity; of two lines, the first. */
+  static Conductor conductor(String place) {
+    return Conductor.valueOf(place.split("[-.]")[0]);
   }
 
   String phasors(CaptureResult capture) {

@@ -39,13 +39,17 @@ final class CaptureViewMaker {
         .filter(w -> w.intervals().stream().anyMatch(i -> i.length().equals(SHORTEST)))
         .ifPresent(w -> tables.add(intervals(w)));
     return new ReadingPage.CaptureView(
-        pictures.waveforms(c, ".v", "V", "reading.waves.voltage.alternative"),
-        pictures.waveforms(c, ".i", "A", "reading.waves.current.alternative"),
+        pictures.first(c.closeUp()),
+        isAllShown(c) ? ReadingPage.Waves.NONE : pictures.whole(c.picture()),
         pictures.phasors(c),
         tables,
         c.windows().stream().flatMap(w -> groups(w).stream()).toList(),
         names.in(c.events().basis()),
         c.events().events().stream().map(this::row).toList());
+  }
+
+  private static boolean isAllShown(CaptureResult c) {
+    return c.closeUp().lengthS() > 0.9 * c.picture().lengthS();
   }
 
   private NodePage.Grid balance(CaptureResult c) {

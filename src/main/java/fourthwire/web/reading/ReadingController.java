@@ -14,7 +14,10 @@ import fourthwire.web.reading.series.CoverageMaker;
 import fourthwire.web.support.Moments;
 import fourthwire.web.support.NotFoundException;
 import jakarta.servlet.http.HttpServletResponse;
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import java.util.stream.Collectors;
 import org.jspecify.annotations.Nullable;
@@ -152,12 +155,25 @@ class ReadingController {
     SiteRepository.Entry entry = existing(site);
     Survey survey = survey(entry);
     model.addAttribute("site", entry);
-    List<ReadingRepository.Entry> all = readings.ofSite(site);
-    model.addAttribute("readings", all.stream().map(r -> pages.row(r, survey)).toList());
-    model.addAttribute("coverage", coverage.of(all, survey));
+    model.addAttribute("meters", meters(readings.ofSite(site), survey));
     model.addAttribute(
         "waiting", uploads.waiting(site).stream().map(w -> waits(w, survey)).toList());
     model.addAttribute("places", pages.places(survey));
+  }
+
+  /** The meters with their readings, that with the newest first. */
+  private List<ReadingPage.Meter> meters(List<ReadingRepository.Entry> all, Survey survey) {
+    Map<ReadingRepository.MeterRef, List<ReadingRepository.Entry>> byMeter = new LinkedHashMap<>();
+    all.forEach(r -> byMeter.computeIfAbsent(r.meter(), m -> new ArrayList<>()).add(r));
+    return byMeter.entrySet().stream()
+        .map(
+            m ->
+                new ReadingPage.Meter(
+                    m.getKey().name(),
+                    m.getKey().node(),
+                    coverage.of(m.getKey(), m.getValue(), survey),
+                    m.getValue().stream().map(r -> pages.row(r, survey)).toList()))
+        .toList();
   }
 
   private ReadingPage.Waiting waits(ReadingUploads.Entry upload, Survey survey) {

@@ -2,14 +2,15 @@ package fourthwire.web.reading;
 
 import fourthwire.metering.ReadingRepository;
 import fourthwire.web.panel.NodePage;
+import fourthwire.web.reading.series.CoverageMaker;
 import java.util.List;
 import java.util.Optional;
 
 /**
  * What the page of a reading shows.
  *
- * @param heading of a log: its verdict in words; empty of a capture
- * @param neutral what a logged neutral carried, a sentence; else empty
+ * @param heading its verdict in words; empty where there is none to tell
+ * @param about of a log what its neutral carried, of a capture what was recorded; else empty
  * @param facts what was read: files, period, length, digest
  * @param faults what is wrong with it, and what was done about it
  * @param limits of a log: its percentiles against the limits of measured values
@@ -23,7 +24,7 @@ record ReadingPage(
     String meter,
     String node,
     String heading,
-    String neutral,
+    String about,
     String kindKey,
     List<Fact> facts,
     List<String> notes,
@@ -33,28 +34,37 @@ record ReadingPage(
     List<NodePage.Grid> capture,
     Optional<NodePage.Grid> orders,
     String spectrum,
-    String cycle,
     List<NodePage.Key> keys,
     String basis,
     Optional<CaptureView> view) {
   /**
    * What only the page of a capture shows.
    *
-   * @param voltages waveforms over the record; empty text for none
-   * @param currents likewise
+   * @param first waveforms of the first cycles
+   * @param whole waveforms over the record; none where the first cycles are all of it
    * @param phasors the fundamentals
    * @param tables unbalance and standard intervals
    * @param folded harmonic groups, opened on demand
    * @param eventsBasis thresholds of the events
    */
   record CaptureView(
-      String voltages,
-      String currents,
+      Waves first,
+      Waves whole,
       String phasors,
       List<NodePage.Grid> tables,
       List<NodePage.Grid> folded,
       String eventsBasis,
       List<EventRow> events) {}
+
+  /** Pictures of voltages and currents; empty text for none. */
+  record Waves(String voltages, String currents) {
+    static final Waves NONE = new Waves("", "");
+
+    /** Whether there is neither. */
+    public boolean isEmpty() {
+      return voltages.isEmpty() && currents.isEmpty();
+    }
+  }
 
   /** A dip, swell or interruption. */
   record EventRow(
@@ -70,9 +80,16 @@ record ReadingPage(
   /** A fact about the file. */
   record Fact(String key, String text) {}
 
-  /** A reading in the list. */
-  record Row(
-      long id, String meter, String node, String kindKey, String period, String files, int found) {}
+  /**
+   * A meter in the list.
+   *
+   * @param calendar which days its readings cover; empty where none has times
+   */
+  record Meter(
+      String name, String node, Optional<CoverageMaker.Calendar> calendar, List<Row> readings) {}
+
+  /** A reading of a meter. */
+  record Row(long id, String kindKey, String period, String files, int found) {}
 
   /** Files whose columns are to be confirmed. */
   record Waiting(long id, ReadingRepository.MeterRef meter, String files, String asked) {}

@@ -3,12 +3,12 @@ package fourthwire.web.reading;
 import fourthwire.jobs.measured.LogAssessments;
 import fourthwire.metering.CaptureResult;
 import fourthwire.metering.LogResult;
+import fourthwire.metering.Period;
 import fourthwire.metering.Reading;
 import fourthwire.metering.ReadingRepository;
 import fourthwire.metering.correction.CorrectionRepository;
 import fourthwire.site.SiteTree;
 import fourthwire.site.Survey;
-import fourthwire.web.figure.CyclePlot;
 import fourthwire.web.figure.Shapes;
 import fourthwire.web.panel.NodePage;
 import fourthwire.web.support.Moments;
@@ -39,8 +39,6 @@ class ReadingPageMaker {
   ReadingPage.Row row(ReadingRepository.Entry entry, Survey survey) {
     return new ReadingPage.Row(
         entry.id(),
-        entry.meter().name(),
-        entry.meter().node(),
         kindKey(entry.reading()),
         period(entry.reading(), survey),
         String.join(", ", entry.files()),
@@ -78,8 +76,15 @@ class ReadingPageMaker {
         entry.id(),
         entry.meter().name(),
         entry.meter().node(),
-        reading.log().isPresent() ? new ReadingHeading(words).of(limits, faults) : "",
-        reading.log().map(quantities::neutral).orElse(""),
+        reading
+            .capture()
+            .map(new CaptureHeading(words, names)::of)
+            .orElseGet(() -> new ReadingHeading(words).of(limits, faults)),
+        reading
+            .capture()
+            .map(c -> new CaptureHeading(words, names).about(c, period(reading, survey)))
+            .or(() -> reading.log().map(quantities::neutral))
+            .orElse(""),
         kindKey(reading),
         facts(entry, survey),
         reading.notes().stream().map(names::in).toList(),
@@ -92,7 +97,6 @@ class ReadingPageMaker {
             .filter(c -> !c.spectrum().isEmpty())
             .map(c -> new CaptureTables(words, names).orders(c)),
         reading.capture().map(c -> new CaptureTables(words, names).spectrum(c)).orElse(""),
-        reading.capture().map(this::cycle).orElse(""),
         reading.capture().map(c -> keys(c, names)).orElse(List.of()),
         reading.capture().map(c -> names.in(c.basis() + " " + c.neutralBasis())).orElse(""),
         reading.capture().map(c -> new CaptureViewMaker(words, names).of(c)));
@@ -106,8 +110,18 @@ class ReadingPageMaker {
     Moments moments = Moments.of(survey);
     return reading
         .period()
-        .map(p -> words.of("reading.period", moments.minute(p.from()), moments.minute(p.to())))
+        .map(p -> period(p, moments))
         .orElse(words.of("reading.period.unknown"));
+  }
+
+  /** Of what is shorter than a minute also how long it is. */
+  private String period(Period p, Moments moments) {
+    return p.length().toMinutes() < 1
+        ? words.of(
+            "reading.period.short",
+            moments.second(p.from()),
+            Numbers.plain(p.length().toMillis() / 1000.0, "s"))
+        : words.of("reading.period", moments.minute(p.from()), moments.minute(p.to()));
   }
 
   private List<ReadingPage.Fact> facts(ReadingRepository.Entry entry, Survey survey) {
@@ -140,14 +154,10 @@ class ReadingPageMaker {
     return new ReadingPage.Fact("reading.fact." + key, text);
   }
 
-  private String cycle(CaptureResult capture) {
-    return capture.spectrum().isEmpty()
-        ? ""
-        : CyclePlot.draw(capture.spectrum(), "A", words.of("reading.cycle"));
-  }
-
   private static List<NodePage.Key> keys(CaptureResult capture, Names names) {
-    return capture.spectrum().keySet().stream()
+    return capture.picture().channels().keySet().stream()
+        .map(CapturePictures::conductor)
+        .distinct()
         .sorted()
         .map(c -> new NodePage.Key(Shapes.sample(c), names.of(c)))
         .toList();

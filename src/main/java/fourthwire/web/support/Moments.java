@@ -14,6 +14,9 @@ public final class Moments {
   private static final DateTimeFormatter MINUTE =
       DateTimeFormatter.ofPattern("d MMMM uuuu, HH:mm", Locale.ENGLISH);
 
+  private static final DateTimeFormatter SECOND =
+      DateTimeFormatter.ofPattern("d MMMM uuuu, HH:mm:ss", Locale.ENGLISH);
+
   private static final DateTimeFormatter DAY =
       DateTimeFormatter.ofPattern("d MMMM uuuu", Locale.ENGLISH);
 
@@ -43,6 +46,11 @@ public final class Moments {
   /** To the minute: 27 January 2026, 09:30. */
   public String minute(Instant moment) {
     return MINUTE.format(moment.atZone(zone)) + (zone.equals(ZoneOffset.UTC) ? " UTC" : "");
+  }
+
+  /** To the second: 27 January 2026, 09:30:05. */
+  public String second(Instant moment) {
+    return SECOND.format(moment.atZone(zone)) + (zone.equals(ZoneOffset.UTC) ? " UTC" : "");
   }
 
   /** A local day: 27 January 2026. */

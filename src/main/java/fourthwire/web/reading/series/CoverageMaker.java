@@ -1,5 +1,6 @@
 package fourthwire.web.reading.series;
 
+import fourthwire.jobs.measured.SiteZone;
 import fourthwire.jobs.series.StoredLog;
 import fourthwire.jobs.series.StoredLogs;
 import fourthwire.metering.ReadingRepository;
@@ -17,7 +18,6 @@ import java.time.YearMonth;
 import java.time.ZoneId;
 import java.time.format.DateTimeFormatter;
 import java.util.ArrayList;
-import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
@@ -26,7 +26,7 @@ import java.util.SortedMap;
 import java.util.TreeMap;
 import org.springframework.stereotype.Component;
 
-/** Makes the calendars that say which days the meters of a site cover. */
+/** Makes the calendars that say which days a meter covers. */
 @Component
 public final class CoverageMaker {
   private static final DateTimeFormatter MONTH =
@@ -45,13 +45,12 @@ public final class CoverageMaker {
   /**
    * A meter's calendar.
    *
+   * @param svg the picture
    * @param sentence how many days are whole
    * @param missing days that are not, in words
    * @param months the same by month
    */
   public record Calendar(
-      String meter,
-      String node,
       String svg,
       String sentence,
       List<String> missing,
@@ -60,17 +59,16 @@ public final class CoverageMaker {
   /** The share of each day that has rows, and on which a capture was made. */
   private record Days(SortedMap<LocalDate, Double> shares, Map<LocalDate, Integer> captures) {}
 
-  /** A calendar for each meter that has readings with times, in the order of the readings. */
-  public List<Calendar> of(List<ReadingRepository.Entry> readings, Survey survey) {
-    Map<ReadingRepository.MeterRef, Days> meters = new LinkedHashMap<>();
+  /** The calendar of one meter's readings; empty where none of them has times. */
+  public Optional<Calendar> of(
+      ReadingRepository.MeterRef meter, List<ReadingRepository.Entry> readings, Survey survey) {
+    Days days = new Days(new TreeMap<>(), new TreeMap<>());
     for (ReadingRepository.Entry entry : readings) {
-      Days days =
-          meters.computeIfAbsent(entry.meter(), m -> new Days(new TreeMap<>(), new TreeMap<>()));
       Optional<StoredLog> log = logs.of(entry, survey);
       if (log.isPresent()) {
         add(days, log.get().days());
       } else {
-        ZoneId zone = fourthwire.jobs.measured.SiteZone.of(survey);
+        ZoneId zone = SiteZone.of(survey);
         entry
             .reading()
             .period()
@@ -78,14 +76,9 @@ public final class CoverageMaker {
                 p -> days.captures().merge(LocalDate.ofInstant(p.from(), zone), 1, Integer::sum));
       }
     }
-    List<Calendar> calendars = new ArrayList<>();
-    meters.forEach(
-        (meter, days) -> {
-          if (!days.shares().isEmpty() || !days.captures().isEmpty()) {
-            calendars.add(calendar(meter, days));
-          }
-        });
-    return calendars;
+    return days.shares().isEmpty() && days.captures().isEmpty()
+        ? Optional.empty()
+        : Optional.of(calendar(meter, days));
   }
 
   /** Where two logs cover a day, the one that covers more of it. */
@@ -103,8 +96,6 @@ public final class CoverageMaker {
             .toList();
     String sentence = sentence(days);
     return new Calendar(
-        meter.name(),
-        meter.node(),
         CoveragePicture.draw(
             months.stream().map(m -> month(m, days)).toList(),
             words.of("coverage.alternative", meter.name(), sentence)),
