@@ -72,9 +72,7 @@ final class WaveformShapes {
 
   static Schema<?> waveforms(String part) {
     return Shape.of(
-            "Of a capture, "
-                + part
-                + ": of each short stretch the lowest and the highest sample")
+            "Of a capture, " + part + ": of each short stretch the lowest and the highest sample")
         .number("step_s", "Length of a stretch, seconds")
         .part("channels", Shape.of("By quantity").others(trace()).schema())
         .schema();

@@ -38,7 +38,8 @@ final class CaptureHeading {
 
   private Optional<String> neutral(CaptureResult c) {
     return Optional.ofNullable(c.current().get(Conductor.N))
-        .filter(n -> n.rmsA().value().isPresent() && c.neutralPercentOfMeanLine().value().isPresent())
+        .filter(
+            n -> n.rmsA().value().isPresent() && c.neutralPercentOfMeanLine().value().isPresent())
         .map(
             n ->
                 words.of(
@@ -85,8 +86,7 @@ final class CaptureHeading {
     recorded.add(list("capture.voltages", c.voltage().keySet().stream().map(k -> names.of(k))));
     recorded.add(
         list("capture.currents", c.current().keySet().stream().sorted().map(k -> names.of(k))));
-    String what =
-        recorded.stream().filter(r -> !r.isEmpty()).collect(Collectors.joining("; "));
+    String what = recorded.stream().filter(r -> !r.isEmpty()).collect(Collectors.joining("; "));
     String about = words.of("capture.about", what, c.cycles(), period);
     return about.substring(0, 1).toUpperCase(Locale.ENGLISH) + about.substring(1);
   }

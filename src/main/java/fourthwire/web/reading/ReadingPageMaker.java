@@ -108,10 +108,7 @@ class ReadingPageMaker {
 
   private String period(Reading reading, Survey survey) {
     Moments moments = Moments.of(survey);
-    return reading
-        .period()
-        .map(p -> period(p, moments))
-        .orElse(words.of("reading.period.unknown"));
+    return reading.period().map(p -> period(p, moments)).orElse(words.of("reading.period.unknown"));
   }
 
   /** Of what is shorter than a minute also how long it is. */

@@ -50,11 +50,7 @@ public final class CoverageMaker {
    * @param missing days that are not, in words
    * @param months the same by month
    */
-  public record Calendar(
-      String svg,
-      String sentence,
-      List<String> missing,
-      NodePage.Grid months) {}
+  public record Calendar(String svg, String sentence, List<String> missing, NodePage.Grid months) {}
 
   /** The share of each day that has rows, and on which a capture was made. */
   private record Days(SortedMap<LocalDate, Double> shares, Map<LocalDate, Integer> captures) {}
