@@ -49,7 +49,7 @@ final class FlatLines implements DayCheck {
     private long runRows;
     private long runFrom;
     private long runFromRow;
-    private long lastRow;
+    private long end;
     private long last;
   }
 
@@ -76,27 +76,37 @@ final class FlatLines implements DayCheck {
 
   private static void take(LogDay day, Column c, double[] x) {
     findLeastStep(c, x);
+    double few = FEW_STEPS * c.leastStep;
+    double before = c.before;
     for (int row = 0; row < x.length; row++) {
       double v = x[row];
-      double moved = Math.abs(v - c.before);
-      long at = day.startMillis(row);
-      if (v == c.before) {
-        if (at != c.last) {
+      if (v == before) {
+        if (day.startMillis(row) != before(day, c, row)) {
           c.runRows++;
         }
       } else {
-        endRun(c, day.intervalMillis());
+        if (c.runRows >= FEWEST_ROWS) {
+          c.last = before(day, c, row);
+          endRun(c, day.firstRow() + row, day.intervalMillis());
+        }
         c.before = v;
         c.runRows = 1;
-        c.runFrom = at;
+        c.runFrom = day.startMillis(row);
         c.runFromRow = day.firstRow() + row;
       }
-      if (!Double.isNaN(c.before)) {
-        (moved > FEW_STEPS * c.leastStep ? c.moved : c.rested)[level(v)]++;
+      if (!Double.isNaN(v)) {
+        (Math.abs(v - before) > few ? c.moved : c.rested)[level(v)]++;
       }
-      c.last = at;
-      c.lastRow = day.firstRow() + row;
+      before = v;
     }
+    if (x.length > 0) {
+      c.last = day.startMillis(x.length - 1);
+      c.end = day.firstRow() + x.length;
+    }
+  }
+
+  private static long before(LogDay day, Column c, int row) {
+    return row > 0 ? day.startMillis(row - 1) : c.last;
   }
 
   /** The last digit of the column, as its smallest step shows. */
@@ -114,7 +124,8 @@ final class FlatLines implements DayCheck {
     return Math.max(0, Math.min(LEVELS - 1, Math.getExponent(v) + LEVELS / 2));
   }
 
-  private static void endRun(Column c, long intervalMillis) {
+  /** Notes a run that ends before this row. */
+  private static void endRun(Column c, long end, long intervalMillis) {
     long to = c.last + intervalMillis;
     // A load that is off reads nothing for hours; an interruption is no fault of the meter.
     boolean lasting = c.runRows >= FEWEST_ROWS && to - c.runFrom >= SHORTEST_MILLIS;
@@ -125,7 +136,7 @@ final class FlatLines implements DayCheck {
               c.runRows,
               c.runFrom,
               Math.max(c.runFrom, to),
-              new Correction.Rows(c.runFromRow, c.lastRow + 1)));
+              new Correction.Rows(c.runFromRow, end)));
     }
   }
 
@@ -134,7 +145,7 @@ final class FlatLines implements DayCheck {
     Map<Correction.Rows, List<String>> together = new LinkedHashMap<>();
     Map<Correction.Rows, Run> runs = new LinkedHashMap<>();
     for (int q = 0; q < columns.length; q++) {
-      endRun(columns[q], 0);
+      endRun(columns[q], columns[q].end, 0);
       for (Run run : columns[q].runs) {
         if (isFault(columns[q], run)) {
           together.computeIfAbsent(run.in(), k -> new ArrayList<>()).add(names.get(q));

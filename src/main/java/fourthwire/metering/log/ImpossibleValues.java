@@ -91,27 +91,35 @@ final class ImpossibleValues implements DayCheck {
    * What is known of a column beforehand.
    *
    * @param bounds from its values of a day
+   * @param clean whether its lowest and highest value of all are within bounds
    * @param low position of its lowest values; -1 for none
    * @param high position of its highest values; -1 for none
    * @param amps where it is the volts of a line, position of that line's amps; -1 for none
    */
-  private record Column(Function<double[], Bounds> bounds, int low, int high, int amps) {}
+  private record Column(
+      Function<double[], Bounds> bounds, boolean clean, int low, int high, int amps) {}
 
   ImpossibleValues(List<String> names, List<QuantityStatistics> statistics, double nominalHz) {
     this.names = names;
     this.statistics = statistics;
     this.seen = new Seen[names.size()];
     for (int q = 0; q < seen.length; q++) {
-      String name = names.get(q);
-      String amps = name.matches("L[123]\\.rms_v") ? name.replace("rms_v", "rms_a") : "";
       seen[q] = new Seen();
-      columns.add(
-          new Column(
-              bounds(name.replaceFirst("\\.(min|max)$", ""), statistics.get(q), nominalHz),
-              names.indexOf(name + ".min"),
-              names.indexOf(name + ".max"),
-              names.indexOf(amps)));
+      columns.add(column(names, q, statistics.get(q), nominalHz));
     }
+  }
+
+  private static Column column(
+      List<String> names, int q, QuantityStatistics of, double nominalHz) {
+    String name = names.get(q);
+    boolean volts = name.matches("L[123]\\.rms_v");
+    int low = names.indexOf(name + ".min");
+    int high = names.indexOf(name + ".max");
+    int amps = volts ? names.indexOf(name.replace("rms_v", "rms_a")) : -1;
+    String measure = name.replaceFirst("\\.(min|max)$", "");
+    boolean alone = low < 0 && high < 0 && amps < 0 && !measure.endsWith(".rms_v");
+    boolean clean = alone && fixed(measure, of, nominalHz).holdsAll(of.min(), of.max());
+    return new Column(bounds(measure, of, nominalHz), clean, low, high, amps);
   }
 
   @Override
@@ -119,23 +127,44 @@ final class ImpossibleValues implements DayCheck {
     for (int q = 0; q < seen.length; q++) {
       double[] x = day.of(q);
       values += x.length;
-      Bounds bounds = columns.get(q).bounds().apply(x);
-      boolean[] wrong = againstOthers(day, q, columns.get(q));
-      double usual = statistics.get(q).p95();
-      for (int row = 0; row < x.length; row++) {
-        if (Double.isNaN(x[row])) {
-          blank.take(day, row, Double.NaN, Double.NaN);
-        } else if (wrong[row] || !bounds.holds(x, row)) {
-          seen[q].take(day, row, x[row], usual);
-        } else {
-          seen[q].keep(x[row]);
-        }
+      if (columns.get(q).clean()) {
+        takeBlanks(day, x);
+      } else {
+        take(day, q, x);
+      }
+    }
+  }
+
+  private void takeBlanks(LogDay day, double[] x) {
+    for (int row = 0; row < x.length; row++) {
+      if (Double.isNaN(x[row])) {
+        blank.take(day, row, Double.NaN, Double.NaN);
+      }
+    }
+  }
+
+  private void take(LogDay day, int q, double[] x) {
+    Bounds bounds = columns.get(q).bounds().apply(x);
+    boolean[] wrong = againstOthers(day, q, columns.get(q));
+    double usual = statistics.get(q).p95();
+    for (int row = 0; row < x.length; row++) {
+      if (Double.isNaN(x[row])) {
+        blank.take(day, row, Double.NaN, Double.NaN);
+      } else if (wrong[row] || !bounds.holds(x, row)) {
+        seen[q].take(day, row, x[row], usual);
+      } else {
+        seen[q].keep(x[row]);
       }
     }
   }
 
   /** What a value may be; {@code alone} is the bound of one that neither neighbour comes near. */
   private record Bounds(double low, double high, double alone) {
+    /** Whether all values from one to another may be. */
+    boolean holdsAll(double least, double most) {
+      return least >= Math.max(low, -alone) && most <= Math.min(high, alone);
+    }
+
     boolean holds(double[] x, int row) {
       double v = x[row];
       if (v < low || v > high) {

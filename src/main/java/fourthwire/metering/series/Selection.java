@@ -1,8 +1,13 @@
 package fourthwire.metering.series;
 
+import java.util.Arrays;
+
 /** Finds order statistics without sorting (Hoare, 1961). Values must hold no NaN. */
 public final class Selection {
   private static final int SMALL = 24;
+
+  /** How many values tell about where the largest begin. */
+  private static final int SAMPLE = 256;
 
   private Selection() {}
 
@@ -15,11 +20,52 @@ public final class Selection {
    * @param rising percentages, rising
    */
   static double[] percentiles(double[] x, int from, int to, double... rising) {
+    int lowest = (int) ((to - from - 1) * rising[0] / 100);
+    double[] top = top(x, from, to, lowest);
+    return top.length > 0
+        ? percentiles(top, to - from - top.length, 0, top.length, rising)
+        : percentiles(x, 0, from, to, rising);
+  }
+
+  /**
+   * The largest values, in no order, from the one of a rank on and some more: far fewer to go
+   * through than all where the rank is high. Empty where they would be many.
+   */
+  private static double[] top(double[] x, int from, int to, int rank) {
+    int n = to - from;
+    int step = Math.max(1, n / SAMPLE);
+    int most = 3 * (n - rank) + 2 * SMALL;
+    if (n < 4 * SMALL || most > n / 2) {
+      return new double[0];
+    }
+    double[] sample = new double[(n - 1) / step + 1];
+    for (int k = 0; k < sample.length; k++) {
+      sample[k] = x[from + k * step];
+    }
+    // Twice as many of the sample as are looked for, and two more for chance.
+    int above = (int) Math.min(sample.length, 2L * (n - rank) / step + 3);
+    double bound = ofRank(sample, 0, sample.length, sample.length - above);
+    double[] top = new double[most + 1];
+    int count = 0;
+    for (int k = from; k < to && count < most; k++) {
+      top[count] = x[k];
+      count += x[k] >= bound ? 1 : 0;
+    }
+    return count < most && count >= n - rank ? Arrays.copyOf(top, count) : new double[0];
+  }
+
+  /**
+   * Of values of which so many are the largest of more.
+   *
+   * @param before how many are smaller and not among them
+   */
+  private static double[] percentiles(
+      double[] x, int before, int from, int to, double... rising) {
     double[] found = new double[rising.length];
     int low = from;
     for (int k = 0; k < rising.length; k++) {
-      double position = (to - from - 1) * rising[k] / 100;
-      int below = from + (int) position;
+      double position = (before + to - from - 1) * rising[k] / 100;
+      int below = from + (int) position - before;
       select(x, low, to - 1, below);
       double a = x[below];
       double b = below + 1 < to ? least(x, below + 1, to) : a;

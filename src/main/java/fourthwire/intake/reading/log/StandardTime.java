@@ -30,6 +30,9 @@ final class StandardTime {
   private long quietFrom = Long.MAX_VALUE;
   private long quietTo = Long.MIN_VALUE;
 
+  /** Whether its clock was seen to change: no other row is looked at then. */
+  private boolean followed;
+
   private StandardTime(ZoneId zone) {
     this.rules = zone.getRules();
   }
@@ -52,7 +55,7 @@ final class StandardTime {
             rows[0] = at.offsetSeconds() == RowTime.NO_OFFSET ? rows[0] + 1 : -1;
             take(at.localMillis());
           }
-          return rows[0] >= 0 && rows[0] < MOST_ROWS;
+          return rows[0] >= 0 && rows[0] < MOST_ROWS && !followed;
         });
     return rows[0] > 0;
   }
@@ -67,14 +70,14 @@ final class StandardTime {
     if (next != null) {
       Change change = changes.computeIfAbsent(next, Change::new);
       change.take(local);
+      followed = change.isFollowed();
       quietTo = change.from - HOUR_MILLIS;
       quietFrom = last == null ? Long.MIN_VALUE : 1000 * last.toEpochSecond() + 86_400_000;
     }
   }
 
   private Optional<ZoneOffset> kept() {
-    boolean follows = changes.values().stream().anyMatch(Change::isFollowed);
-    return follows
+    return followed || changes.values().stream().anyMatch(Change::isFollowed)
         ? Optional.empty()
         : changes.values().stream()
             .filter(Change::isPassedOver)

@@ -1,5 +1,8 @@
 package fourthwire.intake.reading.table;
 
+import java.lang.invoke.MethodHandles;
+import java.lang.invoke.VarHandle;
+import java.nio.ByteOrder;
 import java.nio.charset.Charset;
 import java.util.ArrayList;
 import java.util.Arrays;
@@ -14,6 +17,18 @@ import java.util.List;
  */
 final class RowCutter {
   private static final byte QUOTE = '"';
+
+  private static final VarHandle EIGHT =
+      MethodHandles.byteArrayViewVarHandle(long[].class, ByteOrder.LITTLE_ENDIAN);
+  private static final long ZEROS = 0x3030303030303030L;
+
+  /** Lifts a byte above nine into its high bit. */
+  private static final long NINES_UP = 0x7676767676767676L;
+
+  private static final long HIGH_BITS = 0x8080808080808080L;
+  private static final long[] POWERS = {
+    1, 10, 100, 1000, 10_000, 100_000, 1_000_000, 10_000_000, 100_000_000
+  };
 
   /** A cell that is no plain number. */
   private static final byte STRANGE = -1;
@@ -84,16 +99,28 @@ final class RowCutter {
 
   private int plain(int from, int to) {
     byte[] b = bytes;
-    byte decimal = mark;
-    int at = from < to && b[from] == '-' ? from + 1 : from;
-    int first = at;
+    int first = from < to && b[from] == '-' ? from + 1 : from;
+    int last = to - Long.BYTES + 1;
     int point = -1;
     long sum = 0;
-    while (at < to) {
+    int at = first;
+    while (at < last) {
+      long eight = (long) EIGHT.get(b, at) ^ ZEROS;
+      int count = digits(eight);
+      sum = sum * POWERS[count] + number(eight, count);
+      at += count;
+      if (count < Long.BYTES) {
+        if (b[at] != mark || point >= 0) {
+          break;
+        }
+        point = at++;
+      }
+    }
+    while (at < to && at >= last) {
       int digit = b[at] - '0';
       if (digit >= 0 && digit <= 9) {
         sum = 10 * sum + digit;
-      } else if (b[at] == decimal && point < 0) {
+      } else if (b[at] == mark && point < 0) {
         point = at;
       } else {
         break;
@@ -108,6 +135,23 @@ final class RowCutter {
       decimals[cells - 1] = (byte) (point < 0 ? 0 : at - point - 1);
     }
     return end;
+  }
+
+  /** How many of eight bytes, digits less their zero, are digits before the first that is none. */
+  private static int digits(long eight) {
+    long none = (eight + NINES_UP | eight) & HIGH_BITS;
+    return Long.numberOfTrailingZeros(none) >>> 3;
+  }
+
+  /** The number that so many digits are: two by two, four by four, all eight at once. */
+  private static long number(long eight, int count) {
+    if (count == 0) {
+      return 0;
+    }
+    long n = eight << Long.SIZE - Byte.SIZE * count;
+    n = n * 10 + (n >>> 8) & 0x00ff00ff00ff00ffL;
+    n = n * 100 + (n >>> 16) & 0x0000ffff0000ffffL;
+    return n * 10_000 + (n >>> 32) & 0xffffffffL;
   }
 
   /** Passes over what is left of a cell. */
