@@ -109,8 +109,7 @@ final class ImpossibleValues implements DayCheck {
     }
   }
 
-  private static Column column(
-      List<String> names, int q, QuantityStatistics of, double nominalHz) {
+  private static Column column(List<String> names, int q, QuantityStatistics of, double nominalHz) {
     String name = names.get(q);
     boolean volts = name.matches("L[123]\\.rms_v");
     int low = names.indexOf(name + ".min");

@@ -59,8 +59,7 @@ public final class Selection {
    *
    * @param before how many are smaller and not among them
    */
-  private static double[] percentiles(
-      double[] x, int before, int from, int to, double... rising) {
+  private static double[] percentiles(double[] x, int before, int from, int to, double... rising) {
     double[] found = new double[rising.length];
     int low = from;
     for (int k = 0; k < rising.length; k++) {

@@ -13,7 +13,21 @@ import org.junit.jupiter.params.provider.ValueSource;
 /** Numbers of rows are those that the platform's decimal arithmetic reads, to the last digit. */
 class RowCutterTest {
   private static final String[] OTHERS = {
-    "", "NaN", "-", "1.2.3", "12a", "1e3", "-.5", "7.", ".", "/9", ":1", "1:", "é1", "123456789,", "€"
+    "",
+    "NaN",
+    "-",
+    "1.2.3",
+    "12a",
+    "1e3",
+    "-.5",
+    "7.",
+    ".",
+    "/9",
+    ":1",
+    "1:",
+    "é1",
+    "123456789,",
+    "€"
   };
 
   @ParameterizedTest(name = "seed {0}")
