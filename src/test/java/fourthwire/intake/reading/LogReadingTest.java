@@ -368,6 +368,27 @@ class LogReadingTest {
     assertThat(r.notes()).anySatisfy(n -> assertThat(n).contains("standard time all year"));
   }
 
+  /** Energy suppliers count hours from 1 to 24; kilowatts that look like 12.34 are no clock. */
+  @Test
+  void hoursThatEndAreCountedFromOne() {
+    StringBuilder text = new StringBuilder("Date,HE,kW\n");
+    for (int k = 0; k < 48; k++) {
+      text.append("02/1" + (3 + k / 24) + "/2025," + (1 + k % 24) + ",12." + (10 + k) + "\n");
+    }
+    Reading r = read(text.toString());
+    assertThat(r.log().orElseThrow().interval()).isEqualTo(Duration.ofHours(1));
+    assertThat(r.period().orElseThrow().from()).isEqualTo(Instant.parse("2025-02-12T23:00:00Z"));
+    assertThat(r.period().orElseThrow().to()).isEqualTo(Instant.parse("2025-02-14T23:00:00Z"));
+  }
+
+  /** Day 45,700 of a spreadsheet is 12 February 2025. */
+  @Test
+  void daysOfASpreadsheetHaveTheirFractionBesideThem() {
+    Reading r = read("Date,Time,I L1 (A)\n45700,0.25,1\n45700,0.5,2\n45700,0.75,3\n45701,0,4\n");
+    assertThat(r.log().orElseThrow().interval()).isEqualTo(Duration.ofHours(6));
+    assertThat(r.period().orElseThrow().from()).isEqualTo(Instant.parse("2025-02-12T05:00:00Z"));
+  }
+
   @Test
   void theRepeatedHourOfAutumnIsTwoRowsOfAnHour() {
     String text = "Time,I L1 (A)\n";

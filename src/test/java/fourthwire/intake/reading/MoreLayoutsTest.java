@@ -209,6 +209,38 @@ class MoreLayoutsTest {
                 .time("Minute", "mm"))
         .lines("U L# [V]", "rms_v")
         .lines("P L# [kW]", "active_w", 3);
+    layout("basic ISO with offset", LayoutWriter.of(",", '.').time("t", "yyyyMMdd'T'HHmmss'+0100'"))
+        .lines("i_#", "rms_a")
+        .lines("u_#", "rms_v");
+    layout("units spelt out", LayoutWriter.of(",", '.').time("Time", "dd/MMM/yyyy:HH:mm:ss"))
+        .lines("Current phase @ (amperes)", "rms_a")
+        .lines("Voltage phase @ (volts)", "rms_v")
+        .column("Real power (kilowatts)", "total.active_w", 3)
+        .column("Apparent power (kilovolt-amperes)", "total.apparent_va", 3);
+    layout("Portuguese", LayoutWriter.of(";", ',').time("Data", "dd/MM/yyyy").time("Hora", "HH:mm"))
+        .lines("Corrente L# (A)", "rms_a")
+        .lines("Tensão L# (V)", "rms_v")
+        .column("Potência Ativa Total (kW)", "total.active_w", 3)
+        .column("Fator de Potência Total", "total.power_factor");
+    layout("lines by colour", LayoutWriter.of(",", '.').time("Time", "yyyy-MM-dd HH:mm"))
+        .column("Red amps", "L1.rms_a")
+        .column("White amps", "L2.rms_a")
+        .column("Blue amps", "L3.rms_a")
+        .column("Neutral amps", "N.rms_a");
+    layout("length of the mean in the heading", LayoutWriter.of(",", '.').time("Time", "yyyy-MM-dd HH:mm"))
+        .lines("Avg. RMS current - phase # - 10 min [A]", "rms_a")
+        .lines("Avg. THD current - phase # - 10 min [%]", "current_thd_percent");
+    layout("direct current beside the grid", LayoutWriter.of(",", '.').time("Time", "yyyy-MM-dd HH:mm"))
+        .lines("Grid current L# (A)", "rms_a")
+        .column("PV1 voltage (V)", "")
+        .column("Total input power (kW)", "");
+    layout("harmonics that make the distortion, without units", LayoutWriter.of(",", '.').time("Time", "yyyy-MM-dd HH:mm"))
+        .lines("I#", "rms_a")
+        .lines("I#THD", "current_thd_percent")
+        .lines("I#H3", "current_h3_percent")
+        .lines("I#H5", "current_h5_percent")
+        .lines("I#H7", "current_h7_percent")
+        .lines("I#H9", "current_h9_percent");
     layout(
             "newest first, days that may be months",
             LayoutWriter.of(",", '.')

@@ -96,6 +96,22 @@ class OpenLayoutsTest {
         "columns.Feeder 3 L1 A",
         dated().lines("Feeder 2 L# A", "rms_a").lines("Feeder 3 L# A", "rms_a"));
     layout(
+        "two boards in one file",
+        "columns.MDB-2 kW",
+        dated().column("MDB-1 kW", "L1.active_w", 3).column("MDB-2 kW", "L2.active_w", 3));
+    layout(
+        "numbers of things that are no lines",
+        "columns.Load 1 (A)",
+        dated().column("Load 1 (A)", "L1.rms_a").column("Load 2 (A)", "L2.rms_a"));
+    layout(
+        "lines counted from 0, or components",
+        "columns.I1 (A)",
+        dated().column("I0 (A)", "L1.rms_a").column("I1 (A)", "L2.rms_a").column("I2 (A)", "L3.rms_a"));
+    layout(
+        "amps behind the instrument transformer",
+        "columns.I1 sec (A)",
+        dated().lines("I# sec (A)", "rms_a"));
+    layout(
         "an abbreviated zone",
         "time.zone",
         LayoutWriter.of(",", '.').time("Time (EST)", "yyyy-MM-dd HH:mm").lines("V# (V)", "rms_v"));

@@ -39,6 +39,11 @@ public record Heading(
   }
 
   private static final Pattern LETTERED = Pattern.compile("(?i)(?<![\\p{L}])vb(?![\\p{L}])");
+  private static final Pattern DIRECT =
+      Pattern.compile("(?i)(?<![\\p{L}])(?:dc|mppt|string|pv(?=[\\s_-]*\\d))[\\s_-]*\\d*(?![\\p{L}])");
+  private static final Pattern PUT_IN = Pattern.compile("(?i)(?<![\\p{L}])input(?![\\p{L}])");
+  private static final Pattern LINE_ZERO =
+      Pattern.compile("(?i)(?<![\\p{L}])(phase|ph|line|l|i|v|u|ch)[\\s_-]*0(?![\\d.])");
   private static final Heading NONE = new Heading(Meaning.NONE, "", Statistic.MEAN, 1, "");
 
   /**
@@ -58,9 +63,18 @@ public record Heading(
     words.forEach(
         (heading, w) ->
             read.put(heading, exact(heading).orElseGet(() -> new LogHeading(w, places).read())));
-    askCircuits(read);
+    askCircuits(words, read);
+    askFromZero(read);
+    passOverDirectCurrent(words, read);
     passOverDemand(words, read);
     return read;
+  }
+
+  /** Beside volts and amps of direct current the power put in is theirs. */
+  private static void passOverDirectCurrent(Map<String, LogWords> words, Map<String, Heading> read) {
+    if (words.keySet().stream().anyMatch(h -> DIRECT.matcher(h).find())) {
+      read.replaceAll((name, h) -> DIRECT.matcher(name).find() || PUT_IN.matcher(name).find() ? NONE : h);
+    }
   }
 
   /** Beside the plain quantity its mean over a longer interval is not read. */
@@ -79,18 +93,34 @@ public record Heading(
   }
 
   /** Of several panels or feeders in one file only one can be what this meter measures. */
-  private static void askCircuits(Map<String, Heading> read) {
+  private static void askCircuits(Map<String, LogWords> words, Map<String, Heading> read) {
+    Map<String, String> named =
+        words.entrySet().stream()
+            .collect(Collectors.toUnmodifiableMap(Map.Entry::getKey, e -> e.getValue().circuit()));
     Set<String> circuits =
         read.entrySet().stream()
             .filter(e -> e.getValue().quantity().contains("."))
-            .map(e -> Circuit.of(e.getKey()))
+            .map(e -> named.getOrDefault(e.getKey(), ""))
             .collect(Collectors.toUnmodifiableSet());
     if (circuits.size() > 1) {
       read.replaceAll(
           (name, h) ->
-              Circuit.of(name).isEmpty() || h.meaning() == Meaning.NONE
+              named.getOrDefault(name, "").isEmpty() || h.meaning() == Meaning.NONE
                   ? h
-                  : unclear("whether this meter measures " + Circuit.of(name)));
+                  : unclear("whether this meter measures " + named.get(name)));
+    }
+  }
+
+  /** Lines may be counted from 0: then 1 is the second. */
+  private static void askFromZero(Map<String, Heading> read) {
+    boolean zero = read.keySet().stream().anyMatch(h -> LINE_ZERO.matcher(h).find());
+    boolean three = read.values().stream().anyMatch(h -> h.quantity().startsWith("L3."));
+    if (zero && !three) {
+      read.replaceAll(
+          (name, h) ->
+              h.quantity().matches("L\\d.*") || h.meaning() == Meaning.PLACELESS
+                  ? unclear("which conductor this is, as the file counts lines from 0")
+                  : h);
     }
   }
 

@@ -155,6 +155,11 @@ final class LogHeading {
     if (voltage() && current() || power() && (voltage() || current())) {
       return Heading.unclear("which quantity this is: its name and its unit disagree");
     }
+    if (words.saysSecondary() && (current() || voltage())) {
+      return Heading.unclear(
+          "whether its values are those behind the instrument transformer: map it with the ratio"
+              + " as factor, or 1");
+    }
     if (current()) {
       return at("rms_a", unit.isPresent());
     }

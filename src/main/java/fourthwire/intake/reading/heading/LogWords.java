@@ -37,7 +37,12 @@ final class LogWords {
     phrase("power[\\s_-]*factor", " pf ");
     phrase("cos\\s*[-_(]?\\s*(phi|φ)\\s*\\)?", " cosphi ");
     phrase("line[\\s-]+to[\\s-]+(line|neutral)", " ");
+    phrase(
+        "(?<!harmonic |harm |order |h)(?<![\\p{L}\\d])(?:10|15|30|60)[\\s_-]*(?:min|minutes?|sec|s)(?!\\p{L})",
+        " ");
     phrase("k[\\s-]factor", " kfactor ");
+    phrase("(?<=volt)[\\s-]+(?=amp)|(?<=watt)[\\s-]+(?=hour)|(?<=kilo)[\\s-]+(?=[vwa])", "");
+    phrase("(?<=volt)amps?(?![\\p{L}])", "ampere");
     phrase("thd[\\s-]?f\\b", " thd ");
     phrase("thd[\\s_-]r(?![\\p{L}\\d])(?=.*\\d|.*[abc]\\b)", " thdr ");
     phrase("(?<=\\b(?:l|phase |ph)[123abc]\\b.{0,40})thd[\\s_-]r\\b", " thdr ");
@@ -47,8 +52,10 @@ final class LogWords {
       Pattern.compile("(?i)[\\s_]*\\b(rms|trms|eff)\\b|(?<=[AV])rms");
   private static final Pattern SHARE = Pattern.compile("%\\s*(?:of|von|de|d')?\\s*(.*)");
   private static final Pattern PERCENTILE =
-      Pattern.compile("c?p\\d\\d|\\d\\d%|percentile|quantile|median");
+      Pattern.compile("c?p(?:5|\\d\\d)|\\d\\d%|percentile|quantile|median");
   private static final Pattern NUMBERED = Pattern.compile("(?i)(?:l|ph|phase)?[123]");
+  private static final Map<String, String> COLOURS =
+      Map.of("red", "r", "yellow", "y", "white", "y", "blue", "b");
   private static final Pattern DIGITS = Pattern.compile("0{0,2}\\d{1,2}");
 
   private final Set<Sense> senses = EnumSet.noneOf(Sense.class);
@@ -57,6 +64,7 @@ final class LogWords {
   private final List<String> unknown = new ArrayList<>();
   private Optional<Unit> unit = Optional.empty();
   private String shareOf = "";
+  private String circuit = "";
   private int order;
 
   private final boolean lettered;
@@ -76,6 +84,7 @@ final class LogWords {
    */
   static LogWords of(String heading, boolean lettered) {
     LogWords words = new LogWords(lettered);
+    words.circuit = Circuit.of(heading);
     String text = words.withoutUnit(plain(Circuit.without(heading)));
     List<String> all = new ArrayList<>();
     for (String part : BREAK.split(text)) {
@@ -153,6 +162,7 @@ final class LogWords {
   private static boolean namesPlace(String word) {
     String w = word.toLowerCase(Locale.ROOT);
     return STANDING.matcher(w).matches()
+        || COLOURS.containsKey(w)
         || w.matches("[1234]")
         || Vocabulary.sense(w).filter(s -> s == Sense.NEUTRAL || s == Sense.TOTAL).isPresent()
         || Symbol.of(w).filter(s -> !s.place().isEmpty()).isPresent();
@@ -176,6 +186,8 @@ final class LogWords {
     } else if (Vocabulary.sense(word).isPresent()) {
       senses.add(Vocabulary.sense(word).get());
       takeUnbalanceOf(word);
+    } else if (COLOURS.containsKey(word)) {
+      places.add(COLOURS.get(word));
     } else {
       Symbol.of(word).ifPresentOrElse(this::take, () -> unknown.add(word));
     }
@@ -195,6 +207,10 @@ final class LogWords {
   }
 
   private void takeNumber(int number, String before) {
+    if (before.length() > 1 && unknown.contains(before.toLowerCase(Locale.ROOT))) {
+      circuit = before.toLowerCase(Locale.ROOT) + " " + number;
+      return;
+    }
     Optional<Sense> sense = Vocabulary.sense(before);
     if (sense.filter(s -> s == Sense.HARMONIC || s == Sense.INDIVIDUAL_DISTORTION).isPresent()) {
       order = number;
@@ -311,6 +327,16 @@ final class LogWords {
   /** Conductors as written, in order. */
   List<String> places() {
     return places;
+  }
+
+  /** The panel, feeder or machine whose number it has; empty text for none. */
+  String circuit() {
+    return circuit;
+  }
+
+  /** Whether it says that values are those behind an instrument transformer. */
+  boolean saysSecondary() {
+    return unknown.contains("sec") || unknown.contains("secondary");
   }
 
   /** Whether nothing in it is understood. */

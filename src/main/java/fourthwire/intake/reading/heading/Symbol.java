@@ -37,7 +37,10 @@ record Symbol(List<Sense> senses, String place, int order, Optional<Unit> unit) 
               + "|(i|u|v)thd("
               + PLACE
               + ")?"
-              + STATISTIC);
+              + STATISTIC
+              + "|(i|u|v)("
+              + PLACE
+              + ")thdf?");
   private static final Pattern WITH_UNIT =
       Pattern.compile("(kvar|kva|kwh|kw|mw|var|va|ka|kv|w|a)(l?[123]n?|n|tot|total|sum|sys)");
   private static final Pattern ORDER_WORD =
@@ -120,11 +123,11 @@ record Symbol(List<Sense> senses, String place, int order, Optional<Unit> unit) 
       return Optional.empty();
     }
     List<Sense> senses = new ArrayList<>(List.of(Sense.DISTORTION));
-    for (int group : new int[] {2, 4, 5, 7}) {
+    for (int group : new int[] {2, 4, 5, 7, 8}) {
       senses.addAll(senses(m.group(group)));
     }
     return Optional.of(
-        new Symbol(senses, text(m.group(3)) + text(m.group(6)), 0, Optional.empty()));
+        new Symbol(senses, text(m.group(3)) + text(m.group(6)) + text(m.group(9)), 0, Optional.empty()));
   }
 
   private static Optional<Symbol> line(String word) {

@@ -9,21 +9,21 @@ import java.util.Optional;
 enum Unit {
   AMPERE(Kind.CURRENT, 1, "a", "amp", "amps", "ampere", "amperes", "arms", "aac", "aeff"),
   MILLIAMPERE(Kind.CURRENT, 1e-3, "ma"),
-  KILOAMPERE(Kind.CURRENT, 1e3, "ka"),
+  KILOAMPERE(Kind.CURRENT, 1e3, "ka", "kiloampere", "kiloamperes", "kiloamp", "kiloamps"),
   VOLT(Kind.VOLTAGE, 1, "v", "volt", "volts", "vrms", "vac", "veff"),
   MILLIVOLT(Kind.VOLTAGE, 1e-3, "mv"),
-  KILOVOLT(Kind.VOLTAGE, 1e3, "kv"),
+  KILOVOLT(Kind.VOLTAGE, 1e3, "kv", "kilovolt", "kilovolts"),
   WATT(Kind.ACTIVE, 1, "w", "watt", "watts"),
-  KILOWATT(Kind.ACTIVE, 1e3, "kw"),
-  MEGAWATT(Kind.ACTIVE, 1e6, "mw"),
+  KILOWATT(Kind.ACTIVE, 1e3, "kw", "kilowatt", "kilowatts"),
+  MEGAWATT(Kind.ACTIVE, 1e6, "mw", "megawatt", "megawatts"),
   VAR(Kind.REACTIVE, 1, "var", "vars"),
-  KILOVAR(Kind.REACTIVE, 1e3, "kvar", "kvars"),
+  KILOVAR(Kind.REACTIVE, 1e3, "kvar", "kvars", "kilovar", "kilovars"),
   MEGAVAR(Kind.REACTIVE, 1e6, "mvar"),
-  VOLTAMPERE(Kind.APPARENT, 1, "va"),
-  KILOVOLTAMPERE(Kind.APPARENT, 1e3, "kva"),
+  VOLTAMPERE(Kind.APPARENT, 1, "va", "voltampere", "voltamperes"),
+  KILOVOLTAMPERE(Kind.APPARENT, 1e3, "kva", "kilovoltampere", "kilovoltamperes"),
   MEGAVOLTAMPERE(Kind.APPARENT, 1e6, "mva"),
   WATTHOUR(Kind.ENERGY, 1, "wh"),
-  KILOWATTHOUR(Kind.ENERGY, 1e3, "kwh"),
+  KILOWATTHOUR(Kind.ENERGY, 1e3, "kwh", "kilowatthour", "kilowatthours"),
   MEGAWATTHOUR(Kind.ENERGY, 1e6, "mwh"),
   PERCENT(Kind.SHARE, 1, "%", "pct", "percent"),
   DEGREE(Kind.ANGLE, 1, "°", "deg", "degree", "degrees"),
@@ -74,6 +74,6 @@ enum Unit {
   static Optional<Unit> find(String text) {
     String name = text.trim();
     return Optional.ofNullable(BY_WORD.get(name.toLowerCase(Locale.ROOT)))
-        .filter(u -> u.factor != 1e6 || name.startsWith("M"));
+        .filter(u -> u.factor != 1e6 || name.startsWith("M") || name.startsWith("mega"));
   }
 }

@@ -48,17 +48,17 @@ final class Vocabulary {
   static {
     put(
         Sense.VOLTAGE,
-        "voltage voltages volt volts spannung tension tensione spanning voltaje u v");
+        "voltage voltages volt volts spannung tension tensione tensao spanning voltaje u v");
     put(
         Sense.CURRENT,
         "current currents amp amps ampere amperes strom stroom courant corriente corrente i");
-    put(Sense.POWER, "power leistung vermogen puissance potencia potenza pwr");
-    put(Sense.ACTIVE, "active real true wirkleistung wirk activa attiva actif p watt watts");
-    put(Sense.REACTIVE, "reactive blindleistung blind reactiva reattiva reactif q vars");
+    put(Sense.POWER, "power leistung vermogen puissance potencia potenza pwr kraft");
+    put(Sense.ACTIVE, "active real true wirkleistung wirk activa attiva ativa actif p watt watts");
+    put(Sense.REACTIVE, "reactive blindleistung blind reactiva reattiva reativa reactif q vars");
     put(Sense.APPARENT, "apparent scheinleistung schein schijnbaar apparente aparente s complex");
     put(Sense.POWER_FACTOR, "pf tpf lf powerfactor leistungsfaktor λ lambda");
     put(Sense.DISPLACEMENT, "cos cosphi cosφ dpf displacement phi φ");
-    put(Sense.FACTOR, "factor faktor facteur fattore facto fp");
+    put(Sense.FACTOR, "factor faktor facteur fattore fator facto fp");
     put(Sense.DISTORTION, "thd thdf distortion klirrfaktor");
     put(
         Sense.HARMONIC,
@@ -80,7 +80,7 @@ final class Vocabulary {
     put(Sense.NEUTRAL, "neutral neutre neutro neut nul neutralleiter nulleider");
     put(
         Sense.LINE,
-        "phase phases ph line fase leiter ligne linea ltn ltl ll ln conductor ch channel");
+        "phase phases ph line leg pole fase fas faza faze fasa vaihe leiter ligne linea linha ltn ltl ll ln conductor ch channel");
     put(Sense.MIN, "min minimum lowest minimal minimo mini mn");
     put(Sense.MAX, "max maximum highest maximal maximo maxi mx");
     put(
@@ -100,7 +100,8 @@ final class Vocabulary {
             + " distortionpower nonactive signalling rvc quality samples sample no nr number id h0"
             + " transient transients impulse impulses surge surges inrush"
             + " rotation humidity speed alarm ground earth gnd pe residual leakage erde erdstrom"
-            + " tierra terre nominal rated setpoint limit threshold target delta difference diff");
+            + " tierra terre nominal rated setpoint limit threshold target delta difference diff"
+            + " forecast baseline predicted expected budget cost price tariff");
     put(
         Sense.NOTHING,
         "rms trms true-rms eff efficace effektiv value values wert valeur measured to the of import"

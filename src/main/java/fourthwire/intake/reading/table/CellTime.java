@@ -119,7 +119,7 @@ record CellTime(Numerals date, long nanoOfDay, OptionalInt offsetSeconds) {
               String clock = rest.substring(found.end());
               return clock.isBlank()
                   ? Optional.of(new CellTime(found.date().onWeekday(day), 0, OptionalInt.empty()))
-                  : ClockText.of(clock.replaceFirst("^[t\\s,_-]+", ""))
+                  : ClockText.of(clock.replaceFirst("^[t:\\s,_-]+", ""))
                       .map(
                           c ->
                               new CellTime(

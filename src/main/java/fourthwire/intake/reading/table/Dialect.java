@@ -49,7 +49,19 @@ record Dialect(
             () ->
                 new TableException(
                     "No table was found: a row of headings, and below it rows of as many values,"
-                        + " separated by comma, semicolon or tab."));
+                        + " separated by comma, semicolon or tab, one row for each time.",
+                    widest(head, length, charset)));
+  }
+
+  /** The first row of the most cells. */
+  private static List<String> widest(byte[] head, int length, Charset charset) {
+    List<String> widest = List.of();
+    for (char separator : new char[] {',', ';', '\t', '|'}) {
+      for (Line line : lines(head, length, separator, charset)) {
+        widest = line.cells().size() > Math.max(1, widest.size()) ? line.cells() : widest;
+      }
+    }
+    return widest;
   }
 
   private static List<Line> lines(byte[] head, int length, char separator, Charset charset) {

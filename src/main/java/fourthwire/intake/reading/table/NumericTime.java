@@ -31,18 +31,34 @@ final class NumericTime {
       if (isTimeHeading(headings.get(k))) {
         Optional<TimeColumns> counted = of(table, rows, List.of(k));
         if (counted.isPresent()) {
-          return counted.get();
+          return withFraction(table, rows, counted.get());
         }
       }
     }
     return elapsed(headings);
   }
 
-  private static boolean isTimeHeading(String heading) {
+  /** Whole days have the fraction of the day in the column of times beside them. */
+  private static TimeColumns withFraction(
+      TextTable table, List<List<String>> rows, TimeColumns days) {
+    int day = days.columns().get(0);
+    int next = day + 1;
+    boolean whole =
+        days.kind() == TimeColumns.Kind.SERIAL
+            && rows.stream().allMatch(r -> r.get(day).matches("\\d{5}([.,]0*)?"));
+    return whole
+            && next < table.headings().size()
+            && isTimeHeading(table.headings().get(next))
+            && rows.stream().allMatch(r -> r.get(next).matches("0?[.,]\\d+|0"))
+        ? new TimeColumns(List.of(day, next), TimeColumns.Kind.SERIAL, 1)
+        : days;
+  }
+
+  static boolean isTimeHeading(String heading) {
     return heading
         .toLowerCase(Locale.ROOT)
         .matches(
-            ".*(time|date|stamp|epoch|unix|zeit|datum|fecha|hora|heure|tijd|\\butc\\b|\\bts\\b).*");
+            ".*(time|date|stamp|epoch|unix|zeit|datum|fecha|hora|heure|tijd|\\bora\\b|orario|\\btid\\b|\\bkl\\b|godzina|\\baika\\b|kello|\\bčas\\b|\\bcas\\b|\\butc\\b|\\bts\\b).*");
   }
 
   /** Calendar time as a number, if it is that. */

@@ -65,7 +65,7 @@ public record TimeColumns(List<Integer> columns, Kind kind, double unitS) {
     }
     int date = start(table, dates);
     boolean whole = isWhole(rows, date);
-    List<Integer> columns = whole ? List.of(date) : withClock(rows, date, width);
+    List<Integer> columns = whole ? List.of(date) : withClock(table, rows, date);
     TimeColumns calendar = new TimeColumns(columns, Kind.CALENDAR, 1);
     return whole || columns.size() > 1
         ? calendar
@@ -108,24 +108,29 @@ public record TimeColumns(List<Integer> columns, Kind kind, double unitS) {
   }
 
   private static boolean isWhole(List<List<String>> rows, int date) {
-    return most(rows, r -> r.get(date).matches("(?i).*\\d:\\d\\d.*|.*\\d[t ]\\d{4,6}z?"));
+    return most(rows, r -> r.get(date).matches("(?i).*\\d:\\d\\d.*|.*\\d[t ]\\d{4,6}(z|[-+]\\d{2}.*)?"));
   }
 
   /** A date alone has its time of day in the column that looks like one, the nearest behind it. */
-  private static List<Integer> withClock(List<List<String>> rows, int date, int width) {
+  private static List<Integer> withClock(TextTable table, List<List<String>> rows, int date) {
+    int width = table.headings().size();
     for (int k = 0; k < width; k++) {
       int column = (date + 1 + k) % width;
-      if (column != date && most(rows, r -> isClock(r.get(column), r.get(date)))) {
+      boolean named = NumericTime.isTimeHeading(table.headings().get(column));
+      if (column != date && most(rows, r -> isClock(r.get(column), r.get(date), named))) {
         return List.of(date, column);
       }
     }
     return List.of(date);
   }
 
-  /** Digits alone are a time of day only beside a date in digits alone. */
-  private static boolean isClock(String cell, String date) {
+  /**
+   * Digits alone are a time of day only beside a date in digits alone, and those with a point only
+   * below a heading that names a time.
+   */
+  private static boolean isClock(String cell, String date, boolean named) {
     boolean digits = date.matches("\\d{8}") && cell.matches("\\d{4}|\\d{6}");
-    return (digits || cell.matches("\\d{1,2}[:.h]\\d{2}.*"))
+    return (digits || cell.matches(named ? "\\d{1,2}[:.h]\\d{2}.*" : "\\d{1,2}[:h]\\d{2}.*"))
         && ClockText.of(cell.toLowerCase(Locale.ROOT)).isPresent();
   }
 
@@ -172,6 +177,7 @@ public record TimeColumns(List<Integer> columns, Kind kind, double unitS) {
           .flatMap(t -> t.local(order).map(local -> new At(local, offset(t.offsetSeconds()))));
     }
     double value = row.value(columns.get(0));
+    value += columns.size() > 1 ? row.value(columns.get(1)) : 0;
     boolean can = NumericTime.isSerial(value) || kind == Kind.EPOCH && value * unitS > 1e8;
     return can ? Optional.of(counted(value)) : Optional.empty();
   }

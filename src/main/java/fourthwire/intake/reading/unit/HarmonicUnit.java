@@ -62,6 +62,10 @@ final class HarmonicUnit {
     Optional<double[]> made = fundamental.map(f -> SampledColumns.quotient(sum, f, 100));
     boolean percent = near(share, 1 - NEAR, 1 + NEAR / 10);
     boolean amount = near(SampledColumns.ratioOf(made, distortionPercent), 1 - NEAR, 1 + NEAR / 10);
+    if (percent && amount) {
+      percent = isSteady(Optional.of(sum));
+      amount = isSteady(made);
+    }
     if (percent != amount) {
       reason = "as together they make the distortion.";
       return Optional.of(percent);
@@ -72,6 +76,15 @@ final class HarmonicUnit {
       return Optional.of(true);
     }
     return Optional.empty();
+  }
+
+  /** Whether it makes the distortion in nearly every row. */
+  private boolean isSteady(Optional<double[]> made) {
+    double[] share =
+        made.flatMap(m -> distortionPercent.map(d -> SampledColumns.quotient(m, d, 1)))
+            .orElse(new double[0]);
+    return near(SampledColumns.percentile(share, 5), 0.97, 1.03)
+        && near(SampledColumns.percentile(share, 95), 0.97, 1.03);
   }
 
   private static boolean near(double x, double from, double to) {

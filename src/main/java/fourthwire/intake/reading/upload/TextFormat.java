@@ -37,7 +37,8 @@ final class TextFormat implements Format {
     try {
       return new TextFormat(part, TextTable.of(part::open));
     } catch (TableException e) {
-      throw new ReadingRefusedException(part.name() + ": " + e.getMessage());
+      throw new ReadingRefusedException(
+          part.name() + ": " + e.getMessage(), e.columns(), List.of());
     }
   }
 
