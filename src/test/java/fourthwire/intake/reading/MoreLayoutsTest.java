@@ -227,14 +227,20 @@ class MoreLayoutsTest {
         .column("White amps", "L2.rms_a")
         .column("Blue amps", "L3.rms_a")
         .column("Neutral amps", "N.rms_a");
-    layout("length of the mean in the heading", LayoutWriter.of(",", '.').time("Time", "yyyy-MM-dd HH:mm"))
+    layout(
+            "length of the mean in the heading",
+            LayoutWriter.of(",", '.').time("Time", "yyyy-MM-dd HH:mm"))
         .lines("Avg. RMS current - phase # - 10 min [A]", "rms_a")
         .lines("Avg. THD current - phase # - 10 min [%]", "current_thd_percent");
-    layout("direct current beside the grid", LayoutWriter.of(",", '.').time("Time", "yyyy-MM-dd HH:mm"))
+    layout(
+            "direct current beside the grid",
+            LayoutWriter.of(",", '.').time("Time", "yyyy-MM-dd HH:mm"))
         .lines("Grid current L# (A)", "rms_a")
         .column("PV1 voltage (V)", "")
         .column("Total input power (kW)", "");
-    layout("harmonics that make the distortion, without units", LayoutWriter.of(",", '.').time("Time", "yyyy-MM-dd HH:mm"))
+    layout(
+            "harmonics that make the distortion, without units",
+            LayoutWriter.of(",", '.').time("Time", "yyyy-MM-dd HH:mm"))
         .lines("I#", "rms_a")
         .lines("I#THD", "current_thd_percent")
         .lines("I#H3", "current_h3_percent")

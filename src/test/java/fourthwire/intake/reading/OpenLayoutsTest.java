@@ -106,7 +106,10 @@ class OpenLayoutsTest {
     layout(
         "lines counted from 0, or components",
         "columns.I1 (A)",
-        dated().column("I0 (A)", "L1.rms_a").column("I1 (A)", "L2.rms_a").column("I2 (A)", "L3.rms_a"));
+        dated()
+            .column("I0 (A)", "L1.rms_a")
+            .column("I1 (A)", "L2.rms_a")
+            .column("I2 (A)", "L3.rms_a"));
     layout(
         "amps behind the instrument transformer",
         "columns.I1 sec (A)",

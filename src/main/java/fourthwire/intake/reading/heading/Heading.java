@@ -40,7 +40,8 @@ public record Heading(
 
   private static final Pattern LETTERED = Pattern.compile("(?i)(?<![\\p{L}])vb(?![\\p{L}])");
   private static final Pattern DIRECT =
-      Pattern.compile("(?i)(?<![\\p{L}])(?:dc|mppt|string|pv(?=[\\s_-]*\\d))[\\s_-]*\\d*(?![\\p{L}])");
+      Pattern.compile(
+          "(?i)(?<![\\p{L}])(?:dc|mppt|string|pv(?=[\\s_-]*\\d))[\\s_-]*\\d*(?![\\p{L}])");
   private static final Pattern PUT_IN = Pattern.compile("(?i)(?<![\\p{L}])input(?![\\p{L}])");
   private static final Pattern LINE_ZERO =
       Pattern.compile("(?i)(?<![\\p{L}])(phase|ph|line|l|i|v|u|ch)[\\s_-]*0(?![\\d.])");
@@ -71,9 +72,11 @@ public record Heading(
   }
 
   /** Beside volts and amps of direct current the power put in is theirs. */
-  private static void passOverDirectCurrent(Map<String, LogWords> words, Map<String, Heading> read) {
+  private static void passOverDirectCurrent(
+      Map<String, LogWords> words, Map<String, Heading> read) {
     if (words.keySet().stream().anyMatch(h -> DIRECT.matcher(h).find())) {
-      read.replaceAll((name, h) -> DIRECT.matcher(name).find() || PUT_IN.matcher(name).find() ? NONE : h);
+      read.replaceAll(
+          (name, h) -> DIRECT.matcher(name).find() || PUT_IN.matcher(name).find() ? NONE : h);
     }
   }
 

@@ -38,7 +38,8 @@ final class LogWords {
     phrase("cos\\s*[-_(]?\\s*(phi|φ)\\s*\\)?", " cosphi ");
     phrase("line[\\s-]+to[\\s-]+(line|neutral)", " ");
     phrase(
-        "(?<!harmonic |harm |order |h)(?<![\\p{L}\\d])(?:10|15|30|60)[\\s_-]*(?:min|minutes?|sec|s)(?!\\p{L})",
+        "(?<!harmonic |harm |order"
+            + " |h)(?<![\\p{L}\\d])(?:10|15|30|60)[\\s_-]*(?:min|minutes?|sec|s)(?!\\p{L})",
         " ");
     phrase("k[\\s-]factor", " kfactor ");
     phrase("(?<=volt)[\\s-]+(?=amp)|(?<=watt)[\\s-]+(?=hour)|(?<=kilo)[\\s-]+(?=[vwa])", "");

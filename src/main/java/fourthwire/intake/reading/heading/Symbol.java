@@ -127,7 +127,8 @@ record Symbol(List<Sense> senses, String place, int order, Optional<Unit> unit) 
       senses.addAll(senses(m.group(group)));
     }
     return Optional.of(
-        new Symbol(senses, text(m.group(3)) + text(m.group(6)) + text(m.group(9)), 0, Optional.empty()));
+        new Symbol(
+            senses, text(m.group(3)) + text(m.group(6)) + text(m.group(9)), 0, Optional.empty()));
   }
 
   private static Optional<Symbol> line(String word) {

@@ -80,7 +80,8 @@ final class Vocabulary {
     put(Sense.NEUTRAL, "neutral neutre neutro neut nul neutralleiter nulleider");
     put(
         Sense.LINE,
-        "phase phases ph line leg pole fase fas faza faze fasa vaihe leiter ligne linea linha ltn ltl ll ln conductor ch channel");
+        "phase phases ph line leg pole fase fas faza faze fasa vaihe leiter ligne linea linha ltn"
+            + " ltl ll ln conductor ch channel");
     put(Sense.MIN, "min minimum lowest minimal minimo mini mn");
     put(Sense.MAX, "max maximum highest maximal maximo maxi mx");
     put(

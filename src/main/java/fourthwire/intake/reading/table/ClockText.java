@@ -19,7 +19,8 @@ record ClockText(long nanoOfDay, OptionalInt offsetSeconds) {
       Pattern.compile(
           "(\\d{1,2})[:.h]\\s?(\\d{2})(?:[:.]\\s?(\\d{2})(?:[.,:](\\d{1,9}))?)?(?:\\s*([ap])\\.?\\s?m\\.?)?\\s*"
               + "(?:\\(?([a-z]{1,5}|(?:utc|gmt)?\\s?[-+\u2212]\\d{1,2}:?(?:\\d{2})?)\\)?)?(?:\\[[\\w/]+\\])?\\s*");
-  private static final Pattern COMPACT = Pattern.compile("(\\d{2})(\\d{2})(\\d{2})?(z|[-+]\\d{2}:?(?:\\d{2})?)?");
+  private static final Pattern COMPACT =
+      Pattern.compile("(\\d{2})(\\d{2})(\\d{2})?(z|[-+]\\d{2}:?(?:\\d{2})?)?");
 
   /** Abbreviations with one meaning; hours from UTC. */
   private static final Map<String, Double> ZONES =

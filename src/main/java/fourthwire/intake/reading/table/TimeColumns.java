@@ -108,7 +108,8 @@ public record TimeColumns(List<Integer> columns, Kind kind, double unitS) {
   }
 
   private static boolean isWhole(List<List<String>> rows, int date) {
-    return most(rows, r -> r.get(date).matches("(?i).*\\d:\\d\\d.*|.*\\d[t ]\\d{4,6}(z|[-+]\\d{2}.*)?"));
+    return most(
+        rows, r -> r.get(date).matches("(?i).*\\d:\\d\\d.*|.*\\d[t ]\\d{4,6}(z|[-+]\\d{2}.*)?"));
   }
 
   /** A date alone has its time of day in the column that looks like one, the nearest behind it. */
