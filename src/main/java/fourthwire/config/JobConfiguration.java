@@ -75,8 +75,9 @@ class JobConfiguration {
   }
 
   @Bean
-  StoredLogs storedLogs(ReadingRepository readings, SeriesRepository series) {
-    return new StoredLogs(readings, series);
+  StoredLogs storedLogs(
+      ReadingRepository readings, SeriesRepository series, CorrectionRepository corrections) {
+    return new StoredLogs(readings, series, corrections);
   }
 
   @Bean

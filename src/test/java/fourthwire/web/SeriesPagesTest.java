@@ -4,6 +4,7 @@ import static org.assertj.core.api.Assertions.assertThat;
 
 import fourthwire.metering.ReadingMapping;
 import fourthwire.metering.ReadingRepository;
+import fourthwire.metering.log.InventedBoard;
 import fourthwire.testsupport.Http.Answer;
 import fourthwire.testsupport.SmallCapture;
 import fourthwire.testsupport.SmallLog;
@@ -111,6 +112,44 @@ class SeriesPagesTest extends PagesTest {
         .doesNotContain("??");
     assertThat(page("/readings/" + log + "/orders?of=L1.voltage_percent&scale=common"))
         .contains("Voltage of L1", ">5th<", "Limit", "6\u202f%");
+  }
+
+  /** A clamp turned round for some days: as read its power was below zero. */
+  @Test
+  void rowsAreShownAsCorrectedOrAsRead() {
+    InventedBoard board = new InventedBoard(4, 2);
+    board.scale("L2.active_w", 1440, 2016, -1);
+    long turned = readings.add(addition("M6", board.reading(), site));
+    String series = "/readings/" + turned + "/series?show=active_w";
+    assertThat(page(series)).contains("rows as read").doesNotContain("id=\"rows\"");
+    assertThat(
+            http()
+                .send(
+                    "POST",
+                    "/readings/" + turned + "/corrections",
+                    "application/x-www-form-urlencoded",
+                    "finding=0&correction=0")
+                .status())
+        .isEqualTo(302);
+    assertThat(page(series))
+        .contains("rows as corrected; thin line: mean as read", "class=\"before\"", "rows=corrected");
+    String asRead = page(series + "&rows=read");
+    assertThat(asRead).contains("rows as read", "rows=read").doesNotContain("class=\"before\"");
+    String spread = "/readings/" + turned + "/spread?show=active_w";
+    assertThat(page(spread)).contains("rows as corrected; thin line: as read", "trace before");
+    assertThat(page(spread + "&rows=read")).contains("rows as read").doesNotContain("trace before");
+    String api = "/api/v1/readings/" + turned + "/series?quantity=L2.active_w&points=2&rows=";
+    assertThat(least(api + "read")).isNegative();
+    assertThat(least(api + "corrected")).isPositive();
+    assertThat(http().get(api + "best").status()).isEqualTo(400);
+  }
+
+  private double least(String address) {
+    double least = Double.POSITIVE_INFINITY;
+    for (tools.jackson.databind.JsonNode step : http().get(address).json().path("steps")) {
+      least = Math.min(least, step.path("min").asDouble(Double.POSITIVE_INFINITY));
+    }
+    return least;
   }
 
   /** One day has half its rows: 12 of 24 hours. */

@@ -1,10 +1,13 @@
 package fourthwire.jobs.series;
 
 import fourthwire.jobs.measured.SiteZone;
+import fourthwire.metering.Correction;
 import fourthwire.metering.LogResult;
 import fourthwire.metering.Period;
 import fourthwire.metering.ReadingRepository;
 import fourthwire.metering.SeriesRepository;
+import fourthwire.metering.correction.CorrectedSeries;
+import fourthwire.metering.correction.CorrectionRepository;
 import fourthwire.metering.reduce.DayCoverage;
 import fourthwire.metering.reduce.HourMeans;
 import fourthwire.metering.reduce.LogSpan;
@@ -12,30 +15,85 @@ import fourthwire.metering.reduce.StepPercentiles;
 import fourthwire.metering.reduce.StepValues;
 import fourthwire.metering.reduce.TimeSteps;
 import fourthwire.metering.reduce.ValuesBySize;
+import fourthwire.metering.series.Series;
 import fourthwire.site.Survey;
+import java.time.Instant;
 import java.time.ZoneId;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.LongSummaryStatistics;
 import java.util.Optional;
+import java.util.stream.LongStream;
 
 /**
- * A log and what is asked of its rows as read; its days and hours are the site's. Not thread-safe.
+ * A log and what is asked of its rows, as read or as corrected; its days and hours are the site's.
+ * Not thread-safe.
  */
 public final class StoredLog {
   private final ReadingRepository.Entry entry;
   private final Survey survey;
   private final SeriesRepository series;
+  private final CorrectionRepository corrections;
+  private final Optional<CorrectedRows> corrected;
   private final LogSpan.Source chunks;
   private final LogResult log;
   private final ZoneId zone;
 
-  StoredLog(ReadingRepository.Entry entry, Survey survey, SeriesRepository series) {
+  private StoredLog(
+      ReadingRepository.Entry entry,
+      Survey survey,
+      SeriesRepository series,
+      CorrectionRepository corrections,
+      Optional<CorrectedRows> corrected,
+      LogResult log) {
     this.entry = entry;
     this.survey = survey;
     this.series = series;
-    this.chunks = series.chunks(entry.id());
-    this.log = entry.reading().log().orElseThrow();
+    this.corrections = corrections;
+    this.corrected = corrected;
+    this.chunks =
+        corrected.<LogSpan.Source>map(c -> c).orElseGet(() -> series.chunks(entry.id()));
+    this.log = log;
     this.zone = SiteZone.of(survey);
+  }
+
+  static StoredLog asRead(
+      ReadingRepository.Entry entry,
+      Survey survey,
+      SeriesRepository series,
+      CorrectionRepository corrections) {
+    LogResult log = entry.reading().log().orElseThrow();
+    return new StoredLog(entry, survey, series, corrections, Optional.empty(), log);
+  }
+
+  /** The same log with the corrections that hold; empty where none does. */
+  public Optional<StoredLog> corrected() {
+    List<Correction> holding =
+        corrections.ofReading(entry.id()).stream()
+            .filter(CorrectionRepository.Entry::holds)
+            .map(CorrectionRepository.Entry::correction)
+            .toList();
+    return holding.isEmpty()
+        ? Optional.empty()
+        : corrections
+            .cleaned(entry.id())
+            .flatMap(cleaned -> series.series(entry.id()).map(read -> with(read, holding, cleaned)));
+  }
+
+  private StoredLog with(
+      Series read, List<Correction> holding, CorrectionRepository.Cleaned cleaned) {
+    CorrectedRows rows = new CorrectedRows(new CorrectedSeries(read, holding));
+    return new StoredLog(entry, survey, series, corrections, Optional.of(rows), cleaned.log());
+  }
+
+  /** Whether its rows are those as corrected. */
+  public boolean isCorrected() {
+    return corrected.isPresent();
+  }
+
+  /** Whether a quantity's rows are others than those as read. */
+  public boolean changes(String quantity) {
+    return corrected.filter(c -> c.changes(quantity)).isPresent();
   }
 
   /** The reading. */
@@ -55,7 +113,19 @@ public final class StoredLog {
 
   /** From its first row to the end of its last. */
   public Period period() {
-    return entry.reading().period().orElseThrow();
+    return corrected
+        .filter(CorrectedRows::changesRows)
+        .map(c -> period(c.times()))
+        .orElseGet(() -> entry.reading().period().orElseThrow());
+  }
+
+  /** Rows left out or another clock can move it. */
+  private Period period(List<long[]> times) {
+    LongSummaryStatistics all =
+        times.stream().flatMapToLong(LongStream::of).summaryStatistics();
+    return new Period(
+        Instant.ofEpochMilli(all.getMin()),
+        Instant.ofEpochMilli(all.getMax()).plusMillis(intervalMillis()));
   }
 
   /** Length of a row, milliseconds. */
@@ -134,9 +204,9 @@ public final class StoredLog {
         zone);
   }
 
-  /** What a quantity was by week, as stored when the log was read. */
+  /** What a quantity was by week, as stored when the log was read; empty where that changed. */
   public Optional<SeriesRepository.Weeks> weeks(String quantity) {
-    return series.weeks(entry.id(), quantity);
+    return changes(quantity) ? Optional.empty() : series.weeks(entry.id(), quantity);
   }
 
   private LogSpan span(long fromMillis, long toMillis) {

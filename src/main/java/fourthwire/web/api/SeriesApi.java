@@ -49,7 +49,7 @@ class SeriesApi {
       description =
           "The span is cut into the shortest round steps of which it has no more than points:"
               + " multiples of the log's interval to an hour, then local hours, days, weeks and"
-              + " months. Each tells the least, mean and largest value of the rows as read in it.")
+              + " months. Each tells the least, mean and largest value of the rows in it.")
   @ApiResponse(
       responseCode = "200",
       description = "The steps in order; one without rows has count 0",
@@ -71,8 +71,16 @@ class SeriesApi {
               schema =
                   @Schema(type = "integer", minimum = "2", maximum = "5000", defaultValue = "720"))
           @RequestParam(defaultValue = "720")
-          int points) {
-    StoredLog log = log(reading);
+          int points,
+      @Parameter(
+              description = "Which rows: as read, or as corrected where corrections hold",
+              schema =
+                  @Schema(
+                      allowableValues = {"read", "corrected"},
+                      defaultValue = "read"))
+          @RequestParam(defaultValue = "read")
+          String rows) {
+    StoredLog log = rows(log(reading), rows);
     if (points < 2 || points > MOST_POINTS) {
       throw bad("points " + points + " is not among 2 to " + MOST_POINTS);
     }
@@ -116,6 +124,14 @@ class SeriesApi {
     return logs.find(reading, this::survey)
         .orElseThrow(
             () -> new MissingException("there is no reading " + reading + " that is a log"));
+  }
+
+  private static StoredLog rows(StoredLog log, String rows) {
+    return switch (rows) {
+      case "read" -> log;
+      case "corrected" -> log.corrected().orElse(log);
+      default -> throw bad("rows \"" + rows + "\" is not among read, corrected");
+    };
   }
 
   private Survey survey(long site) {

@@ -7,6 +7,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.stream.DoubleStream;
+import java.util.stream.IntStream;
 
 /**
  * Quantities over time: of each step the room between its least and largest value filled, its mean
@@ -23,6 +24,7 @@ public final class SeriesPlot {
   private static final double AXIS_PX = 26;
   private static final int STEPS = 3;
   private static final double FURTHEST_LIMIT = 2;
+  private static final double FURTHEST_BEFORE = 3;
   private static final int UNITS_A_PX = 4;
   private static final int MOST_LANES = 5;
   private static final int PASSED_UNITS = 14;
@@ -44,6 +46,8 @@ public final class SeriesPlot {
    * @param about its figures, written beside the name
    * @param brief the same for a narrow picture
    * @param classes {@code l1} to {@code n}, or others
+   * @param before the same before it was corrected, its mean drawn as a thin line where it lies
+   *     near the values
    * @param bounds drawn where they are not far off the values
    */
   public record Strip(
@@ -52,6 +56,7 @@ public final class SeriesPlot {
       String brief,
       String classes,
       StepValues values,
+      Optional<StepValues> before,
       List<Bound> bounds) {}
 
   /** A limit; steps that pass it are marked along the top of the strip. */
@@ -122,7 +127,7 @@ public final class SeriesPlot {
     Svg svg = brushed("plot overview", alternative, OVERVIEW_PX + AXIS_PX, axis);
     axis.draw(svg, OVERVIEW_PX);
     Manner manner = new Manner(zone, 1, "", false);
-    Strip strip = new Strip("", "", "", classes, whole, List.of());
+    Strip strip = new Strip("", "", "", classes, whole, Optional.empty(), List.of());
     scale(List.of(strip), 1)
         .ifPresent(s -> new SeriesPlot(s, manner, svg).values(strip, 0, OVERVIEW_PX));
     double left = Math.max(0, axis.at(from));
@@ -154,6 +159,11 @@ public final class SeriesPlot {
     double high = highs.filter(v -> !Double.isNaN(v)).max().orElse(Double.NaN);
     double from = low;
     double to = high;
+    for (double mean : means(strips, factor)) {
+      boolean near = Math.max(mean, high) - Math.min(mean, low) <= FURTHEST_BEFORE * (high - low);
+      to = near ? Math.max(to, mean) : to;
+      from = near ? Math.min(from, mean) : from;
+    }
     for (Strip strip : strips) {
       for (Bound bound : strip.bounds()) {
         double value = factor * bound.value();
@@ -162,6 +172,16 @@ public final class SeriesPlot {
       }
     }
     return Scale.holding(from, to, STEPS);
+  }
+
+  /** The means before corrections. */
+  private static double[] means(List<Strip> strips, double factor) {
+    return strips.stream()
+        .flatMap(s -> s.before().stream())
+        .flatMapToDouble(b -> IntStream.range(0, b.steps().count()).mapToDouble(b::mean))
+        .filter(v -> !Double.isNaN(v))
+        .map(v -> factor * v)
+        .toArray();
   }
 
   /** Whether the strips' picture shows a limit: those far off the values are not drawn. */
@@ -232,6 +252,9 @@ public final class SeriesPlot {
     svg.stretched(
         top, height, path.width(), Math.round(UNITS_A_PX * height), "class", strip.classes());
     svg.add("path", "class", "spread", "d", path.band(v::max, v::min));
+    strip
+        .before()
+        .ifPresent(b -> svg.add("path", "class", "before", "d", path.line(k -> onScale(b, k))));
     svg.add("path", "class", "trace", "d", path.line(v::mean));
     String passed =
         path.bars(k -> strip.bounds().stream().anyMatch(b -> b.isPassed(v, k)), PASSED_UNITS);
@@ -239,6 +262,12 @@ public final class SeriesPlot {
       svg.add("path", "class", "passed", "d", passed);
     }
     svg.close();
+  }
+
+  /** A mean before corrections; NaN beyond the picture. */
+  private double onScale(StepValues before, int step) {
+    double mean = before.mean(step);
+    return scale.holds(manner.factor() * mean) ? mean : Double.NaN;
   }
 
   private long depth(double value, double height) {

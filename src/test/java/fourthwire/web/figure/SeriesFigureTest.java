@@ -8,6 +8,7 @@ import fourthwire.metering.reduce.ValuesBySize;
 import java.time.Instant;
 import java.time.ZoneId;
 import java.util.List;
+import java.util.Optional;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 import java.util.stream.IntStream;
@@ -30,7 +31,7 @@ class SeriesFigureTest {
 
   private static String plot(List<SeriesPlot.Bound> bounds, List<SeriesPlot.Note> notes) {
     SeriesPlot.Strip strip =
-        new SeriesPlot.Strip("N", "0 to 10 A", "0 to 10 A", "n", values(), bounds);
+        new SeriesPlot.Strip("N", "0 to 10 A", "0 to 10 A", "n", values(), Optional.empty(), bounds);
     return SeriesPlot.draw(
         List.of(strip), notes, new SeriesPlot.Manner(UTC, 1, "A", false), "currents");
   }

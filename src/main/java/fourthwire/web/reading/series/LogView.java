@@ -9,18 +9,25 @@ import fourthwire.web.support.Names;
 import fourthwire.web.support.Words;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 
-/** What the pages of a log share: the part shown, its limits, its names and words. */
+/** What the pages of a log share: the rows and part shown, its limits, its names and words. */
 final class LogView {
+  /** Asks for the rows as read of a log that has corrections. */
+  static final String AS_READ = "read";
+
   private final StoredLog log;
+  private final Optional<StoredLog> asRead;
   private final Span span;
   private final Words words;
   private final Names names;
   private final Moments moments;
   private final LogLimits limits;
 
-  LogView(StoredLog log, Span span, Words words) {
+  /** Of a log; {@code asRead} empty where no correction holds. */
+  LogView(StoredLog log, Optional<StoredLog> asRead, Span span, Words words) {
     this.log = log;
+    this.asRead = asRead;
     this.span = span;
     this.words = words;
     this.names = new Names(log.survey().settings().practice());
@@ -30,6 +37,16 @@ final class LogView {
 
   StoredLog log() {
     return log;
+  }
+
+  /** The rows as read of a quantity that is shown otherwise. */
+  Optional<StoredLog> before(String quantity) {
+    return asRead.filter(r -> log.changes(quantity));
+  }
+
+  /** Which rows are shown, in words. */
+  String rows() {
+    return words.of(log.isCorrected() ? "log.rows.corrected" : "log.rows.read");
   }
 
   Span span() {
@@ -71,6 +88,8 @@ final class LogView {
         span.from(),
         span.to(),
         span.isUnderstood(),
+        asRead.isPresent(),
+        asRead.isEmpty() || log.isCorrected() ? "" : AS_READ,
         span.ways());
   }
 

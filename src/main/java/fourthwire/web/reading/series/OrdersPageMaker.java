@@ -66,7 +66,7 @@ final class OrdersPageMaker {
         chosen,
         common,
         chosen.isEmpty() ? "" : sourceName(chosen),
-        words.of("orders.step." + step),
+        words.of("orders.step." + step, view.rows()),
         new OrdersPage.Heads(
             words.of("orders.typical." + step, unit(chosen)),
             words.of("orders.highest." + step, unit(chosen)),

@@ -6,6 +6,7 @@ import fourthwire.site.SiteRepository;
 import fourthwire.site.Survey;
 import fourthwire.web.support.NotFoundException;
 import fourthwire.web.support.Words;
+import java.util.Optional;
 import org.springframework.stereotype.Controller;
 import org.springframework.ui.Model;
 import org.springframework.web.bind.annotation.GetMapping;
@@ -33,9 +34,10 @@ class SeriesController {
       @RequestParam(name = "together", defaultValue = "false") boolean together,
       @RequestParam(name = "from", defaultValue = "") String from,
       @RequestParam(name = "to", defaultValue = "") String to,
+      @RequestParam(name = "rows", defaultValue = "") String rows,
       Model model) {
     StoredLog log = log(reading, model);
-    model.addAttribute("page", new SeriesPageMaker(view(log, from, to)).make(show, also, together));
+    model.addAttribute("page", new SeriesPageMaker(view(log, rows, from, to)).make(show, also, together));
     return "reading/series";
   }
 
@@ -45,9 +47,10 @@ class SeriesController {
       @RequestParam(name = "show", defaultValue = "rms_a") String show,
       @RequestParam(name = "from", defaultValue = "") String from,
       @RequestParam(name = "to", defaultValue = "") String to,
+      @RequestParam(name = "rows", defaultValue = "") String rows,
       Model model) {
     StoredLog log = log(reading, model);
-    model.addAttribute("page", new SpreadPageMaker(view(log, from, to)).make(show));
+    model.addAttribute("page", new SpreadPageMaker(view(log, rows, from, to)).make(show));
     return "reading/spread";
   }
 
@@ -58,15 +61,19 @@ class SeriesController {
       @RequestParam(name = "scale", defaultValue = "own") String scale,
       @RequestParam(name = "from", defaultValue = "") String from,
       @RequestParam(name = "to", defaultValue = "") String to,
+      @RequestParam(name = "rows", defaultValue = "") String rows,
       Model model) {
     StoredLog log = log(reading, model);
     model.addAttribute(
-        "page", new OrdersPageMaker(view(log, from, to)).make(of, scale.equals("common")));
+        "page", new OrdersPageMaker(view(log, rows, from, to)).make(of, scale.equals("common")));
     return "reading/orders";
   }
 
-  private LogView view(StoredLog log, String from, String to) {
-    return new LogView(log, Span.of(log, from, to), words);
+  /** Of the rows as corrected where corrections hold, unless those as read are asked for. */
+  private LogView view(StoredLog log, String rows, String from, String to) {
+    Optional<StoredLog> corrected = log.corrected();
+    StoredLog shown = rows.equals(LogView.AS_READ) ? log : corrected.orElse(log);
+    return new LogView(shown, corrected.map(c -> log), Span.of(shown, from, to), words);
   }
 
   private StoredLog log(long reading, Model model) {

@@ -29,6 +29,8 @@ record SeriesPage(
    * @param period the part shown, in words
    * @param from as a form's field takes it
    * @param understood whether the part asked for could be shown
+   * @param choice whether there are rows as corrected beside those as read
+   * @param rows {@code read} for those as read; empty for what is shown unasked
    * @param ways to other parts
    */
   record Head(
@@ -40,6 +42,8 @@ record SeriesPage(
       String from,
       String to,
       boolean understood,
+      boolean choice,
+      String rows,
       List<Span.Way> ways) {}
 
   /**

@@ -146,7 +146,10 @@ final class SeriesPageMaker {
     boolean one = together && strips.size() > 1;
     return new SeriesPage.Picture(
         title,
-        words.of("series.step", StepWords.of(values.steps().length(), words)),
+        words.of("series.step", StepWords.of(values.steps().length(), words), view.rows())
+            + (strips.stream().anyMatch(s -> s.before().isPresent())
+                ? "; " + words.of("series.before")
+                : ""),
         SeriesPlot.draw(
             strips,
             notes,
@@ -167,12 +170,13 @@ final class SeriesPageMaker {
     TimeSteps steps = values.steps();
     List<String> quantities = values.measure().quantities();
     return new SeriesPage.Readout(
-        "/api/v1/readings/%d/series?from=%s&to=%s&points=%d"
+        "/api/v1/readings/%d/series?from=%s&to=%s&points=%d&rows=%s"
             .formatted(
                 view.log().entry().id(),
                 Instant.ofEpochMilli(steps.from()),
                 Instant.ofEpochMilli(steps.to()),
-                Math.max(2, steps.count())),
+                Math.max(2, steps.count()),
+                view.log().isCorrected() ? "corrected" : LogView.AS_READ),
         String.join(" ", quantities),
         quantities.stream().map(view::place).collect(Collectors.joining(" ")),
         values.factor(),
@@ -191,7 +195,19 @@ final class SeriesPageMaker {
         passed == 0 ? range : words.of("series.passed.brief", range, passed, all),
         Measure.classes(quantity(values, k)),
         v,
+        before(values, k),
         bounds);
+  }
+
+  /** The rows as read, where they show something else. */
+  private Optional<StepValues> before(Values values, int k) {
+    StepValues shown = values.fine().get(k);
+    return view.before(quantity(values, k))
+        .map(log -> log.values(List.of(quantity(values, k)), shown.steps()).get(0))
+        .filter(
+            read ->
+                IntStream.range(0, shown.steps().count())
+                    .anyMatch(s -> Double.compare(read.mean(s), shown.mean(s)) != 0));
   }
 
   private String range(StepValues v, Values values) {

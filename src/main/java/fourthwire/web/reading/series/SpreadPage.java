@@ -6,6 +6,7 @@ import java.util.List;
 /**
  * What the page of a measure in order of size shows.
  *
+ * @param about what the picture shows of which rows
  * @param curve the picture
  * @param figures percentiles, and the share of the time over the limit
  * @param hours of each quantity its week
@@ -15,6 +16,7 @@ record SpreadPage(
     List<Measures.Group> measures,
     String show,
     String title,
+    String about,
     String curve,
     List<NodePage.Key> keys,
     List<LogLimits.Line> limits,

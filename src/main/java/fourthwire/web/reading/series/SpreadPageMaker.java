@@ -15,10 +15,12 @@ import java.util.List;
 import java.util.OptionalInt;
 import java.util.stream.DoubleStream;
 import java.util.stream.IntStream;
+import java.util.stream.Stream;
 
 /** Makes the page of a measure in order of size and by hour of the week. */
 final class SpreadPageMaker {
   private static final List<Integer> PERCENTS = List.of(5, 50, 95, 99);
+  private static final double FURTHEST_BEFORE = 3;
 
   private final LogView view;
   private final Words words;
@@ -45,12 +47,19 @@ final class SpreadPageMaker {
     String unit = measure.unit(largest);
     String title = measure.label(words);
     List<DurationPlot.Curve> curves = curves(measure, values);
+    List<DurationPlot.Curve> before = before(measure, values);
     return new SpreadPage(
         view.head(verdict(measure, values, factor, unit), "spread"),
         measures.groups(words),
         measure.word(),
         title,
-        curve(measure, curves, factor, unit, title),
+        words.of(before.isEmpty() ? "spread.about" : "spread.about.both", view.rows()),
+        curve(
+            measure,
+            Stream.concat(before.stream(), curves.stream()).toList(),
+            factor,
+            unit,
+            title),
         view.keys(measure),
         limits.lines(measure, factor, unit, b -> DurationPlot.draws(curves, b, factor)),
         figures(measure, values, factor, unit),
@@ -90,6 +99,22 @@ final class SpreadPageMaker {
         .toList();
   }
 
+  /** The rows as read where they are others, unless they lie so far off that little else shows. */
+  private List<DurationPlot.Curve> before(Measure measure, List<ValuesBySize> values) {
+    double most = most(values, 1);
+    double least = least(values, 1);
+    double furthest = FURTHEST_BEFORE * (most - Math.min(0, least));
+    List<DurationPlot.Curve> before = new ArrayList<>();
+    for (String quantity : measure.quantities()) {
+      view.before(quantity)
+          .map(log -> log.spreads(List.of(quantity), view.span().shown()).get(0).bySize())
+          .filter(v -> v.count() > 0)
+          .filter(v -> v.percentile(100) <= furthest && v.percentile(0) >= least - furthest)
+          .ifPresent(v -> before.add(new DurationPlot.Curve("before", v)));
+    }
+    return before;
+  }
+
   private String curve(
       Measure measure, List<DurationPlot.Curve> curves, double factor, String unit, String title) {
     List<SeriesPlot.Bound> bounds =
@@ -112,7 +137,7 @@ final class SpreadPageMaker {
     Digits written = Digits.of(least(values, factor), most(values, factor));
     FigureGrid grid =
         new FigureGrid(
-            words.of("spread.figures"),
+            words.of("spread.figures", view.rows()),
             heads,
             c -> c <= PERCENTS.size() ? written : new Digits(OptionalInt.empty()));
     for (int k = 0; k < values.size(); k++) {
