@@ -132,7 +132,8 @@ class SeriesPagesTest extends PagesTest {
                 .status())
         .isEqualTo(302);
     assertThat(page(series))
-        .contains("rows as corrected; thin line: mean as read", "class=\"before\"", "rows=corrected");
+        .contains(
+            "rows as corrected; thin line: mean as read", "class=\"before\"", "rows=corrected");
     String asRead = page(series + "&rows=read");
     assertThat(asRead).contains("rows as read", "rows=read").doesNotContain("class=\"before\"");
     String spread = "/readings/" + turned + "/spread?show=active_w";

@@ -51,8 +51,7 @@ public final class StoredLog {
     this.series = series;
     this.corrections = corrections;
     this.corrected = corrected;
-    this.chunks =
-        corrected.<LogSpan.Source>map(c -> c).orElseGet(() -> series.chunks(entry.id()));
+    this.chunks = corrected.<LogSpan.Source>map(c -> c).orElseGet(() -> series.chunks(entry.id()));
     this.log = log;
     this.zone = SiteZone.of(survey);
   }
@@ -77,7 +76,8 @@ public final class StoredLog {
         ? Optional.empty()
         : corrections
             .cleaned(entry.id())
-            .flatMap(cleaned -> series.series(entry.id()).map(read -> with(read, holding, cleaned)));
+            .flatMap(
+                cleaned -> series.series(entry.id()).map(read -> with(read, holding, cleaned)));
   }
 
   private StoredLog with(
@@ -121,8 +121,7 @@ public final class StoredLog {
 
   /** Rows left out or another clock can move it. */
   private Period period(List<long[]> times) {
-    LongSummaryStatistics all =
-        times.stream().flatMapToLong(LongStream::of).summaryStatistics();
+    LongSummaryStatistics all = times.stream().flatMapToLong(LongStream::of).summaryStatistics();
     return new Period(
         Instant.ofEpochMilli(all.getMin()),
         Instant.ofEpochMilli(all.getMax()).plusMillis(intervalMillis()));

@@ -31,7 +31,8 @@ class SeriesFigureTest {
 
   private static String plot(List<SeriesPlot.Bound> bounds, List<SeriesPlot.Note> notes) {
     SeriesPlot.Strip strip =
-        new SeriesPlot.Strip("N", "0 to 10 A", "0 to 10 A", "n", values(), Optional.empty(), bounds);
+        new SeriesPlot.Strip(
+            "N", "0 to 10 A", "0 to 10 A", "n", values(), Optional.empty(), bounds);
     return SeriesPlot.draw(
         List.of(strip), notes, new SeriesPlot.Manner(UTC, 1, "A", false), "currents");
   }

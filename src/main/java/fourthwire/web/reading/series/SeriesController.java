@@ -37,7 +37,8 @@ class SeriesController {
       @RequestParam(name = "rows", defaultValue = "") String rows,
       Model model) {
     StoredLog log = log(reading, model);
-    model.addAttribute("page", new SeriesPageMaker(view(log, rows, from, to)).make(show, also, together));
+    model.addAttribute(
+        "page", new SeriesPageMaker(view(log, rows, from, to)).make(show, also, together));
     return "reading/series";
   }
 

@@ -55,11 +55,7 @@ final class SpreadPageMaker {
         title,
         words.of(before.isEmpty() ? "spread.about" : "spread.about.both", view.rows()),
         curve(
-            measure,
-            Stream.concat(before.stream(), curves.stream()).toList(),
-            factor,
-            unit,
-            title),
+            measure, Stream.concat(before.stream(), curves.stream()).toList(), factor, unit, title),
         view.keys(measure),
         limits.lines(measure, factor, unit, b -> DurationPlot.draws(curves, b, factor)),
         figures(measure, values, factor, unit),
