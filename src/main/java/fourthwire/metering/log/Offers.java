@@ -21,6 +21,7 @@ import java.util.Map;
 
 /** Words the corrections that are offered for faults of a log. */
 final class Offers {
+  private static final int MOST_NAMED = 6;
   private static final double NEAR = 0.02;
 
   private final List<String> names;
@@ -136,13 +137,21 @@ final class Offers {
   static Correction scale(List<String> quantities, double ratio, Rows rows) {
     double factor = likely(1 / ratio);
     return Correction.of(
-        "Multiply " + joined(quantities) + " by " + number(factor),
+        "Multiply " + shortened(quantities) + " by " + number(factor),
         new Scale(quantities, factor, rows));
   }
 
-  /** A line's power by the factor that undoes a ratio; totals that were summed from it with it. */
-  Correction rescale(String power, double ratio, boolean totalFollows, Rows rows) {
-    Correction alone = scale(List.of(power), ratio, rows);
+  /** Many harmonics beside what they belong to are not named one by one. */
+  private static String shortened(List<String> quantities) {
+    List<String> plain = quantities.stream().filter(q -> !q.matches(".*_h\\d+_.*")).toList();
+    return quantities.size() > MOST_NAMED && !plain.isEmpty() && plain.size() < quantities.size()
+        ? joined(plain) + ", with their harmonics,"
+        : joined(quantities);
+  }
+
+  /** Lines' powers by the factor that undoes a ratio; totals summed from them with them. */
+  Correction rescale(List<String> powers, double ratio, boolean totalFollows, Rows rows) {
+    Correction alone = scale(powers, ratio, rows);
     if (!totalFollows) {
       return alone;
     }

@@ -188,6 +188,24 @@ class PlantedFaultsTest {
             e,
             (b, p) -> b.scale("N.rms_a", p[0], p[1], 15)),
         fault(
+            "a total by a wrong ratio, beside volts and amps alone",
+            QualityFinding.WRONG_RATIO,
+            d,
+            e,
+            (b, p) -> {
+              b.columns.keySet().removeIf(name -> name.matches("L..(active_w|power_factor)"));
+              b.scale("total.active_w", p[0], p[1], 3);
+            }),
+        fault(
+            "amps twice what they are, beside volts and watts alone",
+            QualityFinding.WRONG_RATIO,
+            d,
+            e,
+            (b, p) -> {
+              b.columns.keySet().removeIf(name -> name.matches(".*(power_factor|_h\\d).*|N.*"));
+              b.scale("L2.rms_a", p[0], p[1], 2);
+            }),
+        fault(
             "a distortion averaged otherwise",
             QualityFinding.DISTORTION_MISREAD,
             d,
@@ -286,8 +304,37 @@ class PlantedFaultsTest {
             f ->
                 f.corrections().stream()
                     .anyMatch(
-                        c -> c.sentence().matches("Multiply N\\.current.* and N.rms_a by 0.2")));
-    assertThat(found).filteredOn(f -> f.code().equals(QualityFinding.WRONG_RATIO)).hasSize(4);
+                        c ->
+                            c.sentence()
+                                .equals(
+                                    "Multiply L1.rms_a, L2.rms_a, L3.rms_a and N.rms_a, with their"
+                                        + " harmonics, by 0.2")));
+    assertThat(found).filteredOn(f -> f.code().equals(QualityFinding.WRONG_RATIO)).hasSize(1);
+  }
+
+  /** Means over a day, two hours, or all lines, written in every row. */
+  @ParameterizedTest
+  @ValueSource(ints = {PER_DAY, 12, 0})
+  void aDistortionAveragedOverLongerIsFound(int rows) {
+    InventedBoard board = new InventedBoard(21, 2);
+    board.columns.keySet().removeIf(name -> name.matches(".*_h\\d+_.*"));
+    double[] thd = board.columns.get("L1.current_thd_percent");
+    for (int from = 0; from < thd.length && rows > 0; from += rows) {
+      double mean = java.util.Arrays.stream(thd, from, from + rows).average().orElseThrow();
+      java.util.Arrays.fill(thd, from, from + rows, Math.round(100 * mean) / 100.0);
+    }
+    if (rows == 0) {
+      board.columns.put("L2.current_thd_percent", thd.clone());
+      board.columns.put("L3.current_thd_percent", thd.clone());
+    }
+    assertThat(board.reading().quality())
+        .singleElement()
+        .satisfies(
+            f -> {
+              assertThat(f.code()).isEqualTo(QualityFinding.DISTORTION_MISREAD);
+              assertThat(f.sentence()).startsWith("L1.current_thd_percent");
+              assertThat(f.corrections()).hasSize(1);
+            });
   }
 
   /** A clock set forward by what is no whole interval is told once, and the way back offered. */
