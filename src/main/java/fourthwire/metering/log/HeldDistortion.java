@@ -132,7 +132,9 @@ final class HeldDistortion implements DayCheck {
           alike += same ? 1 : 0;
           moved += same && one != before ? 1 : 0;
           before = one;
-          double[] a = {amps.map(x -> x[0]).orElse(t[0])[row], amps.map(x -> x[1]).orElse(t[1])[row]};
+          double[] a = {
+            amps.map(x -> x[0]).orElse(t[0])[row], amps.map(x -> x[1]).orElse(t[1])[row]
+          };
           apart += Math.abs(a[0] - a[1]) > 0.02 * Math.max(a[0], a[1]) ? 1 : 0;
         }
       }
@@ -215,8 +217,6 @@ final class HeldDistortion implements DayCheck {
         "Its percentiles are lower than the truth and can't be held against limits.",
         name + " " + what + ".",
         List.of(
-            harmonics
-                ? Offers.formDistortion(name, all)
-                : Offers.leaveOut(List.of(name), all)));
+            harmonics ? Offers.formDistortion(name, all) : Offers.leaveOut(List.of(name), all)));
   }
 }

@@ -6,7 +6,6 @@ import fourthwire.metering.Correction;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
-import java.util.function.IntToDoubleFunction;
 
 /**
  * Totals of power against the sum of the lines, or against the lines' volts times amps where their
@@ -49,8 +48,7 @@ final class TotalRatios {
       return;
     }
     double[] sum = new double[day.rows()];
-    java.util.Arrays.setAll(
-        sum, k -> amps.get()[0][k] + amps.get()[1][k] + amps.get()[2][k]);
+    java.util.Arrays.setAll(sum, k -> amps.get()[0][k] + amps.get()[1][k] + amps.get()[2][k]);
     Optional<double[]> factor =
         active ? day.find("total.power_factor") : Optional.<double[]>empty();
     double least = active && factor.isEmpty() ? 0.02 : 0.8;
