@@ -7,6 +7,7 @@ import fourthwire.audit.AuditRepository;
 import fourthwire.intake.reading.ReadingReader;
 import fourthwire.jobs.AuditRun;
 import fourthwire.jobs.AuditService;
+import fourthwire.jobs.CorrectionRuns;
 import fourthwire.jobs.CorrectionService;
 import fourthwire.jobs.JobQueue;
 import fourthwire.jobs.JobRecovery;
@@ -95,6 +96,11 @@ class JobConfiguration {
   CorrectionService correctionService(
       ReadingRepository readings, SeriesRepository series, CorrectionRepository corrections) {
     return new CorrectionService(readings, series, corrections);
+  }
+
+  @Bean
+  CorrectionRuns correctionRuns(CorrectionService service, Stop stop) {
+    return new CorrectionRuns(service, stop);
   }
 
   @Bean

@@ -16,6 +16,8 @@ import java.time.ZoneOffset;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
+import java.util.concurrent.atomic.AtomicInteger;
+import java.util.function.DoubleConsumer;
 
 /** Makes corrections of logs and takes them back. */
 public final class CorrectionService {
@@ -36,14 +38,15 @@ public final class CorrectionService {
    *
    * @param finding position among the reading's findings
    * @param offer position among the finding's corrections
+   * @param listener hears what share is done; what it throws ends the work, and nothing is made
    * @return its id
    * @throws RefusedException where there is no such finding or offer, or the finding is mended
    */
-  public long make(long readingId, int finding, int offer) {
+  public long make(long readingId, int finding, int offer, DoubleConsumer listener) {
     ReadingRepository.Entry entry = readings.find(readingId).orElseThrow();
     Correction correction = offered(entry.reading().quality(), finding, offer);
     return corrections
-        .add(readingId, finding, correction, holding -> cleaned(entry, holding))
+        .add(readingId, finding, correction, holding -> cleaned(entry, holding, listener))
         .orElseThrow(
             () ->
                 new RefusedException(
@@ -70,13 +73,15 @@ public final class CorrectionService {
     return offers.get(offer);
   }
 
-  /** Takes a correction back; false where it does not hold. The reading must be there. */
-  public boolean undo(long readingId, long correctionId) {
+  /** Takes a correction back; false where it does not hold. Otherwise as {@link #make}. */
+  public boolean undo(long readingId, long correctionId, DoubleConsumer listener) {
     ReadingRepository.Entry entry = readings.find(readingId).orElseThrow();
-    return corrections.undo(readingId, correctionId, holding -> cleaned(entry, holding));
+    return corrections.undo(
+        readingId, correctionId, holding -> cleaned(entry, holding, listener));
   }
 
-  private CleanedLog cleaned(ReadingRepository.Entry entry, List<Correction> holding) {
+  private CleanedLog cleaned(
+      ReadingRepository.Entry entry, List<Correction> holding, DoubleConsumer listener) {
     LogResult log = entry.reading().log().orElseThrow();
     Series read =
         series
@@ -86,11 +91,15 @@ public final class CorrectionService {
                     new RefusedException(
                         "the rows of this log are not stored; upload its file again"));
     CorrectedSeries corrected = new CorrectedSeries(read, holding);
+    AtomicInteger begun = new AtomicInteger();
     return CleanedLog.of(
         corrected,
         log.interval(),
         zone(entry),
-        q -> asRead(entry.id(), log, corrected, read.quantities().get(q)));
+        q -> {
+          listener.accept((double) begun.getAndIncrement() / read.quantities().size());
+          return asRead(entry.id(), log, corrected, read.quantities().get(q));
+        });
   }
 
   private static ZoneId zone(ReadingRepository.Entry entry) {

@@ -1,6 +1,7 @@
 /**
  * Work that outlives a request: audits, and the reading of uploaded meters' files. Its state is
- * stored, so it can be watched, cancelled, and run again after a restart.
+ * stored, so it can be watched, cancelled, and run again after a restart. Corrections of large logs
+ * outlive theirs too ({@link fourthwire.jobs.CorrectionRuns}), but are whole or not at all.
  *
  * <p>Doors: {@link fourthwire.jobs.AuditService} and {@link fourthwire.jobs.ReadingService} for who
  * asks; {@link fourthwire.jobs.AuditRun} and {@link fourthwire.jobs.ReadingRun} do the work, called

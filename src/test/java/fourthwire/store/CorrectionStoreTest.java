@@ -77,9 +77,9 @@ class CorrectionStoreTest {
     int turned = finding("Active power");
     int repeated = finding("the time of the row before");
 
-    long first = service.make(reading, turned, 0);
+    long first = service.make(reading, turned, 0, share -> {});
     List<String> onlyFirst = table("cleaned_quantities", "statistics");
-    long second = service.make(reading, repeated, 0);
+    long second = service.make(reading, repeated, 0, share -> {});
     CorrectionRepository.Cleaned cleaned = corrections.cleaned(reading).orElseThrow();
     assertThat(cleaned.rows()).isEqualTo(28L * InventedBoard.PER_DAY);
     assertThat(cleaned.log().quantities().get("L2.active_w").min()).isPositive();
@@ -88,18 +88,18 @@ class CorrectionStoreTest {
         .extracting(CorrectionRepository.Entry::finding)
         .containsExactly(turned, repeated);
 
-    assertThat(service.undo(reading, second)).isTrue();
-    assertThat(service.undo(reading, second)).as("it holds no more").isFalse();
+    assertThat(service.undo(reading, second, share -> {})).isTrue();
+    assertThat(service.undo(reading, second, share -> {})).as("it holds no more").isFalse();
     assertThat(table("cleaned_quantities", "statistics")).isEqualTo(onlyFirst);
-    long again = service.make(reading, repeated, 0);
-    assertThat(service.undo(reading, first)).as("in another order").isTrue();
-    assertThat(service.undo(reading, again)).isTrue();
+    long again = service.make(reading, repeated, 0, share -> {});
+    assertThat(service.undo(reading, first, share -> {})).as("in another order").isTrue();
+    assertThat(service.undo(reading, again, share -> {})).isTrue();
     assertThat(corrections.cleaned(reading)).isEmpty();
     assertThat(corrections.ofReading(reading)).hasSize(3).noneMatch(c -> c.holds());
     assertThat(table("series_quantities", "statistics")).isEqualTo(read);
     assertThat(summaries()).isEqualTo(before);
 
-    service.make(reading, turned, 0);
+    service.make(reading, turned, 0, share -> {});
     assertThat(readings.delete(reading)).isTrue();
     for (String table : List.of("reading_corrections", "cleaned_logs", "cleaned_quantities")) {
       assertThat(table(table, "reading_id")).as(table).isEmpty();
@@ -112,7 +112,7 @@ class CorrectionStoreTest {
   void whatIsNotTouchedIsAsRead(Databases kind) {
     open(kind);
     List<String> read = table("series_quantities", "statistics");
-    service.make(reading, finding("Active power"), 0);
+    service.make(reading, finding("Active power"), 0, share -> {});
     List<String> cleaned = table("cleaned_quantities", "statistics");
     List<String> names = table("cleaned_quantities", "name");
     for (int q = 0; q < names.size(); q++) {

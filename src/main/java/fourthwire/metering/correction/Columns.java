@@ -12,6 +12,8 @@ import fourthwire.metering.Correction.TurnSign;
 import fourthwire.metering.series.Series;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Map;
+import java.util.concurrent.ConcurrentHashMap;
 
 /** The values of a corrected log by quantity, rows left out still among them. */
 final class Columns {
@@ -27,6 +29,7 @@ final class Columns {
   private final List<SumLines> sums;
   private final List<FormDistortion> distortions;
   private final Distortions formed;
+  private final Map<String, Boolean> changed = new ConcurrentHashMap<>();
 
   Columns(Series read, List<Step> steps) {
     this.read = read;
@@ -56,7 +59,12 @@ final class Columns {
     return (int) Math.max(0, Math.min(length, rows.to() - firstRow));
   }
 
+  /** Asked for each column of every chunk. */
   boolean changes(String quantity) {
+    return changed.computeIfAbsent(quantity, this::findChange);
+  }
+
+  private boolean findChange(String quantity) {
     return distortions.stream().anyMatch(d -> d.quantity().equals(quantity))
         || sums.stream().anyMatch(s -> quantity.equals("total." + s.measure()))
         || reorders.stream().anyMatch(r -> r.from().containsKey(quantity))

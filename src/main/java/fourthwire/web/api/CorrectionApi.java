@@ -1,6 +1,6 @@
 package fourthwire.web.api;
 
-import fourthwire.jobs.CorrectionService;
+import fourthwire.jobs.CorrectionRuns;
 import fourthwire.jobs.measured.SiteZone;
 import fourthwire.json.CorrectionJson;
 import fourthwire.metering.ReadingRepository;
@@ -13,6 +13,7 @@ import io.swagger.v3.oas.annotations.media.Schema;
 import io.swagger.v3.oas.annotations.responses.ApiResponse;
 import io.swagger.v3.oas.annotations.tags.Tag;
 import java.net.URI;
+import java.time.Duration;
 import java.time.ZoneId;
 import java.util.List;
 import org.jspecify.annotations.Nullable;
@@ -36,17 +37,20 @@ import tools.jackson.databind.node.ObjectNode;
     produces = MediaType.APPLICATION_JSON_VALUE)
 @Tag(name = "Readings")
 class CorrectionApi {
-  private final CorrectionService service;
+  /** The answer is the correction that was made, however large the log. */
+  private static final Duration PATIENCE = Duration.ofHours(6);
+
+  private final CorrectionRuns runs;
   private final CorrectionRepository corrections;
   private final ReadingRepository readings;
   private final SiteRepository sites;
 
   CorrectionApi(
-      CorrectionService service,
+      CorrectionRuns runs,
       CorrectionRepository corrections,
       ReadingRepository readings,
       SiteRepository sites) {
-    this.service = service;
+    this.runs = runs;
     this.corrections = corrections;
     this.readings = readings;
     this.sites = sites;
@@ -84,8 +88,8 @@ class CorrectionApi {
   @ApiResponse(responseCode = "201", description = "It is made")
   ResponseEntity<Made> make(@PathVariable long reading, @RequestBody Asked asked) {
     existing(reading);
-    long id =
-        service.make(reading, asked.finding(), asked.correction() == null ? 0 : asked.correction());
+    int offer = asked.correction() == null ? 0 : asked.correction();
+    long id = runs.make(reading, asked.finding(), offer, PATIENCE).orElseThrow();
     return ResponseEntity.created(URI.create("/api/v1/readings/" + reading + "/corrections/" + id))
         .body(new Made(id));
   }
@@ -96,7 +100,7 @@ class CorrectionApi {
   @ApiResponse(responseCode = "204", description = "It holds no more")
   void undo(@PathVariable long reading, @PathVariable long correction) {
     existing(reading);
-    if (!service.undo(reading, correction)) {
+    if (!runs.undo(reading, correction, PATIENCE).orElseThrow()) {
       throw new MissingException("no correction " + correction + " of this reading holds");
     }
   }

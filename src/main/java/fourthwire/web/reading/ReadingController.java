@@ -1,6 +1,7 @@
 package fourthwire.web.reading;
 
 import fourthwire.intake.reading.ReadingRefusedException;
+import fourthwire.jobs.CorrectionRuns;
 import fourthwire.jobs.ReadingService;
 import fourthwire.jobs.RefusedException;
 import fourthwire.json.MappingJson;
@@ -39,6 +40,7 @@ class ReadingController {
   private final SiteRepository sites;
   private final ReadingPageMaker pages;
   private final CoverageMaker coverage;
+  private final CorrectionRuns corrections;
 
   ReadingController(
       ReadingService service,
@@ -46,13 +48,15 @@ class ReadingController {
       ReadingUploads uploads,
       SiteRepository sites,
       ReadingPageMaker pages,
-      CoverageMaker coverage) {
+      CoverageMaker coverage,
+      CorrectionRuns corrections) {
     this.service = service;
     this.readings = readings;
     this.uploads = uploads;
     this.sites = sites;
     this.pages = pages;
     this.coverage = coverage;
+    this.corrections = corrections;
   }
 
   @GetMapping("/sites/{site}/readings")
@@ -119,6 +123,10 @@ class ReadingController {
     SiteRepository.Entry site = existing(entry.siteId());
     model.addAttribute("site", site);
     model.addAttribute("page", pages.make(entry, survey(site)));
+    model.addAttribute("reading", reading);
+    Optional<CorrectionRuns.State> forming = corrections.of(reading);
+    forming.ifPresent(f -> model.addAttribute("forming", f));
+    model.addAttribute("live", forming.filter(f -> f.failure().isEmpty()).isPresent());
     return "reading/reading";
   }
 
@@ -126,6 +134,7 @@ class ReadingController {
   String delete(@PathVariable("reading") long reading) {
     ReadingRepository.Entry entry =
         readings.find(reading).orElseThrow(() -> new NotFoundException("reading " + reading));
+    corrections.cancel(reading);
     readings.delete(reading);
     return "redirect:/sites/" + entry.siteId() + "/readings";
   }
