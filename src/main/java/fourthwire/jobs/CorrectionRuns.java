@@ -71,7 +71,8 @@ public final class CorrectionRuns implements AutoCloseable {
    *     another correction of the log is on its way
    */
   public Optional<Long> make(long readingId, int finding, int offer, Duration patience) {
-    return start(readingId, patience, listener -> service.make(readingId, finding, offer, listener));
+    return start(
+        readingId, patience, listener -> service.make(readingId, finding, offer, listener));
   }
 
   /** Takes a correction back, likewise; tells whether it held. */
@@ -135,7 +136,9 @@ public final class CorrectionRuns implements AutoCloseable {
     }
   }
 
-  /** Of the correction of a reading that is on its way, or failed last; empty where there is none. */
+  /**
+   * Of the correction of a reading that is on its way, or failed last; empty where there is none.
+   */
   public Optional<State> of(long readingId) {
     return Optional.ofNullable(runs.get(readingId)).map(r -> new State(r.share, r.failure));
   }

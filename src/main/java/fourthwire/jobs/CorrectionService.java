@@ -76,8 +76,7 @@ public final class CorrectionService {
   /** Takes a correction back; false where it does not hold. Otherwise as {@link #make}. */
   public boolean undo(long readingId, long correctionId, DoubleConsumer listener) {
     ReadingRepository.Entry entry = readings.find(readingId).orElseThrow();
-    return corrections.undo(
-        readingId, correctionId, holding -> cleaned(entry, holding, listener));
+    return corrections.undo(readingId, correctionId, holding -> cleaned(entry, holding, listener));
   }
 
   private CleanedLog cleaned(
