@@ -1,5 +1,8 @@
 package fourthwire.store;
 
+import java.lang.invoke.MethodHandles;
+import java.lang.invoke.VarHandle;
+import java.nio.ByteOrder;
 import java.util.Arrays;
 
 /**
@@ -16,6 +19,9 @@ final class FilePart {
   private static final byte PACKED = 1;
   private static final int COMMON = 15;
   private static final int HEAD = 1 + Integer.BYTES + COMMON;
+
+  private static final VarHandle PAIRS =
+      MethodHandles.byteArrayViewVarHandle(short[].class, ByteOrder.BIG_ENDIAN);
 
   /** No pair of two of the fifteen. */
   private static final byte OTHER = (byte) 0xff;
@@ -94,12 +100,7 @@ final class FilePart {
     for (int k = 0; k < Integer.BYTES; k++) {
       length |= (packed[1 + k] & 0xff) << 8 * k;
     }
-    byte[] first = new byte[256];
-    byte[] second = new byte[256];
-    for (int pair = 0; pair < COMMON << 4; pair++) {
-      first[pair] = packed[1 + Integer.BYTES + (pair >>> 4)];
-      second[pair] = packed[1 + Integer.BYTES + Math.min(pair & 0xf, COMMON - 1)];
-    }
+    short[] pairs = pairs(packed);
     byte[] part = new byte[length + length % 2];
     int at = HEAD;
     for (int k = 0; k < length; k += 2) {
@@ -108,10 +109,22 @@ final class FilePart {
         part[k] = packed[at++];
         part[k + 1] = packed[at++];
       } else {
-        part[k] = first[pair & 0xff];
-        part[k + 1] = second[pair & 0xff];
+        PAIRS.set(part, k, pairs[pair & 0xff]);
       }
     }
     return length % 2 == 0 ? part : Arrays.copyOf(part, length);
+  }
+
+  /** The two bytes that each number stands for. */
+  private static short[] pairs(byte[] packed) {
+    short[] pairs = new short[256];
+    for (int high = 0; high < COMMON; high++) {
+      for (int low = 0; low < COMMON; low++) {
+        int first = packed[1 + Integer.BYTES + high] & 0xff;
+        int second = packed[1 + Integer.BYTES + low] & 0xff;
+        pairs[high << 4 | low] = (short) (first << 8 | second);
+      }
+    }
+    return pairs;
   }
 }

@@ -41,15 +41,18 @@ final class StandardTime {
   static Optional<ZoneOffset> kept(
       TextTable table, TimeColumns time, DateOrder order, ZoneId zone) {
     StandardTime look = new StandardTime(zone);
-    return look.rules.isFixedOffset() || !look.take(table, new RowTime(time, order))
+    return look.rules.isFixedOffset() || !look.take(table, time, order)
         ? Optional.empty()
         : look.kept();
   }
 
   /** False where offsets are written: they settle it. */
-  private boolean take(TextTable table, RowTime at) {
+  private boolean take(TextTable table, TimeColumns time, DateOrder order) {
+    RowTime at = new RowTime(time, order);
+    int cells = 1 + time.columns().stream().mapToInt(k -> k).max().orElse(0);
     long[] rows = {0};
     table.forEach(
+        cells,
         row -> {
           if (at.read(row)) {
             rows[0] = at.offsetSeconds() == RowTime.NO_OFFSET ? rows[0] + 1 : -1;

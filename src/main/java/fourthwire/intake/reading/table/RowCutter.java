@@ -43,6 +43,7 @@ final class RowCutter {
   private long[] digits = new long[256];
   private byte[] decimals = new byte[256];
   private int cells;
+  private int most = Integer.MAX_VALUE;
 
   RowCutter(char separator, Charset charset, boolean decimalComma) {
     this.separator = (byte) separator;
@@ -50,6 +51,12 @@ final class RowCutter {
     this.decimalComma = decimalComma;
     // A comma that separates cells is a decimal comma within quotes only.
     this.mark = (byte) (!decimalComma ? '.' : separator == ',' ? 0 : ',');
+  }
+
+  /** Cuts no more than so many cells of a row, which must hold no line end in quotes. */
+  RowCutter first(int mostCells) {
+    most = mostCells;
+    return this;
   }
 
   /**
@@ -71,6 +78,9 @@ final class RowCutter {
       }
       byte c = block[at++];
       if (c == separator) {
+        if (cells >= most) {
+          return rowEnd(lineEnd(block, at, to), to);
+        }
         at = separator == ' ' ? skipBlanks(block, at, to) : at;
         if (separator == ' ' && (at >= to || block[at] == '\n' || block[at] == '\r')) {
           return rowEnd(at, to);
@@ -79,6 +89,14 @@ final class RowCutter {
         return rowEnd(at - 1, to);
       }
     }
+  }
+
+  private static int lineEnd(byte[] block, int from, int to) {
+    int at = from;
+    while (at < to && block[at] != '\n' && block[at] != '\r') {
+      at++;
+    }
+    return at;
   }
 
   private static int skipBlanks(byte[] block, int from, int to) {

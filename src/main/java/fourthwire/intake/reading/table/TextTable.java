@@ -127,9 +127,18 @@ public final class TextTable {
 
   /** Passes every row of values by. */
   public void forEach(Visitor visitor) {
+    forEach(cutter(), visitor);
+  }
+
+  /** Passes every row by with no more than its first cells, where that saves time. */
+  public void forEach(int firstCells, Visitor visitor) {
+    forEach(quotes ? cutter() : cutter().first(firstCells), visitor);
+  }
+
+  private void forEach(RowCutter cutter, Visitor visitor) {
     try (InputStream in = open()) {
       Blocks blocks = blocks(in);
-      RowWalk walk = new RowWalk(cutter(), 0);
+      RowWalk walk = new RowWalk(cutter, 0);
       for (Blocks.Block b = blocks.next(); b.length() > 0; b = blocks.next()) {
         if (!walk.through(b, dialect.firstData(), visitor)) {
           return;
