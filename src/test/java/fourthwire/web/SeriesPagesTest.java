@@ -111,7 +111,9 @@ class SeriesPagesTest extends PagesTest {
         .contains("Current of N, amps", ">3rd<", ">9th<", "94.5", "95th percentile of each day")
         .doesNotContain("??");
     assertThat(page("/readings/" + log + "/orders?of=L1.voltage_percent&scale=common"))
-        .contains("Voltage of L1", ">5th<", "Limit", "6\u202f%");
+        .contains("Voltage of L1", ">5th<", "Limit", "6\u202f%")
+        .contains("full-mark", "Limit: EN 50160");
+    assertThat(orders).contains("not that of the neutral").doesNotContain("Limit: ");
   }
 
   /** A clamp turned round for some days: as read its power was below zero. */

@@ -4,6 +4,8 @@ import fourthwire.audit.AuditRepository;
 import fourthwire.audit.DesignState;
 import fourthwire.audit.measured.LogVerdict;
 import fourthwire.audit.measured.LogVerdicts;
+import fourthwire.limits.distortion.CurrentDistortion519;
+import fourthwire.limits.distortion.Edition519;
 import fourthwire.metering.Amount;
 import fourthwire.metering.ReadingRepository;
 import fourthwire.metering.SeriesRepository;
@@ -78,6 +80,40 @@ public final class LogAssessments {
     Optional<Series> rows =
         entry.reading().log().isPresent() ? series.series(entry.id()) : Optional.empty();
     return rows.map(read -> of(entry, survey, read));
+  }
+
+  /**
+   * Limits of harmonic currents at a meter's node.
+   *
+   * @param demandA I_L, which they are per cent of
+   * @param table of IEEE 519
+   */
+  public record CurrentLimits(double demandA, CurrentDistortion519 table) {
+    /** Of an order, amps. */
+    public double orderLimitA(int order) {
+      return demandA * table.orderLimitPercent(order) / 100;
+    }
+  }
+
+  /** As the latest audit knows the node; empty where it does not. */
+  public Optional<CurrentLimits> currentLimits(ReadingRepository.Entry entry, Survey survey) {
+    Currents known = currents(entry);
+    if (known.demandA().isEmpty() || known.faultA().isEmpty()) {
+      return Optional.empty();
+    }
+    double demandA = known.demandA().getAsDouble();
+    return SiteTree.of(survey)
+        .find(entry.meter().node())
+        .filter(n -> demandA > 0)
+        .map(
+            n ->
+                new CurrentLimits(
+                    demandA,
+                    CurrentDistortion519.of(
+                        Edition519.IEEE_519_2022,
+                        n.nominalV(),
+                        known.faultA().getAsDouble(),
+                        demandA)));
   }
 
   private Result of(ReadingRepository.Entry entry, Survey survey, Series read) {

@@ -2,6 +2,7 @@ package fourthwire.web.figure;
 
 import fourthwire.metering.reduce.TimeSteps;
 import java.time.ZoneId;
+import java.util.OptionalDouble;
 import java.util.function.IntToDoubleFunction;
 
 /** One quantity over time in the height of a table's row: filled from zero, a gap where none is. */
@@ -17,9 +18,15 @@ public final class StepStrip {
    * @param classes of its colour
    * @param values one for each step; NaN for none
    * @param end the value that is as high as the strip; above 0
+   * @param limit drawn as a dashed line where the strip is so high
    */
   public static String draw(
-      String classes, TimeSteps steps, IntToDoubleFunction values, double end, String alternative) {
+      String classes,
+      TimeSteps steps,
+      IntToDoubleFunction values,
+      double end,
+      OptionalDouble limit,
+      String alternative) {
     StepPath path =
         new StepPath(steps, v -> Math.round(UNITS_HIGH * (1 - Math.min(1, Math.max(0, v / end)))));
     Svg svg = Svg.picture("strip " + classes, alternative);
@@ -35,7 +42,11 @@ public final class StepStrip {
         "preserveAspectRatio",
         "none");
     svg.add("path", "class", "spread", "d", path.band(values, k -> 0));
-    svg.add("path", "class", "trace", "d", path.line(values));
+    svg.add("path", "class", "trace", "d", path.line(values)).close();
+    limit.stream()
+        .filter(l -> l <= end)
+        .mapToObj(l -> Svg.share(1 - l / end))
+        .forEach(y -> svg.add("line", "class", "full-mark", "x1", 0, "x2", "100%", "y1", y, "y2", y));
     return svg.done();
   }
 

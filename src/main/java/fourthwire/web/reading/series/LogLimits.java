@@ -1,5 +1,6 @@
 package fourthwire.web.reading.series;
 
+import fourthwire.jobs.measured.LogAssessments.CurrentLimits;
 import fourthwire.limits.distortion.Edition519;
 import fourthwire.limits.distortion.VoltageDistortion;
 import fourthwire.metering.MeasuredQuantity;
@@ -20,6 +21,8 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 import java.util.function.Predicate;
 
 /**
@@ -32,8 +35,11 @@ final class LogLimits {
   private static final double FREQUENCY_BAND = 0.01;
   private static final double UNBALANCE_PERCENT = 2;
 
+  private static final Pattern CURRENT_ORDER = Pattern.compile("current_h(\\d+)_a");
+
   private final Survey survey;
   private final Optional<SiteTree.Node> node;
+  private final Optional<CurrentLimits> currents;
   private final Words words;
 
   /**
@@ -48,8 +54,10 @@ final class LogLimits {
     }
   }
 
-  LogLimits(Survey survey, String node, Words words) {
+  /** At a node; {@code currents} where an audit knows its demand and short-circuit currents. */
+  LogLimits(Survey survey, String node, Optional<CurrentLimits> currents, Words words) {
     this.survey = survey;
+    this.currents = currents;
     this.node = SiteTree.of(survey).find(node);
     this.words = words;
   }
@@ -66,6 +74,30 @@ final class LogLimits {
       case "voltage_thd_percent" -> distortion(q, OptionalDouble.of(0));
       default -> distortion(q, OptionalDouble.empty());
     };
+  }
+
+  /** Whether limits of currents by order are known here. */
+  boolean knowsCurrents() {
+    return currents.isPresent();
+  }
+
+  /** What the 95th percentile of an order is held against; empty where nothing applies. */
+  Optional<Limit> ofPercentile(String quantity) {
+    MeasuredQuantity q = Measure.parsed(quantity);
+    Matcher order = CURRENT_ORDER.matcher(q.measure());
+    if (!order.matches()) {
+      return of(quantity).stream().findFirst();
+    }
+    return currents
+        .filter(c -> !q.place().equals(Conductor.N.name()))
+        .map(
+            c ->
+                upper(
+                    c.orderLimitA(Integer.parseInt(order.group(1))),
+                    words.of(
+                        "orders.limit.current",
+                        c.table().basis(),
+                        Numbers.of(c.demandA(), "A"))));
   }
 
   private List<Limit> current(SiteTree.Node at, String place) {

@@ -1,5 +1,6 @@
 package fourthwire.web.reading.series;
 
+import fourthwire.jobs.measured.LogAssessments.CurrentLimits;
 import fourthwire.jobs.series.StoredLog;
 import fourthwire.quantity.Conductor;
 import fourthwire.web.figure.Shapes;
@@ -25,14 +26,19 @@ final class LogView {
   private final LogLimits limits;
 
   /** Of a log; {@code asRead} empty where no correction holds. */
-  LogView(StoredLog log, Optional<StoredLog> asRead, Span span, Words words) {
+  LogView(
+      StoredLog log,
+      Optional<StoredLog> asRead,
+      Span span,
+      Optional<CurrentLimits> currents,
+      Words words) {
     this.log = log;
     this.asRead = asRead;
     this.span = span;
     this.words = words;
     this.names = new Names(log.survey().settings().practice());
     this.moments = Moments.of(log.survey());
-    this.limits = new LogLimits(log.survey(), log.entry().meter().node(), words);
+    this.limits = new LogLimits(log.survey(), log.entry().meter().node(), currents, words);
   }
 
   StoredLog log() {

@@ -8,6 +8,8 @@ import java.util.List;
  * @param sources whose orders there are to choose from
  * @param about what a step is, in words
  * @param axis the time below the strips
+ * @param basis of the limits, a sentence each
+ * @param without why there are none, a sentence; else empty
  */
 record OrdersPage(
     SeriesPage.Head head,
@@ -18,7 +20,9 @@ record OrdersPage(
     String about,
     Heads heads,
     String axis,
-    List<Row> rows) {
+    List<Row> rows,
+    List<String> basis,
+    String without) {
   /** Column heads: which steps' percentiles the figures are. */
   record Heads(String typical, String highest, String when) {}
 

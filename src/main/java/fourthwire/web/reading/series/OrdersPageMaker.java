@@ -7,6 +7,7 @@ import fourthwire.metering.SeriesRepository;
 import fourthwire.metering.reduce.StepPercentiles;
 import fourthwire.metering.reduce.TimeSteps;
 import fourthwire.metering.series.WeekClock;
+import fourthwire.quantity.Conductor;
 import fourthwire.web.figure.StepStrip;
 import fourthwire.web.support.Column;
 import fourthwire.web.support.Numbers;
@@ -23,6 +24,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
+import java.util.OptionalDouble;
 
 /**
  * Makes the page of a log's orders over time: the 95th percentile of each order by day, or by week
@@ -30,6 +32,7 @@ import java.util.Optional;
  */
 final class OrdersPageMaker {
   private static final int MOST_DAYS = 62;
+  private static final double FURTHEST_LIMIT = 2.5;
   private static final DateTimeFormatter DAY =
       DateTimeFormatter.ofPattern("d MMM uuuu", Locale.ENGLISH);
 
@@ -72,7 +75,25 @@ final class OrdersPageMaker {
             words.of("orders.highest." + step, unit(chosen)),
             words.of("orders.when." + step)),
         StepStrip.axis(steps, log.zone(), words.of("orders.axis")),
-        rows(lines, steps, common));
+        rows(lines, steps, common),
+        lines.stream()
+            .flatMap(l -> view.limits().ofPercentile(l.quantity()).stream())
+            .map(LogLimits.Limit::basis)
+            .distinct()
+            .toList(),
+        without(chosen));
+  }
+
+  /** Why no limit is drawn. */
+  private String without(String source) {
+    if (source.startsWith(Conductor.N.name()) || source.isEmpty()) {
+      return source.isEmpty() ? "" : words.of("orders.without.neutral");
+    }
+    if (source.endsWith("current_percent")) {
+      return words.of("orders.without.percent");
+    }
+    boolean known = view.limits().knowsCurrents();
+    return source.endsWith("current_a") && !known ? words.of("orders.without.audit") : "";
   }
 
   private static String unit(String source) {
@@ -179,7 +200,8 @@ final class OrdersPageMaker {
     List<OrdersPage.Row> rows = new ArrayList<>();
     for (int k = 0; k < known.size(); k++) {
       Line line = known.get(k);
-      double most = common ? end : line.highest();
+      Optional<LogLimits.Limit> limit = view.limits().ofPercentile(line.quantity());
+      double most = common ? end : end(line.highest(), limit);
       rows.add(
           new OrdersPage.Row(
               Numbers.ordinal(line.order()),
@@ -188,16 +210,28 @@ final class OrdersPageMaker {
                   steps,
                   s -> line.p95()[s],
                   most > 0 ? most : 1,
+                  limit.map(l -> OptionalDouble.of(l.value())).orElse(OptionalDouble.empty()),
                   words.of("orders.alternative", Numbers.ordinal(line.order()))),
               typical.get(k),
               highest.get(k),
               DAY.format(date(steps, peak(line))),
-              view.limits().of(line.quantity()).stream()
-                  .map(l -> Numbers.plain(l.value(), "%"))
-                  .findFirst()
-                  .orElse("")));
+              limit.map(l -> limitText(l.value(), line)).orElse("")));
     }
     return rows;
+  }
+
+  /** Per cent as printed, amps as figures. */
+  private static String limitText(double limit, Line line) {
+    String unit = Measure.of(line.quantity()).unit(0);
+    return unit.equals("%") ? Numbers.plain(limit, unit) : Numbers.of(limit, unit);
+  }
+
+  /** An order's own scale holds its limit too, where that is not far above. */
+  private static double end(double highest, Optional<LogLimits.Limit> limit) {
+    return limit
+        .map(LogLimits.Limit::value)
+        .filter(l -> l > highest && l <= FURTHEST_LIMIT * highest)
+        .orElse(highest);
   }
 
   private static double median(double[] p95) {

@@ -1,5 +1,6 @@
 package fourthwire.web.reading.series;
 
+import fourthwire.jobs.measured.LogAssessments;
 import fourthwire.jobs.series.StoredLog;
 import fourthwire.jobs.series.StoredLogs;
 import fourthwire.site.SiteRepository;
@@ -17,11 +18,14 @@ import org.springframework.web.bind.annotation.RequestParam;
 @Controller
 class SeriesController {
   private final StoredLogs logs;
+  private final LogAssessments assessments;
   private final SiteRepository sites;
   private final Words words;
 
-  SeriesController(StoredLogs logs, SiteRepository sites, Words words) {
+  SeriesController(
+      StoredLogs logs, LogAssessments assessments, SiteRepository sites, Words words) {
     this.logs = logs;
+    this.assessments = assessments;
     this.sites = sites;
     this.words = words;
   }
@@ -74,7 +78,12 @@ class SeriesController {
   private LogView view(StoredLog log, String rows, String from, String to) {
     Optional<StoredLog> corrected = log.corrected();
     StoredLog shown = rows.equals(LogView.AS_READ) ? log : corrected.orElse(log);
-    return new LogView(shown, corrected.map(c -> log), Span.of(shown, from, to), words);
+    return new LogView(
+        shown,
+        corrected.map(c -> log),
+        Span.of(shown, from, to),
+        assessments.currentLimits(log.entry(), log.survey()),
+        words);
   }
 
   private StoredLog log(long reading, Model model) {
