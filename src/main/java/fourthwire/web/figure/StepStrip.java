@@ -46,7 +46,8 @@ public final class StepStrip {
     limit.stream()
         .filter(l -> l <= end)
         .mapToObj(l -> Svg.share(1 - l / end))
-        .forEach(y -> svg.add("line", "class", "full-mark", "x1", 0, "x2", "100%", "y1", y, "y2", y));
+        .forEach(
+            y -> svg.add("line", "class", "full-mark", "x1", 0, "x2", "100%", "y1", y, "y2", y));
     return svg.done();
   }
 

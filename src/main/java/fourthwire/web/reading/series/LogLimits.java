@@ -21,9 +21,9 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import java.util.function.Predicate;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
-import java.util.function.Predicate;
 
 /**
  * What a logged quantity is held against at its node: the smallest known rating of a current's
@@ -95,9 +95,7 @@ final class LogLimits {
                 upper(
                     c.orderLimitA(Integer.parseInt(order.group(1))),
                     words.of(
-                        "orders.limit.current",
-                        c.table().basis(),
-                        Numbers.of(c.demandA(), "A"))));
+                        "orders.limit.current", c.table().basis(), Numbers.of(c.demandA(), "A"))));
   }
 
   private List<Limit> current(SiteTree.Node at, String place) {

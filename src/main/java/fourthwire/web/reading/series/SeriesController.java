@@ -22,8 +22,7 @@ class SeriesController {
   private final SiteRepository sites;
   private final Words words;
 
-  SeriesController(
-      StoredLogs logs, LogAssessments assessments, SiteRepository sites, Words words) {
+  SeriesController(StoredLogs logs, LogAssessments assessments, SiteRepository sites, Words words) {
     this.logs = logs;
     this.assessments = assessments;
     this.sites = sites;
