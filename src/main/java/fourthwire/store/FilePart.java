@@ -91,28 +91,33 @@ final class FilePart {
     return common;
   }
 
-  /** What {@link #pack} packed. */
-  static byte[] unpack(byte[] packed) {
+  /**
+   * Unpacks what {@link #pack} packed.
+   *
+   * @param into has room for the part, and a byte more where its length is odd
+   * @return the part's length
+   */
+  static int unpack(byte[] packed, byte[] into) {
     if (packed[0] == PLAIN) {
-      return Arrays.copyOfRange(packed, 1, packed.length);
+      System.arraycopy(packed, 1, into, 0, packed.length - 1);
+      return packed.length - 1;
     }
     int length = 0;
     for (int k = 0; k < Integer.BYTES; k++) {
       length |= (packed[1 + k] & 0xff) << 8 * k;
     }
     short[] pairs = pairs(packed);
-    byte[] part = new byte[length + length % 2];
     int at = HEAD;
     for (int k = 0; k < length; k += 2) {
       byte pair = packed[at++];
       if (pair == OTHER) {
-        part[k] = packed[at++];
-        part[k + 1] = packed[at++];
+        into[k] = packed[at++];
+        into[k + 1] = packed[at++];
       } else {
-        PAIRS.set(part, k, pairs[pair & 0xff]);
+        PAIRS.set(into, k, pairs[pair & 0xff]);
       }
     }
-    return length % 2 == 0 ? part : Arrays.copyOf(part, length);
+    return length;
   }
 
   /** The two bytes that each number stands for. */

@@ -7,12 +7,13 @@ import java.io.UncheckedIOException;
 import java.security.DigestInputStream;
 import java.security.MessageDigest;
 import java.security.NoSuchAlgorithmException;
+import java.util.ArrayDeque;
 import java.util.ArrayList;
 import java.util.Collection;
+import java.util.Deque;
 import java.util.HexFormat;
 import java.util.List;
 import java.util.Objects;
-import java.util.Optional;
 import org.springframework.jdbc.core.simple.JdbcClient;
 import org.springframework.transaction.support.TransactionTemplate;
 
@@ -25,6 +26,7 @@ import org.springframework.transaction.support.TransactionTemplate;
 final class FileStore {
   private static final int PART_BYTES = 256 * 1024;
   private static final int PARTS_AT_ONCE = 16;
+  private static final int READ_AT_ONCE = 4;
 
   private final JdbcClient jdbc;
   private final TransactionTemplate transaction;
@@ -148,19 +150,15 @@ final class FileStore {
             .list());
   }
 
-  private Optional<byte[]> part(long fileId, int position) {
+  private List<byte[]> parts(long fileId, int from) {
     return jdbc.sql(
             """
-            select p.bytes, f.packed from stored_file_parts p join stored_files f on f.id = p.file_id
-            where p.file_id = ? and p.position = ?
+            select bytes from stored_file_parts where file_id = ? and position >= ? and position < ?
+            order by position
             """)
-        .params(fileId, position)
-        .query(
-            (row, n) -> {
-              byte[] bytes = Objects.requireNonNull(row.getBytes(1));
-              return row.getBoolean(2) ? FilePart.unpack(bytes) : bytes;
-            })
-        .optional();
+        .params(fileId, from, from + READ_AT_ONCE)
+        .query((row, n) -> Objects.requireNonNull(row.getBytes(1)))
+        .list();
   }
 
   static MessageDigest sha256() {
@@ -171,19 +169,28 @@ final class FileStore {
     }
   }
 
-  /** Reads one part after the other. */
+  /** Reads a few parts at a time. */
   private final class PartStream extends InputStream {
     private final long fileId;
+    private final boolean packed;
+    private final Deque<byte[]> ahead = new ArrayDeque<>();
     private int next;
-    private ByteArrayInputStream current = new ByteArrayInputStream(new byte[0]);
+    private byte[] current = new byte[PART_BYTES];
+    private int at;
+    private int end;
 
     PartStream(long fileId) {
       this.fileId = fileId;
+      this.packed =
+          jdbc.sql("select packed from stored_files where id = ?")
+              .param(fileId)
+              .query(Boolean.class)
+              .single();
     }
 
     @Override
     public int read() {
-      return more() ? current.read() : -1;
+      return more() ? current[at++] & 0xff : -1;
     }
 
     @Override
@@ -191,19 +198,27 @@ final class FileStore {
       if (length == 0) {
         return 0;
       }
-      return more() ? current.read(into, offset, length) : -1;
+      if (!more()) {
+        return -1;
+      }
+      int count = Math.min(length, end - at);
+      System.arraycopy(current, at, into, offset, count);
+      at += count;
+      return count;
     }
 
     private boolean more() {
-      if (current.available() == 0) {
-        part(fileId, next)
-            .ifPresent(
-                bytes -> {
-                  current = new ByteArrayInputStream(bytes);
-                  next++;
-                });
+      if (at == end && ahead.isEmpty()) {
+        ahead.addAll(parts(fileId, next));
+        next += ahead.size();
       }
-      return current.available() > 0;
+      if (at == end && !ahead.isEmpty()) {
+        byte[] part = ahead.remove();
+        at = 0;
+        end = packed ? FilePart.unpack(part, current) : part.length;
+        current = packed ? current : part;
+      }
+      return at < end;
     }
   }
 }

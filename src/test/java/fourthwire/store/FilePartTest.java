@@ -3,6 +3,7 @@ package fourthwire.store;
 import static org.assertj.core.api.Assertions.assertThat;
 
 import java.nio.charset.StandardCharsets;
+import java.util.Arrays;
 import java.util.Random;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -20,7 +21,9 @@ class FilePartTest {
         part[k] = (byte) (random.nextInt(20) == 0 ? random.nextInt() : random.nextInt(kinds) - 7);
       }
       byte[] packed = FilePart.pack(part);
-      assertThat(FilePart.unpack(packed)).as("%d kinds of bytes", kinds).isEqualTo(part);
+      byte[] into = new byte[part.length + 1];
+      assertThat(FilePart.unpack(packed, into)).isEqualTo(part.length);
+      assertThat(Arrays.copyOf(into, part.length)).as("%d kinds of bytes", kinds).isEqualTo(part);
       assertThat(packed.length).isLessThanOrEqualTo(part.length + 1);
     }
   }

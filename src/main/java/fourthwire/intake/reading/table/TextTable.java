@@ -143,6 +143,7 @@ public final class TextTable {
         if (!walk.through(b, dialect.firstData(), visitor)) {
           return;
         }
+        blocks.useAgain(b);
       }
     } catch (IOException e) {
       throw new UncheckedIOException(e);
