@@ -1,11 +1,11 @@
 package fourthwire.metering.log;
 
 import static fourthwire.metering.QualityFinding.DISTORTION_MISREAD;
-import static fourthwire.metering.QualityFinding.NEUTRAL_NOT_SUM;
 import static fourthwire.metering.QualityFinding.WRONG_RATIO;
 
 import fourthwire.metering.QualityFinding;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
@@ -24,14 +24,18 @@ final class ConductorRelations implements DayCheck {
       Pattern.compile("(.+)\\.(current|voltage)_h(\\d+)_(a|v|percent)");
   private static final int FEWEST_ROWS = 4;
 
+  /** Last digits that harmonics make together, at least, so that rounding is no distortion. */
+  private static final double FEWEST_DIGITS = 10;
+
+
   private final FlaggedDays flagged = new FlaggedDays();
   private final List<String> names;
-  private final List<String> neutralCurrents;
+  private final NeutralRelation neutral;
   private final Map<String, Map<Integer, Integer>> harmonics = new LinkedHashMap<>();
 
   ConductorRelations(List<String> names) {
     this.names = names;
-    this.neutralCurrents = names.stream().filter(n -> n.matches("N\\.(rms_a|current_).*")).toList();
+    this.neutral = new NeutralRelation(names, flagged);
     for (int q = 0; q < names.size(); q++) {
       Matcher m = HARMONIC.matcher(names.get(q));
       if (m.matches()) {
@@ -53,7 +57,7 @@ final class ConductorRelations implements DayCheck {
     if (day.rows() < FEWEST_ROWS) {
       return;
     }
-    neutral(day);
+    neutral.look(day);
     betweenLines(day);
     harmonics.forEach((key, orders) -> harmonics(day, key, orders));
   }
@@ -66,64 +70,6 @@ final class ConductorRelations implements DayCheck {
       String sentence,
       Offers.Of corrections) {
     flagged.add(day, new FlaggedDays.Fault(code, subject, effect, sentence, corrections));
-  }
-
-  /** For any waveforms the rms of a sum lies between the largest less the rest, and the sum. */
-  private void neutral(LogDay day) {
-    Optional<double[]> neutral = day.find("N.rms_a");
-    Optional<double[][]> lines = new LineDay(day).all("rms_a");
-    if (neutral.isEmpty() || lines.isEmpty()) {
-      return;
-    }
-    int there = 0;
-    int above = 0;
-    int below = 0;
-    for (int k = 0; k < day.rows(); k++) {
-      double n = neutral.get()[k];
-      double a = lines.get()[0][k];
-      double b = lines.get()[1][k];
-      double c = lines.get()[2][k];
-      double sum = a + b + c;
-      double least = Math.max(0, 2 * Math.max(a, Math.max(b, c)) - sum);
-      if (!Double.isNaN(sum + n)) {
-        there++;
-        above += n > 1.03 * sum + 0.1 ? 1 : 0;
-        below += n < 0.9 * least - 0.02 * sum ? 1 : 0;
-      }
-    }
-    int thirds = thirds(day);
-    if (there >= FEWEST_ROWS && above + below > there / 5 || thirds != 0) {
-      flag(
-          day,
-          NEUTRAL_NOT_SUM,
-          "N",
-          "The column mapped as N is not to be trusted.",
-          thirds != 0
-              ? "The third harmonic of N is "
-                  + (thirds > 0
-                      ? "above that of all lines together."
-                      : "far below that of the lines.")
-              : String.format(
-                  Locale.ROOT,
-                  "N.rms_a can't be the sum of the line currents: above all three together in %d of"
-                      + " %d rows of the day, below what they must leave in %d.",
-                  above,
-                  there,
-                  below),
-          rows -> List.of(Offers.leaveOut(neutralCurrents, rows)));
-    }
-  }
-
-  /** Third harmonics of the lines add up in the neutral: 1 where it has more, -1 far less. */
-  private static int thirds(LogDay day) {
-    Optional<double[]> neutral = day.find("N.current_h3_a");
-    Optional<double[][]> lines = new LineDay(day).all("current_h3_a");
-    if (neutral.isEmpty() || lines.isEmpty()) {
-      return 0;
-    }
-    double[][] l = lines.get();
-    double share = Rows.median(day.rows(), k -> neutral.get()[k] / (l[0][k] + l[1][k] + l[2][k]));
-    return share > 1.08 ? 1 : share < 0.1 ? -1 : 0;
   }
 
   /** Volts between lines are √3 times those to the neutral where these are alike. */
@@ -174,7 +120,11 @@ final class ConductorRelations implements DayCheck {
   }
 
   private static Offers.Of scaled(List<String> quantities, double ratio) {
-    return rows -> List.of(Offers.scale(quantities, ratio, rows));
+    return rows ->
+        List.of(
+            ratio > 0
+                ? Offers.scale(quantities, ratio, rows)
+                : Offers.leaveOut(quantities, rows));
   }
 
   private void harmonics(LogDay day, String key, Map<Integer, Integer> orders) {
@@ -197,7 +147,10 @@ final class ConductorRelations implements DayCheck {
     if (!percent && first.length > 0 && rms.isPresent()) {
       againstRms(day, place, current, first, sum, rms.get());
     }
-    distortion(day, place + (current ? ".current" : ".voltage"), percent, first, sum, rms);
+    double digit = above.stream().mapToDouble(Rows::leastStep).max().orElse(0);
+    double[] told = new double[sum.length];
+    Arrays.setAll(told, k -> sum[k] > FEWEST_DIGITS * digit ? sum[k] : Double.NaN);
+    distortion(day, place + (current ? ".current" : ".voltage"), percent, first, told, rms);
   }
 
   private static double[] rootSum(List<double[]> all, int rows) {
@@ -207,13 +160,13 @@ final class ConductorRelations implements DayCheck {
         sum[k] += Double.isNaN(x[k]) ? 0 : x[k] * x[k];
       }
     }
-    java.util.Arrays.setAll(sum, k -> Math.sqrt(sum[k]));
+    Arrays.setAll(sum, k -> Math.sqrt(sum[k]));
     return sum;
   }
 
   private void againstRms(
       LogDay day, String place, boolean current, double[] first, double[] sum, double[] rms) {
-    double ratio = Rows.median(day.rows(), k -> rms[k] / Math.hypot(first[k], sum[k]));
+    double ratio = PowerRatios.median(rms, k -> rms[k] / Math.hypot(first[k], sum[k]));
     if (ratio < 0.93 || ratio > 1.15) {
       flag(
           day,
@@ -263,7 +216,8 @@ final class ConductorRelations implements DayCheck {
                       : first.length > 0
                           ? first[k]
                           : Math.sqrt(Math.max(0, rms.get()[k] * rms.get()[k] - sum[k] * sum[k]));
-              return logged.get()[k] / (100 * sum[k] / base);
+              // Instruments write 0 where the current is too small to tell.
+              return logged.get()[k] == 0 ? Double.NaN : logged.get()[k] / (100 * sum[k] / base);
             });
     if (ratio < 0.8 || ratio > 1.5) {
       flag(

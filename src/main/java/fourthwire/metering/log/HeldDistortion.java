@@ -199,13 +199,20 @@ final class HeldDistortion implements DayCheck {
     if (daily.isEmpty() && lines.isOne()) {
       findings.add(
           finding(
-              "L1.current_thd_percent",
+              List.of(
+                  "L1.current_thd_percent", "L2.current_thd_percent", "L3.current_thd_percent"),
               "is the same as that of L2 and L3 in nearly every row, as one mean of all lines is"));
     }
     return findings;
   }
 
   private QualityFinding finding(String name, String what) {
+    return finding(List.of(name), what);
+  }
+
+  /** Of columns that are alike; the first is named. */
+  private QualityFinding finding(List<String> alike, String what) {
+    String name = alike.get(0);
     Correction.Rows all = new Correction.Rows(0, rows);
     String start = name.replace("thd_percent", "h");
     boolean harmonics =

@@ -149,12 +149,19 @@ final class ImpossibleValues implements DayCheck {
     for (int row = 0; row < x.length; row++) {
       if (Double.isNaN(x[row])) {
         blank.take(day, row, Double.NaN, Double.NaN);
-      } else if (wrong[row] || !bounds.holds(x, row)) {
+      } else if (wrong[row] || !bounds.holds(x, row) && !isOff(day, q, row)) {
         seen[q].take(day, row, x[row], usual);
       } else {
         seen[q].keep(x[row]);
       }
     }
+  }
+
+  /** Where there are no volts there is no frequency. */
+  private boolean isOff(LogDay day, int q, int row) {
+    return names.get(q).equals("frequency_hz")
+        && day.of(q)[row] == 0
+        && day.find("L1.rms_v").or(() -> day.find("L1.rms_a")).filter(x -> x[row] == 0).isPresent();
   }
 
   /** What a value may be; {@code alone} is the bound of one that neither neighbour comes near. */
@@ -179,7 +186,7 @@ final class ImpossibleValues implements DayCheck {
       String name, QuantityStatistics s, double nominalHz) {
     double none = Double.MAX_VALUE;
     if (name.endsWith(".rms_v")) {
-      return x -> new Bounds(0, 2 * Math.max(Rows.median(x), 0.5 * s.p95()) + 1, none);
+      return x -> new Bounds(0, 2 * Math.max(Rows.median(x), 0.75 * s.p95()) + 1, none);
     }
     Bounds fixed = fixed(name, s, nominalHz);
     return x -> fixed;

@@ -23,6 +23,8 @@ final class LogClock implements DayCheck {
 
   private static final int MOST_JUMPS = 50;
 
+  private static final long HOUR_MILLIS = Duration.ofHours(1).toMillis();
+
   /** A step off the grid that is longer is a pause as well. */
   private static final long LONGEST_SET_MILLIS = Duration.ofDays(1).toMillis();
 
@@ -126,6 +128,20 @@ final class LogClock implements DayCheck {
     }
     if (step - interval > interval / 2 && (onGrid || step > LONGEST_SET_MILLIS)) {
       gap(new Gap(before + interval, at));
+      hourOn(day.firstRow() + row, at, interval);
+    }
+  }
+
+  /** An hour without rows is what a clock leaves that is set to summer time. */
+  private void hourOn(long row, long at, long interval) {
+    if (at - before - interval == HOUR_MILLIS && 2 * interval <= HOUR_MILLIS) {
+      jump(
+          before + interval,
+          at,
+          "Rows from then on may be an hour late.",
+          "Rows of exactly one hour are missing: the logging paused, or the clock was set forward"
+              + " by 1 h.",
+          Offers.shift(-HOUR_MILLIS, 0, row));
     }
   }
 

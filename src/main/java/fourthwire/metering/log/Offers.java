@@ -161,8 +161,13 @@ final class Offers {
   }
 
   static Correction formDistortion(String quantity, Rows rows) {
-    return Correction.of(
-        "Form " + quantity + " from the harmonics", new FormDistortion(quantity, rows));
+    return formDistortion(List.of(quantity), rows);
+  }
+
+  static Correction formDistortion(List<String> quantities, Rows rows) {
+    List<Step> steps = new ArrayList<>();
+    quantities.forEach(q -> steps.add(new FormDistortion(q, rows)));
+    return new Correction("Form " + joined(quantities) + " from the harmonics", steps);
   }
 
   /**

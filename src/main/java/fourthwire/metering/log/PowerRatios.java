@@ -23,6 +23,9 @@ final class PowerRatios {
   /** Whole ratios that an instrument may be set to, as exact as that, are no load's own. */
   private static final double WHOLE = 0.04;
 
+  /** Last digits in a current, at least, so that rounding is no ratio. */
+  private static final double FEWEST_DIGITS = 20;
+
   private static final double STEADY = 0.08;
   private static final int MOST_WHOLE = 20;
 
@@ -135,7 +138,7 @@ final class PowerRatios {
 
   /** Rows of next to no current have no ratio: their digits are too few. */
   static double median(double[] amps, IntToDoubleFunction ratio) {
-    double least = 0.1 * Rows.median(amps);
+    double least = Math.max(0.1 * Rows.median(amps), FEWEST_DIGITS * Rows.leastStep(amps));
     return Rows.median(amps.length, k -> amps[k] > least ? ratio.applyAsDouble(k) : Double.NaN);
   }
 
@@ -202,6 +205,9 @@ final class PowerRatios {
 
   /** The power where the ratio is a prefix of its unit; else the amps, or the power. */
   private static List<Correction> rescaled(LogDay day, Off off, Correction.Rows rows) {
+    if (!(off.median() > 0)) {
+      return List.of();
+    }
     boolean active = off.which().equals(ACTIVE);
     double ratio = active ? againstOthers(day, off.line(), off.median()) : off.median();
     Correction ofPower =
@@ -221,6 +227,9 @@ final class PowerRatios {
   /** The same for all lines at once, N with them where it is the amps. */
   private static List<Correction> allRescaled(
       LogDay day, String which, double ratio, Correction.Rows rows) {
+    if (!(ratio > 0)) {
+      return List.of();
+    }
     boolean active = which.equals(ACTIVE);
     List<String> powers = new ArrayList<>();
     List<String> amps = new ArrayList<>();

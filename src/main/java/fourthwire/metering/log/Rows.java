@@ -31,6 +31,18 @@ final class Rows {
     return medianOf(x);
   }
 
+  /** The smallest step from row to row: a last digit, where values are written in few. */
+  static double leastStep(double[] x) {
+    double least = 0;
+    for (int k = 1; k < x.length; k++) {
+      double step = Math.abs(x[k] - x[k - 1]);
+      if (step > 1e-9 * Math.abs(x[k]) && (least == 0 || step < least)) {
+        least = step;
+      }
+    }
+    return least;
+  }
+
   /** How many rows a figure is there. */
   static int count(int rows, IntToDoubleFunction figure) {
     int there = 0;

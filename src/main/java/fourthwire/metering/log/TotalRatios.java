@@ -110,6 +110,9 @@ final class TotalRatios {
 
   private static List<Correction> corrected(
       String measure, double ratio, boolean lines, Correction.Rows rows) {
+    if (!(Math.abs(ratio) > 0)) {
+      return List.of();
+    }
     if (PowerRatios.isPrefix(ratio) || !lines) {
       return List.of(Offers.scale(List.of("total." + measure), ratio, rows));
     }

@@ -206,6 +206,27 @@ class PlantedFaultsTest {
               b.scale("L2.rms_a", p[0], p[1], 2);
             }),
         fault(
+            "a line without volts for days",
+            QualityFinding.WRONG_RATIO,
+            d,
+            e,
+            (b, p) -> b.scale("L2.rms_v", p[0], p[1], 0)),
+        fault(
+            "a neutral by a tenth, beside percentages of harmonics",
+            QualityFinding.NEUTRAL_NOT_SUM,
+            d,
+            e,
+            (b, p) -> {
+              for (String line : LineDay.LINES) {
+                double[] percent = b.columns.get(line + ".current_h3_a");
+                java.util.Arrays.setAll(
+                    percent, k -> 100 * percent[k] / b.at(line + ".current_h1_a", k));
+                b.columns.put(line + ".current_h3_percent", percent);
+              }
+              b.columns.keySet().removeIf(name -> name.matches(".*_h\\d_a"));
+              b.scale("N.rms_a", p[0], p[1], 0.1);
+            }),
+        fault(
             "a distortion averaged otherwise",
             QualityFinding.DISTORTION_MISREAD,
             d,
@@ -310,6 +331,39 @@ class PlantedFaultsTest {
                                     "Multiply L1.rms_a, L2.rms_a, L3.rms_a and N.rms_a, with their"
                                         + " harmonics, by 0.2")));
     assertThat(found).filteredOn(f -> f.code().equals(QualityFinding.WRONG_RATIO)).hasSize(1);
+  }
+
+  /** An hour that is missing is a pause, or a clock set to summer time: either is offered. */
+  @ParameterizedTest
+  @ValueSource(longs = {21, 22})
+  void anHourOnIsToldAsBoth(long seed) {
+    InventedBoard board = new InventedBoard(seed, 2);
+    board.times.replaceAll(t -> t >= START + STEP * 500 ? t + 3_600_000 : t);
+    assertThat(board.reading().quality())
+        .as("seed %d", seed)
+        .extracting(QualityFinding::code)
+        .containsExactlyInAnyOrder(QualityFinding.CLOCK_JUMP, QualityFinding.GAP);
+  }
+
+  /** A generator that rests has neither volts nor frequency; a small load has few digits. */
+  @ParameterizedTest
+  @ValueSource(longs = {24, 25, 26})
+  void whatRestsRaisesNoAlarm(long seed) {
+    InventedBoard board = new InventedBoard(seed, 1);
+    for (int row = 0; row < board.times.size(); row++) {
+      boolean off = row % PER_DAY < 110 || row / PER_DAY % 7 > 4;
+      double load = seed == 25 ? 0.0004 : off ? 0 : 1;
+      for (String name : List.copyOf(board.columns.keySet())) {
+        boolean volts = name.matches(".*rms_v|frequency_hz") && seed != 25;
+        boolean amps = name.matches(".*(_a|_w)");
+        if (off && (volts || amps || name.endsWith("_percent")) && seed != 26 || amps && off) {
+          int decimals = name.endsWith("_w") ? 0 : name.contains("_h") ? 3 : 1;
+          double at = name.endsWith("_percent") ? 0 : board.at(name, row) * load;
+          board.put(name, row, at, decimals);
+        }
+      }
+    }
+    assertThat(board.reading().quality()).as("seed %d", seed).isEmpty();
   }
 
   /** Means over a day, two hours, or all lines, written in every row. */
