@@ -27,7 +27,6 @@ final class ConductorRelations implements DayCheck {
   /** Last digits that harmonics make together, at least, so that rounding is no distortion. */
   private static final double FEWEST_DIGITS = 10;
 
-
   private final FlaggedDays flagged = new FlaggedDays();
   private final List<String> names;
   private final NeutralRelation neutral;
@@ -122,9 +121,7 @@ final class ConductorRelations implements DayCheck {
   private static Offers.Of scaled(List<String> quantities, double ratio) {
     return rows ->
         List.of(
-            ratio > 0
-                ? Offers.scale(quantities, ratio, rows)
-                : Offers.leaveOut(quantities, rows));
+            ratio > 0 ? Offers.scale(quantities, ratio, rows) : Offers.leaveOut(quantities, rows));
   }
 
   private void harmonics(LogDay day, String key, Map<Integer, Integer> orders) {

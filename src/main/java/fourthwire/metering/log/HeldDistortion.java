@@ -199,8 +199,7 @@ final class HeldDistortion implements DayCheck {
     if (daily.isEmpty() && lines.isOne()) {
       findings.add(
           finding(
-              List.of(
-                  "L1.current_thd_percent", "L2.current_thd_percent", "L3.current_thd_percent"),
+              List.of("L1.current_thd_percent", "L2.current_thd_percent", "L3.current_thd_percent"),
               "is the same as that of L2 and L3 in nearly every row, as one mean of all lines is"));
     }
     return findings;

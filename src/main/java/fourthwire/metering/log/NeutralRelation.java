@@ -105,8 +105,7 @@ final class NeutralRelation {
             k -> (l[0][k] + l[1][k] + l[2][k]) / (amps[0][k] + amps[1][k] + amps[2][k]));
     Optional<double[]> neutral = day.find("N.current_h3_a");
     double share =
-        Rows.median(
-            day.rows(), k -> neutral.orElse(rms)[k] / (l[0][k] + l[1][k] + l[2][k]));
+        Rows.median(day.rows(), k -> neutral.orElse(rms)[k] / (l[0][k] + l[1][k] + l[2][k]));
     if (neutral.isPresent() && share > 1.08) {
       return Optional.of("The third harmonic of N is above that of all lines together.");
     }
