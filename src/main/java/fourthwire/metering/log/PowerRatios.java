@@ -139,7 +139,12 @@ final class PowerRatios {
   /** Rows of next to no current have no ratio: their digits are too few. */
   static double median(double[] amps, IntToDoubleFunction ratio) {
     double least = Math.max(0.1 * Rows.median(amps), FEWEST_DIGITS * Rows.leastStep(amps));
-    return Rows.median(amps.length, k -> amps[k] > least ? ratio.applyAsDouble(k) : Double.NaN);
+    return Rows.median(
+        amps.length,
+        k -> {
+          double at = amps[k] > least ? ratio.applyAsDouble(k) : Double.NaN;
+          return Double.isInfinite(at) ? Double.NaN : at;
+        });
   }
 
   private void ofOne(LogDay day, Off off) {
