@@ -27,7 +27,7 @@ public final class LogVerdictJson {
   private static ObjectNode write(LogVerdict v, ZoneId zone) {
     MeasuredBand band = v.band();
     ObjectNode o = Json.object().put("code", v.code()).put("basis", band.basis());
-    o.put("period", band.weekly() ? "week" : "day").put("value_s", band.weekly() ? 600 : 3);
+    o.put("period", band.values().word()).put("value_s", band.values().seconds());
     o.put("percent_of_values", band.percent()).put("unit", v.unit());
     if (band.isTwoSided()) {
       o.put("band_from", band.low()).put("band_to", band.high());

@@ -7,7 +7,7 @@ import java.util.Comparator;
 import java.util.List;
 
 /**
- * What one limit says of a log, day by day or week by week.
+ * What one limit says of a log, day by day, week by week or year by year.
  *
  * @param code word of what is held against it
  * @param band the limit; of single orders that of the worst period's order
@@ -18,13 +18,16 @@ public record LogVerdict(String code, MeasuredBand band, String unit, List<Perio
   /** Word of the rms of a voltage, which no audit's finding has. */
   public static final String RMS_VOLTAGE = "rms-voltage";
 
+  /** Word of a supply's frequency, likewise. */
+  public static final String FREQUENCY = "frequency";
+
   /** Copies the list. */
   public LogVerdict {
     periods = List.copyOf(periods);
   }
 
   /**
-   * A day or week.
+   * A day, week or year.
    *
    * @param place conductor or pair, empty text for all lines together
    * @param order of a harmonic; 0 otherwise

@@ -4,6 +4,7 @@ import fourthwire.limits.FindingCode;
 import fourthwire.limits.distortion.CurrentDistortion519;
 import fourthwire.limits.distortion.Edition519;
 import fourthwire.limits.distortion.MeasuredBand;
+import fourthwire.limits.distortion.MeasuredBand.Values;
 import fourthwire.limits.distortion.MeasuredBands;
 import fourthwire.limits.distortion.VoltageDistortion;
 import fourthwire.metering.assess.PeriodFigures;
@@ -14,6 +15,7 @@ import fourthwire.site.Practice;
 import java.time.Duration;
 import java.time.Instant;
 import java.util.ArrayList;
+import java.util.EnumMap;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -44,6 +46,7 @@ public final class LogVerdicts {
    * @param interval length of a row
    * @param nominalLineV of the node, between lines
    * @param nominalPhaseV to the neutral
+   * @param nominalHz of the supply
    * @param demandA I_L, where it is known
    * @param shortCircuitA at the node, where it is known
    */
@@ -52,6 +55,7 @@ public final class LogVerdicts {
       Duration interval,
       double nominalLineV,
       double nominalPhaseV,
+      double nominalHz,
       Practice practice,
       OptionalDouble demandA,
       OptionalDouble shortCircuitA) {}
@@ -64,6 +68,16 @@ public final class LogVerdicts {
   public static List<LogVerdict> of(Request request) {
     LogVerdicts all = new LogVerdicts(request);
     all.voltages();
+    all.columns
+        .find("frequency_hz")
+        .ifPresent(
+            column ->
+                all.hold(
+                    LogVerdict.FREQUENCY,
+                    "",
+                    0,
+                    MeasuredBands.frequency(request.nominalHz()),
+                    column));
     all.currents();
     return all.found.values().stream()
         .map(f -> new LogVerdict(f.code(), f.band(), f.unit(), List.copyOf(f.periods().values())))
@@ -173,14 +187,21 @@ public final class LogVerdicts {
     if (bands.isEmpty()) {
       return;
     }
-    List<PeriodFigures> weeks = figures(column, Span.WEEK);
-    List<PeriodFigures> days =
-        bands.stream().allMatch(MeasuredBand::weekly) ? List.of() : figures(column, Span.DAY);
+    Map<Values, List<PeriodFigures>> formed = new EnumMap<>(Values.class);
     for (MeasuredBand band : bands) {
-      for (PeriodFigures f : band.weekly() ? weeks : days) {
+      for (PeriodFigures f :
+          formed.computeIfAbsent(band.values(), values -> figures(column, span(values)))) {
         note(code, band, period(band, place, order, f));
       }
     }
+  }
+
+  private static Span span(Values values) {
+    return switch (values) {
+      case OF_A_DAY -> Span.DAY;
+      case OF_A_WEEK -> Span.WEEK;
+      case OF_A_YEAR -> Span.YEAR;
+    };
   }
 
   private List<PeriodFigures> figures(PeriodFigures.Column column, Span span) {
@@ -207,7 +228,7 @@ public final class LogVerdicts {
    */
   private void note(String code, MeasuredBand band, LogVerdict.Period period) {
     boolean pair = band.isTwoSided() && period.place().contains("-");
-    String key = code + band.weekly() + band.percent() + band.basis() + pair;
+    String key = code + band.values() + band.percent() + band.basis() + pair;
     Found into =
         found.computeIfAbsent(
             key,

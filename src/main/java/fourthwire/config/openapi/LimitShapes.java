@@ -20,15 +20,15 @@ final class LimitShapes {
     return Shape.of("A limit")
         .text("code", "What is held against it: voltage-thd, voltage-order, rms-voltage, …")
         .text("basis", "Document, edition, clause")
-        .word("period", "Over what", "day", "week")
+        .word("period", "Over what", "day", "week", "year")
         .whole("value_s", "Length of the values that are counted, seconds")
         .number("percent_of_values", "How many of a period's values must keep the limit, percent")
         .text("unit", "Of figure and limit")
-        .optional("band_from", Shape.number("Of a band with two ends: its lower end, volts"))
+        .optional("band_from", Shape.number("Of a band with two ends: its lower end, volts or hertz"))
         .optional("band_to", Shape.number("Its upper end, volts"))
         .word("outcome", "Over where any period is, within where any is and none is over", OUTCOMES)
         .part("worst", period("The period that stands for all"))
-        .list("periods", "All of them in time", period("A day or week"))
+        .list("periods", "All of them in time", period("A day, week or year"))
         .schema();
   }
 

@@ -2,6 +2,7 @@ package fourthwire.jobs.measured;
 
 import fourthwire.audit.AuditRepository;
 import fourthwire.audit.DesignState;
+import fourthwire.audit.measured.FrequencyRows;
 import fourthwire.audit.measured.LogVerdict;
 import fourthwire.audit.measured.LogVerdicts;
 import fourthwire.limits.distortion.CurrentDistortion519;
@@ -145,19 +146,22 @@ public final class LogAssessments {
           set.words(), List.of(), List.of("The survey has this meter’s node no more."));
     }
     Duration interval = set.log().interval();
+    Series rows = new CorrectedSeries(read, set.corrections());
     List<LogVerdict> verdicts =
         LogVerdicts.of(
             new LogVerdicts.Request(
-                new CorrectedSeries(read, set.corrections()),
+                rows,
                 interval,
                 node.get().nominalV(),
                 node.get().lineToNeutralV(),
+                survey.settings().frequencyHz(),
                 survey.settings().practice(),
                 currents.demandA(),
                 currents.faultA()));
     List<String> notes = notes(interval, currents);
-    if (read.indexOf("frequency_hz") >= 0) {
-      notes.add(frequency(interval));
+    if (!Span.YEAR.canBeMadeOf(interval)) {
+      FrequencyRows.sentence(rows, interval.toSeconds(), survey.settings().frequencyHz())
+          .ifPresent(notes::add);
     }
     return new Result(set.words(), verdicts, notes);
   }
@@ -174,14 +178,6 @@ public final class LogAssessments {
     }
     notes.add(currents.note());
     return notes;
-  }
-
-  /** Why nothing is said of it; the band is of EN 50160:2010, clause 4.2.1. */
-  private static String frequency(Duration interval) {
-    return "Frequency is not held against a limit: EN 50160, clause 4.2.1, counts means over 10 s, "
-        + (interval.toMillis() > 10_000
-            ? "which can’t be made of rows of " + interval.toSeconds() + " s."
-            : "which are not formed here.");
   }
 
   /** From the latest audit that is done. */

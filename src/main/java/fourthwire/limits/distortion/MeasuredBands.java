@@ -1,6 +1,7 @@
 package fourthwire.limits.distortion;
 
 import fourthwire.quantity.PublishedTable;
+import fourthwire.limits.distortion.MeasuredBand.Values;
 import java.util.ArrayList;
 import java.util.List;
 
@@ -13,6 +14,9 @@ public final class MeasuredBands {
   private static final PublishedTable FACTORS =
       PublishedTable.beside(MeasuredBands.class, "ieee519-percentiles.csv");
   private static final double EN_50160_PERCENT = 95;
+  private static final double FREQUENCY_PERCENT = 99.5;
+  private static final String FREQUENCY_OF_EN_50160 =
+      "EN 50160:2010, clause 4.2.1, interconnected networks (from memory)";
   private static final String VOLTAGE_OF_EN_50160 = "EN 50160:2010, clause 4.2.2";
   private static final String UNBALANCE_OF_EN_50160 = "EN 50160:2010, clause 4.2.4";
   private static final String VOLTAGE_OF_PLANTS =
@@ -34,11 +38,11 @@ public final class MeasuredBands {
     List<MeasuredBand> bands = new ArrayList<>();
     for (PublishedTable.Row row : FACTORS.rows()) {
       if (row.text("quantity").equals(quantity)) {
-        boolean weekly = row.number("value_s") == 600;
+        Values values = row.number("value_s") == 600 ? Values.OF_A_WEEK : Values.OF_A_DAY;
         double factor = row.number("factor");
         bands.add(
             MeasuredBand.upTo(
-                weekly,
+                values,
                 row.number("percentile"),
                 factor * limit,
                 factor == 1 ? basis : basis + ", times " + factor + " (from memory)"));
@@ -49,7 +53,7 @@ public final class MeasuredBands {
 
   /** Distortion after EN 50160 or IEC 61000-2-4. */
   public static List<MeasuredBand> weekly95(double limit, String basis) {
-    return List.of(MeasuredBand.upTo(true, EN_50160_PERCENT, limit, basis));
+    return List.of(MeasuredBand.upTo(Values.OF_A_WEEK, EN_50160_PERCENT, limit, basis));
   }
 
   /**
@@ -61,19 +65,36 @@ public final class MeasuredBands {
   public static List<MeasuredBand> supplyVoltage(double nominalV) {
     return List.of(
         new MeasuredBand(
-            true, EN_50160_PERCENT, 0.9 * nominalV, 1.1 * nominalV, VOLTAGE_OF_EN_50160),
-        new MeasuredBand(true, 100, 0.85 * nominalV, 1.1 * nominalV, VOLTAGE_OF_EN_50160));
+            Values.OF_A_WEEK, EN_50160_PERCENT, 0.9 * nominalV, 1.1 * nominalV, VOLTAGE_OF_EN_50160),
+        new MeasuredBand(Values.OF_A_WEEK, 100, 0.85 * nominalV, 1.1 * nominalV, VOLTAGE_OF_EN_50160));
   }
 
   /** Rms inside a plant of class 2: within 10 % of nominal. */
   public static List<MeasuredBand> plantVoltage(double nominalV) {
     return List.of(
         new MeasuredBand(
-            true, EN_50160_PERCENT, 0.9 * nominalV, 1.1 * nominalV, VOLTAGE_OF_PLANTS));
+            Values.OF_A_WEEK, EN_50160_PERCENT, 0.9 * nominalV, 1.1 * nominalV, VOLTAGE_OF_PLANTS));
+  }
+
+  /**
+   * Frequency of a public supply joined to an interconnected network: 99.5 % of a year's 10 s values
+   * within 1 % of nominal, all of them within +4 and -6 %. Class 2 of IEC 61000-2-4 allows the same
+   * 1 %.
+   */
+  public static List<MeasuredBand> frequency(double nominalHz) {
+    return List.of(
+        new MeasuredBand(
+            Values.OF_A_YEAR,
+            FREQUENCY_PERCENT,
+            0.99 * nominalHz,
+            1.01 * nominalHz,
+            FREQUENCY_OF_EN_50160),
+        new MeasuredBand(
+            Values.OF_A_YEAR, 100, 0.94 * nominalHz, 1.04 * nominalHz, FREQUENCY_OF_EN_50160));
   }
 
   /** Negative on positive sequence of a public supply. */
   public static List<MeasuredBand> unbalance() {
-    return List.of(MeasuredBand.upTo(true, EN_50160_PERCENT, 2, UNBALANCE_OF_EN_50160));
+    return List.of(MeasuredBand.upTo(Values.OF_A_WEEK, EN_50160_PERCENT, 2, UNBALANCE_OF_EN_50160));
   }
 }

@@ -8,7 +8,7 @@ import java.util.Arrays;
 import java.util.List;
 
 /**
- * What was there of one quantity in one day or week of a log, in the values that standards count:
+ * What was there of one quantity in one day, week or year of a log, in the values that standards count:
  * very short ones of 3 s, short ones of 10 min (IEC 61000-4-30:2015, 4.5: roots of mean squares of
  * shorter rows). Days and weeks follow each other from the log's first full ten minutes on.
  */
@@ -31,7 +31,9 @@ public final class PeriodFigures {
     /** The 3 s values of a day. */
     DAY(Duration.ofSeconds(3), Duration.ofDays(1)),
     /** The 10 min values of a week. */
-    WEEK(Duration.ofMinutes(10), Duration.ofDays(7));
+    WEEK(Duration.ofMinutes(10), Duration.ofDays(7)),
+    /** The 10 s values of a year of 365 days. */
+    YEAR(Duration.ofSeconds(10), Duration.ofDays(365));
 
     private final long value;
     private final long period;

@@ -54,12 +54,13 @@ final class LimitsMaker {
 
   private String what(LogVerdict v, LogVerdict.Period p) {
     String place = p.place().isEmpty() ? "" : names.of(p.place());
+    String unit = v.code().equals(LogVerdict.FREQUENCY) ? "Hz" : "V";
     return v.band().isTwoSided()
         ? words.of(
             "reading.limits.what." + v.code(),
             place,
-            Numbers.plain(v.band().low(), "V"),
-            Numbers.plain(v.band().high(), "V"))
+            Numbers.plain(v.band().low(), unit),
+            Numbers.plain(v.band().high(), unit))
         : words.of(
             "reading.limits.what." + v.code(),
             place,
@@ -67,7 +68,7 @@ final class LimitsMaker {
   }
 
   private String counted(MeasuredBand band) {
-    String key = band.weekly() ? "reading.limits.week" : "reading.limits.day";
+    String key = "reading.limits." + band.values().word();
     return band.percent() == 100
         ? words.of(key + ".all")
         : words.of(key, Numbers.plain(band.percent(), "%"));
@@ -105,7 +106,7 @@ final class LimitsMaker {
       if (count > 0) {
         String word = o.name().toLowerCase(Locale.ROOT);
         parts.add(
-            words.of("reading.limits." + word + (v.band().weekly() ? ".weeks" : ".days"), count));
+            words.of("reading.limits." + word + "." + v.band().values().word() + "s", count));
       }
     }
     String text = String.join(", ", parts);

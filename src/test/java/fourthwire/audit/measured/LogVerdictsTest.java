@@ -41,7 +41,7 @@ class LogVerdictsTest {
       Map<String, double[]> columns, OptionalDouble demandA, OptionalDouble faultA) {
     return LogVerdicts.of(
         new LogVerdicts.Request(
-            log(columns), Duration.ofMinutes(10), 400, 230.94, Practice.IEC, demandA, faultA));
+            log(columns), Duration.ofMinutes(10), 400, 230.94, 50, Practice.IEC, demandA, faultA));
   }
 
   private static LogVerdict find(List<LogVerdict> all, String code, String basis, double percent) {
@@ -50,6 +50,61 @@ class LogVerdictsTest {
         .filter(v -> v.band().percent() == percent)
         .findFirst()
         .orElseThrow();
+  }
+
+  /** One day of 10 s means, every hundredth at another frequency. */
+  private static List<LogVerdict> frequency(double rarely) {
+    int rows = 8640;
+    LogSeries series = new LogSeries(List.of("frequency_hz"), Parts.held(), 1 << 24);
+    long[] times = new long[rows];
+    long start = Instant.parse("2026-03-02T00:00:00Z").toEpochMilli();
+    Arrays.setAll(times, k -> start + 10_000L * k);
+    double[] hertz = new double[rows];
+    Arrays.setAll(hertz, k -> k % 100 == 0 ? rarely : 50);
+    series.add(new LogChunk(times, new double[][] {hertz}), Runnable::run);
+    return LogVerdicts.of(
+        new LogVerdicts.Request(
+            series,
+            Duration.ofSeconds(10),
+            400,
+            230.94,
+            50,
+            Practice.IEC,
+            OptionalDouble.empty(),
+            OptionalDouble.empty()));
+  }
+
+  /**
+   * EN 50160:2010, clause 4.2.1 (from memory): 99.5 % of a year's 10 s means within 49.5 to 50.5 Hz,
+   * all within 47 to 52 Hz. A day leaves a year open, but one mean outside the latter is too many.
+   */
+  @Test
+  void frequencyIsHeldAgainstItsYear() {
+    LogVerdict rare = find(frequency(49.4), "frequency", "EN 50160", 99.5);
+    assertThat(rare.outcome()).isEqualTo(Outcome.OPEN);
+    assertThat(rare.worst().figure()).isCloseTo(100 * 87 / 8640.0, within(1e-9));
+    assertThat(rare.worst().sharePercent()).isCloseTo(100 / 365.0, within(1e-9));
+    assertThat(find(frequency(49.4), "frequency", "EN 50160", 100).outcome())
+        .isEqualTo(Outcome.OPEN);
+    assertThat(find(frequency(46.9), "frequency", "EN 50160", 100).outcome())
+        .isEqualTo(Outcome.OVER);
+  }
+
+  /** A mean of ten minutes outside has a mean of 10 s outside in it; one inside tells nothing. */
+  @Test
+  void longerRowsSayLessOfTheFrequency() {
+    Map<String, double[]> columns = new LinkedHashMap<>();
+    columns.put("frequency_hz", mostly(50, 3, 49.9));
+    assertThat(judge(columns, OptionalDouble.empty(), OptionalDouble.empty())).isEmpty();
+    assertThat(FrequencyRows.sentence(log(columns), 600, 50).orElseThrow())
+        .contains("rows are of 600 s", "from 49.90 to 50.00 Hz", "does not show that every");
+    columns.put("frequency_hz.min", mostly(49.8, 0, 0));
+    columns.put("frequency_hz.max", mostly(50.2, 0, 0));
+    assertThat(FrequencyRows.sentence(log(columns), 600, 50).orElseThrow())
+        .endsWith("so every 10 s mean in them did.");
+    columns.put("frequency_hz", mostly(50, 3, 49.4));
+    assertThat(FrequencyRows.sentence(log(columns), 600, 50).orElseThrow())
+        .contains("3 of 1008 lay outside 49.5 to 50.5 Hz");
   }
 
   @Test

@@ -49,6 +49,7 @@ class MessagesTest {
           "reading.limits.what.",
           "reading.limits.week",
           "reading.limits.day",
+          "reading.limits.year",
           "reading.limits.over",
           "reading.limits.within",
           "reading.limits.open",
