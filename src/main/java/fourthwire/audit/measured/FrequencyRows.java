@@ -62,9 +62,10 @@ public final class FrequencyRows {
     String what =
         String.format(
             Locale.ROOT,
-            "Frequency gets no verdict: EN 50160, clause 4.2.1, counts means over 10 s, of which 99.5 %%"
-                + " of a year’s lie within 1 %% of nominal (IEC 61000-2-4, class 2, allows the same 1"
-                + " %%), and these rows are of %d s. Their means lay from %.2f to %.2f Hz; ",
+            "Frequency gets no verdict: EN 50160, clause 4.2.1, counts means over 10 s, of which"
+                + " 99.5 %% of a year’s lie within 1 %% of nominal (IEC 61000-2-4, class 2, allows"
+                + " the same 1 %%), and these rows are of %d s. Their means lay from %.2f to %.2f"
+                + " Hz; ",
             rowSeconds,
             low,
             high);

@@ -24,7 +24,8 @@ final class LimitShapes {
         .whole("value_s", "Length of the values that are counted, seconds")
         .number("percent_of_values", "How many of a period's values must keep the limit, percent")
         .text("unit", "Of figure and limit")
-        .optional("band_from", Shape.number("Of a band with two ends: its lower end, volts or hertz"))
+        .optional(
+            "band_from", Shape.number("Of a band with two ends: its lower end, volts or hertz"))
         .optional("band_to", Shape.number("Its upper end, volts"))
         .word("outcome", "Over where any period is, within where any is and none is over", OUTCOMES)
         .part("worst", period("The period that stands for all"))

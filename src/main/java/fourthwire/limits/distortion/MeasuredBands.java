@@ -1,7 +1,7 @@
 package fourthwire.limits.distortion;
 
-import fourthwire.quantity.PublishedTable;
 import fourthwire.limits.distortion.MeasuredBand.Values;
+import fourthwire.quantity.PublishedTable;
 import java.util.ArrayList;
 import java.util.List;
 
@@ -65,8 +65,13 @@ public final class MeasuredBands {
   public static List<MeasuredBand> supplyVoltage(double nominalV) {
     return List.of(
         new MeasuredBand(
-            Values.OF_A_WEEK, EN_50160_PERCENT, 0.9 * nominalV, 1.1 * nominalV, VOLTAGE_OF_EN_50160),
-        new MeasuredBand(Values.OF_A_WEEK, 100, 0.85 * nominalV, 1.1 * nominalV, VOLTAGE_OF_EN_50160));
+            Values.OF_A_WEEK,
+            EN_50160_PERCENT,
+            0.9 * nominalV,
+            1.1 * nominalV,
+            VOLTAGE_OF_EN_50160),
+        new MeasuredBand(
+            Values.OF_A_WEEK, 100, 0.85 * nominalV, 1.1 * nominalV, VOLTAGE_OF_EN_50160));
   }
 
   /** Rms inside a plant of class 2: within 10 % of nominal. */
@@ -77,9 +82,9 @@ public final class MeasuredBands {
   }
 
   /**
-   * Frequency of a public supply joined to an interconnected network: 99.5 % of a year's 10 s values
-   * within 1 % of nominal, all of them within +4 and -6 %. Class 2 of IEC 61000-2-4 allows the same
-   * 1 %.
+   * Frequency of a public supply joined to an interconnected network: 99.5 % of a year's 10 s
+   * values within 1 % of nominal, all of them within +4 and -6 %. Class 2 of IEC 61000-2-4 allows
+   * the same 1 %.
    */
   public static List<MeasuredBand> frequency(double nominalHz) {
     return List.of(

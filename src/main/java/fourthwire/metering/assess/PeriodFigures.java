@@ -8,9 +8,10 @@ import java.util.Arrays;
 import java.util.List;
 
 /**
- * What was there of one quantity in one day, week or year of a log, in the values that standards count:
- * very short ones of 3 s, short ones of 10 min (IEC 61000-4-30:2015, 4.5: roots of mean squares of
- * shorter rows). Days and weeks follow each other from the log's first full ten minutes on.
+ * What was there of one quantity in one day, week or year of a log, in the values that standards
+ * count: very short ones of 3 s, short ones of 10 min (IEC 61000-4-30:2015, 4.5: roots of mean
+ * squares of shorter rows). Days and weeks follow each other from the log's first full ten minutes
+ * on.
  */
 public final class PeriodFigures {
   /** A value of which a tenth is missing is none. */

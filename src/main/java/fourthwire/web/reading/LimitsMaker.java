@@ -105,8 +105,7 @@ final class LimitsMaker {
       long count = v.count(o);
       if (count > 0) {
         String word = o.name().toLowerCase(Locale.ROOT);
-        parts.add(
-            words.of("reading.limits." + word + "." + v.band().values().word() + "s", count));
+        parts.add(words.of("reading.limits." + word + "." + v.band().values().word() + "s", count));
       }
     }
     String text = String.join(", ", parts);

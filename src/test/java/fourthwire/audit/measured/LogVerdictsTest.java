@@ -75,8 +75,9 @@ class LogVerdictsTest {
   }
 
   /**
-   * EN 50160:2010, clause 4.2.1 (from memory): 99.5 % of a year's 10 s means within 49.5 to 50.5 Hz,
-   * all within 47 to 52 Hz. A day leaves a year open, but one mean outside the latter is too many.
+   * EN 50160:2010, clause 4.2.1 (from memory): 99.5 % of a year's 10 s means within 49.5 to 50.5
+   * Hz, all within 47 to 52 Hz. A day leaves a year open, but one mean outside the latter is too
+   * many.
    */
   @Test
   void frequencyIsHeldAgainstItsYear() {
