@@ -3,7 +3,10 @@
 # process on the engine's classes, and as a job of the service from its start to the stored result.
 # Statistics are compared with the dataframe's to 1e-9. Needs /usr/bin/python3 with numpy and pandas
 # and the tests compiled (mvn test-compile). The folder holds gen_log.py, base_pandas.py,
-# base_numpy.py and, with the database's driver as lib/duckdb_jdbc-*.jar, DuckBench.java.
+# base_numpy.py and DuckBench.java, which needs the database's driver: lib/duckdb_jdbc-*.jar in the
+# folder, or DRIVER=<jar>, as the command
+#   mvn dependency:copy -Dartifact=org.duckdb:duckdb_jdbc:1.5.6.0 -DoutputDirectory=<folder>
+# fetches it. A reference that is not at hand is named as such, in the first lines and the last.
 # usage: deploy/bench-logs.sh <folder> [rounds] [seed]
 set -e
 cd "$(dirname "$0")/.."
@@ -15,7 +18,11 @@ mvn -B -q dependency:build-classpath -Dmdep.outputFile="$work/cp.txt" -Dmdep.inc
 libraries=$(cat "$work/cp.txt")
 plain=$(tr ':' '\n' < "$work/cp.txt" | grep -E 'jspecify' | tr '\n' ':')
 classes="$PWD/target/classes:$PWD/target/test-classes"
-driver=$(ls "$reference"/lib/duckdb_jdbc-*.jar "$reference"/duckdb_jdbc-*.jar 2> /dev/null | tail -1 || true)
+driver=${DRIVER:-$(ls "$reference"/lib/duckdb_jdbc-*.jar "$reference"/duckdb_jdbc-*.jar 2> /dev/null | tail -1 || true)}
+[ -z "$driver" ] || driver=$(realpath "$driver")
+at_hand="references at hand: dataframe, arrays, $([ -n "$driver" ] && echo "database ($(basename "$driver"))" || echo "NOT the database: no driver")"
+echo "$at_hand"
+uptime
 cp "$reference"/*.py "$work"
 cd "$work"
 /usr/bin/python3 gen_log.py log.csv ${3:-7}
@@ -88,3 +95,4 @@ print(f"largest difference from the dataframe's statistics: {worst:.1e} of the v
 if worst > 1e-9:
     raise SystemExit("the statistics differ")
 PYTHON
+echo "$at_hand"
