@@ -281,6 +281,7 @@ public final class LogFormat {
     long[] before = {Long.MIN_VALUE};
     int[] rows = {0, 0};
     table.forEach(
+        time.cells(),
         row -> {
           if (at.read(row)) {
             rows[1] += at.localMillis() == before[0] ? 1 : 0;
@@ -312,6 +313,7 @@ public final class LogFormat {
     int[] rows = {0};
     boolean[] found = {false};
     table.forEach(
+        time.cells(),
         row -> {
           found[0] = time.columns().size() > 0 && DAY_END.matcher(time.text(row)).find();
           return !found[0] && ++rows[0] < LOOK_FOR_DAY_END;

@@ -20,6 +20,7 @@ final class NewestFirst {
     long[] before = {0};
     int[] count = {0, 0, 0};
     table.forEach(
+        time.cells(),
         row -> {
           if (at.read(row)) {
             int step = count[0] == 0 ? 0 : Long.compare(at.localMillis(), before[0]);

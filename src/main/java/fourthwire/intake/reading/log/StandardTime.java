@@ -49,10 +49,9 @@ final class StandardTime {
   /** False where offsets are written: they settle it. */
   private boolean take(TextTable table, TimeColumns time, DateOrder order) {
     RowTime at = new RowTime(time, order);
-    int cells = 1 + time.columns().stream().mapToInt(k -> k).max().orElse(0);
     long[] rows = {0};
     table.forEach(
-        cells,
+        time.cells(),
         row -> {
           if (at.read(row)) {
             rows[0] = at.offsetSeconds() == RowTime.NO_OFFSET ? rows[0] + 1 : -1;

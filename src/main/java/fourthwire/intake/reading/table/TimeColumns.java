@@ -208,6 +208,7 @@ public record TimeColumns(List<Integer> columns, Kind kind, double unitS) {
     List<String> found = new ArrayList<>();
     int[] plainRows = {0};
     table.forEach(
+        cells(),
         row -> {
           Optional<CellTime> time = CellTime.of(text(row));
           if (time.isPresent() && !time.get().fits(order)) {
@@ -219,6 +220,11 @@ public record TimeColumns(List<Integer> columns, Kind kind, double unitS) {
     return isCalendar() ? found.stream().findFirst() : Optional.empty();
   }
 
+  /** How many cells of a row reach to its time. */
+  public int cells() {
+    return 1 + columns.stream().mapToInt(k -> k).max().orElse(0);
+  }
+
   /** The order of the dates and why it is that; empty where the file does not settle it. */
   public Optional<Order> order(TextTable table) {
     if (!isCalendar()) {
@@ -227,6 +233,7 @@ public record TimeColumns(List<Integer> columns, Kind kind, double unitS) {
     OrderSearch search = new OrderSearch();
     int[] rows = {0};
     table.forEach(
+        cells(),
         row -> {
           CellTime.of(text(row)).ifPresent(search::take);
           // Dates that name their own order, or fit one only, need no search through a long file.
