@@ -20,7 +20,8 @@ final class RowCutter {
 
   private static final VarHandle EIGHT =
       MethodHandles.byteArrayViewVarHandle(long[].class, ByteOrder.LITTLE_ENDIAN);
-  private static final long ZEROS = 0x3030303030303030L;
+  private static final long ONES = 0x0101010101010101L;
+  private static final long ZEROS = '0' * ONES;
 
   /** Lifts a byte above nine into its high bit. */
   private static final long NINES_UP = 0x7676767676767676L;
@@ -93,10 +94,22 @@ final class RowCutter {
 
   private static int lineEnd(byte[] block, int from, int to) {
     int at = from;
+    while (at + Long.BYTES <= to && !isLineEndIn((long) EIGHT.get(block, at))) {
+      at += Long.BYTES;
+    }
     while (at < to && block[at] != '\n' && block[at] != '\r') {
       at++;
     }
     return at;
+  }
+
+  private static boolean isLineEndIn(long eight) {
+    return ((zeros(eight ^ '\n' * ONES) | zeros(eight ^ '\r' * ONES)) & HIGH_BITS) != 0;
+  }
+
+  /** Has the high bit of each byte that is zero. */
+  private static long zeros(long eight) {
+    return eight - ONES & ~eight;
   }
 
   private static int skipBlanks(byte[] block, int from, int to) {

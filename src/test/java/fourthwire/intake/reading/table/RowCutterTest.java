@@ -76,4 +76,25 @@ class RowCutterTest {
       }
     }
   }
+
+  @ParameterizedTest(name = "seed {0}")
+  @ValueSource(longs = {7, 8, 9})
+  void rowsEndWhereTheyEndHoweverFewCellsAreCut(long seed) {
+    Random random = new Random(seed);
+    StringBuilder text = new StringBuilder();
+    for (int k = 0; k < 2000; k++) {
+      text.append(random.nextInt(4) == 0 ? OTHERS[random.nextInt(OTHERS.length)] : number(random));
+      text.append(random.nextInt(9) > 0 ? ";" : random.nextBoolean() ? "\n" : "\r\n");
+    }
+    byte[] block = text.toString().getBytes(StandardCharsets.UTF_8);
+    RowCutter all = new RowCutter(';', StandardCharsets.UTF_8, false);
+    RowCutter few = new RowCutter(';', StandardCharsets.UTF_8, false).first(2);
+    for (int at = 0; at < block.length; at = all.next(block, at, block.length)) {
+      int row = at;
+      assertThat(few.next(block, row, block.length))
+          .isEqualTo(
+              new RowCutter(';', StandardCharsets.UTF_8, false).next(block, row, block.length));
+      assertThat(few.cells()).isLessThanOrEqualTo(2);
+    }
+  }
 }
