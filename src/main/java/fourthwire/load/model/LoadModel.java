@@ -1,6 +1,8 @@
 package fourthwire.load.model;
 
 import java.util.Arrays;
+import java.util.List;
+import java.util.Optional;
 
 /**
  * Equipment as the network sees it: a linear part that goes into the network's matrix, and a
@@ -30,6 +32,22 @@ public interface LoadModel {
   /** Whether the linear part is all there is: such a model injects nothing. */
   default boolean isLinear() {
     return false;
+  }
+
+  /**
+   * Whether its current breaks the voltage at others beside it so sharply that they are to be
+   * solved together ({@link #newJointSolver}).
+   */
+  default boolean shapesOthers() {
+    return false;
+  }
+
+  /**
+   * A solver for such models side by side, this one among them; empty where there is none for
+   * these.
+   */
+  default Optional<JointSolver> newJointSolver(List<LoadModel> all) {
+    return Optional.empty();
   }
 
   /**

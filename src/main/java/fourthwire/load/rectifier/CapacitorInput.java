@@ -1,8 +1,12 @@
 package fourthwire.load.rectifier;
 
+import fourthwire.load.model.JointSolver;
 import fourthwire.load.model.LoadModel;
 import fourthwire.load.model.LoadSolver;
+import fourthwire.load.rectifier.node.NodeRectifiers;
 import fourthwire.load.rectifier.path.BridgeLoad;
+import java.util.List;
+import java.util.Optional;
 
 /**
  * {@code capacitor-input}: single-phase diode bridge, source R-L, smoothing capacitor and a
@@ -42,6 +46,23 @@ public final class CapacitorInput implements LoadModel {
   @Override
   public int ports() {
     return 1;
+  }
+
+  @Override
+  public boolean shapesOthers() {
+    return load.dcHenry() == 0;
+  }
+
+  @Override
+  public Optional<JointSolver> newJointSolver(List<LoadModel> all) {
+    List<BridgeLoad> loads =
+        all.stream()
+            .filter(CapacitorInput.class::isInstance)
+            .map(other -> ((CapacitorInput) other).load)
+            .toList();
+    return loads.size() == all.size()
+        ? Optional.of(new NodeRectifiers(loads, frequencyHz))
+        : Optional.empty();
   }
 
   @Override

@@ -4,23 +4,26 @@ package fourthwire.load.rectifier.loop;
  * A square matrix of a few rows: linear equations by Gauss and Jordan's elimination with row
  * exchange, and the spectral radius from high powers. A workspace, not thread-safe.
  */
-final class SmallMatrix {
+public final class SmallMatrix {
   /** Powers up to 2 to this many tell the spectral radius to 0.1 %. */
   private static final int SQUARINGS = 14;
 
   private final double[][] entry;
   private final double[][] work;
 
-  SmallMatrix(int most) {
+  /** Of so many rows at most. */
+  public SmallMatrix(int most) {
     entry = new double[most][most];
     work = new double[most][most + 1];
   }
 
-  void set(int row, int column, double value) {
+  /** Sets an entry. */
+  public void set(int row, int column, double value) {
     entry[row][column] = value;
   }
 
-  double get(int row, int column) {
+  /** An entry. */
+  public double get(int row, int column) {
     return entry[row][column];
   }
 
@@ -30,7 +33,7 @@ final class SmallMatrix {
    * @param x the right-hand side, becomes the solution
    * @return false where there is none
    */
-  boolean solve(int size, double[] x) {
+  public boolean solve(int size, double[] x) {
     for (int r = 0; r < size; r++) {
       System.arraycopy(entry[r], 0, work[r], 0, size);
       work[r][size] = x[r];
@@ -72,7 +75,7 @@ final class SmallMatrix {
   }
 
   /** The largest size of an eigenvalue of the first rows and columns, which are spent. */
-  double spectralRadius(int size) {
+  public double spectralRadius(int size) {
     double log = 0;
     double share = 1;
     for (int n = 0; n < SQUARINGS; n++) {
