@@ -1,5 +1,7 @@
 package fourthwire.network;
 
+import java.util.stream.IntStream;
+
 /**
  * A radial network: a source, and a tree of nodes behind feeders and transformers, with linear
  * elements at the nodes. Immutable; different orders may be factored by different threads at once.
@@ -42,6 +44,14 @@ public final class TreeNetwork {
   /** Whether a feeder feeds the node: not a transformer, and not the source itself. */
   public boolean isFedByFeeder(int node) {
     return layout.isFeeder(layout.position[node]);
+  }
+
+  /** Whether a feeder without any impedance feeds the node: the two are one point. */
+  public boolean isJoined(int node) {
+    int position = layout.position[node];
+    return layout.isFeeder(position)
+        && IntStream.range(layout.first[position], layout.first[position + 1])
+            .allMatch(c -> layout.resistance[c] == 0 && layout.reactance[c] == 0);
   }
 
   /**

@@ -4,6 +4,7 @@ import de.siegmar.fastcsv.reader.CsvReader;
 import de.siegmar.fastcsv.reader.NamedCsvRecord;
 import fourthwire.load.model.PortSpectra;
 import fourthwire.load.model.SharedSource;
+import fourthwire.load.rectifier.node.NodeRectifiers;
 import fourthwire.load.rectifier.path.BridgeLoad;
 import fourthwire.load.rectifier.path.Diode;
 import fourthwire.quantity.Phasor;
@@ -12,10 +13,13 @@ import java.io.IOException;
 import java.io.InputStreamReader;
 import java.io.UncheckedIOException;
 import java.nio.charset.StandardCharsets;
+import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.stream.IntStream;
 
 /**
  * The circuit-simulator cases of several rows of rectifiers on one node: the test resources, {@code
@@ -30,7 +34,7 @@ public record JointReference(List<NamedCsvRecord> rows) {
   public static List<JointReference> all() {
     Map<String, List<NamedCsvRecord>> byId = new LinkedHashMap<>();
     for (NamedCsvRecord row : read("joint-cases.csv")) {
-      byId.computeIfAbsent(row.getField("id"), id -> new java.util.ArrayList<>()).add(row);
+      byId.computeIfAbsent(row.getField("id"), id -> new ArrayList<>()).add(row);
     }
     return byId.values().stream().map(JointReference::new).toList();
   }
@@ -50,7 +54,7 @@ public record JointReference(List<NamedCsvRecord> rows) {
 
   /** All units of each row as one. */
   List<BridgeLoad> loads() {
-    return java.util.stream.IntStream.range(0, rows.size()).mapToObj(this::load).toList();
+    return IntStream.range(0, rows.size()).mapToObj(this::load).toList();
   }
 
   private BridgeLoad load(int row) {
@@ -91,6 +95,16 @@ public record JointReference(List<NamedCsvRecord> rows) {
         return number(0, "Ls_uH") * 1e-6;
       }
     };
+  }
+
+  /** The currents of the rows that this project computes for the case. */
+  PortSpectra[] computed() {
+    PortSpectra[] emf = new PortSpectra[rows.size()];
+    PortSpectra[] current = new PortSpectra[rows.size()];
+    Arrays.setAll(emf, k -> emf());
+    Arrays.setAll(current, k -> new PortSpectra(1));
+    new NodeRectifiers(loads(), number(0, "f_Hz")).solve(emf, source(), current);
+    return current;
   }
 
   /** The simulated current of a row, counted from 0. */

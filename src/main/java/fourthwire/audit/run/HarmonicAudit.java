@@ -34,7 +34,7 @@ import java.util.function.Supplier;
  */
 public final class HarmonicAudit implements Audit {
   /** Version of the engine: rises whenever the same survey can give other figures. */
-  public static final String ENGINE_VERSION = "1.2";
+  public static final String ENGINE_VERSION = "1.3";
 
   private static final String NO_WEEK = "the week is computed on the normal supply";
 

@@ -18,7 +18,14 @@ import java.util.Optional;
  */
 final class DevicePort {
   /** Part of the nominal voltage by which one order is stepped to find a slope. */
-  private static final double SLOPE_STEP = 1e-4;
+  static final double SLOPE_STEP = 1e-4;
+
+  /**
+   * How much of the impedance above the group is taken out of a slope. A load with no impedance of
+   * its own would answer a voltage there without bounds, and Newton's equations could not be
+   * solved; what is left bounds it, and costs a fiftieth of what the load moves by in a pass.
+   */
+  static final double OPENED = 0.98;
 
   /** A change of the current, on its rms, that need not be solved for: the slope tells enough. */
   private static final double NOT_FELT = 2e-6;
@@ -40,8 +47,10 @@ final class DevicePort {
   private double sharedHenry;
   private double[] voltage = new double[0];
   private double[] behind = new double[0];
+  private double[] facing = new double[0];
   private Optional<LoadSlope> slope = Optional.empty();
   private boolean ownSlope;
+  private Optional<JointLoads> joint = Optional.empty();
   private double voltageMovedV;
   private String failure = "";
 
@@ -141,6 +150,33 @@ final class DevicePort {
     return seriesHenry;
   }
 
+  double sharedOhm() {
+    return sharedOhm;
+  }
+
+  double sharedHenry() {
+    return sharedHenry;
+  }
+
+  /** Of the series R-L, what lies below the group. */
+  double ownOhm() {
+    return Math.max(0, seriesOhm - sharedOhm);
+  }
+
+  double ownHenry() {
+    return Math.max(0, seriesHenry - sharedHenry);
+  }
+
+  /** It is solved with others from now on. */
+  void setJoint(JointLoads loads) {
+    joint = Optional.of(loads);
+  }
+
+  /** Those it is solved with, itself among them. */
+  Optional<JointLoads> joint() {
+    return joint;
+  }
+
   /** How many numbers of the state are its own. */
   int length(OrdersInPlay orders) {
     return 2 * ports() * orders.count();
@@ -228,12 +264,12 @@ final class DevicePort {
     solveAt(orders, now, g);
     if (failure.isEmpty()) {
       double[] moved = difference(Arrays.copyOfRange(g, offset, offset + now.length), before);
-      addDrop(orders, -sharedOhm, -omega * sharedHenry, moved, 0, change);
+      addDrop(orders, -OPENED * sharedOhm, -OPENED * omega * sharedHenry, moved, 0, change);
       slope.get().learn(orders, change, moved);
     }
   }
 
-  private static double[] difference(double[] a, double[] b) {
+  static double[] difference(double[] a, double[] b) {
     double[] d = new double[a.length];
     for (int i = 0; i < d.length; i++) {
       d[i] = a[i] - b[i];
@@ -247,12 +283,10 @@ final class DevicePort {
    */
   double[] stepAlone(OrdersInPlay orders, double omega, double[] x, double[] g) {
     int size = length(orders);
-    double[] step = new double[size];
-    for (int i = 0; i < size; i++) {
-      step[i] = g[offset + i] - x[offset + i];
-    }
+    double[] step = difference(part(orders, g), part(orders, x));
     double[] drop = new double[size];
-    addDrop(orders, sharedOhm, omega * sharedHenry, step, 0, drop);
+    double[] all = joint.map(loads -> loads.step(orders, x, g)).orElse(step);
+    addDrop(orders, OPENED * sharedOhm, OPENED * omega * sharedHenry, all, 0, drop);
     double[] answer = new double[size];
     slope().multiply(orders, drop, answer);
     for (int i = 0; i < size; i++) {
@@ -262,13 +296,7 @@ final class DevicePort {
   }
 
   private void solveAt(OrdersInPlay orders, double[] now, double[] g) {
-    int at = 0;
-    for (int port = 0; port < from.length; port++) {
-      for (int k = 0; k < orders.count(); k++) {
-        emf.re[port][orders.at(k)] = now[at++];
-        emf.im[port][orders.at(k)] = now[at++];
-      }
-    }
+    putEmf(orders, now);
     failure = "";
     try {
       solver.solve(emf, seriesOhm, seriesHenry, drawn);
@@ -277,6 +305,76 @@ final class DevicePort {
     } catch (NoSteadyStateException e) {
       failure = String.valueOf(e.getMessage());
     }
+  }
+
+  private void putEmf(OrdersInPlay orders, double[] now) {
+    int at = 0;
+    for (int port = 0; port < from.length; port++) {
+      for (int k = 0; k < orders.count(); k++) {
+        emf.re[port][orders.at(k)] = now[at++];
+        emf.im[port][orders.at(k)] = now[at++];
+      }
+    }
+  }
+
+  /** Its part of a state. */
+  double[] part(OrdersInPlay orders, double[] state) {
+    return Arrays.copyOfRange(state, offset, offset + length(orders));
+  }
+
+  /** The electromotive force at which it is to be solved. */
+  PortSpectra emf() {
+    return emf;
+  }
+
+  /** What it drew there. */
+  PortSpectra drawn() {
+    return drawn;
+  }
+
+  double[] drawnRow(OrdersInPlay orders) {
+    double[] row = new double[length(orders)];
+    orders.copy(drawn, row, 0);
+    return row;
+  }
+
+  void stepEmf(int order, boolean real, double volts) {
+    (real ? emf.re : emf.im)[0][order] += volts;
+  }
+
+  /**
+   * Of a load that is solved with others: takes the electromotive force behind what all share.
+   *
+   * @param total what all of them drew when its voltage was solved
+   */
+  void face(OrdersInPlay orders, double omega, double[] x, double[] total) {
+    facing = voltage.clone();
+    addDrop(orders, ownOhm(), omega * ownHenry(), x, offset, facing);
+    addDrop(orders, sharedOhm, omega * sharedHenry, total, 0, facing);
+    putEmf(orders, facing);
+  }
+
+  /** Takes what it drew, solved with others. */
+  void draw(OrdersInPlay orders, String reason, double[] g) {
+    failure = reason;
+    if (failure.isEmpty()) {
+      orders.copy(drawn, g, offset);
+    }
+  }
+
+  /**
+   * Lets its slope learn from that.
+   *
+   * @param before what it drew before
+   * @param all by how much the current of all changed
+   */
+  void learn(OrdersInPlay orders, double omega, double[] before, double[] all, double[] g) {
+    if (slope.isPresent()) {
+      double[] change = difference(facing, behind);
+      addDrop(orders, -OPENED * sharedOhm, -OPENED * omega * sharedHenry, all, 0, change);
+      slope.get().learn(orders, change, difference(part(orders, g), before));
+    }
+    behind = facing;
   }
 
   /** Adds what a current, from its place in a row, drops over a series R-X. */
@@ -329,13 +427,29 @@ final class DevicePort {
 
   /**
    * The slope at the electromotive force last solved (which it follows at once), as it is before
-   * the impedance above the group.
+   * the impedance above the group. Of a load that is solved with others, as it would be alone at
+   * the voltage that is there; zero if it would find no steady state so.
    *
    * @param wholly steps all lines of a load on three ({@link SlopeFinder})
    */
   void findSlope(OrdersInPlay orders, double omega, boolean wholly, DeviceSlope slope) {
+    if (joint.isPresent() && !solvesAlone(orders, omega)) {
+      return;
+    }
     new SlopeFinder(solver, emf, drawn, seriesOhm, seriesHenry)
         .find(orders, SLOPE_STEP * nominalV(), wholly, slope);
-    slope.open(orders, sharedOhm, omega * sharedHenry);
+    slope.open(orders, OPENED * sharedOhm, OPENED * omega * sharedHenry);
+  }
+
+  private boolean solvesAlone(OrdersInPlay orders, double omega) {
+    double[] now = voltage.clone();
+    addDrop(orders, seriesOhm, omega * seriesHenry, drawnRow(orders), 0, now);
+    putEmf(orders, now);
+    try {
+      solver.solve(emf, seriesOhm, seriesHenry, drawn);
+      return true;
+    } catch (NoSteadyStateException none) {
+      return false;
+    }
   }
 }

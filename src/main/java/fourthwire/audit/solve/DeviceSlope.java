@@ -80,6 +80,37 @@ final class DeviceSlope {
     }
   }
 
+  /** Adds another slope to this. */
+  void add(DeviceSlope other) {
+    for (int i = 0; i < byColumn.length; i++) {
+      byColumn[i] += other.byColumn[i];
+    }
+  }
+
+  /**
+   * For one of several loads behind a series impedance S that they share: from its slope J behind
+   * that, where all feel the same change, to K = J·(1 + S·T) before it.
+   *
+   * @param together T, the slope of all before it
+   */
+  void open(OrdersInPlay orders, double ohm, double reactance, DeviceSlope together) {
+    DeviceSlope behind = new DeviceSlope(size);
+    double[] dropped = new double[size];
+    double[] answer = new double[size];
+    for (int column = 0; column < size; column++) {
+      for (int row = 0; row < size; row += 2) {
+        double x = reactance * orders.at(row / 2 % orders.count());
+        double re = together.get(row, column);
+        double im = together.get(row + 1, column);
+        dropped[row] = ohm * re - x * im;
+        dropped[row + 1] = ohm * im + x * re;
+      }
+      multiply(dropped, answer);
+      System.arraycopy(answer, 0, behind.byColumn, column * size, size);
+    }
+    add(behind);
+  }
+
   /** Gauss-Jordan with row exchange; the right half becomes the solution. */
   private void eliminate(double[][] rows) {
     for (int k = 0; k < size; k++) {

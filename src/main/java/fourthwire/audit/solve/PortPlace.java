@@ -35,6 +35,15 @@ record PortPlace(int node, List<Integer> from, int to) {
         to == NONE ? NONE : network.joinedTo(node, to));
   }
 
+  /** The same point of the network as far up as feeders without impedance lead. */
+  PortPlace top(TreeNetwork network) {
+    PortPlace top = this;
+    while (network.isJoined(top.node())) {
+      top = top.feeding(network);
+    }
+    return top;
+  }
+
   int[] fromIndices(TreeNetwork network) {
     return from.stream().mapToInt(c -> network.index(node, c)).toArray();
   }

@@ -44,6 +44,11 @@ final class SiteIteration {
   private final int length;
   private double[] last = new double[0];
 
+  /** Those that are solved together, and those that are solved each for itself. */
+  private List<JointLoads> together = List.of();
+
+  private List<DevicePort> alone;
+
   SiteIteration(
       Survey survey, NetworkPlan plan, List<Device> devices, OrdersInPlay orders, Workers workers) {
     this.plan = plan;
@@ -63,6 +68,7 @@ final class SiteIteration {
       }
     }
     this.length = at;
+    this.alone = loads;
   }
 
   /** The same state with a few loads that speak for all; active filters stand still. */
@@ -73,6 +79,7 @@ final class SiteIteration {
     this.omega = whole.omega;
     this.orders = whole.orders;
     this.loads = sample;
+    this.alone = sample;
     this.state = whole.state;
     this.few = Optional.of(Trunk.of(network, sample.stream().mapToInt(l -> l.place().node())));
     this.length = sample.stream().mapToInt(load -> load.length(orders)).sum();
@@ -88,7 +95,7 @@ final class SiteIteration {
     int at = 0;
     for (int d = 0; d < devices.size(); d++) {
       PortPlace place = places.get(d);
-      PortPlace group = loadsAt[place.node()] == 1 ? place.feeding(network) : place;
+      PortPlace group = (loadsAt[place.node()] == 1 ? place.feeding(network) : place).top(network);
       DevicePort load = new DevicePort(devices.get(d), place, group, network, at);
       loads.add(load);
       at += load.length(orders);
@@ -169,6 +176,8 @@ final class SiteIteration {
    */
   private void beginTogether(double[] x) {
     Arrays.fill(x, 0);
+    together = List.of();
+    alone = loads;
     solveNetwork(x);
     series().applyTogether(state.solutions()[1]);
     image(x, x);
@@ -208,6 +217,11 @@ final class SiteIteration {
   /** From here every load is solved behind what it sees alone. */
   private void takeUp(double[] x) {
     series().applyAlone();
+    if (few.isEmpty()) {
+      together = JointLoads.among(loads);
+      together.forEach(some -> some.members().forEach(load -> load.setJoint(some)));
+      alone = loads.stream().filter(load -> load.joint().isEmpty()).toList();
+    }
     solveNetwork(x);
   }
 
@@ -286,12 +300,9 @@ final class SiteIteration {
 
   /** What the loads draw at the solved voltages, into g; the reason where one can't. */
   private String image(double[] x, double[] g) {
-    workers.each(
-        loads.size(),
-        d -> {
-          loads.get(d).takeVoltages(orders, state.solutions());
-          loads.get(d).solve(orders, omega, x, g);
-        });
+    workers.each(loads.size(), d -> loads.get(d).takeVoltages(orders, state.solutions()));
+    workers.each(together.size(), k -> together.get(k).solve(orders, omega, x, g));
+    workers.each(alone.size(), d -> alone.get(d).solve(orders, omega, x, g));
     filters.forEach(filter -> filter.solve(orders, state.solutions(), x, g));
     return loads.stream()
         .filter(load -> !load.failure().isEmpty())

@@ -70,7 +70,11 @@ final class SlopeBook {
   }
 
   /** Gives loads a slope at the state last solved, where they drew g. */
-  void lend(List<DevicePort> loads, double[] g, Workers workers) {
+  void lend(List<DevicePort> all, double[] g, Workers workers) {
+    List<JointLoads> strong = together(all).stream().filter(JointLoads::isStrong).toList();
+    workers.each(strong.size(), k -> strong.get(k).findSlopes(orders, omega, false));
+    List<DevicePort> loads =
+        all.stream().filter(load -> load.joint().filter(JointLoads::isStrong).isEmpty()).toList();
     Look[] looks = new Look[loads.size()];
     workers.each(looks.length, d -> looks[d] = look(loads.get(d), g));
     Leader[] of = new Leader[looks.length];
@@ -100,6 +104,16 @@ final class SlopeBook {
 
   /** Gives loads that resemble no other a slope of their own. */
   void giveOwn(List<DevicePort> loads, Workers workers) {
+    List<JointLoads> together = together(loads);
+    workers.each(together.size(), k -> together.get(k).findSlopes(orders, omega, true));
+    giveEach(loads.stream().filter(load -> load.joint().isEmpty()).toList(), workers);
+  }
+
+  private static List<JointLoads> together(List<DevicePort> loads) {
+    return loads.stream().flatMap(load -> load.joint().stream()).distinct().toList();
+  }
+
+  private void giveEach(List<DevicePort> loads, Workers workers) {
     workers.each(
         loads.size(),
         k -> {

@@ -10,6 +10,13 @@ package fourthwire.load.model;
  */
 public interface JointSolver {
   /**
+   * How much the loads feel each other: what part of a load's current others beside it make, just
+   * above the orders that networks are solved for, by the one that is the worst off. Well under 1
+   * each may be solved for itself, behind its own port.
+   */
+  double felt(SharedSource source);
+
+  /**
    * Solves the periodic steady state of the loads behind what they share of the network.
    *
    * @param emf electromotive force of each load, rms volts

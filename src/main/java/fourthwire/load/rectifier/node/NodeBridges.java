@@ -13,7 +13,7 @@ import java.util.List;
 /**
  * Single-phase bridges on one node followed through time, whichever of them conduct: each starts
  * where what the others leave of the source passes its capacitor's voltage and its diodes'
- * threshold, and ends where its current falls through the threshold. Every change is found as an
+ * threshold, and ends where its current rises through the threshold. Every change is found as an
  * event. Workspace, not thread-safe.
  */
 final class NodeBridges {
@@ -29,7 +29,7 @@ final class NodeBridges {
   private static final double REST_OF_LEAVER = 0.1;
 
   /** First step after an event, and what steps grow by with the time since, in cells. */
-  private static final double FIRST = 0.03;
+  private static final double FIRST = 0.005;
 
   private static final double GROWTH = 0.7;
 
@@ -40,6 +40,20 @@ final class NodeBridges {
   private static final double SHARE_OF_RING = 0.3;
 
   private static final double LEAST_OF_RING = 0.25;
+
+  /**
+   * A current may fall by this share of itself in a step, or rise by the other: the diodes' law is
+   * steep where it is small.
+   */
+  private static final double FALL = 0.6;
+
+  private static final double RISE = 1;
+
+  /** A rising current of so many thresholds is no longer told from its start. */
+  private static final double LOW = 10;
+
+  /** But no step need be shorter for that, in cells. */
+  private static final double LEAST = 0.01;
 
   final CycleTable[] emf;
   final PulseTrace[] trace;
@@ -60,6 +74,7 @@ final class NodeBridges {
   private final double[] leftAt;
   private final EventFinder.Margin shortfall = this::shortfall;
   private final EventFinder.Margin joinMargin = this::marginAfter;
+  private final double[] rises;
   private double longest;
   private double u;
   private double to;
@@ -78,6 +93,7 @@ final class NodeBridges {
     amps = new double[all];
     volts = new double[all];
     leftAt = new double[all];
+    rises = new double[all];
     alone = new PathStep[all];
     discharge = new Discharge[all];
     for (int k = 0; k < all; k++) {
@@ -115,6 +131,7 @@ final class NodeBridges {
     u = from;
     to = from + cells;
     Arrays.fill(leftAt, from - 1);
+    Arrays.fill(rises, 0);
     for (PulseTrace one : trace) {
       one.clear();
     }
@@ -161,6 +178,7 @@ final class NodeBridges {
   private void start(int bridge, double drive) {
     tangent.join(step, bridge);
     amps[bridge] = Math.copySign(step.threshold[bridge], drive);
+    rises[bridge] = 0;
     arrange();
   }
 
@@ -193,7 +211,7 @@ final class NodeBridges {
     boolean alive = true;
     boolean same = true;
     while (alive && same && u < to) {
-      double h = Math.min(Math.min(longest, FIRST + GROWTH * (u - began)), to - u);
+      double h = Math.min(next(u - began), to - u);
       double missing = shortfall(h);
       boolean leaves = missing > 0;
       if (leaves) {
@@ -215,6 +233,19 @@ final class NodeBridges {
     return alive;
   }
 
+  /** The length of the next step, so long after the last event. */
+  private double next(double since) {
+    double h = Math.min(longest, FIRST + GROWTH * since);
+    for (int a = 0; a < step.n; a++) {
+      double size = spare(a, step.from) + 1;
+      double rise = rises[step.bridge[a]];
+      double change =
+          rise < 0 ? -FALL * size / rise : RISE * (size + LOW) / Math.max(rise, 1e-300);
+      h = Math.min(h, Math.max(change, LEAST));
+    }
+    return h;
+  }
+
   private double joinAfter(double h, double margin) {
     System.arraycopy(step.from, 0, step.x, 0, step.n);
     System.arraycopy(step.fromV, 0, step.v, 0, step.n);
@@ -234,6 +265,7 @@ final class NodeBridges {
     u = end;
     for (int a = 0; a < step.n; a++) {
       int k = step.bridge[a];
+      rises[k] = (spare(a, step.x) - spare(a, step.from)) / h;
       trace[k].next(u, step.x[a], step.charge(a, h));
       amps[k] = step.x[a];
       volts[k] = step.v[a];
@@ -266,7 +298,7 @@ final class NodeBridges {
     return step.sign[a] * signed[a] / step.threshold[step.bridge[a]] - 1;
   }
 
-  /** Steps by h cells; by how much the smallest current falls short of its threshold then. */
+  /** Steps by h cells; by how much the smallest current rises short of its threshold then. */
   private double shortfall(double h) {
     step.step(emf, u, h);
     return -least(step.x);

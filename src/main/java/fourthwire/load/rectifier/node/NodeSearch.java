@@ -29,6 +29,7 @@ final class NodeSearch {
   private static final int TURNS_TO_COME_NEAR = 4;
   private static final int MOST_TURNS = 30;
   private static final int MOST_REPETITIONS = 300;
+  private static final int REPETITIONS_TO_NEAR = 40;
   private static final int MOST_HALVINGS = 4;
 
   private final NodeBridges bridges;
@@ -77,7 +78,7 @@ final class NodeSearch {
     halfWave = mirrored;
     emptied = false;
     boolean found = known && newton(1) && stable() || comeNear() && stable();
-    if (!found && mirrored) {
+    if (!found && !emptied) {
       halfWave = false;
       found = repeat(1.01 * FIRST_GUESS) && stable();
     }
@@ -156,7 +157,20 @@ final class NodeSearch {
         return true;
       }
       accept();
+      if (n % REPETITIONS_TO_NEAR == REPETITIONS_TO_NEAR - 1 && newtonFromHere()) {
+        return true;
+      }
     }
+    return false;
+  }
+
+  /** Newton's method the rest of the way to a stable state; else nothing is changed. */
+  private boolean newtonFromHere() {
+    double[] here = state.clone();
+    if (newton(1) && stable()) {
+      return true;
+    }
+    System.arraycopy(here, 0, state, 0, 2 * all);
     return false;
   }
 
