@@ -96,8 +96,7 @@ class JointSurveyTest {
     for (int row = 0; row < c.rows().size(); row++) {
       double watts = c.number(row, "P_dc_W");
       ModelColumns columns =
-          columns(
-              c.number(row, "C_uF") / watts, c.number(row, "Rb_ohm"), c.number(row, "Lb_uH"));
+          columns(c.number(row, "C_uF") / watts, c.number(row, "Rb_ohm"), c.number(row, "Lb_uH"));
       row(b, row, watts, c.number(row, "n_units"), columns);
     }
     return b.build();

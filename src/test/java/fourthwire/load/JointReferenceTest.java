@@ -45,8 +45,7 @@ class JointReferenceTest {
     PortSpectra[] parts = given.computed();
     PortSpectra one = new PortSpectra(1);
     new NodeRectifiers(List.of(given.loads().get(1).parallel(25)), given.number(0, "f_Hz"))
-        .solve(
-            new PortSpectra[] {given.emf()}, given.source(), new PortSpectra[] {one});
+        .solve(new PortSpectra[] {given.emf()}, given.source(), new PortSpectra[] {one});
     for (int h = 1; h <= Spectrum.HIGHEST_ORDER; h++) {
       assertThat(parts[1].spectrum(0).at(h).minus(one.spectrum(0).at(h).times(0.04)).magnitude())
           .as("order %d", h)

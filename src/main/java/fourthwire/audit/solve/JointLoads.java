@@ -6,7 +6,6 @@ import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.load.model.PortSpectra;
 import fourthwire.load.model.SharedSource;
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -115,8 +114,8 @@ final class JointLoads implements SharedSource {
   }
 
   /**
-   * Gives the members slopes of their own, found at the state last solved, each as it is before the impedance that
-   * they share, where the voltage is one for all.
+   * Gives the members slopes of their own, found at the state last solved, each as it is before the
+   * impedance that they share, where the voltage is one for all.
    */
   void findSlopes(OrdersInPlay orders, double omega, boolean own) {
     List<DeviceSlope> slopes = stepAll(orders);

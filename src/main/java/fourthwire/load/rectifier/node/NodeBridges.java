@@ -239,8 +239,7 @@ final class NodeBridges {
     for (int a = 0; a < step.n; a++) {
       double size = spare(a, step.from) + 1;
       double rise = rises[step.bridge[a]];
-      double change =
-          rise < 0 ? -FALL * size / rise : RISE * (size + LOW) / Math.max(rise, 1e-300);
+      double change = rise < 0 ? -FALL * size / rise : RISE * (size + LOW) / Math.max(rise, 1e-300);
       h = Math.min(h, Math.max(change, LEAST));
     }
     return h;

@@ -57,8 +57,7 @@ public final class NodeRectifiers implements JointSolver {
     BridgeLoad load = loads.get(bridge);
     double perHenry = 2 * Math.PI * frequencyHz * Spectrum.HIGHEST_ORDER;
     int other = bridge == 0 ? 1 : 0;
-    double common =
-        Math.hypot(source.ohm(bridge, other), perHenry * source.henry(bridge, other));
+    double common = Math.hypot(source.ohm(bridge, other), perHenry * source.henry(bridge, other));
     double whole =
         Math.hypot(
             source.ohm(bridge, bridge) + load.lineOhm(),
@@ -69,7 +68,8 @@ public final class NodeRectifiers implements JointSolver {
   @Override
   public void solve(PortSpectra[] emf, SharedSource source, PortSpectra[] current) {
     AlikeBridges alike = new AlikeBridges(loads, source);
-    Work now = work.filter(w -> w.count() == alike.count()).orElseGet(() -> new Work(alike.count()));
+    Work now =
+        work.filter(w -> w.count() == alike.count()).orElseGet(() -> new Work(alike.count()));
     work = Optional.of(now);
     NodeBridges bridges = now.bridges();
     double peak = fill(bridges, alike, emf);

@@ -227,9 +227,7 @@ final class NodeSearch {
       for (int a = 0; a < unknowns; a++) {
         int row = unknown[a];
         double part =
-            row < all
-                ? bridges.tangent.volts[b][row]
-                : sign() * bridges.tangent.amps[b][row - all];
+            row < all ? bridges.tangent.volts[b][row] : sign() * bridges.tangent.amps[b][row - all];
         jacobian.set(a, b, part * scale[unknown[b]] / scale[row]);
       }
     }

@@ -1,6 +1,6 @@
 /**
- * Single-phase rectifiers side by side on one node, followed through time together: each shapes
- * the voltage that the others draw from.
+ * Single-phase rectifiers side by side on one node, followed through time together: each shapes the
+ * voltage that the others draw from.
  *
  * <p>Door: {@link fourthwire.load.rectifier.node.NodeRectifiers}. May use {@code quantity}, {@code
  * load.model}, {@code load.rectifier.path} and the small matrices of {@code load.rectifier.loop}.
