@@ -123,6 +123,50 @@ class PqdifTest {
     assertThat(q).containsKeys("L1.rms_a.min", "L1.rms_a.max");
   }
 
+  /** Orders that a channel's name says are read; what has an unknown identifier is only named. */
+  @Test
+  void harmonicsAreReadByTheirNamesAndWhatIsUnknownIsLeft() {
+    PqdifWriter w = new PqdifWriter(false);
+    w.define("Harmonic 5", false, 1, 2, 7, "a6b31ae9", false, MEAN);
+    w.define("Ia", false, 1, 2, 7, "12345678", false, MEAN);
+    List<Instance> channels =
+        List.of(
+            w.instance(0).reals(0, 600, 1200).reals(2, 3, 4),
+            w.instance(1).shared(0).reals(7, 8, 9));
+    Reading r = read(w.file(List.of(new Observation("trend", START, channels))), Optional.empty());
+    var q = r.log().orElseThrow().quantities();
+    assertThat(q.keySet()).containsExactly("L1.current_h5_a");
+    assertThat(q.get("L1.current_h5_a").mean()).isEqualTo(3, within(1e-9));
+    assertThat(r.notes()).anySatisfy(n -> assertThat(n).contains("Ia unidentified"));
+  }
+
+  /** Volts and amps of one event may stand in observations of their own. */
+  @Test
+  void waveformsOfOneTimeAreOneCapture() {
+    PqdifWriter w = writer(false);
+    Observation both = waves(w, "event", 6400);
+    Observation volts = new Observation("volts", both.start(), both.instances().subList(0, 1));
+    Observation amps =
+        new Observation(
+            "amps",
+            both.start(),
+            List.of(w.instance(5).even(6400, 1 / 6400.0).scaled(0.0014142, 0, sine(6400))));
+    Reading r =
+        read(w.file(List.of(volts, amps, waves(w, "short", 640))), Optional.of(ReadingKind.CAPTURE));
+    CaptureResult c = r.capture().orElseThrow();
+    assertThat(c.voltage().get("L1").rmsV().value().orElseThrow()).isEqualTo(230, within(0.02));
+    assertThat(c.current().get(Conductor.L1).fundamentalA().value().orElseThrow())
+        .isEqualTo(10, within(1e-3));
+    assertThat(r.notes()).anySatisfy(n -> assertThat(n).contains("Not read: number 3, \"short\""));
+  }
+
+  private static int[] sine(int samples) {
+    int[] i = new int[samples];
+    java.util.Arrays.setAll(
+        i, k -> (int) Math.round(10000 * Math.sin(2 * Math.PI * 50 * k / 6400)));
+    return i;
+  }
+
   @ParameterizedTest(name = "compressed {0}")
   @ValueSource(booleans = {false, true})
   void theLongestWaveformsBecomeACapture(boolean compressed) {

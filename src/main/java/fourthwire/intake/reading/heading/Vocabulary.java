@@ -102,7 +102,7 @@ final class Vocabulary {
             + " transient transients impulse impulses surge surges inrush"
             + " rotation humidity speed alarm ground earth gnd pe residual leakage erde erdstrom"
             + " tierra terre nominal rated setpoint limit threshold target delta difference diff"
-            + " forecast baseline predicted expected budget cost price tariff");
+            + " forecast baseline predicted expected budget cost price tariff unidentified");
     put(
         Sense.NOTHING,
         "rms trms true-rms eff efficace effektiv value values wert valeur measured to the of import"

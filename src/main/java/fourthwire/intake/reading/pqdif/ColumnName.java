@@ -3,9 +3,15 @@ package fourthwire.intake.reading.pqdif;
 import fourthwire.metering.MeasuredQuantity;
 import fourthwire.metering.ReadingMapping.Statistic;
 import java.util.Optional;
+import java.util.regex.Pattern;
 
 /** What the interval data of a PQDIF file are called here. */
 final class ColumnName {
+  private static final Pattern HARMONIC =
+      Pattern.compile(
+          "(?i)(?<![\\p{L}\\d])(?:h|harm|harmonic|order)[\\s_.-]*\\d{1,2}(?!\\d)"
+              + "|(?<!\\d)\\d{1,2}(?:st|nd|rd|th)\\s+harm");
+
   private ColumnName() {}
 
   /**
@@ -21,7 +27,37 @@ final class ColumnName {
         };
     return quantity(o)
         .map(q -> q + "." + statistic.word())
-        .orElse((o.channel() + " " + statistic.word()).replace('"', ' '));
+        .orElse((own(o) + " " + statistic.word() + unit(o)).replace('"', ' '));
+  }
+
+  /**
+   * A channel's own name; conductor and quantity are added to an order of harmonics, and where what
+   * it holds has an identifier that is not known here its name must not be taken for that.
+   */
+  private static String own(ValueSeries.Origin o) {
+    if (o.kind() != ValueSeries.Kind.OTHER) {
+      return o.channel();
+    }
+    String measures =
+        switch (o.measures()) {
+          case VOLTAGE -> " voltage ";
+          case CURRENT -> " current ";
+          case OTHER -> " ";
+        };
+    return HARMONIC.matcher(o.channel()).find()
+        ? o.phase().place() + measures + o.channel()
+        : o.channel() + " unidentified";
+  }
+
+  private static String unit(ValueSeries.Origin o) {
+    boolean harmonic = HARMONIC.matcher(o.channel()).find();
+    return switch (harmonic ? o.unit() : SeriesUnit.OTHER) {
+      case VOLTS -> " [V]";
+      case AMPS -> " [A]";
+      case PERCENT -> " [%]";
+      case DEGREES -> " [deg]";
+      default -> "";
+    };
   }
 
   /** To the unit of the quantity. */
@@ -45,7 +81,7 @@ final class ColumnName {
           case DISPLACEMENT_FACTOR -> "displacement_factor";
           case FREQUENCY -> "frequency_hz";
           case ENERGY -> o.unit() == SeriesUnit.WATT_HOURS ? "energy_wh" : "";
-          case INSTANTANEOUS, OTHER -> "";
+          case INSTANTANEOUS, UNSAID, OTHER -> "";
         };
     String name = measure.equals("frequency_hz") ? measure : o.phase().place() + "." + measure;
     return MeasuredQuantity.ofLog(name).map(MeasuredQuantity::name);

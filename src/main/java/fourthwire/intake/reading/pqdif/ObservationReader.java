@@ -124,8 +124,11 @@ final class ObservationReader {
         Phase.of(channel.number(Tags.PHASE).orElse(0)),
         SeriesUnit.of(definition.number(Tags.UNITS).orElse(-1)),
         measures(channel.number(Tags.QUANTITY_MEASURED).orElse(0)),
-        KINDS.getOrDefault(
-            definition.identifier(Tags.CHARACTERISTIC).orElse(NONE), ValueSeries.Kind.OTHER),
+        definition
+            .identifier(Tags.CHARACTERISTIC)
+            .filter(c -> !c.equals(NONE))
+            .map(c -> KINDS.getOrDefault(c, ValueSeries.Kind.OTHER))
+            .orElse(ValueSeries.Kind.UNSAID),
         channel.identifier(Tags.QUANTITY_TYPE).filter(Tags.WAVEFORM::equals).isPresent(),
         statistic);
   }

@@ -53,6 +53,8 @@ public final class ValueSeries {
     DISPLACEMENT_FACTOR,
     FREQUENCY,
     ENERGY,
+    /** What is not said. */
+    UNSAID,
     /** An identifier that is not known here. */
     OTHER
   }
@@ -91,10 +93,10 @@ public final class ValueSeries {
     return secondsS[k];
   }
 
-  /** Whether another stands at the same times. */
+  /** Whether another stands at the same times, in one observation or in several. */
   public boolean isBeside(ValueSeries other) {
     int last = values.length - 1;
-    return origin.observation() == other.origin.observation()
+    return origin.start().equals(other.origin.start())
         && values.length == other.values.length
         && Math.abs(secondsS[0] - other.secondsS[0]) < 1e-6
         && Math.abs(secondsS[last] - other.secondsS[last]) < 1e-6;

@@ -20,6 +20,7 @@ import fourthwire.metering.ReadingMapping.Column;
 import fourthwire.metering.capture.Capture;
 import fourthwire.metering.capture.wave.Samples;
 import fourthwire.metering.capture.wave.TimeAxis;
+import java.time.temporal.ChronoUnit;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.LinkedHashMap;
@@ -29,8 +30,9 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.function.BiPredicate;
 
-/** The waveforms of one observation of a PQDIF file: of the longest, the others are named. */
+/** The longest waveforms of a PQDIF file, of all observations of their times; others are named. */
 public final class PqdifCapture implements Format {
+  private static final int MOST_NAMED = 8;
   private static final double EVEN_WITHIN = 0.05;
 
   private final Map<String, ValueSeries> channels = new LinkedHashMap<>();
@@ -41,17 +43,30 @@ public final class PqdifCapture implements Format {
       String name = s.origin().channel().isEmpty() ? "channel" : s.origin().channel();
       channels.put(channels.containsKey(name) ? name + " #" + (channels.size() + 1) : name, s);
     }
-    long observations = all.stream().map(s -> s.origin().observation()).distinct().count();
-    ValueSeries.Origin o = chosen.get(0).origin();
-    if (observations > 1) {
+    List<Integer> read = chosen.stream().map(s -> s.origin().observation()).toList();
+    List<String> left =
+        all.stream()
+            .map(ValueSeries::origin)
+            .filter(o -> !read.contains(o.observation()))
+            .map(PqdifCapture::named)
+            .distinct()
+            .toList();
+    if (!left.isEmpty()) {
       notes.add(
-          "The file holds waveforms of "
-              + observations
-              + " observations; the longest, number "
-              + o.observation()
-              + (o.observationName().isEmpty() ? "" : ", \"" + o.observationName() + "\"")
-              + ", was read.");
+          "The file holds waveforms of several observations; the longest, "
+              + named(chosen.get(0).origin())
+              + ", was read. Not read: "
+              + String.join("; ", left.subList(0, Math.min(MOST_NAMED, left.size())))
+              + (left.size() > MOST_NAMED ? " and " + (left.size() - MOST_NAMED) + " more." : "."));
     }
+  }
+
+  private static String named(ValueSeries.Origin o) {
+    return "number "
+        + o.observation()
+        + (o.observationName().isEmpty() ? "" : ", \"" + o.observationName() + "\"")
+        + " of "
+        + o.start().truncatedTo(ChronoUnit.SECONDS);
   }
 
   /** Of a file; empty where it holds no waveforms in volts or amps. */
