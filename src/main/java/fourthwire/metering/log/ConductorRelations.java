@@ -11,6 +11,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
+import java.util.function.IntToDoubleFunction;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 
@@ -26,6 +27,9 @@ final class ConductorRelations implements DayCheck {
 
   /** Last digits that harmonics make together, at least, so that rounding is no distortion. */
   private static final double FEWEST_DIGITS = 10;
+
+  /** How far a true distortion never stays from its harmonics. */
+  private static final double SMOOTHED = 0.03;
 
   private final FlaggedDays flagged = new FlaggedDays();
   private final List<String> names;
@@ -203,34 +207,55 @@ final class ConductorRelations implements DayCheck {
     if (logged.isEmpty() || !percent && first.length == 0 && rms.isEmpty()) {
       return;
     }
-    double ratio =
-        Rows.median(
-            day.rows(),
-            k -> {
-              double base =
-                  percent
-                      ? 100
-                      : first.length > 0
-                          ? first[k]
-                          : Math.sqrt(Math.max(0, rms.get()[k] * rms.get()[k] - sum[k] * sum[k]));
-              // Instruments write 0 where the current is too small to tell.
-              return logged.get()[k] == 0 ? Double.NaN : logged.get()[k] / (100 * sum[k] / base);
-            });
-    if (ratio < 0.8 || ratio > 1.5) {
+    double[] made = new double[day.rows()];
+    Arrays.setAll(
+        made,
+        k -> {
+          double base =
+              percent
+                  ? 100
+                  : first.length > 0
+                      ? first[k]
+                      : Math.sqrt(Math.max(0, rms.get()[k] * rms.get()[k] - sum[k] * sum[k]));
+          return 100 * sum[k] / base;
+        });
+    // Instruments write 0 where the current is too small to tell.
+    double[] told = Arrays.stream(logged.get()).map(x -> x == 0 ? Double.NaN : x).toArray();
+    double ratio = Rows.median(day.rows(), k -> told[k] / made[k]);
+    boolean misread = ratio < 0.8 || ratio > 1.5;
+    if (misread || isSmoothed(told, made)) {
+      String name = measured + "_thd_percent";
       flag(
           day,
           DISTORTION_MISREAD,
           measured,
           "Its means and percentiles can't be held against limits; the harmonics can.",
-          String.format(
-              Locale.ROOT,
-              "%s_thd_percent is %.3g times the distortion that the harmonics make (median of the"
-                  + " day): it is averaged otherwise, or taken on another base than the"
-                  + " fundamental.",
-              measured,
-              ratio),
-          rows -> List.of(Offers.formDistortion(measured + "_thd_percent", rows)));
+          misread
+              ? String.format(
+                  Locale.ROOT,
+                  "%s is %.3g times the distortion that the harmonics make (median of the day): it"
+                      + " is averaged otherwise, or taken on another base than the fundamental.",
+                  name,
+                  ratio)
+              : name
+                  + " does not follow the distortion that the harmonics make from row to row: it is"
+                  + " a mean over a longer time.",
+          rows -> List.of(Offers.formDistortion(name, rows)));
     }
+  }
+
+  /** Whether a distortion moves far less over the day than what its harmonics make. */
+  private static boolean isSmoothed(double[] told, double[] made) {
+    double apart = spread(told.length, k -> told[k] / made[k]);
+    double digits = 2 * Rows.leastStep(told) / Rows.median(told);
+    return apart > Math.max(SMOOTHED, digits)
+        && spread(told.length, k -> told[k]) < 0.5 * spread(made.length, k -> made[k]);
+  }
+
+  /** Usual distance from the median, as a share of it. */
+  private static double spread(int rows, IntToDoubleFunction figure) {
+    double usual = Rows.median(rows, figure);
+    return Rows.median(rows, k -> Math.abs(figure.applyAsDouble(k) / usual - 1));
   }
 
   @Override

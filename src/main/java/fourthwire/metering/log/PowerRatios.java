@@ -138,7 +138,7 @@ final class PowerRatios {
 
   /** Rows of next to no current have no ratio: their digits are too few. */
   static double median(double[] amps, IntToDoubleFunction ratio) {
-    double least = Math.max(0.1 * Rows.median(amps), FEWEST_DIGITS * Rows.leastStep(amps));
+    double least = Math.max(0.1 * Rows.median(amps), FEWEST_DIGITS * Rows.digit(amps));
     return Rows.median(
         amps.length,
         k -> {

@@ -43,6 +43,24 @@ final class Rows {
     return least;
   }
 
+  /** The last digit that values are written in, at least: they may stand still all day. */
+  static double digit(double[] x) {
+    double digit = 1;
+    while (digit > 1e-6 && !isWhole(x, digit)) {
+      digit /= 10;
+    }
+    return digit > 1e-6 ? Math.max(digit, leastStep(x)) : 0;
+  }
+
+  private static boolean isWhole(double[] x, double digit) {
+    for (double v : x) {
+      if (Math.abs(v / digit - Math.rint(v / digit)) > 1e-6) {
+        return false;
+      }
+    }
+    return true;
+  }
+
   /** How many rows a figure is there. */
   static int count(int rows, IntToDoubleFunction figure) {
     int there = 0;

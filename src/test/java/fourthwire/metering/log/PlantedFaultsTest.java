@@ -206,6 +206,29 @@ class PlantedFaultsTest {
               b.scale("L2.rms_a", p[0], p[1], 2);
             }),
         fault(
+            "a neutral by another ratio for some days, beside amps alone",
+            QualityFinding.NEUTRAL_NOT_SUM,
+            d,
+            e,
+            (b, p) -> {
+              b.columns.keySet().removeIf(name -> !name.endsWith("rms_a"));
+              b.scale("N.rms_a", p[0], p[1], 0.1);
+            }),
+        fault(
+            "a distortion smoothed over a day",
+            QualityFinding.DISTORTION_MISREAD,
+            d,
+            e,
+            (b, p) -> {
+              for (int row = 0; row < b.times.size(); row++) {
+                for (String name :
+                    List.of("current_h3_a", "current_h5_a", "current_h7_a", "current_thd_percent")) {
+                  b.scale("L1." + name, row, row + 1, 0.8 + 0.2 * Math.sin(row * Math.PI / 72));
+                }
+              }
+              smooth(b.columns.get("L1.current_thd_percent"), p[0], p[1]);
+            }),
+        fault(
             "a line without volts for days",
             QualityFinding.WRONG_RATIO,
             d,
@@ -232,6 +255,14 @@ class PlantedFaultsTest {
             d,
             e,
             (b, p) -> b.scale("L1.current_thd_percent", p[0], p[1], 0.6)));
+  }
+
+  private static void smooth(double[] x, int from, int to) {
+    double[] raw = x.clone();
+    for (int row = from; row < to; row++) {
+      double mean = java.util.Arrays.stream(raw, row - 72, row + 72).average().orElseThrow();
+      x[row] = Math.round(10 * mean) / 10.0;
+    }
   }
 
   private static void turn(InventedBoard b, int[] p) {
