@@ -24,7 +24,7 @@ final class PowerRatios {
   private static final double WHOLE = 0.04;
 
   /** Last digits in a current, at least, so that rounding is no ratio. */
-  private static final double FEWEST_DIGITS = 20;
+  private static final double FEWEST_DIGITS = 10;
 
   private static final double STEADY = 0.08;
   private static final int MOST_WHOLE = 20;
