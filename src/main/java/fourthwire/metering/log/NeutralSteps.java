@@ -109,8 +109,7 @@ final class NeutralSteps implements DayCheck {
     for (int k = 0; k < steps.size(); k++) {
       Step from = steps.get(k);
       boolean back =
-          k + 1 < steps.size()
-              && Math.abs(from.factor() * steps.get(k + 1).factor() - 1) < PAIRED;
+          k + 1 < steps.size() && Math.abs(from.factor() * steps.get(k + 1).factor() - 1) < PAIRED;
       findings.add(
           back
               ? finding(from, steps.get(k + 1).row(), steps.get(k + 1).at())

@@ -152,7 +152,8 @@ class PqdifTest {
             both.start(),
             List.of(w.instance(5).even(6400, 1 / 6400.0).scaled(0.0014142, 0, sine(6400))));
     Reading r =
-        read(w.file(List.of(volts, amps, waves(w, "short", 640))), Optional.of(ReadingKind.CAPTURE));
+        read(
+            w.file(List.of(volts, amps, waves(w, "short", 640))), Optional.of(ReadingKind.CAPTURE));
     CaptureResult c = r.capture().orElseThrow();
     assertThat(c.voltage().get("L1").rmsV().value().orElseThrow()).isEqualTo(230, within(0.02));
     assertThat(c.current().get(Conductor.L1).fundamentalA().value().orElseThrow())

@@ -222,7 +222,8 @@ class PlantedFaultsTest {
             (b, p) -> {
               for (int row = 0; row < b.times.size(); row++) {
                 for (String name :
-                    List.of("current_h3_a", "current_h5_a", "current_h7_a", "current_thd_percent")) {
+                    List.of(
+                        "current_h3_a", "current_h5_a", "current_h7_a", "current_thd_percent")) {
                   b.scale("L1." + name, row, row + 1, 0.8 + 0.2 * Math.sin(row * Math.PI / 72));
                 }
               }
