@@ -138,6 +138,35 @@ class ReadingPagesTest extends ServiceTest {
         + "&p2=L1&o2=5&s2=mean&f2=1";
   }
 
+  /** Headings that leave the measure open tell place and order, to which one choice is added. */
+  @Test
+  void oneChoiceIsMadeForAllColumnsOfAKind() throws InterruptedException {
+    String file =
+        """
+        Date,L1 H4,L1 H6,L2 H4
+        2026-03-02 00:10:00,1.2,2.2,3.2
+        2026-03-02 00:20:00,1.3,2.3,3.3
+        2026-03-02 00:30:00,1.4,2.4,3.4
+        """;
+    Answer taken = add("week.csv", file, "LP-1", "");
+    String upload = taken.header("Location").replaceAll(".*(/uploads/\\d+).*", "$1");
+    String columns = upload + "/columns";
+    assertThat(text(http().get(columns, "Accept", HTML)))
+        .contains("Columns of a kind together", "Set for all 3", "value=\"all-open\"");
+    String each = "date=Date&zone=Europe/Vienna&stamp=start";
+    String[] headings = {"L1+H4", "L1+H6", "L2+H4"};
+    for (int k = 0; k < headings.length; k++) {
+      each += "&h%d=%s&k%d=open&m%d=&p%d=&o%d=&s%d=mean&f%d=1".formatted(k, headings[k], k, k, k, k, k, k);
+    }
+    String chosen = "&act=all-open&km-open=current_h_a&ko-open=1&ks-open=max&kf-open=0.001";
+    Answer set = http().send("POST", columns, FORM, each + chosen);
+    assertThat(set.status()).isEqualTo(200);
+    assertThat(text(set))
+        .contains("value=\"all-current_h_a\"", "name=\"o0\" value=\"5\"", "name=\"o1\" value=\"7\"")
+        .contains("name=\"f2\" value=\"0.001\"", "<option value=\"max\" selected")
+        .doesNotContain("??", "value=\"all-open\"");
+  }
+
   @Test
   void aWaitingFileIsDiscarded() {
     Answer taken =

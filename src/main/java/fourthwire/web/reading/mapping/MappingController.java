@@ -22,6 +22,8 @@ import org.springframework.web.bind.annotation.RequestParam;
 /** Shows what a waiting log's columns are taken for, and takes what a person makes of it. */
 @Controller
 class MappingController {
+  private static final String ALL = "all-";
+
   private final ReadingService service;
   private final ReadingUploads uploads;
   private final SiteRepository sites;
@@ -49,7 +51,8 @@ class MappingController {
   /**
    * Shows the rows as they are understood by what was chosen, or reads the file so.
    *
-   * @param act {@code look} or {@code read}
+   * @param act {@code look}, {@code read}, or {@code all-} with the kind of columns that one choice
+   *     is made for
    */
   @PostMapping("/uploads/{upload}/columns")
   String edit(
@@ -62,7 +65,9 @@ class MappingController {
     if (!waits(waiting)) {
       return progress(upload);
     }
-    ReadingMapping edited = new MappingForm(fields).mapping();
+    MappingForm form = new MappingForm(fields);
+    ReadingMapping edited =
+        (act.startsWith(ALL) ? form.forAll(act.substring(ALL.length())) : form).mapping();
     String refusal = "";
     try {
       if (act.equals("read")) {

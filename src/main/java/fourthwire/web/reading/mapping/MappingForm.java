@@ -22,6 +22,41 @@ final class MappingForm {
     this.fields = fields;
   }
 
+  /**
+   * The same with one choice made for every column of a kind: what it is, its statistic, its
+   * factor, its orders moved by one. What is left empty stays as each has it.
+   *
+   * @param kind as the page names it, beside each of its columns
+   */
+  MappingForm forAll(String kind) {
+    Map<String, String> all = new LinkedHashMap<>(fields);
+    for (int k = 0; fields.containsKey("h" + k); k++) {
+      if (raw("k" + k).equals(kind)) {
+        set(all, "m" + k, text("km-" + kind));
+        set(all, "s" + k, text("ks-" + kind));
+        set(all, "f" + k, text("kf-" + kind));
+        Measure heading = Measure.ofHeading(raw("h" + k));
+        set(all, "p" + k, text("p" + k).isEmpty() ? heading.place() : "");
+        set(all, "o" + k, order(text("o" + k), heading.order(), text("ko-" + kind)));
+      }
+    }
+    return new MappingForm(all);
+  }
+
+  private static void set(Map<String, String> all, String field, String value) {
+    if (!value.isEmpty()) {
+      all.put(field, value);
+    }
+  }
+
+  /** The order as given, else as the heading has it, moved where that was asked. */
+  private static String order(String given, String heading, String moved) {
+    String order = given.isEmpty() ? heading : given;
+    return order.matches("\\d{1,3}") && moved.matches("-?1")
+        ? String.valueOf(Integer.parseInt(order) + Integer.parseInt(moved))
+        : order;
+  }
+
   ReadingMapping mapping() {
     Map<String, Column> columns = new LinkedHashMap<>();
     for (int k = 0; fields.containsKey("h" + k); k++) {

@@ -8,6 +8,7 @@ import java.util.List;
  * @param meter where it was taken, in words
  * @param asked what is open beside the columns
  * @param groups the columns by how sure their meaning is
+ * @param kinds of columns, each of several, for which one choice can be made
  * @param rows when the first rows are, as written and as understood
  */
 record MappingPage(
@@ -17,6 +18,7 @@ record MappingPage(
     TimeFields time,
     List<String> asked,
     List<Group> groups,
+    List<Kind> kinds,
     List<When> rows,
     List<Choice> places,
     List<Choice> measures,
@@ -34,12 +36,14 @@ record MappingPage(
    * A column.
    *
    * @param number of its fields
+   * @param kind of the columns that one choice can be made for; empty text for none
    * @param written its first cells
    * @param understood the same as they would be read; empty text where it would not be
    * @param question what is open; empty text for nothing
    */
   record ColumnRow(
       int number,
+      String kind,
       String heading,
       String written,
       String understood,
@@ -47,6 +51,15 @@ record MappingPage(
       String statistic,
       String factor,
       String question) {}
+
+  /**
+   * Columns of one kind.
+   *
+   * @param value what is measured, or {@code open} where that is asked
+   * @param label the same in words
+   * @param orders whether they are of harmonic orders
+   */
+  record Kind(String value, String label, int count, boolean orders) {}
 
   /** A first row: as written, as understood. */
   record When(String written, String understood) {}

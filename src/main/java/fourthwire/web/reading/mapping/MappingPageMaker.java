@@ -27,6 +27,7 @@ class MappingPageMaker {
   /** More columns of one kind than this are folded, where nothing about them is open. */
   private static final int MOST_OPEN = 12;
 
+  private static final String OPEN = "open";
   private static final DateTimeFormatter SECOND =
       DateTimeFormatter.ofPattern("EEEE d MMMM uuuu, HH:mm:ss", Locale.ENGLISH);
   private static final List<String> DEGREES = List.of("asked", "likely", "sure", "unread");
@@ -50,6 +51,7 @@ class MappingPageMaker {
             .distinct()
             .toList(),
         groups(p),
+        kinds(p),
         p.rows().stream().map(r -> when(r, p.time().mapped())).toList(),
         Measure.PLACES.stream()
             .map(
@@ -124,6 +126,32 @@ class MappingPageMaker {
     return groups;
   }
 
+  /** What a column is so far; of what is not read, nothing. */
+  private static String kind(LogProposal.Column c) {
+    return c.mapped()
+        .map(m -> Measure.of(m.quantity()).measure())
+        .filter(m -> !m.isEmpty())
+        .orElse(c.question().isEmpty() ? "" : OPEN);
+  }
+
+  private List<MappingPage.Kind> kinds(LogProposal p) {
+    Map<String, Integer> counts = new LinkedHashMap<>();
+    p.columns().forEach(c -> counts.merge(kind(c), 1, Integer::sum));
+    counts.remove("");
+    return counts.entrySet().stream()
+        .filter(e -> e.getValue() > 1)
+        .map(
+            e ->
+                new MappingPage.Kind(
+                    e.getKey(),
+                    e.getKey().equals(OPEN)
+                        ? words.of("columns.kind.open")
+                        : words.of("columns.measure." + e.getKey()),
+                    e.getValue(),
+                    e.getKey().equals(OPEN) || e.getKey().contains("_h_")))
+        .toList();
+  }
+
   private static String degree(LogProposal.Column c) {
     if (!c.question().isEmpty()) {
       return "asked";
@@ -149,6 +177,7 @@ class MappingPageMaker {
             .orElse("");
     return new MappingPage.ColumnRow(
         number,
+        kind(c),
         c.heading(),
         written,
         understood,

@@ -1,6 +1,7 @@
 package fourthwire.web.reading.mapping;
 
 import java.util.List;
+import java.util.Locale;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 
@@ -41,6 +42,11 @@ record Measure(String place, String measure, String order) {
           "current_unbalance_percent");
 
   private static final Pattern HARMONIC = Pattern.compile("(current|voltage)_h(\\d+)_(\\w+)");
+  private static final Pattern HEADED_PLACE =
+      Pattern.compile("(?i)(?<![a-z0-9])(L[123]|N)(?![a-z0-9])");
+  private static final Pattern HEADED_ORDER =
+      Pattern.compile(
+          "(?i)(?<![a-z0-9])h(?:arm(?:onic)?)?[ _.-]*(\\d{1,2})(?!\\d)|(\\d{1,2})(?:st|nd|rd|th)");
   private static final List<String> PLACELESS =
       List.of("frequency_hz", "voltage_unbalance_percent", "current_unbalance_percent");
 
@@ -53,6 +59,19 @@ record Measure(String place, String measure, String order) {
     return m.matches()
         ? new Measure(place, m.group(1) + "_h_" + m.group(3), m.group(2))
         : new Measure(place, measure, "");
+  }
+
+  /**
+   * What a heading that leaves its measure open says of place and order, to begin with when a person
+   * chooses the measure; each column shows it before it is read.
+   */
+  static Measure ofHeading(String heading) {
+    Matcher place = HEADED_PLACE.matcher(heading);
+    Matcher order = HEADED_ORDER.matcher(heading);
+    String number =
+        !order.find() ? "" : order.group(1) != null ? order.group(1) : order.group(2);
+    return new Measure(
+        place.find() ? place.group(1).toUpperCase(Locale.ROOT) : "", "", number.replaceFirst("^0+", ""));
   }
 
   /** The name of what was chosen; a text that is no quantity where the choice is none. */
