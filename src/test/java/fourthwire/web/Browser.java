@@ -75,8 +75,10 @@ final class Browser implements AutoCloseable {
    * handed over whole, and as no page has frames, in the page itself.
    */
   static List<String> violations(Page page) {
+    AxeRunOptions whole = new AxeRunOptions();
+    whole.setResultTypes(List.of("violations"));
     return new AxeBuilder(page)
-        .options(new AxeRunOptions().setResultTypes(List.of("violations")))
+        .options(whole)
         .setLegacyMode(true)
         .analyze().getViolations().stream().map(Browser::line).toList();
   }
