@@ -1,7 +1,7 @@
 package fourthwire.web;
 
-import com.deque.html.axecore.playwright.AxeBuilder;
 import com.deque.html.axecore.args.AxeRunOptions;
+import com.deque.html.axecore.playwright.AxeBuilder;
 import com.deque.html.axecore.results.Rule;
 import com.microsoft.playwright.BrowserContext;
 import com.microsoft.playwright.BrowserType;
@@ -78,9 +78,9 @@ final class Browser implements AutoCloseable {
     AxeRunOptions whole = new AxeRunOptions();
     whole.setResultTypes(List.of("violations"));
     return new AxeBuilder(page)
-        .options(whole)
-        .setLegacyMode(true)
-        .analyze().getViolations().stream().map(Browser::line).toList();
+        .options(whole).setLegacyMode(true).analyze().getViolations().stream()
+            .map(Browser::line)
+            .toList();
   }
 
   private static String line(Rule rule) {

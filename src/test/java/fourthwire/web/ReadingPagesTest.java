@@ -156,7 +156,9 @@ class ReadingPagesTest extends ServiceTest {
     String each = "date=Date&zone=Europe/Vienna&stamp=start";
     String[] headings = {"L1+H4", "L1+H6", "L2+H4"};
     for (int k = 0; k < headings.length; k++) {
-      each += "&h%d=%s&k%d=open&m%d=&p%d=&o%d=&s%d=mean&f%d=1".formatted(k, headings[k], k, k, k, k, k, k);
+      each +=
+          "&h%d=%s&k%d=open&m%d=&p%d=&o%d=&s%d=mean&f%d=1"
+              .formatted(k, headings[k], k, k, k, k, k, k);
     }
     String chosen = "&act=all-open&km-open=current_h_a&ko-open=1&ks-open=max&kf-open=0.001";
     Answer set = http().send("POST", columns, FORM, each + chosen);

@@ -62,16 +62,17 @@ record Measure(String place, String measure, String order) {
   }
 
   /**
-   * What a heading that leaves its measure open says of place and order, to begin with when a person
-   * chooses the measure; each column shows it before it is read.
+   * What a heading that leaves its measure open says of place and order, to begin with when a
+   * person chooses the measure; each column shows it before it is read.
    */
   static Measure ofHeading(String heading) {
     Matcher place = HEADED_PLACE.matcher(heading);
     Matcher order = HEADED_ORDER.matcher(heading);
-    String number =
-        !order.find() ? "" : order.group(1) != null ? order.group(1) : order.group(2);
+    String number = !order.find() ? "" : order.group(1) != null ? order.group(1) : order.group(2);
     return new Measure(
-        place.find() ? place.group(1).toUpperCase(Locale.ROOT) : "", "", number.replaceFirst("^0+", ""));
+        place.find() ? place.group(1).toUpperCase(Locale.ROOT) : "",
+        "",
+        number.replaceFirst("^0+", ""));
   }
 
   /** The name of what was chosen; a text that is no quantity where the choice is none. */
