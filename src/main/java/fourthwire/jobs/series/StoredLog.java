@@ -82,7 +82,8 @@ public final class StoredLog {
 
   private StoredLog with(
       Series read, List<Correction> holding, CorrectionRepository.Cleaned cleaned) {
-    CorrectedRows rows = new CorrectedRows(new CorrectedSeries(read, holding));
+    CorrectedRows rows =
+        new CorrectedRows(series.chunks(entry.id()), new CorrectedSeries(read, holding));
     return new StoredLog(entry, survey, series, corrections, Optional.of(rows), cleaned.log());
   }
 
