@@ -3,6 +3,7 @@ package fourthwire.audit.solve;
 import fourthwire.network.Excitation;
 import fourthwire.network.TreeNetwork;
 import fourthwire.network.Trunk;
+import java.util.Arrays;
 import java.util.Collection;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -19,12 +20,16 @@ import java.util.stream.IntStream;
  * residuals ({@link Gmres}); a product is one sweep of the boards alone ({@link Trunk}).
  *
  * <p>Most of what loads do to each other they do through what many boards have in common: the
- * supply, a transformer, a riser. So the same equations are first solved for a few boards above, as
- * if all below stood at their voltage, and that leads the solution for all ({@link UpperBoards}).
- * Active filters' currents are further unknowns, behind the potentials.
+ * supply, a transformer, a riser. So the same equations are first solved for a few boards above,
+ * which see those below through their feeders, and that leads the solution for all ({@link
+ * UpperBoards}); those above are led by each of them solved alone ({@link BoardInverse}). Active
+ * filters' currents are further unknowns, behind the potentials.
  */
 final class BoardEquations {
   private static final int MOST_PRODUCTS = 120;
+
+  /** Boards above, if no more than this, are solved one by one to lead their own solution. */
+  private static final int MOST_INVERSES = 100;
 
   private final BoardResponse response;
   private final BoardRow row;
@@ -34,6 +39,7 @@ final class BoardEquations {
   private final List<ActiveFilter> filters;
   private final int filtersLength;
   private final Optional<UpperBoards> upper;
+  private final List<BoardInverse> inverses;
 
   /**
    * Equations for loads at these places.
@@ -66,7 +72,22 @@ final class BoardEquations {
                 Collectors.collectingAndThen(
                     Collectors.groupingBy(s -> s.place().node(), TreeMap::new, Collectors.toList()),
                     boardsOf -> List.copyOf(boardsOf.values())));
-    this.upper = above.map(equations -> new UpperBoards(network, equations, leadsOf(leads), row));
+    this.inverses =
+        above.isEmpty() && byBoard.size() <= MOST_INVERSES ? inverses() : List.of();
+    this.upper = above.map(equations -> new UpperBoards(response, equations, leadsOf(leads), row));
+  }
+
+  private List<BoardInverse> inverses() {
+    List<FeederOhms> whole = FeederOhms.whole(row, response);
+    return byBoard.stream()
+        .map(slopes -> whole.get(row.position(slopes.get(0).place().node())))
+        .map(ohms -> new BoardInverse(ohms, row.perConductor()))
+        .toList();
+  }
+
+  /** Whether a board is in the row. */
+  boolean stands(int node) {
+    return row.start(response.network().index(node, 0)) >= 0;
   }
 
   private Map<PlaceSlope, PortPlace> leadsOf(Map<PortPlace, PortPlace> leads) {
@@ -86,7 +107,10 @@ final class BoardEquations {
 
   /** To be called when slopes have changed. */
   void renew() {
-    upper.ifPresent(u -> u.renew(response.workers()));
+    upper.ifPresent(UpperBoards::renew);
+    response
+        .workers()
+        .each(inverses.size(), b -> inverses.get(b).renew(byBoard.get(b)));
   }
 
   /**
@@ -112,7 +136,15 @@ final class BoardEquations {
   }
 
   private double[] rough(double[] c) {
-    return upper.map(u -> u.lead(c)).orElse(c);
+    if (upper.isPresent()) {
+      return upper.get().lead(c);
+    }
+    if (inverses.isEmpty()) {
+      return c;
+    }
+    double[] solved = c.clone();
+    response.workers().each(inverses.size(), b -> inverses.get(b).solve(solved));
+    return solved;
   }
 
   /** into = y less what the network answers where slopes and filters answer to y. */

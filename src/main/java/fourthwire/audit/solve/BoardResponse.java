@@ -1,5 +1,6 @@
 package fourthwire.audit.solve;
 
+import fourthwire.network.DrivingPoints;
 import fourthwire.network.Excitation;
 import fourthwire.network.FactoredOrder;
 import fourthwire.network.OrderSolution;
@@ -41,6 +42,12 @@ final class BoardResponse {
 
   Workers workers() {
     return workers;
+  }
+
+  /** Hands over the driving-point impedances of every order, by its position. */
+  void eachDrivingPoints(BiConsumer<Integer, DrivingPoints> taker) {
+    workers.each(
+        orders.count(), k -> taker.accept(k, factors[orders.at(k)].drivingPoints()));
   }
 
   /** The orders solved last, on the trunk they were solved on. */

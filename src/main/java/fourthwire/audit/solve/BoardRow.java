@@ -32,6 +32,11 @@ final class BoardRow {
     return IntStream.of(nodes);
   }
 
+  /** Which board of the row a node is. */
+  int position(int node) {
+    return Arrays.binarySearch(nodes, node);
+  }
+
   /** How many conductors there are. */
   int count() {
     return conductors.length;

@@ -10,11 +10,11 @@ import java.util.Arrays;
  */
 final class DeviceSlope {
   private final int size;
-  private final double[] byColumn;
+  private final float[] byColumn;
 
   DeviceSlope(int size) {
     this.size = size;
-    this.byColumn = new double[size * size];
+    this.byColumn = new float[size * size];
   }
 
   int size() {
@@ -22,7 +22,7 @@ final class DeviceSlope {
   }
 
   void set(int row, int column, double siemens) {
-    byColumn[column * size + row] = siemens;
+    byColumn[column * size + row] = (float) siemens;
   }
 
   double get(int row, int column) {
@@ -57,25 +57,26 @@ final class DeviceSlope {
    * @param reactance at the fundamental, ohms
    */
   void open(OrdersInPlay orders, double ohm, double reactance) {
-    double[][] rows = new double[size][2 * size];
+    double[][] matrix = new double[size][size];
+    double[][] sides = new double[size][size];
     for (int column = 0; column < size; column += 2) {
       double x = reactance * orders.at(column / 2 % orders.count());
       for (int row = 0; row < size; row++) {
         double re = get(row, column);
         double im = get(row, column + 1);
-        rows[row][column] = -(re * ohm + im * x);
-        rows[row][column + 1] = -(im * ohm - re * x);
-        rows[row][size + column] = re;
-        rows[row][size + column + 1] = im;
+        matrix[row][column] = -(re * ohm + im * x);
+        matrix[row][column + 1] = -(im * ohm - re * x);
+        sides[row][column] = re;
+        sides[row][column + 1] = im;
       }
     }
     for (int k = 0; k < size; k++) {
-      rows[k][k] += 1;
+      matrix[k][k] += 1;
     }
-    eliminate(rows);
+    new DenseLu(matrix).solve(sides);
     for (int row = 0; row < size; row++) {
       for (int column = 0; column < size; column++) {
-        set(row, column, rows[row][size + column]);
+        set(row, column, sides[row][column]);
       }
     }
   }
@@ -109,29 +110,5 @@ final class DeviceSlope {
       System.arraycopy(answer, 0, behind.byColumn, column * size, size);
     }
     add(behind);
-  }
-
-  /** Gauss-Jordan with row exchange; the right half becomes the solution. */
-  private void eliminate(double[][] rows) {
-    for (int k = 0; k < size; k++) {
-      int best = k;
-      for (int row = k + 1; row < size; row++) {
-        best = Math.abs(rows[row][k]) > Math.abs(rows[best][k]) ? row : best;
-      }
-      double[] pivot = rows[best];
-      rows[best] = rows[k];
-      rows[k] = pivot;
-      for (int column = 2 * size - 1; column >= k; column--) {
-        pivot[column] /= pivot[k];
-      }
-      for (int row = 0; row < size; row++) {
-        double factor = rows[row][k];
-        if (row != k && factor != 0) {
-          for (int column = k; column < 2 * size; column++) {
-            rows[row][column] -= factor * pivot[column];
-          }
-        }
-      }
-    }
   }
 }

@@ -2,15 +2,19 @@ package fourthwire.audit.solve;
 
 import fourthwire.network.TreeNetwork;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Collection;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.TreeMap;
+import java.util.function.Predicate;
 
 /**
- * A few boards above many, at whose voltage all below are taken to stand: of n boards each is led
- * by the nearest above it, or itself, that has √n boards at or below, else by the topmost of its
- * voltage level.
+ * A few boards above many: of n boards each is led by the nearest above it, or itself, that has √n
+ * boards at or below, else by the topmost of its voltage level. What hangs at a board is seen from
+ * above behind the feeders between ({@link FedSlope}); what boards do to each other below the one
+ * that leads them, and what three-line loads do to the lines beside them there, is left aside.
  */
 final class UpperBoards {
   /** Fewer boards than this need none to lead them. */
@@ -20,15 +24,18 @@ final class UpperBoards {
   private static final int TIMES_FEWER = 3;
 
   /** How well their own equations are solved, each time they lead. */
-  private static final double ROUGH = 0.3;
+  private static final double ROUGH = 0.03;
 
+  private final BoardResponse response;
   private final BoardEquations equations;
-  private final Map<PlaceSlope, List<PlaceSlope>> parts = new LinkedHashMap<>();
+  private final BoardRow led;
 
-  /** For each conductor among those led, where the one begins that leads it, or -1. */
+  /** For each conductor among those led, where the one begins that leads it. */
   private final int[] leading;
 
-  private final BoardRow led;
+  private final List<FeederOhms> feeders;
+  private final List<List<FedSlope>> byBoard;
+  private final Map<PlaceSlope, List<FedSlope>> parts = new LinkedHashMap<>();
 
   /**
    * Boards above others.
@@ -38,32 +45,47 @@ final class UpperBoards {
    * @param led how those below stand in a row; it has all of these boards too
    */
   UpperBoards(
-      TreeNetwork network,
+      BoardResponse response,
       BoardEquations equations,
       Map<PlaceSlope, PortPlace> leads,
       BoardRow led) {
+    this.response = response;
     this.equations = equations;
     this.led = led;
+    List<BoardAbove> above = led.nodes().mapToObj(this::above).toList();
+    this.leading =
+        above.stream()
+            .flatMapToInt(a -> Arrays.stream(a.conductors()).map(c -> network().index(a.node(), c)))
+            .map(equations.row()::start)
+            .toArray();
+    this.feeders = FeederOhms.below(above, led, response);
+    Map<Integer, List<FedSlope>> boards = new TreeMap<>();
     leads.forEach(
-        (slope, lead) ->
-            parts.computeIfAbsent(equations.slope(lead), s -> new ArrayList<>()).add(slope));
-    this.leading = new int[led.count()];
-    int at = 0;
-    for (int node : led.nodes().toArray()) {
-      for (int c = 0; c < network.conductors(node); c++) {
-        leading[at++] = leading(network, node, c);
-      }
-    }
+        (slope, lead) -> {
+          FeederOhms feeder = feeders.get(led.position(slope.place().node()));
+          FedSlope fed = new FedSlope(slope, feeder, network(), led);
+          parts.computeIfAbsent(equations.slope(lead), s -> new ArrayList<>()).add(fed);
+          boards.computeIfAbsent(slope.place().node(), n -> new ArrayList<>()).add(fed);
+        });
+    this.byBoard = List.copyOf(boards.values());
   }
 
-  private int leading(TreeNetwork network, int node, int conductor) {
-    int n = node;
-    int c = conductor;
-    while (equations.row().start(network.index(n, c)) < 0 && network.isFedByFeeder(n)) {
-      c = network.joinedTo(n, c);
-      n = network.parent(n);
+  private TreeNetwork network() {
+    return response.network();
+  }
+
+  /** The board that leads a node, and how its conductors are joined to it. */
+  private BoardAbove above(int node) {
+    int[] conductors = new int[network().conductors(node)];
+    Arrays.setAll(conductors, c -> c);
+    int lead = node;
+    while (!equations.stands(lead) && network().isFedByFeeder(lead)) {
+      for (int c = 0; c < conductors.length; c++) {
+        conductors[c] = network().joinedTo(lead, conductors[c]);
+      }
+      lead = network().parent(lead);
     }
-    return equations.row().start(network.index(n, c));
+    return new BoardAbove(lead, conductors);
   }
 
   /** Which place leads each; none if those that lead are too many to help. */
@@ -97,32 +119,59 @@ final class UpperBoards {
   }
 
   /** Takes up new slopes of those led. */
-  void renew(Workers workers) {
+  void renew() {
+    Workers workers = response.workers();
+    workers.each(byBoard.size(), b -> byBoard.get(b).forEach(FedSlope::renew));
     List<PlaceSlope> sums = List.copyOf(parts.keySet());
     workers.each(
         sums.size(),
         k -> {
           sums.get(k).clear();
-          parts.getOrDefault(sums.get(k), List.of()).forEach(sums.get(k)::add);
+          parts.getOrDefault(sums.get(k), List.of()).forEach(fed -> sums.get(k).add(fed.seen()));
         });
     equations.renew();
   }
 
-  /** A rough solution for all: right in what the boards below one of these have in common. */
+  /** A rough solution for all: what is drawn at c, what follows above, what follows from both. */
   double[] lead(double[] c) {
-    BoardRow own = equations.row();
-    double[] above = new double[own.length()];
-    for (int k = 0; k < own.count(); k++) {
-      System.arraycopy(
-          c, led.start(own.conductor(k)), above, k * own.perConductor(), own.perConductor());
-    }
-    double[] solved = equations.solve(above, ROUGH);
+    double[] drawn = new double[led.length()];
+    drawAt(c, drawn, fed -> true);
+    double[] solved = equations.solve(summed(drawn), new double[0], ROUGH);
     double[] u = c.clone();
+    int length = led.perConductor();
     for (int k = 0; k < leading.length; k++) {
-      for (int i = 0; i < led.perConductor() && leading[k] >= 0; i++) {
-        u[k * led.perConductor() + i] += solved[leading[k] + i] - above[leading[k] + i];
+      for (int i = 0; i < length; i++) {
+        u[k * length + i] += solved[leading[k] + i];
       }
     }
+    Arrays.fill(drawn, 0);
+    drawAt(u, drawn, FedSlope::isBehind);
+    response.workers().each(feeders.size(), b -> feeders.get(b).fall(drawn, u));
     return u;
+  }
+
+  private double[] summed(double[] drawn) {
+    double[] sums = new double[equations.row().length()];
+    int length = led.perConductor();
+    for (int k = 0; k < leading.length; k++) {
+      for (int i = 0; i < length; i++) {
+        sums[leading[k] + i] += drawn[k * length + i];
+      }
+    }
+    return sums;
+  }
+
+  private void drawAt(double[] potentials, double[] drawn, Predicate<FedSlope> which) {
+    response
+        .workers()
+        .each(
+            byBoard.size(),
+            b -> {
+              for (FedSlope fed : byBoard.get(b)) {
+                if (which.test(fed)) {
+                  fed.seen().answer(potentials, drawn);
+                }
+              }
+            });
   }
 }
