@@ -107,7 +107,9 @@ final class DeviceSlope {
         dropped[row + 1] = ohm * im + x * re;
       }
       multiply(dropped, answer);
-      System.arraycopy(answer, 0, behind.byColumn, column * size, size);
+      for (int row = 0; row < size; row++) {
+        behind.set(row, column, answer[row]);
+      }
     }
     add(behind);
   }
