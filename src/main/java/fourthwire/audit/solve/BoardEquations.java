@@ -3,7 +3,6 @@ package fourthwire.audit.solve;
 import fourthwire.network.Excitation;
 import fourthwire.network.TreeNetwork;
 import fourthwire.network.Trunk;
-import java.util.Arrays;
 import java.util.Collection;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -72,8 +71,7 @@ final class BoardEquations {
                 Collectors.collectingAndThen(
                     Collectors.groupingBy(s -> s.place().node(), TreeMap::new, Collectors.toList()),
                     boardsOf -> List.copyOf(boardsOf.values())));
-    this.inverses =
-        above.isEmpty() && byBoard.size() <= MOST_INVERSES ? inverses() : List.of();
+    this.inverses = above.isEmpty() && byBoard.size() <= MOST_INVERSES ? inverses() : List.of();
     this.upper = above.map(equations -> new UpperBoards(response, equations, leadsOf(leads), row));
   }
 
@@ -108,9 +106,7 @@ final class BoardEquations {
   /** To be called when slopes have changed. */
   void renew() {
     upper.ifPresent(UpperBoards::renew);
-    response
-        .workers()
-        .each(inverses.size(), b -> inverses.get(b).renew(byBoard.get(b)));
+    response.workers().each(inverses.size(), b -> inverses.get(b).renew(byBoard.get(b)));
   }
 
   /**

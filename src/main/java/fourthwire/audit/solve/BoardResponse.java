@@ -46,8 +46,7 @@ final class BoardResponse {
 
   /** Hands over the driving-point impedances of every order, by its position. */
   void eachDrivingPoints(BiConsumer<Integer, DrivingPoints> taker) {
-    workers.each(
-        orders.count(), k -> taker.accept(k, factors[orders.at(k)].drivingPoints()));
+    workers.each(orders.count(), k -> taker.accept(k, factors[orders.at(k)].drivingPoints()));
   }
 
   /** The orders solved last, on the trunk they were solved on. */

@@ -1,8 +1,8 @@
 package fourthwire.audit.solve;
 
 import fourthwire.network.DrivingPoint;
-import fourthwire.quantity.Phasor;
 import fourthwire.network.TreeNetwork;
+import fourthwire.quantity.Phasor;
 import java.util.Arrays;
 import java.util.List;
 import java.util.stream.IntStream;
@@ -86,7 +86,9 @@ final class FeederOhms {
     return starts[conductor];
   }
 
-  /** What a port of these conductors, by their starts in the row, sees of it; both parts by order. */
+  /**
+   * What a port of these conductors, by their starts in the row, sees of it; both parts by order.
+   */
   double[] loop(int line, int back) {
     int a = position(line);
     double[] loop = new double[2 * orders];
