@@ -190,7 +190,7 @@ final class LineOrder {
     for (int line = 0; line < 3; line++) {
       int k = line;
       cosine[k] =
-          PowerRatios.median(
+          Rows.loaded(
               amps.get()[k],
               row -> watts.get()[k][row] / (volts.get()[k][row] * amps.get()[k][row]));
     }

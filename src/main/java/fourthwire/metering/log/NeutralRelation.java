@@ -106,7 +106,7 @@ final class NeutralRelation {
     Optional<double[]> neutral = day.find("N.current_h3_a");
     double share =
         Rows.median(day.rows(), k -> neutral.orElse(rms)[k] / (l[0][k] + l[1][k] + l[2][k]));
-    double own = neutral.map(n -> PowerRatios.median(rms, k -> rms[k] / n[k])).orElse(1.0);
+    double own = neutral.map(n -> Rows.loaded(rms, k -> rms[k] / n[k])).orElse(1.0);
     if (own < 0.8) {
       return Optional.of("N.rms_a is below its own third harmonic.");
     }

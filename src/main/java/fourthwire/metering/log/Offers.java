@@ -16,13 +16,11 @@ import fourthwire.metering.Correction.TurnSign;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.Locale;
 import java.util.Map;
 
 /** Words the corrections that are offered for faults of a log. */
 final class Offers {
   private static final int MOST_NAMED = 6;
-  private static final double NEAR = 0.02;
 
   private final List<String> names;
 
@@ -135,9 +133,9 @@ final class Offers {
 
   /** These columns by the factor that undoes a ratio. */
   static Correction scale(List<String> quantities, double ratio, Rows rows) {
-    double factor = likely(1 / ratio);
+    double factor = LikelyRatio.of(1 / ratio);
     return Correction.of(
-        "Multiply " + shortened(quantities) + " by " + number(factor),
+        "Multiply " + shortened(quantities) + " by " + LikelyRatio.text(factor),
         new Scale(quantities, factor, rows));
   }
 
@@ -216,35 +214,6 @@ final class Offers {
     return moved.size() == 2
         ? "Exchange " + joined(moved)
         : "Take " + joined(moved) + " from the columns of " + joined(from);
-  }
-
-  /** A ratio of instruments or units where one is near: whole numbers, √3, thousands. */
-  static double likely(double factor) {
-    for (double thousands : new double[] {1e-6, 1e-3, 1e3, 1e6}) {
-      if (Math.abs(factor / thousands - 1) < 0.2) {
-        return thousands;
-      }
-    }
-    double up = Math.max(factor, 1 / factor);
-    double size = Math.pow(10, Math.max(0, Math.floor(Math.log10(up))));
-    double whole = Math.rint(up / size) * size;
-    double near =
-        Math.abs(up / whole - 1) < NEAR
-            ? whole
-            : Math.abs(up / Math.sqrt(3) - 1) < NEAR
-                ? Math.sqrt(3)
-                : Double.parseDouble(String.format(Locale.ROOT, "%.3g", up));
-    return factor >= 1 ? near : 1 / near;
-  }
-
-  private static String number(double factor) {
-    return factor == Math.sqrt(3)
-        ? "√3"
-        : factor == 1 / Math.sqrt(3)
-            ? "1/√3"
-            : String.format(Locale.ROOT, "%.4g", factor)
-                .replaceFirst("(\\.\\d*?)0+$", "$1")
-                .replaceFirst("\\.$", "");
   }
 
   static String joined(List<String> words) {

@@ -6,6 +6,9 @@ import java.util.function.IntToDoubleFunction;
 
 /** Medians and shares of the rows of a day. */
 final class Rows {
+  /** Last digits in a current, at least, so that rounding is no ratio. */
+  private static final double FEWEST_DIGITS = 10;
+
   private Rows() {}
 
   /** Median, the upper of two in the middle; NaN without any value. */
@@ -29,6 +32,17 @@ final class Rows {
     double[] x = new double[rows];
     Arrays.setAll(x, figure);
     return medianOf(x);
+  }
+
+  /** Median over rows under load: those of next to no current, or of few digits, have no ratio. */
+  static double loaded(double[] amps, IntToDoubleFunction ratio) {
+    double least = Math.max(0.1 * median(amps), FEWEST_DIGITS * digit(amps));
+    return median(
+        amps.length,
+        k -> {
+          double at = amps[k] > least ? ratio.applyAsDouble(k) : Double.NaN;
+          return Double.isInfinite(at) ? Double.NaN : at;
+        });
   }
 
   /** The smallest step from row to row: a last digit, where values are written in few. */

@@ -53,7 +53,7 @@ final class TotalRatios {
         active ? day.find("total.power_factor") : Optional.<double[]>empty();
     double least = active && factor.isEmpty() ? 0.02 : 0.8;
     double most = active && factor.isEmpty() ? 1.05 : active ? 1.25 : MOST_APPARENT;
-    double median = PowerRatios.median(sum, k -> ratio(day, measure, k));
+    double median = Rows.loaded(sum, k -> ratio(day, measure, k));
     if (median < least || median > most) {
       flag(
           day,
@@ -113,7 +113,7 @@ final class TotalRatios {
     if (!(Math.abs(ratio) > 0)) {
       return List.of();
     }
-    if (PowerRatios.isPrefix(ratio) || !lines) {
+    if (LikelyRatio.isPrefix(ratio) || !lines) {
       return List.of(Offers.scale(List.of("total." + measure), ratio, rows));
     }
     return measure.equals("active_w") ? List.of(Offers.sum(measure, rows)) : List.of();
