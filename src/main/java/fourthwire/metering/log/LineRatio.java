@@ -8,7 +8,12 @@ import java.util.Optional;
  */
 enum LineRatio {
   ACTIVE("Active", ".active_w"),
-  APPARENT("Apparent", ".apparent_va");
+  APPARENT("Apparent", ".apparent_va"),
+
+  /**
+   * Active and reactive power together, where a line that also feeds back has next to no active.
+   */
+  FUNDAMENTAL("Fundamental apparent", ".active_w");
 
   private final String word;
   private final String measure;
@@ -33,14 +38,18 @@ enum LineRatio {
     Optional<double[]> volts = new LineDay(day).volts(line);
     Optional<double[]> amps = day.find(line + ".rms_a");
     Optional<double[]> power = day.find(of(line));
-    if (volts.isEmpty() || amps.isEmpty() || power.isEmpty()) {
+    Optional<double[]> reactive = day.find(line + ".reactive_var");
+    boolean lacking = power.isEmpty() || this == FUNDAMENTAL && reactive.isEmpty();
+    if (volts.isEmpty() || amps.isEmpty() || lacking) {
       return Double.NaN;
     }
     double factor =
         this == ACTIVE
             ? day.find(line + ".power_factor").map(f -> Math.abs(f[row])).orElse(1.0)
             : 1;
-    return Math.abs(power.get()[row]) / (volts.get()[row] * amps.get()[row] * factor);
+    double watts = Math.abs(power.get()[row]);
+    double value = this == FUNDAMENTAL ? Math.hypot(watts, reactive.get()[row]) : watts;
+    return value / (volts.get()[row] * amps.get()[row] * factor);
   }
 
   /** Its median of a day; NaN where it is not logged. */

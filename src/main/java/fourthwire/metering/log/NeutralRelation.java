@@ -19,6 +19,9 @@ final class NeutralRelation {
    */
   private static final double MOST_OF_ROOT = 1.15;
 
+  /** How near a whole number a ratio is to be taken for it. */
+  private static final double WHOLE = 0.15;
+
   private final List<String> neutralCurrents;
   private final FlaggedDays flagged;
 
@@ -64,32 +67,60 @@ final class NeutralRelation {
     }
     Optional<String> thirds = thirds(day, neutral.get(), l);
     if (count.isWrong() || thirds.isPresent()) {
-      flagged.add(
+      flag(
           day,
-          new FlaggedDays.Fault(
-              NEUTRAL_NOT_SUM,
-              "N",
-              "The column mapped as N is not to be trusted.",
-              thirds.orElseGet(() -> sentence(count)),
-              rows -> List.of(Offers.leaveOut(neutralCurrents, rows))));
+          thirds.orElseGet(() -> sentence(count)),
+          rows -> List.of(Offers.leaveOut(neutralCurrents, rows)));
+    } else {
+      NeutralOrders.off(day, neutral.get(), l).ifPresent(ratio -> ofOrders(day, ratio));
     }
   }
 
+  private void flag(LogDay day, String sentence, Offers.Of corrections) {
+    flagged.add(
+        day,
+        new FlaggedDays.Fault(
+            NEUTRAL_NOT_SUM,
+            "N",
+            "The column mapped as N is not to be trusted.",
+            sentence,
+            corrections));
+  }
+
+  private void ofOrders(LogDay day, double ratio) {
+    double up = Math.max(ratio, 1 / ratio);
+    double whole = Math.rint(up);
+    boolean likely = whole >= 2 && Math.abs(up / whole - 1) < WHOLE;
+    flag(
+        day,
+        String.format(
+            Locale.ROOT,
+            "N.rms_a is %.3g times what the orders of the lines add up to (median of the day).",
+            ratio),
+        rows ->
+            likely
+                ? List.of(
+                    Offers.scale(List.of("N.rms_a"), ratio > 1 ? whole : 1 / whole, rows),
+                    Offers.leaveOut(neutralCurrents, rows))
+                : List.of(Offers.leaveOut(neutralCurrents, rows)));
+  }
+
   private static String sentence(Count count) {
-    return count.above + count.below > 0
-        ? String.format(
-            Locale.ROOT,
-            "N.rms_a can't be the sum of the line currents: above all three together in %d of"
-                + " %d rows of the day, below what they must leave in %d.",
-            count.above,
-            count.there,
-            count.below)
-        : String.format(
-            Locale.ROOT,
-            "N.rms_a is more than lines of a third of a cycle apart add up to, in %d of %d rows of"
-                + " the day: it stands above the root of their squares' sum.",
-            count.beyond,
-            count.there);
+    if (count.above + count.below == 0) {
+      return String.format(
+          Locale.ROOT,
+          "N.rms_a is more than lines of a third of a cycle apart add up to, in %d of %d rows of"
+              + " the day: it stands above the root of their squares' sum.",
+          count.beyond,
+          count.there);
+    }
+    boolean above = count.above >= count.below;
+    return String.format(
+        Locale.ROOT,
+        "N.rms_a can't be the sum of the line currents: %s in %d of %d rows of the day.",
+        above ? "above all three together" : "below what they must leave",
+        above ? count.above : count.below,
+        count.there);
   }
 
   /** Third harmonics of the lines add up in the neutral, where they are those of single loads. */

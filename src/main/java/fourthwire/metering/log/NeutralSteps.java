@@ -24,6 +24,7 @@ final class NeutralSteps implements DayCheck {
   private static final double LEAST_FACTOR = 1.8;
   private static final double STEADY = 1.5;
   private static final double OF_LINES = 2;
+  private static final double OF_WANDER = 2;
   private static final double PAIRED = 0.2;
   private static final int MOST_STEPS = 50;
 
@@ -85,7 +86,8 @@ final class NeutralSteps implements DayCheck {
       lines += Math.abs(median(last[line], SIDE) - median(last[line], 0));
     }
     boolean steady = isSteady(0) && isSteady(SIDE);
-    boolean own = Math.abs(after - before) > OF_LINES * lines;
+    double step = Math.abs(after - before);
+    boolean own = step > OF_LINES * lines && step > OF_WANDER * Math.max(range(0), range(SIDE));
     double factor = after / before;
     if (steady && own && Math.max(factor, 1 / factor) >= LEAST_FACTOR) {
       steps.add(new Step(row[SIDE], at[SIDE], factor));
@@ -93,8 +95,21 @@ final class NeutralSteps implements DayCheck {
   }
 
   private boolean isSteady(int from) {
+    double[] side = side(from);
+    return side[SIDE - 1] < STEADY * side[0];
+  }
+
+  /** How far N wanders on a side. */
+  private double range(int from) {
+    double[] side = side(from);
+    return side[SIDE - 1] - side[0];
+  }
+
+  /** N by size. */
+  private double[] side(int from) {
     double[] side = Arrays.copyOfRange(last[0], from, from + SIDE);
-    return Arrays.stream(side).max().orElse(1) < STEADY * Arrays.stream(side).min().orElse(1);
+    Arrays.sort(side);
+    return side;
   }
 
   private static double median(double[] x, int from) {

@@ -8,6 +8,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.function.IntToDoubleFunction;
+import java.util.stream.Stream;
 
 /**
  * Powers against volts times amps, line by line: a ratio or unit that is wrong. Each day is judged
@@ -74,37 +75,39 @@ final class PowerRatios {
               new Off(line, LineRatio.ACTIVE, median, "volts times amps times power factor"))
           : Optional.empty();
     }
-    boolean beyond = median > 1.05 || median < 0.02;
     boolean apparentFits = day.find(LineRatio.APPARENT.of(line)).isPresent();
-    boolean unlikeOthers = !beyond && !apparentFits && isWholeAgainstOthers(day, line);
-    return beyond || unlikeOthers
-        ? Optional.of(
-            new Off(
-                line,
-                LineRatio.ACTIVE,
-                median,
-                "volts times amps" + (unlikeOthers ? ", that of the other lines far more" : "")))
-        : Optional.empty();
+    if (median > 1.05 || median < 0.02) {
+      return Optional.of(new Off(line, LineRatio.ACTIVE, median, "volts times amps"));
+    }
+    return Stream.of(LineRatio.ACTIVE, LineRatio.FUNDAMENTAL)
+        .filter(which -> !apparentFits && isWholeAgainstOthers(day, line, which))
+        .map(
+            which ->
+                new Off(
+                    line,
+                    which,
+                    which.usual(day, line),
+                    "volts times amps, that of the other lines far more"))
+        .findFirst();
   }
 
   /**
    * Where nothing but volts, amps and watts is logged, a line whose watts are a whole fraction of
    * what they are on the other lines, row by row, has another ratio, not another load.
    */
-  private static boolean isWholeAgainstOthers(LogDay day, String line) {
+  private static boolean isWholeAgainstOthers(LogDay day, String line, LineRatio which) {
     double[] amps = day.find(line + ".rms_a").orElseThrow();
     List<String> others = Arrays.stream(LineDay.LINES).filter(o -> !o.equals(line)).toList();
-    double one = LineRatio.ACTIVE.usual(day, others.get(0));
-    double other = LineRatio.ACTIVE.usual(day, others.get(1));
+    double one = which.usual(day, others.get(0));
+    double other = which.usual(day, others.get(1));
     boolean likely = Math.min(one, other) > 0.6 && Math.max(one, other) < 1.05;
     if (!likely || Math.abs(one / other - 1) > 0.12) {
       return false;
     }
     IntToDoubleFunction times =
         row ->
-            (LineRatio.ACTIVE.at(day, others.get(0), row)
-                    + LineRatio.ACTIVE.at(day, others.get(1), row))
-                / (2 * LineRatio.ACTIVE.at(day, line, row));
+            (which.at(day, others.get(0), row) + which.at(day, others.get(1), row))
+                / (2 * which.at(day, line, row));
     double factor = Rows.loaded(amps, times);
     double whole = Math.rint(factor);
     double apart = Rows.loaded(amps, row -> Math.abs(times.applyAsDouble(row) / factor - 1));

@@ -20,8 +20,8 @@ final class RatioOffers {
     if (!(median > 0)) {
       return List.of();
     }
-    double ratio = isActive() ? againstOthers(line, median) : median;
-    return either(amps(line), List.of(which.of(line)), ratio, rows);
+    double ratio = which == LineRatio.APPARENT ? median : againstOthers(line, median);
+    return either(amps(line), powers(line), ratio, rows);
   }
 
   /** The same for all lines at once, N with them where it is the amps. */
@@ -32,7 +32,7 @@ final class RatioOffers {
     List<String> powers = new ArrayList<>();
     List<String> amps = new ArrayList<>();
     for (String line : LineDay.LINES) {
-      powers.add(which.of(line));
+      powers.addAll(powers(line));
       amps.addAll(amps(line));
     }
     day.quantities().stream()
@@ -43,13 +43,19 @@ final class RatioOffers {
 
   private List<Correction> either(
       List<String> amps, List<String> powers, double ratio, Correction.Rows rows) {
-    boolean follows = isActive() && PowerRelations.totalIsSum(day);
+    boolean follows = which != LineRatio.APPARENT && PowerRelations.totalIsSum(day);
     Correction ofPowers = new Offers(day.quantities()).rescale(powers, ratio, follows, rows);
     // Where the apparent power fits volts and amps, the active power alone is wrong.
     boolean alone = isActive() && powers.stream().allMatch(this::hasApparent);
     return alone || LikelyRatio.isPrefix(ratio)
         ? List.of(ofPowers)
         : List.of(Offers.scale(amps, 1 / ratio, rows), ofPowers);
+  }
+
+  private List<String> powers(String line) {
+    return which == LineRatio.FUNDAMENTAL
+        ? List.of(which.of(line), line + ".reactive_var")
+        : List.of(which.of(line));
   }
 
   private boolean isActive() {

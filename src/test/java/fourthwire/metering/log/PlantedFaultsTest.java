@@ -215,6 +215,15 @@ class PlantedFaultsTest {
               b.scale("N.rms_a", p[0], p[1], 0.1);
             }),
         fault(
+            "a neutral by another ratio all along, beside the orders of the lines",
+            QualityFinding.NEUTRAL_NOT_SUM,
+            0,
+            InventedBoard.DAYS * InventedBoard.PER_DAY,
+            (b, p) -> {
+              b.columns.remove("N.current_h3_a");
+              b.scale("N.rms_a", p[0], p[1], 3);
+            }),
+        fault(
             "a distortion smoothed over a day",
             QualityFinding.DISTORTION_MISREAD,
             d,
