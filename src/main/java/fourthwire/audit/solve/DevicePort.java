@@ -52,6 +52,7 @@ final class DevicePort {
   private boolean ownSlope;
   private Optional<JointLoads> joint = Optional.empty();
   private double voltageMovedV;
+  private double[] standing = new double[0];
   private String failure = "";
 
   /**
@@ -217,6 +218,16 @@ final class DevicePort {
     }
   }
 
+  /** From now on it is told how much its voltages differ from those it has. */
+  void standHere() {
+    standing = voltage.clone();
+  }
+
+  /** From now on it is told its voltages. */
+  void standAnywhere() {
+    standing = new double[0];
+  }
+
   /** Takes the voltages of the solved orders. */
   void takeVoltages(OrdersInPlay orders, OrderSolution[] solutions) {
     boolean first = voltage.length == 0;
@@ -226,8 +237,8 @@ final class DevicePort {
     for (int port = 0; port < from.length; port++) {
       for (int k = 0; k < orders.count(); k++) {
         OrderSolution s = solutions[orders.at(k)];
-        double re = voltageRe(port, s);
-        double im = voltageIm(port, s);
+        double re = voltageRe(port, s) + (standing.length == 0 ? 0 : standing[at]);
+        double im = voltageIm(port, s) + (standing.length == 0 ? 0 : standing[at + 1]);
         moved = Math.max(moved, Math.hypot(re - voltage[at], im - voltage[at + 1]));
         voltage[at++] = re;
         voltage[at++] = im;

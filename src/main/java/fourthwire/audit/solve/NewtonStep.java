@@ -35,6 +35,7 @@ final class NewtonStep {
   private final Workers workers;
   private final SlopeBook book;
   private boolean known;
+  private boolean kept;
   private double lastChange = Double.POSITIVE_INFINITY;
 
   NewtonStep(
@@ -71,10 +72,10 @@ final class NewtonStep {
   void renewSlopes(Settling settling, double[] g) {
     double change = settling.change();
     boolean far = settling.usualChange() > FAR;
-    if (known && far) {
+    if (known && far && !kept) {
       book.forget();
     }
-    if (!known || far) {
+    if (!known || far && !kept) {
       book.lend(loads.stream().filter(load -> !load.hasOwnSlope()).toList(), g, workers);
     }
     if (known) {
@@ -82,6 +83,12 @@ final class NewtonStep {
     }
     known = true;
     lastChange = change;
+  }
+
+  /** The loads have slopes already. */
+  void keepSlopes() {
+    known = true;
+    kept = true;
   }
 
   /** The step from x, where the loads answer g. */

@@ -22,6 +22,7 @@ final class Settling {
   private final double[] changes;
   private double worstChange;
   private double worstMove;
+  private double filtersChange;
   private double firstChange;
   private String worst = "";
 
@@ -41,6 +42,7 @@ final class Settling {
   void look(double[] x, double[] g) {
     worstChange = 0;
     worstMove = 0;
+    filtersChange = 0;
     for (int d = 0; d < changes.length; d++) {
       DevicePort load = loads.get(d);
       changes[d] = look(load, x, g);
@@ -48,8 +50,9 @@ final class Settling {
     }
     for (ActiveFilter filter : filters) {
       double change = change(filter.offset(), 2 * filter.ports() * orders.count(), x, g);
-      worstChange = Math.max(worstChange, change);
+      filtersChange = Math.max(filtersChange, change);
     }
+    worstChange = Math.max(worstChange, filtersChange);
     firstChange = Math.max(firstChange, worstChange);
   }
 
@@ -121,6 +124,21 @@ final class Settling {
         .sorted(Comparator.comparingDouble((Integer d) -> changes[d]).reversed())
         .limit(MOST)
         .map(loads::get)
+        .toList();
+  }
+
+  /**
+   * The few loads that have not settled where nearly all others, and all filters, have; none where
+   * they are many.
+   */
+  List<DevicePort> stragglers() {
+    if (filtersChange > CoupledSolver.LOAD_TOLERANCE
+        || usualChange() > CoupledSolver.LOAD_TOLERANCE) {
+      return List.of();
+    }
+    return IntStream.range(0, changes.length)
+        .filter(d -> changes[d] > CoupledSolver.LOAD_TOLERANCE)
+        .mapToObj(loads::get)
         .toList();
   }
 

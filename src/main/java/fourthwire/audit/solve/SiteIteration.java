@@ -233,6 +233,7 @@ final class SiteIteration {
     Settling settling = new Settling(loads, filters, orders);
     NewtonStep newton =
         new NewtonStep(network, state.factors(), orders, loads, filters, omega, book, workers);
+    boolean caughtUp = false;
     for (int pass = 1; pass <= MOST_PASSES; pass++) {
       settling.look(x, g);
       if (few.isPresent()) {
@@ -246,8 +247,16 @@ final class SiteIteration {
         last = g;
         return;
       }
-      newton.renewSlopes(settling, g);
-      advance(x, g, newton.step(x, g));
+      List<DevicePort> behind = few.isPresent() || caughtUp ? List.of() : settling.stragglers();
+      caughtUp = behind.stream().allMatch(l -> l.joint().isEmpty()) && !behind.isEmpty();
+      if (caughtUp) {
+        new Stragglers(network, state, orders, behind, omega, book, workers).catchUp(x, g);
+        solveNetwork(x);
+        refuse(image(x, g));
+      } else {
+        newton.renewSlopes(settling, g);
+        advance(x, g, newton.step(x, g));
+      }
     }
     throw new AuditFailedException(
         "The network and its loads did not settle in %d passes: %s"

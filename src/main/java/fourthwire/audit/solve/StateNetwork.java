@@ -76,12 +76,7 @@ final class StateNetwork {
     int h = orders.at(position);
     Excitation excitation = excitations[h].clear();
     plan.supply().excite(h, excitation);
-    for (DevicePort load : loads) {
-      for (int port = 0; port < load.ports(); port++) {
-        int at = load.offset() + 2 * (port * orders.count() + position);
-        load.draw(excitation, port, x[at], x[at + 1]);
-      }
-    }
+    draw(position, x, loads, excitation);
     for (ActiveFilter filter : filters) {
       filter.feed(excitation, orders, position, x, 0);
     }
@@ -89,6 +84,16 @@ final class StateNetwork {
       factors[h].solve(excitation, solutions[h], part.get());
     } else {
       factors[h].solve(excitation, solutions[h]);
+    }
+  }
+
+  /** Adds to one order, by its position, what loads draw. */
+  void draw(int position, double[] x, List<DevicePort> loads, Excitation excitation) {
+    for (DevicePort load : loads) {
+      for (int port = 0; port < load.ports(); port++) {
+        int at = load.offset() + 2 * (port * orders.count() + position);
+        load.draw(excitation, port, x[at], x[at + 1]);
+      }
     }
   }
 
