@@ -432,6 +432,10 @@ final class DevicePort {
     return ownSlope;
   }
 
+  boolean hasSlope() {
+    return slope.isPresent();
+  }
+
   LoadSlope slope() {
     return slope.orElseThrow();
   }

@@ -14,6 +14,7 @@ final class LoadGroup {
   LoadGroup(PlaceSlope slope, List<DevicePort> members) {
     this.slope = slope;
     this.members = members;
+    members.stream().filter(DevicePort::hasSlope).forEach(load -> load.slope().forgetAdded());
   }
 
   PlaceSlope slope() {

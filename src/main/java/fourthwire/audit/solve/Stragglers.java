@@ -67,7 +67,9 @@ final class Stragglers {
   void catchUp(double[] x, double[] g) {
     double[] start = x.clone();
     double[] drawn = g.clone();
-    newton.keepSlopes();
+    if (loads.stream().allMatch(DevicePort::hasSlope)) {
+      newton.keepSlopes();
+    }
     loads.forEach(DevicePort::standHere);
     boolean done = false;
     settling.look(x, drawn);
@@ -88,6 +90,7 @@ final class Stragglers {
       done = settling.change() <= CoupledSolver.LOAD_TOLERANCE;
     }
     loads.forEach(DevicePort::standAnywhere);
+    loads.forEach(load -> load.slope().forgetAdded());
     if (!done) {
       System.arraycopy(start, 0, x, 0, x.length);
     }
