@@ -62,31 +62,30 @@ final class Stragglers {
    * Lets them catch up, or leaves things as they were where they do not.
    *
    * @param x what all loads were taken to draw at the voltages last solved; receives what these do
-   * @param g what they draw there
+   * @param g what all draw there; receives what these do when solved last
    */
   void catchUp(double[] x, double[] g) {
     double[] start = x.clone();
-    double[] drawn = g.clone();
     if (loads.stream().allMatch(DevicePort::hasSlope)) {
       newton.keepSlopes();
     }
     loads.forEach(DevicePort::standHere);
     boolean done = false;
-    settling.look(x, drawn);
+    settling.look(x, g);
     for (int pass = 1; pass <= MOST_PASSES && !done; pass++) {
-      newton.renewSlopes(settling, drawn);
-      double[] step = newton.step(x, drawn);
+      newton.renewSlopes(settling, g);
+      double[] step = newton.step(x, g);
       for (DevicePort load : loads) {
         for (int i = load.offset(); i < load.offset() + load.length(orders); i++) {
           x[i] += step[i];
         }
       }
       answer(x, start);
-      workers.each(loads.size(), d -> follow(loads.get(d), x, drawn));
+      workers.each(loads.size(), d -> follow(loads.get(d), x, g));
       if (loads.stream().anyMatch(load -> !load.failure().isEmpty())) {
         break;
       }
-      settling.look(x, drawn);
+      settling.look(x, g);
       done = settling.change() <= CoupledSolver.LOAD_TOLERANCE;
     }
     loads.forEach(DevicePort::standAnywhere);
