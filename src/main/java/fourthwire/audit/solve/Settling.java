@@ -4,6 +4,8 @@ import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Locale;
+import java.util.Set;
+import java.util.stream.Collectors;
 import java.util.stream.IntStream;
 
 /** Watches the loads settle: what they draw against what was injected, and how voltages move. */
@@ -128,18 +130,20 @@ final class Settling {
   }
 
   /**
-   * The few loads that have not settled where nearly all others, and all filters, have; none where
-   * they are many.
+   * The few loads that have not settled where nearly all others, and all filters, have, with those
+   * beside them on their boards; none where they are many.
    */
   List<DevicePort> stragglers() {
     if (filtersChange > CoupledSolver.LOAD_TOLERANCE
         || usualChange() > CoupledSolver.LOAD_TOLERANCE) {
       return List.of();
     }
-    return IntStream.range(0, changes.length)
-        .filter(d -> changes[d] > CoupledSolver.LOAD_TOLERANCE)
-        .mapToObj(loads::get)
-        .toList();
+    Set<Integer> boards =
+        IntStream.range(0, changes.length)
+            .filter(d -> changes[d] > CoupledSolver.LOAD_TOLERANCE)
+            .mapToObj(d -> loads.get(d).group().node())
+            .collect(Collectors.toSet());
+    return loads.stream().filter(load -> boards.contains(load.group().node())).toList();
   }
 
   /** What nineteen loads of twenty change at most. */

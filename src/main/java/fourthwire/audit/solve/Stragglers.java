@@ -59,7 +59,7 @@ final class Stragglers {
   }
 
   /**
-   * Lets them catch up, or leaves things as they were where they do not.
+   * Lets them catch up; where they get no nearer, x stays as it was.
    *
    * @param x what all loads were taken to draw at the voltages last solved; receives what these do
    * @param g what all draw there; receives what these do when solved last
@@ -70,9 +70,9 @@ final class Stragglers {
       newton.keepSlopes();
     }
     loads.forEach(DevicePort::standHere);
-    boolean done = false;
     settling.look(x, g);
-    for (int pass = 1; pass <= MOST_PASSES && !done; pass++) {
+    double before = settling.change();
+    for (int pass = 1; pass <= MOST_PASSES && !settled(); pass++) {
       newton.renewSlopes(settling, g);
       double[] step = newton.step(x, g);
       for (DevicePort load : loads) {
@@ -82,17 +82,24 @@ final class Stragglers {
       }
       answer(x, start);
       workers.each(loads.size(), d -> follow(loads.get(d), x, g));
-      if (loads.stream().anyMatch(load -> !load.failure().isEmpty())) {
+      if (failed()) {
         break;
       }
       settling.look(x, g);
-      done = settling.change() <= CoupledSolver.LOAD_TOLERANCE;
     }
     loads.forEach(DevicePort::standAnywhere);
     loads.forEach(load -> load.slope().forgetAdded());
-    if (!done) {
+    if (failed() || settling.change() > before) {
       System.arraycopy(start, 0, x, 0, x.length);
     }
+  }
+
+  private boolean settled() {
+    return settling.change() <= CoupledSolver.LOAD_TOLERANCE;
+  }
+
+  private boolean failed() {
+    return loads.stream().anyMatch(load -> !load.failure().isEmpty());
   }
 
   private void follow(DevicePort load, double[] x, double[] g) {
