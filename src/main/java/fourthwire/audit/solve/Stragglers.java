@@ -48,8 +48,7 @@ final class Stragglers {
     this.workers = workers;
     this.trunk = Trunk.of(network, loads.stream().mapToInt(load -> load.place().node()));
     FactoredOrder[] factors = state.factors();
-    this.newton =
-        new NewtonStep(network, factors, orders, loads, List.of(), omega, book, workers);
+    this.newton = new NewtonStep(network, factors, orders, loads, List.of(), omega, book, workers);
     this.settling = new Settling(loads, List.of(), orders);
     for (int k = 0; k < orders.count(); k++) {
       int h = orders.at(k);
