@@ -195,7 +195,7 @@ final class DevicePort {
 
   /** What has to be known of the current that it draws, in sentences that name the load. */
   List<String> remarks() {
-    return solver.remarks().stream()
+    return joint.map(JointLoads::remarks).orElseGet(solver::remarks).stream()
         .map(said -> device.placement().load().name() + ": " + said)
         .toList();
   }
@@ -349,8 +349,10 @@ final class DevicePort {
     return row;
   }
 
-  void stepEmf(int order, boolean real, double volts) {
-    (real ? emf.re : emf.im)[0][order] += volts;
+  /** Steps one part of the electromotive force, by where it stands in a row. */
+  void stepEmf(OrdersInPlay orders, int column, double volts) {
+    double[][] part = column % 2 == 0 ? emf.re : emf.im;
+    part[column / (2 * orders.count())][orders.at(column / 2 % orders.count())] += volts;
   }
 
   /**

@@ -31,26 +31,48 @@ final class JointLoads implements SharedSource {
   private JointLoads(List<DevicePort> members) {
     this.members = List.copyOf(members);
     List<LoadModel> models = members.stream().map(load -> load.device().model()).toList();
-    this.solver = models.get(0).newJointSolver(models).orElseThrow();
+    this.solver = models.get(0).newJointSolver(models);
   }
 
   /** Those among loads, whose series R-L are set, that have to be solved together. */
   static List<JointLoads> among(List<DevicePort> loads) {
-    Map<PortPlace, List<DevicePort>> byPlace = new LinkedHashMap<>();
+    Map<PortPlace, List<List<DevicePort>>> byPlace = new LinkedHashMap<>();
     for (DevicePort load : loads) {
-      if (load.device().model().shapesOthers()) {
-        byPlace.computeIfAbsent(load.group(), place -> new ArrayList<>()).add(load);
+      if (joins(load, load)) {
+        List<List<DevicePort>> here =
+            byPlace.computeIfAbsent(load.group(), place -> new ArrayList<>());
+        here.stream()
+            .filter(some -> joins(some.get(0), load))
+            .findFirst()
+            .orElseGet(() -> begin(here))
+            .add(load);
       }
     }
     return byPlace.values().stream()
+        .flatMap(List::stream)
         .filter(some -> some.size() > 1)
         .map(JointLoads::new)
         .filter(some -> some.solver.felt(some) > FELT)
         .toList();
   }
 
+  private static boolean joins(DevicePort one, DevicePort other) {
+    return one.device().model().joins(other.device().model());
+  }
+
+  private static List<DevicePort> begin(List<List<DevicePort>> parts) {
+    List<DevicePort> part = new ArrayList<>();
+    parts.add(part);
+    return part;
+  }
+
   List<DevicePort> members() {
     return members;
+  }
+
+  /** What has to be known of the currents, in sentences. */
+  List<String> remarks() {
+    return solver.remarks();
   }
 
   /** Whether a member's slope can't be told without the others. */
@@ -137,7 +159,7 @@ final class JointLoads implements SharedSource {
     List<DeviceSlope> slopes = members.stream().map(load -> new DeviceSlope(size)).toList();
     double volts = DevicePort.SLOPE_STEP * members.get(0).nominalV();
     for (int column = 0; column < size; column++) {
-      double taken = stepped(orders.at(column / 2), column % 2 == 0, volts);
+      double taken = stepped(orders, column, volts);
       for (int m = 0; m < members.size() && taken != 0; m++) {
         double[] after = members.get(m).drawnRow(orders);
         for (int row = 0; row < size; row++) {
@@ -149,11 +171,11 @@ final class JointLoads implements SharedSource {
   }
 
   /** As {@link SlopeFinder} steps one load: forwards, else backwards, else not at all. */
-  private double stepped(int order, boolean real, double step) {
+  private double stepped(OrdersInPlay orders, int column, double step) {
     for (double signed : new double[] {step, -step}) {
-      members.forEach(load -> load.stepEmf(order, real, signed));
+      members.forEach(load -> load.stepEmf(orders, column, signed));
       String failure = solve();
-      members.forEach(load -> load.stepEmf(order, real, -signed));
+      members.forEach(load -> load.stepEmf(orders, column, -signed));
       if (failure.isEmpty()) {
         return signed;
       }

@@ -1,5 +1,7 @@
 package fourthwire.load.model;
 
+import java.util.List;
+
 /**
  * Finds the injected currents of several loads that feel each other through what they share of the
  * network, beyond the orders that the network is solved for.
@@ -25,4 +27,9 @@ public interface JointSolver {
    * @throws NoSteadyStateException as {@link LoadSolver#solve}
    */
   void solve(PortSpectra[] emf, SharedSource source, PortSpectra[] current);
+
+  /** As {@link LoadSolver#remarks}, of all. */
+  default List<String> remarks() {
+    return List.of();
+  }
 }

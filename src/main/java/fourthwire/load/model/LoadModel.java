@@ -2,7 +2,6 @@ package fourthwire.load.model;
 
 import java.util.Arrays;
 import java.util.List;
-import java.util.Optional;
 
 /**
  * Equipment as the network sees it: a linear part that goes into the network's matrix, and a
@@ -35,19 +34,21 @@ public interface LoadModel {
   }
 
   /**
-   * Whether its current breaks the voltage at others beside it so sharply that they are to be
-   * solved together ({@link #newJointSolver}).
+   * Whether this model and another break each other's voltage so sharply that they are to be solved
+   * together ({@link #newJointSolver}) where they stand side by side.
    */
-  default boolean shapesOthers() {
+  default boolean joins(LoadModel other) {
     return false;
   }
 
   /**
-   * A solver for such models side by side, this one among them; empty where there is none for
-   * these.
+   * A solver for models side by side, this one among them.
+   *
+   * @param all each joins this one
+   * @throws UnsupportedOperationException where none joins it
    */
-  default Optional<JointSolver> newJointSolver(List<LoadModel> all) {
-    return Optional.empty();
+  default JointSolver newJointSolver(List<LoadModel> all) {
+    throw new UnsupportedOperationException("nothing joins this model");
   }
 
   /**

@@ -6,7 +6,6 @@ import fourthwire.load.model.LoadSolver;
 import fourthwire.load.rectifier.node.NodeRectifiers;
 import fourthwire.load.rectifier.path.BridgeLoad;
 import java.util.List;
-import java.util.Optional;
 
 /**
  * {@code capacitor-input}: single-phase diode bridge, source R-L, smoothing capacitor and a
@@ -49,20 +48,14 @@ public final class CapacitorInput implements LoadModel {
   }
 
   @Override
-  public boolean shapesOthers() {
-    return load.dcHenry() == 0;
+  public boolean joins(LoadModel other) {
+    return load.dcHenry() == 0 && other instanceof CapacitorInput c && c.load.dcHenry() == 0;
   }
 
   @Override
-  public Optional<JointSolver> newJointSolver(List<LoadModel> all) {
-    List<BridgeLoad> loads =
-        all.stream()
-            .filter(CapacitorInput.class::isInstance)
-            .map(other -> ((CapacitorInput) other).load)
-            .toList();
-    return loads.size() == all.size()
-        ? Optional.of(new NodeRectifiers(loads, frequencyHz))
-        : Optional.empty();
+  public JointSolver newJointSolver(List<LoadModel> all) {
+    List<BridgeLoad> loads = all.stream().map(other -> ((CapacitorInput) other).load).toList();
+    return new NodeRectifiers(loads, frequencyHz);
   }
 
   @Override

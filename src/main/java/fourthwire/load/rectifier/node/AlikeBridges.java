@@ -12,9 +12,14 @@ import java.util.List;
  * units of one design in several sizes. At one node they draw the same per watt exactly, so a row
  * in two parts draws what it does in one.
  */
-final class AlikeBridges implements SharedSource {
+public final class AlikeBridges implements SharedSource {
   /** Figures that differ by less, relative, are the same. */
   private static final double SAME = 1e-9;
+
+  /** By how many e-folds diodes' currents may differ, and by how many ohms, times watts. */
+  private static final double DIODES = 1.5;
+
+  private static final double OHM_WATTS = 20;
 
   private final List<BridgeLoad> loads;
   private final SharedSource source;
@@ -44,21 +49,32 @@ final class AlikeBridges implements SharedSource {
   private boolean alike(int a, int b) {
     BridgeLoad one = loads.get(a);
     BridgeLoad other = loads.get(b);
-    return sameDesign(one, other.parallel(one.powerW() / other.powerW()))
+    return sameDesign(one, other)
         && same(own(a, b, source::ohm), own(b, a, source::ohm), source.ohm(a, a))
         && same(own(a, b, source::henry), own(b, a, source::henry), source.henry(a, a))
         && standAlike(a, b);
   }
 
-  private static boolean sameDesign(BridgeLoad a, BridgeLoad b) {
-    double base = a.lineOhm() + a.dcOhm();
-    double henry = a.lineHenry() + a.dcHenry();
-    return same(a.capacitanceF(), b.capacitanceF(), a.capacitanceF())
-        && same(base, b.lineOhm() + b.dcOhm(), base)
-        && same(henry, b.lineHenry() + b.dcHenry(), henry)
+  /**
+   * Whether two are the same per watt. Their diodes may be of other sizes: that is worth some
+   * hundredths of a volt, as units of one design have the same diode whatever their size.
+   */
+  public static boolean sameDesign(BridgeLoad a, BridgeLoad other) {
+    BridgeLoad b = other.parallel(a.powerW() / other.powerW());
+    return same(a.capacitanceF(), b.capacitanceF())
+        && same(a.leadOhm(), b.leadOhm())
+        && same(a.leadHenry(), b.leadHenry())
+        && same(a.lineOhm(), b.lineOhm())
+        && same(a.lineHenry(), b.lineHenry())
+        && same(a.dcOhm(), b.dcOhm())
+        && same(a.dcHenry(), b.dcHenry())
         && a.diode().emission() == b.diode().emission()
-        && same(a.diode().saturationA(), b.diode().saturationA(), a.diode().saturationA())
-        && same(a.diode().ohm(), b.diode().ohm(), a.diode().ohm());
+        && Math.abs(Math.log(a.diode().saturationA() / b.diode().saturationA())) < DIODES
+        && Math.abs(a.diode().ohm() - b.diode().ohm()) * a.powerW() < OHM_WATTS;
+  }
+
+  private static boolean same(double a, double b) {
+    return same(a, b, a);
   }
 
   /** Part of a matrix: a bridge's port and another's. */
@@ -109,7 +125,7 @@ final class AlikeBridges implements SharedSource {
 
   /** The electromotive force that a group sees. */
   PortSpectra emf(int group, PortSpectra[] emf) {
-    PortSpectra mean = new PortSpectra(1);
+    PortSpectra mean = new PortSpectra(emf[0].ports());
     for (int k : groups.get(group)) {
       add(share(k, groups.get(group)), emf[k], mean);
     }
@@ -125,11 +141,13 @@ final class AlikeBridges implements SharedSource {
   }
 
   private static void add(double factor, PortSpectra part, PortSpectra sum) {
-    for (int h = 1; h <= Spectrum.HIGHEST_ORDER; h++) {
-      sum.re[0][h] += factor * part.re[0][h];
-      sum.im[0][h] += factor * part.im[0][h];
+    for (int port = 0; port < sum.ports(); port++) {
+      for (int h = 1; h <= Spectrum.HIGHEST_ORDER; h++) {
+        sum.re[port][h] += factor * part.re[port][h];
+        sum.im[port][h] += factor * part.im[port][h];
+      }
+      sum.direct[port] += factor * part.direct[port];
     }
-    sum.direct[0] += factor * part.direct[0];
   }
 
   @Override

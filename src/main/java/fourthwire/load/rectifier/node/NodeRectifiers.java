@@ -7,11 +7,9 @@ import fourthwire.load.model.PortSpectra;
 import fourthwire.load.model.SharedSource;
 import fourthwire.load.rectifier.path.BridgeLoad;
 import fourthwire.load.rectifier.path.CycleTable;
-import fourthwire.quantity.Spectrum;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
-import java.util.stream.IntStream;
 
 /**
  * Periodic steady state of single-phase rectifiers side by side, in each of which one pair of
@@ -48,21 +46,7 @@ public final class NodeRectifiers implements JointSolver {
 
   @Override
   public double felt(SharedSource source) {
-    double all = loads.stream().mapToDouble(BridgeLoad::powerW).sum();
-    return IntStream.range(0, loads.size()).mapToDouble(k -> felt(k, all, source)).max().orElse(0);
-  }
-
-  /** The others' size on its own, times what is common to both on all that lies before it. */
-  private double felt(int bridge, double allW, SharedSource source) {
-    BridgeLoad load = loads.get(bridge);
-    double perHenry = 2 * Math.PI * frequencyHz * Spectrum.HIGHEST_ORDER;
-    int other = bridge == 0 ? 1 : 0;
-    double common = Math.hypot(source.ohm(bridge, other), perHenry * source.henry(bridge, other));
-    double whole =
-        Math.hypot(
-            source.ohm(bridge, bridge) + load.lineOhm(),
-            perHenry * (source.henry(bridge, bridge) + load.lineHenry()));
-    return common / whole * (allW / load.powerW() - 1);
+    return Felt.most(loads, source, frequencyHz);
   }
 
   @Override
