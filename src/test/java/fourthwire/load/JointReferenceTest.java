@@ -4,6 +4,7 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
 import fourthwire.load.model.PortSpectra;
+import fourthwire.load.model.SharedSource;
 import fourthwire.load.rectifier.node.NodeRectifiers;
 import fourthwire.quantity.Spectrum;
 import java.util.List;
@@ -36,6 +37,38 @@ class JointReferenceTest {
       assertThat(computed[row].spectrum(0).rms())
           .isCloseTo(simulated.rms(), within(0.001 * simulated.rms()));
     }
+  }
+
+  /** A bridge by itself: two solvers written apart agree better than the simulator with either. */
+  @ParameterizedTest
+  @MethodSource("single")
+  void oneBridgeIsSolvedAsByItsOwnSolver(RectifierReference given) {
+    PortSpectra[] current = {new PortSpectra(1)};
+    SharedSource source =
+        new SharedSource() {
+          @Override
+          public double ohm(int load, int other) {
+            return given.number("Rs_ohm");
+          }
+
+          @Override
+          public double henry(int load, int other) {
+            return given.number("Ls_uH") * 1e-6;
+          }
+        };
+    new NodeRectifiers(List.of(given.load()), given.number("f_Hz"))
+        .solve(new PortSpectra[] {given.emf()}, source, current);
+    Spectrum own = given.computed().spectrum(0);
+    for (int h = 1; h <= Spectrum.HIGHEST_ORDER; h++) {
+      assertThat(current[0].spectrum(0).at(h).minus(own.at(h)).magnitude())
+          .as("order %d", h)
+          .isLessThan(1e-3 * own.magnitude(1));
+    }
+  }
+
+  static Stream<RectifierReference> single() {
+    return RectifierReference.all().stream()
+        .filter(c -> !c.threePhase() && c.number("L_dc_uH") == 0);
   }
 
   /** Equal units draw the same whatever rows they stand in: exact by symmetry. */

@@ -9,6 +9,8 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
+import java.util.stream.IntStream;
 
 /**
  * Loads at one connection that shape each other's pulses beyond the orders the network knows: they
@@ -21,6 +23,9 @@ final class JointLoads implements SharedSource {
    * their currents would be in error by some tenths of a percent at single orders.
    */
   private static final double FELT = 1;
+
+  /** What has no more than this of its impedance in common with others is not felt by them. */
+  private static final double LITTLE = 0.2;
 
   /** And from so much on one's slope can't be told without the others. */
   private static final double STRONG = 5;
@@ -50,10 +55,32 @@ final class JointLoads implements SharedSource {
     }
     return byPlace.values().stream()
         .flatMap(List::stream)
-        .filter(some -> some.size() > 1)
-        .map(JointLoads::new)
-        .filter(some -> some.solver.felt(some) > FELT)
+        .flatMap(some -> closeAmong(some).stream())
         .toList();
+  }
+
+  /** Those of loads that could be solved together that have to be. */
+  private static Optional<JointLoads> closeAmong(List<DevicePort> loads) {
+    if (loads.size() < 2) {
+      return Optional.empty();
+    }
+    JointLoads all = new JointLoads(loads);
+    List<DevicePort> close =
+        IntStream.range(0, loads.size())
+            .filter(k -> all.solver.felt(k, all) > FELT || all.solver.common(k, all) > LITTLE)
+            .mapToObj(loads::get)
+            .toList();
+    if (close.size() < loads.size()) {
+      return closeAmong(close);
+    }
+    return all.felt() > FELT ? Optional.of(all) : Optional.empty();
+  }
+
+  private double felt() {
+    return IntStream.range(0, members.size())
+        .mapToDouble(k -> solver.felt(k, this))
+        .max()
+        .orElse(0);
   }
 
   private static boolean joins(DevicePort one, DevicePort other) {
@@ -77,7 +104,7 @@ final class JointLoads implements SharedSource {
 
   /** Whether a member's slope can't be told without the others. */
   boolean isStrong() {
-    return solver.felt(this) > STRONG;
+    return felt() > STRONG;
   }
 
   @Override

@@ -12,11 +12,17 @@ import java.util.List;
  */
 public interface JointSolver {
   /**
-   * How much the loads feel each other: what part of a load's current others beside it make, just
-   * above the orders that networks are solved for, by the one that is the worst off. Well under 1
-   * each may be solved for itself, behind its own port.
+   * How much one of the loads feels the others: what part of its current they make, just above the
+   * orders that networks are solved for. Well under 1 it may be solved for itself, behind its own
+   * port.
    */
-  double felt(SharedSource source);
+  double felt(int load, SharedSource source);
+
+  /**
+   * How much of the impedance before a load is common to all: where it is little the others hardly
+   * feel that load.
+   */
+  double common(int load, SharedSource source);
 
   /**
    * Solves the periodic steady state of the loads behind what they share of the network.

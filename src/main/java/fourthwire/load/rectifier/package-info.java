@@ -4,7 +4,8 @@
  * <p>Doors: {@link fourthwire.load.rectifier.CapacitorInput}, {@link
  * fourthwire.load.rectifier.SixPulse} and {@link fourthwire.load.rectifier.TwelvePulse}, made from
  * a {@link fourthwire.load.rectifier.path.BridgeLoad}. Below: {@code path}, one path of current at
- * a time through a bridge; {@code loop}, several that share a current. May use {@code quantity} and
+ * a time through a bridge; {@code loop}, several that share a current; {@code node}, several
+ * bridges side by side. May use {@code quantity} and
  * {@code load.model}.
  *
  * <p>Sources: the circuit equations stand at each class. Steps are RODAS3's and, where one path is

@@ -9,8 +9,8 @@ import java.util.List;
 
 /**
  * Bridges that are the same per watt, each group taken as one: equal units in several rows, or
- * units of one design in several sizes. At one node they draw the same per watt exactly, so a row
- * in two parts draws what it does in one.
+ * units of one design in several sizes. At one node they draw the same per watt, so a row in two
+ * parts draws exactly what it does in one.
  */
 public final class AlikeBridges implements SharedSource {
   /** Figures that differ by less, relative, are the same. */
@@ -56,8 +56,8 @@ public final class AlikeBridges implements SharedSource {
   }
 
   /**
-   * Whether two are the same per watt. Their diodes may be of other sizes: that is worth some
-   * hundredths of a volt, as units of one design have the same diode whatever their size.
+   * Whether two are the same per watt. Their diodes may differ by so much as is worth
+   * under a tenth of a volt, as units of one design have the same diode whatever their size.
    */
   public static boolean sameDesign(BridgeLoad a, BridgeLoad other) {
     BridgeLoad b = other.parallel(a.powerW() / other.powerW());

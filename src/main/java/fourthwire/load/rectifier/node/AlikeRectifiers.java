@@ -33,9 +33,14 @@ public final class AlikeRectifiers implements JointSolver {
 
   /** Nothing where what lies before them is not the same per watt. */
   @Override
-  public double felt(SharedSource source) {
+  public double felt(int load, SharedSource source) {
     boolean one = new AlikeBridges(loads, source).count() == 1;
-    return one ? Felt.most(loads, source, frequencyHz) : 0;
+    return one ? Felt.by(load, loads, source, frequencyHz) : 0;
+  }
+
+  @Override
+  public double common(int load, SharedSource source) {
+    return Felt.common(load, loads, source, frequencyHz);
   }
 
   @Override

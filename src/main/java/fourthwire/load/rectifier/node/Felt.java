@@ -4,30 +4,32 @@ import fourthwire.load.model.SharedSource;
 import fourthwire.load.rectifier.path.BridgeLoad;
 import fourthwire.quantity.Spectrum;
 import java.util.List;
-import java.util.stream.IntStream;
 
 /** How much rectifiers side by side feel each other ({@code JointSolver}). */
 final class Felt {
   private Felt() {}
 
-  /** By the one that feels the others most. */
-  static double most(List<BridgeLoad> loads, SharedSource source, double frequencyHz) {
-    double perHenry = 2 * Math.PI * frequencyHz * Spectrum.HIGHEST_ORDER;
+  /** What others make of one's current: their size on its own, times what is common. */
+  static double by(int bridge, List<BridgeLoad> loads, SharedSource source, double frequencyHz) {
     double all = loads.stream().mapToDouble(BridgeLoad::powerW).sum();
-    return IntStream.range(0, loads.size())
-        .mapToDouble(k -> share(loads.get(k), k, source, perHenry) * (all / loads.get(k).powerW() - 1))
-        .max()
-        .orElse(0);
+    return common(bridge, loads, source, frequencyHz) * (all / loads.get(bridge).powerW() - 1);
   }
 
   /** What is common to others on all that lies before one. */
-  private static double share(BridgeLoad load, int at, SharedSource source, double perHenry) {
-    int other = at == 0 ? 1 : 0;
-    double common = Math.hypot(source.ohm(at, other), perHenry * source.henry(at, other));
+  static double common(
+      int bridge, List<BridgeLoad> loads, SharedSource source, double frequencyHz) {
+    BridgeLoad load = loads.get(bridge);
+    double perHenry = 2 * Math.PI * frequencyHz * Spectrum.HIGHEST_ORDER;
+    int other = bridge == 0 ? 1 : 0;
+    double common = Math.hypot(source.ohm(bridge, other), perHenry * source.henry(bridge, other));
     double whole =
         Math.hypot(
-            source.ohm(at, at) + load.leadOhm() + load.lineOhm(),
-            perHenry * (source.henry(at, at) + load.leadHenry() + load.lineHenry()));
+            source.ohm(bridge, bridge) + load.leadOhm() + load.lineOhm(),
+            perHenry
+                * (source.henry(bridge, bridge)
+                    + load.leadHenry()
+                    + load.lineHenry()
+                    + load.dcHenry() / 2));
     return common / whole;
   }
 }

@@ -13,7 +13,7 @@ import java.util.List;
 /**
  * Single-phase bridges on one node followed through time, whichever of them conduct: each starts
  * where what the others leave of the source passes its capacitor's voltage and its diodes'
- * threshold, and ends where its current rises through the threshold. Every change is found as an
+ * threshold, and ends where its current falls through the threshold. Every change is found as an
  * event. Workspace, not thread-safe.
  */
 final class NodeBridges {

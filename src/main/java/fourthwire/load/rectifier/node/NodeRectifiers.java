@@ -45,8 +45,13 @@ public final class NodeRectifiers implements JointSolver {
   }
 
   @Override
-  public double felt(SharedSource source) {
-    return Felt.most(loads, source, frequencyHz);
+  public double felt(int load, SharedSource source) {
+    return Felt.by(load, loads, source, frequencyHz);
+  }
+
+  @Override
+  public double common(int load, SharedSource source) {
+    return Felt.common(load, loads, source, frequencyHz);
   }
 
   @Override

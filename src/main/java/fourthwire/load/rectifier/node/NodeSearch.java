@@ -26,6 +26,8 @@ final class NodeSearch {
   /** Of the crest: what a capacitor is taken to hold where nothing is known. */
   private static final double FIRST_GUESS = 0.93;
 
+  private static final int[] SECTIONS = {0, 21, 43};
+
   private static final int TURNS_TO_COME_NEAR = 4;
   private static final int MOST_TURNS = 30;
   private static final int MOST_REPETITIONS = 300;
@@ -70,7 +72,7 @@ final class NodeSearch {
    * @param power of each load, watts
    */
   boolean find(double from, boolean mirrored, double peak, double[] power) {
-    section = from;
+    section = known ? section : from;
     for (int k = 0; k < all; k++) {
       scale[k] = peak;
       scale[all + k] = power[k] / peak;
@@ -96,15 +98,27 @@ final class NodeSearch {
     return emptied;
   }
 
+  /** At one section after the other, as some bridge may just start or end at one. */
   private boolean comeNear() {
+    double first = section;
+    for (int shift : SECTIONS) {
+      section = (first + shift) % CycleTable.CELLS;
+      if (nearAndNewton()) {
+        return true;
+      }
+    }
+    return repeat(1);
+  }
+
+  private boolean nearAndNewton() {
     start(FIRST_GUESS);
     for (int n = 0; n < TURNS_TO_COME_NEAR; n++) {
       if (!follow(false)) {
-        return repeat(1);
+        return false;
       }
       accept();
     }
-    return newton(1) || repeat(1);
+    return newton(1);
   }
 
   private void start(double share) {

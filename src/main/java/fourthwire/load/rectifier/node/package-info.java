@@ -1,8 +1,9 @@
 /**
- * Single-phase rectifiers side by side on one node, followed through time together: each shapes the
+ * Rectifiers side by side on one node, followed through time together: each shapes the
  * voltage that the others draw from.
  *
- * <p>Door: {@link fourthwire.load.rectifier.node.NodeRectifiers}. May use {@code quantity}, {@code
+ * <p>Doors: {@link fourthwire.load.rectifier.node.NodeRectifiers} for single-phase ones of any
+ * kinds, {@link fourthwire.load.rectifier.node.AlikeRectifiers} for others of one design. May use {@code quantity}, {@code
  * load.model}, {@code load.rectifier.path} and the small matrices of {@code load.rectifier.loop}.
  *
  * <p>Sources: the circuit's own equations; steps are RODAS3's (Sandu et al., Atmospheric
