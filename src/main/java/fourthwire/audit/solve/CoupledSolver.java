@@ -14,13 +14,13 @@ import java.util.Optional;
  *
  * <p>The unknown x is what the loads draw. The network answers it with voltages in linear time (see
  * {@code fourthwire.network}); each load, solved behind the series R-L that the network shows it
- * ({@link SeriesEstimate}), answers those with its current again: g(x). Rectifiers at one connection
- * that shape each other's pulses beyond the orders of the network answer together ({@link
- * JointLoads}). Newton's method leads to x
- * = g(x) ({@link NewtonStep}); slopes are worked out for a few loads, lent to those alike ({@link
- * SlopeBook}) and corrected by what each load's own solutions show ({@link LoadSlope}). So a
- * resonance, a soft generator or a shared riser costs a few more passes, no more, and no matrix
- * over the site is ever formed. A load whose slope says that it hardly moves is not solved again.
+ * ({@link SeriesEstimate}), answers those with its current again: g(x). Rectifiers at one
+ * connection that shape each other's pulses beyond the orders of the network answer together
+ * ({@link JointLoads}). Newton's method leads to x = g(x) ({@link NewtonStep}); slopes are worked
+ * out for a few loads, lent to those alike ({@link SlopeBook}) and corrected by what each load's
+ * own solutions show ({@link LoadSlope}). So a resonance, a soft generator or a shared riser costs
+ * a few more passes, no more, and no matrix over the site is ever formed. A load whose slope says
+ * that it hardly moves is not solved again.
  *
  * <p>Converged means: every load's current at the final voltages equals what was injected within
  * {@value #LOAD_TOLERANCE} of its rms, no load's voltage moved by more than {@value

@@ -11,8 +11,8 @@ import java.util.List;
 
 /**
  * The series R-L that each load sees of the network: what it is solved behind. It only shapes the
- * way of the iteration to its end (and what little of a current lies above order 50, where loads are not
- * solved together, {@link JointLoads}).
+ * way of the iteration to its end (and what little of a current lies above order 50, where loads
+ * are not solved together, {@link JointLoads}).
  *
  * <p>Together: every load injects a current in proportion to its size, in step with its own
  * voltage; what voltage that makes at a load, over its own current, is the impedance that acts on

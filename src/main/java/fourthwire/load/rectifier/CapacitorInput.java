@@ -26,8 +26,8 @@ import java.util.List;
  * one that repeats after the whole cycle, with even orders, is then found, or it is said that none
  * settles.
  *
- * <p>Beside others at one connection it is followed together with them where they shape each other's
- * pulses ({@link NodeRectifiers}).
+ * <p>Beside others at one connection it is followed together with them where they shape each
+ * other's pulses ({@link NodeRectifiers}).
  *
  * <p>Assumed: constant power at every instant, an ideal capacitor (its loss resistance counts in
  * the diode's), a linear choke, no drift of an inrush limiter. Valid from stiff to soft sources, in

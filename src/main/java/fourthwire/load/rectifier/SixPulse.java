@@ -15,10 +15,10 @@ import fourthwire.load.rectifier.path.BridgeLoad;
  *
  * <p>Assumed: constant power on the direct-current side, linear chokes. Overlap of four lines (a
  * short-circuited drive) is outside its validity; so are unlike drives without chokes at one soft
- * connection, beyond the orders that the network is solved for. A capacitor so small that the state would not
- * hold at constant power is given with a remark (stable where R·C·v² > L·P, about). Checked against
- * circuit-simulator results with the same diodes (test resources {@code load/rectifiers}); expected
- * error 0.4 % of the fundamental at each order to 39.
+ * connection, beyond the orders that the network is solved for. A capacitor so small that the state
+ * would not hold at constant power is given with a remark (stable where R·C·v² > L·P, about).
+ * Checked against circuit-simulator results with the same diodes (test resources {@code
+ * load/rectifiers}); expected error 0.4 % of the fundamental at each order to 39.
  */
 public final class SixPulse extends ThreeLineRectifier {
   /** All units of a row together. */

@@ -5,8 +5,7 @@
  * fourthwire.load.rectifier.SixPulse} and {@link fourthwire.load.rectifier.TwelvePulse}, made from
  * a {@link fourthwire.load.rectifier.path.BridgeLoad}. Below: {@code path}, one path of current at
  * a time through a bridge; {@code loop}, several that share a current; {@code node}, several
- * bridges side by side. May use {@code quantity} and
- * {@code load.model}.
+ * bridges side by side. May use {@code quantity} and {@code load.model}.
  *
  * <p>Sources: the circuit equations stand at each class. Steps are RODAS3's and, where one path is
  * not stiff, GRK4T's; the periodic state is Newton's method's, on the state at a section of the

@@ -56,8 +56,8 @@ public final class AlikeBridges implements SharedSource {
   }
 
   /**
-   * Whether two are the same per watt. Their diodes may differ by so much as is worth
-   * under a tenth of a volt, as units of one design have the same diode whatever their size.
+   * Whether two are the same per watt. Their diodes may differ by so much as is worth under a tenth
+   * of a volt, as units of one design have the same diode whatever their size.
    */
   public static boolean sameDesign(BridgeLoad a, BridgeLoad other) {
     BridgeLoad b = other.parallel(a.powerW() / other.powerW());
