@@ -7,8 +7,8 @@ import java.util.Locale;
 
 /**
  * Waveforms over the whole record: each conductor's lowest and highest sample of every short
- * stretch, the room between them filled. A record of a few cycles shows its curves, a long one the
- * bands they run in.
+ * stretch. A record of a few cycles shows its curves, a long one the outlines of the bands they run
+ * in.
  */
 public final class EnvelopePlot {
   private static final double HEIGHT_PX = 208;
@@ -50,8 +50,8 @@ public final class EnvelopePlot {
     boolean curves = stretches * stepS < CURVES_BELOW_S;
     for (Trace t : traces) {
       String classes = "trace " + t.conductor().name().toLowerCase(Locale.ROOT);
-      String path = curves ? curve(t.values(), ticks.end()) : band(t.values(), ticks.end());
-      svg.add("path", "class", curves ? classes : classes + " band", "d", path);
+      String path = curves ? curve(t.values(), ticks.end()) : outline(t.values(), ticks.end());
+      svg.add("path", "class", classes, "d", path);
     }
     return svg.close().done();
   }
@@ -103,22 +103,23 @@ public final class EnvelopePlot {
     return d.toString();
   }
 
-  /** Along the highest and back along the lowest. */
-  private static String band(WaveformPicture.Trace trace, double end) {
+  /** Along the highest, and along the lowest. */
+  private static String outline(WaveformPicture.Trace trace, double end) {
     int n = trace.lowest().size();
     StringBuilder d = new StringBuilder("M");
     for (int k = 0; k < n; k++) {
       point(d, k, n, trace.highest().get(k), end);
     }
-    for (int k = n - 1; k >= 0; k--) {
+    for (int k = 0; k < n; k++) {
+      d.append(k == 0 ? "M" : "");
       point(d, k, n, trace.lowest().get(k), end);
     }
-    return d.append('Z').toString();
+    return d.toString();
   }
 
   private static void point(StringBuilder d, int k, int n, double value, double end) {
     double x = UNITS_WIDE * (k + 0.5) / n;
-    d.append(d.length() == 1 ? "" : "L").append(Svg.rounded(x, 1));
+    d.append(d.charAt(d.length() - 1) == 'M' ? "" : "L").append(Svg.rounded(x, 1));
     d.append(' ').append(Svg.rounded(y(value, end), 1));
   }
 

@@ -6,6 +6,7 @@ import fourthwire.web.support.Reasons;
 import fourthwire.web.support.Words;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.OptionalInt;
 
 /** Puts figures together as a table, row by row, and aligns its columns at the end. */
 public final class Grids {
@@ -14,6 +15,7 @@ public final class Grids {
   private final List<String> heads;
   private final List<String> names = new ArrayList<>();
   private final List<List<Figure>> rows = new ArrayList<>();
+  private final List<List<OptionalInt>> decimals = new ArrayList<>();
 
   /** An empty table with this caption and these column heads, the first over the names. */
   public Grids(Words words, String title, List<String> heads) {
@@ -24,8 +26,14 @@ public final class Grids {
 
   /** Adds a row; an unknown figure without a reason leaves its cell empty. */
   public Grids row(String name, List<Figure> figures) {
+    return row(name, figures, figures.stream().map(f -> OptionalInt.empty()).toList());
+  }
+
+  /** Adds a row of figures with so many decimals, or as many as always. */
+  public Grids row(String name, List<Figure> figures, List<OptionalInt> fixed) {
     names.add(name);
     rows.add(figures);
+    decimals.add(fixed);
     return this;
   }
 
@@ -40,7 +48,11 @@ public final class Grids {
     List<List<Column.Cell>> columns = new ArrayList<>();
     for (int c = 0; c < heads.size() - 1; c++) {
       int column = c;
-      columns.add(Column.of(rows.stream().map(r -> r.get(column)).toList(), reasons));
+      columns.add(
+          Column.of(
+              rows.stream().map(r -> r.get(column)).toList(),
+              decimals.stream().map(d -> d.get(column)).toList(),
+              reasons));
     }
     List<NodePage.GridRow> out = new ArrayList<>();
     for (int r = 0; r < names.size(); r++) {

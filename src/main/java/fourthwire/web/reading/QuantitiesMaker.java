@@ -6,13 +6,16 @@ import fourthwire.metering.correction.CorrectionRepository;
 import fourthwire.quantity.Figure;
 import fourthwire.web.panel.Grids;
 import fourthwire.web.panel.NodePage;
+import fourthwire.web.reading.series.Digits;
 import fourthwire.web.reading.series.QuantityWords;
 import fourthwire.web.support.Names;
 import fourthwire.web.support.Numbers;
 import fourthwire.web.support.Words;
 import java.util.ArrayList;
+import java.util.Collections;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalInt;
 
 /** Words the statistics of a log's quantities. */
 final class QuantitiesMaker {
@@ -58,19 +61,30 @@ final class QuantitiesMaker {
     log.quantities()
         .forEach(
             (name, q) -> {
-              grid.row(called.of(name), figures(Optional.of(q)));
+              grid.row(called.of(name), figures(Optional.of(q)), decimals(q));
               codes.add(name);
               cleaned
                   .map(c -> Optional.ofNullable(c.log().quantities().get(name)))
                   .filter(c -> !c.equals(Optional.of(q)))
                   .ifPresent(
                       c -> {
-                        grid.row(words.of("reading.corrected", called.of(name)), figures(c));
+                        grid.row(
+                            words.of("reading.corrected", called.of(name)),
+                            figures(c),
+                            decimals(c.orElse(q)));
                         codes.add("");
                       });
             });
     NodePage.Grid done = grid.done();
     return new ReadingPage.Quantities(done, codes);
+  }
+
+  /** As many as tell figures apart that lie close together; of the count none. */
+  private static List<OptionalInt> decimals(QuantitySummary q) {
+    OptionalInt decimals = Digits.of(q.min(), q.max()).decimals();
+    List<OptionalInt> row = new ArrayList<>(Collections.nCopies(6, decimals));
+    row.set(0, OptionalInt.empty());
+    return row;
   }
 
   private List<Figure> figures(Optional<QuantitySummary> summary) {

@@ -3,6 +3,8 @@ package fourthwire.web.support;
 import fourthwire.quantity.Figure;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.OptionalDouble;
+import java.util.OptionalInt;
 
 /**
  * A column of figures: padded so that, set to the right with figures of one width, the decimal
@@ -26,10 +28,27 @@ public final class Column {
     return of(figures, "", reasons);
   }
 
+  /** The cells of a column, each with so many decimals or, where none are given, as always. */
+  public static List<Cell> of(List<Figure> figures, List<OptionalInt> decimals, Reasons reasons) {
+    List<String> texts = new ArrayList<>();
+    for (int i = 0; i < figures.size(); i++) {
+      OptionalDouble value = figures.get(i).value();
+      texts.add(
+          value.isPresent() && decimals.get(i).isPresent()
+              ? Numbers.withDecimals(value.getAsDouble(), decimals.get(i).getAsInt())
+              : text(figures.get(i)));
+    }
+    return of(figures, texts, "", reasons);
+  }
+
   /** The cells of a column with their unit beside each number. */
   public static List<Cell> of(List<Figure> figures, String unit, Reasons reasons) {
     String tail = unit.isEmpty() ? "" : Numbers.THIN_SPACE + unit;
-    List<String> texts = figures.stream().map(Column::text).toList();
+    return of(figures, figures.stream().map(Column::text).toList(), tail, reasons);
+  }
+
+  private static List<Cell> of(
+      List<Figure> figures, List<String> texts, String tail, Reasons reasons) {
     int decimals = texts.stream().mapToInt(Column::decimals).max().orElse(0);
     List<Cell> cells = new ArrayList<>();
     for (int i = 0; i < texts.size(); i++) {

@@ -7,6 +7,7 @@ import java.util.List;
  *
  * @param meter where it was taken, in words
  * @param asked what is open beside the columns
+ * @param noneKnown whether no column's heading says what it holds
  * @param groups the columns by how sure their meaning is
  * @param kinds of columns, each of several, for which one choice can be made
  * @param rows when the first rows are, as written and as understood
@@ -17,6 +18,7 @@ record MappingPage(
     List<String> headings,
     TimeFields time,
     List<String> asked,
+    boolean noneKnown,
     List<Group> groups,
     List<Kind> kinds,
     List<When> rows,

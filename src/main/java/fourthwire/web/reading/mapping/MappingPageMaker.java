@@ -32,6 +32,9 @@ class MappingPageMaker {
       DateTimeFormatter.ofPattern("EEEE d MMMM uuuu, HH:mm:ss", Locale.ENGLISH);
   private static final List<String> DEGREES = List.of("asked", "likely", "sure", "unread");
 
+  /** The question that is open where no column is known at all. */
+  private static final String ANY_COLUMN = "columns";
+
   private final Words words;
 
   MappingPageMaker(Words words) {
@@ -46,10 +49,11 @@ class MappingPageMaker {
         p.headings(),
         time(p.time()),
         p.questions().stream()
-            .filter(q -> !isOfAColumn(q.part(), p))
+            .filter(q -> !q.part().equals(ANY_COLUMN) && !isOfAColumn(q.part(), p))
             .map(q -> sentence(q.message()))
             .distinct()
             .toList(),
+        p.questions().stream().anyMatch(q -> q.part().equals(ANY_COLUMN)),
         groups(p),
         kinds(p),
         p.rows().stream().map(r -> when(r, p.time().mapped())).toList(),

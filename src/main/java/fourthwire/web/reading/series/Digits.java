@@ -7,11 +7,11 @@ import java.util.OptionalInt;
  * How figures of one quantity are written: three significant digits; where they lie far from zero
  * and close together, so many decimals that they can be told apart.
  */
-record Digits(OptionalInt decimals) {
+public record Digits(OptionalInt decimals) {
   private static final int MOST = 3;
 
   /** For figures from one to another. */
-  static Digits of(double low, double high) {
+  public static Digits of(double low, double high) {
     boolean nearZero = low <= 0 || low < high / 2 || !(high > low);
     return new Digits(nearZero ? OptionalInt.empty() : OptionalInt.of(decimals(high - low)));
   }

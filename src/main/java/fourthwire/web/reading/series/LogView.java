@@ -10,7 +10,9 @@ import fourthwire.web.support.Names;
 import fourthwire.web.support.Words;
 import java.util.List;
 import java.util.Locale;
+import java.util.Map;
 import java.util.Optional;
+import java.util.stream.Collectors;
 
 /** What the pages of a log share: the rows and part shown, its limits, its names and words. */
 final class LogView {
@@ -97,6 +99,25 @@ final class LogView {
         asRead.isPresent(),
         asRead.isEmpty() || log.isCorrected() ? "" : AS_READ,
         span.ways());
+  }
+
+  /** That a measure's limits always held, in words; and which of its places have none. */
+  String alwaysWithin(Measure measure) {
+    Map<Boolean, List<String>> places =
+        measure.quantities().stream()
+            .collect(
+                Collectors.partitioningBy(
+                    q -> limits.of(q).isEmpty(),
+                    Collectors.mapping(this::place, Collectors.toList())));
+    String label = measure.label(words);
+    List<String> free = places.getOrDefault(true, List.of());
+    return free.isEmpty()
+        ? words.of("series.verdict.inside", label)
+        : words.of(
+            "series.verdict.inside.some",
+            label,
+            String.join(", ", places.getOrDefault(false, List.of())),
+            String.join(", ", free));
   }
 
   /** Where a quantity is measured, as the site's people call it. */

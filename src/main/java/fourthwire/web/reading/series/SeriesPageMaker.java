@@ -107,7 +107,7 @@ final class SeriesPageMaker {
       }
     }
     if (worst < 0 || most == 0) {
-      return worst < 0 ? "" : words.of("series.verdict.inside", values.measure().label(words));
+      return worst < 0 ? "" : view.alwaysWithin(values.measure());
     }
     List<SeriesPlot.Bound> bounds = bounds(values, worst);
     String place = view.place(quantity(values, worst));

@@ -76,7 +76,7 @@ final class SpreadPageMaker {
       }
     }
     if (worst < 0 || most == 0) {
-      return worst < 0 ? "" : words.of("series.verdict.inside", measure.label(words));
+      return worst < 0 ? "" : view.alwaysWithin(measure);
     }
     String quantity = measure.quantities().get(worst);
     List<LogLimits.Limit> of = limits.of(quantity);
