@@ -170,9 +170,16 @@ final class ReadingShapes {
 
   private static Schema<?> time() {
     return Shape.of("How a row's time is written")
-        .optional("columns", Shape.listOf("Headers of the time", Shape.text("A header")))
+        .optional(
+            "columns",
+            Shape.listOf(
+                "One, date and time, or year, month, day, hour, minute and second",
+                Shape.text("A header")))
         .optional("format", Shape.text("For example yyyy-MM-dd HH:mm:ss"))
-        .optional("zone", Shape.text("Time zone; left out: the site's"))
+        .optional(
+            "zone",
+            Shape.text(
+                "Time zone, or an offset as +01:00 that the clock keeps; left out: the site's"))
         .optional("stamp", Shape.text("start or end: which instant of its interval a row names"))
         .optional("interval_s", Shape.number("Seconds from row to row"))
         .schema();

@@ -17,14 +17,14 @@ final class NeutralOrders {
   private static final int FEWEST_ORDERS = 3;
   private static final int MOST_ROWS = 200;
   private static final double UNDER_LOAD = 0.3;
-  private static final double ABOVE = 1.3;
+  private static final double ABOVE = 1.1;
   private static final double BELOW = 0.75;
   private static final double NEARLY_ALL = 0.8;
 
   /** Thirds of single loads stand in step in the neutral, but for so much. */
   private static final double IN_STEP = 0.75;
 
-  private static final double LARGE_THIRDS = 0.2;
+  private static final double LARGE_THIRDS = 0.15;
   private static final double STEADY = 0.15;
 
   /** Where powers do not tell it: loads of one board differ by no more, as a rule. */
@@ -171,11 +171,12 @@ final class NeutralOrders {
     return Math.hypot(x, y);
   }
 
+  /** NaN where it feeds back or its clamp is the wrong way round: nothing is told then. */
   private double cosine(int line, double first, int row) {
     if (watts.get(line).isEmpty() || volts.get(line).isEmpty()) {
       return UNKNOWN_COSINE;
     }
     double share = watts.get(line).get()[row] / (volts.get(line).get()[row] * first);
-    return Double.isNaN(share) ? UNKNOWN_COSINE : Math.max(-1, Math.min(1, share));
+    return Double.isNaN(share) ? UNKNOWN_COSINE : share < 0 ? Double.NaN : Math.min(1, share);
   }
 }

@@ -26,6 +26,7 @@ final class NeutralSteps implements DayCheck {
   private static final double OF_LINES = 2;
   private static final double OF_WANDER = 2;
   private static final double PAIRED = 0.2;
+  private static final int FEWEST_DIGITS = 5;
   private static final int MOST_STEPS = 50;
 
   /** The last rows: N, L1, L2, L3 each; and when and where they stand. */
@@ -35,6 +36,7 @@ final class NeutralSteps implements DayCheck {
   private final long[] row = new long[2 * SIDE];
   private final List<Step> steps = new ArrayList<>();
   private int filled;
+  private double digit;
   private long end;
   private long rows;
 
@@ -49,6 +51,7 @@ final class NeutralSteps implements DayCheck {
     if (neutral.isEmpty() || lines.isEmpty()) {
       return;
     }
+    digit = Rows.digit(neutral.get());
     for (int k = 0; k < day.rows(); k++) {
       double[] now = {neutral.get()[k], lines.get()[0][k], lines.get()[1][k], lines.get()[2][k]};
       if (Arrays.stream(now).allMatch(x -> x > 0)) {
@@ -87,9 +90,10 @@ final class NeutralSteps implements DayCheck {
     }
     boolean steady = isSteady(0) && isSteady(SIDE);
     double step = Math.abs(after - before);
+    boolean told = step > FEWEST_DIGITS * digit;
     boolean own = step > OF_LINES * lines && step > OF_WANDER * Math.max(range(0), range(SIDE));
     double factor = after / before;
-    if (steady && own && Math.max(factor, 1 / factor) >= LEAST_FACTOR) {
+    if (steady && told && own && Math.max(factor, 1 / factor) >= LEAST_FACTOR) {
       steps.add(new Step(row[SIDE], at[SIDE], factor));
     }
   }

@@ -215,6 +215,15 @@ class PlantedFaultsTest {
               b.scale("N.rms_a", p[0], p[1], 0.1);
             }),
         fault(
+            "amps twice what they are, on lines that feed back at noon",
+            QualityFinding.WRONG_RATIO,
+            d,
+            e,
+            (b, p) -> {
+              feedBack(b);
+              b.scale("L2.rms_a", p[0], p[1], 2);
+            }),
+        fault(
             "a neutral by another ratio all along, beside the orders of the lines",
             QualityFinding.NEUTRAL_NOT_SUM,
             0,
@@ -265,6 +274,27 @@ class PlantedFaultsTest {
             d,
             e,
             (b, p) -> b.scale("L1.current_thd_percent", p[0], p[1], 0.6)));
+  }
+
+  /** Volts, amps, watts and vars alone, less what roofs of panels make. */
+  private static void feedBack(InventedBoard b) {
+    for (String line : LineDay.LINES) {
+      for (int row = 0; row < b.times.size(); row++) {
+        double hour = row % InventedBoard.PER_DAY / 6.0;
+        double volts = b.at(line + ".rms_v", row);
+        double first = b.at(line + ".current_h1_a", row);
+        double rest = b.at(line + ".rms_a", row) / first;
+        double sun = 0.8 * Math.max(0, Math.sin((hour - 6) / 12 * Math.PI));
+        double watts = b.at(line + ".active_w", row) * (1 - sun);
+        double vars = 0.4 * volts * first;
+        b.put(line + ".active_w", row, watts, 0);
+        b.put(line + ".reactive_var", row, vars, 0);
+        b.put(line + ".rms_a", row, rest * Math.hypot(watts, vars) / volts, 2);
+      }
+    }
+    b.columns
+        .keySet()
+        .removeIf(name -> !name.matches("L\\d\\.(rms_v|rms_a|active_w|reactive_var)"));
   }
 
   private static void smooth(double[] x, int from, int to) {
