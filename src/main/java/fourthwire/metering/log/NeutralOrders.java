@@ -24,14 +24,19 @@ final class NeutralOrders {
   /** Thirds of single loads stand in step in the neutral, but for so much. */
   private static final double IN_STEP = 0.75;
 
-  private static final double LARGE_THIRDS = 0.15;
+  private static final double LARGE_THIRDS = 0.12;
   private static final double STEADY = 0.15;
 
-  /** Where powers do not tell it: loads of one board differ by no more, as a rule. */
-  private static final double UNKNOWN_COSINE = Math.cos(Math.toRadians(30));
+  /** Where powers do not tell it. */
+  private static final double UNKNOWN_COSINE = Math.cos(Math.toRadians(10));
 
-  private static final double[] COSINE = {1, -0.5, -0.5};
-  private static final double[] SINE = {0, Math.sqrt(0.75), -Math.sqrt(0.75)};
+  private static final double LEAST_COSINE = 0.6;
+  private static final double MOST_COSINE = 1.1;
+
+  /** Displacements of the lines of one board differ by no more, as a rule. */
+  private static final double MOST_APART = Math.toRadians(20);
+
+  private static final double THIRD_OF_CYCLE = 2 * Math.PI / 3;
 
   private final double[][] amps;
   private final boolean percent;
@@ -142,41 +147,42 @@ final class NeutralOrders {
 
   private record Bounds(double least, double usual, double most) {}
 
-  /** Each line may lag or lead by what its power allows; as a rule all lag. */
+  /** A line may lag or lead by what its power allows, but the lines not much apart. */
   private Bounds fundamentals(double[] first, int row) {
-    double[] cosine = new double[first.length];
-    for (int line = 0; line < cosine.length; line++) {
-      cosine[line] = cosine(line, first[line], row);
+    double[] lag = new double[first.length];
+    double[] lead = new double[first.length];
+    for (int line = 0; line < lag.length; line++) {
+      lag[line] = Math.acos(cosine(line, first[line], row));
+      lead[line] = Math.max(-lag[line], lag[line] - MOST_APART);
     }
     double least = Double.POSITIVE_INFINITY;
     double most = 0;
     for (int leads = 0; leads < 8; leads++) {
-      double sum = sum(first, cosine, leads);
+      double sum = sum(first, lag, lead, leads);
       least = Math.min(least, sum);
       most = Math.max(most, sum);
     }
-    return new Bounds(least, sum(first, cosine, 0), most);
+    return new Bounds(least, sum(first, lag, lead, 0), most);
   }
 
   /** Of phasors a third of a cycle apart, the lines of the set bits leading. */
-  private static double sum(double[] first, double[] cosine, int leads) {
+  private static double sum(double[] first, double[] lag, double[] lead, int leads) {
     double x = 0;
     double y = 0;
     for (int line = 0; line < first.length; line++) {
-      double c = cosine[line];
-      double s = Math.sqrt(1 - c * c) * ((leads >> line & 1) == 0 ? 1 : -1);
-      x += first[line] * (c * COSINE[line] - s * SINE[line]);
-      y += first[line] * (s * COSINE[line] + c * SINE[line]);
+      double at = ((leads >> line & 1) == 0 ? lag : lead)[line] + THIRD_OF_CYCLE * line;
+      x += first[line] * Math.cos(at);
+      y += first[line] * Math.sin(at);
     }
     return Math.hypot(x, y);
   }
 
-  /** NaN where it feeds back or its clamp is the wrong way round: nothing is told then. */
+  /** NaN, nothing is told, where it feeds back, or its watts or amps seem wrong themselves. */
   private double cosine(int line, double first, int row) {
     if (watts.get(line).isEmpty() || volts.get(line).isEmpty()) {
       return UNKNOWN_COSINE;
     }
     double share = watts.get(line).get()[row] / (volts.get(line).get()[row] * first);
-    return Double.isNaN(share) ? UNKNOWN_COSINE : share < 0 ? Double.NaN : Math.min(1, share);
+    return share > LEAST_COSINE && share < MOST_COSINE ? Math.min(1, share) : Double.NaN;
   }
 }
