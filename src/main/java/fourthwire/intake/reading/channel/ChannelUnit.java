@@ -19,6 +19,12 @@ record ChannelUnit(Kind kind, String letter, double factor) {
   private static final Pattern BRACKET = Pattern.compile("[\\[(]\\s*([^\\])]*?)\\s*[\\])]");
   private static final Pattern LAST = Pattern.compile("[\\s_](kV|mV|V|kA|mA|A)\\s*$");
 
+  /** A unit with a multiple, or a prefix that is no usual one. */
+  private static final Pattern MULTIPLE =
+      Pattern.compile(
+          "(?i)(?:.*[x×*/^]\\s*|.*\\d[.,]?)\\d+\\s*\\p{L}*"
+              + "|.*(?:multipl|divide|scale|tenth|hundred).*|(?:deci|centi|hecto|de[ck]a)\\p{L}+|(?:da|[dchn])[AV]");
+
   /** What a unit is. */
   private enum Kind {
     ELECTRIC,
@@ -60,7 +66,8 @@ record ChannelUnit(Kind kind, String letter, double factor) {
           : new ChannelUnit(Kind.ELECTRIC, letter, factor(prefix));
     }
     boolean share = text.toLowerCase(Locale.ROOT).matches("p\\.?\\s*u\\.?|%|pct|percent");
-    return new ChannelUnit(share ? Kind.UNCLEAR : Kind.OTHER, "", 1);
+    boolean unclear = share || MULTIPLE.matcher(text).matches();
+    return new ChannelUnit(unclear ? Kind.UNCLEAR : Kind.OTHER, "", 1);
   }
 
   private static double factor(String prefix) {

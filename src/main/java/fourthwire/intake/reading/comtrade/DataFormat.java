@@ -30,7 +30,7 @@ enum DataFormat {
   }
 
   private static Optional<DataFormat> named(String word) {
-    String upper = word.trim().toUpperCase(Locale.ROOT);
+    String upper = word.replaceAll("[,;\\s]+$", "").trim().toUpperCase(Locale.ROOT);
     return Arrays.stream(values())
         .filter(f -> f.name().equals(upper) || f == BINARY && upper.equals("BINARY16"))
         .findFirst();

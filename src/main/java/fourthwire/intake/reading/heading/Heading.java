@@ -16,7 +16,8 @@ import java.util.stream.Collectors;
  * @param meaning how far it could be understood
  * @param quantity the quantity's name where it is settled, else empty text
  * @param factor from the column's unit to the quantity's
- * @param question what it leaves open, for a meaning of {@code UNCLEAR}
+ * @param question what it leaves open, for a meaning of {@code UNCLEAR}; for {@code NONE} why it is
+ *     left out, or empty text
  */
 public record Heading(
     Meaning meaning, String quantity, Statistic statistic, double factor, String question) {
@@ -148,6 +149,11 @@ public record Heading(
   /** Nothing a log holds. */
   public static Heading none() {
     return NONE;
+  }
+
+  /** Known, but nothing a log holds. */
+  public static Heading leftOut(String reason) {
+    return new Heading(Meaning.NONE, "", Statistic.MEAN, 1, reason);
   }
 
   static Heading placeless(String measure, String question) {

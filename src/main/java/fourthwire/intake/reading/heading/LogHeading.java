@@ -12,6 +12,10 @@ final class LogHeading {
   private static final Set<String> SUMMED =
       Set.of("active_w", "reactive_var", "apparent_va", "energy_wh");
 
+  private static final Heading OF_RMS =
+      Heading.leftOut("percent of the rms value, where the fundamental is asked for");
+  private static final Heading PEAK = Heading.leftOut("peak values");
+
   private final LogWords words;
   private final LogPlace places;
   private final Optional<Unit.Kind> unit;
@@ -23,9 +27,16 @@ final class LogHeading {
   }
 
   Heading read() {
+    Heading read = meaning();
+    return words.hasOpenUnit() && read.meaning() != Heading.Meaning.NONE
+        ? Heading.unclear("the factor: what its unit says beside A, V, W or % is not understood")
+        : read;
+  }
+
+  private Heading meaning() {
     boolean peak = words.says(Sense.PEAK) && (voltage() || current());
-    if (words.says(Sense.OTHER) || peak || words.saysNothing()) {
-      return Heading.none();
+    if (words.says(Sense.OTHER) || words.says(Sense.OF_RMS) || peak || words.saysNothing()) {
+      return peak ? PEAK : words.says(Sense.OF_RMS) ? OF_RMS : Heading.none();
     }
     if (words.says(Sense.UNBALANCE)) {
       return unbalance();
@@ -57,6 +68,10 @@ final class LogHeading {
 
   private boolean is(Unit.Kind kind) {
     return unit.filter(k -> k == kind).isPresent();
+  }
+
+  private boolean isOfRms() {
+    return words.shareOf().equals(UnitText.OF_RMS);
   }
 
   private boolean current() {
@@ -102,7 +117,7 @@ final class LogHeading {
                   + " or percent of the fundamental");
     }
     if (is(Unit.Kind.SHARE)) {
-      return words.shareOf().startsWith("r") ? Heading.none() : at(start + "_percent", true);
+      return isOfRms() ? OF_RMS : at(start + "_percent", true);
     }
     boolean fits = is(current() ? Unit.Kind.CURRENT : Unit.Kind.VOLTAGE);
     return fits ? at(start + (current() ? "_a" : "_v"), true) : Heading.none();
@@ -115,8 +130,8 @@ final class LogHeading {
   }
 
   private Heading distortion() {
-    if (unit.isPresent() && !is(Unit.Kind.SHARE) || words.shareOf().startsWith("r")) {
-      return Heading.none();
+    if (unit.isPresent() && !is(Unit.Kind.SHARE) || isOfRms()) {
+      return isOfRms() ? OF_RMS : Heading.none();
     }
     if (words.says(Sense.CURRENT) == words.says(Sense.VOLTAGE)) {
       return Heading.unclear("whether this distortion is of current or voltage");
@@ -234,7 +249,7 @@ final class LogHeading {
 
   private Heading settled(String quantity, boolean unitNamed) {
     boolean ratio = quantity.endsWith("_factor");
-    double factor = words.unit().map(Unit::factor).orElse(1.0);
+    double factor = words.factor();
     return new Heading(
         unitNamed ? Heading.Meaning.CLEAR : Heading.Meaning.LIKELY,
         quantity,

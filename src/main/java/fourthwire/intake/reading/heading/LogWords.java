@@ -46,12 +46,11 @@ final class LogWords {
     phrase("(?<=volt)amps?(?![\\p{L}])", "ampere");
     phrase("thd[\\s-]?f\\b", " thd ");
     phrase("thd[\\s_-]r(?![\\p{L}\\d])(?=.*\\d|.*[abc]\\b)", " thdr ");
-    phrase("(?<=\\b(?:l|phase |ph)[123abc]\\b.{0,40})thd[\\s_-]r\\b", " thdr ");
+    phrase("(?<=\\b(?:[iuv]?l?|phase |ph)[123abc]\\b.{0,40})thd[\\s_-]r\\b", " thdr ");
+    phrase("tan\\s*[-_(]?\\s*(phi|φ)\\s*\\)?", " tanphi ");
   }
 
-  private static final Pattern RMS =
-      Pattern.compile("(?i)[\\s_]*\\b(rms|trms|eff)\\b|(?<=[AV])rms");
-  private static final Pattern SHARE = Pattern.compile("%\\s*(?:of|von|de|d')?\\s*(.*)");
+  private static final Pattern RAISED = Pattern.compile("(?<=10)([⁻]?)([⁰¹²³⁴⁵⁶⁷⁸⁹])");
   private static final Pattern PERCENTILE =
       Pattern.compile("c?p(?:5|\\d\\d)|\\d\\d%|percentile|quantile|median");
   private static final Pattern NUMBERED = Pattern.compile("(?i)(?:l|ph|phase)?[123]");
@@ -64,6 +63,8 @@ final class LogWords {
   private final List<Integer> numbers = new ArrayList<>();
   private final List<String> unknown = new ArrayList<>();
   private Optional<Unit> unit = Optional.empty();
+  private double multiple = 1;
+  private boolean openUnit;
   private String shareOf = "";
   private String circuit = "";
   private int order;
@@ -107,7 +108,10 @@ final class LogWords {
   /** Accents, subscripts and Greek letters as plain ones; phrases as one word. */
   private static String plain(String heading) {
     String text =
-        Normalizer.normalize(heading.replace('ϕ', 'φ').replace('º', '°'), Normalizer.Form.NFKD);
+        Normalizer.normalize(
+            RAISED.matcher(heading.replace('ϕ', 'φ').replace('º', '°')).replaceAll("^$1$2"),
+            Normalizer.Form.NFKD);
+    text = text.replace('\u2212', '-');
     for (Map.Entry<Pattern, String> phrase : PHRASES.entrySet()) {
       Matcher m = phrase.getKey().matcher(text);
       text = m.find() ? m.replaceAll(phrase.getValue()) : text;
@@ -121,26 +125,40 @@ final class LogWords {
     StringBuilder rest = new StringBuilder();
     while (bracket.find()) {
       boolean taken = unit.isEmpty() && takeUnit(bracket.group(1));
+      if (!taken) {
+        compare(bracket.group(1));
+      }
       bracket.appendReplacement(
           rest, taken ? " " : Matcher.quoteReplacement(" " + bracket.group(1) + " "));
     }
     bracket.appendTail(rest);
+    openUnit = openUnit || UnitText.hasMultiple(rest.toString());
     Matcher slash = BEHIND_SLASH.matcher(rest);
     return unit.isEmpty() && slash.matches() && takeUnit(slash.group(2))
         ? slash.group(1)
         : rest.toString();
   }
 
-  /** {@code kW}, {@code A rms}, {@code % of fundamental}, {@code %r}. */
   private boolean takeUnit(String text) {
-    String bare = RMS.matcher(text).replaceAll("").trim();
-    Matcher share = SHARE.matcher(bare);
-    if (share.matches()) {
-      shareOf = share.group(1).toLowerCase(Locale.ROOT);
-      bare = "%";
-    }
-    unit = Unit.find(bare);
-    return unit.isPresent();
+    Optional<UnitText> found = UnitText.of(text);
+    found.ifPresent(
+        u -> {
+          unit = Optional.of(u.unit());
+          multiple = u.multiple();
+          shareOf = u.shareOf();
+          openUnit = openUnit || u.isOpen();
+        });
+    return found.isPresent();
+  }
+
+  /** Of two units in brackets the second may only say the first again. */
+  private void compare(String text) {
+    Optional<UnitText> other = UnitText.of(text);
+    boolean same =
+        other.isEmpty()
+            || unit.filter(u -> u == other.get().unit()).isPresent()
+                && multiple == other.get().multiple();
+    openUnit = openUnit || !same || UnitText.isOpen(text);
   }
 
   /** A last word that is a unit; the letter A only where a place stands before it. */
@@ -151,8 +169,8 @@ final class LogWords {
     String last = all.get(all.size() - 1);
     boolean line = all.subList(0, all.size() - 1).stream().anyMatch(LogWords::namesPlace);
     boolean letter = last.length() == 1 && last.toLowerCase(Locale.ROOT).matches("[avw]");
-    if (Unit.find(last).isPresent() && (!letter || line || !last.equalsIgnoreCase("a"))) {
-      unit = Unit.find(last);
+    if (UnitText.of(last).isPresent() && (!letter || line || !last.equalsIgnoreCase("a"))) {
+      takeUnit(last);
       all.remove(all.size() - 1);
       if (Vocabulary.isConnector(all.get(all.size() - 1).toLowerCase(Locale.ROOT))) {
         all.remove(all.size() - 1);
@@ -315,7 +333,28 @@ final class LogWords {
     return unit;
   }
 
-  /** What a percentage is of, as written; empty text where it is not said. */
+  /** From the column's values to the base unit. */
+  double factor() {
+    return multiple * unit.map(Unit::factor).orElse(1.0);
+  }
+
+  /** Whether something stands beside the unit that is not understood. */
+  boolean hasOpenUnit() {
+    return openUnit;
+  }
+
+  /** Whether a word in brackets beside a unit is understood. */
+  static boolean isUnderstood(String word) {
+    String w = word.toLowerCase(Locale.ROOT);
+    return w.isEmpty()
+        || Vocabulary.sense(w).isPresent()
+        || Vocabulary.isConnector(w)
+        || STANDING.matcher(w).matches()
+        || w.matches("l|true|sec|secondary")
+        || Symbol.of(w).isPresent();
+  }
+
+  /** What a percentage is of, as {@link UnitText} says it. */
   String shareOf() {
     return shareOf;
   }

@@ -20,6 +20,8 @@ final class Vocabulary {
     DISPLACEMENT,
     FACTOR,
     DISTORTION,
+    /** A distortion in percent of the rms value. */
+    OF_RMS,
     HARMONIC,
     INDIVIDUAL_DISTORTION,
     FUNDAMENTAL,
@@ -64,6 +66,7 @@ final class Vocabulary {
         Sense.HARMONIC,
         "harmonic harmonics harm har harmon h order oberschwingung oberschwingungen harmonische"
             + " harmonique armonico armonica ordnung ord hrm");
+    put(Sense.OF_RMS, "thdr");
     put(Sense.INDIVIDUAL_DISTORTION, "hd ihd");
     put(Sense.FUNDAMENTAL, "fundamental fund grundschwingung fondamental fond");
     put(Sense.ANGLE, "angle ang winkel angulo phaseangle");
@@ -88,7 +91,7 @@ final class Vocabulary {
         Sense.MEAN,
         "avg mean average ave mittel mittelwert moy moyenne media gemiddeld medio av durchschnitt");
     put(Sense.INSTANT, "inst instantaneous momentan instant");
-    put(Sense.PEAK, "peak pk spitze crest");
+    put(Sense.PEAK, "peak pk pp spitze crest vpp vpk vpkpk vpeak app apk apkpk apeak");
     put(
         Sense.UNBALANCE,
         "unbalance imbalance unbal unb asymmetry unsymmetrie desequilibre onbalans squilibrio vunb"
@@ -97,7 +100,7 @@ final class Vocabulary {
         Sense.OTHER,
         "flicker pst plt ifl cf kf kfactor k tdd temp temperature battery status event events flag"
             + " flags dip swell sag record rec count index sequence seq positive negative zero"
-            + " interharmonic interharmonics ripple std stdev stddev deviation sigma dc thdr tif"
+            + " interharmonic interharmonics ripple std stdev stddev deviation sigma dc tif tan tanphi tanφ"
             + " distortionpower nonactive signalling rvc quality samples sample no nr number id h0"
             + " transient transients impulse impulses surge surges inrush"
             + " rotation humidity speed alarm ground earth gnd pe residual leakage erde erdstrom"

@@ -175,6 +175,13 @@ public final class LogFormat {
     }
     OpenUnits.Settled read = OpenUnits.settle(Heading.ofLog(others), new SampledColumns(table));
     notes.addAll(read.notes());
+    read.headings()
+        .forEach(
+            (column, h) -> {
+              if (h.meaning() == Heading.Meaning.NONE && !h.question().isEmpty()) {
+                notes.add("\"" + column + "\" is left out: " + h.question() + ".");
+              }
+            });
     return new ChannelMapping.Words(
         h -> read.headings().getOrDefault(h, Heading.none()), MeasuredQuantity::ofLog, EXAMPLES);
   }

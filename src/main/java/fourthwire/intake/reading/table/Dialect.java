@@ -49,7 +49,7 @@ record Dialect(
             () ->
                 new TableException(
                     "No table was found: a row of headings, and below it rows of as many values,"
-                        + " separated by comma, semicolon or tab, one row for each time.",
+                        + " separated by comma, semicolon, tab or pipe, one row for each time.",
                     widest(head, length, charset)));
   }
 

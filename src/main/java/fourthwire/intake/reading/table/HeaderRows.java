@@ -21,6 +21,12 @@ record HeaderRows(List<String> headings, List<String> written) {
           "[\\[(]?\\s*((k|m|M|G)?(A|V|W|VA|var|VAr|VAR|Var|Wh|VAh|varh|Hz)(rms)?|%[a-z]?|°|º|deg|-|s|ms|min|p\\.?u\\.?"
               + "|Volts?|Amps?|Watts?|percent|yyyy.*|dd.*|MM.*|hh.*|HH.*)?\\s*[\\])]?");
 
+  /** A unit with its multiple: {@code x10 A}, {@code 0.1 A}, {@code A/10}, {@code dA}. */
+  private static final Pattern MULTIPLE =
+      Pattern.compile(
+          "[\\[(]?\\s*(?:[x×*]?\\s*\\d[\\d.,^-]*\\s*[x×*]?\\s*)?(?:da|[dcuµμkMmG])?(?:A|V|W|VA|var|VAr|Wh)"
+              + "(?:\\s*[x×*/]\\s*\\d+)?\\s*[\\])]?");
+
   /** What a row of statistics says: it completes the names above it. */
   private static final Set<String> STATISTICS =
       Set.of(
@@ -75,7 +81,7 @@ record HeaderRows(List<String> headings, List<String> written) {
   }
 
   private static boolean isUnit(String cell) {
-    return UNIT.matcher(cell).matches();
+    return UNIT.matcher(cell).matches() || MULTIPLE.matcher(cell).matches();
   }
 
   /** Filled in several places, in words that are neither times nor a label with its value. */
