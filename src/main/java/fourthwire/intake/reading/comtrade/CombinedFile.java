@@ -9,7 +9,9 @@ import java.util.regex.Pattern;
 /** The parts of a single-file record (CFF, IEEE C37.111-2013, clause 9). */
 record CombinedFile(byte[] configuration, byte[] data) {
   private static final Pattern PART =
-      Pattern.compile("(?im)^(?:\u00EF\u00BB\u00BF)?---\\s*file type:\\s*([A-Z0-9 ]+?)\\s*(?::\\s*(\\d+))?\\s*---\\s*$");
+      Pattern.compile(
+          "(?im)^(?:\u00EF\u00BB\u00BF)?---\\s*file type:\\s*([A-Z0-9"
+              + " ]+?)\\s*(?::\\s*(\\d+))?\\s*---\\s*$");
 
   static CombinedFile of(byte[] file) {
     // One byte a character: positions in the text are positions in the bytes.

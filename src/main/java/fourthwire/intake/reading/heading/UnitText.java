@@ -21,7 +21,8 @@ record UnitText(Unit unit, double multiple, String shareOf, boolean isOpen) {
   private static final Pattern RMS =
       Pattern.compile("(?i)[\\s_]*\\b(rms|trms|eff)\\b|(?<=[AV])rms");
   private static final Pattern SHARE =
-      Pattern.compile("(?i)(?:%|(?:percent|pct)(?!\\p{L}))\\s*(?:of\\b|von\\b|de\\b|du\\b|d')?\\s*(?:the\\b)?(.*)");
+      Pattern.compile(
+          "(?i)(?:%|(?:percent|pct)(?!\\p{L}))\\s*(?:of\\b|von\\b|de\\b|du\\b|d')?\\s*(?:the\\b)?(.*)");
   private static final Pattern FUNDAMENTAL =
       Pattern.compile("f|fund.*|fond.*|grund.*|h0?1|1st.*|first.*|h?2\\W+h?\\d\\d|avg|mean|thd|");
   private static final Pattern TOTAL = Pattern.compile("r|(?:true|total)?\\W*t?rms.*|eff.*");
@@ -29,7 +30,8 @@ record UnitText(Unit unit, double multiple, String shareOf, boolean isOpen) {
   private static final String NUMBER = "(10\\^-?\\d|1e[+-]?\\d|\\d+(?:[.,]\\d+)?)";
   private static final String NAME = "([\\p{L}°]+)";
   private static final Pattern IN_FRONT =
-      Pattern.compile("([x×*·])?\\s*" + NUMBER + "\\s*[x×*·]?\\s*" + NAME, Pattern.CASE_INSENSITIVE);
+      Pattern.compile(
+          "([x×*·])?\\s*" + NUMBER + "\\s*[x×*·]?\\s*" + NAME, Pattern.CASE_INSENSITIVE);
   private static final Pattern PART = Pattern.compile(NAME + "\\s*[/÷]\\s*(10+)");
   private static final Pattern TOLD =
       Pattern.compile(
@@ -62,7 +64,8 @@ record UnitText(Unit unit, double multiple, String shareOf, boolean isOpen) {
   static Optional<UnitText> of(String text) {
     Matcher share = SHARE.matcher(text.trim());
     if (share.matches()) {
-      return Optional.of(share(share.group(1).toLowerCase(Locale.ROOT).replaceAll("^\\W+", "").trim()));
+      return Optional.of(
+          share(share.group(1).toLowerCase(Locale.ROOT).replaceAll("^\\W+", "").trim()));
     }
     String bare = RMS.matcher(text).replaceAll("").trim();
     return named(bare, 1, false)
@@ -78,8 +81,7 @@ record UnitText(Unit unit, double multiple, String shareOf, boolean isOpen) {
   }
 
   private static Optional<UnitText> named(String name, double multiple, boolean open) {
-    Optional<UnitText> plain =
-        Unit.find(name).map(unit -> new UnitText(unit, multiple, "", open));
+    Optional<UnitText> plain = Unit.find(name).map(unit -> new UnitText(unit, multiple, "", open));
     return plain.isPresent() ? plain : prefixed(name, multiple, open);
   }
 
@@ -89,7 +91,9 @@ record UnitText(Unit unit, double multiple, String shareOf, boolean isOpen) {
     double prefix =
         letter.matches()
             ? PREFIXES.getOrDefault(letter.group(1), 1.0)
-            : spelt.matches() ? SPELT.getOrDefault(spelt.group(1).toLowerCase(Locale.ROOT), 1.0) : 1;
+            : spelt.matches()
+                ? SPELT.getOrDefault(spelt.group(1).toLowerCase(Locale.ROOT), 1.0)
+                : 1;
     return prefix == 1
         ? Optional.empty()
         : Unit.find(letter.matches() ? letter.group(2) : spelt.group(2))
@@ -99,7 +103,10 @@ record UnitText(Unit unit, double multiple, String shareOf, boolean isOpen) {
   /** A number without a sign may be the range of a clamp, unless it is a tenth or the like. */
   private static Optional<UnitText> multipleInFront(Matcher m) {
     return m.matches()
-        ? named(m.group(3), number(m.group(2)), m.group(1) == null && !TENTH.matcher(m.group(2)).matches())
+        ? named(
+            m.group(3),
+            number(m.group(2)),
+            m.group(1) == null && !TENTH.matcher(m.group(2)).matches())
         : Optional.empty();
   }
 
@@ -112,7 +119,8 @@ record UnitText(Unit unit, double multiple, String shareOf, boolean isOpen) {
       return Optional.empty();
     }
     double number = number(m.group(3));
-    return named(m.group(1), m.group(2).equalsIgnoreCase("divide") ? 1 / number : number, number == 0);
+    return named(
+        m.group(1), m.group(2).equalsIgnoreCase("divide") ? 1 / number : number, number == 0);
   }
 
   private static double number(String text) {

@@ -100,12 +100,12 @@ final class Vocabulary {
         Sense.OTHER,
         "flicker pst plt ifl cf kf kfactor k tdd temp temperature battery status event events flag"
             + " flags dip swell sag record rec count index sequence seq positive negative zero"
-            + " interharmonic interharmonics ripple std stdev stddev deviation sigma dc tif tan tanphi tanφ"
-            + " distortionpower nonactive signalling rvc quality samples sample no nr number id h0"
-            + " transient transients impulse impulses surge surges inrush"
-            + " rotation humidity speed alarm ground earth gnd pe residual leakage erde erdstrom"
-            + " tierra terre nominal rated setpoint limit threshold target delta difference diff"
-            + " forecast baseline predicted expected budget cost price tariff unidentified");
+            + " interharmonic interharmonics ripple std stdev stddev deviation sigma dc tif tan"
+            + " tanphi tanφ distortionpower nonactive signalling rvc quality samples sample no nr"
+            + " number id h0 transient transients impulse impulses surge surges inrush rotation"
+            + " humidity speed alarm ground earth gnd pe residual leakage erde erdstrom tierra"
+            + " terre nominal rated setpoint limit threshold target delta difference diff forecast"
+            + " baseline predicted expected budget cost price tariff unidentified");
     put(
         Sense.NOTHING,
         "rms trms true-rms eff efficace effektiv value values wert valeur measured to the of import"
