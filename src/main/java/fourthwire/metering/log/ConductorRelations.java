@@ -18,6 +18,7 @@ final class ConductorRelations implements DayCheck {
   private final FlaggedDays flagged = new FlaggedDays();
   private final NeutralRelation neutral;
   private final HarmonicRelation harmonics;
+  private final NeutralSteps steps = new NeutralSteps();
 
   ConductorRelations(List<String> names) {
     this.neutral = new NeutralRelation(names, flagged);
@@ -28,6 +29,7 @@ final class ConductorRelations implements DayCheck {
   public void take(LogDay day) {
     look(day);
     flagged.endDay(day);
+    steps.take(day);
   }
 
   private void look(LogDay day) {
@@ -97,6 +99,6 @@ final class ConductorRelations implements DayCheck {
 
   @Override
   public List<QualityFinding> findings() {
-    return flagged.findings();
+    return steps.findings(flagged.findings());
   }
 }

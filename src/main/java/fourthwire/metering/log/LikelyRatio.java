@@ -1,10 +1,17 @@
 package fourthwire.metering.log;
 
+import java.util.Arrays;
 import java.util.Locale;
+import java.util.OptionalDouble;
 
 /** The ratio that was set wrongly, of the one that a log shows. Common practice, no source. */
 final class LikelyRatio {
   private static final double NEAR = 0.02;
+
+  /** Decades first, then the steps of clamp ranges and transformers of five amps. */
+  private static final double[] USUAL = {
+    10, 100, 1000, 5, 2, 20, 50, 4, 3, 25, 40, 30, 15, 6, 8, 12, 60, 80, 200, 500
+  };
 
   private LikelyRatio() {}
 
@@ -25,6 +32,15 @@ final class LikelyRatio {
                 ? Math.sqrt(3)
                 : Double.parseDouble(String.format(Locale.ROOT, "%.3g", up));
     return factor >= 1 ? near : 1 / near;
+  }
+
+  /** The roundest ratio that instruments are set to between two; empty where there is none. */
+  static OptionalDouble usual(double low, double high) {
+    if (high < 1) {
+      OptionalDouble up = usual(1 / high, 1 / low);
+      return up.isPresent() ? OptionalDouble.of(1 / up.getAsDouble()) : up;
+    }
+    return Arrays.stream(USUAL).filter(f -> f >= low && f <= high).findFirst();
   }
 
   /** Whether a factor is about that of another prefix of the unit: W for kW. */

@@ -13,6 +13,14 @@ import java.util.Optional;
  */
 final class LineOrder {
   private static final int[][] ORDERS = {{1, 0, 2}, {0, 2, 1}, {2, 1, 0}, {1, 2, 0}, {2, 0, 1}};
+  private static final int[] STRAIGHT = {0, 1, 2};
+
+  /** How far power factors wander about their medians at least where lines are mixed up. */
+  private static final double LEAST_WANDER = 0.06;
+
+  private static final double MOST_STEADY = 0.05;
+  private static final double LEAST_FACTOR = 0.3;
+  private static final double MOST_FACTOR = 1.03;
 
   private final FlaggedDays flagged;
 
@@ -35,21 +43,72 @@ final class LineOrder {
     if (amps.isEmpty() || volts.isEmpty()) {
       return false;
     }
-    double[][] expected =
-        power.orElseGet(
+    Optional<double[][]> expected =
+        power.or(
             () ->
                 lines
                     .all("active_w")
                     .filter(p -> factor.isPresent())
-                    .map(p -> quotient(p, factor.get()))
-                    .orElse(new double[0][]));
-    if (expected.length == 0) {
-      return false;
+                    .map(p -> quotient(p, factor.get())));
+    if (expected.isEmpty()) {
+      return lines.all("active_w").filter(p -> unsteady(day, p, volts.get(), amps.get())).isPresent();
     }
-    return swapped(
-            day, "currents", order -> misfit(expected, volts.get(), amps.get(), order, false))
-        || swapped(
-            day, "voltages", order -> misfit(expected, volts.get(), amps.get(), order, true));
+    double[][] s = expected.get();
+    return swapped(day, "currents", order -> misfit(s, volts.get(), amps.get(), order, false))
+        || swapped(day, "voltages", order -> misfit(s, volts.get(), amps.get(), order, true));
+  }
+
+  /** Without apparent powers: each line's power factor is steady in one order, as it stands not. */
+  private boolean unsteady(LogDay day, double[][] watts, double[][] volts, double[][] amps) {
+    Misfit wander =
+        order -> misfit(apparent(watts, volts, amps, order), volts, amps, order, false);
+    double straight = wander.of(STRAIGHT);
+    int[] best = best(wander);
+    double least = wander.of(best);
+    boolean wrong = straight > LEAST_WANDER && least < straight / 2.5 && least < MOST_STEADY;
+    if (wrong) {
+      double[] factors = factors(watts, volts, amps, best);
+      flag(day, "currents", best, (other, row) -> fits(other, row, best, factors));
+    }
+    return wrong;
+  }
+
+  /** What the watts of each line would be as apparent power, at its usual power factor. */
+  private static double[][] apparent(
+      double[][] watts, double[][] volts, double[][] amps, int[] order) {
+    double[] factors = factors(watts, volts, amps, order);
+    double[][] made = new double[watts.length][];
+    for (int line = 0; line < made.length; line++) {
+      boolean likely = factors[line] > LEAST_FACTOR && factors[line] < MOST_FACTOR;
+      double factor = likely || order == STRAIGHT ? factors[line] : Double.NaN;
+      made[line] = java.util.Arrays.stream(watts[line]).map(p -> p / factor).toArray();
+    }
+    return made;
+  }
+
+  private static double[] factors(double[][] watts, double[][] volts, double[][] amps, int[] order) {
+    double[] factors = new double[watts.length];
+    java.util.Arrays.setAll(
+        factors,
+        line ->
+            Rows.loaded(
+                amps[order[line]],
+                k -> watts[line][k] / (volts[line][k] * amps[order[line]][k])));
+    return factors;
+  }
+
+  /** 1 where a row's power factors are nearer the usual ones in this order, -1 where as it stands. */
+  private static int fits(LogDay day, int row, int[] order, double[] factors) {
+    double nearer = 0;
+    for (int line = 0; line < order.length; line++) {
+      String name = LineDay.LINES[line];
+      double volts = at(day, name + ".rms_v", row);
+      double expected = at(day, name + ".active_w", row) / factors[line];
+      nearer +=
+          Math.abs(volts * at(day, name + ".rms_a", row) / expected - 1)
+              - Math.abs(volts * at(day, LineDay.LINES[order[line]] + ".rms_a", row) / expected - 1);
+    }
+    return (int) Math.signum(nearer);
   }
 
   private static double[][] quotient(double[][] p, double[][] factor) {
@@ -64,7 +123,7 @@ final class LineOrder {
 
   /** 1 where a row fits its powers better in this order of the lines, -1 where as it stands. */
   private static int fits(LogDay day, int row, int[] order, boolean voltsMoved) {
-    double straight = misfit(day, row, new int[] {0, 1, 2}, voltsMoved);
+    double straight = misfit(day, row, STRAIGHT, voltsMoved);
     double moved = misfit(day, row, order, voltsMoved);
     return moved < straight ? 1 : moved > straight ? -1 : 0;
   }
@@ -94,38 +153,48 @@ final class LineOrder {
   }
 
   private boolean swapped(LogDay day, String what, Misfit misfit) {
-    double straight = misfit.of(new int[] {0, 1, 2});
+    double straight = misfit.of(STRAIGHT);
     if (!(straight > 0.0015)) {
       return false;
     }
+    int[] best = best(misfit);
+    double least = misfit.of(best);
+    boolean wrong = least < straight / 3 && least < 0.03;
+    if (wrong) {
+      flag(day, what, best, (other, row) -> fits(other, row, best, what.equals("voltages")));
+    }
+    return wrong;
+  }
+
+  private static int[] best(Misfit misfit) {
     int[] best = ORDERS[0];
     double least = misfit.of(best);
     for (int[] order : ORDERS) {
       double other = misfit.of(order);
-      best = other < least ? order : best;
-      least = other < least ? other : least;
+      boolean better = other < least || Double.isNaN(least);
+      best = better ? order : best;
+      least = better ? other : least;
     }
-    boolean wrong = least < straight / 3 && least < 0.03;
-    if (wrong) {
-      int[] order = best;
-      flagged.add(
-          day,
-          new FlaggedDays.Fault(
-              SWAPPED_LINES,
-              what,
-              "Figures of single lines belong to other lines; sums are right.",
-              String.format(
-                  Locale.ROOT,
-                  "The %s under L1, L2 and L3 fit the powers as those of %s, %s and %s: lines stand"
-                      + " under each other's names.",
-                  what,
-                  LineDay.LINES[order[0]],
-                  LineDay.LINES[order[1]],
-                  LineDay.LINES[order[2]]),
-              rows -> List.of(reordered(day, what.equals("currents"), order, rows)),
-              (other, row) -> fits(other, row, order, what.equals("voltages"))));
-    }
-    return wrong;
+    return best;
+  }
+
+  private void flag(LogDay day, String what, int[] order, RowTest rows) {
+    flagged.add(
+        day,
+        new FlaggedDays.Fault(
+            SWAPPED_LINES,
+            what,
+            "Figures of single lines belong to other lines; sums are right.",
+            String.format(
+                Locale.ROOT,
+                "The %s under L1, L2 and L3 fit the powers as those of %s, %s and %s: lines stand"
+                    + " under each other's names.",
+                what,
+                LineDay.LINES[order[0]],
+                LineDay.LINES[order[1]],
+                LineDay.LINES[order[2]]),
+            within -> List.of(reordered(day, what.equals("currents"), order, within)),
+            rows));
   }
 
   private static Correction reordered(
@@ -194,7 +263,8 @@ final class LineOrder {
               amps.get()[k],
               row -> watts.get()[k][row] / (volts.get()[k][row] * amps.get()[k][row]));
     }
-    for (int straight = 0; straight < 3; straight++) {
+    for (int k = 0; k < 3; k++) {
+      int straight = k;
       int a = (straight + 1) % 3;
       int b = (straight + 2) % 3;
       if (cosine[straight] > 0.7
@@ -216,11 +286,24 @@ final class LineOrder {
                     LineDay.LINES[straight],
                     cosine[straight],
                     pair),
-                rows -> List.of(uncrossed(day, a, b, rows))));
+                rows -> List.of(uncrossed(day, a, b, rows)),
+                (other, row) -> crossed(other, row, straight, a, b)));
         return true;
       }
     }
     return false;
+  }
+
+  /** Two crossed lines share -V·I·cos φ, straight ones 2 V·I·cos φ: which is nearer in a row. */
+  private static int crossed(LogDay day, int row, int straight, int a, int b) {
+    double half = cosine(day, row, straight) / 2;
+    return (int) Math.signum(half - cosine(day, row, a) - cosine(day, row, b));
+  }
+
+  private static double cosine(LogDay day, int row, int line) {
+    String name = LineDay.LINES[line];
+    return at(day, name + ".active_w", row)
+        / (at(day, name + ".rms_v", row) * at(day, name + ".rms_a", row));
   }
 
   /** Amps go where they belong; what the instrument formed from them with other volts is lost. */

@@ -49,7 +49,6 @@ public final class LogAnalysis {
             new PowerRelations(),
             new ConductorRelations(names),
             new ImpossibleValues(names, statistics.quantities(), nominalHz),
-            new NeutralSteps(),
             new HeldDistortion(names),
             new FlatLines(names),
             new LogClock(series));

@@ -37,7 +37,9 @@ final class LogClock implements DayCheck {
   private long blocksFrom = Long.MAX_VALUE;
   private long blocksTo = Long.MIN_VALUE;
 
-  private final List<QualityFinding> jumps = new ArrayList<>();
+  private final List<Jump> jumps = new ArrayList<>();
+  private final ClockSpells spells = new ClockSpells();
+  private long jitter;
   private final List<Gap> gaps = new ArrayList<>();
   private long gapCount;
   private long missing;
@@ -55,11 +57,13 @@ final class LogClock implements DayCheck {
     private long toRow;
   }
 
-  private record Gap(long from, long to) {
+  private record Gap(long row, long from, long to) {
     long length() {
       return to - from;
     }
   }
+
+  private record Jump(long row, QualityFinding finding) {}
 
   /** Of a log whose rows it may look up again. */
   LogClock(Series series) {
@@ -119,6 +123,11 @@ final class LogClock implements DayCheck {
     // Loggers stamp to the second: a step off the grid by less than a tenth is jitter.
     long off = Math.abs(step - Math.round((double) step / interval) * interval);
     boolean onGrid = off <= interval / 10;
+    boolean usual = onGrid && Math.abs(step - interval) <= interval / 2;
+    if (step != 0 && !usual) {
+      spells.add(new ClockSpells.Step(day.firstRow() + row, before + interval, at));
+    }
+    jitter = interval / 10;
     if (step == 0) {
       repeat(day, row, at);
     } else if (step < 0) {
@@ -127,7 +136,7 @@ final class LogClock implements DayCheck {
       offGrid(day.firstRow() + row, at, interval);
     }
     if (step - interval > interval / 2 && (onGrid || step > LONGEST_SET_MILLIS)) {
-      gap(new Gap(before + interval, at));
+      gap(new Gap(day.firstRow() + row, before + interval, at));
       hourOn(day.firstRow() + row, at, interval);
     }
   }
@@ -136,6 +145,7 @@ final class LogClock implements DayCheck {
   private void hourOn(long row, long at, long interval) {
     if (at - before - interval == HOUR_MILLIS && 2 * interval <= HOUR_MILLIS) {
       jump(
+          row,
           before + interval,
           at,
           "Rows from then on may be an hour late.",
@@ -148,6 +158,7 @@ final class LogClock implements DayCheck {
   private void setBack(long row, long at, long interval) {
     long by = interval - (at - before);
     jump(
+        row,
         at,
         before,
         "Rows overlap: the same time is counted twice.",
@@ -174,6 +185,7 @@ final class LogClock implements DayCheck {
       offers.addAll(Offers.shift(whole - step, whole - interval, row));
     }
     jump(
+        row,
         before,
         at,
         "One interval is not of the stated length.",
@@ -195,9 +207,9 @@ final class LogClock implements DayCheck {
   }
 
   private void jump(
-      long from, long to, String effect, String sentence, List<Correction> corrections) {
+      long row, long from, long to, String effect, String sentence, List<Correction> corrections) {
     if (jumps.size() < MOST_JUMPS) {
-      jumps.add(finding(CLOCK_JUMP, from, to, effect, sentence, corrections));
+      jumps.add(new Jump(row, finding(CLOCK_JUMP, from, to, effect, sentence, corrections)));
     }
   }
 
@@ -224,7 +236,13 @@ final class LogClock implements DayCheck {
 
   @Override
   public List<QualityFinding> findings() {
-    List<QualityFinding> all = new ArrayList<>(jumps);
+    List<QualityFinding> all = new ArrayList<>(spells.findings(jitter));
+    jumps.stream().filter(j -> !spells.tells(j.row())).forEach(j -> all.add(j.finding()));
+    for (Gap gap : gaps) {
+      gapCount -= spells.tells(gap.row()) ? 1 : 0;
+      missing -= spells.tells(gap.row()) ? gap.length() : 0;
+    }
+    gaps.removeIf(gap -> spells.tells(gap.row()));
     gaps.sort(Comparator.comparingLong(Gap::length).reversed());
     for (Gap gap : gaps.subList(0, Math.min(MOST_GAPS, gaps.size()))) {
       all.add(

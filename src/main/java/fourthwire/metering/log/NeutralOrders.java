@@ -50,6 +50,9 @@ final class NeutralOrders {
   /** What a neutral may be, would be of lines alike in power factor, and the share of thirds. */
   private record Made(double least, double usual, double most, double thirds) {}
 
+  /** The neutral on what is made of the orders, how far rows are from it, and if it can't be. */
+  private record Ratio(double usual, double apart, boolean far) {}
+
   private NeutralOrders(LogDay day, double[][] amps) {
     this.amps = amps;
     LineDay lines = new LineDay(day);
@@ -71,13 +74,22 @@ final class NeutralOrders {
    * nearly all rows under load; else, or where the orders are not logged, empty.
    */
   static Optional<Double> off(LogDay day, double[] neutral, double[][] amps) {
+    return of(day, neutral, amps).filter(Ratio::far).map(Ratio::usual);
+  }
+
+  /** The same where it is so nearly the same in all rows that one ratio explains it. */
+  static Optional<Double> steady(LogDay day, double[] neutral, double[][] amps) {
+    return of(day, neutral, amps).filter(r -> r.apart() < STEADY).map(Ratio::usual);
+  }
+
+  private static Optional<Ratio> of(LogDay day, double[] neutral, double[][] amps) {
     NeutralOrders made = new NeutralOrders(day, amps);
     boolean logged =
         made.orders.size() >= FEWEST_ORDERS && made.orders.stream().anyMatch(o -> o.order() == 3);
-    return logged ? made.off(neutral) : Optional.empty();
+    return logged ? Optional.of(made.ratio(neutral)) : Optional.empty();
   }
 
-  private Optional<Double> off(double[] neutral) {
+  private Ratio ratio(double[] neutral) {
     double least = UNDER_LOAD * Rows.median(neutral.length, this::sum);
     double digit = Rows.digit(neutral);
     int there = 0;
@@ -101,7 +113,7 @@ final class NeutralOrders {
     double apart = Rows.median(ratio.length, k -> Math.abs(ratio[k] / usual - 1));
     boolean single = Rows.median(thirds) > LARGE_THIRDS && apart < STEADY;
     boolean far = above > NEARLY_ALL * there || single && below > NEARLY_ALL * there;
-    return far ? Optional.of(usual) : Optional.empty();
+    return new Ratio(usual, apart, far);
   }
 
   private double sum(int row) {

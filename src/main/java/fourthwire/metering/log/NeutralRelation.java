@@ -2,9 +2,12 @@ package fourthwire.metering.log;
 
 import static fourthwire.metering.QualityFinding.NEUTRAL_NOT_SUM;
 
+import fourthwire.metering.Correction;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import java.util.OptionalDouble;
 
 /**
  * The neutral's current against the lines' it is the sum of. Thresholds are common practice, no
@@ -19,8 +22,10 @@ final class NeutralRelation {
    */
   private static final double MOST_OF_ROOT = 1.15;
 
-  /** How near a whole number a ratio is to be taken for it. */
-  private static final double WHOLE = 0.15;
+  /** How near a ratio of instruments one is to be taken for it. */
+  private static final double NEAR = 0.15;
+
+  private static final double LEAST_RATIO = 1.5;
 
   private final List<String> neutralCurrents;
   private final FlaggedDays flagged;
@@ -67,42 +72,50 @@ final class NeutralRelation {
     }
     Optional<String> thirds = thirds(day, neutral.get(), l);
     if (count.isWrong() || thirds.isPresent()) {
-      flag(
-          day,
-          thirds.orElseGet(() -> sentence(count)),
-          rows -> List.of(Offers.leaveOut(neutralCurrents, rows)));
+      OptionalDouble factor = likely(NeutralOrders.steady(day, neutral.get(), l));
+      flag(day, thirds.orElseGet(() -> sentence(count)), factor);
     } else {
       NeutralOrders.off(day, neutral.get(), l).ifPresent(ratio -> ofOrders(day, ratio));
     }
   }
 
-  private void flag(LogDay day, String sentence, Offers.Of corrections) {
+  /** The ratio it was set to wrongly; empty where none is near. */
+  private static OptionalDouble likely(Optional<Double> ratio) {
+    double r = ratio.orElse(1.0);
+    return Math.max(r, 1 / r) < LEAST_RATIO
+        ? OptionalDouble.empty()
+        : LikelyRatio.usual(r / (1 + NEAR), r * (1 + NEAR));
+  }
+
+  private void flag(LogDay day, String sentence, OptionalDouble factor) {
     flagged.add(
         day,
         new FlaggedDays.Fault(
             NEUTRAL_NOT_SUM,
             "N",
-            "The column mapped as N is not to be trusted.",
+            factor.isPresent()
+                ? "The column mapped as N is not to be trusted."
+                : "The column mapped as N is not to be trusted; what it should be, the currents"
+                    + " logged can't tell.",
             sentence,
-            corrections));
+            rows -> corrections(factor, rows)));
+  }
+
+  private List<Correction> corrections(OptionalDouble factor, Correction.Rows rows) {
+    List<Correction> offers = new ArrayList<>();
+    factor.ifPresent(f -> offers.add(Offers.scale(List.of("N.rms_a"), f, rows)));
+    offers.add(Offers.leaveOut(neutralCurrents, rows));
+    return offers;
   }
 
   private void ofOrders(LogDay day, double ratio) {
-    double up = Math.max(ratio, 1 / ratio);
-    double whole = Math.rint(up);
-    boolean likely = whole >= 2 && Math.abs(up / whole - 1) < WHOLE;
     flag(
         day,
         String.format(
             Locale.ROOT,
             "N.rms_a is %.3g times what the orders of the lines add up to (median of the day).",
             ratio),
-        rows ->
-            likely
-                ? List.of(
-                    Offers.scale(List.of("N.rms_a"), ratio > 1 ? whole : 1 / whole, rows),
-                    Offers.leaveOut(neutralCurrents, rows))
-                : List.of(Offers.leaveOut(neutralCurrents, rows)));
+        likely(Optional.of(ratio)));
   }
 
   private static String sentence(Count count) {

@@ -1,8 +1,12 @@
 package fourthwire.metering.log;
 
 import static fourthwire.metering.QualityFinding.REVERSED_CLAMP;
+import static fourthwire.metering.QualityFinding.SWAPPED_LINES;
 
+import fourthwire.metering.Period;
 import fourthwire.metering.QualityFinding;
+import java.time.Duration;
+import java.time.Instant;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -122,9 +126,24 @@ final class PowerRelations implements DayCheck {
     return off < 0.02;
   }
 
+  /** Whether a finding is what lines under each other's names leave at either end of their time. */
+  private static boolean isOfSwap(QualityFinding f, QualityFinding swap) {
+    if (f.code().equals(SWAPPED_LINES) || !swap.code().equals(SWAPPED_LINES)) {
+      return false;
+    }
+    Period of = f.period().orElseThrow();
+    Period within = swap.period().orElseThrow();
+    Instant from = of.from().isAfter(within.from()) ? of.from() : within.from();
+    Instant to = of.to().isBefore(within.to()) ? of.to() : within.to();
+    Duration shared = Duration.between(from, to);
+    return shared.multipliedBy(2).compareTo(Duration.between(of.from(), of.to())) > 0;
+  }
+
   @Override
   public List<QualityFinding> findings() {
-    List<QualityFinding> all = new ArrayList<>(flagged.findings());
+    List<QualityFinding> found = flagged.findings();
+    List<QualityFinding> all = new ArrayList<>(found);
+    all.removeIf(f -> found.stream().anyMatch(other -> isOfSwap(f, other)));
     all.addAll(runs.findings(all));
     return all;
   }

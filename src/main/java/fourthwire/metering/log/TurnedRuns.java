@@ -14,11 +14,13 @@ import java.util.Optional;
 /**
  * A clamp that was turned for some hours: the power of one line is below zero while its current
  * flows and the other lines take power, and it is as large right before and after. Power fed back
- * grows from nothing and fades; that of all lines is no clamp. Thresholds are common practice, no
+ * grows from nothing and fades, or comes at the same hours each day; that of all lines is no clamp. Thresholds are common practice, no
  * source.
  */
 final class TurnedRuns {
   private static final long SHORTEST_MILLIS = 3 * 3_600_000L;
+  private static final long DAY_MILLIS = 24 * 3_600_000L;
+  private static final long SAME_HOUR_MILLIS = 5_400_000;
   private static final int FEWEST_ROWS = 4;
   private static final int MOST_RUNS = 200;
 
@@ -111,12 +113,28 @@ final class TurnedRuns {
       String name = LineDay.LINES[k];
       end(lines[k], Double.NaN);
       for (Run run : lines[k].runs) {
-        if (told.stream().noneMatch(f -> tells(f, run, name))) {
+        boolean known = told.stream().anyMatch(f -> tells(f, run, name));
+        if (!known && !isDaily(run, lines[k].runs)) {
           findings.add(finding(name, run));
         }
       }
     }
     return findings;
+  }
+
+  /** At the same hours of another day: a source of its own on this line, no clamp. */
+  private static boolean isDaily(Run run, List<Run> all) {
+    return all.stream()
+        .anyMatch(
+            other ->
+                other != run
+                    && isSameHour(other.from(), run.from())
+                    && isSameHour(other.to(), run.to()));
+  }
+
+  private static boolean isSameHour(long a, long b) {
+    long apart = Math.floorMod(a - b, DAY_MILLIS);
+    return Math.min(apart, DAY_MILLIS - apart) <= SAME_HOUR_MILLIS;
   }
 
   /** Whether a finding of days says it, or that lines stand under each other's names then. */

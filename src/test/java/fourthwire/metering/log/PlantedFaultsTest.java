@@ -2,6 +2,7 @@ package fourthwire.metering.log;
 
 import static org.assertj.core.api.Assertions.assertThat;
 
+import fourthwire.metering.Correction;
 import fourthwire.metering.Period;
 import fourthwire.metering.QualityFinding;
 import java.time.Instant;
@@ -17,6 +18,7 @@ import org.junit.jupiter.params.provider.ValueSource;
 class PlantedFaultsTest {
   private static final int PER_DAY = InventedBoard.PER_DAY;
   private static final long STEP = InventedBoard.STEP;
+  private static final double TURN = 2 * Math.PI / 3;
   private static final long START = InventedBoard.START;
 
   @ParameterizedTest
@@ -375,6 +377,104 @@ class PlantedFaultsTest {
     Period period = board.reading().quality().get(0).period().orElseThrow();
     assertThat(period.from()).isEqualTo(Instant.ofEpochMilli(START + STEP * 400));
     assertThat(period.to()).isEqualTo(Instant.ofEpochMilli(START + STEP * 820));
+  }
+
+  /** Lines exchanged between two rows are exchanged back in just these, whatever powers show it. */
+  @ParameterizedTest
+  @ValueSource(strings = {"power_factor", "active_w", "crossed"})
+  void linesExchangedForSomeDaysAreMendedInTheirRows(String shown) {
+    InventedBoard board = new InventedBoard(21, 2);
+    board.columns.keySet().removeIf(name -> name.matches(".*(_h\\d_a|_thd.*)|N.*"));
+    board.columns.keySet().removeIf(name -> name.contains("factor") && !name.contains(shown));
+    board.swap("L1.rms_a", "L3.rms_a", 353, 820);
+    for (int row = 353; row < 820 && shown.equals("crossed"); row++) {
+      double phi = Math.acos(0.92);
+      board.put("L1.active_w", row, voltAmps(board, "L1", row) * Math.cos(TURN + phi), 0);
+      board.put("L3.active_w", row, voltAmps(board, "L3", row) * Math.cos(TURN - phi), 0);
+      board.put("L2.active_w", row, voltAmps(board, "L2", row) * 0.92, 0);
+    }
+    board.columns.remove("total.active_w");
+    assertThat(board.reading().quality())
+        .singleElement()
+        .satisfies(
+            f -> {
+              assertThat(f.code()).isEqualTo(QualityFinding.SWAPPED_LINES);
+              Period period = f.period().orElseThrow();
+              assertThat(period.from()).isEqualTo(Instant.ofEpochMilli(START + STEP * 353));
+              assertThat(period.to()).isEqualTo(Instant.ofEpochMilli(START + STEP * 820));
+              assertThat(f.corrections().get(0).sentence()).startsWith("Exchange L1 and L3");
+            });
+  }
+
+  private static double voltAmps(InventedBoard board, String line, int row) {
+    return board.at(line + ".rms_v", row) * board.at(line + ".rms_a", row);
+  }
+
+  /** A neutral by a tenth or tenfold between two rows is mended in these, by the round factor. */
+  @ParameterizedTest
+  @ValueSource(doubles = {10, 0.1})
+  void aNeutralOfAnotherRatioIsToldOnceByItsRows(double factor) {
+    InventedBoard board = new InventedBoard(21, 2);
+    board.scale("N.rms_a", 497, 936, factor);
+    assertThat(board.reading().quality())
+        .singleElement()
+        .satisfies(
+            f -> {
+              Period period = f.period().orElseThrow();
+              assertThat(period.from()).isEqualTo(Instant.ofEpochMilli(START + STEP * 497));
+              assertThat(period.to()).isEqualTo(Instant.ofEpochMilli(START + STEP * 936));
+              assertThat(f.corrections().get(0).sentence())
+                  .isEqualTo("Multiply N.rms_a by " + (factor > 1 ? "0.1" : "10"));
+            });
+  }
+
+  /** Where the orders of the lines tell a neutral's ratio, it is offered ahead of leaving it out. */
+  @ParameterizedTest
+  @ValueSource(doubles = {10, 5, 0.1})
+  void aNeutralOfAnotherRatioAllAlongIsMended(double factor) {
+    InventedBoard board = new InventedBoard(21, 3);
+    board.columns.remove("N.current_h3_a");
+    board.scale("N.rms_a", 0, board.times.size(), factor);
+    assertThat(board.reading().quality())
+        .singleElement()
+        .satisfies(
+            f -> {
+              assertThat(f.code()).isEqualTo(QualityFinding.NEUTRAL_NOT_SUM);
+              assertThat(f.corrections().get(0).sentence())
+                  .isEqualTo("Multiply N.rms_a by " + LikelyRatio.text(1 / factor));
+            });
+  }
+
+  /** A clock set and later set back by as much moves the rows between, no others. */
+  @ParameterizedTest
+  @ValueSource(longs = {180, -17, -60, 13})
+  void aClockSetForAWhileIsToldOnce(long minutes) {
+    InventedBoard board = new InventedBoard(21, 2);
+    for (int row = 504; row < 792; row++) {
+      board.times.set(row, board.times.get(row) + 60_000 * minutes);
+    }
+    assertThat(board.reading().quality())
+        .singleElement()
+        .satisfies(
+            f -> {
+              assertThat(f.code()).isEqualTo(QualityFinding.CLOCK_JUMP);
+              assertThat(f.corrections().get(0).steps())
+                  .containsExactly(
+                      new Correction.ShiftClock(-60_000 * minutes, new Correction.Rows(504, 792)));
+            });
+  }
+
+  /** A source of a line's own that feeds back as much as it took, each midday, is no clamp. */
+  @ParameterizedTest
+  @ValueSource(longs = {21, 22})
+  void aSourceOfTheSameHoursIsNoTurnedClamp(long seed) {
+    InventedBoard board = new InventedBoard(seed, 2);
+    for (int row = 0; row < board.times.size(); row++) {
+      if (row % PER_DAY >= 60 && row % PER_DAY < 90) {
+        turn(board, new int[] {row, row + 1});
+      }
+    }
+    assertThat(board.reading().quality()).as("seed %d", seed).isEmpty();
   }
 
   /** Where all amps are five times too large, N is offered the same factor as the lines. */
