@@ -73,8 +73,7 @@ final class ClockSpells {
     String by = LogClock.words(Math.abs(from.millis()));
     return new QualityFinding(
         QualityFinding.CLOCK_JUMP,
-        Optional.of(
-            new Period(Instant.ofEpochMilli(from.at()), Instant.ofEpochMilli(to.before()))),
+        Optional.of(new Period(Instant.ofEpochMilli(from.at()), Instant.ofEpochMilli(to.before()))),
         "These rows stand at wrong times: some times seem to be missing, others count twice.",
         String.format(
             Locale.ROOT,
@@ -88,7 +87,11 @@ final class ClockSpells {
             ahead ? "back" : "forward"),
         List.of(
             Correction.of(
-                "Set these " + (to.row() - from.row()) + " rows " + by + (ahead ? " earlier" : " later"),
+                "Set these "
+                    + (to.row() - from.row())
+                    + " rows "
+                    + by
+                    + (ahead ? " earlier" : " later"),
                 new Correction.ShiftClock(
                     -from.millis(), new Correction.Rows(from.row(), to.row())))));
   }

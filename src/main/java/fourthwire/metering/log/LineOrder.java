@@ -51,7 +51,10 @@ final class LineOrder {
                     .filter(p -> factor.isPresent())
                     .map(p -> quotient(p, factor.get())));
     if (expected.isEmpty()) {
-      return lines.all("active_w").filter(p -> unsteady(day, p, volts.get(), amps.get())).isPresent();
+      return lines
+          .all("active_w")
+          .filter(p -> unsteady(day, p, volts.get(), amps.get()))
+          .isPresent();
     }
     double[][] s = expected.get();
     return swapped(day, "currents", order -> misfit(s, volts.get(), amps.get(), order, false))
@@ -60,8 +63,7 @@ final class LineOrder {
 
   /** Without apparent powers: each line's power factor is steady in one order, as it stands not. */
   private boolean unsteady(LogDay day, double[][] watts, double[][] volts, double[][] amps) {
-    Misfit wander =
-        order -> misfit(apparent(watts, volts, amps, order), volts, amps, order, false);
+    Misfit wander = order -> misfit(apparent(watts, volts, amps, order), volts, amps, order, false);
     double straight = wander.of(STRAIGHT);
     int[] best = best(wander);
     double least = wander.of(best);
@@ -86,18 +88,20 @@ final class LineOrder {
     return made;
   }
 
-  private static double[] factors(double[][] watts, double[][] volts, double[][] amps, int[] order) {
+  private static double[] factors(
+      double[][] watts, double[][] volts, double[][] amps, int[] order) {
     double[] factors = new double[watts.length];
     java.util.Arrays.setAll(
         factors,
         line ->
             Rows.loaded(
-                amps[order[line]],
-                k -> watts[line][k] / (volts[line][k] * amps[order[line]][k])));
+                amps[order[line]], k -> watts[line][k] / (volts[line][k] * amps[order[line]][k])));
     return factors;
   }
 
-  /** 1 where a row's power factors are nearer the usual ones in this order, -1 where as it stands. */
+  /**
+   * 1 where a row's power factors are nearer the usual ones in this order, -1 where as it stands.
+   */
   private static int fits(LogDay day, int row, int[] order, double[] factors) {
     double nearer = 0;
     for (int line = 0; line < order.length; line++) {
@@ -106,7 +110,8 @@ final class LineOrder {
       double expected = at(day, name + ".active_w", row) / factors[line];
       nearer +=
           Math.abs(volts * at(day, name + ".rms_a", row) / expected - 1)
-              - Math.abs(volts * at(day, LineDay.LINES[order[line]] + ".rms_a", row) / expected - 1);
+              - Math.abs(
+                  volts * at(day, LineDay.LINES[order[line]] + ".rms_a", row) / expected - 1);
     }
     return (int) Math.signum(nearer);
   }

@@ -213,7 +213,6 @@ final class NeutralSteps {
                 + " go on: a sum can't change by more than its parts.",
             seen),
         List.of(
-            Offers.scale(List.of("N.rms_a"), factor, in),
-            Offers.leaveOut(List.of("N.rms_a"), in)));
+            Offers.scale(List.of("N.rms_a"), factor, in), Offers.leaveOut(List.of("N.rms_a"), in)));
   }
 }

@@ -14,8 +14,8 @@ import java.util.Optional;
 /**
  * A clamp that was turned for some hours: the power of one line is below zero while its current
  * flows and the other lines take power, and it is as large right before and after. Power fed back
- * grows from nothing and fades, or comes at the same hours each day; that of all lines is no clamp. Thresholds are common practice, no
- * source.
+ * grows from nothing and fades, or comes at the same hours each day; that of all lines is no clamp.
+ * Thresholds are common practice, no source.
  */
 final class TurnedRuns {
   private static final long SHORTEST_MILLIS = 3 * 3_600_000L;

@@ -428,7 +428,9 @@ class PlantedFaultsTest {
             });
   }
 
-  /** Where the orders of the lines tell a neutral's ratio, it is offered ahead of leaving it out. */
+  /**
+   * Where the orders of the lines tell a neutral's ratio, it is offered ahead of leaving it out.
+   */
   @ParameterizedTest
   @ValueSource(doubles = {10, 5, 0.1})
   void aNeutralOfAnotherRatioAllAlongIsMended(double factor) {
