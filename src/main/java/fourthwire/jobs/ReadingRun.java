@@ -13,6 +13,7 @@ import java.util.List;
 import java.util.OptionalLong;
 import java.util.concurrent.CancellationException;
 import java.util.function.BiPredicate;
+import java.util.function.DoublePredicate;
 import java.util.stream.Collectors;
 import java.util.stream.Stream;
 
@@ -77,8 +78,10 @@ public final class ReadingRun {
     }
     Reading reading = reader.read(files, plan, setting, listener(upload.id()));
     try {
-      stop.check();
-      if (!uploads.progress(upload.id(), STORING, "storing what was read")) {
+      BiPredicate<Double, String> listener = listener(upload.id());
+      DoublePredicate storing =
+          share -> listener.test(STORING + (1 - STORING) * share, "storing what was read");
+      if (!storing.test(0)) {
         throw new CancellationException("stopped before it was stored");
       }
       uploads.finish(
@@ -91,7 +94,8 @@ public final class ReadingRun {
                   plan.layout(),
                   plan.mapping(),
                   upload.mapping(),
-                  reading)));
+                  reading),
+              storing));
     } finally {
       reading.log().flatMap(LogResult::detail).ifPresent(d -> d.series().close());
     }

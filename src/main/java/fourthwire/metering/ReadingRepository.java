@@ -3,6 +3,7 @@ package fourthwire.metering;
 import java.time.Instant;
 import java.util.List;
 import java.util.Optional;
+import java.util.function.DoublePredicate;
 
 /**
  * Where readings are kept: the file as it came, the mapping it was read by, and what it says.
@@ -57,10 +58,19 @@ public interface ReadingRepository {
       Reading reading) {}
 
   /**
-   * Stores a reading in one transaction; returns its id. The same bytes at the same meter a second
-   * time add nothing: the id of the first comes back.
+   * Stores a reading, whole or not at all: the rows of a log in pieces, which nothing shows before
+   * the last is there. The same bytes at the same meter a second time add nothing: the id of the
+   * first comes back.
+   *
+   * @param goesOn is told the share stored; false gives up
+   * @throws java.util.concurrent.CancellationException where it was false; nothing is left then
    */
-  long add(Addition addition);
+  long add(Addition addition, DoublePredicate goesOn);
+
+  /** Stores a reading to its end; returns its id. */
+  default long add(Addition addition) {
+    return add(addition, share -> true);
+  }
 
   /** Remembers where a meter is, and a mapping that was confirmed for its files of a layout. */
   void remember(long siteId, MeterRef meter, String layout, Optional<ReadingMapping> confirmed);

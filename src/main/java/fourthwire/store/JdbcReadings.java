@@ -18,8 +18,8 @@ import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.HexFormat;
 import java.util.List;
-import java.util.Objects;
 import java.util.Optional;
+import java.util.function.DoublePredicate;
 import java.util.stream.Collectors;
 import org.springframework.dao.DuplicateKeyException;
 import org.springframework.jdbc.core.simple.JdbcClient;
@@ -53,17 +53,42 @@ final class JdbcReadings implements ReadingRepository {
   }
 
   @Override
-  public long add(Addition addition) {
+  public long add(Addition addition, DoublePredicate goesOn) {
     String sha256 = sha256(addition.files());
     remember(addition.siteId(), addition.meter(), addition.layout(), addition.confirmed());
+    return same(addition.siteId(), addition.meter().name(), sha256)
+        .orElseGet(() -> store(addition, sha256, goesOn));
+  }
+
+  /** Rows in pieces, files in parts; only the last step makes a reading of them. */
+  private long store(Addition addition, String sha256, DoublePredicate goesOn) {
+    long id = insert(addition);
+    List<Long> stored = new ArrayList<>();
     try {
-      return Objects.requireNonNull(
-          transaction.execute(
-              status ->
-                  same(addition.siteId(), addition.meter().name(), sha256)
-                      .orElseGet(() -> insert(addition, sha256))));
+      addition.reading().log().flatMap(LogResult::detail).ifPresent(d -> series.add(id, d, goesOn));
+      addition.files().forEach(file -> stored.add(stored(file)));
+      transaction.executeWithoutResult(status -> complete(id, sha256, addition.files(), stored));
+      return id;
     } catch (DuplicateKeyException meanwhile) {
+      takeBack(id, addition.files(), stored, meanwhile);
       return same(addition.siteId(), addition.meter().name(), sha256).orElseThrow(() -> meanwhile);
+    } catch (RuntimeException | Error e) {
+      takeBack(id, addition.files(), stored, e);
+      throw e;
+    }
+  }
+
+  /** Deletes what was stored of a reading that can't be whole; else the next start does. */
+  private void takeBack(long id, List<RawFile> raw, List<Long> stored, Throwable why) {
+    try {
+      series.deleteHalfStored(id);
+      for (int k = 0; k < stored.size(); k++) {
+        if (!(raw.get(k) instanceof StoredRawFile)) {
+          files.delete(stored.subList(k, k + 1));
+        }
+      }
+    } catch (RuntimeException again) {
+      why.addSuppressed(again);
     }
   }
 
@@ -134,32 +159,33 @@ final class JdbcReadings implements ReadingRepository {
         .update();
   }
 
-  private long insert(Addition addition, String sha256) {
-    long id =
-        Rows.insert(
-            jdbc.sql(
-                    """
-                    insert into readings (site_id, meter, sha256, added, mapping, result)
-                    values (?, ?, ?, ?, ?, ?)
-                    """)
-                .params(
-                    addition.siteId(),
-                    addition.meter().name(),
-                    sha256,
-                    Rows.now(clock),
-                    MappingJson.write(addition.mapping()).toString(),
-                    ReadingJson.write(addition.reading()).toString()));
-    for (int i = 0; i < addition.files().size(); i++) {
-      addFile(id, i, addition.files().get(i));
-    }
-    addition.reading().log().flatMap(LogResult::detail).ifPresent(d -> series.add(id, d));
-    return id;
+  private long insert(Addition addition) {
+    return Rows.insert(
+        jdbc.sql(
+                """
+                insert into readings (site_id, meter, added, mapping, result)
+                values (?, ?, ?, ?, ?)
+                """)
+            .params(
+                addition.siteId(),
+                addition.meter().name(),
+                Rows.now(clock),
+                MappingJson.write(addition.mapping()).toString(),
+                ReadingJson.write(addition.reading()).toString()));
   }
 
-  private void addFile(long readingId, int position, RawFile file) {
-    jdbc.sql("insert into reading_files (reading_id, position, name, file_id) values (?, ?, ?, ?)")
-        .params(readingId, position, file.name(), stored(file))
-        .update();
+  private void complete(long id, String sha256, List<RawFile> raw, List<Long> stored) {
+    for (int k = 0; k < raw.size(); k++) {
+      jdbc.sql(
+              "insert into reading_files (reading_id, position, name, file_id) values (?, ?, ?, ?)")
+          .params(id, k, raw.get(k).name(), stored.get(k))
+          .update();
+    }
+    int there =
+        jdbc.sql("update readings set sha256 = ? where id = ?").params(sha256, id).update();
+    if (there == 0) {
+      throw new IllegalStateException("its site was deleted while it was being stored");
+    }
   }
 
   /** A file that an upload brought into the database stays where it is. */
@@ -176,7 +202,7 @@ final class JdbcReadings implements ReadingRepository {
 
   @Override
   public List<Entry> ofSite(long siteId) {
-    return jdbc.sql(COLUMNS + " where r.site_id = ? order by r.id desc")
+    return jdbc.sql(COLUMNS + " where r.site_id = ? and r.sha256 is not null order by r.id desc")
         .param(siteId)
         .query(this::entry)
         .list();
@@ -184,7 +210,10 @@ final class JdbcReadings implements ReadingRepository {
 
   @Override
   public Optional<Entry> find(long readingId) {
-    return jdbc.sql(COLUMNS + " where r.id = ?").param(readingId).query(this::entry).optional();
+    return jdbc.sql(COLUMNS + " where r.id = ? and r.sha256 is not null")
+        .param(readingId)
+        .query(this::entry)
+        .optional();
   }
 
   private Entry entry(ResultSet row, int number) throws SQLException {

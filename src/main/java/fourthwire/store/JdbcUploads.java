@@ -30,13 +30,20 @@ final class JdbcUploads implements ReadingUploads {
   private final JdbcClient jdbc;
   private final TransactionTemplate transaction;
   private final FileStore files;
+  private final SeriesTables series;
   private final Clock clock;
   private final JobRows rows;
 
-  JdbcUploads(JdbcClient jdbc, TransactionTemplate transaction, FileStore files, Clock clock) {
+  JdbcUploads(
+      JdbcClient jdbc,
+      TransactionTemplate transaction,
+      FileStore files,
+      SeriesTables series,
+      Clock clock) {
     this.jdbc = jdbc;
     this.transaction = transaction;
     this.files = files;
+    this.series = series;
     this.clock = clock;
     this.rows = new JobRows(jdbc, "reading_uploads");
   }
@@ -271,6 +278,7 @@ final class JdbcUploads implements ReadingUploads {
         .query(Long.class)
         .list()
         .forEach(id -> end(id, State.CANCELLED, "cancelled"));
+    series.deleteHalfStored();
     files.deleteUnowned();
     return rows.requeue("waiting to be read again after a restart");
   }

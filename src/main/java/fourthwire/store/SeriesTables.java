@@ -16,28 +16,52 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Objects;
 import java.util.Optional;
+import java.util.concurrent.CancellationException;
+import java.util.function.DoublePredicate;
 import java.util.stream.DoubleStream;
 import java.util.stream.IntStream;
 import org.springframework.jdbc.core.JdbcTemplate;
 import org.springframework.jdbc.core.simple.JdbcClient;
+import org.springframework.transaction.support.TransactionTemplate;
 
 /** The rows of logs as coded columns, written a chunk of all columns at a time. */
 final class SeriesTables implements SeriesRepository {
   private static final int TIMES = -1;
 
+  /** Columns of chunks stored or deleted at once: a megabyte at most, unless a chunk has more. */
+  private static final int COLUMNS_AT_ONCE = 32;
+
   private final JdbcClient jdbc;
   private final JdbcTemplate template;
+  private final TransactionTemplate transaction;
 
-  SeriesTables(JdbcClient jdbc, JdbcTemplate template) {
+  SeriesTables(JdbcClient jdbc, JdbcTemplate template, TransactionTemplate transaction) {
     this.jdbc = jdbc;
     this.template = template;
+    this.transaction = transaction;
   }
 
-  /** Stores a log's rows; the caller keeps the transaction. */
-  void add(long readingId, LogResult.Detail detail) {
-    addQuantities(readingId, detail.series().quantities(), detail.statistics());
-    for (int chunk = 0; chunk < detail.series().chunks(); chunk++) {
-      addChunk(readingId, detail.series(), chunk);
+  /**
+   * Stores a log's rows, a few chunks at a time, as a database keeps what it may have to undo. What
+   * a failure leaves is the caller's to delete.
+   *
+   * @param goesOn is told the share stored; false lets go of the rest
+   * @throws CancellationException where it was false
+   */
+  void add(long readingId, LogResult.Detail detail, DoublePredicate goesOn) {
+    LogSeries series = detail.series();
+    transaction.executeWithoutResult(
+        status -> addQuantities(readingId, series.quantities(), detail.statistics()));
+    int atOnce = Math.max(1, COLUMNS_AT_ONCE / (series.quantities().size() + 1));
+    for (int chunk = 0; chunk < series.chunks(); chunk += atOnce) {
+      if (!goesOn.test((double) chunk / series.chunks())) {
+        throw new CancellationException("stopped while its rows were stored");
+      }
+      int first = chunk;
+      int end = Math.min(series.chunks(), chunk + atOnce);
+      transaction.executeWithoutResult(
+          status ->
+              IntStream.range(first, end).forEach(each -> addChunk(readingId, series, each)));
     }
   }
 
@@ -89,8 +113,8 @@ final class SeriesTables implements SeriesRepository {
   }
 
   /**
-   * Removes a log's rows, a quantity at a time: outside a transaction no more than that is then
-   * kept for an undo, however long the log.
+   * Removes a log's rows, some chunks of a quantity at a time: outside a transaction no more than
+   * that is then kept for an undo, however long the log.
    */
   void delete(long readingId) {
     int most =
@@ -99,9 +123,36 @@ final class SeriesTables implements SeriesRepository {
             .query(Integer.class)
             .single();
     for (int q = TIMES; q <= most; q++) {
-      jdbc.sql("delete from series_chunks where reading_id = ? and quantity = ?")
-          .params(readingId, q)
-          .update();
+      delete(readingId, q);
+    }
+  }
+
+  /** Deletes readings whose rows are not all there: only while nothing is being stored. */
+  void deleteHalfStored() {
+    jdbc.sql("select id from readings where sha256 is null")
+        .query(Long.class)
+        .list()
+        .forEach(this::deleteHalfStored);
+  }
+
+  /** Deletes a reading that was not stored whole. */
+  void deleteHalfStored(long readingId) {
+    delete(readingId);
+    jdbc.sql("delete from readings where id = ? and sha256 is null").param(readingId).update();
+  }
+
+  private void delete(long readingId, int quantity) {
+    String chunks =
+        """
+        delete from series_chunks
+        where reading_id = ? and quantity = ? and chunk >= ? and chunk < ?
+        """;
+    int from = 0;
+    while (jdbc.sql(chunks)
+            .params(readingId, quantity, from, from + COLUMNS_AT_ONCE)
+            .update()
+        > 0) {
+      from += COLUMNS_AT_ONCE;
     }
   }
 

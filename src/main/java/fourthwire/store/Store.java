@@ -38,7 +38,7 @@ public final class Store {
   /** Sites and their surveys. */
   public SiteRepository sites(SurveyCodec codec) {
     return new JdbcSites(
-        jdbc, transaction, files(), new SeriesTables(jdbc, template), codec, clock);
+        jdbc, transaction, files(), seriesTables(), codec, clock);
   }
 
   /** Audits and their results. */
@@ -48,7 +48,7 @@ public final class Store {
 
   /** Readings and their files. */
   public ReadingRepository readings() {
-    return new JdbcReadings(jdbc, transaction, files(), new SeriesTables(jdbc, template), clock);
+    return new JdbcReadings(jdbc, transaction, files(), seriesTables(), clock);
   }
 
   /** Corrections of logs. */
@@ -58,12 +58,12 @@ public final class Store {
 
   /** Rows of logs. */
   public SeriesRepository series() {
-    return new SeriesTables(jdbc, template);
+    return seriesTables();
   }
 
   /** Uploads that wait to be read. */
   public ReadingUploads uploads() {
-    return new JdbcUploads(jdbc, transaction, files(), clock);
+    return new JdbcUploads(jdbc, transaction, files(), seriesTables(), clock);
   }
 
   /** Settings of this installation. */
@@ -77,6 +77,10 @@ public final class Store {
    */
   public void forgetScheduledTasks() {
     jdbc.sql("delete from scheduled_tasks").update();
+  }
+
+  private SeriesTables seriesTables() {
+    return new SeriesTables(jdbc, template, transaction);
   }
 
   private FileStore files() {

@@ -1,6 +1,7 @@
 package fourthwire.jobs;
 
 import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.assertThatThrownBy;
 
 import fourthwire.intake.reading.LogProposal;
 import fourthwire.intake.reading.ReadingPlan;
@@ -9,12 +10,19 @@ import fourthwire.intake.reading.ReadingSetting;
 import fourthwire.intake.reading.upload.FormatReader;
 import fourthwire.metering.RawFile;
 import fourthwire.metering.Reading;
+import fourthwire.metering.ReadingRepository;
+import fourthwire.metering.ReadingRepository.MeterRef;
 import fourthwire.metering.ReadingUploads;
 import fourthwire.testsupport.Databases;
 import fourthwire.testsupport.RawFiles;
+import java.time.ZoneOffset;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.concurrent.CancellationException;
 import java.util.function.BiPredicate;
+import java.util.function.DoublePredicate;
 import javax.sql.DataSource;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.EnumSource;
@@ -126,6 +134,62 @@ class HalfReadLogTest {
     long reading = next.read(upload).reading().orElseThrow();
     assertThat(next.readings().find(reading).orElseThrow().reading().count()).isEqualTo(40_000);
     assertThat(next.uploads().recover()).isEmpty();
+  }
+
+  /** The rows of a log are stored in pieces: what a start finds of one half stored goes. */
+  @ParameterizedTest
+  @EnumSource(Databases.class)
+  void aStartDeletesHalfStoredRows(Databases kind) {
+    DataSource database = kind.migrated();
+    ReadingDesk desk = new ReadingDesk(database, new Interrupted(), stop);
+    long files = count(database, OF_A_FILE);
+    long upload = desk.take(log(), Optional.empty());
+    long reading = desk.read(upload).reading().orElseThrow();
+    long whole = count(database, OF_A_LOG);
+    JdbcClient jdbc = JdbcClient.create(database);
+    // As a process leaves it that ended while the rows were being stored.
+    jdbc.sql("delete from reading_files").update();
+    jdbc.sql("update readings set sha256 = null").update();
+    assertThat(desk.readings().ofSite(desk.site())).as("is not listed").isEmpty();
+    assertThat(desk.readings().find(reading)).isEmpty();
+    assertThat(count(database, OF_A_LOG)).isEqualTo(whole - 1);
+    desk.uploads().recover();
+    assertNothingLeft(database, files);
+  }
+
+  /** A cancel is heard while rows are being stored, and takes back those that are. */
+  @ParameterizedTest
+  @EnumSource(Databases.class)
+  void aCancelWhileRowsAreStoredLeavesNothing(Databases kind) {
+    DataSource database = kind.migrated();
+    ReadingDesk desk = new ReadingDesk(database, new Interrupted(), stop);
+    long files = count(database, OF_A_FILE);
+    List<RawFile> file = List.of(log());
+    MeterRef meter = new MeterRef("LP-1", "LP-1");
+    ReadingReader reader = new FormatReader();
+    ReadingSetting setting = 
+        new ReadingSetting(
+            Optional.of(ZoneOffset.UTC),
+            50,
+            Optional.empty(),
+            layout -> Optional.empty(),
+            List.of(),
+            OptionalDouble.empty());
+    ReadingPlan plan = reader.plan(file, setting);
+    Reading reading = reader.read(file, plan, setting, (share, message) -> true);
+    ReadingRepository.Addition addition =
+        new ReadingRepository.Addition(
+            desk.site(), meter, file, plan.layout(), plan.mapping(), Optional.empty(), reading);
+    List<Double> told = new ArrayList<>();
+    DoublePredicate untilSomeAreThere =
+        share -> {
+          told.add(share);
+          return count(database, List.of("series_chunks")) == 0;
+        };
+    assertThatThrownBy(() -> desk.readings().add(addition, untilSomeAreThere))
+        .isInstanceOf(CancellationException.class);
+    assertThat(told).as("some rows were stored").hasSizeGreaterThan(1);
+    assertNothingLeft(database, files);
   }
 
   @ParameterizedTest

@@ -91,6 +91,10 @@ final class FlaggedDays {
     if (last != null && !day.from().isAfter(last.to.plus(APART))) {
       last.add(day);
     } else {
+      if (all.size() > MOST) {
+        // One that began after those that are told only marks where the fault was seen last.
+        all.remove(MOST);
+      }
       all.add(new Stretch(fault, before.orElse(day), day));
     }
   }

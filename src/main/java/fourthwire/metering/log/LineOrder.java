@@ -198,23 +198,22 @@ final class LineOrder {
                 LineDay.LINES[order[0]],
                 LineDay.LINES[order[1]],
                 LineDay.LINES[order[2]]),
-            within -> List.of(reordered(day, what.equals("currents"), order, within)),
+            reordered(day, what.equals("currents"), order),
             rows));
   }
 
-  private static Correction reordered(
-      LogDay day, boolean currents, int[] order, Correction.Rows rows) {
+  private static Offers.Of reordered(LogDay day, boolean currents, int[] order) {
     Offers offers = new Offers(day.quantities());
     String rms = currents ? "rms_a" : "rms_v";
     String first = currents ? "current_h1_a" : "voltage_h1_v";
     boolean all = moveTogether(new LineDay(day), rms, first, order);
     List<String> measures =
         all ? offers.measures(rms, currents ? "current_" : "voltage_") : offers.measures(rms);
-    return Correction.of(
+    String sentence =
         Offers.exchanged(order)
             + (all ? " (" + (currents ? "currents" : "voltages") : " (" + rms)
-            + ")",
-        offers.reorder(order, measures, rows));
+            + ")";
+    return rows -> List.of(Correction.of(sentence, offers.reorder(order, measures, rows)));
   }
 
   /** Whether the harmonics stand under the same names as the rms: then they move with it. */
@@ -291,7 +290,7 @@ final class LineOrder {
                     LineDay.LINES[straight],
                     cosine[straight],
                     pair),
-                rows -> List.of(uncrossed(day, a, b, rows)),
+                uncrossed(day, a, b),
                 (other, row) -> crossed(other, row, straight, a, b)));
         return true;
       }
@@ -312,7 +311,7 @@ final class LineOrder {
   }
 
   /** Amps go where they belong; what the instrument formed from them with other volts is lost. */
-  private static Correction uncrossed(LogDay day, int a, int b, Correction.Rows rows) {
+  private static Offers.Of uncrossed(LogDay day, int a, int b) {
     Offers offers = new Offers(day.quantities());
     int[] order = {0, 1, 2};
     order[a] = b;
@@ -331,10 +330,12 @@ final class LineOrder {
                             + ")\\.(active_w|reactive_var|apparent_va|power_factor"
                             + "|displacement_factor|energy_wh).*"))
             .toList();
-    return Correction.of(
-        Offers.exchanged(order) + " (currents), and leave out the powers formed from them",
-        offers.reorder(order, offers.measures("rms_a", "current_"), rows),
-        new Correction.LeaveOut(lost, rows));
+    return rows ->
+        List.of(
+            Correction.of(
+                Offers.exchanged(order) + " (currents), and leave out the powers formed from them",
+                offers.reorder(order, offers.measures("rms_a", "current_"), rows),
+                new Correction.LeaveOut(lost, rows)));
   }
 
   private static boolean isCrossed(double one, double other, double angle) {

@@ -132,7 +132,7 @@ final class PowerRatios {
                 off.line(),
                 off.median(),
                 off.of()),
-            rows -> new RatioOffers(day, off.which()).ofLine(off.line(), off.median(), rows),
+            new RatioOffers(day, off.which()).ofLine(off.line(), off.median()),
             RowTest.ofRatio((other, row) -> off.which().at(other, off.line(), row), off.median())));
   }
 
@@ -153,7 +153,7 @@ final class PowerRatios {
                 first.which().word(),
                 ratio,
                 first.of()),
-            rows -> new RatioOffers(day, first.which()).ofAllLines(ratio, rows),
+            new RatioOffers(day, first.which()).ofAllLines(ratio),
             RowTest.ofRatio((other, row) -> first.which().at(other, first.line(), row), ratio)));
   }
 }

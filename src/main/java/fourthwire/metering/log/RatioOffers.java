@@ -16,18 +16,18 @@ final class RatioOffers {
   }
 
   /** The power where the ratio is a prefix of its unit; else the amps, or the power. */
-  List<Correction> ofLine(String line, double median, Correction.Rows rows) {
+  Offers.Of ofLine(String line, double median) {
     if (!(median > 0)) {
-      return List.of();
+      return rows -> List.of();
     }
     double ratio = which == LineRatio.APPARENT ? median : againstOthers(line, median);
-    return either(amps(line), powers(line), ratio, rows);
+    return either(amps(line), powers(line), ratio);
   }
 
   /** The same for all lines at once, N with them where it is the amps. */
-  List<Correction> ofAllLines(double ratio, Correction.Rows rows) {
+  Offers.Of ofAllLines(double ratio) {
     if (!(ratio > 0)) {
-      return List.of();
+      return rows -> List.of();
     }
     List<String> powers = new ArrayList<>();
     List<String> amps = new ArrayList<>();
@@ -38,18 +38,22 @@ final class RatioOffers {
     day.quantities().stream()
         .filter(q -> q.equals("N.rms_a") || isHarmonic(q, "N") && harmonicsAgree("L1"))
         .forEach(amps::add);
-    return either(amps, powers, ratio, rows);
+    return either(amps, powers, ratio);
   }
 
-  private List<Correction> either(
-      List<String> amps, List<String> powers, double ratio, Correction.Rows rows) {
+  /** What is to be known of the day is found out now, so that a fault does not hold its rows. */
+  private Offers.Of either(List<String> amps, List<String> powers, double ratio) {
     boolean follows = which != LineRatio.APPARENT && PowerRelations.totalIsSum(day);
-    Correction ofPowers = new Offers(day.quantities()).rescale(powers, ratio, follows, rows);
+    Offers offers = new Offers(day.quantities());
     // Where the apparent power fits volts and amps, the active power alone is wrong.
     boolean alone = isActive() && powers.stream().allMatch(this::hasApparent);
-    return alone || LikelyRatio.isPrefix(ratio)
-        ? List.of(ofPowers)
-        : List.of(Offers.scale(amps, 1 / ratio, rows), ofPowers);
+    boolean ofPowersOnly = alone || LikelyRatio.isPrefix(ratio);
+    return rows -> {
+      Correction ofPowers = offers.rescale(powers, ratio, follows, rows);
+      return ofPowersOnly
+          ? List.of(ofPowers)
+          : List.of(Offers.scale(amps, 1 / ratio, rows), ofPowers);
+    };
   }
 
   private List<String> powers(String line) {

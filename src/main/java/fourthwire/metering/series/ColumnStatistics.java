@@ -1,20 +1,27 @@
 package fourthwire.metering.series;
 
-import java.time.ZoneId;
 import java.util.Arrays;
 
 /**
- * Statistics of a column, in one array where it fits, else in passes over the chunks. Not
- * thread-safe: the array is used again for the next column.
+ * Statistics of a column, in memory for a week of it and the highest twentieth of all; of very many
+ * rows for a week alone. Not thread-safe: the week's array is used again for the next column.
  */
 final class ColumnStatistics {
+  /** Of more rows the percentiles are searched for in passes. */
+  private static final int MOST_IN_MEMORY = 4_000_000;
+
   private final Series series;
   private final RowWeeks rows;
-  private double[] there = new double[0];
+  private final int[] firstRow;
+  private double[] current = new double[1024];
 
   ColumnStatistics(Series series, RowWeeks rows) {
     this.series = series;
     this.rows = rows;
+    this.firstRow = new int[series.chunks() + 1];
+    for (int k = 0; k < series.chunks(); k++) {
+      firstRow[k + 1] = firstRow[k] + series.rows(k);
+    }
   }
 
   /** What a pass over the values gathers. */
@@ -26,23 +33,14 @@ final class ColumnStatistics {
     private double max = Double.NEGATIVE_INFINITY;
     private long count;
 
-    void take(double v, int hour) {
-      count++;
-      sum += v;
-      min = v < min ? v : min;
-      max = v > max ? v : max;
-      hourSum[hour] += v;
-      hourCount[hour]++;
-    }
-
     /**
      * Takes values of one hour.
      *
+     * @param there gets those that are no NaN, from {@code at} on
      * @return how many were there
      */
-    int take(double[] x, int from, int to, int hour, double[] there) {
-      int before = (int) count;
-      int n = before;
+    int take(double[] x, int from, int to, int hour, double[] there, int at) {
+      int n = at;
       double total = sum;
       double ofHour = hourSum[hour];
       double low = min;
@@ -60,10 +58,10 @@ final class ColumnStatistics {
       min = low;
       max = high;
       sum = total;
-      count = n;
+      count += n - at;
       hourSum[hour] = ofHour;
-      hourCount[hour] += n - before;
-      return n - before;
+      hourCount[hour] += n - at;
+      return n - at;
     }
 
     double[] hourMeans() {
@@ -98,103 +96,72 @@ final class ColumnStatistics {
     }
   }
 
-  QuantityStatistics inArray(int quantity) {
-    there = there.length == 0 ? new double[(int) series.rows()] : there;
+  /** A week at a time. */
+  QuantityStatistics of(int quantity) {
+    Column column = new Column(quantity);
     Sums sums = new Sums();
-    int[] end = new int[rows.weeks() + 1];
-    forEachStretch(
-        quantity,
-        (x, from, to, stretch) ->
-            end[rows.week()[stretch] + 1] += sums.take(x, from, to, rows.hour()[stretch], there));
-    for (int w = 1; w < end.length; w++) {
-      end[w] += end[w - 1];
+    Weeks weeks = new Weeks(rows.weeks());
+    boolean few = series.rows() <= MOST_IN_MEMORY;
+    Highest highest = new Highest(few ? series.rows() : 0);
+    int stretch = 0;
+    for (int week = 0; week < rows.weeks(); week++) {
+      int length = 0;
+      for (; stretch < rows.weekEnd()[week]; stretch++) {
+        length = column.take(stretch, sums, length);
+      }
+      weeks.take(week, current, 0, length);
+      if (few) {
+        highest.take(current, 0, length);
+      }
     }
-    // The weeks' values stand together in the file's order, unless the clock ran back over a week.
-    Weeks weeks = weeks(rows.rising() ? there : byWeek(quantity, end), end);
     double[] all =
-        sums.count == 0
-            ? new double[] {Double.NaN, Double.NaN}
-            : Selection.percentiles(there, 0, (int) sums.count, 95, 99);
+        few ? highest.percentiles(95, 99) : new RankSearch(series, quantity).percentiles(95, 99);
     return statistics(sums, all, weeks);
   }
 
-  private interface Stretch {
-    void take(double[] values, int from, int to, int stretch);
-  }
+  /** A column's chunks, read as the stretches ask for them. */
+  private final class Column {
+    private final int quantity;
+    private int chunk = -1;
+    private double[] x = new double[0];
 
-  /** Passes stretches of one hour on, cut where chunks end. */
-  private void forEachStretch(int quantity, Stretch taker) {
-    int stretch = 0;
-    int first = 0;
-    for (int k = 0; k < series.chunks(); k++) {
-      double[] x = series.values(k, quantity);
-      int from = 0;
-      while (from < x.length) {
-        int to = Math.min(x.length, rows.end()[stretch] - first);
-        taker.take(x, from, to, stretch);
-        stretch += first + to == rows.end()[stretch] ? 1 : 0;
-        from = to;
+    Column(int quantity) {
+      this.quantity = quantity;
+    }
+
+    /**
+     * Takes a stretch, cut where chunks end.
+     *
+     * @param length of the week's values so far
+     * @return of them then
+     */
+    int take(int stretch, Sums sums, int length) {
+      int row = rows.firstRow()[stretch];
+      int end = row + rows.rows()[stretch];
+      if (length + end - row > current.length) {
+        current = Arrays.copyOf(current, Math.max(2 * current.length, length + end - row));
       }
-      first += x.length;
+      int filled = length;
+      while (row < end) {
+        go(row);
+        int from = row - firstRow[chunk];
+        int to = Math.min(x.length, end - firstRow[chunk]);
+        filled += sums.take(x, from, to, rows.hour()[stretch], current, filled);
+        row = firstRow[chunk] + to;
+      }
+      return filled;
     }
-  }
 
-  /** Values sorted into their weeks, the place of each known from the counts. */
-  private double[] byWeek(int quantity, int[] end) {
-    int[] next = end.clone();
-    double[] byWeek = new double[end[end.length - 1]];
-    forEachStretch(
-        quantity,
-        (x, from, to, stretch) -> {
-          for (int k = from; k < to; k++) {
-            if (!Double.isNaN(x[k])) {
-              byWeek[next[rows.week()[stretch]]++] = x[k];
-            }
-          }
-        });
-    return byWeek;
-  }
-
-  private Weeks weeks(double[] byWeek, int[] end) {
-    Weeks weeks = new Weeks(rows.weeks());
-    for (int w = 0; w < rows.weeks(); w++) {
-      weeks.take(w, byWeek, end[w], end[w + 1]);
-    }
-    return weeks;
-  }
-
-  /** A week at a time; rows of an earlier week that come late are left out of it. */
-  QuantityStatistics inPasses(int quantity, ZoneId zone) {
-    Sums sums = new Sums();
-    Weeks weeks = new Weeks(rows.weeks());
-    WeekClock clock = new WeekClock(zone);
-    double[] current = new double[1 << 16];
-    int length = 0;
-    int week = 0;
-    for (int k = 0; k < series.chunks(); k++) {
-      double[] values = series.values(k, quantity);
-      long[] start = series.startMillis(k);
-      for (int row = 0; row < values.length; row++) {
-        double v = values[row];
-        if (Double.isNaN(v)) {
-          continue;
+    private void go(int row) {
+      if (chunk < 0 || row < firstRow[chunk] || row >= firstRow[chunk + 1]) {
+        int found = Arrays.binarySearch(firstRow, row);
+        chunk = found >= 0 ? found : -found - 2;
+        while (firstRow[chunk + 1] <= row) {
+          chunk++;
         }
-        sums.take(v, clock.hourOfWeek(start[row]));
-        int in = (int) (clock.week(start[row]) - rows.firstWeek());
-        if (in < week) {
-          continue;
-        }
-        if (in > week) {
-          weeks.take(week, current, 0, length);
-          week = in;
-          length = 0;
-        }
-        current = length == current.length ? Arrays.copyOf(current, 2 * length) : current;
-        current[length++] = v;
+        x = series.values(chunk, quantity);
       }
     }
-    weeks.take(week, current, 0, length);
-    return statistics(sums, new RankSearch(series, quantity).percentiles(95, 99), weeks);
   }
 
   private static QuantityStatistics statistics(Sums sums, double[] all, Weeks weeks) {

@@ -5,14 +5,14 @@ import java.util.Arrays;
 
 /**
  * In which week and hour of the week the rows are, found once for all columns: stretches of rows of
- * the same hour.
+ * the same hour, those of a week together, in the file's order.
  *
- * @param end row after each stretch's last; empty where the rows are too many to be held
- * @param week of each stretch, counted from the first
+ * @param firstRow of each stretch
+ * @param rows of each stretch
  * @param hour of the week of each stretch
- * @param rising whether no week comes again once the next has begun
+ * @param weekEnd the stretch after each week's last
  */
-record RowWeeks(long firstWeek, int weeks, int[] end, short[] week, short[] hour, boolean rising) {
+record RowWeeks(long firstWeek, int[] firstRow, int[] rows, short[] hour, int[] weekEnd) {
   static RowWeeks of(Series series, ZoneId zone) {
     WeekClock clock = new WeekClock(zone);
     long first = Long.MAX_VALUE;
@@ -25,12 +25,17 @@ record RowWeeks(long firstWeek, int weeks, int[] end, short[] week, short[] hour
       }
     }
     Stretches found = new Stretches(first, (int) Math.min(Short.MAX_VALUE, last - first + 1));
-    for (int k = 0; series.rows() <= SeriesStatistics.MOST_IN_ARRAY && k < series.chunks(); k++) {
+    for (int k = 0; k < series.chunks(); k++) {
       for (long millis : series.startMillis(k)) {
         found.take(clock.week(millis), clock.hourOfWeek(millis));
       }
     }
-    return found.done();
+    return found.byWeek();
+  }
+
+  /** How many weeks there are. */
+  int weeks() {
+    return weekEnd.length;
   }
 
   /** Stretches gathered row by row. */
@@ -40,7 +45,6 @@ record RowWeeks(long firstWeek, int weeks, int[] end, short[] week, short[] hour
     private int[] end = new int[1024];
     private short[] week = new short[1024];
     private short[] hour = new short[1024];
-    private boolean rising = true;
     private int count;
     private int rows;
 
@@ -57,21 +61,33 @@ record RowWeeks(long firstWeek, int weeks, int[] end, short[] week, short[] hour
           week = Arrays.copyOf(week, 2 * count);
           hour = Arrays.copyOf(hour, 2 * count);
         }
-        rising &= count == 0 || in >= week[count - 1];
         week[count] = in;
         hour[count++] = (short) hourOfWeek;
       }
       end[count - 1] = ++rows;
     }
 
-    RowWeeks done() {
-      return new RowWeeks(
-          firstWeek,
-          weeks,
-          Arrays.copyOf(end, count),
-          Arrays.copyOf(week, count),
-          Arrays.copyOf(hour, count),
-          rising);
+    /** Puts stretches of a week together, for a clock may run back into the week before. */
+    RowWeeks byWeek() {
+      int[] weekEnd = new int[weeks];
+      for (int s = 0; s < count; s++) {
+        weekEnd[week[s]]++;
+      }
+      int[] next = new int[weeks];
+      for (int w = 1; w < weeks; w++) {
+        weekEnd[w] += weekEnd[w - 1];
+        next[w] = weekEnd[w - 1];
+      }
+      int[] firstRow = new int[count];
+      int[] rowsOf = new int[count];
+      short[] hourOf = new short[count];
+      for (int s = 0; s < count; s++) {
+        int at = next[week[s]]++;
+        firstRow[at] = s == 0 ? 0 : end[s - 1];
+        rowsOf[at] = end[s] - firstRow[at];
+        hourOf[at] = hour[s];
+      }
+      return new RowWeeks(firstWeek, firstRow, rowsOf, hourOf, weekEnd);
     }
   }
 }

@@ -13,9 +13,6 @@ import java.util.stream.IntStream;
  * @param quantities in the order of the series
  */
 public record SeriesStatistics(long firstWeek, int weeks, List<QuantityStatistics> quantities) {
-  /** Most rows whose columns are taken into one array each. */
-  static final int MOST_IN_ARRAY = 4_000_000;
-
   /** Shares of work, each with a workplace of its own. */
   private static final int SHARES = 16;
 
@@ -32,7 +29,6 @@ public record SeriesStatistics(long firstWeek, int weeks, List<QuantityStatistic
   public static SeriesStatistics of(
       Series series, ZoneId zone, IntFunction<Optional<QuantityStatistics>> known) {
     RowWeeks rows = RowWeeks.of(series, zone);
-    boolean inArray = series.rows() <= MOST_IN_ARRAY;
     int quantities = series.quantities().size();
     int share = Math.max(1, quantities / SHARES);
     List<QuantityStatistics> all =
@@ -44,12 +40,7 @@ public record SeriesStatistics(long firstWeek, int weeks, List<QuantityStatistic
                   ColumnStatistics column = new ColumnStatistics(series, rows);
                   return IntStream.range(share * k, Math.min(quantities, share * (k + 1)))
                       .mapToObj(
-                          q ->
-                              known
-                                  .apply(q)
-                                  .orElseGet(
-                                      () ->
-                                          inArray ? column.inArray(q) : column.inPasses(q, zone)));
+                          q -> known.apply(q).orElseGet(() -> column.of(q)));
                 })
             .toList();
     return new SeriesStatistics(rows.firstWeek(), rows.weeks(), all);

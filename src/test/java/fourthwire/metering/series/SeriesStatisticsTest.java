@@ -69,8 +69,6 @@ class SeriesStatisticsTest {
         k -> random.nextInt(50) == 0 ? Double.NaN : Math.round(random.nextGaussian() * 1e4) / 1e3);
     LogSeries series = series(x, seed == 1 ? 0 : 1 << 20);
     QuantityStatistics s = SeriesStatistics.of(series, AMSTERDAM).quantities().get(0);
-    QuantityStatistics passes =
-        new ColumnStatistics(series, RowWeeks.of(series, AMSTERDAM)).inPasses(0, AMSTERDAM);
     for (int week = 0; week < 9; week++) {
       double[] rows =
           Arrays.stream(Arrays.copyOfRange(x, 1008 * week, Math.min(9000, 1008 * week + 1008)))
@@ -84,10 +82,53 @@ class SeriesStatisticsTest {
           .isEqualTo(expected, within(1e-12));
       assertThat(s.weekCount()[week]).isEqualTo(rows.length);
     }
-    assertThat(passes.weekP99()).containsExactly(s.weekP99());
-    assertThat(passes.p95()).isEqualTo(s.p95());
-    assertThat(passes.p99()).isEqualTo(s.p99());
-    assertThat(passes.hourOfWeekMean()).containsExactly(s.hourOfWeekMean());
+    assertThat(new RankSearch(series, 0).percentiles(95, 99)).containsExactly(s.p95(), s.p99());
+  }
+
+  /** A clock that is set back by ten days: weeks are those of the times, whatever the order. */
+  @ParameterizedTest
+  @ValueSource(longs = {11, 12})
+  void weeksThatComeAgainAreOne(long seed) {
+    Random random = new Random(seed);
+    double[] x = random.doubles(9000).toArray();
+    LogSeries straight = series(x, seed == 11 ? 0 : 1 << 20);
+    LogSeries turned = new LogSeries(List.of("L1.rms_a"), Parts.held(), seed == 11 ? 0 : 1 << 20);
+    for (int k : new int[] {1, 0, 2}) {
+      double[][] values = {straight.values(k, 0)};
+      turned.add(new LogChunk(straight.startMillis(k), values), Runnable::run);
+    }
+    QuantityStatistics a = SeriesStatistics.of(straight, AMSTERDAM).quantities().get(0);
+    QuantityStatistics b = SeriesStatistics.of(turned, AMSTERDAM).quantities().get(0);
+    assertThat(b.weekCount()).as("seed %d", seed).containsExactly(a.weekCount());
+    assertThat(b.weekP95()).containsExactly(a.weekP95());
+    assertThat(b.weekP99()).containsExactly(a.weekP99());
+    assertThat(b.p95()).isEqualTo(a.p95());
+    assertThat(b.hourOfWeekMean()).containsExactly(a.hourOfWeekMean(), within(1e-12));
+  }
+
+  /** The highest twentieth tells what sorting all tells, in whatever order and however alike. */
+  @ParameterizedTest
+  @ValueSource(longs = {21, 22, 23, 24, 25, 26})
+  void theHighestTellThePercentiles(long seed) {
+    Random random = new Random(seed);
+    double[] x = random.doubles(1 + random.nextInt(20_000)).toArray();
+    for (int k = 0; k < x.length; k++) {
+      x[k] = seed % 3 == 0 ? k : seed % 3 == 1 ? Math.rint(20 * x[k]) : x[k];
+    }
+    Highest highest = new Highest(x.length + random.nextInt(100));
+    for (int from = 0; from < x.length; from += 1000) {
+      highest.take(x, from, Math.min(x.length, from + 1000));
+    }
+    double[] found = highest.percentiles(95, 99);
+    Arrays.sort(x);
+    assertThat(found).as("seed %d", seed).containsExactly(linear(x, 95), linear(x, 99));
+  }
+
+  private static double linear(double[] sorted, double percent) {
+    double at = (sorted.length - 1) * percent / 100;
+    int below = (int) at;
+    double above = sorted[Math.min(below + 1, sorted.length - 1)];
+    return sorted[below] + (at - below) * (above - sorted[below]);
   }
 
   @ParameterizedTest

@@ -357,8 +357,8 @@ public final class LogFormat {
     }
   }
 
-  /** A quarter of the memory there is may hold values as numbers. */
+  /** An eighth of the memory there is may hold values as numbers. */
   private static long mostHeldValues() {
-    return Runtime.getRuntime().maxMemory() / 4 / Double.BYTES;
+    return Runtime.getRuntime().maxMemory() / 8 / Double.BYTES;
   }
 }

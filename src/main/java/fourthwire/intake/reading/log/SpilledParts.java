@@ -12,7 +12,9 @@ import org.jspecify.annotations.Nullable;
 
 /** Coded columns in memory while they are small, then in a temporary file that goes with them. */
 final class SpilledParts implements Parts {
-  private static final long MOST_HELD_BYTES = 48L << 20;
+  /** A share of the memory there is, for two logs may be read at once; of much memory no more. */
+  private static final long MOST_HELD_BYTES =
+      Math.min(48L << 20, Runtime.getRuntime().maxMemory() / 32);
 
   private byte[] @Nullable [] held = new byte[1024][];
   private long[] position = new long[1024];
