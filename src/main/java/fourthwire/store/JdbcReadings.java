@@ -181,8 +181,7 @@ final class JdbcReadings implements ReadingRepository {
           .params(id, k, raw.get(k).name(), stored.get(k))
           .update();
     }
-    int there =
-        jdbc.sql("update readings set sha256 = ? where id = ?").params(sha256, id).update();
+    int there = jdbc.sql("update readings set sha256 = ? where id = ?").params(sha256, id).update();
     if (there == 0) {
       throw new IllegalStateException("its site was deleted while it was being stored");
     }

@@ -60,8 +60,7 @@ final class SeriesTables implements SeriesRepository {
       int first = chunk;
       int end = Math.min(series.chunks(), chunk + atOnce);
       transaction.executeWithoutResult(
-          status ->
-              IntStream.range(first, end).forEach(each -> addChunk(readingId, series, each)));
+          status -> IntStream.range(first, end).forEach(each -> addChunk(readingId, series, each)));
     }
   }
 
@@ -148,9 +147,7 @@ final class SeriesTables implements SeriesRepository {
         where reading_id = ? and quantity = ? and chunk >= ? and chunk < ?
         """;
     int from = 0;
-    while (jdbc.sql(chunks)
-            .params(readingId, quantity, from, from + COLUMNS_AT_ONCE)
-            .update()
+    while (jdbc.sql(chunks).params(readingId, quantity, from, from + COLUMNS_AT_ONCE).update()
         > 0) {
       from += COLUMNS_AT_ONCE;
     }

@@ -37,8 +37,7 @@ public final class Store {
 
   /** Sites and their surveys. */
   public SiteRepository sites(SurveyCodec codec) {
-    return new JdbcSites(
-        jdbc, transaction, files(), seriesTables(), codec, clock);
+    return new JdbcSites(jdbc, transaction, files(), seriesTables(), codec, clock);
   }
 
   /** Audits and their results. */

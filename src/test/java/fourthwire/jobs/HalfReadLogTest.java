@@ -167,7 +167,7 @@ class HalfReadLogTest {
     List<RawFile> file = List.of(log());
     MeterRef meter = new MeterRef("LP-1", "LP-1");
     ReadingReader reader = new FormatReader();
-    ReadingSetting setting = 
+    ReadingSetting setting =
         new ReadingSetting(
             Optional.of(ZoneOffset.UTC),
             50,

@@ -39,8 +39,7 @@ public record SeriesStatistics(long firstWeek, int weeks, List<QuantityStatistic
                 k -> {
                   ColumnStatistics column = new ColumnStatistics(series, rows);
                   return IntStream.range(share * k, Math.min(quantities, share * (k + 1)))
-                      .mapToObj(
-                          q -> known.apply(q).orElseGet(() -> column.of(q)));
+                      .mapToObj(q -> known.apply(q).orElseGet(() -> column.of(q)));
                 })
             .toList();
     return new SeriesStatistics(rows.firstWeek(), rows.weeks(), all);
