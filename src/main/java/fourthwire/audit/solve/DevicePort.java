@@ -4,8 +4,6 @@ import fourthwire.audit.plan.Device;
 import fourthwire.load.model.LoadSolver;
 import fourthwire.load.model.NoSteadyStateException;
 import fourthwire.load.model.PortSpectra;
-import fourthwire.network.Excitation;
-import fourthwire.network.OrderSolution;
 import fourthwire.network.TreeNetwork;
 import fourthwire.quantity.Spectrum;
 import java.util.Arrays;
@@ -34,25 +32,18 @@ final class DevicePort {
   private final PortPlace place;
   private final PortPlace group;
   private final PortPlace home;
-  private final double weight;
-  private final int[] from;
-  private final int to;
+  private final Terminals terminals;
   private final LoadSolver solver;
   private final PortSpectra emf;
   private final PortSpectra drawn;
   private final int offset;
-  private double seriesOhm;
-  private double seriesHenry;
-  private double sharedOhm;
-  private double sharedHenry;
-  private double[] voltage = new double[0];
+  private SeriesOhms series = SeriesOhms.NONE;
+  private SeriesOhms shared = SeriesOhms.NONE;
   private double[] behind = new double[0];
   private double[] facing = new double[0];
   private Optional<LoadSlope> slope = Optional.empty();
   private boolean ownSlope;
   private Optional<JointLoads> joint = Optional.empty();
-  private double voltageMovedV;
-  private double[] standing = new double[0];
   private String failure = "";
 
   /**
@@ -78,13 +69,11 @@ final class DevicePort {
     this.place = place;
     this.group = group;
     this.home = home;
-    this.weight = weight;
-    this.from = place.fromIndices(network);
-    this.to = place.toIndex(network);
+    this.terminals = new Terminals(place, weight, network);
     this.offset = offset;
     this.solver = device.model().newSolver();
-    this.emf = new PortSpectra(from.length);
-    this.drawn = new PortSpectra(from.length);
+    this.emf = new PortSpectra(ports());
+    this.drawn = new PortSpectra(ports());
   }
 
   /**
@@ -107,11 +96,6 @@ final class DevicePort {
     return home;
   }
 
-  /** How many loads like it stand here. */
-  double weight() {
-    return weight;
-  }
-
   PortPlace group() {
     return group;
   }
@@ -121,7 +105,7 @@ final class DevicePort {
   }
 
   int ports() {
-    return from.length;
+    return terminals.ports();
   }
 
   int offset() {
@@ -132,40 +116,34 @@ final class DevicePort {
     return device.placement().request().nominalPortV();
   }
 
-  void setSeries(double ohm, double henry) {
-    seriesOhm = ohm;
-    seriesHenry = henry;
+  /** How many loads like it stand here. */
+  double weight() {
+    return terminals.weight();
   }
 
-  /** Of the series R-L, what lies above the group. */
-  void setShared(double ohm, double henry) {
-    sharedOhm = ohm;
-    sharedHenry = henry;
+  /** Where it meets the network. */
+  Terminals terminals() {
+    return terminals;
   }
 
-  double seriesOhm() {
-    return seriesOhm;
+  /**
+   * Sets what it is solved behind.
+   *
+   * @param shared of that, what lies above the group
+   */
+  void setSeries(SeriesOhms whole, SeriesOhms shared) {
+    this.series = whole;
+    this.shared = shared;
   }
 
-  double seriesHenry() {
-    return seriesHenry;
+  /** Of the series impedance, what lies above the group. */
+  SeriesOhms shared() {
+    return shared;
   }
 
-  double sharedOhm() {
-    return sharedOhm;
-  }
-
-  double sharedHenry() {
-    return sharedHenry;
-  }
-
-  /** Of the series R-L, what lies below the group. */
-  double ownOhm() {
-    return Math.max(0, seriesOhm - sharedOhm);
-  }
-
-  double ownHenry() {
-    return Math.max(0, seriesHenry - sharedHenry);
+  /** Of the series impedance, what lies below the group. */
+  SeriesOhms own() {
+    return series.beyond(shared);
   }
 
   /** It is solved with others from now on. */
@@ -183,11 +161,6 @@ final class DevicePort {
     return 2 * ports() * orders.count();
   }
 
-  /** The largest change of a voltage of one order since the pass before, volts. */
-  double voltageMovedV() {
-    return voltageMovedV;
-  }
-
   /** Why the last solution failed; empty if it did not. */
   String failure() {
     return failure;
@@ -200,53 +173,6 @@ final class DevicePort {
         .toList();
   }
 
-  /** Voltage of one port in one order's solution, real part. */
-  double voltageRe(int port, OrderSolution s) {
-    return s.potentialRe(from[port]) - (to == PortPlace.NONE ? 0 : s.potentialRe(to));
-  }
-
-  /** Likewise, imaginary part. */
-  double voltageIm(int port, OrderSolution s) {
-    return s.potentialIm(from[port]) - (to == PortPlace.NONE ? 0 : s.potentialIm(to));
-  }
-
-  /** Draws a current at one port: out of the line, back into the return conductor. */
-  void draw(Excitation excitation, int port, double re, double im) {
-    excitation.inject(from[port], -weight * re, -weight * im);
-    if (to != PortPlace.NONE) {
-      excitation.inject(to, weight * re, weight * im);
-    }
-  }
-
-  /** From now on it is told how much its voltages differ from those it has. */
-  void standHere() {
-    standing = voltage.clone();
-  }
-
-  /** From now on it is told its voltages. */
-  void standAnywhere() {
-    standing = new double[0];
-  }
-
-  /** Takes the voltages of the solved orders. */
-  void takeVoltages(OrdersInPlay orders, OrderSolution[] solutions) {
-    boolean first = voltage.length == 0;
-    voltage = first ? new double[length(orders)] : voltage;
-    double moved = 0;
-    int at = 0;
-    for (int port = 0; port < from.length; port++) {
-      for (int k = 0; k < orders.count(); k++) {
-        OrderSolution s = solutions[orders.at(k)];
-        double re = voltageRe(port, s) + (standing.length == 0 ? 0 : standing[at]);
-        double im = voltageIm(port, s) + (standing.length == 0 ? 0 : standing[at + 1]);
-        moved = Math.max(moved, Math.hypot(re - voltage[at], im - voltage[at + 1]));
-        voltage[at++] = re;
-        voltage[at++] = im;
-      }
-    }
-    voltageMovedV = moved;
-  }
-
   /**
    * Solves the load at the voltages taken; where its slope says that its current hardly moves, by
    * that slope.
@@ -255,8 +181,8 @@ final class DevicePort {
    * @param g receives what it draws now, in its place
    */
   void solve(OrdersInPlay orders, double omega, double[] x, double[] g) {
-    double[] now = voltage.clone();
-    addDrop(orders, seriesOhm, omega * seriesHenry, x, offset, now);
+    double[] now = terminals.voltage();
+    series.addDrop(orders, omega, x, offset, now);
     if (slope.isEmpty()) {
       solveAt(orders, now, g);
       return;
@@ -275,7 +201,7 @@ final class DevicePort {
     solveAt(orders, now, g);
     if (failure.isEmpty()) {
       double[] moved = difference(Arrays.copyOfRange(g, offset, offset + now.length), before);
-      addDrop(orders, -OPENED * sharedOhm, -OPENED * omega * sharedHenry, moved, 0, change);
+      shared.times(-OPENED).addDrop(orders, omega, moved, 0, change);
       slope.get().learn(orders, change, moved);
     }
   }
@@ -297,7 +223,7 @@ final class DevicePort {
     double[] step = difference(part(orders, g), part(orders, x));
     double[] drop = new double[size];
     double[] all = joint.map(loads -> loads.step(orders, x, g)).orElse(step);
-    addDrop(orders, OPENED * sharedOhm, OPENED * omega * sharedHenry, all, 0, drop);
+    shared.times(OPENED).addDrop(orders, omega, all, 0, drop);
     double[] answer = new double[size];
     slope().multiply(orders, drop, answer);
     for (int i = 0; i < size; i++) {
@@ -310,7 +236,7 @@ final class DevicePort {
     putEmf(orders, now);
     failure = "";
     try {
-      solver.solve(emf, seriesOhm, seriesHenry, drawn);
+      solver.solve(emf, series.ohm(), series.henry(), drawn);
       orders.copy(drawn, g, offset);
       behind = now;
     } catch (NoSteadyStateException e) {
@@ -320,7 +246,7 @@ final class DevicePort {
 
   private void putEmf(OrdersInPlay orders, double[] now) {
     int at = 0;
-    for (int port = 0; port < from.length; port++) {
+    for (int port = 0; port < ports(); port++) {
       for (int k = 0; k < orders.count(); k++) {
         emf.re[port][orders.at(k)] = now[at++];
         emf.im[port][orders.at(k)] = now[at++];
@@ -361,9 +287,9 @@ final class DevicePort {
    * @param total what all of them drew when its voltage was solved
    */
   void face(OrdersInPlay orders, double omega, double[] x, double[] total) {
-    facing = voltage.clone();
-    addDrop(orders, ownOhm(), omega * ownHenry(), x, offset, facing);
-    addDrop(orders, sharedOhm, omega * sharedHenry, total, 0, facing);
+    facing = terminals.voltage();
+    own().addDrop(orders, omega, x, offset, facing);
+    shared.addDrop(orders, omega, total, 0, facing);
     putEmf(orders, facing);
   }
 
@@ -384,25 +310,10 @@ final class DevicePort {
   void learn(OrdersInPlay orders, double omega, double[] before, double[] all, double[] g) {
     if (slope.isPresent()) {
       double[] change = difference(facing, behind);
-      addDrop(orders, -OPENED * sharedOhm, -OPENED * omega * sharedHenry, all, 0, change);
+      shared.times(-OPENED).addDrop(orders, omega, all, 0, change);
       slope.get().learn(orders, change, difference(part(orders, g), before));
     }
     behind = facing;
-  }
-
-  /** Adds what a current, from its place in a row, drops over a series R-X. */
-  private void addDrop(
-      OrdersInPlay orders, double ohm, double reactance, double[] amps, int start, double[] volts) {
-    int at = 0;
-    for (int port = 0; port < from.length; port++) {
-      for (int k = 0; k < orders.count(); k++) {
-        double re = amps[start + at];
-        double im = amps[start + at + 1];
-        double x = orders.at(k) * reactance;
-        volts[at++] += ohm * re - x * im;
-        volts[at++] += ohm * im + x * re;
-      }
-    }
   }
 
   /** Whether the two half-waves of what it drew last differ. */
@@ -453,17 +364,17 @@ final class DevicePort {
     if (joint.isPresent() && !solvesAlone(orders, omega)) {
       return;
     }
-    new SlopeFinder(solver, emf, drawn, seriesOhm, seriesHenry)
+    new SlopeFinder(solver, emf, drawn, series)
         .find(orders, SLOPE_STEP * nominalV(), wholly, slope);
-    slope.open(orders, OPENED * sharedOhm, OPENED * omega * sharedHenry);
+    slope.open(orders, shared.times(OPENED), omega);
   }
 
   private boolean solvesAlone(OrdersInPlay orders, double omega) {
-    double[] now = voltage.clone();
-    addDrop(orders, seriesOhm, omega * seriesHenry, drawnRow(orders), 0, now);
+    double[] now = terminals.voltage();
+    series.addDrop(orders, omega, drawnRow(orders), 0, now);
     putEmf(orders, now);
     try {
-      solver.solve(emf, seriesOhm, seriesHenry, drawn);
+      solver.solve(emf, series.ohm(), series.henry(), drawn);
       return true;
     } catch (NoSteadyStateException none) {
       return false;

@@ -54,18 +54,18 @@ final class DeviceSlope {
   /**
    * From the slope J behind a series impedance S to the slope K before it: K = (1 - J·S)⁻¹·J.
    *
-   * @param reactance at the fundamental, ohms
+   * @param omega of the fundamental, 1/s
    */
-  void open(OrdersInPlay orders, double ohm, double reactance) {
+  void open(OrdersInPlay orders, SeriesOhms series, double omega) {
     double[][] matrix = new double[size][size];
     double[][] sides = new double[size][size];
     for (int column = 0; column < size; column += 2) {
-      double x = reactance * orders.at(column / 2 % orders.count());
+      double x = series.henry() * omega * orders.at(column / 2 % orders.count());
       for (int row = 0; row < size; row++) {
         double re = get(row, column);
         double im = get(row, column + 1);
-        matrix[row][column] = -(re * ohm + im * x);
-        matrix[row][column + 1] = -(im * ohm - re * x);
+        matrix[row][column] = -(re * series.ohm() + im * x);
+        matrix[row][column + 1] = -(im * series.ohm() - re * x);
         sides[row][column] = re;
         sides[row][column + 1] = im;
       }
@@ -94,17 +94,17 @@ final class DeviceSlope {
    *
    * @param together T, the slope of all before it
    */
-  void open(OrdersInPlay orders, double ohm, double reactance, DeviceSlope together) {
+  void open(OrdersInPlay orders, SeriesOhms series, double omega, DeviceSlope together) {
     DeviceSlope behind = new DeviceSlope(size);
     double[] dropped = new double[size];
     double[] answer = new double[size];
     for (int column = 0; column < size; column++) {
       for (int row = 0; row < size; row += 2) {
-        double x = reactance * orders.at(row / 2 % orders.count());
+        double x = series.henry() * omega * orders.at(row / 2 % orders.count());
         double re = together.get(row, column);
         double im = together.get(row + 1, column);
-        dropped[row] = ohm * re - x * im;
-        dropped[row + 1] = ohm * im + x * re;
+        dropped[row] = series.ohm() * re - x * im;
+        dropped[row + 1] = series.ohm() * im + x * re;
       }
       multiply(dropped, answer);
       for (int row = 0; row < size; row++) {

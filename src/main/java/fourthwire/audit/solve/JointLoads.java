@@ -110,13 +110,13 @@ final class JointLoads implements SharedSource {
   @Override
   public double ohm(int load, int other) {
     DevicePort port = members.get(load);
-    return port.sharedOhm() + (load == other ? port.ownOhm() : 0);
+    return port.shared().ohm() + (load == other ? port.own().ohm() : 0);
   }
 
   @Override
   public double henry(int load, int other) {
     DevicePort port = members.get(load);
-    return port.sharedHenry() + (load == other ? port.ownHenry() : 0);
+    return port.shared().henry() + (load == other ? port.own().henry() : 0);
   }
 
   /** Solves the members at the voltages they have taken; as {@link DevicePort#solve}. */
@@ -170,11 +170,10 @@ final class JointLoads implements SharedSource {
     List<DeviceSlope> slopes = stepAll(orders);
     DeviceSlope together = new DeviceSlope(members.get(0).length(orders));
     slopes.forEach(together::add);
-    double ohm = DevicePort.OPENED * members.get(0).sharedOhm();
-    double reactance = DevicePort.OPENED * omega * members.get(0).sharedHenry();
-    together.open(orders, ohm, reactance);
+    SeriesOhms opened = members.get(0).shared().times(DevicePort.OPENED);
+    together.open(orders, opened, omega);
     for (int m = 0; m < slopes.size(); m++) {
-      slopes.get(m).open(orders, ohm, reactance, together);
+      slopes.get(m).open(orders, opened, omega, together);
       members.get(m).setSlope(new LoadSlope(slopes.get(m), 1, 0), own);
     }
   }

@@ -59,8 +59,11 @@ final class SeriesEstimate {
           put(above.times(port.weight()), d, k, shared);
         });
     for (int d = 0; d < ports.size(); d++) {
-      ports.get(d).setSeries(median(whole[2 * d]), median(whole[2 * d + 1]));
-      ports.get(d).setShared(median(shared[2 * d]), median(shared[2 * d + 1]));
+      ports
+          .get(d)
+          .setSeries(
+              new SeriesOhms(median(whole[2 * d]), median(whole[2 * d + 1])),
+              new SeriesOhms(median(shared[2 * d]), median(shared[2 * d + 1])));
     }
   }
 
@@ -101,8 +104,8 @@ final class SeriesEstimate {
         DevicePort port = ports.get(d);
         double size = port.device().roughA();
         double turn = h * angle[d];
-        double re = -port.voltageRe(0, response) / size;
-        double im = -port.voltageIm(0, response) / size;
+        double re = -port.terminals().re(0, response) / size;
+        double im = -port.terminals().im(0, response) / size;
         ohm[d][k] = counts(port, h) ? re * Math.cos(turn) + im * Math.sin(turn) : Double.NaN;
         henry[d][k] =
             counts(port, h)
@@ -111,7 +114,7 @@ final class SeriesEstimate {
       }
     }
     for (int d = 0; d < ports.size(); d++) {
-      ports.get(d).setSeries(median(ohm[d]), median(henry[d]));
+      ports.get(d).setSeries(new SeriesOhms(median(ohm[d]), median(henry[d])), SeriesOhms.NONE);
     }
   }
 
@@ -128,7 +131,7 @@ final class SeriesEstimate {
         double size = port.device().roughA();
         for (int line = 0; line < port.ports(); line++) {
           double turn = order * (angle[d] - line * 2 * Math.PI / 3);
-          port.draw(excitation, line, size * Math.cos(turn), size * Math.sin(turn));
+          port.terminals().draw(excitation, line, size * Math.cos(turn), size * Math.sin(turn));
         }
       }
     }
@@ -136,7 +139,7 @@ final class SeriesEstimate {
   }
 
   private static double angle(DevicePort port, OrderSolution s) {
-    return Math.atan2(port.voltageIm(0, s), port.voltageRe(0, s));
+    return Math.atan2(port.terminals().im(0, s), port.terminals().re(0, s));
   }
 
   /** The median of the numbers among the values, 0 if it is negative. */

@@ -48,7 +48,7 @@ final class Settling {
     for (int d = 0; d < changes.length; d++) {
       DevicePort load = loads.get(d);
       changes[d] = look(load, x, g);
-      worstMove = Math.max(worstMove, load.voltageMovedV() / load.nominalV());
+      worstMove = Math.max(worstMove, load.terminals().movedV() / load.nominalV());
     }
     for (ActiveFilter filter : filters) {
       double change = change(filter.offset(), 2 * filter.ports() * orders.count(), x, g);

@@ -309,7 +309,7 @@ final class SiteIteration {
 
   /** What the loads draw at the solved voltages, into g; the reason where one can't. */
   private String image(double[] x, double[] g) {
-    workers.each(loads.size(), d -> loads.get(d).takeVoltages(orders, state.solutions()));
+    workers.each(loads.size(), d -> loads.get(d).terminals().take(orders, state.solutions()));
     workers.each(together.size(), k -> together.get(k).solve(orders, omega, x, g));
     workers.each(alone.size(), d -> alone.get(d).solve(orders, omega, x, g));
     filters.forEach(filter -> filter.solve(orders, state.solutions(), x, g));

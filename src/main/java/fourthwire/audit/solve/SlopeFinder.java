@@ -13,8 +13,7 @@ final class SlopeFinder {
   private final LoadSolver solver;
   private final PortSpectra emf;
   private final PortSpectra drawn;
-  private final double seriesOhm;
-  private final double seriesHenry;
+  private final SeriesOhms series;
 
   /**
    * A finder.
@@ -23,12 +22,11 @@ final class SlopeFinder {
    * @param drawn what it drew then; used as a work block
    */
   SlopeFinder(
-      LoadSolver solver, PortSpectra emf, PortSpectra drawn, double seriesOhm, double seriesHenry) {
+      LoadSolver solver, PortSpectra emf, PortSpectra drawn, SeriesOhms series) {
     this.solver = solver;
     this.emf = emf;
     this.drawn = drawn;
-    this.seriesOhm = seriesOhm;
-    this.seriesHenry = seriesHenry;
+    this.series = series;
   }
 
   /**
@@ -71,7 +69,7 @@ final class SlopeFinder {
     for (double signed : new double[] {step, -step}) {
       part[order] = unstepped + signed;
       try {
-        solver.solve(emf, seriesOhm, seriesHenry, drawn);
+        solver.solve(emf, series.ohm(), series.henry(), drawn);
         return signed;
       } catch (NoSteadyStateException onThisSide) {
         // The other side is tried.

@@ -92,7 +92,7 @@ final class StateNetwork {
     for (DevicePort load : loads) {
       for (int port = 0; port < load.ports(); port++) {
         int at = load.offset() + 2 * (port * orders.count() + position);
-        load.draw(excitation, port, x[at], x[at + 1]);
+        load.terminals().draw(excitation, port, x[at], x[at + 1]);
       }
     }
   }

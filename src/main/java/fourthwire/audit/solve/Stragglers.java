@@ -68,7 +68,7 @@ final class Stragglers {
     if (loads.stream().allMatch(DevicePort::hasSlope)) {
       newton.keepSlopes();
     }
-    loads.forEach(DevicePort::standHere);
+    loads.forEach(load -> load.terminals().standHere());
     settling.look(x, g);
     double before = settling.change();
     for (int pass = 1; pass <= MOST_PASSES && !settled(); pass++) {
@@ -86,7 +86,7 @@ final class Stragglers {
       }
       settling.look(x, g);
     }
-    loads.forEach(DevicePort::standAnywhere);
+    loads.forEach(load -> load.terminals().standAnywhere());
     loads.forEach(load -> load.slope().forgetAdded());
     if (failed() || settling.change() > before) {
       System.arraycopy(start, 0, x, 0, x.length);
@@ -102,7 +102,7 @@ final class Stragglers {
   }
 
   private void follow(DevicePort load, double[] x, double[] g) {
-    load.takeVoltages(orders, answers);
+    load.terminals().take(orders, answers);
     load.solve(orders, omega, x, g);
   }
 
