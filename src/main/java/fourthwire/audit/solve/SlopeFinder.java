@@ -21,8 +21,7 @@ final class SlopeFinder {
    * @param emf at which the load was solved last
    * @param drawn what it drew then; used as a work block
    */
-  SlopeFinder(
-      LoadSolver solver, PortSpectra emf, PortSpectra drawn, SeriesOhms series) {
+  SlopeFinder(LoadSolver solver, PortSpectra emf, PortSpectra drawn, SeriesOhms series) {
     this.solver = solver;
     this.emf = emf;
     this.drawn = drawn;
