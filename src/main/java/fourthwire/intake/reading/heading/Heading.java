@@ -7,6 +7,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
+import java.util.function.UnaryOperator;
 import java.util.regex.Pattern;
 import java.util.stream.Collectors;
 
@@ -55,7 +56,8 @@ public record Heading(
   public static Map<String, Heading> ofLog(List<String> headings) {
     Map<String, LogWords> words = new LinkedHashMap<>();
     boolean lettered = headings.stream().anyMatch(h -> LETTERED.matcher(h).find());
-    headings.forEach(h -> words.put(h, LogWords.of(h, lettered)));
+    UnaryOperator<String> numbered = MotorLetters.of(headings);
+    headings.forEach(h -> words.put(h, LogWords.of(numbered.apply(h), lettered)));
     LogPlace places =
         new LogPlace(
             words.values().stream()

@@ -47,6 +47,10 @@ final class LogWords {
     phrase("thd[\\s-]?f\\b", " thd ");
     phrase("thd[\\s_-]r(?![\\p{L}\\d])(?=.*\\d|.*[abc]\\b)", " thdr ");
     phrase("(?<=\\b(?:[iuv]?l?|phase |ph)[123abc]\\b.{0,40})thd[\\s_-]r\\b", " thdr ");
+    phrase("(?<!\\p{L})([uv])_?n[\\s_-]?(?:g|gnd|pe|earth|ground)(?![\\p{L}\\p{N}])", " $1n ");
+    phrase(
+        "neutral[\\s-]*(?:to)?[\\s-]*(?:earth|ground|gnd|pe)[\\s-]*(voltage|volts?)(?!\\p{L})",
+        " neutral $1 ");
     phrase("tan\\s*[-_(]?\\s*(phi|φ)\\s*\\)?", " tanphi ");
   }
 

@@ -85,7 +85,7 @@ record NumberStyle(boolean decimalComma, List<Integer> openColumns) {
           columns.add(new Count());
         }
         if (!CellTime.isTime(row.get(k))) {
-          columns.get(k).take(row.get(k));
+          columns.get(k).take(Numbers.negative(row.get(k)));
         }
       }
     }

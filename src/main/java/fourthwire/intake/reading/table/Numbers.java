@@ -4,6 +4,7 @@ import java.math.BigDecimal;
 import java.nio.charset.Charset;
 import java.util.Locale;
 import java.util.Set;
+import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 
 /** Numbers as cells hold them. */
@@ -91,6 +92,10 @@ final class Numbers {
   static final String UNIT = "(?:%|VA|V|A|W|[vV][aA][rR]|Hz|°)";
 
   private static final Pattern UNIT_BEHIND = Pattern.compile("(?<=[\\d.,])\\s?" + UNIT + "$");
+  /** A negative number as accounts write it. */
+  private static final Pattern IN_BRACKETS =
+      Pattern.compile("\\(\\s*([\\d.,][\\d.,\\s'’]*?(?:[eE][+-]?\\d+)?)\\s*\\)");
+
   private static final Pattern BLANKS = Pattern.compile("[\\s\\h\\uFEFF\\u001A]+");
   private static final Pattern ENDS = Pattern.compile("^[-+]+|[!*]+$");
   private static final Pattern PLAIN =
@@ -189,10 +194,19 @@ final class Numbers {
   /** Blanks of every kind as one, a true minus as the hyphen, a unit behind taken off. */
   private static String plain(String text) {
     String plain = BLANKS.matcher(text).replaceAll(" ").trim().replace('\u2212', '-');
-    plain = UNIT_BEHIND.matcher(plain).replaceFirst("");
+    plain = negative(UNIT_BEHIND.matcher(plain).replaceFirst(""));
     return plain.startsWith("- ") || plain.startsWith("+ ")
         ? plain.charAt(0) + plain.substring(2)
         : plain;
+  }
+
+  /** A number in brackets with the sign it stands for; any other text as it is. */
+  static String negative(String text) {
+    if (!text.startsWith("(")) {
+      return text;
+    }
+    Matcher m = IN_BRACKETS.matcher(text);
+    return m.matches() ? "-" + m.group(1) : text;
   }
 
   /** Whether a text is digits with at most one mark between them, as nearly all cells are. */

@@ -34,6 +34,7 @@ public final class OpenUnits {
 
   private void settle(PowerUnits powers) {
     placeless();
+    passOverCounters();
     open.each(Meaning.LIKELY, ".*\\.rms_v", this::voltage);
     powers.settlePowers();
     powers.settleCurrents();
@@ -54,6 +55,18 @@ public final class OpenUnits {
                       .anyMatch(o -> o != h && o.quantity().endsWith("." + h.quantity()));
               return h.meaning() == Meaning.PLACELESS && beside ? Heading.none() : h;
             });
+  }
+
+  /** Readings of a counter are no energies of intervals: they never fall, and stand far above a step. */
+  private void passOverCounters() {
+    open.all()
+        .replaceAll(
+            (column, h) ->
+                h.quantity().endsWith("energy_wh") && open.values().isCounter(column)
+                    ? Heading.leftOut(
+                        "it never falls, as the register of a counter; a log holds the energy of"
+                            + " each interval")
+                    : h);
   }
 
   private Heading voltage(String column) {

@@ -13,6 +13,11 @@ import java.util.function.IntToDoubleFunction;
 public final class SampledColumns {
   private static final int ROWS = 1000;
 
+  /** Energies of a few intervals may rise by themselves. */
+  private static final int FEW_ROWS = 12;
+
+  private static final double LEAST_STEPS = 5;
+
   private final Map<String, double[]> columns = new LinkedHashMap<>();
   private final List<String> openNumbers;
 
@@ -47,6 +52,22 @@ public final class SampledColumns {
   /** Median of a column's absolute values; NaN without any. */
   double median(String column) {
     return percentile(of(column), 50);
+  }
+
+  /** Whether values go one way only, in steps that are small beside them. */
+  boolean isCounter(String column) {
+    double[] x = Arrays.stream(of(column)).filter(v -> !Double.isNaN(v)).toArray();
+    int rising = 0;
+    int falling = 0;
+    double largest = 0;
+    for (int k = 1; k < x.length; k++) {
+      rising += x[k] > x[k - 1] ? 1 : 0;
+      falling += x[k] < x[k - 1] ? 1 : 0;
+      largest = Math.max(largest, Math.abs(x[k] - x[k - 1]));
+    }
+    boolean oneWay = (rising == 0) != (falling == 0);
+    double end = x.length == 0 ? 0 : Math.max(x[0], x[x.length - 1]);
+    return oneWay && x.length > FEW_ROWS && end > LEAST_STEPS * largest;
   }
 
   /** Median of the rows' ratios; NaN where one of the two is not there. */

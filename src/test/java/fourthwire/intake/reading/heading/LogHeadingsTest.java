@@ -94,7 +94,17 @@ class LogHeadingsTest {
         "I1 THD (%) | x | L1.current_thd_percent | 1",
         "tan phi | x | - | 1",
         "U1 (Vpp) | x | - | 1",
-        "U1 (Vpk) | x | - | 1"
+        "U1 (Vpk) | x | - | 1",
+        "Iu (A) | Iv Iw | L1.rms_a | 1",
+        "Iw | Iu Iv | L3.rms_a | 1",
+        "Iu (A) | Iv | rms_a | 1",
+        "Uv | Uu Uw | L2.rms_v | 1",
+        "Uvw (V) | Uuv Uwu | L2-L3.rms_v | 1",
+        "Current W (A) | Current_U Current_V | L3.rms_a | 1",
+        "Vng | x | N.rms_v | 1",
+        "Vn-g (V) | Van | N.rms_v | 1",
+        "Neutral to ground voltage (V) | x | N.rms_v | 1",
+        "Neutral-ground current (A) | x | - | 1"
       })
   void saysWhatItHolds(String heading, String others, String quantity, double factor) {
     List<String> file = new java.util.ArrayList<>(List.of(heading));
