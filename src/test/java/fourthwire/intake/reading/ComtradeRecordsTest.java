@@ -82,6 +82,16 @@ class ComtradeRecordsTest {
     return w;
   }
 
+  /** A byte order mark first, and a comma behind the name of the data's format. */
+  @Test
+  void marksThatOtherProgramsLeaveAreNoFault() throws java.io.IOException {
+    RecordWriter w = bent(r -> r.format = "ASCII");
+    String text = new String(w.combined().get(0).open().readAllBytes(), StandardCharsets.UTF_8);
+    assertThat(text).contains("ASCII\r\n");
+    checked(List.of(Files.of("record.cff", "\uFEFF" + text)));
+    checked(List.of(Files.of("record.cff", text.replaceFirst("ASCII\r\n(?!-)", "ASCII,\r\n"))));
+  }
+
   @Test
   void asRecordersReallyWriteThem() {
     checked(bent(w -> w.lineEnd = "\n").files());

@@ -79,6 +79,53 @@ class LogReadingTest {
   }
 
   @Test
+  void ordersBelowTheNameOfTheirGroupAreRead() {
+    Reading r =
+        read(
+            "Time;Harmonics I L1 (%);;;Current L1 (A)\n;3;5;7;\n"
+                + "2025-03-01 00:00;31;22;13;10\n2025-03-01 00:10;33;24;15;12\n");
+    assertThat(mean(r, "L1.current_h3_percent")).isEqualTo(32);
+    assertThat(mean(r, "L1.current_h7_percent")).isEqualTo(14);
+    assertThat(mean(r, "L1.rms_a")).isEqualTo(11);
+  }
+
+  @Test
+  void valuesWithoutATimeAreRefusedBeforeTheFileIsTaken() {
+    List<fourthwire.metering.RawFile> files =
+        List.of(
+            Files.of(
+                "log.csv",
+                "Time;I1 (A);I2 (A);I3 (A)\n;31.5;22;13\n2025-03-01 00:10;33;24;15\n"));
+    assertThatThrownBy(() -> new FormatReader().plan(files, Files.setting(50)))
+        .isInstanceOfSatisfying(
+            ReadingRefusedException.class, e -> assertThat(e.columns()).contains("I1 (A)"));
+  }
+
+  @Test
+  void aRegisterThatNeverFallsIsSaidToBeOne() {
+    StringBuilder log = new StringBuilder("Time;Energy register (kWh);I1 (A);P (kW)\n");
+    for (int k = 0; k < 40; k++) {
+      String sign = k % 3 == 0 ? "(%d.5)" : "%d.5";
+      log.append("2025-03-01 %02d:%02d;%d.25;7;".formatted(k / 6, k % 6 * 10, 182311 + 3 * k));
+      log.append(sign.formatted(k)).append('\n');
+    }
+    Reading r = read(log.toString());
+    assertThat(r.log().orElseThrow().quantities().get("total.energy_wh").min())
+        .isEqualTo(182311.25e3);
+    assertThat(r.notes()).anySatisfy(n -> assertThat(n).contains("Energy register", "differences"));
+    // Every third is written in brackets, as accounts write what is below nothing.
+    assertThat(r.log().orElseThrow().quantities().get("total.active_w").min()).isEqualTo(-39500);
+    assertThat(r.quality()).noneMatch(q -> q.code().equals(QualityFinding.IMPOSSIBLE_VALUE));
+  }
+
+  @Test
+  void aUnitRowWithAMultipleIsApplied() {
+    Reading r = read("Time;I1;I2\n;x10 A;0.1 A\n2025-03-01 00:00;2;30\n2025-03-01 00:10;4;50\n");
+    assertThat(mean(r, "L1.rms_a")).isEqualTo(30);
+    assertThat(mean(r, "L2.rms_a")).isEqualTo(4);
+  }
+
+  @Test
   void exactQuantityNamesAreRead() {
     Reading r =
         read(

@@ -134,6 +134,29 @@ class TextCaptureTest {
   }
 
   @Test
+  void timesRoundedToMillisecondsAreSetEvenly() {
+    StringBuilder csv = new StringBuilder("Time (s),V1 (V),I1 (A)\n");
+    for (int k = 0; k < 2560; k++) {
+      double w = 2 * Math.PI * 50 * k / 6400;
+      csv.append(
+          String.format(
+              Locale.ROOT,
+              "%.3f,%.3f,%.4f%n",
+              k / 6400.0,
+              325.27 * Math.sin(w),
+              14.142 * Math.sin(w)));
+    }
+    List<RawFile> files = List.of(Files.of("ms.csv", csv.toString()));
+    ReadingReader reader = new FormatReader();
+    ReadingPlan plan = reader.plan(files, Files.setting(50));
+    Reading r = reader.read(files, plan, Files.setting(50), (share, message) -> true);
+    assertThat(r.capture().orElseThrow().frequencyHz()).isEqualTo(50, within(0.01));
+    assertThat(r.capture().orElseThrow().current().get(Conductor.L1).rmsA().value().orElseThrow())
+        .isEqualTo(10, within(0.01));
+    assertThat(r.notes()).anySatisfy(n -> assertThat(n).contains("set evenly"));
+  }
+
+  @Test
   void clockTimesOfMicrosecondsAreSamples() {
     StringBuilder csv = new StringBuilder("When,U1 [V],I1 [A]\n");
     java.time.LocalDateTime from = java.time.LocalDateTime.of(2026, 2, 23, 10, 0);

@@ -108,14 +108,12 @@ public final class LogFormat {
             zone,
             Optional.of(stamp(given, notes)),
             given.intervalS());
-    return new ReadingPlan(
-        ReadingKind.LOG,
-        layout,
+    ReadingMapping whole =
         new ReadingMapping(
-            Optional.of(ReadingKind.LOG), settled, OptionalDouble.empty(), mapping.columns()),
-        table.headings(),
-        mapping.confidence(),
-        notes);
+            Optional.of(ReadingKind.LOG), settled, OptionalDouble.empty(), mapping.columns());
+    LogRows.checkFirst(table, new LogColumns(table, time, whole));
+    return new ReadingPlan(
+        ReadingKind.LOG, layout, whole, table.headings(), mapping.confidence(), notes);
   }
 
   /** How it would be read, what is open included. */

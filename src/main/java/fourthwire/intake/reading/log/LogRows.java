@@ -231,21 +231,32 @@ final class LogRows {
     return interval;
   }
 
-  private void notes(ParsedRows block) {
+  /** Refuses values without a time in the first rows, before the rest is read. */
+  static void checkFirst(TextTable table, LogColumns columns) {
+    try (TextTable.RowBlocks blocks = table.inBlocks()) {
+      blocks.next().ifPresent(b -> refuseTimeless(new ParsedRows(columns).fill(b), 0, columns));
+    }
+  }
+
+  private static void refuseTimeless(ParsedRows block, long before, LogColumns columns) {
     for (ParsedRows.Trouble t : block.timeless()) {
       throw new ReadingRefusedException(
           "Row "
-              + (fileRows + t.row())
+              + (before + t.row())
               + ": \""
               + t.text()
               + "\" is no time in the order "
               + columns.order().pattern()
               + ", but the row holds values.",
-          table.headings(),
+          columns.headings(),
           List.of(
               new ReadingRefusedException.Question(
                   "time.format", "say how times are written, or mend the row")));
     }
+  }
+
+  private void notes(ParsedRows block) {
+    refuseTimeless(block, fileRows, columns);
     for (ParsedRows.Trouble t : block.passedOver()) {
       tell(passedOver, "row " + (fileRows + t.row()));
     }

@@ -149,8 +149,21 @@ record Dialect(
     return found.first();
   }
 
+  /** Orders of harmonics, or units, below the names: nothing stands under the time. */
+  private static boolean isBelowNames(List<String> cells) {
+    List<String> filled = cells.stream().filter(c -> !c.isEmpty()).toList();
+    boolean orders =
+        filled.stream().distinct().count() > 1
+            && filled.stream().allMatch(c -> c.matches("0?[1-9]|[1-4]\\d|50"));
+    boolean units = !filled.isEmpty() && filled.stream().allMatch(HeaderRows::isUnit);
+    return cells.get(0).isEmpty() && (orders || units);
+  }
+
   /** At least half of what is not blank are numbers or times. */
   private static boolean isData(List<String> cells) {
+    if (isBelowNames(cells)) {
+      return false;
+    }
     int filled = 0;
     int values = 0;
     for (String cell : cells) {

@@ -80,7 +80,7 @@ record HeaderRows(List<String> headings, List<String> written) {
     return row.stream().allMatch(c -> isUnit(c) || STATISTICS.contains(c.toLowerCase(Locale.ROOT)));
   }
 
-  private static boolean isUnit(String cell) {
+  static boolean isUnit(String cell) {
     return UNIT.matcher(cell).matches() || MULTIPLE.matcher(cell).matches();
   }
 

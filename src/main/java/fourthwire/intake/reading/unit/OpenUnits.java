@@ -34,7 +34,7 @@ public final class OpenUnits {
 
   private void settle(PowerUnits powers) {
     placeless();
-    passOverCounters();
+    tellCounters();
     open.each(Meaning.LIKELY, ".*\\.rms_v", this::voltage);
     powers.settlePowers();
     powers.settleCurrents();
@@ -57,16 +57,20 @@ public final class OpenUnits {
             });
   }
 
-  /** Readings of a counter are no energies of intervals: they never fall, and stand far above a step. */
-  private void passOverCounters() {
+  /** Readings of a counter never fall, and stand far above a step. */
+  private void tellCounters() {
     open.all()
-        .replaceAll(
-            (column, h) ->
-                h.quantity().endsWith("energy_wh") && open.values().isCounter(column)
-                    ? Heading.leftOut(
-                        "it never falls, as the register of a counter; a log holds the energy of"
-                            + " each interval")
-                    : h);
+        .forEach(
+            (column, h) -> {
+              if (h.quantity().endsWith("energy_wh") && open.values().isCounter(column)) {
+                open.notes()
+                    .add(
+                        "\""
+                            + column
+                            + "\" never falls: it is the register of a counter, read as it stands;"
+                            + " its differences are the energies of intervals.");
+              }
+            });
   }
 
   private Heading voltage(String column) {

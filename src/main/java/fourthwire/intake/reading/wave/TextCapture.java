@@ -141,8 +141,9 @@ public final class TextCapture {
           samples.add(seconds(row, order, samples), values);
           return true;
         });
-    Capture capture = capture(plan, setting, samples, columns);
-    return CaptureReading.of(capture, setting, plan.notes(), progress);
+    List<String> notes = new ArrayList<>(plan.notes());
+    Capture capture = capture(plan, setting, samples, notes);
+    return CaptureReading.of(capture, setting, notes, progress);
   }
 
   /** A row's time in seconds; NaN where the rows are counted instead. */
@@ -174,10 +175,10 @@ public final class TextCapture {
   }
 
   private Capture capture(
-      ReadingPlan plan, ReadingSetting setting, Samples samples, Map<String, Column> columns) {
-    TimeAxis axis = samples.axis(plan.mapping().sampleRateHz(), table.headings());
+      ReadingPlan plan, ReadingSetting setting, Samples samples, List<String> notes) {
+    TimeAxis axis = samples.axis(plan.mapping().sampleRateHz(), table.headings(), notes);
     List<Capture.Channel> channels = new ArrayList<>();
-    columns.forEach((name, column) -> channels.add(new Capture.Channel(name, column.quantity())));
+    plan.mapping().columns().forEach((name, column) -> channels.add(new Capture.Channel(name, column.quantity())));
     Optional<ZoneId> zone = plan.mapping().time().zone().map(ZoneId::of).or(setting::siteZone);
     Optional<Instant> start =
         samples.first().flatMap(local -> zone.map(z -> local.atZone(z).toInstant()));
@@ -229,10 +230,12 @@ public final class TextCapture {
     }
 
     /** Times after the first; printed to few digits they are put on an even grid. */
-    TimeAxis axis(OptionalDouble rateHz, List<String> headings) {
-      double span = rows < 2 ? 0 : times[rows - 1] - times[0];
-      double step = rateHz.isPresent() ? 1 / rateHz.getAsDouble() : span / Math.max(1, rows - 1);
-      if (rows < 2 || !(step > 0)) {
+    TimeAxis axis(OptionalDouble rateHz, List<String> headings, List<String> notes) {
+      if (rateHz.isPresent() && rows >= 2) {
+        return TimeAxis.even(rateHz.getAsDouble(), rows);
+      }
+      EvenTimes even = EvenTimes.of(times, rows);
+      if (even.stepS() <= 0) {
         throw new ReadingRefusedException(
             "The times of the samples do not rise: check the time column.",
             headings,
@@ -240,20 +243,21 @@ public final class TextCapture {
                 new ReadingRefusedException.Question(
                     "sample_rate_hz", "or give the samples a second")));
       }
-      for (int k = 0; k < rows; k++) {
-        if (rateHz.isEmpty() && !(Math.abs(times[k] - times[0] - k * step) < 2 * step)) {
-          throw new ReadingRefusedException(
-              "Sample "
-                  + (k + 1)
-                  + " stands off the even grid of times: samples are missing or the time column is"
-                  + " not the time.",
-              headings,
-              List.of(
-                  new ReadingRefusedException.Question(
-                      "sample_rate_hz", "give the samples a second if they are even after all")));
-        }
+      if (even.offGrid() > 0) {
+        throw new ReadingRefusedException(
+            "Sample "
+                + even.offGrid()
+                + " stands off the even grid of times: samples are missing or the time column is"
+                + " not the time.",
+            headings,
+            List.of(
+                new ReadingRefusedException.Question(
+                    "sample_rate_hz", "give the samples a second if they are even after all")));
       }
-      return TimeAxis.even(1 / step, rows);
+      if (!even.note().isEmpty()) {
+        notes.add(even.note());
+      }
+      return TimeAxis.even(1 / even.stepS(), rows);
     }
   }
 }
