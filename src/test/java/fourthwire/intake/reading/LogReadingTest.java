@@ -94,8 +94,7 @@ class LogReadingTest {
     List<fourthwire.metering.RawFile> files =
         List.of(
             Files.of(
-                "log.csv",
-                "Time;I1 (A);I2 (A);I3 (A)\n;31.5;22;13\n2025-03-01 00:10;33;24;15\n"));
+                "log.csv", "Time;I1 (A);I2 (A);I3 (A)\n;31.5;22;13\n2025-03-01 00:10;33;24;15\n"));
     assertThatThrownBy(() -> new FormatReader().plan(files, Files.setting(50)))
         .isInstanceOfSatisfying(
             ReadingRefusedException.class, e -> assertThat(e.columns()).contains("I1 (A)"));

@@ -10,8 +10,9 @@ import java.util.regex.Pattern;
 import java.util.stream.Collectors;
 
 /**
- * Lines named u, v and w, as the terminals of motors and drives are (IEC 60445): V and U are voltages
- * too, so that the three letters count only where all of them stand behind the same symbol.
+ * Lines named u, v and w, as the terminals of motors and drives are (IEC 60445): V and U are
+ * voltages too, so that the three letters count only where all of them stand behind the same
+ * symbol.
  */
 final class MotorLetters {
   private static final Pattern LINE =
@@ -35,7 +36,8 @@ final class MotorLetters {
                 Collectors.groupingBy(
                     MotorLetters::symbol,
                     Collectors.mapping(m -> lower(m.group(2)), Collectors.toSet())));
-    boolean whole = bySymbol.values().stream().anyMatch(s -> WHOLE.stream().anyMatch(s::containsAll));
+    boolean whole =
+        bySymbol.values().stream().anyMatch(s -> WHOLE.stream().anyMatch(s::containsAll));
     return whole
         ? heading ->
             LINE.matcher(heading)

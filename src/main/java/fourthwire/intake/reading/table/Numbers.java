@@ -92,6 +92,7 @@ final class Numbers {
   static final String UNIT = "(?:%|VA|V|A|W|[vV][aA][rR]|Hz|°)";
 
   private static final Pattern UNIT_BEHIND = Pattern.compile("(?<=[\\d.,])\\s?" + UNIT + "$");
+
   /** A negative number as accounts write it. */
   private static final Pattern IN_BRACKETS =
       Pattern.compile("\\(\\s*([\\d.,][\\d.,\\s'’]*?(?:[eE][+-]?\\d+)?)\\s*\\)");

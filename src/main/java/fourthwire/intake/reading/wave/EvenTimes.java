@@ -45,7 +45,9 @@ record EvenTimes(double stepS, int offGrid, String note) {
         1 / step);
   }
 
-  /** The least step between times that differ, where neighbours that don't show they are rounded. */
+  /**
+   * The least step between times that differ, where neighbours that don't show they are rounded.
+   */
   private static Optional<Double> rounding(double[] times) {
     double least = Double.POSITIVE_INFINITY;
     boolean repeated = false;

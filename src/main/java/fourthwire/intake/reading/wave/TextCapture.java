@@ -178,7 +178,9 @@ public final class TextCapture {
       ReadingPlan plan, ReadingSetting setting, Samples samples, List<String> notes) {
     TimeAxis axis = samples.axis(plan.mapping().sampleRateHz(), table.headings(), notes);
     List<Capture.Channel> channels = new ArrayList<>();
-    plan.mapping().columns().forEach((name, column) -> channels.add(new Capture.Channel(name, column.quantity())));
+    plan.mapping()
+        .columns()
+        .forEach((name, column) -> channels.add(new Capture.Channel(name, column.quantity())));
     Optional<ZoneId> zone = plan.mapping().time().zone().map(ZoneId::of).or(setting::siteZone);
     Optional<Instant> start =
         samples.first().flatMap(local -> zone.map(z -> local.atZone(z).toInstant()));
