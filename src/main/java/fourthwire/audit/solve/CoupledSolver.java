@@ -46,14 +46,22 @@ public final class CoupledSolver {
   /** Kirchhoff's laws and the balance of power hold at least this well, relative. */
   public static final double CHECK_TOLERANCE = 1e-8;
 
+  private static final int MOST_PASSES = 60;
+
   private final Survey survey;
   private final Workers workers;
+  private final int mostPasses;
   private boolean allOrders;
   private LoadCurrents before = LoadCurrents.NONE;
   private Optional<SlopeBook> book = Optional.empty();
 
   /** A solver for states of this survey. */
   public CoupledSolver(Survey survey, Workers workers) {
+    this(survey, workers, MOST_PASSES);
+  }
+
+  CoupledSolver(Survey survey, Workers workers, int mostPasses) {
+    this.mostPasses = mostPasses;
     this.survey = survey;
     this.workers = workers;
   }
@@ -69,7 +77,7 @@ public final class CoupledSolver {
   public SiteSolution solve(NetworkPlan plan, List<Device> devices, Progress progress) {
     OrdersInPlay orders =
         allOrders ? OrdersInPlay.all() : OrdersInPlay.of(survey.background(), devices);
-    SiteIteration iteration = new SiteIteration(survey, plan, devices, orders, workers);
+    SiteIteration iteration = new SiteIteration(survey, plan, devices, orders, workers, mostPasses);
     SlopeBook slopes = book.filter(iteration::canUse).orElseGet(iteration::newBook);
     book = Optional.of(slopes);
     SiteSolution solution;

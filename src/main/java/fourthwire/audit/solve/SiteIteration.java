@@ -17,7 +17,6 @@ import java.util.Optional;
 
 /** One state of a site being solved, from the first guess to where loads and network agree. */
 final class SiteIteration {
-  private static final int MOST_PASSES = 60;
   private static final int SHORTEST_STEP = 10;
 
   /** Below this part of a step that all loads can follow, none shorter is tried. */
@@ -41,6 +40,7 @@ final class SiteIteration {
 
   private final double omega;
   private final Workers workers;
+  private final int mostPasses;
   private final int length;
   private double[] last = new double[0];
 
@@ -50,8 +50,9 @@ final class SiteIteration {
   private List<DevicePort> alone;
 
   SiteIteration(
-      Survey survey, NetworkPlan plan, List<Device> devices, OrdersInPlay orders, Workers workers) {
+      Survey survey, NetworkPlan plan, List<Device> devices, OrdersInPlay orders, Workers workers, int mostPasses) {
     this.plan = plan;
+    this.mostPasses = mostPasses;
     this.workers = workers;
     this.network = plan.network();
     this.omega = 2 * Math.PI * survey.settings().frequencyHz();
@@ -74,6 +75,7 @@ final class SiteIteration {
   /** The same state with a few loads that speak for all; active filters stand still. */
   private SiteIteration(SiteIteration whole, List<DevicePort> sample) {
     this.plan = whole.plan;
+    this.mostPasses = whole.mostPasses;
     this.workers = whole.workers;
     this.network = whole.network;
     this.omega = whole.omega;
@@ -234,7 +236,7 @@ final class SiteIteration {
     NewtonStep newton =
         new NewtonStep(network, state.factors(), orders, loads, filters, omega, book, workers);
     boolean caughtUp = false;
-    for (int pass = 1; pass <= MOST_PASSES; pass++) {
+    for (int pass = 1; pass <= mostPasses; pass++) {
       settling.look(x, g);
       if (few.isPresent()) {
         progress.at(0, "Network and a few loads for all, pass " + pass);
@@ -260,7 +262,7 @@ final class SiteIteration {
     }
     throw new AuditFailedException(
         "The network and its loads did not settle in %d passes: %s"
-            .formatted(MOST_PASSES, settling.worst()));
+            .formatted(mostPasses, settling.worst()));
   }
 
   /**
