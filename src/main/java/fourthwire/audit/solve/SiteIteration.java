@@ -50,7 +50,12 @@ final class SiteIteration {
   private List<DevicePort> alone;
 
   SiteIteration(
-      Survey survey, NetworkPlan plan, List<Device> devices, OrdersInPlay orders, Workers workers, int mostPasses) {
+      Survey survey,
+      NetworkPlan plan,
+      List<Device> devices,
+      OrdersInPlay orders,
+      Workers workers,
+      int mostPasses) {
     this.plan = plan;
     this.mostPasses = mostPasses;
     this.workers = workers;

@@ -14,7 +14,9 @@ import fourthwire.testsupport.MixedSite;
 import java.util.List;
 import org.junit.jupiter.api.Test;
 
-/** What does not settle is no result: the refusal names the load, where it stands, and the order. */
+/**
+ * What does not settle is no result: the refusal names the load, where it stands, and the order.
+ */
 class NotSettledTest {
   @Test
   void namesLoadAndOrder() {
