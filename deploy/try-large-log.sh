@@ -13,7 +13,17 @@ port=${3:-8099}
 heap=${4:-512m}
 work=$(mktemp -d)
 run=${RUN:-java -jar target/fourthwire.jar}
-trap 'kill $service 2> /dev/null; wait $service 2> /dev/null; rm -rf "$work"' EXIT
+leave() {
+  kill "$service" 2> /dev/null
+  wait "$service" 2> /dev/null
+  if grep -q java.lang.OutOfMemoryError "$work/service.out"; then
+    rm -rf "$work/large.csv" "$work/data"
+    echo "memory ran out: the service's log and a dump of its heap are kept in $work"
+  else
+    rm -rf "$work"
+  fi
+}
+trap leave EXIT
 /usr/bin/python3 - "$log" "$gigabytes" "$work/large.csv" << 'PYTHON'
 import datetime, itertools, sys
 lines = [line for _, line in zip(range(2001), open(sys.argv[1]))]
@@ -91,4 +101,5 @@ upload "uploaded"
 read_on
 remove "sites/$site"
 grep -c java.lang.OutOfMemoryError "$work/service.out" || true
-awk -F'->' '/Pause/ {split($2, a, "M"); if (a[1] + 0 > most) most = a[1] + 0} END {print "heap in use after a collection, at most: " most " MB"}' "$work/gc.log"
+awk -F'->' '/Pause/ {split($2, a, "M"); if (a[1] + 0 > most) most = a[1] + 0} END {print "heap in use after a collection, at most: " most " MB (garbage that it did not look for included)"}' "$work/gc.log"
+awk -F'->' '/Pause Full/ {split($2, a, "M"); if (a[1] + 0 > most) most = a[1] + 0} END {print "after a full collection, at most: " most " MB"}' "$work/gc.log"
