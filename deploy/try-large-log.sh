@@ -14,8 +14,8 @@ heap=${4:-512m}
 work=$(mktemp -d)
 run=${RUN:-java -jar target/fourthwire.jar}
 leave() {
-  kill "$service" 2> /dev/null
-  wait "$service" 2> /dev/null
+  kill "$service" 2> /dev/null || true
+  wait "$service" 2> /dev/null || true
   if grep -q java.lang.OutOfMemoryError "$work/service.out"; then
     rm -rf "$work/large.csv" "$work/data"
     echo "memory ran out: the service's log and a dump of its heap are kept in $work"
