@@ -115,6 +115,10 @@ class OpenLayoutsTest {
         "columns.I1 sec (A)",
         dated().lines("I# sec (A)", "rms_a"));
     layout(
+        "a unit below the names that is none known",
+        "columns.I1 [Ax]",
+        dated().lines("I#|Ax", "rms_a"));
+    layout(
         "an abbreviated zone",
         "time.zone",
         LayoutWriter.of(",", '.').time("Time (EST)", "yyyy-MM-dd HH:mm").lines("V# (V)", "rms_v"));

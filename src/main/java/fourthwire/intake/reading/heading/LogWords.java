@@ -51,6 +51,7 @@ final class LogWords {
     phrase(
         "neutral[\\s-]*(?:to)?[\\s-]*(?:earth|ground|gnd|pe)[\\s-]*(voltage|volts?)(?!\\p{L})",
         " neutral $1 ");
+    phrase("(?<![\\p{L}\\d])(?:3-?|three[\\s-])ph(?:ase)?(?![\\p{L}\\d])", " total ");
     phrase("tan\\s*[-_(]?\\s*(phi|φ)\\s*\\)?", " tanphi ");
   }
 
@@ -69,6 +70,7 @@ final class LogWords {
   private Optional<Unit> unit = Optional.empty();
   private double multiple = 1;
   private boolean openUnit;
+  private boolean numberBeforeUnit;
   private String shareOf = "";
   private String circuit = "";
   private int order;
@@ -106,6 +108,7 @@ final class LogWords {
     }
     words.settleNumbers();
     words.settleAmpere();
+    words.openUnit |= words.numberBeforeUnit && words.order == 0;
     return words;
   }
 
@@ -131,6 +134,7 @@ final class LogWords {
       boolean taken = unit.isEmpty() && takeUnit(bracket.group(1));
       if (!taken) {
         compare(bracket.group(1));
+        openUnit |= unit.isEmpty() && bracket.group().startsWith("[") && isUnknown(bracket.group(1));
       }
       bracket.appendReplacement(
           rest, taken ? " " : Matcher.quoteReplacement(" " + bracket.group(1) + " "));
@@ -155,6 +159,12 @@ final class LogWords {
     return found.isPresent();
   }
 
+  /** Whether nothing in square brackets, where units stand, is understood. */
+  private static boolean isUnknown(String text) {
+    return BREAK.splitAsStream(text).noneMatch(w -> w.matches("\\d*") || isUnderstood(w))
+        && !text.isBlank();
+  }
+
   /** Of two units in brackets the second may only say the first again. */
   private void compare(String text) {
     Optional<UnitText> other = UnitText.of(text);
@@ -176,6 +186,7 @@ final class LogWords {
     if (UnitText.of(last).isPresent() && (!letter || line || !last.equalsIgnoreCase("a"))) {
       takeUnit(last);
       all.remove(all.size() - 1);
+      numberBeforeUnit = all.get(all.size() - 1).matches("[5-9]|\\d\\d+");
       if (Vocabulary.isConnector(all.get(all.size() - 1).toLowerCase(Locale.ROOT))) {
         all.remove(all.size() - 1);
       }

@@ -60,7 +60,9 @@ record HeaderRows(List<String> headings, List<String> written) {
     int last = above.size() - 1;
     List<String> names = padded(above.get(last), width);
     List<List<String>> below = new ArrayList<>();
-    while (completes(names) && last > 0 && isHeader(above.get(last - 1), width, 2)) {
+    while (last > 0
+        && isHeader(above.get(last - 1), width, 2)
+        && (completes(names) || standsBelow(names, padded(above.get(last - 1), width)))) {
       below.add(0, names);
       names = padded(above.get(--last), width);
     }
@@ -78,6 +80,21 @@ record HeaderRows(List<String> headings, List<String> written) {
   /** A row that only says units or statistics. */
   private static boolean completes(List<String> row) {
     return row.stream().allMatch(c -> isUnit(c) || STATISTICS.contains(c.toLowerCase(Locale.ROOT)));
+  }
+
+  /** A row with nothing under the time, each cell of which stands below a name of its own. */
+  private static boolean standsBelow(List<String> row, List<String> names) {
+    List<String> named = new ArrayList<>();
+    for (int k = 0; k < row.size(); k++) {
+      if (!row.get(k).isEmpty()) {
+        named.add(names.get(k));
+      }
+    }
+    return row.get(0).isEmpty()
+        && !names.get(0).isEmpty()
+        && named.size() > 1
+        && !named.contains("")
+        && named.size() == new HashSet<>(named).size();
   }
 
   static boolean isUnit(String cell) {
