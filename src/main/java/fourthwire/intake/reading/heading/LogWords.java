@@ -134,7 +134,8 @@ final class LogWords {
       boolean taken = unit.isEmpty() && takeUnit(bracket.group(1));
       if (!taken) {
         compare(bracket.group(1));
-        openUnit |= unit.isEmpty() && bracket.group().startsWith("[") && isUnknown(bracket.group(1));
+        openUnit |=
+            unit.isEmpty() && bracket.group().startsWith("[") && isUnknown(bracket.group(1));
       }
       bracket.appendReplacement(
           rest, taken ? " " : Matcher.quoteReplacement(" " + bracket.group(1) + " "));
