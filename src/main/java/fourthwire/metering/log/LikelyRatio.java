@@ -8,6 +8,9 @@ import java.util.OptionalDouble;
 final class LikelyRatio {
   private static final double NEAR = 0.02;
 
+  /** As exact as meters are. */
+  private static final double MOST_POWER_FACTOR = 1.02;
+
   /** Decades first, then the steps of clamp ranges and transformers of five amps. */
   private static final double[] USUAL = {
     10, 100, 1000, 5, 2, 20, 50, 4, 3, 25, 40, 30, 15, 6, 8, 12, 60, 80, 200, 500
@@ -41,6 +44,17 @@ final class LikelyRatio {
       return up.isPresent() ? OptionalDouble.of(1 / up.getAsDouble()) : up;
     }
     return Arrays.stream(USUAL).filter(f -> f >= low && f <= high).findFirst();
+  }
+
+  /** Of an active power on volts times amps that a power factor is part of, at most one. */
+  static double beyondPowerFactor(double ratio) {
+    for (double least : new double[] {0.8, 0.65}) {
+      OptionalDouble likely = usual(ratio / MOST_POWER_FACTOR, ratio / least);
+      if (likely.isPresent()) {
+        return likely.getAsDouble();
+      }
+    }
+    return ratio;
   }
 
   /** Whether a factor is about that of another prefix of the unit: W for kW. */

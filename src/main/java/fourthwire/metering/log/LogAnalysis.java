@@ -65,6 +65,8 @@ public final class LogAnalysis {
     batch.pass();
     List<QualityFinding> quality = new ArrayList<>();
     checks.forEach(check -> quality.addAll(check.findings()));
+    List<QualityFinding> found = List.copyOf(quality);
+    quality.removeIf(f -> found.stream().anyMatch(other -> RatioOffers.explains(other, f)));
     quality.addAll(seen);
     return reading(series, statistics, key, intervalMillis, notes, quality);
   }

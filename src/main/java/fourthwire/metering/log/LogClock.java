@@ -39,6 +39,7 @@ final class LogClock implements DayCheck {
 
   private final List<Jump> jumps = new ArrayList<>();
   private final ClockSpells spells = new ClockSpells();
+  private final ClockDrift drift = new ClockDrift();
   private long jitter;
   private final List<Gap> gaps = new ArrayList<>();
   private long gapCount;
@@ -84,6 +85,7 @@ final class LogClock implements DayCheck {
       }
       before = at;
     }
+    drift.endDay();
     rowBefore = row(day, day.rows() - 1);
   }
 
@@ -126,6 +128,9 @@ final class LogClock implements DayCheck {
     boolean usual = onGrid && Math.abs(step - interval) <= interval / 2;
     if (step != 0 && !usual) {
       spells.add(new ClockSpells.Step(day.firstRow() + row, before + interval, at));
+    }
+    if (usual) {
+      drift.take(step, interval);
     }
     jitter = interval / 10;
     if (step == 0) {
@@ -238,6 +243,7 @@ final class LogClock implements DayCheck {
   public List<QualityFinding> findings() {
     List<QualityFinding> all = new ArrayList<>(spells.findings(jitter));
     jumps.stream().filter(j -> !spells.tells(j.row())).forEach(j -> all.add(j.finding()));
+    drift.finding(first, before).ifPresent(all::add);
     for (Gap gap : gaps) {
       gapCount -= spells.tells(gap.row()) ? 1 : 0;
       missing -= spells.tells(gap.row()) ? gap.length() : 0;

@@ -40,16 +40,19 @@ final class PowerRatios {
    */
   private record Off(String line, LineRatio which, double median, String of) {}
 
-  void look(LogDay day) {
+  /** Whether a total proves the power of a line wrong; what is off is flagged. */
+  boolean look(LogDay day) {
     List<Off> off = new ArrayList<>();
     for (String line : LineDay.LINES) {
       off(day, line).ifPresent(off::add);
     }
     if (off.size() == LineDay.LINES.length && isAlike(off)) {
       ofAllLines(day, off);
-    } else {
-      off.forEach(o -> ofOne(day, o));
+      return false;
     }
+    off.forEach(o -> ofOne(day, o));
+    return off.stream()
+        .anyMatch(o -> new RatioOffers(day, o.which()).totalProves(o.line(), o.median()));
   }
 
   private static boolean isAlike(List<Off> off) {
@@ -145,15 +148,28 @@ final class PowerRatios {
             WRONG_RATIO,
             "all lines",
             "Amps, volts or watts of all lines are wrong by that factor; where it is the amps,"
-                + " those of N too, which no power can show.",
+                + " those of N too unless it is above their sum; no power can show it.",
             String.format(
                 Locale.ROOT,
                 "%s power of L1, L2 and L3 is %.3g times %s on each (median of the day): one ratio"
-                    + " or unit of the instrument is wrong.",
+                    + " or unit of the instrument is wrong%s.",
                 first.which().word(),
                 ratio,
-                first.of()),
+                first.of(),
+                beyond(ratio, new RatioOffers(day, first.which()).likely(ratio))),
             new RatioOffers(day, first.which()).ofAllLines(ratio),
             RowTest.ofRatio((other, row) -> first.which().at(other, first.line(), row), ratio)));
+  }
+
+  /** What a ratio leaves where a power factor is part of what was seen. */
+  static String beyond(double seen, double ratio) {
+    return seen == ratio
+        ? ""
+        : String.format(
+            Locale.ROOT,
+            "; whether of amps or of watts can't be told, by a factor of %s the power factor would"
+                + " be %.2f",
+            LikelyRatio.text(Math.max(ratio, 1 / ratio)),
+            seen / ratio);
   }
 }

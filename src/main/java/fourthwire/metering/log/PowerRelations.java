@@ -48,8 +48,8 @@ final class PowerRelations implements DayCheck {
         reversed(day, LineDay.LINES[k], turned[0] && turned[1] && turned[2]);
       }
     }
-    ratios.look(day);
-    if (!turned[0] && !turned[1] && !turned[2]) {
+    boolean proven = ratios.look(day);
+    if (!proven && !turned[0] && !turned[1] && !turned[2]) {
       totals.look(day);
     }
   }

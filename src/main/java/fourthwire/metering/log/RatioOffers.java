@@ -1,12 +1,20 @@
 package fourthwire.metering.log;
 
 import fourthwire.metering.Correction;
+import fourthwire.metering.Period;
+import fourthwire.metering.QualityFinding;
+import java.time.Duration;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 
 /** What is offered where a power is not volts times amps: another ratio of the amps, or of it. */
 final class RatioOffers {
+  /** How near lines of a board are in power factor, as a rule. */
+  private static final double NEAR = 1.06;
+
+  private static final Duration A_DAY = Duration.ofDays(1);
+
   private final LogDay day;
   private final LineRatio which;
 
@@ -21,14 +29,44 @@ final class RatioOffers {
       return rows -> List.of();
     }
     double ratio = which == LineRatio.APPARENT ? median : againstOthers(line, median);
+    if (totalProves(line, median)) {
+      List<String> powers = powers(line);
+      return rows -> List.of(Offers.scale(powers, ratio, rows));
+    }
     return either(amps(line), powers(line), ratio);
   }
 
+  /** Whether a total of active power is the sum of the lines but for this one's ratio. */
+  boolean totalProves(String line, double median) {
+    Optional<double[]> total = day.find("total.active_w");
+    Optional<double[][]> lines = new LineDay(day).all("active_w");
+    if (which != LineRatio.ACTIVE || total.isEmpty() || lines.isEmpty()) {
+      return false;
+    }
+    double ratio = LikelyRatio.of(againstOthers(line, median));
+    double[] own = day.find(which.of(line)).orElseThrow();
+    double[][] p = lines.get();
+    double off =
+        Rows.median(
+            day.rows(),
+            k -> {
+              double sum = p[0][k] + p[1][k] + p[2][k] - own[k] + own[k] / ratio;
+              return isOff(line, k, median) ? Math.abs(total.get()[k] / sum - 1) : Double.NaN;
+            });
+    return off < 0.02;
+  }
+
+  /** Whether a row has the ratio, of a day on which it may begin or end. */
+  private boolean isOff(String line, int row, double ratio) {
+    return RowTest.ofRatio((d, k) -> which.at(d, line, k), ratio).of(day, row) > 0;
+  }
+
   /** The same for all lines at once, N with them where it is the amps. */
-  Offers.Of ofAllLines(double ratio) {
-    if (!(ratio > 0)) {
+  Offers.Of ofAllLines(double median) {
+    if (!(median > 0)) {
       return rows -> List.of();
     }
+    double ratio = likely(median);
     List<String> powers = new ArrayList<>();
     List<String> amps = new ArrayList<>();
     for (String line : LineDay.LINES) {
@@ -37,8 +75,51 @@ final class RatioOffers {
     }
     day.quantities().stream()
         .filter(q -> q.equals("N.rms_a") || isHarmonic(q, "N") && harmonicsAgree("L1"))
+        .filter(q -> !neutralIsAbove(median))
         .forEach(amps::add);
     return either(amps, powers, ratio);
+  }
+
+  /** Whether N is above the lines' sum where these are off: then it is right, and they are not. */
+  private boolean neutralIsAbove(double ratio) {
+    Optional<double[]> neutral = day.find("N.rms_a");
+    Optional<double[][]> lines = new LineDay(day).all("rms_a");
+    if (neutral.isEmpty() || lines.isEmpty()) {
+      return false;
+    }
+    double[][] l = lines.get();
+    int there = 0;
+    int above = 0;
+    for (int k = 0; k < day.rows(); k++) {
+      if (isOff("L1", k, ratio)) {
+        there++;
+        above += neutral.get()[k] > 1.03 * (l[0][k] + l[1][k] + l[2][k]) + 0.1 ? 1 : 0;
+      }
+    }
+    return 5 * above > there;
+  }
+
+  /** Whether a neutral is told to be no sum only where the amps of all lines are wrong, not it. */
+  static boolean explains(QualityFinding of, QualityFinding neutral) {
+    boolean told = of.code().equals(QualityFinding.WRONG_RATIO) && !of.corrections().isEmpty();
+    if (!told || !neutral.code().equals(QualityFinding.NEUTRAL_NOT_SUM)) {
+      return false;
+    }
+    boolean allLines =
+        of.corrections().get(0).steps().get(0) instanceof Correction.Scale scale
+            && scale.quantities().containsAll(List.of("L1.rms_a", "L2.rms_a", "L3.rms_a"))
+            && !scale.quantities().contains("N.rms_a");
+    Period lines = of.period().orElseThrow();
+    Period sum = neutral.period().orElseThrow();
+    return allLines
+        && !sum.from().isBefore(lines.from().minus(A_DAY))
+        && !sum.to().isAfter(lines.to().plus(A_DAY));
+  }
+
+  /** Without a power factor or apparent power: the instrument's ratio beyond a likely one. */
+  double likely(double ratio) {
+    boolean known = day.find("L1.power_factor").isPresent();
+    return which != LineRatio.ACTIVE || known ? ratio : LikelyRatio.beyondPowerFactor(ratio);
   }
 
   /** What is to be known of the day is found out now, so that a fault does not hold its rows. */
@@ -97,7 +178,10 @@ final class RatioOffers {
         count++;
       }
     }
-    return count == 0 ? ratio : ratio * count / sum;
+    double beside = ratio * count / sum;
+    return count == 0
+        ? likely(ratio)
+        : LikelyRatio.usual(beside / NEAR, beside * NEAR).orElse(beside);
   }
 
   /** Whether amps and fundamental are of one ratio. */

@@ -15,6 +15,11 @@ final class TotalRatios {
   /** The effective apparent power of three lines is no sum: it may be larger by a half. */
   private static final double MOST_APPARENT = 1.6;
 
+  /** Power factors as low as that, and steady all day, are no loads'. */
+  private static final double LEAST_STEADY = 0.08;
+
+  private static final double STEADY = 0.2;
+
   private final FlaggedDays flagged;
 
   TotalRatios(FlaggedDays flagged) {
@@ -51,9 +56,10 @@ final class TotalRatios {
     java.util.Arrays.setAll(sum, k -> amps.get()[0][k] + amps.get()[1][k] + amps.get()[2][k]);
     Optional<double[]> factor =
         active ? day.find("total.power_factor") : Optional.<double[]>empty();
-    double least = active && factor.isEmpty() ? 0.02 : 0.8;
     double most = active && factor.isEmpty() ? 1.05 : active ? 1.25 : MOST_APPARENT;
     double median = Rows.loaded(sum, k -> ratio(day, measure, k));
+    double apart = Rows.loaded(sum, k -> Math.abs(ratio(day, measure, k) / median - 1));
+    double least = active && factor.isEmpty() ? apart < STEADY ? LEAST_STEADY : 0.02 : 0.8;
     if (median < least || median > most) {
       flag(
           day,
@@ -92,6 +98,8 @@ final class TotalRatios {
 
   private void flag(
       LogDay day, String measure, double median, String of, boolean lines, RowTest test) {
+    double likely = lines ? median : likely(day, measure, median);
+    List<String> quantities = day.quantities();
     flagged.add(
         day,
         new FlaggedDays.Fault(
@@ -100,20 +108,46 @@ final class TotalRatios {
             "The total, or one of the lines, is wrong.",
             String.format(
                 Locale.ROOT,
-                "The total of %s is %.3g times %s (median of the day).",
+                "The total of %s is %.3g times %s (median of the day)%s.",
                 measure,
                 median,
-                of),
-            rows -> corrected(measure, median, lines, rows),
+                of,
+                PowerRatios.beyond(median, likely)),
+            rows ->
+                lines
+                    ? corrected(measure, median, rows)
+                    : either(quantities, measure, likely, rows),
             test));
   }
 
+  /** Without a power factor: the instrument's ratio beyond a likely one. */
+  private static double likely(LogDay day, String measure, double ratio) {
+    boolean known = !measure.equals("active_w") || day.find("total.power_factor").isPresent();
+    return known ? ratio : LikelyRatio.beyondPowerFactor(ratio);
+  }
+
+  /** The total, or the amps of all lines: nothing tells which. */
+  private static List<Correction> either(
+      List<String> quantities, String measure, double ratio, Correction.Rows rows) {
+    if (!(ratio > 0)) {
+      return List.of();
+    }
+    Correction total = Offers.scale(List.of("total." + measure), ratio, rows);
+    List<String> amps =
+        quantities.stream()
+            .filter(q -> q.matches("L[123]\\.(rms_a|current_h\\d+_a)"))
+            .toList();
+    return LikelyRatio.isPrefix(ratio)
+        ? List.of(total)
+        : List.of(total, Offers.scale(amps, 1 / ratio, rows));
+  }
+
   private static List<Correction> corrected(
-      String measure, double ratio, boolean lines, Correction.Rows rows) {
+      String measure, double ratio, Correction.Rows rows) {
     if (!(Math.abs(ratio) > 0)) {
       return List.of();
     }
-    if (LikelyRatio.isPrefix(ratio) || !lines) {
+    if (LikelyRatio.isPrefix(ratio)) {
       return List.of(Offers.scale(List.of("total." + measure), ratio, rows));
     }
     return measure.equals("active_w") ? List.of(Offers.sum(measure, rows)) : List.of();

@@ -466,6 +466,82 @@ class PlantedFaultsTest {
             });
   }
 
+  /** Amps by a fifth beside watts alone: five is offered, not five times the power factor. */
+  @ParameterizedTest
+  @ValueSource(booleans = {true, false})
+  void theRatioOfAmpsLeavesAPowerFactor(boolean neutralToo) {
+    InventedBoard board = new InventedBoard(24, 2);
+    board.columns.keySet().removeIf(name -> name.matches(".*(_factor|_h\\d_a|_thd.*)"));
+    for (String line : neutralToo ? List.of("L1", "L2", "L3", "N") : List.of("L1", "L2", "L3")) {
+      board.scale(line + ".rms_a", 497, 936, 0.2);
+    }
+    List<QualityFinding> found = board.reading().quality();
+    assertThat(found)
+        .singleElement()
+        .extracting(QualityFinding::code)
+        .isEqualTo(QualityFinding.WRONG_RATIO);
+    assertThat(found.get(0).corrections())
+        .extracting(Correction::sentence)
+        .first()
+        .isEqualTo(
+            "Multiply L1.rms_a, L2.rms_a"
+                + (neutralToo ? ", L3.rms_a and N.rms_a by 5" : " and L3.rms_a by 5"));
+  }
+
+  /** A total that is right proves which line's watts are not, and that its amps are. */
+  @ParameterizedTest
+  @ValueSource(longs = {21, 22, 23})
+  void aTotalProvesTheWattsOfALineWrong(long seed) {
+    InventedBoard board = new InventedBoard(seed, 2);
+    board.columns.keySet().removeIf(name -> name.matches(".*(_factor|_h\\d_a|_thd.*)|N.*"));
+    board.scale("L2.active_w", 497, 936, 2);
+    assertThat(board.reading().quality())
+        .as("seed %d", seed)
+        .singleElement()
+        .satisfies(
+            f ->
+                assertThat(f.corrections())
+                    .extracting(Correction::sentence)
+                    .containsExactly("Multiply L2.active_w by 0.5"));
+  }
+
+  /** A total by a twentieth leaves a power factor that no load has all day. */
+  @ParameterizedTest
+  @ValueSource(longs = {21, 22, 23})
+  void aTotalOfNextToNoPowerFactorIsOfAWrongRatio(long seed) {
+    InventedBoard board = new InventedBoard(seed, 2);
+    board.columns.keySet().removeIf(name -> name.matches("L.\\.active_w|.*(_factor|_thd.*)|N.*"));
+    board.scale("total.active_w", 0, board.times.size(), 0.05);
+    assertThat(board.reading().quality())
+        .as("seed %d", seed)
+        .singleElement()
+        .satisfies(
+            f ->
+                assertThat(f.corrections().get(0).sentence())
+                    .isEqualTo("Multiply total.active_w by 20"));
+  }
+
+  /** A clock that is fast by forty seconds a day, written to the second; jitter is no drift. */
+  @ParameterizedTest
+  @ValueSource(longs = {40, 0})
+  void aClockThatRunsFastIsFound(long secondsADay) {
+    InventedBoard board = new InventedBoard(21, 2);
+    java.util.Random random = new java.util.Random(21);
+    for (int row = 0; row < board.times.size(); row++) {
+      long drift = Math.round((double) secondsADay * row / PER_DAY);
+      long jitter = secondsADay == 0 ? random.nextInt(20) : 0;
+      board.times.set(row, board.times.get(row) + 1000 * (drift + jitter));
+    }
+    List<QualityFinding> found = board.reading().quality();
+    assertThat(found).hasSize(secondsADay == 0 ? 0 : 1);
+    assertThat(found)
+        .allSatisfy(
+            f -> {
+              assertThat(f.code()).isEqualTo(QualityFinding.CLOCK_JUMP);
+              assertThat(f.sentence()).contains("longer than the interval", "40 s a day", "fast");
+            });
+  }
+
   /** A source of a line's own that feeds back as much as it took, each midday, is no clamp. */
   @ParameterizedTest
   @ValueSource(longs = {21, 22})
