@@ -134,16 +134,13 @@ final class TotalRatios {
     }
     Correction total = Offers.scale(List.of("total." + measure), ratio, rows);
     List<String> amps =
-        quantities.stream()
-            .filter(q -> q.matches("L[123]\\.(rms_a|current_h\\d+_a)"))
-            .toList();
+        quantities.stream().filter(q -> q.matches("L[123]\\.(rms_a|current_h\\d+_a)")).toList();
     return LikelyRatio.isPrefix(ratio)
         ? List.of(total)
         : List.of(total, Offers.scale(amps, 1 / ratio, rows));
   }
 
-  private static List<Correction> corrected(
-      String measure, double ratio, Correction.Rows rows) {
+  private static List<Correction> corrected(String measure, double ratio, Correction.Rows rows) {
     if (!(Math.abs(ratio) > 0)) {
       return List.of();
     }
