@@ -70,6 +70,13 @@ final class LogHeading {
     return unit.filter(k -> k == kind).isPresent();
   }
 
+  private Heading share(String measure) {
+    return words.saysRms()
+        ? Heading.unclear(
+            "whether this is percent of the fundamental, as is asked for, or of the rms value")
+        : at(measure, unit.isPresent());
+  }
+
   private boolean isOfRms() {
     return words.shareOf().equals(UnitText.OF_RMS);
   }
@@ -117,7 +124,7 @@ final class LogHeading {
                   + " or percent of the fundamental");
     }
     if (is(Unit.Kind.SHARE)) {
-      return isOfRms() ? OF_RMS : at(start + "_percent", true);
+      return isOfRms() ? OF_RMS : share(start + "_percent");
     }
     boolean fits = is(current() ? Unit.Kind.CURRENT : Unit.Kind.VOLTAGE);
     return fits ? at(start + (current() ? "_a" : "_v"), true) : Heading.none();
@@ -136,8 +143,7 @@ final class LogHeading {
     if (words.says(Sense.CURRENT) == words.says(Sense.VOLTAGE)) {
       return Heading.unclear("whether this distortion is of current or voltage");
     }
-    return at(
-        (words.says(Sense.CURRENT) ? "current" : "voltage") + "_thd_percent", unit.isPresent());
+    return share((words.says(Sense.CURRENT) ? "current" : "voltage") + "_thd_percent");
   }
 
   private Heading energy() {

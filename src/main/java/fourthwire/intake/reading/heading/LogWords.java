@@ -52,6 +52,7 @@ final class LogWords {
         "neutral[\\s-]*(?:to)?[\\s-]*(?:earth|ground|gnd|pe)[\\s-]*(voltage|volts?)(?!\\p{L})",
         " neutral $1 ");
     phrase("(?<![\\p{L}\\d])(?:3-?|three[\\s-])ph(?:ase)?(?![\\p{L}\\d])", " total ");
+    phrase("thd\\s*\\(\\s*r\\s*\\)", " thdr ");
     phrase("tan\\s*[-_(]?\\s*(phi|φ)\\s*\\)?", " tanphi ");
   }
 
@@ -71,6 +72,8 @@ final class LogWords {
   private double multiple = 1;
   private boolean openUnit;
   private boolean numberBeforeUnit;
+  private boolean numberForUnit;
+  private boolean rms;
   private String shareOf = "";
   private String circuit = "";
   private int order;
@@ -106,7 +109,9 @@ final class LogWords {
     for (int k = 0; k < all.size(); k++) {
       words.take(all, k);
     }
+    boolean placed = !words.places.isEmpty();
     words.settleNumbers();
+    words.openUnit |= words.numberForUnit && placed && words.order == 0;
     words.settleAmpere();
     words.openUnit |= words.numberBeforeUnit && words.order == 0;
     return words;
@@ -134,6 +139,7 @@ final class LogWords {
       boolean taken = unit.isEmpty() && takeUnit(bracket.group(1));
       if (!taken) {
         compare(bracket.group(1));
+        numberForUnit |= bracket.group().matches("\\[\\d+]");
         openUnit |=
             unit.isEmpty() && bracket.group().startsWith("[") && isUnknown(bracket.group(1));
       }
@@ -205,6 +211,7 @@ final class LogWords {
 
   private void take(List<String> all, int k) {
     String word = all.get(k).toLowerCase(Locale.ROOT);
+    rms |= word.matches("t?rms");
     boolean standing = all.size() > 1 || standsAlone(word);
     if (DIGITS.matcher(word).matches()) {
       takeNumber(Integer.parseInt(word), k > 0 ? all.get(k - 1) : "");
@@ -357,6 +364,11 @@ final class LogWords {
   /** Whether something stands beside the unit that is not understood. */
   boolean hasOpenUnit() {
     return openUnit;
+  }
+
+  /** Whether the word rms stands in it by itself, outside its unit. */
+  boolean saysRms() {
+    return rms;
   }
 
   /** Whether a word in brackets beside a unit is understood. */

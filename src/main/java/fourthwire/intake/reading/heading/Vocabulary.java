@@ -66,7 +66,7 @@ final class Vocabulary {
         Sense.HARMONIC,
         "harmonic harmonics harm har harmon h order oberschwingung oberschwingungen harmonische"
             + " harmonique armonico armonica ordnung ord hrm");
-    put(Sense.OF_RMS, "thdr");
+    put(Sense.OF_RMS, "thdr thdrms");
     put(Sense.INDIVIDUAL_DISTORTION, "hd ihd");
     put(Sense.FUNDAMENTAL, "fundamental fund grundschwingung fondamental fond");
     put(Sense.ANGLE, "angle ang winkel angulo phaseangle");
