@@ -50,7 +50,9 @@ record UnitText(Unit unit, double multiple, String shareOf, boolean isOpen) {
   private static final Pattern ELECTRIC =
       Pattern.compile("(?:[kMm]?(?:A|V|W|VA|var|VAr|Wh)|[kM]W|amps?|volts?|watts?|%)");
 
-  private static final Pattern UNKNOWN_UNIT = Pattern.compile("(?:[kMmdcuμnhGTp]|da)[AVW]|[%‰].*|(?i:.*\\b(?:counts?|raw|adc|digits?|lsb)\\b.*)");
+  private static final Pattern UNKNOWN_UNIT =
+      Pattern.compile(
+          "(?:[kMmdcuμnhGTp]|da)[AVW]|[%‰].*|(?i:.*\\b(?:counts?|raw|adc|digits?|lsb)\\b.*)");
 
   /** Words and signs of a multiple, wherever they stand. */
   private static final Pattern MULTIPLE =
