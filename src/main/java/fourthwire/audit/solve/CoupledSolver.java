@@ -20,7 +20,8 @@ import java.util.Optional;
  * out for a few loads, lent to those alike ({@link SlopeBook}) and corrected by what each load's
  * own solutions show ({@link LoadSlope}). So a resonance, a soft generator or a shared riser costs
  * a few more passes, no more, and no matrix over the site is ever formed. A load whose slope says
- * that it hardly moves is not solved again.
+ * that it hardly moves is not solved again, and a few that lag behind all others catch up with
+ * their boards while the rest stands still ({@link Stragglers}).
  *
  * <p>Converged means: every load's current at the final voltages equals what was injected within
  * {@value #LOAD_TOLERANCE} of its rms, no load's voltage moved by more than {@value
