@@ -1,10 +1,8 @@
 package fourthwire.intake.reading.heading;
 
 import fourthwire.intake.reading.heading.Vocabulary.Sense;
-import java.text.Normalizer;
 import java.util.ArrayList;
 import java.util.EnumSet;
-import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
@@ -26,37 +24,6 @@ final class LogWords {
       Pattern.compile(
           "l[123]|l[123]l[123]|l[123]n|l?[123]-?[123n]|[123][123n]|[abcrstnyb]|a[abn]|[bc][abcn]|[rst][rstn]|ry|yb|br|[yb]n");
 
-  /** Phrases and what stands for them, one after the other. */
-  private static final Map<Pattern, String> PHRASES = new LinkedHashMap<>();
-
-  static {
-    phrase("\\p{M}", "");
-    phrase("[Σ∑]", " total ");
-    phrase("total\\s+harmonic\\s+dist(ortion|\\.)?", " thd ");
-    phrase("harmonic\\s+distortion", " thd ");
-    phrase("power[\\s_-]*factor", " pf ");
-    phrase("cos\\s*[-_(]?\\s*(phi|φ)\\s*\\)?", " cosphi ");
-    phrase("line[\\s-]+to[\\s-]+(line|neutral)", " ");
-    phrase(
-        "(?<!harmonic |harm |order"
-            + " |h)(?<![\\p{L}\\d])(?:10|15|30|60)[\\s_-]*(?:min|minutes?|sec|s)(?!\\p{L})",
-        " ");
-    phrase("k[\\s-]factor", " kfactor ");
-    phrase("(?<=volt)[\\s-]+(?=amp)|(?<=watt)[\\s-]+(?=hour)|(?<=kilo)[\\s-]+(?=[vwa])", "");
-    phrase("(?<=volt)amps?(?![\\p{L}])", "ampere");
-    phrase("thd[\\s-]?f\\b", " thd ");
-    phrase("thd[\\s_-]r(?![\\p{L}\\d])(?=.*\\d|.*[abc]\\b)", " thdr ");
-    phrase("(?<=\\b(?:[iuv]?l?|phase |ph)[123abc]\\b.{0,40})thd[\\s_-]r\\b", " thdr ");
-    phrase("(?<!\\p{L})([uv])_?n[\\s_-]?(?:g|gnd|pe|earth|ground)(?![\\p{L}\\p{N}])", " $1n ");
-    phrase(
-        "neutral[\\s-]*(?:to)?[\\s-]*(?:earth|ground|gnd|pe)[\\s-]*(voltage|volts?)(?!\\p{L})",
-        " neutral $1 ");
-    phrase("(?<![\\p{L}\\d])(?:3-?|three[\\s-])ph(?:ase)?(?![\\p{L}\\d])", " total ");
-    phrase("thd\\s*\\(\\s*r\\s*\\)", " thdr ");
-    phrase("tan\\s*[-_(]?\\s*(phi|φ)\\s*\\)?", " tanphi ");
-  }
-
-  private static final Pattern RAISED = Pattern.compile("(?<=10)([⁻]?)([⁰¹²³⁴⁵⁶⁷⁸⁹])");
   private static final Pattern PERCENTILE =
       Pattern.compile("c?p(?:5|\\d\\d)|\\d\\d%|percentile|quantile|median");
   private static final Pattern NUMBERED = Pattern.compile("(?i)(?:l|ph|phase)?[123]");
@@ -84,10 +51,6 @@ final class LogWords {
     this.lettered = lettered;
   }
 
-  private static void phrase(String pattern, String words) {
-    PHRASES.put(Pattern.compile(pattern, Pattern.CASE_INSENSITIVE), words);
-  }
-
   /**
    * Takes a heading apart.
    *
@@ -96,7 +59,7 @@ final class LogWords {
   static LogWords of(String heading, boolean lettered) {
     LogWords words = new LogWords(lettered);
     words.circuit = Circuit.of(heading);
-    String text = words.withoutUnit(plain(Circuit.without(heading)));
+    String text = words.withoutUnit(PlainText.of(Circuit.without(heading)));
     List<String> all = new ArrayList<>();
     for (String part : BREAK.split(text)) {
       for (String word : CAMEL.split(part)) {
@@ -115,20 +78,6 @@ final class LogWords {
     words.settleAmpere();
     words.openUnit |= words.numberBeforeUnit && words.order == 0;
     return words;
-  }
-
-  /** Accents, subscripts and Greek letters as plain ones; phrases as one word. */
-  private static String plain(String heading) {
-    String text =
-        Normalizer.normalize(
-            RAISED.matcher(heading.replace('ϕ', 'φ').replace('º', '°')).replaceAll("^$1$2"),
-            Normalizer.Form.NFKD);
-    text = text.replace('\u2212', '-');
-    for (Map.Entry<Pattern, String> phrase : PHRASES.entrySet()) {
-      Matcher m = phrase.getKey().matcher(text);
-      text = m.find() ? m.replaceAll(phrase.getValue()) : text;
-    }
-    return text;
   }
 
   /** The unit in brackets, or behind the last slash, taken off. */
