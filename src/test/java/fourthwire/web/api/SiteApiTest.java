@@ -88,7 +88,7 @@ class SiteApiTest extends ServiceTest {
   void everyMisuseIsAProblemDocument() {
     Http http = http();
     byte[] text = "not a zip".getBytes(StandardCharsets.UTF_8);
-    ProblemShape.check(http.form("POST", SITES, Part.field("other", "x")), 400);
+    ProblemShape.check(http.form("POST", SITES, Part.field("other", "x")), 422);
     ProblemShape.check(http.form("POST", SITES, Part.field("survey", "x")), 422);
     Part survey = survey(SmallSite.zip("Works"));
     Answer two = http.form("POST", SITES, survey, survey);
