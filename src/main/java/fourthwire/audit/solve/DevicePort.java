@@ -19,8 +19,8 @@ final class DevicePort {
   static final double SLOPE_STEP = 1e-4;
 
   /**
-   * How much of the impedance above the group is taken out of a slope. A load with no impedance of
-   * its own would answer a voltage there without bounds, and Newton's equations could not be
+   * How much of the impedance above the group is taken out of the slope of a load with next to no
+   * impedance of its own. It would answer a voltage there without bounds, and Newton's equations could not be
    * solved; what is left bounds it, and costs a fiftieth of what the load moves by in a pass.
    */
   static final double OPENED = 0.98;
@@ -141,6 +141,12 @@ final class DevicePort {
     return shared;
   }
 
+  /** Of the impedance above the group, what is taken out of the slope. */
+  SeriesOhms opened() {
+    boolean bounded = joint.isEmpty() && own().isAtLeast(shared.times(1 - OPENED));
+    return bounded ? shared : shared.times(OPENED);
+  }
+
   /** Of the series impedance, what lies below the group. */
   SeriesOhms own() {
     return series.beyond(shared);
@@ -201,7 +207,7 @@ final class DevicePort {
     solveAt(orders, now, g);
     if (failure.isEmpty()) {
       double[] moved = difference(Arrays.copyOfRange(g, offset, offset + now.length), before);
-      shared.times(-OPENED).addDrop(orders, omega, moved, 0, change);
+      opened().times(-1).addDrop(orders, omega, moved, 0, change);
       slope.get().learn(orders, change, moved);
     }
   }
@@ -223,7 +229,7 @@ final class DevicePort {
     double[] step = difference(part(orders, g), part(orders, x));
     double[] drop = new double[size];
     double[] all = joint.map(loads -> loads.step(orders, x, g)).orElse(step);
-    shared.times(OPENED).addDrop(orders, omega, all, 0, drop);
+    opened().addDrop(orders, omega, all, 0, drop);
     double[] answer = new double[size];
     slope().multiply(orders, drop, answer);
     for (int i = 0; i < size; i++) {
@@ -310,7 +316,7 @@ final class DevicePort {
   void learn(OrdersInPlay orders, double omega, double[] before, double[] all, double[] g) {
     if (slope.isPresent()) {
       double[] change = difference(facing, behind);
-      shared.times(-OPENED).addDrop(orders, omega, all, 0, change);
+      opened().times(-1).addDrop(orders, omega, all, 0, change);
       slope.get().learn(orders, change, difference(part(orders, g), before));
     }
     behind = facing;
@@ -366,7 +372,7 @@ final class DevicePort {
     }
     new SlopeFinder(solver, emf, drawn, series)
         .find(orders, SLOPE_STEP * nominalV(), wholly, slope);
-    slope.open(orders, shared.times(OPENED), omega);
+    slope.open(orders, opened(), omega);
   }
 
   private boolean solvesAlone(OrdersInPlay orders, double omega) {

@@ -20,7 +20,7 @@ final class NewtonStep {
   private static final double LINEAR_TOLERANCE = 3e-3;
 
   /** Where most loads change by more they are not yet what they will be: slopes there mislead. */
-  private static final double FAR = 0.1;
+  private static final double FAR = 0.05;
 
   /** A pass that leaves more than this part of the change before is held up by some loads. */
   private static final double SLOW = 0.5;

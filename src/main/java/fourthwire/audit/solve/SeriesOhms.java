@@ -19,6 +19,11 @@ record SeriesOhms(double ohm, double henry) {
     return new SeriesOhms(Math.max(0, ohm - other.ohm), Math.max(0, henry - other.henry));
   }
 
+  /** Whether it is no smaller than another, in resistance and in inductance. */
+  boolean isAtLeast(SeriesOhms other) {
+    return ohm >= other.ohm && henry >= other.henry;
+  }
+
   /** Adds what a load's current, from its place in a row, drops over it. */
   void addDrop(OrdersInPlay orders, double omega, double[] amps, int start, double[] volts) {
     for (int at = 0; at < volts.length; at += 2) {
