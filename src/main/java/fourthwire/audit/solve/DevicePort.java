@@ -20,8 +20,9 @@ final class DevicePort {
 
   /**
    * How much of the impedance above the group is taken out of the slope of a load with next to no
-   * impedance of its own. It would answer a voltage there without bounds, and Newton's equations could not be
-   * solved; what is left bounds it, and costs a fiftieth of what the load moves by in a pass.
+   * impedance of its own. It would answer a voltage there without bounds, and Newton's equations
+   * could not be solved; what is left bounds it, and costs a fiftieth of what the load moves by in
+   * a pass.
    */
   static final double OPENED = 0.98;
 
