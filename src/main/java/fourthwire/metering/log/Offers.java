@@ -85,6 +85,15 @@ final class Offers {
             new ShiftClock(-millis, new Rows(0, row))));
   }
 
+  /** Those logged of a line whose sign turns with its clamp. */
+  List<String> signed(String line) {
+    return logged(
+        line + ".active_w",
+        line + ".power_factor",
+        line + ".displacement_factor",
+        line + ".reactive_var");
+  }
+
   /** The columns of these names that are logged. */
   List<String> logged(String... wanted) {
     List<String> there = new ArrayList<>();

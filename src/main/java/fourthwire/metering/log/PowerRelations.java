@@ -74,13 +74,7 @@ final class PowerRelations implements DayCheck {
   private void reversed(LogDay day, String line, boolean all) {
     Offers offers = new Offers(day.quantities());
     List<String> turned =
-        offers
-            .logged(
-                line + ".active_w",
-                line + ".power_factor",
-                line + ".displacement_factor",
-                line + ".reactive_var")
-            .stream()
+        offers.signed(line).stream()
             .filter(q -> negative(day.find(q).orElseThrow()))
             .toList();
     boolean follows = totalIsSum(day);

@@ -151,13 +151,7 @@ final class TurnedRuns {
     Offers offers = new Offers(run.day().quantities());
     int begins = (int) (run.rows().from() - run.day().firstRow());
     List<String> turned =
-        offers
-            .logged(
-                line + ".active_w",
-                line + ".power_factor",
-                line + ".displacement_factor",
-                line + ".reactive_var")
-            .stream()
+        offers.signed(line).stream()
             .filter(q -> run.day().find(q).orElseThrow()[begins] < 0)
             .toList();
     return new QualityFinding(
