@@ -74,9 +74,7 @@ final class PowerRelations implements DayCheck {
   private void reversed(LogDay day, String line, boolean all) {
     Offers offers = new Offers(day.quantities());
     List<String> turned =
-        offers.signed(line).stream()
-            .filter(q -> negative(day.find(q).orElseThrow()))
-            .toList();
+        offers.signed(line).stream().filter(q -> negative(day.find(q).orElseThrow())).toList();
     boolean follows = totalIsSum(day);
     flagged.add(
         day,
